@@ -1,0 +1,120 @@
+import type { Port, StreamId, UnitId } from '../engine/ids';
+import type { Weight } from '../engine/outcome';
+
+/** Sheet coordinates in px at 100 %, y down. */
+export type Point = readonly [number, number];
+export interface Box {
+  readonly x: number;
+  readonly y: number;
+  readonly w: number;
+  readonly h: number;
+}
+
+export type Ink = 'ink' | 'ink2' | 'ink3' | 'hair' | 'paper' | 'accent' | 'caution' | 'beyond';
+/** One stroke or fill of a symbol, in the symbol's own coordinates (origin in its middle). */
+export interface PathShape {
+  readonly d: string;
+  /** Line weights of the tokens: outline 1.5, detail 1, heat link 1.2. 0: no stroke. */
+  readonly width: number;
+  readonly stroke: Ink | 'none';
+  readonly fill: Ink | 'none';
+  readonly dash?: string;
+}
+export type Side = 'left' | 'right' | 'top' | 'bottom';
+export interface PortPlace {
+  readonly at: Point;
+  /** The side a line leaves or enters. */
+  readonly side: Side;
+}
+export interface SymbolData {
+  /** Bounding box of the drawn outline, origin inside it. */
+  readonly box: Box;
+  readonly paths: readonly PathShape[];
+  /** Where each port lies; numbered ports by stem: place of number k. */
+  ports(name: Port): PortPlace | undefined;
+  /** Draws the unit's name inside (feed, product). */
+  readonly nameInside?: boolean;
+  /** No tag is drawn (join, divide, feed, product). */
+  readonly tagless?: boolean;
+}
+
+/** State as drawn under the tag; the fifth is the page's own. */
+export type DrawnState = 'solved' | 'needs-value' | 'waiting' | 'no-solution' | 'out-of-date';
+
+export interface TextShape {
+  readonly at: Point;
+  readonly text: string;
+  readonly size: number;
+  readonly weight: 400 | 600;
+  readonly italic?: boolean;
+  readonly anchor: 'start' | 'middle' | 'end';
+  readonly ink: Ink;
+  readonly halo?: boolean;
+}
+
+export interface UnitShape {
+  readonly unit: UnitId;
+  readonly tag: string;
+  readonly kind: string;
+  readonly at: Point;
+  readonly turn: 0 | 90 | 180 | 270;
+  readonly mirror: boolean;
+  readonly symbol: SymbolData;
+  readonly box: Box;
+  readonly state: DrawnState;
+  /** Tag text and the mark under it, if a tag is drawn. */
+  readonly tagText?: TextShape;
+  readonly stateMark: readonly PathShape[];
+  /** Symbol shown upright even when turned (names of feeds and products). */
+  readonly texts: readonly TextShape[];
+  /** Heat link end with its duty, for units that have one. */
+  readonly duty?: { readonly line: PathShape; readonly text?: TextShape };
+  readonly limit?: { readonly weight: Weight; readonly at: Point };
+}
+
+export interface LineShape {
+  readonly stream: StreamId;
+  readonly number: string;
+  readonly points: readonly Point[];
+  /** Path with rounded bends and bridges. */
+  readonly d: string;
+  readonly arrow?: { readonly at: Point; readonly side: Side };
+  readonly diamond?: Point;
+  /** Hanging: no target. */
+  readonly hanging: boolean;
+}
+
+export interface LabelRow {
+  readonly number: string;
+  readonly unit: string;
+}
+export interface LabelShape {
+  readonly stream: StreamId;
+  readonly box: Box;
+  readonly rows: readonly LabelRow[];
+  /** x where numbers end (right-aligned) and where units start. */
+  readonly numberRight: number;
+  readonly unitLeft: number;
+  /** No free place: opens on hover or focus. */
+  readonly folded: boolean;
+}
+
+/** Everything on the sheet, placed. Canvas and PDF draw the same scene. */
+export interface Scene {
+  readonly box: Box;
+  readonly units: readonly UnitShape[];
+  readonly lines: readonly LineShape[];
+  readonly labels: readonly LabelShape[];
+}
+
+/** What the scene shows beside the sketch itself. */
+export interface SceneInput {
+  readonly states: ReadonlyMap<UnitId, DrawnState>;
+  readonly limits: ReadonlyMap<UnitId, Weight>;
+  /** Rows per stream, already formatted in the sketch's measures; absent: no label. */
+  readonly labels: ReadonlyMap<StreamId, readonly LabelRow[]>;
+  /** Formatted duty per unit ("Q 1307 kW"); absent: ring without text. */
+  readonly duties: ReadonlyMap<UnitId, string>;
+  /** Positions while a drag lasts, over the sketch's own. */
+  readonly moved?: ReadonlyMap<UnitId, Point>;
+}

@@ -1,0 +1,20 @@
+import type { UnitId } from '../engine/ids';
+import type { Basis, Problem, SolveBatch } from '../engine/network/types';
+
+/** Questions outside the sketch's solve, e.g. saturation points for a drawer. Grows with the drawers. */
+export type Question = { readonly ask: 'prewarm' };
+
+/** Page to worker. One job in flight, one waiting; the latest wins. */
+export type ToWorker =
+  | { readonly say: 'basis'; readonly basis: Basis }
+  | { readonly say: 'solve'; readonly problem: Problem; readonly from: 'warm' | 'nothing' }
+  | { readonly say: 'question'; readonly job: number; readonly about: Question }
+  | { readonly say: 'drop'; readonly job: number };
+
+/** Worker to page. 'at' comes at most every 250 ms; silence for 3 s while a job runs means restart. */
+export type FromWorker =
+  | { readonly say: 'ready' }
+  | { readonly say: 'at'; readonly edit: number; readonly unit: UnitId }
+  | ({ readonly say: 'results'; readonly edit: number; readonly last: boolean } & SolveBatch)
+  | { readonly say: 'answer'; readonly job: number; readonly value: unknown }
+  | { readonly say: 'broke'; readonly edit?: number; readonly job?: number; readonly message: string };

@@ -1,0 +1,56 @@
+import type { Dimension } from '../quantity/dimension';
+
+/** A cell keeps the unrounded number; writers format it. Text cells are guarded against formula injection where it matters. */
+export type Cell =
+  | { readonly is: 'text'; readonly text: string; readonly bold?: boolean; readonly muted?: boolean }
+  /** Already in display units; `decimals` fixed for the row; trace: shown '<0.01' when smaller than the last place but not zero. */
+  | { readonly is: 'number'; readonly value: number; readonly decimals: number; readonly bold?: boolean }
+  | { readonly is: 'absent' };
+
+export interface Row {
+  readonly key: string;
+  readonly label: string;
+  readonly unit?: string;
+  readonly cells: readonly Cell[];
+  readonly style?: 'head' | 'group' | 'total';
+}
+
+export interface Table {
+  readonly key: string;
+  readonly title: string;
+  readonly columns: readonly { readonly key: string; readonly head: string; readonly sub?: string; readonly align: 'left' | 'right' }[];
+  readonly rows: readonly Row[];
+  readonly notes: readonly string[];
+}
+
+export interface TitleEntry {
+  readonly label: string;
+  readonly text: string;
+}
+
+/** One model behind every table on screen, in CSV and in PDF. */
+export interface ReportModel {
+  readonly title: readonly TitleEntry[];
+  readonly strip: {
+    readonly purpose: string;
+    readonly margin: string;
+    readonly fingerprint: string;
+    readonly measures: string;
+    readonly version: string;
+    readonly number: string;
+  };
+  readonly streams: Table;
+  readonly units: Table;
+  readonly closure: Table;
+  readonly limits: Table;
+  readonly assumptions: Table;
+  readonly pairs: Table;
+  readonly sources: readonly string[];
+  readonly cautions: readonly string[];
+  readonly state: { readonly solved: boolean; readonly text: string };
+}
+
+export interface MeasureOf {
+  readonly dim: Dimension;
+  readonly unit: string;
+}
