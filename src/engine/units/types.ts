@@ -11,13 +11,17 @@ import type { Model } from '../thermo/types';
 interface SettingCommon {
   /** May be absent without an assumption (absence has a meaning of its own, e.g. adiabatic). */
   readonly optional?: true;
-  /** Used when absent, and listed as an assumption: the text as a user would type it, its SI value, the reason. */
+  /**
+   * Used when absent, and listed as an assumption: its compiled value, the text as a user would type it, the reason as a plain
+   * sentence. For a group the value has one key, e.g. { drop: 0 }: the assumption's path then ends in that key ('p.drop').
+   */
   readonly otherwise?: { readonly value: unknown; readonly text: string; readonly why: string };
 }
 export type SettingSpec = SettingCommon &
   (
     | { readonly is: 'quantity'; readonly dim: Dimension; readonly min?: number; readonly max?: number }
-    | { readonly is: 'flow' }
+    /** `share`: a bare fraction ("8 %") is allowed too and means that mole share of what enters the unit. */
+    | { readonly is: 'flow'; readonly share?: true }
     | { readonly is: 'composition' }
     | { readonly is: 'chemical' }
     | { readonly is: 'product' }
@@ -62,7 +66,13 @@ export type CompositionSI =
       /** 0..1, humid air. */
       readonly relativeHumidity: number;
       /** Indices in the full list. */
-      readonly at: { readonly N2: number; readonly O2: number; readonly Ar: number; readonly CO2: number; readonly H2O: number };
+      readonly at: {
+        readonly N2: number;
+        readonly O2: number;
+        readonly Ar: number;
+        readonly CO2: number;
+        readonly H2O: number;
+      };
     };
 
 /** One port of a kind. Numbered ports ('in1', 'in2', ...) are names: gaps allowed, never renumbered. */
@@ -73,6 +83,21 @@ export interface PortSpec {
   readonly numbered?: { readonly min: number; readonly max: number };
   /** May stay without a stream (a numbered inlet beyond the first, an air port). */
   readonly optional?: true;
+}
+
+/**
+ * Exactly `count` of these top-level settings must be given, or exactly one of the pairs. All keys are `optional` by themselves.
+ */
+export interface Choice {
+  readonly keys: readonly string[];
+  readonly count: 1;
+  readonly pairs?: readonly (readonly [string, string])[];
+}
+
+/** When every one of these paths is given, the key has no meaning: refused if given, not asked for, no default filled in. */
+export interface Moot {
+  readonly when: readonly string[];
+  readonly key: string;
 }
 
 /** How a result of the kind is shown: key in Answer.results -> what it measures. */
@@ -91,6 +116,10 @@ export interface KindCatalogue {
   readonly tag: { readonly letters: string; readonly drawn: boolean };
   readonly ports: readonly PortSpec[];
   readonly settings: Readonly<Record<string, SettingSpec>>;
+  /** Settings of which a stated number is given. */
+  readonly choose?: readonly Choice[];
+  /** Settings that lose their meaning beside others. */
+  readonly moot?: readonly Moot[];
   readonly results: Readonly<Record<string, ResultSpec>>;
   /** Codes this kind may emit. */
   readonly findings: readonly string[];
