@@ -3,6 +3,7 @@
 import { spawnSync } from 'node:child_process';
 import { existsSync } from 'node:fs';
 import { createRequire } from 'node:module';
+import { delimiter, join } from 'node:path';
 
 /** Names a Chromium goes by on PATH, in the order tried. */
 const NAMES = ['chromium', 'chromium-browser', 'google-chrome', 'google-chrome-stable'];
@@ -35,6 +36,17 @@ function runs(program) {
   return spawnSync(program, ['--version'], { stdio: 'ignore', timeout: 30_000 }).status === 0;
 }
 
+/**
+ * Every file on PATH with one of the names; Playwright wants the file, not the name.
+ * @returns {string[]}
+ */
+function onPath() {
+  const folders = (process.env.PATH ?? '').split(delimiter).filter(Boolean);
+  return NAMES.flatMap((name) => folders.map((folder) => join(folder, name))).filter((file) =>
+    existsSync(file),
+  );
+}
+
 /** The file of Playwright's own browser, if the package and that file are there. */
 function playwrightsOwn() {
   const require = createRequire(import.meta.url);
@@ -60,6 +72,6 @@ export function findBrowser() {
     if (!runs(given)) throw new Error(`CHROMIUM_PATH is "${given}", which does not answer --version.`);
     return { executablePath: given, foundBy: 'CHROMIUM_PATH' };
   }
-  for (const name of NAMES) if (runs(name)) return { executablePath: name, foundBy: 'PATH' };
+  for (const file of onPath()) if (runs(file)) return { executablePath: file, foundBy: 'PATH' };
   return playwrightsOwn() ? { foundBy: 'playwright' } : undefined;
 }
