@@ -1,0 +1,111 @@
+/** The rooms of src and who may import whom. Change a rule here and in DEVELOPERS.md together. */
+export interface RoomRule {
+  /**
+   * Rooms whose code it may load. `catalogue` stands for engine/units/catalogue.ts, `engine-types` for files
+   * directly in engine/ and its types.ts files: tables and names that solve nothing, safe for the page.
+   */
+  readonly code: readonly string[];
+  /** Rooms it may `import type` from besides: erased before anything runs. */
+  readonly types: readonly string[];
+  /** Packages it may load, by name; '*' for any, 'node:*' for Node's own modules. */
+  readonly packages: readonly string[];
+  /** Whether it may start a worker. */
+  readonly startsWorker?: true;
+}
+
+const screen = (...more: string[]): RoomRule => ({
+  code: ['store', 'drawing', 'wording', 'report', 'quantity', 'catalogue', 'engine-types'],
+  types: ['engine', 'sketch', 'data', 'protocol'],
+  packages: ['react', 'react-dom', '@base-ui/react', 'zustand', 'd3-scale', 'd3-shape', ...more],
+});
+
+export const ROOMS: Readonly<Record<string, RoomRule>> = {
+  quantity: { code: [], types: [], packages: [] },
+  engine: { code: ['quantity'], types: [], packages: [] },
+  data: { code: ['engine-types', 'quantity'], types: ['engine'], packages: ['valibot'] },
+  sketch: {
+    code: ['quantity', 'catalogue', 'data', 'engine-types'],
+    types: ['engine'],
+    packages: ['valibot'],
+  },
+  wording: { code: ['quantity', 'catalogue', 'engine-types'], types: ['engine'], packages: [] },
+  drawing: {
+    code: ['sketch', 'catalogue', 'quantity', 'engine-types'],
+    types: ['engine'],
+    packages: ['d3-scale', 'd3-shape'],
+  },
+  report: {
+    code: ['sketch', 'drawing', 'wording', 'quantity', 'catalogue', 'engine-types'],
+    types: ['engine', 'data'],
+    packages: ['pdfmake', 'd3-scale', 'd3-shape'],
+  },
+  protocol: { code: ['engine-types'], types: ['engine'], packages: [] },
+  worker: { code: ['engine', 'protocol', 'quantity'], types: [], packages: [] },
+  store: {
+    code: ['sketch', 'protocol', 'quantity', 'catalogue', 'engine-types'],
+    types: ['engine', 'data'],
+    packages: ['react', 'zustand', 'idb', 'valibot'],
+    startsWorker: true,
+  },
+  canvas: screen('reactflow'),
+  drawers: screen(),
+  balance: screen(),
+  review: screen(),
+  app: {
+    code: [
+      'canvas',
+      'drawers',
+      'balance',
+      'review',
+      'store',
+      'drawing',
+      'wording',
+      'report',
+      'quantity',
+      'sketch',
+      'data',
+      'protocol',
+      'catalogue',
+      'engine-types',
+    ],
+    types: ['engine'],
+    packages: ['*'],
+    startsWorker: true,
+  },
+  cli: {
+    code: ['engine', 'sketch', 'data', 'report', 'wording', 'quantity', 'catalogue', 'engine-types'],
+    types: [],
+    packages: ['node:*', 'pdfmake'],
+  },
+};
+
+/** Floors of the engine, lowest first. Files directly in engine/ are the ground, below all of them. */
+export const FLOORS = [
+  'numerics',
+  'chemicals',
+  'thermo',
+  'equilibrium',
+  'column',
+  'units',
+  'network',
+] as const;
+
+/** src/engine/units/catalogue.ts and each kind's own catalogue.ts: ports and settings as data. */
+export const isCatalogue = (path: string): boolean =>
+  /^src\/engine\/units\/([\w-]+\/)?catalogue\.ts$/.test(path);
+
+/** Files of the engine that hold types and plain tables of names only. */
+export const isEngineTypes = (path: string): boolean =>
+  /^src\/engine\/([\w-]+\.ts|([\w-]+\/)+types\.ts)$/.test(path);
+
+/** Code that solves: the page reaches it through the worker, never by an import. */
+export const isSolver = (path: string): boolean =>
+  /^src\/engine\/units\/([\w-]+\/)+solve\.ts$/.test(path) ||
+  path === 'src/engine/units/solvers.ts' ||
+  (/^src\/engine\/(network|column|equilibrium)\//.test(path) && !isEngineTypes(path)) ||
+  path.startsWith('src/worker/');
+
+/** Names that must not stand in pure rooms: the screen, the clock, chance. */
+export const IMPURE =
+  /\b(document|window|navigator|localStorage|indexedDB|setTimeout|setInterval|requestAnimationFrame|performance|process)\b\s*[.(]|\bDate\.now\b|\bnew Date\b|\bMath\.random\b|\bcrypto\./;
+export const PURE_ROOMS: readonly string[] = ['engine', 'quantity'];
