@@ -2,7 +2,7 @@
 // All stages run even after one failed, so that one run tells everything. A stage that fails without a
 // failed test (a lint or type error, a build, a crash, an empty run) counts as one failure.
 import { spawnSync } from 'node:child_process';
-import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import { existsSync, mkdtempSync, readFileSync, realpathSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { delimiter, dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -49,6 +49,7 @@ function main() {
     ...process.env,
     PATH: join(root, 'node_modules', '.bin') + delimiter + (process.env.PATH ?? ''),
     PLAYWRIGHT_JSON_OUTPUT_FILE: e2e,
+    ...(process.stdout.isTTY ? {} : { NO_COLOR: '1' }),
   };
   /** @type {{ name: string, line: string, report?: string, count?: (report: any) => Count }[]} */
   const stages = [
@@ -93,4 +94,6 @@ function main() {
   return total.failed === 0 ? 0 : 1;
 }
 
-if (process.argv[1] === fileURLToPath(import.meta.url)) process.exitCode = main();
+// Real paths are compared: through a linked folder the two differ, and nothing would run.
+const started = process.argv[1] && realpathSync(process.argv[1]);
+if (started === realpathSync(fileURLToPath(import.meta.url))) process.exitCode = main();

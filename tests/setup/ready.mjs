@@ -1,7 +1,7 @@
 // Makes a bare checkout ready: installs the packages when they do not match the lock file and, with
 // --browser, finds or installs a Chromium. Only Node's own modules: nothing is installed before this ran.
 import { spawnSync } from 'node:child_process';
-import { existsSync, readFileSync } from 'node:fs';
+import { existsSync, readFileSync, realpathSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { findBrowser, NO_BROWSER } from './browser.mjs';
@@ -75,4 +75,6 @@ function main() {
   return 0;
 }
 
-if (process.argv[1] === fileURLToPath(import.meta.url)) process.exitCode = main();
+// Real paths are compared: through a linked folder the two differ, and nothing would run.
+const started = process.argv[1] && realpathSync(process.argv[1]);
+if (started === realpathSync(fileURLToPath(import.meta.url))) process.exitCode = main();
