@@ -49,7 +49,6 @@ function main() {
     ...process.env,
     PATH: join(root, 'node_modules', '.bin') + delimiter + (process.env.PATH ?? ''),
     PLAYWRIGHT_JSON_OUTPUT_FILE: e2e,
-    ...(process.stdout.isTTY ? {} : { NO_COLOR: '1' }),
   };
   /** @type {{ name: string, line: string, report?: string, count?: (report: any) => Count }[]} */
   const stages = [
@@ -70,13 +69,21 @@ function main() {
     },
   ];
 
+  // Logs kept in a file carry no colour codes; Playwright sees to that itself and complains when told.
+  const plain = process.stdout.isTTY ? {} : { NO_COLOR: '1' };
+
   const total = { passed: 0, failed: 0, skipped: 0 };
   const summary = [];
   for (const { name, line, report, count } of stages) {
     console.log(`\n== ${name}: ${line.split(' --')[0]}`);
     const start = performance.now();
     const ok =
-      spawnSync(line, { cwd: root, env, shell: true, stdio: ['ignore', 'inherit', 'inherit'] }).status === 0;
+      spawnSync(line, {
+        cwd: root,
+        env: name === 'browser tests' ? env : { ...env, ...plain },
+        shell: true,
+        stdio: ['ignore', 'inherit', 'inherit'],
+      }).status === 0;
     const seconds = ((performance.now() - start) / 1000).toFixed(1);
     const counted =
       report && count && existsSync(report) ? count(JSON.parse(readFileSync(report, 'utf8'))) : undefined;
