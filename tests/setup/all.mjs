@@ -52,7 +52,7 @@ function main() {
   };
   /** @type {{ name: string, line: string, report?: string, count?: (report: any) => Count }[]} */
   const stages = [
-    { name: 'lint and format', line: 'biome ci .' },
+    { name: 'lint and format', line: `biome ci . --colors=${process.stdout.isTTY ? 'force' : 'off'}` },
     { name: 'types', line: 'tsc --noEmit' },
     {
       name: 'unit tests',
