@@ -101,8 +101,8 @@ export function toText(a: Ratio, decimals: number): string {
   return `${sign}${digits.slice(0, -decimals)}.${digits.slice(-decimals)}`;
 }
 
-/** Place of the first figure: 3 for 1234, -2 for 0.012; 0 for zero. Off by at most one beside a power of ten. */
+/** Place of the first figure: 3 for 1234, -2 for 0.012; 0 for zero and beyond the doubles. */
 export function magnitude(a: Ratio): number {
-  const size = Math.abs(toDouble(a));
-  return size > 0 && Number.isFinite(size) ? Math.floor(Math.log10(size)) : 0;
+  const size = toDouble(a);
+  return size !== 0 && Number.isFinite(size) ? Number(size.toExponential().split('e')[1]) : 0;
 }

@@ -46,4 +46,5 @@ export const addShape = (a: Shape, b: Shape, n: number): Shape => [
 ];
 
 /** The dimensions that a unit of this shape can measure. */
-export const dimensionsOf = (shape: Shape): Dimension[] => DIMENSIONS.filter((d) => sameShape(SHAPES[d], shape));
+export const dimensionsOf = (shape: Shape): Dimension[] =>
+  DIMENSIONS.filter((d) => sameShape(SHAPES[d], shape));

@@ -27,7 +27,12 @@ const ENERGY: Shape = [2, 1, -2, 0, 0];
 const FORCE: Shape = [1, 1, -2, 0, 0];
 
 const table = new Map<string, UnitSymbol>();
-const put = (names: string, factor: Ratio, shape: Shape, more: Omit<UnitSymbol, 'factor' | 'shape'> = {}): void => {
+const put = (
+  names: string,
+  factor: Ratio,
+  shape: Shape,
+  more: Omit<UnitSymbol, 'factor' | 'shape'> = {},
+): void => {
   for (const name of names.split(' ')) table.set(name, { factor: reduced(factor), shape, ...more });
 };
 const is = fromText;
@@ -109,18 +114,24 @@ put('kWh', is('3.6e6'), ENERGY);
 put('W', ONE, SHAPES.power);
 put('kW', is('1e3'), SHAPES.power);
 put('MW', is('1e6'), SHAPES.power);
+put('mW', is('0.001'), SHAPES.power);
 
 // Viscosity: 1 cP = 1 mPa s (NIST SP 811, App. B.8).
 put('mPa', is('0.001'), PRESSURE);
 put('cP', is('0.001'), SHAPES.viscosity);
 
 // Gas volumes at a reference state, counted as amount of ideal gas: n = P V / (R T).
-const gas = (volume_m3: Ratio, P_Pa: Ratio, T_K: Ratio): Ratio => over(times(P_Pa, volume_m3), times(is(String(R_J_molK)), T_K));
+const gas = (volume_m3: Ratio, P_Pa: Ratio, T_K: Ratio): Ratio =>
+  over(times(P_Pa, volume_m3), times(is(String(R_J_molK)), T_K));
 const ATMOSPHERE = is(String(STANDARD_ATMOSPHERE_Pa));
 put('Nm3', gas(ONE, ATMOSPHERE, is('273.15')), AMOUNT); // 0 degC, 101325 Pa
 put('Sm3', gas(ONE, ATMOSPHERE, is('288.15')), AMOUNT); // 15 degC, 101325 Pa (ISO 13443)
 // 60 degF and 14.696 psi.
-put('scf', gas(power(FOOT, 3), times(is('14.696'), PSI), times(plus(is('60'), is('459.67')), RANKINE)), AMOUNT);
+put(
+  'scf',
+  gas(power(FOOT, 3), times(is('14.696'), PSI), times(plus(is('60'), is('459.67')), RANKINE)),
+  AMOUNT,
+);
 
 put('%', is('0.01'), SHAPES.number);
 put('ppm', is('0.000001'), SHAPES.number);
