@@ -50,6 +50,14 @@ export function takeApart(text: string): TakenApart | UnitFault {
   if (!number.ok) return number;
   let unitAt = number.next;
   while (unitAt < whole.length && BLANK.test(whole.charAt(unitAt))) unitAt += 1;
+  if (/\d/.test(whole.charAt(unitAt))) {
+    return {
+      ok: false,
+      code: 'quantity/digit-grouping',
+      at: numberAt,
+      found: whole.slice(numberAt, unitAt + 1),
+    };
+  }
   const unit = unitAt < whole.length ? readUnit(whole, unitAt) : NO_UNIT;
   if (!unit.ok) return unit;
   return { ok: true, typed: number.typed, plain: number.plain, numberAt, unitAt, unit };

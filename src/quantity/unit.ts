@@ -29,6 +29,8 @@ const CUBE = /\^?3|³/y;
 const PLAIN_EXPONENT = /\^?([-−]?\d+)/y;
 const RAISED_EXPONENT = /[⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+/y;
 const JOINER = new RegExp(`(?:${SPACE}*[·⋅]${SPACE}*|${SPACE}+)`, 'y');
+const SLASH = new RegExp(`${SPACE}*/${SPACE}*`, 'y');
+const APART = new RegExp(`${SPACE}*(\\((?:a|g)\\))`, 'y');
 const RAISED = '⁰¹²³⁴⁵⁶⁷⁸⁹';
 const SPELT: Readonly<Record<string, string>> = { '°C': 'degC', '°F': 'degF' };
 
@@ -100,10 +102,9 @@ function readProduct(text: string, start: number): { factors: Factor[]; next: nu
 /** Reads what stands below the slash: one factor, or several in brackets. */
 function readBelow(
   text: string,
-  slash: number,
+  at: number,
   above: readonly Factor[],
 ): { factors: Factor[]; next: number } | UnitFault {
-  const at = slash + 1;
   if (text[at] !== '(') {
     const one = readFactor(text, at);
     if ('ok' in one) return one;
@@ -152,10 +153,25 @@ function combine(above: readonly Factor[], below: readonly Factor[]): UnitOfMeas
   return { ok: true, text, factor, shape };
 }
 
+/** What stands behind a complete unit: a second slash, a pressure mark set apart, or something that does not belong. */
+function leftOver(text: string, start: number, at: number): UnitFault {
+  const found = text.slice(at, at + 1);
+  const parts = text.slice(start).split('/');
+  if (match(SLASH, text, at)) {
+    const near = `${parts[0]?.trim()}/(${parts.slice(1).join(' ')})`;
+    const fault: UnitFault = { ok: false, code: 'quantity/second-slash', at, found };
+    return parts.length < 5 && !/[()]/.test(parts.join('')) && readUnit(near).ok ? { ...fault, near } : fault;
+  }
+  const mark = match(APART, text, at)?.[1];
+  const near = mark === undefined ? undefined : text.slice(start, at) + mark;
+  const fault: UnitFault = { ok: false, code: 'quantity/unit-syntax', at, found };
+  return near !== undefined && SYMBOLS.has(near) ? { ...fault, near } : fault;
+}
+
 /**
  * Reads a unit of measure from `start` to the end of the text.
  *
- * A space or raised dot multiplies, one slash divides, brackets hold several factors below it, `^` may stand before an
+ * A space or raised dot multiplies, one slash (spaces around it or not) divides, brackets hold several factors below it, `^` may stand before an
  * exponent. Inside a compound unit a degree counts as a difference.
  *
  * @returns the unit, or the place and kind of the first fault
@@ -165,15 +181,13 @@ export function readUnit(text: string, start = 0): UnitOfMeasure | UnitFault {
   if ('ok' in above) return above;
   let below: Factor[] = [];
   let next = above.next;
-  if (text[next] === '/') {
-    const read = readBelow(text, next, above.factors);
+  const slash = match(SLASH, text, next)?.[0];
+  if (slash !== undefined) {
+    const read = readBelow(text, next + slash.length, above.factors);
     if ('ok' in read) return read;
     below = read.factors;
     next = read.next;
   }
-  if (next < text.length) {
-    const code = text[next] === '/' ? 'quantity/second-slash' : 'quantity/unit-syntax';
-    return { ok: false, code, at: next, found: text.slice(next, next + 1) };
-  }
+  if (next < text.length) return leftOver(text, start, next);
   return combine(above.factors, below);
 }

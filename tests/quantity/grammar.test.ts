@@ -31,6 +31,9 @@ describe('a quantity is read as typed', () => {
     ['1 kg s⁻¹', 'massFlow', 'kg s-1'],
     ['1 BTU/(lb °F)', 'heatCapacity', 'BTU/(lb degF)'],
     ['1 kg/(m s)', 'viscosity', 'kg/(m s)'],
+    ['1 kg / h', 'massFlow', 'kg/h'],
+    ['1 kJ / (kg °C)', 'heatCapacity', 'kJ/(kg degC)'],
+    ['1 kcal(th)/h', 'power', 'kcal(th)/h'],
   ])('%s has one spelling', (text, dim, unit) => {
     expect(parseQuantity(text, dim)).toMatchObject({ ok: true, dim, unit });
   });
@@ -87,6 +90,10 @@ describe('what is not a quantity is refused with code, place and what fits', () 
     ['1,000.5 bar', 'pressure', 'digit-grouping', 0, '1,000.5'],
     ['1 000 bar', 'pressure', 'digit-grouping', 0, '1 000'],
     ['1\u2009000 bar', 'pressure', 'digit-grouping', 0, '1\u2009000'],
+    ['1.5 000 bar', 'pressure', 'digit-grouping', 0, '1.5 0'],
+    ['10 bar(b)', 'pressure', 'unit-syntax', 6, '('],
+    ['10 (bar)', 'pressure', 'unit-syntax', 3, '('],
+    ['5 /h', 'massFlow', 'unit-syntax', 2, '/'],
     ["1'000 bar", 'pressure', 'digit-grouping', 0, "1'000"],
     ['1e400 bar', 'pressure', 'out-of-range', 0, '1e400'],
     ['1e999999999 bar', 'pressure', 'out-of-range', 0, '1e999999999'],
@@ -132,6 +139,9 @@ describe('what is not a quantity is refused with code, place and what fits', () 
     ['10 J/mol K', 'molarEntropy', 'J/(mol K)'],
     ['0.3 barg', 'pressureDifference', 'bar'],
     ['0.3 kPa(g)', 'pressureDifference', 'kPa'],
+    ['10 bar (a)', 'pressure', 'bar(a)'],
+    ['10 W/m/K', 'thermalConductivity', 'W/(m K)'],
+    ['10 mol%', 'fraction', '%'],
   ])('%s as %s names what was meant: %s', (text, dim, near) => {
     expect(parseQuantity(text, dim)).toMatchObject({ ok: false, near });
   });
