@@ -1,5 +1,6 @@
 import type { Port, StreamId, UnitId } from '../engine/ids';
 import type { Weight } from '../engine/outcome';
+import type { KindCatalogue } from '../engine/units/types';
 
 /** Sheet coordinates in px at 100 %, y down. */
 export type Point = readonly [number, number];
@@ -10,7 +11,18 @@ export interface Box {
   readonly h: number;
 }
 
-export type Ink = 'ink' | 'ink2' | 'ink3' | 'hair' | 'paper' | 'accent' | 'caution' | 'beyond';
+export type Ink =
+  | 'ink'
+  | 'ink2'
+  | 'ink3'
+  | 'hair'
+  | 'rule'
+  | 'paper'
+  | 'accent'
+  | 'caution'
+  | 'caution-wash'
+  | 'beyond'
+  | 'on-beyond';
 /** One stroke or fill of a symbol, in the symbol's own coordinates (origin in its middle). */
 export interface PathShape {
   readonly d: string;
@@ -25,6 +37,15 @@ export interface PortPlace {
   readonly at: Point;
   /** The side a line leaves or enters. */
   readonly side: Side;
+  /** The drawn line runs on inward by this much beyond the port, to the edge of a dot. */
+  readonly reach?: number;
+}
+/** A heat link (or shaft link) that ends in a ring: from the symbol outward, in the symbol's own coordinates. */
+export interface LinkData {
+  readonly from: Point;
+  readonly to: Point;
+  /** Where the arrowhead points; none when the direction is a result. */
+  readonly flow: 'in' | 'out' | 'none';
 }
 export interface SymbolData {
   /** Bounding box of the drawn outline, origin inside it. */
@@ -34,6 +55,9 @@ export interface SymbolData {
   ports(name: Port): PortPlace | undefined;
   /** Draws the unit's name inside (feed, product). */
   readonly nameInside?: boolean;
+  /** Middle of the name inside. */
+  readonly nameAt?: Point;
+  readonly link?: LinkData;
   /** No tag is drawn (join, divide, feed, product). */
   readonly tagless?: boolean;
 }
@@ -52,6 +76,10 @@ export interface TextShape {
   readonly halo?: boolean;
 }
 
+/**
+ * A unit, placed. Everything is in sheet coordinates, save `symbol`, which is drawn through
+ * `transformOf(shape)` (transform.ts).
+ */
 export interface UnitShape {
   readonly unit: UnitId;
   readonly tag: string;
@@ -60,6 +88,7 @@ export interface UnitShape {
   readonly turn: 0 | 90 | 180 | 270;
   readonly mirror: boolean;
   readonly symbol: SymbolData;
+  /** The symbol's box after turning and mirroring. */
   readonly box: Box;
   readonly state: DrawnState;
   /** Tag text and the mark under it, if a tag is drawn. */
@@ -67,18 +96,27 @@ export interface UnitShape {
   readonly stateMark: readonly PathShape[];
   /** Symbol shown upright even when turned (names of feeds and products). */
   readonly texts: readonly TextShape[];
-  /** Heat link end with its duty, for units that have one. */
-  readonly duty?: { readonly line: PathShape; readonly text?: TextShape };
+  /** Heat link with its ring and arrowhead (marks) and its duty, for units that have one. */
+  readonly duty?: {
+    readonly line: PathShape;
+    readonly marks: readonly PathShape[];
+    readonly text?: TextShape;
+  };
+  /** Middle of the 16 px mark (marks.ts draws it). */
   readonly limit?: { readonly weight: Weight; readonly at: Point };
 }
 
 export interface LineShape {
   readonly stream: StreamId;
   readonly number: string;
+  /** Port, bends, port: orthogonal, no rounding. */
   readonly points: readonly Point[];
-  /** Path with rounded bends and bridges. */
+  /** Path with rounded bends and bridges; ends inside the arrowhead. */
   readonly d: string;
+  /** Tip of the arrowhead and the side it points to. */
   readonly arrow?: { readonly at: Point; readonly side: Side };
+  /** Filled arrowhead, 9 x 7. */
+  readonly head?: string;
   readonly diamond?: Point;
   /** Hanging: no target. */
   readonly hanging: boolean;
@@ -95,8 +133,12 @@ export interface LabelShape {
   /** x where numbers end (right-aligned) and where units start. */
   readonly numberRight: number;
   readonly unitLeft: number;
+  /** Baseline of the first row; the next ones follow by 13 px. */
+  readonly baseline: number;
   /** No free place: opens on hover or focus. */
   readonly folded: boolean;
+  /** Numbers of an out-of-date unit: drawn in ink3 and italic. */
+  readonly stale: boolean;
 }
 
 /** Everything on the sheet, placed. Canvas and PDF draw the same scene. */
@@ -117,4 +159,8 @@ export interface SceneInput {
   readonly duties: ReadonlyMap<UnitId, string>;
   /** Positions while a drag lasts, over the sketch's own. */
   readonly moved?: ReadonlyMap<UnitId, Point>;
+  /** Width of a stream's ribbon in follow [px]; labels clear half of it. */
+  readonly ribbons?: ReadonlyMap<StreamId, number>;
+  /** Kinds whose ports are known; absent: the catalogue. A kind without a symbol of its own becomes a box. */
+  readonly kinds?: Readonly<Record<string, KindCatalogue>>;
 }

@@ -18,7 +18,12 @@ export interface Row {
 export interface Table {
   readonly key: string;
   readonly title: string;
-  readonly columns: readonly { readonly key: string; readonly head: string; readonly sub?: string; readonly align: 'left' | 'right' }[];
+  readonly columns: readonly {
+    readonly key: string;
+    readonly head: string;
+    readonly sub?: string;
+    readonly align: 'left' | 'right';
+  }[];
   readonly rows: readonly Row[];
   readonly notes: readonly string[];
 }

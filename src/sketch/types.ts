@@ -55,8 +55,10 @@ export interface ModelChoice {
   readonly poynting?: boolean;
   readonly liquidH?: 'psat-slope' | 'hvap';
   readonly liquidVolume?: 'corrected' | 'cubic';
-  readonly bankPairs: boolean;
-  readonly pairs: readonly Json[];
+  /** Absent: true, an assumption. False: only the pairs given here, all others zero. */
+  readonly bankPairs?: boolean;
+  /** Absent: none, an assumption. */
+  readonly pairs?: readonly Json[];
 }
 
 export interface SketchUnit {
@@ -91,7 +93,14 @@ export interface Note {
 
 export type MeasureSet = 'SI' | 'metric' | 'US';
 /** What a stream's label on the sheet may show, by key; units follow the measures. */
-export type LabelKey = 'molarFlow' | 'massFlow' | 'temperature' | 'pressure' | 'vapourFraction' | 'enthalpyFlow' | 'volumeFlow';
+export type LabelKey =
+  | 'molarFlow'
+  | 'massFlow'
+  | 'temperature'
+  | 'pressure'
+  | 'vapourFraction'
+  | 'enthalpyFlow'
+  | 'volumeFlow';
 
 export interface Display {
   readonly set: MeasureSet;
@@ -107,7 +116,11 @@ export interface Sketch {
   readonly version: 1;
   readonly id: string;
   readonly title: TitleBlock;
-  readonly site: { readonly pressure?: Quantity; readonly ambient?: Quantity; readonly coolingWater?: Quantity };
+  readonly site: {
+    readonly pressure?: Quantity;
+    readonly ambient?: Quantity;
+    readonly coolingWater?: Quantity;
+  };
   readonly chemicals: readonly SketchChemical[];
   readonly model: ModelChoice;
   readonly units: readonly SketchUnit[];

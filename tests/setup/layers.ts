@@ -14,7 +14,7 @@ export interface RoomRule {
 }
 
 const screen = (...more: string[]): RoomRule => ({
-  code: ['store', 'drawing', 'wording', 'report', 'quantity', 'catalogue', 'engine-types'],
+  code: ['parts', 'store', 'drawing', 'wording', 'report', 'quantity', 'catalogue', 'engine-types'],
   types: ['engine', 'sketch', 'data', 'protocol'],
   packages: ['react', 'react-dom', '@base-ui/react', 'zustand', 'd3-scale', 'd3-shape', ...more],
 });
@@ -47,12 +47,19 @@ export const ROOMS: Readonly<Record<string, RoomRule>> = {
     packages: ['react', 'zustand', 'idb', 'valibot'],
     startsWorker: true,
   },
+  /** Small React parts that several screens show alike: marks, number fields, segmented switches. */
+  parts: {
+    code: ['store', 'drawing', 'wording', 'quantity', 'engine-types'],
+    types: ['engine', 'sketch'],
+    packages: ['react', 'd3-scale', 'd3-shape'],
+  },
   canvas: screen('reactflow'),
   drawers: screen(),
   balance: screen(),
   review: screen(),
   app: {
     code: [
+      'parts',
       'canvas',
       'drawers',
       'balance',

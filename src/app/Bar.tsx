@@ -1,0 +1,173 @@
+import { useState } from 'react';
+import { LimitMark, worstWeight } from '../parts/LimitMark';
+import type { Action } from '../store/action';
+import { useResults, useSession, useSketch, useStores } from '../store/react';
+
+const savedText = {
+  saved: 'Saved on this computer',
+  saving: 'Saving',
+  failed: 'Not saved',
+  'read-only': 'Read only: open in another tab',
+  unknown: '',
+} as const;
+
+function Word({
+  action,
+  children,
+}: {
+  readonly action: Action | undefined;
+  readonly children?: React.ReactNode;
+}) {
+  const stores = useStores();
+  if (!action) return null;
+  const keys = action.keys[0];
+  return (
+    <button
+      type="button"
+      className="button"
+      title={keys ? `${action.label} (${keys})` : action.label}
+      onClick={() => action.run(stores)}
+    >
+      {children ?? action.label}
+    </button>
+  );
+}
+
+/** The bar: mark, name of the sketch, then words. What is switched on says what it is on. */
+export function Bar({ actions }: { readonly actions: readonly Action[] }) {
+  const stores = useStores();
+  const by = (id: string): Action | undefined => actions.find((action) => action.id === id);
+  const title = useSketch((state) => state.sketch.title.title ?? '');
+  const number = useSketch((state) => state.sketch.title.number ?? '');
+  const undoLabel = useSketch((state) => state.past.at(-1)?.label);
+  const redoLabel = useSketch((state) => state.future[0]?.label);
+  const findings = useResults((state) => state.findings);
+  const saved = useSession((state) => state.saved);
+  const limitsOpen = useSession((state) => state.drawer?.is === 'limits');
+  const worst = worstWeight(findings);
+  const [menu, setMenu] = useState(false);
+  const more = actions.filter(
+    (action) => action.group === 'sketch' || action.group === 'view' || action.group === 'help',
+  );
+
+  return (
+    <header className="bar">
+      <div className="brand">
+        <svg width="20" height="20" viewBox="0 0 20 20" aria-hidden="true">
+          <path
+            d="M10 1 19 10 10 19 1 10Z M1 10H19 M10 10 14.5 5.5"
+            fill="none"
+            stroke="currentColor"
+            strokeWidth="1.6"
+            strokeLinejoin="round"
+          />
+        </svg>
+        <span>Splitwright</span>
+      </div>
+      <button
+        type="button"
+        className="name"
+        title="Title block, site and measures"
+        onClick={() => stores.session.openDrawer({ is: 'sketch' })}
+      >
+        {title || 'Untitled sketch'}
+        {number ? <span className="muted"> {number}</span> : null}
+      </button>
+      <span className="saved" data-state={saved.state} title={saved.detail}>
+        {savedText[saved.state]}
+      </span>
+      <span className="gap" />
+      <button
+        type="button"
+        className="button"
+        disabled={!undoLabel}
+        title="Undo (Ctrl+Z)"
+        onClick={() => by('undo')?.run(stores)}
+      >
+        Undo {undoLabel ? <span className="muted wide-only">{undoLabel}</span> : null}
+      </button>
+      <button
+        type="button"
+        className="button"
+        disabled={!redoLabel}
+        title={redoLabel ? `Redo ${redoLabel} (Ctrl+Shift+Z)` : 'Redo (Ctrl+Shift+Z)'}
+        onClick={() => by('redo')?.run(stores)}
+      >
+        Redo
+      </button>
+      <span className="divider" />
+      <Word action={by('chemicals')}>Chemicals</Word>
+      <Word action={by('assumptions')}>Assumptions</Word>
+      <button
+        type="button"
+        className={limitsOpen ? 'button on' : 'button'}
+        aria-pressed={limitsOpen}
+        onClick={() => by('limits')?.run(stores)}
+      >
+        Limits {worst ? <LimitMark weight={worst} /> : null} <span className="count">{findings.length}</span>
+      </button>
+      <span className="divider" />
+      <Word action={by('summary')}>Stream summary</Word>
+      <div className="menu-holder">
+        <button
+          type="button"
+          className="button"
+          aria-haspopup="menu"
+          aria-expanded={menu}
+          onClick={() => setMenu(!menu)}
+        >
+          File and view
+        </button>
+        {menu ? <Menu actions={more} close={() => setMenu(false)} /> : null}
+      </div>
+      <button type="button" className="button fill" onClick={() => by('export-pdf')?.run(stores)}>
+        Export PDF
+      </button>
+    </header>
+  );
+}
+
+function Menu({ actions, close }: { readonly actions: readonly Action[]; readonly close: () => void }) {
+  const stores = useStores();
+  const step = (from: EventTarget & Element, by: number): void => {
+    const items = [...(from.closest('[role=menu]')?.querySelectorAll<HTMLElement>('[role=menuitem]') ?? [])];
+    const at = items.indexOf(document.activeElement as HTMLElement);
+    items[(at + by + items.length) % items.length]?.focus();
+  };
+  return (
+    <>
+      <button type="button" className="menu-away" aria-label="Close the menu" tabIndex={-1} onClick={close} />
+      <div
+        className="menu"
+        role="menu"
+        aria-label="File and view"
+        tabIndex={-1}
+        ref={(element) => element?.querySelector<HTMLElement>('[role=menuitem]')?.focus()}
+        onKeyDown={(event) => {
+          if (event.key === 'Escape') close();
+          else if (event.key === 'ArrowDown') step(event.currentTarget, 1);
+          else if (event.key === 'ArrowUp') step(event.currentTarget, -1);
+          else return;
+          event.preventDefault();
+          event.stopPropagation();
+        }}
+      >
+        {actions.map((action) => (
+          <button
+            key={action.id}
+            type="button"
+            role="menuitem"
+            disabled={!(action.when?.(stores) ?? true)}
+            onClick={() => {
+              close();
+              action.run(stores);
+            }}
+          >
+            <span>{action.label}</span>
+            <kbd>{action.keys[0] ?? ''}</kbd>
+          </button>
+        ))}
+      </div>
+    </>
+  );
+}

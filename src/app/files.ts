@@ -1,0 +1,34 @@
+/** Opens the browser's file dialogue; answers undefined when the user closed it. */
+export function pickFile(accept: string): Promise<File | undefined> {
+  return new Promise((resolve) => {
+    const input = document.createElement('input');
+    input.type = 'file';
+    input.accept = accept;
+    input.addEventListener('change', () => resolve(input.files?.[0]));
+    input.addEventListener('cancel', () => resolve(undefined));
+    input.click();
+  });
+}
+
+/** Hands a file to the browser's downloads. */
+export function download(name: string, data: BlobPart, type: string): void {
+  const address = URL.createObjectURL(new Blob([data], { type }));
+  const link = document.createElement('a');
+  link.href = address;
+  link.download = name;
+  document.body.append(link);
+  link.click();
+  link.remove();
+  setTimeout(() => URL.revokeObjectURL(address), 60_000);
+}
+
+/** A file name from a title: letters, digits and dashes, never empty. */
+export function fileName(title: string | undefined, ending: string): string {
+  const stem = (title ?? '')
+    .normalize('NFKD')
+    .replace(/[^\p{Letter}\p{Number}]+/gu, '-')
+    .replace(/^-+|-+$/g, '')
+    .toLowerCase()
+    .slice(0, 60);
+  return `${stem || 'sketch'}${ending}`;
+}

@@ -1,0 +1,56 @@
+import type { Stores } from './react';
+
+/** One thing a user can do: menu, key and undo label come from the same record. */
+export interface Action {
+  readonly id: string;
+  readonly label: string;
+  readonly group: 'sketch' | 'edit' | 'sheet' | 'view' | 'result' | 'help';
+  /** Keys as shown to users: 'Ctrl+Z', 'F6', '/', 'Shift+Arrow Up'. Empty: no key. */
+  readonly keys: readonly string[];
+  /** Also works while a text field has the focus. */
+  readonly whileTyping?: true;
+  when?(stores: Stores): boolean;
+  run(stores: Stores): void;
+}
+
+const named: Readonly<Record<string, string>> = {
+  ' ': 'Space',
+  ArrowUp: 'Arrow Up',
+  ArrowDown: 'Arrow Down',
+  ArrowLeft: 'Arrow Left',
+  ArrowRight: 'Arrow Right',
+  Escape: 'Esc',
+};
+
+/** 'Ctrl+Shift+Z' for a keyboard event. Command counts as Ctrl; Shift is named with letters and named keys only. */
+export function keyText(
+  event: Pick<KeyboardEvent, 'key' | 'ctrlKey' | 'metaKey' | 'altKey' | 'shiftKey'>,
+): string {
+  const plain = named[event.key] ?? (event.key.length === 1 ? event.key.toUpperCase() : event.key);
+  const isMark =
+    event.key.length === 1 && event.key.toUpperCase() === event.key.toLowerCase() && event.key !== ' ';
+  return [
+    event.ctrlKey || event.metaKey ? 'Ctrl' : '',
+    event.altKey ? 'Alt' : '',
+    event.shiftKey && !isMark ? 'Shift' : '',
+    plain,
+  ]
+    .filter(Boolean)
+    .join('+');
+}
+
+/** The action for a key press, if one is ready to run. */
+export function actionFor(
+  actions: readonly Action[],
+  event: KeyboardEvent,
+  typing: boolean,
+  stores: Stores,
+): Action | undefined {
+  const text = keyText(event);
+  return actions.find(
+    (action) =>
+      action.keys.includes(text) &&
+      (!typing || action.whileTyping === true) &&
+      (action.when?.(stores) ?? true),
+  );
+}

@@ -1,0 +1,31 @@
+/**
+ * Performance marks that scripts read: app-ready, first-solved, edit:N (input event) and shown:N (first frame painted after
+ * the text changed: a MessageChannel turn posted in requestAnimationFrame).
+ */
+const KEEP = 400;
+const made: string[] = [];
+
+function mark(name: string): void {
+  performance.mark(name);
+  made.push(name);
+  if (made.length > KEEP) performance.clearMarks(made.shift() as string);
+}
+
+export const markEdit = (edit: number): void => mark(`edit:${edit}`);
+export const markOnce = (name: 'app-ready' | 'first-solved'): void => {
+  if (performance.getEntriesByName(name, 'mark').length === 0) performance.mark(name);
+};
+
+/** Calls back after the next frame has been painted. */
+export function afterPaint(then: () => void): void {
+  requestAnimationFrame(() => {
+    const channel = new MessageChannel();
+    channel.port1.onmessage = () => {
+      channel.port1.close();
+      then();
+    };
+    channel.port2.postMessage(null);
+  });
+}
+
+export const markShown = (edit: number): void => mark(`shown:${edit}`);

@@ -1,0 +1,113 @@
+import { createStore } from 'zustand/vanilla';
+import type { StreamId, UnitId } from '../engine/ids';
+import type { Closure, SolveBatch, StreamResult, UnitResult } from '../engine/network/types';
+import type { Finding } from '../engine/outcome';
+
+/** The latest word on a stream or unit, and the last solved result where the latest has none to show. */
+export interface Shown<T> {
+  readonly latest: T;
+  /** An older solved result, shown as out of date while the new one is missing. Never beside 'no solution'. */
+  readonly older?: T;
+}
+
+export interface ResultsState {
+  readonly streams: ReadonlyMap<StreamId, Shown<StreamResult>>;
+  readonly units: ReadonlyMap<UnitId, Shown<UnitResult>>;
+  readonly closure: Closure | null;
+  readonly findings: readonly Finding[];
+  /** Edit that the last complete answer belongs to; 0 before the first. */
+  readonly solvedEdit: number;
+  /** Edit that partial results belong to while a slower solve runs. */
+  readonly answering: number;
+  /** Unit the worker is at during a slow solve. */
+  readonly at: UnitId | null;
+  /** Wall time of the last complete solve, posting included [ms]. */
+  readonly tookMs: number;
+  /** Bumped when the worker had to be restarted or gave up; the message is for the title strip. */
+  readonly trouble: string | null;
+}
+
+const empty: ResultsState = {
+  streams: new Map(),
+  units: new Map(),
+  closure: null,
+  findings: [],
+  solvedEdit: 0,
+  answering: 0,
+  at: null,
+  tookMs: 0,
+  trouble: null,
+};
+
+function merge<K extends string, T extends { readonly state: string }>(
+  known: ReadonlyMap<K, Shown<T>>,
+  changed: readonly (readonly [K, T])[],
+  gone: readonly string[],
+): ReadonlyMap<K, Shown<T>> {
+  if (changed.length === 0 && !gone.some((id) => known.has(id as K))) return known;
+  const next = new Map(known);
+  for (const id of gone) next.delete(id as K);
+  for (const [id, latest] of changed) {
+    const before = known.get(id);
+    const lastSolved = before && (before.latest.state === 'solved' ? before.latest : before.older);
+    const keep = latest.state === 'waiting' || latest.state === 'needs-value' ? lastSolved : undefined;
+    next.set(id, keep ? { latest, older: keep } : { latest });
+  }
+  return next;
+}
+
+/** What the worker said, tagged with the edit it answers. Neither saved nor undone; untouched records keep their identity. */
+export function createResultsStore() {
+  const store = createStore<ResultsState>()(() => empty);
+  const { getState: get, setState: set } = store;
+  return {
+    ...store,
+    take(edit: number, last: boolean, batch: SolveBatch, tookMs: number): void {
+      const streams = merge(get().streams, batch.streams, batch.gone);
+      const units = merge(get().units, batch.units, batch.gone);
+      set(
+        last
+          ? {
+              streams,
+              units,
+              findings: batch.findings,
+              closure: batch.closure ?? null,
+              solvedEdit: edit,
+              answering: edit,
+              at: null,
+              tookMs,
+              trouble: null,
+            }
+          : { streams, units, answering: edit },
+      );
+    },
+    at(edit: number, unit: UnitId): void {
+      set({ answering: edit, at: unit });
+    },
+    broke(message: string): void {
+      set({ trouble: message, at: null });
+    },
+    clear(): void {
+      set(empty);
+    },
+  };
+}
+
+export type ResultsStore = ReturnType<typeof createResultsStore>;
+
+/** The stream's result fit for numbers on the screen: the latest solved one, or an older one marked so. */
+export function shownStream(
+  entry: Shown<StreamResult> | undefined,
+): { readonly result: Extract<StreamResult, { state: 'solved' }>; readonly outOfDate: boolean } | undefined {
+  if (!entry) return undefined;
+  if (entry.latest.state === 'solved') return { result: entry.latest, outOfDate: false };
+  if (entry.older?.state === 'solved') return { result: entry.older, outOfDate: true };
+  return undefined;
+}
+
+/** The unit's state as drawn: the worker's four, and 'out-of-date' where an older result is shown. */
+export function drawnState(entry: Shown<UnitResult> | undefined): UnitResult['state'] | 'out-of-date' {
+  if (!entry) return 'waiting';
+  if (entry.latest.state === 'waiting' && entry.older) return 'out-of-date';
+  return entry.latest.state;
+}

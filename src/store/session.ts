@@ -1,0 +1,91 @@
+import { createStore } from 'zustand/vanilla';
+import type { Port, StreamId, UnitId } from '../engine/ids';
+
+export type DrawerChoice =
+  | { readonly is: 'unit'; readonly id: UnitId }
+  | { readonly is: 'stream'; readonly id: StreamId }
+  | { readonly is: 'limits' }
+  | { readonly is: 'assumptions' }
+  | { readonly is: 'chemicals' }
+  | { readonly is: 'sketch' };
+
+export interface Notice {
+  readonly key: number;
+  readonly tone: 'info' | 'caution' | 'beyond';
+  readonly title: string;
+  readonly lines: readonly string[];
+}
+
+export type Theme = 'system' | 'light' | 'dark';
+
+/** What is neither saved with the sketch nor undone: selection, open drawer, what lies over the sheet. */
+export interface SessionState {
+  readonly units: readonly UnitId[];
+  readonly streams: readonly StreamId[];
+  readonly drawer: DrawerChoice | null;
+  /** A connection started by keyboard or pointer, waiting for its other end. */
+  readonly connecting: { readonly unit: UnitId; readonly port: Port } | null;
+  readonly theme: Theme;
+  readonly shelfFolded: boolean;
+  readonly balanceFolded: boolean;
+  /** Full-screen pages over the sheet. */
+  readonly over: 'none' | 'summary' | 'pdf' | 'open' | 'keys' | 'find';
+  readonly notice: Notice | null;
+  /** Title bar: how autosave stands. */
+  readonly saved: {
+    readonly state: 'saved' | 'saving' | 'failed' | 'read-only' | 'unknown';
+    readonly detail?: string;
+  };
+  /** Read out politely by screen readers. */
+  readonly spoken: string;
+}
+
+export function createSession() {
+  const store = createStore<SessionState>()(() => ({
+    units: [],
+    streams: [],
+    drawer: null,
+    connecting: null,
+    theme: 'system',
+    shelfFolded: false,
+    balanceFolded: false,
+    over: 'none',
+    notice: null,
+    saved: { state: 'unknown' },
+    spoken: '',
+  }));
+  const { getState: get, setState: set } = store;
+  let notices = 0;
+  return {
+    ...store,
+    /** Replaces the selection and opens the drawer of a single thing. */
+    select(units: readonly UnitId[], streams: readonly StreamId[] = []): void {
+      const [unit] = units;
+      const [stream] = streams;
+      const alone = units.length + streams.length === 1;
+      const drawer: DrawerChoice | null =
+        alone && unit
+          ? { is: 'unit', id: unit }
+          : alone && stream
+            ? { is: 'stream', id: stream }
+            : get().drawer;
+      set({ units, streams, drawer });
+    },
+    toggleUnit(id: UnitId): void {
+      const { units } = get();
+      set({ units: units.includes(id) ? units.filter((u) => u !== id) : [...units, id] });
+    },
+    openDrawer(drawer: DrawerChoice | null): void {
+      set({ drawer });
+    },
+    say(tone: Notice['tone'], title: string, lines: readonly string[] = []): void {
+      notices += 1;
+      set({ notice: { key: notices, tone, title, lines }, spoken: [title, ...lines].join(' ') });
+    },
+    dismiss(): void {
+      set({ notice: null });
+    },
+  };
+}
+
+export type Session = ReturnType<typeof createSession>;

@@ -1,0 +1,117 @@
+import type { UnitId } from '../engine/ids';
+import type { Basis, Problem, SolveBatch } from '../engine/network/types';
+import type { FromWorker, ToWorker } from '../protocol/messages';
+
+/** What the page's side needs of a worker; a real one, or a port in tests. */
+export interface WorkerLike {
+  postMessage(message: ToWorker): void;
+  terminate(): void;
+  onmessage: ((event: MessageEvent<FromWorker>) => void) | null;
+  onerror: ((event: ErrorEvent) => void) | null;
+}
+
+export interface SolverHandlers {
+  results(edit: number, last: boolean, batch: SolveBatch): void;
+  at(edit: number, unit: UnitId): void;
+  /** The worker gave up on this edit, or was ended for silence twice; `unit` is where it was last heard. */
+  broke(edit: number, message: string, unit: UnitId | null): void;
+  answer(job: number, value: unknown): void;
+}
+
+export interface SolverClient {
+  /** Sends the problem; anything older still waiting is dropped by the worker. */
+  solve(basis: Basis, problem: Problem, from: 'warm' | 'nothing'): void;
+  ask(job: number, about: Extract<ToWorker, { say: 'question' }>['about']): void;
+  close(): void;
+}
+
+/** Silence of a busy worker after which it is ended [ms]. */
+const SILENCE_MS = 3000;
+const RESTARTS = 2;
+
+/**
+ * One worker kept alive. While an edit is unanswered and the worker stays silent for three seconds it is ended, started
+ * again, and the problem sent once more; the second time the edit is reported as broken, naming the unit it was in.
+ */
+export function connectSolver(make: () => WorkerLike, handlers: SolverHandlers): SolverClient {
+  let worker: WorkerLike | null = null;
+  let basisSent = '';
+  let pending: { basis: Basis; problem: Problem; from: 'warm' | 'nothing' } | null = null;
+  let restarts = 0;
+  let where: UnitId | null = null;
+  let timer: ReturnType<typeof setTimeout> | undefined;
+  let closed = false;
+
+  const watch = (): void => {
+    clearTimeout(timer);
+    if (pending) timer = setTimeout(() => restart('silent for three seconds'), SILENCE_MS);
+  };
+
+  const restart = (why: string): void => {
+    worker?.terminate();
+    worker = null;
+    basisSent = '';
+    if (closed || !pending) return;
+    restarts += 1;
+    if (restarts > RESTARTS) {
+      const { edit } = pending.problem;
+      pending = null;
+      clearTimeout(timer);
+      handlers.broke(edit, why, where);
+      return;
+    }
+    send();
+  };
+
+  const start = (): WorkerLike => {
+    const fresh = make();
+    fresh.onmessage = (event) => {
+      const message = event.data;
+      watch();
+      if (message.say === 'results') {
+        if (message.last && pending?.problem.edit === message.edit) {
+          pending = null;
+          restarts = 0;
+          clearTimeout(timer);
+        }
+        handlers.results(message.edit, message.last, message);
+      } else if (message.say === 'at') {
+        where = message.unit;
+        handlers.at(message.edit, message.unit);
+      } else if (message.say === 'answer') handlers.answer(message.job, message.value);
+      else if (message.say === 'broke') restart(message.message);
+    };
+    fresh.onerror = (event) => restart(event.message || 'the solver stopped');
+    return fresh;
+  };
+
+  const send = (): void => {
+    if (!pending) return;
+    worker ??= start();
+    if (basisSent !== pending.basis.id) {
+      worker.postMessage({ say: 'basis', basis: pending.basis });
+      basisSent = pending.basis.id;
+    }
+    worker.postMessage({ say: 'solve', problem: pending.problem, from: pending.from });
+    watch();
+  };
+
+  return {
+    solve(basis, problem, from) {
+      if (pending?.problem.edit !== problem.edit) restarts = 0;
+      pending = { basis, problem, from };
+      where = null;
+      send();
+    },
+    ask(job, about) {
+      worker ??= start();
+      worker.postMessage({ say: 'question', job, about });
+    },
+    close() {
+      closed = true;
+      clearTimeout(timer);
+      worker?.terminate();
+      worker = null;
+    },
+  };
+}
