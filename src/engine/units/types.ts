@@ -146,6 +146,8 @@ export interface Call<S> {
   readonly settings: S;
   readonly model: Model;
   readonly site: SiteSI;
+  /** Thresholds the sketch overrides, by finding code [SI]. */
+  readonly limits?: Readonly<Record<string, number>>;
   readonly warm?: unknown;
   readonly work: Work;
 }

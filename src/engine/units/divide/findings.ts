@@ -5,5 +5,5 @@ export const DIVIDE_FINDINGS = [
   'divide/unknown-outlet',
   'divide/share-below-zero',
   'divide/shares-above-whole',
-  'divide/flow-without-component',
+  'divide/flow-from-nothing',
 ] as const;

@@ -23,8 +23,6 @@ export const feed: KindCatalogue = {
     composition: { is: 'composition' },
   },
   moot: [{ when: ['composition.flows'], key: 'flow' }],
-  results: {
-    humidityRatio: { dim: 'number' },
-  },
+  results: {},
   findings: FEED_FINDINGS,
 };

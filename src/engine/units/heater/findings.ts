@@ -1,15 +1,10 @@
+import { UTILITY_FINDINGS } from '../limits/utilities';
+
 /** Codes a heater may emit. */
 export const HEATER_FINDINGS = [
-  'heater/pressure-not-positive',
-  'heater/temperature-not-positive',
-  'heater/no-state',
-  'heater/no-bubble-point',
-  'heater/no-dew-point',
-  'heater/wrong-way',
-  'heater/enters-below-pressure',
-  'heater/medium-pressure-steam',
-  'heater/high-pressure-steam',
-  'heater/above-steam',
-  'heater/cracking',
-  'heater/polymerises',
+  'pressure/not-positive',
+  'pressure/enters-below',
+  'temperature/not-positive',
+  'heater/cools',
+  ...UTILITY_FINDINGS,
 ] as const;

@@ -1,6 +1,2 @@
 /** Codes a join may emit. */
-export const JOIN_FINDINGS = [
-  'join/pressure-not-positive',
-  'join/no-state',
-  'join/enters-below-pressure',
-] as const;
+export const JOIN_FINDINGS = ['pressure/not-positive', 'pressure/enters-below'] as const;

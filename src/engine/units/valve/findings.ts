@@ -1,7 +1,6 @@
 /** Codes a valve may emit. */
 export const VALVE_FINDINGS = [
-  'valve/pressure-not-positive',
-  'valve/no-state',
+  'pressure/not-positive',
   'valve/outlet-above-inlet',
   'valve/flashes',
   'valve/cools',

@@ -1,0 +1,27 @@
+import type { StreamState } from '../equilibrium/types';
+import type { Port } from '../ids';
+import type { Answer } from './types';
+
+/** The answer of a unit without reactions; effort and warm start come from the streams that were flashed in it. */
+export function answerOf<R>(
+  out: Readonly<Record<Port, StreamState>>,
+  results: R,
+  flashed: readonly StreamState[],
+  heat_W = 0,
+): Answer<R> {
+  let iterations = 0;
+  let residual = 0;
+  for (const s of flashed) {
+    iterations += s.iterations;
+    residual = Math.max(residual, s.residual);
+  }
+  const last = flashed.at(-1);
+  return {
+    out,
+    heat_W,
+    power_W: 0,
+    results,
+    effort: { iterations, residual },
+    warm: last ? { T_K: last.T_K } : undefined,
+  };
+}

@@ -1,0 +1,86 @@
+import type { StreamState } from '../../equilibrium/types';
+import type { UnitId } from '../../ids';
+import type { Finding } from '../../outcome';
+import type { Model } from '../../thermo/types';
+import type { SiteSI } from '../types';
+import { finding, named, type Overrides, type Rule, rule, saw, thresholdOf } from './rule';
+
+const degC = (t: number): number => t + 273.15;
+
+/** Codes of the levels at which heat is taken away or brought; every kind with a duty may emit them. */
+export const UTILITY_FINDINGS = [
+  'cooling/below-air',
+  'cooling/below-cooling-water',
+  'cooling/below-chilled-water',
+  'cooling/second-refrigerant',
+  'heating/above-low-pressure-steam',
+  'heating/above-medium-pressure-steam',
+  'heating/above-high-pressure-steam',
+  'heating/cracks',
+  'heating/polymerises',
+] as const;
+
+/** From the coldest level up; the first that fires is the one that is said. Cooling water: approach to its inlet. */
+const COOLING: readonly Rule[] = [
+  rule('cooling/second-refrigerant', 'caution', degC(-20), 'temperature'),
+  rule('cooling/below-chilled-water', 'caution', degC(12), 'temperature'),
+  rule('cooling/below-cooling-water', 'caution', 10, 'temperatureDifference'),
+  rule('cooling/below-air', 'note', degC(50), 'temperature'),
+];
+/** From the hottest level down. */
+const HEATING: readonly Rule[] = [
+  rule('heating/cracks', 'beyond-limit', degC(350), 'temperature'),
+  rule('heating/above-high-pressure-steam', 'caution', degC(235), 'temperature'),
+  rule('heating/above-medium-pressure-steam', 'note', degC(170), 'temperature'),
+  rule('heating/above-low-pressure-steam', 'note', degC(135), 'temperature'),
+];
+const POLYMERISES = rule('heating/polymerises', 'caution', degC(110), 'temperature');
+
+export const UTILITY_RULES: readonly Rule[] = [...COOLING, ...HEATING, POLYMERISES];
+
+/** Dienes and styrenes, by CAS number where the family alone does not tell. */
+const STYRENES = new Set(['100-42-5', '98-83-9']);
+
+/** The first present chemical that polymerises when warm, above a trace of 0.01 mol %. */
+function polymerising(stream: StreamState, model: Model): string | undefined {
+  let total = 0;
+  for (const n of stream.n_mol_s) total += n;
+  return model.chemicals.find(
+    (c, i) =>
+      stream.n_mol_s[i]! > 1e-4 * total &&
+      (c.family === 'diene' || (c.cas !== undefined && STYRENES.has(c.cas))),
+  )?.id;
+}
+
+/**
+ * Which level of cooling or heating a duty needs, judged by the temperature at which the stream leaves.
+ *
+ * @param heat_W  heat into the unit [W]; 0 asks for no level
+ */
+export function utilityLevels(
+  unit: UnitId,
+  heat_W: number,
+  out: StreamState,
+  model: Model,
+  site: SiteSI,
+  overrides: Overrides,
+): Finding[] {
+  const seen = [saw('temperature', out.T_K, 'temperature')];
+  const found: Finding[] = [];
+  if (heat_W < 0) {
+    const level = COOLING.find((r) => {
+      const t = thresholdOf(r, overrides);
+      return out.T_K < (r.dim === 'temperatureDifference' ? site.coolingWater_K + t : t);
+    });
+    const water = saw('coolingWater', site.coolingWater_K, 'temperature');
+    if (level) found.push(finding(level, { unit }, [...seen, water], overrides));
+  }
+  if (heat_W > 0) {
+    const level = HEATING.find((r) => out.T_K > thresholdOf(r, overrides));
+    if (level) found.push(finding(level, { unit }, seen, overrides));
+    const chemical = out.T_K > thresholdOf(POLYMERISES, overrides) ? polymerising(out, model) : undefined;
+    if (chemical)
+      found.push(finding(POLYMERISES, { unit }, [...seen, named('chemical', chemical)], overrides));
+  }
+  return found;
+}

@@ -1,0 +1,18 @@
+import type { Finding } from '../../outcome';
+import { fuelShareOfLimit } from '../limits/flammable';
+import { finding, named, rule, saw, thresholdOf } from '../limits/rule';
+import type { Call } from '../types';
+import type { ProductSettings } from './solve';
+
+/** Fuel in the gas that goes to atmosphere, as a share of its lower flammability limit [-]. */
+export const FLAMMABLE_TO_ATMOSPHERE = rule('product/flammable-to-atmosphere', 'caution', 0.25, 'fraction');
+export const PRODUCT_RULES = [FLAMMABLE_TO_ATMOSPHERE];
+
+export function productLimits(call: Call<ProductSettings>): Finding[] {
+  const stream = call.in.in;
+  if (call.settings.to !== 'atmosphere' || stream === undefined) return [];
+  const { share, chemical } = fuelShareOfLimit(stream, call.model);
+  if (chemical === undefined || share < thresholdOf(FLAMMABLE_TO_ATMOSPHERE, call.limits)) return [];
+  const seen = [saw('shareOfLimit', share, 'fraction'), named('chemical', chemical)];
+  return [finding(FLAMMABLE_TO_ATMOSPHERE, { unit: call.unit, port: 'in' }, seen, call.limits)];
+}

@@ -1,0 +1,14 @@
+import { solved } from '../../outcome';
+import { answerOf } from '../answer';
+import type { UnitKind } from '../types';
+import { productLimits } from './limits';
+
+export interface ProductSettings {
+  readonly to?: 'process' | 'atmosphere' | 'storage';
+}
+
+/** A product takes what comes. */
+export const product: UnitKind<ProductSettings, Record<string, never>> = {
+  solve: () => solved(answerOf({}, {}, [])),
+  limits: productLimits,
+};

@@ -1,0 +1,21 @@
+import { COOLER_RULES } from './cooler/limits';
+import { DRUM_RULES } from './drum/limits';
+import { HEATER_RULES } from './heater/limits';
+import { ENTERS_BELOW } from './limits/joiningPressure';
+import type { Rule } from './limits/rule';
+import { UTILITY_RULES } from './limits/utilities';
+import { PRODUCT_RULES } from './product/limits';
+import { STREAM_RULES } from './streamLimits';
+import { VALVE_RULES } from './valve/limits';
+
+/** Every limit with its default threshold and basis: what a sketch may override and what is printed. Imports no solver. */
+export const RULES: readonly Rule[] = [
+  ...STREAM_RULES,
+  ENTERS_BELOW,
+  ...VALVE_RULES,
+  ...HEATER_RULES,
+  ...COOLER_RULES,
+  ...UTILITY_RULES,
+  ...DRUM_RULES,
+  ...PRODUCT_RULES,
+];

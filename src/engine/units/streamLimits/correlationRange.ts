@@ -1,0 +1,71 @@
+import type { ChemicalData, CorrProperty } from '../../chemicals/types';
+import type { Finding } from '../../outcome';
+import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import type { StreamContext } from './context';
+
+/** Distance outside a correlation's own range [K]: any, from the first threshold, from the second. */
+const OUTSIDE = rule('stream/outside-correlation', 'note', 0, 'temperatureDifference', 'table-range');
+const WELL_OUTSIDE = rule(
+  'stream/well-outside-correlation',
+  'caution',
+  10,
+  'temperatureDifference',
+  'table-range',
+);
+const FAR_OUTSIDE = rule(
+  'stream/far-outside-correlation',
+  'beyond-limit',
+  50,
+  'temperatureDifference',
+  'table-range',
+);
+export const CORRELATION_RULES: readonly Rule[] = [OUTSIDE, WELL_OUTSIDE, FAR_OUTSIDE];
+
+/** Less than this of a chemical moves nothing that is shown [-]. */
+const COUNTS = 1e-4;
+
+/** Kelvin outside the ranges a property is tabulated for; 0 inside, or when no range is stated. */
+function outside_K(chemical: ChemicalData, property: CorrProperty, T_K: number): number {
+  let low = Number.POSITIVE_INFINITY;
+  let high = Number.NEGATIVE_INFINITY;
+  for (const corr of chemical.corr[property] ?? []) {
+    low = Math.min(low, corr.Tmin ?? Number.NEGATIVE_INFINITY);
+    high = Math.max(high, corr.Tmax ?? Number.POSITIVE_INFINITY);
+  }
+  return low > high ? 0 : Math.max(0, low - T_K, T_K - high);
+}
+
+/** What the model reads at the stream's temperature. Raoult's law stands on vapour pressures, equations of state do not. */
+function propertiesRead(c: StreamContext): readonly CorrProperty[] {
+  if (c.model.spec.kind !== 'raoult') return ['ideal_gas_cp'];
+  const both: CorrProperty[] = ['ideal_gas_cp', 'vapor_pressure'];
+  return c.model.spec.liquidH === 'hvap' ? [...both, 'enthalpy_of_vaporization'] : both;
+}
+
+/** The worst correlation of the stream; a gas alone reads no vapour pressure. */
+export function correlationRange(c: StreamContext): Finding[] {
+  const { stream, overrides, at, model } = c;
+  let total = 0;
+  for (const n of stream.n_mol_s) total += n;
+  const gasOnly = stream.phases.every((p) => p.kind === 'vapour');
+  const properties = gasOnly ? (['ideal_gas_cp'] as const) : propertiesRead(c);
+  let worst: { id: string; property: CorrProperty; distance_K: number } | undefined;
+  model.chemicals.forEach((chemical, i) => {
+    if (stream.n_mol_s[i]! < COUNTS * total || stream.n_mol_s[i] === 0) return;
+    for (const property of properties) {
+      const distance_K = outside_K(chemical, property, stream.T_K);
+      if (distance_K > (worst?.distance_K ?? 0)) worst = { id: chemical.id, property, distance_K };
+    }
+  });
+  if (!worst || worst.distance_K <= thresholdOf(OUTSIDE, overrides)) return [];
+  const distance = worst.distance_K;
+  const at_least = (r: Rule): boolean => distance >= thresholdOf(r, overrides);
+  const broken = at_least(FAR_OUTSIDE) ? FAR_OUTSIDE : at_least(WELL_OUTSIDE) ? WELL_OUTSIDE : OUTSIDE;
+  const seen = [
+    saw('temperature', stream.T_K, 'temperature'),
+    saw('distance', distance, 'temperatureDifference'),
+    named('chemical', worst.id),
+    named('property', worst.property),
+  ];
+  return [finding(broken, at, seen, overrides)];
+}

@@ -1,0 +1,20 @@
+import type { Finding } from '../../outcome';
+import { fuelShareOfLimit } from '../limits/flammable';
+import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import type { StreamContext } from './context';
+
+/** Fuel as a share of its lower flammability limit, in a gas with at least this much oxygen. */
+const FLAMMABLE = rule('stream/flammable-mixture', 'caution', 0.25, 'fraction');
+const OXYGEN = 0.05;
+export const FLAMMABLE_RULES: readonly Rule[] = [FLAMMABLE];
+
+export function flammable({ stream, model, overrides, at }: StreamContext): Finding[] {
+  const { share, oxygen, chemical } = fuelShareOfLimit(stream, model);
+  if (oxygen < OXYGEN || chemical === undefined || share < thresholdOf(FLAMMABLE, overrides)) return [];
+  const seen = [
+    saw('shareOfLimit', share, 'fraction'),
+    saw('oxygen', oxygen, 'fraction'),
+    named('chemical', chemical),
+  ];
+  return [finding(FLAMMABLE, at, seen, overrides)];
+}

@@ -1,0 +1,42 @@
+import type { Finding } from '../../outcome';
+import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { CAS_CO2, CAS_WATER, flowing, fractionOf, type StreamContext } from './context';
+
+/** Thresholds are mole fractions in the liquid, of the whole for water and carbon dioxide. */
+const MOSTLY = rule('stream/freezes-mostly', 'caution', 0.8, 'fraction', 'melting-points');
+const PARTLY = rule('stream/may-freeze', 'note', 0.2, 'fraction', 'melting-points');
+const ICE = rule('stream/ice', 'caution', 1e-3, 'fraction');
+const DRY_ICE = rule('stream/dry-ice', 'caution', 1e-2, 'fraction');
+export const FREEZING_RULES: readonly Rule[] = [MOSTLY, PARTLY, ICE, DRY_ICE];
+
+const ICE_K = 273.15;
+const DRY_ICE_K = 273.15 - 56;
+
+/** A liquid below the melting point of what it mostly is; water below 0 degC, carbon dioxide below -56 degC. */
+export function freezing(c: StreamContext): Finding[] {
+  const { stream, overrides, at } = c;
+  const seen = [saw('temperature', stream.T_K, 'temperature')];
+  const found: Finding[] = [];
+  const liquid = flowing(stream, 'liquid');
+  let worst: { id: string; x: number; Tm_K: number } | undefined;
+  c.model.chemicals.forEach((chemical, i) => {
+    const whole = fractionOf(stream, i);
+    if (chemical.cas === CAS_WATER && stream.T_K < ICE_K && whole >= thresholdOf(ICE, overrides))
+      found.push(finding(ICE, at, [...seen, saw('fraction', whole, 'fraction')], overrides));
+    if (chemical.cas === CAS_CO2 && stream.T_K < DRY_ICE_K && whole >= thresholdOf(DRY_ICE, overrides))
+      found.push(finding(DRY_ICE, at, [...seen, saw('fraction', whole, 'fraction')], overrides));
+    const x = liquid?.x[i] ?? 0;
+    if (chemical.Tm_K !== undefined && stream.T_K < chemical.Tm_K && x > (worst?.x ?? 0))
+      worst = { id: chemical.id, x, Tm_K: chemical.Tm_K };
+  });
+  if (worst && worst.x >= thresholdOf(PARTLY, overrides)) {
+    const evidence = [
+      ...seen,
+      saw('fraction', worst.x, 'fraction'),
+      saw('meltingPoint', worst.Tm_K, 'temperature'),
+      named('chemical', worst.id),
+    ];
+    found.push(finding(worst.x >= thresholdOf(MOSTLY, overrides) ? MOSTLY : PARTLY, at, evidence, overrides));
+  }
+  return found;
+}
