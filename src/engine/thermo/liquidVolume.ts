@@ -1,17 +1,12 @@
 import type { ChemicalData } from '../chemicals/types';
+import { rackettFromOmega } from './pure/liquidVolume';
 import { R_J_molK } from './types';
 
 /** From here up to 1 in Tr the answer passes over to the model's own volume. */
 const HAND_OVER_FROM = 0.96;
 
-/** Constant of the modified Rackett equation: the chemical's own, else by Yamada & Gunn, AIChE J. 19 (1973) 1078. */
-export const rackettConstant = (chem: ChemicalData): number | undefined =>
-  chem.zRA ?? (chem.omega === undefined ? undefined : 0.29056 - 0.08775 * chem.omega);
-
-/** Names of the constants that the liquid-volume method needs and the chemical lacks. */
-export function missingForVolume(chem: ChemicalData): readonly ('Tc_K' | 'Pc_Pa' | 'omega')[] {
-  return (['Tc_K', 'Pc_Pa', 'omega'] as const).filter((name) => chem[name] === undefined);
-}
+/** Constant of the modified Rackett equation: the chemical's own, else from the acentric factor. */
+const constantOf = (chem: ChemicalData, omega: number): number => chem.zRA ?? rackettFromOmega(omega);
 
 /**
  * Molar volume of liquid mixtures by corresponding states: the modified Rackett equation at saturation with one
@@ -41,7 +36,7 @@ export class LiquidVolume {
   /** Tc_ij [K], row-major */
   private readonly Tc: Float64Array;
 
-  /** Throws when a chemical lacks Tc, Pc or omega: missingForVolume is asked before. */
+  /** Throws when a chemical lacks Tc, Pc or omega: missingCritical is asked before. */
   constructor(chemicals: readonly ChemicalData[]) {
     const n = chemicals.length;
     this.n = n;
@@ -51,7 +46,7 @@ export class LiquidVolume {
       return value;
     };
     this.omega = Float64Array.from(chemicals, (c) => need(c, 'omega'));
-    this.zRA = Float64Array.from(chemicals, (c) => rackettConstant(c)!);
+    this.zRA = Float64Array.from(chemicals, (c, i) => constantOf(c, this.omega[i]!));
     this.size = Float64Array.from(chemicals, (c) => (R_J_molK * need(c, 'Tc_K')) / need(c, 'Pc_Pa'));
     this.Vc = Float64Array.from(
       chemicals,

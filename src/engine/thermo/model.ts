@@ -33,9 +33,11 @@ export function makeModel(spec: ModelSpec, chemicals: readonly ChemicalData[]): 
   };
 }
 
-/** The data by name that the model needs of a chemical and does not find; empty when it can be used. */
-export const missingForModel = (kind: ModelSpec['kind'], chem: ChemicalData): readonly string[] =>
-  MODELS[kind].missing(chem);
+/** Data by field or correlation name that the model needs of a chemical and that it lacks; empty when it can be used. */
+export const missingForModel = (
+  spec: Pick<ModelSpec, 'kind' | 'liquidH'>,
+  chem: ChemicalData,
+): readonly string[] => MODELS[spec.kind].missing(spec, chem);
 
 /** The same model over some of the chemicals: pairs between two of them, counted anew. */
 function specOf(spec: ModelSpec, present: readonly number[]): ModelSpec {

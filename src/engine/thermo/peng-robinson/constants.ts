@@ -47,7 +47,7 @@ export function missingConstants(chem: ChemicalData): readonly ('Tc_K' | 'Pc_Pa'
   return (['Tc_K', 'Pc_Pa', 'omega'] as const).filter((name) => chem[name] === undefined);
 }
 
-/** Throws when a constant is missing: a sketch is checked by missingConstants before a model is made. */
+/** Throws when a constant is missing: a sketch is checked by missingForModel before a model is made. */
 export function cubicConstants(chem: ChemicalData, alpha: '1976' | '1978'): CubicConstants {
   const { Tc_K: Tc, Pc_Pa: Pc, omega } = chem;
   if (Tc === undefined || Pc === undefined || omega === undefined)

@@ -3,11 +3,11 @@ import { positiveRoots } from '../../numerics/cubic';
 import { LiquidVolume } from '../liquidVolume';
 import { type IdealGases, prepareIdealGases } from '../pure/ideal';
 import { type Level, type ModelSpec, type PhaseProps, R_J_molK, type Side, type ThermoModel } from '../types';
+import { attraction } from './attraction';
 import { cubicConstants, OMEGA_B, Z_CRITICAL } from './constants';
 import { CubicProps } from './props';
 import { saturationReduced } from './saturation';
 
-const SQRT2 = Math.SQRT2;
 /** Compressibilities at the mechanical limit of stability are kept finite: at most this many times the ideal gas's. */
 const STIFFEST = 1e-12;
 
@@ -70,7 +70,7 @@ export class PengRobinson implements ThermoModel {
   }
 
   makeProps(): CubicProps {
-    return new CubicProps(this, this.ideal, this.n);
+    return new CubicProps(this, this.ideal);
   }
 
   evaluate(side: Side, T: number, P: number, x: Float64Array, level: Level, props: PhaseProps): void {
@@ -149,7 +149,7 @@ export class PengRobinson implements ThermoModel {
 
     const a1 = 2 * halfA1;
     const f = L / bm;
-    this.idealAt(T, out);
+    out.idealAt(T);
     const { hIdeal, cpIdeal } = out;
     let hIg = 0;
     let cpIg = 0;
@@ -158,10 +158,7 @@ export class PengRobinson implements ThermoModel {
       cpIg += x[i]! * cpIdeal[i]!;
     }
     out.h_J_mol = hIg + RT * (Z - 1) + (T * a1 - a) * f;
-    out.sResidual = R_J_molK * lnW + a1 * f;
-    out.x.set(x);
-    out.atT = T;
-    out.atP = P;
+    out.keepForEntropy(T, P, x, R_J_molK * lnW + a1 * f);
     if (level === 1) return;
 
     // Derivatives of f by V and B, of the pressure by V, T and n_i; then those of ln phi.
@@ -214,10 +211,13 @@ export class PengRobinson implements ThermoModel {
     }
   }
 
-  /** Wilson's relation. */
+  /** Wilson's relation (1969); not below 1e-300. */
   startK(T: number, P: number, K: Float64Array): void {
     for (let i = 0; i < this.n; i++)
-      K[i] = (this.Pc[i]! / P) * Math.exp(5.373 * (1 + this.omega[i]!) * (1 - this.Tc[i]! / T));
+      K[i] = Math.max(
+        (this.Pc[i]! / P) * Math.exp(5.373 * (1 + this.omega[i]!) * (1 - this.Tc[i]! / T)),
+        1e-300,
+      );
   }
 
   hIdeal_J_mol(i: number, T: number): number {
@@ -267,16 +267,4 @@ export class PengRobinson implements ThermoModel {
     }
     out.rootT = T;
   }
-
-  private idealAt(T: number, out: CubicProps): void {
-    if (out.idealT === T) return;
-    this.ideal.hAll(T, out.hIdeal);
-    this.ideal.cpAll(T, out.cpIdeal);
-    out.idealT = T;
-  }
-}
-
-/** ln[(Z + (1+sqrt 2) B)/(Z + (1-sqrt 2) B)] / (2 sqrt 2); exact for thin gases too. */
-function attraction(Z: number, B: number): number {
-  return Math.log1p((2 * SQRT2 * B) / (Z + (1 - SQRT2) * B)) / (2 * SQRT2);
 }

@@ -1,7 +1,7 @@
 import { positiveRoots } from '../../numerics/cubic';
+import { attraction } from './attraction';
 import { OMEGA_A, OMEGA_B, Z_CRITICAL } from './constants';
 
-const SQRT2 = Math.SQRT2;
 /** q = a/(bRT) at the critical point. */
 const Q_CRITICAL = OMEGA_A / OMEGA_B;
 /** v/b at the critical point. */
@@ -51,8 +51,4 @@ export function saturationReduced(q: number): number | undefined {
     y = next;
   }
   return Math.exp(y);
-}
-
-function attraction(Z: number, B: number): number {
-  return Math.log1p((2 * SQRT2 * B) / (Z + (1 - SQRT2) * B)) / (2 * SQRT2);
 }
