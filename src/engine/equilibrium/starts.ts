@@ -1,0 +1,100 @@
+import { BELOW, follow, setPlane } from './stability';
+import type { FlashWork, Slot } from './work';
+
+/** -ln of an activity of a tenth: a pure liquid this far above the plane has no liquid rich in it nearby. */
+const FAR = 2.3;
+
+/**
+ * Whether the single phase in w.feed (properties at T, P; plane in w.d) can lower its Gibbs energy by splitting; then
+ * w.trial holds a phase below the tangent plane.
+ *
+ * Starts: vapour z K, liquid z / K, the lightest pure as vapour, the heaviest and every other liquid former as liquid.
+ * The likelier kind of trial comes first, so that an unstable feed is found out early.
+ */
+export function isUnstable(w: FlashWork, T: number, P: number): boolean {
+  const { n, model, feed, K, startW } = w;
+  model.startK(T, P, K);
+  const dense = feed.props.side === 'liquid';
+  for (let turn = 0; turn < 2; turn++) {
+    const vapour = (turn === 0) === dense;
+    for (let i = 0; i < n; i++) startW[i] = vapour ? feed.x[i]! * K[i]! : feed.x[i]! / K[i]!;
+    tame(startW, n);
+    w.trial.side = vapour ? 'vapour' : 'liquid';
+    if (follow(w, T, P, feed, undefined)) return true;
+  }
+  if (w.formers.length === 0) return false;
+  if (pureTrial(w, T, P, w.lightest, 'vapour', feed, undefined)) return true;
+  return hiddenLiquid(w, T, P, feed, undefined);
+}
+
+/**
+ * Whether some liquid rich in one of the liquid formers lies below the plane in w.d; w.trial then holds it.
+ *
+ * A pure liquid i lies at minus the logarithm of its activity above the plane: one evaluation rules most of them out.
+ */
+export function hiddenLiquid(
+  w: FlashWork,
+  T: number,
+  P: number,
+  known1: Slot,
+  known2: Slot | undefined,
+): boolean {
+  for (let k = 0; k < w.formers.length; k++) {
+    if (pureTrial(w, T, P, w.formers[k]!, 'liquid', known1, known2)) return true;
+  }
+  return false;
+}
+
+function pureTrial(
+  w: FlashWork,
+  T: number,
+  P: number,
+  i: number,
+  side: 'vapour' | 'liquid',
+  known1: Slot,
+  known2: Slot | undefined,
+): boolean {
+  const { model, trial, startW, d } = w;
+  trial.side = side;
+  startW.fill(0);
+  startW[i] = 1;
+  trial.x.set(startW);
+  model.evaluate(side, T, P, trial.x, 0, trial.props);
+  w.iterations++;
+  const above = trial.props.lnPhi[i]! - d[i]!;
+  if (above < BELOW && above > Number.NEGATIVE_INFINITY) {
+    trial.flow.set(startW);
+    return true;
+  }
+  if (!(above < FAR)) return false;
+  // One step of substitution from the pure: the other chemicals as the plane has them.
+  for (let j = 0; j < w.n; j++) startW[j] = Math.exp(d[j]! - trial.props.lnPhi[j]!);
+  startW[i] = Math.max(startW[i]!, 1);
+  return follow(w, T, P, known1, known2);
+}
+
+/** Start amounts of very unequal size are brought to a sum that exp() and products can carry. */
+function tame(W: Float64Array, n: number): void {
+  let total = 0;
+  for (let i = 0; i < n; i++) total += W[i]!;
+  const scale = 1 / total;
+  for (let i = 0; i < n; i++) W[i] = W[i]! * scale;
+}
+
+/** Tests the phase in `phase` against a vapour-like trial only. */
+export function vapourBelow(
+  w: FlashWork,
+  T: number,
+  P: number,
+  phase: Slot,
+  other: Slot | undefined,
+): boolean {
+  const { n, model, K, startW } = w;
+  setPlane(w, phase);
+  model.startK(T, P, K);
+  for (let i = 0; i < n; i++) startW[i] = phase.x[i]! * K[i]!;
+  tame(startW, n);
+  w.trial.side = 'vapour';
+  if (follow(w, T, P, phase, other)) return true;
+  return pureTrial(w, T, P, w.lightest, 'vapour', phase, other);
+}
