@@ -9,7 +9,8 @@
  * & Privat, Fluid Phase Equilib. 560 (2022) 113456; a(T): Robinson & Peng, GPA Research Report RR-28 (1978).
  */
 import type { ChemicalData } from '../../chemicals/types';
-import { R_J_molK, T0_K } from '../types';
+import { cubicConstants, missingConstants } from '../peng-robinson/constants';
+import { T0_K } from '../types';
 
 /** One group interaction, A and B in MPa. */
 export interface GroupInteraction {
@@ -28,24 +29,11 @@ export function makeGroupTable(rows: readonly GroupInteraction[]): GroupTable {
   return new Map(rows.map((row) => [key(row.a, row.b), row]));
 }
 
-/** The constants of the equation to all digits: its critical point is the one real root of a cubic. */
-const ROOT = Math.cbrt(6 * Math.SQRT2 + 8) - Math.cbrt(6 * Math.SQRT2 - 8);
-const ETA = (ROOT - 1) / 3;
-/** a(Tc) Pc/(R Tc)^2 = 0.457235529..., b Pc/(R Tc) = 0.077796074... */
-export const OMEGA_A = (8 * (5 * ETA + 1)) / (49 - 37 * ETA);
-export const OMEGA_B = ETA / (ETA + 3);
-
-/** sqrt(a) [Pa^0.5 m3/mol] and b [m3/mol] of the 1978 equation; undefined without critical constants. */
-function attraction(c: ChemicalData, T: number): { readonly rootA: number; readonly b: number } | undefined {
-  if (c.Tc_K === undefined || c.Pc_Pa === undefined || c.omega === undefined) return undefined;
-  const w = c.omega;
-  const m =
-    w <= 0.491
-      ? 0.37464 + 1.54226 * w - 0.26992 * w * w
-      : 0.379642 + 1.48503 * w - 0.164423 * w * w + 0.016666 * w ** 3;
-  const RTc = R_J_molK * c.Tc_K;
-  const rootA = Math.sqrt(OMEGA_A / c.Pc_Pa) * RTc * Math.abs(1 + m * (1 - Math.sqrt(T / c.Tc_K)));
-  return { rootA, b: (OMEGA_B * RTc) / c.Pc_Pa };
+/** sqrt(a)/b [Pa^0.5] of the 1978 equation; undefined without critical constants. */
+function attraction(c: ChemicalData, T: number): number | undefined {
+  if (missingConstants(c).length > 0) return undefined;
+  const { rootA0, rootA1, b } = cubicConstants(c, '1978');
+  return Math.abs(rootA0 - rootA1 * Math.sqrt(T)) / b;
 }
 
 /**
@@ -62,10 +50,7 @@ export function predictedKij(
   const j = attraction(two, T);
   if (!i || !j || !one.ppr78 || !two.ppr78) return undefined;
   const S = groupSum(one.ppr78, two.ppr78, table, T);
-  if (S === undefined || i.rootA === 0 || j.rootA === 0) return undefined;
-  const di = i.rootA / i.b;
-  const dj = j.rootA / j.b;
-  return (-0.5e6 * S - (di - dj) ** 2) / (2 * di * dj);
+  return S === undefined ? undefined : (-0.5e6 * S - (i - j) ** 2) / (2 * i * j);
 }
 
 /** S [MPa]; undefined when a needed interaction is missing. */

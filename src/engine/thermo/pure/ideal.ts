@@ -110,24 +110,28 @@ export function prepareIdealGases(chemicals: readonly ChemicalData[]): IdealGase
     while (T > to[k]!) k += 1;
     return k * stride;
   };
-  const cpAt = (at: number, T: number, inv: number): number => {
+  // Written out for the seven terms that nearly every row has; a longer polynomial runs its tail first.
+  const tail = (low: number, T: number): number => {
     let y = 0;
-    for (let p = at + terms - 1; p >= at + 2; p -= 1) y = y * T + data[p]!;
-    return y + (data[at + 1]! + data[at]! * inv) * inv;
+    for (let p = low + terms - 1; p >= low + 7; p -= 1) y = (y + data[p]!) * T;
+    return y;
+  };
+  const cpAt = (at: number, T: number, inv: number): number => {
+    const y = data[at + 6]! + (terms > 7 ? tail(at, T) : 0);
+    const poly = data[at + 2]! + T * (data[at + 3]! + T * (data[at + 4]! + T * (data[at + 5]! + T * y)));
+    return poly + (data[at + 1]! + data[at]! * inv) * inv;
   };
   const hAt = (at: number, T: number, inv: number, ln: number): number => {
-    const low = at + terms;
-    let y = 0;
-    for (let p = low + terms - 1; p >= low + 2; p -= 1) y = y * T + data[p]!;
-    return y * T + data[low + 1]! * ln + data[low]! * inv + data[at + 3 * terms]!;
+    const a = at + terms;
+    const y = data[a + 6]! + (terms > 7 ? tail(a, T) : 0);
+    const poly = data[a + 2]! + T * (data[a + 3]! + T * (data[a + 4]! + T * (data[a + 5]! + T * y)));
+    return poly * T + data[a + 1]! * ln + data[a]! * inv + data[at + 3 * terms]!;
   };
   const sAt = (at: number, T: number, inv: number, ln: number): number => {
-    const low = at + 2 * terms;
-    let y = 0;
-    for (let p = low + terms - 1; p >= low + 3; p -= 1) y = y * T + data[p]!;
-    return (
-      y * T + data[low + 2]! * ln + (data[low + 1]! + data[low]! * inv) * inv + data[at + 3 * terms + 1]!
-    );
+    const a = at + 2 * terms;
+    const y = data[a + 6]! + (terms > 7 ? tail(a, T) : 0);
+    const poly = data[a + 3]! + T * (data[a + 4]! + T * (data[a + 5]! + T * y));
+    return poly * T + data[a + 2]! * ln + (data[a + 1]! + data[a]! * inv) * inv + data[at + 3 * terms + 1]!;
   };
 
   return {
