@@ -53,6 +53,8 @@ function halley(e2: number, e1: number, e0: number, start: number): number {
   let w = start;
   for (let pass = 0; pass < 60; pass++) {
     const f = ((w + e2) * w + e1) * w + e0;
+    // At an exact triple root the step would be 0/0.
+    if (f === 0) return w;
     const df = (3 * w + 2 * e2) * w + e1;
     const step = (f * df) / (df * df - f * (3 * w + e2));
     w -= step;
