@@ -177,6 +177,15 @@ describe.each(CASES)('%s', (_title, name, state) => {
       for (let i = 0; i < 2 * n; i++) expect(p.lnPhi[i]).toBeCloseTo(at.lnPhi[i % n]!, 11);
     });
 
+  const cv = at.cv_J_molK;
+  if (cv !== undefined)
+    test('cp - cv = -T (dv/dT)^2 / (dv/dP), never negative', () => {
+      const byT = slope((d) => look(model, state, T * (1 + d)).v, 1e-3) / T;
+      const byP = slope((d) => look(model, state, T, P * (1 + d)).v, 1e-3) / P;
+      expect((at.cp_J_molK - cv) / ((-T * byT * byT) / byP)).toBeCloseTo(1, 6);
+      expect(at.cp_J_molK).toBeGreaterThan(cv);
+    });
+
   test('used props give the same numbers to the last bit', () => {
     const p = model.makeProps();
     const y = Float64Array.from(x, () => 1 / n);

@@ -15,6 +15,7 @@ export class BaseProps implements PhaseProps {
   h_J_mol = 0;
   v_m3_mol = 0;
   cp_J_molK = 0;
+  cv_J_molK: number | undefined = undefined;
   Z = 0;
   side: 'vapour' | 'liquid' = 'vapour';
   single = true;

@@ -59,6 +59,8 @@ export interface PhaseProps {
   v_m3_mol: number;
   /** Molar heat capacity at constant pressure [J/(mol K)]; level 2. */
   cp_J_molK: number;
+  /** Molar heat capacity at constant volume [J/(mol K)]; undefined where the phase has no volume that counts; level 2. */
+  cv_J_molK?: number | undefined;
   Z: number;
   /** Which side was evaluated in the end. With a single real root: the side that was asked, or for 'stable' by volume against 'pseudo-critical'. */
   side: 'vapour' | 'liquid';

@@ -171,7 +171,9 @@ export class PengRobinson implements ThermoModel {
     const PV = Math.min((2 * a * (v + bm)) / (D * D) - RT / (vb * vb), (-STIFFEST * RT) / (v * v));
     const PT = R_J_molK / vb - a1 / D;
     const a2 = 2 * slopes - a1 / (2 * T);
-    out.cp_J_molK = cpIg + T * a2 * f - (T * PT * PT) / PV - R_J_molK;
+    const cv = cpIg - R_J_molK + T * a2 * f;
+    out.cv_J_molK = cv;
+    out.cp_J_molK = cv - (T * PT * PT) / PV;
 
     const { p, dT, dP, dN } = out;
     const p0 = RT / vb;

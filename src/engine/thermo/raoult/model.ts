@@ -129,6 +129,7 @@ export class Raoult implements ThermoModel {
     out.keepForEntropy(T, P, x, 0);
     if (level === 1) return;
     out.cp_J_molK = cp;
+    out.cv_J_molK = cp - R_J_molK;
     out.dT.fill(0);
     out.dP.fill(0);
     out.dN.fill(0);
@@ -187,6 +188,7 @@ export class Raoult implements ThermoModel {
     out.keepForEntropy(T, P, x, hResidual / T - R_J_molK * lnPhiMean);
     if (level === 1) return;
     out.cp_J_molK = cpIdeal + cpResidual;
+    out.cv_J_molK = undefined;
     for (let i = 0; i < n; i++) dP[i] = (poynting ? volume[i]! / RT : 0) - 1 / P;
     out.dN.fill(0);
   }
