@@ -7,7 +7,13 @@ export type Question = { readonly ask: 'prewarm' };
 /** Page to worker. One job in flight, one waiting; the latest wins. */
 export type ToWorker =
   | { readonly say: 'basis'; readonly basis: Basis }
-  | { readonly say: 'solve'; readonly problem: Problem; readonly from: 'warm' | 'nothing' }
+  /** `announce`: say 'at' before every unit; asked for after a silence, so that a second one names the unit. */
+  | {
+      readonly say: 'solve';
+      readonly problem: Problem;
+      readonly from: 'warm' | 'nothing';
+      readonly announce?: true;
+    }
   | { readonly say: 'question'; readonly job: number; readonly about: Question }
   | { readonly say: 'drop'; readonly job: number };
 
@@ -15,6 +21,12 @@ export type ToWorker =
 export type FromWorker =
   | { readonly say: 'ready' }
   | { readonly say: 'at'; readonly edit: number; readonly unit: UnitId }
-  | ({ readonly say: 'results'; readonly edit: number; readonly last: boolean } & SolveBatch)
+  | ({
+      readonly say: 'results';
+      readonly edit: number;
+      readonly last: boolean;
+      /** Solved from nothing, for something that leaves the app. */
+      readonly from?: 'nothing';
+    } & SolveBatch)
   | { readonly say: 'answer'; readonly job: number; readonly value: unknown }
   | { readonly say: 'broke'; readonly edit?: number; readonly job?: number; readonly message: string };

@@ -27,6 +27,8 @@ export interface ProblemUnit {
   readonly kind: string;
   /** Compiled settings (SI), or null when a value is missing: the unit is not solved and its state is needs-value. */
   readonly settings: unknown;
+  /** A material of construction was chosen, so cold has been thought of. */
+  readonly materialNoted?: true;
   readonly in: Readonly<Record<Port, StreamId>>;
   readonly out: Readonly<Record<Port, StreamId>>;
 }
@@ -133,5 +135,6 @@ export interface SolveBatch {
   readonly gone: readonly string[];
   /** On the last batch. */
   readonly closure?: Closure;
+  /** All of this edit on the last batch; empty before. Reasons of unsolved units stand in their UnitResult as well. */
   readonly findings: readonly Finding[];
 }

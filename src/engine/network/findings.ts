@@ -1,0 +1,14 @@
+/** Codes the network may emit. */
+export const NETWORK_FINDINGS = [
+  'network/loop',
+  'network/unknown-kind',
+  'network/inlet-missing',
+  'network/source-missing',
+  'network/outlet-missing',
+  'network/waits-for',
+  'network/does-not-close',
+  'network/several-answers',
+  'model/pair-none',
+  'model/pair-predicted',
+] as const;
+export type NetworkFindingCode = (typeof NETWORK_FINDINGS)[number];

@@ -1,0 +1,21 @@
+import { CATALOGUE } from '../units/catalogue';
+import { type AnyKind, SOLVERS } from '../units/solvers';
+import type { KindCatalogue } from '../units/types';
+
+/** The kinds a network can solve: what they are and how. An argument, so that a kind can be added without touching a list. */
+export interface Kinds {
+  readonly catalogue: Readonly<Record<string, KindCatalogue>>;
+  readonly solvers: Readonly<Record<string, AnyKind>>;
+}
+
+export const KNOWN_KINDS: Kinds = { catalogue: CATALOGUE, solvers: SOLVERS };
+
+export const catalogueOf = (kinds: Kinds, kind: string): KindCatalogue | undefined =>
+  Object.hasOwn(kinds.catalogue, kind) ? kinds.catalogue[kind] : undefined;
+
+export const solverOf = (kinds: Kinds, kind: string): AnyKind | undefined =>
+  Object.hasOwn(kinds.solvers, kind) ? kinds.solvers[kind] : undefined;
+
+/** Feeds and products bound the sketch: nothing passes through them, so they have no closure of their own. */
+export const isBoundary = (kinds: Kinds, kind: string): boolean =>
+  catalogueOf(kinds, kind)?.group === 'boundary';

@@ -1,0 +1,74 @@
+import type { StreamState } from '../equilibrium/types';
+import type { Port, StreamId, UnitId } from '../ids';
+import type { Finding, Outcome } from '../outcome';
+import { makeModel } from '../thermo/model';
+import type { Model } from '../thermo/types';
+import type { Answer, SiteSI, Work } from '../units/types';
+import { type ClosureData, closureData } from './closure';
+import type { Basis, StreamResult, UnitClosure, UnitResult } from './types';
+
+/** What was found for a unit, and for what: the key is the settings and the states entering, compared bit for bit. */
+export interface UnitMemory {
+  readonly kind: string;
+  readonly settings: unknown;
+  readonly in: Readonly<Record<Port, StreamState>>;
+  readonly outPorts: readonly Port[];
+  readonly site: SiteSI;
+  readonly outcome: Outcome<Answer>;
+  /** Start values of the last answer that was solved. */
+  readonly warm: unknown;
+  readonly result: UnitResult;
+  /** Of a solved unit inside the sketch. */
+  readonly closure?: UnitClosure;
+  /** Limits pass: what it found, and under which thresholds. */
+  readonly limits: Readonly<Record<string, number>>;
+  readonly limitFindings: readonly Finding[];
+}
+
+/** A solved stream: its state, how it is shown, what it runs into. */
+export interface StreamMemory {
+  readonly state: StreamState;
+  readonly result: StreamResult;
+  readonly limits: Readonly<Record<string, number>>;
+  readonly materialNoted: boolean;
+  readonly findings: readonly Finding[];
+}
+
+/** What was last handed out, by id; an untouched record keeps its identity. */
+export interface Posted {
+  readonly streams: Map<StreamId, StreamResult>;
+  readonly units: Map<UnitId, UnitResult>;
+}
+
+/** What one solve has found so far. */
+export type Found = Posted;
+
+/** Everything a worker keeps between solves of one basis. Owned by one solve at a time. */
+export interface Memory {
+  readonly basis: Basis;
+  readonly model: Model;
+  readonly data: ClosureData;
+  readonly work: Work;
+  readonly units: Map<UnitId, UnitMemory>;
+  readonly streams: Map<StreamId, StreamMemory>;
+  readonly posted: Posted;
+  /** The edit whose answer is complete in here; undefined while or after a solve was broken off. */
+  complete: number | undefined;
+}
+
+export const nothingPosted = (): Posted => ({ streams: new Map(), units: new Map() });
+
+/** @param posted  shared by the memories of one reader, so that a change of basis hands out what the reader does not have */
+export function makeMemory(basis: Basis, posted: Posted = nothingPosted()): Memory {
+  const model = makeModel(basis.model, basis.chemicals);
+  return {
+    basis,
+    model,
+    data: closureData(model),
+    work: { flash: new Map() },
+    units: new Map(),
+    streams: new Map(),
+    posted,
+    complete: undefined,
+  };
+}

@@ -1,0 +1,74 @@
+import type { StreamState } from '../equilibrium/types';
+import type { StreamId } from '../ids';
+import type { Finding } from '../outcome';
+import type { KindCatalogue, PortSpec } from '../units/types';
+import type { NetworkFindingCode } from './findings';
+import type { Plan } from './plan';
+import type { ProblemUnit, SolveState } from './types';
+
+/** What is known of a stream while a solve runs: its state, or why there is none. */
+export type Known = StreamState | 'waiting' | 'no-solution';
+
+export type Unready = { readonly state: Exclude<SolveState, 'solved'>; readonly reasons: readonly Finding[] };
+
+const because = (
+  code: NetworkFindingCode,
+  at: Finding['at'],
+  evidence: Finding['evidence'] = [],
+): Finding => ({
+  code,
+  weight: code === 'network/waits-for' ? 'note' : 'beyond-limit',
+  at,
+  evidence,
+});
+
+const numberOf = (ports: readonly string[], spec: PortSpec): number =>
+  ports.filter((p) => p.startsWith(spec.name) && /^[1-9]\d*$/.test(p.slice(spec.name.length))).length;
+
+/** Ports that must have a stream and have none. */
+function openPorts(unit: ProblemUnit, catalogue: KindCatalogue): Finding[] {
+  return catalogue.ports.flatMap((spec) => {
+    const ports = Object.keys(spec.dir === 'in' ? unit.in : unit.out);
+    if (spec.optional) return [];
+    const enough = spec.numbered
+      ? numberOf(ports, spec) >= spec.numbered.min
+      : spec.dir === 'out' || ports.includes(spec.name);
+    if (enough) return [];
+    const code = spec.dir === 'in' ? 'network/inlet-missing' : 'network/outlet-missing';
+    return [because(code, { unit: unit.id, port: spec.numbered ? `${spec.name}1` : spec.name })];
+  });
+}
+
+/**
+ * Why a unit cannot be solved yet, or undefined when it can: a missing value first, then the loop it stands in, then what is
+ * missing upstream.
+ */
+export function whyNot(
+  unit: ProblemUnit,
+  catalogue: KindCatalogue | undefined,
+  plan: Plan,
+  known: ReadonlyMap<StreamId, Known>,
+  loop: readonly ProblemUnit[] | undefined,
+): Unready | undefined {
+  if (!catalogue)
+    return { state: 'no-solution', reasons: [because('network/unknown-kind', { unit: unit.id })] };
+  const missing = openPorts(unit, catalogue);
+  const needed = [...Object.values(unit.in), ...(plan.reads.get(unit.id) ?? []).map((r) => r.stream)];
+  for (const stream of needed)
+    if (!plan.source.has(stream)) missing.push(because('network/source-missing', { unit: unit.id, stream }));
+  if (unit.settings === null || missing.length > 0) return { state: 'needs-value', reasons: missing };
+  if (loop) {
+    const names = loop.map((u) => ({ name: 'unit', value: 0, dim: 'number', text: u.id }) as const);
+    return { state: 'no-solution', reasons: [because('network/loop', { unit: unit.id }, names)] };
+  }
+  const waits = needed.filter((stream) => typeof known.get(stream) === 'string');
+  if (waits.length === 0) return undefined;
+  return {
+    state: 'waiting',
+    reasons: waits.map((stream) => {
+      const from = plan.source.get(stream)!;
+      const upstream = { name: 'unit', value: 0, dim: 'number', text: plan.units[from.unit]!.id } as const;
+      return because('network/waits-for', { unit: unit.id, stream }, [upstream]);
+    }),
+  };
+}

@@ -1,0 +1,141 @@
+import type { StreamState } from '../equilibrium/types';
+import type { Port } from '../ids';
+import { type Finding, noSolution, type Outcome } from '../outcome';
+import type { AnyKind } from '../units/solvers';
+import { atUnit } from '../units/streams';
+import type { Answer, Call } from '../units/types';
+import { closureOf, worstOf } from './closure';
+import { describe } from './describe';
+import type { Memory, UnitMemory } from './memory';
+import { sameData, sameState } from './same';
+import type { Problem, ProblemUnit, StreamResult, UnitClosure, UnitResult } from './types';
+
+/** A solved unit closes at least this well [-]. */
+const CLOSES = 1e-9;
+
+const sameIn = (a: UnitMemory['in'], b: UnitMemory['in']): boolean => {
+  const ports = Object.keys(a);
+  return (
+    ports.length === Object.keys(b).length &&
+    ports.every((port) => b[port] !== undefined && sameState(a[port]!, b[port]!))
+  );
+};
+
+/** Whether what is remembered of a unit answers this call: same kind, settings, site and entering states, bit for bit. */
+export const answers = (memory: UnitMemory, unit: ProblemUnit, call: Call<unknown>): boolean =>
+  memory.kind === unit.kind &&
+  sameIn(memory.in, call.in) &&
+  sameData(memory.settings, call.settings) &&
+  sameData(memory.outPorts, call.outPorts) &&
+  sameData(memory.site, call.site);
+
+/** Around a unit that stands inside the sketch. */
+export const unitClosure = (
+  inlets: Readonly<Record<Port, StreamState>>,
+  answer: Answer,
+  memory: Memory,
+): UnitClosure =>
+  closureOf(
+    [...Object.values(inlets), ...Object.values(answer.drawn ?? {})],
+    Object.values(answer.out),
+    answer.heat_W,
+    answer.power_W,
+    answer.made_mol_s,
+    memory.data,
+  );
+
+const isFiniteState = (s: StreamState): boolean =>
+  Number.isFinite(s.T_K) &&
+  Number.isFinite(s.P_Pa) &&
+  Number.isFinite(s.H_W) &&
+  s.n_mol_s.every(Number.isFinite);
+
+function refuseUnclosed(unit: ProblemUnit, relative: number): Finding {
+  return {
+    code: 'network/does-not-close',
+    weight: 'beyond-limit',
+    at: { unit: unit.id },
+    evidence: [{ name: 'relative', value: Number.isNaN(relative) ? -1 : relative, dim: 'number' }],
+  };
+}
+
+function resultOf(unit: ProblemUnit, outcome: Outcome<Answer>, memory: Memory): UnitResult {
+  if (outcome.state !== 'solved') return { kind: unit.kind, state: 'no-solution', reasons: outcome.findings };
+  const { heat_W, power_W, effort, made_mol_s, drawn, results } = outcome.value;
+  const air: Record<Port, StreamResult> = {};
+  for (const [port, state] of Object.entries(drawn ?? {}))
+    air[port] = describe(state, memory.model, memory.data);
+  return {
+    kind: unit.kind,
+    state: 'solved',
+    heat_W,
+    power_W,
+    iterations: effort.iterations,
+    residual: effort.residual,
+    ...(made_mol_s ? { made_mol_s } : {}),
+    ...(drawn ? { drawn: air } : {}),
+    results,
+  };
+}
+
+/**
+ * Solves one unit: warm if an earlier answer was solved, and once more from nothing if that fails. An answer that does not
+ * close, or holds something that is not a number, is none.
+ */
+export function solveUnit(
+  unit: ProblemUnit,
+  solver: AnyKind,
+  call: Call<unknown>,
+  boundary: boolean,
+  memory: Memory,
+  problem: Problem,
+): UnitMemory {
+  const last = memory.units.get(unit.id);
+  const warm = last?.kind === unit.kind ? last.warm : undefined;
+  const attempt = (start: unknown): Outcome<Answer> =>
+    solver.solve({
+      ...call,
+      ...(start === undefined ? {} : { warm: start }),
+    } as Call<never>) as Outcome<Answer>;
+  let outcome = attempt(warm);
+  if (outcome.state !== 'solved' && warm !== undefined) outcome = attempt(undefined);
+  let closure: UnitClosure | undefined;
+  if (outcome.state === 'solved') {
+    const finite = Object.values(outcome.value.out).every(isFiniteState);
+    if (!boundary) closure = unitClosure(call.in, outcome.value, memory);
+    const worst = closure ? worstOf(closure) : 0;
+    if (!finite || !(worst <= CLOSES)) {
+      outcome = noSolution(refuseUnclosed(unit, finite ? worst : Number.NaN));
+      closure = undefined;
+    }
+  }
+  if (outcome.state !== 'solved') {
+    const [first, ...rest] = outcome.findings.map((f) => atUnit(call, f));
+    outcome = noSolution(first!, ...rest);
+  }
+  return {
+    kind: unit.kind,
+    settings: call.settings,
+    in: call.in,
+    outPorts: call.outPorts,
+    site: call.site,
+    outcome,
+    warm: outcome.state === 'solved' ? outcome.value.warm : warm,
+    result: resultOf(unit, outcome, memory),
+    ...(closure ? { closure } : {}),
+    limits: problem.limits,
+    limitFindings: limitsOf(unit, solver, call, outcome),
+  };
+}
+
+/** The limits pass of a solved unit. */
+export function limitsOf(
+  unit: ProblemUnit,
+  solver: AnyKind,
+  call: Call<unknown>,
+  outcome: Outcome<Answer>,
+): readonly Finding[] {
+  if (outcome.state !== 'solved') return [];
+  const found = solver.limits(call as Call<never>, outcome.value as Answer<never>, call.site);
+  return found.map((f) => atUnit({ unit: unit.id }, f));
+}

@@ -1,0 +1,31 @@
+import type { Model } from '../thermo/types';
+
+const STANDARD_K = 288.15;
+const STANDARD_PA = 101325;
+const ONE = Float64Array.of(1);
+
+/** Pure liquids' volumes at 15 degC by model, computed when first asked for; NaN where there is no liquid. */
+const kept = new WeakMap<Model, Float64Array>();
+
+function pureVolumes(model: Model): Float64Array {
+  const known = kept.get(model);
+  if (known) return known;
+  const v = Float64Array.from(model.chemicals, ({ Tc_K }, i) =>
+    Tc_K === undefined || Tc_K <= STANDARD_K
+      ? Number.NaN
+      : model.of([i]).liquidVolume_m3_mol(STANDARD_K, STANDARD_PA, ONE),
+  );
+  kept.set(model, v);
+  return v;
+}
+
+/**
+ * Volume flow as liquid at 15 degC by ideal mixing of pure liquids [m3/s]; a chemical that boils below 15 degC counts with its
+ * saturated liquid. Undefined when one that flows is above its critical temperature there.
+ */
+export function standardLiquid_m3_s(n_mol_s: Float64Array, model: Model): number | undefined {
+  const v = pureVolumes(model);
+  let sum = 0;
+  for (let i = 0; i < n_mol_s.length; i++) if (n_mol_s[i] !== 0) sum += n_mol_s[i]! * v[i]!;
+  return Number.isFinite(sum) ? sum : undefined;
+}
