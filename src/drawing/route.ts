@@ -1,0 +1,153 @@
+import { boxOfPiece, grown, hull, overlaps } from './boxes';
+import { findWay, type Heading } from './search';
+import { AWAY } from './transform';
+import type { Box, Point, PortPlace, Side } from './types';
+
+/** A line leaves and enters its ports straight for as much as there is room, the first of these that is free [px]. */
+const STUBS = [24, 16, 12, 8] as const;
+/** A hanging stream shows as a straight piece with an arrowhead [px]. */
+const HANGING = [40, 32, 24, 16] as const;
+/** How far around its ends a line looks for a way at first [px]. */
+const REGION = 160;
+const EVERYWHERE: Box = { x: -1e6, y: -1e6, w: 2e6, h: 2e6 };
+
+const HEADING: Readonly<Record<Side, Heading>> = { right: 0, bottom: 1, left: 2, top: 3 };
+
+export interface RouteEnd {
+  readonly port: PortPlace;
+  /** The unit's own symbol among the obstacles (the same object). */
+  readonly own?: Box;
+}
+
+const along = ([x, y]: Point, side: Side, by: number): Point => [
+  x + AWAY[side][0] * by,
+  y + AWAY[side][1] * by,
+];
+
+const inside = ([x, y]: Point, b: Box): boolean => x > b.x && x < b.x + b.w && y > b.y && y < b.y + b.h;
+
+const crossesAny = (a: Point, b: Point, obstacles: readonly Box[], by: number, except?: Box): boolean => {
+  const piece = boxOfPiece(a, b, by);
+  return obstacles.some((o) => o !== except && overlaps(o, piece));
+};
+
+/** Drops points that add nothing: repeated ones and those in the middle of a straight piece or a spike. */
+export function simplified(points: readonly Point[]): Point[] {
+  const out: Point[] = [];
+  for (const p of points) {
+    const last = out.at(-1);
+    if (last && last[0] === p[0] && last[1] === p[1]) continue;
+    const before = out.at(-2);
+    if (
+      last &&
+      before &&
+      ((before[0] === last[0] && last[0] === p[0]) || (before[1] === last[1] && last[1] === p[1]))
+    ) {
+      out.pop();
+      if (before[0] === p[0] && before[1] === p[1]) continue;
+    }
+    out.push(p);
+  }
+  return out;
+}
+
+/** Length of the straight piece at a port: shorter where another symbol is close or the other port faces it nearby. */
+function stubOf(end: RouteEnd, most: number, obstacles: readonly Box[]): number {
+  for (const length of STUBS) {
+    if (length > most) continue;
+    if (!crossesAny(end.port.at, along(end.port.at, end.port.side, length), obstacles, 6, end.own))
+      return length;
+  }
+  return Math.min(most, STUBS.at(-1)!);
+}
+
+/** Free way between two ports that face each other across less than two stubs, half of it [px]. */
+function halfGap(a: PortPlace, b: PortPlace): number {
+  const [ux, uy] = AWAY[a.side];
+  if (AWAY[b.side][0] !== -ux || AWAY[b.side][1] !== -uy) return Infinity;
+  const ahead = (b.at[0] - a.at[0]) * ux + (b.at[1] - a.at[1]) * uy;
+  return ahead > 0 ? ahead / 2 : Infinity;
+}
+
+export interface Route {
+  readonly points: Point[];
+  /** What lies outside this part of the sheet has no influence on the line. */
+  readonly region: Box;
+}
+
+/**
+ * Orthogonal line from port to port, by way of the bends that were moved by hand.
+ * It keeps clear of every obstacle as long as there is any way; bends inside a symbol are left out.
+ */
+export function routeLine(
+  from: RouteEnd,
+  to: RouteEnd,
+  via: readonly Point[],
+  obstacles: readonly Box[],
+): Route {
+  const a = from.port;
+  const b = to.port;
+  const own = [from.own, to.own];
+  const straight = simplified([a.at, b.at]);
+  if (
+    via.length === 0 &&
+    halfGap(a, b) < Infinity &&
+    (a.at[0] === b.at[0] || a.at[1] === b.at[1]) &&
+    !obstacles.some((o) => !own.includes(o) && overlaps(o, boxOfPiece(a.at, b.at, 6)))
+  ) {
+    return { points: straight, region: boxOfPiece(a.at, b.at, 6) };
+  }
+  const half = via.length === 0 ? halfGap(a, b) : Infinity;
+  const start = along(a.at, a.side, stubOf(from, half, obstacles));
+  const end = along(b.at, b.side, stubOf(to, half, obstacles));
+  const stops = [start, ...via.filter((v) => !obstacles.some((o) => inside(v, grown(o, 6)))), end];
+  const arrive = ((HEADING[b.side] + 2) & 3) as Heading;
+
+  const around = hull([...stops, a.at, b.at].map((p) => boxOfPiece(p, p, REGION)))!;
+  const near = obstacles.filter((o) => overlaps(grown(o, 16), around));
+  for (const [boxes, region] of [
+    [near, around],
+    [obstacles, EVERYWHERE],
+  ] as const) {
+    const points = throughStops(stops, HEADING[a.side], arrive, boxes, region);
+    if (points) return { points: simplified([a.at, ...points, b.at]), region };
+  }
+  return { points: simplified([a.at, start, ...elbow(start, end, a.side), end, b.at]), region: EVERYWHERE };
+}
+
+function throughStops(
+  stops: readonly Point[],
+  heading: Heading,
+  arrive: Heading,
+  obstacles: readonly Box[],
+  region: Box,
+): Point[] | undefined {
+  const points: Point[] = [stops[0]!];
+  let now = heading;
+  for (let k = 1; k < stops.length; k++) {
+    const last = k === stops.length - 1;
+    const leg = { from: stops[k - 1]!, heading: now, to: stops[k]! };
+    if (!last && leg.from[0] === leg.to[0] && leg.from[1] === leg.to[1]) continue;
+    const way = findWay(last ? { ...leg, arrive } : leg, obstacles, region);
+    if (!way) return undefined;
+    points.push(...way.slice(1));
+    const [p, q] = [way.at(-2), way.at(-1)];
+    if (p && q && (p[0] !== q[0] || p[1] !== q[1])) {
+      now = p[0] !== q[0] ? (q[0] > p[0] ? 0 : 2) : q[1] > p[1] ? 1 : 3;
+    }
+  }
+  return points;
+}
+
+/** Last resort when symbols leave no way at all: one bend, straight over whatever is there. */
+const elbow = (start: Point, end: Point, side: Side): Point[] =>
+  side === 'left' || side === 'right' ? [[end[0], start[1]]] : [[start[0], end[1]]];
+
+/** A stream with one end: straight away from its port (or towards it), shorter where a symbol is in the way. */
+export function hangingLine(end: RouteEnd, outgoing: boolean, obstacles: readonly Box[]): Route {
+  const { at, side } = end.port;
+  const length =
+    HANGING.find((l) => !crossesAny(at, along(at, side, l), obstacles, 6, end.own)) ?? HANGING.at(-1)!;
+  const far = along(at, side, length);
+  return { points: outgoing ? [at, far] : [far, at], region: boxOfPiece(at, along(at, side, HANGING[0]), 6) };
+}

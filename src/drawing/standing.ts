@@ -1,0 +1,67 @@
+import type { UnitId } from '../engine/ids';
+import { CATALOGUE } from '../engine/units/catalogue';
+import type { KindCatalogue, PortSpec } from '../engine/units/types';
+import type { Sketch, SketchUnit } from '../sketch/types';
+import { boxOfPiece } from './boxes';
+import { symbolOf } from './symbols/registry';
+import { boxOnSheet, type Pose, portOnSheet, poseOf, toSheet } from './transform';
+import type { Box, Point, PortPlace, SymbolData } from './types';
+
+/** A unit with its symbol, where it stands on the sheet. */
+export interface StandingUnit {
+  readonly unit: SketchUnit;
+  readonly symbol: SymbolData;
+  readonly pose: Pose;
+  readonly box: Box;
+  /** Ends of its heat link: at the symbol, at the ring. */
+  readonly link?: readonly [Point, Point];
+  /** Room of the heat link with its ring. */
+  readonly linkBox?: Box;
+}
+
+/** Ports of kinds that nobody knows any more, as far as streams use them. */
+function usedPorts(sketch: Sketch): ReadonlyMap<UnitId, readonly PortSpec[]> {
+  const used = new Map<UnitId, PortSpec[]>();
+  const note = (unit: UnitId, name: string, dir: 'in' | 'out'): void => {
+    const ports = used.get(unit) ?? [];
+    if (!ports.some((p) => p.name === name)) ports.push({ name, dir });
+    used.set(unit, ports);
+  };
+  for (const { from, to } of sketch.streams) {
+    if (from) note(from[0], from[1], 'out');
+    if (to) note(to[0], to[1], 'in');
+  }
+  return used;
+}
+
+export function standingUnits(
+  sketch: Sketch,
+  moved: ReadonlyMap<UnitId, Point> | undefined,
+  kinds: Readonly<Record<string, KindCatalogue>> = CATALOGUE,
+): readonly StandingUnit[] {
+  const used = usedPorts(sketch);
+  return sketch.units.map((unit) => {
+    const symbol = symbolOf(unit, kinds, used.get(unit.id));
+    const pose = poseOf(unit, moved?.get(unit.id));
+    const plain = { unit, symbol, pose, box: boxOnSheet(pose, symbol.box) };
+    if (!symbol.link) return plain;
+    const link = [toSheet(pose, symbol.link.from), toSheet(pose, symbol.link.to)] as const;
+    return { ...plain, link, linkBox: boxOfPiece(...link, 4) };
+  });
+}
+
+export const portOf = (standing: StandingUnit, name: string): PortPlace | undefined => {
+  const port = standing.symbol.ports(name);
+  return port && portOnSheet(standing.pose, port);
+};
+
+/** A port's place on the sheet; undefined when the unit has no such port. */
+export function portPlace(
+  unit: SketchUnit,
+  name: string,
+  moved?: Point,
+  kinds: Readonly<Record<string, KindCatalogue>> = CATALOGUE,
+): PortPlace | undefined {
+  const port = symbolOf(unit, kinds).ports(name);
+  return port && portOnSheet(poseOf(unit, moved), port);
+}
