@@ -9,7 +9,7 @@ const P_Pa = 5e7;
 export interface Candidates {
   /** Indices into the model's chemicals, ascending. */
   readonly formers: Int32Array;
-  /** By molar mass. */
+  /** By the start values of K at 298 K. */
   readonly lightest: number;
   readonly heaviest: number;
 }
@@ -23,12 +23,13 @@ export interface Candidates {
  */
 export function liquidFormers(model: ThermoModel): Candidates {
   const { n } = model;
+  const K = new Float64Array(n);
+  model.startK(T_K, 1e5, K);
   let lightest = 0;
   let heaviest = 0;
   for (let i = 1; i < n; i++) {
-    const mass = model.chemicals[i]!.MW_g_mol;
-    if (mass < model.chemicals[lightest]!.MW_g_mol) lightest = i;
-    if (mass > model.chemicals[heaviest]!.MW_g_mol) heaviest = i;
+    if (K[i]! > K[lightest]!) lightest = i;
+    if (K[i]! < K[heaviest]!) heaviest = i;
   }
   if (n === 1 || model.spec.kind === 'raoult') return { formers: new Int32Array(0), lightest, heaviest };
 

@@ -20,15 +20,16 @@ export function settleLiquids(w: FlashWork, z: Float64Array, T: number, P: numbe
   return afterVapourLiquid(w, z, T, P, true);
 }
 
-/** The feed as one liquid though it could split; `other` is the liquid that is said. */
-export function asOneLiquid(w: FlashWork, T: number, P: number, other: Float64Array): true {
+/**
+ * The stable state is two liquids, in w.vap and w.liq: they are taken together as one liquid phase of the feed's
+ * composition with the properties of both (a single liquid of that composition does not exist in nature, and in the
+ * model its enthalpy would be off by tens of kJ/mol). `other` is the composition that is said.
+ */
+function asOneLiquid(w: FlashWork, other: Float64Array): true {
   w.hidden = true;
   w.hiddenX.set(other);
-  w.feed.side = 'liquid';
-  w.model.evaluate('liquid', T, P, w.feed.x, 2, w.feed.props);
-  w.iterations++;
   w.phases = 1;
-  w.residual = 0;
+  w.lumped = true;
   return true;
 }
 
@@ -40,7 +41,7 @@ function afterTwoLiquids(w: FlashWork, z: Float64Array, T: number, P: number): b
   const smaller = w.vap.total < w.liq.total ? w.vap : w.liq;
   w.hiddenX.set(smaller.x);
   setPlane(w, w.vap);
-  if (!vapourBelow(w, T, P, w.vap, w.liq)) return asOneLiquid(w, T, P, w.hiddenX);
+  if (!vapourBelow(w, T, P, w.vap, w.liq)) return asOneLiquid(w, w.hiddenX);
   exchange(w);
   const larger = w.vap2.total >= w.liq2.total ? w.vap2 : w.liq2;
   const rest = larger === w.vap2 ? w.liq2 : w.vap2;
@@ -51,7 +52,8 @@ function afterTwoLiquids(w: FlashWork, z: Float64Array, T: number, P: number): b
     w.phases = 2;
     return afterVapourLiquid(w, z, T, P, false);
   }
-  return asOneLiquid(w, T, P, w.hiddenX);
+  exchange(w);
+  return asOneLiquid(w, w.hiddenX);
 }
 
 function afterVapourLiquid(
@@ -76,7 +78,7 @@ function afterVapourLiquid(
     orderByVolume(w);
     if (bothLiquid(w, T)) {
       setPlane(w, w.vap);
-      if (!vapourBelow(w, T, P, w.vap, w.liq)) return asOneLiquid(w, T, P, w.hiddenX);
+      if (!vapourBelow(w, T, P, w.vap, w.liq)) return asOneLiquid(w, w.hiddenX);
     }
   }
   // Perhaps the vapour with the other liquid lies lower.

@@ -9,7 +9,7 @@ import {
   type SplitEnd,
   substitute,
 } from './split';
-import type { FlashWork, Slot } from './work';
+import type { FlashWork } from './work';
 
 /** Substitution, Newton, and when that stalls longer accelerated substitution and Newton again. */
 export function settle(w: FlashWork, z: Float64Array, T: number, P: number): SplitEnd {
@@ -65,10 +65,14 @@ function accelerated(w: FlashWork, z: Float64Array, T: number, P: number, steps:
   return 'going';
 }
 
-/** w.vap becomes the phase of the larger molar volume. */
+/**
+ * w.vap becomes the phase of the larger molar volume. Where the model itself tells vapour from liquid (two roots, or
+ * two sides), its word stands.
+ */
 export function orderByVolume(w: FlashWork): void {
-  if (w.vap.props.v_m3_mol >= w.liq.props.v_m3_mol) return;
-  const other: Slot = w.vap;
-  w.vap = w.liq;
-  w.liq = other;
+  const { vap, liq } = w;
+  if (vap.props.v_m3_mol >= liq.props.v_m3_mol) return;
+  if (!vap.props.single && !liq.props.single && vap.props.side !== liq.props.side) return;
+  w.vap = liq;
+  w.liq = vap;
 }

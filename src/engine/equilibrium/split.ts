@@ -1,4 +1,4 @@
-import { solveDefinite } from './definite';
+import { solveDefinite } from './dense';
 import { vapourFractionOf } from './rachford-rice';
 import type { FlashWork, Slot } from './work';
 

@@ -1,4 +1,4 @@
-import { solveDefinite } from './definite';
+import { solveDefinite } from './dense';
 import type { FlashWork, Slot } from './work';
 
 /** A trial lies below the tangent plane only if it does so by more than rounding. */

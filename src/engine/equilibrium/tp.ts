@@ -1,4 +1,4 @@
-import { asOneLiquid, settleLiquids } from './liquids';
+import { settleLiquids } from './liquids';
 import { vapourFractionOf } from './rachford-rice';
 import { orderByVolume, settle } from './settle';
 import {
@@ -44,11 +44,13 @@ export function flashTP(w: FlashWork, z: Float64Array, T: number, P: number, fro
   w.iterations = 0;
   w.residual = 0;
   w.hidden = false;
+  w.lumped = false;
   feed.x.set(z);
   feed.total = 1;
   feed.side = 'stable';
   model.evaluate('stable', T, P, feed.x, 0, feed.props);
   w.iterations++;
+  if (n === 1) return finishOne(w, T, P);
   setPlane(w, feed);
   w.vap.side = 'vapour';
   w.liq.side = 'liquid';
@@ -70,10 +72,8 @@ export function flashTP(w: FlashWork, z: Float64Array, T: number, P: number, fro
   if (!isUnstable(w, T, P)) return finishOne(w, T, P);
   const light = startFromTrial(w, z, T, P);
   if (light === undefined) return finishOne(w, T, P);
-  w.hiddenX.set(w.trial.x);
   end = settle(w, z, T, P);
   if (end === 'equal') return finishTwo(w, z, T, P);
-  if (light === 'liquid') return asOneLiquid(w, T, P, w.hiddenX);
   return end === 'trivial' ? finishOne(w, T, P) : false;
 }
 
@@ -82,7 +82,12 @@ export function flashTP(w: FlashWork, z: Float64Array, T: number, P: number, fro
  *
  * @returns the side that the lighter phase takes; undefined when the split cannot be placed
  */
-export function startFromTrial(w: FlashWork, z: Float64Array, T: number, P: number): 'vapour' | 'liquid' | undefined {
+export function startFromTrial(
+  w: FlashWork,
+  z: Float64Array,
+  T: number,
+  P: number,
+): 'vapour' | 'liquid' | undefined {
   const { n, feed, trial, K, lnK, vap, liq } = w;
   const trialIsLight = trial.props.v_m3_mol >= feed.props.v_m3_mol;
   const bothLiquid = liquidLike(w, feed, T) && liquidLike(w, trial, T);
@@ -130,7 +135,7 @@ export function finishOne(w: FlashWork, T: number, P: number): true {
   return true;
 }
 
-function finishTwo(w: FlashWork, z: Float64Array, T: number, P: number): 'vapour' | 'liquid' | undefined {
+function finishTwo(w: FlashWork, z: Float64Array, T: number, P: number): boolean {
   w.phases = 2;
   orderByVolume(w);
   return settleLiquids(w, z, T, P);

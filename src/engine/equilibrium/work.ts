@@ -42,7 +42,6 @@ export interface FlashWork extends FlashWorkOwner {
   readonly g: Float64Array;
   readonly s: Float64Array;
   readonly step: Float64Array;
-  readonly stepU: Float64Array;
   readonly saved: Float64Array;
   readonly saved2: Float64Array;
   readonly startW: Float64Array;
@@ -50,7 +49,6 @@ export interface FlashWork extends FlashWorkOwner {
   readonly hess: Float64Array;
   readonly border: Float64Array;
   readonly rhs: Float64Array;
-  readonly pivots: Int32Array;
 
   /** Answer so far. */
   phases: 1 | 2;
@@ -58,6 +56,8 @@ export interface FlashWork extends FlashWorkOwner {
   P_Pa: number;
   iterations: number;
   residual: number;
+  /** The single phase is two liquids taken together (w.vap, w.liq): the model has no single liquid for this feed. */
+  lumped: boolean;
   /** Another liquid was found; its composition is in hiddenX. */
   hidden: boolean;
   readonly hiddenX: Float64Array;
@@ -100,19 +100,18 @@ export function makeFlashWork(model: ThermoModel): FlashWork {
     g: vector(),
     s: vector(),
     step: vector(),
-    stepU: vector(),
     saved: vector(),
     saved2: vector(),
     startW: new Float64Array(n),
     hess: new Float64Array(n * n),
     border: new Float64Array((n + 1) * (n + 1)),
     rhs: vector(),
-    pivots: new Int32Array(n + 1),
     phases: 1,
     T_K: 0,
     P_Pa: 0,
     iterations: 0,
     residual: 0,
+    lumped: false,
     hidden: false,
     hiddenX: new Float64Array(n),
   };

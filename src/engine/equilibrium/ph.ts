@@ -1,0 +1,192 @@
+import { newtonCaloric } from './caloric';
+import { orderByVolume } from './settle';
+import { placeFlows } from './split';
+import { liquidLike, setPlane } from './stability';
+import { hiddenLiquid } from './starts';
+import { flashTP, type StartK } from './tp';
+import { type Caloric, closeEnough, frozenCp, LEAST_T_K, MOST_T_K, wholeOf } from './whole';
+import type { FlashWork } from './work';
+
+export type SearchEnd = 'solved' | 'no-convergence' | 'out-of-range' | 'between-states';
+
+/** Relative width of a temperature bracket below which enthalpy is taken to jump. */
+const JUMP = 1e-8;
+const PASSES = 80;
+
+/**
+ * Phases of z at given pressure and molar enthalpy or entropy. Both rise with temperature at constant pressure, so a
+ * bracket grows tight around the answer from every equilibrium state that is met; inside the two-phase region flows
+ * and temperature are solved together.
+ *
+ * @param target  molar enthalpy [J/mol] or entropy [J/(mol K)]
+ * @param T0      where to start [K]
+ * @param from    'K': w.lnK holds a start
+ * @returns 'solved' with the answer in w (see flashTP; w.T_K); 'between-states': the property jumps over the target
+ */
+export function flashCaloric(
+  w: FlashWork,
+  z: Float64Array,
+  P: number,
+  target: number,
+  of: Caloric,
+  T0: number,
+  from: StartK,
+): SearchEnd {
+  let low = LEAST_T_K;
+  let high = MOST_T_K;
+  let T = T0 > low && T0 < high ? T0 : 300;
+  let start = from;
+  let iterations = 0;
+  let missed = 0;
+  let belowT = 0;
+  let belowMiss = 0;
+  let aboveT = 0;
+  let aboveMiss = 0;
+  for (let pass = 0; pass < PASSES; pass++) {
+    const ok = flashTP(w, z, T, P, start);
+    iterations += w.iterations;
+    start = 'nothing';
+    if (!ok) {
+      // A state that does not settle (a critical point) is stepped round.
+      if (++missed > 5) return 'no-convergence';
+      T *= 1 + (missed % 2 === 0 ? -1 : 1) * 3e-4 * missed;
+      continue;
+    }
+    const miss = target - wholeOf(w, of);
+    if (Math.abs(miss) <= closeEnough(of, T, target)) return done(w, iterations);
+    if (miss > 0) {
+      low = T;
+      belowT = T;
+      belowMiss = miss;
+    } else {
+      high = T;
+      aboveT = T;
+      aboveMiss = miss;
+    }
+    if (high - low < 4e-13 * T && Math.abs(miss) < 1e3 * closeEnough(of, T, target))
+      return done(w, iterations);
+
+    let next: number;
+    if (w.phases === 2) {
+      const hidden = w.hidden;
+      w.iterations = 0;
+      const end = newtonCaloric(w, T, P, target, of);
+      iterations += w.iterations;
+      if (end === 'equal' && isAnswer(w, P, hidden)) return done(w, iterations);
+      // Not the stable state, or a phase is about to vanish: go on from that temperature.
+      next = end === 'going' ? Number.NaN : w.T_K;
+    } else if (w.lumped) {
+      next = T + (miss * slopeless(of, T)) / frozenCp(w);
+    } else next = singleT(w, P, target, of, T, low, high);
+
+    if (belowT > 0 && aboveT > 0) {
+      if (high - low < JUMP * high) {
+        w.iterations = 0;
+        const bridged = acrossJump(w, z, low, high, P, target, of);
+        iterations += w.iterations;
+        return bridged ? done(w, iterations) : 'between-states';
+      }
+      if (!(next > low && next < high)) {
+        // Regula falsi first, then halves: a jump is found by halving.
+        next =
+          pass % 3 === 0 &&
+          Math.abs(belowMiss) < 50 * Math.abs(aboveMiss) &&
+          Math.abs(aboveMiss) < 50 * Math.abs(belowMiss)
+            ? low + ((high - low) * belowMiss) / (belowMiss - aboveMiss)
+            : (low + high) / 2;
+      }
+      const edge = 1e-3 * (high - low);
+      if (pass > 8 && (next - low < edge || high - next < edge)) next = (low + high) / 2;
+    } else if (!(next > low && next < high)) {
+      next = miss > 0 ? Math.min(T * 1.3, (T + high) / 2) : Math.max(T / 1.3, (T + low) / 2);
+    }
+    if (next > 0.999 * MOST_T_K || next < 1.001 * LEAST_T_K) return 'out-of-range';
+    T = next;
+  }
+  return 'no-convergence';
+}
+
+const slopeless = (of: Caloric, T: number): number => (of === 'h' ? 1 : T);
+
+function done(w: FlashWork, iterations: number): 'solved' {
+  w.iterations = iterations;
+  return 'solved';
+}
+
+/** A split that newtonCaloric found, tested as flashTP tests its own; small phases are real, but none is negative. */
+function isAnswer(w: FlashWork, P: number, hiddenBefore: boolean): boolean {
+  const T = w.T_K;
+  orderByVolume(w);
+  if (w.formers.length === 0) return true;
+  if (liquidLike(w, w.vap, T) && liquidLike(w, w.liq, T)) return false;
+  setPlane(w, w.vap);
+  const hidden = hiddenLiquid(w, T, P, w.vap, w.liq);
+  if (hidden) w.hiddenX.set(w.trial.x);
+  w.hidden = hidden;
+  // A second liquid that was not there at the start: the stable state may have no vapour; ask again from nothing.
+  return !hidden || hiddenBefore;
+}
+
+/** Temperature at which the single phase of the feed, on its present root, has the property [K]; NaN if not found. */
+function singleT(
+  w: FlashWork,
+  P: number,
+  target: number,
+  of: Caloric,
+  T0: number,
+  low: number,
+  high: number,
+): number {
+  const { model, feed, trial } = w;
+  let T = T0;
+  let miss = target - (of === 'h' ? feed.props.h_J_mol : feed.props.s_J_molK);
+  let cp = feed.props.cp_J_molK;
+  const side = feed.props.side;
+  for (let pass = 0; pass < 30; pass++) {
+    let move = (of === 'h' ? miss : miss * T) / cp;
+    const most = 0.4 * T;
+    if (Math.abs(move) > most) move = Math.sign(move) * most;
+    const next = T + move;
+    if (next === T || !(next > low && next < high)) return next;
+    T = next;
+    model.evaluate(feed.side === 'liquid' ? 'liquid' : side, T, P, feed.x, 2, trial.props);
+    w.iterations++;
+    miss = target - (of === 'h' ? trial.props.h_J_mol : trial.props.s_J_molK);
+    cp = trial.props.cp_J_molK;
+    if (!(cp > 0)) return Number.NaN;
+    if (Math.abs(miss) <= 0.5 * closeEnough(of, T, target)) return T;
+  }
+  return T;
+}
+
+/** A boiling range narrower than the bracket: vapour fraction by the lever rule, then flows and temperature together. */
+function acrossJump(
+  w: FlashWork,
+  z: Float64Array,
+  low: number,
+  high: number,
+  P: number,
+  target: number,
+  of: Caloric,
+): boolean {
+  const { n, model, feed, vap, liq, K, lnK } = w;
+  const T = (low + high) / 2;
+  vap.side = 'vapour';
+  liq.side = 'liquid';
+  model.evaluate('vapour', T, P, feed.x, 1, vap.props);
+  model.evaluate('liquid', T, P, feed.x, 1, liq.props);
+  w.iterations += 2;
+  const above = of === 'h' ? vap.props.h_J_mol : vap.props.s_J_molK;
+  const below = of === 'h' ? liq.props.h_J_mol : liq.props.s_J_molK;
+  const beta = (target - below) / (above - below);
+  if (!(beta > 0 && beta < 1)) return false;
+  for (let i = 0; i < n; i++) {
+    lnK[i] = liq.props.lnPhi[i]! - vap.props.lnPhi[i]!;
+    K[i] = Math.exp(lnK[i]!);
+  }
+  placeFlows(w, z, beta);
+  if (newtonCaloric(w, T, P, target, of) !== 'equal') return false;
+  w.phases = 2;
+  w.lumped = false;
+  return isAnswer(w, P, true);
+}

@@ -1,0 +1,123 @@
+import { newtonFraction, type Sought, startPoint } from './fraction';
+import { liquidLike, setPlane } from './stability';
+import { hiddenLiquid } from './starts';
+import { flashTP } from './tp';
+import { LEAST_T_K, MOST_T_K } from './whole';
+import type { FlashWork } from './work';
+
+export type FractionSearch = 'solved' | 'no-convergence' | 'no-such-state' | 'out-of-range';
+
+/**
+ * Phases of z at a given vapour fraction and a given pressure (temperature is sought) or temperature (pressure is
+ * sought). 0 and 1 are the bubble and the dew point; the incipient phase is then in its slot with a total of zero.
+ *
+ * Where several states have this fraction (retrograde), the one on the side of low density is taken: the higher
+ * temperature, the lower pressure.
+ *
+ * @param given   pressure [Pa] or temperature [K]
+ * @param start   start of what is sought, w.lnK alongside; undefined: from the model's start values
+ */
+export function flashFraction(
+  w: FlashWork,
+  z: Float64Array,
+  beta: number,
+  sought: Sought,
+  given: number,
+  start: number | undefined,
+): FractionSearch {
+  w.iterations = 0;
+  w.hidden = false;
+  w.lumped = false;
+  if (start !== undefined && newtonFraction(w, z, beta, sought, given, start, 0) === 'equal' && accept(w)) {
+    return 'solved';
+  }
+  const first = startPoint(w, z, beta, sought, given);
+  if (newtonFraction(w, z, beta, sought, given, first, 4) === 'equal' && accept(w)) return 'solved';
+  startPoint(w, z, beta, sought, given);
+  if (newtonFraction(w, z, beta, sought, given, first, 15) === 'equal' && accept(w)) return 'solved';
+  return searchFraction(w, z, beta, sought, given, first);
+}
+
+/** Whether what Newton found is a vapour and a liquid; looks for a second liquid beside it. */
+function accept(w: FlashWork): boolean {
+  const { vap, liq, T_K: T, P_Pa: P } = w;
+  if (!(T > LEAST_T_K && T < MOST_T_K)) return false;
+  if (!(vap.props.v_m3_mol > liq.props.v_m3_mol)) {
+    if (vap.props.single || liq.props.single) return false;
+  }
+  w.phases = 2;
+  w.hidden = false;
+  if (w.formers.length === 0) return true;
+  if (liquidLike(w, vap, T) && liquidLike(w, liq, T)) return false;
+  setPlane(w, vap);
+  if (hiddenLiquid(w, T, P, vap, liq)) {
+    w.hidden = true;
+    w.hiddenX.set(w.trial.x);
+  }
+  return true;
+}
+
+const GRID = 48;
+
+/**
+ * The slow, sure way: flashes at given T and P from the thin side to the dense one, until the vapour fraction passes
+ * the wanted value; then halves, then Newton.
+ */
+function searchFraction(
+  w: FlashWork,
+  z: Float64Array,
+  beta: number,
+  sought: Sought,
+  given: number,
+  centre: number,
+): FractionSearch {
+  let iterations = w.iterations;
+  const at = (u: number): number | undefined => {
+    const ok = sought === 'T' ? flashTP(w, z, u, given, 'nothing') : flashTP(w, z, given, u, 'nothing');
+    iterations += w.iterations;
+    if (!ok) return undefined;
+    if (w.phases === 2) return w.vap.total;
+    const critical = w.model.pseudoCritical(w.feed.x);
+    // Beyond the ends, so that bubble and dew points are crossings too.
+    return !w.lumped && w.feed.props.v_m3_mol > critical.v_m3_mol ? 2 : -1;
+  };
+  const finish = (u: number): boolean => {
+    for (let i = 0; i < w.n; i++) w.lnK[i] = Math.log(w.vap.x[i]! / w.liq.x[i]!);
+    w.iterations = 0;
+    const end = newtonFraction(w, z, beta, sought, given, u, 0);
+    iterations += w.iterations;
+    return end === 'equal' && accept(w);
+  };
+  // From thin to dense: temperature down, pressure up.
+  const thin = sought === 'T' ? Math.min(centre * 2, MOST_T_K) : centre * 1e-3;
+  const dense = sought === 'T' ? Math.max(centre * 0.35, LEAST_T_K) : centre * 1e3;
+  let uBefore = thin;
+  let before = at(thin);
+  for (let k = 1; k <= GRID; k++) {
+    const u = thin * (dense / thin) ** (k / GRID);
+    const now = at(u);
+    if (before !== undefined && now !== undefined && (before - beta) * (now - beta) <= 0 && before !== now) {
+      let a = uBefore;
+      let fa = before;
+      let b = u;
+      for (let half = 0; half < 60; half++) {
+        const middle = Math.sqrt(a * b);
+        const f = at(middle);
+        if (f === undefined) break;
+        if (w.phases === 2 && (Math.abs(f - beta) < 0.05 || half > 6) && finish(middle)) {
+          w.iterations = iterations;
+          return 'solved';
+        }
+        if ((fa - beta) * (f - beta) > 0) {
+          a = middle;
+          fa = f;
+        } else b = middle;
+        if (Math.abs(Math.log(a / b)) < 1e-12) break;
+      }
+    }
+    uBefore = u;
+    before = now;
+  }
+  w.iterations = iterations;
+  return 'no-such-state';
+}
