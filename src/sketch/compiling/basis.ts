@@ -1,0 +1,155 @@
+import type { ChemicalData } from '../../engine/chemicals/types';
+import type { Basis } from '../../engine/network/types';
+import type { Finding } from '../../engine/outcome';
+import { type PairTables, resolvePairs } from '../../engine/thermo/pairs/resolve';
+import type { ModelSpec } from '../../engine/thermo/types';
+import { finding, word } from '../findings';
+import type { Sketch } from '../types';
+import { chemicalId, type FullList } from './air';
+import { readModel } from './model';
+import { ownChemicalData } from './ownChemical';
+import type { AssumptionDraft } from './scope';
+
+/** What of the bank a sketch needs, already loaded. */
+export interface BankData {
+  readonly chemicals: ReadonlyMap<string, ChemicalData>;
+  readonly pairs: PairTables;
+}
+
+export interface BasisRead {
+  /** Undefined when a chemical or the model cannot be used. */
+  readonly basis: Basis | undefined;
+  /** Over the full list; undefined where the bank has no such chemical. */
+  readonly data: readonly (ChemicalData | undefined)[];
+  readonly gaps: readonly Finding[];
+  readonly notes: readonly Finding[];
+  readonly assumptions: readonly AssumptionDraft[];
+}
+
+/** Constants and correlations that a model cannot do without. */
+const NEEDS: Readonly<Record<ModelSpec['kind'], readonly string[]>> = {
+  'peng-robinson': ['Tc_K', 'Pc_Pa', 'omega', 'ideal_gas_cp'],
+  raoult: ['vapor_pressure', 'ideal_gas_cp'],
+};
+
+/** What a chemical lacks for a model, by field or correlation name. */
+export function lackingFor(
+  spec: Pick<ModelSpec, 'kind' | 'liquidH'>,
+  chemical: ChemicalData,
+): readonly string[] {
+  const needs = NEEDS[spec.kind];
+  const more = spec.kind === 'raoult' && spec.liquidH === 'hvap' ? ['enthalpy_of_vaporization'] : [];
+  const corr: Readonly<Record<string, readonly unknown[] | undefined>> = chemical.corr;
+  const constants: Readonly<Record<string, unknown>> = { ...chemical };
+  return [...needs, ...more].filter((name) => constants[name] === undefined && !corr[name]?.length);
+}
+
+/** Chemicals and model with every constant and pair inside, or the reasons why they cannot be had. */
+export function readBasis(sketch: Sketch, list: FullList, bank: BankData): BasisRead {
+  const ids = [...list.chemicals.map(chemicalId), ...list.added];
+  const gaps: Finding[] = [];
+  const notes: Finding[] = [];
+  const assumptions: AssumptionDraft[] = [];
+  const data = [...list.chemicals, ...list.added].map((chemical, k): ChemicalData | undefined => {
+    if (typeof chemical !== 'string') return ownChemicalData(chemical.id, chemical.own);
+    const known = bank.chemicals.get(chemical);
+    if (!known)
+      gaps.push(
+        finding(
+          'sketch/chemical-not-in-bank',
+          'caution',
+          { path: `chemicals.${k}`, chemical },
+          word('chemical', chemical),
+        ),
+      );
+    return known && k >= list.chemicals.length ? assumedOf(known) : known;
+  });
+  if (ids.length === 0) gaps.push(finding('sketch/no-chemicals', 'caution', { path: 'chemicals' }));
+
+  const model = readModel(sketch.model, new Set(ids));
+  gaps.push(...model.gaps);
+  notes.push(...model.notes);
+  assumptions.push(...model.assumptions);
+  for (const [k, chemical] of data.entries()) {
+    if (!chemical) continue;
+    const at = { path: `chemicals.${k}`, chemical: chemical.id };
+    for (const name of model.spec ? lackingFor(model.spec, chemical) : [])
+      gaps.push(
+        finding('sketch/chemical-lacks', 'caution', at, word('chemical', chemical.id), word('lacks', name)),
+      );
+    if (chemical.own && chemical.formula !== undefined && !chemical.elements)
+      notes.push(finding('sketch/formula-not-read', 'caution', at, word('typed', chemical.formula)));
+    assumptions.push(...assumptionsOf(chemical, k));
+  }
+  const complete = data.filter((c) => c !== undefined);
+  const basis =
+    model.spec && gaps.length === 0
+      ? {
+          ...model.spec,
+          pairs: model.spec.kind === 'raoult' ? [] : resolvePairs(complete, model, bank.pairs),
+        }
+      : undefined;
+  return {
+    basis: basis && {
+      id: fingerprint(JSON.stringify([list.chemicals, list.added, sketch.model])),
+      chemicals: complete,
+      model: basis,
+    },
+    data,
+    gaps,
+    notes,
+    assumptions,
+  };
+}
+
+const assumed = new WeakMap<ChemicalData, ChemicalData>();
+function assumedOf(chemical: ChemicalData): ChemicalData {
+  const known = assumed.get(chemical) ?? { ...chemical, assumed: true };
+  assumed.set(chemical, known);
+  return known;
+}
+
+/** What is assumed of a chemical because nothing better is known. */
+function assumptionsOf(chemical: ChemicalData, k: number): readonly AssumptionDraft[] {
+  const found: AssumptionDraft[] = [];
+  const path = `chemicals.${k}`;
+  if (chemical.assumed)
+    found.push({
+      path,
+      value: chemical.id,
+      unitText: chemical.id,
+      reason: `Air needs ${chemical.name.toLowerCase()}, which is not among the sketch's chemicals.`,
+    });
+  if (chemical.Hf_J_mol === undefined)
+    found.push({
+      path: `${path}.Hf`,
+      value: 0,
+      unitText: '0 J/mol',
+      reason: `${chemical.name} has no enthalpy of formation: its enthalpy starts at 0.`,
+    });
+  const noCritical =
+    chemical.Tc_K === undefined ||
+    chemical.Pc_Pa === undefined ||
+    (chemical.zRA ?? chemical.omega) === undefined;
+  if (noCritical && !chemical.corr.liquid_density?.length)
+    found.push({
+      path: `${path}.rhoL`,
+      value: 800,
+      unitText: '800 kg/m3',
+      reason: `Nothing tells the liquid density of ${chemical.name}.`,
+    });
+  return found;
+}
+
+/** 64 bits of a text as an id, in two halves that mix differently. Equal texts give equal ids in every run. */
+export function fingerprint(text: string): string {
+  const half = (seed: number, factor: number): string => {
+    let h = seed;
+    for (let i = 0; i < text.length; i += 1) {
+      h = Math.imul(h ^ text.charCodeAt(i), factor);
+      h ^= h >>> 15;
+    }
+    return (h >>> 0).toString(16).padStart(8, '0');
+  };
+  return half(0x2545f491, 0x9e3779b1) + half(0x6c8e9cf5, 0x85ebca77);
+}

@@ -1,0 +1,116 @@
+import { word } from '../findings';
+import { sameJson } from '../json';
+import { nextNoteId } from '../naming';
+import type { Display, Json, ModelChoice, Note, Quantity, Sketch, TitleBlock } from '../types';
+import { type Edit, refuse, withText } from './edited';
+
+const changed = <K extends keyof Sketch>(sketch: Sketch, key: K, value: Sketch[K]): Sketch =>
+  sketch[key] === value || sameJson(sketch[key] as unknown as Json, value as unknown as Json)
+    ? sketch
+    : { ...sketch, [key]: value };
+
+/** A line of the title block; blank takes it away. */
+export const setTitle = (sketch: Sketch, key: keyof TitleBlock, text: string): Edit => ({
+  ok: true,
+  sketch: changed(sketch, 'title', withText(sketch.title, key, text)),
+  label: `title block: ${key}`,
+});
+
+/** A value of the site, as typed; blank returns to the assumption. */
+export const setSite = (sketch: Sketch, key: keyof Sketch['site'], text: string): Edit => ({
+  ok: true,
+  sketch: changed(
+    sketch,
+    'site',
+    withText(sketch.site as { readonly [K in keyof Sketch['site']]?: string }, key, text),
+  ),
+  label: `site: ${key}`,
+});
+
+/** Choices that may be undefined: that takes them away. */
+type Choices<T> = { readonly [K in keyof T]?: T[K] | undefined };
+
+function merged<T extends object>(record: T, choices: Choices<T>): T {
+  const entries = new Map<string, unknown>(Object.entries(record));
+  for (const [key, value] of Object.entries(choices))
+    if (value === undefined) entries.delete(key);
+    else entries.set(key, value);
+  return Object.fromEntries(entries) as T;
+}
+
+/** Choices of the thermodynamic model; undefined returns one to its assumption. */
+export const setModel = (sketch: Sketch, choices: Choices<ModelChoice>): Edit => ({
+  ok: true,
+  sketch: changed(
+    sketch,
+    'model',
+    merged(sketch.model, { ...choices, kind: choices.kind ?? sketch.model.kind }),
+  ),
+  label: 'thermodynamic model',
+});
+
+/** What is shown, and in which measures. */
+export const setDisplay = (sketch: Sketch, choices: Choices<Display>): Edit => ({
+  ok: true,
+  sketch: changed(
+    sketch,
+    'display',
+    merged(sketch.display, {
+      ...choices,
+      set: choices.set ?? sketch.display.set,
+      labels: choices.labels ?? sketch.display.labels,
+    }),
+  ),
+  label: choices.set !== undefined ? `measures: ${choices.set}` : 'what the sheet shows',
+});
+
+/** A threshold of a limit by its code; undefined returns it to the usual one. */
+export function setLimit(sketch: Sketch, code: string, value: Quantity | undefined): Edit {
+  const limits = merged<Readonly<Record<string, Quantity>>>(sketch.limits ?? {}, { [code]: value });
+  if (sameJson(limits as Json, (sketch.limits ?? {}) as Json))
+    return { ok: true, sketch, label: `limit ${code}` };
+  const { limits: _, ...rest } = sketch;
+  const next = Object.keys(limits).length === 0 ? rest : { ...rest, limits };
+  return { ok: true, sketch: next, label: `limit ${code}` };
+}
+
+export function addNote(
+  sketch: Sketch,
+  text: string,
+  where: { readonly at?: Note['at']; readonly on?: string } = {},
+): Edit {
+  if (text.trim() === '') return refuse('edit/empty-text');
+  const note: Note = {
+    id: nextNoteId(sketch.notes),
+    text,
+    ...(where.at === undefined ? {} : { at: where.at }),
+    ...(where.on === undefined ? {} : { on: where.on }),
+  };
+  return { ok: true, sketch: { ...sketch, notes: [...sketch.notes, note] }, label: 'add a note' };
+}
+
+/** A note's text or place. */
+export function changeNote(
+  sketch: Sketch,
+  id: string,
+  change: { readonly text?: string; readonly at?: Note['at'] },
+): Edit {
+  if (!sketch.notes.some((n) => n.id === id)) return refuse('edit/unknown-note', word('note', id));
+  if (change.text !== undefined && change.text.trim() === '') return refuse('edit/empty-text');
+  const notes = sketch.notes.map((n) =>
+    n.id === id
+      ? { ...n, text: change.text ?? n.text, ...(change.at === undefined ? {} : { at: change.at }) }
+      : n,
+  );
+  return { ok: true, sketch: changed(sketch, 'notes', notes), label: 'change a note' };
+}
+
+export const deleteNote = (sketch: Sketch, id: string): Edit => ({
+  ok: true,
+  sketch: changed(
+    sketch,
+    'notes',
+    sketch.notes.filter((n) => n.id !== id),
+  ),
+  label: 'delete a note',
+});

@@ -1,0 +1,17 @@
+/** Everything a user can do to a sketch: pure functions that share what did not change, each with a label for undo. */
+export { setChemicals } from './editing/chemicals';
+export { bendStream, connect, deleteStream, disconnect, type End, whyNotConnect } from './editing/connect';
+export {
+  addNote,
+  changeNote,
+  deleteNote,
+  setDisplay,
+  setLimit,
+  setModel,
+  setSite,
+  setTitle,
+} from './editing/document';
+export { EDIT_REFUSALS, type Edit, type EditCode, type Edited, type Refused } from './editing/edited';
+export { setMaterial, setNumber, setStreamName, setTag, setUnitName } from './editing/names';
+export { clearSetting, normaliseParts, setByPath, setSetting, setSettings } from './editing/settings';
+export { addUnit, deleteUnits, insertUnitOnStream, mirrorUnit, moveUnits, turnUnit } from './editing/units';
