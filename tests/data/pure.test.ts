@@ -170,3 +170,30 @@ describe('outside a stated range', () => {
     expect(pure.outside_K('ideal_gas_cp', 1)).toBe(0);
   });
 });
+
+test('a heat capacity may be a polynomial of any length', () => {
+  const c = [20, 0.05, -1e-5, 2e-9, 1e-12, -3e-16, 2e-19, 1e-23];
+  const pure = preparePure(own({ ideal_gas_cp: [{ form: 'powers', of: 'Cp', c }] }));
+  const T = 700;
+  const cp = c.reduce((sum, a, k) => sum + a * T ** k, 0);
+  const h = c.reduce((sum, a, k) => sum + (a * (T ** (k + 1) - T0_K ** (k + 1))) / (k + 1), -1000);
+  const s = c.reduce(
+    (sum, a, k) => sum + (k === 0 ? a * Math.log(T / T0_K) : (a * (T ** k - T0_K ** k)) / k),
+    200,
+  );
+  expect(pure.cpIdeal!(T)).toBeCloseTo(cp, 10);
+  expect(pure.hIdeal!(T)).toBeCloseTo(h, 8);
+  expect(pure.sIdeal!(T)).toBeCloseTo(s, 10);
+});
+
+// Published: water between 1 and 100 degC, log10(P/mmHg) = 8.07131 - 1730.63/(233.426 + t/degC); Dortmund Data Bank
+// constants as widely printed, from memory. At 100 degC they give 760.09 mmHg by hand.
+test('an Antoine row keeps its own units, and stays finite below its pole', () => {
+  const psat = preparePure(
+    own({
+      vapor_pressure: [{ form: 'antoine', log: '10', P: 'mmHg', T: 'degC', c: [8.07131, 1730.63, 233.426] }],
+    }),
+  );
+  expect(psat.psat!(373.15) / 133.322368).toBeCloseTo(760.09, 1);
+  for (const T of [1, 20, 39.7, 41, 60]) expect(psat.lnPsat!(T)).toBeLessThan(psat.lnPsat!(T + 1));
+});
