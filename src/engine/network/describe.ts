@@ -1,7 +1,7 @@
 import type { Phase, StreamState } from '../equilibrium/types';
 import type { Model } from '../thermo/types';
+import { capacityRatio } from './capacityRatio';
 import { type ClosureData, idealDatum_W } from './closure';
-import { heatCapacityRatio } from './heatCapacityRatio';
 import { presentOf } from './present';
 import { standardLiquid_m3_s } from './standardLiquid';
 import type { PhaseResult, StreamResult } from './types';
@@ -30,7 +30,7 @@ function describePhase(
 ): { result: PhaseResult; v_m3_mol: number } {
   const MW = molarMass_kg_mol(phase.x, data);
   const v_m3_mol = shownVolume_m3_mol(phase, stream, model);
-  const cpOverCv = heatCapacityRatio(phase, stream.T_K, stream.P_Pa, model);
+  const cpOverCv = capacityRatio(phase, stream.T_K, stream.P_Pa, model);
   const viscosity = phaseViscosity(phase, stream.T_K, model);
   const result: PhaseResult = {
     kind: phase.kind,

@@ -1,5 +1,6 @@
 import type { StreamState } from '../equilibrium/types';
 import type { Port } from '../ids';
+import { warmOf } from './streams';
 import type { Answer } from './types';
 
 /** The answer of a unit without reactions; effort and warm start come from the streams that were flashed in it. */
@@ -22,6 +23,6 @@ export function answerOf<R>(
     power_W: 0,
     results,
     effort: { iterations, residual },
-    warm: last ? { T_K: last.T_K } : undefined,
+    warm: last ? warmOf(last) : undefined,
   };
 }

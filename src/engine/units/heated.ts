@@ -1,8 +1,9 @@
-import type { Condition, StreamState } from '../equilibrium/types';
+import type { StreamCondition } from '../equilibrium/stream';
+import type { StreamState } from '../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../outcome';
 import { answerOf } from './answer';
 import type { OutletConditionSI, PressureSI } from './groups';
-import { emptyStream, outletPressure, streamAt, streamWithEnthalpy, warmFrom } from './streams';
+import { emptyStream, outletPressure, streamAt, warmFrom } from './streams';
 import type { Answer, Call } from './types';
 
 export interface HeatedSettings extends OutletConditionSI {
@@ -17,9 +18,6 @@ export interface HeatedResults {
   readonly vapourFraction: number;
 }
 
-/** Two conditions for the outlet, or its enthalpy flow. */
-type Wanted = { readonly at: Condition } | { readonly P_Pa: number; readonly H_W: number };
-
 /** A stated distance from the bubble point (below) or the dew point (above) at the outlet's pressure. */
 function fromSaturation(
   call: Call<HeatedSettings>,
@@ -27,9 +25,9 @@ function fromSaturation(
   P_Pa: number,
   side: 'subcooling' | 'superheat',
   distance_K: number,
-): Outcome<Wanted> {
+): Outcome<StreamCondition> {
   const edge = { P_Pa, vapourFraction: side === 'subcooling' ? 0 : 1 };
-  if (distance_K === 0) return solved({ at: edge });
+  if (distance_K === 0) return solved(edge);
   const point = streamAt(call, inlet.n_mol_s, edge);
   if (point.state !== 'solved') return noSolution(...point.findings);
   const T_K = side === 'subcooling' ? point.value.T_K - distance_K : point.value.T_K + distance_K;
@@ -41,8 +39,8 @@ function wantTemperature(
   P_Pa: number,
   T_K: number,
   path: string,
-): Outcome<Wanted> {
-  if (T_K > 0) return solved({ at: { T_K, P_Pa } });
+): Outcome<StreamCondition> {
+  if (T_K > 0) return solved({ T_K, P_Pa });
   return noSolution({
     code: 'temperature/not-positive',
     weight: 'beyond-limit',
@@ -51,16 +49,16 @@ function wantTemperature(
   });
 }
 
-function wanted(call: Call<HeatedSettings>, inlet: StreamState): Outcome<Wanted> {
+function wanted(call: Call<HeatedSettings>, inlet: StreamState): Outcome<StreamCondition> {
   const s = call.settings;
   if (s.T !== undefined && s.vapourFraction !== undefined)
-    return solved({ at: { T_K: s.T, vapourFraction: s.vapourFraction } });
+    return solved({ T_K: s.T, vapourFraction: s.vapourFraction });
   const outlet = outletPressure(call, s.p ?? { drop: 0 }, inlet.P_Pa);
   if (outlet.state !== 'solved') return noSolution(...outlet.findings);
   const P_Pa = outlet.value;
   if (s.T !== undefined) return wantTemperature(call, P_Pa, s.T, 'T');
   if (s.dT !== undefined) return wantTemperature(call, P_Pa, inlet.T_K + s.dT, 'dT');
-  if (s.vapourFraction !== undefined) return solved({ at: { P_Pa, vapourFraction: s.vapourFraction } });
+  if (s.vapourFraction !== undefined) return solved({ P_Pa, vapourFraction: s.vapourFraction });
   if (s.subcooling !== undefined) return fromSaturation(call, inlet, P_Pa, 'subcooling', s.subcooling);
   if (s.superheat !== undefined) return fromSaturation(call, inlet, P_Pa, 'superheat', s.superheat);
   if (s.duty !== undefined) return solved({ P_Pa, H_W: inlet.H_W + s.duty });
@@ -84,11 +82,8 @@ export function solveHeated(call: Call<HeatedSettings>): Outcome<Answer<HeatedRe
   if (inlet.phases.length === 0) return nothing(call, inlet);
   const want = wanted(call, inlet);
   if (want.state !== 'solved') return noSolution(...want.findings);
-  const warm = warmFrom(call.warm, inlet.T_K);
-  const made =
-    'at' in want.value
-      ? streamAt(call, inlet.n_mol_s, want.value.at, warm)
-      : streamWithEnthalpy(call, inlet.n_mol_s, want.value.P_Pa, want.value.H_W, warm);
+  const warm = warmFrom(call.warm, inlet.n_mol_s, inlet.T_K);
+  const made = streamAt(call, inlet.n_mol_s, want.value, warm);
   if (made.state !== 'solved') return noSolution(...made.findings);
   const out = made.value;
   // A given duty is kept as given: the difference of two large enthalpy flows would only repeat it with rounding.

@@ -1,5 +1,5 @@
-import { makeStream } from '../equilibrium/stream';
-import type { Condition, FlashWarm, StreamState } from '../equilibrium/types';
+import { makeStream, type StreamCondition } from '../equilibrium/stream';
+import type { FlashWarm, StreamState } from '../equilibrium/types';
 import { type Finding, noSolution, type Outcome, solved } from '../outcome';
 import type { PressureSI } from './groups';
 import type { Call } from './types';
@@ -99,40 +99,49 @@ export function outletPressure(
 export const atUnit = (call: Pick<Call<unknown>, 'unit'>, f: Finding): Finding =>
   f.at.unit === undefined ? { ...f, at: { unit: call.unit, ...f.at } } : f;
 
-function placed<T>(call: Pick<Call<unknown>, 'unit'>, outcome: Outcome<T>): Outcome<T> {
-  const [first, ...rest] = outcome.findings.map((f) => atUnit(call, f));
-  if (outcome.state === 'solved') return first ? { ...outcome, findings: [first, ...rest] } : outcome;
-  return first ? { ...outcome, findings: [first, ...rest] } : outcome;
-}
-
-/** Flash of `n_mol_s` at two conditions; findings carry the unit. */
-export const streamAt = (
-  call: Pick<Call<unknown>, 'unit' | 'model' | 'work'>,
-  n_mol_s: Float64Array,
-  at: Condition,
-  warm?: FlashWarm,
-): Outcome<StreamState> => placed(call, makeStream(call.model, n_mol_s, at, call.work, warm));
-
 /**
- * Flash at a pressure and an enthalpy flow. The flash meets the enthalpy to its own tolerance; the stream then carries the flow
- * that was asked for, so that balances close to rounding.
+ * Flash of `n_mol_s` at two conditions, or at a pressure and an enthalpy flow, which the stream then carries exactly; findings
+ * name the unit. A hidden second liquid is told once, by the limits of the stream that carries it.
  */
-export function streamWithEnthalpy(
+export function streamAt(
   call: Pick<Call<unknown>, 'unit' | 'model' | 'work'>,
   n_mol_s: Float64Array,
-  P_Pa: number,
-  H_W: number,
+  at: StreamCondition,
   warm?: FlashWarm,
 ): Outcome<StreamState> {
-  const made = streamAt(call, n_mol_s, { P_Pa, h_J_mol: H_W / totalOf(n_mol_s) }, warm);
-  return made.state === 'solved' ? { ...made, value: { ...made.value, H_W } } : made;
+  const made = makeStream(call.model, n_mol_s, at, call.work, warm, { unit: call.unit });
+  if (made.state !== 'solved' || made.findings.length === 0) return made;
+  return solved(
+    made.value,
+    made.findings.filter((f) => f.code !== 'equilibrium/second-liquid'),
+  );
 }
 
-/** A start value that never changes an answer: the temperature of the last one, if there was one. */
-export function warmFrom(warm: unknown, otherwise_K: number): FlashWarm {
-  const T_K =
-    typeof warm === 'object' && warm !== null && 'T_K' in warm && typeof warm.T_K === 'number'
-      ? warm.T_K
-      : otherwise_K;
-  return { T_K };
+/** What a unit remembers of the last state it flashed: start values that never change an answer. */
+export interface WarmState extends FlashWarm {
+  readonly T_K: number;
+  /** Which chemicals K is over, by place in the full list. */
+  readonly present: readonly number[];
+}
+
+export function warmOf(stream: StreamState): WarmState {
+  const { T_K, P_Pa, vapourFraction, n_mol_s, phases } = stream;
+  const present: number[] = [];
+  for (let i = 0; i < n_mol_s.length; i++) if (n_mol_s[i]! > 0) present.push(i);
+  const [vapour, liquid] = phases;
+  if (vapour?.kind !== 'vapour' || liquid?.kind !== 'liquid') return { T_K, P_Pa, present };
+  const K = Float64Array.from(present, (i) => vapour.x[i]! / liquid.x[i]!);
+  return K.every((k) => k > 0 && k < Number.POSITIVE_INFINITY)
+    ? { T_K, P_Pa, vapourFraction, K, present }
+    : { T_K, P_Pa, present };
+}
+
+/** Start values for a flash of `n_mol_s`: what was remembered, as far as it is about the same chemicals; else a temperature. */
+export function warmFrom(warm: unknown, n_mol_s: Float64Array, otherwise_K: number): FlashWarm {
+  if (warm === undefined) return { T_K: otherwise_K };
+  const { present, ...rest } = warm as WarmState;
+  let k = 0;
+  for (let i = 0; i < n_mol_s.length; i++)
+    if (n_mol_s[i]! > 0 && present[k++] !== i) return { T_K: rest.T_K };
+  return k === present.length ? rest : { T_K: rest.T_K };
 }

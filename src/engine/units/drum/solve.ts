@@ -3,15 +3,7 @@ import type { Phase, StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { answerOf } from '../answer';
 import type { HeatSI, PressureSI } from '../groups';
-import {
-  emptyStream,
-  type Mixed,
-  mixed,
-  outletPressure,
-  streamAt,
-  streamWithEnthalpy,
-  warmFrom,
-} from '../streams';
+import { emptyStream, type Mixed, mixed, outletPressure, streamAt, warmFrom } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { drumLimits } from './limits';
 
@@ -31,7 +23,7 @@ export interface DrumResults {
 
 function flash(call: Call<DrumSettings>, all: Mixed): Outcome<StreamState> {
   const { p, h = {} } = call.settings;
-  const warm = warmFrom(call.warm, all.T_K);
+  const warm = warmFrom(call.warm, all.n_mol_s, all.T_K);
   if (h.T !== undefined && h.vapourFraction !== undefined && all.total_mol_s > 0)
     return streamAt(call, all.n_mol_s, { T_K: h.T, vapourFraction: h.vapourFraction }, warm);
   const P = outletPressure(call, p ?? { drop: 0 }, all.P_Pa);
@@ -45,7 +37,7 @@ function flash(call: Call<DrumSettings>, all: Mixed): Outcome<StreamState> {
   const only = flowing[0];
   // One stream at the drum's own pressure and no heat: it already is what the drum holds.
   if (!h.duty && flowing.length === 1 && only && only.P_Pa === P_Pa) return solved(only);
-  return streamWithEnthalpy(call, all.n_mol_s, P_Pa, all.H_W + (h.duty ?? 0), warm);
+  return streamAt(call, all.n_mol_s, { P_Pa: P_Pa, H_W: all.H_W + (h.duty ?? 0) }, warm);
 }
 
 const isGas = (phase: Phase, whole: StreamState): boolean =>

@@ -78,7 +78,12 @@ function flows(call: Call<FeedSettings>): Outcome<Float64Array> {
 function solve(call: Call<FeedSettings>): Outcome<Answer<Record<string, never>>> {
   const n = flows(call);
   if (n.state !== 'solved') return noSolution(...n.findings);
-  const made = streamAt(call, n.value, conditionOf(call.settings.state), warmFrom(call.warm, 298.15));
+  const made = streamAt(
+    call,
+    n.value,
+    conditionOf(call.settings.state),
+    warmFrom(call.warm, n.value, 298.15),
+  );
   if (made.state !== 'solved') return noSolution(...made.findings);
   return solved(answerOf({ out: made.value }, {}, [made.value]), made.findings);
 }

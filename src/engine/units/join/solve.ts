@@ -1,7 +1,7 @@
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { answerOf } from '../answer';
 import type { PressureSI } from '../groups';
-import { emptyStream, mixed, outletPressure, streamWithEnthalpy, warmFrom } from '../streams';
+import { emptyStream, mixed, outletPressure, streamAt, warmFrom } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { joinLimits } from './limits';
 
@@ -26,7 +26,12 @@ function solve(call: Call<JoinSettings>): Outcome<Answer<JoinResults>> {
   // One stream that keeps its pressure keeps its state too, bit for bit.
   if (flowing.length === 1 && only && only.P_Pa === P.value)
     return solved(answerOf({ out: only }, { T_K: only.T_K, P_Pa: only.P_Pa }, []));
-  const made = streamWithEnthalpy(call, all.n_mol_s, P.value, all.H_W, warmFrom(call.warm, all.T_K));
+  const made = streamAt(
+    call,
+    all.n_mol_s,
+    { P_Pa: P.value, H_W: all.H_W },
+    warmFrom(call.warm, all.n_mol_s, all.T_K),
+  );
   if (made.state !== 'solved') return noSolution(...made.findings);
   const out = made.value;
   return solved(answerOf({ out }, { T_K: out.T_K, P_Pa: out.P_Pa }, [out]), made.findings);

@@ -1,5 +1,6 @@
-import type { ChemicalData, CorrProperty } from '../../chemicals/types';
+import type { CorrProperty } from '../../chemicals/types';
 import type { Finding } from '../../outcome';
+import { outside_K } from '../../thermo/pure/curve';
 import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
 import type { StreamContext } from './context';
 
@@ -24,17 +25,6 @@ export const CORRELATION_RULES: readonly Rule[] = [OUTSIDE, WELL_OUTSIDE, FAR_OU
 /** Less than this of a chemical moves nothing that is shown [-]. */
 const COUNTS = 1e-4;
 
-/** Kelvin outside the ranges a property is tabulated for; 0 inside, or when no range is stated. */
-function outside_K(chemical: ChemicalData, property: CorrProperty, T_K: number): number {
-  let low = Number.POSITIVE_INFINITY;
-  let high = Number.NEGATIVE_INFINITY;
-  for (const corr of chemical.corr[property] ?? []) {
-    low = Math.min(low, corr.Tmin ?? Number.NEGATIVE_INFINITY);
-    high = Math.max(high, corr.Tmax ?? Number.POSITIVE_INFINITY);
-  }
-  return low > high ? 0 : Math.max(0, low - T_K, T_K - high);
-}
-
 /** What the model reads at the stream's temperature. Raoult's law stands on vapour pressures, equations of state do not. */
 function propertiesRead(c: StreamContext): readonly CorrProperty[] {
   if (c.model.spec.kind !== 'raoult') return ['ideal_gas_cp'];
@@ -53,7 +43,7 @@ export function correlationRange(c: StreamContext): Finding[] {
   model.chemicals.forEach((chemical, i) => {
     if (stream.n_mol_s[i]! < COUNTS * total || stream.n_mol_s[i] === 0) return;
     for (const property of properties) {
-      const distance_K = outside_K(chemical, property, stream.T_K);
+      const distance_K = outside_K(chemical.corr[property] ?? [], stream.T_K);
       if (distance_K > (worst?.distance_K ?? 0)) worst = { id: chemical.id, property, distance_K };
     }
   });

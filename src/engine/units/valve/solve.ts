@@ -1,7 +1,7 @@
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { answerOf } from '../answer';
 import type { PressureSI } from '../groups';
-import { emptyStream, outletPressure, streamWithEnthalpy, warmFrom } from '../streams';
+import { emptyStream, outletPressure, streamAt, warmFrom } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { valveLimits } from './limits';
 
@@ -25,7 +25,12 @@ function solve(call: Call<ValveSettings>): Outcome<Answer<ValveResults>> {
       ? solved(emptyStream(call.model.nc, inlet.T_K, P.value))
       : P.value === inlet.P_Pa
         ? solved(inlet)
-        : streamWithEnthalpy(call, inlet.n_mol_s, P.value, inlet.H_W, warmFrom(call.warm, inlet.T_K));
+        : streamAt(
+            call,
+            inlet.n_mol_s,
+            { P_Pa: P.value, H_W: inlet.H_W },
+            warmFrom(call.warm, inlet.n_mol_s, inlet.T_K),
+          );
   if (made.state !== 'solved') return noSolution(...made.findings);
   const out = made.value;
   const results: ValveResults = {

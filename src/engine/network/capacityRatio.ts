@@ -1,0 +1,13 @@
+import type { Phase } from '../equilibrium/types';
+import { heatCapacityRatio } from '../thermo/transport';
+import type { Model } from '../thermo/types';
+import { presentOf } from './present';
+
+/** Cp / Cv of a vapour by the sketch's model; undefined for other phases and where the model has none. */
+export function capacityRatio(phase: Phase, T_K: number, P_Pa: number, model: Model): number | undefined {
+  if (phase.kind !== 'vapour') return undefined;
+  const { thermo, x } = presentOf(phase.x, model);
+  const props = thermo.makeProps();
+  thermo.evaluate('vapour', T_K, P_Pa, x, 2, props);
+  return heatCapacityRatio(props);
+}
