@@ -32,7 +32,7 @@ const each = (value: Json | undefined, order: readonly string[]): Json =>
   Array.isArray(value) ? (value as readonly Json[]).map((item) => ordered(item, order)) : [];
 
 /**
- * The sketch as file text: fixed order of keys, two spaces, a line's end at the end. Text that was typed stays as typed;
+ * The sketch as file text: fixed order of keys, two spaces, ends with a line's end. Text that was typed stays as typed;
  * the same sketch always gives the same text.
  */
 export function writeSketch(sketch: Sketch): string {
@@ -43,5 +43,21 @@ export function writeSketch(sketch: Sketch): string {
       return key === 'streams' ? [key, each(value, ORDER.stream)] : [key, value];
     }),
   );
-  return `${JSON.stringify(tidy, null, 2)}\n`;
+  return `${formatted(tidy, '')}\n`;
+}
+
+/** JSON with two spaces; a list of plain values (a place, the end of a stream) stands on one line. */
+function formatted(value: Json, margin: string): string {
+  const deeper = `${margin}  `;
+  if (Array.isArray(value)) {
+    const items = value as readonly Json[];
+    if (items.every((item) => typeof item !== 'object' || item === null))
+      return `[${items.map((item) => JSON.stringify(item)).join(', ')}]`;
+    return `[\n${items.map((item) => deeper + formatted(item, deeper)).join(',\n')}\n${margin}]`;
+  }
+  if (!isObject(value)) return JSON.stringify(value);
+  const entries = Object.entries(value).filter(([, v]) => v !== undefined);
+  if (entries.length === 0) return '{}';
+  const lines = entries.map(([key, v]) => `${deeper}${JSON.stringify(key)}: ${formatted(v, deeper)}`);
+  return `{\n${lines.join(',\n')}\n${margin}}`;
 }
