@@ -186,6 +186,16 @@ describe.each(CASES)('%s', (_title, name, state) => {
       expect(at.cp_J_molK).toBeGreaterThan(cv);
     });
 
+  test('the partial molar enthalpies add up to h, and each is the slope of n h', () => {
+    const h = dot(x, at.hPartial);
+    expect(Math.abs(h - at.h_J_mol)).toBeLessThan(1e-9 * (1e3 + Math.abs(at.h_J_mol)));
+    for (let j = 0; j < n; j++) {
+      if (x[j]! < 1e-3) continue;
+      const nh = slope((d) => (1 + d) * look(model, state, T, P, added(x, j, d)).h, 5e-4);
+      expect(Math.abs(nh - at.hPartial[j]!)).toBeLessThan(1e-6 * (1e4 + Math.abs(nh)));
+    }
+  });
+
   test('used props give the same numbers to the last bit', () => {
     const p = model.makeProps();
     const y = Float64Array.from(x, () => 1 / n);
@@ -195,6 +205,7 @@ describe.each(CASES)('%s', (_title, name, state) => {
       ...p.dT,
       ...p.dP,
       ...p.dN,
+      ...p.hPartial,
       p.h_J_mol,
       p.s_J_molK,
       p.v_m3_mol,

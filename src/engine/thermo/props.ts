@@ -12,6 +12,7 @@ export class BaseProps implements PhaseProps {
   readonly dT: Float64Array;
   readonly dP: Float64Array;
   readonly dN: Float64Array;
+  readonly hPartial: Float64Array;
   h_J_mol = 0;
   v_m3_mol = 0;
   cp_J_molK = 0;
@@ -39,6 +40,7 @@ export class BaseProps implements PhaseProps {
     this.dT = vector();
     this.dP = vector();
     this.dN = new Float64Array(n * n);
+    this.hPartial = vector();
     this.hIdeal = vector();
     this.cpIdeal = vector();
     this.x = vector();

@@ -51,6 +51,11 @@ export interface PhaseProps {
   readonly dP: Float64Array;
   /** d ln phi_i / dn_j at constant T, P, for one mole in all [1/mol]; row-major [i * n + j]; symmetric; level 2. */
   readonly dN: Float64Array;
+  /**
+   * Partial molar enthalpies, d(n h)/dn_i at constant T, P, elements datum [J/mol]; level 2. Take these, not -R T^2 dT,
+   * where an enthalpy balance is differentiated: a model may have its liquid enthalpy from elsewhere.
+   */
+  readonly hPartial: Float64Array;
   /** Molar enthalpy, elements at 298.15 K as datum [J/mol]; level 1. */
   h_J_mol: number;
   /** Molar entropy [J/(mol K)]; 0 and meaningless unless the model's hasEntropy; level 1. */

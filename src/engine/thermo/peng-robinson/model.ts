@@ -175,7 +175,7 @@ export class PengRobinson implements ThermoModel {
     out.cv_J_molK = cv;
     out.cp_J_molK = cv - (T * PT * PT) / PV;
 
-    const { p, dT, dP, dN } = out;
+    const { p, dT, dP, dN, hPartial } = out;
     const p0 = RT / vb;
     const pb = RT / (vb * vb) + a * turnB;
     const ps = -2 / D;
@@ -189,7 +189,9 @@ export class PengRobinson implements ThermoModel {
       p[i] = pi;
       const volume = pi * perV;
       dP[i] = volume - 1 / P;
-      dT[i] = tb * b[i]! + ts * s[i]! + tds * ds[i]! + 1 / T - volume * PT;
+      const byT = tb * b[i]! + ts * s[i]! + tds * ds[i]! + 1 / T - volume * PT;
+      dT[i] = byT;
+      hPartial[i] = hIdeal[i]! - RT * T * byT;
     }
     // Row i of the second derivatives: a term in a_ij and a form of rank three in (1, b, s).
     const nb = 1 / vb;

@@ -130,6 +130,7 @@ export class Raoult implements ThermoModel {
     if (level === 1) return;
     out.cp_J_molK = cp;
     out.cv_J_molK = cp - R_J_molK;
+    out.hPartial.set(out.hIdeal);
     out.dT.fill(0);
     out.dP.fill(0);
     out.dN.fill(0);
@@ -137,7 +138,7 @@ export class Raoult implements ThermoModel {
 
   private liquid(T: number, P: number, x: Float64Array, level: Level, out: RaoultProps): void {
     const { n } = this;
-    const { lnPhi, dT, dP, lnPsat, slope, bend, volume, dVolume } = out;
+    const { lnPhi, dT, dP, hPartial, lnPsat, slope, bend, volume, dVolume } = out;
     const { poynting } = this.spec;
     const RT = R_J_molK * T;
     const lnP = Math.log(P);
@@ -173,16 +174,16 @@ export class Raoult implements ThermoModel {
         if (level === 2) d2 += this.poyntingBend(i, T, over, psat, out);
       }
       dT[i] = d1;
-      hIdeal += x[i]! * out.hIdeal[i]!;
       cpIdeal += x[i]! * out.cpIdeal[i]!;
+      let hOver = -RT * T * d1;
       if (correlated) {
         const pure = this.pure[i]!;
-        hResidual -= x[i]! * pure.hvap!(T);
+        hOver = -pure.hvap!(T);
         if (level === 2) cpResidual -= x[i]! * pure.dHvap_dT!(T);
-      } else {
-        hResidual -= x[i]! * RT * T * d1;
-        cpResidual -= x[i]! * RT * (2 * d1 + T * d2);
-      }
+      } else cpResidual -= x[i]! * RT * (2 * d1 + T * d2);
+      hIdeal += x[i]! * out.hIdeal[i]!;
+      hResidual += x[i]! * hOver;
+      hPartial[i] = out.hIdeal[i]! + hOver;
     }
     out.h_J_mol = hIdeal + hResidual;
     out.keepForEntropy(T, P, x, hResidual / T - R_J_molK * lnPhiMean);
