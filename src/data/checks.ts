@@ -8,6 +8,7 @@ import { isCas } from '../engine/chemicals/cas';
 import { elementCounts, molarMass_g_mol, sameElements } from '../engine/chemicals/elements';
 import type { ChemicalData, Corr, CorrProperty } from '../engine/chemicals/types';
 import { preparePure } from '../engine/thermo/pure/pure';
+import { corrFault } from '../engine/thermo/pure/usable';
 import { R_J_molK } from '../engine/thermo/types';
 
 /** Chemicals whose vapour dimerises or is a quantum gas: the slope of ln P says little about their heat of vaporisation. */
@@ -23,40 +24,12 @@ const NOT_BY_SLOPE = new Set([
 /** Its heat capacity falls where low-lying electronic levels fill up. */
 const NOT_RISING = new Set(['nitric-oxide']);
 
-/** Reasons why a correlation row cannot be used; empty when it can. */
+/** Reasons why a correlation row cannot be used; empty when it can. Every row of the bank states its range. */
 export function rowFaults(of: CorrProperty, corr: Corr): string[] {
-  const low = corr.Tmin;
-  const high = corr.Tmax;
-  if (low === undefined || high === undefined) return ['no range'];
-  if (!(low < high)) return [`range ${low} to ${high} K`];
-  const probe = preparePure({
-    id: 'row',
-    name: 'row',
-    MW_g_mol: 1,
-    sources: {},
-    corr: { [of]: [corr] },
-  });
-  const value = {
-    ideal_gas_cp: probe.cpIdeal,
-    vapor_pressure: probe.psat,
-    enthalpy_of_vaporization: probe.hvap,
-    liquid_density: probe.rhoL,
-    liquid_cp: probe.cpL,
-    liquid_viscosity: probe.viscosityL,
-    gas_viscosity: probe.viscosityG,
-    liquid_conductivity: probe.conductivityL,
-    gas_conductivity: probe.conductivityG,
-    surface_tension: probe.surfaceTension,
-  }[of];
-  if (!value) return ['no such property'];
-  const zeroAtEnd = of === 'enthalpy_of_vaporization' || of === 'surface_tension';
-  for (let k = 0; k <= 40; k += 1) {
-    const T = low + ((high - low) * k) / 40;
-    const y = value(T);
-    const critical = k === 40 && zeroAtEnd;
-    if (!Number.isFinite(y) || y < 0 || (y === 0 && !critical)) return [`${y} at ${T.toFixed(2)} K`];
-  }
-  return [];
+  if (corr.Tmin === undefined || corr.Tmax === undefined) return ['no range'];
+  const found = corrFault(of, [corr]);
+  if (!found) return [];
+  return [found.T_K === undefined ? found.fault : `${found.fault} at ${found.T_K.toFixed(2)} K`];
 }
 
 /** Reasons why a chemical is left out; empty when its data agree. */
