@@ -1,15 +1,13 @@
 import type { ChemicalData } from '../chemicals/types';
+import { rackettFromOmega } from './pure/liquidVolume';
 import { R_J_molK } from './types';
 
 /** From here up to 1 in Tr the answer passes over to the model's own volume. */
 const HAND_OVER_FROM = 0.96;
 
-/**
- * Constant of the modified Rackett equation: the chemical's own, else 0.29056 - 0.08775 omega (Yamada & Gunn, J. Chem.
- * Eng. Data 18 (1973) 234); undefined with neither.
- */
-export const rackettConstant = (chem: ChemicalData): number | undefined =>
-  chem.zRA ?? (chem.omega === undefined ? undefined : 0.29056 - 0.08775 * chem.omega);
+/** Constant of the modified Rackett equation: the chemical's own, else from omega; undefined with neither. */
+export const zRAOf = (chem: ChemicalData): number | undefined =>
+  chem.zRA ?? (chem.omega === undefined ? undefined : rackettFromOmega(chem.omega));
 
 /**
  * Molar volume of liquid mixtures by corresponding states: the modified Rackett equation at saturation with one
@@ -49,7 +47,7 @@ export class LiquidVolume {
       return value;
     };
     this.omega = Float64Array.from(chemicals, (c) => need(c, 'omega'));
-    this.zRA = Float64Array.from(chemicals, (c) => rackettConstant(c)!);
+    this.zRA = Float64Array.from(chemicals, (c) => zRAOf(c)!);
     this.size = Float64Array.from(chemicals, (c) => (R_J_molK * need(c, 'Tc_K')) / need(c, 'Pc_Pa'));
     this.Vc = Float64Array.from(
       chemicals,

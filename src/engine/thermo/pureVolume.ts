@@ -1,7 +1,7 @@
 import type { ChemicalData } from '../chemicals/types';
-import { rackettConstant } from './liquidVolume';
+import { zRAOf } from './liquidVolume';
+import { rackettVolume_m3_mol } from './pure/liquidVolume';
 import type { PureChemical } from './pure/pure';
-import { R_J_molK } from './types';
 
 /** Density [kg/m3] of a liquid about which nothing is known. */
 const UNKNOWN_kg_m3 = 800;
@@ -27,9 +27,9 @@ export interface PureVolume {
 export function pureVolume(pure: PureChemical): PureVolume {
   const { chemical } = pure;
   const { Tc_K: Tc, Pc_Pa: Pc } = chemical;
-  const zRA = rackettConstant(chemical);
+  const zRA = zRAOf(chemical);
   if (Tc !== undefined && Pc !== undefined && zRA !== undefined) {
-    const below = (T: number): number => ((R_J_molK * Tc) / Pc) * zRA ** (1 + (1 - T / Tc) ** (2 / 7));
+    const below = (T: number): number => rackettVolume_m3_mol(T, Tc, Pc, zRA);
     const slopeBelow = (T: number): number =>
       (below(T) * Math.log(zRA) * (-2 / 7) * (1 - T / Tc) ** (-5 / 7)) / Tc;
     const T1 = TAME_FROM * Tc;
