@@ -1,0 +1,58 @@
+import { useStores } from '../store/react';
+import { offeredKinds, takeOffer } from './pull';
+import { ShelfIcon } from './ShelfIcon';
+import { useSheet, useSheetStore } from './sheetStore';
+import { capital, kindWord } from './words';
+
+/** A stream let go on empty sheet: the units it could lead to. */
+export function OfferMenu({
+  toScreen,
+}: {
+  readonly toScreen: (at: readonly [number, number]) => { x: number; y: number };
+}) {
+  const stores = useStores();
+  const sheet = useSheetStore();
+  const offer = useSheet((state) => state.offer);
+  if (!offer) return null;
+  const { x, y } = toScreen(offer.at);
+  const close = (): void => sheet.setState({ offer: null });
+  const step = (from: Element, by: number): void => {
+    const items = [...from.querySelectorAll<HTMLElement>('[role=menuitem]')];
+    const at = items.indexOf(document.activeElement as HTMLElement);
+    items[(at + by + items.length) % items.length]?.focus();
+  };
+  return (
+    <div
+      className="offer nokey nowheel nopan"
+      role="menu"
+      tabIndex={-1}
+      aria-label={offer.from.dir === 'out' ? 'Where the stream leads' : 'Where the stream comes from'}
+      style={{ left: x, top: y }}
+      ref={(element) => element?.querySelector<HTMLElement>('[role=menuitem]')?.focus()}
+      onBlur={(event) => {
+        if (!event.currentTarget.contains(event.relatedTarget)) close();
+      }}
+      onKeyDown={(event) => {
+        if (event.key === 'Escape') close();
+        else if (event.key === 'ArrowDown') step(event.currentTarget, 1);
+        else if (event.key === 'ArrowUp') step(event.currentTarget, -1);
+        else return;
+        event.preventDefault();
+        event.stopPropagation();
+      }}
+    >
+      <p>{offer.from.dir === 'out' ? 'Leads to' : 'Comes from'}</p>
+      {offeredKinds(offer.from.dir).map((kind) => (
+        <button
+          key={kind}
+          type="button"
+          role="menuitem"
+          onClick={() => takeOffer(stores, sheet, offer, kind)}
+        >
+          <ShelfIcon kind={kind} />
+          {capital(kindWord(kind))}
+        </button>
+      ))}
+    </div>
+  );
+}

@@ -1,0 +1,55 @@
+import { memo } from 'react';
+import { measureText } from '../drawing/metrics';
+import type { Box, PathShape, Point, TextShape } from '../drawing/types';
+import { inkOf, pathStyle } from './paint';
+
+/** Strokes and fills of the scene, as they are. */
+export const Paths = memo(function Paths({ shapes }: { readonly shapes: readonly PathShape[] }) {
+  return shapes.map((shape) => <path key={shape.d} d={shape.d} style={pathStyle(shape)} />);
+});
+
+/** A text of the scene. */
+export function Text({ shape, stale }: { readonly shape: TextShape; readonly stale?: boolean }) {
+  return (
+    <text
+      x={shape.at[0]}
+      y={shape.at[1]}
+      textAnchor={shape.anchor}
+      fontSize={shape.size}
+      fontWeight={shape.weight}
+      fontStyle={shape.italic || stale ? 'italic' : undefined}
+      className={shape.halo ? 'halo' : undefined}
+      style={{ fill: inkOf(stale ? 'ink3' : shape.ink) }}
+    >
+      {shape.text}
+    </text>
+  );
+}
+
+/** The point of a box nearest to another point. */
+export const nearestOf = (box: Box, [x, y]: Point): Point => [
+  Math.min(Math.max(x, box.x), box.x + box.w),
+  Math.min(Math.max(y, box.y), box.y + box.h),
+];
+
+/** Keeps what is inside at its size on the screen: it grows and shrinks against the zoom, away from a fixed point. */
+export function Steady({
+  about: [x, y],
+  most,
+  children,
+}: {
+  readonly about: Point;
+  /** It does not grow by more than this. */
+  readonly most?: number;
+  readonly children: React.ReactNode;
+}) {
+  const scale = most === undefined ? 'var(--inv, 1)' : `min(var(--inv, 1), ${most})`;
+  return <g style={{ transform: `scale(${scale})`, transformOrigin: `${x}px ${y}px` }}>{children}</g>;
+}
+
+/** How much a text may grow and stay inside a flag. */
+export function roomToGrow(text: TextShape, box: Box): number {
+  const inside = text.at[0] > box.x && text.at[0] < box.x + box.w;
+  if (!inside) return 2;
+  return Math.max(1, (box.w - 20) / Math.max(1, measureText(text.text, text.size, text.weight)));
+}

@@ -1,0 +1,183 @@
+import { useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import {
+  type Node,
+  type NodeChange,
+  ReactFlow,
+  ReactFlowProvider,
+  SelectionMode,
+  useOnViewportChange,
+  useReactFlow,
+  useStoreApi,
+  ViewportPortal,
+} from 'reactflow';
+import 'reactflow/dist/style.css';
+import type { UnitId } from '../engine/ids';
+import { useSession, useSketch, useStores } from '../store/react';
+import './canvas.css';
+import { adds, chooseUnit } from './choose';
+import { DropLayer } from './DropLayer';
+import { createDrag } from './drag';
+import { Frame } from './Frame';
+import { putHandle } from './handle';
+import { keepScene, quietAgain } from './keepScene';
+import { Lines } from './Lines';
+import { nodesOf } from './nodes';
+import { OfferMenu } from './OfferMenu';
+import { PullLayer } from './PullLayer';
+import { steadyScale } from './quiet';
+import { StreamMarks } from './StreamMarks';
+import { createSheetStore, SheetProvider, useSheet, useSheetStore } from './sheetStore';
+import { TitleStrip } from './TitleStrip';
+import { UnitNode } from './UnitNode';
+import { createView } from './view';
+
+const NODE_TYPES = { unit: UnitNode };
+const NO_EDGES: never[] = [];
+/** Middle and right button pan; the left one bands. */
+const PAN_BUTTONS = [1, 2];
+const SMALLEST = 0.25;
+const LARGEST = 3;
+
+/** The drawing area: React Flow carries place, zoom, drag and band; everything drawn comes from the scene. */
+export function Sheet() {
+  const [sheet] = useState(createSheetStore);
+  return (
+    <SheetProvider value={sheet}>
+      <ReactFlowProvider>
+        <View />
+      </ReactFlowProvider>
+    </SheetProvider>
+  );
+}
+
+function View() {
+  const stores = useStores();
+  const sheet = useSheetStore();
+  const flow = useReactFlow();
+  const flowStore = useStoreApi();
+  const root = useRef<HTMLElement | null>(null);
+  const view = useMemo(
+    () => createView(sheet, flow, flowStore, root),
+    [sheet, flow, flowStore],
+  );
+
+  useLayoutEffect(() => keepScene(stores, sheet, () => flow.getZoom()), [stores, sheet, flow]);
+  useEffect(() => putHandle(stores, view), [stores, view]);
+
+  // Text and marks stand still on the screen while the sheet is zoomed: two custom properties, no rendering.
+  const shownZoom = useRef(0);
+  const scaleMarks = useCallback(
+    ({ zoom }: { readonly zoom: number }) => {
+      if (zoom === shownZoom.current) return;
+      shownZoom.current = zoom;
+      root.current?.style.setProperty('--inv', String(steadyScale(zoom)));
+      root.current?.style.setProperty('--back', String(1 / zoom));
+      quietAgain(stores, sheet, zoom);
+    },
+    [stores, sheet],
+  );
+  useOnViewportChange({ onChange: scaleMarks });
+
+  const id = useSketch((state) => state.sketch.id);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: another sketch on the sheet is brought into view whole
+  useEffect(() => {
+    view.fit();
+  }, [id, view]);
+
+  const [size, setSize] = useState({ width: 0, height: 0 });
+  useEffect(() => {
+    const element = root.current?.querySelector('.sheet-flow');
+    if (!element || typeof ResizeObserver === 'undefined') return;
+    const observer = new ResizeObserver(() =>
+      setSize({ width: element.clientWidth, height: element.clientHeight }),
+    );
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, []);
+
+  return (
+    <section className="sheet-view" aria-label="Drawing" ref={root}>
+      <div className="sheet-flow">
+        <Flow />
+        <OfferMenu toScreen={view.toView} />
+      </div>
+      <div className="sheet-edge" />
+      <Frame width={size.width} height={size.height} />
+      <TitleStrip />
+    </section>
+  );
+}
+
+/** React Flow with the scene's units as its nodes. */
+function Flow() {
+  const stores = useStores();
+  const sheet = useSheetStore();
+  const shapes = useSheet((state) => state.scene.units);
+  const selected = useSession((state) => state.units);
+  const writable = useSketch((state) => state.writable);
+  const nodes = useRef<Node[]>([]);
+  nodes.current = useMemo(() => nodesOf(shapes, new Set(selected), nodes.current), [shapes, selected]);
+  const drag = useMemo(() => createDrag(stores, sheet), [stores, sheet]);
+  const banding = useRef(false);
+
+  const change = useCallback(
+    (changes: NodeChange[]) => {
+      drag.take(changes);
+      if (!banding.current) return;
+      const chosen = new Set(stores.session.getState().units);
+      for (const item of changes) {
+        if (item.type !== 'select') continue;
+        if (item.selected) chosen.add(item.id as UnitId);
+        else chosen.delete(item.id as UnitId);
+      }
+      stores.session.setState({ units: [...chosen] });
+    },
+    [drag, stores],
+  );
+
+  return (
+    <ReactFlow
+      nodes={nodes.current}
+      edges={NO_EDGES}
+      nodeTypes={NODE_TYPES}
+      onNodesChange={change}
+      onNodeClick={(event, node) => chooseUnit(stores, node.id as UnitId, event)}
+      onNodeDragStart={drag.start}
+      onNodeDragStop={drag.stop}
+      onSelectionStart={(event) => {
+        banding.current = true;
+        if (!adds(event)) stores.session.setState({ units: [], streams: [] });
+      }}
+      onSelectionEnd={() => {
+        banding.current = false;
+        const { units, streams } = stores.session.getState();
+        if (units.length > 0) stores.session.select(units, streams);
+      }}
+      onPaneClick={() => stores.session.select([], [])}
+      nodesDraggable={writable}
+      nodesConnectable={false}
+      nodesFocusable={false}
+      edgesFocusable={false}
+      disableKeyboardA11y
+      deleteKeyCode={null}
+      selectionKeyCode={null}
+      multiSelectionKeyCode={null}
+      selectionOnDrag
+      selectNodesOnDrag={false}
+      selectionMode={SelectionMode.Partial}
+      panOnDrag={PAN_BUTTONS}
+      zoomOnDoubleClick={false}
+      nodeDragThreshold={3}
+      minZoom={SMALLEST}
+      maxZoom={LARGEST}
+      attributionPosition="top-right"
+    >
+      <ViewportPortal>
+        <Lines />
+        <StreamMarks />
+        <PullLayer />
+        <DropLayer />
+      </ViewportPortal>
+    </ReactFlow>
+  );
+}

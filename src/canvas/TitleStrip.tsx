@@ -1,0 +1,66 @@
+import { memo, useEffect } from 'react';
+import { useShallow } from 'zustand/react/shallow';
+import { labelsSentence } from '../drawing/labelText';
+import { useMeasures } from '../parts/measures';
+import { useResults, useSketch, useStores } from '../store/react';
+import { wholeState } from './whole';
+import { modelWord } from './words';
+
+/** Foot of the sheet: name, revision, model, what labels show; at the right the state of the whole. */
+export const TitleStrip = memo(function TitleStrip() {
+  const title = useSketch((state) => state.sketch.title);
+  const model = useSketch((state) => state.sketch.model.kind);
+  const labels = useSketch((state) => state.sketch.display.labels);
+  const measures = useMeasures();
+  return (
+    <footer className="title-strip">
+      <span className="strip-title">{title.title?.trim() || 'Untitled sketch'}</span>
+      <span>{title.revision ? `Rev ${title.revision}, draft` : 'No revision'}</span>
+      <span>{modelWord(model)}</span>
+      <span className="strip-labels">{labelsSentence(labels, measures)}</span>
+      <span className="strip-gap" />
+      <WholeState />
+    </footer>
+  );
+});
+
+const QUIET_MS = 900;
+
+function WholeState() {
+  const stores = useStores();
+  const sketch = useSketch((state) => state.sketch);
+  const edit = useSketch((state) => state.edit);
+  const results = useResults(
+    useShallow(({ units, at, answering, solvedEdit, tookMs, trouble }) => ({
+      units,
+      at,
+      answering,
+      solvedEdit,
+      tookMs,
+      trouble,
+    })),
+  );
+  const { word, rest } = wholeState(sketch, edit, { ...stores.results.getState(), ...results });
+  const solvedEdit = results.solvedEdit;
+
+  // One announcement for a run of edits: when the numbers have stood still for a moment.
+  useEffect(() => {
+    if (solvedEdit === 0) return;
+    const timer = setTimeout(() => {
+      const now = wholeState(
+        stores.sketch.getState().sketch,
+        stores.sketch.getState().edit,
+        stores.results.getState(),
+      );
+      if (now.word) stores.session.setState({ spoken: `${now.word}${now.rest}` });
+    }, QUIET_MS);
+    return () => clearTimeout(timer);
+  }, [solvedEdit, stores]);
+
+  return (
+    <span className="strip-state" data-strip="state" title={`${word}${rest}`}>
+      <b>{word}</b>
+      {rest}
+    </span>
+  );
+}

@@ -1,0 +1,101 @@
+import { memo, useMemo } from 'react';
+import type { NodeProps } from 'reactflow';
+import { limitMark } from '../drawing/marks';
+import { transformOf } from '../drawing/transform';
+import type { UnitShape } from '../drawing/types';
+import type { UnitId } from '../engine/ids';
+import { useSession } from '../store/react';
+import { nodeBox } from './nodes';
+import { nearestOf, Paths, roomToGrow, Steady, Text } from './Shapes';
+import { useSheet, useSheetStore } from './sheetStore';
+import { UnitPorts } from './UnitPorts';
+
+/** One unit on the sheet. It listens to its own shape, name and selection, to nothing else. */
+export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
+  const unit = id as UnitId;
+  const store = useSheetStore();
+  const shape = useSheet((state) => state.units.get(unit));
+  const name = useSheet((state) => state.unitNames.get(unit));
+  const quietDuty = useSheet((state) => state.quiet.duties);
+  const selected = useSession((state) => state.units.includes(unit));
+  const entry = useSession((state) => isEntry(state.units, state.streams, unit));
+  const first = useSheet((state) => state.scene.units[0]?.unit === unit);
+  if (!shape) return null;
+  const box = nodeBox(shape);
+  return (
+    <div
+      className="unit"
+      data-unit={shape.tag}
+      data-kind={shape.kind}
+      data-state={shape.state}
+      data-selected={selected || undefined}
+      onPointerEnter={() => store.setState({ hovered: unit })}
+      onPointerLeave={() => {
+        if (store.getState().hovered === unit) store.setState({ hovered: null });
+      }}
+    >
+      {/* biome-ignore lint/a11y/useSemanticElements: a drawing in SVG carries the unit; a button element would clip it */}
+      <div
+        className="unit-body"
+        role="button"
+        tabIndex={entry || (entry === null && first) ? 0 : -1}
+        aria-label={name}
+        aria-pressed={selected}
+        data-focus-unit={unit}
+      />
+      <svg className="unit-drawing" aria-hidden="true" style={{ left: -box.x, top: -box.y }}>
+        <Drawing shape={shape} showDuty={!quietDuty || selected} />
+      </svg>
+      <UnitPorts unit={unit} origin={box} />
+    </div>
+  );
+});
+
+/** Whether Tab enters the sheet at this unit: at the selected one; null while nothing is selected. */
+const isEntry = (units: readonly string[], streams: readonly string[], unit: UnitId): boolean | null =>
+  units.length + streams.length === 0 ? null : units[0] === unit;
+
+const Drawing = memo(function Drawing({
+  shape,
+  showDuty,
+}: {
+  readonly shape: UnitShape;
+  readonly showDuty: boolean;
+}) {
+  const stale = shape.state === 'out-of-date';
+  const tag = shape.tagText;
+  const limit = useMemo(() => (shape.limit ? limitMark(shape.limit.weight) : []), [shape.limit]);
+  const hold = nearestOf(shape.box, tag?.at ?? shape.limit?.at ?? shape.at);
+  return (
+    <>
+      {shape.duty ? (
+        <>
+          <Paths shapes={[shape.duty.line]} />
+          <Paths shapes={shape.duty.marks} />
+        </>
+      ) : null}
+      <g className="symbol" transform={transformOf(shape)}>
+        <Paths shapes={shape.symbol.paths} />
+      </g>
+      {shape.texts.map((text) => (
+        <Steady key={text.text} about={text.at} most={roomToGrow(text, shape.box)}>
+          <Text shape={text} />
+        </Steady>
+      ))}
+      {shape.duty?.text && showDuty ? (
+        <Steady about={shape.duty.text.at}>
+          <Text shape={shape.duty.text} stale={stale} />
+        </Steady>
+      ) : null}
+      <Steady about={hold}>
+        {tag ? <Text shape={tag} /> : null}
+        <Paths shapes={shape.stateMark} />
+        {shape.limit ? (
+          <g transform={`translate(${shape.limit.at[0]} ${shape.limit.at[1]})`}>
+            <Paths shapes={limit} />
+          </g>
+        ) : null}
+      </Steady>
+    </>
+  );
+});

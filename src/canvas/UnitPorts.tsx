@@ -1,0 +1,55 @@
+import { memo } from 'react';
+import { useShallow } from 'zustand/react/shallow';
+import type { Box } from '../drawing/types';
+import type { UnitId } from '../engine/ids';
+import { useSession, useSketch, useStores, useUnit } from '../store/react';
+import { pullByPointer } from './pointer';
+import { isFree, portsOf } from './ports';
+import { useSheet, useSheetStore } from './sheetStore';
+import { capital, portWord } from './words';
+
+interface Props {
+  readonly unit: UnitId;
+  /** The node's box: port places are counted from its corner. */
+  readonly origin: Box;
+}
+
+/** Marks of the ports a stream can be pulled from, while the unit is under the pointer or selected alone. */
+export const UnitPorts = memo(function UnitPorts({ unit, origin }: Props) {
+  const hovered = useSheet((state) => state.hovered === unit);
+  const busy = useSheet((state) => state.pulling !== null || state.dropping !== null || state.moved !== null);
+  const alone = useSession(
+    (state) => state.units.length === 1 && state.streams.length === 0 && state.units[0] === unit,
+  );
+  if (busy || !(hovered || alone)) return null;
+  return <Marks unit={unit} origin={origin} />;
+});
+
+function Marks({ unit: id, origin }: Props) {
+  const stores = useStores();
+  const sheet = useSheetStore();
+  const unit = useUnit(id);
+  const streams = useSketch(
+    useShallow((state) => state.sketch.streams.filter((s) => s.from?.[0] === id || s.to?.[0] === id)),
+  );
+  if (!unit) return null;
+  return portsOf({ streams }, unit, null)
+    .filter(isFree)
+    .map((port) => (
+      <button
+        key={port.port}
+        type="button"
+        tabIndex={-1}
+        className="port nodrag nopan"
+        data-port={port.port}
+        aria-label={`${capital(portWord(port.port))} of ${unit.tag}: pull a stream`}
+        title={capital(portWord(port.port))}
+        style={{ left: port.place.at[0] - origin.x, top: port.place.at[1] - origin.y }}
+        onPointerDown={(event) => pullByPointer(stores, sheet, port, event)}
+      >
+        <svg aria-hidden="true">
+          <path d="M-3 -3H3V3H-3Z" />
+        </svg>
+      </button>
+    ));
+}

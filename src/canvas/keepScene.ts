@@ -1,0 +1,132 @@
+import { buildScene } from '../drawing/scene';
+import type { Scene } from '../drawing/types';
+import type { StreamId, UnitId } from '../engine/ids';
+import type { Finding } from '../engine/outcome';
+import type { Sketch } from '../sketch/types';
+import type { Stores } from '../store/react';
+import type { ResultsState } from '../store/resultsStore';
+import { streamName, unitName } from './names';
+import { quietAt } from './quiet';
+import { createSceneInput } from './sceneInput';
+import type { SheetState, SheetStore } from './sheetStore';
+import { tagOf } from './words';
+
+/** The list as a map by id; the known map itself when the list is the same. */
+const indexed = <T, K>(
+  list: readonly T[],
+  before: readonly T[],
+  known: ReadonlyMap<K, T>,
+  keyOf: (item: T) => K,
+): ReadonlyMap<K, T> => (list === before ? known : new Map(list.map((item) => [keyOf(item), item])));
+
+/** Streams from a feed, to a product, or with a loose end: their labels step back last. */
+const outerStreams = (sketch: Sketch): ReadonlySet<StreamId> => {
+  const edge = new Set<UnitId>(
+    sketch.units.filter((unit) => unit.kind === 'feed' || unit.kind === 'product').map((unit) => unit.id),
+  );
+  return new Set(
+    sketch.streams
+      .filter((s) => !s.from || !s.to || edge.has(s.from[0]) || edge.has(s.to[0]))
+      .map((s) => s.id),
+  );
+};
+
+/**
+ * Keeps the sheet's scene in step with sketch and results: one pure function of both, with every shape handed on as the
+ * same object wherever nothing changed, so that only the views of what changed are drawn again.
+ */
+export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => number): () => void {
+  const input = createSceneInput();
+  let scene: Scene | undefined;
+
+  const build = (): void => {
+    const { sketch } = stores.sketch.getState();
+    const results = stores.results.getState();
+    const before = sheet.getState();
+    const next = buildScene(sketch, input(sketch, results, before.moved), scene);
+    const units = indexed(next.units, before.scene.units, before.units, (shape) => shape.unit);
+    const lines = indexed(next.lines, before.scene.lines, before.lines, (shape) => shape.stream);
+    const labels = indexed(next.labels, before.scene.labels, before.labels, (shape) => shape.stream);
+    scene = next;
+    sheet.setState({
+      scene: next,
+      units,
+      lines,
+      labels,
+      ...namesOf(sketch, results, units, labels),
+      ...(next === before.scene ? {} : { quiet: quietAt(next, zoomNow(), outerStreams(sketch)) }),
+    });
+  };
+
+  build();
+  let shown = stores.sketch.getState().sketch;
+  const stop = [
+    stores.sketch.subscribe(({ sketch }) => {
+      if (sketch === shown) return;
+      shown = sketch;
+      prune(stores, sketch);
+      build();
+    }),
+    stores.results.subscribe((now, before) => {
+      if (now.streams !== before.streams || now.units !== before.units || now.findings !== before.findings)
+        build();
+    }),
+    sheet.subscribe((now, before) => {
+      if (now.moved !== before.moved) build();
+    }),
+  ];
+  return () => {
+    for (const end of stop) end();
+  };
+}
+
+/** Labels step back anew when the zoom changes. */
+export function quietAgain(stores: Stores, sheet: SheetStore, zoom: number): void {
+  const { scene } = sheet.getState();
+  sheet.setState({ quiet: quietAt(scene, zoom, outerStreams(stores.sketch.getState().sketch)) });
+}
+
+function namesOf(
+  sketch: Sketch,
+  results: ResultsState,
+  units: SheetState['units'],
+  labels: SheetState['labels'],
+): Pick<SheetState, 'unitNames' | 'streamNames'> {
+  const limits = new Map<UnitId, Finding[]>();
+  for (const finding of results.findings) {
+    const unit = finding.at.unit;
+    if (unit) limits.set(unit, [...(limits.get(unit) ?? []), finding]);
+  }
+  return {
+    unitNames: new Map(
+      sketch.units.map((unit) => [
+        unit.id,
+        unitName(
+          unit,
+          units.get(unit.id),
+          results.units.get(unit.id)?.latest.reasons ?? [],
+          limits.get(unit.id) ?? [],
+        ),
+      ]),
+    ),
+    streamNames: new Map(
+      sketch.streams.map((stream) => [
+        stream.id,
+        streamName(stream, labels.get(stream.id), (id) => tagOf(sketch, id)),
+      ]),
+    ),
+  };
+}
+
+/** What is gone from the sketch leaves the selection and the drawer. */
+function prune({ session }: Stores, sketch: Sketch): void {
+  const { units, streams, drawer } = session.getState();
+  const has = (list: readonly { readonly id: string }[], id: string): boolean =>
+    list.some((record) => record.id === id);
+  if (!units.every((id) => has(sketch.units, id)))
+    session.setState({ units: units.filter((id) => has(sketch.units, id)) });
+  if (!streams.every((id) => has(sketch.streams, id)))
+    session.setState({ streams: streams.filter((id) => has(sketch.streams, id)) });
+  if (drawer?.is === 'unit' && !has(sketch.units, drawer.id)) session.setState({ drawer: null });
+  if (drawer?.is === 'stream' && !has(sketch.streams, drawer.id)) session.setState({ drawer: null });
+}

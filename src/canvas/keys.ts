@@ -1,0 +1,201 @@
+import { GRID } from '../drawing/tokens';
+import type { Point } from '../drawing/types';
+import type { StreamId, UnitId } from '../engine/ids';
+import { moveUnits } from '../store/commands';
+import type { Stores } from '../store/react';
+import { tryEdit } from './edit';
+import { type SheetHandle, sheetOf } from './handle';
+import { middleOf } from './lines';
+import { isFree, portsOf, type StandingPort } from './ports';
+import { beginPull, cancelPull, endPull } from './pull';
+import type { SheetStore, Target } from './sheetStore';
+import { type Arrow, chooseByArrow, type Places, stepFrom, type Thing } from './walk';
+import { portWord, tagOf } from './words';
+
+const say = ({ session }: Stores, spoken: string): void => session.setState({ spoken });
+
+const placesOf = (sheet: SheetStore): Places => {
+  const { units, lines } = sheet.getState();
+  return {
+    unit: (id) => units.get(id)?.at,
+    stream: (id) => {
+      const line = lines.get(id);
+      return line && (line.diamond ?? middleOf(line.points));
+    },
+  };
+};
+
+/** The one thing the keys start from: what has the focus on the sheet, else what is selected last. */
+export function currentThing({ session }: Stores): Thing | undefined {
+  const { units, streams } = session.getState();
+  const unit = units.at(-1);
+  const stream = streams.at(-1);
+  if (unit) return { unit };
+  return stream ? { stream } : undefined;
+}
+
+function goTo(stores: Stores, handle: SheetHandle, thing: Thing, add: boolean): void {
+  const { units, streams } = stores.session.getState();
+  if (add) {
+    if ('unit' in thing) {
+      stores.session.setState({ units: [...units.filter((id) => id !== thing.unit), thing.unit] });
+    } else
+      stores.session.setState({ streams: [...streams.filter((id) => id !== thing.stream), thing.stream] });
+  } else if ('unit' in thing) stores.session.select([thing.unit]);
+  else stores.session.select([], [thing.stream]);
+  const places = placesOf(handle.store);
+  const at = 'unit' in thing ? places.unit(thing.unit) : places.stream(thing.stream);
+  if (at) handle.reveal(at);
+  handle.focus(thing);
+}
+
+/** An arrow key: it chooses a port, moves units, or walks along the streams, as the sheet stands. */
+export function arrow(stores: Stores, direction: Arrow, shift: boolean): void {
+  const handle = sheetOf(stores);
+  if (!handle) return;
+  const state = handle.store.getState();
+  if (state.pulling) choosePort(stores, handle.store, direction);
+  else if (state.movingByKeys) nudge(handle.store, direction, shift ? 5 : 1);
+  else walk(stores, handle, direction, shift);
+}
+
+function walk(stores: Stores, handle: SheetHandle, direction: Arrow, add: boolean): void {
+  const { sketch } = stores.sketch.getState();
+  const from = currentThing(stores);
+  const first = sketch.units[0];
+  const next = from ? stepFrom(sketch, placesOf(handle.store), from, direction) : first && { unit: first.id };
+  if (next) goTo(stores, handle, next, add);
+}
+
+/** Starts a connection at the selected unit or loose stream; pressed again, from its next free port. */
+export function connectByKeys(stores: Stores): void {
+  const handle = sheetOf(stores);
+  if (!handle) return;
+  const { sketch } = stores.sketch.getState();
+  const free = freePorts(stores);
+  if (free.length === 0) {
+    say(stores, 'No port is free here.');
+    return;
+  }
+  const { pulling } = handle.store.getState();
+  const at = pulling ? free.findIndex((port) => port.port === pulling.from.port) : -1;
+  const from = free[(at + 1) % free.length]!;
+  beginPull(stores, handle.store, from, true);
+  const fitting = handle.store.getState().pulling?.targets.filter((target) => !target.reason) ?? [];
+  say(
+    stores,
+    `Connect from ${tagOf(sketch, from.unit)} ${portWord(from.port)}: ${fitting.length} ports fit. Arrows choose, Enter connects, Esc leaves it.`,
+  );
+}
+
+/** Free ports of what is selected: outlets first. */
+export function freePorts(stores: Stores): readonly StandingPort[] {
+  const { sketch } = stores.sketch.getState();
+  const thing = currentThing(stores);
+  if (!thing) return [];
+  const stream = 'stream' in thing ? sketch.streams.find((s) => s.id === thing.stream) : undefined;
+  const id = 'unit' in thing ? thing.unit : (stream?.from?.[0] ?? stream?.to?.[0]);
+  const unit = sketch.units.find((u) => u.id === id);
+  if (!unit) return [];
+  return portsOf(sketch, unit, null)
+    .filter(isFree)
+    .filter((port) => stream === undefined || port.stream?.id === stream.id)
+    .sort((a, b) => Number(a.dir === 'in') - Number(b.dir === 'in'));
+}
+
+function choosePort(stores: Stores, sheet: SheetStore, direction: Arrow): void {
+  const { pulling } = sheet.getState();
+  if (!pulling) return;
+  const fitting = pulling.targets
+    .filter((target) => !target.reason)
+    .map((target) => ({ target, at: target.place.at }));
+  const now = fitting.find(({ target }) => target === pulling.over);
+  const next: Target | undefined = chooseByArrow(fitting, now, pulling.from.place.at, direction)?.target;
+  if (!next) return;
+  sheet.setState({ pulling: { ...pulling, over: next, at: next.place.at } });
+  say(stores, `${tagOf(stores.sketch.getState().sketch, next.unit)} ${portWord(next.port)}`);
+}
+
+/** Starts moving the selected units by keys; pressed again, or with Enter, they stay where they are. */
+export function moveByKeys(stores: Stores): void {
+  const sheet = sheetOf(stores)?.store;
+  if (!sheet) return;
+  if (sheet.getState().movingByKeys) {
+    endMove(stores, sheet);
+    return;
+  }
+  const { sketch } = stores.sketch.getState();
+  const chosen = new Set(stores.session.getState().units);
+  const moved = new Map<UnitId, Point>(
+    sketch.units.filter((unit) => chosen.has(unit.id)).map((unit) => [unit.id, unit.at]),
+  );
+  if (moved.size === 0) return;
+  sheet.setState({ moved, movingByKeys: true });
+  say(stores, 'Moving. Arrows move by one step of the grid, Enter leaves it there, Esc puts it back.');
+}
+
+function nudge(sheet: SheetStore, direction: Arrow, steps: number): void {
+  const { moved } = sheet.getState();
+  if (!moved) return;
+  const by = GRID * steps;
+  const [dx, dy]: Point =
+    direction === 'left'
+      ? [-by, 0]
+      : direction === 'right'
+        ? [by, 0]
+        : direction === 'up'
+          ? [0, -by]
+          : [0, by];
+  sheet.setState({
+    moved: new Map([...moved].map(([id, [x, y]]): [UnitId, Point] => [id, [x + dx, y + dy]])),
+  });
+}
+
+/** Units stay where a drag or keys brought them: one edit. */
+export function endMove(stores: Stores, sheet: SheetStore): void {
+  const { moved } = sheet.getState();
+  if (moved) tryEdit(stores, (sketch) => moveUnits(sketch, moved));
+  sheet.setState({ moved: null, movingByKeys: false });
+}
+
+/** Enter: ends a connection or a move; else opens the drawer of what is selected. */
+export function enter(stores: Stores): void {
+  const handle = sheetOf(stores);
+  if (!handle) return;
+  const { pulling, movingByKeys } = handle.store.getState();
+  if (pulling) endPull(stores, handle.store, handle.zoom());
+  else if (movingByKeys) endMove(stores, handle.store);
+  else {
+    const thing = currentThing(stores) ?? focusedThing();
+    if (!thing) return;
+    stores.session.openDrawer(
+      'unit' in thing ? { is: 'unit', id: thing.unit } : { is: 'stream', id: thing.stream },
+    );
+  }
+}
+
+/** Esc: leaves what is under way, one thing at a time; last, the selection. */
+export function leave(stores: Stores): boolean {
+  const sheet = sheetOf(stores)?.store;
+  if (!sheet) return false;
+  const { pulling, offer, moved, dropping } = sheet.getState();
+  if (pulling || offer) cancelPull(stores, sheet);
+  else if (dropping) sheet.setState({ dropping: null });
+  else if (moved) sheet.setState({ moved: null, movingByKeys: false });
+  else {
+    const { units, streams, notice } = stores.session.getState();
+    if (notice) stores.session.dismiss();
+    else if (units.length + streams.length > 0) stores.session.select([], []);
+    else return false;
+  }
+  return true;
+}
+
+/** The unit or stream that has the keyboard's focus. */
+export function focusedThing(): Thing | undefined {
+  const focused = document.activeElement;
+  if (!(focused instanceof HTMLElement)) return undefined;
+  const { focusUnit, focusStream } = focused.dataset;
+  if (focusUnit) return { unit: focusUnit as UnitId };
+  return focusStream ? { stream: focusStream as StreamId } : undefined;
+}

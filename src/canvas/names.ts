@@ -1,0 +1,48 @@
+import type { LabelShape, UnitShape } from '../drawing/types';
+import type { UnitId } from '../engine/ids';
+import type { Finding } from '../engine/outcome';
+import { weightWord, worstFirst } from '../parts/LimitMark';
+import type { SketchStream, SketchUnit } from '../sketch/types';
+import { findingSentence, kindWord, STATE_WORDS } from './words';
+
+/** "V-101, flash drum, solved, caution: liquid leaves at its bubble point": what a screen reader hears of a unit. */
+export function unitName(
+  unit: SketchUnit,
+  shape: UnitShape | undefined,
+  reasons: readonly Finding[],
+  limits: readonly Finding[],
+): string {
+  const state = shape?.state ?? 'waiting';
+  const [reason] = reasons;
+  const why = reason && state !== 'solved' ? `: ${findingSentence(reason)}` : '';
+  const [worst] = worstFirst(limits);
+  return [
+    unit.tag,
+    unit.name,
+    kindWord(unit.kind),
+    `${STATE_WORDS[state]}${why}`,
+    worst && `${weightWord(worst.weight)}: ${findingSentence(worst)}`,
+  ]
+    .filter(Boolean)
+    .join(', ');
+}
+
+/** "Stream 3, PV-101 to V-101, 120.0 kmol/h, 56.65 °C": what a screen reader hears of a stream. */
+export function streamName(
+  stream: SketchStream,
+  label: LabelShape | undefined,
+  tagOf: (id: UnitId) => string,
+): string {
+  const from = stream.from ? tagOf(stream.from[0]) : 'nowhere yet';
+  const to = stream.to ? tagOf(stream.to[0]) : 'nowhere yet';
+  const numbers = label?.rows.map((row) => `${row.number} ${row.unit}`.trim()) ?? [];
+  return [
+    `Stream ${stream.number}`,
+    stream.name,
+    `${from} to ${to}`,
+    ...(label?.stale ? ['out of date'] : []),
+    ...numbers,
+  ]
+    .filter(Boolean)
+    .join(', ');
+}

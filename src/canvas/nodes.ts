@@ -1,0 +1,53 @@
+import type { Node } from 'reactflow';
+import type { Box, UnitShape } from '../drawing/types';
+import type { UnitId } from '../engine/ids';
+
+const SMALLEST = 24;
+const NONE = {};
+
+/** The part of the sheet that takes the pointer for a unit: its symbol, at least 24 px wide and high. */
+export function nodeBox({ box }: Pick<UnitShape, 'box'>): Box {
+  const padX = Math.max(0, (SMALLEST - box.w) / 2);
+  const padY = Math.max(0, (SMALLEST - box.h) / 2);
+  return { x: box.x - padX, y: box.y - padY, w: box.w + 2 * padX, h: box.h + 2 * padY };
+}
+
+/**
+ * React Flow's nodes: a cache of the scene's units. A node is made anew only when its unit's place, size or selection
+ * changes; `data` stays empty, for the view listens to its own unit.
+ */
+export function nodesOf(
+  shapes: readonly UnitShape[],
+  selected: ReadonlySet<UnitId>,
+  before: readonly Node[],
+): Node[] {
+  const known = new Map(before.map((node) => [node.id, node]));
+  let same = before.length === shapes.length;
+  const nodes = shapes.map((shape, k) => {
+    const box = nodeBox(shape);
+    const old = known.get(shape.unit);
+    const isSelected = selected.has(shape.unit);
+    const keep =
+      old?.position.x === box.x &&
+      old.position.y === box.y &&
+      old.width === box.w &&
+      old.height === box.h &&
+      old.selected === isSelected;
+    const node: Node = keep
+      ? old
+      : {
+          id: shape.unit,
+          type: 'unit',
+          position: { x: box.x, y: box.y },
+          width: box.w,
+          height: box.h,
+          measured: { width: box.w, height: box.h },
+          handles: [],
+          data: NONE,
+          selected: isSelected,
+        };
+    if (before[k] !== node) same = false;
+    return node;
+  });
+  return same ? (before as Node[]) : nodes;
+}

@@ -1,0 +1,95 @@
+import { plainSymbol } from '../drawing/symbols/registry';
+import type { Point } from '../drawing/types';
+import { CATALOGUE } from '../engine/units/catalogue';
+import { addUnit, connect, nextPortName } from '../store/commands';
+import type { Stores } from '../store/react';
+import { together, tryEdit } from './edit';
+import { targetsFor } from './ports';
+import type { Offer, PortRef, SheetStore, Target } from './sheetStore';
+
+/** A port takes the stream within this distance [screen px]. */
+const CATCH = 14;
+/** Shorter pulls are taken for a click [screen px]. */
+const SHORTEST = 20;
+
+/** Takes hold of a port: every other port shows whether the stream can end there. */
+export function beginPull(stores: Stores, sheet: SheetStore, from: Target, byKeys: boolean): void {
+  const { sketch } = stores.sketch.getState();
+  const targets = targetsFor(sketch, from, sheet.getState().moved);
+  sheet.setState({
+    pulling: { from, targets, at: from.place.at, over: null, byKeys },
+    offer: null,
+    hovered: null,
+  });
+  stores.session.setState({ connecting: { unit: from.unit, port: from.port } });
+}
+
+export function movePull(sheet: SheetStore, at: Point, zoom: number): void {
+  const { pulling } = sheet.getState();
+  if (!pulling) return;
+  let over: Target | null = null;
+  let nearest = CATCH / zoom;
+  for (const target of pulling.targets) {
+    const away = Math.hypot(target.place.at[0] - at[0], target.place.at[1] - at[1]);
+    if (away <= nearest) {
+      nearest = away;
+      over = target;
+    }
+  }
+  sheet.setState({ pulling: { ...pulling, at: over ? over.place.at : at, over } });
+}
+
+export function cancelPull(stores: Stores, sheet: SheetStore): void {
+  sheet.setState({ pulling: null, offer: null });
+  stores.session.setState({ connecting: null });
+}
+
+/** Lets go: at a fitting port the stream is made, at another the reason is said, on empty sheet units are offered. */
+export function endPull(stores: Stores, sheet: SheetStore, zoom: number): void {
+  const { pulling } = sheet.getState();
+  if (!pulling) return;
+  cancelPull(stores, sheet);
+  const { from, over, at, byKeys } = pulling;
+  if (over?.reason) {
+    stores.session.say('caution', over.reason);
+    return;
+  }
+  if (over) {
+    const made = tryEdit(stores, (sketch) => connect(sketch, [from.unit, from.port], [over.unit, over.port]));
+    const stream = made?.stream;
+    if (stream && byKeys) stores.session.select([], [stream]);
+    return;
+  }
+  const [x, y] = from.place.at;
+  if (!byKeys && Math.hypot(at[0] - x, at[1] - y) * zoom >= SHORTEST) {
+    sheet.setState({ offer: { from: { unit: from.unit, port: from.port, dir: from.dir }, at } });
+  }
+}
+
+/** The first port of a kind that faces the other way, by its full name. */
+function matching(kind: string, dir: PortRef['dir']): string | undefined {
+  const spec = CATALOGUE[kind]?.ports.find((port) => port.dir !== dir);
+  return spec && nextPortName(spec, []);
+}
+
+/** Kinds that a pulled stream can lead to; a product, or a feed, stands first. */
+export const offeredKinds = (dir: PortRef['dir']): readonly string[] =>
+  Object.keys(CATALOGUE)
+    .filter((kind) => matching(kind, dir) !== undefined)
+    .sort((a, b) => Number(b === 'product') - Number(a === 'product'));
+
+/** Makes the chosen unit with its port where the stream was let go, and connects it, in one step. */
+export function takeOffer(stores: Stores, sheet: SheetStore, offer: Offer, kind: string): void {
+  sheet.setState({ offer: null });
+  const port = matching(kind, offer.from.dir);
+  const place = port === undefined ? undefined : plainSymbol(kind).ports(port);
+  if (port === undefined || !place) return;
+  const at: Point = [offer.at[0] - place.at[0], offer.at[1] - place.at[1]];
+  const made = tryEdit(stores, (sketch) => {
+    const added = addUnit(sketch, kind, at);
+    if (!added.ok || !added.unit) return added;
+    const unit = added.unit;
+    return together(sketch, added, (now) => connect(now, [offer.from.unit, offer.from.port], [unit, port]));
+  });
+  if (made?.unit) stores.session.select([made.unit]);
+}

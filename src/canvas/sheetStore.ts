@@ -1,0 +1,103 @@
+import { createContext, useContext } from 'react';
+import { useStore } from 'zustand';
+import { createStore } from 'zustand/vanilla';
+import type { LabelShape, LineShape, Point, PortPlace, Scene, UnitShape } from '../drawing/types';
+import type { Port, StreamId, UnitId } from '../engine/ids';
+
+/** A port that a stream can have one end at. */
+export interface PortRef {
+  readonly unit: UnitId;
+  readonly port: Port;
+  readonly dir: 'in' | 'out';
+}
+
+/** A port on the sheet while an end of a stream looks for its place; `reason`: why it cannot be had. */
+export interface Target extends PortRef {
+  readonly place: PortPlace;
+  readonly reason?: string;
+}
+
+/** A stream being drawn: by the pointer, or by keys. */
+export interface Pulling {
+  readonly from: Target;
+  readonly targets: readonly Target[];
+  /** Free end of the rubber line, sheet coordinates. */
+  readonly at: Point;
+  readonly over: Target | null;
+  readonly byKeys: boolean;
+}
+
+/** What a stream that ends on empty sheet can lead to. */
+export interface Offer {
+  readonly from: PortRef;
+  readonly at: Point;
+}
+
+/** A unit from the shelf on its way over the sheet. */
+export interface Dropping {
+  readonly kind: string;
+  readonly at: Point;
+  readonly turn: 0 | 90 | 180 | 270;
+  readonly mirror: boolean;
+  /** The stream it would open. */
+  readonly on: StreamId | null;
+  readonly tip: readonly string[];
+}
+
+export interface SheetState {
+  readonly scene: Scene;
+  readonly units: ReadonlyMap<UnitId, UnitShape>;
+  readonly lines: ReadonlyMap<StreamId, LineShape>;
+  readonly labels: ReadonlyMap<StreamId, LabelShape>;
+  /** What a screen reader hears of each unit and stream. */
+  readonly unitNames: ReadonlyMap<UnitId, string>;
+  readonly streamNames: ReadonlyMap<StreamId, string>;
+  /** Labels, diamonds and tags that step back at this zoom. */
+  readonly quiet: Quiet;
+  /** Positions while a drag or a move by keys lasts. */
+  readonly moved: ReadonlyMap<UnitId, Point> | null;
+  readonly movingByKeys: boolean;
+  readonly pulling: Pulling | null;
+  readonly offer: Offer | null;
+  readonly dropping: Dropping | null;
+  /** Unit under the pointer: its port marks show. */
+  readonly hovered: UnitId | null;
+}
+
+export interface Quiet {
+  readonly labels: ReadonlySet<StreamId>;
+  readonly diamonds: ReadonlySet<StreamId>;
+  readonly duties: boolean;
+}
+
+const emptyScene: Scene = { box: { x: 0, y: 0, w: 0, h: 0 }, units: [], lines: [], labels: [] };
+
+export const createSheetStore = () =>
+  createStore<SheetState>()(() => ({
+    scene: emptyScene,
+    units: new Map(),
+    lines: new Map(),
+    labels: new Map(),
+    unitNames: new Map(),
+    streamNames: new Map(),
+    quiet: { labels: new Set(), diamonds: new Set(), duties: false },
+    moved: null,
+    movingByKeys: false,
+    pulling: null,
+    offer: null,
+    dropping: null,
+    hovered: null,
+  }));
+
+export type SheetStore = ReturnType<typeof createSheetStore>;
+
+const Context = createContext<SheetStore | null>(null);
+export const SheetProvider = Context.Provider;
+
+export function useSheetStore(): SheetStore {
+  const store = useContext(Context);
+  if (!store) throw new Error('useSheetStore outside SheetProvider');
+  return store;
+}
+
+export const useSheet = <T>(pick: (state: SheetState) => T): T => useStore(useSheetStore(), pick);

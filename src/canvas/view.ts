@@ -1,0 +1,73 @@
+import type { ReactFlowInstance, useStoreApi } from 'reactflow';
+import type { Point } from '../drawing/types';
+import type { SheetHandle } from './handle';
+import type { SheetStore } from './sheetStore';
+
+const MARGIN = 28;
+const LEAST_ZOOM = 0.25;
+/** Further from the edges of the view than this counts as well in view [px]. */
+const WELL_IN = 48;
+
+interface Root {
+  readonly current: HTMLElement | null;
+}
+
+/** What the sheet can be asked to show. `toView`: a sheet point, from the corner of the drawing area. */
+export function createView(
+  store: SheetStore,
+  flow: ReactFlowInstance,
+  flowStore: ReturnType<typeof useStoreApi>,
+  root: Root,
+): SheetHandle & { readonly toView: (at: Point) => { readonly x: number; readonly y: number } } {
+  const size = (): Point => {
+    const { width, height } = flowStore.getState();
+    return [width, height];
+  };
+  const put = (middle: Point, zoom: number): void => {
+    const [w, h] = size();
+    void flow.setViewport({ x: w / 2 - middle[0] * zoom, y: h / 2 - middle[1] * zoom, zoom });
+  };
+  const middle = (): Point => {
+    const [w, h] = size();
+    const { x, y, zoom } = flow.getViewport();
+    return [(w / 2 - x) / zoom, (h / 2 - y) / zoom];
+  };
+  const toView = ([px, py]: Point): { x: number; y: number } => {
+    const { x, y, zoom } = flow.getViewport();
+    return { x: px * zoom + x, y: py * zoom + y };
+  };
+
+  return {
+    store,
+    toView,
+    middle,
+    zoom: () => flow.getZoom(),
+    zoomBy: (factor) => put(middle(), Math.min(3, Math.max(LEAST_ZOOM, flow.getZoom() * factor))),
+    zoomTo: (zoom) => put(middle(), zoom),
+    fit() {
+      const [w, h] = size();
+      const { box, units } = store.getState().scene;
+      if (units.length === 0 || w === 0 || h === 0) return;
+      const zoom = Math.min(1, (w - 2 * MARGIN) / box.w, (h - 2 * MARGIN) / box.h);
+      put([box.x + box.w / 2, box.y + box.h / 2], Math.max(LEAST_ZOOM, zoom));
+    },
+    reveal(at) {
+      const [w, h] = size();
+      const { x, y } = toView(at);
+      if (x > WELL_IN && y > WELL_IN && x < w - WELL_IN && y < h - WELL_IN) return;
+      put(at, flow.getZoom());
+    },
+    toSheet(clientX, clientY) {
+      const area = root.current?.querySelector('.sheet-flow')?.getBoundingClientRect();
+      if (!area || clientX < area.left || clientX > area.right || clientY < area.top || clientY > area.bottom)
+        return null;
+      const { x, y } = flow.screenToFlowPosition({ x: clientX, y: clientY }, { snapToGrid: false });
+      return [x, y];
+    },
+    focus(what) {
+      const name =
+        'unit' in what ? `[data-focus-unit="${what.unit}"]` : `[data-focus-stream="${what.stream}"]`;
+      root.current?.querySelector<HTMLElement>(name)?.focus({ preventScroll: true });
+    },
+  };
+}

@@ -1,0 +1,35 @@
+import type { Sketch } from '../sketch/types';
+import type { ResultsState } from '../store/resultsStore';
+import { tagOf } from './words';
+
+/** State of the whole train for the title strip: a word in bold, then the rest. */
+export interface WholeState {
+  readonly word: string;
+  readonly rest: string;
+}
+
+const CAUSES = { 'needs-value': 'needs a value', 'no-solution': 'has no solution' } as const;
+
+const time = (ms: number): string =>
+  ms < 1000 ? `${Math.max(1, Math.round(ms))} ms` : `${(ms / 1000).toFixed(1)} s`;
+
+/** "Solved in 12 ms, edit 214", or what stops the train, first cause first. */
+export function wholeState(sketch: Sketch, edit: number, results: ResultsState): WholeState {
+  if (sketch.units.length === 0) return { word: '', rest: 'Nothing to solve yet' };
+  if (results.trouble) return { word: 'Stopped', rest: `: ${results.trouble}` };
+  if (results.at && results.answering > results.solvedEdit)
+    return { word: 'Solving', rest: `, at ${tagOf(sketch, results.at)}, edit ${edit}` };
+  const stops: string[] = [];
+  let solved = 0;
+  for (const unit of sketch.units) {
+    const state = results.units.get(unit.id)?.latest.state;
+    if (state === 'solved') solved += 1;
+    else if (state === 'needs-value' || state === 'no-solution') stops.push(`${unit.tag} ${CAUSES[state]}`);
+  }
+  if (stops.length > 0) {
+    const more = stops.length > 2 ? ` and ${stops.length - 2} more` : '';
+    return { word: 'Not solved yet', rest: `: ${stops.slice(0, 2).join(', ')}${more}` };
+  }
+  if (solved < sketch.units.length) return { word: 'Not solved yet', rest: '' };
+  return { word: 'Solved', rest: ` in ${time(results.tookMs)}, edit ${results.solvedEdit}` };
+}

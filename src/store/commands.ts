@@ -1,0 +1,7 @@
+/** What screens may do to a sketch: the edits, and the names they need to make them. */
+
+export { MODEL_KINDS } from '../sketch/compiling/modelKinds';
+export { describeStream, portWords } from '../sketch/describe';
+export * from '../sketch/edits';
+export { LABEL_KEYS } from '../sketch/fresh';
+export { isOneOf, nextPortName } from '../sketch/registry';
