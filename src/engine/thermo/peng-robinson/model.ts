@@ -76,66 +76,18 @@ export class PengRobinson implements ThermoModel {
   evaluate(side: Side, T: number, P: number, x: Float64Array, level: Level, props: PhaseProps): void {
     const out = props as CubicProps;
     if (out.owner !== this || x.length !== this.n) throw new Error('props or x of another model');
-    const { n, b, one_k } = this;
-    const { root, slope, xRoot, xSlope, s, ds, lnPhi, ends } = out;
     if (out.rootT !== T) this.rootsAt(T, out);
+    if (level < 2) this.mix(x, out);
+    else this.mixWithSlopes(x, out);
+    const { n, b } = this;
+    const { s, lnPhi, mixed } = out;
+    const bm = mixed.b;
+    const a = mixed.a;
 
-    // Mixing: s_i = Sum_j x_j a_ij (and its slope), a = Sum x_i s_i, b = Sum x_i b_i.
-    let bm = 0;
-    for (let j = 0; j < n; j++) {
-      const xj = x[j]!;
-      bm += xj * b[j]!;
-      xRoot[j] = xj * root[j]!;
-      xSlope[j] = xj * slope[j]!;
-    }
-    let a = 0;
-    let halfA1 = 0;
-    let slopes = 0;
-    if (level < 2) {
-      for (let i = 0, at = 0; i < n; i++) {
-        let y = 0;
-        for (let j = 0; j < n; j++, at++) y += one_k[at]! * xRoot[j]!;
-        a += xRoot[i]! * y;
-        halfA1 += xSlope[i]! * y;
-        s[i] = root[i]! * y;
-      }
-    } else {
-      for (let i = 0, at = 0; i < n; i++) {
-        let y = 0;
-        let z = 0;
-        for (let j = 0; j < n; j++, at++) {
-          const k = one_k[at]!;
-          y += k * xRoot[j]!;
-          z += k * xSlope[j]!;
-        }
-        a += xRoot[i]! * y;
-        halfA1 += xSlope[i]! * y;
-        slopes += xSlope[i]! * z;
-        s[i] = root[i]! * y;
-        ds[i] = slope[i]! * y + root[i]! * z;
-      }
-    }
-
-    // The equation as a cubic in w = Z - B: no term cancels, however dense or thin the phase.
     const RT = R_J_molK * T;
     const B = (bm * P) / RT;
-    const A = (a * P) / (RT * RT);
     const q = a / (bm * RT);
-    const real = positiveRoots(4 * B - 1, A - 4 * B + 2 * B * B, -2 * B * B, ends);
-    let w = ends[0]!;
-    out.single = real === 1;
-    if (real === 3) {
-      const big = ends[1]!;
-      if (side === 'stable') {
-        const liquid = w - Math.log(w) - q * attraction(w + B, B);
-        const vapour = big - Math.log(big) - q * attraction(big + B, B);
-        out.side = vapour < liquid ? 'vapour' : 'liquid';
-      } else out.side = side;
-      if (out.side === 'vapour') w = big;
-    } else if (side === 'stable') {
-      out.side = w + B > (Z_CRITICAL / OMEGA_B) * B ? 'vapour' : 'liquid';
-    } else out.side = side;
-
+    const w = chooseRoot(side, q, B, out);
     const Z = w + B;
     const L = attraction(Z, B);
     const lnW = Math.log(w);
@@ -147,72 +99,14 @@ export class PengRobinson implements ThermoModel {
     out.v_m3_mol = v;
     if (level === 0) return;
 
-    const a1 = 2 * halfA1;
     const f = L / bm;
     out.idealAt(T);
-    const { hIdeal, cpIdeal } = out;
-    let hIg = 0;
-    let cpIg = 0;
-    for (let i = 0; i < n; i++) {
-      hIg += x[i]! * hIdeal[i]!;
-      cpIg += x[i]! * cpIdeal[i]!;
-    }
-    out.h_J_mol = hIg + RT * (Z - 1) + (T * a1 - a) * f;
-    out.keepForEntropy(T, P, x, R_J_molK * lnW + a1 * f);
-    if (level === 1) return;
-
-    // Derivatives of f by V and B, of the pressure by V, T and n_i; then those of ln phi.
-    const vb = (w * RT) / P;
-    const D = v * v + 2 * bm * v - bm * bm;
-    const fV = -1 / D;
-    const fB = -(f + v * fV) / bm;
-    const turnB = (2 * (v - bm)) / (D * D);
-    const fBB = -(2 * fB + v * turnB) / bm;
-    const PV = Math.min((2 * a * (v + bm)) / (D * D) - RT / (vb * vb), (-STIFFEST * RT) / (v * v));
-    const PT = R_J_molK / vb - a1 / D;
-    const a2 = 2 * slopes - a1 / (2 * T);
-    const cv = cpIg - R_J_molK + T * a2 * f;
-    out.cv_J_molK = cv;
-    out.cp_J_molK = cv - (T * PT * PT) / PV;
-
-    const { p, dT, dP, dN, hPartial } = out;
-    const p0 = RT / vb;
-    const pb = RT / (vb * vb) + a * turnB;
-    const ps = -2 / D;
-    const perV = -1 / (RT * PV);
-    const overRT = 1 / RT;
-    const tb = -(a1 - a / T) * fB * overRT;
-    const ts = (2 * f * overRT) / T;
-    const tds = -2 * f * overRT;
-    for (let i = 0; i < n; i++) {
-      const pi = p0 + pb * b[i]! + ps * s[i]!;
-      p[i] = pi;
-      const volume = pi * perV;
-      dP[i] = volume - 1 / P;
-      const byT = tb * b[i]! + ts * s[i]! + tds * ds[i]! + 1 / T - volume * PT;
-      dT[i] = byT;
-      hPartial[i] = hIdeal[i]! - RT * T * byT;
-    }
-    // Row i of the second derivatives: a term in a_ij and a form of rank three in (1, b, s).
-    const nb = 1 / vb;
-    const nbb = 1 / (vb * vb) - a * fBB * overRT;
-    const nsb = -2 * fB * overRT;
-    const na = -2 * f * overRT;
-    for (let i = 0; i < n; i++) {
-      const bi = b[i]!;
-      const si = s[i]!;
-      const vi = p[i]! * perV;
-      const c0 = 1 + nb * bi - vi * p0;
-      const c1 = nb + nbb * bi + nsb * si - vi * pb;
-      const c2 = nsb * bi - vi * ps;
-      const c3 = na * root[i]!;
-      const row = i * n;
-      for (let j = i; j < n; j++) {
-        const d = c0 + c1 * b[j]! + c2 * s[j]! + c3 * one_k[row + j]! * root[j]!;
-        dN[row + j] = d;
-        dN[j * n + i] = d;
-      }
-    }
+    const { hIdeal } = out;
+    let h = 0;
+    for (let i = 0; i < n; i++) h += x[i]! * hIdeal[i]!;
+    out.h_J_mol = h + RT * (Z - 1) + (T * mixed.a1 - a) * f;
+    out.keepForEntropy(T, P, x, R_J_molK * lnW + mixed.a1 * f);
+    if (level === 2) this.derivatives(T, P, x, v, (w * RT) / P, f, out);
   }
 
   /** Wilson's relation (1969); not below 1e-300. */
@@ -262,6 +156,131 @@ export class PengRobinson implements ThermoModel {
     return { T_K, P_Pa, v_m3_mol: (b * Z_CRITICAL) / OMEGA_B };
   }
 
+  /** s_i = Sum_j x_j a_ij, a = Sum x_i s_i, da/dT, b = Sum x_i b_i. */
+  private mix(x: Float64Array, out: CubicProps): void {
+    const { n, one_k } = this;
+    const { root, slope, xRoot, s, mixed } = out;
+    let bm = 0;
+    for (let j = 0; j < n; j++) {
+      bm += x[j]! * this.b[j]!;
+      xRoot[j] = x[j]! * root[j]!;
+    }
+    let a = 0;
+    let halfA1 = 0;
+    for (let i = 0, at = 0; i < n; i++) {
+      let y = 0;
+      for (let j = 0; j < n; j++, at++) y += one_k[at]! * xRoot[j]!;
+      a += xRoot[i]! * y;
+      halfA1 += x[i]! * slope[i]! * y;
+      s[i] = root[i]! * y;
+    }
+    mixed.b = bm;
+    mixed.a = a;
+    mixed.a1 = 2 * halfA1;
+  }
+
+  /** mix, and besides ds_i/dT and d2a/dT2; a root's own second derivative is -1/(2T) times its first. */
+  private mixWithSlopes(x: Float64Array, out: CubicProps): void {
+    const { n, one_k } = this;
+    const { root, slope, xRoot, xSlope, s, ds, mixed } = out;
+    let bm = 0;
+    for (let j = 0; j < n; j++) {
+      bm += x[j]! * this.b[j]!;
+      xRoot[j] = x[j]! * root[j]!;
+      xSlope[j] = x[j]! * slope[j]!;
+    }
+    let a = 0;
+    let halfA1 = 0;
+    let slopes = 0;
+    for (let i = 0, at = 0; i < n; i++) {
+      let y = 0;
+      let z = 0;
+      for (let j = 0; j < n; j++, at++) {
+        const k = one_k[at]!;
+        y += k * xRoot[j]!;
+        z += k * xSlope[j]!;
+      }
+      a += xRoot[i]! * y;
+      halfA1 += xSlope[i]! * y;
+      slopes += xSlope[i]! * z;
+      s[i] = root[i]! * y;
+      ds[i] = slope[i]! * y + root[i]! * z;
+    }
+    mixed.b = bm;
+    mixed.a = a;
+    mixed.a1 = 2 * halfA1;
+    mixed.a2 = 2 * slopes - halfA1 / out.rootT;
+  }
+
+  /**
+   * Cp, Cv, partial molar enthalpies and the derivatives of ln phi, from those of f by V and B and of the pressure by V,
+   * T and n_i.
+   *
+   * @param vb  v - b, free of cancellation
+   */
+  private derivatives(
+    T: number,
+    P: number,
+    x: Float64Array,
+    v: number,
+    vb: number,
+    f: number,
+    out: CubicProps,
+  ): void {
+    const { n, b, one_k } = this;
+    const { root, s, ds, p, dT, dP, dN, hPartial, hIdeal, cpIdeal, mixed } = out;
+    const { a, a1, b: bm } = mixed;
+    const RT = R_J_molK * T;
+    const D = v * v + 2 * bm * v - bm * bm;
+    const fB = (v / D - f) / bm;
+    const turnB = (2 * (v - bm)) / (D * D);
+    const fBB = -(2 * fB + v * turnB) / bm;
+    const PV = Math.min((2 * a * (v + bm)) / (D * D) - RT / (vb * vb), (-STIFFEST * RT) / (v * v));
+    const PT = R_J_molK / vb - a1 / D;
+    let cpIg = 0;
+    for (let i = 0; i < n; i++) cpIg += x[i]! * cpIdeal[i]!;
+    const cv = cpIg - R_J_molK + T * mixed.a2 * f;
+    out.cv_J_molK = cv;
+    out.cp_J_molK = cv - (T * PT * PT) / PV;
+
+    const p0 = RT / vb;
+    const pb = RT / (vb * vb) + a * turnB;
+    const ps = -2 / D;
+    const perV = -1 / (RT * PV);
+    const overRT = 1 / RT;
+    const tb = -(a1 - a / T) * fB * overRT;
+    const ts = (2 * f * overRT) / T;
+    const tds = -2 * f * overRT;
+    for (let i = 0; i < n; i++) {
+      const pi = p0 + pb * b[i]! + ps * s[i]!;
+      const volume = pi * perV;
+      const byT = tb * b[i]! + ts * s[i]! + tds * ds[i]! + 1 / T - volume * PT;
+      p[i] = pi;
+      dP[i] = volume - 1 / P;
+      dT[i] = byT;
+      hPartial[i] = hIdeal[i]! - RT * T * byT;
+    }
+    // Row i of the second derivatives: a term in a_ij and a form of rank three in (1, b, s).
+    const nb = 1 / vb;
+    const nbb = 1 / (vb * vb) - a * fBB * overRT;
+    const nsb = -2 * fB * overRT;
+    const na = -2 * f * overRT;
+    for (let i = 0; i < n; i++) {
+      const bi = b[i]!;
+      const vi = p[i]! * perV;
+      const c0 = 1 + nb * bi - vi * p0;
+      const c1 = nb + nbb * bi + nsb * s[i]! - vi * pb;
+      const c2 = nsb * bi - vi * ps;
+      const c3 = na * root[i]!;
+      const row = i * n;
+      for (let j = i; j < n; j++) {
+        const d = c0 + c1 * b[j]! + c2 * s[j]! + c3 * one_k[row + j]! * root[j]!;
+        dN[row + j] = d;
+        dN[j * n + i] = d;
+      }
+    }
+  }
+
   private rootsAt(T: number, out: CubicProps): void {
     const rootT = Math.sqrt(T);
     const { root, slope } = out;
@@ -271,4 +290,24 @@ export class PengRobinson implements ThermoModel {
     }
     out.rootT = T;
   }
+}
+
+/**
+ * Z - B on the side asked for; says in `out` which side it was and whether there was a choice. The equation is solved
+ * as a cubic in Z - B, in which no term cancels, however dense or thin the phase.
+ */
+function chooseRoot(side: Side, q: number, B: number, out: CubicProps): number {
+  const { ends } = out;
+  const real = positiveRoots(4 * B - 1, q * B - 4 * B + 2 * B * B, -2 * B * B, ends);
+  const small = ends[0]!;
+  const big = ends[1]!;
+  out.single = real === 1;
+  if (side !== 'stable') out.side = side;
+  else if (real === 1) out.side = small + B > (Z_CRITICAL / OMEGA_B) * B ? 'vapour' : 'liquid';
+  else {
+    const liquid = small - Math.log(small) - q * attraction(small + B, B);
+    const vapour = big - Math.log(big) - q * attraction(big + B, B);
+    out.side = vapour < liquid ? 'vapour' : 'liquid';
+  }
+  return out.side === 'vapour' ? big : small;
 }

@@ -16,6 +16,8 @@ export class CubicProps extends BaseProps {
   readonly ds: Float64Array;
   /** dP/dn_i at constant T, V. */
   readonly p: Float64Array;
+  /** b [m3/mol], a [Pa m6/mol2] of the mixture and the first and second derivative of a by T. */
+  readonly mixed = { b: 0, a: 0, a1: 0, a2: 0 };
   /** Smallest and largest Z - B. */
   readonly ends = new Float64Array(2);
 
