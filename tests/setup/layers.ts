@@ -2,7 +2,8 @@
 export interface RoomRule {
   /**
    * Rooms whose code it may load. `catalogue` stands for engine/units/catalogue.ts, `engine-types` for files
-   * directly in engine/ and its types.ts files: tables and names that solve nothing, safe for the page.
+   * directly in engine/ and its types.ts files: tables and names that solve nothing, safe for the page; `formulas` for
+   * closed formulas of pure chemicals and pairs.
    */
   readonly code: readonly string[];
   /** Rooms it may `import type` from besides: erased before anything runs. */
@@ -22,9 +23,9 @@ const screen = (...more: string[]): RoomRule => ({
 export const ROOMS: Readonly<Record<string, RoomRule>> = {
   quantity: { code: [], types: [], packages: [] },
   engine: { code: ['quantity'], types: [], packages: [] },
-  data: { code: ['engine-types', 'quantity'], types: ['engine'], packages: ['valibot'] },
+  data: { code: ['engine-types', 'formulas', 'quantity'], types: ['engine'], packages: ['valibot'] },
   sketch: {
-    code: ['quantity', 'catalogue', 'data', 'engine-types'],
+    code: ['quantity', 'catalogue', 'data', 'engine-types', 'formulas'],
     types: ['engine'],
     packages: ['valibot'],
   },
@@ -104,6 +105,14 @@ export const isCatalogue = (path: string): boolean =>
 /** Files of the engine that hold types and plain tables of names only. */
 export const isEngineTypes = (path: string): boolean =>
   /^src\/engine\/([\w-]+\.ts|([\w-]+\/)+types\.ts)$/.test(path);
+
+/** Closed formulas of pure chemicals and pairs: nothing is iterated, no state; data and sketch check and fill with them. */
+export const isFormula = (path: string): boolean =>
+  /^src\/engine\/(chemicals|thermo\/(pure|pairs))\//.test(path);
+
+/** Run by hand with Node to make committed files; nothing imports them. */
+export const isScript = (path: string): boolean =>
+  ['src/data/convert.ts', 'src/drawing/makeMetrics.ts', 'src/sketch/writeSchema.ts'].includes(path);
 
 /** Code that solves: the page reaches it through the worker, never by an import. */
 export const isSolver = (path: string): boolean =>
