@@ -32,7 +32,7 @@ function feed(id: string, stream: string, random: Random, nc: number): ProblemUn
     const kind = random();
     return kind < 0.2 ? 0 : kind < 0.3 ? 1e-7 * random() : random();
   });
-  if (x.every((v) => v === 0)) x[0] = 1;
+  if (!x.some((v) => v > 0)) x[0] = 1;
   const P = between(random, 1.2e5, 40e5);
   const state = random() < 0.8 ? { T: between(random, 250, 480), P } : { P, vapourFraction: random() };
   return unit(`${id} feed > out=${stream}`, {

@@ -1,0 +1,21 @@
+import type { KindWords } from '../types';
+import { cooler } from './cooler';
+import { divide } from './divide';
+import { drum } from './drum';
+import { feed } from './feed';
+import { heater } from './heater';
+import { join } from './join';
+import { product } from './product';
+import { valve } from './valve';
+
+/** The words of every kind of unit, one line each. */
+export const KIND_WORDS: Readonly<Record<string, KindWords>> = {
+  feed,
+  product,
+  join,
+  divide,
+  valve,
+  heater,
+  cooler,
+  drum,
+};
