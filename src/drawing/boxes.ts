@@ -44,35 +44,48 @@ export const hull = (boxes: Iterable<Box>): Box | undefined => {
 export const sameBox = (a: Box, b: Box): boolean => a.x === b.x && a.y === b.y && a.w === b.w && a.h === b.h;
 
 const CELL = 96;
+/** Cells in a row of the index; sheets are far smaller than that. */
+const ROW = 65536;
+
+interface Entry {
+  readonly box: Box;
+  readonly owner: unknown;
+}
 
 /** Boxes by place, so that asking what a small box hits does not walk over the whole sheet. */
 export class BoxIndex {
-  private readonly cells = new Map<number, { readonly box: Box; readonly owner: unknown }[]>();
-
-  private *keys(b: Box): Generator<number> {
-    const x2 = Math.floor((b.x + b.w) / CELL);
-    const y2 = Math.floor((b.y + b.h) / CELL);
-    for (let cx = Math.floor(b.x / CELL); cx <= x2; cx++) {
-      for (let cy = Math.floor(b.y / CELL); cy <= y2; cy++) yield cx * 65536 + cy;
-    }
-  }
+  private readonly cells = new Map<number, Entry[]>();
 
   /** @param owner who put it there; `hits` can leave out one owner's boxes */
   add(box: Box, owner?: unknown): void {
-    for (const key of this.keys(box)) {
-      const cell = this.cells.get(key);
-      if (cell) cell.push({ box, owner });
-      else this.cells.set(key, [{ box, owner }]);
+    const entry: Entry = { box, owner };
+    const x2 = Math.floor((box.x + box.w) / CELL);
+    const y2 = Math.floor((box.y + box.h) / CELL);
+    for (let cx = Math.floor(box.x / CELL); cx <= x2; cx++) {
+      for (let cy = Math.floor(box.y / CELL); cy <= y2; cy++) {
+        const cell = this.cells.get(cx * ROW + cy);
+        if (cell) cell.push(entry);
+        else this.cells.set(cx * ROW + cy, [entry]);
+      }
     }
   }
 
-  /** Whether anything of another owner overlaps the box. */
-  hits(box: Box, except?: unknown): boolean {
-    for (const key of this.keys(box)) {
-      const cell = this.cells.get(key);
-      if (!cell) continue;
-      for (const entry of cell) {
-        if ((except === undefined || entry.owner !== except) && overlaps(entry.box, box)) return true;
+  /** Whether anything of another owner overlaps the box when it is grown by `clear` px on all sides. */
+  hits(box: Box, clear = 0, except?: unknown): boolean {
+    const x1 = box.x - clear;
+    const y1 = box.y - clear;
+    const x2 = box.x + box.w + clear;
+    const y2 = box.y + box.h + clear;
+    const cx2 = Math.floor(x2 / CELL);
+    const cy2 = Math.floor(y2 / CELL);
+    for (let cx = Math.floor(x1 / CELL); cx <= cx2; cx++) {
+      for (let cy = Math.floor(y1 / CELL); cy <= cy2; cy++) {
+        const cell = this.cells.get(cx * ROW + cy);
+        if (!cell) continue;
+        for (const { box: b, owner } of cell) {
+          const over = b.x < x2 && x1 < b.x + b.w && b.y < y2 && y1 < b.y + b.h;
+          if (over && (except === undefined || owner !== except)) return true;
+        }
       }
     }
     return false;

@@ -61,7 +61,7 @@ export function placeDiamond(
     for (const along of places(length, piece + 2 === points.length)) {
       const at: Point = [Math.round(x1 + ux * along), Math.round(y1 + uy * along)];
       if (crossings.some(([x, y]) => Math.abs(x - at[0]) + Math.abs(y - at[1]) < FROM_CROSSING)) continue;
-      if (taken.hits(boxAround(at, DIAMOND + 2), line)) continue;
+      if (taken.hits(boxAround(at, DIAMOND), 2, line)) continue;
       if (ownPieceNear(points, piece, at)) continue;
       return { at, piece };
     }

@@ -1,4 +1,4 @@
-import { type BoxIndex, grown } from './boxes';
+import { type BoxIndex, grown, overlaps } from './boxes';
 import { DIAMOND, piecesByLength } from './diamonds';
 import { measureText, numberRoom } from './metrics';
 import { TEXT } from './tokens';
@@ -53,24 +53,31 @@ function shifts(from: number, to: number): number[] {
   return out;
 }
 
-/** Boxes to try for a label, in order. */
-function candidates(points: readonly Point[], anchor: Anchor, size: LabelSize, half: number): Box[] {
-  const out: Box[] = [];
-  const sides = (piece: number, [x, y]: Point, off: number): void => {
-    const across = points[piece]![1] === points[piece + 1]![1];
-    if (across) {
-      const left = Math.round(x - size.middle);
-      out.push({ x: left, y: Math.ceil(y + off), w: size.w, h: size.h });
-      out.push({ x: left, y: Math.floor(y - off - size.h), w: size.w, h: size.h });
-    } else {
-      const top = Math.round(y - size.h / 2);
-      out.push({ x: Math.ceil(x + off), y: top, w: size.w, h: size.h });
-      out.push({ x: Math.floor(x - off - size.w), y: top, w: size.w, h: size.h });
-    }
-  };
+/** Both sides of a straight piece at one of its points: below and above it, or right and left of it. */
+function* sides(across: boolean, [x, y]: Point, off: number, size: LabelSize): Generator<Box> {
+  const { w, h, middle } = size;
+  if (across) {
+    const left = Math.round(x - middle);
+    yield { x: left, y: Math.ceil(y + off), w, h };
+    yield { x: left, y: Math.floor(y - off - h), w, h };
+  } else {
+    const top = Math.round(y - h / 2);
+    yield { x: Math.ceil(x + off), y: top, w, h };
+    yield { x: Math.floor(x - off - w), y: top, w, h };
+  }
+}
+
+/** Beyond the free end of a hanging line, in its direction. */
+function* beyond([px, py]: Point, [x, y]: Point, { w, h, middle }: LabelSize): Generator<Box> {
+  const off = CLEAR + 4;
+  if (py === y) yield { x: x > px ? x + off : x - off - w, y: Math.round(y - h / 2), w, h };
+  else yield { x: Math.round(x - middle), y: y > py ? y + off : y - off - h, w, h };
+}
+
+/** Boxes to try for a label, in order: at its diamond, then along its piece, then along the other pieces. */
+function* candidates({ points, anchor, size, half, freeEnd }: LabelWish): Generator<Box> {
   const beside = half + CLEAR;
   const first = anchor.diamond ? Math.max(beside, DIAMOND + CLEAR) : beside;
-  sides(anchor.piece, anchor.at, first);
   const order = [anchor.piece, ...piecesByLength(points).filter((k) => k !== anchor.piece)];
   for (const piece of order) {
     const a = points[piece]!;
@@ -79,15 +86,41 @@ function candidates(points: readonly Point[], anchor: Anchor, size: LabelSize, h
     const axis = across ? 0 : 1;
     const own = piece === anchor.piece;
     const middle = own ? anchor.at[axis] : (a[axis] + b[axis]) / 2;
+    const on = (by: number): Point => (across ? [middle + by, a[1]] : [a[0], middle + by]);
+    yield* sides(across, on(0), own ? first : beside, size);
+    if (own && freeEnd) {
+      const last = points.length - 1;
+      if (freeEnd === 'last') yield* beyond(points[last - 1]!, points[last]!, size);
+      else yield* beyond(points[1]!, points[0]!, size);
+    }
+    const reach = (across ? size.w - size.middle : size.h / 2) + CLEAR + DIAMOND;
     const [from, to] = [Math.min(a[axis], b[axis]) - middle, Math.max(a[axis], b[axis]) - middle];
-    if (!own) sides(piece, across ? [middle, a[1]] : [a[0], middle], beside);
     for (const by of shifts(from, to)) {
-      const at: Point = across ? [middle + by, a[1]] : [a[0], middle + by];
-      const reach = across ? size.w / 2 + 24 : size.h / 2;
-      sides(piece, at, own && anchor.diamond && Math.abs(by) < reach + DIAMOND ? first : beside);
+      yield* sides(across, on(by), own && anchor.diamond && Math.abs(by) < reach ? first : beside, size);
     }
   }
-  return out;
+}
+
+/** Further out from the diamond when nothing close is free [px]. */
+const FURTHER = [16, 32] as const;
+
+/** Boxes further out at the diamond, each with the strip between the two that must be free as well. */
+function* furtherOut({ points, anchor, size, half }: LabelWish): Generator<readonly [Box, Box]> {
+  if (!anchor.diamond) return;
+  const across = points[anchor.piece]![1] === points[anchor.piece + 1]![1];
+  const [x, y] = anchor.at;
+  const first = Math.max(half, DIAMOND) + CLEAR;
+  for (const far of FURTHER) {
+    for (const by of [0, STEP, -STEP]) {
+      const at: Point = across ? [x + by, y] : [x, y + by];
+      for (const box of sides(across, at, first + far, size)) {
+        const strip: Box = across
+          ? { x: x - 2, y: box.y > y ? y + DIAMOND + 1 : box.y + box.h, w: 4, h: far + CLEAR - 1 }
+          : { x: box.x > x ? x + DIAMOND + 1 : box.x + box.w, y: y - 2, w: far + CLEAR - 1, h: 4 };
+        yield [box, strip];
+      }
+    }
+  }
 }
 
 export interface LabelWish {
@@ -96,6 +129,8 @@ export interface LabelWish {
   readonly size: LabelSize;
   /** Half the width of the line or its ribbon [px]. */
   readonly half: number;
+  /** The end of a hanging line that nothing is joined to. */
+  readonly freeEnd?: 'first' | 'last';
 }
 
 /** How many free places are counted before a label counts as easy to place. */
@@ -103,25 +138,52 @@ const EASY = 6;
 
 /**
  * Places labels one after another, those with the fewest free places first, each at the first of its candidates that
- * clears everything by 6 px.
+ * clears everything by 6 px. A label that finds none may send one other label to its next free place.
  *
- * @param taken symbols, lines, diamonds, tags and marks; the placed labels are added
+ * @param taken symbols, lines, diamonds, tags and marks
  * @returns a box each, undefined where no place is free
  */
 export function placeLabels(wishes: readonly LabelWish[], taken: BoxIndex): readonly (Box | undefined)[] {
-  const tried = wishes.map((wish) => candidates(wish.points, wish.anchor, wish.size, wish.half));
-  const free = tried.map((boxes) => boxes.filter((box) => !taken.hits(grown(box, CLEAR))));
+  const free = wishes.map((wish) => {
+    const boxes: Box[] = [];
+    for (const box of candidates(wish)) if (!taken.hits(box, CLEAR)) boxes.push(box);
+    return boxes;
+  });
   const order = wishes.map((_, k) => k);
   const ease = (k: number): number => Math.min(free[k]!.length, EASY);
   order.sort((a, b) => ease(a) - ease(b) || a - b);
-  const out: (Box | undefined)[] = wishes.map(() => undefined);
+  const placed: (Box | undefined)[] = wishes.map(() => undefined);
+  const inTheWay = (box: Box, except: number): readonly number[] => {
+    const room = grown(box, CLEAR);
+    return order.filter((j) => j !== except && placed[j] !== undefined && overlaps(room, placed[j]));
+  };
+  const fits = (box: Box, except: number): boolean => inTheWay(box, except).length === 0;
+
+  /** Takes a place that one other label can leave for another one. */
+  const swap = (k: number): boolean => {
+    for (const box of free[k]!) {
+      const [j, ...more] = inTheWay(box, k);
+      if (j === undefined || more.length > 0) continue;
+      placed[k] = box;
+      const next = free[j]!.find((b) => fits(b, j));
+      if (next) {
+        placed[j] = next;
+        return true;
+      }
+      placed[k] = undefined;
+    }
+    return false;
+  };
   for (const k of order) {
-    const box = free[k]!.find((b) => !taken.hits(grown(b, CLEAR)));
-    if (!box) continue;
-    out[k] = box;
-    taken.add(box);
+    placed[k] = free[k]!.find((box) => fits(box, k));
+    if (placed[k] || swap(k)) continue;
+    for (const [box, strip] of furtherOut(wishes[k]!)) {
+      if (taken.hits(box, CLEAR) || taken.hits(strip) || !fits(box, k) || !fits(strip, k)) continue;
+      placed[k] = box;
+      break;
+    }
   }
-  return out;
+  return placed;
 }
 
 /** Where the rows of a label stand in its box. */
@@ -135,5 +197,7 @@ export const rowsIn = (
 });
 
 /** Where a label opens when it had to fold: below its diamond, or right of it. */
-export const foldedBox = (wish: LabelWish): Box =>
-  candidates(wish.points, wish.anchor, wish.size, wish.half)[0]!;
+export function foldedBox(wish: LabelWish): Box {
+  for (const box of candidates(wish)) return box;
+  return { x: wish.anchor.at[0], y: wish.anchor.at[1], w: wish.size.w, h: wish.size.h };
+}

@@ -1,8 +1,7 @@
 import { boxOfPiece, overlaps } from './boxes';
+import { APART, type Lane } from './search';
 import type { Box, Point } from './types';
 
-/** Parallel pieces of two lines closer than this are drawn apart [px]. */
-const APART = 10;
 /** How far a piece may be moved, nearest first [px]. */
 const OFFSETS = [8, -8, 12, -12, 16, -16, 24, -24, 32, -32, 40, -40, 48, -48] as const;
 /** Clear of symbols, as when the way was found [px]. */
@@ -10,18 +9,13 @@ const CLEAR = 6;
 /** What is left of the straight piece at a port [px]. */
 const SHORTEST_STUB = 8;
 
-interface Piece {
-  line: number;
+interface Piece extends Lane {
+  readonly line: number;
   /** Index of its first point. */
-  k: number;
-  across: boolean;
-  /** Place across its direction. */
-  at: number;
-  lo: number;
-  hi: number;
+  readonly k: number;
 }
 
-function piecesOf(lines: readonly (readonly Point[])[]): Piece[] {
+export function piecesOf(lines: readonly (readonly Point[])[]): Piece[] {
   const pieces: Piece[] = [];
   lines.forEach((points, line) => {
     for (let k = 0; k + 1 < points.length; k++) pieces.push(pieceAt(points, line, k));
@@ -48,8 +42,23 @@ const tooClose = (a: Piece, b: Piece): boolean =>
 const cross = (a: Piece, b: Piece): boolean =>
   a.line !== b.line && a.across !== b.across && a.at > b.lo && a.at < b.hi && b.at > a.lo && b.at < a.hi;
 
+/** Lines that another line runs along, each with the lines it is too close to. */
+export function tangles(lines: readonly (readonly Point[])[]): ReadonlyMap<number, ReadonlySet<number>> {
+  const out = new Map<number, Set<number>>();
+  const pieces = piecesOf(lines);
+  for (const a of pieces) {
+    for (const b of pieces) {
+      if (!tooClose(a, b)) continue;
+      const with_ = out.get(a.line) ?? new Set<number>();
+      with_.add(b.line);
+      out.set(a.line, with_);
+    }
+  }
+  return out;
+}
+
 /** Closeness and crossings of one line with all others: fewer is better; closeness counts far more. */
-function trouble(points: readonly Point[], line: number, others: readonly Piece[]): number {
+export function trouble(points: readonly Point[], line: number, others: readonly Piece[]): number {
   let sum = 0;
   for (let k = 0; k + 1 < points.length; k++) {
     const piece = pieceAt(points, line, k);

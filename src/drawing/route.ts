@@ -1,6 +1,6 @@
 import { boxOfPiece, grown, hull, overlaps } from './boxes';
-import { findWay, type Heading } from './search';
-import { AWAY } from './transform';
+import { findWay, type Heading, type Lane } from './search';
+import { AWAY, HEADING } from './transform';
 import type { Box, Point, PortPlace, Side } from './types';
 
 /** A line leaves and enters its ports straight for as much as there is room, the first of these that is free [px]. */
@@ -10,8 +10,6 @@ const HANGING = [40, 32, 24, 16] as const;
 /** How far around its ends a line looks for a way at first [px]. */
 const REGION = 160;
 const EVERYWHERE: Box = { x: -1e6, y: -1e6, w: 2e6, h: 2e6 };
-
-const HEADING: Readonly<Record<Side, Heading>> = { right: 0, bottom: 1, left: 2, top: 3 };
 
 export interface RouteEnd {
   readonly port: PortPlace;
@@ -51,14 +49,25 @@ export function simplified(points: readonly Point[]): Point[] {
   return out;
 }
 
+/** How deep a port lies inside its own symbol's box (a notch, a circle's side) [px]. */
+function depthOf({ port: { at, side }, own }: RouteEnd): number {
+  if (!own) return 0;
+  const [ux, uy] = AWAY[side];
+  const edge =
+    ux > 0 ? own.x + own.w - at[0] : ux < 0 ? at[0] - own.x : uy > 0 ? own.y + own.h - at[1] : at[1] - own.y;
+  return Math.max(0, edge);
+}
+
 /** Length of the straight piece at a port: shorter where another symbol is close or the other port faces it nearby. */
 function stubOf(end: RouteEnd, most: number, obstacles: readonly Box[]): number {
-  for (const length of STUBS) {
+  const depth = depthOf(end);
+  for (const stub of STUBS) {
+    const length = stub + depth;
     if (length > most) continue;
     if (!crossesAny(end.port.at, along(end.port.at, end.port.side, length), obstacles, 6, end.own))
       return length;
   }
-  return Math.min(most, STUBS.at(-1)!);
+  return Math.min(most, STUBS.at(-1)! + depth);
 }
 
 /** Free way between two ports that face each other across less than two stubs, half of it [px]. */
@@ -67,6 +76,13 @@ function halfGap(a: PortPlace, b: PortPlace): number {
   if (AWAY[b.side][0] !== -ux || AWAY[b.side][1] !== -uy) return Infinity;
   const ahead = (b.at[0] - a.at[0]) * ux + (b.at[1] - a.at[1]) * uy;
   return ahead > 0 ? ahead / 2 : Infinity;
+}
+
+/** What else a line is to heed when it is led once more, because it ran along another one. */
+export interface Detour {
+  readonly lanes: readonly Lane[];
+  /** Most that the straight pieces at its ports may take [px]. */
+  readonly stubs: readonly [number, number];
 }
 
 export interface Route {
@@ -85,12 +101,31 @@ export function routeLine(
   via: readonly Point[],
   obstacles: readonly Box[],
 ): Route {
+  return ledOnce(from, to, via, obstacles) ?? lastResort(from, to);
+}
+
+/** The line once more, heeding others; undefined when there is no way. */
+export const detourLine = (
+  from: RouteEnd,
+  to: RouteEnd,
+  obstacles: readonly Box[],
+  detour: Detour,
+): Route | undefined => ledOnce(from, to, [], obstacles, detour);
+
+function ledOnce(
+  from: RouteEnd,
+  to: RouteEnd,
+  via: readonly Point[],
+  obstacles: readonly Box[],
+  detour?: Detour,
+): Route | undefined {
   const a = from.port;
   const b = to.port;
   const own = [from.own, to.own];
   const straight = simplified([a.at, b.at]);
   if (
     via.length === 0 &&
+    !detour &&
     halfGap(a, b) < Infinity &&
     (a.at[0] === b.at[0] || a.at[1] === b.at[1]) &&
     !obstacles.some((o) => !own.includes(o) && overlaps(o, boxOfPiece(a.at, b.at, 6)))
@@ -98,21 +133,22 @@ export function routeLine(
     return { points: straight, region: boxOfPiece(a.at, b.at, 6) };
   }
   const half = via.length === 0 ? halfGap(a, b) : Infinity;
-  const start = along(a.at, a.side, stubOf(from, half, obstacles));
-  const end = along(b.at, b.side, stubOf(to, half, obstacles));
+  const start = along(a.at, a.side, stubOf(from, Math.min(half, detour?.stubs[0] ?? half), obstacles));
+  const end = along(b.at, b.side, stubOf(to, Math.min(half, detour?.stubs[1] ?? half), obstacles));
   const stops = [start, ...via.filter((v) => !obstacles.some((o) => inside(v, grown(o, 6)))), end];
   const arrive = ((HEADING[b.side] + 2) & 3) as Heading;
 
   const around = hull([...stops, a.at, b.at].map((p) => boxOfPiece(p, p, REGION)))!;
   const near = obstacles.filter((o) => overlaps(grown(o, 16), around));
-  for (const [boxes, region] of [
+  const looks: readonly (readonly [readonly Box[], Box])[] = [
     [near, around],
-    [obstacles, EVERYWHERE],
-  ] as const) {
-    const points = throughStops(stops, HEADING[a.side], arrive, boxes, region);
+    ...(detour ? [] : [[obstacles, EVERYWHERE] as const]),
+  ];
+  for (const [boxes, region] of looks) {
+    const points = throughStops(stops, HEADING[a.side], arrive, boxes, region, detour?.lanes);
     if (points) return { points: simplified([a.at, ...points, b.at]), region };
   }
-  return { points: simplified([a.at, start, ...elbow(start, end, a.side), end, b.at]), region: EVERYWHERE };
+  return undefined;
 }
 
 function throughStops(
@@ -121,6 +157,7 @@ function throughStops(
   arrive: Heading,
   obstacles: readonly Box[],
   region: Box,
+  lanes?: readonly Lane[],
 ): Point[] | undefined {
   const points: Point[] = [stops[0]!];
   let now = heading;
@@ -128,7 +165,7 @@ function throughStops(
     const last = k === stops.length - 1;
     const leg = { from: stops[k - 1]!, heading: now, to: stops[k]! };
     if (!last && leg.from[0] === leg.to[0] && leg.from[1] === leg.to[1]) continue;
-    const way = findWay(last ? { ...leg, arrive } : leg, obstacles, region);
+    const way = findWay(last ? { ...leg, arrive } : leg, obstacles, region, lanes);
     if (!way) return undefined;
     points.push(...way.slice(1));
     const [p, q] = [way.at(-2), way.at(-1)];
@@ -139,9 +176,12 @@ function throughStops(
   return points;
 }
 
-/** Last resort when symbols leave no way at all: one bend, straight over whatever is there. */
-const elbow = (start: Point, end: Point, side: Side): Point[] =>
-  side === 'left' || side === 'right' ? [[end[0], start[1]]] : [[start[0], end[1]]];
+/** When symbols leave no way at all: one bend between the straight pieces, over whatever is there. */
+function lastResort({ port: a }: RouteEnd, { port: b }: RouteEnd): Route {
+  const [start, end] = [along(a.at, a.side, STUBS[1]), along(b.at, b.side, STUBS[1])];
+  const bend: Point = AWAY[a.side][0] !== 0 ? [end[0], start[1]] : [start[0], end[1]];
+  return { points: simplified([a.at, start, bend, end, b.at]), region: EVERYWHERE };
+}
 
 /** A stream with one end: straight away from its port (or towards it), shorter where a symbol is in the way. */
 export function hangingLine(end: RouteEnd, outgoing: boolean, obstacles: readonly Box[]): Route {

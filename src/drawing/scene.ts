@@ -76,13 +76,9 @@ function placeDiamonds(
   wires.forEach((wire, k) => {
     for (const box of pieceBoxes(wire.points, HALF_LINE)) taken.add(box, k);
   });
-  const all = wires.map((wire) => wire.points);
+  const crossings = crossingsOf(wires.map((wire) => wire.points));
   return wires.map((wire, k) => {
-    const crossings = crossingsOf(
-      wire.points,
-      all.filter((_, j) => j !== k),
-    );
-    const place = placeDiamond(wire.points, k, taken, crossings);
+    const place = placeDiamond(wire.points, k, taken, crossings[k]!);
     if (place) taken.add(boxAround(place.at, DIAMOND));
     return place;
   });
@@ -130,6 +126,7 @@ function drawLabels(
       points: wire.points,
       anchor: { ...(place ?? middleOf(wire.points)), diamond: place !== undefined },
       size: labelSize(rows),
+      ...(wire.freeEnd ? { freeEnd: wire.freeEnd } : {}),
       half: Math.max((input.ribbons?.get(wire.stream.id) ?? 0) / 2, HALF_LINE),
     };
     const from = wire.stream.from?.[0];

@@ -16,6 +16,22 @@ const LATE = 1e-3;
 /** Directions of travel in order right, down, left, up. */
 export type Heading = 0 | 1 | 2 | 3;
 
+/** A straight piece of another line: crossing it is free, running along it is not. */
+export interface Lane {
+  readonly across: boolean;
+  /** Place across its direction, and its extent. */
+  readonly at: number;
+  readonly lo: number;
+  readonly hi: number;
+  /** The way may run beside it: its edges are offered as channels. */
+  readonly channel?: boolean;
+}
+
+/** Lines keep this far from lanes [px]; running along one costs as much as this many times the way. */
+export const APART = 10;
+const LANE_COST = 12;
+const BESIDE_LANE = 12;
+
 export interface Leg {
   readonly from: Point;
   readonly heading: Heading;
@@ -27,7 +43,12 @@ export interface Leg {
 /** Indices of the sorted values strictly between a and b: from, to (exclusive). */
 function span(values: Float64Array, a: number, b: number): [number, number] {
   let lo = 0;
-  while (lo < values.length && values[lo]! <= a) lo++;
+  let end = values.length;
+  while (lo < end) {
+    const middle = (lo + end) >> 1;
+    if (values[middle]! <= a) lo = middle + 1;
+    else end = middle;
+  }
   let hi = lo;
   while (hi < values.length && values[hi]! < b) hi++;
   return [lo, hi];
@@ -44,7 +65,7 @@ function coordinates(
   return Float64Array.from(all).sort();
 }
 
-/** Two bits an edge: 1 closed, 2 costly. Edges run from a crossing to the next one right (across) or below (down). */
+/** Bits of an edge: 1 closed, 2 near a symbol, 4 along another line. Edges run from a crossing to the next one right (across) or below (down). */
 class Grid {
   readonly nx: number;
   readonly ny: number;
@@ -55,6 +76,7 @@ class Grid {
     readonly xs: Float64Array,
     readonly ys: Float64Array,
     obstacles: readonly Box[],
+    lanes: readonly Lane[],
   ) {
     this.nx = xs.length;
     this.ny = ys.length;
@@ -63,6 +85,20 @@ class Grid {
     for (const box of obstacles) {
       this.mark(grown(box, SOFT), 2);
       this.mark(grown(box, HARD), 1);
+    }
+    for (const lane of lanes) this.markLane(lane);
+  }
+
+  private markLane({ across, at, lo, hi }: Lane): void {
+    const { xs, ys, nx } = this;
+    const [along, aside] = across ? [xs, ys] : [ys, xs];
+    const [a1, a2] = span(along, lo - 4, hi + 4);
+    const [b1, b2] = span(aside, at - APART, at + APART);
+    for (let b = b1; b < b2; b++) {
+      for (let a = Math.max(0, a1 - 1); a < a2; a++) {
+        if (across) this.across[b * nx + a]! |= 4;
+        else this.down[a * nx + b]! |= 4;
+      }
     }
   }
 
@@ -137,7 +173,7 @@ function pop(): number {
 }
 
 /** Fewest bends that lead from a point with a heading to another point and heading, in open space. */
-function bendsLeft(dx: number, dy: number, heading: number, arrive: number | undefined): number {
+export function bendsLeft(dx: number, dy: number, heading: number, arrive: number | undefined): number {
   const hx = heading === 0 ? 1 : heading === 2 ? -1 : 0;
   const hy = heading === 1 ? 1 : heading === 3 ? -1 : 0;
   const ahead = dx * hx + dy * hy;
@@ -153,9 +189,15 @@ function bendsLeft(dx: number, dy: number, heading: number, arrive: number | und
  * Source: Hart, Nilsson & Raphael, IEEE Trans. Syst. Sci. Cybern. 4(2), 1968, p. 100.
  *
  * @param within only this part of the sheet is looked at
+ * @param lanes  pieces of other lines not to run along
  * @returns corners from `from` to `to`, or undefined when there is no way
  */
-export function findWay(leg: Leg, obstacles: readonly Box[], within: Box): Point[] | undefined {
+export function findWay(
+  leg: Leg,
+  obstacles: readonly Box[],
+  within: Box,
+  lanes: readonly Lane[] = [],
+): Point[] | undefined {
   const edgesX: number[] = [];
   const edgesY: number[] = [];
   for (const b of obstacles) {
@@ -164,9 +206,15 @@ export function findWay(leg: Leg, obstacles: readonly Box[], within: Box): Point
       edgesY.push(b.y - c, b.y + b.h + c);
     }
   }
+  for (const { across, at, lo, hi, channel } of lanes) {
+    if (!channel) continue;
+    const [along, aside] = across ? [edgesX, edgesY] : [edgesY, edgesX];
+    aside.push(at - BESIDE_LANE, at + BESIDE_LANE);
+    along.push(lo - BESIDE_LANE, hi + BESIDE_LANE);
+  }
   const xs = coordinates([leg.from[0], leg.to[0]], within.x, within.x + within.w, edgesX);
   const ys = coordinates([leg.from[1], leg.to[1]], within.y, within.y + within.h, edgesY);
-  const grid = new Grid(xs, ys, obstacles);
+  const grid = new Grid(xs, ys, obstacles, lanes);
   const { nx, ny, across, down } = grid;
   const node = ([x, y]: Point): number => ys.indexOf(y) * nx + xs.indexOf(x);
   const goal = node(leg.to);
@@ -204,7 +252,7 @@ export function findWay(leg: Leg, obstacles: readonly Box[], within: Box): Point
       const x = xs[next % nx]!;
       const y = ys[Math.floor(next / nx)]!;
       const length = Math.abs(x - xs[ix]!) + Math.abs(y - ys[iy]!);
-      let to = g + length * (edge & 2 ? SOFT_COST : 1);
+      let to = g + length * (edge & 4 ? LANE_COST : edge & 2 ? SOFT_COST : 1);
       if (d !== heading) to += BEND + LATE * (Math.abs(gx - xs[ix]!) + Math.abs(gy - ys[iy]!));
       const s = next * 4 + d;
       if (to < cost[s]!) {

@@ -1,4 +1,4 @@
-import { type BoxIndex, grown } from './boxes';
+import type { BoxIndex } from './boxes';
 import { measureText, numberRoom } from './metrics';
 import { TEXT } from './tokens';
 import type { Box, Ink, Point, TextShape } from './types';
@@ -17,28 +17,43 @@ const dutyRoom = (text: string): number => {
   return measureText('Q ', TEXT.duty) + numberRoom(TEXT.duty) + measureText(` ${unit}`, TEXT.duty);
 };
 
-/** A text beside a point: right of it, left, below, above; the first that is free. */
+type Beside = 'right' | 'left' | 'below' | 'above';
+
+/** Sideways steps when the place right beside the point is taken [px]. */
+const SLIDES = [0, 10, -10, 20, -20, 32, -32] as const;
+
+/** A text beside a point: right of it, left, below, above; the first that is free, then the same with a slide along. */
 function beside(
   [x, y]: Point,
   text: string,
   style: { readonly size: number; readonly ink: Ink; readonly room: number },
-  order: readonly ('right' | 'left' | 'below' | 'above')[],
+  order: readonly Beside[],
   taken: BoxIndex,
-  away: Point,
+  [dx, dy]: Point,
 ): TextPlace {
   const { size, ink, room } = style;
   const h = size + 2;
-  const [dx, dy] = away;
-  const boxes: Readonly<
-    Record<(typeof order)[number], { readonly box: Box; readonly anchor: TextShape['anchor'] }>
-  > = {
-    right: { box: { x: x + dx, y: y - h / 2, w: room, h }, anchor: 'start' },
-    left: { box: { x: x - dx - room, y: y - h / 2, w: room, h }, anchor: 'end' },
-    below: { box: { x: x - room / 2, y: y + dy, w: room, h }, anchor: 'middle' },
-    above: { box: { x: x - room / 2, y: y - dy - h, w: room, h }, anchor: 'middle' },
+  const boxAt = (side: Beside, slide: number): Box => {
+    switch (side) {
+      case 'right':
+        return { x: x + dx, y: y - h / 2 + slide, w: room, h };
+      case 'left':
+        return { x: x - dx - room, y: y - h / 2 + slide, w: room, h };
+      case 'below':
+        return { x: x - room / 2 + slide, y: y + dy, w: room, h };
+      case 'above':
+        return { x: x - room / 2 + slide, y: y - dy - h, w: room, h };
+    }
   };
-  const side = order.find((s) => !taken.hits(grown(boxes[s].box, CLEAR))) ?? order[0]!;
-  const { box, anchor } = boxes[side];
+  const anchorOf: Readonly<Record<Beside, TextShape['anchor']>> = {
+    right: 'start',
+    left: 'end',
+    below: 'middle',
+    above: 'middle',
+  };
+  const tries = SLIDES.flatMap((slide) => order.map((side) => ({ side, box: boxAt(side, slide) })));
+  const { side, box } = tries.find((t) => !taken.hits(t.box, CLEAR)) ?? tries[0]!;
+  const anchor = anchorOf[side];
   const tx = anchor === 'start' ? box.x : anchor === 'end' ? box.x + box.w : box.x + box.w / 2;
   const shape: TextShape = {
     at: [tx, box.y + size * 0.86],

@@ -3,6 +3,7 @@ import { CATALOGUE } from '../engine/units/catalogue';
 import type { KindCatalogue, PortSpec } from '../engine/units/types';
 import type { Sketch, SketchUnit } from '../sketch/types';
 import { boxOfPiece } from './boxes';
+import { withSides } from './dotSides';
 import { symbolOf } from './symbols/registry';
 import { boxOnSheet, type Pose, portOnSheet, poseOf, toSheet } from './transform';
 import type { Box, Point, PortPlace, SymbolData } from './types';
@@ -40,7 +41,7 @@ export function standingUnits(
   kinds: Readonly<Record<string, KindCatalogue>> = CATALOGUE,
 ): readonly StandingUnit[] {
   const used = usedPorts(sketch);
-  return sketch.units.map((unit) => {
+  const units = sketch.units.map((unit): StandingUnit => {
     const symbol = symbolOf(unit, kinds, used.get(unit.id));
     const pose = poseOf(unit, moved?.get(unit.id));
     const plain = { unit, symbol, pose, box: boxOnSheet(pose, symbol.box) };
@@ -48,6 +49,7 @@ export function standingUnits(
     const link = [toSheet(pose, symbol.link.from), toSheet(pose, symbol.link.to)] as const;
     return { ...plain, link, linkBox: boxOfPiece(...link, 4) };
   });
+  return withSides(units, sketch);
 }
 
 export const portOf = (standing: StandingUnit, name: string): PortPlace | undefined => {
@@ -55,7 +57,10 @@ export const portOf = (standing: StandingUnit, name: string): PortPlace | undefi
   return port && portOnSheet(standing.pose, port);
 };
 
-/** A port's place on the sheet; undefined when the unit has no such port. */
+/**
+ * The usual place of a unit's port on the sheet; undefined when the unit has no such port. The lines of a dot may have
+ * chosen other sides: a drawn unit knows them (portOfShape in transform.ts).
+ */
 export function portPlace(
   unit: SketchUnit,
   name: string,

@@ -1,4 +1,4 @@
-import { type BoxIndex, grown } from './boxes';
+import type { BoxIndex } from './boxes';
 import { LIMIT_SIDE, STATE_ROOM } from './marks';
 import { measureText } from './metrics';
 import { TEXT } from './tokens';
@@ -61,10 +61,10 @@ export function placeTag(tag: string, symbol: Box, taken: BoxIndex): TagPlace {
   const at = corners(symbol, width);
   for (const corner of at) {
     const place = placeAt(corner, width, 'left');
-    if (taken.hits(grown(place.box, CLEAR))) continue;
+    if (taken.hits(place.box, CLEAR)) continue;
     for (const side of ['left', 'right'] as const) {
       const withMark = placeAt(corner, width, side);
-      if (!taken.hits(grown(withMark.limitBox, CLEAR))) return withMark;
+      if (!taken.hits(withMark.limitBox, CLEAR)) return withMark;
     }
   }
   return placeAt(at[0]!, width, 'left');

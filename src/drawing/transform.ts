@@ -1,5 +1,5 @@
 import type { SketchUnit } from '../sketch/types';
-import type { Box, Point, PortPlace, Side } from './types';
+import type { Box, Point, PortPlace, Side, UnitShape } from './types';
 
 export type Turn = 0 | 90 | 180 | 270;
 
@@ -23,6 +23,8 @@ export const AWAY: Readonly<Record<Side, Point>> = {
   left: [-1, 0],
   top: [0, -1],
 };
+/** Direction of travel away from a side: right, down, left, up. */
+export const HEADING: Readonly<Record<Side, 0 | 1 | 2 | 3>> = { right: 0, bottom: 1, left: 2, top: 3 };
 const ROUND: readonly Side[] = ['right', 'bottom', 'left', 'top'];
 
 export const opposite = (side: Side): Side => ROUND[(ROUND.indexOf(side) + 2) % 4]!;
@@ -60,6 +62,12 @@ export const portOnSheet = (pose: Pose, port: PortPlace): PortPlace => ({
   at: toSheet(pose, port.at),
   side: sideOnSheet(pose, port.side),
 });
+
+/** Where a drawn unit's port is on the sheet; undefined when it has no such port. */
+export const portOfShape = (shape: UnitShape, name: string): PortPlace | undefined => {
+  const port = shape.symbol.ports(name);
+  return port && portOnSheet(shape, port);
+};
 
 /** The same pose as an SVG transform for the symbol's own paths. */
 export const transformOf = ({ at: [x, y], turn, mirror }: Pose): string =>

@@ -58,6 +58,8 @@ export interface SymbolData {
   /** Middle of the name inside. */
   readonly nameAt?: Point;
   readonly link?: LinkData;
+  /** Lines may choose among these places, whatever their port's name (join, divide). */
+  readonly sides?: readonly PortPlace[];
   /** No tag is drawn (join, divide, feed, product). */
   readonly tagless?: boolean;
 }

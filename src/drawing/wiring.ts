@@ -1,8 +1,8 @@
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Sketch, SketchStream } from '../sketch/types';
 import { boxOfPiece, grown, hull, overlaps } from './boxes';
-import { drawApart } from './nudge';
-import { hangingLine, type Route, type RouteEnd, routeLine } from './route';
+import { drawApart, piecesOf, tangles, trouble } from './nudge';
+import { detourLine, hangingLine, type Route, type RouteEnd, routeLine } from './route';
 import { portOf, type StandingUnit } from './standing';
 import type { Box, Point } from './types';
 
@@ -11,6 +11,8 @@ export interface Wire {
   readonly stream: SketchStream;
   readonly points: readonly Point[];
   readonly hanging: boolean;
+  /** The end that nothing is joined to. */
+  readonly freeEnd?: 'first' | 'last';
   /** How far the drawn line runs on beyond its ends [px]. */
   readonly reach: readonly [number, number];
 }
@@ -24,6 +26,8 @@ interface Kept {
 export interface RouteCache {
   readonly obstacles: ReadonlyMap<string, Box>;
   readonly routes: ReadonlyMap<StreamId, Kept>;
+  /** Lines as they were drawn apart; they stand while all ways and symbols do. */
+  readonly apart: readonly (readonly Point[])[];
 }
 
 const keyOfBox = (b: Box): string => `${b.x} ${b.y} ${b.w} ${b.h}`;
@@ -76,41 +80,102 @@ export function wireSheet(
     else continue;
     routes.set(stream.id, { key, route });
     const reach = [from?.port.reach ?? 0, to?.port.reach ?? 0] as const;
-    wires.push({ stream, points: route.points, hanging: !to, reach });
+    const freeEnd = !to ? ({ freeEnd: 'last' } as const) : !from ? ({ freeEnd: 'first' } as const) : {};
+    wires.push({ stream, points: route.points, hanging: !to, ...freeEnd, reach });
   }
   const fixed = wires.map((wire) => (wire.stream.via?.length ?? 0) > 0);
-  const apart = drawApart(
-    wires.map((wire) => wire.points),
-    obstacles,
-    fixed,
-  );
+  const drawApartAnew = (): readonly (readonly Point[])[] => {
+    const shifted = drawApart(
+      wires.map((wire) => wire.points),
+      obstacles,
+      fixed,
+    );
+    const ends = wires.map(({ stream }) => [endOf(stream.from), endOf(stream.to)] as const);
+    return untangled(shifted, ends, obstacles, fixed);
+  };
+  const unmoved =
+    before !== undefined && changed.length === 0 && sameOrder(before.routes, routes)
+      ? before.apart
+      : undefined;
+  const apart = unmoved ?? drawApartAnew();
   return {
     wires: wires.map((wire, k) => (apart[k] === wire.points ? wire : { ...wire, points: apart[k]! })),
-    cache: { obstacles: obstacleMap, routes },
+    cache: { obstacles: obstacleMap, routes, apart },
   };
 }
+
+/** Whether both hold the same ways in the same order. */
+function sameOrder(a: ReadonlyMap<StreamId, Kept>, b: ReadonlyMap<StreamId, Kept>): boolean {
+  if (a.size !== b.size) return false;
+  const old = [...a];
+  return [...b].every(([id, kept], k) => old[k]?.[0] === id && old[k][1].key === kept.key);
+}
+
+/** Straight pieces at the ports of a line that is led once more, to choose from [px]. */
+const DETOUR_STUBS: readonly (readonly [number, number])[] = [
+  [24, 24],
+  [12, 24],
+  [24, 12],
+  [12, 12],
+];
+
+/**
+ * Leads lines that still run along another one once more, this time keeping off the pieces of all others; the shorter way
+ * out wins. A line that finds nothing better stays.
+ */
+function untangled(
+  lines: readonly (readonly Point[])[],
+  ends: readonly (readonly [RouteEnd | undefined, RouteEnd | undefined])[],
+  obstacles: readonly Box[],
+  fixed: readonly boolean[],
+): readonly (readonly Point[])[] {
+  const out = [...lines];
+  for (let round = 0; round < 3; round++) {
+    const tangled = tangles(out);
+    if (tangled.size === 0) break;
+    for (const [line, with_] of [...tangled].sort(([a], [b]) => b - a)) {
+      const [from, to] = ends[line]!;
+      if (fixed[line] || !from || !to) continue;
+      const others = piecesOf(out).filter((p) => p.line !== line);
+      let least = trouble(out[line]!, line, others);
+      if (least < 100) continue;
+      const around = grown(hull(pieceBoxes(out[line]!, 60))!, 60);
+      const lanes = others
+        .filter((p) => overlaps(around, laneBox(p)))
+        .map((p) => ({ ...p, channel: with_.has(p.line) }));
+      for (const stubs of DETOUR_STUBS) {
+        const points = detourLine(from, to, obstacles, { lanes, stubs })?.points;
+        if (!points) continue;
+        const left = trouble(points, line, others);
+        if (left < least) {
+          least = left;
+          out[line] = points;
+        }
+        if (least < 100) break;
+      }
+    }
+  }
+  return out;
+}
+
+const laneBox = ({ across, at, lo, hi }: { across: boolean; at: number; lo: number; hi: number }): Box =>
+  across ? boxOfPiece([lo, at], [hi, at], 1) : boxOfPiece([at, lo], [at, hi], 1);
 
 /** Thin boxes over the pieces of a line. */
 export const pieceBoxes = (points: readonly Point[], half: number): readonly Box[] =>
   points.slice(1).map((p, k) => boxOfPiece(points[k]!, p, half));
 
-/** Points where a line meets the others at right angles. */
-export function crossingsOf(
-  points: readonly Point[],
-  others: readonly (readonly Point[])[],
-): readonly Point[] {
-  const out: Point[] = [];
-  const around = hull(pieceBoxes(points, 1))!;
-  for (const other of others) {
-    for (let j = 0; j + 1 < other.length; j++) {
-      const b = boxOfPiece(other[j]!, other[j + 1]!, 0.5);
-      if (!overlaps(b, around)) continue;
-      const down = other[j]![0] === other[j + 1]![0];
-      for (let k = 0; k + 1 < points.length; k++) {
-        if ((points[k]![0] === points[k + 1]![0]) === down) continue;
-        if (!overlaps(b, boxOfPiece(points[k]!, points[k + 1]!, 0.5))) continue;
-        out.push(down ? [other[j]![0], points[k]![1]] : [points[k]![0], other[j]![1]]);
-      }
+/** Points where each line meets others at right angles. */
+export function crossingsOf(lines: readonly (readonly Point[])[]): readonly (readonly Point[])[] {
+  const out: Point[][] = lines.map(() => []);
+  const pieces = piecesOf(lines);
+  const downs = pieces.filter((p) => !p.across);
+  for (const a of pieces) {
+    if (!a.across) continue;
+    for (const d of downs) {
+      if (d.line === a.line || d.at < a.lo || d.at > a.hi || a.at < d.lo || a.at > d.hi) continue;
+      out[a.line]!.push([d.at, a.at]);
+      out[d.line]!.push([d.at, a.at]);
     }
   }
   return out;

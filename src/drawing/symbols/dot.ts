@@ -10,7 +10,8 @@ const SIDES: readonly PortPlace[] = [
 ];
 
 /**
- * A filled dot on the line with four sides: one for the single end, three for the numbered ones in the order given.
+ * A filled dot on the line with four sides: one for the single end, three for the numbered ones in the order given,
+ * unless the lines choose better ones (dotSides.ts).
  * A fourth number shares a side with the first: its line runs into the other one before the dot.
  */
 export function dot(single: string, at: number, stem: string, order: readonly number[]): SymbolData {
@@ -22,6 +23,7 @@ export function dot(single: string, at: number, stem: string, order: readonly nu
       const k = numberOf(name, stem);
       return k === undefined ? undefined : SIDES[order[(k - 1) % order.length]!];
     },
+    sides: SIDES,
     tagless: true,
   };
 }

@@ -1,0 +1,244 @@
+import { describe, expect, test } from 'vitest';
+import { frameOf, pageOf, zoneOf } from '../../src/drawing/frame';
+import { limitMark, stateMark } from '../../src/drawing/marks';
+import { cutText, measureText } from '../../src/drawing/metrics';
+import { buildScene } from '../../src/drawing/scene';
+import { sceneToSvg } from '../../src/drawing/svg';
+import { DARK, LIGHT, PRINT } from '../../src/drawing/tokens';
+import type { Point } from '../../src/drawing/types';
+import type { UnitId } from '../../src/engine/ids';
+import { randomSheet, seeded } from './random';
+import { inputOf, LET_DOWN, RECYCLE, SHEETS, sheetOf } from './sheets';
+
+const rowsWith = (number: string) => [
+  { number, unit: 'kmol/h' },
+  { number, unit: '°C' },
+  { number, unit: 'bar(a)' },
+];
+
+describe('labels', () => {
+  test.each(Object.entries(SHEETS))('keep their places whatever the digits are: %s', (_name, sketch) => {
+    const boxes = (number: string) =>
+      buildScene(sketch, inputOf(sketch, { rows: rowsWith(number) })).labels.map((l) => [l.box, l.folded]);
+    expect(boxes('0')).toEqual(boxes('1234.567'));
+    expect(boxes('–')).toEqual(boxes('−9.999'));
+  });
+
+  test('keep their places when states, limits and duties change', () => {
+    const plain = inputOf(RECYCLE);
+    const before = buildScene(RECYCLE, { ...plain, duties: new Map() });
+    const marked = inputOf(RECYCLE, {
+      states: { 'V-101': 'no-solution', 'E-101': 'needs-value' },
+      limits: { 'V-101': 'beyond-limit', 'PV-101': 'note' },
+    });
+    const after = buildScene(RECYCLE, marked);
+    expect(after.labels).toEqual(before.labels);
+    expect(after.lines).toEqual(before.lines);
+    expect(after.box).toEqual(before.box);
+  });
+
+  test('show numbers of an out-of-date unit as stale', () => {
+    const { labels } = buildScene(LET_DOWN, inputOf(LET_DOWN, { states: { 'PV-101': 'out-of-date' } }));
+    expect(labels.map((label) => label.stale)).toEqual([false, true, false, false]);
+  });
+
+  test('keep clear of ribbons in follow', () => {
+    const plain = inputOf(LET_DOWN);
+    const ribbons = new Map(LET_DOWN.streams.map((s) => [s.id, 28]));
+    const { labels, lines } = buildScene(LET_DOWN, { ...plain, ribbons });
+    for (const label of labels.filter((l) => !l.folded)) {
+      const line = lines.find((l) => l.stream === label.stream)!;
+      const [[, y]] = [line.diamond!];
+      const gap = Math.min(Math.abs(label.box.y - y), Math.abs(label.box.y + label.box.h - y));
+      expect(gap).toBeGreaterThanOrEqual(14 + 6);
+    }
+  });
+});
+
+describe('a scene built upon an earlier one', () => {
+  test('is the same object when nothing changed', () => {
+    const scene = buildScene(RECYCLE, inputOf(RECYCLE));
+    expect(buildScene(RECYCLE, inputOf(RECYCLE), scene)).toBe(scene);
+  });
+
+  test('keeps the lines that have nothing to do with a moved unit', () => {
+    const before = buildScene(RECYCLE, inputOf(RECYCLE));
+    const moved = new Map<UnitId, Point>([['PROD-1' as UnitId, [1016, 96]]]);
+    const after = buildScene(RECYCLE, { ...inputOf(RECYCLE), moved }, before);
+    const changed = after.lines.filter((line, k) => line !== before.lines[k]).map((line) => line.number);
+    expect(changed).toEqual(['7']);
+  });
+
+  test.each([3, 11, 23, 35])(
+    'equals one built from scratch after every step of a random walk: seed %i',
+    (seed) => {
+      const sketch = randomSheet(seed);
+      const input = inputOf(sketch);
+      const next = seeded(seed);
+      const moved = new Map<UnitId, Point>();
+      let scene = buildScene(sketch, input);
+      for (let step = 0; step < 12; step++) {
+        const unit = sketch.units[Math.floor(next() * sketch.units.length)]!;
+        const [x, y] = moved.get(unit.id) ?? unit.at;
+        moved.set(unit.id, [x + 8 * Math.floor(next() * 5 - 2), y + 8 * Math.floor(next() * 5 - 2)]);
+        const now = { ...input, moved: new Map(moved) };
+        scene = buildScene(sketch, now, scene);
+        expect(scene).toEqual(buildScene(sketch, now));
+      }
+    },
+  );
+});
+
+test('bends moved by hand are honoured, those inside a symbol are left out', () => {
+  const via = (at: readonly [number, number]) =>
+    sheetOf(
+      [
+        ['feed', 'FEED-1', 0, 0],
+        ['product', 'PROD-1', 400, 0],
+        ['drum', 'V-1', 200, 200],
+      ],
+      [['1', 'FEED-1.out', 'PROD-1.in', [at]]],
+    );
+  const points = (at: readonly [number, number]) => buildScene(via(at), inputOf(via(at))).lines[0]!.points;
+  expect(points([200, -80]).map(([, y]) => y)).toContain(-80);
+  expect(points([200, 200])).toEqual([
+    [32, 0],
+    [376, 0],
+  ]);
+});
+
+test('a hanging stream is a straight piece of 40 px with an arrowhead', () => {
+  const sketch = sheetOf([['feed', 'FEED-1', 0, 0]], [['1', 'FEED-1.out', '']]);
+  const [line] = buildScene(sketch, inputOf(sketch)).lines;
+  expect(line).toMatchObject({
+    points: [
+      [32, 0],
+      [72, 0],
+    ],
+    hanging: true,
+    arrow: { at: [72, 0], side: 'right' },
+  });
+});
+
+test('a horizontal line jumps over a vertical one with a half circle of 5 px', () => {
+  const sketch = sheetOf(
+    [
+      ['feed', 'FEED-1', 0, 0],
+      ['product', 'PROD-1', 400, 0],
+      ['drum', 'V-1', 200, -200],
+      ['drum', 'V-2', 200, 200],
+      ['product', 'PROD-2', 400, 400],
+    ],
+    [
+      ['1', 'FEED-1.out', 'PROD-1.in'],
+      ['2', 'V-1.liquid', ''],
+      ['3', 'V-2.vapour', 'PROD-2.in'],
+    ],
+  );
+  const down = {
+    ...sketch,
+    streams: [sketch.streams[0]!, { ...sketch.streams[1]!, to: ['V-2' as UnitId, 'in1'] as const }],
+  };
+  const [across] = buildScene(down, inputOf(down)).lines;
+  expect(across!.d.match(/A5 5 0 0 1/g)).toHaveLength(1);
+});
+
+test('a short line has no diamond', () => {
+  const sketch = sheetOf(
+    [
+      ['valve', 'PV-1', 0, 0],
+      ['valve', 'PV-2', 64, 0],
+    ],
+    [['1', 'PV-1.out', 'PV-2.in']],
+  );
+  expect(buildScene(sketch, inputOf(sketch)).lines[0]!.diamond).toBeUndefined();
+});
+
+test('an empty sketch is an empty scene', () => {
+  const empty = sheetOf([], []);
+  expect(buildScene(empty, inputOf(empty))).toEqual({
+    box: { x: 0, y: 0, w: 0, h: 0 },
+    units: [],
+    lines: [],
+    labels: [],
+  });
+});
+
+describe('text widths', () => {
+  // Source Sans 3, advance widths as the shipped files state them: figure 497 (regular) and 513 (semibold) of 1000
+  test('are the advance widths of the font', () => {
+    expect(measureText('0', 1000)).toBe(497);
+    expect(measureText('0000', 1000, 600)).toBe(4 * 513);
+    expect(measureText('8', 10)).toBe(measureText('1', 10));
+  });
+
+  test('a text that is cut fits and ends in an ellipsis', () => {
+    const cut = cutText('Stabilised condensate to storage', 80, 11.5);
+    expect(cut.endsWith('…')).toBe(true);
+    expect(measureText(cut, 11.5)).toBeLessThanOrEqual(80);
+    expect(cutText('Air', 80, 11.5)).toBe('Air');
+  });
+});
+
+describe('SVG', () => {
+  const scene = buildScene(RECYCLE, inputOf(RECYCLE, { limits: { 'V-101': 'beyond-limit' } }));
+
+  test('keeps to attributes that the PDF writer reads', () => {
+    const svg = sceneToSvg(scene, PRINT, { frame: frameOf(pageOf(scene.box)) });
+    expect(svg).not.toMatch(/class=|style=|tspan|NaN|undefined/);
+    expect(new Set(svg.match(/<([a-z]+)/g))).toEqual(new Set(['<svg', '<path', '<g', '<text']));
+    expect(svg).toContain('font-family="SourceSans3"');
+  });
+
+  test('escapes names', () => {
+    const sketch = sheetOf([['feed', 'FEED-1', 0, 0, { name: 'A & <B>' }]], []);
+    expect(sceneToSvg(buildScene(sketch, inputOf(sketch)), PRINT)).toContain('A &amp; &lt;B&gt;');
+  });
+
+  test('takes its colours from one palette', () => {
+    for (const palette of [LIGHT, DARK, PRINT]) {
+      const colours = new Set(sceneToSvg(scene, palette).match(/#[0-9A-F]{6}/gi));
+      expect([...colours].filter((c) => !Object.values(palette).includes(c))).toEqual([]);
+    }
+  });
+
+  test('a small picture shows lines and symbols only', () => {
+    expect(sceneToSvg(scene, LIGHT, { bare: true })).not.toContain('<text');
+  });
+});
+
+describe('the border', () => {
+  const page = pageOf({ x: 0, y: 0, w: 900, h: 300 });
+
+  test('holds the drawing with a margin, in the shape of the paper', () => {
+    expect(page.w / page.h).toBeCloseTo(Math.SQRT2, 2);
+    const { inner } = frameOf(page);
+    expect(inner.x).toBeLessThanOrEqual(-40);
+    expect(inner.x + inner.w).toBeGreaterThanOrEqual(940);
+  });
+
+  test('names zones 1 to 8 across and A to F down at both edges', () => {
+    const names = frameOf(page).texts.map((t) => t.text);
+    expect(names.filter((n) => n === 'C')).toHaveLength(2);
+    expect(names).toHaveLength(2 * (8 + 6));
+    expect(zoneOf([page.x, page.y], page)).toBe('A1');
+    expect(zoneOf([page.x + page.w / 2 + 1, page.y + page.h / 2 + 1], page)).toBe('D5');
+    expect(zoneOf([page.x + page.w + 99, page.y + page.h + 99], page)).toBe('F8');
+  });
+});
+
+test('states and limits are told apart by shape, not by colour', () => {
+  const states = ['solved', 'needs-value', 'waiting', 'no-solution', 'out-of-date'] as const;
+  const shapes = states.map((state) =>
+    stateMark(state, 0, 40, 0)
+      .map((p) => `${p.d} ${p.dash}`)
+      .join(),
+  );
+  expect(new Set(shapes).size).toBe(states.length);
+  const limits = (['note', 'caution', 'beyond-limit'] as const).map((w) =>
+    limitMark(w)
+      .map((p) => p.d)
+      .join(),
+  );
+  expect(new Set(limits).size).toBe(3);
+});
