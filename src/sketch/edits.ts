@@ -13,5 +13,6 @@ export {
 } from './editing/document';
 export { EDIT_REFUSALS, type Edit, type EditCode, type Edited, type Refused } from './editing/edited';
 export { setMaterial, setNumber, setStreamName, setTag, setUnitName } from './editing/names';
+export type { SettingPath } from './editing/path';
 export { clearSetting, normaliseParts, setByPath, setSetting, setSettings } from './editing/settings';
 export { addUnit, deleteUnits, insertUnitOnStream, mirrorUnit, moveUnits, turnUnit } from './editing/units';

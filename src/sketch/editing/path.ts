@@ -4,8 +4,11 @@ import { isObject, type JsonObject, own, withKey } from '../json';
 import { portSpec } from '../registry';
 import type { Json } from '../types';
 
-/** A place inside settings, with dots; list numbers from 0: "fixedBy.1.value.share". */
-export const pathKeys = (path: string): readonly string[] => path.split('.');
+/** A place inside settings, with dots; list numbers from 0: "fixedBy.1.value.share". Key by key where a key holds a dot. */
+export type SettingPath = string | readonly string[];
+export const pathKeys = (path: SettingPath): readonly string[] =>
+  typeof path === 'string' ? path.split('.') : path;
+export const pathText = (path: SettingPath): string => (typeof path === 'string' ? path : path.join('.'));
 
 const INDEX = /^(0|[1-9]\d{0,3})$/;
 

@@ -6,7 +6,7 @@ import { isObject, type JsonObject, sameJson } from '../json';
 import { KNOWN_KINDS, kindOf, type Registry } from '../registry';
 import type { Json, Sketch } from '../types';
 import { type Edit, refuse, unitOf, withUnit } from './edited';
-import { pathKeys, specsAt, valueAt, withoutValueAt, withValueAt } from './path';
+import { pathKeys, pathText, type SettingPath, specsAt, valueAt, withoutValueAt, withValueAt } from './path';
 
 /**
  * Gives a setting a value, as typed. What the value means is judged on compiling; a place that the kind does not have is
@@ -15,7 +15,7 @@ import { pathKeys, specsAt, valueAt, withoutValueAt, withValueAt } from './path'
 export function setSetting(
   sketch: Sketch,
   id: UnitId,
-  path: string,
+  path: SettingPath,
   value: Json,
   registry: Registry = KNOWN_KINDS,
 ): Edit {
@@ -28,25 +28,25 @@ export function setSetting(
     return refuse(
       'edit/no-such-setting',
       word('tag', unit.tag),
-      word('path', path),
+      word('path', pathText(path)),
       word('known', Object.keys(kind.settings).join(', ')),
     );
-  const label = `set ${unit.tag} ${path}`;
+  const label = `set ${unit.tag} ${pathText(path)}`;
   if (sameJson(valueAt(unit.settings, keys), value)) return { ok: true, sketch, label };
   const isList = (depth: number): boolean => specsAt(kind, keys.slice(0, depth)).some((s) => s.is === 'list');
   const settings = withValueAt(unit.settings, keys, value, isList);
   if (settings === undefined || !isObject(settings))
-    return refuse('edit/bad-path', word('tag', unit.tag), word('path', path));
+    return refuse('edit/bad-path', word('tag', unit.tag), word('path', pathText(path)));
   return { ok: true, sketch: withUnit(sketch, id, (u) => ({ ...u, settings })), label };
 }
 
 /** Takes a setting away; a group without anything left goes too. */
-export function clearSetting(sketch: Sketch, id: UnitId, path: string): Edit {
+export function clearSetting(sketch: Sketch, id: UnitId, path: SettingPath): Edit {
   const unit = unitOf(sketch, id);
   if (!unit) return refuse('edit/unknown-unit', word('unit', id));
   const settings = withoutValueAt(unit.settings, pathKeys(path));
   const next = settings === unit.settings ? sketch : withUnit(sketch, id, (u) => ({ ...u, settings }));
-  return { ok: true, sketch: next, label: `clear ${unit.tag} ${path}` };
+  return { ok: true, sketch: next, label: `clear ${unit.tag} ${pathText(path)}` };
 }
 
 /** Replaces all settings of a unit, e.g. with pasted ones. */
@@ -83,7 +83,7 @@ function jsonOrText(text: string): Json {
 }
 
 /** Scales the parts of a composition so that they sum to 1; units and order stay as typed. */
-export function normaliseParts(sketch: Sketch, id: UnitId, path: string): Edit {
+export function normaliseParts(sketch: Sketch, id: UnitId, path: SettingPath): Edit {
   const unit = unitOf(sketch, id);
   if (!unit) return refuse('edit/unknown-unit', word('unit', id));
   const parts = valueAt(unit.settings, pathKeys(path));
@@ -98,7 +98,8 @@ export function normaliseParts(sketch: Sketch, id: UnitId, path: string): Edit {
     : [];
   let sum = 0;
   for (const { quantity } of read) sum += quantity?.ok ? quantity.si : Number.NaN;
-  if (!(sum > 0)) return refuse('edit/nothing-to-normalise', word('tag', unit.tag), word('path', path));
+  if (!(sum > 0))
+    return refuse('edit/nothing-to-normalise', word('tag', unit.tag), word('path', pathText(path)));
   const scaled = read.map(({ key, value, quantity }): [string, Json] => {
     if (!quantity?.ok) return [key, value];
     // Twelve figures carry every composition that anybody types.
@@ -106,7 +107,7 @@ export function normaliseParts(sketch: Sketch, id: UnitId, path: string): Edit {
     return [key, typeof value === 'number' ? n : `${n} ${quantity.unit}`.trim()];
   });
   const next = withValueAt(unit.settings, pathKeys(path), Object.fromEntries(scaled), () => false);
-  if (!isObject(next)) return refuse('edit/bad-path', word('tag', unit.tag), word('path', path));
-  const label = `normalise ${unit.tag} ${path}`;
+  if (!isObject(next)) return refuse('edit/bad-path', word('tag', unit.tag), word('path', pathText(path)));
+  const label = `normalise ${unit.tag} ${pathText(path)}`;
   return { ok: true, sketch: withUnit(sketch, id, (u) => ({ ...u, settings: next })), label };
 }

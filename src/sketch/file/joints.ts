@@ -28,9 +28,11 @@ export function checkJoints(raw: JsonObject, registry: Registry, problems: Probl
       }
       const kind = kindOf(registry, kindName);
       const spec = kind && portSpec(kind, port);
-      if (kind && !spec) problems.add(path, 'file/unknown-port', word('port', port), word('kind', kindName));
-      else if (spec && spec.dir !== dir)
-        problems.add(path, 'file/wrong-direction', word('port', port), word('kind', kindName));
+      if (kind && spec?.dir !== dir) {
+        const code = spec ? 'file/wrong-direction' : 'file/unknown-port';
+        problems.add(path, code, word('port', port), word('kind', kindName));
+        continue;
+      }
       const place = JSON.stringify([unit, port]);
       const other = taken.get(place);
       if (other !== undefined)
