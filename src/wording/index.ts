@@ -1,4 +1,5 @@
 /** Words for people: names, labels and sentences. Codes and keys come from the engine; nothing here is calculated. */
+export { sayEditRefusal } from './edits';
 export { sayFileProblem } from './files';
 export { capital, humanised } from './humanise';
 export { sayRefusal } from './refusals';

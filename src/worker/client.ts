@@ -86,10 +86,10 @@ export function connectSolver(
     worker = own;
     has = undefined;
     own.addEventListener('message', ({ data }) => {
-      if (own === worker && !closed) hear(data);
+      if (own === worker && !closed && !dead) hear(data);
     });
     own.addEventListener('error', ({ message }) => {
-      if (own === worker && !closed) fail(message);
+      if (own === worker && !closed && !dead) fail(message);
     });
   }
 

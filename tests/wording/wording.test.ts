@@ -6,10 +6,12 @@ import type { Finding } from '../../src/engine/outcome';
 import { CATALOGUE } from '../../src/engine/units/catalogue';
 import { RULES } from '../../src/engine/units/rules';
 import { STREAM_FINDINGS } from '../../src/engine/units/streamLimits';
+import { EDIT_REFUSALS } from '../../src/sketch/edits';
 import { FILE_PROBLEMS } from '../../src/sketch/file/problem';
 import { SKETCH_FINDINGS } from '../../src/sketch/findings';
 import { kindWord, portWord, resultWord, sayFileProblem, sayFinding, settingWord } from '../../src/wording';
 import { SENTENCES } from '../../src/wording/codes';
+import { EDIT_CODES } from '../../src/wording/edits';
 import { FILE_CODES } from '../../src/wording/files';
 
 const ofKinds = Object.values(CATALOGUE).flatMap((kind) => kind.findings);
@@ -31,6 +33,10 @@ describe('every code', () => {
     const known = new Set<string>(CODES);
     expect([...RULES, ...PAIR_RULES].filter((r) => !known.has(r.code))).toEqual([]);
     expect(new Set(RULES.map((r) => r.code)).size).toBe(RULES.length);
+  });
+
+  test('of an edit that is refused has a line', () => {
+    expect(EDIT_REFUSALS.filter((code) => !EDIT_CODES.includes(code))).toEqual([]);
   });
 
   test('of a file that is not opened has a line', () => {

@@ -1,0 +1,144 @@
+import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
+import type { Basis, Problem } from '../../src/engine/network/types';
+import type { FromWorker, ToWorker } from '../../src/protocol/messages';
+import { type Broke, connectSolver, type Results, type WorkerLike } from '../../src/worker/client';
+import { problemOf, unitId } from '../network/fixtures';
+
+const basis = (id: string): Basis => ({ id, chemicals: [], model: {} as Basis['model'] });
+const problem = (edit: number, of = 'b1'): Problem => problemOf(basis(of), [], { edit });
+const nothing = { streams: [], units: [], gone: [], findings: [] } as const;
+
+/** A worker that says only what the test lets it say. */
+class Puppet implements WorkerLike {
+  readonly got: ToWorker[] = [];
+  ended = false;
+  private listen: ((event: { readonly data: FromWorker }) => void) | undefined;
+  private fail: ((event: { readonly message: string }) => void) | undefined;
+  postMessage(message: ToWorker): void {
+    this.got.push(message);
+  }
+  addEventListener(type: 'message' | 'error', listener: never): void {
+    if (type === 'message') this.listen = listener;
+    else this.fail = listener;
+  }
+  terminate(): void {
+    this.ended = true;
+  }
+  say(message: FromWorker): void {
+    this.listen?.({ data: message });
+  }
+  crash(message: string): void {
+    this.fail?.({ message });
+  }
+}
+
+let workers: Puppet[];
+let results: Results[];
+let broke: Broke[];
+const connect = () =>
+  connectSolver(
+    () => {
+      const made = new Puppet();
+      workers.push(made);
+      return made;
+    },
+    { results: (r) => results.push(r), broke: (b) => broke.push(b) },
+  );
+const now = (): Puppet => workers.at(-1)!;
+
+beforeEach(() => {
+  vi.useFakeTimers();
+  [workers, results, broke] = [[], [], []];
+});
+afterEach(() => {
+  vi.useRealTimers();
+});
+
+describe('the page’s end of the line', () => {
+  test('posts a basis only when its id is new', () => {
+    const solver = connect();
+    solver.solve(basis('b1'), problem(1));
+    solver.solve(basis('b1'), problem(2));
+    solver.solve(basis('b2'), problem(3, 'b2'));
+    expect(now().got.map((m) => m.say)).toEqual(['basis', 'solve', 'solve', 'basis', 'solve']);
+  });
+
+  test('starts a silent worker anew and sends basis and problem again, asking it to name its units', () => {
+    const solver = connect();
+    solver.solve(basis('b1'), problem(1));
+    vi.advanceTimersByTime(2999);
+    expect(workers).toHaveLength(1);
+    vi.advanceTimersByTime(1);
+    expect(workers).toHaveLength(2);
+    expect(workers[0]!.ended).toBe(true);
+    expect(now().got).toMatchObject([
+      { say: 'basis' },
+      { say: 'solve', announce: true, problem: { edit: 1 } },
+    ]);
+    now().say({ say: 'results', edit: 1, last: true, ...nothing });
+    vi.advanceTimersByTime(60_000);
+    expect(workers).toHaveLength(2);
+    expect(results).toHaveLength(1);
+    expect(broke).toEqual([]);
+  });
+
+  test('leaves a busy worker alone as long as it gives a sign of life', () => {
+    const solver = connect();
+    solver.solve(basis('b1'), problem(1));
+    for (let k = 0; k < 20; k++) {
+      vi.advanceTimersByTime(2500);
+      now().say({ say: 'at', edit: 1, unit: unitId('u') });
+    }
+    expect(workers).toHaveLength(1);
+  });
+
+  test('gives an edit up after two restarts, naming the unit, and serves the next edit', () => {
+    const solver = connect();
+    solver.solve(basis('b1'), problem(1));
+    for (let k = 0; k < 3; k++) {
+      now().say({ say: 'ready' });
+      now().say({ say: 'at', edit: 1, unit: unitId('bad') });
+      vi.advanceTimersByTime(3000);
+    }
+    expect(broke).toMatchObject([{ edit: 1, unit: 'bad' }]);
+    vi.advanceTimersByTime(60_000);
+    const count = workers.length;
+    solver.solve(basis('b1'), problem(2));
+    expect(workers).toHaveLength(count);
+    expect(now().got).toMatchObject([{ say: 'basis' }, { say: 'solve', problem: { edit: 2 } }]);
+    now().say({ say: 'results', edit: 2, last: true, ...nothing });
+    expect(results.map((r) => r.edit)).toEqual([2]);
+  });
+
+  test('does not start a worker for ever that dies at once, and tries again with the next edit', () => {
+    const solver = connect();
+    solver.solve(basis('b1'), problem(1));
+    for (let k = 0; k < 10; k++) now().crash('cannot load');
+    expect(workers).toHaveLength(3);
+    expect(broke).toMatchObject([{ edit: 1, message: 'cannot load' }]);
+    solver.solve(basis('b1'), problem(2));
+    expect(workers).toHaveLength(4);
+    expect(now().got.map((m) => m.say)).toEqual(['basis', 'solve']);
+  });
+
+  test('hears nothing of a worker that it has ended', () => {
+    const solver = connect();
+    solver.solve(basis('b1'), problem(1));
+    vi.advanceTimersByTime(3000);
+    workers[0]!.say({ say: 'results', edit: 1, last: true, ...nothing });
+    expect(results).toEqual([]);
+    solver.close();
+    now().say({ say: 'results', edit: 1, last: true, ...nothing });
+    expect(results).toEqual([]);
+  });
+
+  test('waits for the answer from nothing although the live one of the same edit came first', () => {
+    const solver = connect();
+    solver.solve(basis('b1'), problem(1));
+    solver.solve(basis('b1'), problem(1), 'nothing');
+    now().say({ say: 'results', edit: 1, last: true, ...nothing });
+    vi.advanceTimersByTime(3000);
+    expect(workers).toHaveLength(2);
+    expect(now().got.at(-1)).toMatchObject({ say: 'solve', from: 'nothing' });
+  });
+});
