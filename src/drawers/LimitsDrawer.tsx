@@ -1,0 +1,115 @@
+import type { Finding, Weight } from '../engine/outcome';
+import { LimitMark, weightWord, worstFirst } from '../parts/LimitMark';
+import { useMeasures } from '../parts/measures';
+import { useKinds } from '../store/kinds';
+import { useCompiled, useResults, useSketch, useStores } from '../store/react';
+import { Head } from './Head';
+import { LimitRuler, rulerOf } from './LimitRuler';
+import { useSay } from './useSay';
+import { checkTitles } from './words';
+
+const WEIGHTS: readonly Weight[] = ['beyond-limit', 'caution', 'note'];
+const plural = (weight: Weight, n: number): string =>
+  weight === 'beyond-limit' ? `${n} beyond limit` : `${n} ${weightWord(weight)}${n === 1 ? '' : 's'}`;
+
+/** What the units and streams run into, worst first; then what was noticed and hinders nothing. */
+export function LimitsDrawer() {
+  const found = useResults((state) => state.findings);
+  const notes = useCompiled((state) => state.notes);
+  const rows = worstFirst([...found, ...notes]);
+  const counts = WEIGHTS.map(
+    (weight) => [weight, rows.filter((row) => row.weight === weight).length] as const,
+  );
+  return (
+    <>
+      <Head label="Limits" sentence="Worst first; each with evidence, basis and next step." />
+      <div className="drawer-body">
+        {rows.length === 0 ? (
+          <NoneFired />
+        ) : (
+          <>
+            <p className="counts">
+              {counts.map(([weight, n]) =>
+                n === 0 ? null : (
+                  <span key={weight}>
+                    <LimitMark weight={weight} /> {plural(weight, n)}
+                  </span>
+                ),
+              )}
+            </p>
+            <ul className="limits">
+              {rows.map((row) => (
+                <LimitRow
+                  key={`${row.code} ${row.at.unit} ${row.at.stream} ${row.at.path} ${row.at.port} ${row.at.chemical}`}
+                  finding={row}
+                />
+              ))}
+            </ul>
+          </>
+        )}
+      </div>
+    </>
+  );
+}
+
+function NoneFired() {
+  const solved = useResults((state) => state.solvedEdit > 0 && state.closure?.complete === true);
+  const kinds = useKinds();
+  const units = useSketch((state) => state.sketch.units);
+  const things = checkTitles(units.flatMap((unit) => kinds[unit.kind]?.findings ?? []));
+  return (
+    <section className="section">
+      <p>
+        {solved
+          ? 'None of these checks fired. What is not checked is not said to be fine.'
+          : 'Nothing is checked before it is solved; so far none of these checks fired.'}
+      </p>
+      <ul className="checked">
+        {things.map((thing) => (
+          <li key={thing}>{thing}</li>
+        ))}
+      </ul>
+    </section>
+  );
+}
+
+function LimitRow({ finding }: { readonly finding: Finding }) {
+  const { session } = useStores();
+  const measures = useMeasures();
+  const { unit, stream } = finding.at;
+  const place = useSketch((state) => {
+    const { units, streams } = state.sketch;
+    if (unit) return units.find((u) => u.id === unit)?.tag;
+    const number = stream && streams.find((s) => s.id === stream)?.number;
+    return number ? `Stream ${number}` : undefined;
+  });
+  const { title, sentence, next, basis } = useSay()(finding);
+  const ruler = rulerOf(finding, measures);
+  const show = (): void => {
+    if (unit) session.setState({ units: [unit], streams: [] });
+    else if (stream) session.setState({ units: [], streams: [stream] });
+  };
+  const open = (): void => {
+    if (unit) session.select([unit]);
+    else if (stream) session.select([], [stream]);
+  };
+  return (
+    <li className="limit" data-weight={finding.weight} data-code={finding.code}>
+      <button type="button" className="limit-head" title="Select on the sheet" onClick={show}>
+        <LimitMark weight={finding.weight} />
+        <span>
+          <b>{place ?? 'Sketch'}</b> {title}, {weightWord(finding.weight)}
+        </span>
+      </button>
+      <p>{sentence}</p>
+      {ruler ? <LimitRuler {...ruler} weight={finding.weight} /> : null}
+      {basis ? <p className="muted">{basis}</p> : null}
+      {next ? <p className="next">{next}</p> : null}
+      {place ? (
+        <button type="button" className="button line" onClick={open}>
+          Open {place}
+        </button>
+      ) : null}
+    </li>
+  );
+}

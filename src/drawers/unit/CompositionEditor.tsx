@@ -1,0 +1,256 @@
+import { useState } from 'react';
+import { QuantityField } from '../../parts/QuantityField';
+import { Segmented } from '../../parts/Segmented';
+import { formatDecimals, formatSignificant, parseQuantity } from '../../quantity';
+import type { Json } from '../../sketch/types';
+import { normaliseParts } from '../../store/commands';
+import { useResults, useSketch, useStores } from '../../store/react';
+import { shownStream } from '../../store/resultsStore';
+import { useChemicals, useSolvedChemicals } from '../chemicalNames';
+import type { SettingChange } from '../edits';
+import { run } from '../run';
+import { capital } from '../words';
+import { AirEditor } from './AirEditor';
+import { asFlows, converted, type Mode, modeOf, partsOf, sumOf, usualUnit } from './composition';
+import { useForm } from './form';
+import { readPaste } from './paste';
+import { FieldFindings } from './SettingRow';
+
+const MODES = [
+  { value: 'mole', text: 'mol' },
+  { value: 'mass', text: 'mass' },
+  { value: 'flows', text: 'flows' },
+  { value: 'preset', text: 'air' },
+] as const;
+
+/** Parts by mole or mass, component flows, or ready-made air; a table that takes a paste from a spreadsheet. */
+export function CompositionEditor({ path }: { readonly path: string }) {
+  const form = useForm();
+  const value = form.value(path);
+  const given = modeOf(value);
+  const [wanted, setWanted] = useState<Mode | null>(null);
+  const mode = wanted ?? given ?? 'mole';
+  const word = form.word(path);
+  const chemicals = useChemicals();
+  const solved = useSolvedChemicals();
+  const outlet = useSketch((state) => state.sketch.streams.find((s) => s.from?.[0] === form.unit.id)?.id);
+  const result = useResults((state) => (outlet ? state.streams.get(outlet) : undefined));
+  const parts = partsOf(value);
+  const isFraction = (m: Mode | undefined): boolean => m === 'mole' || m === 'mass';
+
+  const put = (next: Json, label: string, more: readonly SettingChange[] = []): void => {
+    setWanted(null);
+    form.set([{ path, value: next }, ...more], `${label} ${form.unit.tag} ${word}`);
+  };
+  const choose = (next: Mode): void => {
+    if (next === given) {
+      setWanted(null);
+      return;
+    }
+    if (next === 'preset') {
+      put({ preset: 'dry air' }, 'set');
+      return;
+    }
+    if (next === 'flows') {
+      const shown = shownStream(result);
+      if (shown && !shown.outOfDate && parts.size > 0) {
+        const z = [...shown.result.z].map((x, k) => [solved[k]?.id ?? '', x] as const);
+        const flows = asFlows(z, shown.result.n_mol_s);
+        put({ flows }, 'set', [{ path: 'flow', value: undefined }]);
+        return;
+      }
+    }
+    setWanted(next);
+  };
+  const isQuestion = wanted !== null && isFraction(wanted) && isFraction(given) && parts.size > 0;
+  const molarMass = (id: string): number | undefined => chemicals.find((c) => c.id === id)?.MW_g_mol;
+  const turned =
+    isQuestion && wanted !== 'flows' && wanted !== 'preset' ? converted(parts, wanted, molarMass) : undefined;
+
+  return (
+    <fieldset className="group composition">
+      <legend>{capital(word)}</legend>
+      <Segmented
+        label={`${capital(word)}: given as`}
+        path={`${path}.basis`}
+        options={MODES}
+        value={mode}
+        disabled={form.disabled}
+        onChange={choose}
+      />
+      {isQuestion ? (
+        <div className="question">
+          <p>
+            The numbers were typed by {given === 'mole' ? 'mole' : 'mass'}. Now by {wanted}:
+          </p>
+          <button
+            type="button"
+            className="button line"
+            disabled={!turned}
+            onClick={() => turned && put({ basis: wanted, parts: turned }, 'convert')}
+          >
+            Convert the numbers
+          </button>
+          <button
+            type="button"
+            className="button line"
+            onClick={() => put({ basis: wanted, parts: Object.fromEntries(parts) }, 'set')}
+          >
+            Keep the numbers
+          </button>
+          <button type="button" className="link" onClick={() => setWanted(null)}>
+            Leave it
+          </button>
+        </div>
+      ) : mode === 'preset' ? (
+        <AirEditor path={path} />
+      ) : (
+        <Grid path={path} mode={mode} isNew={mode !== given} word={word} done={() => setWanted(null)} />
+      )}
+      <FieldFindings path={path} />
+    </fieldset>
+  );
+}
+
+interface GridProps {
+  readonly path: string;
+  readonly mode: Exclude<Mode, 'preset'>;
+  /** The composition is not given this way yet: the first number typed begins it anew. */
+  readonly isNew: boolean;
+  readonly word: string;
+  readonly done: () => void;
+}
+
+function Grid({ path, mode, isNew, word, done }: GridProps) {
+  const form = useForm();
+  const { sketch } = useStores();
+  const chemicals = useChemicals();
+  const [pasted, setPasted] = useState<string | null>(null);
+  const value = form.value(path);
+  const parts = isNew ? new Map<string, never>() : partsOf(value);
+  const key = mode === 'flows' ? 'flows' : 'parts';
+  const unit = usualUnit(parts, mode, form.site);
+  const frame = (filled: Readonly<Record<string, Json>>): Json =>
+    mode === 'flows' ? { flows: filled } : { basis: mode, parts: filled };
+  // Component flows carry the total with them: a flow beside them would say it twice.
+  const beside: readonly SettingChange[] =
+    mode === 'flows' && form.value('flow') !== undefined ? [{ path: 'flow', value: undefined }] : [];
+  const begin: readonly SettingChange[] = isNew ? [{ path, value: frame({}) }, ...beside] : beside;
+
+  const paste = (text: string, from: number): boolean => {
+    const targets = chemicals.map(({ id, name, formula, cas }) => ({
+      id,
+      names: [id, name, ...(formula ? [formula] : []), ...(cas ? [cas] : [])],
+    }));
+    const read = readPaste(text, targets, from, unit);
+    if (!read) return false;
+    if (read.values.size > 0) {
+      const merged = { ...Object.fromEntries(parts), ...Object.fromEntries(read.values) };
+      form.set([...beside, { path, value: frame(merged) }], `paste ${form.unit.tag} ${word}`);
+      done();
+    }
+    const left = [
+      ...(read.unknown.length > 0 ? [`not among the sketch's chemicals: ${read.unknown.join(', ')}`] : []),
+      ...(read.surplus > 0 ? [`${read.surplus} rows too many`] : []),
+    ];
+    setPasted(left.length > 0 ? `Left out: ${left.join('; ')}.` : null);
+    return true;
+  };
+  const edit = (id: string, name: string) => {
+    const plain = form.edit([...path.split('.'), key, id], `${word}, ${name}`, begin);
+    return {
+      ...plain,
+      set: (next: Parameters<typeof plain.set>[0]) => {
+        plain.set(next);
+        done();
+      },
+    };
+  };
+  if (chemicals.length === 0) return <NoChemicals />;
+  const { sum, whole } = sumOf(parts);
+  const off = sum - 1;
+  return (
+    <>
+      <table className="parts">
+        <tbody>
+          {chemicals.map(({ id, name }, row) => {
+            const part = parts.get(id);
+            const read =
+              part === undefined
+                ? undefined
+                : parseQuantity(part, mode === 'flows' ? ['molarFlow', 'massFlow'] : 'fraction', form.site);
+            return (
+              <tr key={id}>
+                <th scope="row">{name}</th>
+                <td>
+                  <QuantityField
+                    label={`${name}, ${capital(word)}`}
+                    path={`${path}.${key}.${id}`}
+                    value={part}
+                    dims={mode === 'flows' ? ['molarFlow', 'massFlow'] : 'fraction'}
+                    min={0}
+                    max={mode === 'flows' ? undefined : 1}
+                    site={form.site}
+                    unitKept={read?.ok ? read.unit : unit}
+                    empty="–"
+                    disabled={form.disabled}
+                    edit={edit(id, name)}
+                    onPaste={(text) => paste(text, row)}
+                  />
+                  <FieldFindings path={`${path}.${key}.${id}`} />
+                </td>
+              </tr>
+            );
+          })}
+        </tbody>
+        {mode === 'flows' || parts.size === 0 ? null : (
+          <tfoot>
+            <tr>
+              <th scope="row">Sum</th>
+              <td>
+                <span className={Math.abs(off) > 5e-4 ? 'sum off' : 'sum'} data-field={`${path}.sum`}>
+                  {formatDecimals(sum * 100, 3)} <span className="unit">%</span>
+                </span>
+              </td>
+            </tr>
+          </tfoot>
+        )}
+      </table>
+      {mode !== 'flows' && whole && Math.abs(off) > 1e-9 && parts.size > 0 ? (
+        <div className="sum-note">
+          <span>
+            {formatSignificant(Math.abs(off) * 100, 3)} % {off < 0 ? 'missing' : 'too much'}.
+          </span>
+          <button
+            type="button"
+            className="button line"
+            disabled={form.disabled || !(sum > 0)}
+            onClick={() => run(sketch, (s) => normaliseParts(s, form.unit.id, `${path}.parts`))}
+          >
+            Scale to 100 %
+          </button>
+        </div>
+      ) : null}
+      {pasted ? (
+        <p className="field-note" role="status">
+          {pasted}
+        </p>
+      ) : (
+        <p className="muted small">A column copied from a spreadsheet can be pasted into any row.</p>
+      )}
+      <FieldFindings path={`${path}.${key}`} />
+    </>
+  );
+}
+
+function NoChemicals() {
+  const { session } = useStores();
+  return (
+    <p className="field-note">
+      The sketch has no chemicals yet.{' '}
+      <button type="button" className="link" onClick={() => session.openDrawer({ is: 'chemicals' })}>
+        Choose chemicals
+      </button>
+    </p>
+  );
+}

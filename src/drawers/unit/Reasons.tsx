@@ -1,0 +1,45 @@
+import type { Evidence, Finding } from '../../engine/outcome';
+import { useMeasures } from '../../parts/measures';
+import { show } from '../../quantity';
+import { useSay } from '../useSay';
+import { capital, evidenceWord } from '../words';
+
+/** Why there is no solution: each reason in a sentence, what was seen, and what to try. */
+export function Reasons({ reasons }: { readonly reasons: readonly Finding[] }) {
+  const say = useSay();
+  if (reasons.length === 0) return null;
+  return (
+    <section className="section" aria-label="Why there is no solution">
+      <div className="section-head">
+        <h3>Why</h3>
+      </div>
+      {reasons.map((reason, k) => {
+        const { sentence, next } = say(reason);
+        return (
+          // biome-ignore lint/suspicious/noArrayIndexKey: the order is the reasons' own
+          <div className="reason" key={k}>
+            <p>{sentence}</p>
+            <EvidenceList evidence={reason.evidence} />
+            {next ? <p className="next">{next}</p> : null}
+          </div>
+        );
+      })}
+    </section>
+  );
+}
+
+function EvidenceList({ evidence }: { readonly evidence: readonly Evidence[] }) {
+  const measures = useMeasures();
+  const numbers = evidence.filter((e) => e.text === undefined);
+  if (numbers.length === 0) return null;
+  return (
+    <p className="muted">
+      {numbers
+        .map((e) => {
+          const { number, unit } = show(e.value, e.dim, measures);
+          return `${capital(evidenceWord(e.name))} ${number} ${unit}`.trim();
+        })
+        .join(', ')}
+    </p>
+  );
+}

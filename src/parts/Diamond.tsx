@@ -1,0 +1,31 @@
+/** A stream's number in its diamond; filled in accent when it is the one that is selected. */
+export function Diamond({
+  number,
+  chosen = false,
+  size = 24,
+}: {
+  readonly number: string;
+  readonly chosen?: boolean;
+  readonly size?: number;
+}) {
+  const h = size / 2;
+  return (
+    <svg
+      className={chosen ? 'diamond chosen' : 'diamond'}
+      width={size}
+      height={size}
+      viewBox={`0 0 ${size} ${size}`}
+      aria-hidden="true"
+    >
+      <path d={`M${h} 0.7 ${size - 0.7} ${h} ${h} ${size - 0.7} 0.7 ${h}Z`} />
+      <text
+        x={h}
+        y={h + size * 0.165}
+        textAnchor="middle"
+        fontSize={number.length > 2 ? size * 0.36 : size * 0.46}
+      >
+        {number}
+      </text>
+    </svg>
+  );
+}
