@@ -41,6 +41,8 @@ export function openSketch(source: unknown, options: OpenOptions = {}): Opened {
     raw = read.value;
   }
   if (!checkPlain(raw, problems)) return refused(problems);
+  // Data that never was text may carry more than JSON can say: extra fields of lists, absent values.
+  if (typeof source !== 'string' && raw !== undefined) raw = JSON.parse(JSON.stringify(raw));
   if (!isObject(raw)) {
     problems.add('', 'file/not-a-sketch', word('found', typeName(raw)));
     return refused(problems);

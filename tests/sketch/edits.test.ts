@@ -113,7 +113,7 @@ describe('connecting', () => {
     sketch = done(connect(sketch, [valve!, 'out'], [join!, 'in'])).sketch;
     sketch = done(connect(sketch, [feed2!, 'out'], [join!, 'in'])).sketch;
     const at = (x: Sketch): unknown[] =>
-      x.streams.flatMap((t) => (t.to?.[0] === join ? [`${t.number}>${t.to[1]}`] : []));
+      x.streams.flatMap(({ number, to }) => (to && to[0] === join ? [`${number}>${to[1]}`] : []));
     expect(at(sketch)).toEqual(['1>in1', '2>in2', '6>in3']);
     sketch = done(disconnect(sketch, s('s2'))).sketch;
     expect(at(sketch)).toEqual(['1>in1', '6>in3']);

@@ -26,12 +26,16 @@ export function checkPlain(root: unknown, problems: Problems): boolean {
     }
     if (typeof value === 'number' && !Number.isFinite(value)) problems.add(path, 'file/out-of-range');
     else if (typeof value === 'object' && value !== null) {
-      const parts: [string, unknown][] = Array.isArray(value)
-        ? value.map((item, k) => [String(k), item])
-        : Object.entries(value);
+      if (Array.isArray(value) && value.length > MOST_VALUES) {
+        problems.add(path, 'file/too-large', evidence('values', value.length));
+        return false;
+      }
       const inside = path === '' ? '' : `${path}.`;
-      for (const [key, item] of parts)
+      const keys = Array.isArray(value) ? value.keys() : Object.keys(value);
+      for (const key of keys) {
+        const item: unknown = (value as Record<string, unknown>)[key];
         waiting.push({ value: item, path: `${inside}${key}`, depth: depth + 1 });
+      }
     } else if (!['string', 'number', 'boolean', 'undefined'].includes(typeof value) && value !== null)
       problems.add(path, 'file/wrong-type', word('wanted', 'JSON'), word('found', typeName(value)));
   }
