@@ -35,6 +35,7 @@ function lumpedOf(w: FlashWork): FlashPhase {
 
 /** The answer that stands in the workspace, in its own arrays. */
 export function answerOf(w: FlashWork): FlashAnswer {
+  if (w.told !== undefined) return w.told;
   const { T_K, P_Pa, model } = w;
   const phases: FlashPhase[] = [];
   let vapourFraction = 0;
@@ -63,5 +64,6 @@ export function answerOf(w: FlashWork): FlashAnswer {
     iterations: w.iterations,
     residual: w.residual,
     ...(w.hidden ? { hiddenLiquid: w.hiddenX.slice() } : {}),
+    ...(w.lumped ? { liquidsTogether: true as const } : {}),
   };
 }

@@ -1,7 +1,9 @@
 import type { ThermoModel } from '../thermo/types';
 
-/** ln of the activity coefficient at infinite dilution from which two liquids may part, also when cold. */
-const LN_GAMMA_APART = 1;
+/** ln of the activity coefficient at infinite dilution from which two liquids may part (2 in a regular solution). */
+const LN_GAMMA_APART = 0.8;
+/** Coldest temperature that candidates are kept for [K]. */
+const COLD_K = 60;
 const T_K = 298.15;
 /** High enough for every chemical to be as dense as a liquid. */
 const P_Pa = 5e7;
@@ -9,6 +11,8 @@ const P_Pa = 5e7;
 export interface Candidates {
   /** Indices into the model's chemicals, ascending. */
   readonly formers: Int32Array;
+  /** Temperature above which a former is no candidate any more [K], in the order of `formers`. */
+  readonly below_K: Float64Array;
   /** By the start values of K at 298 K. */
   readonly lightest: number;
   readonly heaviest: number;
@@ -17,9 +21,9 @@ export interface Candidates {
 /**
  * Which pure liquids a stability test starts from when a second liquid may hide.
  *
- * A regular solution parts once ln gamma at infinite dilution passes 2, and it grows as 1/T; so every chemical with a
- * value above 1 in another one at 298 K, and that other one, is a candidate (water with organics; not the members of
- * one homologous series), besides the lightest and the heaviest. An ideal liquid (Raoult) gives none.
+ * A regular solution parts once ln gamma at infinite dilution passes 2, and ln gamma grows as 1/T: a chemical is a
+ * candidate where its largest ln gamma in another one, or of another one in it, passes 0.8 (water with organics; not
+ * the neighbours in a homologous series), and so are the lightest and the heaviest. An ideal liquid gives none.
  */
 export function liquidFormers(model: ThermoModel): Candidates {
   const { n } = model;
@@ -31,7 +35,8 @@ export function liquidFormers(model: ThermoModel): Candidates {
     if (K[i]! > K[lightest]!) lightest = i;
     if (K[i]! < K[heaviest]!) heaviest = i;
   }
-  if (n === 1 || model.spec.kind === 'raoult') return { formers: new Int32Array(0), lightest, heaviest };
+  if (n === 1 || model.spec.kind === 'raoult')
+    return { formers: new Int32Array(0), below_K: new Float64Array(0), lightest, heaviest };
 
   const props = model.makeProps();
   const x = new Float64Array(n);
@@ -43,13 +48,17 @@ export function liquidFormers(model: ThermoModel): Candidates {
     model.evaluate('liquid', T_K, P_Pa, x, 0, props);
     lnPhi.set(props.lnPhi, j * n);
   }
-  const found = new Set<number>([lightest, heaviest]);
+  const below = new Float64Array(n);
+  below[lightest] = Number.POSITIVE_INFINITY;
+  below[heaviest] = Number.POSITIVE_INFINITY;
   for (let j = 0; j < n; j++) {
     for (let i = 0; i < n; i++) {
-      if (lnPhi[j * n + i]! - lnPhi[i * n + i]! < LN_GAMMA_APART) continue;
-      found.add(i);
-      found.add(j);
+      const lnGamma = lnPhi[j * n + i]! - lnPhi[i * n + i]!;
+      const limit = (T_K * lnGamma) / LN_GAMMA_APART;
+      if (limit > below[i]!) below[i] = limit;
+      if (limit > below[j]!) below[j] = limit;
     }
   }
-  return { formers: Int32Array.from([...found].sort((a, b) => a - b)), lightest, heaviest };
+  const formers = Int32Array.from(Array.from(below, (_, i) => i).filter((i) => below[i]! > COLD_K));
+  return { formers, below_K: Float64Array.from(formers, (i) => below[i]!), lightest, heaviest };
 }

@@ -64,6 +64,7 @@ function search(w: FlashWork, z: Float64Array, at: Condition, warm: FlashWarm | 
   const pure = w.n === 1;
   w.iterations = 0;
   w.residual = 0;
+  w.told = undefined;
   w.feed.x.set(z);
   w.T_K = 'T_K' in at ? at.T_K : 0;
   w.P_Pa = 'P_Pa' in at ? at.P_Pa : 0;

@@ -10,7 +10,7 @@ const EQUAL = 1e-11;
 const NEARLY_EQUAL = 3e-10;
 
 /**
- * Unnormalised phase amounts X_i = z_i / (1 + beta (K_i - 1)), Y_i = K_i X_i: sums in total, fractions in x.
+ * Unnormalised phase amounts X_i = z_i / (1 - beta + beta K_i), Y_i = K_i X_i: sums in total, fractions in x.
  * Zero and one are as good as any beta: bubble and dew points.
  */
 export function placeFractions(w: FlashWork, z: Float64Array, beta: number): void {
@@ -19,7 +19,7 @@ export function placeFractions(w: FlashWork, z: Float64Array, beta: number): voi
   let Y = 0;
   for (let i = 0; i < n; i++) {
     const k = K[i]!;
-    const t = z[i]! / (1 + beta * (k - 1));
+    const t = z[i]! / (1 - beta + beta * k);
     liq.x[i] = t;
     vap.x[i] = k * t;
     X += t;
@@ -42,7 +42,7 @@ function startSum(w: FlashWork, z: Float64Array, beta: number, T: number, P: num
   let sum = 0;
   for (let i = 0; i < n; i++) {
     const k = K[i]! - 1;
-    sum += (z[i]! * k) / (1 + beta * k);
+    sum += (z[i]! * k) / (1 - beta + beta * K[i]!);
   }
   return sum;
 }
@@ -144,7 +144,7 @@ export function newtonFraction(
         lnK[i] = Math.max(-500, Math.min(500, next));
         const k = Math.exp(lnK[i]!);
         K[i] = k;
-        const t = 1 + beta * (k - 1);
+        const t = 1 - beta + beta * k;
         sum += (z[i]! * (k - 1)) / t;
         slope += ((z[i]! * k) / (t * t)) * u * (dL[i]! - dV[i]!);
       }

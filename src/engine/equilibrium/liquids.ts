@@ -1,3 +1,4 @@
+import { expansionOf } from './naming';
 import { vapourFractionOf } from './rachford-rice';
 import { orderByVolume, settle } from './settle';
 import { gibbsAgainstPlane, placeFlows } from './split';
@@ -71,7 +72,8 @@ function afterVapourLiquid(
   const residual = w.residual;
   exchange(w);
   // Perhaps the stable state is two liquids and no vapour.
-  const trialIsLight = w.trial.props.v_m3_mol > w.liq2.props.v_m3_mol;
+  const trialIsLight =
+    expansionOf(w.model, w.trial.x, w.trial.props) > expansionOf(w.model, w.liq2.x, w.liq2.props);
   const light = trialIsLight ? w.trial : w.liq2;
   const dense = trialIsLight ? w.liq2 : w.trial;
   if (startPair(w, z, light, dense, 'liquid') && settle(w, z, T, P) === 'equal') {

@@ -30,3 +30,11 @@ export function nameOf(
     vapour,
   };
 }
+
+/**
+ * How far a phase is expanded: molar volume over pseudo-critical volume. Of two phases the vapour is the one that is
+ * expanded further; the bare molar volumes would call a heavy oil under compressed hydrogen a vapour.
+ */
+export function expansionOf(model: ThermoModel, x: Float64Array, props: PhaseProps): number {
+  return props.v_m3_mol / model.pseudoCritical(x).v_m3_mol;
+}

@@ -1,10 +1,12 @@
+import { answerOf } from './answer';
+import { between } from './blend';
 import { newtonCaloric } from './caloric';
 import { orderByVolume } from './settle';
 import { placeFlows } from './split';
 import { liquidLike, setPlane } from './stability';
 import { hiddenLiquid } from './starts';
 import { flashTP, type StartK } from './tp';
-import { type Caloric, closeEnough, frozenCp, LEAST_T_K, MOST_T_K, wholeOf } from './whole';
+import { type Caloric, closeEnough, frozenCp, LEAST_T_K, MOST_T_K, rounding, wholeOf } from './whole';
 import type { FlashWork } from './work';
 
 export type SearchEnd = 'solved' | 'no-convergence' | 'out-of-range' | 'between-states';
@@ -42,6 +44,7 @@ export function flashCaloric(
   let belowMiss = 0;
   let aboveT = 0;
   let aboveMiss = 0;
+  let lastT = 0;
   for (let pass = 0; pass < PASSES; pass++) {
     const ok = flashTP(w, z, T, P, start);
     iterations += w.iterations;
@@ -54,6 +57,8 @@ export function flashCaloric(
     }
     const miss = target - wholeOf(w, of);
     if (Math.abs(miss) <= closeEnough(of, T, target)) return done(w, iterations);
+    if (Math.abs(T - lastT) < 1e-12 * T && Math.abs(miss) < rounding(of, T)) return done(w, iterations);
+    lastT = T;
     if (miss > 0) {
       low = T;
       belowT = T;
@@ -63,8 +68,6 @@ export function flashCaloric(
       aboveT = T;
       aboveMiss = miss;
     }
-    if (high - low < 4e-13 * T && Math.abs(miss) < 1e3 * closeEnough(of, T, target))
-      return done(w, iterations);
 
     let next: number;
     if (w.phases === 2) {
@@ -84,7 +87,15 @@ export function flashCaloric(
         w.iterations = 0;
         const bridged = acrossJump(w, z, low, high, P, target, of);
         iterations += w.iterations;
-        return bridged ? done(w, iterations) : 'between-states';
+        if (bridged) return done(w, iterations);
+        if (high - low < 1e-12 * high) {
+          w.iterations = 0;
+          const found =
+            atBoundary(w, z, low, high, P, target, of) || partOfEach(w, z, low, high, P, target, of);
+          iterations += w.iterations;
+          return found ? done(w, iterations) : 'between-states';
+        }
+        next = (low + high) / 2;
       }
       if (!(next > low && next < high)) {
         // Regula falsi first, then halves: a jump is found by halving.
@@ -154,7 +165,7 @@ function singleT(
     miss = target - (of === 'h' ? trial.props.h_J_mol : trial.props.s_J_molK);
     cp = trial.props.cp_J_molK;
     if (!(cp > 0)) return Number.NaN;
-    if (Math.abs(miss) <= 0.5 * closeEnough(of, T, target)) return T;
+    if (Math.abs(miss) <= 0.5 * closeEnough(of, T, target) || Math.abs(move) < 2e-14 * T) return T;
   }
   return T;
 }
@@ -189,4 +200,55 @@ function acrossJump(
   w.phases = 2;
   w.lumped = false;
   return isAnswer(w, P, true);
+}
+
+/**
+ * The target lies on a boundary of the two-phase region, within rounding of it: the single phase on one of its sides,
+ * taken to the temperature where it has the property.
+ */
+function atBoundary(
+  w: FlashWork,
+  z: Float64Array,
+  low: number,
+  high: number,
+  P: number,
+  target: number,
+  of: Caloric,
+): boolean {
+  for (const T of [low, high]) {
+    if (!flashTP(w, z, T, P, 'nothing') || w.phases === 2 || w.lumped) continue;
+    const at = singleT(w, P, target, of, T, T * (1 - BOUNDARY), T * (1 + BOUNDARY));
+    if (!(Math.abs(at - T) < BOUNDARY * T)) continue;
+    w.model.evaluate(w.feed.props.side, at, P, w.feed.x, 2, w.feed.props);
+    w.T_K = at;
+    if (Math.abs(target - wholeOf(w, of)) <= rounding(of, at)) return true;
+  }
+  return false;
+}
+const BOUNDARY = 1e-9;
+
+/**
+ * The state jumps because a second liquid comes or goes (three phases meet): part of the state on each side. Without a
+ * second liquid a jump is not explained, and there is no answer.
+ */
+function partOfEach(
+  w: FlashWork,
+  z: Float64Array,
+  low: number,
+  high: number,
+  P: number,
+  target: number,
+  of: Caloric,
+): boolean {
+  if (!flashTP(w, z, low, P, 'nothing')) return false;
+  const below = answerOf(w);
+  if (!flashTP(w, z, high, P, 'nothing')) return false;
+  const above = answerOf(w);
+  if (below.hiddenLiquid === undefined && above.hiddenLiquid === undefined) return false;
+  const a = of === 'h' ? below.h_J_mol : below.s_J_molK;
+  const b = of === 'h' ? above.h_J_mol : above.s_J_molK;
+  const share = (target - a) / (b - a);
+  if (!(share >= 0 && share <= 1)) return false;
+  w.told = between(below, above, share);
+  return true;
 }

@@ -26,7 +26,8 @@ export function vapourFractionOf(z: Float64Array, K: Float64Array, guess: number
     let slope = 0;
     for (let i = 0; i < n; i++) {
       const k = K[i]! - 1;
-      const t = k / (1 + beta * k);
+      // Not 1 + beta k: that would lose the digits of a small K near beta = 1.
+      const t = k / (1 - beta + beta * K[i]!);
       f += z[i]! * t;
       slope += z[i]! * t * t;
     }

@@ -1,3 +1,4 @@
+import { expansionOf } from './naming';
 import { vapourFractionOf } from './rachford-rice';
 import {
   CALM,
@@ -66,13 +67,13 @@ function accelerated(w: FlashWork, z: Float64Array, T: number, P: number, steps:
 }
 
 /**
- * w.vap becomes the phase of the larger molar volume. Where the model itself tells vapour from liquid (two roots, or
+ * w.vap becomes the phase that is expanded further (naming.ts). Where the model itself tells vapour from liquid (two roots, or
  * two sides), its word stands.
  */
 export function orderByVolume(w: FlashWork): void {
   const { vap, liq } = w;
-  if (vap.props.v_m3_mol >= liq.props.v_m3_mol) return;
   if (!vap.props.single && !liq.props.single && vap.props.side !== liq.props.side) return;
+  if (expansionOf(w.model, vap.x, vap.props) >= expansionOf(w.model, liq.x, liq.props)) return;
   w.vap = liq;
   w.liq = vap;
 }

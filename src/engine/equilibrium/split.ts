@@ -22,7 +22,7 @@ export function placeFlows(w: FlashWork, z: Float64Array, beta: number): void {
   let V = 0;
   let L = 0;
   for (let i = 0; i < n; i++) {
-    const t = z[i]! / (1 + beta * (K[i]! - 1));
+    const t = z[i]! / (1 - beta + beta * K[i]!);
     const l = (1 - beta) * t;
     const v = beta * K[i]! * t;
     liq.flow[i] = l;

@@ -3,6 +3,8 @@ import type { FlashWork, Slot } from './work';
 
 /** -ln of an activity of a tenth: a pure liquid this far above the plane has no liquid rich in it nearby. */
 const FAR = 2.3;
+/** ln of an activity coefficient from which a chemical may be better off in a liquid of its own. */
+const STRANGE = 0.3;
 
 /**
  * Whether the single phase in w.feed (properties at T, P; plane in w.d) can lower its Gibbs energy by splitting; then
@@ -31,6 +33,9 @@ export function isUnstable(w: FlashWork, T: number, P: number): boolean {
  * Whether some liquid rich in one of the liquid formers lies below the plane in w.d; w.trial then holds it.
  *
  * A pure liquid i lies at minus the logarithm of its activity above the plane: one evaluation rules most of them out.
+ * Last comes the mixture of the tested phase with as much of the chemical that is least at home in it.
+ *
+ * @param known1  the tested phase, a liquid if there is one; @param known2  the other phase of a split
  */
 export function hiddenLiquid(
   w: FlashWork,
@@ -39,10 +44,26 @@ export function hiddenLiquid(
   known1: Slot,
   known2: Slot | undefined,
 ): boolean {
-  for (let k = 0; k < w.formers.length; k++) {
-    if (pureTrial(w, T, P, w.formers[k]!, 'liquid', known1, known2)) return true;
+  const { formers, below_K, startW, n } = w;
+  const tested = known2 ?? known1;
+  let stranger = -1;
+  let most = STRANGE;
+  for (let k = 0; k < formers.length; k++) {
+    if (below_K[k]! < T) continue;
+    const i = formers[k]!;
+    if (pureTrial(w, T, P, i, 'liquid', known1, known2)) return true;
+    // w.trialAbove is -ln(x gamma) of the tested phase.
+    const lnGamma = -w.trialAbove - Math.log(tested.x[i]!);
+    if (w.trialAbove < FAR && lnGamma > most) {
+      most = lnGamma;
+      stranger = i;
+    }
   }
-  return false;
+  if (stranger < 0) return false;
+  for (let i = 0; i < n; i++) startW[i] = 0.5 * tested.x[i]!;
+  startW[stranger] = startW[stranger]! + 0.5;
+  w.trial.side = 'liquid';
+  return follow(w, T, P, known1, known2);
 }
 
 function pureTrial(
@@ -62,6 +83,7 @@ function pureTrial(
   model.evaluate(side, T, P, trial.x, 0, trial.props);
   w.iterations++;
   const above = trial.props.lnPhi[i]! - d[i]!;
+  w.trialAbove = above;
   if (above < BELOW && above > Number.NEGATIVE_INFINITY) {
     trial.flow.set(startW);
     return true;

@@ -1,4 +1,5 @@
 import { settleLiquids } from './liquids';
+import { expansionOf } from './naming';
 import { vapourFractionOf } from './rachford-rice';
 import { orderByVolume, settle } from './settle';
 import {
@@ -29,7 +30,7 @@ export type StartK = 'nothing' | 'K';
  * A split is looked for from start values of K and kept if its Gibbs energy is below the single phase's; otherwise a
  * stability test decides, and gives the start when the feed is not stable. Both phases are then tested in turn.
  *
- * On return w.phases is 1 (the phase in w.feed, level-2 properties) or 2 (w.vap of larger volume and w.liq, flows for
+ * On return w.phases is 1 (the phase in w.feed, level-2 properties) or 2 (w.vap, expanded further, and w.liq, flows for
  * one mole of feed, level-2 properties); w.hidden tells that a second liquid was found.
  *
  * @param z   mole fractions, each > 0, sum 1
@@ -89,7 +90,7 @@ export function startFromTrial(
   P: number,
 ): 'vapour' | 'liquid' | undefined {
   const { n, feed, trial, K, lnK, vap, liq } = w;
-  const trialIsLight = trial.props.v_m3_mol >= feed.props.v_m3_mol;
+  const trialIsLight = expansionOf(w.model, trial.x, trial.props) >= expansionOf(w.model, feed.x, feed.props);
   const bothLiquid = liquidLike(w, feed, T) && liquidLike(w, trial, T);
   vap.side = bothLiquid ? 'liquid' : 'vapour';
   liq.side = 'liquid';

@@ -41,6 +41,11 @@ export interface FlashAnswer {
    * Gives the trial liquid's composition.
    */
   readonly hiddenLiquid?: Float64Array;
+  /**
+   * The liquid among the phases is two liquids taken together: composition, h, s and v are those of both, and its own
+   * fugacities mean nothing. Only together with hiddenLiquid.
+   */
+  readonly liquidsTogether?: true;
 }
 
 /** Two conditions that fix the state of a given composition. Molar enthalpy and entropy on the elements' datum. */

@@ -1,4 +1,5 @@
 import { newtonFraction, type Sought, startPoint } from './fraction';
+import { expansionOf } from './naming';
 import { liquidLike, setPlane } from './stability';
 import { hiddenLiquid } from './starts';
 import { flashTP } from './tp';
@@ -42,9 +43,8 @@ export function flashFraction(
 function accept(w: FlashWork): boolean {
   const { vap, liq, T_K: T, P_Pa: P } = w;
   if (!(T > LEAST_T_K && T < MOST_T_K)) return false;
-  if (!(vap.props.v_m3_mol > liq.props.v_m3_mol)) {
-    if (vap.props.single || liq.props.single) return false;
-  }
+  const lighter = expansionOf(w.model, vap.x, vap.props) > expansionOf(w.model, liq.x, liq.props);
+  if (!lighter && (vap.props.single || liq.props.single)) return false;
   w.phases = 2;
   w.hidden = false;
   if (w.formers.length === 0) return true;

@@ -27,3 +27,8 @@ export function closeEnough(of: Caloric, T: number, target: number): number {
   const size = of === 'h' ? 8.314 * T : 8.314;
   return 4e-13 * size + 1e-15 * Math.abs(target);
 }
+
+/** What the rounding of a liquid root may leave in enthalpy or entropy, however fine the temperature is tuned. */
+export function rounding(of: Caloric, T: number): number {
+  return 4e-11 * (of === 'h' ? 8.314 * T : 8.314);
+}

@@ -1,6 +1,6 @@
 import type { PhaseProps, Side, ThermoModel } from '../thermo/types';
 import { liquidFormers } from './candidates';
-import type { FlashWorkOwner } from './types';
+import type { FlashAnswer, FlashWorkOwner } from './types';
 
 /** One phase while a flash is at work: flows, fractions, properties. Exchanged by reference, never copied. */
 export interface Slot {
@@ -20,10 +20,11 @@ export interface FlashWork extends FlashWorkOwner {
   readonly n: number;
   /** Chemicals whose pure liquid is tried when a second liquid is sought; see candidates.ts. */
   readonly formers: Int32Array;
+  readonly below_K: Float64Array;
   readonly lightest: number;
   readonly heaviest: number;
 
-  /** Phase of the larger molar volume, phase of the smaller one; `feed` holds a single phase. */
+  /** The phase that is expanded further (vapour), the other one; `feed` holds a single phase. */
   vap: Slot;
   liq: Slot;
   readonly feed: Slot;
@@ -45,6 +46,8 @@ export interface FlashWork extends FlashWorkOwner {
   readonly saved: Float64Array;
   readonly saved2: Float64Array;
   readonly startW: Float64Array;
+  /** How far the last pure trial lay above the plane [-]. */
+  trialAbove: number;
   /** Matrices, n x n and (n + 1) x (n + 1), row-major. */
   readonly hess: Float64Array;
   readonly border: Float64Array;
@@ -58,6 +61,8 @@ export interface FlashWork extends FlashWorkOwner {
   residual: number;
   /** The single phase is two liquids taken together (w.vap, w.liq): the model has no single liquid for this feed. */
   lumped: boolean;
+  /** An answer that is not in the slots (a state between two others). */
+  told: FlashAnswer | undefined;
   /** Another liquid was found; its composition is in hiddenX. */
   hidden: boolean;
   readonly hiddenX: Float64Array;
@@ -79,12 +84,13 @@ const slot = (model: ThermoModel, side: Side): Slot => ({
  */
 export function makeFlashWork(model: ThermoModel): FlashWork {
   const n = model.n;
-  const { formers, lightest, heaviest } = liquidFormers(model);
+  const { formers, below_K, lightest, heaviest } = liquidFormers(model);
   const vector = (): Float64Array => new Float64Array(n + 1);
   return {
     model,
     n,
     formers,
+    below_K,
     lightest,
     heaviest,
     vap: slot(model, 'vapour'),
@@ -103,6 +109,7 @@ export function makeFlashWork(model: ThermoModel): FlashWork {
     saved: vector(),
     saved2: vector(),
     startW: new Float64Array(n),
+    trialAbove: 0,
     hess: new Float64Array(n * n),
     border: new Float64Array((n + 1) * (n + 1)),
     rhs: vector(),
@@ -112,6 +119,7 @@ export function makeFlashWork(model: ThermoModel): FlashWork {
     iterations: 0,
     residual: 0,
     lumped: false,
+    told: undefined,
     hidden: false,
     hiddenX: new Float64Array(n),
   };

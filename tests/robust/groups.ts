@@ -1,0 +1,21 @@
+import { flashes } from './flashes';
+
+/** What a group found: cases tried, how they ended, and every case that needs looking at. */
+export interface GroupReport {
+  readonly tried: number;
+  /** With an answer that passes all checks. */
+  readonly answered: number;
+  /** With a reason instead, by code. */
+  readonly reasons: Readonly<Record<string, number>>;
+  /** Answers that fail a check: always a defect. */
+  readonly wrong: number;
+  readonly share: number;
+  readonly wanted: number;
+  readonly cases: readonly unknown[];
+  readonly more?: unknown;
+}
+
+export type Group = (seed: number, count: number) => Promise<GroupReport>;
+
+/** One line a group. */
+export const GROUPS: Readonly<Record<string, Group>> = { flashes };
