@@ -26,6 +26,10 @@ export const boxOfPiece = ([x1, y1]: Point, [x2, y2]: Point, half: number): Box 
   h: Math.abs(y2 - y1) + 2 * half,
 });
 
+/** Thin boxes over the pieces of a line. */
+export const pieceBoxes = (points: readonly Point[], half: number): readonly Box[] =>
+  points.slice(1).map((p, k) => boxOfPiece(points[k]!, p, half));
+
 /** Smallest box over all; undefined of none. */
 export const hull = (boxes: Iterable<Box>): Box | undefined => {
   let x1 = Infinity;

@@ -1,13 +1,12 @@
 import type { UnitId } from '../engine/ids';
 import type { Sketch } from '../sketch/types';
-import { bendsLeft, type Heading } from './search';
+import { BEND, bendsLeft, type Heading } from './search';
 import type { StandingUnit } from './standing';
 import { AWAY, HEADING, opposite, portOnSheet } from './transform';
 import type { Point, PortPlace, SymbolData } from './types';
 
-/** As a line's way is weighed: length and bends, from the ends of its straight pieces [px]. */
+/** A line's way is weighed by length and bends between the ends of its straight pieces [px]. */
 const STUB = 24;
-const BEND = 40;
 /** A line that hangs stays on its own side unless another one has a use for it [px]. */
 const MOVED_HANGING = 20;
 

@@ -1,5 +1,5 @@
 import { boxOfPiece, overlaps } from './boxes';
-import { APART, type Lane } from './search';
+import { APART, type Lane } from './grid';
 import type { Box, Point } from './types';
 
 /** How far a piece may be moved, nearest first [px]. */
@@ -49,21 +49,24 @@ export function tangles(lines: readonly (readonly Point[])[]): ReadonlyMap<numbe
   for (const a of pieces) {
     for (const b of pieces) {
       if (!tooClose(a, b)) continue;
-      const with_ = out.get(a.line) ?? new Set<number>();
-      with_.add(b.line);
-      out.set(a.line, with_);
+      const near = out.get(a.line) ?? new Set<number>();
+      near.add(b.line);
+      out.set(a.line, near);
     }
   }
   return out;
 }
 
-/** Closeness and crossings of one line with all others: fewer is better; closeness counts far more. */
+/** What running along another line counts for, against one for a crossing. */
+export const TANGLE = 100;
+
+/** Closeness and crossings of one line with all others: fewer is better. */
 export function trouble(points: readonly Point[], line: number, others: readonly Piece[]): number {
   let sum = 0;
   for (let k = 0; k + 1 < points.length; k++) {
     const piece = pieceAt(points, line, k);
     for (const other of others) {
-      if (tooClose(piece, other)) sum += 100;
+      if (tooClose(piece, other)) sum += TANGLE;
       else if (cross(piece, other)) sum += 1;
     }
   }

@@ -1,5 +1,6 @@
 import { boxOfPiece, grown, hull, overlaps } from './boxes';
-import { findWay, type Heading, type Lane } from './search';
+import type { Lane } from './grid';
+import { findWay, type Heading } from './search';
 import { AWAY, HEADING } from './transform';
 import type { Box, Point, PortPlace, Side } from './types';
 
@@ -59,11 +60,11 @@ function depthOf({ port: { at, side }, own }: RouteEnd): number {
 }
 
 /** Length of the straight piece at a port: shorter where another symbol is close or the other port faces it nearby. */
-function stubOf(end: RouteEnd, most: number, obstacles: readonly Box[]): number {
+function stubOf(end: RouteEnd, most: number, obstacles: readonly Box[], longest: number = STUBS[0]): number {
   const depth = depthOf(end);
   for (const stub of STUBS) {
     const length = stub + depth;
-    if (length > most) continue;
+    if (stub > longest || length > most) continue;
     if (!crossesAny(end.port.at, along(end.port.at, end.port.side, length), obstacles, 6, end.own))
       return length;
   }
@@ -133,8 +134,8 @@ function ledOnce(
     return { points: straight, region: boxOfPiece(a.at, b.at, 6) };
   }
   const half = via.length === 0 ? halfGap(a, b) : Infinity;
-  const start = along(a.at, a.side, stubOf(from, Math.min(half, detour?.stubs[0] ?? half), obstacles));
-  const end = along(b.at, b.side, stubOf(to, Math.min(half, detour?.stubs[1] ?? half), obstacles));
+  const start = along(a.at, a.side, stubOf(from, half, obstacles, detour?.stubs[0]));
+  const end = along(b.at, b.side, stubOf(to, half, obstacles, detour?.stubs[1]));
   const stops = [start, ...via.filter((v) => !obstacles.some((o) => inside(v, grown(o, 6)))), end];
   const arrive = ((HEADING[b.side] + 2) & 3) as Heading;
 

@@ -1,6 +1,6 @@
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { Sketch } from '../sketch/types';
-import { BoxIndex, boxAround, hull, sameBox } from './boxes';
+import { BoxIndex, boxAround, hull, pieceBoxes, sameBox } from './boxes';
 import { DIAMOND, type DiamondPlace, piecesByLength, placeDiamond } from './diamonds';
 import { foldedBox, type LabelWish, labelSize, placeLabels, rowsIn } from './labels';
 import { bridgesOf, drawPath } from './path';
@@ -9,7 +9,7 @@ import { standingUnits } from './standing';
 import { WEIGHT } from './tokens';
 import type { Box, LabelShape, LineShape, Point, Scene, SceneInput } from './types';
 import { drawUnits } from './units';
-import { crossingsOf, pieceBoxes, type RouteCache, type Wire, wireSheet } from './wiring';
+import { crossingsOf, type RouteCache, type Wire, wireSheet } from './wiring';
 
 const caches = new WeakMap<Scene, RouteCache>();
 const HALF_LINE = WEIGHT.material / 2;

@@ -1,36 +1,16 @@
-import { grown } from './boxes';
+import { ALONG_LANE, CLOSED, Grid, type Lane, NEAR_SYMBOL } from './grid';
 import type { Box, Point } from './types';
 
-/** Clear of a symbol by this much, always [px]; less than a grid step, so that lines pass between close symbols. */
-const HARD = 6;
-/** Closer than this costs extra, so that lines keep away where there is room [px]. */
-const SOFT = 12;
-/** Where lines run past a symbol: a roomy and a narrow channel on each side [px]. */
-const CHANNELS = [16, 8] as const;
 /** A bend costs as much as this way round [px]. */
-const BEND = 40;
+export const BEND = 40;
+/** Times the way: near a symbol, and along another line. */
 const SOFT_COST = 1.6;
+const LANE_COST = 12;
 /** Among equal lines the one that bends late wins: its first straight piece is the longest. */
 const LATE = 1e-3;
 
 /** Directions of travel in order right, down, left, up. */
 export type Heading = 0 | 1 | 2 | 3;
-
-/** A straight piece of another line: crossing it is free, running along it is not. */
-export interface Lane {
-  readonly across: boolean;
-  /** Place across its direction, and its extent. */
-  readonly at: number;
-  readonly lo: number;
-  readonly hi: number;
-  /** The way may run beside it: its edges are offered as channels. */
-  readonly channel?: boolean;
-}
-
-/** Lines keep this far from lanes [px]; running along one costs as much as this many times the way. */
-export const APART = 10;
-const LANE_COST = 12;
-const BESIDE_LANE = 12;
 
 export interface Leg {
   readonly from: Point;
@@ -38,82 +18,6 @@ export interface Leg {
   readonly to: Point;
   /** Direction in which the line goes on behind `to`; undefined: any. */
   readonly arrive?: Heading;
-}
-
-/** Indices of the sorted values strictly between a and b: from, to (exclusive). */
-function span(values: Float64Array, a: number, b: number): [number, number] {
-  let lo = 0;
-  let end = values.length;
-  while (lo < end) {
-    const middle = (lo + end) >> 1;
-    if (values[middle]! <= a) lo = middle + 1;
-    else end = middle;
-  }
-  let hi = lo;
-  while (hi < values.length && values[hi]! < b) hi++;
-  return [lo, hi];
-}
-
-function coordinates(
-  own: readonly number[],
-  from: number,
-  to: number,
-  edges: readonly number[],
-): Float64Array {
-  const all = new Set(own);
-  for (const e of edges) if (e >= from && e <= to) all.add(e);
-  return Float64Array.from(all).sort();
-}
-
-/** Bits of an edge: 1 closed, 2 near a symbol, 4 along another line. Edges run from a crossing to the next one right (across) or below (down). */
-class Grid {
-  readonly nx: number;
-  readonly ny: number;
-  readonly across: Uint8Array;
-  readonly down: Uint8Array;
-
-  constructor(
-    readonly xs: Float64Array,
-    readonly ys: Float64Array,
-    obstacles: readonly Box[],
-    lanes: readonly Lane[],
-  ) {
-    this.nx = xs.length;
-    this.ny = ys.length;
-    this.across = new Uint8Array(this.nx * this.ny);
-    this.down = new Uint8Array(this.nx * this.ny);
-    for (const box of obstacles) {
-      this.mark(grown(box, SOFT), 2);
-      this.mark(grown(box, HARD), 1);
-    }
-    for (const lane of lanes) this.markLane(lane);
-  }
-
-  private markLane({ across, at, lo, hi }: Lane): void {
-    const { xs, ys, nx } = this;
-    const [along, aside] = across ? [xs, ys] : [ys, xs];
-    const [a1, a2] = span(along, lo - 4, hi + 4);
-    const [b1, b2] = span(aside, at - APART, at + APART);
-    for (let b = b1; b < b2; b++) {
-      for (let a = Math.max(0, a1 - 1); a < a2; a++) {
-        if (across) this.across[b * nx + a]! |= 4;
-        else this.down[a * nx + b]! |= 4;
-      }
-    }
-  }
-
-  private mark(b: Box, bit: number): void {
-    const { xs, ys, nx } = this;
-    const [x1, x2] = span(xs, b.x, b.x + b.w);
-    const [y1, y2] = span(ys, b.y, b.y + b.h);
-    // the edge that leads into the box overlaps it as well, hence one more before the first coordinate inside
-    for (let iy = y1; iy < y2; iy++) {
-      for (let ix = Math.max(0, x1 - 1); ix < x2; ix++) this.across[iy * nx + ix]! |= bit;
-    }
-    for (let ix = x1; ix < x2; ix++) {
-      for (let iy = Math.max(0, y1 - 1); iy < y2; iy++) this.down[iy * nx + ix]! |= bit;
-    }
-  }
 }
 
 /** Grown as needed and kept: a search allocates next to nothing. */
@@ -198,24 +102,8 @@ export function findWay(
   within: Box,
   lanes: readonly Lane[] = [],
 ): Point[] | undefined {
-  const edgesX: number[] = [];
-  const edgesY: number[] = [];
-  for (const b of obstacles) {
-    for (const c of CHANNELS) {
-      edgesX.push(b.x - c, b.x + b.w + c);
-      edgesY.push(b.y - c, b.y + b.h + c);
-    }
-  }
-  for (const { across, at, lo, hi, channel } of lanes) {
-    if (!channel) continue;
-    const [along, aside] = across ? [edgesX, edgesY] : [edgesY, edgesX];
-    aside.push(at - BESIDE_LANE, at + BESIDE_LANE);
-    along.push(lo - BESIDE_LANE, hi + BESIDE_LANE);
-  }
-  const xs = coordinates([leg.from[0], leg.to[0]], within.x, within.x + within.w, edgesX);
-  const ys = coordinates([leg.from[1], leg.to[1]], within.y, within.y + within.h, edgesY);
-  const grid = new Grid(xs, ys, obstacles, lanes);
-  const { nx, ny, across, down } = grid;
+  const grid = new Grid([leg.from, leg.to], within, obstacles, lanes);
+  const { xs, ys, nx, ny, across, down } = grid;
   const node = ([x, y]: Point): number => ys.indexOf(y) * nx + xs.indexOf(x);
   const goal = node(leg.to);
   const [gx, gy] = leg.to;
@@ -248,11 +136,11 @@ export function findWay(
       const next = d === 0 ? at + 1 : d === 1 ? at + nx : d === 2 ? at - 1 : at - nx;
       if (d === 0 ? ix + 1 >= nx : d === 1 ? iy + 1 >= ny : d === 2 ? ix === 0 : iy === 0) continue;
       const edge = d === 0 ? across[at]! : d === 1 ? down[at]! : d === 2 ? across[next]! : down[next]!;
-      if (edge & 1) continue;
+      if (edge & CLOSED) continue;
       const x = xs[next % nx]!;
       const y = ys[Math.floor(next / nx)]!;
       const length = Math.abs(x - xs[ix]!) + Math.abs(y - ys[iy]!);
-      let to = g + length * (edge & 4 ? LANE_COST : edge & 2 ? SOFT_COST : 1);
+      let to = g + length * (edge & ALONG_LANE ? LANE_COST : edge & NEAR_SYMBOL ? SOFT_COST : 1);
       if (d !== heading) to += BEND + LATE * (Math.abs(gx - xs[ix]!) + Math.abs(gy - ys[iy]!));
       const s = next * 4 + d;
       if (to < cost[s]!) {

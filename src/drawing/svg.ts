@@ -31,8 +31,8 @@ export function textToSvg(shape: TextShape, palette: Palette): string {
   );
 }
 
-const material = (line: LineShape): readonly PathShape[] => [
-  { d: line.d, width: WEIGHT.material, stroke: 'ink', fill: 'none' },
+const material = (line: LineShape, heavier: number): readonly PathShape[] => [
+  { d: line.d, width: WEIGHT.material * heavier, stroke: 'ink', fill: 'none' },
   ...(line.head ? [{ d: line.head, width: 0, stroke: 'none', fill: 'ink' } as const] : []),
 ];
 
@@ -73,7 +73,7 @@ export function diamondShapes(
     text: {
       at: [x, y + 3.8],
       text: line.number,
-      size: line.number.length > 3 ? 8 : line.number.length > 2 ? 9.5 : TEXT.diamond,
+      size: line.number.length > 3 ? 9 : TEXT.diamond,
       weight: 600,
       anchor: 'middle',
       ink: 'ink',
@@ -84,8 +84,13 @@ export function diamondShapes(
 const pathsToSvg = (list: readonly PathShape[], palette: Palette): string =>
   list.map((p) => pathToSvg(p, palette)).join('');
 
-const symbolInPlace = (shape: UnitShape, palette: Palette): string =>
-  `<g transform="${transformOf(shape)}">${pathsToSvg(shape.symbol.paths, palette)}</g>`;
+const symbolInPlace = (shape: UnitShape, palette: Palette, heavier = 1): string => {
+  const paths = shape.symbol.paths.map((p) => (heavier === 1 ? p : { ...p, width: p.width * heavier }));
+  return `<g transform="${transformOf(shape)}">${pathsToSvg(paths, palette)}</g>`;
+};
+
+/** Lines of a small picture keep at least this weight [px]. */
+const LIGHTEST = 1.1;
 
 function unitToSvg(shape: UnitShape, palette: Palette): string {
   const paths = (list: readonly PathShape[]): string => pathsToSvg(list, palette);
@@ -121,6 +126,9 @@ export interface SvgOptions {
 export function sceneToSvg(scene: Scene, palette: Palette = PRINT, options: SvgOptions = {}): string {
   const { frame, bare = false, ground = false } = options;
   const view: Box = frame?.page ?? grown(scene.box, 8);
+  const { width = view.w, height = view.h } = options;
+  const scale = Math.min(width / view.w, height / view.h);
+  const heavier = bare ? Math.max(1, LIGHTEST / (WEIGHT.material * scale)) : 1;
   const parts: string[] = [];
   if (ground) {
     parts.push(
@@ -131,9 +139,9 @@ export function sceneToSvg(scene: Scene, palette: Palette = PRINT, options: SvgO
     parts.push(...frame.paths.map((p) => pathToSvg(p, palette)));
     parts.push(...frame.texts.map((t) => textToSvg(t, palette)));
   }
-  for (const line of scene.lines) parts.push(...material(line).map((p) => pathToSvg(p, palette)));
+  for (const line of scene.lines) parts.push(...material(line, heavier).map((p) => pathToSvg(p, palette)));
   for (const unit of scene.units) {
-    parts.push(bare ? symbolInPlace(unit, palette) : unitToSvg(unit, palette));
+    parts.push(bare ? symbolInPlace(unit, palette, heavier) : unitToSvg(unit, palette));
   }
   if (!bare) {
     for (const line of scene.lines) {
@@ -144,7 +152,6 @@ export function sceneToSvg(scene: Scene, palette: Palette = PRINT, options: SvgO
       if (!label.folded) parts.push(...labelTexts(label).map((t) => textToSvg(t, palette)));
     }
   }
-  const { width = view.w, height = view.h } = options;
   return (
     `<svg xmlns="http://www.w3.org/2000/svg" width="${n(width)}" height="${n(height)}" ` +
     `viewBox="${n(view.x)} ${n(view.y)} ${n(view.w)} ${n(view.h)}">${parts.join('')}</svg>`

@@ -1,10 +1,11 @@
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Sketch, SketchStream } from '../sketch/types';
-import { boxOfPiece, grown, hull, overlaps } from './boxes';
-import { drawApart, piecesOf, tangles, trouble } from './nudge';
-import { detourLine, hangingLine, type Route, type RouteEnd, routeLine } from './route';
+import { grown, overlaps } from './boxes';
+import { drawApart, piecesOf } from './nudge';
+import { hangingLine, type Route, type RouteEnd, routeLine } from './route';
 import { portOf, type StandingUnit } from './standing';
 import type { Box, Point } from './types';
+import { untangled } from './untangle';
 
 /** A stream's line before it is drawn. */
 export interface Wire {
@@ -110,60 +111,6 @@ function sameOrder(a: ReadonlyMap<StreamId, Kept>, b: ReadonlyMap<StreamId, Kept
   const old = [...a];
   return [...b].every(([id, kept], k) => old[k]?.[0] === id && old[k][1].key === kept.key);
 }
-
-/** Straight pieces at the ports of a line that is led once more, to choose from [px]. */
-const DETOUR_STUBS: readonly (readonly [number, number])[] = [
-  [24, 24],
-  [12, 24],
-  [24, 12],
-  [12, 12],
-];
-
-/**
- * Leads lines that still run along another one once more, this time keeping off the pieces of all others; the shorter way
- * out wins. A line that finds nothing better stays.
- */
-function untangled(
-  lines: readonly (readonly Point[])[],
-  ends: readonly (readonly [RouteEnd | undefined, RouteEnd | undefined])[],
-  obstacles: readonly Box[],
-  fixed: readonly boolean[],
-): readonly (readonly Point[])[] {
-  const out = [...lines];
-  for (let round = 0; round < 3; round++) {
-    const tangled = tangles(out);
-    if (tangled.size === 0) break;
-    for (const [line, with_] of [...tangled].sort(([a], [b]) => b - a)) {
-      const [from, to] = ends[line]!;
-      if (fixed[line] || !from || !to) continue;
-      const others = piecesOf(out).filter((p) => p.line !== line);
-      let least = trouble(out[line]!, line, others);
-      if (least < 100) continue;
-      const around = grown(hull(pieceBoxes(out[line]!, 60))!, 60);
-      const lanes = others
-        .filter((p) => overlaps(around, laneBox(p)))
-        .map((p) => ({ ...p, channel: with_.has(p.line) }));
-      for (const stubs of DETOUR_STUBS) {
-        const points = detourLine(from, to, obstacles, { lanes, stubs })?.points;
-        if (!points) continue;
-        const left = trouble(points, line, others);
-        if (left < least) {
-          least = left;
-          out[line] = points;
-        }
-        if (least < 100) break;
-      }
-    }
-  }
-  return out;
-}
-
-const laneBox = ({ across, at, lo, hi }: { across: boolean; at: number; lo: number; hi: number }): Box =>
-  across ? boxOfPiece([lo, at], [hi, at], 1) : boxOfPiece([at, lo], [at, hi], 1);
-
-/** Thin boxes over the pieces of a line. */
-export const pieceBoxes = (points: readonly Point[], half: number): readonly Box[] =>
-  points.slice(1).map((p, k) => boxOfPiece(points[k]!, p, half));
 
 /** Points where each line meets others at right angles. */
 export function crossingsOf(lines: readonly (readonly Point[])[]): readonly (readonly Point[])[] {
