@@ -1,8 +1,8 @@
 import { useStores } from '../store/react';
+import { capital, kindWord } from '../wording';
 import { offeredKinds, takeOffer } from './pull';
 import { ShelfIcon } from './ShelfIcon';
 import { useSheet, useSheetStore } from './sheetStore';
-import { capital, kindWord } from './words';
 
 /** A stream let go on empty sheet: the units it could lead to. */
 export function OfferMenu({
@@ -15,6 +15,7 @@ export function OfferMenu({
   const offer = useSheet((state) => state.offer);
   if (!offer) return null;
   const { x, y } = toScreen(offer.at);
+  const kinds = offeredKinds(offer.from.dir);
   const close = (): void => sheet.setState({ offer: null });
   const step = (from: Element, by: number): void => {
     const items = [...from.querySelectorAll<HTMLElement>('[role=menuitem]')];
@@ -27,7 +28,10 @@ export function OfferMenu({
       role="menu"
       tabIndex={-1}
       aria-label={offer.from.dir === 'out' ? 'Where the stream leads' : 'Where the stream comes from'}
-      style={{ left: x, top: y }}
+      style={{
+        left: `min(${x}px, calc(100% - 168px))`,
+        top: `clamp(0px, ${y}px, calc(100% - ${Math.min(320, 36 + 28 * kinds.length)}px))`,
+      }}
       ref={(element) => element?.querySelector<HTMLElement>('[role=menuitem]')?.focus()}
       onBlur={(event) => {
         if (!event.currentTarget.contains(event.relatedTarget)) close();
@@ -42,7 +46,7 @@ export function OfferMenu({
       }}
     >
       <p>{offer.from.dir === 'out' ? 'Leads to' : 'Comes from'}</p>
-      {offeredKinds(offer.from.dir).map((kind) => (
+      {kinds.map((kind) => (
         <button
           key={kind}
           type="button"

@@ -1,5 +1,4 @@
-import { memo } from 'react';
-import { measureText } from '../drawing/metrics';
+import { type CSSProperties, memo } from 'react';
 import type { Box, PathShape, Point, TextShape } from '../drawing/types';
 import { inkOf, pathStyle } from './paint';
 
@@ -35,21 +34,11 @@ export const nearestOf = (box: Box, [x, y]: Point): Point => [
 /** Keeps what is inside at its size on the screen: it grows and shrinks against the zoom, away from a fixed point. */
 export function Steady({
   about: [x, y],
-  most,
   children,
 }: {
   readonly about: Point;
-  /** It does not grow by more than this. */
-  readonly most?: number;
   readonly children: React.ReactNode;
 }) {
-  const scale = most === undefined ? 'var(--inv, 1)' : `min(var(--inv, 1), ${most})`;
-  return <g style={{ transform: `scale(${scale})`, transformOrigin: `${x}px ${y}px` }}>{children}</g>;
-}
-
-/** How much a text may grow and stay inside a flag. */
-export function roomToGrow(text: TextShape, box: Box): number {
-  const inside = text.at[0] > box.x && text.at[0] < box.x + box.w;
-  if (!inside) return 2;
-  return Math.max(1, (box.w - 20) / Math.max(1, measureText(text.text, text.size, text.weight)));
+  const style = { transform: 'scale(var(--inv, 1))', transformOrigin: `${x}px ${y}px`, '--back': 1 };
+  return <g style={style as CSSProperties}>{children}</g>;
 }

@@ -56,10 +56,7 @@ function View() {
   const flow = useReactFlow();
   const flowStore = useStoreApi();
   const root = useRef<HTMLElement | null>(null);
-  const view = useMemo(
-    () => createView(sheet, flow, flowStore, root),
-    [sheet, flow, flowStore],
-  );
+  const view = useMemo(() => createView(sheet, flow, flowStore, root), [sheet, flow, flowStore]);
 
   useLayoutEffect(() => keepScene(stores, sheet, () => flow.getZoom()), [stores, sheet, flow]);
   useEffect(() => putHandle(stores, view), [stores, view]);

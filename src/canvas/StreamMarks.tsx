@@ -6,9 +6,13 @@ import type { StreamId } from '../engine/ids';
 import { useSession, useStores } from '../store/react';
 import { chooseStream } from './choose';
 import { anchorOf, middleOf } from './lines';
-import { useSheet } from './sheetStore';
+import { pullByPointer } from './pointer';
+import { portsOf } from './ports';
+import { useSheet, useSheetStore } from './sheetStore';
 
 const LINE_HEIGHT = 13;
+/** The stream's element is a square of 24 px around its diamond. */
+const HALF = 12;
 
 /** Diamonds and labels, over units and lines. */
 export const StreamMarks = memo(function StreamMarks() {
@@ -44,16 +48,14 @@ const StreamMark = memo(function StreamMark({ id }: { readonly id: StreamId }) {
       data-selected={selected || undefined}
       style={{ transform: `translate(${at[0]}px, ${at[1]}px)`, zIndex: opened ? 2 : undefined }}
     >
-      {/* biome-ignore lint/a11y/useSemanticElements: a drawing in SVG carries the stream; a button element would clip it */}
-      <div
+      <button
+        type="button"
         className="stream-body nodrag nopan"
-        role="button"
         tabIndex={entry ? 0 : -1}
         aria-label={name}
         aria-pressed={selected}
         data-focus-stream={id}
         onClick={(event) => chooseStream(stores, id, event)}
-        onKeyDown={undefined}
         onPointerEnter={() => setNear(true)}
         onPointerLeave={() => setNear(false)}
         onFocus={() => setNear(true)}
@@ -67,13 +69,34 @@ const StreamMark = memo(function StreamMark({ id }: { readonly id: StreamId }) {
             </text>
           </svg>
         ) : null}
-      </div>
+      </button>
+      {line.hanging && line.arrow ? <LooseEnd id={id} at={line.arrow.at} from={at} /> : null}
       {label && ((!quietLabel && !label.folded) || shown) ? (
         <Label label={label} line={line} from={at} opened={opened} />
       ) : null}
     </div>
   );
 });
+
+/** The arrowhead of a stream that leads nowhere yet: pulled, it looks for a port. */
+function LooseEnd({ id, at, from }: { readonly id: StreamId; readonly at: Point; readonly from: Point }) {
+  const stores = useStores();
+  const sheet = useSheetStore();
+  return (
+    <div
+      className="loose-end nodrag nopan"
+      title="Pull to a port"
+      style={{ left: at[0] - from[0] + HALF, top: at[1] - from[1] + HALF }}
+      onPointerDown={(event) => {
+        const { sketch } = stores.sketch.getState();
+        const end = sketch.streams.find((stream) => stream.id === id)?.from;
+        const unit = end && sketch.units.find((known) => known.id === end[0]);
+        const port = unit && portsOf(sketch, unit, null).find((known) => known.port === end[1]);
+        if (port) pullByPointer(stores, sheet, port, event);
+      }}
+    />
+  );
+}
 
 function Label({
   label,
@@ -92,7 +115,7 @@ function Label({
       className="label"
       aria-hidden="true"
       data-stale={label.stale || undefined}
-      style={{ left: anchor[0] - from[0], top: anchor[1] - from[1] }}
+      style={{ left: anchor[0] - from[0] + HALF, top: anchor[1] - from[1] + HALF }}
     >
       {opened ? (
         <rect

@@ -3,8 +3,9 @@ import { useShallow } from 'zustand/react/shallow';
 import { labelsSentence } from '../drawing/labelText';
 import { useMeasures } from '../parts/measures';
 import { useResults, useSketch, useStores } from '../store/react';
+import { kindWord, modelWord } from '../wording';
+import { type SheetState, useSheet } from './sheetStore';
 import { wholeState } from './whole';
-import { modelWord } from './words';
 
 /** Foot of the sheet: name, revision, model, what labels show; at the right the state of the whole. */
 export const TitleStrip = memo(function TitleStrip() {
@@ -26,6 +27,10 @@ export const TitleStrip = memo(function TitleStrip() {
 
 const QUIET_MS = 900;
 
+/** What the hand is doing, while it does it. */
+const underWay = ({ dropping, moved, pulling }: SheetState): string =>
+  dropping ? `Moving: ${kindWord(dropping.kind)}` : moved ? 'Moving' : pulling ? 'Connecting' : '';
+
 function WholeState() {
   const stores = useStores();
   const sketch = useSketch((state) => state.sketch);
@@ -40,7 +45,10 @@ function WholeState() {
       trouble,
     })),
   );
-  const { word, rest } = wholeState(sketch, edit, { ...stores.results.getState(), ...results });
+  const doing = useSheet(underWay);
+  const { word, rest } = doing
+    ? { word: doing, rest: ', Esc leaves it' }
+    : wholeState(sketch, edit, { ...stores.results.getState(), ...results });
   const solvedEdit = results.solvedEdit;
 
   // One announcement for a run of edits: when the numbers have stood still for a moment.

@@ -1,12 +1,12 @@
 import { memo, useMemo } from 'react';
 import type { NodeProps } from 'reactflow';
 import { limitMark } from '../drawing/marks';
-import { transformOf } from '../drawing/transform';
-import type { UnitShape } from '../drawing/types';
+import { toSheet, transformOf } from '../drawing/transform';
+import type { Point, UnitShape } from '../drawing/types';
 import type { UnitId } from '../engine/ids';
 import { useSession } from '../store/react';
 import { nodeBox } from './nodes';
-import { nearestOf, Paths, roomToGrow, Steady, Text } from './Shapes';
+import { nearestOf, Paths, Steady, Text } from './Shapes';
 import { useSheet, useSheetStore } from './sheetStore';
 import { UnitPorts } from './UnitPorts';
 
@@ -34,18 +34,18 @@ export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
         if (store.getState().hovered === unit) store.setState({ hovered: null });
       }}
     >
-      {/* biome-ignore lint/a11y/useSemanticElements: a drawing in SVG carries the unit; a button element would clip it */}
-      <div
-        className="unit-body"
-        role="button"
-        tabIndex={entry || (entry === null && first) ? 0 : -1}
-        aria-label={name}
-        aria-pressed={selected}
-        data-focus-unit={unit}
-      />
       <svg className="unit-drawing" aria-hidden="true" style={{ left: -box.x, top: -box.y }}>
         <Drawing shape={shape} showDuty={!quietDuty || selected} />
       </svg>
+      <button
+        type="button"
+        className="unit-body"
+        tabIndex={entry || (entry === null && first) ? 0 : -1}
+        aria-label={name}
+        title={name}
+        aria-pressed={selected}
+        data-focus-unit={unit}
+      />
       <UnitPorts unit={unit} origin={box} />
     </div>
   );
@@ -54,6 +54,12 @@ export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
 /** Whether Tab enters the sheet at this unit: at the selected one; null while nothing is selected. */
 const isEntry = (units: readonly string[], streams: readonly string[], unit: UnitId): boolean | null =>
   units.length + streams.length === 0 ? null : units[0] === unit;
+
+/** A flag keeps its size on the screen with the name inside; its port stays where the line ends. */
+const flagPort = (shape: UnitShape): Point | undefined => {
+  const port = shape.symbol.ports('out') ?? shape.symbol.ports('in');
+  return port && toSheet(shape, port.at);
+};
 
 const Drawing = memo(function Drawing({
   shape,
@@ -65,6 +71,17 @@ const Drawing = memo(function Drawing({
   const stale = shape.state === 'out-of-date';
   const tag = shape.tagText;
   const limit = useMemo(() => (shape.limit ? limitMark(shape.limit.weight) : []), [shape.limit]);
+  const flag = shape.symbol.nameInside ? flagPort(shape) : undefined;
+  const symbol = (
+    <>
+      <g className="symbol" transform={transformOf(shape)}>
+        <Paths shapes={shape.symbol.paths} />
+      </g>
+      {shape.texts.map((text) => (
+        <Text key={text.text} shape={text} />
+      ))}
+    </>
+  );
   const hold = nearestOf(shape.box, tag?.at ?? shape.limit?.at ?? shape.at);
   return (
     <>
@@ -74,21 +91,14 @@ const Drawing = memo(function Drawing({
           <Paths shapes={shape.duty.marks} />
         </>
       ) : null}
-      <g className="symbol" transform={transformOf(shape)}>
-        <Paths shapes={shape.symbol.paths} />
-      </g>
-      {shape.texts.map((text) => (
-        <Steady key={text.text} about={text.at} most={roomToGrow(text, shape.box)}>
-          <Text shape={text} />
-        </Steady>
-      ))}
+      {flag ? <Steady about={flag}>{symbol}</Steady> : symbol}
       {shape.duty?.text && showDuty ? (
         <Steady about={shape.duty.text.at}>
           <Text shape={shape.duty.text} stale={stale} />
         </Steady>
       ) : null}
       <Steady about={hold}>
-        {tag ? <Text shape={tag} /> : null}
+        {tag ? <Text shape={{ ...tag, halo: true }} /> : null}
         <Paths shapes={shape.stateMark} />
         {shape.limit ? (
           <g transform={`translate(${shape.limit.at[0]} ${shape.limit.at[1]})`}>

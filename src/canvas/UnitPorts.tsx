@@ -3,10 +3,10 @@ import { useShallow } from 'zustand/react/shallow';
 import type { Box } from '../drawing/types';
 import type { UnitId } from '../engine/ids';
 import { useSession, useSketch, useStores, useUnit } from '../store/react';
+import { capital, portWord } from '../wording';
 import { pullByPointer } from './pointer';
 import { isFree, portsOf } from './ports';
 import { useSheet, useSheetStore } from './sheetStore';
-import { capital, portWord } from './words';
 
 interface Props {
   readonly unit: UnitId;
@@ -42,8 +42,8 @@ function Marks({ unit: id, origin }: Props) {
         tabIndex={-1}
         className="port nodrag nopan"
         data-port={port.port}
-        aria-label={`${capital(portWord(port.port))} of ${unit.tag}: pull a stream`}
-        title={capital(portWord(port.port))}
+        aria-label={`${capital(portWord(unit.kind, port.port))} of ${unit.tag}: pull a stream`}
+        title={capital(portWord(unit.kind, port.port))}
         style={{ left: port.place.at[0] - origin.x, top: port.place.at[1] - origin.y }}
         onPointerDown={(event) => pullByPointer(stores, sheet, port, event)}
       >

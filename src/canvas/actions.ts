@@ -12,7 +12,11 @@ import type { Arrow } from './walk';
 const onSheet = (stores: Stores): boolean => {
   if (!sheetOf(stores)) return false;
   const focused = document.activeElement;
-  return focused === null || focused === document.body || focused.closest('.sheet-view') !== null;
+  return (
+    focused === null ||
+    focused === document.body ||
+    (focused.closest('.sheet-view') !== null && !focused.closest('[role=menu]'))
+  );
 };
 
 const someUnits = ({ session }: Stores): boolean => session.getState().units.length > 0;

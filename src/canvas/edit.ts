@@ -1,7 +1,7 @@
 import type { Sketch } from '../sketch/types';
 import type { Edit, Edited } from '../store/commands';
 import type { Stores } from '../store/react';
-import { refusalSentence } from './words';
+import { sayEditRefusal } from '../wording';
 
 /** Makes one edit with its name for undo. A refusal is said in words and changes nothing. */
 export function tryEdit(stores: Stores, make: (sketch: Sketch) => Edit): Edited | undefined {
@@ -12,7 +12,7 @@ export function tryEdit(stores: Stores, make: (sketch: Sketch) => Edit): Edited 
   }
   const edit = make(sketch);
   if (!edit.ok) {
-    stores.session.say('caution', refusalSentence(edit));
+    stores.session.say('caution', sayEditRefusal(edit));
     return undefined;
   }
   stores.sketch.apply(edit.label, () => edit.sketch);

@@ -11,7 +11,7 @@ export interface SheetHandle {
   zoomBy(factor: number): void;
   zoomTo(zoom: number): void;
   zoom(): number;
-  /** Brings a point to the middle, if it is not well in view already. */
+  /** Moves the view no further than needed to have a point well in it. */
   reveal(at: Point): void;
   /** Middle of the view, in sheet coordinates. */
   middle(): Point;

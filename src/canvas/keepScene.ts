@@ -2,9 +2,11 @@ import { buildScene } from '../drawing/scene';
 import type { Scene } from '../drawing/types';
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Finding } from '../engine/outcome';
+import { measuresOf } from '../parts/measures';
 import type { Sketch } from '../sketch/types';
 import type { Stores } from '../store/react';
 import type { ResultsState } from '../store/resultsStore';
+import type { SayContext } from '../wording';
 import { streamName, unitName } from './names';
 import { quietAt } from './quiet';
 import { createSceneInput } from './sceneInput';
@@ -97,6 +99,12 @@ function namesOf(
     const unit = finding.at.unit;
     if (unit) limits.set(unit, [...(limits.get(unit) ?? []), finding]);
   }
+  const context: SayContext = {
+    measures: measuresOf(sketch),
+    tag: (id) => tagOf(sketch, id),
+    kind: (id) => sketch.units.find((unit) => unit.id === id)?.kind,
+    number: (id) => sketch.streams.find((stream) => stream.id === id)?.number,
+  };
   return {
     unitNames: new Map(
       sketch.units.map((unit) => [
@@ -106,6 +114,7 @@ function namesOf(
           units.get(unit.id),
           results.units.get(unit.id)?.latest.reasons ?? [],
           limits.get(unit.id) ?? [],
+          context,
         ),
       ]),
     ),

@@ -10,7 +10,7 @@ import { isFree, portsOf, type StandingPort } from './ports';
 import { beginPull, cancelPull, endPull } from './pull';
 import type { SheetStore, Target } from './sheetStore';
 import { type Arrow, chooseByArrow, type Places, stepFrom, type Thing } from './walk';
-import { portWord, tagOf } from './words';
+import { portName } from './words';
 
 const say = ({ session }: Stores, spoken: string): void => session.setState({ spoken });
 
@@ -84,7 +84,7 @@ export function connectByKeys(stores: Stores): void {
   const fitting = handle.store.getState().pulling?.targets.filter((target) => !target.reason) ?? [];
   say(
     stores,
-    `Connect from ${tagOf(sketch, from.unit)} ${portWord(from.port)}: ${fitting.length} ports fit. Arrows choose, Enter connects, Esc leaves it.`,
+    `Connect from ${portName(sketch, from)}: ${fitting.length} ports fit. Arrows choose, Enter connects, Esc leaves it.`,
   );
 }
 
@@ -113,7 +113,7 @@ function choosePort(stores: Stores, sheet: SheetStore, direction: Arrow): void {
   const next: Target | undefined = chooseByArrow(fitting, now, pulling.from.place.at, direction)?.target;
   if (!next) return;
   sheet.setState({ pulling: { ...pulling, over: next, at: next.place.at } });
-  say(stores, `${tagOf(stores.sketch.getState().sketch, next.unit)} ${portWord(next.port)}`);
+  say(stores, portName(stores.sketch.getState().sketch, next));
 }
 
 /** Starts moving the selected units by keys; pressed again, or with Enter, they stay where they are. */

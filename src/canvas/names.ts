@@ -3,7 +3,7 @@ import type { UnitId } from '../engine/ids';
 import type { Finding } from '../engine/outcome';
 import { weightWord, worstFirst } from '../parts/LimitMark';
 import type { SketchStream, SketchUnit } from '../sketch/types';
-import { findingSentence, kindWord, STATE_WORDS } from './words';
+import { kindWord, type SayContext, sayFinding, stateWord } from '../wording';
 
 /** "V-101, flash drum, solved, caution: liquid leaves at its bubble point": what a screen reader hears of a unit. */
 export function unitName(
@@ -11,17 +11,19 @@ export function unitName(
   shape: UnitShape | undefined,
   reasons: readonly Finding[],
   limits: readonly Finding[],
+  context: SayContext,
 ): string {
+  const say = (finding: Finding): string => sayFinding(finding, context).sentence.replace(/\.$/, '');
   const state = shape?.state ?? 'waiting';
   const [reason] = reasons;
-  const why = reason && state !== 'solved' ? `: ${findingSentence(reason)}` : '';
+  const why = reason && state !== 'solved' ? `: ${say(reason)}` : '';
   const [worst] = worstFirst(limits);
   return [
     unit.tag,
     unit.name,
     kindWord(unit.kind),
-    `${STATE_WORDS[state]}${why}`,
-    worst && `${weightWord(worst.weight)}: ${findingSentence(worst)}`,
+    `${stateWord(state)}${why}`,
+    worst && `${weightWord(worst.weight)}: ${say(worst)}`,
   ]
     .filter(Boolean)
     .join(', ');

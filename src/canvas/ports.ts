@@ -6,14 +6,15 @@ import { CATALOGUE } from '../engine/units/catalogue';
 import type { PortSpec } from '../engine/units/types';
 import type { Sketch, SketchStream, SketchUnit } from '../sketch/types';
 import { isOneOf, nextPortName, whyNotConnect } from '../store/commands';
+import { sayEditRefusal } from '../wording';
 import type { PortRef, Target } from './sheetStore';
-import { refusalSentence } from './words';
 
 type Moved = ReadonlyMap<UnitId, Point> | null;
 
 /** A port of a unit on the sheet, and the stream that has an end at it. */
 export interface StandingPort extends Target {
   readonly stream: SketchStream | undefined;
+  readonly numbered: boolean;
 }
 
 function namesOf(spec: PortSpec, used: readonly Port[]): readonly Port[] {
@@ -39,7 +40,7 @@ export function portsOf(sketch: Pick<Sketch, 'streams'>, unit: SketchUnit, moved
       if (!own) return [];
       const place = portOnSheet(pose, own);
       const stream = mine.find((s) => endsAt(spec.dir === 'out' ? s.from : s.to, unit.id, port));
-      return [{ unit: unit.id, port, dir: spec.dir, place, stream }];
+      return [{ unit: unit.id, port, dir: spec.dir, place, stream, numbered: spec.numbered !== undefined }];
     }),
   );
 }
@@ -48,13 +49,16 @@ export function portsOf(sketch: Pick<Sketch, 'streams'>, unit: SketchUnit, moved
 export const isFree = ({ dir, stream }: StandingPort): boolean =>
   stream === undefined || (dir === 'out' ? stream.to === undefined : stream.from === undefined);
 
+/** Of numbered ports the next free one stands for all. */
+const isOffered = ({ stream, numbered }: StandingPort): boolean => !numbered || stream === undefined;
+
 /** Every port of the other units, with the reason where the stream cannot end there. */
 export function targetsFor(sketch: Sketch, from: PortRef, moved: Moved): Target[] {
   return sketch.units
     .filter((unit) => unit.id !== from.unit)
-    .flatMap((unit) => portsOf(sketch, unit, moved))
+    .flatMap((unit) => portsOf(sketch, unit, moved).filter(isOffered))
     .map(({ unit, port, dir, place }) => {
       const refused = whyNotConnect(sketch, [from.unit, from.port], [unit, port]);
-      return { unit, port, dir, place, ...(refused ? { reason: refusalSentence(refused) } : {}) };
+      return { unit, port, dir, place, ...(refused ? { reason: sayEditRefusal(refused) } : {}) };
     });
 }

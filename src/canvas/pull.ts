@@ -30,7 +30,9 @@ export function movePull(sheet: SheetStore, at: Point, zoom: number): void {
   let over: Target | null = null;
   let nearest = CATCH / zoom;
   for (const target of pulling.targets) {
-    const away = Math.hypot(target.place.at[0] - at[0], target.place.at[1] - at[1]);
+    // Where two ports lie close together, the one that fits is meant.
+    const handicap = target.reason ? CATCH / 2 / zoom : 0;
+    const away = Math.hypot(target.place.at[0] - at[0], target.place.at[1] - at[1]) + handicap;
     if (away <= nearest) {
       nearest = away;
       over = target;

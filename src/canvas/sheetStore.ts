@@ -41,6 +41,8 @@ export interface Dropping {
   readonly mirror: boolean;
   /** The stream it would open. */
   readonly on: StreamId | null;
+  /** The loose stream that would lead to it, and the port it would take. */
+  readonly onto?: { readonly from: PortRef; readonly port: Port };
   readonly tip: readonly string[];
 }
 

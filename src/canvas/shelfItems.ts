@@ -1,6 +1,6 @@
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { KindCatalogue } from '../engine/units/types';
-import { capital, kindWord } from './words';
+import { capital, kindWord } from '../wording';
 
 export interface ShelfItem {
   readonly kind: string;

@@ -3,10 +3,10 @@ import type { Point } from '../drawing/types';
 import type { SheetHandle } from './handle';
 import type { SheetStore } from './sheetStore';
 
-const MARGIN = 28;
+const MARGIN = 36;
 const LEAST_ZOOM = 0.25;
-/** Further from the edges of the view than this counts as well in view [px]. */
-const WELL_IN = 48;
+/** What is shown stands at least this far from the edges of the view [px]. */
+const WELL_IN = 88;
 
 interface Root {
   readonly current: HTMLElement | null;
@@ -54,8 +54,14 @@ export function createView(
     reveal(at) {
       const [w, h] = size();
       const { x, y } = toView(at);
-      if (x > WELL_IN && y > WELL_IN && x < w - WELL_IN && y < h - WELL_IN) return;
-      put(at, flow.getZoom());
+      const over = (value: number, length: number): number => {
+        const margin = Math.min(WELL_IN, length / 3);
+        return value < margin ? value - margin : Math.max(0, value - (length - margin));
+      };
+      const [dx, dy] = [over(x, w), over(y, h)];
+      if (dx === 0 && dy === 0) return;
+      const viewport = flow.getViewport();
+      void flow.setViewport({ ...viewport, x: viewport.x - dx, y: viewport.y - dy });
     },
     toSheet(clientX, clientY) {
       const area = root.current?.querySelector('.sheet-flow')?.getBoundingClientRect();
