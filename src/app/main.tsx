@@ -1,13 +1,39 @@
 import { StrictMode } from 'react';
 import { createRoot } from 'react-dom/client';
+import { emptySketch } from '../sketch/fresh';
+import { createCompiledStore } from '../store/compiledStore';
+import { afterPaint, markEdit, markOnce } from '../store/marks';
+import type { Stores } from '../store/react';
+import { createResultsStore } from '../store/resultsStore';
+import { createSession } from '../store/session';
+import { createSketchStore } from '../store/sketchStore';
+import { App } from './App';
+import { startAutosave } from './autosaving';
+import { ErrorBoundary } from './ErrorBoundary';
+import { startSolving } from './solving';
+import { applyTheme, storedTheme } from './theme';
 
 const root = document.getElementById('root');
 if (!root) throw new Error('index.html has no element with the id "root"');
 
+const theme = storedTheme();
+applyTheme(theme);
+const autosave = await startAutosave();
+const stores: Stores = {
+  sketch: createSketchStore(autosave.last ?? emptySketch(crypto.randomUUID()), markEdit),
+  results: createResultsStore(),
+  session: createSession(),
+  compiled: createCompiledStore(),
+};
+stores.session.setState({ theme });
+startSolving(stores);
+autosave.watch(stores);
+
 createRoot(root).render(
   <StrictMode>
-    <main>
-      <h1>Splitwright</h1>
-    </main>
+    <ErrorBoundary stores={stores}>
+      <App stores={stores} />
+    </ErrorBoundary>
   </StrictMode>,
 );
+afterPaint(() => markOnce('app-ready'));

@@ -9,6 +9,8 @@ export interface CompiledState {
   readonly basis: Basis | null;
   readonly problem: Problem | null;
   readonly gaps: readonly Finding[];
+  /** Noticed while compiling; hinders nothing. */
+  readonly notes: readonly Finding[];
   readonly assumptions: readonly Assumption[];
   /** Chemicals the bank could not give yet (still loading), by id. */
   readonly loading: readonly string[];
@@ -20,6 +22,7 @@ export function createCompiledStore() {
     basis: null,
     problem: null,
     gaps: [],
+    notes: [],
     assumptions: [],
     loading: [],
   }));

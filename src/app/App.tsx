@@ -1,0 +1,99 @@
+import { useEffect, useMemo } from 'react';
+import { Balance } from '../balance/Balance';
+import { Sheet } from '../canvas/Sheet';
+import { Shelf } from '../canvas/Shelf';
+import { DrawerHost } from '../drawers/DrawerHost';
+import { actionFor } from '../store/action';
+import { BankContext } from '../store/bank';
+import { type Stores, StoresProvider, useSession, useSketch } from '../store/react';
+import { actions } from './actions';
+import { Bar } from './Bar';
+import { bankIndex } from './bankIndex';
+import { dropFiles } from './documents';
+import { KeyList } from './KeyList';
+import { MySketches } from './MySketches';
+import { Notice } from './Notice';
+import { Start } from './Start';
+import { SummaryPage } from './SummaryPage';
+import { applyTheme } from './theme';
+import './theme.css';
+import './layout.css';
+
+const isTyping = (target: EventTarget | null): boolean =>
+  target instanceof HTMLElement && target.closest('input, textarea, select, [contenteditable]') !== null;
+
+/** Keys of all actions; a field keeps its own keys, a dialogue keeps them all. */
+function useKeys(stores: Stores): void {
+  useEffect(() => {
+    const press = (event: KeyboardEvent): void => {
+      if (event.defaultPrevented || document.querySelector('[aria-modal="true"]')) return;
+      const action = actionFor(actions, event, isTyping(event.target), stores);
+      if (!action) return;
+      event.preventDefault();
+      action.run(stores);
+    };
+    window.addEventListener('keydown', press);
+    return () => window.removeEventListener('keydown', press);
+  }, [stores]);
+}
+
+/** A file dropped anywhere on the page is opened. */
+function useFileDrop(stores: Stores): void {
+  useEffect(() => {
+    const over = (event: DragEvent): void => event.preventDefault();
+    const drop = (event: DragEvent): void => {
+      event.preventDefault();
+      if (event.dataTransfer) void dropFiles(stores, event.dataTransfer.files);
+    };
+    window.addEventListener('dragover', over);
+    window.addEventListener('drop', drop);
+    return () => {
+      window.removeEventListener('dragover', over);
+      window.removeEventListener('drop', drop);
+    };
+  }, [stores]);
+}
+
+function Over() {
+  const over = useSession((state) => state.over);
+  if (over === 'keys') return <KeyList actions={actions} />;
+  if (over === 'open') return <MySketches />;
+  return over === 'summary' ? <SummaryPage /> : null;
+}
+
+function Workplace({ stores }: { readonly stores: Stores }) {
+  useKeys(stores);
+  useFileDrop(stores);
+  const theme = useSession((state) => state.theme);
+  useEffect(() => applyTheme(theme), [theme]);
+  const isBlank = useSketch((state) => state.sketch.units.length === 0);
+  const spoken = useSession((state) => state.spoken);
+  return (
+    <div className="app">
+      <Bar actions={actions} />
+      <Shelf />
+      <main className="sheet" aria-label="Sheet">
+        <Sheet />
+        {isBlank ? <Start /> : null}
+        <Notice />
+      </main>
+      <DrawerHost />
+      <Balance />
+      <Over />
+      <div className="unseen" role="status" aria-live="polite">
+        {spoken}
+      </div>
+    </div>
+  );
+}
+
+export function App({ stores }: { readonly stores: Stores }) {
+  const bank = useMemo(() => ({ index: bankIndex }), []);
+  return (
+    <StoresProvider value={stores}>
+      <BankContext.Provider value={bank}>
+        <Workplace stores={stores} />
+      </BankContext.Provider>
+    </StoresProvider>
+  );
+}

@@ -1,0 +1,39 @@
+import { type ReactNode, useEffect, useRef } from 'react';
+import { useStores } from '../store/react';
+
+/** A dialogue over the page: the browser's own, so that focus stays inside and Esc closes it. */
+export function Dialogue({
+  title,
+  wide = false,
+  children,
+}: {
+  readonly title: string;
+  readonly wide?: boolean;
+  readonly children: ReactNode;
+}) {
+  const stores = useStores();
+  const ref = useRef<HTMLDialogElement>(null);
+  const close = (): void => stores.session.setState({ over: 'none' });
+  useEffect(() => {
+    const dialogue = ref.current;
+    if (dialogue && !dialogue.open) dialogue.showModal();
+    return () => dialogue?.close();
+  }, []);
+  return (
+    <dialog
+      ref={ref}
+      className={wide ? 'dialogue wide' : 'dialogue'}
+      aria-modal="true"
+      aria-label={title}
+      onClose={close}
+    >
+      <div className="dialogue-head">
+        <h2>{title}</h2>
+        <button type="button" className="button line" onClick={close}>
+          Close
+        </button>
+      </div>
+      {children}
+    </dialog>
+  );
+}

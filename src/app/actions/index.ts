@@ -1,0 +1,13 @@
+import { sheetActions } from '../../canvas/actions';
+import type { Action } from '../../store/action';
+import { documentActions } from './documents';
+import { fileActions } from './files';
+import { viewActions } from './view';
+
+/** Every action of the page; the bar, the menus, the keys and the list of keys read this. */
+export const actions: readonly Action[] = [
+  ...fileActions,
+  ...documentActions,
+  ...viewActions,
+  ...sheetActions,
+];

@@ -1,0 +1,36 @@
+import type { StreamId, UnitId } from '../engine/ids';
+import type { Basis, Closure, Problem, StreamResult, UnitResult } from '../engine/network/types';
+import type { Finding } from '../engine/outcome';
+import { connectSolver } from '../store/solverClient';
+import { makeWorker } from './solving';
+
+export interface CleanAnswer {
+  readonly streams: ReadonlyMap<StreamId, StreamResult>;
+  readonly units: ReadonlyMap<UnitId, UnitResult>;
+  readonly closure: Closure | null;
+  readonly findings: readonly Finding[];
+}
+
+/** Solves once from nothing in a worker of its own: what leaves the app never rests on a warm start. */
+export function solveFromNothing(basis: Basis, problem: Problem): Promise<CleanAnswer> {
+  return new Promise((resolve, reject) => {
+    const streams = new Map<StreamId, StreamResult>();
+    const units = new Map<UnitId, UnitResult>();
+    const client = connectSolver(makeWorker, {
+      results: (_edit, last, batch) => {
+        for (const [id, result] of batch.streams) streams.set(id, result);
+        for (const [id, result] of batch.units) units.set(id, result);
+        if (!last) return;
+        client.close();
+        resolve({ streams, units, closure: batch.closure ?? null, findings: batch.findings });
+      },
+      at: () => undefined,
+      answer: () => undefined,
+      broke: (_edit, message) => {
+        client.close();
+        reject(new Error(message));
+      },
+    });
+    client.solve(basis, problem, 'nothing');
+  });
+}

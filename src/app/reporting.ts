@@ -1,0 +1,44 @@
+import { bank } from '../data/bank';
+import { answersDiffer } from '../report/compare';
+import type { ReportInput } from '../report/input';
+import { writeSketch } from '../sketch/write';
+import type { Stores } from '../store/react';
+import { solveFromNothing } from './cleanSolve';
+
+declare const __APP_VERSION__: string;
+
+const hex = (bytes: Uint8Array): string => Array.from(bytes, (b) => b.toString(16).padStart(2, '0')).join('');
+
+/** First sixteen digits of the SHA-256 of the file's text, in groups of four. */
+export async function fingerprint(text: string): Promise<string> {
+  const digest = await crypto.subtle.digest('SHA-256', new TextEncoder().encode(text));
+  return hex(new Uint8Array(digest))
+    .slice(0, 16)
+    .replace(/(.{4})(?=.)/g, '$1 ');
+}
+
+/** Everything a report needs, solved once more from nothing. Undefined while the sketch cannot be compiled. */
+export async function cleanReportInput(stores: Stores): Promise<ReportInput | undefined> {
+  const { sketch } = stores.sketch.getState();
+  const { basis, problem, gaps, assumptions } = stores.compiled.getState();
+  if (!basis || !problem) return undefined;
+  const live = new Map([...stores.results.getState().streams].map(([id, shown]) => [id, shown.latest]));
+  const [clean, citations, print] = await Promise.all([
+    solveFromNothing(basis, problem),
+    bank.sources(),
+    fingerprint(writeSketch(sketch)),
+  ]);
+  return {
+    sketch,
+    basis,
+    ...clean,
+    gaps,
+    assumptions,
+    citations,
+    sitePressure_Pa: problem.site.pressure_Pa,
+    version: __APP_VERSION__,
+    fingerprint: print,
+    day: new Date().toISOString().slice(0, 10),
+    severalAnswers: answersDiffer(live, clean.streams),
+  };
+}

@@ -1,0 +1,86 @@
+import type { Problem } from '../engine/network/types';
+import { loadBankData } from '../sketch/bank';
+import { type BankData, makeCompile, neededChemicals } from '../sketch/compile';
+import { afterPaint, markOnce, markShown } from '../store/marks';
+import type { Stores } from '../store/react';
+import { connectSolver, type SolverClient } from '../store/solverClient';
+
+export const makeWorker = (): Worker =>
+  new Worker(new URL('../worker/solver.worker.ts', import.meta.url), { type: 'module' });
+
+/**
+ * Keeps the results answering the document: compiles each new document (memoised), loads chemicals of the bank that it
+ * newly names, and sends the problem to the worker. What changes no number (a label moved) is not sent.
+ */
+export function startSolving(stores: Stores): SolverClient {
+  const compile = makeCompile();
+  let data: BankData | null = null;
+  let loadedFor = '';
+  let sent: Problem | null = null;
+  const started = new Map<number, number>();
+
+  const client = connectSolver(makeWorker, {
+    results: (edit, last, batch) => {
+      const begun = started.get(edit);
+      stores.results.take(edit, last, batch, begun === undefined ? 0 : performance.now() - begun);
+      if (!last) return;
+      for (const known of started.keys()) if (known <= edit) started.delete(known);
+      if (edit === sent?.edit) answered(stores.compiled.getState().edit);
+    },
+    at: (edit, unit) => stores.results.at(edit, unit),
+    broke: (_edit, message, unit) => {
+      const tag = stores.sketch.getState().sketch.units.find((u) => u.id === unit)?.tag;
+      stores.results.broke(
+        tag ? `The solver stopped in ${tag}: ${message}` : `The solver stopped: ${message}`,
+      );
+    },
+    answer: () => undefined,
+  });
+
+  /** The numbers on the screen now belong to this edit. */
+  const answered = (edit: number): void => {
+    stores.results.setState({ solvedEdit: edit });
+    markOnce('first-solved');
+    afterPaint(() => {
+      document.documentElement.dataset.solvedEdit = String(edit);
+      const root = document.getElementById('root');
+      if (root) root.dataset.solvedEdit = String(edit);
+      markShown(edit);
+    });
+  };
+
+  const run = (): void => {
+    const { sketch, edit } = stores.sketch.getState();
+    const needed = neededChemicals(sketch).join();
+    if (!data || needed !== loadedFor) {
+      void loadBankData(sketch).then((loaded) => {
+        if (neededChemicals(stores.sketch.getState().sketch).join() !== needed) return;
+        data = loaded;
+        loadedFor = needed;
+        run();
+      });
+      return;
+    }
+    const { basis, problem, gaps, notes, assumptions } = compile(sketch, data, edit);
+    stores.compiled.setState({ edit, basis: basis ?? null, problem, gaps, notes, assumptions, loading: [] });
+    if (problem === sent) {
+      answered(edit);
+      return;
+    }
+    if (!basis) {
+      stores.results.clear();
+      stores.results.setState({ solvedEdit: edit });
+      sent = null;
+      return;
+    }
+    sent = problem;
+    started.set(problem.edit, performance.now());
+    client.solve(basis, problem, 'warm');
+  };
+
+  stores.sketch.subscribe((state, before) => {
+    if (state.sketch !== before.sketch) run();
+  });
+  run();
+  return client;
+}

@@ -1,0 +1,67 @@
+import type { StreamResult } from '../engine/network/types';
+import { type Dimension, displayUnit, type Measures, parseQuantity, show } from '../quantity';
+import type { LabelKey, Sketch } from '../sketch/types';
+import type { LabelRow } from './types';
+
+export type SolvedStream = Extract<StreamResult, { state: 'solved' }>;
+
+interface LabelSpec {
+  readonly dim: Dimension;
+  readonly word: string;
+  readonly of: (stream: SolvedStream) => number;
+  /** Shown behind a pure number. */
+  readonly unit?: string;
+}
+
+/** What a label may show: which result, what it measures, its word in the title strip. */
+export const LABEL_SPECS: Readonly<Record<LabelKey, LabelSpec>> = {
+  molarFlow: { dim: 'molarFlow', word: 'flow', of: (s) => s.n_mol_s },
+  massFlow: { dim: 'massFlow', word: 'mass flow', of: (s) => s.m_kg_s },
+  temperature: { dim: 'temperature', word: 'temperature', of: (s) => s.T_K },
+  pressure: { dim: 'pressure', word: 'pressure', of: (s) => s.P_Pa },
+  vapourFraction: { dim: 'fraction', word: 'vapour fraction', of: (s) => s.vapourFraction, unit: 'mol/mol' },
+  enthalpyFlow: { dim: 'power', word: 'enthalpy flow', of: (s) => s.H_W },
+  volumeFlow: { dim: 'volumeFlow', word: 'volume flow', of: (s) => s.volume_m3_s },
+};
+
+const GAUGE = { SI: 'kPa(g)', metric: 'bar(g)', US: 'psi(g)' } as const;
+
+/** Measures of the sketch's labels: its set, its own choices, (g) counted from its site pressure. */
+export function measuresOf({ display, site }: Pick<Sketch, 'display' | 'site'>): Measures {
+  const pressure =
+    site.pressure === undefined ? undefined : parseQuantity(String(site.pressure), ['pressure']);
+  return {
+    set: display.set,
+    units: { ...(display.gauge ? { pressure: GAUGE[display.set] } : {}), ...display.units },
+    ...(pressure?.ok ? { site: { P_Pa: pressure.si } } : {}),
+  };
+}
+
+/** A stream's label: one row for each chosen quantity, four significant figures. */
+export function labelRows(
+  stream: SolvedStream,
+  keys: readonly LabelKey[],
+  measures: Measures,
+): readonly LabelRow[] {
+  return keys.map((key) => {
+    const spec = LABEL_SPECS[key];
+    const shown = show(spec.of(stream), spec.dim, measures);
+    return { number: shown.number, unit: shown.unit || (spec.unit ?? '') };
+  });
+}
+
+/** "Q 1 307 kW" beside a heat link: heat by its size, its direction is drawn. */
+export const dutyText = (heat_W: number, measures: Measures): string => {
+  const { number, unit } = show(Math.abs(heat_W), 'power', measures);
+  return `Q ${number} ${unit}`;
+};
+
+/** "Labels: flow kmol/h, temperature °C, pressure bar(a)" */
+export function labelsSentence(keys: readonly LabelKey[], measures: Measures): string {
+  if (keys.length === 0) return 'Labels: none';
+  const words = keys.map((key) => {
+    const spec = LABEL_SPECS[key];
+    return `${spec.word} ${displayUnit(spec.dim, measures).label || (spec.unit ?? '')}`.trim();
+  });
+  return `Labels: ${words.join(', ')}`;
+}

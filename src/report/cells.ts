@@ -1,0 +1,47 @@
+import { formatDecimals, plainNumber } from '../quantity';
+import type { Cell } from './types';
+
+export const text = (value: string, style: { bold?: boolean; muted?: boolean } = {}): Cell => ({
+  is: 'text',
+  text: value,
+  ...style,
+});
+export const absent: Cell = { is: 'absent' };
+export const number = (value: number | undefined, decimals: number, bold = false): Cell =>
+  value === undefined || !Number.isFinite(value)
+    ? absent
+    : { is: 'number', value, decimals, ...(bold ? { bold } : {}) };
+
+/** As printed: fixed decimals, '–' for absent, '<0.01' for a trace. */
+export function printed(cell: Cell): string {
+  if (cell.is === 'absent') return '–';
+  return cell.is === 'text' ? cell.text : formatDecimals(cell.value, cell.decimals);
+}
+
+/** The number a reader of the printed page would take from it. */
+export const printedValue = (cell: Cell): number =>
+  cell.is === 'number' ? Number(cell.value.toFixed(cell.decimals)) : 0;
+
+/** For CSV: every digit. */
+export function full(cell: Cell): string {
+  if (cell.is === 'absent') return '';
+  return cell.is === 'text' ? cell.text : plainNumber(cell.value);
+}
+
+/**
+ * Decimals for a printed row: enough for `figures` significant figures of the largest value, within bounds.
+ * Fixed for the whole row, so that a column of figures can be compared.
+ */
+export function decimalsFor(
+  values: readonly (number | undefined)[],
+  figures: number,
+  least: number,
+  most: number,
+): number {
+  let largest = 0;
+  for (const value of values)
+    if (value !== undefined && Number.isFinite(value)) largest = Math.max(largest, Math.abs(value));
+  if (largest === 0) return least;
+  const wanted = figures - 1 - Math.floor(Math.log10(largest));
+  return Math.min(most, Math.max(least, wanted));
+}

@@ -1,0 +1,37 @@
+import { dutyText, labelRows } from '../drawing/labelText';
+import { buildScene } from '../drawing/scene';
+import type { DrawnState, LabelRow, Scene } from '../drawing/types';
+import type { StreamId, UnitId } from '../engine/ids';
+import type { Weight } from '../engine/outcome';
+import { measuresOf, type ReportInput, solvedStream } from './input';
+
+const RANK: Readonly<Record<Weight, number>> = { note: 0, caution: 1, 'beyond-limit': 2 };
+
+/** The worst limit of each unit. */
+export function worstByUnit(input: ReportInput): ReadonlyMap<UnitId, Weight> {
+  const worst = new Map<UnitId, Weight>();
+  for (const { at, weight } of input.findings) {
+    const known = at.unit ? worst.get(at.unit) : undefined;
+    if (at.unit && (known === undefined || RANK[weight] > RANK[known])) worst.set(at.unit, weight);
+  }
+  return worst;
+}
+
+/** The same scene as on the canvas, with the clean answer's numbers. */
+export function reportScene(input: ReportInput): Scene {
+  const { sketch } = input;
+  const measures = measuresOf(input);
+  const labels = new Map<StreamId, readonly LabelRow[]>();
+  for (const stream of sketch.streams) {
+    const result = solvedStream(input.streams.get(stream.id));
+    if (result) labels.set(stream.id, labelRows(result, sketch.display.labels, measures));
+  }
+  const states = new Map<UnitId, DrawnState>();
+  const duties = new Map<UnitId, string>();
+  for (const unit of sketch.units) {
+    const result = input.units.get(unit.id);
+    states.set(unit.id, result?.state ?? 'waiting');
+    if (result?.heat_W) duties.set(unit.id, dutyText(result.heat_W, measures));
+  }
+  return buildScene(sketch, { states, limits: worstByUnit(input), labels, duties });
+}

@@ -1,0 +1,232 @@
+import type { PhaseResult } from '../engine/network/types';
+import type { Dimension } from '../quantity/dimension';
+import type { SolvedStream } from './input';
+
+/** Volume of an ideal gas at 0 degC and 101325 Pa [m3/mol]: R T / P with the CODATA gas constant. */
+const NORMAL_m3_mol = (8.314462618 * 273.15) / 101325;
+
+/** One row of the stream table: what it measures and where the value comes from. */
+export interface RowRule {
+  readonly key: string;
+  readonly label: string;
+  readonly dim: Dimension;
+  /** Unit text when it is not the measures' own choice. */
+  readonly unit?: string;
+  /** Gauge row of a pressure. */
+  readonly gauge?: true;
+  readonly unitLabel?: string;
+  readonly figures: number;
+  readonly least: number;
+  readonly most: number;
+  readonly bold?: true;
+  readonly value: (stream: SolvedStream) => number | undefined;
+}
+
+const phase = (stream: SolvedStream, vapour: boolean): PhaseResult | undefined =>
+  stream.phases.find((p) => p.fraction > 0 && (vapour ? isVapour(p) : p.kind === 'liquid'));
+
+/** A dense phase stands in the vapour block; its name is printed in the row 'phase'. */
+const isVapour = (p: PhaseResult): boolean => p.kind === 'vapour' || p.kind === 'dense';
+
+const of =
+  (vapour: boolean, pick: (p: PhaseResult, stream: SolvedStream) => number | undefined) =>
+  (stream: SolvedStream): number | undefined => {
+    const found = phase(stream, vapour);
+    return found ? pick(found, stream) : undefined;
+  };
+
+const massFlow = (p: PhaseResult, s: SolvedStream): number => (p.fraction * s.n_mol_s * p.MW_g_mol) / 1000;
+
+/** The words for a stream's phases, as printed. */
+export function phaseWord(stream: SolvedStream): string {
+  const present = stream.phases.filter((p) => p.fraction > 0).map((p) => p.kind);
+  if (present.length === 0) return 'no flow';
+  if (present.length > 1) return 'two-phase';
+  return present[0] === 'liquid2' ? 'liquid' : (present[0] ?? 'no flow');
+}
+
+export const CONDITION_ROWS: readonly RowRule[] = [
+  { key: 'T', label: 'Temperature', dim: 'temperature', figures: 4, least: 1, most: 2, value: (s) => s.T_K },
+  { key: 'P', label: 'Pressure', dim: 'pressure', figures: 5, least: 3, most: 4, value: (s) => s.P_Pa },
+  {
+    key: 'Pg',
+    label: 'Pressure',
+    dim: 'pressure',
+    gauge: true,
+    figures: 5,
+    least: 3,
+    most: 4,
+    value: (s) => s.P_Pa,
+  },
+  {
+    key: 'vapourFraction',
+    label: 'Vapour fraction, molar',
+    dim: 'fraction',
+    unitLabel: 'mol/mol',
+    figures: 4,
+    least: 4,
+    most: 4,
+    value: (s) => s.vapourFraction,
+  },
+  {
+    key: 'vapourMassFraction',
+    label: 'Vapour fraction, mass',
+    dim: 'fraction',
+    unitLabel: 'kg/kg',
+    figures: 4,
+    least: 4,
+    most: 4,
+    value: (s) => s.vapourMassFraction,
+  },
+];
+
+export const FLOW_ROWS: readonly RowRule[] = [
+  {
+    key: 'n',
+    label: 'Molar flow',
+    dim: 'molarFlow',
+    figures: 6,
+    least: 2,
+    most: 6,
+    bold: true,
+    value: (s) => s.n_mol_s,
+  },
+  {
+    key: 'm',
+    label: 'Mass flow',
+    dim: 'massFlow',
+    figures: 7,
+    least: 2,
+    most: 6,
+    bold: true,
+    value: (s) => s.m_kg_s,
+  },
+  {
+    key: 'normal',
+    label: 'Normal gas flow',
+    dim: 'volumeFlow',
+    figures: 5,
+    least: 1,
+    most: 5,
+    value: (s) => of(true, (p) => p.fraction * s.n_mol_s * NORMAL_m3_mol)(s),
+  },
+  {
+    key: 'standardLiquid',
+    label: 'Standard liquid flow',
+    dim: 'volumeFlow',
+    figures: 5,
+    least: 3,
+    most: 6,
+    value: (s) => s.standardLiquid_m3_s,
+  },
+];
+
+export const ENERGY_ROWS: readonly RowRule[] = [
+  {
+    key: 'MW',
+    label: 'Molar mass',
+    dim: 'molarMass',
+    figures: 4,
+    least: 2,
+    most: 3,
+    value: (s) => s.MW_g_mol / 1000,
+  },
+  {
+    key: 'H',
+    label: 'Enthalpy flow, elements',
+    dim: 'power',
+    figures: 6,
+    least: 1,
+    most: 4,
+    value: (s) => s.H_W,
+  },
+  {
+    key: 'Hig',
+    label: 'Enthalpy flow, ideal gas 25 °C',
+    dim: 'power',
+    figures: 6,
+    least: 1,
+    most: 4,
+    value: (s) => s.HfromIdeal_W,
+  },
+];
+
+const block = (vapour: boolean): readonly RowRule[] => {
+  const key = vapour ? 'vapour' : 'liquid';
+  return [
+    {
+      key: `${key}.m`,
+      label: 'Mass flow',
+      dim: 'massFlow',
+      figures: 7,
+      least: 2,
+      most: 6,
+      value: of(vapour, massFlow),
+    },
+    {
+      key: `${key}.volume`,
+      label: 'Actual flow',
+      dim: 'volumeFlow',
+      figures: 5,
+      least: 2,
+      most: 6,
+      value: of(vapour, (p, s) => massFlow(p, s) / p.density_kg_m3),
+    },
+    {
+      key: `${key}.density`,
+      label: 'Density',
+      dim: 'density',
+      figures: 4,
+      least: 2,
+      most: 4,
+      value: of(vapour, (p) => p.density_kg_m3),
+    },
+    {
+      key: `${key}.MW`,
+      label: 'Molar mass',
+      dim: 'molarMass',
+      figures: 4,
+      least: 2,
+      most: 3,
+      value: of(vapour, (p) => p.MW_g_mol / 1000),
+    },
+    {
+      key: `${key}.Z`,
+      label: 'Z',
+      dim: 'number',
+      figures: 4,
+      least: 4,
+      most: 4,
+      value: of(vapour, (p) => p.Z),
+    },
+    {
+      key: `${key}.cp`,
+      label: 'Heat capacity',
+      dim: 'heatCapacity',
+      figures: 4,
+      least: 3,
+      most: 4,
+      value: of(vapour, (p) => (p.cp_J_molK * 1000) / p.MW_g_mol),
+    },
+    {
+      key: `${key}.cpcv`,
+      label: 'Cp/Cv',
+      dim: 'number',
+      figures: 4,
+      least: 3,
+      most: 3,
+      value: of(vapour, (p) => p.cpOverCv),
+    },
+    {
+      key: `${key}.viscosity`,
+      label: 'Viscosity',
+      dim: 'viscosity',
+      figures: 3,
+      least: 4,
+      most: 4,
+      value: of(vapour, (p) => p.viscosity_Pa_s),
+    },
+  ];
+};
+export const VAPOUR_ROWS = block(true);
+export const LIQUID_ROWS = block(false);

@@ -1,0 +1,188 @@
+import { displayUnit, type Measures } from '../quantity';
+import { describeStream } from '../sketch/describe';
+import type { SketchStream } from '../sketch/types';
+import { absent, decimalsFor, number, printedValue, text } from './cells';
+import { measuresOf, type ReportInput, type SolvedStream, solvedStream } from './input';
+import {
+  CONDITION_ROWS,
+  ENERGY_ROWS,
+  FLOW_ROWS,
+  LIQUID_ROWS,
+  phaseWord,
+  type RowRule,
+  VAPOUR_ROWS,
+} from './streamRows';
+import type { Cell, Row, Table } from './types';
+
+const byNumber = new Intl.Collator('en', { numeric: true });
+/** Streams in the order of their numbers: 2 before 10. */
+export const inOrder = (streams: readonly SketchStream[]): readonly SketchStream[] =>
+  [...streams].sort((a, b) => byNumber.compare(a.number, b.number));
+
+const GAUGE: Readonly<Record<Measures['set'], string>> = { SI: 'kPa(g)', metric: 'bar(g)', US: 'psi(g)' };
+
+/** Heat and material balance: one column a stream, rows in the trade's order. Totals come from unrounded values. */
+export function streamTable(input: ReportInput): Table {
+  const { sketch } = input;
+  const measures = measuresOf(input);
+  const streams = inOrder(sketch.streams);
+  const results = streams.map((stream) => solvedStream(input.streams.get(stream.id)));
+  const unitTag = new Map(
+    sketch.units.map((unit) => [unit.id, unit.name && isBoundary(unit.kind) ? unit.name : unit.tag]),
+  );
+  const end = (of: SketchStream['from']): Cell => text(of ? (unitTag.get(of[0]) ?? '') : '–');
+
+  const rows: Row[] = [
+    { key: 'from', label: 'From', cells: streams.map((s) => end(s.from)) },
+    { key: 'to', label: 'To', cells: streams.map((s) => end(s.to)) },
+    {
+      key: 'phase',
+      label: 'Phase',
+      cells: results.map((r, k) => (r ? text(phaseWord(r)) : text(stateWord(input, streams[k])))),
+    },
+    ...CONDITION_ROWS.map((rule) => ruled(rule, results, measures)),
+    group('flows', 'Flows'),
+    ...FLOW_ROWS.map((rule) => ruled(rule, results, measures)),
+    ...ENERGY_ROWS.map((rule) => ruled(rule, results, measures)),
+    group('vapour', 'Vapour'),
+    ...VAPOUR_ROWS.map((rule) => ruled(rule, results, measures)),
+    group('liquid', 'Liquid'),
+    ...LIQUID_ROWS.map((rule) => ruled(rule, results, measures)),
+    { key: 'liquid2', label: 'Second liquid', cells: results.map(secondLiquid) },
+    ...composition(input, results),
+    ...componentFlows(input, results, measures),
+  ];
+  return {
+    key: 'streams',
+    title: 'Stream summary (heat and material balance)',
+    columns: streams.map((s) => ({
+      key: s.id,
+      head: s.number,
+      sub: s.name ?? describeStream(sketch, s),
+      align: 'right',
+    })),
+    rows,
+    notes: notes(input, rows),
+  };
+}
+
+const isBoundary = (kind: string): boolean => kind === 'feed' || kind === 'product';
+const group = (key: string, label: string, unit?: string): Row => ({
+  key,
+  label,
+  ...(unit ? { unit } : {}),
+  cells: [],
+  style: 'group',
+});
+const stateWord = (input: ReportInput, stream: SketchStream | undefined): string =>
+  stream && input.streams.get(stream.id)?.state === 'no-solution' ? 'no solution' : 'waiting';
+const secondLiquid = (stream: SolvedStream | undefined): Cell => {
+  if (!stream) return absent;
+  if (stream.hiddenLiquid) return text('found: one liquid shown');
+  return text(stream.phases.some((p) => p.kind === 'liquid' && p.fraction > 0) ? 'none found' : '–');
+};
+
+function ruled(rule: RowRule, results: readonly (SolvedStream | undefined)[], measures: Measures): Row {
+  const own: Measures = rule.gauge
+    ? { ...measures, units: { ...measures.units, pressure: GAUGE[measures.set] } }
+    : measures;
+  const unit = displayUnit(rule.dim, own);
+  const values = results.map((stream) => {
+    const si = stream ? rule.value(stream) : undefined;
+    return si === undefined ? undefined : unit.toDisplay(si);
+  });
+  const decimals = decimalsFor(values, rule.figures, rule.least, rule.most);
+  return {
+    key: rule.key,
+    label: rule.label,
+    unit: rule.unitLabel ?? unit.label,
+    cells: values.map((value) => number(value, decimals, rule.bold === true)),
+  };
+}
+
+const PERCENT_PLACES = 2;
+
+function composition(input: ReportInput, results: readonly (SolvedStream | undefined)[]): Row[] {
+  const percent = (value: number | undefined): Cell => (value === 0 ? absent : number(value, PERCENT_PLACES));
+  return [
+    group('composition', 'Composition', 'mol %'),
+    ...input.basis.chemicals.map(
+      (chemical, i): Row => ({
+        key: `z.${chemical.id}`,
+        label: chemical.name,
+        unit: 'mol %',
+        cells: results.map((r) => (r ? percent((r.z[i] ?? 0) * 100) : absent)),
+      }),
+    ),
+    {
+      key: 'z.total',
+      label: 'Total',
+      unit: 'mol %',
+      style: 'total',
+      cells: results.map((r) =>
+        r && r.n_mol_s > 0 ? number(100 * r.z.reduce((a, b) => a + b, 0), PERCENT_PLACES, true) : absent,
+      ),
+    },
+  ];
+}
+
+function componentFlows(
+  input: ReportInput,
+  results: readonly (SolvedStream | undefined)[],
+  measures: Measures,
+): Row[] {
+  const unit = displayUnit('massFlow', measures);
+  const flow = (r: SolvedStream, i: number): number =>
+    unit.toDisplay(((r.z[i] ?? 0) * r.n_mol_s * (input.basis.chemicals[i]?.MW_g_mol ?? 0)) / 1000);
+  const totals = results.map((r) => (r ? unit.toDisplay(r.m_kg_s) : undefined));
+  const decimals = decimalsFor(totals, 7, 2, 6);
+  return [
+    group('componentFlows', 'Flow by component', unit.label),
+    ...input.basis.chemicals.map(
+      (chemical, i): Row => ({
+        key: `m.${chemical.id}`,
+        label: chemical.name,
+        unit: unit.label,
+        cells: results.map((r) => {
+          const value = r ? flow(r, i) : undefined;
+          return value === 0 ? absent : number(value, decimals);
+        }),
+      }),
+    ),
+    {
+      key: 'm.total',
+      label: 'Total',
+      unit: unit.label,
+      style: 'total',
+      cells: totals.map((value) => number(value, decimals, true)),
+    },
+  ];
+}
+
+/** Largest difference between a printed total and the sum of the printed figures above it. No figure is adjusted. */
+export function roundingDifference(
+  rows: readonly Row[],
+  stem: 'm' | 'z',
+): { readonly value: number; readonly decimals: number } {
+  const parts = rows.filter((row) => row.key.startsWith(`${stem}.`) && row.key !== `${stem}.total`);
+  const total = rows.find((row) => row.key === `${stem}.total`);
+  let worst = 0;
+  let decimals = 2;
+  total?.cells.forEach((cell, k) => {
+    if (cell.is !== 'number') return;
+    decimals = cell.decimals;
+    const sum = parts.reduce((so, row) => so + printedValue(row.cells[k] ?? absent), 0);
+    worst = Math.max(worst, Math.abs(sum - printedValue(cell)));
+  });
+  return { value: worst, decimals };
+}
+
+function notes(input: ReportInput, rows: readonly Row[]): string[] {
+  const { value, decimals } = roundingDifference(rows, 'm');
+  const unit = displayUnit('massFlow', measuresOf(input)).label;
+  const site = displayUnit('pressure', { ...measuresOf(input) });
+  return [
+    `Sum of printed figures differs from the totals by ${value.toFixed(decimals)} ${unit} at most: rounding. No figure is adjusted.`,
+    `Enthalpy: from the elements at 298.15 K, and from the same components as ideal gas at 25 °C; only differences mean something. Gauge pressure is above ${site.toDisplay(input.sitePressure_Pa).toPrecision(6)} ${site.label}. Normal gas: the vapour as ideal gas at 0 °C, 101.325 kPa(a). Standard liquid: 15 °C, ideal mixing of pure liquids. “–” absent, “<0.01” a trace.`,
+  ];
+}

@@ -1,0 +1,33 @@
+import type { Finding } from '../engine/outcome';
+import type { ModelSpec } from '../engine/thermo/types';
+import { CATALOGUE } from '../engine/units/catalogue';
+import type { Dimension } from '../quantity';
+import { resultWord as labelOf, modelWord as nameOfModel, type Said, sayFinding } from '../wording';
+import { measuresOf, type ReportInput } from './input';
+
+/** A finding in words, with the sketch's own tags, numbers and component names. */
+export function findingWords(finding: Finding, input: ReportInput): Said {
+  const { sketch, basis } = input;
+  return sayFinding(finding, {
+    measures: measuresOf(input),
+    tag: (id) => sketch.units.find((unit) => unit.id === id)?.tag,
+    kind: (id) => sketch.units.find((unit) => unit.id === id)?.kind,
+    number: (id) => sketch.streams.find((stream) => stream.id === id)?.number,
+    chemical: (id) => basis.chemicals.find((chemical) => chemical.id === id)?.name,
+  });
+}
+
+/** Label and dimension of a result that is meant to be shown; undefined for hidden and unknown ones. */
+export function resultWord(
+  kind: string,
+  key: string,
+): { readonly label: string; readonly dim: Dimension } | undefined {
+  const spec = CATALOGUE[kind]?.results[key];
+  return spec && !spec.hidden ? { label: labelOf(kind, key), dim: spec.dim } : undefined;
+}
+
+/** "Peng–Robinson, 1976 alpha" */
+export const modelText = (model: ModelSpec): string =>
+  model.kind === 'peng-robinson'
+    ? `${nameOfModel(model.kind)}, ${model.alpha} alpha`
+    : nameOfModel(model.kind);
