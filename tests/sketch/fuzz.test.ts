@@ -79,7 +79,7 @@ function mutate(root: Node, random: () => number): void {
   const at = node as { [key: string]: unknown };
   const other = pick(places, random);
   const how = random();
-  if (how < 0.45) at[key] = pick(STRANGE, random);
+  if (how < 0.45) at[key] = structuredClone(pick(STRANGE, random));
   else if (how < 0.6) {
     if (Array.isArray(node)) node.splice(Number(key), 1);
     else delete at[key];
@@ -149,8 +149,10 @@ describe('spoilt sketches', () => {
         if (!(error instanceof SyntaxError)) throw error;
         parses = false;
       }
-      const unreadable = !result.ok && result.problems[0].code === 'file/not-json';
-      expect(unreadable).toBe(!parses);
+      const code = result.ok ? '' : result.problems[0].code;
+      // A key that stands twice may be met before the place that is no JSON.
+      if (parses) expect(code).not.toBe('file/not-json');
+      else expect(['file/not-json', 'file/repeated-key']).toContain(code);
     }
   });
 });

@@ -31,8 +31,7 @@ export function checkPlain(root: unknown, problems: Problems): boolean {
         return false;
       }
       const inside = path === '' ? '' : `${path}.`;
-      const keys = Array.isArray(value) ? value.keys() : Object.keys(value);
-      for (const key of keys) {
+      for (const key of Object.keys(value)) {
         const item: unknown = (value as Record<string, unknown>)[key];
         waiting.push({ value: item, path: `${inside}${key}`, depth: depth + 1 });
       }
