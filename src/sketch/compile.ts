@@ -1,5 +1,6 @@
 import type { Basis, Problem, ProblemUnit, Read } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
+import { RULES } from '../engine/units/rules';
 import { chemicalId, type FullList, fullList } from './compiling/air';
 import { type BankData, type BasisRead, readBasis } from './compiling/basis';
 import { keepEqual, keepList, keepRecord } from './compiling/keep';
@@ -50,7 +51,7 @@ export type Compile = (sketch: Sketch, bank: BankData, edit: number) => Compiled
  * It never throws on what a user can type: what is missing or does not fit is a gap with its place, and the unit's settings
  * are null, while everything else is compiled all the same.
  */
-export function makeCompile({ registry = KNOWN_KINDS, thresholds }: CompileOptions = {}): Compile {
+export function makeCompile({ registry = KNOWN_KINDS, thresholds = RULES }: CompileOptions = {}): Compile {
   const readUnit = makeUnitReader();
   let last: Compiled | undefined;
   let lastBasis:

@@ -1,7 +1,7 @@
 /** The rooms of src and who may import whom. Change a rule here and in DEVELOPERS.md together. */
 export interface RoomRule {
   /**
-   * Rooms whose code it may load. `catalogue` stands for engine/units/catalogue.ts, `engine-types` for files
+   * Rooms whose code it may load. `catalogue` stands for engine/units/catalogue.ts and rules.ts, `engine-types` for files
    * directly in engine/ and its types.ts files: tables and names that solve nothing, safe for the page; `formulas` for
    * closed formulas of pure chemicals and pairs.
    */
@@ -101,6 +101,10 @@ export const FLOORS = [
 /** src/engine/units/catalogue.ts and each kind's own catalogue.ts: ports and settings as data. */
 export const isCatalogue = (path: string): boolean =>
   /^src\/engine\/units\/([\w-]+\/)?catalogue\.ts$/.test(path);
+
+/** What is known of the kinds without solving anything: their catalogues, and their limits with thresholds and basis. */
+export const isKnownOfKinds = (path: string): boolean =>
+  path === 'src/engine/units/catalogue.ts' || path === 'src/engine/units/rules.ts';
 
 /** Files of the engine that hold types and plain tables of names only. */
 export const isEngineTypes = (path: string): boolean =>

@@ -1,7 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { missingForModel } from '../../src/engine/thermo/model';
-import { RULES } from '../../src/engine/units/rules';
-import { compile, makeCompile, neededChemicals } from '../../src/sketch/compile';
+import { makeCompile, neededChemicals } from '../../src/sketch/compile';
 import { lackingFor } from '../../src/sketch/compiling/basis';
 import {
   deleteStream,
@@ -526,7 +525,7 @@ describe('every form of a setting, by a kind that only this test knows', () => {
 describe('limits that the sketch overrides', () => {
   test('are read in the dimension of their threshold; unknown codes are told', async () => {
     const sketch = { ...letDown(), limits: { 'valve/cools': '36 degF', 'valve/colour': 3 } };
-    const c = compile(sketch, await bankOf(sketch), 1, { thresholds: RULES });
+    const c = await compiled(sketch);
     expect(c.problem.limits).toEqual({ 'valve/cools': 20 });
     expect(gapsOf(c)).toEqual(['sketch/unknown-limit at limits.valve/colour']);
   });

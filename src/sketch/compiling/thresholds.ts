@@ -1,5 +1,5 @@
 import type { Finding } from '../../engine/outcome';
-import { DIMENSIONS, type Dimension, parseQuantity } from '../../quantity';
+import { type Dimension, parseQuantity } from '../../quantity';
 import { finding, word } from '../findings';
 import type { Sketch } from '../types';
 import { refusalEvidence } from './quantity';
@@ -15,24 +15,18 @@ export interface ThresholdsRead {
   readonly gaps: readonly Finding[];
 }
 
-/**
- * Thresholds that the sketch overrides, by finding code [SI]. With the list of thresholds each is read in its own
- * dimension and an unknown code is told; without it a temperature counts as absolute (state a difference in K).
- */
-export function readThresholds(
-  limits: Sketch['limits'],
-  known: readonly Threshold[] | undefined,
-): ThresholdsRead {
+/** Thresholds that the sketch overrides, by finding code [SI], each in its own dimension. An unknown code is told. */
+export function readThresholds(limits: Sketch['limits'], known: readonly Threshold[]): ThresholdsRead {
   const out: [string, number][] = [];
   const gaps: Finding[] = [];
   for (const [code, typed] of Object.entries(limits ?? {})) {
     const at = { path: `limits.${code}` };
-    const rule = known?.find((r) => r.code === code);
-    if (known && !rule) {
+    const rule = known.find((r) => r.code === code);
+    if (!rule) {
       gaps.push(finding('sketch/unknown-limit', 'caution', at, word('code', code)));
       continue;
     }
-    const parsed = parseQuantity(typed, rule ? rule.dim : DIMENSIONS);
+    const parsed = parseQuantity(typed, rule.dim);
     if (parsed.ok) out.push([code, parsed.si]);
     else
       gaps.push(finding('sketch/not-a-quantity', 'caution', at, ...refusalEvidence(String(typed), parsed)));
