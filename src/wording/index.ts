@@ -1,9 +1,10 @@
 /** Words for people: names, labels and sentences. Codes and keys come from the engine; nothing here is calculated. */
-export { sayEditRefusal } from './edits';
-export { sayFileProblem } from './files';
+export { sayEditRefusal } from './general/edits';
+export { sayFileProblem } from './general/files';
+export { type QuantitySaid, sayQuantityRefusal } from './general/quantity';
 export { capital, humanised } from './humanise';
-export { sayRefusal } from './refusals';
 export { type Said, type SayContext, sayFinding } from './say';
+export { sayRefusal } from './sayRefusal';
 export {
   basisWord,
   kindAbout,

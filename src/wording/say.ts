@@ -2,17 +2,15 @@ import type { StreamId, UnitId } from '../engine/ids';
 import type { Evidence, Finding } from '../engine/outcome';
 import { type MeasureSet, type Measures, show } from '../quantity';
 import { SENTENCES } from './codes';
+import { EQUILIBRIUM_WORDS } from './general/equilibrium';
+import { SKETCH_WORDS } from './general/sketch';
+import { makeSlots, type Names, type Words } from './general/slots';
 import { capital, humanised } from './humanise';
-import { sayRefusal } from './refusals';
 import { basisWord, portWord, propertyWord, settingWord } from './words';
 
 /** How a finding's ids are called, and in what it is measured. A name that is unknown is shown by its id. */
-export interface SayContext {
+export interface SayContext extends Names {
   readonly measures: Measures | MeasureSet;
-  tag?(unit: UnitId): string | undefined;
-  kind?(unit: UnitId): string | undefined;
-  number?(stream: StreamId): string | undefined;
-  chemical?(id: string): string | undefined;
 }
 
 export interface Said {
@@ -42,20 +40,13 @@ function valueText(seen: Evidence, percent: boolean, kind: string, ctx: SayConte
   if (name === 'stream') return ctx.number?.(text as StreamId) ?? text;
   if (name === 'port' || name === 'outlet') return portWord(kind, text);
   if (name === 'property' || name === 'lacks') return propertyWord(text);
-  if (name === 'known' || name === 'given' || name === 'beside')
-    return text
-      .split(', ')
-      .map((key) => settingWord(kind, key))
-      .join(', ');
   return text;
 }
 
 /** Fills the slots of one sentence. */
 function filled(template: string, f: Finding, ctx: SayContext): string {
   const kind = (f.at.unit && ctx.kind?.(f.at.unit)) ?? '';
-  const text = (name: string): string | undefined => f.evidence.find((e) => e.name === name)?.text;
   return template.replace(/\{(\w+)(%|\.\.\.)?\}/g, (_, name: string, how?: string) => {
-    if (name === 'why') return sayRefusal(text('why') ?? '', text('found'), text('near'));
     const all = f.evidence.filter((e) => e.name === name);
     if (all.length > 0)
       return (how === '...' ? all : all.slice(0, 1))
@@ -76,17 +67,34 @@ function whereOf({ at }: Finding, ctx: SayContext): string {
   return [unit, stream].filter(Boolean).join(', ');
 }
 
+/** What the document and a flash say. */
+const WORDS: Readonly<Record<string, Words>> = { ...SKETCH_WORDS, ...EQUILIBRIUM_WORDS };
+
+/** Title, sentence and next step of a code, wherever its words stand; nobody's code is shown by its own words. */
+function wordsOf(f: Finding, ctx: SayContext): Pick<Said, 'title' | 'sentence' | 'next'> {
+  if (Object.hasOwn(WORDS, f.code)) {
+    const words = WORDS[f.code]!;
+    const slots = makeSlots(f.evidence, f.at, ctx.measures, ctx);
+    const next = words.next?.(slots);
+    return { title: words.title, sentence: words.sentence(slots), ...(next ? { next } : {}) };
+  }
+  const sentence = Object.hasOwn(SENTENCES, f.code) ? SENTENCES[f.code] : undefined;
+  if (!sentence) return { title: capital(humanised(f.code)), sentence: `${humanised(f.code)}.` };
+  const next = sentence.next === undefined ? {} : { next: filled(sentence.next, f, ctx) };
+  return { title: sentence.title, sentence: filled(sentence.says, f, ctx), ...next };
+}
+
 /**
  * A finding as people read it: title, sentence, next step, basis of its threshold, place. Numbers are shown in the measures
- * asked for. A code that nobody wrote a sentence for is shown by its own words.
+ * asked for.
  */
 export function sayFinding(f: Finding, ctx: SayContext): Said {
-  const sentence = Object.hasOwn(SENTENCES, f.code) ? SENTENCES[f.code] : undefined;
+  const { title, sentence, next } = wordsOf(f, ctx);
   const basis = f.evidence.find((e) => e.name === 'basis')?.text;
   return {
-    title: sentence?.title ?? capital(humanised(f.code)),
-    sentence: capital(sentence ? filled(sentence.says, f, ctx) : `${humanised(f.code)}.`),
-    ...(sentence?.next === undefined ? {} : { next: filled(sentence.next, f, ctx) }),
+    title,
+    sentence: capital(sentence),
+    ...(next === undefined ? {} : { next }),
     ...(basis === undefined ? {} : { basis: basisWord(basis) }),
     where: whereOf(f, ctx),
   };

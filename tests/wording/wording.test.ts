@@ -1,46 +1,24 @@
 import { describe, expect, test } from 'vitest';
-import { EQUILIBRIUM_FINDINGS } from '../../src/engine/equilibrium/findings';
 import { NETWORK_FINDINGS } from '../../src/engine/network/findings';
-import { PAIR_RULES } from '../../src/engine/network/pairLimits';
 import type { Finding } from '../../src/engine/outcome';
-import { CATALOGUE } from '../../src/engine/units/catalogue';
-import { RULES } from '../../src/engine/units/rules';
+import { CATALOGUE, LIMIT_RULES as RULES } from '../../src/engine/units/catalogue';
 import { STREAM_FINDINGS } from '../../src/engine/units/streamLimits';
-import { EDIT_REFUSALS } from '../../src/sketch/edits';
-import { FILE_PROBLEMS } from '../../src/sketch/file/problem';
-import { SKETCH_FINDINGS } from '../../src/sketch/findings';
-import { kindWord, portWord, resultWord, sayFileProblem, sayFinding, settingWord } from '../../src/wording';
+import { kindWord, portWord, resultWord, sayFinding, settingWord } from '../../src/wording';
 import { SENTENCES } from '../../src/wording/codes';
-import { EDIT_CODES } from '../../src/wording/edits';
-import { FILE_CODES } from '../../src/wording/files';
 
 const ofKinds = Object.values(CATALOGUE).flatMap((kind) => kind.findings);
-const CODES = [
-  ...ofKinds,
-  ...STREAM_FINDINGS,
-  ...NETWORK_FINDINGS,
-  ...EQUILIBRIUM_FINDINGS,
-  ...SKETCH_FINDINGS,
-];
+const CODES = [...ofKinds, ...STREAM_FINDINGS, ...NETWORK_FINDINGS];
 
 describe('every code', () => {
   test.each([...new Set(CODES)])('%s has a title and a sentence', (code) => {
     expect(SENTENCES[code]?.title).toBeTruthy();
-    expect(SENTENCES[code]?.says).toMatch(/[.]$|\{why\}$/);
+    expect(SENTENCES[code]?.says).toMatch(/[.]$/);
   });
 
   test('that carries a threshold is one that a kind, a stream or the model may emit', () => {
     const known = new Set<string>(CODES);
-    expect([...RULES, ...PAIR_RULES].filter((r) => !known.has(r.code))).toEqual([]);
+    expect(RULES.filter((r) => !known.has(r.code))).toEqual([]);
     expect(new Set(RULES.map((r) => r.code)).size).toBe(RULES.length);
-  });
-
-  test('of an edit that is refused has a line', () => {
-    expect(EDIT_REFUSALS.filter((code) => !EDIT_CODES.includes(code))).toEqual([]);
-  });
-
-  test('of a file that is not opened has a line', () => {
-    expect(FILE_PROBLEMS.filter((code) => !FILE_CODES.includes(code))).toEqual([]);
   });
 });
 
@@ -103,24 +81,22 @@ describe('a finding is said', () => {
     expect(said.sentence).toContain('in a loop: A, B, C.');
   });
 
-  test('as text that was not taken, with the reason', () => {
-    const refused: Finding = {
-      code: 'sketch/not-a-quantity',
+  test('by the sentences of the document and of a flash where those are theirs', () => {
+    const needs = {
+      code: 'sketch/needs-value',
       weight: 'caution',
       at: { unit: 'u' as never, path: 'p.P' },
-      evidence: [
-        ['typed', '7 bra'],
-        ['why', 'quantity/unknown-unit'],
-        ['found', 'bra'],
-        ['fits', 'bar, kPa'],
-        ['near', 'bar'],
-      ].map(([name = '', text = '']) => ({ name, value: 0, dim: 'number', text })),
-    };
-    const said = sayFinding(refused, { measures: 'SI', kind: () => 'valve' });
-    expect(said.sentence).toBe(
-      'Outlet pressure: “7 bra” is not taken. “bra” is no unit known here. Perhaps bar?',
-    );
-    expect(said.next).toBe('It could be in: bar, kPa.');
+      evidence: [],
+    } as const;
+    const said = sayFinding(needs, { measures: 'SI', kind: () => 'valve' });
+    expect(said.sentence).toMatch(/outlet pressure/i);
+    const stuck = {
+      code: 'equilibrium/no-such-state',
+      weight: 'beyond-limit',
+      at: {},
+      evidence: [],
+    } as const;
+    expect(sayFinding(stuck, { measures: 'SI' }).title).toBe('No such state');
   });
 
   test('without an open slot left, whatever the evidence', () => {
@@ -130,17 +106,4 @@ describe('a finding is said', () => {
       expect(`${title} ${sentence} ${next}`).not.toMatch(/[{}]|undefined|NaN/);
     }
   });
-});
-
-test('a file that is not opened names the place and the reason', () => {
-  const seen = [
-    { name: 'line', value: 3, dim: 'number' },
-    { name: 'column', value: 12, dim: 'number' },
-  ] as const;
-  expect(sayFileProblem({ path: '', code: 'file/not-json', evidence: seen })).toBe(
-    'The file cannot be read as JSON from line 3, column 12 on.',
-  );
-  expect(sayFileProblem({ path: 'units.2.tag', code: 'file/missing', evidence: [] })).toMatch(
-    /^units\.2\.tag: /,
-  );
 });

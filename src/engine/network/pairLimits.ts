@@ -2,12 +2,8 @@ import type { StreamState } from '../equilibrium/types';
 import type { StreamId } from '../ids';
 import type { Finding } from '../outcome';
 import type { Model } from '../thermo/types';
-import { finding, named, type Overrides, type Rule, rule, saw, thresholdOf } from '../units/limits/rule';
-
-/** Both chemicals of a pair without a parameter reach this share of a stream [-]; a gas or water counts from a tenth of it. */
-const NONE = rule('model/pair-none', 'caution', 0.05, 'fraction', 'own-rule');
-const PREDICTED = rule('model/pair-predicted', 'note', 0, 'fraction', 'own-rule');
-export const PAIR_RULES: readonly Rule[] = [NONE, PREDICTED];
+import { PAIR_NONE, PAIR_PREDICTED } from '../units/limits/pairs';
+import { finding, named, type Overrides, saw, thresholdOf } from '../units/limits/rule';
 
 /** Dissolved gases and water tell on phase equilibrium at a tenth of the share. */
 const isTelling = (family: string | undefined): boolean => family === 'inorganic-gas' || family === 'water';
@@ -37,7 +33,7 @@ export function pairLimits(
       continue;
     }
     const [a, b] = [model.chemicals[i]!, model.chemicals[j]!];
-    const least = thresholdOf(NONE, overrides);
+    const least = thresholdOf(PAIR_NONE, overrides);
     const need_i = isTelling(a.family) ? least * TELLING : least;
     const need_j = isTelling(b.family) ? least * TELLING : least;
     let worst: { id: StreamId; least: number } | undefined;
@@ -48,8 +44,8 @@ export function pairLimits(
     }
     if (!worst) continue;
     const seen = [named('first', a.id), named('second', b.id), saw('fraction', worst.least, 'fraction')];
-    found.push(finding(NONE, { stream: worst.id }, seen, overrides));
+    found.push(finding(PAIR_NONE, { stream: worst.id }, seen, overrides));
   }
-  if (predicted > 0) found.push(finding(PREDICTED, {}, [saw('count', predicted, 'number')], overrides));
+  if (predicted > 0) found.push(finding(PAIR_PREDICTED, {}, [saw('count', predicted, 'number')], overrides));
   return found;
 }

@@ -19,3 +19,6 @@ export const CATALOGUE: Readonly<Record<string, KindCatalogue>> = {
   cooler,
   drum,
 };
+
+/** Thresholds of all limits: what a sketch may override, and what is printed with its basis. */
+export { RULES as LIMIT_RULES } from './rules';

@@ -2,6 +2,7 @@ import { COOLER_RULES } from './cooler/limits';
 import { DRUM_RULES } from './drum/limits';
 import { HEATER_RULES } from './heater/limits';
 import { ENTERS_BELOW } from './limits/joiningPressure';
+import { PAIR_NONE, PAIR_PREDICTED } from './limits/pairs';
 import type { Rule } from './limits/rule';
 import { UTILITY_RULES } from './limits/utilities';
 import { PRODUCT_RULES } from './product/limits';
@@ -18,4 +19,6 @@ export const RULES: readonly Rule[] = [
   ...UTILITY_RULES,
   ...DRUM_RULES,
   ...PRODUCT_RULES,
+  PAIR_NONE,
+  PAIR_PREDICTED,
 ];

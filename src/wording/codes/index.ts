@@ -1,16 +1,14 @@
 import { KIND_WORDS } from '../kinds';
 import type { Sentence } from '../types';
 import { NETWORK_SENTENCES } from './network';
-import { SKETCH_SENTENCES } from './sketch';
 import { STREAM_SENTENCES } from './streams';
 import { UNIT_SENTENCES } from './units';
 
-/** Every sentence by its code. */
+/** Sentences of units, streams and network by code; what the document and a flash say stands in general/. */
 export const SENTENCES: Readonly<Record<string, Sentence>> = Object.assign(
   {},
   UNIT_SENTENCES,
   STREAM_SENTENCES,
   NETWORK_SENTENCES,
-  SKETCH_SENTENCES,
   ...Object.values(KIND_WORDS).map((words) => words.sentences ?? {}),
 );

@@ -1,6 +1,6 @@
 import type { Sentence } from '../types';
 
-/** Order, loops, closure, the model's pairs, and what a flash cannot do. */
+/** Order, loops, closure, and the model's pairs. */
 export const NETWORK_SENTENCES: Readonly<Record<string, Sentence>> = {
   'network/loop': {
     title: 'Loop',
@@ -51,45 +51,5 @@ export const NETWORK_SENTENCES: Readonly<Record<string, Sentence>> = {
     title: 'Predicted pairs',
     says: 'Of the pairs that meet in the sketch {count} have a parameter that group contributions predict.',
     next: 'See the list of pairs; give measured values where they matter.',
-  },
-  'equilibrium/no-convergence': {
-    title: 'The flash does not settle',
-    says: 'No phase equilibrium was found after {evaluations} evaluations.',
-    next: 'Change the conditions a little; near a critical point this can happen.',
-  },
-  'equilibrium/out-of-range': {
-    title: 'Out of reach',
-    says: 'What is asked for lies outside the temperatures and pressures that are searched.',
-    next: 'Check the conditions.',
-  },
-  'equilibrium/no-such-state': {
-    title: 'No such state',
-    says: 'There is no state that meets both conditions.',
-    next: 'Check the conditions; above the critical point there is no boiling, for example.',
-  },
-  'equilibrium/between-states': {
-    title: 'Between two states',
-    says: 'The conditions are met only between two states, at a jump.',
-    next: 'Give another pair of conditions.',
-  },
-  'equilibrium/several-states': {
-    title: 'More than one state',
-    says: 'More than one state meets the conditions; the one shown is one of them.',
-    next: 'Give another pair of conditions if the other is meant.',
-  },
-  'equilibrium/second-liquid': {
-    title: 'Another liquid may form',
-    says: 'The stability test finds another liquid, mostly {chemical}. The numbers are for one liquid.',
-    next: 'Do not rely on the liquid figures.',
-  },
-  'equilibrium/no-entropy': {
-    title: 'No entropy',
-    says: 'A standard entropy is missing for {chemical...}, so a state cannot be fixed by entropy.',
-    next: 'Give another condition, or bring the standard entropy.',
-  },
-  'equilibrium/not-a-state': {
-    title: 'Not two conditions',
-    says: 'The two conditions do not fix a state.',
-    next: 'Give another pair of conditions.',
   },
 };

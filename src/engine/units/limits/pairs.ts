@@ -1,0 +1,6 @@
+import { rule } from './rule';
+
+/** Both chemicals of a pair without a parameter reach this share of a stream [-]; a gas or water counts from a tenth of it. */
+export const PAIR_NONE = rule('model/pair-none', 'caution', 0.05, 'fraction', 'own-rule');
+/** Counted in one note whenever two chemicals meet. */
+export const PAIR_PREDICTED = rule('model/pair-predicted', 'note', 0, 'fraction', 'own-rule');
