@@ -84,6 +84,8 @@ export interface Detour {
   readonly lanes: readonly Lane[];
   /** Most that the straight pieces at its ports may take [px]. */
   readonly stubs: readonly [number, number];
+  /** Most that the way may cost in length and bends [px]. */
+  readonly most: number;
 }
 
 export interface Route {
@@ -146,7 +148,7 @@ function ledOnce(
     ...(detour ? [] : [[obstacles, EVERYWHERE] as const]),
   ];
   for (const [boxes, region] of looks) {
-    const points = throughStops(stops, HEADING[a.side], arrive, boxes, region, detour?.lanes);
+    const points = throughStops(stops, HEADING[a.side], arrive, boxes, region, detour);
     if (points) return { points: simplified([a.at, ...points, b.at]), region };
   }
   return undefined;
@@ -158,15 +160,20 @@ function throughStops(
   arrive: Heading,
   obstacles: readonly Box[],
   region: Box,
-  lanes?: readonly Lane[],
+  detour?: Detour,
 ): Point[] | undefined {
   const points: Point[] = [stops[0]!];
   let now = heading;
   for (let k = 1; k < stops.length; k++) {
     const last = k === stops.length - 1;
-    const leg = { from: stops[k - 1]!, heading: now, to: stops[k]! };
+    const leg = {
+      from: stops[k - 1]!,
+      heading: now,
+      to: stops[k]!,
+      ...(detour ? { most: detour.most } : {}),
+    };
     if (!last && leg.from[0] === leg.to[0] && leg.from[1] === leg.to[1]) continue;
-    const way = findWay(last ? { ...leg, arrive } : leg, obstacles, region, lanes);
+    const way = findWay(last ? { ...leg, arrive } : leg, obstacles, region, detour?.lanes);
     if (!way) return undefined;
     points.push(...way.slice(1));
     const [p, q] = [way.at(-2), way.at(-1)];

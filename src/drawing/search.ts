@@ -18,6 +18,8 @@ export interface Leg {
   readonly to: Point;
   /** Direction in which the line goes on behind `to`; undefined: any. */
   readonly arrive?: Heading;
+  /** A way that costs more than this is not worth having [px]. */
+  readonly most?: number;
 }
 
 /** Grown as needed and kept: a search allocates next to nothing. */
@@ -106,6 +108,9 @@ export function findWay(
   const { xs, ys, nx, ny, across, down } = grid;
   const node = ([x, y]: Point): number => ys.indexOf(y) * nx + xs.indexOf(x);
   const goal = node(leg.to);
+  const { most = Infinity } = leg;
+  // taken out of the loop: exports of another file are not free to read there
+  const [closed, nearSymbol, alongLane] = [CLOSED, NEAR_SYMBOL, ALONG_LANE];
   const [gx, gy] = leg.to;
   ensure(nx * ny * 4);
   const first = node(leg.from) * 4 + leg.heading;
@@ -117,6 +122,7 @@ export function findWay(
     const at = state >> 2;
     const heading = state & 3;
     const g = cost[state]!;
+    if (g > most) return undefined;
     if (at === goal) {
       if (leg.arrive === undefined || heading === leg.arrive) return corners(state, xs, ys, nx);
       if (((heading + 2) & 3) !== leg.arrive) {
@@ -136,11 +142,11 @@ export function findWay(
       const next = d === 0 ? at + 1 : d === 1 ? at + nx : d === 2 ? at - 1 : at - nx;
       if (d === 0 ? ix + 1 >= nx : d === 1 ? iy + 1 >= ny : d === 2 ? ix === 0 : iy === 0) continue;
       const edge = d === 0 ? across[at]! : d === 1 ? down[at]! : d === 2 ? across[next]! : down[next]!;
-      if (edge & CLOSED) continue;
+      if (edge & closed) continue;
       const x = xs[next % nx]!;
       const y = ys[Math.floor(next / nx)]!;
       const length = Math.abs(x - xs[ix]!) + Math.abs(y - ys[iy]!);
-      let to = g + length * (edge & ALONG_LANE ? LANE_COST : edge & NEAR_SYMBOL ? SOFT_COST : 1);
+      let to = g + length * (edge & alongLane ? LANE_COST : edge & nearSymbol ? SOFT_COST : 1);
       if (d !== heading) to += BEND + LATE * (Math.abs(gx - xs[ix]!) + Math.abs(gy - ys[iy]!));
       const s = next * 4 + d;
       if (to < cost[s]!) {

@@ -1,9 +1,11 @@
 import { describe, expect, test } from 'vitest';
 import { boxAround, boxOfPiece, grown, overlaps } from '../../src/drawing/boxes';
 import { diamondPath } from '../../src/drawing/diamonds';
+import { measureText } from '../../src/drawing/metrics';
 import { buildScene } from '../../src/drawing/scene';
-import { portOnSheet } from '../../src/drawing/transform';
-import type { Box, LineShape, Point, Scene, UnitShape } from '../../src/drawing/types';
+import { portOnSheet, toSheet } from '../../src/drawing/transform';
+import type { Box, LineShape, Point, Scene, TextShape, UnitShape } from '../../src/drawing/types';
+import type { Weight } from '../../src/engine/outcome';
 import type { Sketch } from '../../src/sketch/types';
 import { randomSheet } from './random';
 import { inputOf, SHEETS } from './sheets';
@@ -23,14 +25,35 @@ const pieces = (points: readonly Point[]): readonly (readonly [Point, Point])[] 
 const endAt = (unit: UnitShape, port: string): Point => portOnSheet(unit, unit.symbol.ports(port)!).at;
 
 /** The drawn symbol and its heat link: nothing else may lie on them. */
-const obstaclesOf = (scene: Scene): readonly (readonly [UnitShape, Box])[] =>
-  scene.units.map((unit): [UnitShape, Box] => [unit, unit.box]);
+function obstaclesOf(scene: Scene): readonly (readonly [UnitShape, Box])[] {
+  return scene.units.flatMap((unit): (readonly [UnitShape, Box])[] => {
+    const { link } = unit.symbol;
+    const own = [unit, unit.box] as const;
+    if (!link) return [own];
+    return [own, [unit, boxOfPiece(toSheet(unit, link.from), toSheet(unit, link.to), 3)]];
+  });
+}
 
-const tagBox = (unit: UnitShape): Box | undefined =>
-  unit.tagText && { x: unit.tagText.at[0], y: unit.tagText.at[1] - 9, w: 20, h: 18 };
+function boxOfText({ at: [x, y], text, size, weight, anchor }: TextShape): Box {
+  const w = measureText(text, size, weight);
+  const left = anchor === 'start' ? x : anchor === 'end' ? x - w : x - w / 2;
+  return { x: left, y: y - size * 0.75, w, h: size * 0.95 };
+}
+
+/** Tag with the room of its state, limit mark, duty and a name that stands outside. */
+function textsOf(unit: UnitShape): readonly Box[] {
+  const { tagText, limit, duty, symbol, texts } = unit;
+  return [
+    ...(tagText ? [{ ...boxOfText(tagText), h: 18 }] : []),
+    ...(limit ? [boxAround(limit.at, 8)] : []),
+    ...(duty?.text ? [boxOfText(duty.text)] : []),
+    ...(symbol.nameInside ? [] : texts.map(boxOfText)),
+  ];
+}
 
 describe.each(CASES)('%s', (_name, sketch) => {
-  const scene = buildScene(sketch, inputOf(sketch));
+  const limits = Object.fromEntries(sketch.units.map((u): [string, Weight] => [u.tag, 'caution']));
+  const scene = buildScene(sketch, inputOf(sketch, { limits }));
   const byId = new Map(scene.units.map((u) => [u.unit, u]));
   const streamOf = (line: LineShape) => sketch.streams.find((s) => s.id === line.stream)!;
 
@@ -103,8 +126,9 @@ describe.each(CASES)('%s', (_name, sketch) => {
       const about = `label ${label.stream}`;
       for (const unit of scene.units) {
         expect(overlaps(room, unit.box), `${about} on ${unit.tag}`).toBe(false);
-        const tag = tagBox(unit);
-        if (tag) expect(overlaps(label.box, tag), `${about} on the tag ${unit.tag}`).toBe(false);
+        for (const text of textsOf(unit)) {
+          expect(overlaps(label.box, text), `${about} on a text of ${unit.tag}`).toBe(false);
+        }
       }
       for (const line of scene.lines) {
         for (const [a, b] of pieces(line.points)) {
@@ -153,4 +177,24 @@ test('every label of the hand-made sheets finds a place, and most do on the crow
   for (const sketch of Object.values(SHEETS)) expect(shown(sketch)).not.toContain(false);
   const all = CASES.flatMap(([, sketch]) => shown(sketch));
   expect(all.filter(Boolean).length / all.length).toBeGreaterThan(0.84);
+});
+
+test.each(Object.entries(SHEETS))('tags, names, marks and duties cover nothing: %s', (_name, sketch) => {
+  const limits = Object.fromEntries(sketch.units.map((u): [string, Weight] => [u.tag, 'note']));
+  const scene = buildScene(sketch, inputOf(sketch, { limits }));
+  const texts = scene.units.flatMap((unit) => textsOf(unit).map((box) => ({ unit, box })));
+  texts.forEach(({ unit, box }, k) => {
+    for (const [other, obstacle] of obstaclesOf(scene)) {
+      expect(overlaps(box, obstacle), `${unit.tag} on ${other.tag}`).toBe(false);
+    }
+    for (const line of scene.lines) {
+      for (const [a, b] of pieces(line.points)) {
+        expect(overlaps(box, boxOfPiece(a, b, 0.9)), `${unit.tag} on line ${line.number}`).toBe(false);
+      }
+      if (line.diamond) expect(overlaps(box, boxAround(line.diamond, 12))).toBe(false);
+    }
+    for (const other of texts.slice(k + 1)) {
+      expect(overlaps(box, other.box), `${unit.tag} on the text of ${other.unit.tag}`).toBe(false);
+    }
+  });
 });
