@@ -70,3 +70,16 @@ export function portPlace(
   const port = symbolOf(unit, kinds).ports(name);
   return port && portOnSheet(poseOf(unit, moved), port);
 }
+
+/** Places of all ports as the sketch's lines have them, dots included; undefined for a port that is not there. */
+export function portFinder(
+  sketch: Sketch,
+  moved?: ReadonlyMap<UnitId, Point>,
+  kinds: Readonly<Record<string, KindCatalogue>> = CATALOGUE,
+): (unit: UnitId, name: string) => PortPlace | undefined {
+  const byId = new Map(standingUnits(sketch, moved, kinds).map((u) => [u.unit.id, u]));
+  return (unit, name) => {
+    const standing = byId.get(unit);
+    return standing && portOf(standing, name);
+  };
+}

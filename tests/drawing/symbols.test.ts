@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { buildScene } from '../../src/drawing/scene';
-import { standingUnits } from '../../src/drawing/standing';
+import { portFinder, portPlace, standingUnits } from '../../src/drawing/standing';
 import { iconOf, symbolToSvg } from '../../src/drawing/symbols/icon';
 import { plainSymbol, SYMBOLS, symbolOf } from '../../src/drawing/symbols/registry';
 import {
@@ -205,5 +205,11 @@ describe('a dot that no one has turned', () => {
   test('leaves a free port only the sides that are left', () => {
     const scene = buildScene(below({}), inputOf(below({})));
     expect(portOfShape(scene.units[1]!, 'out3')?.side).toBe('bottom');
+    const dot = scene.units[1]!;
+    const find = portFinder(below({}));
+    for (const name of ['in', 'out1', 'out2', 'out3']) {
+      expect(find(dot.unit, name)).toEqual(portOfShape(dot, name));
+    }
+    expect(portPlace(below({}).units[1]!, 'in')?.side).toBe('left');
   });
 });
