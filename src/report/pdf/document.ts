@@ -41,6 +41,8 @@ function valueCell(of: Cell, row: Row, align: 'left' | 'right'): TableCell {
   const muted = of.is === 'absent' || (of.is === 'text' && of.muted === true);
   return cell(printed(of), {
     alignment: align,
+    // The thin space that groups digits must not become a line break.
+    ...(of.is === 'number' ? { noWrap: true } : {}),
     ...(bold ? { bold } : {}),
     ...(muted ? { color: PRINT.ink3 } : {}),
   });
