@@ -1,5 +1,5 @@
 import { type CSSProperties, memo } from 'react';
-import type { Box, PathShape, Point, TextShape } from '../drawing/types';
+import type { PathShape, Point, TextShape } from '../drawing/types';
 import { inkOf, pathStyle } from './paint';
 
 /** Strokes and fills of the scene, as they are. */
@@ -24,12 +24,6 @@ export function Text({ shape, stale }: { readonly shape: TextShape; readonly sta
     </text>
   );
 }
-
-/** The point of a box nearest to another point. */
-export const nearestOf = (box: Box, [x, y]: Point): Point => [
-  Math.min(Math.max(x, box.x), box.x + box.w),
-  Math.min(Math.max(y, box.y), box.y + box.h),
-];
 
 /** Keeps what is inside at its size on the screen: it grows and shrinks against the zoom, away from a fixed point. */
 export function Steady({

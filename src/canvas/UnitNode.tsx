@@ -1,12 +1,14 @@
 import { memo, useMemo } from 'react';
 import type { NodeProps } from 'reactflow';
 import { limitMark } from '../drawing/marks';
-import { toSheet, transformOf } from '../drawing/transform';
-import type { Point, UnitShape } from '../drawing/types';
+import { transformOf } from '../drawing/transform';
+import type { UnitShape } from '../drawing/types';
 import type { UnitId } from '../engine/ids';
 import { useSession } from '../store/react';
+import { flagPort } from './extent';
 import { nodeBox } from './nodes';
-import { nearestOf, Paths, Steady, Text } from './Shapes';
+import { tagHold } from './quiet';
+import { Paths, Steady, Text } from './Shapes';
 import { useSheet, useSheetStore } from './sheetStore';
 import { UnitPorts } from './UnitPorts';
 
@@ -55,12 +57,6 @@ export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
 const isEntry = (units: readonly string[], streams: readonly string[], unit: UnitId): boolean | null =>
   units.length + streams.length === 0 ? null : units[0] === unit;
 
-/** A flag keeps its size on the screen with the name inside; its port stays where the line ends. */
-const flagPort = (shape: UnitShape): Point | undefined => {
-  const port = shape.symbol.ports('out') ?? shape.symbol.ports('in');
-  return port && toSheet(shape, port.at);
-};
-
 const Drawing = memo(function Drawing({
   shape,
   showDuty,
@@ -71,7 +67,7 @@ const Drawing = memo(function Drawing({
   const stale = shape.state === 'out-of-date';
   const tag = shape.tagText;
   const limit = useMemo(() => (shape.limit ? limitMark(shape.limit.weight) : []), [shape.limit]);
-  const flag = shape.symbol.nameInside ? flagPort(shape) : undefined;
+  const flag = flagPort(shape);
   const symbol = (
     <>
       <g className="symbol" transform={transformOf(shape)}>
@@ -82,7 +78,7 @@ const Drawing = memo(function Drawing({
       ))}
     </>
   );
-  const hold = nearestOf(shape.box, tag?.at ?? shape.limit?.at ?? shape.at);
+  const hold = tagHold(shape);
   return (
     <>
       {shape.duty ? (

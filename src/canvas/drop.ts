@@ -1,8 +1,8 @@
 import { boxOfPiece, overlaps } from '../drawing/boxes';
 import { plainSymbol } from '../drawing/symbols/registry';
 import { GRID } from '../drawing/tokens';
-import { toSheet } from '../drawing/transform';
-import type { Box, LineShape, Point } from '../drawing/types';
+import { AWAY, type Pose, portOnSheet } from '../drawing/transform';
+import type { Box, LineShape, Point, PortPlace, SymbolData } from '../drawing/types';
 import type { UnitId } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { Sketch } from '../sketch/types';
@@ -136,10 +136,9 @@ function atLooseEnd(
     const [a, b] = [line.points.at(-2)!, line.points.at(-1)!];
     if (nearestOn([a, b], at).distance > LOOSE_CATCH / zoom) continue;
     const { turn, mirror } = facing(kind, [a, b]);
-    const [px, py] = toSheet({ at: [0, 0], turn, mirror }, inlet.at);
     return {
       kind,
-      at: onGrid([b[0] - px, b[1] - py]),
+      at: onGrid(takingUp(plainSymbol(kind), inlet, { at: [0, 0], turn, mirror }, a, b)),
       turn,
       mirror,
       on: null,
@@ -148,6 +147,16 @@ function atLooseEnd(
     };
   }
   return undefined;
+}
+
+/** With its inlet at the arrowhead where the line runs into it; else further on, so that the line finds its way round. */
+function takingUp(symbol: SymbolData, inlet: PortPlace, pose: Pose, a: Point, b: Point): Point {
+  const flow: Point = [Math.sign(b[0] - a[0]), Math.sign(b[1] - a[1])];
+  const port = portOnSheet(pose, inlet);
+  const [ux, uy] = AWAY[port.side];
+  if (ux === -flow[0] && uy === -flow[1]) return [b[0] - port.at[0], b[1] - port.at[1]];
+  const on = STUB + Math.max(symbol.box.w, symbol.box.h) / 2;
+  return [b[0] + flow[0] * on, b[1] + flow[1] * on];
 }
 
 function firstInlet(kind: string): string | undefined {

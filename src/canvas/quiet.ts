@@ -1,12 +1,14 @@
 import { BoxIndex, boxAround, boxOfPiece, grown } from '../drawing/boxes';
 import { DIAMOND } from '../drawing/diamonds';
-import type { Box, Point, Scene } from '../drawing/types';
+import { LIMIT_SIDE, STATE_ROOM } from '../drawing/marks';
+import { measureText } from '../drawing/metrics';
+import type { Box, Point, Scene, UnitShape } from '../drawing/types';
 import type { StreamId } from '../engine/ids';
 import { anchorOf, longestPiece } from './lines';
 import type { Quiet } from './sheetStore';
 
 /** Between these zooms text, diamonds and marks keep their size on the screen. */
-const SMALL = 0.5;
+export const SMALL = 0.5;
 const LARGE = 1.5;
 /** Below this zoom not everything has room. */
 const CROWDED = 0.85;
@@ -16,12 +18,35 @@ const CLEAR = 2;
 /** By how much text is drawn larger than the sheet, so that it keeps its size on the screen. */
 export const steadyScale = (zoom: number): number => 1 / Math.min(Math.max(zoom, SMALL), LARGE);
 
-const scaledAbout = (box: Box, [x, y]: Point, k: number): Box => ({
+/** A box grown about a fixed point. */
+export const scaledAbout = (box: Box, [x, y]: Point, k: number): Box => ({
   x: x + (box.x - x) * k,
   y: y + (box.y - y) * k,
   w: box.w * k,
   h: box.h * k,
 });
+
+/** The point of a box nearest to another point. */
+export const nearestOf = (box: Box, [x, y]: Point): Point => [
+  Math.min(Math.max(x, box.x), box.x + box.w),
+  Math.min(Math.max(y, box.y), box.y + box.h),
+];
+
+/** Where a unit's tag and marks hang on its symbol while the zoom changes. */
+export const tagHold = (unit: UnitShape): Point =>
+  nearestOf(unit.box, unit.tagText?.at ?? unit.limit?.at ?? unit.at);
+
+function tagBoxes(unit: UnitShape, k: number): readonly Box[] {
+  const { tagText: tag, limit } = unit;
+  const hold = tagHold(unit);
+  const boxes: Box[] = [];
+  if (tag) {
+    const w = measureText(tag.text, tag.size, tag.weight);
+    boxes.push({ x: tag.at[0], y: tag.at[1] - 10, w, h: 10 + STATE_ROOM });
+  }
+  if (limit) boxes.push(boxAround(limit.at, LIMIT_SIDE / 2));
+  return boxes.map((box) => scaledAbout(box, hold, k));
+}
 
 const ALL_CLEAR: Quiet = { labels: new Set(), diamonds: new Set(), duties: false };
 
@@ -40,9 +65,13 @@ export function quietAt(scene: Scene, zoom: number, outer: ReadonlySet<StreamId>
   }
   const k = steadyScale(zoom);
   const taken = new BoxIndex();
+  const standing = new BoxIndex();
   for (const unit of scene.units) {
     taken.add(unit.box);
-    if (unit.tagText) taken.add(boxAround([unit.tagText.at[0], unit.tagText.at[1] - 2], 10 * k));
+    for (const box of tagBoxes(unit, k)) {
+      taken.add(box);
+      standing.add(box);
+    }
   }
   const diamonds = new Set<StreamId>();
   for (const line of scene.lines) {
@@ -51,7 +80,6 @@ export function quietAt(scene: Scene, zoom: number, outer: ReadonlySet<StreamId>
     }
     if (!line.diamond || longestPiece(line.points) * zoom < SHORTEST_ON_SCREEN) diamonds.add(line.stream);
   }
-  const standing = new BoxIndex();
   for (const line of scene.lines) {
     if (diamonds.has(line.stream)) continue;
     const box = boxAround(line.diamond!, DIAMOND * k);

@@ -1,9 +1,10 @@
 import type { ReactFlowInstance, useStoreApi } from 'reactflow';
 import type { Point } from '../drawing/types';
+import { fitting } from './extent';
 import type { SheetHandle } from './handle';
 import type { SheetStore } from './sheetStore';
 
-const MARGIN = 36;
+const MARGIN = 20;
 const LEAST_ZOOM = 0.25;
 /** What is shown stands at least this far from the edges of the view [px]. */
 const WELL_IN = 88;
@@ -46,10 +47,10 @@ export function createView(
     zoomTo: (zoom) => put(middle(), zoom),
     fit() {
       const [w, h] = size();
-      const { box, units } = store.getState().scene;
-      if (units.length === 0 || w === 0 || h === 0) return;
-      const zoom = Math.min(1, (w - 2 * MARGIN) / box.w, (h - 2 * MARGIN) / box.h);
-      put([box.x + box.w / 2, box.y + box.h / 2], Math.max(LEAST_ZOOM, zoom));
+      const { scene } = store.getState();
+      if (scene.units.length === 0 || w === 0 || h === 0) return;
+      const { zoom, middle: at } = fitting(scene, w - 2 * MARGIN, h - 2 * MARGIN, LEAST_ZOOM);
+      put(at, zoom);
     },
     reveal(at) {
       const [w, h] = size();
