@@ -31,7 +31,8 @@ const RESTARTS = 2;
 
 /**
  * One worker kept alive. While an edit is unanswered and the worker stays silent for three seconds it is ended, started
- * again, and the problem sent once more; the second time the edit is reported as broken, naming the unit it was in.
+ * again, and the problem sent once more, now with every unit named before it is solved; after two restarts on one edit it
+ * is reported as broken, with the unit the worker was last heard of in. A restarted worker hands everything out anew.
  */
 export function connectSolver(make: () => WorkerLike, handlers: SolverHandlers): SolverClient {
   let worker: WorkerLike | null = null;
@@ -55,21 +56,29 @@ export function connectSolver(make: () => WorkerLike, handlers: SolverHandlers):
     restarts += 1;
     if (restarts > RESTARTS) {
       const { edit } = pending.problem;
-      pending = null;
-      clearTimeout(timer);
-      handlers.broke(edit, why, where);
+      giveUp(edit, why);
       return;
     }
-    send();
+    send(true);
+  };
+
+  const giveUp = (edit: number, why: string): void => {
+    pending = null;
+    restarts = 0;
+    clearTimeout(timer);
+    handlers.broke(edit, why, where);
   };
 
   const start = (): WorkerLike => {
     const fresh = make();
     fresh.onmessage = (event) => {
+      if (fresh !== worker) return;
       const message = event.data;
       watch();
       if (message.say === 'results') {
-        if (message.last && pending?.problem.edit === message.edit) {
+        const { edit, last, from = 'warm' } = message;
+        // The live answer of an edit may come while its answer from nothing is still awaited.
+        if (last && pending?.problem.edit === edit && pending.from === from) {
           pending = null;
           restarts = 0;
           clearTimeout(timer);
@@ -79,20 +88,30 @@ export function connectSolver(make: () => WorkerLike, handlers: SolverHandlers):
         where = message.unit;
         handlers.at(message.edit, message.unit);
       } else if (message.say === 'answer') handlers.answer(message.job, message.value);
-      else if (message.say === 'broke') restart(message.message);
+      else if (message.say === 'broke' && message.edit !== undefined) {
+        // A mistake of ours that the worker survived: the same again would end the same way.
+        if (pending?.problem.edit === message.edit) giveUp(message.edit, message.message);
+      }
     };
-    fresh.onerror = (event) => restart(event.message || 'the solver stopped');
+    fresh.onerror = (event) => {
+      if (fresh === worker) restart(event.message || 'the solver stopped');
+    };
     return fresh;
   };
 
-  const send = (): void => {
+  const send = (announce = false): void => {
     if (!pending) return;
     worker ??= start();
     if (basisSent !== pending.basis.id) {
       worker.postMessage({ say: 'basis', basis: pending.basis });
       basisSent = pending.basis.id;
     }
-    worker.postMessage({ say: 'solve', problem: pending.problem, from: pending.from });
+    worker.postMessage({
+      say: 'solve',
+      problem: pending.problem,
+      from: pending.from,
+      ...(announce ? { announce } : {}),
+    });
     watch();
   };
 

@@ -20,8 +20,10 @@ interface QuestionOrder {
   readonly about: Question;
 }
 
-/** Bases whose memories are kept, so that undoing a change of chemicals or model finds its answers again. */
-const KEPT_BASES = 2;
+/** Memories that are kept, so that undoing a change of chemicals or model finds its answers again. */
+const KEPT_MEMORIES = 2;
+/** Bases that are kept; the page posts one again when it comes back to it. */
+const KEPT_BASES = 4;
 
 const messageOf = (cause: unknown): string => (cause instanceof Error ? cause.message : String(cause));
 
@@ -57,10 +59,7 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
     if (!basis) throw new Error(`no basis ${id} was posted`);
     const made = makeMemory(basis, posted);
     memories.set(id, made);
-    for (const old of [...memories.keys()].slice(0, -KEPT_BASES)) {
-      memories.delete(old);
-      bases.delete(old);
-    }
+    for (const old of [...memories.keys()].slice(0, -KEPT_MEMORIES)) memories.delete(old);
     return made;
   }
 
@@ -116,7 +115,9 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
   port.addEventListener('message', ({ data }) => {
     switch (data.say) {
       case 'basis':
+        bases.delete(data.basis.id);
         bases.set(data.basis.id, data.basis);
+        for (const old of [...bases.keys()].slice(0, -KEPT_BASES)) bases.delete(old);
         return;
       case 'solve':
         waiting = data;

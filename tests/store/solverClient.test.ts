@@ -1,7 +1,7 @@
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import type { Basis, Problem } from '../../src/engine/network/types';
 import type { FromWorker, ToWorker } from '../../src/protocol/messages';
-import { type Broke, connectSolver, type Results, type WorkerLike } from '../../src/worker/client';
+import { connectSolver, type WorkerLike } from '../../src/store/solverClient';
 import { problemOf, unitId } from '../network/fixtures';
 
 const basis = (id: string): Basis => ({ id, chemicals: [], model: {} as Basis['model'] });
@@ -12,29 +12,25 @@ const nothing = { streams: [], units: [], gone: [], findings: [] } as const;
 class Puppet implements WorkerLike {
   readonly got: ToWorker[] = [];
   ended = false;
-  private listen: ((event: { readonly data: FromWorker }) => void) | undefined;
-  private fail: ((event: { readonly message: string }) => void) | undefined;
+  onmessage: WorkerLike['onmessage'] = null;
+  onerror: WorkerLike['onerror'] = null;
   postMessage(message: ToWorker): void {
     this.got.push(message);
-  }
-  addEventListener(type: 'message' | 'error', listener: never): void {
-    if (type === 'message') this.listen = listener;
-    else this.fail = listener;
   }
   terminate(): void {
     this.ended = true;
   }
-  say(message: FromWorker): void {
-    this.listen?.({ data: message });
+  say(data: FromWorker): void {
+    this.onmessage?.({ data } as MessageEvent<FromWorker>);
   }
   crash(message: string): void {
-    this.fail?.({ message });
+    this.onerror?.({ message } as ErrorEvent);
   }
 }
 
 let workers: Puppet[];
-let results: Results[];
-let broke: Broke[];
+let answered: number[];
+let broke: { edit: number; message: string; unit: string | null }[];
 const connect = () =>
   connectSolver(
     () => {
@@ -42,13 +38,18 @@ const connect = () =>
       workers.push(made);
       return made;
     },
-    { results: (r) => results.push(r), broke: (b) => broke.push(b) },
+    {
+      results: (edit, last) => void (last && answered.push(edit)),
+      at: () => undefined,
+      broke: (edit, message, unit) => void broke.push({ edit, message, unit }),
+      answer: () => undefined,
+    },
   );
 const now = (): Puppet => workers.at(-1)!;
 
 beforeEach(() => {
   vi.useFakeTimers();
-  [workers, results, broke] = [[], [], []];
+  [workers, answered, broke] = [[], [], []];
 });
 afterEach(() => {
   vi.useRealTimers();
@@ -57,15 +58,15 @@ afterEach(() => {
 describe('the page’s end of the line', () => {
   test('posts a basis only when its id is new', () => {
     const solver = connect();
-    solver.solve(basis('b1'), problem(1));
-    solver.solve(basis('b1'), problem(2));
-    solver.solve(basis('b2'), problem(3, 'b2'));
+    solver.solve(basis('b1'), problem(1), 'warm');
+    solver.solve(basis('b1'), problem(2), 'warm');
+    solver.solve(basis('b2'), problem(3, 'b2'), 'warm');
     expect(now().got.map((m) => m.say)).toEqual(['basis', 'solve', 'solve', 'basis', 'solve']);
   });
 
   test('starts a silent worker anew and sends basis and problem again, asking it to name its units', () => {
     const solver = connect();
-    solver.solve(basis('b1'), problem(1));
+    solver.solve(basis('b1'), problem(1), 'warm');
     vi.advanceTimersByTime(2999);
     expect(workers).toHaveLength(1);
     vi.advanceTimersByTime(1);
@@ -78,13 +79,13 @@ describe('the page’s end of the line', () => {
     now().say({ say: 'results', edit: 1, last: true, ...nothing });
     vi.advanceTimersByTime(60_000);
     expect(workers).toHaveLength(2);
-    expect(results).toHaveLength(1);
+    expect(answered).toEqual([1]);
     expect(broke).toEqual([]);
   });
 
   test('leaves a busy worker alone as long as it gives a sign of life', () => {
     const solver = connect();
-    solver.solve(basis('b1'), problem(1));
+    solver.solve(basis('b1'), problem(1), 'warm');
     for (let k = 0; k < 20; k++) {
       vi.advanceTimersByTime(2500);
       now().say({ say: 'at', edit: 1, unit: unitId('u') });
@@ -94,47 +95,55 @@ describe('the page’s end of the line', () => {
 
   test('gives an edit up after two restarts, naming the unit, and serves the next edit', () => {
     const solver = connect();
-    solver.solve(basis('b1'), problem(1));
+    solver.solve(basis('b1'), problem(1), 'warm');
     for (let k = 0; k < 3; k++) {
-      now().say({ say: 'ready' });
       now().say({ say: 'at', edit: 1, unit: unitId('bad') });
       vi.advanceTimersByTime(3000);
     }
     expect(broke).toMatchObject([{ edit: 1, unit: 'bad' }]);
     vi.advanceTimersByTime(60_000);
-    const count = workers.length;
-    solver.solve(basis('b1'), problem(2));
-    expect(workers).toHaveLength(count);
+    expect(workers).toHaveLength(3);
+    solver.solve(basis('b1'), problem(2), 'warm');
     expect(now().got).toMatchObject([{ say: 'basis' }, { say: 'solve', problem: { edit: 2 } }]);
     now().say({ say: 'results', edit: 2, last: true, ...nothing });
-    expect(results.map((r) => r.edit)).toEqual([2]);
+    expect(answered).toEqual([2]);
   });
 
   test('does not start a worker for ever that dies at once, and tries again with the next edit', () => {
     const solver = connect();
-    solver.solve(basis('b1'), problem(1));
+    solver.solve(basis('b1'), problem(1), 'warm');
     for (let k = 0; k < 10; k++) now().crash('cannot load');
     expect(workers).toHaveLength(3);
     expect(broke).toMatchObject([{ edit: 1, message: 'cannot load' }]);
-    solver.solve(basis('b1'), problem(2));
+    solver.solve(basis('b1'), problem(2), 'warm');
     expect(workers).toHaveLength(4);
     expect(now().got.map((m) => m.say)).toEqual(['basis', 'solve']);
   });
 
+  test('reports a mistake that the worker survived at once, and keeps the worker', () => {
+    const solver = connect();
+    solver.solve(basis('b1'), problem(1), 'warm');
+    now().say({ say: 'broke', edit: 1, message: 'a mistake of ours' });
+    expect(broke).toMatchObject([{ edit: 1, message: 'a mistake of ours' }]);
+    solver.solve(basis('b1'), problem(2), 'warm');
+    expect(workers).toHaveLength(1);
+    expect(now().got.map((m) => m.say)).toEqual(['basis', 'solve', 'solve']);
+  });
+
   test('hears nothing of a worker that it has ended', () => {
     const solver = connect();
-    solver.solve(basis('b1'), problem(1));
+    solver.solve(basis('b1'), problem(1), 'warm');
     vi.advanceTimersByTime(3000);
     workers[0]!.say({ say: 'results', edit: 1, last: true, ...nothing });
-    expect(results).toEqual([]);
+    expect(answered).toEqual([]);
     solver.close();
     now().say({ say: 'results', edit: 1, last: true, ...nothing });
-    expect(results).toEqual([]);
+    expect(answered).toEqual([]);
   });
 
   test('waits for the answer from nothing although the live one of the same edit came first', () => {
     const solver = connect();
-    solver.solve(basis('b1'), problem(1));
+    solver.solve(basis('b1'), problem(1), 'warm');
     solver.solve(basis('b1'), problem(1), 'nothing');
     now().say({ say: 'results', edit: 1, last: true, ...nothing });
     vi.advanceTimersByTime(3000);
