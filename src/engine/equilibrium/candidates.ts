@@ -1,7 +1,7 @@
 import type { ThermoModel } from '../thermo/types';
 
 /** ln of the activity coefficient at infinite dilution from which two liquids may part (2 in a regular solution). */
-const LN_GAMMA_APART = 0.8;
+export const LN_GAMMA_APART = 0.8;
 /** Coldest temperature that candidates are kept for [K]. */
 const COLD_K = 60;
 const T_K = 298.15;
@@ -11,8 +11,8 @@ const P_Pa = 5e7;
 export interface Candidates {
   /** Indices into the model's chemicals, ascending. */
   readonly formers: Int32Array;
-  /** Temperature above which a former is no candidate any more [K], in the order of `formers`. */
-  readonly below_K: Float64Array;
+  /** T ln gamma at infinite dilution, the largest found [K], in the order of `formers`. */
+  readonly heat_K: Float64Array;
   /** By the start values of K at 298 K. */
   readonly lightest: number;
   readonly heaviest: number;
@@ -23,7 +23,7 @@ export interface Candidates {
  *
  * A regular solution parts once ln gamma at infinite dilution passes 2, and ln gamma grows as 1/T: a chemical is a
  * candidate where its largest ln gamma in another one, or of another one in it, passes 0.8 (water with organics; not
- * the neighbours in a homologous series), and so are the lightest and the heaviest. An ideal liquid gives none.
+ * the neighbours in a homologous series). An ideal liquid gives none.
  */
 export function liquidFormers(model: ThermoModel): Candidates {
   const { n } = model;
@@ -36,7 +36,7 @@ export function liquidFormers(model: ThermoModel): Candidates {
     if (K[i]! < K[heaviest]!) heaviest = i;
   }
   if (n === 1 || model.spec.kind === 'raoult')
-    return { formers: new Int32Array(0), below_K: new Float64Array(0), lightest, heaviest };
+    return { formers: new Int32Array(0), heat_K: new Float64Array(0), lightest, heaviest };
 
   const props = model.makeProps();
   const x = new Float64Array(n);
@@ -48,17 +48,16 @@ export function liquidFormers(model: ThermoModel): Candidates {
     model.evaluate('liquid', T_K, P_Pa, x, 0, props);
     lnPhi.set(props.lnPhi, j * n);
   }
-  const below = new Float64Array(n);
-  below[lightest] = Number.POSITIVE_INFINITY;
-  below[heaviest] = Number.POSITIVE_INFINITY;
+  const heat = new Float64Array(n);
   for (let j = 0; j < n; j++) {
     for (let i = 0; i < n; i++) {
-      const lnGamma = lnPhi[j * n + i]! - lnPhi[i * n + i]!;
-      const limit = (T_K * lnGamma) / LN_GAMMA_APART;
-      if (limit > below[i]!) below[i] = limit;
-      if (limit > below[j]!) below[j] = limit;
+      const found = T_K * (lnPhi[j * n + i]! - lnPhi[i * n + i]!);
+      if (found > heat[i]!) heat[i] = found;
+      if (found > heat[j]!) heat[j] = found;
     }
   }
-  const formers = Int32Array.from(Array.from(below, (_, i) => i).filter((i) => below[i]! > COLD_K));
-  return { formers, below_K: Float64Array.from(formers, (i) => below[i]!), lightest, heaviest };
+  const formers = Int32Array.from(
+    Array.from(heat, (_, i) => i).filter((i) => heat[i]! > LN_GAMMA_APART * COLD_K),
+  );
+  return { formers, heat_K: Float64Array.from(formers, (i) => heat[i]!), lightest, heaviest };
 }

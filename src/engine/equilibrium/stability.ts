@@ -41,13 +41,14 @@ export function follow(w: FlashWork, T: number, P: number, known1: Slot, known2:
   W.set(startW);
   let total = normalise(W, x, n);
   let before = Number.POSITIVE_INFINITY;
+  const reach = known2 === undefined ? NEAR_FEED : NEAR_PHASE;
   for (let pass = 0; pass < SUBSTITUTIONS; pass++) {
     model.evaluate(trial.side, T, P, x, 0, props);
     w.iterations++;
     const distance = tpd(w);
     if (distance < BELOW) return true;
-    if (near(trial, known1, n)) return false;
-    if (known2 !== undefined && near(trial, known2, n)) return false;
+    if (near(trial, known1, n, reach)) return false;
+    if (known2 !== undefined && near(trial, known2, n, reach)) return false;
     let change = 0;
     for (let i = 0; i < n; i++) {
       const lnW = d[i]! - props.lnPhi[i]!;
@@ -78,13 +79,14 @@ function newton(
   const { flow: W, x, props } = trial;
   let total = start;
   let best = Number.POSITIVE_INFINITY;
+  const reach = known2 === undefined ? NEAR_FEED : NEAR_PHASE;
   for (let pass = 0; pass < NEWTONS; pass++) {
     model.evaluate(trial.side, T, P, x, 2, props);
     w.iterations++;
     const distance = tpd(w);
     if (distance < BELOW) return true;
-    if (near(trial, known1, n)) return false;
-    if (known2 !== undefined && near(trial, known2, n)) return false;
+    if (near(trial, known1, n, reach)) return false;
+    if (known2 !== undefined && near(trial, known2, n, reach)) return false;
     let modified = 1;
     let err = 0;
     for (let i = 0; i < n; i++) {
@@ -136,13 +138,15 @@ function tpd(w: FlashWork): number {
 }
 
 /** Same composition and same volume: a nearly pure liquid and its vapour differ in the second only. */
-function near(a: Slot, b: Slot, n: number): boolean {
-  if (Math.abs(a.props.v_m3_mol - b.props.v_m3_mol) > NEAR * b.props.v_m3_mol) return false;
+function near(a: Slot, b: Slot, n: number, reach: number): boolean {
+  if (Math.abs(a.props.v_m3_mol - b.props.v_m3_mol) > reach * b.props.v_m3_mol) return false;
   let distance = 0;
   for (let i = 0; i < n; i++) distance += Math.abs(a.x[i]! - b.x[i]!);
-  return distance < NEAR;
+  return distance < reach;
 }
-const NEAR = 1e-3;
+/** A feed near its critical point splits into phases that differ little from it; a third phase differs more. */
+const NEAR_FEED = 1e-3;
+const NEAR_PHASE = 0.03;
 
 function normalise(W: Float64Array, x: Float64Array, n: number): number {
   let total = 0;

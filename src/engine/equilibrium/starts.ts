@@ -1,10 +1,11 @@
-import { BELOW, follow, setPlane } from './stability';
+import { LN_GAMMA_APART } from './candidates';
+import { BELOW, follow, liquidLike, setPlane } from './stability';
 import type { FlashWork, Slot } from './work';
 
 /** -ln of an activity of a tenth: a pure liquid this far above the plane has no liquid rich in it nearby. */
 const FAR = 2.3;
 /** ln of an activity coefficient from which a chemical may be better off in a liquid of its own. */
-const STRANGE = 0.3;
+const STRANGE = 0.4;
 
 /**
  * Whether the single phase in w.feed (properties at T, P; plane in w.d) can lower its Gibbs energy by splitting; then
@@ -24,8 +25,9 @@ export function isUnstable(w: FlashWork, T: number, P: number): boolean {
     w.trial.side = vapour ? 'vapour' : 'liquid';
     if (follow(w, T, P, feed, undefined)) return true;
   }
-  if (w.formers.length === 0) return false;
+  if (model.spec.kind === 'raoult') return false;
   if (pureTrial(w, T, P, w.lightest, 'vapour', feed, undefined)) return true;
+  if (pureTrial(w, T, P, w.heaviest, 'liquid', feed, undefined)) return true;
   return hiddenLiquid(w, T, P, feed, undefined);
 }
 
@@ -44,25 +46,62 @@ export function hiddenLiquid(
   known1: Slot,
   known2: Slot | undefined,
 ): boolean {
-  const { formers, below_K, startW, n } = w;
+  const { formers, heat_K, startW, n } = w;
   const tested = known2 ?? known1;
+  const inLiquid = known2 !== undefined || liquidLike(w, known1, T);
   let stranger = -1;
   let most = STRANGE;
   for (let k = 0; k < formers.length; k++) {
-    if (below_K[k]! < T) continue;
+    const lnGammaMost = heat_K[k]! / T;
+    if (lnGammaMost < LN_GAMMA_APART) continue;
     const i = formers[k]!;
-    if (pureTrial(w, T, P, i, 'liquid', known1, known2)) return true;
-    // w.trialAbove is -ln(x gamma) of the tested phase.
-    const lnGamma = -w.trialAbove - Math.log(tested.x[i]!);
-    if (w.trialAbove < FAR && lnGamma > most) {
+    // Beside a vapour the tested phase is a liquid: the activity in it cannot be larger than this.
+    const lnX = Math.log(tested.x[i]!);
+    if (inLiquid && lnX + 1.5 * lnGammaMost < -FAR) continue;
+    const above = pureAbove(w, T, P, i, 'liquid');
+    if (above < BELOW) return true;
+    if (!(above < FAR)) continue;
+    // -above is ln(x gamma). A liquid rich in i lies below only if i is not at home in the tested one.
+    const lnGamma = -above - lnX;
+    if (lnGamma > most) {
       most = lnGamma;
       stranger = i;
     }
+    if (inLiquid && lnGamma < STRANGE) continue;
+    if (followPure(w, T, P, i, known1, known2)) return true;
   }
   if (stranger < 0) return false;
   for (let i = 0; i < n; i++) startW[i] = 0.5 * tested.x[i]!;
   startW[stranger] = startW[stranger]! + 0.5;
   w.trial.side = 'liquid';
+  return follow(w, T, P, known1, known2);
+}
+
+/** Distance of a pure trial from the plane; w.trial holds it. */
+function pureAbove(w: FlashWork, T: number, P: number, i: number, side: 'vapour' | 'liquid'): number {
+  const { model, trial, startW, d } = w;
+  trial.side = side;
+  startW.fill(0);
+  startW[i] = 1;
+  trial.x.set(startW);
+  trial.flow.set(startW);
+  model.evaluate(side, T, P, trial.x, 0, trial.props);
+  w.iterations++;
+  return trial.props.lnPhi[i]! - d[i]!;
+}
+
+/** Substitution from the pure trial in w.trial: the other chemicals as the plane has them. */
+function followPure(
+  w: FlashWork,
+  T: number,
+  P: number,
+  i: number,
+  known1: Slot,
+  known2: Slot | undefined,
+): boolean {
+  const { trial, startW, d } = w;
+  for (let j = 0; j < w.n; j++) startW[j] = Math.exp(d[j]! - trial.props.lnPhi[j]!);
+  startW[i] = Math.max(startW[i]!, 1);
   return follow(w, T, P, known1, known2);
 }
 
@@ -75,24 +114,9 @@ function pureTrial(
   known1: Slot,
   known2: Slot | undefined,
 ): boolean {
-  const { model, trial, startW, d } = w;
-  trial.side = side;
-  startW.fill(0);
-  startW[i] = 1;
-  trial.x.set(startW);
-  model.evaluate(side, T, P, trial.x, 0, trial.props);
-  w.iterations++;
-  const above = trial.props.lnPhi[i]! - d[i]!;
-  w.trialAbove = above;
-  if (above < BELOW && above > Number.NEGATIVE_INFINITY) {
-    trial.flow.set(startW);
-    return true;
-  }
-  if (!(above < FAR)) return false;
-  // One step of substitution from the pure: the other chemicals as the plane has them.
-  for (let j = 0; j < w.n; j++) startW[j] = Math.exp(d[j]! - trial.props.lnPhi[j]!);
-  startW[i] = Math.max(startW[i]!, 1);
-  return follow(w, T, P, known1, known2);
+  const above = pureAbove(w, T, P, i, side);
+  if (above < BELOW) return true;
+  return above < FAR && followPure(w, T, P, i, known1, known2);
 }
 
 /** Start amounts of very unequal size are brought to a sum that exp() and products can carry. */

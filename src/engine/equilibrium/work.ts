@@ -20,7 +20,7 @@ export interface FlashWork extends FlashWorkOwner {
   readonly n: number;
   /** Chemicals whose pure liquid is tried when a second liquid is sought; see candidates.ts. */
   readonly formers: Int32Array;
-  readonly below_K: Float64Array;
+  readonly heat_K: Float64Array;
   readonly lightest: number;
   readonly heaviest: number;
 
@@ -46,8 +46,6 @@ export interface FlashWork extends FlashWorkOwner {
   readonly saved: Float64Array;
   readonly saved2: Float64Array;
   readonly startW: Float64Array;
-  /** How far the last pure trial lay above the plane [-]. */
-  trialAbove: number;
   /** Matrices, n x n and (n + 1) x (n + 1), row-major. */
   readonly hess: Float64Array;
   readonly border: Float64Array;
@@ -84,13 +82,13 @@ const slot = (model: ThermoModel, side: Side): Slot => ({
  */
 export function makeFlashWork(model: ThermoModel): FlashWork {
   const n = model.n;
-  const { formers, below_K, lightest, heaviest } = liquidFormers(model);
+  const { formers, heat_K, lightest, heaviest } = liquidFormers(model);
   const vector = (): Float64Array => new Float64Array(n + 1);
   return {
     model,
     n,
     formers,
-    below_K,
+    heat_K,
     lightest,
     heaviest,
     vap: slot(model, 'vapour'),
@@ -109,7 +107,6 @@ export function makeFlashWork(model: ThermoModel): FlashWork {
     saved: vector(),
     saved2: vector(),
     startW: new Float64Array(n),
-    trialAbove: 0,
     hess: new Float64Array(n * n),
     border: new Float64Array((n + 1) * (n + 1)),
     rhs: vector(),
