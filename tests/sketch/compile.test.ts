@@ -318,6 +318,20 @@ describe('chemicals and model', () => {
       'sketch/pair-not-read at model.pairs.0',
     ]);
   });
+  test('a pair that is given twice: the last counts, with a caution', async () => {
+    const pairs = [
+      { i: 'methane', j: 'n-decane', kij: 0.05 },
+      { i: 'n-decane', j: 'methane', kij: 0.06 },
+    ];
+    const c = await compiled(feedSketch({}, { model: { kind: 'peng-robinson', pairs } }));
+    expect(codes(c.notes)).toContain('sketch/repeated-pair');
+    expect(c.basis?.model.pairs[1]).toMatchObject({ kij: 0.06, origin: 'given' });
+  });
+  test('a sketch without chemicals says so', async () => {
+    const c = await compiled(feedSketch({}, { chemicals: [] }));
+    expect(codes(c.gaps)).toContain('sketch/no-chemicals');
+    expect(c.basis).toBeUndefined();
+  });
   test('what a model needs of a chemical agrees with the models themselves', async () => {
     const names = ['methane', 'water', 'sulfolane', 'helium', 'n-decane'];
     const { chemicals } = await bankOf({ ...letDown(), chemicals: names });

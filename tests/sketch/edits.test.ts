@@ -177,6 +177,16 @@ describe('taking streams away', () => {
     expect(done(deleteUnits(before, new Set([u('u2'), u('u3')]))).label).toBe('delete 2 units');
   });
 
+  test('a stream or unit that is not there is refused by name', () => {
+    const gone = [
+      disconnect(letDown(), s('s99')),
+      deleteStream(letDown(), s('s99')),
+      setNumber(letDown(), s('s99'), '1'),
+    ];
+    expect(gone.map(refusedWith)).toEqual(gone.map(() => 'edit/unknown-stream'));
+    expect(refusedWith(turnUnit(letDown(), u('u99')))).toBe('edit/unknown-unit');
+  });
+
   test('notes on a deleted unit go with it, others stay', () => {
     let sketch = done(addNote(letDown(), 'check', { on: 'u2' })).sketch;
     sketch = done(addNote(sketch, 'free', { at: [8, 8] })).sketch;

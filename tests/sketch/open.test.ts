@@ -265,6 +265,12 @@ describe('opening fills what may be absent and keeps what it does not know', () 
     expect(result.ok && result.sketch.model.kind).toBe('wilson');
   });
 
+  test('a stream without any end is kept and told', () => {
+    const result = openSketch({ ...least, streams: [...least.streams, { id: 's9', number: '9' }] });
+    expect(result.ok && codes(result.notes)).toContain('sketch/stream-without-ends');
+    expect(result.ok && result.sketch.streams.some((x) => x.id === 's9')).toBe(true);
+  });
+
   test('a label that this version does not know is left out, with a note', () => {
     const result = openSketch({ ...least, display: { set: 'US', labels: ['pressure', 'colour'] } });
     expect(result.ok && result.sketch.display.labels).toEqual(['pressure']);

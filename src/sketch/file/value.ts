@@ -15,7 +15,7 @@ export function text(value: Json | undefined, path: string, problems: Problems):
 export function name(value: Json | undefined, path: string, problems: Problems): value is string {
   if (value === undefined) problems.add(path, 'file/missing');
   else if (text(value, path, problems)) {
-    if (value.trim() !== '' && value === value.trim()) return true;
+    if (value.trim() !== '') return true;
     problems.add(path, 'file/empty-text', word('found', value));
   }
   return false;
