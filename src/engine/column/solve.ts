@@ -1,0 +1,286 @@
+import { startBySums } from './absorber';
+import { type Guess, guessOf } from './guess';
+import { Newton, type NewtonEnd, type Wanted } from './newton';
+import { type Sweeps, startBySweeps } from './start';
+import { StageSystem } from './system';
+import { flowTarget, type Target, targetOf } from './targets';
+import type { Attempt, ColumnState, ColumnTask, Effort, Fixing } from './types';
+
+export type ColumnEnd =
+  | { readonly state: 'solved'; readonly system: StageSystem; readonly effort: Effort }
+  | { readonly state: 'no-solution'; readonly failure: Failure; readonly effort: Effort };
+
+/** Where the best attempt stood when it was given up. */
+export interface Failure {
+  readonly why: 'dries' | 'trivial' | 'no-convergence' | 'out-of-reach';
+  /** Place of the worst residual, or the one that runs dry. */
+  readonly place: number;
+  /** 'dries': what runs out there. */
+  readonly phase?: 'liquid' | 'vapour';
+  readonly residual: number;
+  readonly of: 'balance' | 'equilibrium' | 'energy';
+  /** 'out-of-reach': how much of the way from a plain column to what is asked was possible, and which fixing. */
+  readonly way?: number;
+  readonly fixing?: number;
+  /** 'out-of-reach': the measure that was reached, see reachedOf. */
+  readonly reached?: number;
+}
+
+const PLAIN: Sweeps = { simple: 6, model: 3, share: 1 };
+const STARTS: readonly (readonly [Attempt, Sweeps])[] = [
+  ['plain-start', PLAIN],
+  ['more-sweeps', { simple: 2, model: 40, share: 1 }],
+  ['wilson-sweeps', { simple: 12, model: 0, share: 1 }],
+  ['slow-sweeps', { simple: 2, model: 200, share: 0.5 }],
+];
+const ITERATIONS = 40;
+const WARM_ITERATIONS = 14;
+/** A place is dry below this share of the feed. */
+const DRY = 1e-7;
+
+/** A solve of one column: its system, its scratch, and the order in which starts are tried. */
+class Search {
+  readonly system: StageSystem;
+  readonly effort: Effort = { iterations: 0, residual: Number.POSITIVE_INFINITY, tried: [] };
+  private readonly newton: Newton;
+  private readonly wanted: Wanted;
+  private readonly direct: ReadonlyMap<number, number>;
+  private failure: Failure | undefined;
+
+  constructor(private readonly task: ColumnTask) {
+    const system = new StageSystem(task);
+    this.system = system;
+    this.newton = new Newton(system);
+    const { direct, left } = directParameters(system, task.fixed);
+    this.direct = direct;
+    const targets = [...left.map((x) => targetOf(system, x)), ...drawTargets(system)];
+    this.wanted = {
+      free: system.movers.map((_, k) => k).filter((k) => !direct.has(k)),
+      targets,
+      values: Float64Array.from(targets, (t) => t.wanted),
+    };
+  }
+
+  solve(warm: ColumnState | undefined): ColumnEnd {
+    if (warm && this.fromWarm(warm)) return this.solved();
+    if (this.fromStarts() || this.fromPlain()) return this.solved();
+    return { state: 'no-solution', failure: this.failure!, effort: this.effort };
+  }
+
+  private solved(): ColumnEnd {
+    return { state: 'solved', system: this.system, effort: this.effort };
+  }
+
+  private fromWarm(warm: ColumnState): boolean {
+    const { system: s } = this;
+    if (warm.l.length !== s.l.length || warm.p.length !== s.p.length) return false;
+    s.l.set(warm.l);
+    s.v.set(warm.v);
+    s.T.set(warm.T_K);
+    s.p.set(warm.p);
+    this.setDirect();
+    return this.attempt('warm', this.wanted, WARM_ITERATIONS);
+  }
+
+  private fromStarts(): boolean {
+    const { system: s } = this;
+    if (s.first === 0 && !this.task.reboiler) {
+      for (const [name, passes, withModel] of SUM_STARTS) {
+        startBySums(s, passes, withModel);
+        if (this.attempt(name, this.wanted, ITERATIONS)) return true;
+      }
+      return false;
+    }
+    const guess = guessOf(s);
+    for (const [name, sweeps] of STARTS) {
+      startBySweeps(s, guess, sweeps);
+      this.setDirect();
+      if (this.attempt(name, this.wanted, ITERATIONS)) return true;
+    }
+    return false;
+  }
+
+  /** A plain column first: reflux ratio and flow as guessed; then step by step to what is asked. */
+  private fromPlain(): boolean {
+    const { wanted } = this;
+    const moved = wanted.targets.length - this.task.draws.length;
+    if (moved <= 0) return false;
+    const plain = this.plainColumn();
+    if (!plain) return false;
+    return this.moveFrom(moved);
+  }
+
+  private plainColumn(): boolean {
+    const { system: s, wanted } = this;
+    const first = s.movers.length - this.task.draws.length;
+    const plain: Wanted = {
+      free: this.task.draws.map((_, k) => first + k),
+      targets: wanted.targets.slice(wanted.targets.length - this.task.draws.length),
+      values: wanted.values.slice(wanted.targets.length - this.task.draws.length),
+    };
+    const guess: Guess = guessOf(s);
+    for (const [, sweeps] of STARTS) {
+      startBySweeps(s, guess, sweeps);
+      this.setDirect();
+      if (this.attempt('plain-then-move', plain, ITERATIONS)) return true;
+    }
+    return false;
+  }
+
+  private moveFrom(moved: number): boolean {
+    const { system: s, wanted } = this;
+    const from = Float64Array.from(wanted.targets, (t) => t.measure());
+    const values = wanted.values.slice();
+    const stage: Wanted = { ...wanted, values };
+    const kept = stateOf(s);
+    const goal = wanted.values;
+    let done = 0;
+    let step = 0.25;
+    for (let k = 0; k < 60; k++) {
+      const next = Math.min(1, done + step);
+      for (let r = 0; r < moved; r++) values[r] = from[r]! + next * (goal[r]! - from[r]!);
+      const end = this.newton.run(stage, { iterations: 18, resets: false });
+      this.effort.iterations += end.iterations;
+      if (end.end === 'solved' && !this.isTrivial()) {
+        done = next;
+        if (done === 1) {
+          this.effort.residual = end.residual;
+          return true;
+        }
+        put(s, kept);
+        step = Math.min(2 * step, 1 - done);
+        continue;
+      }
+      restore(s, kept);
+      step /= 2;
+      if (step < 1 / 256) break;
+    }
+    s.evaluate();
+    this.noteReach(done, from, moved);
+    return false;
+  }
+
+  private noteReach(way: number, from: Float64Array, moved: number): void {
+    let fixing = 0;
+    let furthest = 0;
+    for (let r = 0; r < moved; r++) {
+      const gap = Math.abs(this.wanted.values[r]! - from[r]!);
+      if (gap > furthest) {
+        furthest = gap;
+        fixing = r;
+      }
+    }
+    const target = this.wanted.targets[fixing]!;
+    this.failure = { ...this.standing(), why: 'out-of-reach', way, fixing, reached: target.measure() };
+  }
+
+  private attempt(name: Attempt, wanted: Wanted, iterations: number): boolean {
+    const { effort } = this;
+    if (effort.tried.at(-1) !== name) effort.tried.push(name);
+    const ends = this.system.first === 1 || this.task.reboiler;
+    const end = this.newton.run(wanted, { iterations, resets: ends && name !== 'warm' });
+    effort.iterations += end.iterations;
+    effort.residual = end.residual;
+    if (end.end === 'solved' && !this.isTrivial()) return true;
+    this.failure = this.explain(end);
+    return false;
+  }
+
+  private explain(end: NewtonEnd): Failure {
+    const { system: s } = this;
+    if (end.end === 'solved') return { ...this.standing(), why: 'trivial' };
+    for (let j = 0; j < s.places; j++) {
+      const L = s.L[j]! / s.feedTotal;
+      const V = s.V[j]! / s.feedTotal;
+      if (L < DRY || V < DRY)
+        return { ...this.standing(), why: 'dries', place: j, phase: L < V ? 'liquid' : 'vapour' };
+    }
+    return this.standing();
+  }
+
+  private standing(): Failure {
+    const worst = this.system.worst();
+    return { why: 'no-convergence', place: worst.place, residual: worst.value, of: worst.of };
+  }
+
+  /** Both phases of a stage are one: an answer of the equations, not of the column. */
+  private isTrivial(): boolean {
+    const { system: s } = this;
+    for (let j = 0; j < s.places; j++) {
+      let size = 0;
+      for (let i = j * s.n; i < (j + 1) * s.n; i++)
+        size = Math.max(size, Math.abs(Math.log((s.v[i]! * s.L[j]!) / (s.l[i]! * s.V[j]!))));
+      const volumes = s.vap[j]!.v_m3_mol / s.liq[j]!.v_m3_mol;
+      if (size < 1e-5 && volumes < 1.01) return true;
+    }
+    return false;
+  }
+
+  private setDirect(): void {
+    for (const [k, value] of this.direct) this.system.p[k] = value;
+  }
+}
+
+const SUM_STARTS: readonly (readonly [Attempt, number, number])[] = [
+  ['plain-start', 6, 2],
+  ['more-sweeps', 30, 20],
+  ['wilson-sweeps', 12, 0],
+];
+
+const drawTargets = (s: StageSystem): Target[] => s.task.draws.map((d, k) => flowTarget(s, k, d.flow));
+
+/** Fixings that are parameters themselves, by parameter; and the others. */
+function directParameters(
+  s: StageSystem,
+  fixed: readonly Fixing[],
+): { readonly direct: ReadonlyMap<number, number>; readonly left: readonly Fixing[] } {
+  const direct = new Map<number, number>();
+  const left: Fixing[] = [];
+  const bottoms = s.movers.findIndex((m) => m.moves === 'bottoms');
+  const { draws } = s.task;
+  for (const x of fixed) {
+    if (x.fix === 'refluxRatio') direct.set(0, s.totalCondenser ? 1 / x.value : x.value);
+    else if (x.fix === 'flow' && x.flow.basis === 'mole' && bottoms >= 0 && x.product === 'bottoms')
+      direct.set(bottoms, x.flow.value);
+    else if (
+      x.fix === 'flow' &&
+      x.flow.basis === 'mole' &&
+      bottoms >= 0 &&
+      x.product === 'top' &&
+      draws.every((d) => d.flow.basis === 'mole')
+    )
+      direct.set(bottoms, s.feedTotal - x.flow.value - draws.reduce((sum, d) => sum + d.flow.value, 0));
+    else left.push(x);
+  }
+  return { direct, left };
+}
+
+export const stateOf = (s: StageSystem): ColumnState => ({
+  l: s.l.slice(),
+  v: s.v.slice(),
+  T_K: s.T.slice(),
+  p: s.p.slice(),
+});
+
+function put(s: StageSystem, kept: ColumnState): void {
+  kept.l.set(s.l);
+  kept.v.set(s.v);
+  kept.T_K.set(s.T);
+  kept.p.set(s.p);
+}
+
+function restore(s: StageSystem, kept: ColumnState): void {
+  s.l.set(kept.l);
+  s.v.set(kept.v);
+  s.T.set(kept.T_K);
+  s.p.set(kept.p);
+}
+
+/**
+ * Solves a column: from an earlier state when there is one, then from start values of its own, then from a plain column
+ * moved step by step.
+ *
+ * @param task  feasible as far as balances tell (see feasible.ts)
+ * @returns     the system at its answer, every scaled residual below 1e-9, with all properties in it; or why not
+ */
+export const solveColumn = (task: ColumnTask, warm?: ColumnState): ColumnEnd => new Search(task).solve(warm);

@@ -1,0 +1,165 @@
+import { bubbleStage } from './bubble';
+import type { Guess } from './guess';
+import { NOTHING, type StageSystem } from './system';
+
+/** How start values are swept: passes with start K-values, then with the model's. */
+export interface Sweeps {
+  readonly simple: number;
+  readonly model: number;
+  /** Share of a new temperature and K taken by a model sweep; 1 is all. */
+  readonly share: number;
+}
+
+/** Molar flows by constant overflow from the ends' flows and the feeds' vapour fractions, into L and V. */
+function constantOverflow(s: StageSystem, guess: Guess): void {
+  const { places, L, V, task } = s;
+  const least = 0.02 * s.feedTotal;
+  const total = guess.top;
+  let net = total;
+  let liquid = s.first === 1 ? guess.refluxRatio * guess.top : 0;
+  for (let j = 0; j < places; j++) {
+    if (j > 0 || s.first === 0) {
+      for (const f of task.feeds)
+        if (f.place === j) {
+          const F = f.n_mol_s.reduce((sum, x) => sum + x, 0);
+          net -= F;
+          liquid += F * (1 - f.vapourFraction);
+        }
+      task.draws.forEach((d, k) => {
+        if (d.place !== j) return;
+        net += guess.draws[k]!;
+        if (d.phase === 'liquid') liquid -= guess.draws[k]!;
+      });
+    } else for (const f of task.feeds) if (f.place === 0) net -= f.n_mol_s.reduce((sum, x) => sum + x, 0);
+    if (j === places - 1 && task.reboiler) liquid = guess.bottoms;
+    L[j] = Math.max(liquid, least);
+    // What rises to place j balances what goes down and out above it.
+    if (j + 1 < places) V[j + 1] = Math.max(liquid + net, least);
+  }
+  V[0] = s.totalCondenser ? L[0]! : Math.max(total, least);
+  if (s.first === 1 && !s.totalCondenser) L[0] = Math.max(guess.refluxRatio * total, least);
+}
+
+/**
+ * Component flows for given K, L and V: one tridiagonal system a chemical (Thomas algorithm), in l.
+ *
+ * @param K  by place and chemical
+ */
+export function componentFlows(s: StageSystem, K: Float64Array, diag: Float64Array): void {
+  const { n, places, L, V, f, l, v, rL, rV } = s;
+  for (let i = 0; i < n; i++) {
+    // v_j = S_j l_j. Forward: eliminate l_{j-1}.
+    let carry = 0;
+    for (let j = 0; j < places; j++) {
+      const at = j * n + i;
+      const S = (K[at]! * V[j]!) / L[j]!;
+      v[at] = S;
+      let d = rL[j]! + rV[j]! * S;
+      if (j > 0) d -= v[at]! / diag[j - 1]!;
+      // In exact arithmetic d > 0; it can round to less where nearly everything rises.
+      diag[j] = Math.max(d, 1e-12 * (rL[j]! + rV[j]! * S));
+      carry = f[at]! + (j > 0 ? carry / diag[j - 1]! : 0);
+      l[at] = carry;
+    }
+    for (let j = places - 1; j >= 0; j--) {
+      const at = j * n + i;
+      const above = j + 1 < places ? v[at + n]! : 0;
+      l[at] = Math.max((l[at]! + above) / diag[j]!, NOTHING * s.feedTotal);
+      v[at] = Math.max(v[at]! * l[at]!, NOTHING * s.feedTotal);
+    }
+  }
+}
+
+/** Brings the flows of every place to the given totals, compositions kept. */
+function scaleTo(s: StageSystem, keptL: Float64Array, keptV: Float64Array): void {
+  const { n, places, l, v } = s;
+  s.sums();
+  for (let j = 0; j < places; j++) {
+    const a = keptL[j]! / s.L[j]!;
+    const b = keptV[j]! / s.V[j]!;
+    for (let i = j * n; i < (j + 1) * n; i++) {
+      l[i] = Math.max(l[i]! * a, NOTHING * s.feedTotal);
+      v[i] = Math.max(v[i]! * b, NOTHING * s.feedTotal);
+    }
+  }
+  s.L.set(keptL);
+  s.V.set(keptV);
+}
+
+/** Share r of what leaves that is drawn, from constant overflow and wanted draws; sets the parameters. */
+function setParameters(s: StageSystem, guess: Guess): void {
+  const { movers, p } = s;
+  const first = movers.length - s.task.draws.length;
+  movers.forEach((m, k) => {
+    if (m.moves === 'refluxRatio') p[k] = guess.refluxRatio;
+    else if (m.moves === 'distillateShare') p[k] = 1 / guess.refluxRatio;
+    else if (m.moves === 'bottoms') p[k] = guess.bottoms;
+    else {
+      const passing = m.moves === 'drawL' ? s.L[m.place]! : s.V[m.place]!;
+      p[k] = guess.draws[k - first]! / passing;
+    }
+  });
+}
+
+/**
+ * Start values for a column with at least one end: constant molar overflow, then sweeps over component flows and bubble
+ * points, first with simple K-values, then with the model's.
+ * Mutates: l, v, T, p of the system.
+ * Source: bubble-point sweeps after Wang & Henke, Hydrocarbon Process. 45 (1966) 155.
+ */
+export function startBySweeps(s: StageSystem, guess: Guess, sweeps: Sweeps): void {
+  const { n, places, T, task } = s;
+  constantOverflow(s, guess);
+  setParameters(s, guess);
+  s.readMovers();
+  const keptL = s.L.slice();
+  const keptV = s.V.slice();
+  for (let j = 0; j < places; j++)
+    T[j] = guess.topT_K + ((guess.bottomT_K - guess.topT_K) * j) / Math.max(places - 1, 1);
+  const K = new Float64Array(places * n);
+  const diag = new Float64Array(places);
+  const { simple } = guess;
+  for (let pass = 0; pass <= sweeps.simple; pass++) {
+    for (let j = 0; j < places; j++) {
+      const u = 1 / T[j]!;
+      const lnP = Math.log(simple.P_Pa / task.P_Pa[j]!);
+      for (let i = 0; i < n; i++) K[j * n + i] = Math.exp(simple.a[i]! - simple.b[i]! * u + lnP);
+    }
+    componentFlows(s, K, diag);
+    scaleTo(s, keptL, keptV);
+    if (pass === sweeps.simple) break;
+    for (let j = 0; j < places; j++) {
+      let sum = 0;
+      let slope = 0;
+      const at = j * n;
+      for (let i = 0; i < n; i++) {
+        const y = (K[at + i]! * s.l[at + i]!) / keptL[j]!;
+        sum += y;
+        slope += y * simple.b[i]!;
+      }
+      // ln(sum K x) is close to linear in 1/T, with this slope.
+      const u = 1 / T[j]! + (Math.log(sum) * sum) / slope;
+      const next = u > 0 ? 1 / u : T[j]! + 20;
+      T[j] = T[j]! + Math.min(Math.max(next - T[j]!, -20), 20);
+    }
+  }
+  for (let pass = 0; pass < sweeps.model; pass++) {
+    for (let j = 0; j < places; j++) {
+      const before = T[j]!;
+      bubbleStage(s, j, 1, 10);
+      T[j] = before + sweeps.share * (T[j]! - before);
+      const liq = s.liq[j]!;
+      const vap = s.vap[j]!;
+      for (let i = 0; i < n; i++) {
+        const lnK = liq.lnPhi[i]! - vap.lnPhi[i]! + (liq.dT[i]! - vap.dT[i]!) * (T[j]! - before);
+        const at = j * n + i;
+        K[at] =
+          sweeps.share === 1
+            ? Math.exp(lnK)
+            : Math.exp(sweeps.share * lnK + (1 - sweeps.share) * Math.log(K[at]!));
+      }
+    }
+    componentFlows(s, K, diag);
+    scaleTo(s, keptL, keptV);
+  }
+}

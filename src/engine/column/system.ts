@@ -1,0 +1,294 @@
+import type { PhaseProps, ThermoModel } from '../thermo/types';
+import type { ColumnTask } from './types';
+
+/** What a parameter outside the stages moves; all are > 0. */
+export type Mover =
+  /** Reflux ratio L/V of a condenser whose distillate is its vapour. */
+  | { readonly moves: 'refluxRatio' }
+  /** Distillate / reflux of a condenser whose distillate is liquid. */
+  | { readonly moves: 'distillateShare' }
+  /** Bottoms flow [mol/s] of a column with a reboiler. */
+  | { readonly moves: 'bottoms' }
+  /** Drawn / left in the column, of the liquid or vapour of a place. */
+  | { readonly moves: 'drawL' | 'drawV'; readonly place: number };
+
+/** Energy of a mole that scales energy balances [J/mol]. */
+export const ENERGY_J_MOL = 20e3;
+/** Scale of temperature unknowns [K]. */
+export const T_SCALE_K = 50;
+/** A chemical's flow counts as nothing below this share of the feed. */
+export const NOTHING = 1e-60;
+/** Balances are measured against no less than this share of the feed. */
+const LEAST_FLOW = 1e-20;
+
+/**
+ * A column's unknowns, properties and residuals.
+ *
+ * Unknowns by place: liquid and vapour flows of each chemical that go on to the next place (draws not included), and the
+ * temperature. The vapour of a total condenser is a shadow: the bubble-point vapour over its liquid, as much as the liquid,
+ * in no balance.
+ */
+export class StageSystem {
+  readonly model: ThermoModel;
+  readonly n: number;
+  readonly places: number;
+  /** First and last place that are stages. */
+  readonly first: number;
+  readonly last: number;
+  readonly totalCondenser: boolean;
+  readonly movers: readonly Mover[];
+
+  readonly l: Float64Array;
+  readonly v: Float64Array;
+  readonly T: Float64Array;
+  readonly p: Float64Array;
+
+  /** Sums of l and v by place. */
+  readonly L: Float64Array;
+  readonly V: Float64Array;
+  /** 1 + drawn share by place; 1 + distillate share for a total condenser. */
+  readonly rL: Float64Array;
+  readonly rV: Float64Array;
+  readonly liq: readonly PhaseProps[];
+  readonly vap: readonly PhaseProps[];
+  /** The reflux as it is cooled, where it is; else liq[0]. */
+  readonly reflux: PhaseProps;
+  /** Feed by place and chemical, total and enthalpy by place. */
+  readonly f: Float64Array;
+  readonly F: Float64Array;
+  readonly HF: Float64Array;
+  readonly feedTotal: number;
+  readonly energyScale: number;
+
+  /** Residuals: mole balances [mol/s], equilibrium [-], energy or what stands in its place [-]. */
+  readonly M: Float64Array;
+  readonly Q: Float64Array;
+  readonly H: Float64Array;
+  /** Share of the equilibrium vapour in what Murphree's relation gives, by place and chemical; 1 without. */
+  readonly theta: Float64Array;
+  readonly scratch: Float64Array;
+
+  constructor(readonly task: ColumnTask) {
+    const { model, P_Pa } = task;
+    this.model = model;
+    const n = model.n;
+    const places = P_Pa.length;
+    this.n = n;
+    this.places = places;
+    this.totalCondenser = task.top === 'liquid';
+    this.first = task.top === 'none' ? 0 : 1;
+    this.last = task.reboiler ? places - 2 : places - 1;
+    const movers: Mover[] = [];
+    if (task.top === 'vapour') movers.push({ moves: 'refluxRatio' });
+    if (task.top === 'liquid') movers.push({ moves: 'distillateShare' });
+    if (task.reboiler) movers.push({ moves: 'bottoms' });
+    for (const draw of task.draws)
+      movers.push({ moves: draw.phase === 'liquid' ? 'drawL' : 'drawV', place: draw.place });
+    this.movers = movers;
+    const vector = (size: number): Float64Array => new Float64Array(size);
+    this.l = vector(places * n);
+    this.v = vector(places * n);
+    this.T = vector(places);
+    this.p = vector(movers.length);
+    this.L = vector(places);
+    this.V = vector(places);
+    this.rL = vector(places);
+    this.rV = vector(places);
+    this.liq = Array.from({ length: places }, () => model.makeProps());
+    this.vap = Array.from({ length: places }, () => model.makeProps());
+    this.reflux = this.totalCondenser && task.subcooling_K > 0 ? model.makeProps() : this.liq[0]!;
+    this.f = vector(places * n);
+    this.F = vector(places);
+    this.HF = vector(places);
+    this.M = vector(places * n);
+    this.Q = vector(places * n);
+    this.H = vector(places);
+    this.theta = vector(places * n).fill(1);
+    this.scratch = vector(n);
+    let total = 0;
+    for (const feed of task.feeds) {
+      for (let i = 0; i < n; i++) {
+        this.f[feed.place * n + i]! += feed.n_mol_s[i]!;
+        this.F[feed.place]! += feed.n_mol_s[i]!;
+      }
+      this.HF[feed.place]! += feed.H_W;
+    }
+    for (const F of this.F) total += F;
+    this.feedTotal = total;
+    this.energyScale = total * ENERGY_J_MOL;
+  }
+
+  /** Liquid properties with which place j's liquid leaves it. */
+  leaving(j: number): PhaseProps {
+    return j === 0 ? this.reflux : this.liq[j]!;
+  }
+
+  /** Whether place j has an energy balance of its own; else it has what fixes an end. */
+  balancesEnergy(j: number): boolean {
+    return j >= this.first && j <= this.last;
+  }
+
+  /** Sums, properties and residuals at l, v, T, p. False when a property is not finite. */
+  evaluate(): boolean {
+    const { n, places, l, v, T, L, V, model, task } = this;
+    const x = this.scratch;
+    this.readMovers();
+    this.sums();
+    for (let j = 0; j < places; j++) {
+      const at = j * n;
+      const P = task.P_Pa[j]!;
+      const sumL = L[j]!;
+      const sumV = V[j]!;
+      for (let i = 0; i < n; i++) x[i] = l[at + i]! / sumL;
+      const liq = this.liq[j]!;
+      model.evaluate('liquid', T[j]!, P, x, 2, liq);
+      if (j === 0 && this.reflux !== liq)
+        model.evaluate('liquid', T[0]! - task.subcooling_K, P, x, 2, this.reflux);
+      for (let i = 0; i < n; i++) x[i] = v[at + i]! / sumV;
+      const vap = this.vap[j]!;
+      model.evaluate('vapour', T[j]!, P, x, 2, vap);
+      if (!Number.isFinite(liq.h_J_mol + vap.h_J_mol + liq.lnPhi[0]! + vap.lnPhi[0]!)) return false;
+    }
+    this.balances();
+    this.equilibria();
+    this.energies();
+    return true;
+  }
+
+  /** L and V from l and v. */
+  sums(): void {
+    const { n, places, l, v, L, V } = this;
+    for (let j = 0; j < places; j++) {
+      const at = j * n;
+      let sumL = 0;
+      let sumV = 0;
+      for (let i = 0; i < n; i++) {
+        sumL += l[at + i]!;
+        sumV += v[at + i]!;
+      }
+      L[j] = sumL;
+      V[j] = sumV;
+    }
+  }
+
+  readMovers(): void {
+    const { rL, rV, movers, p } = this;
+    rL.fill(1);
+    rV.fill(1);
+    for (let k = 0; k < movers.length; k++) {
+      const mover = movers[k]!;
+      if (mover.moves === 'distillateShare') rL[0] = 1 + p[k]!;
+      else if (mover.moves === 'drawL') rL[mover.place]! += p[k]!;
+      else if (mover.moves === 'drawV') rV[mover.place]! += p[k]!;
+    }
+    // A shadow vapour leaves nothing.
+    if (this.totalCondenser) rV[0] = 0;
+  }
+
+  private balances(): void {
+    const { n, places, l, v, f, M, rL, rV } = this;
+    for (let j = 0; j < places; j++) {
+      const at = j * n;
+      const a = rL[j]!;
+      const b = rV[j]!;
+      for (let i = 0; i < n; i++) {
+        let m = a * l[at + i]! + b * v[at + i]! - f[at + i]!;
+        if (j > 0) m -= l[at - n + i]!;
+        if (j + 1 < places) m -= v[at + n + i]!;
+        M[at + i] = m;
+      }
+    }
+  }
+
+  private equilibria(): void {
+    const { n, places, l, v, L, V, Q, theta, task } = this;
+    for (let j = 0; j < places; j++) {
+      const at = j * n;
+      const lnPhiL = this.liq[j]!.lnPhi;
+      const lnPhiV = this.vap[j]!.lnPhi;
+      const ratio = L[j]! / V[j]!;
+      const E = task.efficiency[j]!;
+      const below = E === 1 ? undefined : this.vapourBelow(j);
+      if (below === undefined) {
+        for (let i = 0; i < n; i++)
+          Q[at + i] = Math.log((v[at + i]! / l[at + i]!) * ratio) + lnPhiV[i]! - lnPhiL[i]!;
+        continue;
+      }
+      for (let i = 0; i < n; i++) {
+        const e = (E * Math.exp(lnPhiL[i]! - lnPhiV[i]!) * l[at + i]!) / L[j]!;
+        const s = e + (1 - E) * below.flows[below.at + i]! * below.scale;
+        theta[at + i] = e / s;
+        Q[at + i] = Math.log(v[at + i]! / V[j]! / s);
+      }
+    }
+  }
+
+  /** Mole fractions of the vapour that rises to place j, as flows times a scale; undefined when none does. */
+  vapourBelow(
+    j: number,
+  ): { readonly flows: Float64Array; readonly at: number; readonly scale: number } | undefined {
+    if (j + 1 < this.places) return { flows: this.v, at: (j + 1) * this.n, scale: 1 / this.V[j + 1]! };
+    const feed = this.task.feeds.find((f) => f.place === j && f.y !== undefined);
+    return feed?.y && { flows: feed.y, at: 0, scale: 1 };
+  }
+
+  private energies(): void {
+    const { places, L, V, H, HF, rL, rV, energyScale, feedTotal, totalCondenser, p, task } = this;
+    for (let j = 0; j < places; j++) {
+      if (this.balancesEnergy(j)) {
+        let h = rL[j]! * L[j]! * this.liq[j]!.h_J_mol + rV[j]! * V[j]! * this.vap[j]!.h_J_mol - HF[j]!;
+        if (j > 0) h -= L[j - 1]! * this.leaving(j - 1).h_J_mol;
+        if (j + 1 < places) h -= V[j + 1]! * this.vap[j + 1]!.h_J_mol;
+        H[j] = h / energyScale;
+      } else if (j === 0) H[j] = (totalCondenser ? V[0]! - L[0]! : L[0]! - p[0]! * V[0]!) / feedTotal;
+      else H[j] = (L[j]! - p[task.top === 'none' ? 0 : 1]!) / feedTotal;
+    }
+  }
+
+  /** Scale of a mole balance: what enters the place of that chemical. */
+  inflow(j: number, i: number): number {
+    const { n, l, v, f, places } = this;
+    const at = j * n + i;
+    const inflow = f[at]! + (j > 0 ? l[at - n]! : 0) + (j + 1 < places ? v[at + n]! : 0);
+    return Math.max(inflow, LEAST_FLOW * this.feedTotal);
+  }
+
+  /** Largest scaled residual of the stages and where it is. */
+  worst(): {
+    readonly value: number;
+    readonly place: number;
+    readonly of: 'balance' | 'equilibrium' | 'energy';
+  } {
+    let value = 0;
+    let place = 0;
+    let of: 'balance' | 'equilibrium' | 'energy' = 'balance';
+    const look = (r: number, j: number, what: typeof of): void => {
+      if (Math.abs(r) <= value) return;
+      value = Math.abs(r);
+      place = j;
+      of = what;
+    };
+    for (let j = 0; j < this.places; j++) {
+      for (let i = 0; i < this.n; i++) {
+        look(this.M[j * this.n + i]! / this.inflow(j, i), j, 'balance');
+        look(this.Q[j * this.n + i]!, j, 'equilibrium');
+      }
+      look(this.H[j]!, j, 'energy');
+    }
+    return { value, place, of };
+  }
+
+  /** Square sum of the scaled residuals of the stages. */
+  squares(): number {
+    let sum = 0;
+    for (let j = 0; j < this.places; j++) {
+      for (let i = 0; i < this.n; i++) {
+        const m = this.M[j * this.n + i]! / this.inflow(j, i);
+        const q = this.Q[j * this.n + i]!;
+        sum += m * m + q * q;
+      }
+      sum += this.H[j]! * this.H[j]!;
+    }
+    return sum;
+  }
+}
