@@ -40,7 +40,7 @@ test('what stands in it means what it meant', async () => {
     { shares: { out2: { is: 'share', share: 0.08, of: { stream: 's1' }, basis: 'mass', chemical: 0 } } },
     { to: 'atmosphere' },
     { T: 353.15 },
-    { p: { drop: 100_000 } },
+    { p: { ratio: 0.5 } },
   ]);
   expect(problem.units[3]).toHaveProperty('materialNoted', true);
   expect(problem.reads).toEqual([{ unit: 'u6', path: 'shares.out2', stream: 's1', of: 'mass', chemical: 0 }]);
