@@ -9,7 +9,7 @@ const isTree = (x: unknown): x is Tree => typeof x === 'object' && x !== null;
 const isShare = (x: unknown): x is Extract<FlowSI, { is: 'share' }> => isTree(x) && x.is === 'share';
 
 /** The flow that a share of a stream stands for: of all of it or of one chemical, by mole or by mass. */
-export function flowOfShare(share: number, read: Read, stream: StreamState, MW_g_mol: Float64Array): FlowSI {
+export function flowOfShare(share: number, read: Read, stream: StreamState, MW_kg_mol: Float64Array): FlowSI {
   const { n_mol_s } = stream;
   if (read.of === 'mol')
     return {
@@ -18,8 +18,8 @@ export function flowOfShare(share: number, read: Read, stream: StreamState, MW_g
     };
   let m = 0;
   for (let i = 0; i < n_mol_s.length; i++)
-    if (read.chemical === undefined || read.chemical === i) m += n_mol_s[i]! * MW_g_mol[i]!;
-  return { is: 'mass', m_kg_s: share * m * 1e-3 };
+    if (read.chemical === undefined || read.chemical === i) m += n_mol_s[i]! * MW_kg_mol[i]!;
+  return { is: 'mass', m_kg_s: share * m };
 }
 
 /** Settings with the flow at the read's path resolved; only what lies on the path is copied. Throws when nothing is there. */
@@ -27,13 +27,13 @@ export function withRead(
   settings: unknown,
   read: Read,
   stream: StreamState,
-  MW_g_mol: Float64Array,
+  MW_kg_mol: Float64Array,
 ): unknown {
   const put = (node: unknown, keys: readonly string[]): unknown => {
     const [key, ...rest] = keys;
     if (key === undefined) {
       if (!isShare(node)) throw new Error(`no share of a stream at ${read.path}`);
-      return flowOfShare(node.share, read, stream, MW_g_mol);
+      return flowOfShare(node.share, read, stream, MW_kg_mol);
     }
     if (!isTree(node) || !Object.hasOwn(node, key)) throw new Error(`no setting at ${read.path}`);
     const value = put(node[key], rest);

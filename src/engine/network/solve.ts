@@ -184,9 +184,8 @@ function callOf(
   const inlets: Record<Port, StreamState> = {};
   for (const [port, stream] of Object.entries(unit.in)) inlets[port] = stateOf(stream);
   let settings = unit.settings;
-  const MW_g_mol = memory.data.MW_kg_mol.map((m) => m * 1e3);
   for (const read of plan.reads.get(unit.id) ?? [])
-    settings = withRead(settings, read, stateOf(read.stream), MW_g_mol);
+    settings = withRead(settings, read, stateOf(read.stream), memory.data.MW_kg_mol);
   return {
     unit: unit.id,
     in: inlets,
