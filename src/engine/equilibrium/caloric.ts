@@ -1,5 +1,5 @@
+import { luFactor, luSolve } from '../numerics/lu';
 import { R_J_molK } from '../thermo/types';
-import { solveDense } from './dense';
 import { differences, EQUAL, evaluateBoth, fillHessian, moveFlows, NEARLY_EQUAL } from './split';
 import { type Caloric, closeEnough, LEAST_T_K, MOST_T_K } from './whole';
 import type { FlashWork } from './work';
@@ -68,7 +68,8 @@ export function newtonCaloric(w: FlashWork, T0: number, P: number, target: numbe
     }
     border[n * m + n] = (vap.total * vap.props.cp_J_molK + liq.total * liq.props.cp_J_molK) / R_J_molK;
     rhs[n] = (target - have) / scale;
-    if (!solveDense(border, rhs, m)) return 'going';
+    if (!luFactor(border, m, w.pivots)) return 'going';
+    luSolve(border, m, w.pivots, rhs);
     let share = 1;
     const dT = Math.abs(rhs[n]!);
     if (!(dT < Number.POSITIVE_INFINITY)) return 'going';

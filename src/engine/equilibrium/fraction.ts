@@ -1,4 +1,4 @@
-import { solveDense } from './dense';
+import { luFactor, luSolve } from '../numerics/lu';
 import { evaluateBoth } from './split';
 import type { FlashWork } from './work';
 
@@ -173,7 +173,8 @@ export function newtonFraction(
     }
     border[n * m + n] = 0;
     rhs[n] = liq.total - vap.total;
-    if (!solveDense(border, rhs, m)) return 'going';
+    if (!luFactor(border, m, w.pivots)) return 'going';
+    luSolve(border, m, w.pivots, rhs);
     const most = sought === 'T' ? 0.08 : 1;
     let share = 1;
     if (Math.abs(rhs[n]!) > most) share = most / Math.abs(rhs[n]!);

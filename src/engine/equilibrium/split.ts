@@ -1,4 +1,4 @@
-import { solveDefinite } from './dense';
+import { choleskyShifted, choleskySolve } from '../numerics/cholesky';
 import { vapourFractionOf } from './rachford-rice';
 import type { FlashWork, Slot } from './work';
 
@@ -213,7 +213,8 @@ export function newtonSplit(w: FlashWork, T: number, P: number, passes: number):
     }
     fillHessian(w);
     for (let i = 0; i < n; i++) step[i] = -s[i]! * g[i]!;
-    solveDefinite(hess, step, n);
+    choleskyShifted(hess, n, w.border);
+    choleskySolve(hess, n, step);
     for (let i = 0; i < n; i++) {
       step[i] = step[i]! * s[i]!;
       saved[i] = vap.flow[i]!;

@@ -1,4 +1,4 @@
-import { solveDefinite } from './dense';
+import { choleskyShifted, choleskySolve } from '../numerics/cholesky';
 import type { FlashWork, Slot } from './work';
 
 /** A trial lies below the tangent plane only if it does so by more than rounding. */
@@ -116,7 +116,8 @@ function newton(
       }
       step[i] = -g[i]!;
     }
-    solveDefinite(hess, step, n);
+    choleskyShifted(hess, n, w.border);
+    choleskySolve(hess, n, step);
     for (let i = 0; i < n; i++) {
       // alpha = 2 sqrt(W): half the step on the root; never below a twentieth.
       const root = Math.max(s[i]! + step[i]! / 2, 0.2 * s[i]!);

@@ -46,10 +46,11 @@ export interface FlashWork extends FlashWorkOwner {
   readonly saved: Float64Array;
   readonly saved2: Float64Array;
   readonly startW: Float64Array;
-  /** Matrices, n x n and (n + 1) x (n + 1), row-major. */
+  /** Matrices, n x n and (n + 1) x (n + 1), row-major; the second also spares the first's entries. */
   readonly hess: Float64Array;
   readonly border: Float64Array;
   readonly rhs: Float64Array;
+  readonly pivots: Int32Array;
 
   /** Answer so far. */
   phases: 1 | 2;
@@ -110,6 +111,7 @@ export function makeFlashWork(model: ThermoModel): FlashWork {
     hess: new Float64Array(n * n),
     border: new Float64Array((n + 1) * (n + 1)),
     rhs: vector(),
+    pivots: new Int32Array(n + 1),
     phases: 1,
     T_K: 0,
     P_Pa: 0,
