@@ -71,9 +71,7 @@ const StreamMark = memo(function StreamMark({ id }: { readonly id: StreamId }) {
         ) : null}
       </button>
       {line.hanging && line.arrow ? <LooseEnd id={id} at={line.arrow.at} from={at} /> : null}
-      {label && ((!quietLabel && !label.folded) || shown) ? (
-        <Label label={label} line={line} from={at} opened={opened} />
-      ) : null}
+      {label && ((!quietLabel && !label.folded) || shown) ? drawLabel(label, line, at, opened) : null}
     </div>
   );
 });
@@ -91,24 +89,17 @@ function LooseEnd({ id, at, from }: { readonly id: StreamId; readonly at: Point;
         const { sketch } = stores.sketch.getState();
         const end = sketch.streams.find((stream) => stream.id === id)?.from;
         const unit = end && sketch.units.find((known) => known.id === end[0]);
-        const port = unit && portsOf(sketch, unit, null).find((known) => known.port === end[1]);
+        const port =
+          unit &&
+          portsOf(sketch, unit, sheet.getState().units.get(unit.id)).find((known) => known.port === end[1]);
         if (port) pullByPointer(stores, sheet, port, event);
       }}
     />
   );
 }
 
-function Label({
-  label,
-  line,
-  from,
-  opened,
-}: {
-  readonly label: LabelShape;
-  readonly line: LineShape;
-  readonly from: Point;
-  readonly opened: boolean;
-}) {
+/** Rows with numbers right-aligned and units behind them; an opened label has a ground of its own. Part of its stream's view. */
+function drawLabel(label: LabelShape, line: LineShape, from: Point, opened: boolean) {
   const anchor = anchorOf(line.points, label.box);
   return (
     <svg

@@ -29,11 +29,12 @@ function Marks({ unit: id, origin }: Props) {
   const stores = useStores();
   const sheet = useSheetStore();
   const unit = useUnit(id);
+  const shape = useSheet((state) => state.units.get(id));
   const streams = useSketch(
     useShallow((state) => state.sketch.streams.filter((s) => s.from?.[0] === id || s.to?.[0] === id)),
   );
   if (!unit) return null;
-  return portsOf({ streams }, unit, null)
+  return portsOf({ streams }, unit, shape)
     .filter(isFree)
     .map((port) => (
       <button

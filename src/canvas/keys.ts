@@ -84,7 +84,7 @@ export function connectByKeys(stores: Stores): void {
   const fitting = handle.store.getState().pulling?.targets.filter((target) => !target.reason) ?? [];
   say(
     stores,
-    `Connect from ${portName(sketch, from)}: ${fitting.length} ports fit. Arrows choose, Enter connects, Esc leaves it.`,
+    `Connect from ${portName(sketch, from)}: ${fitting.length === 1 ? 'one port fits' : `${fitting.length} ports fit`}. Arrows choose, Enter connects, Esc leaves it.`,
   );
 }
 
@@ -97,7 +97,7 @@ export function freePorts(stores: Stores): readonly StandingPort[] {
   const id = 'unit' in thing ? thing.unit : (stream?.from?.[0] ?? stream?.to?.[0]);
   const unit = sketch.units.find((u) => u.id === id);
   if (!unit) return [];
-  return portsOf(sketch, unit, null)
+  return portsOf(sketch, unit, sheetOf(stores)?.store.getState().units.get(unit.id))
     .filter(isFree)
     .filter((port) => stream === undefined || port.stream?.id === stream.id)
     .sort((a, b) => Number(a.dir === 'in') - Number(b.dir === 'in'));

@@ -1,15 +1,12 @@
-import { symbolOf } from '../drawing/symbols/registry';
-import { portOnSheet, poseOf } from '../drawing/transform';
-import type { Point } from '../drawing/types';
+import { portOfShape } from '../drawing/transform';
+import type { UnitShape } from '../drawing/types';
 import type { Port, UnitId } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { PortSpec } from '../engine/units/types';
 import type { Sketch, SketchStream, SketchUnit } from '../sketch/types';
 import { isOneOf, nextPortName, whyNotConnect } from '../store/commands';
 import { sayEditRefusal } from '../wording';
-import type { PortRef, Target } from './sheetStore';
-
-type Moved = ReadonlyMap<UnitId, Point> | null;
+import type { PortRef, SheetState, Target } from './sheetStore';
 
 /** A port of a unit on the sheet, and the stream that has an end at it. */
 export interface StandingPort extends Target {
@@ -26,19 +23,20 @@ function namesOf(spec: PortSpec, used: readonly Port[]): readonly Port[] {
 const endsAt = (end: SketchStream['from'], unit: UnitId, port: Port): boolean =>
   end?.[0] === unit && end[1] === port;
 
-/** All ports of a unit: of numbered ones those in use and the next free one. */
-export function portsOf(sketch: Pick<Sketch, 'streams'>, unit: SketchUnit, moved: Moved): StandingPort[] {
+/** All ports of a drawn unit: of numbered ones those in use and the next free one. */
+export function portsOf(
+  sketch: Pick<Sketch, 'streams'>,
+  unit: SketchUnit,
+  shape: UnitShape | undefined,
+): StandingPort[] {
   const kind = Object.hasOwn(CATALOGUE, unit.kind) ? CATALOGUE[unit.kind] : undefined;
-  if (!kind) return [];
+  if (!kind || !shape) return [];
   const mine = sketch.streams.filter((s) => s.from?.[0] === unit.id || s.to?.[0] === unit.id);
   const used = mine.flatMap((s) => [s.from, s.to].flatMap((end) => (end?.[0] === unit.id ? [end[1]] : [])));
-  const symbol = symbolOf(unit);
-  const pose = poseOf(unit, moved?.get(unit.id));
   return kind.ports.flatMap((spec) =>
     namesOf(spec, used).flatMap((port): StandingPort[] => {
-      const own = symbol.ports(port);
-      if (!own) return [];
-      const place = portOnSheet(pose, own);
+      const place = portOfShape(shape, port);
+      if (!place) return [];
       const stream = mine.find((s) => endsAt(spec.dir === 'out' ? s.from : s.to, unit.id, port));
       return [{ unit: unit.id, port, dir: spec.dir, place, stream, numbered: spec.numbered !== undefined }];
     }),
@@ -53,10 +51,10 @@ export const isFree = ({ dir, stream }: StandingPort): boolean =>
 const isOffered = ({ stream, numbered }: StandingPort): boolean => !numbered || stream === undefined;
 
 /** Every port of the other units, with the reason where the stream cannot end there. */
-export function targetsFor(sketch: Sketch, from: PortRef, moved: Moved): Target[] {
+export function targetsFor(sketch: Sketch, from: PortRef, shapes: SheetState['units']): Target[] {
   return sketch.units
     .filter((unit) => unit.id !== from.unit)
-    .flatMap((unit) => portsOf(sketch, unit, moved).filter(isOffered))
+    .flatMap((unit) => portsOf(sketch, unit, shapes.get(unit.id)).filter(isOffered))
     .map(({ unit, port, dir, place }) => {
       const refused = whyNotConnect(sketch, [from.unit, from.port], [unit, port]);
       return { unit, port, dir, place, ...(refused ? { reason: sayEditRefusal(refused) } : {}) };

@@ -15,7 +15,7 @@ const SHORTEST = 20;
 /** Takes hold of a port: every other port shows whether the stream can end there. */
 export function beginPull(stores: Stores, sheet: SheetStore, from: Target, byKeys: boolean): void {
   const { sketch } = stores.sketch.getState();
-  const targets = targetsFor(sketch, from, sheet.getState().moved);
+  const targets = targetsFor(sketch, from, sheet.getState().units);
   sheet.setState({
     pulling: { from, targets, at: from.place.at, over: null, byKeys },
     offer: null,

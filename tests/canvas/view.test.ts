@@ -1,0 +1,157 @@
+import { expect, test } from 'vitest';
+import { fitting } from '../../src/canvas/extent';
+import { zonesAlong } from '../../src/canvas/Frame';
+import { keepScene } from '../../src/canvas/keepScene';
+import { anchorOf, middleOf, nearestOn } from '../../src/canvas/lines';
+import { nodesOf } from '../../src/canvas/nodes';
+import { quietAt, steadyScale } from '../../src/canvas/quiet';
+import { createSheetStore } from '../../src/canvas/sheetStore';
+import { shelfGroups } from '../../src/canvas/shelfItems';
+import { chooseByArrow, type Places, stepFrom } from '../../src/canvas/walk';
+import { letDown, solveAll, storesOf, streamId, unitId } from './fixture';
+
+function solvedScene() {
+  const stores = storesOf(letDown());
+  const sheet = createSheetStore();
+  keepScene(stores, sheet, () => 1);
+  solveAll(stores);
+  return sheet.getState();
+}
+
+test('text keeps its size on the screen between 50 and 150 %', () => {
+  for (const zoom of [0.5, 0.8, 1, 1.5]) expect(steadyScale(zoom) * zoom).toBeCloseTo(1, 12);
+  expect(steadyScale(0.25)).toBe(2);
+  expect(steadyScale(3)).toBeCloseTo(1 / 1.5, 12);
+});
+
+test('at 85 % and above nothing steps back, under 50 % only symbols, tags and lines stay', () => {
+  const { scene } = solvedScene();
+  const outer = new Set([streamId('s1')]);
+  expect(quietAt(scene, 0.85, outer)).toMatchObject({ duties: false, labels: new Set() });
+  const far = quietAt(scene, 0.49, outer);
+  expect(far.labels.size).toBe(scene.labels.length);
+  expect(far.diamonds.size).toBe(scene.lines.length);
+});
+
+test('where labels crowd, those of feeds and products stand longest', () => {
+  const { scene } = solvedScene();
+  const [first, second] = scene.labels;
+  // The same label twice on the same line: only one of them has room.
+  const crowded = {
+    ...scene,
+    labels: [first!, { ...second!, box: first!.box }],
+  };
+  const outerSecond = quietAt(crowded, 0.8, new Set([second!.stream]));
+  expect(outerSecond.labels.has(first!.stream)).toBe(true);
+});
+
+test('a piece under 40 px on the screen loses its diamond', () => {
+  const { scene } = solvedScene();
+  const line = scene.lines.find((l) => l.stream === 's1')!;
+  const short = {
+    ...line,
+    points: [
+      [0, 900],
+      [60, 900],
+    ] as const,
+    diamond: [30, 900] as const,
+  };
+  const only = { ...scene, units: [], labels: [], lines: [short] };
+  expect(quietAt(only, 0.8, new Set()).diamonds.size).toBe(0);
+  expect(quietAt(only, 0.6, new Set()).diamonds.has(line.stream)).toBe(true);
+});
+
+test('zones belong to the page and stand at the edges of the view', () => {
+  const name = (k: number) => `${k + 1}`;
+  const whole = zonesAlong(4, name, 0, 400, 400);
+  expect(whole.map((z) => [z.text, z.middle, z.edge])).toEqual([
+    ['1', 50, 100],
+    ['2', 150, 200],
+    ['3', 250, 300],
+    ['4', 350, null],
+  ]);
+  // Moved half a zone to the right: the first zone reaches to the edge of the view, the last one is cut.
+  const moved = zonesAlong(4, name, 50, 400, 400);
+  expect(moved[0]).toMatchObject({ text: '1', middle: 75, edge: 150 });
+  expect(moved.at(-1)).toMatchObject({ text: '4', middle: 375 });
+  // Zoomed in on zone 2 alone.
+  expect(zonesAlong(4, name, -1000, 2800, 400).map((z) => z.text)).toEqual(['2']);
+});
+
+test('the whole scene fits the view, flags and labels at their size included', () => {
+  const { scene } = solvedScene();
+  const { zoom } = fitting(scene, 400, 400, 0.25);
+  expect(zoom).toBeLessThan(400 / scene.box.w + 1e-9);
+  expect(zoom).toBeGreaterThanOrEqual(0.5);
+  expect(fitting(scene, 4000, 4000, 0.25).zoom).toBe(1);
+});
+
+test('points on a line: its middle, the nearest one, where a label hangs', () => {
+  const line = [
+    [0, 0],
+    [100, 0],
+    [100, 300],
+  ] as const;
+  expect(middleOf(line)).toEqual([100, 150]);
+  expect(nearestOn(line, [40, 30])).toEqual({ at: [40, 0], distance: 30 });
+  expect(anchorOf(line, { x: 110, y: 190, w: 40, h: 20 })).toEqual([100, 200]);
+});
+
+test('a node is made anew only when its unit moves or is selected', () => {
+  const { scene } = solvedScene();
+  const first = nodesOf(scene.units, new Set(), []);
+  expect(nodesOf(scene.units, new Set(), first)).toBe(first);
+  const second = nodesOf(scene.units, new Set([unitId('u2')]), first);
+  expect(second.filter((node, k) => node !== first[k]).map((node) => node.id)).toEqual(['u2']);
+  expect(first.every((node) => Object.keys(node.data).length === 0)).toBe(true);
+  // A target is never smaller than 24 px.
+  expect(first.every((node) => (node.width ?? 0) >= 24 && (node.height ?? 0) >= 24)).toBe(true);
+});
+
+const sketch = letDown();
+const places: Places = {
+  unit: (id) => sketch.units.find((u) => u.id === id)?.at,
+  stream: (id) =>
+    ({ s1: [170, 320], s2: [340, 320], s3: [560, 160], s4: [432, 400], s5: [640, 520] })[id as string] as
+      | readonly [number, number]
+      | undefined,
+};
+
+test('arrows walk along the streams: right with the flow, left against it', () => {
+  const path: string[] = [];
+  let at: Parameters<typeof stepFrom>[2] | undefined = { unit: unitId('u1') };
+  while (at) {
+    path.push('unit' in at ? at.unit : at.stream);
+    at = stepFrom(sketch, places, at, 'right');
+  }
+  expect(path).toEqual(['u1', 's1', 'u2', 's2', 'u3', 's3', 'u4']);
+  expect(stepFrom(sketch, places, { unit: unitId('u4') }, 'left')).toEqual({ stream: 's3' });
+  expect(stepFrom(sketch, places, { stream: streamId('s4') }, 'right')).toBeUndefined();
+});
+
+test('up and down choose a branch where streams leave the same unit', () => {
+  expect(stepFrom(sketch, places, { stream: streamId('s3') }, 'down')).toEqual({ stream: 's4' });
+  expect(stepFrom(sketch, places, { stream: streamId('s4') }, 'up')).toEqual({ stream: 's3' });
+  expect(stepFrom(sketch, places, { stream: streamId('s3') }, 'up')).toBeUndefined();
+  expect(stepFrom(sketch, places, { unit: unitId('u3') }, 'up')).toEqual({ unit: 'u4' });
+});
+
+test('an arrow chooses the nearest port in its direction', () => {
+  const ports = [
+    { at: [100, 0] as const, name: 'right' },
+    { at: [0, 100] as const, name: 'below' },
+    { at: [200, 10] as const, name: 'further right' },
+  ];
+  expect(chooseByArrow(ports, undefined, [0, 0], 'right')?.name).toBe('right');
+  expect(chooseByArrow(ports, ports[0], [0, 0], 'right')?.name).toBe('further right');
+  expect(chooseByArrow(ports, ports[2], [0, 0], 'right')).toBeUndefined();
+  expect(chooseByArrow(ports, undefined, [0, 0], 'left')?.name).toBe('right');
+});
+
+test('the shelf lists kinds by group and filters by word or tag letters', () => {
+  const all = shelfGroups('');
+  expect(all[0]).toMatchObject({ word: 'Boundary', items: [{ word: 'Feed' }, { word: 'Product' }] });
+  expect(shelfGroups('flash').flatMap((g) => g.items.map((i) => i.word))).toEqual(['Flash drum']);
+  expect(shelfGroups('PV').flatMap((g) => g.items.map((i) => i.word))).toEqual(['Valve']);
+  expect(shelfGroups('no such thing')).toEqual([]);
+});
