@@ -2,6 +2,7 @@
 import { writeFileSync } from 'node:fs';
 import { cpus } from 'node:os';
 import { parseArgs } from 'node:util';
+import { timeBrowser } from './browser';
 import { timeFlashes } from './flash';
 import { timeModels } from './models';
 
@@ -11,6 +12,7 @@ const now = (): number => performance.now();
 const BENCHES: Readonly<Record<string, () => Promise<readonly object[]>>> = {
   models: async () => timeModels(now),
   flash: () => timeFlashes(now),
+  browser: timeBrowser,
 };
 
 const { values } = parseArgs({ options: { what: { type: 'string' }, json: { type: 'string' } } });
