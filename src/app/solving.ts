@@ -63,7 +63,9 @@ export function startSolving(stores: Stores): SolverClient {
     }
     const { basis, problem, gaps, notes, assumptions } = compile(sketch, data, edit);
     stores.compiled.setState({ edit, basis: basis ?? null, problem, gaps, notes, assumptions, loading: [] });
-    if (problem === sent) {
+    // Results may have been cleared (another file, a model that cannot be solved) while the worker remembers handing them out.
+    const blank = problem.units.length > 0 && stores.results.getState().units.size === 0;
+    if (problem === sent && !blank) {
       answered(edit);
       return;
     }
@@ -75,7 +77,7 @@ export function startSolving(stores: Stores): SolverClient {
     }
     sent = problem;
     started.set(problem.edit, performance.now());
-    client.solve(basis, problem, 'warm');
+    client.solve(basis, problem, 'warm', blank);
   };
 
   stores.sketch.subscribe((state, before) => {

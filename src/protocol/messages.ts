@@ -7,12 +7,16 @@ export type Question = { readonly ask: 'prewarm' };
 /** Page to worker. One job in flight, one waiting; the latest wins. */
 export type ToWorker =
   | { readonly say: 'basis'; readonly basis: Basis }
-  /** `announce`: say 'at' before every unit; asked for after a silence, so that a second one names the unit. */
+  /**
+   * `announce`: say 'at' before every unit; asked for after a silence, so that a second one names the unit.
+   * `blank`: the page holds no results, so everything is handed out, changed or not.
+   */
   | {
       readonly say: 'solve';
       readonly problem: Problem;
       readonly from: 'warm' | 'nothing';
       readonly announce?: true;
+      readonly blank?: true;
     }
   | { readonly say: 'question'; readonly job: number; readonly about: Question }
   | { readonly say: 'drop'; readonly job: number };

@@ -19,8 +19,11 @@ export interface SolverHandlers {
 }
 
 export interface SolverClient {
-  /** Sends the problem; anything older still waiting is dropped by the worker. */
-  solve(basis: Basis, problem: Problem, from: 'warm' | 'nothing'): void;
+  /**
+   * Sends the problem; anything older still waiting is dropped by the worker.
+   * `blank`: no results are held any more, so everything is handed out, changed or not.
+   */
+  solve(basis: Basis, problem: Problem, from: 'warm' | 'nothing', blank?: boolean): void;
   ask(job: number, about: Extract<ToWorker, { say: 'question' }>['about']): void;
   close(): void;
 }
@@ -99,7 +102,7 @@ export function connectSolver(make: () => WorkerLike, handlers: SolverHandlers):
     return fresh;
   };
 
-  const send = (announce = false): void => {
+  const send = (announce = false, blank = false): void => {
     if (!pending) return;
     worker ??= start();
     if (basisSent !== pending.basis.id) {
@@ -111,16 +114,17 @@ export function connectSolver(make: () => WorkerLike, handlers: SolverHandlers):
       problem: pending.problem,
       from: pending.from,
       ...(announce ? { announce } : {}),
+      ...(blank ? { blank } : {}),
     });
     watch();
   };
 
   return {
-    solve(basis, problem, from) {
+    solve(basis, problem, from, blank = false) {
       if (pending?.problem.edit !== problem.edit) restarts = 0;
       pending = { basis, problem, from };
       where = null;
-      send();
+      send(false, blank);
     },
     ask(job, about) {
       worker ??= start();

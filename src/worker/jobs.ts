@@ -63,9 +63,13 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
     return made;
   }
 
-  async function runSolve({ problem, from, announce }: SolveOrder): Promise<void> {
+  async function runSolve({ problem, from, announce, blank }: SolveOrder): Promise<void> {
     const { edit } = problem;
     const clean = from === 'nothing' ? ({ from } as const) : {};
+    if (blank) {
+      posted.streams.clear();
+      posted.units.clear();
+    }
     try {
       const memory = memoryOf(problem.basis);
       const batch = await drive(solveNetwork(problem, memory, { from, kinds }), {
@@ -120,7 +124,8 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
         for (const old of [...bases.keys()].slice(0, -KEPT_BASES)) bases.delete(old);
         return;
       case 'solve':
-        waiting = data;
+        // What the page lacks it still lacks when a newer order takes the place of the one that said so.
+        waiting = waiting?.blank ? { ...data, blank: true } : data;
         void work();
         return;
       case 'question':

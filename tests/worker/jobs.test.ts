@@ -146,6 +146,21 @@ describe('the solver behind a port', () => {
     expect([third.streams, third.units, third.gone]).toEqual([[], [], []]);
   });
 
+  test('hands everything out again to a page that holds nothing, also when another order overtakes the one that said so', async () => {
+    const page = open();
+    page.say({ say: 'basis', basis });
+    page.say({ say: 'solve', problem: edit(1, letDown(7e5)), from: 'warm' });
+    await page.last(1);
+    page.say({ say: 'solve', problem: edit(2, letDown(7e5)), from: 'warm', blank: true });
+    page.say({ say: 'solve', problem: edit(3, letDown(7e5)), from: 'warm' });
+    const last = await page.last(3);
+    const handed = page.heard.flatMap((m) =>
+      m.say === 'results' && m.edit > 1 ? m.streams.map(([id]) => id) : [],
+    );
+    expect([...new Set(handed)].sort()).toEqual(['1', '2', '3', '4']);
+    expect(last.closure!.complete).toBe(true);
+  });
+
   test('lets the latest win: what lies between is never solved, and its answer is that of a fresh solve', async () => {
     const clock = new Clock();
     const page = open({ kinds: kindsWith(clock, 3), now: clock.now });
