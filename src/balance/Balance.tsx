@@ -2,6 +2,7 @@ import { useMemo, useState, useSyncExternalStore } from 'react';
 import { Choice } from '../parts/Choice';
 import { useMeasures } from '../parts/measures';
 import { displayUnit, formatDecimals, formatDifference, formatSignificant } from '../quantity';
+import type { SketchStream, SketchUnit } from '../sketch/types';
 import { describeStream } from '../store/commands';
 import { useKinds } from '../store/kinds';
 import { useCompiled, useResults, useSession, useSketch, useStores } from '../store/react';
@@ -21,6 +22,12 @@ const onResize = (then: () => void): (() => void) => {
   return () => window.removeEventListener('resize', then);
 };
 const useSmallScreen = (): boolean => useSyncExternalStore(onResize, () => window.innerWidth <= 1100);
+
+/** A feed or product by its own name, else the stream by where it comes from. */
+function nameAt(units: readonly SketchUnit[], stream: SketchStream, end: 'from' | 'to'): string {
+  const unit = units.find(({ id }) => id === stream[end]?.[0]);
+  return stream.name?.trim() || unit?.name?.trim() || describeStream({ units }, stream);
+}
 
 /** What goes in and what comes out as two bars that must end at the same line. */
 export function Balance() {
@@ -49,7 +56,7 @@ export function Balance() {
         results: { streams: streamResults, units: unitResults },
         data,
         basis,
-        describe: (stream) => describeStream({ units }, stream),
+        describe: (stream, end) => nameAt(units, stream, end),
       }),
     [units, streams, kinds, streamResults, unitResults, data, key],
   );
@@ -92,7 +99,11 @@ export function Balance() {
     </div>
   );
   const total = (side: typeof sides.in) =>
-    sides.empty ? null : side.unknown.length > 0 ? <span className="muted">open</span> : number(side.total);
+    sides.empty ? null : side.unknown.length > 0 || side.segments.some((s) => s.outOfDate) ? (
+      <span className="muted">open</span>
+    ) : (
+      number(side.total)
+    );
 
   return (
     <section
@@ -135,7 +146,7 @@ export function Balance() {
               <span>
                 out <b className={isClosed ? 'closed' : ''}>{total(sides.out)}</b>
               </span>
-              {known ? (
+              {known && !isOld ? (
                 <span>
                   <span className="muted">difference</span> {formatDifference(toDisplay(missing))}
                 </span>

@@ -66,7 +66,13 @@ function Piece({ segment, width, figure, unit }: PieceProps) {
   const { session } = useStores();
   const { stream, unit: id, number, name, what, turned, outOfDate } = segment;
   const chosen = useSession((state) => stream !== undefined && state.streams.includes(stream));
-  const classes = ['piece', what, turned ? 'hatched' : '', outOfDate ? 'older' : '', chosen ? 'chosen' : ''];
+  const classes = [
+    'piece',
+    `of-${what}`,
+    turned ? 'hatched' : '',
+    outOfDate ? 'older' : '',
+    chosen ? 'chosen' : '',
+  ];
   return (
     <li className={classes.filter(Boolean).join(' ')} style={{ width }}>
       <button
@@ -74,8 +80,8 @@ function Piece({ segment, width, figure, unit }: PieceProps) {
         title={`${name}: ${figure} ${unit}${turned ? ', negative: counted on the other side' : ''}`}
         onClick={() => (stream ? session.select([], [stream]) : id && session.select([id]))}
       >
-        {number === undefined ? null : <Diamond number={number} chosen={chosen} size={18} />}
-        <span className="name">{name}</span>
+        {number === undefined ? null : <Diamond number={number} chosen={chosen} size={20} />}
+        <span className="piece-name">{name}</span>
         <b className="figure">{figure}</b>
       </button>
     </li>

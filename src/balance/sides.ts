@@ -41,7 +41,7 @@ export interface SidesInput {
   readonly results: Pick<ResultsState, 'streams' | 'units'>;
   readonly data: Basis | null;
   readonly basis: BalanceBasis;
-  readonly describe: (stream: SketchStream) => string;
+  readonly describe: (stream: SketchStream, end: 'from' | 'to') => string;
 }
 
 type Draft = Omit<Segment, 'value' | 'turned'> & { readonly amount: number };
@@ -68,12 +68,13 @@ export function sidesOf({ sketch, kinds, results, data, basis, describe }: Sides
 
   const drafts = (
     streams: readonly SketchStream[],
+    end: 'from' | 'to',
   ): { readonly known: Draft[]; readonly unknown: string[] } => {
     const known: Draft[] = [];
     const unknown: string[] = [];
     for (const stream of streams) {
       const shown = shownStream(results.streams.get(stream.id));
-      const name = describe(stream);
+      const name = describe(stream, end);
       if (!shown) unknown.push(name || `stream ${stream.number}`);
       else
         known.push({
@@ -88,8 +89,8 @@ export function sidesOf({ sketch, kinds, results, data, basis, describe }: Sides
     }
     return { known, unknown };
   };
-  const ins = drafts(entering);
-  const outs = drafts(leaving);
+  const ins = drafts(entering, 'from');
+  const outs = drafts(leaving, 'to');
   for (const { unit, result, outOfDate } of units) {
     const shared = { unit: unit.id, outOfDate };
     if (basis.is === 'energy') {

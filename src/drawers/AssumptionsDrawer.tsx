@@ -54,7 +54,7 @@ function Row({ assumption, tag, kind }: RowProps) {
   };
   return (
     <li data-assumption={assumption.no} data-path={assumption.path}>
-      <span className="no">{assumption.no}</span>
+      <span className="entry-no">{assumption.no}</span>
       <div>
         <p>
           {tag ? <b>{tag} </b> : null}

@@ -1,4 +1,3 @@
-import { useEffect, useRef } from 'react';
 import { useSession, useSketch, useStores } from '../store/react';
 import type { DrawerChoice } from '../store/session';
 import { AssumptionsDrawer } from './AssumptionsDrawer';
@@ -31,20 +30,14 @@ export function DrawerHost() {
     return drawer !== null;
   });
   const width = useDrawerWidth();
-  const scroller = useRef<HTMLDivElement>(null);
   const key = drawer ? `${drawer.is} ${'id' in drawer ? drawer.id : ''}` : '';
-  // biome-ignore lint/correctness/useExhaustiveDependencies: another drawer begins at its top
-  useEffect(() => {
-    if (scroller.current) scroller.current.scrollTop = 0;
-  }, [key]);
   if (!drawer || !isThere) return null;
   return (
     <aside className="drawer" aria-label={NAMES[drawer.is]} style={{ width: width.px }}>
       <Splitter width={width} />
       {/* biome-ignore lint/a11y/noStaticElementInteractions: Esc leaves the drawer from any of its fields */}
       <div
-        className="drawer-scroll"
-        ref={scroller}
+        className="drawer-inner"
         onKeyDown={(event) => {
           if (event.key === 'Escape' && !event.defaultPrevented) session.openDrawer(null);
         }}

@@ -41,10 +41,10 @@ export function LimitRuler({ value, limit, unit, weight }: RulerData & { readonl
       role="img"
       aria-label={`${text(value)} against a limit of ${text(limit)} ${unit}`}
     >
-      <path d={`M${LEFT} 10H${RIGHT}`} className="line" />
+      <path d={`M${LEFT} 10H${RIGHT}`} className="axis" />
       {x.ticks(5).map((tick) => (
         <g key={tick}>
-          <path d={`M${x(tick)} 7V13`} className="line" />
+          <path d={`M${x(tick)} 7V13`} className="axis" />
           <text x={x(tick)} y={26} textAnchor="middle">
             {text(tick)}
           </text>
@@ -55,7 +55,7 @@ export function LimitRuler({ value, limit, unit, weight }: RulerData & { readonl
       </text>
       <path d={`M${x(from)} 10H${x(value)}`} className="upto" />
       <path d={`M${x(limit)} 2V18`} className={weight === 'beyond-limit' ? 'tick' : 'tick soft'} />
-      <circle cx={x(value)} cy={10} r={4.5} className={`dot ${weight}`} />
+      <circle cx={x(value)} cy={10} r={4.5} className={`spot ${weight}`} />
     </svg>
   );
 }

@@ -15,8 +15,8 @@ export function Bars({ filled, outlined, full }: BarsProps) {
   const width = (x: number): string => `${length(Math.max(0, x)).toFixed(2)}%`;
   return (
     <span className={outlined === undefined ? 'bars' : 'bars two'} aria-hidden="true">
-      {outlined === undefined ? null : <i className="outlined" style={{ width: width(outlined) }} />}
-      {filled === undefined ? null : <i className="filled" style={{ width: width(filled) }} />}
+      {!outlined ? null : <i className="outlined" style={{ width: width(outlined) }} />}
+      {!filled ? null : <i className="filled" style={{ width: width(filled) }} />}
     </span>
   );
 }

@@ -11,7 +11,7 @@ export function Diamond({
   const h = size / 2;
   return (
     <svg
-      className={chosen ? 'diamond chosen' : 'diamond'}
+      className={chosen ? 'stream-diamond chosen' : 'stream-diamond'}
       width={size}
       height={size}
       viewBox={`0 0 ${size} ${size}`}
@@ -22,7 +22,7 @@ export function Diamond({
         x={h}
         y={h + size * 0.165}
         textAnchor="middle"
-        fontSize={number.length > 2 ? size * 0.36 : size * 0.46}
+        fontSize={number.length > 2 ? size * 0.38 : Math.max(10, size * 0.46)}
       >
         {number}
       </text>

@@ -13,7 +13,7 @@ export function NumberCell({ text, unit }: NumberCellProps) {
     <span className="number-cell">
       <span className="whole">{whole}</span>
       <span className="rest">{rest}</span>
-      {unit === undefined ? null : <span className="unit">{unit}</span>}
+      {unit === undefined ? null : <span className="uom">{unit}</span>}
     </span>
   );
 }

@@ -1,5 +1,13 @@
 import { useId, useRef, useState } from 'react';
-import { type Dimension, parseQuantity, type Refusal, type Site, stepSize, unitLabel } from '../quantity';
+import {
+  type Dimension,
+  parseQuantity,
+  type Refusal,
+  type Site,
+  stepSize,
+  suggestedUnits,
+  unitLabel,
+} from '../quantity';
 import type { Quantity } from '../sketch/types';
 import type { FieldEdit } from './fieldEdit';
 import { type RangeRefusal, RefusalNote } from './RefusalNote';
@@ -28,6 +36,8 @@ export interface QuantityFieldProps {
   readonly basis?: React.ReactNode;
   /** A bare number takes this unit; it stands in the field while typing. */
   readonly unitKept?: string;
+  /** What stood here last, offered while a needed value is missing. */
+  readonly formerly?: Quantity | undefined;
   readonly disabled?: boolean;
   readonly describedBy?: string | undefined;
   readonly autoFocus?: boolean;
@@ -162,28 +172,33 @@ export function QuantityField(props: QuantityFieldProps) {
         {shownAside ? (
           <span className="shown" aria-hidden="true">
             <span
-              className="number"
+              className="digits"
               data-slides={disabled ? undefined : true}
               title={disabled ? undefined : 'Drag sideways to slide, click to type'}
               {...(disabled ? {} : slide.pointer(focusNumber))}
             >
               {number}
             </span>
-            <span className="unit">{unit}</span>
+            <span className="uom">{unit}</span>
           </span>
         ) : null}
         {blank && !focused ? (
           <span className="shown placeholder" aria-hidden="true">
             {assumed ? (
               <>
-                <span className="number">{assumedNumber}</span>
-                <span className="unit">{assumedUnit}</span>
+                <span className="digits">{assumedNumber}</span>
+                <span className="uom">{assumedUnit}</span>
               </>
             ) : needed ? (
               <span className="blank-mark">needs a value</span>
             ) : (
-              <span className="unit">{props.empty ?? ''}</span>
+              <span className="uom">{props.empty ?? ''}</span>
             )}
+          </span>
+        ) : null}
+        {focused && needed && (draft ?? typed).trim() === '' ? (
+          <span className="kept" aria-hidden="true">
+            needs a value
           </span>
         ) : null}
         {focused && props.unitKept && BARE.test(draft ?? '') ? (
@@ -193,6 +208,21 @@ export function QuantityField(props: QuantityFieldProps) {
         ) : null}
         {props.basis ? <span className="basis">{props.basis}</span> : null}
       </div>
+      {focused && needed && (draft ?? typed).trim() === '' ? (
+        <p className="hint">
+          {suggestedUnits(dims).slice(0, 4).join(', ')} or another unit
+          {props.formerly === undefined ? null : (
+            <button
+              type="button"
+              className="link"
+              onPointerDown={(event) => event.preventDefault()}
+              onClick={() => edit.set(props.formerly)}
+            >
+              Back to {String(props.formerly)}
+            </button>
+          )}
+        </p>
+      ) : null}
       {slide.state ? <SlideRuler state={slide.state} step={stepSize(slide.state.from) ?? 1} /> : null}
       {refusal ? (
         <RefusalNote

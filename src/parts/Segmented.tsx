@@ -6,6 +6,8 @@ export interface SegmentedProps<T extends string> {
   readonly value: T | undefined;
   readonly onChange: (value: T) => void;
   readonly path?: string;
+  /** What counts while nothing is chosen. */
+  readonly assumed?: T;
   readonly disabled?: boolean;
 }
 
@@ -15,7 +17,11 @@ export function Segmented<T extends string>(props: SegmentedProps<T>) {
   return (
     <div className="segmented" role="radiogroup" aria-label={props.label} data-field={props.path}>
       {props.options.map(({ value, text, title }) => (
-        <label key={value} title={title}>
+        <label
+          key={value}
+          title={title}
+          className={props.value === undefined && value === props.assumed ? 'assumed-option' : undefined}
+        >
           <input
             type="radio"
             name={name}

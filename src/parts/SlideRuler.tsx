@@ -23,10 +23,10 @@ export function SlideRuler({ state, step }: { readonly state: SlideState; readon
       {x.ticks(40).map((tick) => (
         <path key={tick} d={`M${x(tick)} 4V8`} className="fine" />
       ))}
-      <path d={`M${PAD} 8H${W - PAD}`} className="line" />
+      <path d={`M${PAD} 8H${W - PAD}`} className="axis" />
       {x.ticks(5).map((tick) => (
         <g key={tick}>
-          <path d={`M${x(tick)} 2V8`} className="line" />
+          <path d={`M${x(tick)} 2V8`} className="axis" />
           <text x={x(tick)} y={21} textAnchor="middle">
             {label(tick)}
           </text>

@@ -128,10 +128,10 @@ function Option<T extends string>({ label, assumed, ...rest }: OptionProps<T>) {
     <div className="setting">
       <div className="setting-label">{label}</div>
       <div className={isOpen ? 'setting-control assumed' : 'setting-control'}>
-        <Segmented {...rest} label={label} />
+        <Segmented {...rest} label={label} assumed={assumed} />
         {isOpen ? (
           <p className="field-note">
-            {rest.options.find(({ value }) => value === assumed)?.text} is assumed; choosing makes it yours.
+            Not chosen: {rest.options.find(({ value }) => value === assumed)?.text} is assumed.
           </p>
         ) : null}
       </div>

@@ -37,14 +37,14 @@ export function Conditions({ stream, outOfDate }: Props) {
         {row('Molar flow', stream.n_mol_s, 'molarFlow')}
         {row('Mass flow', stream.m_kg_s, 'massFlow')}
         {row('Volume flow, actual', stream.volume_m3_s, 'volumeFlow')}
-        {row('As gas at reference state', stream.n_mol_s, 'molarFlow', {
+        {row('As gas, reference state', stream.n_mol_s, 'molarFlow', {
           as: gas,
           title:
             measures.set === 'US'
               ? 'Ideal gas at 60 °F and 14.696 psi(a)'
               : 'Ideal gas at 0 °C and 101 325 Pa(a)',
         })}
-        {row('As liquid at 15 °C', stream.standardLiquid_m3_s, 'volumeFlow', {
+        {row('As liquid, 15 °C', stream.standardLiquid_m3_s, 'volumeFlow', {
           title:
             stream.standardLiquid_m3_s === undefined
               ? 'A chemical here has no liquid at 15 °C'

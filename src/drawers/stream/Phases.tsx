@@ -61,7 +61,7 @@ export function Phases({ stream, outOfDate }: Props) {
             {phases.map((phase) => (
               <td key={phase.kind}>{formatSignificant(phase.fraction * 100, 4)}</td>
             ))}
-            <td className="unit">mol %</td>
+            <td className="uom">mol %</td>
           </tr>
           {ROWS.filter(({ of }) => phases.some((phase) => of(phase) !== undefined)).map(
             ({ label, dim, of }) => (
@@ -72,7 +72,7 @@ export function Phases({ stream, outOfDate }: Props) {
                     {of(phase) === undefined ? ABSENT : show(of(phase), dim, measures).number}
                   </td>
                 ))}
-                <td className="unit">{displayUnit(dim, measures).label}</td>
+                <td className="uom">{displayUnit(dim, measures).label}</td>
               </tr>
             ),
           )}

@@ -209,7 +209,7 @@ function Grid({ path, mode, isNew, word, done }: GridProps) {
               <th scope="row">Sum</th>
               <td>
                 <span className={Math.abs(off) > 5e-4 ? 'sum off' : 'sum'} data-field={`${path}.sum`}>
-                  {formatDecimals(sum * 100, 3)} <span className="unit">%</span>
+                  {formatDecimals(sum * 100, 3)} <span className="uom">%</span>
                 </span>
               </td>
             </tr>

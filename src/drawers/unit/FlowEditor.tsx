@@ -46,9 +46,12 @@ export function FlowEditor({ path, word, beside, share, ...rest }: Props) {
   const readable = streams.filter((stream) => stream.from?.[0] !== form.unit.id);
   const hasInlets = form.kind.ports.some((port) => port.dir === 'in');
   const options = [
-    { value: AS_TYPED, text: share ? 'flow or share' : 'flow' },
-    ...(hasInlets ? [{ value: ALL_FEEDS, text: 'of all its feeds' }] : []),
-    ...readable.map((stream) => ({ value: stream.id as string, text: `of stream ${stream.number}` })),
+    { value: AS_TYPED, text: 'given as a flow' },
+    ...(hasInlets ? [{ value: ALL_FEEDS, text: 'given as a share of all its feeds' }] : []),
+    ...readable.map((stream) => ({
+      value: stream.id as string,
+      text: `given as a share of stream ${stream.number}`,
+    })),
   ];
   const ofJson = (key: string): Json => (key === ALL_FEEDS ? 'feed' : { stream: key });
   const choose = (next: string): void => {
@@ -64,6 +67,7 @@ export function FlowEditor({ path, word, beside, share, ...rest }: Props) {
   };
   const which = (
     <Choice
+      asLabel
       label={`${label}: what it counts from`}
       value={of}
       options={options}

@@ -62,10 +62,26 @@ export function OneOf({ base, of, count, pairs = [], optional, spec }: Props) {
     if (key === '' && offered.length === 0) return null;
     // The second of a pair is offered only beside a first that has partners.
     if (row > 0 && pairs.length > 0 && kept.keys[0] === '') return null;
+    if (key === '' && row > 0)
+      return (
+        <p className="setting-more" key="more">
+          {offered.map((other) => (
+            <button
+              key={other}
+              type="button"
+              className="link quiet"
+              disabled={form.disabled}
+              onClick={() => pick(row, other)}
+            >
+              and {wordOf(other)}
+            </button>
+          ))}
+        </p>
+      );
     const path = joined(base, key);
     const isAssumed = given.length === 0 && key !== '' && key === assumed?.key;
     const replaced = kept.replaces[row];
-    const emptyText = row === 0 ? `no ${groupWord} given` : 'nothing more';
+    const emptyText = row === 0 ? `${capital(groupWord)}: none` : 'Nothing more';
     const rowName = row === 0 ? capital(groupWord) : `${capital(groupWord)}, second`;
     return (
       <SettingRow

@@ -1,10 +1,12 @@
+import type { UnitId } from '../../engine/ids';
 import type { SettingSpec } from '../../engine/units/types';
 import { Choice } from '../../parts/Choice';
 import { QuantityField } from '../../parts/QuantityField';
 import { Segmented } from '../../parts/Segmented';
+import type { Quantity } from '../../sketch/types';
 import { useSketch } from '../../store/react';
 import { useChemicals } from '../chemicalNames';
-import type { SettingChange } from '../edits';
+import { type SettingChange, valueAt } from '../edits';
 import { capital, optionWord, portWord } from '../words';
 import { FlowEditor } from './FlowEditor';
 import { useForm } from './form';
@@ -35,6 +37,7 @@ export function SettingControl({ spec, path, word, beside = [], ...rest }: Contr
   const label = capital(word);
   const shared = { ...rest, label, path, site: form.site, disabled: form.disabled };
   const value = form.value(path);
+  const formerly = useFormer(form.unit.id, path, spec.is === 'quantity' && value === undefined);
   switch (spec.is) {
     case 'quantity':
       return (
@@ -45,6 +48,7 @@ export function SettingControl({ spec, path, word, beside = [], ...rest }: Contr
           min={spec.min}
           max={spec.max}
           edit={form.edit(path, word, beside)}
+          formerly={formerly}
         />
       );
     case 'flow':
@@ -89,19 +93,34 @@ export function SettingControl({ spec, path, word, beside = [], ...rest }: Contr
   }
 }
 
+/** What stood at a path before it was cleared, by the history of this sketch. */
+function useFormer(id: UnitId, path: string, isMissing: boolean): Quantity | undefined {
+  return useSketch((state) => {
+    if (!isMissing) return undefined;
+    for (let k = state.past.length - 1; k >= 0; k -= 1) {
+      const unit = state.past[k]?.before.units.find((u) => u.id === id);
+      const value = quantityOf(valueAt(unit?.settings, path));
+      if (value !== undefined) return value;
+    }
+    return undefined;
+  });
+}
+
 interface OptionsProps {
   readonly path: string;
   readonly word: string;
   readonly beside: readonly SettingChange[];
   readonly optional: boolean;
   readonly assumed?: string;
+  /** Always a list: names that come and go. */
+  readonly asList?: true;
   readonly options: readonly { readonly value: string; readonly text: string }[];
 }
 
 const NOT_SAID = '';
 
 /** Few short ones side by side, many in a list; what may be left unsaid can be left again. */
-function Options({ path, word, beside, optional, assumed, options }: OptionsProps) {
+function Options({ path, word, beside, optional, assumed, asList, options }: OptionsProps) {
   const form = useForm();
   const given = form.value(path);
   const value = typeof given === 'string' ? given : NOT_SAID;
@@ -116,14 +135,15 @@ function Options({ path, word, beside, optional, assumed, options }: OptionsProp
     );
   const shared = { label: capital(word), path, value, disabled: form.disabled, onChange: choose };
   const letters = options.reduce((sum, option) => sum + option.text.length + 2, 0);
-  if (!optional && options.length <= 4 && letters <= 34) return <Segmented {...shared} options={options} />;
+  if (!asList && !optional && options.length <= 4 && letters <= 34)
+    return <Segmented {...shared} options={options} />;
   const withUnsaid = optional || value === NOT_SAID ? [unsaid, ...options] : options;
   return <Choice {...shared} options={withUnsaid} />;
 }
 
 function ChemicalOptions(props: Omit<OptionsProps, 'options'>) {
   const chemicals = useChemicals();
-  return <Options {...props} options={chemicals.map(({ id, name }) => ({ value: id, text: name }))} />;
+  return <Options {...props} asList options={chemicals.map(({ id, name }) => ({ value: id, text: name }))} />;
 }
 
 function ProductOptions(props: Omit<OptionsProps, 'options'>) {
@@ -134,5 +154,5 @@ function ProductOptions(props: Omit<OptionsProps, 'options'>) {
       ? [{ value: from[1], text: `${portWord(form.kind.kind, from[1])}, stream ${number}` }]
       : [],
   );
-  return <Options {...props} options={options} />;
+  return <Options {...props} asList options={options} />;
 }

@@ -36,14 +36,14 @@ export function UnitDrawer({ id }: { readonly id: UnitId }) {
   const reasons = entry?.latest.state === 'no-solution' ? (entry.latest.reasons ?? []) : [];
   const findings = useMemo(() => {
     const seen = new Set<string>();
-    const all = [...here, ...notes, ...found, ...(entry?.latest.reasons ?? [])];
+    const all = [...here, ...notes, ...found];
     return all.filter((finding) => {
       const key = `${finding.code} ${finding.at.path} ${finding.at.port}`;
       if (finding.at.unit !== id || seen.has(key)) return false;
       seen.add(key);
       return true;
     });
-  }, [here, notes, found, entry, id]);
+  }, [here, notes, found, id]);
 
   if (!unit) return null;
   const head = (
@@ -62,7 +62,7 @@ export function UnitDrawer({ id }: { readonly id: UnitId }) {
     { unit, kind, site, disabled: !writable, findings, assumptions, Editor: SettingEditor },
     stores.sketch,
   );
-  const general = findings.filter((f) => f.at.path === undefined && !reasons.includes(f));
+  const general = findings.filter((f) => f.at.path === undefined);
   return (
     <FormProvider value={form}>
       {head}

@@ -11,6 +11,7 @@ export function stateSentence(
   say: (finding: Finding) => Said,
 ): string {
   const [gap] = gaps;
+  const [reason] = entry?.latest.reasons ?? [];
   if (gap) return say(gap).sentence;
   switch (drawnState(entry)) {
     case 'solved': {
@@ -18,15 +19,16 @@ export function stateSentence(
       if (!iterations) return 'Solved.';
       return `Solved, ${iterations} iterations${residual ? `, residual ${formatSignificant(residual, 2)}` : ''}.`;
     }
-    case 'needs-value': {
-      const [reason] = entry?.latest.reasons ?? [];
+    case 'needs-value':
       return reason ? say(reason).sentence : 'Needs a value.';
-    }
     case 'no-solution':
       return 'No solution; no result is shown.';
     case 'out-of-date':
-      return 'Out of date: an older result is shown until what is upstream has an answer.';
+      return reason
+        ? `Out of date. ${say(reason).sentence}`
+        : 'Out of date: shown until there is a new answer.';
     case 'waiting':
+      if (reason) return say(reason).sentence;
       return entry ? 'Waiting for what is upstream.' : 'Not solved yet.';
   }
 }

@@ -1,0 +1,89 @@
+// @vitest-environment jsdom
+import { act, fireEvent, screen } from '@testing-library/react';
+import { describe, expect, test } from 'vitest';
+import { Balance } from '../../src/balance/Balance';
+import type { Closure, ClosureEntry, StreamResult } from '../../src/engine/network/types';
+import { letDown, makePage, type Page, show, solvedStream, streamId, unitId } from '../drawers/page';
+
+const even: ClosureEntry = { in: 2, out: 2, made: 0, relative: 0 };
+const closure: Closure = {
+  mass: even,
+  energy: even,
+  chemicals: [],
+  elements: { C: even },
+  complete: true,
+  byUnit: {},
+};
+
+function open(streams: readonly (readonly [string, StreamResult])[], whole: Closure | undefined): Page {
+  const page = makePage({
+    ...letDown,
+    units: [letDown.units[0], { id: 'u4', tag: 'PROD-1', name: 'Condensate', kind: 'product', settings: {} }],
+    streams: [{ id: 's1', number: '1', from: ['u1', 'out'], to: ['u4', 'in'] }],
+  });
+  page.stores.results.take(
+    1,
+    true,
+    {
+      streams: streams.map(([id, result]) => [streamId(id), result]),
+      units: [],
+      gone: [],
+      findings: [],
+      ...(whole ? { closure: whole } : {}),
+    },
+    1,
+  );
+  window.innerWidth = 1440;
+  show(page, <Balance />);
+  return page;
+}
+const band = (): HTMLElement => screen.getByRole('region', { name: 'Balance' });
+
+describe('the balance', () => {
+  test('rules the total out twice only when it closes, and says what closure is not', () => {
+    open([['s1', solvedStream()]], closure);
+    expect(band().dataset.closed).toBe('yes');
+    expect(document.querySelector('.totals .closed')?.textContent).toBe('7\u2009200.0');
+    expect(screen.getByText('Closure shows arithmetic, not that the model is right.')).toBeTruthy();
+  });
+
+  test('names feeds and products and selects a stream on a click', () => {
+    const page = open([['s1', solvedStream()]], closure);
+    fireEvent.click(screen.getByRole('button', { name: /Condensate/ }));
+    expect(page.stores.session.getState().streams).toEqual(['s1']);
+  });
+
+  test('leaves the line open, with names and the cause, while something is not known', () => {
+    const page = open([['s1', { state: 'waiting' }]], undefined);
+    act(() =>
+      page.stores.compiled.setState({
+        gaps: [
+          {
+            code: 'sketch/needs-value',
+            weight: 'caution',
+            at: { unit: unitId('u1'), path: 'flow' },
+            evidence: [],
+          },
+        ],
+      }),
+    );
+    expect(band().dataset.closed).toBe('open');
+    expect(document.querySelector('.closed')).toBeNull();
+    expect(screen.getByText('not known: Condensate')).toBeTruthy();
+    expect(screen.getByText('FEED-1 needs a value.')).toBeTruthy();
+  });
+
+  test('folds to one line with the same totals', () => {
+    const page = open([['s1', solvedStream()]], closure);
+    fireEvent.click(screen.getByRole('button', { name: 'Fold' }));
+    expect(page.stores.session.getState().balanceFolded).toBe(true);
+    expect(document.querySelector('.one-line')?.textContent).toContain('out 7\u2009200.0');
+  });
+
+  test('shows where feeds and products will stand on an empty sheet', () => {
+    const page = makePage({ ...letDown, units: [], streams: [] });
+    show(page, <Balance />);
+    expect(screen.getByText('Feeds will stand here')).toBeTruthy();
+    expect(document.querySelector('.totals')?.textContent).toBe('');
+  });
+});
