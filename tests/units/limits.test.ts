@@ -211,6 +211,20 @@ describe('streams', () => {
     expect(found).toMatchObject([{ code: 'stream/second-liquid', weight: 'caution', at: { stream: 'a' } }]);
   });
 
+  test('water beyond what oil dissolves is named where the model mixes everything', async () => {
+    const ideal = await basisOf(['n-hexane', 'benzene', 'water', 'methanol'], 'raoult');
+    const at = (T: number, ...x: number[]) => codes(ideal, [feed({ T, P: 20e5 }, ...x)]);
+    const code = 'stream/water-above-solubility';
+    // From memory: about 100 ppm by mass of water in hexane at 25 degC is 0.048 mol %; in benzene 0.063 % is 0.27 mol %.
+    expect(at(298.15, 0.9994, 0, 0.0006, 0)).toContain(code);
+    expect(at(298.15, 0.9996, 0, 0.0004, 0)).not.toContain(code);
+    expect(at(298.15, 0, 0.998, 0.002, 0)).not.toContain(code);
+    expect(at(298.15, 0, 0.996, 0.004, 0)).toContain(code);
+    expect(at(373.15, 0.9994, 0, 0.0006, 0)).not.toContain(code);
+    expect(at(298.15, 0.5, 0, 0.01, 0.49)).not.toContain(code);
+    expect(at(298.15, 0.01, 0, 0.99, 0)).not.toContain(code);
+  });
+
   test('vapour and liquid that are nearly alike are named', () => {
     const at = (P: number) => codes(hydrocarbons, [feed({ P, vapourFraction: 0.5 }, 0, 1, 0, 1, 0, 0, 0)]);
     expect(at(10e5).filter((c) => c.includes('critical'))).toEqual([]);

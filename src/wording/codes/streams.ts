@@ -7,6 +7,11 @@ export const STREAM_SENTENCES: Readonly<Record<string, Sentence>> = {
     says: 'The stability test finds another liquid, mostly {chemical}. The numbers are for one liquid.',
     next: 'Do not rely on the liquid figures of this stream; a model for two liquids is needed.',
   },
+  'stream/water-above-solubility': {
+    title: 'Water may part from the liquid',
+    says: 'The hydrocarbon liquid holds {fraction%} water; at {temperature} it dissolves about {dissolves%}. The numbers are for one liquid.',
+    next: 'Take the water out ahead of this stream, or use a model for two liquids.',
+  },
   'stream/may-freeze': {
     title: 'A component may freeze',
     says: 'At {temperature} the liquid holds {fraction%} {chemical}, which alone freezes at {meltingPoint}.',

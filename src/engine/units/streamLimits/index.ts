@@ -4,11 +4,13 @@ import { CONDITION_RULES, coldSteel, hydrates, nearCritical, secondLiquid, vacuu
 import type { StreamContext } from './context';
 import { CORRELATION_RULES, correlationRange } from './correlationRange';
 import { FLAMMABLE_RULES, flammable } from './flammable';
+import { FREE_WATER_RULES, freeWater } from './freeWater';
 import { FREEZING_RULES, freezing } from './freezing';
 
 /** Codes any stream may carry, whatever unit it leaves. */
 export const STREAM_FINDINGS = [
   'stream/second-liquid',
+  'stream/water-above-solubility',
   'stream/may-freeze',
   'stream/freezes-mostly',
   'stream/ice',
@@ -30,10 +32,12 @@ export const STREAM_RULES: readonly Rule[] = [
   ...CORRELATION_RULES,
   ...FLAMMABLE_RULES,
   ...FREEZING_RULES,
+  ...FREE_WATER_RULES,
 ];
 
 const CHECKS = [
   secondLiquid,
+  freeWater,
   freezing,
   coldSteel,
   vacuum,
