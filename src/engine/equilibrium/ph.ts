@@ -14,6 +14,7 @@ export type SearchEnd = 'solved' | 'no-convergence' | 'out-of-range' | 'between-
 /** Relative width of a temperature bracket below which enthalpy is taken to jump. */
 const JUMP = 1e-8;
 const PASSES = 80;
+const GOLDEN = 0.618;
 
 /**
  * Phases of z at given pressure and molar enthalpy or entropy. Both rise with temperature at constant pressure, so a
@@ -50,9 +51,13 @@ export function flashCaloric(
     iterations += w.iterations;
     start = 'nothing';
     if (!ok) {
-      // A state that does not settle (a critical point) is stepped round.
-      if (++missed > 5) return 'no-convergence';
-      T *= 1 + (missed % 2 === 0 ? -1 : 1) * 3e-4 * missed;
+      // A state that does not settle (at a critical point, or where three phases meet) is stepped round.
+      if (++missed > 8) {
+        const narrow = belowT > 0 && aboveT > 0 && high - low < 1e-6 * high;
+        return narrow && partOfEach(w, z, low, high, P, target, of) ? done(w, iterations) : 'no-convergence';
+      }
+      if (belowT > 0 && aboveT > 0) T = low + (high - low) * ((missed * GOLDEN) % 1);
+      else T *= 1 + (missed % 2 === 0 ? -1 : 1) * 3e-4 * missed;
       continue;
     }
     const miss = target - wholeOf(w, of);

@@ -206,6 +206,10 @@ export function newtonSplit(w: FlashWork, T: number, P: number, passes: number):
   w.iterations += 2;
   let err = differences(w);
   let gibbs = s[n]!;
+  // Near a critical point the differences may rise before they fall.
+  let loose = 6;
+  // Along a direction without upward curvature a shifted step is short: it may grow from step to step.
+  let boost = 1;
   for (let pass = 0; pass < passes; pass++) {
     if (err < EQUAL) {
       w.residual = err;
@@ -213,7 +217,7 @@ export function newtonSplit(w: FlashWork, T: number, P: number, passes: number):
     }
     fillHessian(w);
     for (let i = 0; i < n; i++) step[i] = -s[i]! * g[i]!;
-    choleskyShifted(hess, n, w.border);
+    boost = choleskyShifted(hess, n, w.border) > 0 ? Math.min(4 * boost, 1e4) : 1;
     choleskySolve(hess, n, step);
     for (let i = 0; i < n; i++) {
       step[i] = step[i]! * s[i]!;
@@ -222,16 +226,20 @@ export function newtonSplit(w: FlashWork, T: number, P: number, passes: number):
     }
     const V = vap.total;
     const L = liq.total;
-    let share = 1;
+    let share = boost;
     let kept = false;
-    for (let half = 0; half < 4; half++) {
+    for (let half = 0; half < (boost > 1 ? 10 : 4); half++) {
       share = moveFlows(w, share);
       evaluateBoth(w, T, P, 2);
       w.iterations += 2;
       const was = err;
       const now = differences(w);
       const flat = Math.abs(s[n]! - gibbs) < 1e-12 * (1 + Math.abs(gibbs));
-      if (now < Number.POSITIVE_INFINITY && ((flat && now < was) || (!flat && s[n]! < gibbs))) {
+      if (
+        now < Number.POSITIVE_INFINITY &&
+        ((flat && (now < was || (loose > 0 && now < 10 * was))) || (!flat && s[n]! < gibbs))
+      ) {
+        if (now >= was) loose--;
         err = now;
         gibbs = s[n]!;
         kept = true;
@@ -244,6 +252,7 @@ export function newtonSplit(w: FlashWork, T: number, P: number, passes: number):
       vap.total = V;
       liq.total = L;
       share *= 0.3;
+      boost = 1;
     }
     if (!kept) {
       fractions(vap, n);
