@@ -29,7 +29,7 @@ import { StreamMarks } from './StreamMarks';
 import { createSheetStore, SheetProvider, useSheet, useSheetStore } from './sheetStore';
 import { TitleStrip } from './TitleStrip';
 import { UnitNode } from './UnitNode';
-import { createView } from './view';
+import { createView, type SheetView } from './view';
 
 const NODE_TYPES = { unit: UnitNode };
 const NO_EDGES: never[] = [];
@@ -85,17 +85,18 @@ function View() {
   useEffect(() => {
     const element = root.current?.querySelector('.sheet-flow');
     if (!element || typeof ResizeObserver === 'undefined') return;
-    const observer = new ResizeObserver(() =>
-      setSize({ width: element.clientWidth, height: element.clientHeight }),
-    );
+    const observer = new ResizeObserver(() => {
+      setSize({ width: element.clientWidth, height: element.clientHeight });
+      view.resized();
+    });
     observer.observe(element);
     return () => observer.disconnect();
-  }, []);
+  }, [view]);
 
   return (
     <section className="sheet-view" aria-label="Drawing" ref={root}>
       <div className="sheet-flow">
-        <Flow />
+        <Flow view={view} />
         <OfferMenu toScreen={view.toView} />
       </div>
       <div className="sheet-edge" />
@@ -106,7 +107,7 @@ function View() {
 }
 
 /** React Flow with the scene's units as its nodes. */
-function Flow() {
+function Flow({ view }: { readonly view: SheetView }) {
   const stores = useStores();
   const sheet = useSheetStore();
   const shapes = useSheet((state) => state.scene.units);
@@ -149,6 +150,9 @@ function Flow() {
         banding.current = false;
         const { units, streams } = stores.session.getState();
         if (units.length > 0) stores.session.select(units, streams);
+      }}
+      onMoveStart={(event) => {
+        if (event) view.handled();
       }}
       onPaneClick={() => stores.session.select([], [])}
       nodesDraggable={writable}

@@ -1,4 +1,4 @@
-import { dutyText, labelRows, type SolvedStream } from '../drawing/labelText';
+import { labelRows, linkText, type SolvedStream } from '../drawing/labelText';
 import type { DrawnState, LabelRow, SceneInput } from '../drawing/types';
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Weight } from '../engine/outcome';
@@ -45,11 +45,11 @@ export function createSceneInput() {
 
     const states = new Map<UnitId, DrawnState>();
     const duties = new Map<UnitId, string>();
-    for (const { id } of sketch.units) {
+    for (const { id, kind } of sketch.units) {
       const entry = results.units.get(id);
       states.set(id, drawnState(entry));
       const shown = entry?.latest.state === 'solved' ? entry.latest : entry?.older;
-      if (shown?.heat_W !== undefined) duties.set(id, dutyText(shown.heat_W, measures));
+      if (shown?.heat_W !== undefined) duties.set(id, linkText(kind, shown, measures));
     }
     return { states, limits: worstByUnit(results), labels, duties, ...(moved ? { moved } : {}) };
   };

@@ -9,6 +9,14 @@ const LEAST_ZOOM = 0.25;
 /** What is shown stands at least this far from the edges of the view [px]. */
 const WELL_IN = 88;
 
+export interface SheetView extends SheetHandle {
+  readonly toView: (at: Point) => { readonly x: number; readonly y: number };
+  /** The view has another size: a drawing that was shown whole is shown whole again. */
+  readonly resized: () => void;
+  /** Somebody moved or zoomed the view by hand: it stays as it is from now on. */
+  readonly handled: () => void;
+}
+
 interface Root {
   readonly current: HTMLElement | null;
 }
@@ -19,11 +27,14 @@ export function createView(
   flow: ReactFlowInstance,
   flowStore: ReturnType<typeof useStoreApi>,
   root: Root,
-): SheetHandle & { readonly toView: (at: Point) => { readonly x: number; readonly y: number } } {
+): SheetView {
+  // The element knows a new size before React Flow has measured it.
   const size = (): Point => {
     const { width, height } = flowStore.getState();
-    return [width, height];
+    const area = root.current?.querySelector('.sheet-flow');
+    return [area?.clientWidth || width, area?.clientHeight || height];
   };
+  let isFitted = false;
   const put = (middle: Point, zoom: number): void => {
     const [w, h] = size();
     void flow.setViewport({ x: w / 2 - middle[0] * zoom, y: h / 2 - middle[1] * zoom, zoom });
@@ -43,14 +54,27 @@ export function createView(
     toView,
     middle,
     zoom: () => flow.getZoom(),
-    zoomBy: (factor) => put(middle(), Math.min(3, Math.max(LEAST_ZOOM, flow.getZoom() * factor))),
-    zoomTo: (zoom) => put(middle(), zoom),
+    zoomBy(factor) {
+      isFitted = false;
+      put(middle(), Math.min(3, Math.max(LEAST_ZOOM, flow.getZoom() * factor)));
+    },
+    zoomTo(zoom) {
+      isFitted = false;
+      put(middle(), zoom);
+    },
+    resized() {
+      if (isFitted) this.fit();
+    },
+    handled() {
+      isFitted = false;
+    },
     fit() {
       const [w, h] = size();
       const { scene } = store.getState();
       if (scene.units.length === 0 || w === 0 || h === 0) return;
       const { zoom, middle: at } = fitting(scene, w - 2 * MARGIN, h - 2 * MARGIN, LEAST_ZOOM);
       put(at, zoom);
+      isFitted = true;
     },
     reveal(at) {
       const [w, h] = size();
