@@ -1,4 +1,5 @@
-import type { StreamResult } from '../engine/network/types';
+import type { StreamResult, UnitResult } from '../engine/network/types';
+import { CATALOGUE } from '../engine/units/catalogue';
 import { type Dimension, displayUnit, type Measures, parseQuantity, show } from '../quantity';
 import type { LabelKey, Sketch } from '../sketch/types';
 import type { LabelRow } from './types';
@@ -55,6 +56,22 @@ export const dutyText = (heat_W: number, measures: Measures): string => {
   const { number, unit } = show(Math.abs(heat_W), 'power', measures);
   return `Q ${number} ${unit}`;
 };
+
+/** "W 0.693 kW" beside a shaft link. */
+export const powerText = (power_W: number, measures: Measures): string => {
+  const { number, unit } = show(Math.abs(power_W), 'power', measures);
+  return `W ${number} ${unit}`;
+};
+
+/** What stands beside the link of a solved unit: its shaft power where it turns, else its duty. */
+export const linkText = (
+  kind: string,
+  result: Pick<UnitResult, 'heat_W' | 'power_W'>,
+  measures: Measures,
+): string =>
+  CATALOGUE[kind]?.group === 'rotating'
+    ? powerText(result.power_W ?? 0, measures)
+    : dutyText(result.heat_W ?? 0, measures);
 
 /** "Labels: flow kmol/h, temperature °C, pressure bar(a)" */
 export function labelsSentence(keys: readonly LabelKey[], measures: Measures): string {

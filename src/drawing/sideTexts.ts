@@ -14,7 +14,7 @@ export interface TextPlace {
 /** Room for any duty: letter, seven figures and unit. The digits have no say in where it stands. */
 const dutyRoom = (text: string): number => {
   const unit = text.slice(text.lastIndexOf(' ') + 1);
-  return measureText('Q ', TEXT.duty) + numberRoom(TEXT.duty) + measureText(` ${unit}`, TEXT.duty);
+  return measureText('W ', TEXT.duty) + numberRoom(TEXT.duty) + measureText(` ${unit}`, TEXT.duty);
 };
 
 type Beside = 'right' | 'left' | 'below' | 'above';

@@ -40,8 +40,10 @@ export interface PortPlace {
   /** The drawn line runs on inward by this much beyond the port, to the edge of a dot. */
   readonly reach?: number;
 }
-/** A heat link (or shaft link) that ends in a ring: from the symbol outward, in the symbol's own coordinates. */
+/** A heat link, which ends in a ring, or a shaft link, which ends in a double bar: from the symbol outward, in its own coordinates. */
 export interface LinkData {
+  /** Absent: heat. */
+  readonly carries?: 'shaft';
   readonly from: Point;
   readonly to: Point;
   /** Where the arrowhead points; none when the direction is a result. */
@@ -98,7 +100,7 @@ export interface UnitShape {
   readonly stateMark: readonly PathShape[];
   /** Symbol shown upright even when turned (names of feeds and products). */
   readonly texts: readonly TextShape[];
-  /** Heat link with its ring and arrowhead (marks) and its duty, for units that have one. */
+  /** Heat or shaft link with its end mark and arrowhead (marks) and its duty or power, for units that have one. */
   readonly duty?: {
     readonly line: PathShape;
     readonly marks: readonly PathShape[];
@@ -157,7 +159,7 @@ export interface SceneInput {
   readonly limits: ReadonlyMap<UnitId, Weight>;
   /** Rows per stream, already formatted in the sketch's measures; absent: no label. */
   readonly labels: ReadonlyMap<StreamId, readonly LabelRow[]>;
-  /** Formatted duty per unit ("Q 1307 kW"); absent: ring without text. */
+  /** Formatted duty ("Q 1307 kW") or shaft power ("W 52.1 kW") per unit; absent: a link without text. */
   readonly duties: ReadonlyMap<UnitId, string>;
   /** Positions while a drag lasts, over the sketch's own. */
   readonly moved?: ReadonlyMap<UnitId, Point>;

@@ -83,7 +83,7 @@ function shapeOf(
     ...(u.link && symbol.link
       ? {
           duty: {
-            ...linkShapes({ from: u.link[0], to: u.link[1], flow: symbol.link.flow }),
+            ...linkShapes({ ...symbol.link, from: u.link[0], to: u.link[1] }),
             ...(dutyText ? { text: stale ? { ...dutyText, italic: true } : dutyText } : {}),
           },
         }

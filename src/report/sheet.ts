@@ -1,4 +1,4 @@
-import { dutyText, labelRows } from '../drawing/labelText';
+import { labelRows, linkText } from '../drawing/labelText';
 import { buildScene } from '../drawing/scene';
 import type { DrawnState, LabelRow, Scene } from '../drawing/types';
 import type { StreamId, UnitId } from '../engine/ids';
@@ -31,7 +31,7 @@ export function reportScene(input: ReportInput): Scene {
   for (const unit of sketch.units) {
     const result = input.units.get(unit.id);
     states.set(unit.id, result?.state ?? 'waiting');
-    if (result?.heat_W) duties.set(unit.id, dutyText(result.heat_W, measures));
+    if (result?.heat_W || result?.power_W) duties.set(unit.id, linkText(unit.kind, result, measures));
   }
   return buildScene(sketch, { states, limits: worstByUnit(input), labels, duties });
 }

@@ -77,6 +77,18 @@ const CASES: Readonly<
     settings: (r) =>
       oneOf(r, [{ p: { ratio: between(r, 0.1, 1) } }, { p: { P: 1.1e5 } }, { p: { drop: 1e4 } }]),
   },
+  pump: {
+    ins: ['in'],
+    outs: ['out'],
+    settings: (r) => ({
+      p: oneOf(r, [
+        { ratio: between(r, 1, 3) },
+        { drop: -between(r, 0, 20e5) },
+        { head: between(r, -5, 200) },
+      ]),
+      efficiency: between(r, 0.3, 1),
+    }),
+  },
   heater: {
     ins: ['in'],
     outs: ['out'],

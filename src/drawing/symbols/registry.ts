@@ -10,6 +10,7 @@ import { heater } from './heater';
 import { join } from './join';
 import { plainBox } from './plainBox';
 import { product } from './product';
+import { pump } from './pump';
 import type { SymbolKind } from './shapes';
 import { valve } from './valve';
 
@@ -20,6 +21,7 @@ export const SYMBOLS: Readonly<Record<string, SymbolKind>> = {
   join,
   divide,
   valve,
+  pump,
   heater,
   cooler,
   drum,

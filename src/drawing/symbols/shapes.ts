@@ -57,8 +57,20 @@ export function arrowhead([x, y]: Point, [ux, uy]: Point, long: number, half: nu
 }
 
 export const RING = 2.6;
+/** Half length and distance of the two bars of a shaft link [px]. */
+const BAR = 4;
+const BARS_APART = 2.6;
 
-/** Line, ring and arrowhead of a heat link. */
+/** Two short bars across the outer end of a shaft link. */
+function doubleBar([x, y]: Point, [ux, uy]: Point): PathShape {
+  const bar = (back: number): string => {
+    const [cx, cy] = [x - ux * back, y - uy * back];
+    return `M${cx - uy * BAR} ${cy + ux * BAR}L${cx + uy * BAR} ${cy - ux * BAR}`;
+  };
+  return { d: bar(0) + bar(BARS_APART), width: WEIGHT.link, stroke: 'ink', fill: 'none' };
+}
+
+/** Line, end mark (ring or double bar) and arrowhead of a heat or shaft link. */
 export function linkShapes(link: LinkData): {
   readonly line: PathShape;
   readonly marks: readonly PathShape[];
@@ -67,14 +79,20 @@ export function linkShapes(link: LinkData): {
   const [x2, y2] = link.to;
   const length = Math.hypot(x2 - x1, y2 - y1);
   const [ux, uy]: Point = [(x2 - x1) / length, (y2 - y1) / length];
-  const marks: PathShape[] = [{ d: circle(RING, x2, y2), width: WEIGHT.link, stroke: 'ink', fill: 'paper' }];
+  const shaft = link.carries === 'shaft';
+  const marks: PathShape[] = [
+    shaft
+      ? doubleBar(link.to, [ux, uy])
+      : { d: circle(RING, x2, y2), width: WEIGHT.link, stroke: 'ink', fill: 'paper' },
+  ];
+  const mark = shaft ? BARS_APART : RING;
   let start = 0;
-  let end = length - RING;
+  let end = length - mark;
   if (link.flow === 'in') {
     marks.push(solid(arrowhead(link.from, [-ux, -uy], 7, 3.5)));
     start = 6;
   } else if (link.flow === 'out') {
-    const tip = length - RING - 0.5;
+    const tip = length - mark - 0.5;
     marks.push(solid(arrowhead([x1 + ux * tip, y1 + uy * tip], [ux, uy], 7, 3.5)));
     end = tip - 6;
   }
@@ -83,7 +101,7 @@ export function linkShapes(link: LinkData): {
     width: WEIGHT.link,
     stroke: 'ink',
     fill: 'none',
-    dash: '5 2.5',
+    dash: shaft ? '7 2 1.5 2' : '5 2.5',
   };
   return { line, marks };
 }

@@ -5,6 +5,7 @@ import { feed } from './feed/catalogue';
 import { heater } from './heater/catalogue';
 import { join } from './join/catalogue';
 import { product } from './product/catalogue';
+import { pump } from './pump/catalogue';
 import type { KindCatalogue } from './types';
 import { valve } from './valve/catalogue';
 
@@ -15,6 +16,7 @@ export const CATALOGUE: Readonly<Record<string, KindCatalogue>> = {
   join,
   divide,
   valve,
+  pump,
   heater,
   cooler,
   drum,

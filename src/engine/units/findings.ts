@@ -5,6 +5,7 @@ import type { FEED_FINDINGS } from './feed/findings';
 import type { HEATER_FINDINGS } from './heater/findings';
 import type { JOIN_FINDINGS } from './join/findings';
 import type { PRODUCT_FINDINGS } from './product/findings';
+import type { PUMP_FINDINGS } from './pump/findings';
 import type { STREAM_FINDINGS } from './streamLimits';
 import type { VALVE_FINDINGS } from './valve/findings';
 
@@ -15,6 +16,7 @@ export type UnitFindingCode =
   | (typeof JOIN_FINDINGS)[number]
   | (typeof DIVIDE_FINDINGS)[number]
   | (typeof VALVE_FINDINGS)[number]
+  | (typeof PUMP_FINDINGS)[number]
   | (typeof HEATER_FINDINGS)[number]
   | (typeof COOLER_FINDINGS)[number]
   | (typeof DRUM_FINDINGS)[number]

@@ -6,6 +6,7 @@ import { PAIR_NONE, PAIR_PREDICTED } from './limits/pairs';
 import type { Rule } from './limits/rule';
 import { UTILITY_RULES } from './limits/utilities';
 import { PRODUCT_RULES } from './product/limits';
+import { PUMP_RULES } from './pump/limits';
 import { STREAM_RULES } from './streamLimits';
 import { VALVE_RULES } from './valve/limits';
 
@@ -14,6 +15,7 @@ export const RULES: readonly Rule[] = [
   ...STREAM_RULES,
   ENTERS_BELOW,
   ...VALVE_RULES,
+  ...PUMP_RULES,
   ...HEATER_RULES,
   ...COOLER_RULES,
   ...UTILITY_RULES,

@@ -5,6 +5,7 @@ import { feed } from './feed/solve';
 import { heater } from './heater/solve';
 import { join } from './join/solve';
 import { product } from './product/solve';
+import { pump } from './pump/solve';
 import type { UnitKind } from './types';
 import { valve } from './valve/solve';
 
@@ -23,6 +24,7 @@ export const SOLVERS: Readonly<Record<string, AnyKind>> = {
   join: seal(join),
   divide: seal(divide),
   valve: seal(valve),
+  pump: seal(pump),
   heater: seal(heater),
   cooler: seal(cooler),
   drum: seal(drum),

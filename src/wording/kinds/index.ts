@@ -6,6 +6,7 @@ import { feed } from './feed';
 import { heater } from './heater';
 import { join } from './join';
 import { product } from './product';
+import { pump } from './pump';
 import { valve } from './valve';
 
 /** The words of every kind of unit, one line each. */
@@ -15,6 +16,7 @@ export const KIND_WORDS: Readonly<Record<string, KindWords>> = {
   join,
   divide,
   valve,
+  pump,
   heater,
   cooler,
   drum,

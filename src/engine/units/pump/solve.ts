@@ -1,0 +1,105 @@
+import type { StreamState } from '../../equilibrium/types';
+import { noSolution, type Outcome, solved } from '../../outcome';
+import { answerOf } from '../answer';
+import type { PressureSI } from '../groups';
+import { emptyStream, outletPressure, streamAt, warmFrom } from '../streams';
+import type { Answer, Call, UnitKind } from '../types';
+import { GRAVITY_m_s2, massFlow_kg_s, volumeFlow_m3_s } from '../volume';
+import { pumpLimits } from './limits';
+
+export interface PumpSettings {
+  readonly p: PressureSI | { readonly head: number };
+  /** Hydraulic power over shaft power [-]. */
+  readonly efficiency: number;
+  /** Height of the liquid level above the pump [m]. */
+  readonly staticHead?: number;
+  /** Shaft power over electric power: motor and drive [-]. */
+  readonly drive?: number;
+}
+export interface PumpResults {
+  /** Shaft power, all of it into the fluid [W]; negative when the pressure falls. */
+  readonly power_W: number;
+  /** Volume flow that enters times the rise of pressure [W]. */
+  readonly hydraulicPower_W: number;
+  /** Only with a drive efficiency. */
+  readonly electric_W?: number;
+  readonly head_m: number;
+  /** (P - bubble pressure)/(density g) + static head; absent without a bubble point at this temperature or with vapour. */
+  readonly npshAvailable_m?: number;
+  readonly bubbleP_Pa?: number;
+  /** What enters [m3/s]. */
+  readonly volume_m3_s: number;
+  readonly P_Pa: number;
+  readonly T_K: number;
+}
+
+/** Bubble pressure of what enters [Pa]; undefined when vapour enters or none exists. */
+function bubblePressure(call: Call<PumpSettings>, inlet: StreamState): number | undefined {
+  const incipient = inlet.phases.length === 2 && inlet.phases[0]!.fraction === 0;
+  if (incipient) return inlet.P_Pa;
+  if (inlet.phases.some((p) => p.kind === 'vapour' && p.fraction > 0)) return undefined;
+  const point = streamAt(call, inlet.n_mol_s, { T_K: inlet.T_K, vapourFraction: 0 });
+  return point.state === 'solved' ? point.value.P_Pa : undefined;
+}
+
+/**
+ * The shaft power that a rise of pressure takes; where the pressure falls, what a machine of this efficiency would give.
+ * Hydraulic power over efficiency in the first case, times efficiency in the second.
+ */
+const shaftPower_W = (hydraulic_W: number, efficiency: number): number =>
+  hydraulic_W >= 0 ? hydraulic_W / efficiency : hydraulic_W * efficiency;
+
+function nothing(call: Call<PumpSettings>, inlet: StreamState): Outcome<Answer<PumpResults>> {
+  const { p } = call.settings;
+  const P = 'head' in p ? solved(inlet.P_Pa) : outletPressure(call, p, inlet.P_Pa);
+  if (P.state !== 'solved') return noSolution(...P.findings);
+  const out = emptyStream(call.model.nc, inlet.T_K, P.value);
+  const { P_Pa, T_K } = out;
+  const results = { power_W: 0, hydraulicPower_W: 0, head_m: 0, volume_m3_s: 0, P_Pa, T_K };
+  return solved(answerOf({ out }, results, []));
+}
+
+function solve(call: Call<PumpSettings>): Outcome<Answer<PumpResults>> {
+  const inlet = call.in.in!;
+  const { p, efficiency, staticHead, drive } = call.settings;
+  if (inlet.phases.length === 0) return nothing(call, inlet);
+  const volume_m3_s = volumeFlow_m3_s(inlet, call.model);
+  /** Weight of one cubic metre [N/m3]. */
+  const weight = (massFlow_kg_s(inlet.n_mol_s, call.model) / volume_m3_s) * GRAVITY_m_s2;
+  const P = outletPressure(call, 'head' in p ? { drop: -p.head * weight } : p, inlet.P_Pa);
+  if (P.state !== 'solved') {
+    const [first] = P.findings;
+    return noSolution('head' in p ? { ...first, at: { ...first.at, path: 'p.head' } } : first);
+  }
+  const P_Pa = P.value;
+  const hydraulicPower_W = volume_m3_s * (P_Pa - inlet.P_Pa);
+  const power_W = shaftPower_W(hydraulicPower_W, efficiency);
+  const made =
+    P_Pa === inlet.P_Pa
+      ? solved(inlet)
+      : streamAt(
+          call,
+          inlet.n_mol_s,
+          { P_Pa, H_W: inlet.H_W + power_W },
+          warmFrom(call.warm, inlet.n_mol_s, inlet.T_K),
+        );
+  if (made.state !== 'solved') return noSolution(...made.findings);
+  const out = made.value;
+  const bubbleP_Pa = bubblePressure(call, inlet);
+  const results: PumpResults = {
+    power_W,
+    hydraulicPower_W,
+    ...(drive === undefined ? {} : { electric_W: shaftPower_W(power_W, drive) }),
+    head_m: (P_Pa - inlet.P_Pa) / weight,
+    ...(bubbleP_Pa === undefined
+      ? {}
+      : { npshAvailable_m: (inlet.P_Pa - bubbleP_Pa) / weight + (staticHead ?? 0), bubbleP_Pa }),
+    volume_m3_s,
+    P_Pa,
+    T_K: out.T_K,
+  };
+  return solved({ ...answerOf({ out }, results, out === inlet ? [] : [out]), power_W }, made.findings);
+}
+
+/** A liquid brought to a higher pressure. */
+export const pump: UnitKind<PumpSettings, PumpResults> = { solve, limits: pumpLimits };
