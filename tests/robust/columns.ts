@@ -101,7 +101,9 @@ async function draw(
   const raw = ids.map(() => 0.02 - Math.log(1 - random.next()));
   const total = raw.reduce((a, b) => a + b, 0);
   const stages = random.whole(8, 60);
-  const Ptop = random.logBetween(1e5, 25e5);
+  // Far enough below every critical pressure that two phases exist at both ends.
+  const most = 0.5 * Math.min(...model.chemicals.filter((c) => c.Tb_K! > 150).map((c) => c.Pc_Pa!));
+  const Ptop = random.logBetween(1e5, Math.min(25e5, most));
   const of = {
     ids,
     z: raw.map((x) => x / total),
@@ -130,11 +132,11 @@ function otherFixings(random: Random, s: StageSystem): Fixing[] {
   const bottoms = productFlow(s, 'bottoms');
   const D = Array.from({ length: n }, (_, i) => top.at(i)).reduce((a, b) => a + b, 0);
   const B = Array.from({ length: n }, (_, i) => bottoms.at(i)).reduce((a, b) => a + b, 0);
-  // Chemicals that show in both products.
-  const keys = Array.from({ length: n }, (_, i) => i).filter((i) => {
-    const r = top.at(i) / (top.at(i) + bottoms.at(i));
-    return r > 1e-4 && r < 1 - 1e-4;
-  });
+  // Keys that show in both products: a light one that mostly goes over the top, a heavy one that mostly does not.
+  const all = Array.from({ length: n }, (_, i) => i);
+  const share = (i: number): number => top.at(i) / (top.at(i) + bottoms.at(i));
+  const lights = all.filter((i) => share(i) > 0.5 && share(i) < 1 - 1e-4);
+  const heavies = all.filter((i) => share(i) <= 0.5 && share(i) > 1e-4);
   const reflux: Fixing = { fix: 'refluxRatio', value: s.L[0]! / D };
   const distillate: Fixing = { fix: 'flow', product: 'top', flow: { value: D, basis: 'mole' } };
   const boilup: Fixing = { fix: 'boilup', value: s.V[s.places - 1]! / B };
@@ -159,8 +161,9 @@ function otherFixings(random: Random, s: StageSystem): Fixing[] {
     [reflux, boilup],
     [reflux, { fix: 'flow', product: 'bottoms', flow: { value: B, basis: 'mole' } }],
   ];
-  if (keys.length < 2 || random.next() < 0.25) return random.of(simple);
-  const [light, heavy] = random.some(keys, 2) as [number, number];
+  if (lights.length === 0 || heavies.length === 0 || random.next() < 0.25) return random.of(simple);
+  const light = random.of(lights);
+  const heavy = random.of(heavies);
   return random.of<Fixing[]>([
     [reflux, recovery('top', light)],
     [reflux, recovery('bottoms', heavy)],

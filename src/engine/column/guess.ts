@@ -108,7 +108,10 @@ export function guessOf(s: StageSystem): Guess {
   const view = (D: number): SplitView => ({ d, f, D, F: total, mass, simple, P, places });
 
   const sharp = Math.max(2, 0.35 * (places - 1));
-  const split = bestSplit(s, (lnC, m) => view(splitInto(d, f, lnK, lnC, m)), sharp, lnK);
+  // With the reflux ratio given, a distillate too small to carry the feed's vapour over the top is no start.
+  const ratioGiven = task.fixed.find((x) => x.fix === 'refluxRatio')?.value;
+  const least = ratioGiven === undefined ? 0 : (1.05 * vapour) / (1 + ratioGiven);
+  const split = bestSplit(s, (lnC, m) => view(splitInto(d, f, lnK, lnC, m)), sharp, lnK, least);
   let m = split?.m ?? sharp;
   let top = split?.D;
   const ratio = refluxRatioFrom(s.task.fixed, top, { vapour, rest, meanMass, places, m });
@@ -156,12 +159,13 @@ function bestSplit(
   at: (lnC: number, m: number) => SplitView,
   sharp: number,
   lnK: Float64Array,
+  least: number,
 ): { readonly D: number; readonly m: number } | undefined {
   const probe = at(0, sharp);
   const asks = s.task.fixed.filter((x) => missOf(x, probe) !== undefined);
   if (asks.length === 0) return undefined;
   const ms =
-    asks.length === 1 ? [sharp] : [0.15, 0.25, 0.35, 0.5, 0.7, 0.9].map((r) => Math.max(1.5, r * places1(s)));
+    asks.length === 1 ? [sharp] : [0.15, 0.25, 0.35, 0.5, 0.7, 0.9].map((r) => Math.max(1.5, r * (s.places - 1)));
   const span = Math.max(...lnK) - Math.min(...lnK) + 1;
   let best: { D: number; m: number; miss: number } | undefined;
   for (const m of ms) {
@@ -169,17 +173,18 @@ function bestSplit(
       const view = at(lnC, m);
       let sum = 0;
       for (const ask of asks) sum += (missOf(ask, view) ?? 0) ** 2;
+      if (view.D < least) sum += 100 * (1 + Math.log(least / view.D)) ** 2;
       if (Number.isFinite(sum) && (best === undefined || sum < best.miss)) best = { D: view.D, m, miss: sum };
       return sum;
     };
     const low = -m * (Math.max(...lnK) + 0.5) - 8;
     const step = (m * span + 16) / 40;
     let from = low;
-    let least = Number.POSITIVE_INFINITY;
+    let nearest = Number.POSITIVE_INFINITY;
     for (let k = 0; k <= 40; k++) {
       const got = miss(low + k * step);
-      if (got < least) {
-        least = got;
+      if (got < nearest) {
+        nearest = got;
         from = low + k * step;
       }
     }
@@ -195,8 +200,6 @@ function bestSplit(
   }
   return best;
 }
-
-const places1 = (s: StageSystem): number => s.places - 1;
 
 /** Moves the cut until the share of the whole that goes over the top is met. */
 function meet(

@@ -1,7 +1,7 @@
 import { luFactor, luSolve } from '../numerics/lu';
 import { bubbleStage } from './bubble';
 import { type Change, Elimination, makeChange } from './elimination';
-import { NOTHING, type StageSystem } from './system';
+import { LEAST_VAPOUR, NOTHING, type StageSystem } from './system';
 import type { Target } from './targets';
 
 /** What is sought besides the stages' own equations: parameters that are free, and as many targets. */
@@ -30,6 +30,8 @@ export interface NewtonOptions {
 const SOLVED = 1e-9;
 /** No flow falls below this share of its value in one step. */
 const LEAST_SHARE = 0.2;
+/** No total flow of a stage grows by more than this factor in one step. */
+const MOST_GROWTH = 3;
 /** Largest change of a stage's temperature in a step [K]. */
 const T_STEP_K = 30;
 const RESET_K = 10;
@@ -227,12 +229,13 @@ export class Newton {
         if (nextL < floorL) {
           l[at] = floorL;
           // What l is floored to carries its own vapour: with both floored a trace would stick where K is 1.
-          v[at] = Math.max(floorL * ratio * Math.exp(lnPhiL[i]! - lnPhiV[i]!), least);
+          v[at] = Math.max(floorL * ratio * Math.exp(lnPhiL[i]! - lnPhiV[i]!), LEAST_VAPOUR);
         } else {
           l[at] = nextL;
-          v[at] = nextV < LEAST_SHARE * v[at]! ? Math.max(LEAST_SHARE * v[at]!, least) : nextV;
+          v[at] = nextV < LEAST_SHARE * v[at]! ? Math.max(LEAST_SHARE * v[at]!, LEAST_VAPOUR) : nextV;
         }
       }
+      this.boundGrowth(j);
       const dT = share * step.T[j]!;
       jump = Math.max(jump, Math.abs(dT));
       const bounded = Math.abs(dT) > T_STEP_K ? Math.sign(dT) * T_STEP_K : dT;
@@ -240,6 +243,25 @@ export class Newton {
     }
     for (const k of wanted.free) this.moveParameter(k, share * dp[k]!);
     return jump;
+  }
+
+  /** No total grows beyond a multiple of itself or of the feed in one step; compositions stay. */
+  private boundGrowth(j: number): void {
+    const { s } = this;
+    const { n, l, v } = s;
+    let L = 0;
+    let V = 0;
+    for (let i = j * n; i < (j + 1) * n; i++) {
+      L += l[i]!;
+      V += v[i]!;
+    }
+    const a = (MOST_GROWTH * Math.max(s.L[j]!, LEAST_SHARE * s.feedTotal)) / L;
+    const b = (MOST_GROWTH * Math.max(s.V[j]!, LEAST_SHARE * s.feedTotal)) / V;
+    if (a >= 1 && b >= 1) return;
+    for (let i = j * n; i < (j + 1) * n; i++) {
+      if (a < 1) l[i] = l[i]! * a;
+      if (b < 1) v[i] = v[i]! * b;
+    }
   }
 
   private moveParameter(k: number, change: number): void {
@@ -253,7 +275,7 @@ export class Newton {
   }
 
   private resetStages(): void {
-    for (let j = 0; j < this.s.places; j++) bubbleStage(this.s, j);
+    for (let j = 0; j < this.s.places; j++) if (Math.abs(this.step.T[j]!) > RESET_K) bubbleStage(this.s, j);
   }
 
   private merit(wanted: Wanted): number {

@@ -93,8 +93,7 @@ class Search {
     }
     const guess = guessOf(s);
     for (const [name, sweeps] of STARTS) {
-      startBySweeps(s, guess, sweeps);
-      this.setDirect();
+      this.start(guess, sweeps);
       if (this.attempt(name, this.wanted, ITERATIONS)) return true;
     }
     return false;
@@ -102,61 +101,82 @@ class Search {
 
   /** A plain column first: reflux ratio and flow as guessed; then step by step to what is asked. */
   private fromPlain(): boolean {
-    const { wanted } = this;
-    const moved = wanted.targets.length - this.task.draws.length;
-    if (moved <= 0) return false;
-    const plain = this.plainColumn();
-    if (!plain) return false;
-    return this.moveFrom(moved);
+    const { system: s, wanted, task } = this;
+    const moved = wanted.targets.length - task.draws.length;
+    const first = s.movers.length - task.draws.length;
+    const plain: Wanted = {
+      free: task.draws.map((_, k) => first + k),
+      targets: wanted.targets.slice(moved),
+      values: wanted.values.slice(moved),
+    };
+    const guess = guessOf(s);
+    // With nothing to move the plain column is the one that was tried.
+    for (const [, sweeps] of moved === 0 ? [] : STARTS) {
+      this.start(guess, sweeps);
+      if (this.attempt('plain-then-move', plain, ITERATIONS)) return this.moveFrom(moved);
+    }
+    this.start(guess, PLAIN);
+    return this.fromConstantOverflow(plain) && (moved === 0 || this.moveFrom(moved));
   }
 
-  private plainColumn(): boolean {
-    const { system: s, wanted } = this;
-    const first = s.movers.length - this.task.draws.length;
-    const plain: Wanted = {
-      free: this.task.draws.map((_, k) => first + k),
-      targets: wanted.targets.slice(wanted.targets.length - this.task.draws.length),
-      values: wanted.values.slice(wanted.targets.length - this.task.draws.length),
-    };
-    const guess: Guess = guessOf(s);
-    for (const [, sweeps] of STARTS) {
-      startBySweeps(s, guess, sweeps);
-      this.setDirect();
-      if (this.attempt('plain-then-move', plain, ITERATIONS)) return true;
+  private start(guess: Guess, sweeps: Sweeps): void {
+    startBySweeps(this.system, guess, sweeps);
+    this.setDirect();
+  }
+
+  /** Constant molar overflow first, then enthalpies more and more real. */
+  private fromConstantOverflow(wanted: Wanted): boolean {
+    const { system: s } = this;
+    s.realism = 0;
+    const fine = this.attempt('constant-overflow', wanted, ITERATIONS);
+    const done = fine && this.follow(wanted, (way) => {
+      s.realism = way;
+    });
+    s.realism = 1;
+    return done;
+  }
+
+  /** From a solved system at 0 of the way to 1 in steps that adapt; false when it gets stuck. */
+  private follow(wanted: Wanted, set: (way: number) => void): boolean {
+    const { system: s } = this;
+    const kept = stateOf(s);
+    let done = 0;
+    let step = 0.25;
+    for (let k = 0; k < 60; k++) {
+      const next = Math.min(1, done + step);
+      set(next);
+      const end = this.newton.run(wanted, { iterations: 18, resets: false });
+      this.effort.iterations += end.iterations;
+      this.way = done;
+      if (end.end === 'solved' && !this.isTrivial()) {
+        done = next;
+        this.effort.residual = end.residual;
+        if (done === 1) return true;
+        put(s, kept);
+        step *= 2;
+        continue;
+      }
+      this.failure = this.explain(end);
+      restore(s, kept);
+      step /= 2;
+      if (step < 1 / 256) break;
     }
     return false;
   }
+  way = 0;
 
   private moveFrom(moved: number): boolean {
     const { system: s, wanted } = this;
     const from = Float64Array.from(wanted.targets, (t) => t.measure());
     const values = wanted.values.slice();
     const stage: Wanted = { ...wanted, values };
-    const kept = stateOf(s);
     const goal = wanted.values;
-    let done = 0;
-    let step = 0.25;
-    for (let k = 0; k < 60; k++) {
-      const next = Math.min(1, done + step);
-      for (let r = 0; r < moved; r++) values[r] = from[r]! + next * (goal[r]! - from[r]!);
-      const end = this.newton.run(stage, { iterations: 18, resets: false });
-      this.effort.iterations += end.iterations;
-      if (end.end === 'solved' && !this.isTrivial()) {
-        done = next;
-        if (done === 1) {
-          this.effort.residual = end.residual;
-          return true;
-        }
-        put(s, kept);
-        step = Math.min(2 * step, 1 - done);
-        continue;
-      }
-      restore(s, kept);
-      step /= 2;
-      if (step < 1 / 256) break;
-    }
+    const done = this.follow(stage, (way) => {
+      for (let r = 0; r < moved; r++) values[r] = from[r]! + way * (goal[r]! - from[r]!);
+    });
+    if (done) return true;
     s.evaluate();
-    this.noteReach(done, from, moved);
+    this.noteReach(this.way, from, moved);
     return false;
   }
 

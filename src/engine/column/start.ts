@@ -1,6 +1,6 @@
 import { bubbleStage } from './bubble';
 import type { Guess } from './guess';
-import { NOTHING, type StageSystem } from './system';
+import { LEAST_VAPOUR, NOTHING, type StageSystem } from './system';
 
 /** How start values are swept: passes with start K-values, then with the model's. */
 export interface Sweeps {
@@ -65,7 +65,7 @@ export function componentFlows(s: StageSystem, K: Float64Array, diag: Float64Arr
       const at = j * n + i;
       const above = j + 1 < places ? v[at + n]! : 0;
       l[at] = Math.max((l[at]! + above) / diag[j]!, NOTHING * s.feedTotal);
-      v[at] = Math.max(v[at]! * l[at]!, NOTHING * s.feedTotal);
+      v[at] = Math.max(v[at]! * l[at]!, LEAST_VAPOUR);
     }
   }
 }
@@ -79,7 +79,7 @@ function scaleTo(s: StageSystem, keptL: Float64Array, keptV: Float64Array): void
     const b = keptV[j]! / s.V[j]!;
     for (let i = j * n; i < (j + 1) * n; i++) {
       l[i] = Math.max(l[i]! * a, NOTHING * s.feedTotal);
-      v[i] = Math.max(v[i]! * b, NOTHING * s.feedTotal);
+      v[i] = Math.max(v[i]! * b, LEAST_VAPOUR);
     }
   }
   s.L.set(keptL);

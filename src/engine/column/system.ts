@@ -18,6 +18,8 @@ export const ENERGY_J_MOL = 20e3;
 export const T_SCALE_K = 50;
 /** A chemical's flow counts as nothing below this share of the feed. */
 export const NOTHING = 1e-60;
+/** The vapour over such a liquid may be far less still, but not zero [mol/s]. */
+export const LEAST_VAPOUR = 1e-280;
 /** Balances are measured against no less than this share of the feed. */
 const LEAST_FLOW = 1e-20;
 
@@ -64,6 +66,13 @@ export class StageSystem {
   readonly M: Float64Array;
   readonly Q: Float64Array;
   readonly H: Float64Array;
+  /**
+   * 1: the model's enthalpies. 0: a vapour has 20 kJ/mol more than a liquid and nothing else counts, which is constant
+   * molar overflow. Between: the blend.
+   */
+  realism = 1;
+  /** Vapour in the feeds by place [mol/s]. */
+  private readonly feedVapour: Float64Array;
   /** Share of the equilibrium vapour in what Murphree's relation gives, by place and chemical; 1 without. */
   readonly theta: Float64Array;
   readonly scratch: Float64Array;
@@ -100,6 +109,7 @@ export class StageSystem {
     this.f = vector(places * n);
     this.F = vector(places);
     this.HF = vector(places);
+    this.feedVapour = vector(places);
     this.M = vector(places * n);
     this.Q = vector(places * n);
     this.H = vector(places);
@@ -112,6 +122,7 @@ export class StageSystem {
         this.F[feed.place]! += feed.n_mol_s[i]!;
       }
       this.HF[feed.place]! += feed.H_W;
+      this.feedVapour[feed.place]! += feed.vapourFraction * feed.n_mol_s.reduce((a, b) => a + b, 0);
     }
     for (const F of this.F) total += F;
     this.feedTotal = total;
@@ -149,10 +160,31 @@ export class StageSystem {
       model.evaluate('vapour', T[j]!, P, x, 2, vap);
       if (!Number.isFinite(liq.h_J_mol + vap.h_J_mol + liq.lnPhi[0]! + vap.lnPhi[0]!)) return false;
     }
+    if (this.realism < 1) this.simplify();
     this.balances();
     this.equilibria();
     this.energies();
     return true;
+  }
+
+  private simplify(): void {
+    const t = this.realism;
+    const blend = (props: PhaseProps, h: number): void => {
+      props.h_J_mol = t * props.h_J_mol + (1 - t) * h;
+      props.cp_J_molK *= t;
+      for (let i = 0; i < this.n; i++) props.hPartial[i] = t * props.hPartial[i]! + (1 - t) * h;
+    };
+    for (let j = 0; j < this.places; j++) {
+      blend(this.liq[j]!, 0);
+      blend(this.vap[j]!, ENERGY_J_MOL);
+    }
+    if (this.reflux !== this.liq[0]) blend(this.reflux, 0);
+  }
+
+  /** Enthalpy that the feeds bring to place j, as real as the stages' [W]. */
+  fedEnthalpy(j: number): number {
+    const t = this.realism;
+    return t === 1 ? this.HF[j]! : t * this.HF[j]! + (1 - t) * ENERGY_J_MOL * this.feedVapour[j]!;
   }
 
   /** L and V from l and v. */
@@ -233,10 +265,10 @@ export class StageSystem {
   }
 
   private energies(): void {
-    const { places, L, V, H, HF, rL, rV, energyScale, feedTotal, totalCondenser, p, task } = this;
+    const { places, L, V, H, rL, rV, energyScale, feedTotal, totalCondenser, p, task } = this;
     for (let j = 0; j < places; j++) {
       if (this.balancesEnergy(j)) {
-        let h = rL[j]! * L[j]! * this.liq[j]!.h_J_mol + rV[j]! * V[j]! * this.vap[j]!.h_J_mol - HF[j]!;
+        let h = rL[j]! * L[j]! * this.liq[j]!.h_J_mol + rV[j]! * V[j]! * this.vap[j]!.h_J_mol - this.fedEnthalpy(j);
         if (j > 0) h -= L[j - 1]! * this.leaving(j - 1).h_J_mol;
         if (j + 1 < places) h -= V[j + 1]! * this.vap[j + 1]!.h_J_mol;
         H[j] = h / energyScale;

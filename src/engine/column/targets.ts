@@ -140,16 +140,16 @@ function temperatureTarget(s: StageSystem, place: number, value: number): Target
 
 /** Heat into an end [W] at the system's present state. */
 export function dutyOf(s: StageSystem, at: 'condenser' | 'reboiler'): number {
-  const { liq, vap, L, V, HF, rL, rV } = s;
+  const { liq, vap, L, V, rL, rV } = s;
   if (at === 'condenser')
     return (
       rL[0]! * L[0]! * s.leaving(0).h_J_mol +
       rV[0]! * V[0]! * vap[0]!.h_J_mol -
       V[1]! * vap[1]!.h_J_mol -
-      HF[0]!
+      s.fedEnthalpy(0)
     );
   const j = s.places - 1;
-  return L[j]! * liq[j]!.h_J_mol + V[j]! * vap[j]!.h_J_mol - L[j - 1]! * s.leaving(j - 1).h_J_mol - HF[j]!;
+  return L[j]! * liq[j]!.h_J_mol + V[j]! * vap[j]!.h_J_mol - L[j - 1]! * s.leaving(j - 1).h_J_mol - s.fedEnthalpy(j);
 }
 
 function dutyTarget(s: StageSystem, at: 'condenser' | 'reboiler', value: number): Target {

@@ -94,4 +94,5 @@ export type Attempt =
   | 'more-sweeps'
   | 'wilson-sweeps'
   | 'slow-sweeps'
-  | 'plain-then-move';
+  | 'plain-then-move'
+  | 'constant-overflow';
