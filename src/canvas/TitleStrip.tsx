@@ -2,7 +2,7 @@ import { memo, useEffect } from 'react';
 import { useShallow } from 'zustand/react/shallow';
 import { labelsSentence } from '../drawing/labelText';
 import { useMeasures } from '../parts/measures';
-import { useResults, useSketch, useStores } from '../store/react';
+import { useCompiled, useResults, useSketch, useStores } from '../store/react';
 import { kindWord, modelWord } from '../wording';
 import { type SheetState, useSheet } from './sheetStore';
 import { wholeState } from './whole';
@@ -35,6 +35,7 @@ function WholeState() {
   const stores = useStores();
   const sketch = useSketch((state) => state.sketch);
   const edit = useSketch((state) => state.edit);
+  const gaps = useCompiled((state) => state.gaps);
   const results = useResults(
     useShallow(({ units, at, answering, solvedEdit, tookMs, trouble }) => ({
       units,
@@ -48,7 +49,7 @@ function WholeState() {
   const doing = useSheet(underWay);
   const { word, rest } = doing
     ? { word: doing, rest: ', Esc leaves it' }
-    : wholeState(sketch, edit, { ...stores.results.getState(), ...results });
+    : wholeState(sketch, edit, { ...stores.results.getState(), ...results }, gaps);
   const solvedEdit = results.solvedEdit;
 
   // One announcement for a run of edits: when the numbers have stood still for a moment.
@@ -59,6 +60,7 @@ function WholeState() {
         stores.sketch.getState().sketch,
         stores.sketch.getState().edit,
         stores.results.getState(),
+        stores.compiled.getState().gaps,
       );
       if (now.word) stores.session.setState({ spoken: `${now.word}${now.rest}` });
     }, QUIET_MS);

@@ -43,9 +43,10 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
 
   const build = (): void => {
     const { sketch } = stores.sketch.getState();
+    const { gaps } = stores.compiled.getState();
     const results = stores.results.getState();
     const before = sheet.getState();
-    const next = buildScene(sketch, input(sketch, results, before.moved), scene);
+    const next = buildScene(sketch, input(sketch, results, gaps, before.moved), scene);
     const units = indexed(next.units, before.scene.units, before.units, (shape) => shape.unit);
     const lines = indexed(next.lines, before.scene.lines, before.lines, (shape) => shape.stream);
     const labels = indexed(next.labels, before.scene.labels, before.labels, (shape) => shape.stream);
@@ -55,7 +56,7 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
       units,
       lines,
       labels,
-      ...namesOf(sketch, results, units, labels),
+      ...namesOf(sketch, results, gaps, units, labels),
       ...(next === before.scene ? {} : { quiet: quietAt(next, zoomNow(), outerStreams(sketch)) }),
     });
   };
@@ -73,6 +74,9 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
       if (now.streams !== before.streams || now.units !== before.units || now.findings !== before.findings)
         build();
     }),
+    stores.compiled.subscribe((now, before) => {
+      if (now.gaps !== before.gaps && placesOf(now.gaps) !== placesOf(before.gaps)) build();
+    }),
     sheet.subscribe((now, before) => {
       if (now.moved !== before.moved) build();
     }),
@@ -81,6 +85,10 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
     for (const end of stop) end();
   };
 }
+
+/** What is missing where, as one text: compiling makes its list anew with every edit. */
+const placesOf = (gaps: readonly Finding[]): string =>
+  gaps.map(({ code, at }) => [code, at.unit, at.path, at.port].join(' ')).join('\n');
 
 /** Labels step back anew when the zoom changes. */
 export function quietAgain(stores: Stores, sheet: SheetStore, zoom: number): void {
@@ -91,6 +99,7 @@ export function quietAgain(stores: Stores, sheet: SheetStore, zoom: number): voi
 function namesOf(
   sketch: Sketch,
   results: ResultsState,
+  gaps: readonly Finding[],
   units: SheetState['units'],
   labels: SheetState['labels'],
 ): Pick<SheetState, 'unitNames' | 'streamNames'> {
@@ -112,7 +121,10 @@ function namesOf(
         unitName(
           unit,
           units.get(unit.id),
-          results.units.get(unit.id)?.latest.reasons ?? [],
+          [
+            ...gaps.filter((gap) => gap.at.unit === unit.id),
+            ...(results.units.get(unit.id)?.latest.reasons ?? []),
+          ],
           limits.get(unit.id) ?? [],
           context,
         ),

@@ -16,17 +16,25 @@ export function unitName(
   const say = (finding: Finding): string => sayFinding(finding, context).sentence.replace(/\.$/, '');
   const state = shape?.state ?? 'waiting';
   const [reason] = reasons;
-  const why = reason && state !== 'solved' ? `: ${say(reason)}` : '';
+  const why = reason && state !== 'solved' ? say(reason) : '';
   const [worst] = worstFirst(limits);
   return [
     unit.tag,
     unit.name,
     kindWord(unit.kind),
-    `${stateWord(state)}${why}`,
+    stateAndReason(stateWord(state), why),
     worst && `${weightWord(worst.weight)}: ${say(worst)}`,
   ]
     .filter(Boolean)
     .join(', ');
+}
+
+/** "needs a value: no stream enters"; a reason that says the state itself stands alone. */
+function stateAndReason(state: string, why: string): string {
+  if (why === '') return state;
+  return /^needs /i.test(why)
+    ? `n${why.slice(1)}`
+    : `${state}: ${why.charAt(0).toLowerCase()}${why.slice(1)}`;
 }
 
 /** "Stream 3, PV-101 to V-101, 120.0 kmol/h, 56.65 °C": what a screen reader hears of a stream. */

@@ -1,7 +1,7 @@
 import { labelRows, linkText, type SolvedStream } from '../drawing/labelText';
 import type { DrawnState, LabelRow, SceneInput } from '../drawing/types';
 import type { StreamId, UnitId } from '../engine/ids';
-import type { Weight } from '../engine/outcome';
+import type { Finding, Weight } from '../engine/outcome';
 import { worstWeight } from '../parts/LimitMark';
 import { measuresOf } from '../parts/measures';
 import type { Measures } from '../quantity';
@@ -23,7 +23,12 @@ export function createSceneInput() {
   let measures: Measures = { set: 'metric' };
   let rows = new Map<StreamId, Kept>();
 
-  return (sketch: Sketch, results: ResultsState, moved: SceneInput['moved'] | null): SceneInput => {
+  return (
+    sketch: Sketch,
+    results: ResultsState,
+    gaps: readonly Finding[],
+    moved: SceneInput['moved'] | null,
+  ): SceneInput => {
     if (sketch.display !== display || sketch.site !== site) {
       display = sketch.display;
       site = sketch.site;
@@ -43,11 +48,13 @@ export function createSceneInput() {
     }
     rows = kept;
 
+    // Before the first answer, what compiling misses is known already.
+    const lacking = new Set(gaps.map((gap) => gap.at.unit));
     const states = new Map<UnitId, DrawnState>();
     const duties = new Map<UnitId, string>();
     for (const { id, kind } of sketch.units) {
       const entry = results.units.get(id);
-      states.set(id, drawnState(entry));
+      states.set(id, entry ? drawnState(entry) : lacking.has(id) ? 'needs-value' : 'waiting');
       const shown = entry?.latest.state === 'solved' ? entry.latest : entry?.older;
       if (shown?.heat_W !== undefined) duties.set(id, linkText(kind, shown, measures));
     }

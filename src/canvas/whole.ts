@@ -1,5 +1,7 @@
+import type { Finding } from '../engine/outcome';
 import type { Sketch } from '../sketch/types';
 import type { ResultsState } from '../store/resultsStore';
+import { sayFinding } from '../wording';
 import { tagOf } from './words';
 
 /** State of the whole train for the title strip: a word in bold, then the rest. */
@@ -10,19 +12,33 @@ export interface WholeState {
 
 const CAUSES = { 'needs-value': 'needs a value', 'no-solution': 'has no solution' } as const;
 
+/** "no chemicals" for what stops the whole sketch. */
+const titleOf = (gap: Finding): string => {
+  const { title } = sayFinding(gap, { measures: 'SI' });
+  return title.charAt(0).toLowerCase() + title.slice(1);
+};
+
 const time = (ms: number): string =>
   ms < 1000 ? `${Math.max(1, Math.round(ms))} ms` : `${(ms / 1000).toFixed(1)} s`;
 
 /** "Solved in 12 ms, edit 214", or what stops the train, first cause first. */
-export function wholeState(sketch: Sketch, edit: number, results: ResultsState): WholeState {
+export function wholeState(
+  sketch: Sketch,
+  edit: number,
+  results: ResultsState,
+  gaps: readonly Finding[] = [],
+): WholeState {
   if (sketch.units.length === 0) return { word: '', rest: 'Nothing to solve yet' };
   if (results.trouble) return { word: 'Stopped', rest: `: ${results.trouble}` };
   if (results.at && results.answering > results.solvedEdit)
     return { word: 'Solving', rest: `, at ${tagOf(sketch, results.at)}, edit ${edit}` };
-  const stops: string[] = [];
+  const whole = gaps.find((gap) => !gap.at.unit && !gap.at.stream);
+  const stops = whole ? [titleOf(whole)] : [];
+  const lacking = new Set(gaps.map((gap) => gap.at.unit));
   let solved = 0;
   for (const unit of sketch.units) {
-    const state = results.units.get(unit.id)?.latest.state;
+    const entry = results.units.get(unit.id)?.latest.state;
+    const state = entry ?? (lacking.has(unit.id) ? 'needs-value' : 'waiting');
     if (state === 'solved') solved += 1;
     else if (state === 'needs-value' || state === 'no-solution') stops.push(`${unit.tag} ${CAUSES[state]}`);
   }

@@ -96,6 +96,22 @@ test('a screen reader hears tag, kind, state and the worst limit of a unit', () 
   expect(streamNames.get(streamId('s4'))).toMatch(/^Stream 4, V-101 to nowhere yet/);
 });
 
+test('before the first answer, what compiling misses shows on the unit and in the title strip', () => {
+  const { stores, sheet } = sheetOn();
+  stores.compiled.setState({
+    gaps: [
+      { code: 'sketch/no-chemicals', weight: 'caution', at: { path: 'chemicals' }, evidence: [] },
+      { code: 'sketch/needs-inlet', weight: 'caution', at: { unit: unitId('u5'), port: 'in' }, evidence: [] },
+    ],
+  });
+  expect(sheet.getState().units.get(unitId('u5'))?.state).toBe('needs-value');
+  expect(sheet.getState().units.get(unitId('u2'))?.state).toBe('waiting');
+  expect(sheet.getState().unitNames.get(unitId('u5'))).toMatch(/^E-101, heater, needs a value: \S/);
+  const { sketch, edit } = stores.sketch.getState();
+  const { word, rest } = wholeState(sketch, edit, stores.results.getState(), stores.compiled.getState().gaps);
+  expect(word + rest).toMatch(/^Not solved yet: .+, E-101 needs a value$/);
+});
+
 test('what is gone from the sketch leaves the selection and the drawer', () => {
   const { stores } = sheetOn();
   stores.session.select([unitId('u5')]);
