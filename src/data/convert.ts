@@ -7,6 +7,7 @@
  */
 import { readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { molarMass_g_mol } from '../engine/chemicals/elements';
 import type { ChemicalData, Corr, CorrForm, CorrProperty } from '../engine/chemicals/types';
 import { chemicalFaults, rowFaults } from './checks';
 import { citationOf } from './citations';
@@ -114,7 +115,8 @@ function chemicals(): ChemicalData[] {
       formula: row.formula!,
       cas: row.cas!,
       family: row.family!,
-      MW_g_mol: number(row.MW_g_per_mol)!,
+      // To all digits: a balance over a reaction closes in mass only if molar masses are sums of the same atoms.
+      MW_g_mol: molarMass(elements[id], number(row.MW_g_per_mol)!, id),
       ...values,
       elements: elements[id] ?? {},
       ...(ppr78 ? { ppr78 } : {}),
@@ -133,6 +135,14 @@ function chemicals(): ChemicalData[] {
     for (const rows of Object.values(c.corr)) for (const r of rows) tags.add(r.source ?? '');
   }
   return out;
+}
+
+function molarMass(counts: Record<string, number> | undefined, listed: number, id: string): number {
+  const summed = counts && molarMass_g_mol(counts);
+  if (summed === undefined) return listed;
+  if (Math.abs(summed - listed) > 2e-4 * listed)
+    throw new Error(`${id}: molar mass ${listed} is not that of its atoms, ${summed}`);
+  return summed;
 }
 
 /** One record a line: differences between two versions of the bank can be read. */

@@ -55,6 +55,12 @@ function pieces(value: Quantity, dims: QuantityFieldProps['dims'], site: Site): 
   return [read.number, unitLabel(read.unit, read.dim)];
 }
 
+/** The unit as it was typed; undefined for a pure number or what cannot be read. */
+function unitTyped(value: Quantity, dims: QuantityFieldProps['dims'], site: Site): string | undefined {
+  const read = parseQuantity(value, dims, site);
+  return read.ok && read.unit !== '' ? read.unit : undefined;
+}
+
 /**
  * A number with the unit its user likes. Enter or leaving the field commits, Esc restores; what cannot be read stays as
  * typed with the reason below it. Dragging the number, or Alt and the arrows, slides it.
@@ -79,6 +85,8 @@ export function QuantityField(props: QuantityFieldProps) {
   const typed = value === undefined ? '' : String(value);
   const shownAside = !focused && draft === null && value !== undefined;
   const blank = draft === null && value === undefined;
+  /** A bare number keeps the unit that stood here: all is selected on coming in, so that any other can be typed over it. */
+  const keptUnit = props.unitKept ?? (value === undefined ? undefined : unitTyped(value, dims, site));
 
   const commit = (text: string | null): void => {
     if (text === null) return;
@@ -92,7 +100,7 @@ export function QuantityField(props: QuantityFieldProps) {
       edit.set(undefined);
       return;
     }
-    const full = props.unitKept && BARE.test(whole) ? `${whole} ${props.unitKept}` : whole;
+    const full = keptUnit && BARE.test(whole) ? `${whole} ${keptUnit}` : whole;
     const read = parseQuantity(full, dims, site);
     if (!read.ok) setRefusal(read);
     else if ((min !== undefined && read.si < min) || (max !== undefined && read.si > max))
@@ -110,8 +118,7 @@ export function QuantityField(props: QuantityFieldProps) {
     const element = input.current;
     if (!element) return;
     element.focus();
-    const end = /^\s*[+\-−\d.eE]+/.exec(element.value)?.[0].length ?? element.value.length;
-    element.setSelectionRange(0, end);
+    element.select();
   };
 
   const [number, unit] = value === undefined ? ['', ''] : pieces(value, dims, site);
@@ -140,11 +147,7 @@ export function QuantityField(props: QuantityFieldProps) {
           value={draft ?? typed}
           onFocus={(event) => {
             setFocused(true);
-            if (draft === null) {
-              const end =
-                /^\s*[+\-−\d.eE]+/.exec(event.target.value)?.[0].length ?? event.target.value.length;
-              event.target.setSelectionRange(0, end);
-            }
+            if (draft === null) event.target.select();
           }}
           onChange={(event) => {
             setDraft(event.target.value);
@@ -201,9 +204,9 @@ export function QuantityField(props: QuantityFieldProps) {
             needs a value
           </span>
         ) : null}
-        {focused && props.unitKept && BARE.test(draft ?? '') ? (
+        {focused && keptUnit && BARE.test(draft ?? '') ? (
           <span className="kept" aria-hidden="true">
-            {props.unitKept}
+            {keptUnit}
           </span>
         ) : null}
         {props.basis ? <span className="basis">{props.basis}</span> : null}

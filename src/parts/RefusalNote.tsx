@@ -33,16 +33,11 @@ interface Props {
 
 /** Why a text was not taken, and what would be: each offer is a button that takes it. */
 export function RefusalNote({ id, refusal, typed, take }: Props) {
-  if ('range' in refusal)
-    return (
-      <p className="refusal" id={id} role="alert">
-        {rangeSentence(refusal)}
-      </p>
-    );
-  const offers = offersOf(refusal, typed);
+  const isRange = 'range' in refusal;
+  const offers = isRange ? percentOf(refusal, typed) : offersOf(refusal, typed);
   return (
     <div className="refusal" id={id} role="alert">
-      <p>{sayRefusal(refusal.code, refusal.found)}</p>
+      <p>{isRange ? rangeSentence(refusal) : sayRefusal(refusal.code, refusal.found)}</p>
       {offers.length > 0 ? (
         <p className="offers">
           {offers.map((text) => (
@@ -61,6 +56,14 @@ export function RefusalNote({ id, refusal, typed, take }: Props) {
       ) : null}
     </div>
   );
+}
+
+/** A bare 30 for a fraction most likely means per cent; it is offered, never assumed. */
+function percentOf({ dim, unit, max }: RangeRefusal, typed: string): readonly string[] {
+  const number = Number(typed.trim());
+  return dim === 'fraction' && unit === '' && max === 1 && number > 1 && number <= 100
+    ? [`${typed.trim()} %`]
+    : [];
 }
 
 /** Whole texts that would be taken instead: the near miss put right, or the number with units that fit. */

@@ -56,8 +56,17 @@ describe('a field of a unit', () => {
     expect(settingsOf(page, 'u2')).toEqual({ p: { P: '7 kPa' } });
   });
 
-  test('asks for a unit when a bare number is typed and offers the usual ones', () => {
+  test('keeps the unit that stood there when a bare number is typed over it', () => {
     const page = openValve();
+    type('p.P', '7');
+    press('p.P', 'Enter');
+    expect(settingsOf(page, 'u2')).toEqual({ p: { P: '7 bar' } });
+  });
+
+  test('asks for a unit when a bare number is typed where none stood, and offers the usual ones', () => {
+    const page = openValve();
+    type('p.P', '');
+    press('p.P', 'Enter');
     type('p.P', '7');
     press('p.P', 'Enter');
     fireEvent.click(screen.getByRole('button', { name: '7 bar(g)' }));
