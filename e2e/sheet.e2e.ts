@@ -43,6 +43,8 @@ const portAt = (page: Page, tag: string, port: string): Promise<readonly [number
 test.beforeEach(async ({ page }) => {
   await page.goto('./');
   await expect(page.locator('[data-shelf="feed"]')).toBeVisible();
+  // The framed example takes the focus when it appears.
+  await expect(page.locator('[data-example]').first()).toBeVisible();
 });
 
 test('units are dragged from the shelf, connected by pulling, and a line opens for another', async ({

@@ -13,13 +13,16 @@ import {
 import 'reactflow/dist/style.css';
 import type { UnitId } from '../engine/ids';
 import { useSession, useSketch, useStores } from '../store/react';
-import './canvas.css';
+import './sheet.css';
+import './drawing.css';
+import './hand.css';
 import { adds, chooseUnit } from './choose';
 import { DropLayer } from './DropLayer';
 import { createDrag } from './drag';
 import { Frame } from './Frame';
 import { putHandle } from './handle';
 import { keepScene, quietAgain } from './keepScene';
+import { endKeys } from './keys';
 import { Lines } from './Lines';
 import { nodesOf } from './nodes';
 import { OfferMenu } from './OfferMenu';
@@ -139,7 +142,10 @@ function Flow({ view }: { readonly view: SheetView }) {
       edges={NO_EDGES}
       nodeTypes={NODE_TYPES}
       onNodesChange={change}
-      onNodeClick={(event, node) => chooseUnit(stores, node.id as UnitId, event)}
+      onNodeClick={(event, node) => {
+        endKeys(stores, sheet);
+        chooseUnit(stores, node.id as UnitId, event);
+      }}
       onNodeDragStart={drag.start}
       onNodeDragStop={drag.stop}
       onSelectionStart={(event) => {
@@ -154,7 +160,10 @@ function Flow({ view }: { readonly view: SheetView }) {
       onMoveStart={(event) => {
         if (event) view.handled();
       }}
-      onPaneClick={() => stores.session.select([], [])}
+      onPaneClick={() => {
+        endKeys(stores, sheet);
+        stores.session.select([], []);
+      }}
       nodesDraggable={writable}
       nodesConnectable={false}
       nodesFocusable={false}

@@ -1,7 +1,7 @@
 import { useEffect, useState } from 'react';
 import { plainSymbol } from '../drawing/symbols/registry';
 import { useSession, useSketch, useStores } from '../store/react';
-import './canvas.css';
+import './shelf.css';
 import { drop, dropAt, place } from './drop';
 import { sheetOf } from './handle';
 import { follow } from './pointer';

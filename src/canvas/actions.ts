@@ -39,7 +39,7 @@ function deleteSelected(stores: Stores): void {
   if (!made) return;
   const { sketch } = stores.sketch.getState();
   const left = streams.filter((id) => sketch.streams.some((stream) => stream.id === id));
-  stores.session.setState({ units: [], streams: left, drawer: null, spoken: `Done: ${made.label}` });
+  stores.session.setState({ units: [], streams: left, spoken: `Done: ${made.label}` });
 }
 
 /** Streams first, then units; what stays because an outlet always has a stream is no reason to keep the rest. */

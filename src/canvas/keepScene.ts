@@ -68,6 +68,7 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
       if (sketch === shown) return;
       shown = sketch;
       prune(stores, sketch);
+      settle(stores, sheet);
       build();
     }),
     stores.results.subscribe((now, before) => {
@@ -137,6 +138,16 @@ function namesOf(
       ]),
     ),
   };
+}
+
+/** Another document ends what was under way on the one before. */
+function settle({ session }: Stores, sheet: SheetStore): void {
+  const { moved, pulling, offer } = sheet.getState();
+  if (moved) sheet.setState({ moved: null, movingByKeys: false });
+  if (pulling || offer) {
+    sheet.setState({ pulling: null, offer: null });
+    session.setState({ connecting: null });
+  }
 }
 
 /** What is gone from the sketch leaves the selection and the drawer. */

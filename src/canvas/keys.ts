@@ -158,6 +158,13 @@ export function endMove(stores: Stores, sheet: SheetStore): void {
   sheet.setState({ moved: null, movingByKeys: false });
 }
 
+/** The pointer takes over: units moved by keys stay where they are, a connection started by keys is left. */
+export function endKeys(stores: Stores, sheet: SheetStore): void {
+  const { movingByKeys, pulling } = sheet.getState();
+  if (movingByKeys) endMove(stores, sheet);
+  if (pulling?.byKeys) cancelPull(stores, sheet);
+}
+
 /** Enter: ends a connection or a move; else opens the drawer of what is selected. */
 export function enter(stores: Stores): void {
   const handle = sheetOf(stores);

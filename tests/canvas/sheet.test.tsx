@@ -233,3 +233,19 @@ test('a zoom changes no document and is asked of the sheet by its stores', () =>
   expect(sheetOf(stores)?.zoom()).toBeCloseTo(1, 9);
   expect(stores.sketch.getState().sketch).toBe(before);
 });
+
+test('another document ends what was under way on the one before', () => {
+  const { stores, page } = show();
+  act(() => stores.session.select([unitId('u5')]));
+  press(stores, 'r');
+  press(stores, 'm');
+  press(stores, 'ArrowUp');
+  act(() => void stores.sketch.undo());
+  expect(sheetOf(stores)?.store.getState()).toMatchObject({ moved: null, movingByKeys: false });
+  expect(stores.sketch.getState().future).toHaveLength(1);
+  press(stores, 'c');
+  expect(page.querySelector('.target')).not.toBeNull();
+  act(() => void stores.sketch.redo());
+  expect(page.querySelector('.target')).toBeNull();
+  expect(stores.session.getState().connecting).toBeNull();
+});
