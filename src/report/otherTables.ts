@@ -45,7 +45,7 @@ export function unitTable(input: ReportInput): Table {
         key: unit.id,
         label: unit.tag,
         cells: [
-          text(kindWord(unit.kind)),
+          text(kindWord(unit.kind, unit.settings.service)),
           text(unit.name ?? ''),
           text(stateText(result?.state)),
           duty(watts[k]?.heat),

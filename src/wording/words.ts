@@ -3,8 +3,12 @@ import { KIND_WORDS } from './kinds';
 
 const wordsOf = (kind: string) => (Object.hasOwn(KIND_WORDS, kind) ? KIND_WORDS[kind] : undefined);
 
-/** "flash drum" for 'drum'. */
-export const kindWord = (kind: string): string => wordsOf(kind)?.name ?? humanised(kind);
+/** "flash drum" for 'drum'; a kind that is called by its service ("fan") goes by that. */
+export function kindWord(kind: string, service?: unknown): string {
+  const words = wordsOf(kind);
+  const own = typeof service === 'string' ? words?.options?.[service] : undefined;
+  return own ?? words?.name ?? humanised(kind);
+}
 
 /** One line on what a kind does; empty when nobody wrote one. */
 export const kindAbout = (kind: string): string => wordsOf(kind)?.about ?? '';

@@ -3,6 +3,7 @@ import { buildScene } from '../../src/drawing/scene';
 import { portFinder, portPlace, standingUnits } from '../../src/drawing/standing';
 import { iconOf, symbolToSvg } from '../../src/drawing/symbols/icon';
 import { plainSymbol, SYMBOLS, symbolOf } from '../../src/drawing/symbols/registry';
+import { linkShapes } from '../../src/drawing/symbols/shapes';
 import {
   boxOnSheet,
   type Pose,
@@ -118,6 +119,18 @@ test('a drum with a duty has a coil and a heat link, an adiabatic one has neithe
   expect(drum({ h: { duty: '-20 kW' } }).link?.flow).toBe('out');
   expect(drum({ h: { T: '20 degC' } }).link?.flow).toBe('none');
   expect(drum({ h: { T: '20 degC' } }).paths.length).toBe(drum({}).paths.length + 1);
+});
+
+test('machines have a shaft link with a double bar, and a fan its blades', () => {
+  const drawn = (kind: string, settings: { [key: string]: Json } = {}) =>
+    symbolOf(sheetOf([[kind, 'K-1', 0, 0, { settings }]], []).units[0]!);
+  expect(drawn('pump').link).toMatchObject({ carries: 'shaft', flow: 'in' });
+  expect(drawn('expander').link?.flow).toBe('out');
+  const { line, marks } = linkShapes(drawn('compressor').link!);
+  expect(line.dash).toBe('7 2 1.5 2');
+  expect(marks[0]!.d.match(/M/g)).toHaveLength(2);
+  expect(linkShapes(drawn('heater').link!).line.dash).toBe('5 2.5');
+  expect(drawn('compressor', { service: 'fan' }).paths.length).toBe(drawn('compressor').paths.length + 1);
 });
 
 test.each(['feed', 'product'])(

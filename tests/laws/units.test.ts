@@ -89,6 +89,22 @@ const CASES: Readonly<
       efficiency: between(r, 0.3, 1),
     }),
   },
+  compressor: {
+    ins: ['in'],
+    outs: ['out'],
+    settings: (r) => ({
+      p: oneOf(r, [{ ratio: between(r, 1, 5) }, { P: between(r, 41e5, 80e5) }]),
+      efficiency: oneOf(r, [{ isentropic: between(r, 0.5, 1) }, { polytropic: between(r, 0.5, 1) }]),
+    }),
+  },
+  expander: {
+    ins: ['in'],
+    outs: ['out'],
+    settings: (r) => ({
+      p: oneOf(r, [{ ratio: between(r, 0.2, 1) }, { P: 1.1e5 }]),
+      efficiency: oneOf(r, [{ isentropic: between(r, 0.5, 1) }, { polytropic: between(r, 0.5, 1) }]),
+    }),
+  },
   heater: {
     ins: ['in'],
     outs: ['out'],

@@ -34,6 +34,12 @@ describe('every kind', () => {
     for (const word of words) expect(word).toMatch(/^[a-zA-Z][a-zA-Z0-9 ()]*$/);
   });
 
+  test('that is called by its service goes by that', () => {
+    expect(kindWord('compressor', 'fan')).toBe('fan');
+    expect(kindWord('compressor')).toBe('compressor');
+    expect(kindWord('valve', 'fan')).toBe('valve');
+  });
+
   test('that nobody wrote words for is shown by its own', () => {
     expect(kindWord('steamTrap')).toBe('steam trap');
     expect(portWord('steamTrap', 'in3')).toBe('inlet 3');

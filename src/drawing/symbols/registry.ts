@@ -2,9 +2,11 @@ import { CATALOGUE } from '../../engine/units/catalogue';
 import type { KindCatalogue, PortSpec } from '../../engine/units/types';
 import type { SketchUnit } from '../../sketch/types';
 import type { SymbolData } from '../types';
+import { compressor } from './compressor';
 import { cooler } from './cooler';
 import { divide } from './divide';
 import { drum } from './drum';
+import { expander } from './expander';
 import { feed } from './feed';
 import { heater } from './heater';
 import { join } from './join';
@@ -22,6 +24,8 @@ export const SYMBOLS: Readonly<Record<string, SymbolKind>> = {
   divide,
   valve,
   pump,
+  compressor,
+  expander,
   heater,
   cooler,
   drum,

@@ -1,6 +1,8 @@
+import { compressor } from './compressor/catalogue';
 import { cooler } from './cooler/catalogue';
 import { divide } from './divide/catalogue';
 import { drum } from './drum/catalogue';
+import { expander } from './expander/catalogue';
 import { feed } from './feed/catalogue';
 import { heater } from './heater/catalogue';
 import { join } from './join/catalogue';
@@ -17,6 +19,8 @@ export const CATALOGUE: Readonly<Record<string, KindCatalogue>> = {
   divide,
   valve,
   pump,
+  compressor,
+  expander,
   heater,
   cooler,
   drum,

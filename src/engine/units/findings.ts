@@ -1,6 +1,8 @@
+import type { COMPRESSOR_FINDINGS } from './compressor/findings';
 import type { COOLER_FINDINGS } from './cooler/findings';
 import type { DIVIDE_FINDINGS } from './divide/findings';
 import type { DRUM_FINDINGS } from './drum/findings';
+import type { EXPANDER_FINDINGS } from './expander/findings';
 import type { FEED_FINDINGS } from './feed/findings';
 import type { HEATER_FINDINGS } from './heater/findings';
 import type { JOIN_FINDINGS } from './join/findings';
@@ -17,6 +19,8 @@ export type UnitFindingCode =
   | (typeof DIVIDE_FINDINGS)[number]
   | (typeof VALVE_FINDINGS)[number]
   | (typeof PUMP_FINDINGS)[number]
+  | (typeof COMPRESSOR_FINDINGS)[number]
+  | (typeof EXPANDER_FINDINGS)[number]
   | (typeof HEATER_FINDINGS)[number]
   | (typeof COOLER_FINDINGS)[number]
   | (typeof DRUM_FINDINGS)[number]

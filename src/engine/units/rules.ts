@@ -1,5 +1,7 @@
+import { COMPRESSOR_RULES } from './compressor/limits';
 import { COOLER_RULES } from './cooler/limits';
 import { DRUM_RULES } from './drum/limits';
+import { EXPANDER_RULES } from './expander/limits';
 import { HEATER_RULES } from './heater/limits';
 import { ENTERS_BELOW } from './limits/joiningPressure';
 import { PAIR_NONE, PAIR_PREDICTED } from './limits/pairs';
@@ -16,6 +18,8 @@ export const RULES: readonly Rule[] = [
   ENTERS_BELOW,
   ...VALVE_RULES,
   ...PUMP_RULES,
+  ...COMPRESSOR_RULES,
+  ...EXPANDER_RULES,
   ...HEATER_RULES,
   ...COOLER_RULES,
   ...UTILITY_RULES,

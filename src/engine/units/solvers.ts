@@ -1,6 +1,8 @@
+import { compressor } from './compressor/solve';
 import { cooler } from './cooler/solve';
 import { divide } from './divide/solve';
 import { drum } from './drum/solve';
+import { expander } from './expander/solve';
 import { feed } from './feed/solve';
 import { heater } from './heater/solve';
 import { join } from './join/solve';
@@ -25,6 +27,8 @@ export const SOLVERS: Readonly<Record<string, AnyKind>> = {
   divide: seal(divide),
   valve: seal(valve),
   pump: seal(pump),
+  compressor: seal(compressor),
+  expander: seal(expander),
   heater: seal(heater),
   cooler: seal(cooler),
   drum: seal(drum),

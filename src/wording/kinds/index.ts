@@ -1,7 +1,9 @@
 import type { KindWords } from '../types';
+import { compressor } from './compressor';
 import { cooler } from './cooler';
 import { divide } from './divide';
 import { drum } from './drum';
+import { expander } from './expander';
 import { feed } from './feed';
 import { heater } from './heater';
 import { join } from './join';
@@ -17,6 +19,8 @@ export const KIND_WORDS: Readonly<Record<string, KindWords>> = {
   divide,
   valve,
   pump,
+  compressor,
+  expander,
   heater,
   cooler,
   drum,

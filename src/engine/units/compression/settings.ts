@@ -1,0 +1,49 @@
+import type { ResultSpec, SettingSpec } from '../types';
+
+/** Outlet of a machine; drive efficiency for electric power only. */
+export const machineOutlet: SettingSpec = {
+  is: 'some',
+  count: 1,
+  of: {
+    P: { is: 'quantity', dim: 'pressure', min: 0 },
+    ratio: { is: 'quantity', dim: 'number', min: 0 },
+    T: { is: 'quantity', dim: 'temperature', min: 0 },
+  },
+};
+
+export const machineEfficiency: SettingSpec = {
+  is: 'some',
+  count: 1,
+  of: {
+    isentropic: { is: 'quantity', dim: 'fraction', min: 0.01, max: 1 },
+    polytropic: { is: 'quantity', dim: 'fraction', min: 0.01, max: 1 },
+  },
+  otherwise: {
+    value: { isentropic: 0.75 },
+    text: '75 %',
+    why: 'No efficiency was given; 75 % isentropic is common practice in early design.',
+  },
+};
+
+export const machineDrive: SettingSpec = {
+  is: 'quantity',
+  dim: 'fraction',
+  min: 0.01,
+  max: 1,
+  optional: true,
+};
+
+export const MACHINE_RESULTS: Readonly<Record<string, ResultSpec>> = {
+  power_W: { dim: 'power' },
+  electric_W: { dim: 'power' },
+  P_Pa: { dim: 'pressure' },
+  ratio: { dim: 'number' },
+  T_K: { dim: 'temperature' },
+  isentropicT_K: { dim: 'temperature' },
+  isentropicEfficiency: { dim: 'fraction' },
+  polytropicEfficiency: { dim: 'fraction' },
+  isentropicHead_J_kg: { dim: 'massEnergy' },
+  polytropicHead_J_kg: { dim: 'massEnergy' },
+  suctionVolume_m3_s: { dim: 'volumeFlow' },
+  dewMargin_K: { dim: 'temperatureDifference' },
+};

@@ -1,0 +1,196 @@
+import type { StreamState } from '../../equilibrium/types';
+import { noSolution, type Outcome, solved } from '../../outcome';
+import type { ThermoModel } from '../../thermo/types';
+import { streamAt, totalOf, type WarmState, warmFrom, warmOf } from '../streams';
+import type { Call } from '../types';
+import { followPath, gasVolumes } from './path';
+import type { MachineSettings } from './types';
+
+/** Largest steps of ln P: with the gas alone, and with a flash at every point. */
+const GAS_STEP = 0.1;
+const FLASH_STEP = 0.2;
+/** For the efficiency that is only reported. */
+const REPORT_STEP = 0.25;
+
+/** Start values of a machine's flashes. */
+export interface MachineWarm {
+  readonly out?: WarmState;
+  readonly isentropic?: WarmState;
+  readonly dew?: WarmState;
+}
+
+/** What enters, prepared once. */
+export interface Entering {
+  readonly stream: StreamState;
+  readonly total_mol_s: number;
+  readonly h_J_mol: number;
+  /** The gas alone, when what enters is one gas phase. */
+  readonly gas?: { readonly thermo: ThermoModel; readonly x: Float64Array };
+}
+
+/** What leaves at a pressure. */
+export interface Leaving {
+  readonly out: StreamState;
+  /** Absent when a chemical has no standard entropy. */
+  readonly isentropic?: StreamState;
+}
+
+const flowing = (s: StreamState) => s.phases.filter((p) => p.fraction > 0);
+export const isOneGas = (s: StreamState): boolean => {
+  const phases = flowing(s);
+  const kind = phases.length === 1 ? phases[0]!.kind : undefined;
+  return kind === 'vapour' || (kind === 'dense' && s.vapourFraction === 1);
+};
+
+export function entering(call: Call<unknown>, stream: StreamState): Entering {
+  const total_mol_s = totalOf(stream.n_mol_s);
+  const common = { stream, total_mol_s, h_J_mol: stream.H_W / total_mol_s };
+  if (!isOneGas(stream)) return common;
+  const present: number[] = [];
+  for (let i = 0; i < stream.n_mol_s.length; i++) if (stream.n_mol_s[i]! > 0) present.push(i);
+  const x = Float64Array.from(present, (i) => stream.n_mol_s[i]! / total_mol_s);
+  return { ...common, gas: { thermo: call.model.of(present), x } };
+}
+
+/** Work without losses to the work that is done, by the direction in which the fluid goes. */
+export const withLosses = (ideal: number, efficiency: number): number =>
+  ideal >= 0 ? ideal / efficiency : ideal * efficiency;
+
+/** The fluid at the same entropy and another pressure. */
+function isentropicTo(
+  call: Call<MachineSettings>,
+  e: Entering,
+  P_Pa: number,
+  warm: MachineWarm,
+): Outcome<StreamState> {
+  const { stream, total_mol_s } = e;
+  // Without a standard entropy the flash itself gives the reason and the chemical.
+  const s_J_molK = (stream.S_W_K ?? 0) / total_mol_s;
+  const start = warmFrom(warm.isentropic, stream.n_mol_s, stream.T_K);
+  return streamAt(call, stream.n_mol_s, { P_Pa, s_J_molK }, start);
+}
+
+/** Enthalpy flow after a path of constant polytropic efficiency, with a flash at every point [W]; undefined without states. */
+function flashedPath_W(
+  call: Call<MachineSettings>,
+  e: Entering,
+  P_Pa: number,
+  factor: number,
+): number | undefined {
+  const { stream, total_mol_s } = e;
+  let warm = warmOf(stream);
+  const h = followPath(
+    (P, h_J_mol) => {
+      const made = streamAt(
+        call,
+        stream.n_mol_s,
+        { P_Pa: P, H_W: h_J_mol * total_mol_s },
+        warmFrom(warm, stream.n_mol_s, stream.T_K),
+      );
+      if (made.state !== 'solved') return undefined;
+      warm = warmOf(made.value);
+      return made.value.phases.reduce((v, p) => v + p.fraction * p.v_m3_mol, 0);
+    },
+    { P_Pa: stream.P_Pa, h_J_mol: e.h_J_mol },
+    P_Pa,
+    factor,
+    FLASH_STEP,
+  );
+  return h === undefined ? undefined : h * total_mol_s;
+}
+
+const outAt = (
+  call: Call<MachineSettings>,
+  e: Entering,
+  P_Pa: number,
+  H_W: number,
+  warm: MachineWarm,
+): Outcome<StreamState> =>
+  streamAt(call, e.stream.n_mol_s, { P_Pa, H_W }, warmFrom(warm.out, e.stream.n_mol_s, e.stream.T_K));
+
+/** What leaves after a path of constant polytropic efficiency. */
+function polytropicTo(
+  call: Call<MachineSettings>,
+  e: Entering,
+  P_Pa: number,
+  efficiency: number,
+  warm: MachineWarm,
+): Outcome<StreamState> {
+  const factor = P_Pa >= e.stream.P_Pa ? 1 / efficiency : efficiency;
+  if (e.gas) {
+    const at = { P_Pa: e.stream.P_Pa, h_J_mol: e.h_J_mol };
+    const volumes = gasVolumes(e.gas.thermo, e.gas.x, e.stream.T_K);
+    const h = followPath(volumes, at, P_Pa, factor, GAS_STEP);
+    if (h !== undefined) {
+      const made = outAt(call, e, P_Pa, h * e.total_mol_s, warm);
+      // Where liquid forms the gas alone was the wrong fluid to follow.
+      if (made.state === 'solved' && isOneGas(made.value)) return made;
+    }
+  }
+  const H_W = flashedPath_W(call, e, P_Pa, factor);
+  if (H_W === undefined)
+    return noSolution({
+      code: 'compression/path-breaks-off',
+      weight: 'beyond-limit',
+      at: { unit: call.unit, path: 'efficiency.polytropic' },
+      evidence: [{ name: 'pressure', value: P_Pa, dim: 'pressure' }],
+    });
+  return outAt(call, e, P_Pa, H_W, warm);
+}
+
+/** What leaves at a pressure, with the efficiency that is set, and without losses. */
+export function leavingAt(
+  call: Call<MachineSettings>,
+  e: Entering,
+  P_Pa: number,
+  warm: MachineWarm,
+): Outcome<Leaving> {
+  const { efficiency } = call.settings;
+  const { stream } = e;
+  if (P_Pa === stream.P_Pa) return solved({ out: stream, isentropic: stream });
+  if ('polytropic' in efficiency) {
+    const made = polytropicTo(call, e, P_Pa, efficiency.polytropic, warm);
+    if (made.state !== 'solved') return noSolution(...made.findings);
+    if (stream.S_W_K === undefined) return solved({ out: made.value }, made.findings);
+    const ideal = isentropicTo(call, e, P_Pa, warm);
+    const isentropic = ideal.state === 'solved' ? { isentropic: ideal.value } : {};
+    return solved({ out: made.value, ...isentropic }, made.findings);
+  }
+  const ideal = isentropicTo(call, e, P_Pa, warm);
+  if (ideal.state !== 'solved') return noSolution(...ideal.findings);
+  const H_W = stream.H_W + withLosses(ideal.value.H_W - stream.H_W, efficiency.isentropic);
+  const made = outAt(call, e, P_Pa, H_W, warm);
+  if (made.state !== 'solved') return noSolution(...made.findings);
+  return solved({ out: made.value, isentropic: ideal.value }, made.findings);
+}
+
+/**
+ * The polytropic efficiency that leads from what enters to what leaves, both one gas phase: secant steps on the path itself,
+ * from the ideal gas' answer. Undefined where it cannot be told.
+ */
+export function polytropicEfficiency(e: Entering, { out, isentropic }: Leaving): number | undefined {
+  const { stream, gas } = e;
+  if (!gas || !isentropic || !isOneGas(out) || out.P_Pa === stream.P_Pa) return undefined;
+  const up = out.P_Pa > stream.P_Pa;
+  const [ideal, real] = [Math.log(isentropic.T_K / stream.T_K), Math.log(out.T_K / stream.T_K)];
+  const at = { P_Pa: stream.P_Pa, h_J_mol: e.h_J_mol };
+  const wanted = out.H_W / e.total_mol_s - e.h_J_mol;
+  const volumes = gasVolumes(gas.thermo, gas.x, stream.T_K);
+  const work = (factor: number): number =>
+    (followPath(volumes, at, out.P_Pa, factor, REPORT_STEP) ?? Number.NaN) - e.h_J_mol;
+  let factor = real / ideal;
+  let last = factor;
+  let lastMiss = 0;
+  for (let pass = 0; pass < 8; pass++) {
+    const miss = work(factor) - wanted;
+    if (!Number.isFinite(miss)) return undefined;
+    if (Math.abs(miss) < 1e-8 * Math.abs(wanted)) break;
+    // The work is nearly proportional to the factor: that is the first step.
+    const slope = pass === 0 ? (miss + wanted) / factor : (miss - lastMiss) / (factor - last);
+    last = factor;
+    lastMiss = miss;
+    factor -= miss / slope;
+  }
+  const efficiency = up ? 1 / factor : factor;
+  return efficiency > 0 && Number.isFinite(efficiency) ? efficiency : undefined;
+}
