@@ -41,7 +41,7 @@ export function SideBar({ side, full, toDisplay, gap, unit, placeholder, label }
         />
       ))}
       {hasUnknown ? (
-        <li className="piece hatched" style={{ width: `${rest.toFixed(3)}%` }}>
+        <li className="piece hatched rest" style={{ width: `${rest.toFixed(3)}%` }}>
           <span>not known: {side.unknown.join(', ')}</span>
         </li>
       ) : null}

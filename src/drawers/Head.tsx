@@ -21,7 +21,7 @@ export function Head({ label, mark, title, sentence }: Props) {
           Close
         </button>
       </div>
-      <p aria-live="polite">{sentence}</p>
+      <p>{sentence}</p>
     </header>
   );
 }

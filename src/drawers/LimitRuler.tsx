@@ -1,5 +1,6 @@
 import { scaleLinear } from 'd3-scale';
 import type { Finding, Weight } from '../engine/outcome';
+import { inOurDigits } from '../parts/tickText';
 import { displayUnit, type Measures } from '../quantity';
 
 interface RulerData {
@@ -30,10 +31,10 @@ export function LimitRuler({ value, limit, unit, weight }: RulerData & { readonl
   const far = Math.max(value, limit);
   const near = Math.min(value, limit);
   const room = (far - near || Math.abs(far) || 1) * 0.6;
-  const isFromZero = near >= 0 && near > (far - near) * 0.5 && near < (far - near) * 12;
-  const x = scaleLinear([isFromZero || near === 0 ? 0 : near - room, far + room], [LEFT, RIGHT]).nice(5);
+  const isFromZero = near >= 0 && near < (far - near) * 12;
+  const x = scaleLinear([isFromZero ? 0 : near - room, far + room], [LEFT, RIGHT]).nice(5);
   const [from = 0] = x.domain();
-  const text = x.tickFormat(5);
+  const text = inOurDigits(x.tickFormat(5));
   return (
     <svg
       className="limit-ruler"

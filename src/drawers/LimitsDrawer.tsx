@@ -16,7 +16,7 @@ const plural = (weight: Weight, n: number): string =>
 export function LimitsDrawer() {
   const found = useResults((state) => state.findings);
   const notes = useCompiled((state) => state.notes);
-  const rows = worstFirst([...found, ...notes]);
+  const rows = worstFirst(found);
   const counts = WEIGHTS.map(
     (weight) => [weight, rows.filter((row) => row.weight === weight).length] as const,
   );
@@ -47,6 +47,21 @@ export function LimitsDrawer() {
             </ul>
           </>
         )}
+        {notes.length > 0 ? (
+          <section className="section about-sketch">
+            <div className="section-head">
+              <h3>About the sketch itself</h3>
+            </div>
+            <ul className="limits">
+              {worstFirst(notes).map((note) => (
+                <LimitRow
+                  key={`${note.code} ${note.at.unit} ${note.at.stream} ${note.at.path}`}
+                  finding={note}
+                />
+              ))}
+            </ul>
+          </section>
+        ) : null}
       </div>
     </>
   );

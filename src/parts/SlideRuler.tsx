@@ -1,6 +1,7 @@
 import { scaleLinear } from 'd3-scale';
 import { MINUS } from '../quantity';
 import { PX_PER_STEP, type SlideState } from './slide';
+import { inOurDigits } from './tickText';
 
 const W = 240;
 const PAD = 10;
@@ -17,7 +18,7 @@ export function SlideRuler({ state, step }: { readonly state: SlideState; readon
   let half = ((W / 2 - PAD) / PX_PER_STEP) * step;
   while (Math.abs(now - from) > half) half *= 2;
   const x = scaleLinear([from - half, from + half], [PAD, W - PAD]);
-  const label = x.tickFormat(5);
+  const label = inOurDigits(x.tickFormat(5));
   return (
     <svg className="slide-ruler" viewBox={`0 0 ${W} 26`} aria-hidden="true">
       {x.ticks(40).map((tick) => (

@@ -47,6 +47,28 @@ describe('a composition', () => {
     expect(screen.getByText(/5.00 % missing/)).toBeTruthy();
   });
 
+  test('offers per cent for a bare number above one among fractions, and does not assume it', () => {
+    const page = openFeed({
+      ...letDown,
+      units: letDown.units.map((u) =>
+        u.id === 'u1'
+          ? {
+              ...u,
+              settings: {
+                ...u.settings,
+                composition: { basis: 'mole', parts: { methane: 0.3, 'n-butane': 0.7 } },
+              },
+            }
+          : u,
+      ),
+    });
+    fireEvent.change(field('composition.parts.methane'), { target: { value: '30' } });
+    fireEvent.blur(field('composition.parts.methane'));
+    expect(settingsOf(page, 'u1').composition).toMatchObject({ parts: { methane: 0.3 } });
+    fireEvent.click(screen.getByRole('button', { name: '30 %' }));
+    expect(settingsOf(page, 'u1').composition).toMatchObject({ parts: { methane: '30 %' } });
+  });
+
   test('is scaled to 100 % on demand', () => {
     const page = openFeed({
       ...letDown,

@@ -45,6 +45,15 @@ describe('the limits drawer', () => {
     expect(page.stores.session.getState().drawer).toEqual({ is: 'limits' });
   });
 
+  test('keeps what is noted about the sketch apart from the limits', () => {
+    openDrawer('limits', ({ stores }) => {
+      stores.results.setState({ findings: [finding('caution', 'u2')] });
+      stores.compiled.setState({ notes: [{ ...finding('note', 'u3'), code: 'sketch/parts-normalised' }] });
+    });
+    expect(document.querySelector('.counts')?.textContent?.trim()).toBe('1 caution');
+    expect(document.querySelectorAll('.about-sketch .limit')).toHaveLength(1);
+  });
+
   test('says that none fired and what is checked, without calling anything fine', () => {
     openDrawer('limits');
     expect(screen.getByText(/none of these checks fired/i)).toBeTruthy();

@@ -43,7 +43,11 @@ export function Pairs() {
               <td>{kijText(kij)}</td>
               <td>
                 {ORIGINS[origin]}
-                {source ? <span className="muted source">{source}</span> : null}
+                {source ? (
+                  <span className="muted source" title={source}>
+                    {source}
+                  </span>
+                ) : null}
               </td>
             </tr>
           ))}

@@ -48,13 +48,7 @@ export function Composition({ stream, outOfDate }: Props) {
         <thead>
           <tr>
             <th scope="col">Component</th>
-            <td>
-              {isTwo ? (
-                <span className="key">
-                  <i className="outlined" /> vapour <i className="filled" /> liquid
-                </span>
-              ) : null}
-            </td>
+            <td />
             <th scope="col">{basisLabel(basis, set)}</th>
             <th scope="col">{basisLabel(other, set)}</th>
           </tr>
@@ -82,6 +76,11 @@ export function Composition({ stream, outOfDate }: Props) {
           ))}
         </tbody>
       </table>
+      {isTwo ? (
+        <p className="key">
+          <i className="outlined" /> vapour <i className="filled" /> liquid, each of its own phase
+        </p>
+      ) : null}
     </section>
   );
 }

@@ -1,6 +1,6 @@
 import { useMemo } from 'react';
 import type { UnitId } from '../../engine/ids';
-import { useSite } from '../../parts/measures';
+import { useMeasures, useSite } from '../../parts/measures';
 import { TextField } from '../../parts/TextField';
 import type { SketchUnit } from '../../sketch/types';
 import { setMaterial, setTag, setUnitName } from '../../store/commands';
@@ -32,6 +32,8 @@ export function UnitDrawer({ id }: { readonly id: UnitId }) {
   const found = useResults((state) => state.findings);
   const entry = useUnitResult(id);
   const say = useSay();
+  const measures = useMeasures();
+  const own = useResults((state) => state.closure?.byUnit[id]);
   const here = useMemo(() => gaps.filter((gap) => gap.at.unit === id), [gaps, id]);
   const reasons = entry?.latest.state === 'no-solution' ? (entry.latest.reasons ?? []) : [];
   const findings = useMemo(() => {
@@ -52,7 +54,7 @@ export function UnitDrawer({ id }: { readonly id: UnitId }) {
       title={<Names unit={unit} />}
       sentence={
         kind
-          ? stateSentence(entry, here, say)
+          ? stateSentence(entry, here, say, measures, own)
           : 'This kind of unit is not available in this version; it is kept as it is.'
       }
     />

@@ -1,6 +1,6 @@
-import type { UnitResult } from '../../engine/network/types';
+import type { UnitClosure, UnitResult } from '../../engine/network/types';
 import type { Finding } from '../../engine/outcome';
-import { formatSignificant } from '../../quantity';
+import { displayUnit, formatDifference, type Measures } from '../../quantity';
 import { drawnState, type Shown } from '../../store/resultsStore';
 import type { Said } from '../../wording';
 
@@ -9,15 +9,16 @@ export function stateSentence(
   entry: Shown<UnitResult> | undefined,
   gaps: readonly Finding[],
   say: (finding: Finding) => Said,
+  measures: Measures,
+  own: UnitClosure | undefined,
 ): string {
   const [gap] = gaps;
   const [reason] = entry?.latest.reasons ?? [];
   if (gap) return say(gap).sentence;
   switch (drawnState(entry)) {
     case 'solved': {
-      const { iterations, residual } = entry?.latest ?? {};
-      if (!iterations) return 'Solved.';
-      return `Solved, ${iterations} iterations${residual ? `, residual ${formatSignificant(residual, 2)}` : ''}.`;
+      const { iterations } = entry?.latest ?? {};
+      return `Solved${iterations ? `, ${iterations} iterations` : ''}.${own ? ` ${ownClosure(own, measures)}` : ''}`;
     }
     case 'needs-value':
       return reason ? say(reason).sentence : 'Needs a value.';
@@ -31,4 +32,13 @@ export function stateSentence(
       if (reason) return say(reason).sentence;
       return entry ? 'Waiting for what is upstream.' : 'Not solved yet.';
   }
+}
+
+/** "Own closure: mass 0 kg/h, energy 3 × 10⁻⁹ kW." */
+function ownClosure({ mass, energy }: UnitClosure, measures: Measures): string {
+  const off = ({ in: into, made, out }: UnitClosure['mass'], dim: 'massFlow' | 'power'): string => {
+    const { label, toDisplay } = displayUnit(dim, measures);
+    return `${formatDifference(toDisplay(into + made - out))} ${label}`;
+  };
+  return `Own closure: mass ${off(mass, 'massFlow')}, energy ${off(energy, 'power')}.`;
 }
