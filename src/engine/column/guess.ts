@@ -165,7 +165,9 @@ function bestSplit(
   const asks = s.task.fixed.filter((x) => missOf(x, probe) !== undefined);
   if (asks.length === 0) return undefined;
   const ms =
-    asks.length === 1 ? [sharp] : [0.15, 0.25, 0.35, 0.5, 0.7, 0.9].map((r) => Math.max(1.5, r * (s.places - 1)));
+    asks.length === 1
+      ? [sharp]
+      : [0.15, 0.25, 0.35, 0.5, 0.7, 0.9].map((r) => Math.max(1.5, r * (s.places - 1)));
   const span = Math.max(...lnK) - Math.min(...lnK) + 1;
   let best: { D: number; m: number; miss: number } | undefined;
   for (const m of ms) {

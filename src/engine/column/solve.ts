@@ -2,7 +2,7 @@ import { startBySums } from './absorber';
 import { type Guess, guessOf } from './guess';
 import { Newton, type NewtonEnd, type Wanted } from './newton';
 import { type Sweeps, startBySweeps } from './start';
-import { StageSystem } from './system';
+import { StageSystem, shapeOf } from './system';
 import { flowTarget, type Target, targetOf } from './targets';
 import type { Attempt, ColumnState, ColumnTask, Effort, Fixing } from './types';
 
@@ -46,11 +46,16 @@ class Search {
   private readonly wanted: Wanted;
   private readonly direct: ReadonlyMap<number, number>;
   private failure: Failure | undefined;
+  /** How far the last way was followed, 0 to 1. */
+  private way = 0;
 
-  constructor(private readonly task: ColumnTask) {
-    const system = new StageSystem(task);
+  constructor(
+    private readonly task: ColumnTask,
+    { system, newton }: ColumnWork,
+  ) {
     this.system = system;
-    this.newton = new Newton(system);
+    this.newton = newton;
+    system.load(task);
     const { direct, left } = directParameters(system, task.fixed);
     this.direct = direct;
     const targets = [...left.map((x) => targetOf(system, x)), ...drawTargets(system)];
@@ -129,9 +134,11 @@ class Search {
     const { system: s } = this;
     s.realism = 0;
     const fine = this.attempt('constant-overflow', wanted, ITERATIONS);
-    const done = fine && this.follow(wanted, (way) => {
-      s.realism = way;
-    });
+    const done =
+      fine &&
+      this.follow(wanted, (way) => {
+        s.realism = way;
+      });
     s.realism = 1;
     return done;
   }
@@ -163,7 +170,6 @@ class Search {
     }
     return false;
   }
-  way = 0;
 
   private moveFrom(moved: number): boolean {
     const { system: s, wanted } = this;
@@ -296,11 +302,29 @@ function restore(s: StageSystem, kept: ColumnState): void {
   s.p.set(kept.p);
 }
 
+/** Scratch of columns of one shape and one model; its contents mean nothing between solves. */
+export interface ColumnWork {
+  readonly shape: string;
+  readonly system: StageSystem;
+  readonly newton: Newton;
+}
+
+/** The workspace for a task: the one given if it fits, else a new one. */
+export function workFor(task: ColumnTask, known?: ColumnWork): ColumnWork {
+  const shape = shapeOf(task);
+  if (known?.shape === shape && known.system.model === task.model) return known;
+  const system = new StageSystem(task);
+  return { shape, system, newton: new Newton(system) };
+}
+
 /**
  * Solves a column: from an earlier state when there is one, then from start values of its own, then from a plain column
  * moved step by step.
  *
  * @param task  feasible as far as balances tell (see feasible.ts)
+ * @param warm  an earlier solved state; only changes the way
+ * @param work  scratch from workFor; the answer's system lives in it until the next solve
  * @returns     the system at its answer, every scaled residual below 1e-9, with all properties in it; or why not
  */
-export const solveColumn = (task: ColumnTask, warm?: ColumnState): ColumnEnd => new Search(task).solve(warm);
+export const solveColumn = (task: ColumnTask, warm?: ColumnState, work = workFor(task)): ColumnEnd =>
+  new Search(task, work).solve(warm);

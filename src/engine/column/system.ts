@@ -12,6 +12,10 @@ export type Mover =
   /** Drawn / left in the column, of the liquid or vapour of a place. */
   | { readonly moves: 'drawL' | 'drawV'; readonly place: number };
 
+/** What must agree for one system to serve several tasks; the model is compared by identity besides. */
+export const shapeOf = (task: ColumnTask): string =>
+  [task.P_Pa.length, task.top, task.reboiler, ...task.draws.map((d) => `${d.phase}${d.place}`)].join(' ');
+
 /** Energy of a mole that scales energy balances [J/mol]. */
 export const ENERGY_J_MOL = 20e3;
 /** Scale of temperature unknowns [K]. */
@@ -54,13 +58,14 @@ export class StageSystem {
   readonly liq: readonly PhaseProps[];
   readonly vap: readonly PhaseProps[];
   /** The reflux as it is cooled, where it is; else liq[0]. */
-  readonly reflux: PhaseProps;
+  reflux: PhaseProps;
+  private readonly cooled: PhaseProps;
   /** Feed by place and chemical, total and enthalpy by place. */
   readonly f: Float64Array;
   readonly F: Float64Array;
   readonly HF: Float64Array;
-  readonly feedTotal: number;
-  readonly energyScale: number;
+  feedTotal = 0;
+  energyScale = 0;
 
   /** Residuals: mole balances [mol/s], equilibrium [-], energy or what stands in its place [-]. */
   readonly M: Float64Array;
@@ -77,8 +82,12 @@ export class StageSystem {
   readonly theta: Float64Array;
   readonly scratch: Float64Array;
 
-  constructor(readonly task: ColumnTask) {
+  /** What is solved; see load. */
+  task: ColumnTask;
+
+  constructor(task: ColumnTask) {
     const { model, P_Pa } = task;
+    this.task = task;
     this.model = model;
     const n = model.n;
     const places = P_Pa.length;
@@ -105,7 +114,8 @@ export class StageSystem {
     this.rV = vector(places);
     this.liq = Array.from({ length: places }, () => model.makeProps());
     this.vap = Array.from({ length: places }, () => model.makeProps());
-    this.reflux = this.totalCondenser && task.subcooling_K > 0 ? model.makeProps() : this.liq[0]!;
+    this.cooled = this.totalCondenser ? model.makeProps() : this.liq[0]!;
+    this.reflux = this.liq[0]!;
     this.f = vector(places * n);
     this.F = vector(places);
     this.HF = vector(places);
@@ -115,16 +125,32 @@ export class StageSystem {
     this.H = vector(places);
     this.theta = vector(places * n).fill(1);
     this.scratch = vector(n);
+    this.load(task);
+  }
+
+  /** Another task of the same shape (shapeOf): feeds, pressures and what is asked may differ. */
+  load(task: ColumnTask): void {
+    const { n, f, F, HF, feedVapour } = this;
+    this.task = task;
+    this.reflux = task.subcooling_K > 0 ? this.cooled : this.liq[0]!;
+    this.realism = 1;
+    f.fill(0);
+    F.fill(0);
+    HF.fill(0);
+    feedVapour.fill(0);
+    this.theta.fill(1);
     let total = 0;
     for (const feed of task.feeds) {
+      let sum = 0;
       for (let i = 0; i < n; i++) {
-        this.f[feed.place * n + i]! += feed.n_mol_s[i]!;
-        this.F[feed.place]! += feed.n_mol_s[i]!;
+        f[feed.place * n + i]! += feed.n_mol_s[i]!;
+        sum += feed.n_mol_s[i]!;
       }
-      this.HF[feed.place]! += feed.H_W;
-      this.feedVapour[feed.place]! += feed.vapourFraction * feed.n_mol_s.reduce((a, b) => a + b, 0);
+      F[feed.place]! += sum;
+      HF[feed.place]! += feed.H_W;
+      feedVapour[feed.place]! += feed.vapourFraction * sum;
+      total += sum;
     }
-    for (const F of this.F) total += F;
     this.feedTotal = total;
     this.energyScale = total * ENERGY_J_MOL;
   }
@@ -268,7 +294,8 @@ export class StageSystem {
     const { places, L, V, H, rL, rV, energyScale, feedTotal, totalCondenser, p, task } = this;
     for (let j = 0; j < places; j++) {
       if (this.balancesEnergy(j)) {
-        let h = rL[j]! * L[j]! * this.liq[j]!.h_J_mol + rV[j]! * V[j]! * this.vap[j]!.h_J_mol - this.fedEnthalpy(j);
+        let h =
+          rL[j]! * L[j]! * this.liq[j]!.h_J_mol + rV[j]! * V[j]! * this.vap[j]!.h_J_mol - this.fedEnthalpy(j);
         if (j > 0) h -= L[j - 1]! * this.leaving(j - 1).h_J_mol;
         if (j + 1 < places) h -= V[j + 1]! * this.vap[j + 1]!.h_J_mol;
         H[j] = h / energyScale;

@@ -149,7 +149,12 @@ export function dutyOf(s: StageSystem, at: 'condenser' | 'reboiler'): number {
       s.fedEnthalpy(0)
     );
   const j = s.places - 1;
-  return L[j]! * liq[j]!.h_J_mol + V[j]! * vap[j]!.h_J_mol - L[j - 1]! * s.leaving(j - 1).h_J_mol - s.fedEnthalpy(j);
+  return (
+    L[j]! * liq[j]!.h_J_mol +
+    V[j]! * vap[j]!.h_J_mol -
+    L[j - 1]! * s.leaving(j - 1).h_J_mol -
+    s.fedEnthalpy(j)
+  );
 }
 
 function dutyTarget(s: StageSystem, at: 'condenser' | 'reboiler', value: number): Target {

@@ -16,6 +16,15 @@ interface SettingCommon {
    * sentence. For a group the value has one key, e.g. { drop: 0 }: the assumption's path then ends in that key ('p.drop').
    */
   readonly otherwise?: { readonly value: unknown; readonly text: string; readonly why: string };
+  /**
+   * Used when absent: what a setting beside it has, listed as an assumption; not filled in while the setting at a path from
+   * the top has a stated value.
+   */
+  readonly sameAs?: {
+    readonly key: string;
+    readonly why: string;
+    readonly unless?: { readonly path: string; readonly is: string | boolean };
+  };
 }
 export type SettingSpec = SettingCommon &
   (
@@ -27,7 +36,12 @@ export type SettingSpec = SettingCommon &
     | { readonly is: 'product' }
     | { readonly is: 'whole'; readonly min: number; readonly max?: number }
     | { readonly is: 'option'; readonly values: readonly string[] }
-    | { readonly is: 'record'; readonly fields: Readonly<Record<string, SettingSpec>> }
+    | {
+        readonly is: 'record';
+        readonly fields: Readonly<Record<string, SettingSpec>>;
+        /** Fields of which a stated number is given. */
+        readonly choose?: readonly Choice[];
+      }
     | { readonly is: 'list'; readonly of: SettingSpec; readonly min: number; readonly max?: number }
     /** Exactly `count` of these (a range for settings that allow one or two). */
     | {
@@ -83,6 +97,8 @@ export interface PortSpec {
   readonly numbered?: { readonly min: number; readonly max: number };
   /** May stay without a stream (a numbered inlet beyond the first, an air port). */
   readonly optional?: true;
+  /** There only while the setting at this path has one of these values. */
+  readonly when?: { readonly path: string; readonly is: readonly string[] };
 }
 
 /**
@@ -120,6 +136,11 @@ export interface KindCatalogue {
   readonly choose?: readonly Choice[];
   /** Settings that lose their meaning beside others. */
   readonly moot?: readonly Moot[];
+  /**
+   * What is still missing in settings that are complete by their descriptions, e.g. how many of a list are needed; paths are
+   * inside the settings. With any of these the unit needs a value.
+   */
+  readonly missing?: (settings: unknown, ports: readonly Port[]) => readonly Omit<Finding, 'weight'>[];
   readonly results: Readonly<Record<string, ResultSpec>>;
   /** Codes this kind may emit. */
   readonly findings: readonly string[];

@@ -3,6 +3,7 @@ import type { Read } from '../../engine/network/types';
 import type { Evidence, Finding } from '../../engine/outcome';
 import type { KindCatalogue } from '../../engine/units/types';
 import { finding, type SketchCode } from '../findings';
+import type { JsonObject } from '../json';
 import type { Assumption } from '../types';
 import type { AirPlaces } from './air';
 
@@ -17,6 +18,8 @@ export const GAP = Symbol('gap');
 export interface Scope {
   readonly unit: UnitId;
   readonly kind: KindCatalogue;
+  /** The unit's settings as typed. */
+  readonly root?: JsonObject;
   /** Ports that have a stream. */
   readonly ports: readonly Port[];
   /** Index in the full list by chemical id. */

@@ -23,8 +23,12 @@ export function readSettings(raw: JsonObject, scope: Scope): JsonObjectSI | type
   if (idle === GAP) return GAP;
   const chosen = choose.map((choice) => checkChoice(choice, raw, scope));
   const fields = Object.fromEntries(Object.entries(settings).filter(([key]) => !idle.has(key)));
-  const read = readFields(fields, raw, '', scope, Object.keys(settings));
-  return chosen.every((fine) => fine) ? read : GAP;
+  const read = readFields(fields, raw, '', { ...scope, root: raw }, Object.keys(settings));
+  if (read === GAP || !chosen.every((fine) => fine)) return GAP;
+  const missing = scope.kind.missing?.(read, scope.ports) ?? [];
+  for (const { code, at, evidence: seen } of missing)
+    scope.gaps.push({ code, weight: 'caution', at: { unit: scope.unit, ...at }, evidence: seen });
+  return missing.length === 0 ? read : GAP;
 }
 
 export type JsonObjectSI = Readonly<Record<string, unknown>>;
@@ -49,9 +53,9 @@ function at(raw: JsonObject, path: string): Json | undefined {
   return value;
 }
 
-function checkChoice({ keys, count, pairs = [] }: Choice, raw: JsonObject, scope: Scope): boolean {
+function checkChoice({ keys, count, pairs = [] }: Choice, raw: JsonObject, scope: Scope, path = ''): boolean {
   const given = keys.filter((key) => isGiven(own(raw, key)));
-  return fitsCount(given, keys, [count], pairs, '', scope);
+  return fitsCount(given, keys, [count], pairs, path, scope);
 }
 
 /** Whether the right number of keys is given, or one of the pairs. */
@@ -98,7 +102,34 @@ function readFields(
     if (value === GAP) broken = true;
     else if (value !== ABSENT) out[key] = value;
   }
+  for (const [key, spec] of Object.entries(fields))
+    if (out[key] === undefined && spec.sameAs) copyBeside(key, spec.sameAs, out, raw, path, scope);
   return broken ? GAP : out;
+}
+
+/** Fills in what the setting beside has, as an assumption. */
+function copyBeside(
+  key: string,
+  { key: beside, why, unless }: NonNullable<SettingSpec['sameAs']>,
+  out: Record<string, unknown>,
+  raw: JsonObject,
+  path: string,
+  scope: Scope,
+): void {
+  const value = out[beside];
+  const idle = unless !== undefined && at(scope.root ?? {}, unless.path) === unless.is;
+  if (value === undefined || idle) return;
+  out[key] = value;
+  const typed = own(raw, beside);
+  const text = typeof typed === 'string' || typeof typed === 'number' ? String(typed) : '';
+  const shown = typeof value === 'number' || typeof value === 'string' ? value : text;
+  scope.assumptions.push({
+    unit: scope.unit,
+    path: under(path, key),
+    value: shown,
+    unitText: text,
+    reason: why,
+  });
 }
 
 function readSetting(spec: SettingSpec, value: Json | undefined, path: string, scope: Scope): unknown {
@@ -193,7 +224,7 @@ function readGiven(spec: SettingSpec, value: Json, path: string, scope: Scope): 
     case 'yesNo':
       return typeof value === 'boolean' ? value : wrong('boolean');
     case 'record':
-      return isObject(value) ? readFields(spec.fields, value, path, scope) : wrong('object');
+      return isObject(value) ? readRecord(spec, value, path, scope) : wrong('object');
     case 'some':
       return isObject(value) ? readSome(spec, value, path, scope) : wrong('object');
     case 'list':
@@ -206,6 +237,12 @@ function readGiven(spec: SettingSpec, value: Json, path: string, scope: Scope): 
 }
 
 type Of<K extends SettingSpec['is']> = Extract<SettingSpec, { readonly is: K }>;
+
+function readRecord(spec: Of<'record'>, raw: JsonObject, path: string, scope: Scope): unknown {
+  const chosen = (spec.choose ?? []).map((choice) => checkChoice(choice, raw, scope, path));
+  const read = readFields(spec.fields, raw, path, scope);
+  return chosen.every((fine) => fine) ? read : GAP;
+}
 
 function readSome(spec: Of<'some'>, raw: JsonObject, path: string, scope: Scope): unknown {
   const keys = Object.keys(spec.of);

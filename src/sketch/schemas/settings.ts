@@ -60,7 +60,9 @@ function notTogether(
 
 function settingSchema(spec: SettingSpec): Schema {
   const schema = shapeOf(spec);
-  const { otherwise } = spec;
+  const { otherwise, sameAs } = spec;
+  if (sameAs)
+    return { ...schema, description: `${schema.description ?? ''}; absent: as ${sameAs.key}. ${sameAs.why}` };
   if (!otherwise) return schema;
   const said = `absent: ${otherwise.text}. ${otherwise.why}`;
   return { ...schema, description: schema.description ? `${schema.description}; ${said}` : said };
@@ -93,8 +95,10 @@ function shapeOf(spec: SettingSpec): Schema {
       return { enum: spec.values };
     case 'yesNo':
       return { type: 'boolean' };
-    case 'record':
-      return group(spec.fields);
+    case 'record': {
+      const rules = (spec.choose ?? []).flatMap(({ keys, pairs = [] }) => notTogether(keys, pairs));
+      return { ...group(spec.fields), ...(rules.length > 0 ? { allOf: rules } : {}) };
+    }
     case 'some': {
       const keys = Object.keys(spec.of);
       const most = typeof spec.count === 'number' ? spec.count : Math.max(...spec.count);

@@ -1,0 +1,44 @@
+import { UTILITY_FINDINGS } from '../limits/utilities';
+
+/** Codes a column may emit. */
+export const COLUMN_FINDINGS = [
+  // What is asked contradicts itself, or the column.
+  'column/fixed-too-few',
+  'column/fixed-too-many',
+  'column/fixed-twice',
+  'column/both-products-fixed',
+  'column/reflux-three-ways',
+  'column/recovery-both',
+  'column/no-such-end',
+  'column/no-such-product',
+  'column/no-such-stage',
+  'column/port-without-stage',
+  'column/side-without-stream',
+  'column/no-feed',
+  'column/both-duties',
+  'column/efficiency-needs-vapour',
+  // What balances alone forbid.
+  'column/product-above-feed',
+  'column/chemical-absent',
+  'column/not-a-share',
+  'column/not-positive',
+  'column/more-than-fed',
+  'column/purities-apart',
+  'pressure/not-positive',
+  // Why a column that could be has no answer.
+  'column/dries',
+  'column/one-phase',
+  'column/out-of-reach',
+  'column/not-found',
+  'column/feed-vapour-above-top',
+  // Limits.
+  'pressure/enters-below',
+  'column/stage-dries',
+  'column/pinch',
+  'column/feed-off-stage',
+  'column/near-critical',
+  'column/too-near-critical',
+  'column/second-liquid',
+  ...UTILITY_FINDINGS,
+] as const;
+export type ColumnCode = (typeof COLUMN_FINDINGS)[number];

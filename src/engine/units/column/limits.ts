@@ -1,0 +1,202 @@
+import { liquidFormers } from '../../equilibrium/candidates';
+import { makeStream } from '../../equilibrium/stream';
+import type { Finding } from '../../outcome';
+import type { ThermoModel } from '../../thermo/types';
+import { joiningPressure } from '../limits/joiningPressure';
+import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { utilityLevels } from '../limits/utilities';
+import type { Answer, Call, SiteSI } from '../types';
+import { topPort } from './free';
+import type { ColumnResults } from './results';
+import type { ColumnSettings, PlaceSI } from './settings';
+
+/** Liquid or vapour on a stage as a share of all feeds. */
+const DRIES = rule('column/stage-dries', 'caution', 0.01, 'fraction');
+/** More than this many neighbouring stages within 0.1 K. */
+const PINCH = rule('column/pinch', 'note', 5, 'number');
+const PINCH_K = 0.1;
+const OFF_STAGE = rule('column/feed-off-stage', 'note', 40, 'temperatureDifference');
+/** Mass density of liquid to vapour on a stage. */
+const NEAR_CRITICAL = rule('column/near-critical', 'caution', 4, 'number');
+const TOO_NEAR_CRITICAL = rule('column/too-near-critical', 'beyond-limit', 2.5, 'number');
+const SECOND_LIQUID = rule('column/second-liquid', 'beyond-limit', 0, 'number', 'phase-stability');
+export const COLUMN_RULES: readonly Rule[] = [
+  DRIES,
+  PINCH,
+  OFF_STAGE,
+  NEAR_CRITICAL,
+  TOO_NEAR_CRITICAL,
+  SECOND_LIQUID,
+];
+
+interface Seen {
+  readonly call: Call<ColumnSettings>;
+  readonly results: ColumnResults;
+}
+
+const feedTotal = ({ call }: Seen): number =>
+  Object.values(call.in).reduce((sum, s) => sum + s.n_mol_s.reduce((a, b) => a + b, 0), 0);
+
+/** The stage that is nearest to running dry. */
+function dries(seen: Seen): Finding[] {
+  const { call, results } = seen;
+  const fed = feedTotal(seen);
+  let least = Number.POSITIVE_INFINITY;
+  let stage = 0;
+  let phase: 'liquid' | 'vapour' = 'liquid';
+  const look = (flows: Float64Array, of: typeof phase): void => {
+    flows.forEach((n, k) => {
+      if (n >= least) return;
+      least = n;
+      stage = k + 1;
+      phase = of;
+    });
+  };
+  look(results.stages.L_mol_s, 'liquid');
+  look(results.stages.V_mol_s, 'vapour');
+  if (least >= thresholdOf(DRIES, call.limits) * fed) return [];
+  const evidence = [
+    saw('flow', least, 'molarFlow'),
+    saw('share', least / fed, 'fraction'),
+    named('phase', phase),
+  ];
+  return [finding(DRIES, { unit: call.unit, stage }, evidence, call.limits)];
+}
+
+/** The longest run of stages of nearly one temperature. */
+function pinch({ call, results }: Seen): Finding[] {
+  const { T_K } = results.stages;
+  let best = 0;
+  let from = 0;
+  for (let a = 0, b = 0; b < T_K.length; b++) {
+    const run = T_K.subarray(a, b + 1);
+    while (a < b && Math.max(...T_K.subarray(a, b + 1)) - Math.min(...T_K.subarray(a, b + 1)) > PINCH_K) a++;
+    if (run.length > 0 && b - a + 1 > best) {
+      best = b - a + 1;
+      from = a + 1;
+    }
+  }
+  if (best <= thresholdOf(PINCH, call.limits)) return [];
+  const evidence = [
+    saw('stages', best, 'number'),
+    saw('from', from, 'number'),
+    saw('to', from + best - 1, 'number'),
+    saw('temperature', T_K[from - 1]!, 'temperature'),
+  ];
+  return [finding(PINCH, { unit: call.unit, stage: from }, evidence, call.limits)];
+}
+
+/** Temperature and pressure where a feed enters. */
+function placeAt(
+  results: ColumnResults,
+  stage: PlaceSI,
+): { readonly T_K: number; readonly P_Pa: number } | undefined {
+  if (stage === 'condenser') return results.condenser;
+  if (stage === 'reboiler') return results.reboiler;
+  return { T_K: results.stages.T_K[stage - 1]!, P_Pa: results.stages.P_Pa[stage - 1]! };
+}
+
+function feeds({ call, results }: Seen): Finding[] {
+  const found: Finding[] = [];
+  for (const { stage, port } of results.stages.feed) {
+    const stream = call.in[port];
+    const there = placeAt(results, stage);
+    if (!stream || !there) continue;
+    const at = typeof stage === 'number' ? { stage } : {};
+    const below = joiningPressure(call.unit, { [port]: stream }, there.P_Pa, call.limits);
+    found.push(...below.map((f) => ({ ...f, at: { ...f.at, ...at } })));
+    const off = stream.T_K - there.T_K;
+    if (Math.abs(off) <= thresholdOf(OFF_STAGE, call.limits)) continue;
+    const evidence = [
+      saw('feedTemperature', stream.T_K, 'temperature'),
+      saw('stageTemperature', there.T_K, 'temperature'),
+      named('port', port),
+    ];
+    found.push(finding(OFF_STAGE, { unit: call.unit, port, ...at }, evidence, call.limits));
+  }
+  return found;
+}
+
+function nearCritical({ call, results }: Seen): Finding[] {
+  const { densityRatio } = results.stages;
+  let stage = 0;
+  densityRatio.forEach((r, k) => {
+    if (r < densityRatio[stage]!) stage = k;
+  });
+  const least = densityRatio[stage]!;
+  const below = (r: Rule): boolean => least < thresholdOf(r, call.limits);
+  const broken = below(TOO_NEAR_CRITICAL)
+    ? TOO_NEAR_CRITICAL
+    : below(NEAR_CRITICAL)
+      ? NEAR_CRITICAL
+      : undefined;
+  return broken
+    ? [
+        finding(
+          broken,
+          { unit: call.unit, stage: stage + 1 },
+          [saw('densityRatio', least, 'number')],
+          call.limits,
+        ),
+      ]
+    : [];
+}
+
+const mayPart = new WeakMap<ThermoModel, boolean>();
+
+/** Whether any pure liquid among these may part from another at all. */
+function partsAtAll(model: ThermoModel): boolean {
+  const known = mayPart.get(model);
+  if (known !== undefined) return known;
+  const parts = liquidFormers(model).formers.length > 0;
+  mayPart.set(model, parts);
+  return parts;
+}
+
+/** The first stage whose liquid would rather be two: each is tested a little above its bubble pressure. */
+function secondLiquid({ call, results }: Seen): Finding[] {
+  const { T_K, P_Pa, x } = results.stages;
+  const { model } = call;
+  const present = model.chemicals.flatMap((c, i) => (x[c.id]!.some((v) => v > 0) ? [i] : []));
+  if (!partsAtAll(model.of(present))) return [];
+  const n = new Float64Array(model.nc);
+  for (let k = 0; k < T_K.length; k++) {
+    model.chemicals.forEach((c, i) => {
+      n[i] = x[c.id]![k]!;
+    });
+    const state = makeStream(model, n.slice(), { T_K: T_K[k]!, P_Pa: 1.001 * P_Pa[k]! }, call.work);
+    const other = state.state === 'solved' ? state.value.hiddenLiquid : undefined;
+    if (!other) continue;
+    let most = 0;
+    other.forEach((v, i) => {
+      if (v > other[most]!) most = i;
+    });
+    const id = model.chemicals[most]!.id;
+    const seen = { name: 'chemical', value: other[most]!, dim: 'fraction', text: id } as const;
+    return [finding(SECOND_LIQUID, { unit: call.unit, stage: k + 1 }, [seen], call.limits)];
+  }
+  return [];
+}
+
+export function columnLimits(
+  call: Call<ColumnSettings>,
+  { out, results }: Answer<ColumnResults>,
+  site: SiteSI,
+): Finding[] {
+  const seen = { call, results };
+  const found = [
+    ...feeds(seen),
+    ...dries(seen),
+    ...pinch(seen),
+    ...nearCritical(seen),
+    ...secondLiquid(seen),
+  ];
+  const top = out[topPort(call.settings)];
+  if (top && results.condenserDuty_W !== undefined)
+    found.push(...utilityLevels(call.unit, results.condenserDuty_W, top, call.model, site, call.limits));
+  if (out.bottoms && results.reboilerDuty_W !== undefined)
+    found.push(
+      ...utilityLevels(call.unit, results.reboilerDuty_W, out.bottoms, call.model, site, call.limits),
+    );
+  return found;
+}

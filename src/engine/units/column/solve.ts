@@ -1,0 +1,181 @@
+import {
+  type ColumnEnd,
+  type ColumnWork,
+  type Failure,
+  solveColumn,
+  stateOf,
+  workFor,
+} from '../../column/solve';
+import type { StageSystem } from '../../column/system';
+import { dutyOf } from '../../column/targets';
+import type { ColumnState, ColumnTask } from '../../column/types';
+import { type Evidence, type Finding, noSolution, type Outcome, solved } from '../../outcome';
+import type { Answer, Call, UnitKind } from '../types';
+import { fedVapour, impossibleBy } from './feasible';
+import { bothDuties, conflictsOf, countMiss } from './free';
+import { columnLimits } from './limits';
+import { outletsOf } from './outlets';
+import { type ColumnResults, resultsOf } from './results';
+import type { ColumnSettings } from './settings';
+import { type ColumnJob, jobOf, nameOfPlace, refuse } from './task';
+
+/** What a column remembers of its last solved state. */
+interface Warm {
+  readonly state: ColumnState;
+  readonly present: readonly number[];
+  readonly shape: string;
+  readonly fed_mol_s: number;
+}
+
+/** Refusals before anything is solved, first of all what contradicts itself. */
+function refusals(call: Call<ColumnSettings>): Finding[] {
+  const { settings } = call;
+  const count = countMiss(settings);
+  const sides = Object.keys(settings.sides ?? {});
+  const without = sides
+    .filter((port) => !call.outPorts.includes(port))
+    .map((port) =>
+      refuse(call, 'column/side-without-stream', { port, path: `sides.${port}` }, [
+        { name: 'port', value: 0, dim: 'number', text: port },
+      ]),
+    );
+  const found = [...conflictsOf(settings, sides.length), ...(count ? [count] : [])];
+  return [...found.map((f) => ({ ...f, at: { unit: call.unit, ...f.at } })), ...without];
+}
+
+const workOf = (call: Call<ColumnSettings>, task: ColumnTask): ColumnWork => {
+  const key = `column ${call.unit}`;
+  const work = workFor(task, call.work.flash.get(key) as ColumnWork | undefined);
+  call.work.flash.set(key, work);
+  return work;
+};
+
+/** The last state, scaled to what is fed now; undefined when it is of another column or other chemicals. */
+function warmState(call: Call<ColumnSettings>, job: ColumnJob, work: ColumnWork): ColumnState | undefined {
+  const warm = call.warm as Warm | undefined;
+  if (!warm || warm.shape !== work.shape) return undefined;
+  if (warm.present.length !== job.present.length || warm.present.some((i, k) => i !== job.present[k]))
+    return undefined;
+  const ratio = totalFed(job.task) / warm.fed_mol_s;
+  const { movers } = work.system;
+  const scaled = (x: Float64Array): Float64Array => x.map((n) => n * ratio);
+  return {
+    l: scaled(warm.state.l),
+    v: scaled(warm.state.v),
+    T_K: warm.state.T_K,
+    p: warm.state.p.map((p, k) => (movers[k]!.moves === 'bottoms' ? p * ratio : p)),
+  };
+}
+
+const totalFed = ({ feeds }: ColumnTask): number =>
+  feeds.reduce((sum, f) => sum + f.n_mol_s.reduce((a, b) => a + b, 0), 0);
+
+const evidence = (name: string, value: number, dim: Evidence['dim'] = 'number'): Evidence => ({
+  name,
+  value,
+  dim,
+});
+
+/** Why a column that might have an answer has none, with what was tried. */
+function reason(
+  call: Call<ColumnSettings>,
+  job: ColumnJob,
+  end: Extract<ColumnEnd, { state: 'no-solution' }>,
+): Finding[] {
+  const { failure, effort } = end;
+  const stage = nameOfPlace(call.settings, failure.place);
+  const where: Evidence = { name: 'place', value: 0, dim: 'number', text: String(stage) };
+  const tried: Evidence[] = effort.tried.map((text) => ({ name: 'tried', value: 0, dim: 'number', text }));
+  const at = typeof stage === 'number' ? { stage } : {};
+  const steps = evidence('iterations', effort.iterations);
+  const code = CODES[failure.why];
+  const found: Finding[] = [];
+  if (failure.why === 'out-of-reach') {
+    const path = failure.fixing === undefined ? {} : { path: `fixedBy.${failure.fixing}` };
+    found.push(
+      refuse(call, code, path, [evidence('way', failure.way ?? 0, 'fraction'), steps, where, ...tried]),
+    );
+  } else {
+    const phase: Evidence = { name: 'phase', value: 0, dim: 'number', text: failure.phase ?? 'vapour' };
+    found.push(
+      refuse(call, code, at, [where, phase, evidence('residual', failure.residual), steps, ...tried]),
+    );
+  }
+  const vapour = carriedShort(job.task);
+  return vapour
+    ? [refuse(call, 'column/feed-vapour-above-top', { path: 'fixedBy' }, vapour), ...found]
+    : found;
+}
+
+const CODES: Readonly<Record<Failure['why'], Finding['code']>> = {
+  dries: 'column/dries',
+  trivial: 'column/one-phase',
+  'out-of-reach': 'column/out-of-reach',
+  'no-convergence': 'column/not-found',
+};
+
+/** Reflux ratio and distillate that carry less over the top than the feeds bring as vapour. */
+function carriedShort(task: ColumnTask): Evidence[] | undefined {
+  const ratio = task.fixed.find((x) => x.fix === 'refluxRatio');
+  const flow = task.fixed.find((x) => x.fix === 'flow' && x.product === 'top' && x.flow.basis === 'mole');
+  if (ratio?.fix !== 'refluxRatio' || flow?.fix !== 'flow') return undefined;
+  const carried = flow.flow.value * (1 + ratio.value);
+  const fed = fedVapour(task);
+  return fed > carried
+    ? [evidence('fed', fed, 'molarFlow'), evidence('carried', carried, 'molarFlow')]
+    : undefined;
+}
+
+function answer(
+  call: Call<ColumnSettings>,
+  job: ColumnJob,
+  s: StageSystem,
+  work: ColumnWork,
+  end: ColumnEnd,
+): Answer<ColumnResults> {
+  const { out, condenser, reboiler, heat_W } = outletsOf(call, job, s, () => dutyOf(s, 'condenser'));
+  const duties = {
+    ...(condenser === undefined ? {} : { condenser }),
+    ...(reboiler === undefined ? {} : { reboiler }),
+  };
+  const warm: Warm = { state: stateOf(s), present: job.present, shape: work.shape, fed_mol_s: s.feedTotal };
+  return {
+    out,
+    heat_W,
+    power_W: 0,
+    results: resultsOf(call, job, s, duties),
+    effort: { iterations: end.effort.iterations, residual: end.effort.residual },
+    warm,
+  };
+}
+
+function solve(call: Call<ColumnSettings>): Outcome<Answer<ColumnResults>> {
+  const [first, ...more] = refusals(call);
+  if (first) return noSolution(first, ...more);
+  const read = jobOf(call);
+  if (read.state !== 'solved') return noSolution(...read.findings);
+  const job = read.value;
+  const [wrong, ...others] = impossibleBy(job.task).map(({ code, fixing, draw, evidence: seen }) => {
+    const at =
+      fixing !== undefined
+        ? { path: `fixedBy.${fixing}` }
+        : draw !== undefined
+          ? { port: job.drawPorts[draw]!, path: `sides.${job.drawPorts[draw]}` }
+          : {};
+    return refuse(call, code, at, seen);
+  });
+  if (wrong) return noSolution(wrong, ...others);
+  const work = workOf(call, job.task);
+  const end = solveColumn(job.task, warmState(call, job, work), work);
+  if (end.state !== 'solved') {
+    const [why, ...rest] = reason(call, job, end);
+    return noSolution(why!, ...rest);
+  }
+  const notes: Finding[] = bothDuties(call.settings)
+    ? [{ code: 'column/both-duties', weight: 'note', at: { unit: call.unit, path: 'fixedBy' }, evidence: [] }]
+    : [];
+  return solved(answer(call, job, end.system, work, end), notes);
+}
+
+/** Equilibrium stages with or without ends. */
+export const column: UnitKind<ColumnSettings, ColumnResults> = { solve, limits: columnLimits };
