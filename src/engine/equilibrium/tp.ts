@@ -39,6 +39,45 @@ export type StartK = 'nothing' | 'K';
  * Source: Michelsen, Fluid Phase Equilib. 9 (1982) 1 and 21.
  */
 export function flashTP(w: FlashWork, z: Float64Array, T: number, P: number, from: StartK): boolean {
+  return flashHere(w, z, T, P, from) || approach(w, z, T, P);
+}
+
+/**
+ * Close to a critical point the phases hardly differ and no step is sure of its direction: a split some kelvins away,
+ * where they differ more, is followed to the temperature asked.
+ */
+function approach(w: FlashWork, z: Float64Array, T: number, P: number): boolean {
+  let iterations = w.iterations;
+  for (const away of [-3e-3, 3e-3, -1e-2, 1e-2]) {
+    const far = flashHere(w, z, T * (1 + away), P, 'nothing');
+    iterations += w.iterations;
+    if (!far || w.phases !== 2) continue;
+    w.iterations = iterations;
+    w.T_K = T;
+    w.P_Pa = P;
+    w.hidden = false;
+    w.lumped = false;
+    renewK(w);
+    let end: SplitEnd = 'equal';
+    let left = away;
+    while (left !== 0 && end === 'equal') {
+      left = Math.abs(left) < 1e-5 ? 0 : left / 2;
+      const beta = vapourFractionOf(z, w.K, -1);
+      if (beta > 0 && beta < 1) placeFlows(w, z, beta);
+      end = settle(w, z, T * (1 + left), P);
+      renewK(w);
+    }
+    iterations = w.iterations;
+    if (end !== 'equal') continue;
+    w.feed.x.set(z);
+    w.model.evaluate('stable', T, P, w.feed.x, 0, w.feed.props);
+    setPlane(w, w.feed);
+    if (gibbsAgainstPlane(w) < 1e-13) return finishTwo(w, z, T, P);
+  }
+  return false;
+}
+
+function flashHere(w: FlashWork, z: Float64Array, T: number, P: number, from: StartK): boolean {
   const { model, n, feed, K, lnK } = w;
   w.T_K = T;
   w.P_Pa = P;
