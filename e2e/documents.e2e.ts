@@ -121,6 +121,7 @@ test('the stream summary shows the same table on the screen', async ({ quiet: pa
 
 for (const scheme of ['light', 'dark'] as const)
   test(`the main screens have no serious fault of access in ${scheme}`, async ({ quiet: page }) => {
+    test.slow();
     await page.emulateMedia({ colorScheme: scheme });
     const faults = async (where: string): Promise<void> => {
       const { violations } = await new AxeBuilder({ page }).analyze();

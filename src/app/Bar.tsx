@@ -52,7 +52,7 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
 
   return (
     <header className="bar">
-      <div className="brand">
+      <h1 className="brand">
         <svg width="20" height="20" viewBox="0 0 20 20" aria-hidden="true">
           <path
             d="M10 1 19 10 10 19 1 10Z M1 10H19 M10 10 14.5 5.5"
@@ -63,7 +63,7 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
           />
         </svg>
         <span>Splitwright</span>
-      </div>
+      </h1>
       <button
         type="button"
         className="name"

@@ -83,7 +83,7 @@ export function Start() {
             type="button"
             className="card"
             data-example={card.file}
-            ref={k === 0 ? (element) => element?.focus({ preventScroll: true }) : undefined}
+            ref={k === 0 ? focusIfFree : undefined}
             onClick={() => void openExample(stores, card.file)}
           >
             {/* biome-ignore lint/security/noDangerouslySetInnerHtml: our own SVG writer, which escapes every text */}
@@ -99,6 +99,11 @@ export function Start() {
       </p>
     </section>
   );
+}
+
+/** The first example takes the focus, unless somebody is already at work elsewhere. */
+function focusIfFree(element: HTMLElement | null): void {
+  if (document.activeElement === document.body) element?.focus({ preventScroll: true });
 }
 
 function Ghost() {

@@ -84,5 +84,8 @@ export function startSolving(stores: Stores): SolverClient {
     if (state.sketch !== before.sketch) run();
   });
   run();
+  // The worker's code is compiled while the page is idle, so that the first solve of a fresh tab is not the slow one.
+  const idle = window.requestIdleCallback ?? ((then: () => void) => setTimeout(then, 200));
+  idle(() => client.ask({ ask: 'prewarm' }));
   return client;
 }

@@ -1,7 +1,7 @@
 import type { StreamResult, UnitResult } from '../engine/network/types';
 import { CATALOGUE } from '../engine/units/catalogue';
-import { type Dimension, displayUnit, type Measures, parseQuantity, show } from '../quantity';
-import type { LabelKey, Sketch } from '../sketch/types';
+import { type Dimension, displayUnit, type Measures, show } from '../quantity';
+import type { LabelKey } from '../sketch/types';
 import type { LabelRow } from './types';
 
 export type SolvedStream = Extract<StreamResult, { state: 'solved' }>;
@@ -24,19 +24,6 @@ export const LABEL_SPECS: Readonly<Record<LabelKey, LabelSpec>> = {
   enthalpyFlow: { dim: 'power', word: 'enthalpy flow', of: (s) => s.H_W },
   volumeFlow: { dim: 'volumeFlow', word: 'volume flow', of: (s) => s.volume_m3_s },
 };
-
-const GAUGE = { SI: 'kPa(g)', metric: 'bar(g)', US: 'psi(g)' } as const;
-
-/** Measures of the sketch's labels: its set, its own choices, (g) counted from its site pressure. */
-export function measuresOf({ display, site }: Pick<Sketch, 'display' | 'site'>): Measures {
-  const pressure =
-    site.pressure === undefined ? undefined : parseQuantity(String(site.pressure), ['pressure']);
-  return {
-    set: display.set,
-    units: { ...(display.gauge ? { pressure: GAUGE[display.set] } : {}), ...display.units },
-    ...(pressure?.ok ? { site: { P_Pa: pressure.si } } : {}),
-  };
-}
 
 /** A stream's label: one row for each chosen quantity, four significant figures. */
 export function labelRows(

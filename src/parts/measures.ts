@@ -15,4 +15,3 @@ export function useSite(): Site {
   const site = useSketch((state) => state.sketch.site);
   return useMemo(() => siteOf(site), [site]);
 }
-

@@ -1,3 +1,4 @@
+import { measuresOf as sketchMeasures, withReference } from '../drawing/measures';
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Basis, Closure, StreamResult, UnitResult } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
@@ -30,11 +31,9 @@ export interface ReportInput {
 
 export type SolvedStream = Extract<StreamResult, { state: 'solved' }>;
 
-export const measuresOf = (input: ReportInput): Measures => ({
-  set: input.sketch.display.set,
-  ...(input.sketch.display.units ? { units: input.sketch.display.units } : {}),
-  site: { P_Pa: input.sitePressure_Pa },
-});
+/** Tables print absolute pressures; gauge ones have a row of their own. */
+export const measuresOf = (input: ReportInput): Measures =>
+  withReference(sketchMeasures(input.sketch), 'absolute');
 
 export const solvedStream = (result: StreamResult | undefined): SolvedStream | undefined =>
   result?.state === 'solved' ? result : undefined;

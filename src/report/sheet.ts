@@ -1,9 +1,10 @@
 import { labelRows, linkText } from '../drawing/labelText';
+import { measuresOf } from '../drawing/measures';
 import { buildScene } from '../drawing/scene';
 import type { DrawnState, LabelRow, Scene } from '../drawing/types';
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Weight } from '../engine/outcome';
-import { measuresOf, type ReportInput, solvedStream } from './input';
+import { type ReportInput, solvedStream } from './input';
 
 const RANK: Readonly<Record<Weight, number>> = { note: 0, caution: 1, 'beyond-limit': 2 };
 
@@ -20,7 +21,7 @@ export function worstByUnit(input: ReportInput): ReadonlyMap<UnitId, Weight> {
 /** The same scene as on the canvas, with the clean answer's numbers. */
 export function reportScene(input: ReportInput): Scene {
   const { sketch } = input;
-  const measures = measuresOf(input);
+  const measures = measuresOf(sketch);
   const labels = new Map<StreamId, readonly LabelRow[]>();
   for (const stream of sketch.streams) {
     const result = solvedStream(input.streams.get(stream.id));
