@@ -6,6 +6,8 @@ import type { FlashWork, Slot } from './work';
 const FAR = 2.3;
 /** ln of an activity coefficient from which a chemical may be better off in a liquid of its own. */
 const STRANGE = 0.4;
+/** -ln of an activity at which the pure liquid is all but stable beside the tested one. */
+const CLOSE = 0.3;
 
 /**
  * Whether the single phase in w.feed (properties at T, P; plane in w.d) can lower its Gibbs energy by splitting; then
@@ -67,7 +69,7 @@ export function hiddenLiquid(
       most = lnGamma;
       stranger = i;
     }
-    if (inLiquid && lnGamma < STRANGE) continue;
+    if (inLiquid && lnGamma < (above < CLOSE ? STRANGE / 4 : STRANGE)) continue;
     if (followPure(w, T, P, i, known1, known2)) return true;
   }
   if (stranger < 0) return false;

@@ -1,7 +1,7 @@
 import { newtonFraction, type Sought, startPoint } from './fraction';
 import { expansionOf } from './naming';
 import { liquidLike, setPlane } from './stability';
-import { hiddenLiquid } from './starts';
+import { hiddenLiquid, isUnstable, vapourBelow } from './starts';
 import { flashTP } from './tp';
 import { LEAST_T_K, MOST_T_K } from './whole';
 import type { FlashWork } from './work';
@@ -47,8 +47,17 @@ function accept(w: FlashWork): boolean {
   if (!lighter && (vap.props.single || liq.props.single)) return false;
   w.phases = 2;
   w.hidden = false;
+  if (Math.abs(vap.props.v_m3_mol / liq.props.v_m3_mol - 1) < ALIKE) {
+    // Nearly one phase: near a critical point, or on the way to no split at all.
+    w.feed.x.set(liq.x);
+    w.model.evaluate('stable', T, P, w.feed.x, 0, w.feed.props);
+    setPlane(w, w.feed);
+    if (isUnstable(w, T, P)) return false;
+  }
   if (w.formers.length === 0) return true;
   if (liquidLike(w, vap, T) && liquidLike(w, liq, T)) return false;
+  // A lighter vapour below the common plane: this is not the stable split.
+  if (vapourBelow(w, T, P, liq, vap)) return false;
   setPlane(w, vap);
   if (hiddenLiquid(w, T, P, vap, liq)) {
     w.hidden = true;
@@ -58,6 +67,8 @@ function accept(w: FlashWork): boolean {
 }
 
 const GRID = 48;
+/** Volumes that differ by less than this share. */
+const ALIKE = 0.03;
 
 /**
  * The slow, sure way: flashes at given T and P from the thin side to the dense one, until the vapour fraction passes
