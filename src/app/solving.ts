@@ -86,6 +86,6 @@ export function startSolving(stores: Stores): SolverClient {
   run();
   // The worker's code is compiled while the page is idle, so that the first solve of a fresh tab is not the slow one.
   const idle = window.requestIdleCallback ?? ((then: () => void) => setTimeout(then, 200));
-  idle(() => client.ask({ ask: 'prewarm' }));
+  idle(() => client.ask(0, { ask: 'prewarm' }));
   return client;
 }
