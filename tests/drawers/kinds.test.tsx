@@ -61,7 +61,7 @@ const stranger: KindCatalogue = {
   findings: [],
 };
 const kinds = { ...CATALOGUE, stranger };
-const document = {
+const strangerFile = {
   ...letDown,
   units: [letDown.units[0], { id: 'x', tag: 'X-101', kind: 'stranger', settings: {} }],
   streams: [
@@ -72,7 +72,7 @@ const document = {
 };
 
 function open() {
-  const page = makePage(document, kinds);
+  const page = makePage(strangerFile, kinds);
   page.stores.session.select([unitId('x')]);
   show(page);
   const put = (path: string, value: string): void => {
@@ -81,6 +81,22 @@ function open() {
   };
   return { page, put };
 }
+
+describe('every kind of the catalogue', () => {
+  test.each(Object.keys(CATALOGUE))('%s opens with its tag, a sentence and labelled fields', (kind) => {
+    const settings = CATALOGUE[kind]?.fresh ?? {};
+    const page = makePage({ ...letDown, units: [{ id: 'k', tag: 'T-1', kind, settings }], streams: [] });
+    page.stores.session.select([unitId('k')]);
+    show(page);
+    expect(screen.getByLabelText('Tag')).toHaveProperty('value', 'T-1');
+    expect(document.querySelector('.drawer-head p')?.textContent).not.toBe('');
+    const fields = [...document.querySelectorAll('.drawer-body input, .drawer-body select')];
+    for (const element of fields) {
+      const isNamed = element.getAttribute('aria-label') || element.closest('label')?.textContent;
+      expect(isNamed, element.outerHTML).toBeTruthy();
+    }
+  });
+});
 
 describe('a kind described by its catalogue alone', () => {
   test('has a working field for every form of setting', () => {

@@ -13,8 +13,12 @@ import { capital } from '../words';
 import { AirEditor } from './AirEditor';
 import { asFlows, converted, type Mode, modeOf, partsOf, sumOf, usualUnit } from './composition';
 import { useForm } from './form';
+import type { Assumed } from './given';
 import { readPaste } from './paste';
 import { FieldFindings } from './SettingRow';
+
+/** The total flow that a composition belongs to. */
+const flowBeside = (path: string): string => [...path.split('.').slice(0, -1), 'flow'].join('.');
 
 const MODES = [
   { value: 'mole', text: 'mol' },
@@ -23,12 +27,19 @@ const MODES = [
   { value: 'preset', text: 'air' },
 ] as const;
 
+interface Props {
+  readonly path: string;
+  /** Used while nothing is given. */
+  readonly assumed?: Assumed | undefined;
+}
+
 /** Parts by mole or mass, component flows, or ready-made air; a table that takes a paste from a spreadsheet. */
-export function CompositionEditor({ path }: { readonly path: string }) {
+export function CompositionEditor({ path, assumed }: Props) {
   const form = useForm();
   const value = form.value(path);
   const given = modeOf(value);
   const [wanted, setWanted] = useState<Mode | null>(null);
+  const isAssumed = given === undefined && wanted === null && assumed !== undefined;
   const mode = wanted ?? given ?? 'mole';
   const word = form.word(path);
   const chemicals = useChemicals();
@@ -56,7 +67,7 @@ export function CompositionEditor({ path }: { readonly path: string }) {
       if (shown && !shown.outOfDate && parts.size > 0) {
         const z = [...shown.result.z].map((x, k) => [solved[k]?.id ?? '', x] as const);
         const flows = asFlows(z, shown.result.n_mol_s);
-        put({ flows }, 'set', [{ path: 'flow', value: undefined }]);
+        put({ flows }, 'set', [{ path: flowBeside(path), value: undefined }]);
         return;
       }
     }
@@ -74,11 +85,13 @@ export function CompositionEditor({ path }: { readonly path: string }) {
         label={`${capital(word)}: given as`}
         path={`${path}.basis`}
         options={MODES}
-        value={mode}
+        value={isAssumed ? undefined : mode}
         disabled={form.disabled}
         onChange={choose}
       />
-      {isQuestion ? (
+      {isAssumed ? (
+        <p className="field-note">Not given: {assumed.text} is assumed.</p>
+      ) : isQuestion ? (
         <div className="question">
           <p>
             The numbers were typed by {given === 'mole' ? 'mole' : 'mass'}. Now by {wanted}:
@@ -134,7 +147,9 @@ function Grid({ path, mode, isNew, word, done }: GridProps) {
     mode === 'flows' ? { flows: filled } : { basis: mode, parts: filled };
   // Component flows carry the total with them: a flow beside them would say it twice.
   const beside: readonly SettingChange[] =
-    mode === 'flows' && form.value('flow') !== undefined ? [{ path: 'flow', value: undefined }] : [];
+    mode === 'flows' && form.value(flowBeside(path)) !== undefined
+      ? [{ path: flowBeside(path), value: undefined }]
+      : [];
   const begin: readonly SettingChange[] = isNew ? [{ path, value: frame({}) }, ...beside] : beside;
 
   const paste = (text: string, from: number): boolean => {

@@ -41,7 +41,7 @@ export function ListEditor({ spec, path }: { readonly spec: ListSpec; readonly p
               ) : null}
             </div>
             {of.is === 'record' ? (
-              <Fields fields={of.fields} base={at} />
+              <Fields fields={of.fields} base={at} choose={of.choose} />
             ) : (
               <form.Editor spec={of} path={at} />
             )}

@@ -71,7 +71,7 @@ function PortMap({ spec, path }: Props) {
           <fieldset className="group" key={key}>
             <legend>{label}</legend>
             {spec.of.is === 'record' ? (
-              <Fields fields={spec.of.fields} base={at} />
+              <Fields fields={spec.of.fields} base={at} choose={spec.of.choose} />
             ) : (
               <form.Editor spec={spec.of} path={at} />
             )}

@@ -1,22 +1,22 @@
-import type { SettingSpec } from '../../engine/units/types';
 import { capital } from '../words';
 import { CasesEditor } from './CasesEditor';
 import { CompositionEditor } from './CompositionEditor';
 import { Fields } from './Fields';
+import type { EditorProps } from './form';
 import { useForm } from './form';
 import { assumedAt } from './given';
 import { ListEditor } from './ListEditor';
 import { MapEditor } from './MapEditor';
 import { OneOf } from './OneOf';
 import { SettingControl } from './SettingControl';
-import { SettingRow } from './SettingRow';
+import { FieldFindings, SettingRow } from './SettingRow';
 
 /** Any setting, by its description alone. */
-export function SettingEditor({ spec, path }: { readonly spec: SettingSpec; readonly path: string }) {
+export function SettingEditor({ spec, path, dormant = false }: EditorProps) {
   const form = useForm();
   const word = form.word(path);
   const assumed = assumedAt(form, path, spec);
-  const needed = !spec.optional && !assumed;
+  const needed = !spec.optional && !spec.sameAs && !assumed && !dormant;
   switch (spec.is) {
     case 'some':
       return (
@@ -25,19 +25,22 @@ export function SettingEditor({ spec, path }: { readonly spec: SettingSpec; read
           of={spec.of}
           count={spec.count}
           pairs={spec.pairs}
-          optional={spec.optional === true}
+          optional={spec.optional === true || dormant}
           spec={spec}
         />
       );
     case 'composition':
-      return <CompositionEditor path={path} />;
-    case 'record':
+      return <CompositionEditor path={path} assumed={assumed} />;
+    case 'record': {
+      const isAbsent = spec.optional === true && form.value(path) === undefined;
       return (
         <fieldset className="group">
           <legend>{capital(word)}</legend>
-          <Fields fields={spec.fields} base={path} />
+          <Fields fields={spec.fields} base={path} choose={spec.choose} dormant={dormant || isAbsent} />
+          <FieldFindings path={path} />
         </fieldset>
       );
+    }
     case 'list':
       return <ListEditor spec={spec} path={path} />;
     case 'map':
@@ -47,8 +50,18 @@ export function SettingEditor({ spec, path }: { readonly spec: SettingSpec; read
     default:
       return (
         <SettingRow label={capital(word)} path={path}>
-          <SettingControl spec={spec} path={path} word={word} assumed={assumed} needed={needed} />
+          <SettingControl
+            spec={spec}
+            path={path}
+            word={word}
+            assumed={assumed}
+            needed={needed}
+            {...(spec.sameAs && !assumed ? { empty: `as ${form.word(besides(path, spec.sameAs.key))}` } : {})}
+          />
         </SettingRow>
       );
   }
 }
+
+/** The path of a setting beside another. */
+const besides = (path: string, key: string): string => [...path.split('.').slice(0, -1), key].join('.');

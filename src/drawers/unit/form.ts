@@ -8,6 +8,13 @@ import type { SketchStore } from '../../store/sketchStore';
 import { keysOf, type Path, type SettingChange, setSettings, valueAt } from '../edits';
 import { settingWord } from '../words';
 
+export interface EditorProps {
+  readonly spec: SettingSpec;
+  readonly path: string;
+  /** The group it belongs to may be absent, and is. */
+  readonly dormant?: boolean;
+}
+
 /** What every setting of one unit's drawer needs: the unit, its kind, and how to edit. */
 export interface Form {
   readonly unit: SketchUnit;
@@ -17,7 +24,7 @@ export interface Form {
   readonly findings: readonly Finding[];
   readonly assumptions: readonly Assumption[];
   /** The editor of any setting, for settings that hold others. */
-  readonly Editor: (props: { readonly spec: SettingSpec; readonly path: string }) => ReactNode;
+  readonly Editor: (props: EditorProps) => ReactNode;
   value(path: Path): Json | undefined;
   word(path: string): string;
   set(changes: readonly SettingChange[], label: string): void;
