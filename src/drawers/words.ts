@@ -1,6 +1,13 @@
 import type { Assumption, LabelKey } from '../sketch/types';
 import type { Refused } from '../store/commands';
-import { capital, humanised, modelWord, optionWord, sayEditRefusal, settingWord } from '../wording';
+import {
+  capital,
+  humanised,
+  modelWord,
+  sayEditRefusal,
+  settingWord,
+  optionWord as wordOfOption,
+} from '../wording';
 import { SENTENCES } from '../wording/codes';
 
 export {
@@ -8,12 +15,17 @@ export {
   kindWord,
   mixtureRuleWord,
   modelWord,
-  optionWord,
   phaseWord,
   portWord,
   resultWord,
   settingWord,
 } from '../wording';
+
+/** Word of a choice; one that nobody named is shown by its own words. */
+export function optionWord(kind: string, value: string): string {
+  const word = wordOfOption(kind, value);
+  return word === value && /^[a-z]+[A-Z]/.test(value) ? humanised(value) : word;
+}
 
 export const evidenceWord = (name: string): string => humanised(name);
 export const refusedSentence = (refused: Refused): string => sayEditRefusal(refused);

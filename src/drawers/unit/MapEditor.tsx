@@ -53,13 +53,17 @@ function PortMap({ spec, path }: Props) {
   return (
     <>
       {[...entries, ...stray].map(({ key, label, note }) => {
-        const at = `${path}.${key}`;
+        const one = soleField(spec.of);
+        const at = one ? `${path}.${key}.${one.key}` : `${path}.${key}`;
+        const inner = one?.spec ?? spec.of;
         const takesRest = oneTakesRest && blanks.length === 1 && blanks[0]?.key === key;
-        const word = `${form.word(path)} of ${portWord(form.kind.kind, key)}`;
-        return hasOneLine(spec.of) ? (
+        const word = one
+          ? `${form.word(at)} of ${portWord(form.kind.kind, key)}`
+          : `${form.word(path)} of ${portWord(form.kind.kind, key)}`;
+        return hasOneLine(inner) ? (
           <SettingRow key={key} path={at} label={label}>
             <SettingControl
-              spec={spec.of}
+              spec={inner}
               path={at}
               word={word}
               needed={!takesRest}
@@ -84,6 +88,12 @@ function PortMap({ spec, path }: Props) {
       <FieldFindings path={path} />
     </>
   );
+}
+
+/** The only field of a record, where it fits beside the port's name. */
+function soleField(spec: SettingSpec): { readonly key: string; readonly spec: SettingSpec } | undefined {
+  const [first, ...others] = spec.is === 'record' ? Object.entries(spec.fields) : [];
+  return first && others.length === 0 && hasOneLine(first[1]) ? { key: first[0], spec: first[1] } : undefined;
 }
 
 const portsWord = (dir: 'in' | 'out' | undefined): string => (dir === 'in' ? 'inlets' : 'outlets');

@@ -33,11 +33,18 @@ export function SettingEditor({ spec, path, dormant = false }: EditorProps) {
       return <CompositionEditor path={path} assumed={assumed} />;
     case 'record': {
       const isAbsent = spec.optional === true && form.value(path) === undefined;
+      const inside = (
+        <>
+          <Fields fields={spec.fields} base={path} choose={spec.choose} dormant={dormant || isAbsent} />
+          <FieldFindings path={path} />
+        </>
+      );
+      // A group of one needs no head of its own.
+      if (Object.keys(spec.fields).length === 1) return inside;
       return (
         <fieldset className="group">
           <legend>{capital(word)}</legend>
-          <Fields fields={spec.fields} base={path} choose={spec.choose} dormant={dormant || isAbsent} />
-          <FieldFindings path={path} />
+          {inside}
         </fieldset>
       );
     }
