@@ -1,7 +1,7 @@
 /** 'vapourFraction' -> 'vapour fraction', 'in2' -> 'in 2', 'duty_W' -> 'duty': a key's own words. */
 export const humanised = (key: string): string =>
   (key.split(/[./]/).at(-1) ?? key)
-    .replace(/_(K|Pa|W|W_K|mol_s|kg_s|J_mol|J_molK|m3_s|m3_mol|kg_m3|Pa_s|m)$/, '')
+    .replace(/_(K|Pa|W|W_K|mol_s|kg_s|J_kg|J_mol|J_molK|m3_s|m3_mol|kg_m3|Pa_s|m)$/, '')
     .replace(/([a-z])([A-Z])/g, '$1 $2')
     .replace(/([a-zA-Z])(\d)/g, '$1 $2')
     .replace(/[-_]/g, ' ')

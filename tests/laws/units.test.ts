@@ -27,8 +27,8 @@ const between = (random: Random, low: number, high: number): number => low + (hi
 const oneOf = <T>(random: Random, list: readonly T[]): T => list[Math.floor(random() * list.length)]!;
 
 /** A feed with some chemicals absent, some in traces, anywhere between 1.2 and 40 bar. */
-function feed(id: string, stream: string, random: Random, nc: number): ProblemUnit {
-  const x: number[] = Array.from({ length: nc }, () => {
+function feed(id: string, stream: string, random: Random, nc: number, gases = 0): ProblemUnit {
+  const x: number[] = Array.from({ length: nc - gases }, () => {
     const kind = random();
     return kind < 0.2 ? 0 : kind < 0.3 ? 1e-7 * random() : random();
   });
@@ -39,9 +39,12 @@ function feed(id: string, stream: string, random: Random, nc: number): ProblemUn
     state,
     flow:
       random() < 0.5 ? molar(between(random, 0.01, 100)) : { is: 'mass', m_kg_s: between(random, 0.01, 10) },
-    composition: parts(...x),
+    composition: parts(...x, ...new Array<number>(gases).fill(0)),
   });
 }
+
+/** What combustion takes and makes. */
+const GASES = ['nitrogen', 'oxygen', 'argon', 'carbon-dioxide', 'water'];
 
 const drop = (random: Random) => ({ p: { drop: between(random, 0, 0.8e5) } });
 
@@ -49,7 +52,13 @@ const drop = (random: Random) => ({ p: { drop: between(random, 0, 0.8e5) } });
 const CASES: Readonly<
   Record<
     string,
-    { readonly ins: readonly string[]; readonly outs: readonly string[]; settings(r: Random): unknown }
+    {
+      readonly ins: readonly string[];
+      readonly outs: readonly string[];
+      /** Needs the gases of air and combustion among the chemicals. */
+      readonly burns?: true;
+      settings(r: Random): unknown;
+    }
   >
 > = {
   join: {
@@ -133,6 +142,29 @@ const CASES: Readonly<
       ]),
     }),
   },
+  chamber: {
+    ins: ['fuel1', 'fuel3'],
+    outs: ['out'],
+    burns: true,
+    settings: (r) => ({
+      air: {
+        ...oneOf(r, [
+          { excess: between(r, 0, 3) },
+          { stackO2Dry: between(r, 0, 0.15) },
+          { flow: molar(1e4) },
+        ]),
+        T: between(r, 260, 500),
+        P: between(r, 1e5, 5e5),
+        composition: {
+          is: 'preset',
+          preset: oneOf(r, ['dry air', '79/21', 'humid air']),
+          relativeHumidity: 0.1 * r(),
+        },
+      },
+      ...oneOf(r, [{ p: { drop: 0 } }, { p: { ratio: 0.9 } }]),
+      heat: oneOf(r, [{ duty: 0 }, { lossOfLHV: between(r, 0, 0.3) }, { T: between(r, 400, 1900) }]),
+    }),
+  },
   drum: {
     ins: ['in1', 'in3'],
     outs: ['vapour', 'liquid'],
@@ -150,8 +182,9 @@ const CASES: Readonly<
 };
 
 function problemUnits(kind: string, random: Random, nc: number): ProblemUnit[] {
-  const { ins, outs, settings } = CASES[kind]!;
-  const feeds = ins.map((port, k) => feed(`f${k}`, `i-${port}`, random, nc));
+  const { ins, outs, burns, settings } = CASES[kind]!;
+  const gases = burns ? GASES.length : 0;
+  const feeds = ins.map((port, k) => feed(`f${k}`, `i-${port}`, random, nc, gases));
   const line = `u ${kind} ${ins.map((p) => `${p}=i-${p}`).join(' ')} > ${outs.map((p) => `${p}=o-${p}`).join(' ')}`;
   return [...feeds, unit(line, settings(random))];
 }
@@ -159,16 +192,20 @@ function problemUnits(kind: string, random: Random, nc: number): ProblemUnit[] {
 const streamsOf = (batch: SolveBatch, kind: string, side: 'ins' | 'outs'): SolvedStream[] =>
   CASES[kind]![side].map((port) => solvedStream(batch, `${side === 'ins' ? 'i' : 'o'}-${port}`));
 
-const bases: Readonly<Record<string, () => Promise<Basis>>> = {
-  'Peng-Robinson': () => basisOf(LET_DOWN),
-  "Raoult's law": () => basisOf(['n-pentane', 'n-hexane', 'benzene', 'toluene', 'n-decane'], 'raoult'),
+const bases: Readonly<Record<string, (kind: string) => Promise<Basis>>> = {
+  'Peng-Robinson': (kind) => basisOf([...LET_DOWN, ...(CASES[kind]?.burns ? GASES : [])]),
+  "Raoult's law": (kind) =>
+    basisOf(
+      ['n-pentane', 'n-hexane', 'benzene', 'toluene', 'n-decane', ...(CASES[kind]?.burns ? GASES : [])],
+      'raoult',
+    ),
 };
 
 describe.each(Object.entries(bases))('under %s', (_, makeBasis) => {
   test.each(Object.keys(CASES))(
     `a %s closes and stays itself in a used workspace (seed ${SEED})`,
     async (kind) => {
-      const basis = await makeBasis();
+      const basis = await makeBasis(kind);
       const random = seeded(SEED);
       const used = makeMemory(basis);
       let solved = 0;
@@ -186,7 +223,7 @@ describe.each(Object.entries(bases))('under %s', (_, makeBasis) => {
         }
         solved++;
         const figures = audit(
-          streamsOf(batch, kind, 'ins'),
+          [...streamsOf(batch, kind, 'ins'), ...(Object.values(result.drawn ?? {}) as SolvedStream[])],
           streamsOf(batch, kind, 'outs'),
           result,
           basis.chemicals,
@@ -208,7 +245,7 @@ describe.each(Object.entries(bases))('under %s', (_, makeBasis) => {
   );
 
   test.each(Object.keys(CASES))(`a warm %s ends where a cold one does (seed ${SEED + 1})`, async (kind) => {
-    const basis = await makeBasis();
+    const basis = await makeBasis(kind);
     const random = seeded(SEED + 1);
     const used = makeMemory(basis);
     for (let k = 0; k < COUNT; k++) {

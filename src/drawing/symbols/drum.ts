@@ -1,5 +1,5 @@
-import type { Json } from '../../sketch/types';
 import type { LinkData, PortPlace, SymbolData } from '../types';
+import { directionOf } from './heatDirection';
 import { type DrawnUnit, detail, inner, numberOf, outline, port, type SymbolKind } from './shapes';
 
 const SHELL = outline('M-24 -44A24 12 0 0 1 24 -44V44A24 12 0 0 1 -24 44Z');
@@ -27,13 +27,6 @@ const heated = (flow: LinkData['flow']): SymbolData => ({
   link: { from: [24, 24], to: [48, 24], flow },
 });
 const HEATED = { in: heated('in'), out: heated('out'), none: heated('none') };
-
-/** The sign of a duty as it was typed; without one the direction is a result and no arrowhead is drawn. */
-function directionOf(h: Json): LinkData['flow'] {
-  const duty = h !== null && typeof h === 'object' && 'duty' in h ? h.duty : undefined;
-  if (typeof duty !== 'string' && typeof duty !== 'number') return 'none';
-  return /^\s*[-−]/.test(String(duty)) ? 'out' : 'in';
-}
 
 /** Upright vessel with round heads; a coil when it has a duty. */
 export const drum: SymbolKind = {

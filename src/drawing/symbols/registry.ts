@@ -2,6 +2,7 @@ import { CATALOGUE } from '../../engine/units/catalogue';
 import type { KindCatalogue, PortSpec } from '../../engine/units/types';
 import type { SketchUnit } from '../../sketch/types';
 import type { SymbolData } from '../types';
+import { chamber } from './chamber';
 import { compressor } from './compressor';
 import { cooler } from './cooler';
 import { divide } from './divide';
@@ -29,6 +30,7 @@ export const SYMBOLS: Readonly<Record<string, SymbolKind>> = {
   heater,
   cooler,
   drum,
+  chamber,
 };
 
 const drawn = new WeakMap<SketchUnit, SymbolData>();

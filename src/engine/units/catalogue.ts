@@ -1,3 +1,4 @@
+import { chamber } from './chamber/catalogue';
 import { compressor } from './compressor/catalogue';
 import { cooler } from './cooler/catalogue';
 import { divide } from './divide/catalogue';
@@ -24,6 +25,7 @@ export const CATALOGUE: Readonly<Record<string, KindCatalogue>> = {
   heater,
   cooler,
   drum,
+  chamber,
 };
 
 /** Thresholds of all limits: what a sketch may override, and what is printed with its basis. */

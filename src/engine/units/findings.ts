@@ -1,3 +1,4 @@
+import type { CHAMBER_FINDINGS } from './chamber/findings';
 import type { COMPRESSOR_FINDINGS } from './compressor/findings';
 import type { COOLER_FINDINGS } from './cooler/findings';
 import type { DIVIDE_FINDINGS } from './divide/findings';
@@ -24,4 +25,5 @@ export type UnitFindingCode =
   | (typeof HEATER_FINDINGS)[number]
   | (typeof COOLER_FINDINGS)[number]
   | (typeof DRUM_FINDINGS)[number]
+  | (typeof CHAMBER_FINDINGS)[number]
   | (typeof STREAM_FINDINGS)[number];

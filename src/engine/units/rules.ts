@@ -1,3 +1,4 @@
+import { CHAMBER_RULES } from './chamber/limits';
 import { COMPRESSOR_RULES } from './compressor/limits';
 import { COOLER_RULES } from './cooler/limits';
 import { DRUM_RULES } from './drum/limits';
@@ -24,6 +25,7 @@ export const RULES: readonly Rule[] = [
   ...COOLER_RULES,
   ...UTILITY_RULES,
   ...DRUM_RULES,
+  ...CHAMBER_RULES,
   ...PRODUCT_RULES,
   PAIR_NONE,
   PAIR_PREDICTED,

@@ -1,3 +1,4 @@
+import { chamber } from './chamber/solve';
 import { compressor } from './compressor/solve';
 import { cooler } from './cooler/solve';
 import { divide } from './divide/solve';
@@ -32,4 +33,5 @@ export const SOLVERS: Readonly<Record<string, AnyKind>> = {
   heater: seal(heater),
   cooler: seal(cooler),
   drum: seal(drum),
+  chamber: seal(chamber),
 };

@@ -141,6 +141,8 @@ export interface KindCatalogue {
    * inside the settings. With any of these the unit needs a value.
    */
   readonly missing?: (settings: unknown, ports: readonly Port[]) => readonly Omit<Finding, 'weight'>[];
+  /** Chemicals that the kind needs beside those of the sketch: what complete combustion takes and makes. */
+  readonly brings?: 'combustion';
   readonly results: Readonly<Record<string, ResultSpec>>;
   /** Codes this kind may emit. */
   readonly findings: readonly string[];

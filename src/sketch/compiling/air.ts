@@ -1,3 +1,4 @@
+import { loadIndex } from '../../data/bank';
 import { type ElementCounts, elementCounts } from '../../engine/chemicals/elements';
 import type { SettingSpec } from '../../engine/units/types';
 import { isObject, own } from '../json';
@@ -16,51 +17,81 @@ export const AIR_OF: Readonly<Record<AirPreset, readonly AirKey[]>> = {
   'humid air': ['N2', 'O2', 'Ar', 'CO2', 'H2O'],
 };
 
-const AIR: Readonly<
-  Record<AirKey, { readonly id: string; readonly cas: string; readonly elements: ElementCounts }>
+/** What ready-made air is made of, and what combustion takes and makes. */
+type GasKey = AirKey | 'SO2' | 'HCl';
+
+const GASES: Readonly<
+  Record<GasKey, { readonly id: string; readonly cas: string; readonly elements: ElementCounts }>
 > = {
   N2: { id: 'nitrogen', cas: '7727-37-9', elements: { N: 2 } },
   O2: { id: 'oxygen', cas: '7782-44-7', elements: { O: 2 } },
   Ar: { id: 'argon', cas: '7440-37-1', elements: { Ar: 1 } },
   CO2: { id: 'carbon-dioxide', cas: '124-38-9', elements: { C: 1, O: 2 } },
   H2O: { id: 'water', cas: '7732-18-5', elements: { H: 2, O: 1 } },
+  SO2: { id: 'sulfur-dioxide', cas: '7446-09-5', elements: { S: 1, O: 2 } },
+  HCl: { id: 'hydrogen-chloride', cas: '7647-01-0', elements: { H: 1, Cl: 1 } },
 };
-const KEYS: readonly AirKey[] = ['N2', 'O2', 'Ar', 'CO2', 'H2O'];
+const KEYS: readonly GasKey[] = ['N2', 'O2', 'Ar', 'CO2', 'H2O', 'SO2', 'HCl'];
+/** What becomes of an element that burns. */
+const BECOMES: Readonly<Record<string, GasKey>> = { C: 'CO2', H: 'H2O', S: 'SO2', N: 'N2', Cl: 'HCl' };
 
 /** The sketch's chemicals in its order, then those that a unit brings in. */
 export interface FullList {
   readonly chemicals: readonly SketchChemical[];
   readonly added: readonly string[];
+  /** Which of those added only combustion asks for; air asks for the others. */
+  readonly forCombustion: ReadonlySet<string>;
   readonly air: AirPlaces;
 }
 
 export const chemicalId = (chemical: SketchChemical): string =>
   typeof chemical === 'string' ? chemical : chemical.id;
 
-/** The full list: what ready-made air needs is found by CAS number, else by formula, else taken from the bank. */
+/** The full list: what air and combustion need is found by CAS number, else by formula, else taken from the bank. */
 export function fullList(sketch: Pick<Sketch, 'chemicals' | 'units'>, registry: Registry): FullList {
-  const needed = new Set(
+  const presets = new Set(
     sketch.units.flatMap((unit) => {
       const fields = kindOf(registry, unit.kind)?.settings;
       return fields ? presetsIn({ is: 'record', fields }, unit.settings) : [];
     }),
   );
-  const air: Record<AirKey, number> = { N2: -1, O2: -1, Ar: -1, CO2: -1, H2O: -1 };
+  const forAir = new Set<GasKey>([...presets].flatMap((preset) => AIR_OF[preset]));
+  const burns = sketch.units.some((unit) => kindOf(registry, unit.kind)?.brings === 'combustion');
+  const forFire = burns ? combustionNeeds(sketch.chemicals) : new Set<GasKey>();
+  const places: Record<GasKey, number> = { N2: -1, O2: -1, Ar: -1, CO2: -1, H2O: -1, SO2: -1, HCl: -1 };
   const added: string[] = [];
-  const wanted = new Set([...needed].flatMap((preset) => AIR_OF[preset]));
+  const forCombustion = new Set<string>();
   for (const key of KEYS) {
-    const { id } = AIR[key];
-    air[key] = place(sketch.chemicals, key);
-    // An own chemical under the bank's name that is something else keeps the name; then the air cannot be had.
-    if (air[key] >= 0 || !wanted.has(key) || sketch.chemicals.some((c) => chemicalId(c) === id)) continue;
-    air[key] = sketch.chemicals.length + added.length;
+    const { id } = GASES[key];
+    places[key] = place(sketch.chemicals, key);
+    const wanted = forAir.has(key) || forFire.has(key);
+    // An own chemical under the bank's name that is something else keeps the name; then the gas cannot be had.
+    if (places[key] >= 0 || !wanted || sketch.chemicals.some((c) => chemicalId(c) === id)) continue;
+    places[key] = sketch.chemicals.length + added.length;
     added.push(id);
+    if (!forAir.has(key)) forCombustion.add(id);
   }
-  return { chemicals: sketch.chemicals, added, air };
+  return { chemicals: sketch.chemicals, added, forCombustion, air: places };
 }
 
-function place(chemicals: readonly SketchChemical[], key: AirKey): number {
-  const { id, cas, elements } = AIR[key];
+const formulas = new Map(loadIndex().map(({ id, formula }) => [id, formula]));
+
+/** Oxygen, and what becomes of the elements in the sketch's chemicals; what neither burns nor leaves anything brings nothing. */
+function combustionNeeds(chemicals: readonly SketchChemical[]): ReadonlySet<GasKey> {
+  const needs = new Set<GasKey>(['O2']);
+  for (const c of chemicals) {
+    const formula = typeof c === 'string' ? formulas.get(c) : c.own.formula;
+    const atoms = formula === undefined ? undefined : elementCounts(formula);
+    for (const element of Object.keys(atoms ?? {})) {
+      const gas = BECOMES[element];
+      if (gas) needs.add(gas);
+    }
+  }
+  return needs;
+}
+
+function place(chemicals: readonly SketchChemical[], key: GasKey): number {
+  const { id, cas, elements } = GASES[key];
   const byCas = chemicals.findIndex((c) => (typeof c === 'string' ? c === id : c.own.cas === cas));
   if (byCas >= 0) return byCas;
   return chemicals.findIndex(
@@ -81,16 +112,18 @@ function sameElements(a: ElementCounts | undefined, b: ElementCounts): boolean {
 export const isPreset = (value: Json | undefined): value is AirPreset =>
   typeof value === 'string' && Object.hasOwn(AIR_OF, value);
 
+const presetOf = (composition: unknown): readonly AirPreset[] => {
+  const preset = isObject(composition) ? own(composition, 'preset') : undefined;
+  return isPreset(preset) ? [preset] : [];
+};
+
 /** Ready-made airs that these settings ask for, wherever a composition may stand. */
 function presetsIn(spec: SettingSpec, value: Json | undefined): readonly AirPreset[] {
-  if (value === undefined) return [];
+  if (value === undefined) return spec.is === 'composition' ? presetOf(spec.otherwise?.value) : [];
   if (spec.is === 'list')
     return Array.isArray(value) ? (value as readonly Json[]).flatMap((v) => presetsIn(spec.of, v)) : [];
   if (!isObject(value)) return [];
-  if (spec.is === 'composition') {
-    const preset = own(value, 'preset');
-    return isPreset(preset) ? [preset] : [];
-  }
+  if (spec.is === 'composition') return presetOf(value);
   if (spec.is === 'map') return Object.values(value).flatMap((v) => presetsIn(spec.of, v));
   if (spec.is === 'record' || spec.is === 'some') {
     const fields = spec.is === 'record' ? spec.fields : spec.of;

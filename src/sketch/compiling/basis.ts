@@ -79,7 +79,7 @@ export function readBasis(sketch: Sketch, list: FullList, bank: BankData): Basis
       );
     if (chemical.own && chemical.formula !== undefined && !chemical.elements)
       notes.push(finding('sketch/formula-not-read', 'caution', at, word('typed', chemical.formula)));
-    assumptions.push(...assumptionsOf(chemical, k));
+    assumptions.push(...assumptionsOf(chemical, k, list.forCombustion.has(chemical.id)));
   }
   const complete = data.filter((c) => c !== undefined);
   const basis =
@@ -110,7 +110,11 @@ function assumedOf(chemical: ChemicalData): ChemicalData {
 }
 
 /** What is assumed of a chemical because nothing better is known. */
-function assumptionsOf(chemical: ChemicalData, k: number): readonly AssumptionDraft[] {
+function assumptionsOf(
+  chemical: ChemicalData,
+  k: number,
+  forCombustion: boolean,
+): readonly AssumptionDraft[] {
   const found: AssumptionDraft[] = [];
   const path = `chemicals.${k}`;
   if (chemical.assumed)
@@ -118,7 +122,7 @@ function assumptionsOf(chemical: ChemicalData, k: number): readonly AssumptionDr
       path,
       value: chemical.id,
       unitText: chemical.id,
-      reason: `Air needs ${chemical.name.toLowerCase()}, which is not among the sketch's chemicals.`,
+      reason: `${forCombustion ? 'Combustion' : 'Air'} needs ${chemical.name.toLowerCase()}, which is not among the sketch's chemicals.`,
     });
   if (chemical.Hf_J_mol === undefined)
     found.push({

@@ -17,6 +17,21 @@ export const UNIT_SENTENCES: Readonly<Record<string, Sentence>> = {
     says: 'The outlet temperature would be {temperature}.',
     next: 'Give a smaller change of temperature.',
   },
+  'reaction/no-formula': {
+    title: 'No formula',
+    says: '{chemical} has no formula, so its elements cannot be followed.',
+    next: 'Give the formula of {chemical}, or keep it out of this unit.',
+  },
+  'reaction/no-formation-enthalpy': {
+    title: 'No enthalpy of formation',
+    says: '{chemical} has no enthalpy of formation, so the heat of its reaction is not known.',
+    next: 'Give the enthalpy of formation of {chemical} as ideal gas at 25 °C.',
+  },
+  'reaction/molar-mass': {
+    title: 'Molar mass against formula',
+    says: 'The molar mass of {chemical} is given as {given}; its formula has {byFormula} g/mol, and mass would not close.',
+    next: 'Give {chemical} the molar mass of its formula.',
+  },
   'cooling/below-air': {
     title: 'Too cool for air',
     says: 'The outlet of {temperature} is below {limit}, which air reaches on a warm day.',

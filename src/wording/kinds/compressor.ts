@@ -26,7 +26,7 @@ export const compressor: KindWords = {
     },
     'compressor/liquid-enters': {
       title: 'Liquid enters the compressor',
-      says: 'By mass {liquid%} of what enters is liquid; a compressor takes {limit} at most.',
+      says: 'By mass {liquid%} of what enters is liquid; a compressor takes {limit%} at most.',
       next: 'Take the liquid off in a drum, or warm the gas before the compressor.',
     },
     'compressor/near-dew-point': {

@@ -1,4 +1,5 @@
 import type { KindWords } from '../types';
+import { chamber } from './chamber';
 import { compressor } from './compressor';
 import { cooler } from './cooler';
 import { divide } from './divide';
@@ -24,4 +25,5 @@ export const KIND_WORDS: Readonly<Record<string, KindWords>> = {
   heater,
   cooler,
   drum,
+  chamber,
 };
