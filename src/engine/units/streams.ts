@@ -2,14 +2,10 @@ import { makeStream, type StreamCondition } from '../equilibrium/stream';
 import type { FlashWarm, StreamState } from '../equilibrium/types';
 import { type Finding, noSolution, type Outcome, solved } from '../outcome';
 import type { PressureSI } from './groups';
+import { totalOf } from './total';
 import type { Call } from './types';
 
-/** Total molar flow [mol/s]. */
-export function totalOf(n_mol_s: Float64Array): number {
-  let total = 0;
-  for (const n of n_mol_s) total += n;
-  return total;
-}
+export { totalOf } from './total';
 
 /** A stream through which nothing flows; temperature and pressure say where it would start. */
 export const emptyStream = (nc: number, T_K: number, P_Pa: number): StreamState => ({

@@ -1,6 +1,6 @@
 import type { Phase, StreamState } from '../equilibrium/types';
 import type { Model } from '../thermo/types';
-import { totalOf } from './streams';
+import { totalOf } from './total';
 
 /** Standard acceleration of gravity [m/s2], exact by definition. */
 export const GRAVITY_m_s2 = 9.80665;

@@ -3,7 +3,7 @@ import type { Finding } from '../../outcome';
 import type { Model } from '../../thermo/types';
 import type { MachineResults, MachineSettings } from '../compression/types';
 import { finding, type Rule, rule, saw, thresholdOf } from '../limits/rule';
-import { totalOf } from '../streams';
+import { totalOf } from '../total';
 import type { Answer, Call } from '../types';
 import { massFlow_kg_s } from '../volume';
 
