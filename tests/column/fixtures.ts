@@ -9,8 +9,9 @@ import type { ColumnResults } from '../../src/engine/units/column/results';
 import type { ColumnSettings } from '../../src/engine/units/column/settings';
 import { column } from '../../src/engine/units/column/solve';
 import type { Answer, Call, Work } from '../../src/engine/units/types';
-import { SITE } from '../network/fixtures';
 import { bankModel } from '../robust/bankModels';
+
+export const SITE = { pressure_Pa: 101325, ambient_K: 293.15, coolingWater_K: 301.15 };
 
 export const freshWork = (): Work => ({ flash: new Map() });
 

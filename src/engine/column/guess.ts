@@ -13,6 +13,8 @@ export interface Guess {
   readonly refluxRatio: number;
   readonly topT_K: number;
   readonly bottomT_K: number;
+  /** Vapour that the feeds bring [mol/s]. */
+  readonly vapour: number;
   readonly simple: SimpleK;
 }
 
@@ -132,6 +134,7 @@ export function guessOf(s: StageSystem): Guess {
     refluxRatio,
     topT_K: simplePoint(simple, zTop, P[0], task.top === 'liquid' ? 'bubble' : 'dew'),
     bottomT_K: simplePoint(simple, xBottom, P[1], 'bubble'),
+    vapour,
     simple,
   };
 }

@@ -3,7 +3,7 @@ import { type Guess, guessOf } from './guess';
 import { Newton, type NewtonEnd, type Wanted } from './newton';
 import { type Sweeps, startBySweeps } from './start';
 import { StageSystem, shapeOf } from './system';
-import { flowTarget, type Target, targetOf } from './targets';
+import { flowTarget, naturalOf, type Target, targetOf } from './targets';
 import type { Attempt, ColumnState, ColumnTask, Effort, Fixing } from './types';
 
 export type ColumnEnd =
@@ -22,7 +22,7 @@ export interface Failure {
   /** 'out-of-reach': how much of the way from a plain column to what is asked was possible, and which fixing. */
   readonly way?: number;
   readonly fixing?: number;
-  /** 'out-of-reach': the measure that was reached, see reachedOf. */
+  /** 'out-of-reach': what was reached instead of that fixing's value, in its own unit. */
   readonly reached?: number;
 }
 
@@ -45,6 +45,8 @@ class Search {
   private readonly newton: Newton;
   private readonly wanted: Wanted;
   private readonly direct: ReadonlyMap<number, number>;
+  /** Fixings that are targets, with their place in the task's list. */
+  private readonly moved: readonly Placed[];
   private failure: Failure | undefined;
   /** How far the last way was followed, 0 to 1. */
   private way = 0;
@@ -58,7 +60,8 @@ class Search {
     system.load(task);
     const { direct, left } = directParameters(system, task.fixed);
     this.direct = direct;
-    const targets = [...left.map((x) => targetOf(system, x)), ...drawTargets(system)];
+    this.moved = left;
+    const targets = [...left.map((x) => targetOf(system, x.fixed)), ...drawTargets(system)];
     this.wanted = {
       free: system.movers.map((_, k) => k).filter((k) => !direct.has(k)),
       targets,
@@ -116,12 +119,29 @@ class Search {
     };
     const guess = guessOf(s);
     // With nothing to move the plain column is the one that was tried.
-    for (const [, sweeps] of moved === 0 ? [] : STARTS) {
-      this.start(guess, sweeps);
-      if (this.attempt('plain-then-move', plain, ITERATIONS)) return this.moveFrom(moved);
-    }
+    for (const other of moved === 0 ? [] : [guess, this.calmer(guess)])
+      if (this.plainColumn(plain, other) && this.moveFrom(moved)) return true;
+    if (this.failure?.why === 'out-of-reach') return false;
     this.start(guess, PLAIN);
     return this.fromConstantOverflow(plain) && (moved === 0 || this.moveFrom(moved));
+  }
+
+  private plainColumn(plain: Wanted, guess: Guess): boolean {
+    for (const [, sweeps] of STARTS) {
+      this.start(guess, sweeps);
+      if (this.attempt('plain-then-move', plain, ITERATIONS)) return true;
+    }
+    return false;
+  }
+
+  /** Another plain column, far from dry: more reflux where that is open, else a distillate between what is possible. */
+  private calmer(guess: Guess): Guess {
+    const all = guess.top + guess.bottoms;
+    if (!this.task.fixed.some((x) => x.fix === 'refluxRatio'))
+      return { ...guess, refluxRatio: Math.max(3, (1.5 * guess.vapour) / guess.top) };
+    const least = Math.min((1.1 * guess.vapour) / (1 + guess.refluxRatio), 0.9 * all);
+    const top = (least + all) / 2;
+    return { ...guess, top, bottoms: all - top };
   }
 
   private start(guess: Guess, sweeps: Sweeps): void {
@@ -197,7 +217,14 @@ class Search {
       }
     }
     const target = this.wanted.targets[fixing]!;
-    this.failure = { ...this.standing(), why: 'out-of-reach', way, fixing, reached: target.measure() };
+    const { index, fixed } = this.moved[fixing]!;
+    this.failure = {
+      ...this.standing(),
+      why: 'out-of-reach',
+      way,
+      fixing: index,
+      reached: naturalOf(this.system, fixed, target.measure()),
+    };
   }
 
   private attempt(name: Attempt, wanted: Wanted, iterations: number): boolean {
@@ -253,18 +280,23 @@ const SUM_STARTS: readonly (readonly [Attempt, number, number])[] = [
   ['wilson-sweeps', 12, 0],
 ];
 
+interface Placed {
+  readonly index: number;
+  readonly fixed: Fixing;
+}
+
 const drawTargets = (s: StageSystem): Target[] => s.task.draws.map((d, k) => flowTarget(s, k, d.flow));
 
 /** Fixings that are parameters themselves, by parameter; and the others. */
 function directParameters(
   s: StageSystem,
   fixed: readonly Fixing[],
-): { readonly direct: ReadonlyMap<number, number>; readonly left: readonly Fixing[] } {
+): { readonly direct: ReadonlyMap<number, number>; readonly left: readonly Placed[] } {
   const direct = new Map<number, number>();
-  const left: Fixing[] = [];
+  const left: Placed[] = [];
   const bottoms = s.movers.findIndex((m) => m.moves === 'bottoms');
   const { draws } = s.task;
-  for (const x of fixed) {
+  fixed.forEach((x, index) => {
     if (x.fix === 'refluxRatio') direct.set(0, s.totalCondenser ? 1 / x.value : x.value);
     else if (x.fix === 'flow' && x.flow.basis === 'mole' && bottoms >= 0 && x.product === 'bottoms')
       direct.set(bottoms, x.flow.value);
@@ -276,8 +308,8 @@ function directParameters(
       draws.every((d) => d.flow.basis === 'mole')
     )
       direct.set(bottoms, s.feedTotal - x.flow.value - draws.reduce((sum, d) => sum + d.flow.value, 0));
-    else left.push(x);
-  }
+    else left.push({ index, fixed: x });
+  });
   return { direct, left };
 }
 

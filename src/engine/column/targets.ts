@@ -237,3 +237,21 @@ function refluxRatioTarget(s: StageSystem, value: number): Target {
     wanted: Math.log(value),
   };
 }
+
+/** A fixing's measure as a value of its own unit again. */
+export function naturalOf(s: StageSystem, fixing: Fixing, measure: number): number {
+  switch (fixing.fix) {
+    case 'purity':
+    case 'recovery':
+      return fixing.value <= 0.5 ? Math.exp(measure) : 1 - Math.exp(measure);
+    case 'temperature':
+      return 10 * measure;
+    case 'duty':
+      return measure * s.feedTotal * ENERGY_J_MOL;
+    case 'refluxRatio':
+    case 'boilup':
+    case 'flow':
+    case 'reflux':
+      return Math.exp(measure);
+  }
+}

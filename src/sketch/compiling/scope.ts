@@ -19,7 +19,7 @@ export interface Scope {
   readonly unit: UnitId;
   readonly kind: KindCatalogue;
   /** The unit's settings as typed. */
-  readonly root?: JsonObject;
+  readonly typed: JsonObject;
   /** Ports that have a stream. */
   readonly ports: readonly Port[];
   /** Index in the full list by chemical id. */

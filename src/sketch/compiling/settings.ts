@@ -23,7 +23,7 @@ export function readSettings(raw: JsonObject, scope: Scope): JsonObjectSI | type
   if (idle === GAP) return GAP;
   const chosen = choose.map((choice) => checkChoice(choice, raw, scope));
   const fields = Object.fromEntries(Object.entries(settings).filter(([key]) => !idle.has(key)));
-  const read = readFields(fields, raw, '', { ...scope, root: raw }, Object.keys(settings));
+  const read = readFields(fields, raw, '', scope, Object.keys(settings));
   if (read === GAP || !chosen.every((fine) => fine)) return GAP;
   const missing = scope.kind.missing?.(read, scope.ports) ?? [];
   for (const { code, at, evidence: seen } of missing)
@@ -117,7 +117,7 @@ function copyBeside(
   scope: Scope,
 ): void {
   const value = out[beside];
-  const idle = unless !== undefined && at(scope.root ?? {}, unless.path) === unless.is;
+  const idle = unless !== undefined && at(scope.typed, unless.path) === unless.is;
   if (value === undefined || idle) return;
   out[key] = value;
   const typed = own(raw, beside);

@@ -58,6 +58,7 @@ function readUnit(unit: SketchUnit, ports: readonly string[], surroundings: Surr
     ...surroundings,
     unit: unit.id,
     kind,
+    typed: unit.settings,
     ports,
     gaps: [],
     notes: [],

@@ -3,31 +3,15 @@ import { makeStream } from '../../equilibrium/stream';
 import type { Finding } from '../../outcome';
 import type { ThermoModel } from '../../thermo/types';
 import { joiningPressure } from '../limits/joiningPressure';
-import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { finding, named, type Rule, saw, thresholdOf } from '../limits/rule';
 import { utilityLevels } from '../limits/utilities';
 import type { Answer, Call, SiteSI } from '../types';
 import { topPort } from './free';
 import type { ColumnResults } from './results';
+import { DRIES, NEAR_CRITICAL, OFF_STAGE, PINCH, SECOND_LIQUID, TOO_NEAR_CRITICAL } from './rules';
 import type { ColumnSettings, PlaceSI } from './settings';
 
-/** Liquid or vapour on a stage as a share of all feeds. */
-const DRIES = rule('column/stage-dries', 'caution', 0.01, 'fraction');
-/** More than this many neighbouring stages within 0.1 K. */
-const PINCH = rule('column/pinch', 'note', 5, 'number');
 const PINCH_K = 0.1;
-const OFF_STAGE = rule('column/feed-off-stage', 'note', 40, 'temperatureDifference');
-/** Mass density of liquid to vapour on a stage. */
-const NEAR_CRITICAL = rule('column/near-critical', 'caution', 4, 'number');
-const TOO_NEAR_CRITICAL = rule('column/too-near-critical', 'beyond-limit', 2.5, 'number');
-const SECOND_LIQUID = rule('column/second-liquid', 'beyond-limit', 0, 'number', 'phase-stability');
-export const COLUMN_RULES: readonly Rule[] = [
-  DRIES,
-  PINCH,
-  OFF_STAGE,
-  NEAR_CRITICAL,
-  TOO_NEAR_CRITICAL,
-  SECOND_LIQUID,
-];
 
 interface Seen {
   readonly call: Call<ColumnSettings>;

@@ -92,9 +92,7 @@ function reason(
   const found: Finding[] = [];
   if (failure.why === 'out-of-reach') {
     const path = failure.fixing === undefined ? {} : { path: `fixedBy.${failure.fixing}` };
-    found.push(
-      refuse(call, code, path, [evidence('way', failure.way ?? 0, 'fraction'), steps, where, ...tried]),
-    );
+    found.push(refuse(call, code, path, [...reached(job.task, failure), steps, where, ...tried]));
   } else {
     const phase: Evidence = { name: 'phase', value: 0, dim: 'number', text: failure.phase ?? 'vapour' };
     found.push(
@@ -105,6 +103,30 @@ function reason(
   return vapour
     ? [refuse(call, 'column/feed-vapour-above-top', { path: 'fixedBy' }, vapour), ...found]
     : found;
+}
+
+/** What was asked and what was reached instead, each in its own dimension. */
+function reached(task: ColumnTask, { fixing, reached: have, way }: Failure): Evidence[] {
+  const share = evidence('way', way ?? 0, 'fraction');
+  const x = fixing === undefined ? undefined : task.fixed[fixing];
+  if (!x || have === undefined) return [share];
+  const [wanted, dim] = ((): readonly [number, Evidence['dim']] => {
+    switch (x.fix) {
+      case 'flow':
+      case 'reflux':
+        return [x.flow.value, x.flow.basis === 'mole' ? 'molarFlow' : 'massFlow'];
+      case 'purity':
+      case 'recovery':
+        return [x.value, 'fraction'];
+      case 'temperature':
+        return [x.value, 'temperature'];
+      case 'duty':
+        return [x.value, 'power'];
+      default:
+        return [x.value, 'number'];
+    }
+  })();
+  return [evidence('asked', wanted, dim), evidence('reached', have, dim), share];
 }
 
 const CODES: Readonly<Record<Failure['why'], Finding['code']>> = {

@@ -1,0 +1,19 @@
+import { type Rule, rule } from '../limits/rule';
+
+/** Liquid or vapour on a stage as a share of all feeds. */
+export const DRIES = rule('column/stage-dries', 'caution', 0.01, 'fraction');
+/** More than this many neighbouring stages within 0.1 K. */
+export const PINCH = rule('column/pinch', 'note', 5, 'number');
+export const OFF_STAGE = rule('column/feed-off-stage', 'note', 40, 'temperatureDifference');
+/** Mass density of liquid to vapour on a stage. */
+export const NEAR_CRITICAL = rule('column/near-critical', 'caution', 4, 'number');
+export const TOO_NEAR_CRITICAL = rule('column/too-near-critical', 'beyond-limit', 2.5, 'number');
+export const SECOND_LIQUID = rule('column/second-liquid', 'beyond-limit', 0, 'number', 'phase-stability');
+export const COLUMN_RULES: readonly Rule[] = [
+  DRIES,
+  PINCH,
+  OFF_STAGE,
+  NEAR_CRITICAL,
+  TOO_NEAR_CRITICAL,
+  SECOND_LIQUID,
+];
