@@ -100,7 +100,9 @@ export function closureTable(input: ReportInput): Table {
   };
   if (closure?.complete) {
     add('Mass', closure.mass, 'massFlow');
-    add('Energy', closure.energy, 'power');
+    // What comes in as heat and power counts as coming in, so that both sides can be compared.
+    const { energy } = closure;
+    add('Energy, with heat and power', { ...energy, in: energy.in + energy.made, made: 0 }, 'power');
     for (const [i, entry] of closure.chemicals.entries())
       add(input.basis.chemicals[i]?.name ?? String(i), entry, 'molarFlow');
     for (const [element, entry] of Object.entries(closure.elements))

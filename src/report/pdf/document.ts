@@ -1,5 +1,6 @@
 import type { Content, ContentTable, TableCell, TDocumentDefinitions } from 'pdfmake/interfaces';
-import { sceneToSvg } from '../../drawing/svg';
+import { frameOf } from '../../drawing/frame';
+import { pathToSvg, sceneToSvg, textToSvg } from '../../drawing/svg';
 import { FONT, PRINT } from '../../drawing/tokens';
 import { printed } from '../cells';
 import type { ReportInput } from '../input';
@@ -230,6 +231,13 @@ function firstPageFoot(report: ReportModel, input: ReportInput): Content {
   };
 }
 
+/** Border with zone marks, behind every page. */
+function borderSvg(): string {
+  const { paths, texts } = frameOf({ x: 0, y: 0, w: PAGE.width, h: PAGE.height });
+  const drawn = [...paths.map((p) => pathToSvg(p, PRINT)), ...texts.map((t) => textToSvg(t, PRINT))].join('');
+  return `<svg xmlns="http://www.w3.org/2000/svg" width="${PAGE.width}" height="${PAGE.height}" viewBox="0 0 ${PAGE.width} ${PAGE.height}">${drawn}</svg>`;
+}
+
 /** Scales the drawing to the room on the page, never above its own size times 1.25. */
 function scaledToPage(width: number, height: number): { readonly width: number; readonly height: number } {
   const scale = Math.min(INNER / width, SHEET_HEIGHT / height, 1.25);
@@ -251,6 +259,7 @@ export function pdfDocument(report: ReportModel, input: ReportInput): TDocumentD
     strip.number,
     strip.version,
   ];
+  const border = borderSvg();
   const day = new Date(`${input.day}T00:00:00Z`);
   return {
     pageSize: { width: PAGE.width, height: PAGE.height },
@@ -264,6 +273,7 @@ export function pdfDocument(report: ReportModel, input: ReportInput): TDocumentD
       creationDate: day,
       modDate: day,
     },
+    background: () => ({ svg: border, width: PAGE.width, height: PAGE.height }),
     footer: (page, pages) => ({
       margin: [MARGIN.left, 12, MARGIN.right, 0],
       table: {
