@@ -27,7 +27,7 @@ export function startSolving(stores: Stores): SolverClient {
       for (const known of started.keys()) if (known <= edit) started.delete(known);
       if (edit === sent?.edit) answered(stores.compiled.getState().edit);
     },
-    at: (edit, unit) => stores.results.at(edit, unit),
+    at: (edit, unit, loop) => stores.results.at(edit, unit, loop ?? null),
     broke: (_edit, message, unit) => {
       const tag = stores.sketch.getState().sketch.units.find((u) => u.id === unit)?.tag;
       stores.results.broke(

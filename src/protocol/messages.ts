@@ -1,5 +1,5 @@
 import type { UnitId } from '../engine/ids';
-import type { Basis, Problem, SolveBatch } from '../engine/network/types';
+import type { Basis, LoopProgress, Problem, SolveBatch } from '../engine/network/types';
 
 /** Questions outside the sketch's solve, e.g. saturation points for a drawer. Grows with the drawers. */
 export type Question = { readonly ask: 'prewarm' };
@@ -21,10 +21,10 @@ export type ToWorker =
   | { readonly say: 'question'; readonly job: number; readonly about: Question }
   | { readonly say: 'drop'; readonly job: number };
 
-/** Worker to page. 'at' comes at most every 250 ms; silence for 3 s while a job runs means restart. */
+/** Worker to page. 'at' comes at most every 250 ms, with `loop` while one is on its way; silence for 3 s while a job runs means restart. */
 export type FromWorker =
   | { readonly say: 'ready' }
-  | { readonly say: 'at'; readonly edit: number; readonly unit: UnitId }
+  | { readonly say: 'at'; readonly edit: number; readonly unit: UnitId; readonly loop?: LoopProgress }
   | ({
       readonly say: 'results';
       readonly edit: number;

@@ -1,6 +1,6 @@
 import { createStore } from 'zustand/vanilla';
 import type { StreamId, UnitId } from '../engine/ids';
-import type { Closure, SolveBatch, StreamResult, UnitResult } from '../engine/network/types';
+import type { Closure, LoopProgress, SolveBatch, StreamResult, UnitResult } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
 
 /** The latest word on a stream or unit, and the last solved result where the latest has none to show. */
@@ -21,6 +21,8 @@ export interface ResultsState {
   readonly answering: number;
   /** Unit the worker is at during a slow solve. */
   readonly at: UnitId | null;
+  /** The loop it stands in, and how far that is. */
+  readonly loop: LoopProgress | null;
   /** Wall time of the last complete solve, posting included [ms]. */
   readonly tookMs: number;
   /** Bumped when the worker had to be restarted or gave up; the message is for the title strip. */
@@ -35,6 +37,7 @@ const empty: ResultsState = {
   solvedEdit: 0,
   answering: 0,
   at: null,
+  loop: null,
   tookMs: 0,
   trouble: null,
 };
@@ -75,17 +78,18 @@ export function createResultsStore() {
               solvedEdit: edit,
               answering: edit,
               at: null,
+              loop: null,
               tookMs,
               trouble: null,
             }
           : { streams, units, answering: edit },
       );
     },
-    at(edit: number, unit: UnitId): void {
-      set({ answering: edit, at: unit });
+    at(edit: number, unit: UnitId, loop: LoopProgress | null = null): void {
+      set({ answering: edit, at: unit, loop });
     },
     broke(message: string): void {
-      set({ trouble: message, at: null });
+      set({ trouble: message, at: null, loop: null });
     },
     clear(): void {
       set(empty);

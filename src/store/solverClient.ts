@@ -1,5 +1,5 @@
 import type { UnitId } from '../engine/ids';
-import type { Basis, Problem, SolveBatch } from '../engine/network/types';
+import type { Basis, LoopProgress, Problem, SolveBatch } from '../engine/network/types';
 import type { FromWorker, ToWorker } from '../protocol/messages';
 
 /** What the page's side needs of a worker; a real one, or a port in tests. */
@@ -12,7 +12,7 @@ export interface WorkerLike {
 
 export interface SolverHandlers {
   results(edit: number, last: boolean, batch: SolveBatch): void;
-  at(edit: number, unit: UnitId): void;
+  at(edit: number, unit: UnitId, loop?: LoopProgress): void;
   /** The worker gave up on this edit, or was ended for silence twice; `unit` is where it was last heard. */
   broke(edit: number, message: string, unit: UnitId | null): void;
   answer(job: number, value: unknown): void;
@@ -89,7 +89,7 @@ export function connectSolver(make: () => WorkerLike, handlers: SolverHandlers):
         handlers.results(message.edit, message.last, message);
       } else if (message.say === 'at') {
         where = message.unit;
-        handlers.at(message.edit, message.unit);
+        handlers.at(message.edit, message.unit, message.loop);
       } else if (message.say === 'answer') handlers.answer(message.job, message.value);
       else if (message.say === 'broke' && message.edit !== undefined) {
         // A mistake of ours that the worker survived: the same again would end the same way.

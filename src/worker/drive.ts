@@ -1,6 +1,6 @@
 import type { UnitId } from '../engine/ids';
 import type { SolveStep } from '../engine/network/solve';
-import type { SolveBatch } from '../engine/network/types';
+import type { LoopProgress, SolveBatch } from '../engine/network/types';
 import type { Turns } from './port';
 
 /** Milliseconds between looks into the queue, before the first partial results, between further ones, between 'at's. */
@@ -19,7 +19,7 @@ export interface Drive {
   /** Something newer waits: this solve is broken off. */
   overtaken(): boolean;
   partial(batch: SolveBatch): void;
-  at(unit: UnitId): void;
+  at(unit: UnitId, loop?: LoopProgress): void;
   readonly announce: boolean;
 }
 
@@ -41,7 +41,7 @@ export async function drive(
     if (step.done) return step.value;
     const t = d.now();
     if (d.announce || t - said >= d.pace.at) {
-      d.at(step.value.unit);
+      d.at(step.value.unit, step.value.loop);
       said = t;
     }
     if (t - slice < d.pace.pause) continue;

@@ -79,7 +79,7 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
         announce: announce === true,
         overtaken: () => closed || waiting !== undefined,
         partial: (part) => say({ say: 'results', edit, last: false, ...clean, ...part }),
-        at: (unit) => say({ say: 'at', edit, unit }),
+        at: (unit, loop) => say({ say: 'at', edit, unit, ...(loop ? { loop } : {}) }),
       });
       if (batch) say({ say: 'results', edit, last: true, ...clean, ...batch });
     } catch (cause) {

@@ -211,23 +211,6 @@ describe('a unit without an answer', () => {
     });
   });
 
-  test('because it stands in a loop names the loop once, and what follows waits', () => {
-    const units = [
-      plainFeed('f', 'a'),
-      unit('j join in1=a in2=back > out=b', { p: { drop: 0 } }),
-      unit('d drum in1=b > vapour=c liquid=e', { p: { drop: 0 } }),
-      unit('v valve in=e > out=back', { p: { P: 1e5 } }),
-      unit('p product in=c', {}),
-    ];
-    const batch = fresh(problemOf(basis, units), basis);
-    for (const id of ['j', 'd', 'v']) expect(unitResult(batch, id)!.state).toBe('no-solution');
-    expect(unitResult(batch, 'p')!.state).toBe('waiting');
-    expect(unitResult(batch, 'f')!.state).toBe('solved');
-    const loops = batch.findings.filter((f) => f.code === 'network/loop');
-    expect(loops).toHaveLength(1);
-    expect(loops[0]!.evidence.map((e) => e.text).sort()).toEqual(['d', 'j', 'v']);
-  });
-
   test('that answers with something that does not close is refused', () => {
     const leaky: AnyKind = {
       solve: (call: Call<never>) =>
@@ -289,16 +272,6 @@ describe('a read', () => {
     );
     const batch = fresh(problemOf(basis, units, { reads }), basis);
     expect(unitResult(batch, 'g')!.state).toBe('waiting');
-  });
-
-  test('of what lies downstream closes a loop, and that is said', () => {
-    const units = [
-      unit('g feed > out=a', second(share({ stream: 'b' }))),
-      unit('v valve in=a > out=b', { p: { P: 2e5 } }),
-    ];
-    const reads = [{ ...read, stream: streamId('b'), of: 'mol' } as const];
-    const batch = fresh(problemOf(basis, units, { reads }), basis);
-    expect(batch.findings.map((f) => f.code)).toContain('network/loop');
   });
 });
 

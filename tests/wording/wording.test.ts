@@ -78,13 +78,13 @@ describe('a finding is said', () => {
 
   test('with every unit of a loop by its tag', () => {
     const loop: Finding = {
-      code: 'network/loop',
+      code: 'network/nothing-enters',
       weight: 'beyond-limit',
       at: {},
       evidence: ['a', 'b', 'c'].map((text) => ({ name: 'unit', value: 0, dim: 'number', text })),
     };
     const said = sayFinding(loop, { measures: 'SI', tag: (unit) => unit.toUpperCase() });
-    expect(said.sentence).toContain('in a loop: A, B, C.');
+    expect(said.sentence).toContain('the loop of A, B, C,');
   });
 
   test('by the sentences of the document and of a flash where those are theirs', () => {

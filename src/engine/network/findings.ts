@@ -1,6 +1,8 @@
 /** Codes the network may emit. */
 export const NETWORK_FINDINGS = [
-  'network/loop',
+  'network/nothing-enters',
+  'network/no-way-out',
+  'network/loop-unsettled',
   'network/unknown-kind',
   'network/inlet-missing',
   'network/source-missing',

@@ -5,6 +5,7 @@ import { makeModel } from '../thermo/model';
 import type { Model } from '../thermo/types';
 import type { Answer, SiteSI, Work } from '../units/types';
 import { type ClosureData, closureData } from './closure';
+import type { LoopMemory } from './loop/types';
 import type { Basis, StreamResult, UnitClosure, UnitResult } from './types';
 
 /** What was found for a unit, and for what: the key is the settings and the states entering, compared bit for bit. */
@@ -51,6 +52,8 @@ export interface Memory {
   readonly work: Work;
   readonly units: Map<UnitId, UnitMemory>;
   readonly streams: Map<StreamId, StreamMemory>;
+  /** By the ids of a loop's units. */
+  readonly loops: Map<string, LoopMemory>;
   readonly posted: Posted;
   /** The edit whose answer is complete in here; undefined while or after a solve was broken off. */
   complete: number | undefined;
@@ -68,6 +71,7 @@ export function makeMemory(basis: Basis, posted: Posted = nothingPosted()): Memo
     work: { flash: new Map() },
     units: new Map(),
     streams: new Map(),
+    loops: new Map(),
     posted,
     complete: undefined,
   };

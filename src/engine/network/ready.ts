@@ -9,9 +9,10 @@ import type { ProblemUnit, SolveState } from './types';
 /** What is known of a stream while a solve runs: its state, or why there is none. */
 export type Known = StreamState | 'waiting' | 'no-solution';
 
+/** Why a unit cannot be solved now. */
 export type Unready = { readonly state: Exclude<SolveState, 'solved'>; readonly reasons: readonly Finding[] };
 
-const because = (
+export const because = (
   code: NetworkFindingCode,
   at: Finding['at'],
   evidence: Finding['evidence'] = [],
@@ -40,15 +41,14 @@ function openPorts(unit: ProblemUnit, catalogue: KindCatalogue): Finding[] {
 }
 
 /**
- * Why a unit cannot be solved yet, or undefined when it can: a missing value first, then the loop it stands in, then what is
- * missing upstream.
+ * Why a unit cannot be solved yet, or undefined when it can: a missing value first, then what is missing upstream. Streams of a
+ * loop of which nothing is known yet are none of its reasons.
  */
 export function whyNot(
   unit: ProblemUnit,
   catalogue: KindCatalogue | undefined,
   plan: Plan,
   known: ReadonlyMap<StreamId, Known>,
-  loop: readonly ProblemUnit[] | undefined,
 ): Unready | undefined {
   if (!catalogue)
     return { state: 'no-solution', reasons: [because('network/unknown-kind', { unit: unit.id })] };
@@ -57,18 +57,15 @@ export function whyNot(
   for (const stream of needed)
     if (!plan.source.has(stream)) missing.push(because('network/source-missing', { unit: unit.id, stream }));
   if (unit.settings === null || missing.length > 0) return { state: 'needs-value', reasons: missing };
-  if (loop) {
-    const names = loop.map((u) => ({ name: 'unit', value: 0, dim: 'number', text: u.id }) as const);
-    return { state: 'no-solution', reasons: [because('network/loop', { unit: unit.id }, names)] };
-  }
   const waits = needed.filter((stream) => typeof known.get(stream) === 'string');
   if (waits.length === 0) return undefined;
-  return {
-    state: 'waiting',
-    reasons: waits.map((stream) => {
-      const from = plan.source.get(stream)!;
-      const upstream = { name: 'unit', value: 0, dim: 'number', text: plan.units[from.unit]!.id } as const;
-      return because('network/waits-for', { unit: unit.id, stream }, [upstream]);
-    }),
-  };
+  return { state: 'waiting', reasons: waits.map((stream) => waitsFor(unit, stream, plan)) };
+}
+
+/** That a unit waits for a stream, and for whose. */
+export function waitsFor(unit: ProblemUnit, stream: StreamId, plan: Plan): Finding {
+  const from = plan.units[plan.source.get(stream)!.unit]!;
+  return because('network/waits-for', { unit: unit.id, stream }, [
+    { name: 'unit', value: 0, dim: 'number', text: from.id },
+  ]);
 }

@@ -8,10 +8,10 @@ import { closureOf, worstOf } from './closure';
 import { describe } from './describe';
 import type { Memory, UnitMemory } from './memory';
 import { sameData, sameState } from './same';
-import type { Problem, ProblemUnit, StreamResult, UnitClosure, UnitResult } from './types';
+import type { LoopResult, Problem, ProblemUnit, StreamResult, UnitClosure, UnitResult } from './types';
 
 /** A solved unit closes at least this well [-]. */
-const CLOSES = 1e-9;
+export const CLOSES = 1e-9;
 
 const sameIn = (a: UnitMemory['in'], b: UnitMemory['in']): boolean => {
   const ports = Object.keys(a);
@@ -44,7 +44,7 @@ export const unitClosure = (
     memory.data,
   );
 
-const isFiniteState = (s: StreamState): boolean =>
+export const isFiniteState = (s: StreamState): boolean =>
   Number.isFinite(s.T_K) &&
   Number.isFinite(s.P_Pa) &&
   Number.isFinite(s.H_W) &&
@@ -78,9 +78,24 @@ function resultOf(unit: ProblemUnit, outcome: Outcome<Answer>, memory: Memory): 
   };
 }
 
+/** One attempt at a unit, from the start values given or from nothing. */
+export const attempt = (solver: AnyKind, call: Call<unknown>, warm: unknown): Outcome<Answer> =>
+  solver.solve({ ...call, ...(warm === undefined ? {} : { warm }) } as Call<never>) as Outcome<Answer>;
+
+/** Warm if there are start values, and once more from nothing if that fails. */
+export function attempts(solver: AnyKind, call: Call<unknown>, warm: unknown): Outcome<Answer> {
+  const outcome = attempt(solver, call, warm);
+  return outcome.state === 'solved' || warm === undefined ? outcome : attempt(solver, call, undefined);
+}
+
+/** Start values that are remembered of a unit. */
+export function warmIn(memory: Memory, unit: ProblemUnit): unknown {
+  const last = memory.units.get(unit.id);
+  return last?.kind === unit.kind ? last.warm : undefined;
+}
+
 /**
- * Solves one unit: warm if an earlier answer was solved, and once more from nothing if that fails. An answer that does not
- * close, or holds something that is not a number, is none.
+ * Solves one unit: warm if an earlier answer was solved, and once more from nothing if that fails.
  */
 export function solveUnit(
   unit: ProblemUnit,
@@ -90,42 +105,65 @@ export function solveUnit(
   memory: Memory,
   problem: Problem,
 ): UnitMemory {
-  const last = memory.units.get(unit.id);
-  const warm = last?.kind === unit.kind ? last.warm : undefined;
-  const attempt = (start: unknown): Outcome<Answer> =>
-    solver.solve({
-      ...call,
-      ...(start === undefined ? {} : { warm: start }),
-    } as Call<never>) as Outcome<Answer>;
-  let outcome = attempt(warm);
-  if (outcome.state !== 'solved' && warm !== undefined) outcome = attempt(undefined);
-  let closure: UnitClosure | undefined;
-  if (outcome.state === 'solved') {
-    const finite = Object.values(outcome.value.out).every(isFiniteState);
-    if (!boundary) closure = unitClosure(call.in, outcome.value, memory);
-    const worst = closure ? worstOf(closure) : 0;
-    if (!finite || !(worst <= CLOSES)) {
-      outcome = noSolution(refuseUnclosed(unit, finite ? worst : Number.NaN));
-      closure = undefined;
-    }
-  }
-  if (outcome.state !== 'solved') {
-    const [first, ...rest] = outcome.findings.map((f) => atUnit(call, f));
-    outcome = noSolution(first!, ...rest);
-  }
+  const warm = warmIn(memory, unit);
+  return remember({ unit, solver, call, boundary }, attempts(solver, call, warm), warm, memory, problem);
+}
+
+/** A unit that was asked something. */
+export interface Asked {
+  readonly unit: ProblemUnit;
+  readonly solver: AnyKind;
+  readonly call: Call<unknown>;
+  readonly boundary: boolean;
+}
+
+/**
+ * What is kept and shown of a unit's outcome. An answer that does not close, or holds something that is not a number, is none.
+ *
+ * @param warm  start values to keep when there is no answer
+ * @param loop  how the loop was solved that the unit stands in
+ */
+export function remember(
+  { unit, solver, call, boundary }: Asked,
+  outcome: Outcome<Answer>,
+  warm: unknown,
+  memory: Memory,
+  problem: Problem,
+  loop?: LoopResult,
+): UnitMemory {
+  const [kept, closure] = closing(unit, call, outcome, boundary, memory);
+  const result = resultOf(unit, kept, memory);
   return {
     kind: unit.kind,
     settings: call.settings,
     in: call.in,
     outPorts: call.outPorts,
     site: call.site,
-    outcome,
-    warm: outcome.state === 'solved' ? outcome.value.warm : warm,
-    result: resultOf(unit, outcome, memory),
+    outcome: kept,
+    warm: kept.state === 'solved' ? kept.value.warm : warm,
+    result: loop && kept.state === 'solved' ? { ...result, loop } : result,
     ...(closure ? { closure } : {}),
     limits: problem.limits,
-    limitFindings: limitsOf(unit, solver, call, outcome),
+    limitFindings: limitsOf(unit, solver, call, kept),
   };
+}
+
+function closing(
+  unit: ProblemUnit,
+  call: Call<unknown>,
+  outcome: Outcome<Answer>,
+  boundary: boolean,
+  memory: Memory,
+): [Outcome<Answer>, UnitClosure?] {
+  if (outcome.state === 'solved') {
+    const finite = Object.values(outcome.value.out).every(isFiniteState);
+    const closure = boundary ? undefined : unitClosure(call.in, outcome.value, memory);
+    const worst = closure ? worstOf(closure) : 0;
+    if (finite && worst <= CLOSES) return closure ? [outcome, closure] : [outcome];
+    return [noSolution(refuseUnclosed(unit, finite ? worst : Number.NaN))];
+  }
+  const [first, ...rest] = outcome.findings.map((f) => atUnit(call, f));
+  return [noSolution(first!, ...rest)];
 }
 
 /** The limits pass of a solved unit. */

@@ -91,6 +91,26 @@ export type StreamResult =
       readonly hiddenLiquid?: Float64Array;
     };
 
+/** How a loop was solved; the same for all of its units. */
+export interface LoopResult {
+  readonly passes: number;
+  /** Largest relative difference between what a tear was assumed to be and what came back [-]. */
+  readonly residual: number;
+  /** Streams at which the loop was opened; a read stream's when it closes by a setting alone. */
+  readonly tear: readonly StreamId[];
+}
+
+/** Where a loop stands while it is solved. */
+export interface LoopProgress {
+  readonly units: readonly UnitId[];
+  /** The tear that was farthest off in the pass before, else the first. */
+  readonly stream: StreamId;
+  /** From 1. */
+  readonly pass: number;
+  /** As in LoopResult, of the pass before. */
+  readonly residual?: number;
+}
+
 export interface UnitResult {
   readonly kind: string;
   readonly state: SolveState;
@@ -99,6 +119,8 @@ export interface UnitResult {
   readonly power_W?: number;
   readonly iterations?: number;
   readonly residual?: number;
+  /** Of a unit that was solved in a loop. */
+  readonly loop?: LoopResult;
   readonly made_mol_s?: Float64Array;
   readonly drawn?: Readonly<Record<Port, StreamResult>>;
   readonly results?: Readonly<Record<string, unknown>>;

@@ -2,10 +2,20 @@ import type { Sentence } from '../types';
 
 /** Order, loops, closure, and the model's pairs. */
 export const NETWORK_SENTENCES: Readonly<Record<string, Sentence>> = {
-  'network/loop': {
-    title: 'Loop',
-    says: 'These units feed each other in a loop: {unit...}. Loops are not solved in this version.',
-    next: 'Open the loop at one stream and give the recycle as a feed.',
+  'network/nothing-enters': {
+    title: 'Nothing enters the loop',
+    says: 'No stream leads into the loop of {unit...}, so nothing says how much flows in it.',
+    next: 'Give its circulating flow: end the loop in a product at stream {stream} and begin it again there with a feed of the same state, or let a feed join it.',
+  },
+  'network/no-way-out': {
+    title: 'No way out',
+    says: 'What has no way out of the loop of {unit...}: {chemical...}. {entering} enter, {leaving} leave, and with {round} going round it still gathers.',
+    next: 'Draw a purge from stream {stream}, {fraction%} of which is that, or let more of it leave elsewhere.',
+  },
+  'network/loop-unsettled': {
+    title: 'The loop does not settle',
+    says: 'After {passes} passes stream {stream} still comes back changed by {residual%} of what was assumed; the loop is {unit...}.',
+    next: 'Open the loop at stream {stream} with a product and a feed, see what comes back, and change what it reacts to most.',
   },
   'network/unknown-kind': {
     title: 'Not available',

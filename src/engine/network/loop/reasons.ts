@@ -1,0 +1,36 @@
+import type { StreamId } from '../../ids';
+import type { Evidence, Finding } from '../../outcome';
+import type { ProblemUnit } from '../types';
+import type { Change } from './advance';
+import type { Ending, Loop } from './types';
+
+const named = (units: readonly ProblemUnit[]): Evidence[] =>
+  units.map((u) => ({ name: 'unit', value: 0, dim: 'number', text: u.id }));
+
+/** The passes came to no end. */
+export function unsettled({ plan, members }: Loop, passes: number, change: Change | undefined): Ending {
+  const stream: StreamId = plan.tears[change?.tear ?? 0] ?? plan.tears[0] ?? plan.scalars[0]!.stream;
+  const finding: Finding = {
+    code: 'network/loop-unsettled',
+    weight: 'beyond-limit',
+    at: { stream },
+    evidence: [
+      { name: 'passes', value: passes, dim: 'number' },
+      { name: 'residual', value: change?.most ?? 1, dim: 'number' },
+      ...named(members.map((m) => m.unit)),
+    ],
+  };
+  return { is: 'no-solution', findings: [finding] };
+}
+
+/** Nothing flows in the loop, or nothing comes in that could. */
+export function nothingEnters({ plan, members }: Pick<Loop, 'plan' | 'members'>): Ending {
+  const stream = plan.tears[0] ?? plan.scalars[0]!.stream;
+  const finding: Finding = {
+    code: 'network/nothing-enters',
+    weight: 'beyond-limit',
+    at: { stream },
+    evidence: named(members.map((m) => m.unit)),
+  };
+  return { is: 'needs-value', findings: [finding] };
+}

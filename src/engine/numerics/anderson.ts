@@ -1,0 +1,130 @@
+/**
+ * Acceleration of a fixed-point iteration x <- g(x): from the last points and answers the combination is taken whose residual
+ * g - x, were the map linear, would be least (type II).
+ *
+ * Source: D. G. Anderson, J. ACM 12 (1965) 547; least squares on differences as in Walker & Ni, SIAM J. Numer. Anal. 49 (2011)
+ * 1715, by modified Gram-Schmidt, newest difference first: a column that hardly differs from the newer ones is left out.
+ */
+export interface Anderson {
+  readonly n: number;
+  readonly depth: number;
+  /** Differences it holds. */
+  readonly held: number;
+  /** Takes in a point and the map's answer there; both are copied. */
+  push(x: Float64Array, g: Float64Array): void;
+  /**
+   * The next point after the last one pushed; without differences that is g itself.
+   *
+   * @param scale  size of each entry, > 0; entries count in the least squares by their residual over it
+   * @param out    length n; overwritten
+   * @returns how many differences took part
+   */
+  propose(scale: Float64Array, out: Float64Array): number;
+  /** Forgets every point and difference. */
+  forget(): void;
+  /** Forgets the last point alone: what comes next is another problem whose slopes are about the same. */
+  leap(): void;
+}
+
+/** A difference whose part not explained by newer ones is smaller than this share is left out [-]. */
+const INDEPENDENT = 1e-8;
+
+export function makeAnderson(n: number, depth: number): Anderson {
+  const dx = Array.from({ length: depth }, () => new Float64Array(n));
+  const df = Array.from({ length: depth }, () => new Float64Array(n));
+  const q = Array.from({ length: depth }, () => new Float64Array(n));
+  const r = new Float64Array(depth * depth);
+  const rhs = new Float64Array(depth);
+  const taken = new Int32Array(depth);
+  const rest = new Float64Array(n);
+  const lastX = new Float64Array(n);
+  const lastG = new Float64Array(n);
+  let placed = false;
+  let held = 0;
+  /** Place of the newest difference. */
+  let newest = depth - 1;
+
+  const push = (x: Float64Array, g: Float64Array): void => {
+    if (placed) {
+      newest = (newest + 1) % depth;
+      if (held < depth) held++;
+      const [toX, toF] = [dx[newest]!, df[newest]!];
+      for (let i = 0; i < n; i++) {
+        toX[i] = x[i]! - lastX[i]!;
+        toF[i] = g[i]! - x[i]! - (lastG[i]! - lastX[i]!);
+      }
+    }
+    lastX.set(x);
+    lastG.set(g);
+    placed = true;
+  };
+
+  /** Orthogonal columns of the scaled differences, and what of the residual lies along each. */
+  const factor = (scale: Float64Array): number => {
+    let used = 0;
+    for (let i = 0; i < n; i++) rest[i] = (lastG[i]! - lastX[i]!) / scale[i]!;
+    for (let age = 0; age < held; age++) {
+      const at = (newest - age + depth) % depth;
+      const column = q[used]!;
+      const from = df[at]!;
+      for (let i = 0; i < n; i++) column[i] = from[i]! / scale[i]!;
+      const whole = Math.sqrt(dot(column, column));
+      for (let k = 0; k < used; k++) {
+        const along = dot(q[k]!, column);
+        r[k * depth + used] = along;
+        subtract(column, along, q[k]!);
+      }
+      const left = Math.sqrt(dot(column, column));
+      if (!(left > INDEPENDENT * whole) || !(left < Number.POSITIVE_INFINITY)) continue;
+      for (let i = 0; i < n; i++) column[i]! /= left;
+      r[used * depth + used] = left;
+      const along = dot(column, rest);
+      rhs[used] = along;
+      subtract(rest, along, column);
+      taken[used++] = at;
+    }
+    return used;
+  };
+
+  const propose = (scale: Float64Array, out: Float64Array): number => {
+    if (!placed) throw new Error('a point comes before a proposal');
+    const used = factor(scale);
+    out.set(lastG);
+    for (let k = used - 1; k >= 0; k--) {
+      let gamma = rhs[k]!;
+      for (let j = k + 1; j < used; j++) gamma -= r[k * depth + j]! * rhs[j]!;
+      gamma /= r[k * depth + k]!;
+      rhs[k] = gamma;
+      const [ofX, ofF] = [dx[taken[k]!]!, df[taken[k]!]!];
+      for (let i = 0; i < n; i++) out[i]! -= gamma * (ofX[i]! + ofF[i]!);
+    }
+    return used;
+  };
+
+  return {
+    n,
+    depth,
+    get held() {
+      return held;
+    },
+    push,
+    propose,
+    forget() {
+      placed = false;
+      held = 0;
+    },
+    leap() {
+      placed = false;
+    },
+  };
+}
+
+function dot(a: Float64Array, b: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < a.length; i++) sum += a[i]! * b[i]!;
+  return sum;
+}
+
+function subtract(a: Float64Array, factor: number, b: Float64Array): void {
+  for (let i = 0; i < a.length; i++) a[i]! -= factor * b[i]!;
+}
