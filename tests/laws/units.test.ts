@@ -57,6 +57,8 @@ const CASES: Readonly<
       readonly outs: readonly string[];
       /** Needs the gases of air and combustion among the chemicals. */
       readonly burns?: true;
+      /** Instead of the usual ones. */
+      readonly chemicals?: readonly string[];
       settings(r: Random): unknown;
     }
   >
@@ -165,6 +167,25 @@ const CASES: Readonly<
       heat: oneOf(r, [{ duty: 0 }, { lossOfLHV: between(r, 0, 0.3) }, { T: between(r, 400, 1900) }]),
     }),
   },
+  reactor: {
+    ins: ['in1', 'in2'],
+    outs: ['out'],
+    chemicals: ['n-pentane', 'n-hexane', 'n-decane', 'benzene', 'toluene'],
+    settings: (r) => ({
+      // 5 hexane make 4 pentane and 1 decane, then some of it goes back.
+      reactions: [-1, 1].map((sense) => ({
+        stoichiometry: [
+          { chemical: 1, value: 5 * sense },
+          { chemical: 0, value: -4 * sense },
+          { chemical: 2, value: -sense },
+        ],
+        of: sense < 0 ? 1 : 2,
+        conversion: sense < 0 ? between(r, 0, 1) : between(r, 0, 0.15),
+      })),
+      ...oneOf(r, [{ p: { drop: 0 } }, drop(r)]),
+      ...oneOf(r, [{}, { h: { T: between(r, 300, 500) } }, { h: { duty: between(r, -1e3, 1e3) } }]),
+    }),
+  },
   drum: {
     ins: ['in1', 'in3'],
     outs: ['vapour', 'liquid'],
@@ -192,13 +213,14 @@ function problemUnits(kind: string, random: Random, nc: number): ProblemUnit[] {
 const streamsOf = (batch: SolveBatch, kind: string, side: 'ins' | 'outs'): SolvedStream[] =>
   CASES[kind]![side].map((port) => solvedStream(batch, `${side === 'ins' ? 'i' : 'o'}-${port}`));
 
+const chemicalsOf = (kind: string, usual: readonly string[]): readonly string[] => [
+  ...(CASES[kind]!.chemicals ?? usual),
+  ...(CASES[kind]!.burns ? GASES : []),
+];
 const bases: Readonly<Record<string, (kind: string) => Promise<Basis>>> = {
-  'Peng-Robinson': (kind) => basisOf([...LET_DOWN, ...(CASES[kind]?.burns ? GASES : [])]),
+  'Peng-Robinson': (kind) => basisOf(chemicalsOf(kind, LET_DOWN)),
   "Raoult's law": (kind) =>
-    basisOf(
-      ['n-pentane', 'n-hexane', 'benzene', 'toluene', 'n-decane', ...(CASES[kind]?.burns ? GASES : [])],
-      'raoult',
-    ),
+    basisOf(chemicalsOf(kind, ['n-pentane', 'n-hexane', 'benzene', 'toluene', 'n-decane']), 'raoult'),
 };
 
 describe.each(Object.entries(bases))('under %s', (_, makeBasis) => {

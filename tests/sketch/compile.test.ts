@@ -188,12 +188,12 @@ describe('what is missing or does not fit is a gap at its place, and the unit ha
   test('a kind that is not in this version', async () => {
     const sketch = opened({
       ...letDown(),
-      units: [{ id: 'u1', tag: 'R-1', kind: 'reactor', settings: { a: 1 } }],
+      units: [{ id: 'u1', tag: 'R-1', kind: 'of-tomorrow', settings: { a: 1 } }],
       streams: [],
     });
     const c = await compiled(sketch);
     expect(codes(c.gaps)).toEqual(['sketch/kind-not-available']);
-    expect(c.problem.units[0]).toMatchObject({ kind: 'reactor', settings: null });
+    expect(c.problem.units[0]).toMatchObject({ kind: 'of-tomorrow', settings: null });
   });
 });
 

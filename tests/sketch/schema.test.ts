@@ -93,7 +93,7 @@ describe('what opening or compiling refuses does not fit either', () => {
           shares: { out2: '8 %', out3: '3 kg/s', out4: { share: 0.1, of: { stream: 's1' }, basis: 'mole' } },
         },
       ],
-      ['reactor', { anything: [1] }],
+      ['of-tomorrow', { anything: [1] }],
       ['feed', { state: { T: '−3 degC' }, composition: { preset: 'humid air', relativeHumidity: '55 %' } }],
     ] as const)
       expect(faults(schema, settings(kind, value as Json))).toEqual([]);

@@ -3,6 +3,7 @@ import type { KindCatalogue, PortSpec } from '../../engine/units/types';
 import type { SketchUnit } from '../../sketch/types';
 import type { SymbolData } from '../types';
 import { chamber } from './chamber';
+import { column } from './column';
 import { compressor } from './compressor';
 import { cooler } from './cooler';
 import { divide } from './divide';
@@ -14,6 +15,7 @@ import { join } from './join';
 import { plainBox } from './plainBox';
 import { product } from './product';
 import { pump } from './pump';
+import { reactor } from './reactor';
 import type { SymbolKind } from './shapes';
 import { valve } from './valve';
 
@@ -30,7 +32,9 @@ export const SYMBOLS: Readonly<Record<string, SymbolKind>> = {
   heater,
   cooler,
   drum,
+  column,
   chamber,
+  reactor,
 };
 
 const drawn = new WeakMap<SketchUnit, SymbolData>();

@@ -1,4 +1,5 @@
 import { chamber } from './chamber/catalogue';
+import { column } from './column/catalogue';
 import { compressor } from './compressor/catalogue';
 import { cooler } from './cooler/catalogue';
 import { divide } from './divide/catalogue';
@@ -9,6 +10,7 @@ import { heater } from './heater/catalogue';
 import { join } from './join/catalogue';
 import { product } from './product/catalogue';
 import { pump } from './pump/catalogue';
+import { reactor } from './reactor/catalogue';
 import type { KindCatalogue } from './types';
 import { valve } from './valve/catalogue';
 
@@ -25,7 +27,9 @@ export const CATALOGUE: Readonly<Record<string, KindCatalogue>> = {
   heater,
   cooler,
   drum,
+  column,
   chamber,
+  reactor,
 };
 
 /** Thresholds of all limits: what a sketch may override, and what is printed with its basis. */

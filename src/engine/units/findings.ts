@@ -1,4 +1,5 @@
 import type { CHAMBER_FINDINGS } from './chamber/findings';
+import type { COLUMN_FINDINGS } from './column/findings';
 import type { COMPRESSOR_FINDINGS } from './compressor/findings';
 import type { COOLER_FINDINGS } from './cooler/findings';
 import type { DIVIDE_FINDINGS } from './divide/findings';
@@ -9,6 +10,7 @@ import type { HEATER_FINDINGS } from './heater/findings';
 import type { JOIN_FINDINGS } from './join/findings';
 import type { PRODUCT_FINDINGS } from './product/findings';
 import type { PUMP_FINDINGS } from './pump/findings';
+import type { REACTOR_FINDINGS } from './reactor/findings';
 import type { STREAM_FINDINGS } from './streamLimits';
 import type { VALVE_FINDINGS } from './valve/findings';
 
@@ -25,5 +27,7 @@ export type UnitFindingCode =
   | (typeof HEATER_FINDINGS)[number]
   | (typeof COOLER_FINDINGS)[number]
   | (typeof DRUM_FINDINGS)[number]
+  | (typeof COLUMN_FINDINGS)[number]
   | (typeof CHAMBER_FINDINGS)[number]
+  | (typeof REACTOR_FINDINGS)[number]
   | (typeof STREAM_FINDINGS)[number];

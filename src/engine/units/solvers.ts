@@ -1,4 +1,5 @@
 import { chamber } from './chamber/solve';
+import { column } from './column/solve';
 import { compressor } from './compressor/solve';
 import { cooler } from './cooler/solve';
 import { divide } from './divide/solve';
@@ -9,6 +10,7 @@ import { heater } from './heater/solve';
 import { join } from './join/solve';
 import { product } from './product/solve';
 import { pump } from './pump/solve';
+import { reactor } from './reactor/solve';
 import type { UnitKind } from './types';
 import { valve } from './valve/solve';
 
@@ -33,5 +35,7 @@ export const SOLVERS: Readonly<Record<string, AnyKind>> = {
   heater: seal(heater),
   cooler: seal(cooler),
   drum: seal(drum),
+  column: seal(column),
   chamber: seal(chamber),
+  reactor: seal(reactor),
 };

@@ -1,5 +1,6 @@
 import type { KindWords } from '../types';
 import { chamber } from './chamber';
+import { column } from './column';
 import { compressor } from './compressor';
 import { cooler } from './cooler';
 import { divide } from './divide';
@@ -10,6 +11,7 @@ import { heater } from './heater';
 import { join } from './join';
 import { product } from './product';
 import { pump } from './pump';
+import { reactor } from './reactor';
 import { valve } from './valve';
 
 /** The words of every kind of unit, one line each. */
@@ -25,5 +27,7 @@ export const KIND_WORDS: Readonly<Record<string, KindWords>> = {
   heater,
   cooler,
   drum,
+  column,
   chamber,
+  reactor,
 };

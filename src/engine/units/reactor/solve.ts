@@ -1,0 +1,68 @@
+import type { StreamState } from '../../equilibrium/types';
+import { noSolution, type Outcome, solved } from '../../outcome';
+import { answerOf } from '../answer';
+import type { HeatSI, PressureSI } from '../groups';
+import { emptyStream, type Mixed, mixed, outletPressure, streamAt, warmFrom } from '../streams';
+import type { Answer, Call, UnitKind } from '../types';
+import { reactorLimits } from './limits';
+import { heatOfReaction_W, type Reaction, react } from './react';
+
+export interface ReactorSettings {
+  readonly reactions: readonly Reaction[];
+  /** Absent when temperature and vapour fraction are both given: the pressure is then a result. */
+  readonly p?: PressureSI;
+  /** Absent: adiabatic. */
+  readonly h?: HeatSI;
+}
+export interface ReactorResults {
+  readonly T_K: number;
+  readonly P_Pa: number;
+  readonly vapourFraction: number;
+  /** Heat into the reactor [W]; absent when it is adiabatic. */
+  readonly duty_W?: number;
+  /** Taken up by the reactions at 25 degC as ideal gases [W]; negative when heat is set free. */
+  readonly heatOfReaction_W: number;
+  /** Turns of each reaction [mol/s]. */
+  readonly extents_mol_s: readonly number[];
+}
+
+function outlet(call: Call<ReactorSettings>, all: Mixed, n_mol_s: Float64Array): Outcome<StreamState> {
+  const { p, h = {} } = call.settings;
+  const warm = warmFrom(call.warm, n_mol_s, all.T_K);
+  if (h.T !== undefined && h.vapourFraction !== undefined && all.total_mol_s > 0)
+    return streamAt(call, n_mol_s, { T_K: h.T, vapourFraction: h.vapourFraction }, warm);
+  const P = outletPressure(call, p ?? { drop: 0 }, all.P_Pa);
+  if (P.state !== 'solved') return noSolution(...P.findings);
+  const P_Pa = P.value;
+  if (all.total_mol_s === 0) return solved(emptyStream(call.model.nc, h.T ?? all.T_K, P_Pa));
+  if (h.T !== undefined) return streamAt(call, n_mol_s, { T_K: h.T, P_Pa }, warm);
+  if (h.vapourFraction !== undefined)
+    return streamAt(call, n_mol_s, { P_Pa, vapourFraction: h.vapourFraction }, warm);
+  return streamAt(call, n_mol_s, { P_Pa, H_W: all.H_W + (h.duty ?? 0) }, warm);
+}
+
+function solve(call: Call<ReactorSettings>): Outcome<Answer<ReactorResults>> {
+  const { reactions, h } = call.settings;
+  const all = mixed(call.in, call.model.nc);
+  const reacted = react(call, reactions, all.n_mol_s);
+  if (reacted.state !== 'solved') return noSolution(...reacted.findings);
+  const { n_mol_s, extents_mol_s } = reacted.value;
+  const made = outlet(call, all, n_mol_s);
+  if (made.state !== 'solved') return noSolution(...made.findings);
+  const out = made.value;
+  const flows = all.total_mol_s > 0;
+  const heat_W = h === undefined || !flows ? 0 : (h.duty ?? out.H_W - all.H_W);
+  const results: ReactorResults = {
+    T_K: out.T_K,
+    P_Pa: out.P_Pa,
+    vapourFraction: out.vapourFraction,
+    ...(h === undefined ? {} : { duty_W: heat_W }),
+    heatOfReaction_W: heatOfReaction_W(reactions, extents_mol_s, call.model.chemicals),
+    extents_mol_s,
+  };
+  const answer = answerOf({ out }, results, flows ? [out] : [], heat_W);
+  return solved({ ...answer, made_mol_s: n_mol_s.map((n, i) => n - all.n_mol_s[i]!) }, made.findings);
+}
+
+/** Given conversions. */
+export const reactor: UnitKind<ReactorSettings, ReactorResults> = { solve, limits: reactorLimits };
