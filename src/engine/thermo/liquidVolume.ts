@@ -1,26 +1,23 @@
 import type { ChemicalData } from '../chemicals/types';
-import { rackettFromOmega } from './pure/liquidVolume';
+import { type VolumeConstant, volumeConstant } from './pure/volumeConstant';
 import { R_J_molK } from './types';
 
 /** From here up to 1 in Tr the answer passes over to the model's own volume. */
-const HAND_OVER_FROM = 0.96;
-
-/** Constant of the modified Rackett equation: the chemical's own, else from omega; undefined with neither. */
-export const zRAOf = (chem: ChemicalData): number | undefined =>
-  chem.zRA ?? (chem.omega === undefined ? undefined : rackettFromOmega(chem.omega));
+const HAND_OVER_FROM = 0.98;
 
 /**
- * Molar volume of liquid mixtures by corresponding states: the modified Rackett equation at saturation with one
- * constant a chemical, raised to pressure by a generalised compression.
+ * Molar volume of liquid mixtures by corresponding states: the modified Rackett equation at saturation, raised to
+ * pressure by a generalised compression. A chemical's constant goes with temperature where its density is known, so
+ * that a pure saturated liquid has the density of its correlation (pure/volumeConstant.ts); else it is one constant.
  *
- *   v_s = R (Sum x_i Tc_i/Pc_i) Z^[1 + (1 - Tr)^(2/7)],  Z = Sum x_i Z_RA,i,  Tr = T/Tcm,
+ *   v_s = R (Sum x_i Tc_i/Pc_i) Z^[1 + (1 - Tr)^(2/7)],  Z = Sum x_i Z_RA,i(T),  Tr = T/Tcm,
  *   Tcm = Sum Sum phi_i phi_j Tc_ij,  phi_i = x_i Vc_i / Sum x Vc,
  *   Tc_ij = sqrt(Tc_i Tc_j) 8 sqrt(Vc_i Vc_j) / (Vc_i^(1/3) + Vc_j^(1/3))^3
  *
  * A gas far above its critical temperature that is dissolved in a liquid enters Tcm by its share of the volume, which
  * keeps v_s bounded. A missing Vc is (0.2918 - 0.0928 omega) R Tc/Pc.
  * Below the pseudo-saturation pressure the saturated volume stands.
- * Towards and above Tcm there is no saturated liquid: between Tr 0.96 and 1 the answer passes over smoothly to the
+ * Towards and above Tcm there is no saturated liquid: between Tr 0.98 and 1 the answer passes over smoothly to the
  * volume of the thermodynamic model, which it is from there on. A model without a volume of its own keeps Tr at 1.
  *
  * Sources: Spencer & Danner, J. Chem. Eng. Data 18 (1973) 230; compression: Aalto, Keskinen, Aittamaa & Liukkonen,
@@ -29,7 +26,10 @@ export const zRAOf = (chem: ChemicalData): number | undefined =>
  */
 export class LiquidVolume {
   private readonly n: number;
+  private readonly constants: readonly VolumeConstant[];
+  /** Z_RA,i at zT; kept, since a temperature is seldom asked for once only. */
   private readonly zRA: Float64Array;
+  private zT = 0;
   private readonly Vc: Float64Array;
   private readonly omega: Float64Array;
   /** R Tc/Pc [m3/mol] */
@@ -47,7 +47,8 @@ export class LiquidVolume {
       return value;
     };
     this.omega = Float64Array.from(chemicals, (c) => need(c, 'omega'));
-    this.zRA = Float64Array.from(chemicals, (c) => zRAOf(c)!);
+    this.zRA = new Float64Array(n);
+    this.constants = chemicals.map((c) => volumeConstant(c)!);
     this.size = Float64Array.from(chemicals, (c) => (R_J_molK * need(c, 'Tc_K')) / need(c, 'Pc_Pa'));
     this.Vc = Float64Array.from(
       chemicals,
@@ -70,6 +71,7 @@ export class LiquidVolume {
    */
   at(T: number, P: number, x: Float64Array, own: number | undefined): number {
     const { n } = this;
+    if (this.zT !== T) this.constantsAt(T);
     let Vc = 0;
     let size = 0;
     let z = 0;
@@ -96,6 +98,11 @@ export class LiquidVolume {
     const t = (Tr - HAND_OVER_FROM) / (1 - HAND_OVER_FROM);
     const share = t * t * (3 - 2 * t);
     return (1 - share) * method + share * own;
+  }
+
+  private constantsAt(T: number): void {
+    for (let i = 0; i < this.n; i++) this.zRA[i] = Math.exp(this.constants[i]!.ln(T));
+    this.zT = T;
   }
 }
 

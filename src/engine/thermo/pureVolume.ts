@@ -1,7 +1,7 @@
 import type { ChemicalData } from '../chemicals/types';
-import { zRAOf } from './liquidVolume';
-import { rackettVolume_m3_mol } from './pure/liquidVolume';
 import type { PureChemical } from './pure/pure';
+import { plainConstant, volumeConstant } from './pure/volumeConstant';
+import { R_J_molK } from './types';
 
 /** Density [kg/m3] of a liquid about which nothing is known. */
 const UNKNOWN_kg_m3 = 800;
@@ -10,7 +10,7 @@ const TAME_FROM = 0.9;
 
 /** True when nothing tells the liquid volume of a chemical, so that 800 kg/m3 is assumed: worth an entry in a register. */
 export const isVolumeAssumed = (chem: ChemicalData): boolean =>
-  (chem.Tc_K === undefined || chem.Pc_Pa === undefined || (chem.zRA ?? chem.omega) === undefined) &&
+  (chem.Tc_K === undefined || chem.Pc_Pa === undefined || plainConstant(chem) === undefined) &&
   (chem.corr.liquid_density ?? []).length === 0;
 
 /** Molar volume of a pure liquid and its slope by T, defined and smooth at every temperature. */
@@ -20,18 +20,24 @@ export interface PureVolume {
 }
 
 /**
- * Volume of one chemical as (part of) a liquid at any T [m3/mol]: the modified Rackett equation up to Tr 0.9, beyond
- * that with the value and slope of Tr 0.9 towards a limit reached within a few tenths of Tc, which serves dissolved
+ * Volume of one chemical as (part of) a liquid at any T [m3/mol]: the modified Rackett equation up to Tr 0.9 with
+ * the constant of pure/volumeConstant.ts, beyond that with the value and slope of Tr 0.9 towards a limit reached within a few tenths of Tc, which serves dissolved
  * gases; without critical constants the stated density; without that 800 kg/m3.
  */
 export function pureVolume(pure: PureChemical): PureVolume {
   const { chemical } = pure;
   const { Tc_K: Tc, Pc_Pa: Pc } = chemical;
-  const zRA = zRAOf(chemical);
-  if (Tc !== undefined && Pc !== undefined && zRA !== undefined) {
-    const below = (T: number): number => rackettVolume_m3_mol(T, Tc, Pc, zRA);
-    const slopeBelow = (T: number): number =>
-      (below(T) * Math.log(zRA) * (-2 / 7) * (1 - T / Tc) ** (-5 / 7)) / Tc;
+  const constant = volumeConstant(chemical);
+  if (Tc !== undefined && Pc !== undefined && constant !== undefined) {
+    const size = (R_J_molK * Tc) / Pc;
+    const below = (T: number): number => size * Math.exp(constant.ln(T) * (1 + (1 - T / Tc) ** (2 / 7)));
+    const slopeBelow = (T: number): number => {
+      const part = (1 - T / Tc) ** (2 / 7);
+      const ln = constant.ln(T);
+      const power = 1 + part;
+      const dPower = ((-2 / 7) * part) / (Tc - T);
+      return size * Math.exp(ln * power) * (constant.slope(T) * power + ln * dPower);
+    };
     const T1 = TAME_FROM * Tc;
     const v1 = below(T1);
     const slope1 = slopeBelow(T1);
