@@ -25,6 +25,7 @@ export interface VolumeConstant {
 const FOLLOWED_TO = 0.98;
 /** Tables: intervals of equal width in T, a cubic with the right value and slope at both ends in each. */
 const INTERVALS = 96;
+const MIDDLE = INTERVALS / 2;
 /** The constant has levelled off, but for a third, this share of Tc away from the end of the correlation. */
 const REACH = 0.01;
 /** d ln Z/d Tr: a density that asks for more heads for another critical temperature and is not followed. */
@@ -76,41 +77,29 @@ function follow(chem: ChemicalData): VolumeConstant | undefined {
     return sound ? [ln, slope] : undefined;
   };
   const range = statedRange(rows);
-  const [low, high] = soundPart(
-    Math.max(range.Tmin ?? 0, 1e-3 * Tc),
-    Math.min(range.Tmax ?? Tc, FOLLOWED_TO * Tc),
-    (T) => at(T) !== undefined,
-  );
-  if (!(high > low)) return undefined;
-  const step = (high - low) / INTERVALS;
+  let low = Math.max(range.Tmin ?? 0, 1e-3 * Tc);
+  let high = Math.min(range.Tmax ?? Tc, FOLLOWED_TO * Tc);
   const value = new Float64Array(INTERVALS + 1);
   const slope = new Float64Array(INTERVALS + 1);
-  for (let k = 0; k <= INTERVALS; k++) {
-    const found = at(Math.min(Math.max(low + k * step, low), high));
-    if (!found) return undefined;
-    [value[k], slope[k]] = found;
+  // Where the density makes no sense at an end, the stretch around the middle in which it does; each pass cuts it finer.
+  for (let pass = 0; pass < 4 && high > low; pass++) {
+    const step = (high - low) / INTERVALS;
+    const node = (k: number): number => (k === INTERVALS ? high : low + k * step);
+    let from = 0;
+    let to = INTERVALS;
+    for (let k = 0; k <= INTERVALS; k++) {
+      const found = at(node(k));
+      if (found) [value[k], slope[k]] = found;
+      else if (k <= MIDDLE) from = k + 1;
+      else {
+        to = k - 1;
+        break;
+      }
+    }
+    if (from === 0 && to === INTERVALS) return table(low, step, value, slope, REACH * Tc);
+    [low, high] = [node(from), node(to)];
   }
-  return table(low, step, value, slope, REACH * Tc);
-}
-
-/** The stretch around the middle of [low, high] in which a density makes sense; empty when it does not in the middle. */
-function soundPart(low: number, high: number, sound: (T: number) => boolean): readonly [number, number] {
-  const step = (high - low) / (4 * INTERVALS);
-  const middle = (low + high) / 2;
-  if (!(step > 0) || !sound(middle)) return [low, low];
-  let from = middle;
-  while (from > low) {
-    const next = Math.max(from - step, low);
-    if (!sound(next)) break;
-    from = next;
-  }
-  let to = middle;
-  while (to < high) {
-    const next = Math.min(to + step, high);
-    if (!sound(next)) break;
-    to = next;
-  }
-  return [from, to];
+  return undefined;
 }
 
 function table(
