@@ -124,6 +124,9 @@ function ledOnce(
 ): Route | undefined {
   const a = from.port;
   const b = to.port;
+  // Ports that touch: nothing lies between them, and nothing else has a say in it.
+  if (a.at[0] === b.at[0] && a.at[1] === b.at[1])
+    return { points: [a.at, b.at], region: boxOfPiece(a.at, b.at, 1) };
   const own = [from.own, to.own];
   const straight = simplified([a.at, b.at]);
   if (

@@ -18,6 +18,7 @@ export function keepSame<T>(
   before: readonly T[],
   keyOf: (shape: T) => string,
 ): readonly T[] {
+  if (next === before) return before;
   const old = new Map(before.map((shape) => [keyOf(shape), shape]));
   const out = next.map((shape) => {
     const was = old.get(keyOf(shape));

@@ -1,151 +1,71 @@
-import { CATALOGUE } from '../engine/units/catalogue';
+import type { UnitId } from '../engine/ids';
 import type { Sketch } from '../sketch/types';
-import { BoxIndex, boxAround, hull, pieceBoxes, sameBox } from './boxes';
-import { DIAMOND, type DiamondPlace, piecesByLength, placeDiamond } from './diamonds';
-import { foldedBox, type LabelWish, labelSize, placeLabels, rowsIn } from './labels';
-import { bridgesOf, drawPath } from './path';
+import { sameBox } from './boxes';
+import { groundOf, type Made, sameGround } from './ground';
+import { type Layout, layOut } from './layout';
 import { keepSame } from './same';
-import { standingUnits } from './standing';
-import { WEIGHT } from './tokens';
-import type { Box, LabelShape, LineShape, Point, Scene, SceneInput } from './types';
-import { drawUnits } from './units';
-import { crossingsOf, type RouteCache, type Wire, wireSheet } from './wiring';
+import type { LabelRow, LabelShape, Scene, SceneInput, UnitShape } from './types';
+import { shapeOf } from './units';
 
-const caches = new WeakMap<Scene, RouteCache>();
-const HALF_LINE = WEIGHT.material / 2;
-const EMPTY: Box = { x: 0, y: 0, w: 0, h: 0 };
+interface Kept extends Made {
+  readonly layout: Layout;
+}
+const kept = new WeakMap<Scene, Kept>();
 
 /**
  * Everything on the sheet, placed: symbols, lines, diamonds, tags, duties and labels, in sheet px. Pure: the same sketch
  * and input give the same scene.
  *
- * @param before an earlier scene; its shapes are handed on as the same objects wherever nothing changed
+ * @param before an earlier scene: while all stands where it stood nothing is placed anew, and its shapes are handed on as
+ *   the same objects wherever nothing changed
  */
 export function buildScene(sketch: Sketch, input: SceneInput, before?: Scene): Scene {
-  const standing = standingUnits(sketch, input.moved, input.kinds ?? CATALOGUE);
-  const { wires, cache } = wireSheet(sketch, standing, before && caches.get(before));
-  const symbolBoxes = standing.flatMap((u) => (u.linkBox ? [u.box, u.linkBox] : [u.box]));
+  const made = before && kept.get(before);
+  const ground = groundOf(sketch, input, made);
+  const stands = made !== undefined && sameGround(ground, made.ground);
+  const layout = stands ? made.layout : layOut(ground, made?.layout);
 
-  const places = placeDiamonds(wires, symbolBoxes);
-  const lines = drawLines(wires, places);
-  const taken = new BoxIndex();
-  for (const box of symbolBoxes) taken.add(box);
-  wires.forEach((wire, k) => {
-    const half = (input.ribbons?.get(wire.stream.id) ?? 0) / 2;
-    for (const box of pieceBoxes(wire.points, Math.max(half, HALF_LINE))) taken.add(box, k);
-    taken.add(boxAround(wire.points.at(-1)!, 4));
-    const place = places[k];
-    if (place) taken.add(boxAround(place.at, DIAMOND));
+  const old = stands ? before : undefined;
+  const now: Made = { sketch, input, ground };
+  const units = ground.standing.map((u, k) => {
+    const was = old?.units[k];
+    return was && drawnAlike(u.unit.id, k, now, made!) ? was : shapeOf(u, input, layout.texts[k]!);
   });
-  const drawn = drawUnits(standing, input, taken);
-  const labels = drawLabels(wires, places, input, taken);
+  const sources = new Map(sketch.streams.map((stream) => [stream.id, stream.from?.[0]]));
+  const labels = layout.labels.map((place, k): LabelShape => {
+    const rows = input.labels.get(place.stream)!;
+    const source = sources.get(place.stream);
+    const stale = source !== undefined && input.states.get(source) === 'out-of-date';
+    const was = old?.labels[k];
+    return was && was.stale === stale && sameRows(was.rows, rows) ? was : { ...place, rows, stale };
+  });
 
-  const scene: Scene = {
-    box:
-      hull([
-        ...symbolBoxes,
-        ...drawn.boxes,
-        ...wires.flatMap((wire) => pieceBoxes(wire.points, HALF_LINE)),
-        ...places.flatMap((place) => (place ? [boxAround(place.at, DIAMOND)] : [])),
-        ...labels.filter((label) => !label.folded).map((label) => label.box),
-      ]) ?? EMPTY,
-    units: drawn.shapes,
-    lines,
-    labels,
-  };
-  const kept = before ? keepScene(scene, before) : scene;
-  caches.set(kept, cache);
-  return kept;
+  const next: Scene = { box: layout.box, units, lines: layout.lines, labels };
+  const scene = before ? keepScene(next, before) : next;
+  kept.set(scene, { ...now, layout });
+  return scene;
 }
 
+/** Whether the input says the same of a unit that stands where it stood, drawn from the same record. */
+function drawnAlike(id: UnitId, k: number, { input, ground }: Made, before: Made): boolean {
+  const [u, v] = [ground.standing[k]!, before.ground.standing[k]!];
+  if (u !== v && (u.unit !== v.unit || u.symbol !== v.symbol)) return false;
+  return (
+    input.states.get(id) === before.input.states.get(id) &&
+    input.limits.get(id) === before.input.limits.get(id) &&
+    input.duties.get(id) === before.input.duties.get(id)
+  );
+}
+
+const sameRows = (a: readonly LabelRow[], b: readonly LabelRow[]): boolean =>
+  a === b ||
+  (a.length === b.length && a.every((row, k) => row.number === b[k]!.number && row.unit === b[k]!.unit));
+
 function keepScene(next: Scene, before: Scene): Scene {
-  const units = keepSame(next.units, before.units, (u) => u.unit);
+  const units = keepSame<UnitShape>(next.units, before.units, (u) => u.unit);
   const lines = keepSame(next.lines, before.lines, (l) => l.stream);
   const labels = keepSame(next.labels, before.labels, (l) => l.stream);
   const same = sameBox(next.box, before.box);
   if (same && units === before.units && lines === before.lines && labels === before.labels) return before;
   return { box: same ? before.box : next.box, units, lines, labels };
-}
-
-function placeDiamonds(
-  wires: readonly Wire[],
-  symbols: readonly Box[],
-): readonly (DiamondPlace | undefined)[] {
-  const taken = new BoxIndex();
-  for (const box of symbols) taken.add(box);
-  wires.forEach((wire, k) => {
-    for (const box of pieceBoxes(wire.points, HALF_LINE)) taken.add(box, k);
-  });
-  const crossings = crossingsOf(wires.map((wire) => wire.points));
-  return wires.map((wire, k) => {
-    const place = placeDiamond(wire.points, k, taken, crossings[k]!);
-    if (place) taken.add(boxAround(place.at, DIAMOND));
-    return place;
-  });
-}
-
-function drawLines(
-  wires: readonly Wire[],
-  places: readonly (DiamondPlace | undefined)[],
-): readonly LineShape[] {
-  const bridges = bridgesOf(wires.map((wire) => wire.points));
-  return wires.map((wire, k) => {
-    const { d, head, arrow } = drawPath(wire.points, bridges.get(k), wire.reach);
-    const place = places[k];
-    return {
-      stream: wire.stream.id,
-      number: wire.stream.number,
-      points: wire.points,
-      d,
-      arrow,
-      head,
-      ...(place ? { diamond: place.at } : {}),
-      hanging: wire.hanging,
-    };
-  });
-}
-
-/** Middle of the longest piece: what a label names when its line is too short for a diamond. */
-function middleOf(points: readonly Point[]): { readonly at: Point; readonly piece: number } {
-  const piece = piecesByLength(points)[0]!;
-  const [a, b] = [points[piece]!, points[piece + 1]!];
-  return { at: [(a[0] + b[0]) / 2, (a[1] + b[1]) / 2], piece };
-}
-
-function drawLabels(
-  wires: readonly Wire[],
-  places: readonly (DiamondPlace | undefined)[],
-  input: SceneInput,
-  taken: BoxIndex,
-): readonly LabelShape[] {
-  const wanted = wires.flatMap((wire, k) => {
-    const rows = input.labels.get(wire.stream.id);
-    if (!rows || rows.length === 0) return [];
-    const place = places[k];
-    const wish: LabelWish = {
-      points: wire.points,
-      anchor: { ...(place ?? middleOf(wire.points)), diamond: place !== undefined },
-      size: labelSize(rows),
-      ...(wire.freeEnd ? { freeEnd: wire.freeEnd } : {}),
-      half: Math.max((input.ribbons?.get(wire.stream.id) ?? 0) / 2, HALF_LINE),
-    };
-    const from = wire.stream.from?.[0];
-    const stale = from !== undefined && input.states.get(from) === 'out-of-date';
-    return [{ wire, rows, wish, stale }];
-  });
-  const boxes = placeLabels(
-    wanted.map(({ wish }) => wish),
-    taken,
-  );
-  return wanted.map(({ wire, rows, wish, stale }, k) => {
-    const box = boxes[k] ?? foldedBox(wish);
-    return {
-      stream: wire.stream.id,
-      box,
-      rows,
-      ...rowsIn(box, wish.size),
-      folded: boxes[k] === undefined,
-      stale,
-    };
-  });
 }

@@ -11,11 +11,18 @@ export interface TextPlace {
   readonly box: Box;
 }
 
-/** Room for any duty: letter, seven figures and unit. The digits have no say in where it stands. */
-const dutyRoom = (text: string): number => {
-  const unit = text.slice(text.lastIndexOf(' ') + 1);
-  return measureText('W ', TEXT.duty) + numberRoom(TEXT.duty) + measureText(` ${unit}`, TEXT.duty);
-};
+const rooms = new Map<string, number>();
+
+/** Room for any duty: letter, seven figures and unit [px]. The digits have no say in where it stands. */
+export function roomOf(duty = '0 kW'): number {
+  const unit = duty.slice(duty.lastIndexOf(' ') + 1);
+  let room = rooms.get(unit);
+  if (room === undefined) {
+    room = measureText('W ', TEXT.duty) + numberRoom(TEXT.duty) + measureText(` ${unit}`, TEXT.duty);
+    rooms.set(unit, room);
+  }
+  return room;
+}
 
 type Beside = 'right' | 'left' | 'below' | 'above';
 
@@ -68,15 +75,16 @@ function beside(
 }
 
 /**
- * The duty at the ring of a heat link.
+ * The duty at the ring of a heat link; its text is left open.
  *
+ * @param room  width that is kept for it [px]
  * @param along direction of the link away from its unit
  */
-export const placeDuty = (text: string, ring: Point, along: Point, taken: BoxIndex): TextPlace =>
+export const placeDuty = (room: number, ring: Point, along: Point, taken: BoxIndex): TextPlace =>
   beside(
     ring,
-    text,
-    { size: TEXT.duty, ink: 'ink3', room: dutyRoom(text) },
+    '',
+    { size: TEXT.duty, ink: 'ink3', room },
     along[0] < 0 ? ['left', 'below', 'above', 'right'] : ['right', 'left', 'below', 'above'],
     taken,
     [GAP, GAP - 2],

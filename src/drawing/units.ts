@@ -9,21 +9,26 @@ import { TEXT } from './tokens';
 import { toSheet } from './transform';
 import type { Box, Point, SceneInput, TextShape, UnitShape } from './types';
 
-export interface DrawnUnits {
-  readonly shapes: readonly UnitShape[];
-  /** Boxes of tags, marks, names and duties. */
-  readonly boxes: readonly Box[];
+/** Places of what stands beside a unit's symbol. */
+export interface UnitTexts {
+  readonly tag?: TagPlace;
+  readonly name?: TextPlace;
+  readonly duty?: TextPlace;
 }
 
-const NO_ROOM = '0 kW';
-
 /**
- * Units with tags, state marks, names and duties, each placed where it covers nothing. Room for a limit mark and a duty is
- * kept even when there is none, so that nothing moves when one appears.
+ * Tags, names and duties, each placed where it covers nothing. Room for a limit mark and a duty is kept even when there is
+ * none, so that nothing moves when one appears.
  *
+ * @param rooms for each unit, width of its duty [px]
  * @param taken symbols, lines and diamonds; what is placed here is added
+ * @returns places for each unit, and the boxes of tags, marks, names and duties
  */
-export function drawUnits(units: readonly StandingUnit[], input: SceneInput, taken: BoxIndex): DrawnUnits {
+export function placeTexts(
+  units: readonly StandingUnit[],
+  rooms: readonly number[],
+  taken: BoxIndex,
+): { readonly texts: readonly UnitTexts[]; readonly boxes: readonly Box[] } {
   const boxes: Box[] = [];
   const add = (box: Box): void => {
     boxes.push(box);
@@ -43,13 +48,17 @@ export function drawUnits(units: readonly StandingUnit[], input: SceneInput, tak
     add(place.box);
     return place;
   });
-  const duties = units.map((u): TextPlace | undefined => {
+  const duties = units.map((u, k): TextPlace | undefined => {
     if (!u.link) return undefined;
-    const place = placeDuty(input.duties.get(u.unit.id) ?? NO_ROOM, u.link[1], direction(u.link), taken);
+    const place = placeDuty(rooms[k]!, u.link[1], direction(u.link), taken);
     add(place.box);
     return place;
   });
-  return { shapes: units.map((u, k) => shapeOf(u, input, tags[k], names[k], duties[k])), boxes };
+  const texts = units.map((_, k): UnitTexts => {
+    const [tag, name, duty] = [tags[k], names[k], duties[k]];
+    return { ...(tag ? { tag } : {}), ...(name ? { name } : {}), ...(duty ? { duty } : {}) };
+  });
+  return { texts, boxes };
 }
 
 const direction = ([a, b]: readonly [Point, Point]): Point => [
@@ -57,17 +66,13 @@ const direction = ([a, b]: readonly [Point, Point]): Point => [
   Math.sign(b[1] - a[1]),
 ];
 
-function shapeOf(
-  u: StandingUnit,
-  input: SceneInput,
-  tag: TagPlace | undefined,
-  name: TextPlace | undefined,
-  duty: TextPlace | undefined,
-): UnitShape {
+/** A unit as it is drawn: its symbol with what stands beside it, and what the input says of it. */
+export function shapeOf(u: StandingUnit, input: SceneInput, { tag, name, duty }: UnitTexts): UnitShape {
   const { unit, symbol, pose, box } = u;
   const state = input.states.get(unit.id) ?? 'waiting';
   const weight = input.limits.get(unit.id);
-  const dutyText = input.duties.has(unit.id) ? duty?.text : undefined;
+  const text = input.duties.get(unit.id);
+  const dutyText = duty && text !== undefined ? { ...duty.text, text } : undefined;
   const stale = state === 'out-of-date';
   return {
     unit: unit.id,

@@ -1,5 +1,5 @@
 import type { StreamId, UnitId } from '../engine/ids';
-import type { Sketch, SketchStream } from '../sketch/types';
+import type { SketchStream } from '../sketch/types';
 import { grown, overlaps } from './boxes';
 import { drawApart, piecesOf } from './nudge';
 import { hangingLine, type Route, type RouteEnd, routeLine } from './route';
@@ -49,7 +49,7 @@ function changedBoxes(a: ReadonlyMap<string, Box>, b: ReadonlyMap<string, Box>):
  * @param before ways of an earlier scene, kept where they still hold; the answer is the same with and without
  */
 export function wireSheet(
-  sketch: Sketch,
+  streams: readonly SketchStream[],
   units: readonly StandingUnit[],
   before: RouteCache | undefined,
 ): { readonly wires: readonly Wire[]; readonly cache: RouteCache } {
@@ -66,7 +66,7 @@ export function wireSheet(
     return port && { port, own: standing.box };
   };
 
-  for (const stream of sketch.streams) {
+  for (const stream of streams) {
     const from = endOf(stream.from);
     const to = endOf(stream.to);
     const via = stream.via ?? [];

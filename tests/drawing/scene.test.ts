@@ -5,8 +5,9 @@ import { cutText, measureText } from '../../src/drawing/metrics';
 import { buildScene } from '../../src/drawing/scene';
 import { sceneToSvg } from '../../src/drawing/svg';
 import { DARK, LIGHT, PRINT } from '../../src/drawing/tokens';
-import type { Point } from '../../src/drawing/types';
+import type { DrawnState, Point } from '../../src/drawing/types';
 import type { UnitId } from '../../src/engine/ids';
+import type { SketchUnit } from '../../src/sketch/types';
 import { randomSheet, seeded } from './random';
 import { inputOf, LET_DOWN, RECYCLE, SHEETS, sheetOf } from './sheets';
 
@@ -61,6 +62,74 @@ describe('a scene built upon an earlier one', () => {
     expect(buildScene(RECYCLE, inputOf(RECYCLE), scene)).toBe(scene);
   });
 
+  test.each(Object.entries(SHEETS))(
+    'has other digits in the same places, and hands everything else on: %s',
+    (_name, sketch) => {
+      const before = buildScene(sketch, inputOf(sketch));
+      const input = inputOf(sketch);
+      const labels = new Map([...input.labels, [sketch.streams[1]!.id, rowsWith('7.5')]]);
+      const duties = new Map([...input.duties].map(([id, text]) => [id, text.replace('1307', '9')]));
+      const fresh = { ...input, labels, duties };
+      const after = buildScene(sketch, fresh, before);
+      expect(after).toEqual(buildScene(sketch, fresh));
+      expect(after.lines).toBe(before.lines);
+      const changed = after.labels.filter((label, k) => label !== before.labels[k]);
+      expect(changed.map((label) => label.stream)).toEqual([sketch.streams[1]!.id]);
+      const redrawn = after.units.filter((unit, k) => unit !== before.units[k]);
+      expect(redrawn.every((unit) => unit.duty !== undefined)).toBe(true);
+    },
+  );
+
+  test.each([2, 9, 14, 27])(
+    'equals one built from scratch whatever changes in sketch and results: seed %i',
+    (seed) => {
+      let sketch = randomSheet(seed);
+      let input = inputOf(sketch);
+      const next = seeded(100 + seed);
+      const pick = <T>(list: readonly T[]): T => list[Math.floor(next() * list.length)]!;
+      const states: readonly DrawnState[] = ['solved', 'waiting', 'no-solution', 'out-of-date'];
+      const rows = [rowsWith('1.5'), rowsWith('99'), rowsWith('3').slice(1), []];
+      const swap = (change: Partial<SketchUnit>): void => {
+        const at = Math.floor(next() * sketch.units.length);
+        sketch = { ...sketch, units: sketch.units.map((u, k) => (k === at ? { ...u, ...change } : u)) };
+      };
+      const steps: readonly (() => void)[] = [
+        () => {
+          input = { ...input, labels: new Map([...input.labels, [pick(sketch.streams).id, pick(rows)]]) };
+        },
+        () => {
+          input = { ...input, states: new Map([...input.states, [pick(sketch.units).id, pick(states)]]) };
+        },
+        () => {
+          input = {
+            ...input,
+            limits: new Map([[pick(sketch.units).id, pick(['note', 'caution'] as const)]]),
+          };
+        },
+        () => {
+          const text = pick(['Q 1 kW', 'W 12 MW', 'Q 5.55 BTU/h']);
+          input = { ...input, duties: new Map([...input.duties, [pick(sketch.units).id, text]]) };
+        },
+        () =>
+          swap({
+            settings: { p: { P: `${1 + Math.floor(9 * next())} bar` }, duty: pick(['3 kW', '-3 kW']) },
+          }),
+        () => swap({ name: pick(['Gas', 'A rather longer name']) }),
+        () => swap({ turn: pick([0, 90, 180, 270] as const) }),
+        () => {
+          const at = Math.floor(next() * sketch.streams.length);
+          sketch = { ...sketch, streams: sketch.streams.filter((_, k) => k !== at) };
+        },
+      ];
+      let scene = buildScene(sketch, input);
+      for (let step = 0; step < 40; step++) {
+        pick(steps)();
+        scene = buildScene(sketch, input, scene);
+        expect(scene).toEqual(buildScene(sketch, input));
+      }
+    },
+  );
+
   test('keeps the lines that have nothing to do with a moved unit', () => {
     const before = buildScene(RECYCLE, inputOf(RECYCLE));
     const moved = new Map<UnitId, Point>([['PROD-1' as UnitId, [1016, 96]]]);
@@ -87,6 +156,29 @@ describe('a scene built upon an earlier one', () => {
       }
     },
   );
+});
+
+test('a unit pushed against another until their ports touch leaves the line without length', () => {
+  const sketch = sheetOf(
+    [
+      ['feed', 'FEED-1', 0, 0],
+      ['valve', 'PV-1', 200, 0],
+      ['product', 'PROD-1', 400, 0],
+    ],
+    [
+      ['1', 'FEED-1.out', 'PV-1.in'],
+      ['2', 'PV-1.out', 'PROD-1.in'],
+    ],
+  );
+  const scene = buildScene(sketch, inputOf(sketch));
+  const [[x], [far]] = [scene.lines[0]!.points[0]!, scene.lines[0]!.points.at(-1)!];
+  const moved = new Map<UnitId, Point>([['PV-1' as UnitId, [200 - (far - x), 0]]]);
+  const touching = buildScene(sketch, { ...inputOf(sketch), moved }, scene);
+  expect(touching.lines[0]!.points).toEqual([
+    [x, 0],
+    [x, 0],
+  ]);
+  expect(JSON.stringify(touching)).not.toContain('null');
 });
 
 test('bends moved by hand are honoured, those inside a symbol are left out', () => {

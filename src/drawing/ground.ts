@@ -1,0 +1,120 @@
+import type { StreamId, UnitId } from '../engine/ids';
+import { CATALOGUE } from '../engine/units/catalogue';
+import type { Sketch, SketchStream } from '../sketch/types';
+import { sameBox } from './boxes';
+import { type LabelSize, labelSize } from './labels';
+import { sameValue } from './same';
+import { roomOf } from './sideTexts';
+import { portOf, type StandingUnit, standingUnits } from './standing';
+import { flagName } from './symbols/flag';
+import type { LabelRow, Point, SceneInput } from './types';
+
+/** All that has a say in where things stand. */
+export interface Ground {
+  readonly standing: readonly StandingUnit[];
+  readonly streams: readonly SketchStream[];
+  /** Sizes of the labels: from units and count of rows, never from digits. */
+  readonly sizes: ReadonlyMap<StreamId, LabelSize>;
+  /** Room of each unit's duty [px]. */
+  readonly rooms: readonly number[];
+  readonly ribbons: ReadonlyMap<StreamId, number> | undefined;
+}
+
+/** What a ground was made of, beside the ground: the same again needs no second look. */
+export interface Made {
+  readonly sketch: Sketch;
+  readonly input: SceneInput;
+  readonly ground: Ground;
+}
+
+const sizeByUnits = new Map<string, LabelSize>();
+
+/** The same units give the same object, so that sizes are compared by identity. */
+function sizeOf(rows: readonly LabelRow[]): LabelSize {
+  let key = '';
+  for (const row of rows) key += `${row.unit}\n`;
+  let size = sizeByUnits.get(key);
+  if (!size) {
+    size = labelSize(rows);
+    sizeByUnits.set(key, size);
+  }
+  return size;
+}
+
+export function groundOf(sketch: Sketch, input: SceneInput, before: Made | undefined): Ground {
+  const kinds = input.kinds ?? CATALOGUE;
+  const stands =
+    before !== undefined &&
+    sketch.units === before.sketch.units &&
+    sketch.streams === before.sketch.streams &&
+    kinds === (before.input.kinds ?? CATALOGUE) &&
+    sameMap(input.moved, before.input.moved);
+  const standing = stands ? before.ground.standing : standingUnits(sketch, input.moved, kinds);
+  const sizes = new Map<StreamId, LabelSize>();
+  for (const { id } of sketch.streams) {
+    const rows = input.labels.get(id);
+    if (rows && rows.length > 0) sizes.set(id, sizeOf(rows));
+  }
+  const rooms = standing.map((u) => (u.link ? roomOf(input.duties.get(u.unit.id)) : 0));
+  return { standing, streams: sketch.streams, sizes, rooms, ribbons: input.ribbons };
+}
+
+/** Whether everything stands where it stood, whatever else changed in the sketch. */
+export function sameGround(a: Ground, b: Ground): boolean {
+  if (a.standing.length !== b.standing.length) return false;
+  if (!a.rooms.every((room, k) => room === b.rooms[k])) return false;
+  if (!sameMap(a.sizes, b.sizes) || !sameMap(a.ribbons, b.ribbons)) return false;
+  if (a.standing === b.standing && a.streams === b.streams) return true;
+  /** Units that became another record or symbol, though they stand where they stood. */
+  const redrawn = new Map<UnitId, readonly [StandingUnit, StandingUnit]>();
+  for (const [k, now] of a.standing.entries()) {
+    const was = b.standing[k]!;
+    if (now === was) continue;
+    if (!standsAlike(now, was)) return false;
+    if (now.symbol !== was.symbol) redrawn.set(now.unit.id, [now, was]);
+  }
+  if (a.streams.length !== b.streams.length) return false;
+  const portStands = (end: SketchStream['from']): boolean => {
+    const pair = end && redrawn.get(end[0]);
+    return !pair || sameValue(portOf(pair[0], end[1]), portOf(pair[1], end[1]));
+  };
+  return a.streams.every((now, k) => {
+    const was = b.streams[k]!;
+    if (now !== was && !runsAlike(now, was)) return false;
+    return redrawn.size === 0 || (portStands(now.from) && portStands(now.to));
+  });
+}
+
+function standsAlike(a: StandingUnit, b: StandingUnit): boolean {
+  if (a.unit !== b.unit) {
+    if (a.unit.id !== b.unit.id || a.unit.tag !== b.unit.tag || a.unit.kind !== b.unit.kind) return false;
+    if (flagName(a.unit) !== flagName(b.unit)) return false;
+  }
+  const { pose: p, symbol: s } = a;
+  const { pose: q, symbol: t } = b;
+  if (!samePoint(p.at, q.at) || p.turn !== q.turn || p.mirror !== q.mirror || !sameBox(a.box, b.box))
+    return false;
+  return (
+    s === t ||
+    (s.tagless === t.tagless &&
+      s.nameInside === t.nameInside &&
+      sameValue(s.nameAt, t.nameAt) &&
+      sameValue(a.link, b.link))
+  );
+}
+
+const runsAlike = (a: SketchStream, b: SketchStream): boolean =>
+  a.id === b.id &&
+  a.number === b.number &&
+  sameValue(a.from, b.from) &&
+  sameValue(a.to, b.to) &&
+  sameValue(a.via, b.via);
+
+const samePoint = (a: Point, b: Point): boolean => a[0] === b[0] && a[1] === b[1];
+
+const sameMap = <K, T>(a: ReadonlyMap<K, T> | undefined, b: ReadonlyMap<K, T> | undefined): boolean => {
+  if (a === b) return true;
+  if ((a?.size ?? 0) !== (b?.size ?? 0)) return false;
+  for (const [key, value] of a ?? []) if (!sameValue(b?.get(key), value)) return false;
+  return true;
+};
