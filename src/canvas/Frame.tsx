@@ -43,9 +43,13 @@ export const Frame = memo(function Frame({
 }) {
   const { x, y, zoom } = useViewport();
   const box = useSheet((state) => state.scene.box);
+  // Before anything is drawn the page is what is seen.
+  const isBlank = useSheet((state) => state.scene.units.length === 0);
   const { inner } = useMemo(() => frameOf(pageOf(box)), [box]);
-  const across = zonesAlong(ZONES_ACROSS, (k) => `${k + 1}`, inner.x * zoom + x, inner.w * zoom, width);
-  const down = zonesAlong(ZONES_DOWN, (k) => LETTERS[k]!, inner.y * zoom + y, inner.h * zoom, height);
+  const [left, wide] = isBlank ? [0, width] : [inner.x * zoom + x, inner.w * zoom];
+  const [top, high] = isBlank ? [0, height] : [inner.y * zoom + y, inner.h * zoom];
+  const across = zonesAlong(ZONES_ACROSS, (k) => `${k + 1}`, left, wide, width);
+  const down = zonesAlong(ZONES_DOWN, (k) => LETTERS[k]!, top, high, height);
   return (
     <div className="frame" aria-hidden="true">
       {(['top', 'bottom'] as const).map((side) => (

@@ -93,8 +93,10 @@ export function Shelf() {
           onChange={(event) => setTyped(event.target.value)}
           onKeyDown={(event) => {
             const first = groups[0]?.items[0];
-            if (event.key === 'Enter' && first) put(first.kind);
-            else if (event.key === 'Escape') setTyped('');
+            if (event.key === 'Enter' && first) {
+              put(first.kind);
+              setTyped('');
+            } else if (event.key === 'Escape') setTyped('');
           }}
         />
       )}

@@ -115,7 +115,7 @@ export const sheetActions: readonly Action[] = [
   ...addingArrows,
   {
     id: 'open-drawer',
-    label: 'Open the drawer; end a connection or a move',
+    label: 'Into the drawer; end a connection or a move',
     group: 'sheet',
     keys: ['Enter'],
     when: (stores) => onSheet(stores) && idle(stores),

@@ -203,12 +203,19 @@ export function freePlace(boxes: readonly Box[], symbol: Box, from: Point): Poin
   return onGrid(from);
 }
 
-/** Puts a unit on the sheet without a pointer: right of the selected one, else at the middle of the view. */
+/** The unit that a new one stands beside: the selected one, or the one that the selected stream leads to, or comes from. */
+function unitChosen({ session, sketch }: Stores): UnitId | undefined {
+  const { units, streams } = session.getState();
+  const stream = sketch.getState().sketch.streams.find(({ id }) => id === streams.at(-1));
+  return units.at(-1) ?? stream?.to?.[0] ?? stream?.from?.[0];
+}
+
+/** Puts a unit on the sheet without a pointer: right of what is selected, else at the middle of the view. */
 export function place(stores: Stores, kind: string): UnitId | undefined {
   const sheet = sheetOf(stores);
   const state = sheet?.store.getState();
   const symbol = plainSymbol(kind).box;
-  const chosen = stores.session.getState().units.at(-1);
+  const chosen = unitChosen(stores);
   const beside = chosen && state?.units.get(chosen);
   const start: Point = beside
     ? [beside.box.x + beside.box.w + ROOM[0] - symbol.x, beside.at[1]]

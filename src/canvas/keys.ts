@@ -165,7 +165,7 @@ export function endKeys(stores: Stores, sheet: SheetStore): void {
   if (pulling?.byKeys) cancelPull(stores, sheet);
 }
 
-/** Enter: ends a connection or a move; else opens the drawer of what is selected. */
+/** Enter: ends a connection or a move; else goes into the drawer of what is selected. */
 export function enter(stores: Stores): void {
   const handle = sheetOf(stores);
   if (!handle) return;
@@ -175,7 +175,7 @@ export function enter(stores: Stores): void {
   else {
     const thing = currentThing(stores) ?? focusedThing();
     if (!thing) return;
-    stores.session.openDrawer(
+    stores.session.enterDrawer(
       'unit' in thing ? { is: 'unit', id: thing.unit } : { is: 'stream', id: thing.stream },
     );
   }

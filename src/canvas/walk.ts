@@ -19,8 +19,8 @@ const byHeight =
 
 /**
  * The next thing from a unit or stream in the direction of an arrow. Right goes on with the flow, left against it: unit,
- * stream, unit. Up and down choose among the streams that leave the same unit, or enter it; from a unit, the nearest unit
- * above or below. Undefined where there is nothing more.
+ * stream, unit; where no stream goes on, to the nearest unit on that side. Up and down choose among the streams that leave
+ * the same unit, or enter it; from a unit, the nearest unit above or below. Undefined where there is nothing more.
  */
 export function stepFrom(sketch: Sketch, places: Places, from: Thing, arrow: Arrow): Thing | undefined {
   return 'unit' in from
@@ -33,32 +33,35 @@ function stepFromUnit(sketch: Sketch, places: Places, id: UnitId, arrow: Arrow):
     const [first] = sketch.streams
       .filter((s) => (arrow === 'right' ? s.from : s.to)?.[0] === id)
       .sort(byHeight(places));
-    return first && { stream: first.id };
+    if (first) return { stream: first.id };
   }
-  const here = places.unit(id);
+  return nearestUnit(sketch, places, places.unit(id), arrow, id);
+}
+
+/** The nearest unit on one side of a point. Sideways counts double: a step should not wander off its line. */
+function nearestUnit(
+  sketch: Sketch,
+  places: Places,
+  here: Point | undefined,
+  arrow: Arrow,
+  except?: UnitId,
+): Thing | undefined {
   if (!here) return undefined;
-  let best: UnitId | undefined;
-  let nearest = Infinity;
-  for (const unit of sketch.units) {
-    const there = places.unit(unit.id);
-    if (!there || unit.id === id) continue;
-    const down = there[1] - here[1];
-    if (arrow === 'down' ? down <= 0 : down >= 0) continue;
-    // Sideways counts double: up and down should not wander off along the train.
-    const away = Math.abs(down) + 2 * Math.abs(there[0] - here[0]);
-    if (away < nearest) {
-      nearest = away;
-      best = unit.id;
-    }
-  }
-  return best && { unit: best };
+  const all = sketch.units.flatMap(({ id }) => {
+    const at = places.unit(id);
+    return at && id !== except ? [{ id, at }] : [];
+  });
+  const best = nearestOnSide(all, here, arrow);
+  return best && { unit: best.id };
 }
 
 function stepFromStream(sketch: Sketch, places: Places, id: StreamId, arrow: Arrow): Thing | undefined {
   const stream = sketch.streams.find((s) => s.id === id);
   if (!stream) return undefined;
-  if (arrow === 'right') return stream.to && { unit: stream.to[0] };
-  if (arrow === 'left') return stream.from && { unit: stream.from[0] };
+  if (arrow === 'right' || arrow === 'left') {
+    const end = arrow === 'right' ? stream.to : stream.from;
+    return end ? { unit: end[0] } : nearestUnit(sketch, places, places.stream(id), arrow);
+  }
   const leaving = sketch.streams.filter((s) => s.from && s.from[0] === stream.from?.[0]);
   const entering = sketch.streams.filter((s) => s.to && s.to[0] === stream.to?.[0]);
   const branch = (leaving.length > 1 ? leaving : entering).sort(byHeight(places));
@@ -67,33 +70,36 @@ function stepFromStream(sketch: Sketch, places: Places, id: StreamId, arrow: Arr
   return next && { stream: next.id };
 }
 
-/** The target nearest to a point in the direction of an arrow; without one there, the next in the list. */
+/** The nearest of what lies on one side of a point; across counts double. */
+function nearestOnSide<T extends { readonly at: Point }>(
+  all: readonly T[],
+  [x, y]: Point,
+  arrow: Arrow,
+): T | undefined {
+  const axis = arrow === 'left' || arrow === 'right' ? 0 : 1;
+  const sign = arrow === 'right' || arrow === 'down' ? 1 : -1;
+  let best: T | undefined;
+  let nearest = Infinity;
+  for (const item of all) {
+    const away: Point = [item.at[0] - x, item.at[1] - y];
+    const along = sign * away[axis];
+    if (along <= 0) continue;
+    const distance = along + 2 * Math.abs(away[1 - axis] as number);
+    if (distance < nearest) {
+      nearest = distance;
+      best = item;
+    }
+  }
+  return best;
+}
+
+/** The target nearest to a point in the direction of an arrow; without one there, the first of all. */
 export function chooseByArrow<T extends { readonly at: Point }>(
   all: readonly T[],
   now: T | undefined,
   from: Point,
   arrow: Arrow,
 ): T | undefined {
-  const here = now?.at ?? from;
-  const along = (p: Point): number =>
-    arrow === 'right'
-      ? p[0] - here[0]
-      : arrow === 'left'
-        ? here[0] - p[0]
-        : arrow === 'down'
-          ? p[1] - here[1]
-          : here[1] - p[1];
-  const across = (p: Point): number =>
-    arrow === 'left' || arrow === 'right' ? Math.abs(p[1] - here[1]) : Math.abs(p[0] - here[0]);
-  let best: T | undefined;
-  let nearest = Infinity;
-  for (const item of all) {
-    if (item === now || along(item.at) <= 0) continue;
-    const away = along(item.at) + 2 * across(item.at);
-    if (away < nearest) {
-      nearest = away;
-      best = item;
-    }
-  }
-  return best ?? (now ? undefined : all[0]);
+  const others = all.filter((item) => item !== now);
+  return nearestOnSide(others, now?.at ?? from, arrow) ?? (now ? undefined : all[0]);
 }

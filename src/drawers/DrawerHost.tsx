@@ -1,3 +1,4 @@
+import { useEffect, useRef } from 'react';
 import { useSession, useSketch, useStores } from '../store/react';
 import type { DrawerChoice } from '../store/session';
 import { AssumptionsDrawer } from './AssumptionsDrawer';
@@ -19,9 +20,44 @@ const NAMES: Readonly<Record<DrawerChoice['is'], string>> = {
   sketch: 'Sketch drawer',
 };
 
+/** Where the keyboard begins: what the drawer names for it, else what needs a value, else its first control. */
+const BEGIN = [
+  '[data-begin]:not(:disabled)',
+  '[data-state="needed"] :is(input, select):not(:disabled)',
+  '.drawer-body :is(input, select, textarea, button):not(:disabled)',
+  'button',
+];
+
+/** The drawer's element, and a way out of it that gives the focus back to where it was before. */
+function useEntering() {
+  const { session } = useStores();
+  const root = useRef<HTMLElement>(null);
+  const cameFrom = useRef<HTMLElement | null>(null);
+  const entered = useSession((state) => state.drawerEntered);
+  const seen = useRef(entered);
+  useEffect(() => {
+    if (seen.current === entered) return;
+    seen.current = entered;
+    for (const selector of BEGIN) {
+      const target = root.current?.querySelector<HTMLElement>(selector);
+      if (!target) continue;
+      target.focus();
+      return;
+    }
+  }, [entered]);
+  const onFocus = (event: React.FocusEvent): void => {
+    const from = event.relatedTarget;
+    if (from instanceof HTMLElement && !event.currentTarget.contains(from)) cameFrom.current = from;
+  };
+  const leave = (): void => {
+    session.openDrawer(null);
+    if (cameFrom.current?.isConnected) cameFrom.current.focus({ preventScroll: true });
+  };
+  return { root, onFocus, leave };
+}
+
 /** The place at the side: one drawer at a time, folded away when there is none. */
 export function DrawerHost() {
-  const { session } = useStores();
   const drawer = useSession((state) => state.drawer);
   // A unit or stream that has gone (deleted, undone, another sketch) takes its drawer with it.
   const isThere = useSketch((state) => {
@@ -30,16 +66,23 @@ export function DrawerHost() {
     return drawer !== null;
   });
   const width = useDrawerWidth();
+  const { root, onFocus, leave } = useEntering();
   const key = drawer ? `${drawer.is} ${'id' in drawer ? drawer.id : ''}` : '';
   if (!drawer || !isThere) return null;
   return (
-    <aside className="drawer" aria-label={NAMES[drawer.is]} style={{ width: width.px }}>
+    <aside
+      className="drawer"
+      aria-label={NAMES[drawer.is]}
+      style={{ width: width.px }}
+      ref={root}
+      onFocus={onFocus}
+    >
       <Splitter width={width} />
       {/* biome-ignore lint/a11y/noStaticElementInteractions: Esc leaves the drawer from any of its fields */}
       <div
         className="drawer-inner"
         onKeyDown={(event) => {
-          if (event.key === 'Escape' && !event.defaultPrevented) session.openDrawer(null);
+          if (event.key === 'Escape' && !event.defaultPrevented) leave();
         }}
       >
         <Content key={key} drawer={drawer} />

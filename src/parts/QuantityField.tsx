@@ -42,7 +42,7 @@ export interface QuantityFieldProps {
   readonly describedBy?: string | undefined;
   readonly autoFocus?: boolean;
   readonly onPaste?: (text: string) => boolean;
-  /** Esc in a field that has nothing to take back. */
+  /** Esc in a field that has nothing to take back; without it, Esc goes on to what the field stands in. */
   readonly onLeave?: () => void;
 }
 
@@ -165,6 +165,8 @@ export function QuantityField(props: QuantityFieldProps) {
             if (slide.keyDown(event)) return;
             if (event.key === 'Enter') commit(draft);
             else if (event.key === 'Escape') {
+              // With nothing to take back, Esc belongs to what the field stands in.
+              if (draft === null && !refusal && !props.onLeave) return;
               event.stopPropagation();
               if (draft === null && !refusal) props.onLeave?.();
               restore();

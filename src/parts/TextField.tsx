@@ -53,7 +53,7 @@ export function TextField(props: TextFieldProps) {
           {...shared}
           rows={props.lines}
           onKeyDown={(event) => {
-            if (event.key !== 'Escape') return;
+            if (event.key !== 'Escape' || draft === null) return;
             event.stopPropagation();
             restore();
           }}
@@ -65,7 +65,7 @@ export function TextField(props: TextFieldProps) {
           autoComplete="off"
           onKeyDown={(event) => {
             if (event.key === 'Enter') commit();
-            else if (event.key === 'Escape') {
+            else if (event.key === 'Escape' && draft !== null) {
               event.stopPropagation();
               restore();
             }

@@ -9,6 +9,9 @@ export type DrawerChoice =
   | { readonly is: 'chemicals' }
   | { readonly is: 'sketch' };
 
+/** A unit or a stream, wherever it is shown. */
+export type Thing = { readonly unit: UnitId } | { readonly stream: StreamId };
+
 export interface Notice {
   readonly key: number;
   readonly tone: 'info' | 'caution' | 'beyond';
@@ -23,13 +26,21 @@ export interface SessionState {
   readonly units: readonly UnitId[];
   readonly streams: readonly StreamId[];
   readonly drawer: DrawerChoice | null;
+  /** Counts how often the keyboard was sent into the drawer. */
+  readonly drawerEntered: number;
+  /** Pointed at in another part of the screen: drawn as if selected, for as long as that lasts. */
+  readonly pointed: Thing | null;
+  /** What the sheet was last asked to bring to its middle; the key tells one asking from the next. */
+  readonly centred: { readonly key: number; readonly thing: Thing } | null;
+  /** Zone of the page that a unit or stream stands in, by id; kept by the sheet. */
+  readonly zones: ReadonlyMap<string, string>;
   /** A connection started by keyboard or pointer, waiting for its other end. */
   readonly connecting: { readonly unit: UnitId; readonly port: Port } | null;
   readonly theme: Theme;
   readonly shelfFolded: boolean;
   readonly balanceFolded: boolean;
   /** Full-screen pages over the sheet. */
-  readonly over: 'none' | 'summary' | 'pdf' | 'open' | 'keys' | 'find';
+  readonly over: 'none' | 'summary' | 'pdf' | 'open' | 'keys' | 'find' | 'pairs' | 'scale';
   readonly notice: Notice | null;
   /** Title bar: how autosave stands. */
   readonly saved: {
@@ -45,6 +56,10 @@ export function createSession() {
     units: [],
     streams: [],
     drawer: null,
+    drawerEntered: 0,
+    pointed: null,
+    centred: null,
+    zones: new Map(),
     connecting: null,
     theme: 'system',
     shelfFolded: false,
@@ -71,12 +86,24 @@ export function createSession() {
             : get().drawer;
       set({ units, streams, drawer });
     },
+    /** Selects one thing and has the sheet bring it to its middle; the drawer stays. */
+    centre(thing: Thing): void {
+      set({
+        units: 'unit' in thing ? [thing.unit] : [],
+        streams: 'stream' in thing ? [thing.stream] : [],
+        centred: { key: (get().centred?.key ?? 0) + 1, thing },
+      });
+    },
     toggleUnit(id: UnitId): void {
       const { units } = get();
       set({ units: units.includes(id) ? units.filter((u) => u !== id) : [...units, id] });
     },
     openDrawer(drawer: DrawerChoice | null): void {
       set({ drawer });
+    },
+    /** Opens a drawer and takes the keyboard into it, to the field to begin with. */
+    enterDrawer(drawer: DrawerChoice): void {
+      set({ drawer, drawerEntered: get().drawerEntered + 1 });
     },
     say(tone: Notice['tone'], title: string, lines: readonly string[] = []): void {
       notices += 1;

@@ -126,7 +126,13 @@ test('arrows walk along the streams: right with the flow, left against it', () =
   }
   expect(path).toEqual(['u1', 's1', 'u2', 's2', 'u3', 's3', 'u4']);
   expect(stepFrom(sketch, places, { unit: unitId('u4') }, 'left')).toEqual({ stream: 's3' });
-  expect(stepFrom(sketch, places, { stream: streamId('s4') }, 'right')).toBeUndefined();
+});
+
+test('where no stream goes on, an arrow goes to the nearest unit on that side', () => {
+  // The liquid's loose end is left of the heater, which nothing leads to.
+  expect(stepFrom(sketch, places, { stream: streamId('s4') }, 'right')).toEqual({ unit: 'u5' });
+  expect(stepFrom(sketch, places, { unit: unitId('u5') }, 'left')).toEqual({ unit: 'u3' });
+  expect(stepFrom(sketch, places, { unit: unitId('u1') }, 'left')).toBeUndefined();
 });
 
 test('up and down choose a branch where streams leave the same unit', () => {

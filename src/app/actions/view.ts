@@ -5,6 +5,8 @@ const drawer = (
   is: 'limits' | 'assumptions' | 'chemicals' | 'sketch',
   label: string,
   keys: string[],
+  /** What one opens it for is typed: the keyboard goes into it. */
+  typed = false,
 ): Action => ({
   id: is,
   label,
@@ -12,7 +14,9 @@ const drawer = (
   keys,
   run: ({ session }) => {
     const open = session.getState().drawer?.is === is;
-    session.openDrawer(open ? null : ({ is } as DrawerChoice));
+    if (open) session.openDrawer(null);
+    else if (typed) session.enterDrawer({ is } as DrawerChoice);
+    else session.openDrawer({ is } as DrawerChoice);
   },
 });
 
@@ -39,8 +43,8 @@ export const viewActions: readonly Action[] = [
   },
   drawer('limits', 'Limits', ['L']),
   drawer('assumptions', 'Assumption register', ['A']),
-  drawer('chemicals', 'Chemicals and thermodynamic model', ['H']),
-  drawer('sketch', 'Title block, site and measures', ['T']),
+  drawer('chemicals', 'Chemicals and thermodynamic model', ['H'], true),
+  drawer('sketch', 'Title block, site and measures', ['T'], true),
   {
     id: 'balance',
     label: 'Fold or unfold the balance',
@@ -85,11 +89,19 @@ export const viewActions: readonly Action[] = [
     whileTyping: true,
     run: () => jumpRegion(1),
   },
+  {
+    id: 'previous-region',
+    label: 'Jump to the part of the screen before',
+    group: 'view',
+    keys: ['Shift+F6'],
+    whileTyping: true,
+    run: () => jumpRegion(-1),
+  },
 ];
 
 const REGIONS = ['.bar', '.shelf', '.sheet', '.drawer', '.balance'];
 
-/** Focuses the first thing that takes focus in the next part of the screen, in reading order. */
+/** Focuses the first thing that takes focus in the next part of the screen, or the one before, in reading order. */
 function jumpRegion(by: number): void {
   const regions = REGIONS.map((name) => document.querySelector<HTMLElement>(`.app > ${name}`)).filter(
     (element) => element !== null && element.getClientRects().length > 0,

@@ -39,6 +39,7 @@ export function AddChemical() {
         aria-activedescendant={found.length > 0 ? `${id}-${at}` : undefined}
         autoComplete="off"
         data-field="chemicals.add"
+        data-begin
         placeholder="Add: name, formula or CAS number"
         disabled={!writable}
         value={text}

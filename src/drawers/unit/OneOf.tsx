@@ -112,9 +112,9 @@ export function OneOf({ base, of, count, pairs = [], optional, spec }: Props) {
             assumed={isAssumed ? assumed : undefined}
             needed={!isAssumed}
             autoFocus={chosen === key}
-            onLeave={() => {
-              if (replaced !== undefined) setSlots(choose(kept, row, replaced, given));
-            }}
+            {...(replaced === undefined
+              ? {}
+              : { onLeave: () => setSlots(choose(kept, row, replaced, given)) })}
           />
         )}
         {replaced !== undefined ? (

@@ -10,12 +10,15 @@ interface Props {
   readonly beside: readonly SettingChange[];
   readonly min: number;
   readonly max?: number | undefined;
-  /** Condenser and reboiler are places too. */
-  readonly ends?: boolean;
+  /** Condenser and reboiler are places too; a list names the ends that there are. */
+  readonly ends?: boolean | readonly End[];
   readonly assumed?: { readonly text: string; readonly why: string } | undefined;
   readonly needed?: boolean;
   readonly autoFocus?: boolean;
 }
+
+type End = 'condenser' | 'reboiler';
+const BOTH: readonly End[] = ['condenser', 'reboiler'];
 
 /** A whole number, or a stage: a number counted from the top, or an end by its name. */
 export function WholeField(props: Props) {
@@ -26,6 +29,9 @@ export function WholeField(props: Props) {
   const [draft, setDraft] = useState<string | null>(null);
   const [why, setWhy] = useState<string | null>(null);
   const isEnd = value === 'condenser' || value === 'reboiler';
+  const named = props.ends === true ? BOTH : props.ends || [];
+  /** An end that has gone stays in sight until another place is chosen. */
+  const ends = isEnd && !named.includes(value) ? [...named, value] : named;
   const text = draft ?? (value === undefined || isEnd ? '' : String(value));
   const put = (next: number | string | undefined): void =>
     form.set(
@@ -74,15 +80,14 @@ export function WholeField(props: Props) {
   return (
     <div className="quantity-field whole-field" data-state={state}>
       <div className="whole-line">
-        {props.ends ? (
+        {ends.length > 0 ? (
           <Choice
             label={`${capital(word)}: place`}
             disabled={form.disabled}
             value={isEnd ? String(value) : 'stage'}
             options={[
               { value: 'stage', text: 'stage' },
-              { value: 'condenser', text: 'condenser' },
-              { value: 'reboiler', text: 'reboiler' },
+              ...ends.map((end) => ({ value: end as string, text: end })),
             ]}
             onChange={(next) => put(next === 'stage' ? undefined : next)}
           />
@@ -110,7 +115,7 @@ export function WholeField(props: Props) {
               onKeyDown={(event) => {
                 const by = { ArrowUp: 1, ArrowDown: -1 }[event.key];
                 if (event.key === 'Enter') commit();
-                else if (event.key === 'Escape') {
+                else if (event.key === 'Escape' && draft !== null) {
                   event.stopPropagation();
                   restore();
                 } else if (event.altKey && by !== undefined) {

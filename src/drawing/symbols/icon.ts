@@ -1,9 +1,9 @@
 import { hull } from '../boxes';
 import { pathToSvg } from '../svg';
-import { type Palette, PRINT } from '../tokens';
-import type { Box, PathShape } from '../types';
+import { type Palette, PRINT, WEIGHT } from '../tokens';
+import type { Box, PathShape, Point } from '../types';
 import { plainSymbol, SYMBOLS } from './registry';
-import { linkShapes } from './shapes';
+import { arrowhead, solid } from './shapes';
 
 /** A kind as it stands on the shelf: its paths and the box they fill. */
 export interface Icon {
@@ -13,22 +13,41 @@ export interface Icon {
 
 const DOT_BOX: Box = { x: -28, y: -6, w: 56, h: 32 };
 
-/** The shelf's picture of a kind, made of the same data as its symbol, with its heat link. */
+/** A heat link on the shelf is short and its arrowhead large, so that in and out are told apart [px]. */
+const REACH = 22;
+const HEAD: readonly [number, number] = [12, 7];
+
+/** The shelf's picture of a kind, made of the same data as its symbol; heat shows which way it goes. */
 export function iconOf(kind: string): Icon {
   const own = Object.hasOwn(SYMBOLS, kind) ? SYMBOLS[kind]?.icon : undefined;
   if (own) return { box: DOT_BOX, paths: own };
-  const symbol = plainSymbol(kind);
-  if (!symbol.link) return { box: symbol.box, paths: symbol.paths };
-  const { line } = linkShapes({ ...symbol.link, flow: 'none' });
-  const { marks } = linkShapes(symbol.link);
-  const [[x1, y1], [x2, y2]] = [symbol.link.from, symbol.link.to];
-  const reach: Box = {
-    x: Math.min(x1, x2) - 3,
-    y: Math.min(y1, y2),
-    w: Math.abs(x2 - x1) + 6,
-    h: Math.abs(y2 - y1) + 3,
+  const { box, paths, link } = plainSymbol(kind);
+  if (!link || link.carries === 'shaft') return { box, paths };
+  const [x, y] = link.from;
+  const length = Math.hypot(link.to[0] - x, link.to[1] - y);
+  const [ux, uy]: Point = [(link.to[0] - x) / length, (link.to[1] - y) / length];
+  const at = (reach: number): Point => [x + ux * reach, y + uy * reach];
+  const foot = at(REACH);
+  const [from, to] = [at(link.flow === 'in' ? HEAD[0] : 0), at(REACH - (link.flow === 'out' ? HEAD[0] : 0))];
+  const line: PathShape = {
+    d: `M${from[0]} ${from[1]}L${to[0]} ${to[1]}`,
+    width: WEIGHT.outline,
+    stroke: 'ink',
+    fill: 'none',
   };
-  return { box: hull([symbol.box, reach])!, paths: [line, ...symbol.paths, ...marks] };
+  const head =
+    link.flow === 'in'
+      ? [solid(arrowhead(link.from, [-ux, -uy], ...HEAD))]
+      : link.flow === 'out'
+        ? [solid(arrowhead(foot, [ux, uy], ...HEAD))]
+        : [];
+  const reach: Box = {
+    x: Math.min(x, foot[0]),
+    y: Math.min(y, foot[1]),
+    w: Math.abs(foot[0] - x),
+    h: Math.abs(foot[1] - y),
+  };
+  return { box: hull([box, reach])!, paths: [line, ...paths, ...head] };
 }
 
 /** How an icon fits a rectangle: its scale, and line weights that come out as on the shelf [px]. */
