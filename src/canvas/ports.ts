@@ -4,7 +4,7 @@ import type { Port, UnitId } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { PortSpec } from '../engine/units/types';
 import type { Sketch, SketchStream, SketchUnit } from '../sketch/types';
-import { isOneOf, nextPortName, whyNotConnect } from '../store/commands';
+import { isOneOf, isThere, nextPortName, whyNotConnect } from '../store/commands';
 import { sayEditRefusal } from '../wording';
 import type { PortRef, SheetState, Target } from './sheetStore';
 
@@ -37,6 +37,8 @@ export function portsOf(
     namesOf(spec, used).flatMap((port): StandingPort[] => {
       const place = portOfShape(shape, port);
       if (!place) return [];
+      // A port that a setting took away is there only for the stream that it still has.
+      if (!used.includes(port) && !isThere(spec, unit.settings)) return [];
       const stream = mine.find((s) => endsAt(spec.dir === 'out' ? s.from : s.to, unit.id, port));
       return [{ unit: unit.id, port, dir: spec.dir, place, stream, numbered: spec.numbered !== undefined }];
     }),

@@ -1,8 +1,7 @@
 import type { Port, StreamId, UnitId } from '../engine/ids';
-import type { KindCatalogue, PortSpec } from '../engine/units/types';
-import { isObject, own } from './json';
-import { kindOf, type Registry } from './registry';
-import type { Json, Sketch, SketchStream, SketchUnit } from './types';
+import type { KindCatalogue } from '../engine/units/types';
+import { isThere, kindOf, type Registry } from './registry';
+import type { Sketch, SketchStream, SketchUnit } from './types';
 
 const FIRST_TAG = 101;
 /** Numbers above this are names by chance (dates, serial numbers) and start no series. */
@@ -58,13 +57,6 @@ export function usedPorts(sketch: Pick<Sketch, 'streams'>, unit: UnitId): readon
   return sketch.streams.flatMap((s) => [s.from, s.to].flatMap((end) => (end?.[0] === unit ? [end[1]] : [])));
 }
 
-/** Whether a port that depends on a setting is there. */
-function isThere(settings: Json, { path, is }: NonNullable<PortSpec['when']>): boolean {
-  let value: Json | undefined = settings;
-  for (const key of path.split('.')) value = isObject(value) ? own(value, key) : undefined;
-  return typeof value === 'string' && is.includes(value);
-}
-
 /** New streams without a target for fixed outlets that have none, so that every result has a place to stand. */
 export function hangingStreams(
   units: readonly SketchUnit[],
@@ -75,7 +67,7 @@ export function hangingStreams(
   const used = new Set(streams.flatMap((s) => (s.from ? [JSON.stringify(s.from)] : [])));
   for (const unit of units) {
     for (const port of kindOf(registry, unit.kind)?.ports ?? []) {
-      const there = port.when ? isThere(unit.settings, port.when) : !port.optional;
+      const there = port.when ? isThere(port, unit.settings) : !port.optional;
       if (port.dir !== 'out' || port.numbered || !there) continue;
       const from: readonly [UnitId, Port] = [unit.id, port.name];
       if (used.has(JSON.stringify(from))) continue;

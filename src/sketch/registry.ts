@@ -1,6 +1,8 @@
 import type { Port } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { KindCatalogue, PortSpec } from '../engine/units/types';
+import { isObject, own } from './json';
+import type { Json } from './types';
 
 /** The kinds of unit that are known, by name. An argument everywhere, so that a kind can be added without touching a file. */
 export type Registry = Readonly<Record<string, KindCatalogue>>;
@@ -34,4 +36,12 @@ export function nextPortName(spec: PortSpec, used: Iterable<Port>): Port {
   let highest = 0;
   for (const port of used) if (isOneOf(spec, port)) highest = Math.max(highest, portNumber(port));
   return `${spec.name}${highest + 1}`;
+}
+
+/** Whether a port that depends on a setting is there; one that depends on none always is. */
+export function isThere({ when }: PortSpec, settings: Json): boolean {
+  if (!when) return true;
+  let value: Json | undefined = settings;
+  for (const key of when.path.split('.')) value = isObject(value) ? own(value, key) : undefined;
+  return typeof value === 'string' && when.is.includes(value);
 }

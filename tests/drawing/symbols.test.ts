@@ -74,6 +74,8 @@ describe.each(Object.values(CATALOGUE).map((kind) => [kind.kind, kind] as const)
             top: at[1] - box.y,
             bottom: box.y + box.h - at[1],
           };
+          // A column's draws leave its shell, beside which the exchangers of its ends stand.
+          if (name === 'column' && port.startsWith('side')) continue;
           expect(Math.min(...Object.values(toEdge))).toBe(toEdge[side]);
         }
       }

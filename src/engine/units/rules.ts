@@ -1,4 +1,5 @@
 import { CHAMBER_RULES } from './chamber/limits';
+import { COLUMN_RULES } from './column/rules';
 import { COMPRESSOR_RULES } from './compressor/limits';
 import { COOLER_RULES } from './cooler/limits';
 import { DRUM_RULES } from './drum/limits';
@@ -25,6 +26,7 @@ export const RULES: readonly Rule[] = [
   ...COOLER_RULES,
   ...UTILITY_RULES,
   ...DRUM_RULES,
+  ...COLUMN_RULES,
   ...CHAMBER_RULES,
   ...PRODUCT_RULES,
   PAIR_NONE,

@@ -2,7 +2,7 @@ import type { Port, StreamId, UnitId } from '../../engine/ids';
 import type { PortSpec } from '../../engine/units/types';
 import { word } from '../findings';
 import { nextStreamId, nextStreamNumber, streamAt, usedPorts } from '../naming';
-import { isOneOf, KNOWN_KINDS, kindOf, nextPortName, portSpec, type Registry } from '../registry';
+import { isOneOf, isThere, KNOWN_KINDS, kindOf, nextPortName, portSpec, type Registry } from '../registry';
 import type { Sketch, SketchStream } from '../types';
 import {
   type Edit,
@@ -122,7 +122,8 @@ function isFixedOutlet(sketch: Sketch, [id, port]: End, registry: Registry): boo
   const unit = unitOf(sketch, id);
   const kind = unit && kindOf(registry, unit.kind);
   const spec = kind && portSpec(kind, port);
-  return spec !== undefined && spec.numbered === undefined && !spec.optional;
+  if (!unit || !spec || spec.numbered) return false;
+  return spec.when ? isThere(spec, unit.settings) : !spec.optional;
 }
 
 /**

@@ -6,6 +6,7 @@ import { isObject, type JsonObject, sameJson } from '../json';
 import { KNOWN_KINDS, kindOf, type Registry } from '../registry';
 import type { Json, Sketch } from '../types';
 import { type Edit, refuse, unitOf, withUnit } from './edited';
+import { withSettings } from './outlets';
 import { pathKeys, pathText, type SettingPath, specsAt, valueAt, withoutValueAt, withValueAt } from './path';
 
 /**
@@ -37,23 +38,33 @@ export function setSetting(
   const settings = withValueAt(unit.settings, keys, value, isList);
   if (settings === undefined || !isObject(settings))
     return refuse('edit/bad-path', word('tag', unit.tag), word('path', pathText(path)));
-  return { ok: true, sketch: withUnit(sketch, id, (u) => ({ ...u, settings })), label };
+  return { ok: true, sketch: withSettings(sketch, unit, settings, registry), label };
 }
 
 /** Takes a setting away; a group without anything left goes too. */
-export function clearSetting(sketch: Sketch, id: UnitId, path: SettingPath): Edit {
+export function clearSetting(
+  sketch: Sketch,
+  id: UnitId,
+  path: SettingPath,
+  registry: Registry = KNOWN_KINDS,
+): Edit {
   const unit = unitOf(sketch, id);
   if (!unit) return refuse('edit/unknown-unit', word('unit', id));
   const settings = withoutValueAt(unit.settings, pathKeys(path));
-  const next = settings === unit.settings ? sketch : withUnit(sketch, id, (u) => ({ ...u, settings }));
+  const next = settings === unit.settings ? sketch : withSettings(sketch, unit, settings, registry);
   return { ok: true, sketch: next, label: `clear ${unit.tag} ${pathText(path)}` };
 }
 
 /** Replaces all settings of a unit, e.g. with pasted ones. */
-export function setSettings(sketch: Sketch, id: UnitId, settings: JsonObject): Edit {
+export function setSettings(
+  sketch: Sketch,
+  id: UnitId,
+  settings: JsonObject,
+  registry: Registry = KNOWN_KINDS,
+): Edit {
   const unit = unitOf(sketch, id);
   if (!unit) return refuse('edit/unknown-unit', word('unit', id));
-  const next = sameJson(unit.settings, settings) ? sketch : withUnit(sketch, id, (u) => ({ ...u, settings }));
+  const next = sameJson(unit.settings, settings) ? sketch : withSettings(sketch, unit, settings, registry);
   return { ok: true, sketch: next, label: `set ${unit.tag}` };
 }
 

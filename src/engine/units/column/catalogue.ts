@@ -49,16 +49,16 @@ export const column: KindCatalogue = {
   ports: [
     { name: 'feed', dir: 'in', numbered: { min: 1, max: 12 } },
     {
-      name: 'vapourDistillate',
-      dir: 'out',
-      optional: true,
-      when: { path: 'top.distillate', is: ['vapour', 'none'] },
-    },
-    {
       name: 'liquidDistillate',
       dir: 'out',
       optional: true,
       when: { path: 'top.distillate', is: ['liquid'] },
+    },
+    {
+      name: 'vapourDistillate',
+      dir: 'out',
+      optional: true,
+      when: { path: 'top.distillate', is: ['vapour', 'none'] },
     },
     { name: 'bottoms', dir: 'out' },
     { name: 'side', dir: 'out', numbered: { min: 0, max: 12 }, optional: true },
@@ -145,6 +145,7 @@ export const column: KindCatalogue = {
     reboiler: { dim: 'number', hidden: true },
   },
   findings: COLUMN_FINDINGS,
+  fresh: { top: { distillate: 'liquid' }, bottom: { reboiler: true } },
 };
 
 const needsStage = (port: string, path: string) =>

@@ -84,7 +84,12 @@ function reason(
 ): Finding[] {
   const { failure, effort } = end;
   const stage = nameOfPlace(call.settings, failure.place);
-  const where: Evidence = { name: 'place', value: 0, dim: 'number', text: String(stage) };
+  const where: Evidence = {
+    name: 'place',
+    value: 0,
+    dim: 'number',
+    text: typeof stage === 'number' ? `stage ${stage}` : stage,
+  };
   const tried: Evidence[] = effort.tried.map((text) => ({ name: 'tried', value: 0, dim: 'number', text }));
   const at = typeof stage === 'number' ? { stage } : {};
   const steps = evidence('iterations', effort.iterations);

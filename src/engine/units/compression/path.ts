@@ -27,7 +27,8 @@ export function followPath(
   let lnP = Math.log(from.P_Pa);
   const slope = (at: number, hAt: number): number => {
     const P = Math.exp(at);
-    return factor * P * (volumeAt(P, hAt) ?? Number.NaN);
+    const v = Number.isFinite(hAt) ? volumeAt(P, hAt) : undefined;
+    return v === undefined ? Number.NaN : factor * P * v;
   };
   for (let k = 0; k < steps; k++) {
     const k1 = slope(lnP, h);

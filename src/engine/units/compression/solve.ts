@@ -117,6 +117,9 @@ function nothing(call: Call<MachineSettings>, inlet: StreamState): Outcome<Answe
   return solved(answerOf({ out }, { power_W: 0, P_Pa, ratio, T_K, suctionVolume_m3_s: 0 }, []));
 }
 
+/** How far a temperature lies above the dew point [K]; what a flash leaves by rounding at the dew point itself is none. */
+const above_K = (T_K: number, dewT_K: number): number => (Math.abs(T_K - dewT_K) < 1e-6 ? 0 : T_K - dewT_K);
+
 /** The dew point of a vapour that enters, at its pressure; undefined for anything else and without one. */
 function dewPoint(
   call: Call<MachineSettings>,
@@ -174,7 +177,7 @@ export function solveMachine(
     ...(ideal_W === undefined ? {} : { isentropicHead_J_kg: ideal_W / mass }),
     ...(polytropic_W === undefined ? {} : { polytropicHead_J_kg: polytropic_W / mass }),
     suctionVolume_m3_s: volumeFlow_m3_s(inlet, call.model),
-    ...(dew === undefined ? {} : { dewMargin_K: inlet.T_K - dew.T_K }),
+    ...(dew === undefined ? {} : { dewMargin_K: above_K(inlet.T_K, dew.T_K) }),
   };
   const flashed = out === inlet ? [] : isentropic ? [isentropic, out] : [out];
   const next: MachineWarm = {

@@ -81,12 +81,9 @@ function flashedPath_W(
   let warm = warmOf(stream);
   const h = followPath(
     (P, h_J_mol) => {
-      const made = streamAt(
-        call,
-        stream.n_mol_s,
-        { P_Pa: P, H_W: h_J_mol * total_mol_s },
-        warmFrom(warm, stream.n_mol_s, stream.T_K),
-      );
+      const at = { P_Pa: P, H_W: h_J_mol * total_mol_s };
+      let made: ReturnType<typeof streamAt> = streamAt(call, stream.n_mol_s, at, warmFrom(warm, stream.n_mol_s, stream.T_K));
+      //X
       if (made.state !== 'solved') return undefined;
       warm = warmOf(made.value);
       return made.value.phases.reduce((v, p) => v + p.fraction * p.v_m3_mol, 0);

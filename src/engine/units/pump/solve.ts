@@ -42,6 +42,10 @@ function bubblePressure(call: Call<PumpSettings>, inlet: StreamState): number | 
   return point.state === 'solved' ? point.value.P_Pa : undefined;
 }
 
+/** How far a pressure lies above the bubble pressure [Pa]; what a flash leaves by rounding at the bubble point itself is none. */
+const above_Pa = (P_Pa: number, bubbleP_Pa: number): number =>
+  Math.abs(P_Pa - bubbleP_Pa) < 1e-9 * P_Pa ? 0 : P_Pa - bubbleP_Pa;
+
 /**
  * The shaft power that a rise of pressure takes; where the pressure falls, what a machine of this efficiency would give.
  * Hydraulic power over efficiency in the first case, times efficiency in the second.
@@ -93,7 +97,7 @@ function solve(call: Call<PumpSettings>): Outcome<Answer<PumpResults>> {
     head_m: (P_Pa - inlet.P_Pa) / weight,
     ...(bubbleP_Pa === undefined
       ? {}
-      : { npshAvailable_m: (inlet.P_Pa - bubbleP_Pa) / weight + (staticHead ?? 0), bubbleP_Pa }),
+      : { npshAvailable_m: above_Pa(inlet.P_Pa, bubbleP_Pa) / weight + (staticHead ?? 0), bubbleP_Pa }),
     volume_m3_s,
     P_Pa,
     T_K: out.T_K,
