@@ -1,4 +1,5 @@
 /** Words for people: names, labels and sentences. Codes and keys come from the engine; nothing here is calculated. */
+export { dutyText, endWords, fixedByText, fixingText, flowText, placeText, stagesText } from './fixedBy';
 export { sayEditRefusal } from './general/edits';
 export { sayFileProblem } from './general/files';
 export { type QuantitySaid, sayQuantityRefusal } from './general/quantity';

@@ -1,7 +1,7 @@
 /** The rooms of src and who may import whom. Change a rule here and in DEVELOPERS.md together. */
 export interface RoomRule {
   /**
-   * Rooms whose code it may load. `catalogue` stands for engine/units/catalogue.ts and rules.ts, `engine-types` for files
+   * Rooms whose code it may load. `catalogue` stands for engine/units/catalogue.ts, rules.ts and each kind's free.ts, `engine-types` for files
    * directly in engine/ and its types.ts files: tables and names that solve nothing, safe for the page; `formulas` for
    * closed formulas of pure chemicals and pairs.
    */
@@ -102,9 +102,14 @@ export const FLOORS = [
 export const isCatalogue = (path: string): boolean =>
   /^src\/engine\/units\/([\w-]+\/)?catalogue\.ts$/.test(path);
 
-/** What is known of the kinds without solving anything: their catalogues, and their limits with thresholds and basis. */
+/**
+ * What is known of the kinds without solving anything: their catalogues, their limits with thresholds and basis, and what a
+ * kind can count and compare of its settings alone.
+ */
 export const isKnownOfKinds = (path: string): boolean =>
-  path === 'src/engine/units/catalogue.ts' || path === 'src/engine/units/rules.ts';
+  path === 'src/engine/units/catalogue.ts' ||
+  path === 'src/engine/units/rules.ts' ||
+  /^src\/engine\/units\/[\w-]+\/free\.ts$/.test(path);
 
 /** Files of the engine that hold types and plain tables of names only. */
 export const isEngineTypes = (path: string): boolean =>

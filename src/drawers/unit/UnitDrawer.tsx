@@ -7,6 +7,7 @@ import { setMaterial, setTag, setUnitName } from '../../store/commands';
 import { useKind } from '../../store/kinds';
 import { useCompiled, useResults, useSketch, useStores, useUnit, useUnitResult } from '../../store/react';
 import { Head } from '../Head';
+import { OWN_PARTS } from '../own';
 import { run } from '../run';
 import { useSay } from '../useSay';
 import { capital, kindWord } from '../words';
@@ -19,7 +20,7 @@ import { FieldFindingList } from './SettingRow';
 import { Settings } from './Settings';
 import { stateSentence } from './stateSentence';
 
-/** One unit: its settings, what it knows, what it makes of them. Made wholly from its kind's catalogue. */
+/** One unit: its settings, what it knows, what it makes of them. Made from its kind's catalogue, save what a kind draws itself. */
 export function UnitDrawer({ id }: { readonly id: UnitId }) {
   const unit = useUnit(id);
   const kind = useKind(unit?.kind ?? '');
@@ -64,12 +65,15 @@ export function UnitDrawer({ id }: { readonly id: UnitId }) {
     { unit, kind, site, disabled: !writable, findings, assumptions, Editor: SettingEditor },
     stores.sketch,
   );
+  const parts = Object.hasOwn(OWN_PARTS, kind.kind) ? OWN_PARTS[kind.kind] : undefined;
+  const SettingsPart = parts?.Settings ?? Settings;
+  const ResultsPart = parts?.Results ?? Results;
   const general = findings.filter((f) => f.at.path === undefined);
   return (
     <FormProvider value={form}>
       {head}
       <div className="drawer-body">
-        <Settings key={unit.id} />
+        <SettingsPart key={unit.id} />
         <Reasons reasons={reasons} />
         {general.length > 0 ? (
           <section className="section">
@@ -80,7 +84,7 @@ export function UnitDrawer({ id }: { readonly id: UnitId }) {
           </section>
         ) : null}
         <Known />
-        <Results />
+        <ResultsPart />
         {kind.tag.drawn ? <Material unit={unit} disabled={!writable} /> : null}
       </div>
     </FormProvider>

@@ -1,0 +1,137 @@
+import type { FixedView } from '../../engine/units/column/free';
+import type { SettingSpec } from '../../engine/units/types';
+import { Segmented } from '../../parts/Segmented';
+import { useStores } from '../../store/react';
+import { endWords } from '../../wording';
+import { Fields } from '../unit/Fields';
+import { useForm } from '../unit/form';
+import { FieldFindings, SettingRow } from '../unit/SettingRow';
+import { WholeField } from '../unit/WholeField';
+import { Efficiency } from './Efficiency';
+import { setDistillate } from './ends';
+import { FixedBy } from './FixedBy';
+import { Feeds, SideDraws } from './Ports';
+import './column.css';
+
+type Fielded = Readonly<Record<string, SettingSpec>>;
+
+const DISTILLATES: Readonly<Record<string, string>> = {
+  liquid: 'liquid',
+  vapour: 'vapour',
+  both: 'both',
+  none: 'no condenser',
+};
+
+/** A column's settings: stages and ends, pressures, what enters and is drawn where, then what fixes it. */
+export function ColumnSettings() {
+  const form = useForm();
+  const { settings } = form.kind;
+  const { stages, subcooling } = settings;
+  const { max } = stages?.is === 'whole' ? stages : {};
+  const ends = endWords(form.unit.settings);
+  const isLiquid = form.value('top.distillate') === 'liquid';
+  return (
+    <>
+      <section className="section column-settings">
+        <div className="section-head">
+          <h3>Settings</h3>
+          <span className="muted">any unit may be typed</span>
+        </div>
+        <SettingRow label="Stages" path="stages">
+          <div className="stages-line">
+            <WholeField path="stages" word="stages" beside={[]} min={1} max={max} needed />
+            <span className="muted">
+              {ends.length > 0 ? ends.map((end) => `+ ${end}`).join(' ') : 'from the top, no ends'}
+            </span>
+          </div>
+        </SettingRow>
+        <Distillate />
+        <Reboiler />
+        {subcooling && (isLiquid || form.value('subcooling') !== undefined) ? (
+          <form.Editor spec={subcooling} path="subcooling" />
+        ) : null}
+        <Pressure />
+        <Feeds />
+        <SideDraws />
+        <Efficiency />
+        <FieldFindings path="" />
+      </section>
+      <FixedBy />
+    </>
+  );
+}
+
+function Distillate() {
+  const form = useForm();
+  const { sketch } = useStores();
+  const spec = fieldOf(form.kind.settings.top, 'distillate');
+  const value = form.value('top.distillate');
+  const values = spec?.is === 'option' ? spec.values : [];
+  return (
+    <SettingRow label="Distillate leaves as" path="top.distillate">
+      <span data-state={value === undefined ? 'needed' : undefined}>
+        <Segmented
+          label="Distillate leaves as"
+          path="top.distillate"
+          value={typeof value === 'string' ? value : undefined}
+          disabled={form.disabled}
+          options={values.map((v) => ({ value: v, text: DISTILLATES[v] ?? v }))}
+          onChange={(next) =>
+            sketch.apply(`set ${form.unit.tag} distillate`, setDistillate(form.unit.id, next))
+          }
+        />
+      </span>
+    </SettingRow>
+  );
+}
+
+function Reboiler() {
+  const form = useForm();
+  const value = form.value('bottom.reboiler');
+  return (
+    <SettingRow label="Bottom" path="bottom.reboiler">
+      <span data-state={value === undefined ? 'needed' : undefined}>
+        <Segmented
+          label="Bottom"
+          path="bottom.reboiler"
+          value={value === true ? 'reboiler' : value === false ? 'none' : undefined}
+          disabled={form.disabled}
+          options={[
+            { value: 'reboiler', text: 'reboiler' },
+            { value: 'none', text: 'none' },
+          ]}
+          onChange={(next) =>
+            form.set([{ path: 'bottom.reboiler', value: next === 'reboiler' }], `set ${form.unit.tag} bottom`)
+          }
+        />
+      </span>
+    </SettingRow>
+  );
+}
+
+/** Pressures of the places that there are; one given for an end that has gone stays in sight. */
+function Pressure() {
+  const form = useForm();
+  const spec = form.kind.settings.pressure;
+  if (spec?.is !== 'record') return null;
+  const view = form.unit.settings as FixedView;
+  const there: Readonly<Record<string, boolean>> = {
+    condenser: view.top?.distillate !== undefined && view.top.distillate !== 'none',
+    reboiler: view.bottom?.reboiler === true,
+  };
+  const fields = Object.fromEntries(
+    Object.entries(spec.fields).filter(
+      ([key]) => (there[key] ?? true) || form.value(`pressure.${key}`) !== undefined,
+    ),
+  );
+  return (
+    <fieldset className="group">
+      <legend>Pressure</legend>
+      <Fields fields={fields} base="pressure" choose={spec.choose} />
+      <FieldFindings path="pressure" />
+    </fieldset>
+  );
+}
+
+const fieldOf = (spec: SettingSpec | undefined, key: string): SettingSpec | undefined =>
+  spec?.is === 'record' ? (spec.fields as Fielded)[key] : undefined;

@@ -1,0 +1,144 @@
+import { useMemo, useState } from 'react';
+import type { Finding } from '../../engine/outcome';
+import { bothDuties, conflictsOf, countMiss, type FixedView } from '../../engine/units/column/free';
+import type { Json } from '../../sketch/types';
+import { FormProvider, useForm } from '../unit/form';
+import { FieldFindingList, FieldFindings } from '../unit/SettingRow';
+import { capital } from '../words';
+import { type Draft, draftForm } from './draft';
+import { FixingRow } from './FixingRow';
+import { fittingOffers, fixedOf, type Offer, offerKey } from './fixings';
+import { useFixingWords } from './words';
+
+/** What fixes the column: one row each, how many of how many, and what contradicts what before anything is solved. */
+export function FixedBy() {
+  const form = useForm();
+  const words = useFixingWords();
+  const view = form.unit.settings as FixedView;
+  const items = useMemo(() => {
+    const list = form.unit.settings.fixedBy;
+    return Array.isArray(list) ? (list as readonly Json[]) : [];
+  }, [form.unit.settings.fixedBy]);
+  const sides = Object.keys(form.unit.settings.sides ?? {}).length;
+  const { fixed, free } = fixedOf(view);
+  const [draft, setDraft] = useState<Draft | null>(null);
+  const isStale = draft !== null && draft.row > items.length;
+  if (isStale) setDraft(null);
+  const conflicts = conflictsOf(view, sides);
+  const miss = countMiss(view);
+
+  const put = (row: number, item: Json, label: string): void => {
+    setDraft(null);
+    const next = row < items.length ? items.map((old, k) => (k === row ? item : old)) : [...items, item];
+    form.set([{ path: 'fixedBy', value: next }], label);
+  };
+  const take = (row: number): void => {
+    setDraft(null);
+    form.set(
+      [{ path: `fixedBy.${row}`, value: undefined }],
+      `take away ${form.unit.tag} ${words.offer(offerKey((items[row] ?? {}) as object))}`,
+    );
+  };
+  const choose = (row: number, offer: Offer): void => {
+    const old = items[row];
+    setDraft(old !== undefined && offerKey(old as object) === offer.key ? null : { row, item: offer.item });
+  };
+  const rowOf = (row: number) => {
+    const pending = draft?.row === row ? draft : null;
+    const here = conflicts.filter(({ at }) => at.path?.split('.')[1] === String(row));
+    const old = items[row];
+    return (
+      <FormProvider
+        key={row}
+        value={
+          pending
+            ? draftForm(
+                form,
+                pending,
+                (item) => setDraft({ row, item }),
+                (item, label) => put(row, item, label),
+              )
+            : form
+        }
+      >
+        <FixingRow
+          row={row}
+          offers={fittingOffers(view, row, sides)}
+          choose={(offer) => choose(row, offer)}
+          take={() => (pending && old === undefined ? setDraft(null) : take(row))}
+          stays={pending && old !== undefined ? words.item(old) : undefined}
+          leave={pending ? () => setDraft(null) : undefined}
+        />
+        {pending ? null : <FieldFindingList findings={withUnit(here, form.unit.id)} />}
+      </FormProvider>
+    );
+  };
+  const rows = Math.max(items.length, draft ? draft.row + 1 : 0);
+  const isOpen = free !== undefined && rows < free;
+  return (
+    <section className="section fixed-by" data-field="fixedBy">
+      <div className="section-head">
+        <h3>Fixed by</h3>
+        <span className="count" role="status">
+          {free === undefined ? 'choose the ends first' : `fixed ${fixed} of ${free}`}
+        </span>
+      </div>
+      {Array.from({ length: rows }, (_, row) => rowOf(row))}
+      {isOpen ? (
+        <BlankRow
+          offers={fittingOffers(view, rows, sides)}
+          choose={(offer) => setDraft({ row: rows, item: offer.item })}
+        />
+      ) : null}
+      {free === 0 && rows === 0 ? (
+        <p className="muted">Without ends nothing is free: feeds, stages and pressures fix this column.</p>
+      ) : null}
+      {miss?.code === 'column/fixed-too-many' ? (
+        <p className="field-note">
+          {free === 0
+            ? 'Without ends nothing is free; take these away.'
+            : `Only ${free} ${free === 1 ? 'is' : 'are'} free with these ends; take one away.`}
+        </p>
+      ) : null}
+      {bothDuties(view) ? (
+        <p className="field-note">
+          With both duties given the balance is said nearly twice: a small change of one moves everything.
+        </p>
+      ) : null}
+      <FieldFindings path="fixedBy" />
+    </section>
+  );
+}
+
+const withUnit = (findings: readonly Finding[], unit: Finding['at']['unit']): readonly Finding[] =>
+  findings.map((finding) => ({ ...finding, at: { ...finding.at, ...(unit ? { unit } : {}) } }));
+
+/** The row that is missing: all that may stand there. */
+function BlankRow({
+  offers,
+  choose,
+}: {
+  readonly offers: readonly Offer[];
+  readonly choose: (offer: Offer) => void;
+}) {
+  const form = useForm();
+  const words = useFixingWords();
+  return (
+    <fieldset className="blank-row">
+      <legend>
+        <span className="blank-mark">needs a value</span> one of these fixes it:
+      </legend>
+      {offers.map((offer) => (
+        <button
+          key={offer.key}
+          type="button"
+          className="link"
+          disabled={form.disabled}
+          onClick={() => choose(offer)}
+        >
+          {capital(words.offer(offer.key))}
+        </button>
+      ))}
+    </fieldset>
+  );
+}
