@@ -21,7 +21,7 @@ export function unitName(
   return [
     unit.tag,
     unit.name,
-    kindWord(unit.kind),
+    kindWord(unit.kind, unit.settings.service),
     stateAndReason(stateWord(state), why),
     worst && `${weightWord(worst.weight)}: ${say(worst)}`,
   ]

@@ -228,6 +228,40 @@ describe('a chamber', () => {
   });
 });
 
+test.each([{ excess: 0.2 }, { stackO2Dry: 0.03 }, { flow: molar(5) }])(
+  'without any fuel a chamber with %j stays solved',
+  (more) => {
+    const batch = fresh(
+      problemOf(basis, [
+        stream('f', 'a', 10, FUEL),
+        unit('d drum in1=a > vapour=v liquid=l', { p: { drop: 0 } }),
+        unit('c chamber fuel1=l > out=b', settings({ air: air(more) })),
+        unit('r reactor in1=l > out=e', {
+          reactions: [
+            {
+              stoichiometry: [
+                { chemical: 0, value: -1 },
+                { chemical: 4, value: -2 },
+                { chemical: 6, value: 1 },
+                { chemical: 7, value: 2 },
+              ],
+              of: 0,
+              conversion: 0.5,
+            },
+          ],
+          p: { drop: 0 },
+        }),
+      ]),
+      basis,
+    );
+    expect(solvedStream(batch, 'l').n_mol_s).toBe(0);
+    expect(unitResult(batch, 'c')).toMatchObject({ state: 'solved', heat_W: 0 });
+    expect(solvedStream(batch, 'b').n_mol_s).toBeCloseTo('flow' in more ? 5 : 0, 12);
+    expect(unitResult(batch, 'r')).toMatchObject({ state: 'solved', heat_W: 0 });
+    expect(batch.findings.map((f) => f.code)).toContain('chamber/nothing-burns');
+  },
+);
+
 describe('a chamber refuses by name', () => {
   const burnOf = async (id: string, change: (b: Basis) => Basis = (b) => b) => {
     const of = change(await basisOf([id, ...IDS]));

@@ -82,8 +82,8 @@ function flashedPath_W(
   const h = followPath(
     (P, h_J_mol) => {
       const at = { P_Pa: P, H_W: h_J_mol * total_mol_s };
-      let made: ReturnType<typeof streamAt> = streamAt(call, stream.n_mol_s, at, warmFrom(warm, stream.n_mol_s, stream.T_K));
-      //X
+      let made = streamAt(call, stream.n_mol_s, at, warmFrom(warm, stream.n_mol_s, stream.T_K));
+      if (made.state !== 'solved') made = streamAt(call, stream.n_mol_s, at);
       if (made.state !== 'solved') return undefined;
       warm = warmOf(made.value);
       return made.value.phases.reduce((v, p) => v + p.fraction * p.v_m3_mol, 0);
