@@ -1,4 +1,5 @@
 import type { ClosureEntry } from '../engine/network/types';
+import type { Finding } from '../engine/outcome';
 import { displayUnit, formatDifference, show } from '../quantity';
 import type { Dimension } from '../quantity/dimension';
 import type { Assumption } from '../sketch/types';
@@ -119,6 +120,10 @@ export function closureTable(input: ReportInput): Table {
   };
 }
 
+const RANK = ['beyond-limit', 'caution', 'note'] as const;
+const worstFirst = (findings: readonly Finding[]): Finding[] =>
+  RANK.flatMap((weight) => findings.filter((finding) => finding.weight === weight));
+
 export function limitsTable(input: ReportInput): Table {
   return {
     key: 'limits',
@@ -129,11 +134,12 @@ export function limitsTable(input: ReportInput): Table {
       left('basis', 'Basis'),
       left('next', 'Next step'),
     ],
-    rows: input.findings.map((finding, k): Row => {
+    rows: worstFirst(input.findings).map((finding, k): Row => {
       const words = findingWords(finding, input);
       return {
         key: String(k),
         label: words.where || 'sketch',
+        title: `${words.title}, ${weightWord(finding.weight)}`,
         cells: [
           text(weightWord(finding.weight)),
           text(words.sentence),

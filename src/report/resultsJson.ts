@@ -157,7 +157,14 @@ function unitRecord(
   const common = { kind: unit.kind, state: result?.state ?? 'waiting', in: at('to'), out: at('from') };
   if (result?.state !== 'solved')
     return { ...common, reasons: (result?.reasons ?? []).map((reason) => reason.code) };
-  const own = plain(result.results ?? {}) as { readonly [key: string]: Plain };
+  const ports = new Map(
+    sketch.streams.flatMap((s) =>
+      [s.from, s.to].flatMap((joint): [string, string][] =>
+        joint?.[0] === unit.id ? [[joint[1], numbers.get(s.id) ?? s.number]] : [],
+      ),
+    ),
+  );
+  const own = withStreams(plain(result.results ?? {}), ports) as { readonly [key: string]: Plain };
   return {
     ...common,
     heat_W: result.heat_W,
@@ -175,6 +182,21 @@ function unitRecord(
     ...own,
   };
 }
+
+/** Entries of lists that name a port get the number of the stream there besides. */
+function withStreams(value: Plain, ports: ReadonlyMap<string, string>): Plain {
+  if (value === null || typeof value !== 'object') return value;
+  if (Array.isArray(value))
+    return (value as readonly Plain[]).map((item) => {
+      const port = isEntry(item) ? item.port : undefined;
+      const stream = typeof port === 'string' ? ports.get(port) : undefined;
+      return stream === undefined ? item : { ...(item as { readonly [key: string]: Plain }), stream };
+    });
+  return Object.fromEntries(Object.entries(value).map(([k, v]) => [k, withStreams(v, ports)]));
+}
+
+const isEntry = (item: Plain): item is { readonly [key: string]: Plain } =>
+  item !== null && typeof item === 'object' && !Array.isArray(item);
 
 function closureRecord(closure: Closure, basis: Basis, tags: ReadonlyMap<string, string>): Plain {
   const one = (c: UnitClosure): { readonly [key: string]: Plain } => ({

@@ -12,6 +12,8 @@ export interface Row {
   readonly label: string;
   readonly unit?: string;
   readonly cells: readonly Cell[];
+  /** The row in a few words, where a page has room for no more. */
+  readonly title?: string;
   readonly style?: 'head' | 'group' | 'total';
 }
 

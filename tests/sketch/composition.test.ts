@@ -106,7 +106,7 @@ describe('ready-made air', () => {
     expect(neededChemicals(sketch)).toEqual(['methane', 'carbon-dioxide', 'oxygen', 'nitrogen', 'argon']);
     const c = await compiled(sketch);
     expect(gapsOf(c)).toEqual([]);
-    expect(placed(c)).toEqual({ N2: 3, O2: 2, Ar: 4, CO2: 1, H2O: -1 });
+    expect(placed(c)).toMatchObject({ N2: 3, O2: 2, Ar: 4, CO2: 1, H2O: -1 });
     expect(c.basis?.chemicals.map((x) => x.assumed ?? false)).toEqual([false, false, false, true, true]);
     expect(c.assumptions.map((a) => [a.path, a.value])).toEqual([
       ['chemicals.3', 'nitrogen'],
@@ -118,7 +118,7 @@ describe('ready-made air', () => {
     expect(neededChemicals(air({ preset: '79/21' }, []))).toEqual(['nitrogen', 'oxygen']);
     const humid = { preset: 'humid air', relativeHumidity: '55 %' };
     const c = await compiled(air(humid, ['water']));
-    expect(placed(c)).toEqual({ N2: 1, O2: 2, Ar: 3, CO2: 4, H2O: 0 });
+    expect(placed(c)).toMatchObject({ N2: 1, O2: 2, Ar: 3, CO2: 4, H2O: 0 });
     expect(settingsOf(c)).toMatchObject({ composition: { relativeHumidity: 0.55 } });
     expect(gapsOf(await compiled(air({ preset: 'humid air' }, [])))).toEqual([
       'sketch/needs-value at composition.relativeHumidity',
@@ -142,7 +142,7 @@ describe('ready-made air', () => {
         'argon',
       ]),
     );
-    expect(placed(c)).toEqual({ N2: 0, O2: 3, Ar: 4, CO2: 1, H2O: -1 });
+    expect(placed(c)).toMatchObject({ N2: 0, O2: 3, Ar: 4, CO2: 1, H2O: -1 });
     expect(gapsOf(c)).toEqual([]);
   });
   test('an own chemical that took the name of an air gas and is something else is told', async () => {

@@ -13,6 +13,8 @@ const PAGE = { width: 1190.55, height: 841.89 } as const;
 const MARGIN = { left: 28, top: 26, right: 28, bottom: 50 } as const;
 const INNER = PAGE.width - MARGIN.left - MARGIN.right;
 const SHEET_HEIGHT = 616;
+/** Limits named under the drawing, worst first; all of them stand in their own table. */
+const LIMITS_SHOWN = 6;
 const LABEL_WIDTH = 128;
 const UNIT_WIDTH = 54;
 
@@ -151,12 +153,8 @@ function firstPageFoot(report: ReportModel, input: ReportInput): Content {
   const small = (text: string): Content => ({ text, fontSize: 8.5, margin: [0, 1.5, 0, 0] });
   const key = `<svg xmlns="http://www.w3.org/2000/svg" width="250" height="78" viewBox="0 0 250 78"><path d="M2 9H40" fill="none" stroke="${PRINT.ink}" stroke-width="1.9"/><path d="M40 5.5L48 9L40 12.5Z" fill="${PRINT.ink}"/><path d="M2 33H40" fill="none" stroke="${PRINT.ink}" stroke-width="1.2" stroke-dasharray="5 2.5"/><circle cx="44" cy="33" r="2.6" fill="#FFFFFF" stroke="${PRINT.ink}" stroke-width="1.2"/><path d="M25 46L36 57L25 68L14 57Z" fill="#FFFFFF" stroke="${PRINT.ink}" stroke-width="1.1"/><text x="25" y="60.5" font-family="${FONT}" font-weight="600" font-size="9" text-anchor="middle" fill="${PRINT.ink}">8</text><text x="60" y="12.5" font-family="${FONT}" font-size="9.5" fill="${PRINT.ink}">material stream; a dot joins or divides</text><text x="60" y="36.5" font-family="${FONT}" font-size="9.5" fill="${PRINT.ink}">heat link; double rule under a tag: solved</text><text x="60" y="60.5" font-family="${FONT}" font-size="9.5" fill="${PRINT.ink}">stream number; labels as on the sheet</text></svg>`;
   const limits = report.limits.rows
-    .slice(0, 5)
-    .map((row) =>
-      small(
-        `${row.label}: ${printed(row.cells[0] ?? { is: 'absent' })}. ${printed(row.cells[1] ?? { is: 'absent' })}`,
-      ),
-    );
+    .slice(0, LIMITS_SHOWN)
+    .map((row) => small(`${row.label}: ${row.title ?? ''}`));
   const closure = report.closure.rows
     .slice(0, 2)
     .map((row) =>
@@ -189,8 +187,8 @@ function firstPageFoot(report: ReportModel, input: ReportInput): Content {
           ...(limits.length > 0
             ? limits
             : [small('None of the built-in checks fired. That is no proof of safety.')]),
-          ...(report.limits.rows.length > 5
-            ? [small(`and ${report.limits.rows.length - 5} more: see the list of limits`)]
+          ...(report.limits.rows.length > LIMITS_SHOWN
+            ? [small(`and ${report.limits.rows.length - LIMITS_SHOWN} more: see the list of limits`)]
             : []),
         ],
         margin: [0, 0, 14, 0],
