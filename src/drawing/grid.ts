@@ -42,15 +42,26 @@ function span(values: Float64Array, a: number, b: number): [number, number] {
   return [lo, hi];
 }
 
+/** Grown as needed and kept. */
+let sorting = new Float64Array(256);
+
+/** The sorted different values of `own`, and of `edges` as far as they lie between the two. */
 function coordinates(
   own: readonly number[],
   from: number,
   to: number,
   edges: readonly number[],
 ): Float64Array {
-  const all = new Set(own);
-  for (const e of edges) if (e >= from && e <= to) all.add(e);
-  return Float64Array.from(all).sort();
+  if (sorting.length < own.length + edges.length) sorting = new Float64Array(2 * (own.length + edges.length));
+  let n = 0;
+  for (const e of own) sorting[n++] = e;
+  for (const e of edges) if (e >= from && e <= to) sorting[n++] = e;
+  sorting.subarray(0, n).sort();
+  let different = 0;
+  for (let k = 0; k < n; k++) {
+    if (different === 0 || sorting[k] !== sorting[different - 1]) sorting[different++] = sorting[k]!;
+  }
+  return sorting.slice(0, different);
 }
 
 /**

@@ -133,6 +133,32 @@ export interface LabelWish {
   readonly freeEnd?: 'first' | 'last';
 }
 
+/** A label's candidates that clear what is taken, looked for only as far as somebody asks. */
+class FreePlaces {
+  private readonly boxes: Box[] = [];
+  private readonly rest: Generator<Box>;
+  private readonly taken: BoxIndex;
+
+  constructor(wish: LabelWish, taken: BoxIndex) {
+    this.rest = candidates(wish);
+    this.taken = taken;
+  }
+
+  /** How many were found so far. */
+  get found(): number {
+    return this.boxes.length;
+  }
+
+  at(k: number): Box | undefined {
+    while (this.boxes.length <= k) {
+      const next = this.rest.next();
+      if (next.done) return undefined;
+      if (!this.taken.hits(next.value, CLEAR)) this.boxes.push(next.value);
+    }
+    return this.boxes[k];
+  }
+}
+
 /** How many free places are counted before a label counts as easy to place. */
 const EASY = 6;
 
@@ -144,38 +170,41 @@ const EASY = 6;
  * @returns a box each, undefined where no place is free
  */
 export function placeLabels(wishes: readonly LabelWish[], taken: BoxIndex): readonly (Box | undefined)[] {
-  const free = wishes.map((wish) => {
-    const boxes: Box[] = [];
-    for (const box of candidates(wish)) if (!taken.hits(box, CLEAR)) boxes.push(box);
-    return boxes;
-  });
+  const free = wishes.map((wish) => new FreePlaces(wish, taken));
   const order = wishes.map((_, k) => k);
-  const ease = (k: number): number => Math.min(free[k]!.length, EASY);
-  order.sort((a, b) => ease(a) - ease(b) || a - b);
+  const ease = free.map((places) => (places.at(EASY - 1) ? EASY : places.found));
+  order.sort((a, b) => ease[a]! - ease[b]! || a - b);
   const placed: (Box | undefined)[] = wishes.map(() => undefined);
   const inTheWay = (box: Box, except: number): readonly number[] => {
     const room = grown(box, CLEAR);
     return order.filter((j) => j !== except && placed[j] !== undefined && overlaps(room, placed[j]));
   };
   const fits = (box: Box, except: number): boolean => inTheWay(box, except).length === 0;
+  const firstFit = (k: number): Box | undefined => {
+    for (let n = 0; ; n++) {
+      const box = free[k]!.at(n);
+      if (!box || fits(box, k)) return box;
+    }
+  };
 
   /** Takes a place that one other label can leave for another one. */
   const swap = (k: number): boolean => {
-    for (const box of free[k]!) {
+    for (let n = 0; ; n++) {
+      const box = free[k]!.at(n);
+      if (!box) return false;
       const [j, ...more] = inTheWay(box, k);
       if (j === undefined || more.length > 0) continue;
       placed[k] = box;
-      const next = free[j]!.find((b) => fits(b, j));
+      const next = firstFit(j);
       if (next) {
         placed[j] = next;
         return true;
       }
       placed[k] = undefined;
     }
-    return false;
   };
   for (const k of order) {
-    placed[k] = free[k]!.find((box) => fits(box, k));
+    placed[k] = firstFit(k);
     if (placed[k] || swap(k)) continue;
     for (const [box, strip] of furtherOut(wishes[k]!)) {
       if (taken.hits(box, CLEAR) || taken.hits(strip) || !fits(box, k) || !fits(strip, k)) continue;

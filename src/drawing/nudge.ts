@@ -9,7 +9,7 @@ const CLEAR = 6;
 /** What is left of the straight piece at a port [px]. */
 const SHORTEST_STUB = 8;
 
-interface Piece extends Lane {
+export interface Piece extends Lane {
   readonly line: number;
   /** Index of its first point. */
   readonly k: number;
@@ -23,7 +23,7 @@ export function piecesOf(lines: readonly (readonly Point[])[]): Piece[] {
   return pieces;
 }
 
-function pieceAt(points: readonly Point[], line: number, k: number): Piece {
+export function pieceAt(points: readonly Point[], line: number, k: number): Piece {
   const [x1, y1] = points[k]!;
   const [x2, y2] = points[k + 1]!;
   const across = y1 === y2;

@@ -107,6 +107,16 @@ export function routeLine(
   return ledOnce(from, to, via, obstacles) ?? lastResort(from, to);
 }
 
+/** All that has a say in how an end lies, as one text. */
+export const keyOfEnd = (e: RouteEnd | undefined): string =>
+  e ? `${e.port.at} ${e.port.side} ${e.own ? `${e.own.x} ${e.own.y} ${e.own.w} ${e.own.h}` : ''}` : '-';
+
+/** The part of the sheet that a detour between two ends cannot leave. */
+export function detourReach(from: RouteEnd, to: RouteEnd): Box {
+  const farthest = REGION + STUBS[0] + Math.max(depthOf(from), depthOf(to));
+  return grown(boxOfPiece(from.port.at, to.port.at, 0), farthest);
+}
+
 /** The line once more, heeding others; undefined when there is no way. */
 export const detourLine = (
   from: RouteEnd,

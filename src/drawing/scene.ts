@@ -3,7 +3,7 @@ import type { Sketch } from '../sketch/types';
 import { sameBox } from './boxes';
 import { groundOf, type Made, sameGround } from './ground';
 import { type Layout, layOut } from './layout';
-import { keepSame } from './same';
+import { keepSame, sameValue } from './same';
 import type { LabelRow, LabelShape, Scene, SceneInput, UnitShape } from './types';
 import { shapeOf } from './units';
 
@@ -28,8 +28,9 @@ export function buildScene(sketch: Sketch, input: SceneInput, before?: Scene): S
   const old = stands ? before : undefined;
   const now: Made = { sketch, input, ground };
   const units = ground.standing.map((u, k) => {
-    const was = old?.units[k];
-    return was && drawnAlike(u.unit.id, k, now, made!) ? was : shapeOf(u, input, layout.texts[k]!);
+    const was = before?.units[k];
+    const placed = stands || (made && sameValue(layout.texts[k], made.layout.texts[k]));
+    return was && placed && drawnAlike(u.unit.id, k, now, made!) ? was : shapeOf(u, input, layout.texts[k]!);
   });
   const sources = new Map(sketch.streams.map((stream) => [stream.id, stream.from?.[0]]));
   const labels = layout.labels.map((place, k): LabelShape => {
@@ -48,8 +49,8 @@ export function buildScene(sketch: Sketch, input: SceneInput, before?: Scene): S
 
 /** Whether the input says the same of a unit that stands where it stood, drawn from the same record. */
 function drawnAlike(id: UnitId, k: number, { input, ground }: Made, before: Made): boolean {
-  const [u, v] = [ground.standing[k]!, before.ground.standing[k]!];
-  if (u !== v && (u.unit !== v.unit || u.symbol !== v.symbol)) return false;
+  const [u, v] = [ground.standing[k]!, before.ground.standing[k]];
+  if (u !== v && !(u.unit === v?.unit && u.symbol === v.symbol && sameValue(u.pose, v.pose))) return false;
   return (
     input.states.get(id) === before.input.states.get(id) &&
     input.limits.get(id) === before.input.limits.get(id) &&

@@ -35,6 +35,12 @@ function usedPorts(sketch: Sketch): ReadonlyMap<UnitId, readonly PortSpec[]> {
   return used;
 }
 
+/** A unit as it stood last: it stands so still while record, symbol and place are the same. */
+const stood = new WeakMap<SketchUnit, StandingUnit>();
+
+const samePlace = (a: Pose, b: Pose): boolean =>
+  a.at[0] === b.at[0] && a.at[1] === b.at[1] && a.turn === b.turn && a.mirror === b.mirror;
+
 export function standingUnits(
   sketch: Sketch,
   moved: ReadonlyMap<UnitId, Point> | undefined,
@@ -44,10 +50,13 @@ export function standingUnits(
   const units = sketch.units.map((unit): StandingUnit => {
     const symbol = symbolOf(unit, kinds, used.get(unit.id));
     const pose = poseOf(unit, moved?.get(unit.id));
+    const known = stood.get(unit);
+    if (known?.symbol === symbol && samePlace(known.pose, pose)) return known;
     const plain = { unit, symbol, pose, box: boxOnSheet(pose, symbol.box) };
-    if (!symbol.link) return plain;
-    const link = [toSheet(pose, symbol.link.from), toSheet(pose, symbol.link.to)] as const;
-    return { ...plain, link, linkBox: boxOfPiece(...link, 4) };
+    const link = symbol.link && ([toSheet(pose, symbol.link.from), toSheet(pose, symbol.link.to)] as const);
+    const now = link ? { ...plain, link, linkBox: boxOfPiece(...link, 4) } : plain;
+    stood.set(unit, now);
+    return now;
   });
   return withSides(units, sketch);
 }

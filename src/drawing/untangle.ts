@@ -1,7 +1,7 @@
 import { boxOfPiece, grown, hull, overlaps, pieceBoxes } from './boxes';
-import type { Lane } from './grid';
-import { piecesOf, TANGLE, tangles, trouble } from './nudge';
-import { detourLine, type RouteEnd } from './route';
+import { APART, type Lane } from './grid';
+import { type Piece, pieceAt, TANGLE, tangles, trouble } from './nudge';
+import { detourLine, detourReach, keyOfEnd, type RouteEnd } from './route';
 import { BEND } from './search';
 import type { Box, Point } from './types';
 
@@ -16,16 +16,23 @@ const DETOUR_STUBS: readonly (readonly [number, number])[] = [
 /** How much longer than the line that runs along another one a detour may be, bends counted [px]. */
 const LONGER = 480;
 
+/** Answers to a line led once more, by all that has a say in them; `false`: nothing better. */
+export type Detours = ReadonlyMap<string, readonly Point[] | false>;
+
 /**
  * Leads lines that still run along another one once more, this time keeping off the pieces of all others.
  * A line that finds nothing better stays; it is tried again only when a line it runs along has changed.
+ *
+ * @param known answers of an earlier scene
  */
 export function untangled(
   lines: readonly (readonly Point[])[],
   ends: readonly (readonly [RouteEnd | undefined, RouteEnd | undefined])[],
   obstacles: readonly Box[],
   fixed: readonly boolean[],
-): readonly (readonly Point[])[] {
+  known: Detours = new Map(),
+): { readonly lines: readonly (readonly Point[])[]; readonly detours: Detours } {
+  const detours = new Map<string, readonly Point[] | false>();
   const out = [...lines];
   let changed = new Set(out.keys());
   for (let round = 0; round < 3; round++) {
@@ -35,7 +42,10 @@ export function untangled(
       const [from, to] = ends[line]!;
       if (fixed[line] || !from || !to) continue;
       if (![...near].some((other) => changed.has(other) || now.has(other))) continue;
-      const better = ledOff(out, line, near, [from, to], obstacles);
+      const task = taskOf(out, line, near, [from, to], obstacles);
+      if (!task) continue;
+      const better = detours.get(task.key) ?? known.get(task.key) ?? (ledOff(task) || false);
+      detours.set(task.key, better);
       if (!better) continue;
       out[line] = better;
       now.add(line);
@@ -43,7 +53,7 @@ export function untangled(
     if (now.size === 0) break;
     changed = now;
   }
-  return out;
+  return { lines: out, detours };
 }
 
 const costOf = (points: readonly Point[]): number =>
@@ -51,26 +61,75 @@ const costOf = (points: readonly Point[]): number =>
     .slice(1)
     .reduce((sum, [x, y], k) => sum + Math.abs(x - points[k]![0]) + Math.abs(y - points[k]![1]) + BEND, 0);
 
-/** A way for one line with less trouble than it has; undefined when none is found. */
-function ledOff(
+/** A line that is to be led once more, and all that has a say in where it then goes. */
+interface Task {
+  readonly key: string;
+  readonly points: readonly Point[];
+  readonly line: number;
+  readonly ends: readonly [RouteEnd, RouteEnd];
+  readonly obstacles: readonly Box[];
+  /** Pieces of other lines that a way in reach could meet. */
+  readonly others: readonly Piece[];
+  /** Those it is to keep off. */
+  readonly lanes: readonly Lane[];
+  readonly least: number;
+}
+
+const rooms = new WeakMap<readonly Point[], Box>();
+
+/** The box around all pieces of a line. */
+function roomOf(points: readonly Point[]): Box {
+  let room = rooms.get(points);
+  if (!room) {
+    room = hull(pieceBoxes(points, 1))!;
+    rooms.set(points, room);
+  }
+  return room;
+}
+
+/** Undefined when the line is in no trouble that another way could end. */
+function taskOf(
   lines: readonly (readonly Point[])[],
   line: number,
   near: ReadonlySet<number>,
-  [from, to]: readonly [RouteEnd, RouteEnd],
+  ends: readonly [RouteEnd, RouteEnd],
   obstacles: readonly Box[],
-): readonly Point[] | undefined {
+): Task | undefined {
   const points = lines[line]!;
-  const others = piecesOf(lines).filter((p) => p.line !== line);
-  let least = trouble(points, line, others);
-  if (least < TANGLE) return undefined;
   const around = grown(hull(pieceBoxes(points, 60))!, 60);
-  const lanes = others
-    .filter((p) => overlaps(around, laneBox(p)))
-    .map((p) => ({ ...p, channel: near.has(p.line) }));
+  const reach = hull([around, grown(detourReach(...ends), 2 * APART)])!;
+  const others: Piece[] = [];
+  const lanes: Lane[] = [];
+  let key = `${points.join(' ')}|${keyOfEnd(ends[0])}|${keyOfEnd(ends[1])}`;
+  for (const [other, ofOther] of lines.entries()) {
+    if (other === line || !overlaps(reach, roomOf(ofOther))) continue;
+    for (let k = 0; k + 1 < ofOther.length; k++) {
+      const piece = pieceAt(ofOther, other, k);
+      const box = laneBox(piece);
+      if (!overlaps(reach, box)) continue;
+      others.push(piece);
+      const { across, at, lo, hi } = piece;
+      key += `|${across ? 'a' : 'd'}${at} ${lo} ${hi}`;
+      if (!overlaps(around, box)) continue;
+      const channel = near.has(other);
+      lanes.push({ ...piece, channel });
+      key += channel ? 'c' : 'l';
+    }
+  }
+  const least = trouble(points, line, others);
+  if (least < TANGLE) return undefined;
+  const close = obstacles.filter((o) => overlaps(reach, o));
+  for (const o of close) key += `|${o.x} ${o.y} ${o.w} ${o.h}`;
+  return { key, points, line, ends, obstacles: close, others, lanes, least };
+}
+
+/** A way with less trouble than the line has; undefined when none is found. */
+function ledOff({ points, line, ends, obstacles, others, lanes, least: has }: Task) {
   const most = costOf(points) + LONGER;
+  let least = has;
   let best: readonly Point[] | undefined;
   for (const stubs of DETOUR_STUBS) {
-    const way = detourLine(from, to, obstacles, { lanes, stubs, most })?.points;
+    const way = detourLine(...ends, obstacles, { lanes, stubs, most })?.points;
     if (!way) continue;
     const left = trouble(way, line, others);
     if (left < least) {

@@ -2,10 +2,10 @@ import type { StreamId, UnitId } from '../engine/ids';
 import type { SketchStream } from '../sketch/types';
 import { grown, overlaps } from './boxes';
 import { drawApart, piecesOf } from './nudge';
-import { hangingLine, type Route, type RouteEnd, routeLine } from './route';
+import { hangingLine, keyOfEnd, type Route, type RouteEnd, routeLine } from './route';
 import { portOf, type StandingUnit } from './standing';
 import type { Box, Point } from './types';
-import { untangled } from './untangle';
+import { type Detours, untangled } from './untangle';
 
 /** A stream's line before it is drawn. */
 export interface Wire {
@@ -29,11 +29,10 @@ export interface RouteCache {
   readonly routes: ReadonlyMap<StreamId, Kept>;
   /** Lines as they were drawn apart; they stand while all ways and symbols do. */
   readonly apart: readonly (readonly Point[])[];
+  readonly detours: Detours;
 }
 
 const keyOfBox = (b: Box): string => `${b.x} ${b.y} ${b.w} ${b.h}`;
-const keyOfEnd = (e: RouteEnd | undefined): string =>
-  e ? `${e.port.at} ${e.port.side} ${e.own ? keyOfBox(e.own) : ''}` : '-';
 
 /** Boxes that are in one of the two only. */
 function changedBoxes(a: ReadonlyMap<string, Box>, b: ReadonlyMap<string, Box>): readonly Box[] {
@@ -85,23 +84,22 @@ export function wireSheet(
     wires.push({ stream, points: route.points, hanging: !to, ...freeEnd, reach });
   }
   const fixed = wires.map((wire) => (wire.stream.via?.length ?? 0) > 0);
-  const drawApartAnew = (): readonly (readonly Point[])[] => {
+  const drawApartAnew = (): Pick<RouteCache, 'apart' | 'detours'> => {
     const shifted = drawApart(
       wires.map((wire) => wire.points),
       obstacles,
       fixed,
     );
     const ends = wires.map(({ stream }) => [endOf(stream.from), endOf(stream.to)] as const);
-    return untangled(shifted, ends, obstacles, fixed);
+    const { lines, detours } = untangled(shifted, ends, obstacles, fixed, before?.detours);
+    return { apart: lines, detours };
   };
   const unmoved =
-    before !== undefined && changed.length === 0 && sameOrder(before.routes, routes)
-      ? before.apart
-      : undefined;
-  const apart = unmoved ?? drawApartAnew();
+    before !== undefined && changed.length === 0 && sameOrder(before.routes, routes) ? before : undefined;
+  const { apart, detours } = unmoved ?? drawApartAnew();
   return {
     wires: wires.map((wire, k) => (apart[k] === wire.points ? wire : { ...wire, points: apart[k]! })),
-    cache: { obstacles: obstacleMap, routes, apart },
+    cache: { obstacles: obstacleMap, routes, apart, detours },
   };
 }
 
