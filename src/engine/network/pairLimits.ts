@@ -1,3 +1,4 @@
+import type { ChemicalData } from '../chemicals/types';
 import type { StreamState } from '../equilibrium/types';
 import type { StreamId } from '../ids';
 import type { Finding } from '../outcome';
@@ -8,6 +9,40 @@ import { finding, named, type Overrides, saw, thresholdOf } from '../units/limit
 /** Dissolved gases and water tell on phase equilibrium at a tenth of the share. */
 const isTelling = (family: string | undefined): boolean => family === 'inorganic-gas' || family === 'water';
 const TELLING = 0.1;
+
+interface Present {
+  readonly chemical: ChemicalData;
+  /** Mole fraction [-]. */
+  readonly share: number;
+}
+
+/** Two chemicals that count in one stream; `first` is the one that is closer to what it has to reach. */
+interface Met {
+  readonly first: Present;
+  readonly second: Present;
+  /** What `first` had to reach [-], and how many times over it does. */
+  readonly least: number;
+  readonly times: number;
+}
+
+/** Both reach `least`, or a gas or water a tenth of it beside any that reaches `least`; undefined where they do not. */
+function meeting(one: Present, two: Present, least: number): Met | undefined {
+  const needs = (tells: Present): number => (isTelling(tells.chemical.family) ? least * TELLING : least);
+  const ways = [
+    { first: one, second: two, least: needs(one), other: least },
+    { first: two, second: one, least: needs(two), other: least },
+  ].filter((way) => way.first.share >= way.least && way.second.share >= way.other);
+  let best: Met | undefined;
+  for (const { first, second, least: need, other } of ways) {
+    const [near, far] = [first.share / need, second.share / other];
+    const met =
+      near <= far
+        ? { first, second, least: need, times: near }
+        : { first: second, second: first, least: other, times: far };
+    if (met.times > (best?.times ?? 0)) best = met;
+  }
+  return best;
+}
 
 /**
  * Pairs of the cubic equation that nothing is known of, each once, at the stream where they matter most; and how many of the
@@ -34,17 +69,22 @@ export function pairLimits(
     }
     const [a, b] = [model.chemicals[i]!, model.chemicals[j]!];
     const least = thresholdOf(PAIR_NONE, overrides);
-    const need_i = isTelling(a.family) ? least * TELLING : least;
-    const need_j = isTelling(b.family) ? least * TELLING : least;
-    let worst: { id: StreamId; least: number } | undefined;
+    let worst: (Met & { readonly id: StreamId }) | undefined;
     for (const { id, z } of shares) {
-      if (z[i]! < need_i || z[j]! < need_j) continue;
-      const both = Math.min(z[i]!, z[j]!);
-      if (both > (worst?.least ?? 0)) worst = { id, least: both };
+      const met = meeting({ chemical: a, share: z[i]! }, { chemical: b, share: z[j]! }, least);
+      if (met && met.times > (worst?.times ?? 0)) worst = { ...met, id };
     }
     if (!worst) continue;
-    const seen = [named('first', a.id), named('second', b.id), saw('fraction', worst.least, 'fraction')];
-    found.push(finding(PAIR_NONE, { stream: worst.id }, seen, overrides));
+    const seen = [
+      named('first', worst.first.chemical.id),
+      named('second', worst.second.chemical.id),
+      saw('fraction', worst.first.share, 'fraction'),
+      saw('other', worst.second.share, 'fraction'),
+    ];
+    // The limit told is the one that the share told has passed.
+    found.push(
+      finding(PAIR_NONE, { stream: worst.id }, seen, { ...overrides, [PAIR_NONE.code]: worst.least }),
+    );
   }
   if (predicted > 0) found.push(finding(PAIR_PREDICTED, {}, [saw('count', predicted, 'number')], overrides));
   return found;

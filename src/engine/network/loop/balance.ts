@@ -119,7 +119,7 @@ export const isStale = (balance: UnitClosure, back: Torn): boolean =>
 function noWayOut(
   chemicals: readonly number[],
   { run, members }: Loop,
-  going: Going,
+  states: ReadonlyMap<StreamId, StreamState>,
   balance: UnitClosure,
   back: Torn,
 ): Finding {
@@ -127,7 +127,7 @@ function noWayOut(
   const inside = members.flatMap(({ unit }) => Object.values(unit.out).filter((s) => taken.has(s)));
   let [richest, most] = [inside[0], -1];
   for (const stream of inside) {
-    const n = going.states.get(stream)?.n_mol_s ?? new Float64Array(0);
+    const n = states.get(stream)?.n_mol_s ?? new Float64Array(0);
     const total = totalOf(n);
     const share = total > 0 ? chemicals.reduce((sum, i) => sum + n[i]! / total, 0) : 0;
     if (share > most) [richest, most] = [stream, share];
@@ -158,15 +158,19 @@ function noWayOut(
   };
 }
 
-/** The end of an attempt in which chemicals gather, if some do. */
+/**
+ * The end of an attempt in which chemicals gather, if some do.
+ *
+ * @param states  of streams, in which is looked where a purge would take most
+ */
 export function gathering(
   loop: Loop,
-  going: Going,
+  states: ReadonlyMap<StreamId, StreamState>,
   balance: UnitClosure,
   back: Torn,
   times: number,
 ): Ending | undefined {
   const stuck = gathered(balance, back, times);
   if (stuck.length === 0) return undefined;
-  return { is: 'no-solution', findings: [noWayOut(stuck, loop, going, balance, back)] };
+  return { is: 'no-solution', findings: [noWayOut(stuck, loop, states, balance, back)] };
 }

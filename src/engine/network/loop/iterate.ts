@@ -1,4 +1,5 @@
-import type { UnitId } from '../../ids';
+import type { StreamState } from '../../equilibrium/types';
+import type { StreamId, UnitId } from '../../ids';
 import { type Anderson, makeAnderson } from '../../numerics/anderson';
 import { worstOf } from '../closure';
 import { CLOSES } from '../solveUnit';
@@ -11,15 +12,18 @@ import { unsettled } from './reasons';
 import type { Ending, Going, Loop, Torn } from './types';
 import { layoutOf, pack, unpack } from './vector';
 
-export const DEPTH = 5;
+/** Differences the acceleration holds: for one tear, and for each further one. */
+const DEPTH = 5;
+const FURTHER = 3;
+const DEEPEST = 12;
 /** Plain passes before the first accelerated one. */
-const DIRECT = 3;
+const DIRECT = 2;
 /** Passes in which a unit may have no answer yet, because not everything flows that will. */
 const LENIENT = 6;
 /** Times in a row a point without an answer is approached again from half as far. */
 const RETREATS = 6;
 /** A residual so many times the least one so far is none to go on from. */
-const WORSE = 10;
+const WORSE = 30;
 /** Solved: change of the tear, and closure of the loop and of the units at its tears [-]. */
 const SETTLED = 1e-9;
 const CLOSED = 2e-10;
@@ -55,12 +59,14 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
   const envelope = envelopeOf(loop);
   const scratch = new Float64Array(layout.length);
   const going: Going = { said: new Map(), states: new Map(), warm: new Map(start.warm) };
-  const anderson = start.slopes ?? makeAnderson(layout.length, DEPTH);
+  const anderson = start.slopes ?? makeAnderson(layout.length, depthOf(layout.tears));
   let assumed = start.torn;
   let x = new Float64Array(layout.length);
   pack(assumed, layout, loop, x);
   let best: Point | undefined;
   let closest = { closure: Number.POSITIVE_INFINITY, pass: 0 };
+  /** Streams of the first passes, before anything gathered: there a purge shows where it would take most. */
+  let early: ReadonlyMap<StreamId, StreamState> = new Map();
   let retreats = 0;
   let damping = 1;
   let shown: Change | undefined;
@@ -98,6 +104,7 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
     const change = changeOf(x, g, entering, layout, scratch);
     shown = change;
     last = { balance, back };
+    if (pass <= DIRECT + 1 || early.size === 0) early = new Map(going.states);
     const closure = Math.max(worstOf(balance), worstTaker(loop, going, back));
     if (closure < closest.closure) closest = { closure, pass };
     const stalled = pass - closest.pass >= STALLED && closure <= CLOSES / 2;
@@ -107,7 +114,7 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
       return { is: 'solved', torn: back, going, result, slopes: anderson };
     }
     if (start.slopes && pass === 1 && isStale(balance, back)) return { is: 'stale' };
-    if (gathered(balance, back, TOO_MUCH).length > 0) return gathering(loop, going, balance, back, MUCH)!;
+    if (gathered(balance, back, TOO_MUCH).length > 0) return gathering(loop, early, balance, back, MUCH)!;
     if (best && change.mean > WORSE * best.change.mean && pass > DIRECT + 1) {
       // Back to the best point, and on from there with a plain step, shorter each time.
       const next = best.x.map((v, i) => v + damping * (best!.g[i]! - v));
@@ -137,10 +144,12 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
     const near = unpack(y, back, layout, loop);
     [x, assumed] = near.state === 'solved' ? [y, near.value] : [g, back];
   }
-  const stuck = last && gathering(loop, going, last.balance, last.back, SOME);
+  const stuck = last && gathering(loop, early, last.balance, last.back, SOME);
   if (stuck) return stuck;
   return unsettled(loop, start.passes, shown);
 }
+
+const depthOf = (tears: number): number => Math.min(DEEPEST, DEPTH + FURTHER * Math.max(0, tears - 1));
 
 function progressOf(loop: Loop, pass: number, last: Change | undefined): LoopProgress {
   const { tears, scalars } = loop.plan;
@@ -156,12 +165,14 @@ function retreat(x: Float64Array, best: Point, loop: Loop): [Float64Array<ArrayB
   return near.state === 'solved' ? [Float64Array.from(next), near.value] : undefined;
 }
 
-/** A share that leaves below which a chemical only gathers [-]. */
+/** Shares that leave of what enters: less than this is nothing, more than this is on its way [-]. */
 const NOTHING = 1e-9;
+const HALF = 0.5;
 
 /**
- * Doubles what goes round of a chemical of which nothing leaves yet: either it finds a way out when there is more of it (a gas
- * that has to fill the space, water that has to reach its dew point), or it has none. Mutates: y.
+ * Doubles what goes round of a chemical of which nothing leaves yet, or so little that the step would take some away: either it
+ * finds a way out when there is more of it (a gas that has to fill the space, water that has to reach its dew point), or it has
+ * none. Mutates: y.
  */
 function fill(
   y: Float64Array,
@@ -173,7 +184,10 @@ function fill(
   let filled = false;
   for (let i = 0; i < nc; i++) {
     const { entering, leaving, round } = stayingOf(balance, back, i);
-    if (!(entering > 0) || leaving > NOTHING * entering || round === 0) continue;
+    if (!(entering > 0) || leaving > HALF * entering || round === 0) continue;
+    let proposed = 0;
+    for (let t = 0; t < tears; t++) proposed += y[t * width + i]!;
+    if (leaving > NOTHING * entering && proposed >= round) continue;
     filled = true;
     for (let t = 0; t < tears; t++) y[t * width + i] = 2 * g[t * width + i]!;
   }
