@@ -34,6 +34,9 @@ export function writeCsv(report: ReportModel): string {
   for (const table of [
     report.streams,
     report.units,
+    ...report.columns.flatMap(({ settings, figures, stages }) =>
+      [settings, figures, stages].filter((table) => table !== undefined),
+    ),
     report.closure,
     report.limits,
     report.assumptions,

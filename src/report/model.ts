@@ -1,4 +1,5 @@
 import { stateWord } from '../wording';
+import { columnReports } from './columns';
 import { measuresOf, type ReportInput } from './input';
 import { assumptionTable, closureTable, limitsTable, pairTable, unitTable } from './otherTables';
 import { streamTable } from './streamTable';
@@ -39,6 +40,7 @@ export function buildReport(input: ReportInput): ReportModel {
     },
     streams: streamTable(input),
     units: unitTable(input),
+    columns: columnReports(input),
     closure: closureTable(input),
     limits: limitsTable(input),
     assumptions: assumptionTable(input),

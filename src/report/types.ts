@@ -1,3 +1,4 @@
+import type { ProfileData } from '../drawing/profiles';
 import type { Dimension } from '../quantity/dimension';
 
 /** A cell keeps the unrounded number; writers format it. Text cells are guarded against formula injection where it matters. */
@@ -30,6 +31,17 @@ export interface Table {
   readonly notes: readonly string[];
 }
 
+/** One column: what was set in words and, where it is solved, figures, stages and profiles. */
+export interface ColumnReport {
+  readonly key: string;
+  readonly title: string;
+  readonly settings: Table;
+  readonly figures?: Table;
+  /** Every stage, from the top, ends by name. */
+  readonly stages?: Table;
+  readonly profiles?: ProfileData;
+}
+
 export interface TitleEntry {
   readonly label: string;
   readonly text: string;
@@ -48,6 +60,7 @@ export interface ReportModel {
   };
   readonly streams: Table;
   readonly units: Table;
+  readonly columns: readonly ColumnReport[];
   readonly closure: Table;
   readonly limits: Table;
   readonly assumptions: Table;

@@ -6,6 +6,7 @@ import { printed } from '../cells';
 import type { ReportInput } from '../input';
 import { reportScene } from '../sheet';
 import type { Cell, ReportModel, Row, Table } from '../types';
+import { columnPages } from './columns';
 import { tablePages } from './pages';
 
 /** A3 landscape in points. */
@@ -304,6 +305,7 @@ export function pdfDocument(report: ReportModel, input: ReportInput): TDocumentD
         ...(plainTable(report.units, [52, 70, 110, 76, 84, 84, '*'], 'Tag') as object),
         pageBreak: 'before',
       } as Content,
+      ...columnPages(report.columns),
       plainTable(report.closure, [190, 110, 110, 90, 90], 'Balance'),
       plainTable(report.limits, [90, 80, '*', 190, 240], 'Where'),
       plainTable(report.assumptions, [40, 230, 180, '*'], 'No.'),
