@@ -41,6 +41,7 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
   const number = useSketch((state) => state.sketch.title.number ?? '');
   const undoLabel = useSketch((state) => state.past.at(-1)?.label);
   const redoLabel = useSketch((state) => state.future[0]?.label);
+  const writable = useSketch((state) => state.writable);
   const findings = useResults((state) => state.findings);
   const saved = useSession((state) => state.saved);
   const limitsOpen = useSession((state) => state.drawer?.is === 'limits');
@@ -80,7 +81,7 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
       <button
         type="button"
         className="button"
-        disabled={!undoLabel}
+        disabled={!undoLabel || !writable}
         title="Undo (Ctrl+Z)"
         onClick={() => by('undo')?.run(stores)}
       >
@@ -89,7 +90,7 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
       <button
         type="button"
         className="button"
-        disabled={!redoLabel}
+        disabled={!redoLabel || !writable}
         title={redoLabel ? `Redo ${redoLabel} (Ctrl+Shift+Z)` : 'Redo (Ctrl+Shift+Z)'}
         onClick={() => by('redo')?.run(stores)}
       >

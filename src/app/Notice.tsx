@@ -1,10 +1,20 @@
 import { useSession, useStores } from '../store/react';
+import type { SessionState } from '../store/session';
+import { ReadOnly } from './ReadOnly';
 
-/** What was refused or needs to be known, over the sheet until it is put away. */
+/** Over the sheet: that it can only be read; and what was refused or needs to be known, until it is put away. */
 export function Notice() {
-  const stores = useStores();
   const notice = useSession((state) => state.notice);
-  if (!notice) return null;
+  return (
+    <>
+      <ReadOnly />
+      {notice ? <Told notice={notice} /> : null}
+    </>
+  );
+}
+
+function Told({ notice }: { readonly notice: NonNullable<SessionState['notice']> }) {
+  const stores = useStores();
   return (
     <section className="notice" data-tone={notice.tone} role="alert" key={notice.key}>
       <h2>{notice.title}</h2>

@@ -1,7 +1,11 @@
 import type { Sketch } from '../sketch/types';
+import { writeSketch } from '../sketch/write';
 import { SketchStorage } from '../store/autosave';
 import type { Stores } from '../store/react';
-import { setStorage } from './storage';
+import type { SessionState } from '../store/session';
+import { showSketch } from './documents';
+import { createHolding } from './holding';
+import { setStorage, setTakeOver } from './storage';
 
 const LAST = 'splitwright.last';
 
@@ -50,61 +54,67 @@ export async function startAutosave(): Promise<Autosave> {
   }
 }
 
+const ELSEWHERE = 'Another tab is editing this sketch.';
+
 /** Writes one document after the other, always the newest next; never two writes at once. */
 function watch(stores: Stores, storage: SketchStorage): void {
   let counter = 0;
   let current = '';
-  let writing = false;
+  let writing: Promise<void> | null = null;
   let waiting: { sketch: Sketch; label: string } | null = null;
-  let release: (() => void) | null = null;
 
-  const lock = (id: string): void => {
-    release?.();
-    release = null;
-    if (!('locks' in navigator)) return;
-    void navigator.locks.request(`splitwright:${id}`, { ifAvailable: true }, (held) => {
-      if (stores.sketch.getState().sketch.id !== id) return undefined;
-      if (!held) {
-        stores.sketch.setWritable(false);
-        stores.session.setState({
-          saved: { state: 'read-only', detail: 'Another tab is editing this sketch.' },
-        });
-        return undefined;
-      }
-      return new Promise<void>((resolve) => {
-        release = resolve;
-      });
-    });
+  const tell = (saved: SessionState['saved']): void => {
+    const { writable } = stores.sketch.getState();
+    stores.session.setState({ saved: writable ? saved : { state: 'read-only', detail: ELSEWHERE } });
+  };
+  const holding = createHolding({
+    lost() {
+      // What was under the hand is kept: it is the last thing this tab writes.
+      stores.sketch.commit();
+      stores.sketch.setWritable(false);
+      tell({ state: 'read-only' });
+    },
+    finish: async () => {
+      await writing;
+    },
+  });
+  const take = async (id: string): Promise<void> => {
+    const isHeld = await holding.take(id);
+    if (isHeld || stores.sketch.getState().sketch.id !== id) return;
+    stores.sketch.setWritable(false);
+    tell({ state: 'read-only' });
   };
 
-  const write = async (): Promise<void> => {
-    if (writing || !waiting) return;
-    writing = true;
-    const { sketch, label } = waiting;
-    waiting = null;
-    stores.session.setState({ saved: { state: 'saving' } });
+  const writeNext = async ({ sketch, label }: { sketch: Sketch; label: string }): Promise<void> => {
+    tell({ state: 'saving' });
     if (sketch.id !== current) {
       current = sketch.id;
       counter = (await storage.latest(sketch.id))?.counter ?? 0;
-      lock(sketch.id);
+      void take(sketch.id);
     }
     const outcome = await storage.save(sketch, counter, label, Date.now());
     if (outcome.ok) {
       counter = outcome.counter;
       remember(sketch.id);
-      stores.session.setState({ saved: { state: 'saved' } });
-    } else {
-      const detail = {
-        'newer-elsewhere':
-          'Another tab has saved a newer state of this sketch. Save this one as a file, or reload.',
-        'storage-full': 'The browser has no room left. Save the sketch as a file now.',
-        'storage-denied': 'The browser does not let this page store anything. Save the sketch as a file.',
-      }[outcome.why];
-      stores.session.setState({ saved: { state: 'failed', detail } });
-      stores.session.say('beyond', 'This edit is not saved on this computer.', [detail]);
+      tell({ state: 'saved' });
+      return;
     }
-    writing = false;
-    await write();
+    const detail = {
+      'newer-elsewhere':
+        'Another tab has saved a newer state of this sketch. Save this one as a file, or reload.',
+      'storage-full': 'The browser has no room left. Save the sketch as a file now.',
+      'storage-denied': 'The browser does not let this page store anything. Save the sketch as a file.',
+    }[outcome.why];
+    tell({ state: 'failed', detail });
+    stores.session.say('beyond', 'This edit is not saved on this computer.', [detail]);
+  };
+  const write = async (): Promise<void> => {
+    while (waiting) {
+      const next = waiting;
+      waiting = null;
+      await writeNext(next);
+    }
+    writing = null;
   };
 
   stores.sketch.subscribe((state, before) => {
@@ -112,15 +122,27 @@ function watch(stores: Stores, storage: SketchStorage): void {
     if (state.gesture || (state.sketch === before.sketch && before.gesture === null)) return;
     if (isEmpty(state.sketch) && state.past.length === 0) return;
     waiting = { sketch: state.sketch, label: state.past.at(-1)?.label ?? 'open' };
-    void write();
+    writing ??= write();
   });
+
+  setTakeOver(async () => {
+    const { sketch } = stores.sketch.getState();
+    await holding.takeOver(sketch.id);
+    const stored = await storage.latest(sketch.id);
+    counter = stored?.counter ?? 0;
+    current = sketch.id;
+    stores.sketch.setWritable(true);
+    tell({ state: 'saved' });
+    if (stored && writeSketch(stored.document) !== writeSketch(sketch)) showSketch(stores, stored.document);
+  });
+
   const { sketch } = stores.sketch.getState();
   if (!isEmpty(sketch)) {
     current = sketch.id;
     void storage.latest(sketch.id).then((stored) => {
       counter = stored?.counter ?? 0;
-      lock(sketch.id);
-      stores.session.setState({ saved: { state: 'saved' } });
+      void take(sketch.id);
+      tell({ state: 'saved' });
     });
   }
 }

@@ -26,6 +26,13 @@ export function newSketch(stores: Stores): void {
   showSketch(stores, emptySketch(crypto.randomUUID()));
 }
 
+/** The sketch that is shown goes on as another one, with a name of its own. */
+export function editCopy(stores: Stores): void {
+  const { sketch } = stores.sketch.getState();
+  const title = sketch.title.title ? { ...sketch.title, title: `${sketch.title.title}, copy` } : sketch.title;
+  showSketch(stores, { ...sketch, id: crypto.randomUUID(), title });
+}
+
 /** Opens a sketch from text. Refused: says where and why, and the open sketch stays. */
 export function openText(stores: Stores, text: string, name: string, as: 'same' | 'copy' = 'same'): boolean {
   const opened = openSketch(text);

@@ -7,3 +7,11 @@ export const theStorage = (): SketchStorage | null => storage;
 export const setStorage = (opened: SketchStorage | null): void => {
   storage = opened;
 };
+
+let takeOver: (() => Promise<void>) | null = null;
+
+/** Makes this the tab that may change the sketch; null where nothing is saved. */
+export const theTakeOver = (): (() => Promise<void>) | null => takeOver;
+export const setTakeOver = (take: () => Promise<void>): void => {
+  takeOver = take;
+};

@@ -1,4 +1,5 @@
 import type { Action } from '../../store/action';
+import type { Stores } from '../../store/react';
 import type { DrawerChoice } from '../../store/session';
 
 const drawer = (
@@ -20,12 +21,15 @@ const drawer = (
   },
 });
 
+const isWritable = ({ sketch }: Stores): boolean => sketch.getState().writable;
+
 export const viewActions: readonly Action[] = [
   {
     id: 'undo',
     label: 'Undo',
     group: 'edit',
     keys: ['Ctrl+Z'],
+    when: isWritable,
     run: ({ sketch, session }) => {
       const label = sketch.undo();
       if (label) session.setState({ spoken: `Undone: ${label}` });
@@ -36,6 +40,7 @@ export const viewActions: readonly Action[] = [
     label: 'Redo',
     group: 'edit',
     keys: ['Ctrl+Shift+Z', 'Ctrl+Y'],
+    when: isWritable,
     run: ({ sketch, session }) => {
       const label = sketch.redo();
       if (label) session.setState({ spoken: `Redone: ${label}` });
