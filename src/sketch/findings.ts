@@ -30,6 +30,7 @@ export const SKETCH_FINDINGS = [
   'sketch/parts-sum-near',
   'sketch/chemical-not-in-bank',
   'sketch/chemical-lacks',
+  'sketch/correlation-not-usable',
   'sketch/formula-not-read',
   'sketch/pair-not-read',
   'sketch/gauge-at-site',
@@ -39,6 +40,7 @@ export const SKETCH_FINDINGS = [
   'sketch/model-not-available',
   // noted
   'sketch/parts-normalised',
+  'sketch/no-standard-entropy',
   'sketch/loose-end',
   'sketch/setting-of-unused-port',
   'sketch/migrated',

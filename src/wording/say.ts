@@ -1,6 +1,6 @@
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Evidence, Finding } from '../engine/outcome';
-import { type MeasureSet, type Measures, show } from '../quantity';
+import { formatDecimals, type MeasureSet, type Measures, show } from '../quantity';
 import { SENTENCES } from './codes';
 import { EQUILIBRIUM_WORDS } from './general/equilibrium';
 import { SKETCH_WORDS } from './general/sketch';
@@ -24,7 +24,9 @@ export interface Said {
 
 const CHEMICALS = new Set(['chemical', 'first', 'second']);
 
+/** A pure number that is whole is a count and has no decimals: "18 of the pairs". */
 function quantityText(seen: Evidence, measures: SayContext['measures']): string {
+  if (seen.dim === 'number' && Number.isInteger(seen.value)) return formatDecimals(seen.value, 0);
   const { number, unit } = show(seen.value, seen.dim, measures);
   return unit === '' ? number : `${number} ${unit}`;
 }

@@ -21,6 +21,21 @@ export function portWord(kind: string, port: string): string {
   return number !== '' && ports[stem] !== undefined ? `${ports[stem]} ${number}` : humanised(port);
 }
 
+/** What a chemical of one's own is made of, by key in the file. */
+export const OWN_WORDS: Readonly<Record<string, string>> = {
+  MW: 'molar mass',
+  Tc: 'critical temperature',
+  Pc: 'critical pressure',
+  omega: 'acentric factor',
+  Hf: 'enthalpy of formation',
+  S0: 'standard entropy',
+  Cp: 'ideal-gas heat capacity',
+  Psat: 'vapour pressure',
+  Hvap: 'heat of vaporisation',
+  rhoL: 'liquid density',
+  cpL: 'liquid heat capacity',
+};
+
 /** Labels of settings that mean the same wherever they stand; the path's end decides. */
 const SETTINGS: Readonly<Record<string, string>> = {
   'p.P': 'outlet pressure',
@@ -32,6 +47,7 @@ const SETTINGS: Readonly<Record<string, string>> = {
   h: 'heat',
   drop: 'pressure drop',
   ratio: 'pressure ratio',
+  ...OWN_WORDS,
 };
 
 /** Label of a setting by its path inside `settings`: the kind's own, else a common one, else its key's words. */

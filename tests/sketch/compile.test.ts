@@ -1,7 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { missingForModel } from '../../src/engine/thermo/model';
 import { makeCompile, neededChemicals } from '../../src/sketch/compile';
-import { lackingFor } from '../../src/sketch/compiling/basis';
 import {
   deleteStream,
   moveUnits,
@@ -331,17 +329,6 @@ describe('chemicals and model', () => {
     const c = await compiled(feedSketch({}, { chemicals: [] }));
     expect(codes(c.gaps)).toContain('sketch/no-chemicals');
     expect(c.basis).toBeUndefined();
-  });
-  test('what a model needs of a chemical agrees with the models themselves', async () => {
-    const names = ['methane', 'water', 'sulfolane', 'helium', 'n-decane'];
-    const { chemicals } = await bankOf({ ...letDown(), chemicals: names });
-    const bare = { id: 'x', name: 'X', MW_g_mol: 1, corr: {}, sources: {} };
-    for (const chemical of [...chemicals.values(), bare])
-      for (const kind of ['peng-robinson', 'raoult'] as const)
-        for (const liquidH of ['psat-slope', 'hvap'] as const) {
-          const spec = { kind, liquidH };
-          expect([...lackingFor(spec, chemical)].sort()).toEqual([...missingForModel(spec, chemical)].sort());
-        }
   });
 });
 

@@ -2,6 +2,8 @@ import type { ChemicalData } from '../chemicals/types';
 import { MODELS } from './registry';
 import type { Model, ModelSpec, ThermoModel } from './types';
 
+export { missingForModel } from './pure/missing';
+
 /**
  * The sketch's thermodynamic model over its full list of chemicals.
  *
@@ -32,12 +34,6 @@ export function makeModel(spec: ModelSpec, chemicals: readonly ChemicalData[]): 
     },
   };
 }
-
-/** Data by field or correlation name that the model needs of a chemical and that it lacks; empty when it can be used. */
-export const missingForModel = (
-  spec: Pick<ModelSpec, 'kind' | 'liquidH'>,
-  chem: ChemicalData,
-): readonly string[] => MODELS[spec.kind].missing(spec, chem);
 
 /** The same model over some of the chemicals: pairs between two of them, counted anew. */
 function specOf(spec: ModelSpec, present: readonly number[]): ModelSpec {

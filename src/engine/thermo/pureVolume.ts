@@ -1,17 +1,13 @@
-import type { ChemicalData } from '../chemicals/types';
 import type { PureChemical } from './pure/pure';
-import { plainConstant, volumeConstant } from './pure/volumeConstant';
+import { volumeConstant } from './pure/volumeConstant';
 import { R_J_molK } from './types';
+
+export { isVolumeAssumed } from './pure/volumeConstant';
 
 /** Density [kg/m3] of a liquid about which nothing is known. */
 const UNKNOWN_kg_m3 = 800;
 /** From here up in Tr the volume grows ever more slowly towards a limit instead of following the critical singularity. */
 const TAME_FROM = 0.9;
-
-/** True when nothing tells the liquid volume of a chemical, so that 800 kg/m3 is assumed: worth an entry in a register. */
-export const isVolumeAssumed = (chem: ChemicalData): boolean =>
-  (chem.Tc_K === undefined || chem.Pc_Pa === undefined || plainConstant(chem) === undefined) &&
-  (chem.corr.liquid_density ?? []).length === 0;
 
 /** Molar volume of a pure liquid and its slope by T, defined and smooth at every temperature. */
 export interface PureVolume {

@@ -2,12 +2,13 @@ import type { ChemicalData } from '../../engine/chemicals/types';
 import type { Basis } from '../../engine/network/types';
 import type { Finding } from '../../engine/outcome';
 import { type PairTables, resolvePairs } from '../../engine/thermo/pairs/resolve';
-import type { ModelSpec } from '../../engine/thermo/types';
+import { missingForModel } from '../../engine/thermo/pure/missing';
+import { isVolumeAssumed } from '../../engine/thermo/pure/volumeConstant';
 import { finding, word } from '../findings';
 import type { Sketch } from '../types';
 import { chemicalId, type FullList } from './air';
 import { readModel } from './model';
-import { ownChemicalData } from './ownChemical';
+import { ownChemicalData, ownConstantFaults, ownFaults } from './ownChemical';
 import type { AssumptionDraft } from './scope';
 
 /** What of the bank a sketch needs, already loaded. */
@@ -24,24 +25,6 @@ export interface BasisRead {
   readonly gaps: readonly Finding[];
   readonly notes: readonly Finding[];
   readonly assumptions: readonly AssumptionDraft[];
-}
-
-/** Constants and correlations that a model cannot do without. */
-const NEEDS: Readonly<Record<ModelSpec['kind'], readonly string[]>> = {
-  'peng-robinson': ['Tc_K', 'Pc_Pa', 'omega', 'ideal_gas_cp'],
-  raoult: ['vapor_pressure', 'ideal_gas_cp'],
-};
-
-/** What a chemical lacks for a model, by field or correlation name. */
-export function lackingFor(
-  spec: Pick<ModelSpec, 'kind' | 'liquidH'>,
-  chemical: ChemicalData,
-): readonly string[] {
-  const needs = NEEDS[spec.kind];
-  const more = spec.kind === 'raoult' && spec.liquidH === 'hvap' ? ['enthalpy_of_vaporization'] : [];
-  const corr: Readonly<Record<string, readonly unknown[] | undefined>> = chemical.corr;
-  const constants: Readonly<Record<string, unknown>> = { ...chemical };
-  return [...needs, ...more].filter((name) => constants[name] === undefined && !corr[name]?.length);
 }
 
 /** Chemicals and model with every constant and pair inside, or the reasons why they cannot be had. */
@@ -73,10 +56,15 @@ export function readBasis(sketch: Sketch, list: FullList, bank: BankData): Basis
   for (const [k, chemical] of data.entries()) {
     if (!chemical) continue;
     const at = { path: `chemicals.${k}`, chemical: chemical.id };
-    for (const name of model.spec ? lackingFor(model.spec, chemical) : [])
+    for (const name of model.spec ? missingForModel(model.spec, chemical) : [])
       gaps.push(
         finding('sketch/chemical-lacks', 'caution', at, word('chemical', chemical.id), word('lacks', name)),
       );
+    const given = list.chemicals[k];
+    if (typeof given === 'object') gaps.push(...ownConstantFaults(given.own, at));
+    gaps.push(...ownFaults(chemical, at));
+    if (chemical.S0_J_molK === undefined)
+      notes.push(finding('sketch/no-standard-entropy', 'note', at, word('chemical', chemical.id)));
     if (chemical.own && chemical.formula !== undefined && !chemical.elements)
       notes.push(finding('sketch/formula-not-read', 'caution', at, word('typed', chemical.formula)));
     assumptions.push(...assumptionsOf(chemical, k, list.forCombustion.has(chemical.id)));
@@ -131,11 +119,7 @@ function assumptionsOf(
       unitText: '0 J/mol',
       reason: `${chemical.name} has no enthalpy of formation: its enthalpy starts at 0.`,
     });
-  const noCritical =
-    chemical.Tc_K === undefined ||
-    chemical.Pc_Pa === undefined ||
-    (chemical.zRA ?? chemical.omega) === undefined;
-  if (noCritical && !chemical.corr.liquid_density?.length)
+  if (isVolumeAssumed(chemical))
     found.push({
       path: `${path}.rhoL`,
       value: 800,

@@ -1,4 +1,5 @@
 import type { Evidence } from '../../engine/outcome';
+import { OWN_WORDS } from '../words';
 import {
   capital,
   humanised,
@@ -37,17 +38,7 @@ function ordinal(index: number): string {
 
 const KEYS: Readonly<Record<string, string>> = {
   own: 'own data',
-  MW: 'molar mass',
-  Tc: 'critical temperature',
-  Pc: 'critical pressure',
-  omega: 'acentric factor',
-  Hf: 'enthalpy of formation',
-  S0: 'standard entropy',
-  Cp: 'ideal-gas heat capacity',
-  Psat: 'vapour pressure',
-  Hvap: 'heat of vaporisation',
-  rhoL: 'liquid density',
-  cpL: 'liquid heat capacity',
+  ...OWN_WORDS,
   Tmin: 'lowest temperature',
   Tmax: 'highest temperature',
   c: 'coefficients',

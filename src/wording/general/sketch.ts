@@ -62,6 +62,43 @@ function unitsFor(s: Slots, wanted: Dimension | undefined): string {
     : `Type the ${s.setting()}.`;
 }
 
+/** "The vapour pressure of Heavy oil", with the row where there are several. */
+const correlation = (s: Slots): string => {
+  const of = s.has('property') ? propertyWord(s.text('property')) : 'correlation';
+  const several = (s.value('rows') ?? 1) > 1 && s.value('row') !== undefined;
+  return `The ${of} of ${s.chemical()}${several ? ` (correlation ${s.number('row')})` : ''}`;
+};
+
+/** Why a correlation cannot be used, and what helps. */
+const FAULTS: Readonly<Record<string, { says(s: Slots): string; readonly next: string }>> = {
+  form: {
+    says: (s) => `its form${s.has('form') ? ` ${quoted(s.text('form'))}` : ''} is none for this property`,
+    next: 'Choose a form that gives this property.',
+  },
+  coefficients: {
+    says: () =>
+      'coefficients are missing, or one that stands for a critical temperature or pressure is not above zero',
+    next: 'Check the coefficients against their source, in number and order.',
+  },
+  range: {
+    says: () => 'its range does not run from a lower to a higher temperature',
+    next: 'Give the lower end as Tmin and the upper end as Tmax, in kelvin.',
+  },
+  overlap: {
+    says: () => 'its range overlaps that of another, so that two hold at one temperature',
+    next: 'Let one range end where the next begins.',
+  },
+  value: {
+    says: (s) => `at ${s.number('temperature')} its value is not above zero, or beyond all measure`,
+    next: 'Check coefficients and range: each must hold over the whole range that is stated.',
+  },
+  falling: {
+    says: (s) => `at ${s.number('temperature')} it falls with rising temperature`,
+    next: 'Check the coefficients and the range; a vapour pressure rises everywhere.',
+  },
+};
+const faultOf = (s: Slots): string => FAULTS[s.text('fault')]?.says(s) ?? 'it makes no sense as it stands';
+
 /** What the document and its compile step may say. */
 export const SKETCH_WORDS: Readonly<Record<string, Words>> = {
   // something is missing
@@ -221,7 +258,8 @@ export const SKETCH_WORDS: Readonly<Record<string, Words>> = {
   'sketch/parts-sum': {
     title: 'Does not add up',
     sentence: (s) => `The fractions add up to ${s.percent('sum')} and should make 100 %.`,
-    next: () => 'Correct the fractions; this far off they are not scaled.',
+    next: () =>
+      'Correct the fractions. This far off they are not scaled by themselves; if their proportions are right, have what was typed scaled to 100 %.',
   },
   'sketch/parts-sum-near': {
     title: 'Does not quite add up',
@@ -242,6 +280,11 @@ export const SKETCH_WORDS: Readonly<Record<string, Words>> = {
     sentence: (s) =>
       `The thermodynamic model needs the ${propertyWord(s.text('lacks'))} of ${s.chemical()}, which is not known.`,
     next: () => 'Choose another model, or bring the data with an own chemical.',
+  },
+  'sketch/correlation-not-usable': {
+    title: 'Correlation not usable',
+    sentence: (s) => `${correlation(s)} cannot be used: ${faultOf(s)}.`,
+    next: (s) => FAULTS[s.text('fault')]?.next ?? 'Correct the correlation.',
   },
   'sketch/formula-not-read': {
     title: 'Formula not read',
@@ -284,6 +327,12 @@ export const SKETCH_WORDS: Readonly<Record<string, Words>> = {
     title: 'Scaled to 100 %',
     sentence: (s) => `The fractions add up to ${s.percent('sum')} and are scaled to 100 % for the solution.`,
     next: () => 'Nothing need be done; correct the fractions if another sum was meant.',
+  },
+  'sketch/no-standard-entropy': {
+    title: 'No standard entropy',
+    sentence: (s) =>
+      `The standard entropy of ${s.chemical()} is not known, so no entropy is shown for a stream that holds it, and no state with it can be given or found by entropy.`,
+    next: () => 'Bring the standard entropy with the chemical where entropy is wanted.',
   },
   'sketch/loose-end': {
     title: 'Loose end',

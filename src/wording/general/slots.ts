@@ -10,7 +10,7 @@ import {
   show,
 } from '../../quantity';
 import { capital, humanised } from '../humanise';
-import { portWord, settingWord } from '../words';
+import { OWN_WORDS, portWord, settingWord } from '../words';
 
 export { kindWord, modelWord, propertyWord } from '../words';
 export { capital, humanised, portWord };
@@ -169,6 +169,8 @@ export function settingLabel(kind: string, path: string, chemical: (id: string) 
   const parent = keys.slice(0, -1).join('.');
   const counted = COUNTED[parent];
   if (counted !== undefined) return counted(Number(last) + 1);
+  const own = keys[0] === 'chemicals' && keys[2] === 'own' ? OWN_WORDS[keys[3] ?? ''] : undefined;
+  if (own !== undefined) return `${own} of chemical ${Number(keys[1]) + 1}`;
   if (keys[0] === 'limits') return `limit “${keys.slice(1).join('.')}”`;
   if (parent === 'composition.parts') return `fraction of ${chemical(last)}`;
   if (parent === 'composition.flows') return `flow of ${chemical(last)}`;

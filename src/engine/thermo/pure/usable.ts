@@ -55,11 +55,25 @@ const FORMS: Readonly<Record<CorrProperty, ReadonlySet<CorrForm>>> = {
 /** Properties that may be exactly zero where a range ends at the critical point. */
 const ZERO_AT_END: ReadonlySet<CorrProperty> = new Set(['enthalpy_of_vaporization', 'surface_tension']);
 
+/** Far beyond what any chemical has [SI]; larger numbers would only turn up as infinities later. */
+const MOST: Readonly<Record<CorrProperty, number>> = {
+  ideal_gas_cp: 1e6,
+  vapor_pressure: 1e11,
+  enthalpy_of_vaporization: 1e8,
+  liquid_density: 1e6,
+  liquid_cp: 1e6,
+  liquid_viscosity: 1e6,
+  gas_viscosity: 1,
+  liquid_conductivity: 1e4,
+  gas_conductivity: 1e4,
+  surface_tension: 1e3,
+};
+
 export interface CorrFault {
   /**
    * 'form': not one for this property; 'coefficients': too few, not finite, or a critical constant not positive;
    * 'range': Tmin not below Tmax, or negative; 'overlap': two rows claim one temperature;
-   * 'value': not positive at T_K; 'falling': a vapour pressure falls with temperature at T_K.
+   * 'value': not positive, or beyond all measure, at T_K; 'falling': a vapour pressure falls with temperature at T_K.
    */
   readonly fault: 'form' | 'coefficients' | 'range' | 'overlap' | 'value' | 'falling';
   /** Which row, counted from 0. */
@@ -102,7 +116,7 @@ function rowFault(of: CorrProperty, row: Corr): Omit<CorrFault, 'row'> | undefin
     const T = low + ((high - low) * k) / 40;
     const y = log ? Math.exp(at(T)) : at(T);
     const critical = k === 40 && ZERO_AT_END.has(of);
-    if (!Number.isFinite(y) || y < 0 || (y === 0 && !critical)) return { fault: 'value', T_K: T };
+    if (!(y >= 0 && y <= MOST[of]) || (y === 0 && !critical)) return { fault: 'value', T_K: T };
     if (of === 'vapor_pressure' && !(slope(T) > 0)) return { fault: 'falling', T_K: T };
   }
   return undefined;

@@ -38,6 +38,11 @@ const MOST = 0.5;
 export const plainConstant = (chem: ChemicalData): number | undefined =>
   chem.zRA ?? (chem.omega === undefined ? undefined : rackettFromOmega(chem.omega));
 
+/** True when nothing tells the liquid volume of a chemical, so that 800 kg/m3 is assumed: worth an entry in a register. */
+export const isVolumeAssumed = (chem: ChemicalData): boolean =>
+  (chem.Tc_K === undefined || chem.Pc_Pa === undefined || plainConstant(chem) === undefined) &&
+  (chem.corr.liquid_density ?? []).length === 0;
+
 const made = new WeakMap<ChemicalData, VolumeConstant | 'none'>();
 
 /**

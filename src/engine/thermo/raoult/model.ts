@@ -1,7 +1,7 @@
 import type { ChemicalData } from '../../chemicals/types';
 import { LiquidVolume } from '../liquidVolume';
-import { missingCritical } from '../missing';
 import { type IdealGases, prepareIdealGases } from '../pure/ideal';
+import { missingCritical } from '../pure/missing';
 import { type PureChemical, preparePure } from '../pure/pure';
 import { type PureVolume, pureVolume } from '../pureVolume';
 import { type Level, type ModelSpec, type PhaseProps, R_J_molK, type Side, type ThermoModel } from '../types';
