@@ -206,9 +206,9 @@ describe('streams', () => {
 
   test('hexane over water holds another liquid, and that is said once, at the stream', () => {
     const found = findings(wet, [feed({ T: 300, P: 5e5 }, 0, 0, 1, 0, 1, 0)]).filter((f) =>
-      f.code.endsWith('second-liquid'),
+      /second-liquid|liquids-together/.test(f.code),
     );
-    expect(found).toMatchObject([{ code: 'stream/second-liquid', weight: 'caution', at: { stream: 'a' } }]);
+    expect(found).toMatchObject([{ code: 'stream/liquids-together', weight: 'caution', at: { stream: 'a' } }]);
   });
 
   test('water beyond what oil dissolves is named where the model mixes everything', async () => {
@@ -264,11 +264,40 @@ describe('pairs', () => {
       {
         weight: 'caution',
         at: { stream: 'a' },
-        evidence: [{ text: 'methane' }, { text: 'n-heptane' }, { value: 0.1 }, {}, {}],
+        evidence: [
+          { text: 'methane' },
+          { text: 'n-heptane' },
+          { name: 'fraction', value: 0.1 },
+          { name: 'other', value: 0.1 },
+          { name: 'limit', value: 0.05 },
+          {},
+        ],
       },
     ]);
     const thin = codes(withOrigin('none'), [feed({ T: 320, P: 12e5 }, 10, 0, 0, 0, 0, 2, 88)]);
     expect(thin).not.toContain('model/pair-none');
+  });
+
+  test.each([
+    ['a little gas beside much of the other is told against its own limit', [2, 98], [0.02, 0.98, 0.005]],
+    ['much gas beside little of the other is told by the other', [90, 10], [0.1, 0.9, 0.05]],
+    ['a little gas beside a little of the other is not told', [95.5, 4.5], undefined],
+    ['too little gas is not told', [0.4, 99.6], undefined],
+  ] as const)('%s', (_, [gas, other], told) => {
+    const basis = withOrigin('none');
+    const withGas: Basis = {
+      ...basis,
+      id: 'gas',
+      chemicals: basis.chemicals.map((c, k) => (k === 0 ? { ...c, family: 'inorganic-gas' } : c)),
+    };
+    const [found] = findings(withGas, [feed({ T: 320, P: 12e5 }, gas, 0, 0, 0, 0, other, 0)]).filter(
+      (f) => f.code === 'model/pair-none',
+    );
+    const seen = (name: string) => found?.evidence.find((e) => e.name === name)?.value;
+    expect(found && [seen('fraction'), seen('other'), seen('limit')]).toEqual(
+      told?.map((x) => expect.closeTo(x, 12)),
+    );
+    if (found) expect(seen('fraction')).toBeGreaterThanOrEqual(seen('limit') ?? 1);
   });
 
   test('that are predicted are counted in one note', () => {
