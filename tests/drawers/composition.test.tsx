@@ -90,6 +90,28 @@ describe('a composition', () => {
     });
   });
 
+  test.each([
+    ['49 %', 'Scale to 100 %', false],
+    ['48.9 %', 'Scale what was typed to 100 %', true],
+  ] as const)('two of %s: the button reads “%s”', (part, name, isSaid) => {
+    openFeed({
+      ...letDown,
+      units: letDown.units.map((u) =>
+        u.id === 'u1'
+          ? {
+              ...u,
+              settings: {
+                ...u.settings,
+                composition: { basis: 'mole', parts: { methane: part, 'n-butane': part } },
+              },
+            }
+          : u,
+      ),
+    });
+    expect(screen.getByRole('button', { name })).toBeTruthy();
+    expect(screen.queryByText(/nothing is scaled unless you say so/) !== null).toBe(isSaid);
+  });
+
   test('asks whether numbers are converted or kept when the basis changes', () => {
     const page = openFeed();
     fireEvent.click(screen.getByRole('radio', { name: 'mass' }));

@@ -11,7 +11,7 @@ import type { SettingChange } from '../edits';
 import { run } from '../run';
 import { capital } from '../words';
 import { AirEditor } from './AirEditor';
-import { asFlows, converted, type Mode, modeOf, partsOf, sumOf, usualUnit } from './composition';
+import { asFlows, converted, isNear, type Mode, modeOf, partsOf, sumOf, usualUnit } from './composition';
 import { useForm } from './form';
 import type { Assumed } from './given';
 import { readPaste } from './paste';
@@ -235,14 +235,16 @@ function Grid({ path, mode, isNew, word, done }: GridProps) {
         <div className="sum-note">
           <span>
             {formatSignificant(Math.abs(off) * 100, 3)} % {off < 0 ? 'missing' : 'too much'}.
+            {isNear(sum) ? null : ' That is more than a slip, so nothing is scaled unless you say so.'}
           </span>
           <button
             type="button"
             className="button line"
             disabled={form.disabled || !(sum > 0)}
+            title={isNear(sum) ? undefined : 'Keeps the proportions between the numbers that were typed'}
             onClick={() => run(sketch, (s) => normaliseParts(s, form.unit.id, `${path}.parts`))}
           >
-            Scale to 100 %
+            {isNear(sum) ? 'Scale to 100 %' : 'Scale what was typed to 100 %'}
           </button>
         </div>
       ) : null}

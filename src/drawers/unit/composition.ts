@@ -1,5 +1,6 @@
 import { parseQuantity, quantityText, type Site } from '../../quantity';
 import type { Json, Quantity } from '../../sketch/types';
+import { ASKED_WITHIN } from '../../store/commands';
 import { quantityOf } from './given';
 
 export type Mode = 'mole' | 'mass' | 'flows' | 'preset';
@@ -42,6 +43,9 @@ export function sumOf(parts: ReadonlyMap<string, Quantity>): {
   }
   return { sum, whole };
 }
+
+/** Whether fractions are so little off that a slip explains it; further off, what was meant is not known. */
+export const isNear = (sum: number): boolean => Math.abs(sum - 1) <= ASKED_WITHIN + 1e-9;
 
 /** The unit a bare number takes in a new cell: that of the cells already filled, else per cent. */
 export function usualUnit(parts: ReadonlyMap<string, Quantity>, mode: Mode, site: Site): string {

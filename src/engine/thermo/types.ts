@@ -16,6 +16,8 @@ export interface PairKij {
   readonly kij: number;
   readonly origin: PairOrigin;
   readonly source: string;
+  /** What would be used had the sketch not given a value. */
+  readonly instead?: Pick<PairKij, 'kij' | 'origin' | 'source'>;
 }
 
 /** What a thermodynamic model is built from: plain data, complete, with all pairs resolved. */

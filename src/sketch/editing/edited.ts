@@ -27,6 +27,10 @@ export const EDIT_REFUSALS = [
   'edit/chemical-in-use',
   'edit/chemical-twice',
   'edit/nothing-to-normalise',
+  'edit/same-chemical',
+  'edit/not-a-number',
+  'edit/bad-factor',
+  'edit/nothing-to-scale',
 ] as const;
 
 export type EditCode = (typeof EDIT_REFUSALS)[number];

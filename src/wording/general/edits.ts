@@ -71,6 +71,11 @@ export const EDIT_WORDS: Readonly<Record<string, (s: Slots) => string>> = {
     `${capital(s.chemical())} is already among the chemicals; one entry is enough.`,
   'edit/nothing-to-normalise': (s) =>
     `The ${s.has('path') ? s.setting(s.text('path')) : 'fractions'} of ${s.text('tag')} do not add up to anything above zero, so they cannot be scaled to 100 %; correct them first.`,
+  'edit/same-chemical': (s) => `${capital(s.chemical())} makes no pair with itself; choose two chemicals.`,
+  'edit/not-a-number': () => 'This is not a number that can be used; type one such as 0.012.',
+  'edit/bad-factor': () => 'Flows are scaled by a number above zero; give one such as 1.25.',
+  'edit/nothing-to-scale': () =>
+    'No feed has a flow that can be read, so there is nothing to scale; give the feeds their flows first.',
 };
 
 const betweenTags = (s: Slots): string =>

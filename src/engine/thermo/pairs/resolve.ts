@@ -55,9 +55,18 @@ function resolve(
   given: ReadonlyMap<string, number>,
   bankPairs: boolean,
   tables: PairTables,
-): Pick<PairKij, 'kij' | 'origin' | 'source'> {
+): Omit<PairKij, 'i' | 'j'> {
   const own = given.get(pairKey(one.id, two.id));
-  if (own !== undefined) return { kij: own, origin: 'given', source: 'given in the sketch' };
+  const instead = ofBank(one, two, bankPairs, tables);
+  return own === undefined ? instead : { kij: own, origin: 'given', source: 'given in the sketch', instead };
+}
+
+function ofBank(
+  one: ChemicalData,
+  two: ChemicalData,
+  bankPairs: boolean,
+  tables: PairTables,
+): Pick<PairKij, 'kij' | 'origin' | 'source'> {
   if (!bankPairs) return { kij: 0, origin: 'none', source: 'none given; pairs of the bank are switched off' };
   const fitted =
     one.cas !== undefined && two.cas !== undefined ? tables.fitted.get(pairKey(one.cas, two.cas)) : undefined;
