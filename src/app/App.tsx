@@ -2,13 +2,16 @@ import { useEffect, useMemo } from 'react';
 import { Balance } from '../balance/Balance';
 import { Sheet } from '../canvas/Sheet';
 import { Shelf } from '../canvas/Shelf';
+import { PairsPage } from '../drawers/chemicals/Pairs';
 import { DrawerHost } from '../drawers/DrawerHost';
+import { ScaleFeeds } from '../drawers/scale/ScaleFeeds';
 import { actionFor } from '../store/action';
 import { BankContext } from '../store/bank';
-import { type Stores, StoresProvider, useSession, useSketch } from '../store/react';
+import { type Stores, StoresProvider, useSession, useSketch, useStores } from '../store/react';
 import { actions } from './actions';
 import { Bar } from './Bar';
 import { bankIndex } from './bankIndex';
+import { Dialogue } from './Dialogue';
 import { dropFiles } from './documents';
 import { KeyList } from './KeyList';
 import { MySketches } from './MySketches';
@@ -55,9 +58,23 @@ function useFileDrop(stores: Stores): void {
 }
 
 function Over() {
+  const { session } = useStores();
   const over = useSession((state) => state.over);
+  const close = (): void => session.setState({ over: 'none' });
   if (over === 'keys') return <KeyList actions={actions} />;
   if (over === 'open') return <MySketches />;
+  if (over === 'pairs')
+    return (
+      <Dialogue title="Pair parameters" wide>
+        <PairsPage />
+      </Dialogue>
+    );
+  if (over === 'scale')
+    return (
+      <Dialogue title="Scale all feeds" aside>
+        <ScaleFeeds close={close} />
+      </Dialogue>
+    );
   return over === 'summary' ? <SummaryPage /> : null;
 }
 

@@ -5,10 +5,13 @@ import { useStores } from '../store/react';
 export function Dialogue({
   title,
   wide = false,
+  aside = false,
   children,
 }: {
   readonly title: string;
   readonly wide?: boolean;
+  /** Small, at the side and without a veil: the sheet is watched meanwhile. */
+  readonly aside?: boolean;
   readonly children: ReactNode;
 }) {
   const stores = useStores();
@@ -22,7 +25,7 @@ export function Dialogue({
   return (
     <dialog
       ref={ref}
-      className={wide ? 'dialogue wide' : 'dialogue'}
+      className={['dialogue', wide ? 'wide' : '', aside ? 'aside' : ''].filter(Boolean).join(' ')}
       aria-modal="true"
       aria-label={title}
       onClose={close}

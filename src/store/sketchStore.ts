@@ -73,14 +73,15 @@ export function createSketchStore(first: Sketch, onEdit: (edit: number) => void 
       const { gesture } = get();
       if (gesture) show(change(gesture.before), {});
     },
-    commit(): void {
+    /** Ends the gesture as one entry; `label` names it where that was not known when it began. */
+    commit(label?: string): void {
       const { gesture, sketch } = get();
       if (!gesture) return;
       if (sketch === gesture.before) set({ gesture: null });
       else
         set({
           gesture: null,
-          past: push({ label: gesture.label, before: gesture.before, after: sketch }),
+          past: push({ label: label ?? gesture.label, before: gesture.before, after: sketch }),
           future: [],
         });
     },

@@ -3,11 +3,13 @@ import type { Action } from '../../store/action';
 import { documentActions } from './documents';
 import { fileActions } from './files';
 import { viewActions } from './view';
+import { wholeActions } from './whole';
 
 /** Every action of the page; the bar, the menus, the keys and the list of keys read this. */
 export const actions: readonly Action[] = [
   ...fileActions,
   ...documentActions,
+  ...wholeActions,
   ...viewActions,
   ...sheetActions,
 ];
