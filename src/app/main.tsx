@@ -10,6 +10,7 @@ import { createSketchStore } from '../store/sketchStore';
 import { App } from './App';
 import { startAutosave } from './autosaving';
 import { ErrorBoundary } from './ErrorBoundary';
+import { keepFolds } from './folds';
 import { startSolving } from './solving';
 import { applyTheme, storedTheme } from './theme';
 
@@ -26,6 +27,7 @@ const stores: Stores = {
   compiled: createCompiledStore(),
 };
 stores.session.setState({ theme });
+keepFolds(stores.session);
 startSolving(stores);
 autosave.watch(stores);
 

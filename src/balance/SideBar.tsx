@@ -1,7 +1,9 @@
 import { scaleLinear } from 'd3-scale';
+import { useEffect, useRef } from 'react';
 import { Diamond } from '../parts/Diamond';
 import { formatSignificant, MINUS } from '../quantity';
 import { useSession, useStores } from '../store/react';
+import type { Thing } from '../store/session';
 import type { Segment, Side } from './sides';
 
 /** Share of the bar that a piece takes when nothing tells how long it is. */
@@ -66,6 +68,19 @@ function Piece({ segment, width, figure, unit }: PieceProps) {
   const { session } = useStores();
   const { stream, unit: id, number, name, what, turned, outOfDate } = segment;
   const chosen = useSession((state) => stream !== undefined && state.streams.includes(stream));
+  const point = (): void => {
+    const thing: Thing | null = stream ? { stream } : id ? { unit: id } : null;
+    session.setState({ pointed: thing });
+  };
+  const unpoint = (): void => {
+    const { pointed } = session.getState();
+    const isOurs = pointed && ('stream' in pointed ? pointed.stream === stream : pointed.unit === id);
+    if (isOurs) session.setState({ pointed: null });
+  };
+  const leaving = useRef(unpoint);
+  leaving.current = unpoint;
+  // A piece that goes away under the pointer points at nothing any more.
+  useEffect(() => () => leaving.current(), []);
   const classes = [
     'piece',
     `of-${what}`,
@@ -78,6 +93,10 @@ function Piece({ segment, width, figure, unit }: PieceProps) {
       <button
         type="button"
         title={`${name}: ${figure} ${unit}${turned ? ', negative: counted on the other side' : ''}`}
+        onPointerEnter={point}
+        onPointerLeave={unpoint}
+        onFocus={point}
+        onBlur={unpoint}
         onClick={() => (stream ? session.select([], [stream]) : id && session.select([id]))}
       >
         {number === undefined ? null : <Diamond number={number} chosen={chosen} size={20} />}

@@ -2,7 +2,7 @@ import { memo } from 'react';
 import { useShallow } from 'zustand/react/shallow';
 import type { StreamId } from '../engine/ids';
 import { useSession, useStores } from '../store/react';
-import { chooseStream } from './choose';
+import { chooseStream, isPointed } from './choose';
 import { useSheet } from './sheetStore';
 
 /** Every stream's line, hanging ones too, in one layer below the units. */
@@ -20,7 +20,7 @@ export const Lines = memo(function Lines() {
 const Line = memo(function Line({ id }: { readonly id: StreamId }) {
   const stores = useStores();
   const line = useSheet((state) => state.lines.get(id));
-  const selected = useSession((state) => state.streams.includes(id));
+  const selected = useSession((state) => state.streams.includes(id) || isPointed(state, id));
   const opening = useSheet((state) => state.dropping?.on === id);
   if (!line) return null;
   return (

@@ -16,6 +16,7 @@ import { useSession, useSketch, useStores } from '../store/react';
 import './sheet.css';
 import './drawing.css';
 import './hand.css';
+import { keepCentred, keepZones } from './asked';
 import { adds, chooseUnit } from './choose';
 import { DropLayer } from './DropLayer';
 import { createDrag } from './drag';
@@ -63,6 +64,8 @@ function View() {
 
   useLayoutEffect(() => keepScene(stores, sheet, () => flow.getZoom()), [stores, sheet, flow]);
   useEffect(() => putHandle(stores, view), [stores, view]);
+  useEffect(() => keepCentred(stores, view), [stores, view]);
+  useEffect(() => keepZones(stores, sheet), [stores, sheet]);
 
   // Text and marks stand still on the screen while the sheet is zoomed: two custom properties, no rendering.
   const shownZoom = useRef(0);

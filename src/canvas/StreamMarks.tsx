@@ -4,7 +4,7 @@ import { diamondPath } from '../drawing/diamonds';
 import type { LabelShape, LineShape, Point } from '../drawing/types';
 import type { StreamId } from '../engine/ids';
 import { useSession, useStores } from '../store/react';
-import { chooseStream } from './choose';
+import { chooseStream, isPointed } from './choose';
 import { anchorOf, middleOf } from './lines';
 import { pullByPointer } from './pointer';
 import { portsOf } from './ports';
@@ -35,17 +35,18 @@ const StreamMark = memo(function StreamMark({ id }: { readonly id: StreamId }) {
   const quietLabel = useSheet((state) => state.quiet.labels.has(id));
   const quietDiamond = useSheet((state) => state.quiet.diamonds.has(id));
   const selected = useSession((state) => state.streams.includes(id));
+  const pointed = useSession((state) => isPointed(state, id));
   const entry = useSession((state) => state.units.length === 0 && state.streams[0] === id);
   const [near, setNear] = useState(false);
   if (!line) return null;
   const at = line.diamond ?? middleOf(line.points);
-  const shown = selected || near;
+  const shown = selected || near || pointed;
   const opened = shown && (quietLabel || label?.folded === true);
   return (
     <div
       className="stream"
       data-stream={line.number}
-      data-selected={selected || undefined}
+      data-selected={selected || pointed || undefined}
       style={{ transform: `translate(${at[0]}px, ${at[1]}px)`, zIndex: opened ? 2 : undefined }}
     >
       <button

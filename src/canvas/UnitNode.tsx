@@ -5,6 +5,7 @@ import { transformOf } from '../drawing/transform';
 import type { UnitShape } from '../drawing/types';
 import type { UnitId } from '../engine/ids';
 import { useSession } from '../store/react';
+import { isPointed } from './choose';
 import { flagPort } from './extent';
 import { nodeBox } from './nodes';
 import { tagHold } from './quiet';
@@ -20,6 +21,7 @@ export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
   const name = useSheet((state) => state.unitNames.get(unit));
   const quietDuty = useSheet((state) => state.quiet.duties);
   const selected = useSession((state) => state.units.includes(unit));
+  const pointed = useSession((state) => isPointed(state, unit));
   const entry = useSession((state) => isEntry(state.units, state.streams, unit));
   const first = useSheet((state) => state.scene.units[0]?.unit === unit);
   if (!shape) return null;
@@ -30,7 +32,7 @@ export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
       data-unit={shape.tag}
       data-kind={shape.kind}
       data-state={shape.state}
-      data-selected={selected || undefined}
+      data-selected={selected || pointed || undefined}
       onPointerEnter={() => store.setState({ hovered: unit })}
       onPointerLeave={() => {
         if (store.getState().hovered === unit) store.setState({ hovered: null });

@@ -1,5 +1,6 @@
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Stores } from '../store/react';
+import type { SessionState } from '../store/session';
 
 interface Keys {
   readonly shiftKey: boolean;
@@ -11,6 +12,10 @@ export const adds = (event: Keys): boolean => event.shiftKey || event.ctrlKey ||
 
 const toggled = <T>(list: readonly T[], item: T): readonly T[] =>
   list.includes(item) ? list.filter((other) => other !== item) : [...list, item];
+
+/** Whether another part of the screen points at a unit or stream: it is drawn as if selected. */
+export const isPointed = ({ pointed }: SessionState, id: UnitId | StreamId): boolean =>
+  pointed !== null && ('unit' in pointed ? pointed.unit : pointed.stream) === id;
 
 /** Adds a stream to the selection or takes it out; what is open in the drawer stays. */
 export function toggleStream({ session }: Stores, id: StreamId): void {

@@ -13,6 +13,8 @@ export interface SheetHandle {
   zoom(): number;
   /** Moves the view no further than needed to have a point well in it. */
   reveal(at: Point): void;
+  /** Brings a point to the middle of the view; the zoom stays. */
+  centre(at: Point): void;
   /** Middle of the view, in sheet coordinates. */
   middle(): Point;
   /** A place on the screen, in sheet coordinates; null outside the sheet. */

@@ -76,6 +76,10 @@ export function createView(
       put(at, zoom);
       isFitted = true;
     },
+    centre(at) {
+      isFitted = false;
+      put(at, flow.getZoom());
+    },
     reveal(at) {
       const [w, h] = size();
       const { x, y } = toView(at);

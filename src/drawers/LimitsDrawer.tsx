@@ -2,7 +2,7 @@ import type { Finding, Weight } from '../engine/outcome';
 import { LimitMark, weightWord, worstFirst } from '../parts/LimitMark';
 import { useMeasures } from '../parts/measures';
 import { useKinds } from '../store/kinds';
-import { useCompiled, useResults, useSketch, useStores } from '../store/react';
+import { useCompiled, useResults, useSession, useSketch, useStores } from '../store/react';
 import { Head } from './Head';
 import { LimitRuler, rulerOf } from './LimitRuler';
 import { useSay } from './useSay';
@@ -100,9 +100,10 @@ function LimitRow({ finding }: { readonly finding: Finding }) {
   });
   const { title, sentence, next, basis } = useSay()(finding);
   const ruler = rulerOf(finding, measures);
+  const zone = useSession((state) => state.zones.get(unit ?? stream ?? ''));
   const show = (): void => {
-    if (unit) session.setState({ units: [unit], streams: [] });
-    else if (stream) session.setState({ units: [], streams: [stream] });
+    if (unit) session.centre({ unit });
+    else if (stream) session.centre({ stream });
   };
   const open = (): void => {
     if (unit) session.select([unit]);
@@ -110,11 +111,22 @@ function LimitRow({ finding }: { readonly finding: Finding }) {
   };
   return (
     <li className="limit" data-weight={finding.weight} data-code={finding.code}>
-      <button type="button" className="limit-head" title="Select on the sheet" onClick={show}>
+      <button
+        type="button"
+        className="limit-head"
+        title="Select and show in the middle of the sheet"
+        onClick={show}
+      >
         <LimitMark weight={finding.weight} />
         <span>
           <b>{place ?? 'Sketch'}</b> {title}, {weightWord(finding.weight)}
         </span>
+        {zone ? (
+          <span className="zone" title="Zone of the sheet">
+            <span className="unseen">, zone </span>
+            {zone}
+          </span>
+        ) : null}
       </button>
       <p>{sentence}</p>
       {ruler ? <LimitRuler {...ruler} weight={finding.weight} /> : null}

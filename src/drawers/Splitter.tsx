@@ -1,30 +1,16 @@
 import { useState, useSyncExternalStore } from 'react';
+import { remember, remembered, type WindowClass, windowClass } from '../store/remembered';
 
 const [LEAST, MOST, USUAL, SMALL] = [320, 560, 368, 304];
-const SMALL_SCREEN_PX = 1100;
-const KEY = 'splitwright.drawer-width';
 
 const onResize = (then: () => void): (() => void) => {
   window.addEventListener('resize', then);
   return () => window.removeEventListener('resize', then);
 };
 
-function stored(): number | undefined {
-  try {
-    const px = Number(localStorage.getItem(KEY));
-    return px >= LEAST && px <= MOST ? px : undefined;
-  } catch (error) {
-    if (error instanceof DOMException) return undefined;
-    throw error;
-  }
-}
-
-function remember(px: number): void {
-  try {
-    localStorage.setItem(KEY, String(px));
-  } catch (error) {
-    if (!(error instanceof DOMException)) throw error;
-  }
+function stored(at: WindowClass): number {
+  const px = Number(remembered(`drawer-width.${at}`));
+  return px >= LEAST && px <= MOST ? px : USUAL;
 }
 
 export interface DrawerWidth {
@@ -33,17 +19,17 @@ export interface DrawerWidth {
   readonly set: ((px: number) => void) | undefined;
 }
 
-/** The drawer's width, remembered on this computer; fixed on small screens. */
+/** The drawer's width, remembered on this computer for each class of window width; fixed in small windows. */
 export function useDrawerWidth(): DrawerWidth {
-  const isSmall = useSyncExternalStore(onResize, () => window.innerWidth <= SMALL_SCREEN_PX);
-  const [px, setPx] = useState(() => stored() ?? USUAL);
-  if (isSmall) return { px: SMALL, set: undefined };
+  const at = useSyncExternalStore(onResize, () => windowClass(window.innerWidth));
+  const [chosen, setChosen] = useState(() => ({ at, px: stored(at) }));
+  if (at === 'small') return { px: SMALL, set: undefined };
   return {
-    px,
+    px: chosen.at === at ? chosen.px : stored(at),
     set: (next) => {
-      const within = Math.round(Math.min(MOST, Math.max(LEAST, next)));
-      setPx(within);
-      remember(within);
+      const px = Math.round(Math.min(MOST, Math.max(LEAST, next)));
+      setChosen({ at, px });
+      remember(`drawer-width.${at}`, String(px));
     },
   };
 }

@@ -53,6 +53,21 @@ describe('the balance', () => {
     expect(page.stores.session.getState().streams).toEqual(['s1']);
   });
 
+  test('points at a stream while the pointer or the focus is on its piece, and selects nothing by that', () => {
+    const page = open([['s1', solvedStream()]], closure);
+    const pointed = () => page.stores.session.getState().pointed;
+    const piece = screen.getByRole('button', { name: /Condensate/ });
+    fireEvent.pointerEnter(piece);
+    expect(pointed()).toEqual({ stream: 's1' });
+    expect(page.stores.session.getState().streams).toEqual([]);
+    fireEvent.pointerLeave(piece);
+    expect(pointed()).toBeNull();
+    fireEvent.focus(piece);
+    expect(pointed()).toEqual({ stream: 's1' });
+    act(() => page.stores.results.clear());
+    expect(pointed()).toBeNull();
+  });
+
   test('leaves the line open, with names and the cause, while something is not known', () => {
     const page = open([['s1', { state: 'waiting' }]], undefined);
     act(() =>

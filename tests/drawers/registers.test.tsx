@@ -45,6 +45,21 @@ describe('the limits drawer', () => {
     expect(page.stores.session.getState().drawer).toEqual({ is: 'limits' });
   });
 
+  test('tells the zone, and asks the sheet to bring the unit to its middle', () => {
+    const page = openDrawer('limits', ({ stores }) => {
+      stores.results.setState({ findings: [finding('caution', 'u3')] });
+      stores.session.setState({ zones: new Map([['u3', 'C4']]) });
+    });
+    expect(document.querySelector('.limit .zone')?.textContent).toBe(', zone C4');
+    const row = screen.getByRole('button', { name: /V-101.*, zone\s*C4/ });
+    fireEvent.click(row);
+    const asked = page.stores.session.getState().centred;
+    expect(asked?.thing).toEqual({ unit: 'u3' });
+    fireEvent.click(row);
+    expect(page.stores.session.getState().centred).not.toBe(asked);
+    expect(page.stores.session.getState().drawer).toEqual({ is: 'limits' });
+  });
+
   test('keeps what is noted about the sketch apart from the limits', () => {
     openDrawer('limits', ({ stores }) => {
       stores.results.setState({ findings: [finding('caution', 'u2')] });
