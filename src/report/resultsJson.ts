@@ -121,6 +121,7 @@ function streamRecord(
     z: byId(result.z),
     phases: result.phases.map((phase) => phaseRecord(phase, byId)),
     ...(result.hiddenLiquid ? { hiddenLiquid: byId(result.hiddenLiquid) } : {}),
+    ...(result.liquidsTogether ? { liquidsTogether: true } : {}),
   };
 }
 

@@ -78,7 +78,8 @@ const stateWord = (input: ReportInput, stream: SketchStream | undefined): string
   stream && input.streams.get(stream.id)?.state === 'no-solution' ? 'no solution' : 'waiting';
 const secondLiquid = (stream: SolvedStream | undefined): Cell => {
   if (!stream) return absent;
-  if (stream.hiddenLiquid) return text('found: one liquid shown');
+  if (stream.hiddenLiquid)
+    return text(stream.liquidsTogether ? 'found: both told as one' : 'found: one liquid shown');
   return text(stream.phases.some((p) => p.kind === 'liquid' && p.fraction > 0) ? 'none found' : '–');
 };
 

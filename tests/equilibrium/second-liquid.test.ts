@@ -2,6 +2,7 @@ import { describe, expect, test } from 'vitest';
 import { flash, makeFlashWork } from '../../src/engine/equilibrium/flash';
 import type { Condition, FlashAnswer } from '../../src/engine/equilibrium/types';
 import type { Outcome } from '../../src/engine/outcome';
+import { sayFinding } from '../../src/wording';
 import { bankModel } from '../robust/bankModels';
 
 async function ask(
@@ -17,6 +18,9 @@ const got = (outcome: Outcome<FlashAnswer>): FlashAnswer => {
   return outcome.value;
 };
 
+const said = (outcome: Outcome<FlashAnswer>): string =>
+  sayFinding(outcome.findings[0]!, { measures: 'metric' }).sentence;
+
 describe('a second liquid is never hidden', () => {
   test('water with as much n-hexane at room temperature is liquid, and two of them', async () => {
     const outcome = await ask(['water', 'n-hexane'], [0.5, 0.5], { T_K: 298.15, P_Pa: 101325 });
@@ -27,6 +31,9 @@ describe('a second liquid is never hidden', () => {
     expect(outcome.findings.map((finding) => [finding.code, finding.weight])).toEqual([
       ['equilibrium/second-liquid', 'caution'],
     ]);
+    expect(said(outcome)).toContain(
+      'those of both liquids together, and the composition is that of the whole',
+    );
     // The enthalpy is that of the two pure liquids, nearly: they hardly mix. Derived from two more flashes.
     const alone = await Promise.all(
       ['water', 'n-hexane'].map(async (id) => got(await ask([id], [1], { T_K: 298.15, P_Pa: 101325 }))),
@@ -43,6 +50,8 @@ describe('a second liquid is never hidden', () => {
     expect(answer.phases.map((phase) => phase.kind)).toEqual(['vapour', 'liquid']);
     expect(answer.hiddenLiquid![3]).toBeGreaterThan(0.99);
     expect(outcome.findings[0]!.evidence[0]!.text).toBe('water');
+    expect(answer.liquidsTogether).toBeUndefined();
+    expect(said(outcome)).toContain('the numbers are for one liquid');
   });
 
   test.each([
@@ -56,13 +65,13 @@ describe('a second liquid is never hidden', () => {
   });
 
   test('a trace of water in oil is said once it is more than dissolves', async () => {
-    const said = async (water: number): Promise<boolean> => {
+    const isSaid = async (water: number): Promise<boolean> => {
       const at = { T_K: 298.15, P_Pa: 1e6 };
       const outcome = await ask(['n-octane', 'n-decane', 'water'], [0.5, 0.5 - water, water], at);
       return got(outcome).hiddenLiquid !== undefined;
     };
-    expect(await said(1e-9)).toBe(false);
-    expect(await said(1e-2)).toBe(true);
+    expect(await isSaid(1e-9)).toBe(false);
+    expect(await isSaid(1e-2)).toBe(true);
   });
 
   test('heating through the three-phase point of water and n-hexane is continuous in enthalpy', async () => {

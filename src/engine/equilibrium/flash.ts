@@ -157,10 +157,13 @@ function reason(end: Exclude<FlashEnd, 'solved'>, at: Condition, w: FlashWork, w
   return { code: CODES[end], weight: 'beyond-limit', at: where, evidence };
 }
 
-/** "Another liquid may form here; the numbers are for one liquid." */
+/**
+ * "Another liquid may form here": the numbers are for one liquid or, where the evidence has 'together', the properties are those
+ * of both.
+ */
 export function secondLiquid(
   model: ThermoModel,
-  state: { readonly T_K: number; readonly P_Pa: number },
+  state: Pick<FlashAnswer, 'T_K' | 'P_Pa' | 'liquidsTogether'>,
   x: Float64Array,
   where: Place,
 ): Finding {
@@ -174,6 +177,7 @@ export function secondLiquid(
       { name: 'chemical', value: x[most]!, dim: 'fraction', text: model.chemicals[most]!.id },
       { name: 'temperature', value: state.T_K, dim: 'temperature' },
       { name: 'pressure', value: state.P_Pa, dim: 'pressure' },
+      ...(state.liquidsTogether ? [{ name: 'together', value: 2, dim: 'number' } as const] : []),
     ],
   };
 }

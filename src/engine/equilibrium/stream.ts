@@ -74,7 +74,10 @@ export function streamOfPhase(stream: StreamState, phase: Phase): StreamState {
     phases: flows ? [{ ...phase, fraction: 1 }] : [],
     vapourFraction: flows ? vapourFraction : 0,
     ...(stream.hiddenLiquid !== undefined && phase.kind !== 'vapour'
-      ? { hiddenLiquid: stream.hiddenLiquid }
+      ? {
+          hiddenLiquid: stream.hiddenLiquid,
+          ...(stream.liquidsTogether ? { liquidsTogether: true as const } : {}),
+        }
       : {}),
     residual: stream.residual,
     iterations: 0,
@@ -129,6 +132,7 @@ function expand(
     phases: phases.map((phase, k) => ({ ...phase, x: full(phase.x), n_mol_s: flows[k]! })),
     vapourFraction: answer.vapourFraction,
     ...(answer.hiddenLiquid ? { hiddenLiquid: full(answer.hiddenLiquid) } : {}),
+    ...(answer.liquidsTogether ? { liquidsTogether: true as const } : {}),
     residual: answer.residual,
     iterations: answer.iterations,
   };

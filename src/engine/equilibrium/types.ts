@@ -106,6 +106,8 @@ export interface StreamState {
   readonly vapourFraction: number;
   /** A stability test found another liquid; full list. */
   readonly hiddenLiquid?: Float64Array;
+  /** The liquid among the phases is two liquids told together, as in a flash's answer. Only together with hiddenLiquid. */
+  readonly liquidsTogether?: true;
   readonly residual: number;
   readonly iterations: number;
 }

@@ -108,5 +108,6 @@ export function describe(stream: StreamState, model: Model, data: ClosureData): 
     ...(standard === undefined ? {} : { standardLiquid_m3_s: standard }),
     phases,
     ...(stream.hiddenLiquid ? { hiddenLiquid: stream.hiddenLiquid } : {}),
+    ...(stream.liquidsTogether ? { liquidsTogether: true } : {}),
   };
 }

@@ -89,6 +89,8 @@ export type StreamResult =
       readonly standardLiquid_m3_s?: number;
       readonly phases: readonly PhaseResult[];
       readonly hiddenLiquid?: Float64Array;
+      /** The liquid is two liquids told together: enthalpy and entropy of both, composition of the whole. */
+      readonly liquidsTogether?: true;
     };
 
 /** How a loop was solved; the same for all of its units. */

@@ -7,6 +7,11 @@ export const STREAM_SENTENCES: Readonly<Record<string, Sentence>> = {
     says: 'The stability test finds another liquid, mostly {chemical}. The numbers are for one liquid.',
     next: 'Do not rely on the liquid figures of this stream; a model for two liquids is needed.',
   },
+  'stream/liquids-together': {
+    title: 'Two liquids',
+    says: 'This liquid parts into two, one of them mostly {chemical}. Enthalpy and entropy are those of both liquids together; the composition is that of the whole.',
+    next: 'Do not rely on density, viscosity or the composition of either liquid; a model for two liquids is needed.',
+  },
   'stream/water-above-solubility': {
     title: 'Water may part from the liquid',
     says: 'The hydrocarbon liquid holds {fraction%} water; at {temperature} it dissolves about {dissolves%}. The numbers are for one liquid.',

@@ -1,4 +1,4 @@
-import { andList, type Slots, type Words } from './slots';
+import { andList, capital, type Slots, type Words } from './slots';
 
 const ASKED: readonly (readonly [name: string, words: string])[] = [
   ['temperature', 'a temperature of'],
@@ -53,8 +53,14 @@ export const EQUILIBRIUM_WORDS: Readonly<Record<string, Words>> = {
   },
   'equilibrium/second-liquid': {
     title: 'Another liquid may form',
-    sentence: (s) =>
-      `${s.has('temperature') ? `At ${s.number('temperature')} and ${s.number('pressure')} another` : 'Another'} liquid may form, mostly ${s.chemical()}; the numbers are for one liquid.`,
+    sentence: (s) => {
+      const where = s.has('temperature') ? `at ${s.number('temperature')} and ${s.number('pressure')} ` : '';
+      return s.has('together')
+        ? capital(
+            `${where}the liquid parts into two, one of them mostly ${s.chemical()}; enthalpy and entropy are those of both liquids together, and the composition is that of the whole.`,
+          )
+        : capital(`${where}another liquid may form, mostly ${s.chemical()}; the numbers are for one liquid.`);
+    },
     next: () => 'Do not rely on the liquid’s figures; a model with two liquids is needed.',
   },
   'equilibrium/no-entropy': {

@@ -11,6 +11,7 @@ const HYDRATES = rule('stream/hydrates-not-checked', 'note', 0.5, 'fraction');
 const NEAR_CRITICAL = rule('stream/near-critical', 'caution', 4, 'number');
 const TOO_NEAR_CRITICAL = rule('stream/too-near-critical', 'beyond-limit', 2.5, 'number');
 const SECOND_LIQUID = rule('stream/second-liquid', 'caution', 0, 'number', 'phase-stability');
+const LIQUIDS_TOGETHER = rule('stream/liquids-together', 'caution', 0, 'number', 'phase-stability');
 export const CONDITION_RULES: readonly Rule[] = [
   COLD,
   TOO_COLD,
@@ -19,6 +20,7 @@ export const CONDITION_RULES: readonly Rule[] = [
   NEAR_CRITICAL,
   TOO_NEAR_CRITICAL,
   SECOND_LIQUID,
+  LIQUIDS_TOGETHER,
 ];
 
 /** Plain carbon steel turns brittle in the cold. */
@@ -76,7 +78,10 @@ export function nearCritical({ stream, overrides, at, model }: StreamContext): F
   return broken ? [finding(broken, at, [saw('densityRatio', ratio, 'number')], overrides)] : [];
 }
 
-/** The stability test found another liquid, so the numbers are for one liquid only. */
+/**
+ * The stability test found another liquid: the numbers are for one liquid only, or the liquid's properties are those of both
+ * together.
+ */
 export function secondLiquid({ stream, overrides, at, model }: StreamContext): Finding[] {
   if (!stream.hiddenLiquid) return [];
   let most = 0;
@@ -89,5 +94,5 @@ export function secondLiquid({ stream, overrides, at, model }: StreamContext): F
     dim: 'fraction',
     text: model.chemicals[most]!.id,
   } as const;
-  return [finding(SECOND_LIQUID, at, [seen], overrides)];
+  return [finding(stream.liquidsTogether ? LIQUIDS_TOGETHER : SECOND_LIQUID, at, [seen], overrides)];
 }

@@ -10,6 +10,7 @@ import { FREEZING_RULES, freezing } from './freezing';
 /** Codes any stream may carry, whatever unit it leaves. */
 export const STREAM_FINDINGS = [
   'stream/second-liquid',
+  'stream/liquids-together',
   'stream/water-above-solubility',
   'stream/may-freeze',
   'stream/freezes-mostly',
