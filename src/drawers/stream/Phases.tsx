@@ -82,7 +82,11 @@ export function Phases({ stream, outOfDate }: Props) {
       {stream.hiddenLiquid ? (
         <p className="said">
           <LimitMark weight="caution" />
-          <span>A second liquid would form here. The numbers are for one liquid.</span>
+          <span>
+            {stream.liquidsTogether
+              ? 'This liquid parts into two. Enthalpy and entropy are those of both together, the composition is that of the whole.'
+              : 'A second liquid would form here. The numbers are for one liquid.'}
+          </span>
         </p>
       ) : null}
       {phases.length > 1 ? <PhaseCompositions stream={stream} /> : null}

@@ -1,8 +1,8 @@
-import type { CorrProperty } from '../../chemicals/types';
+import type { ChemicalData, CorrProperty } from '../../chemicals/types';
 import type { Finding } from '../../outcome';
 import { outside_K } from '../../thermo/pure/curve';
 import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
-import type { StreamContext } from './context';
+import { flowing, type StreamContext } from './context';
 
 /** Distance outside a correlation's own range [K]: any, from the first threshold, from the second. */
 const OUTSIDE = rule('stream/outside-correlation', 'note', 0, 'temperatureDifference', 'table-range');
@@ -24,6 +24,8 @@ export const CORRELATION_RULES: readonly Rule[] = [OUTSIDE, WELL_OUTSIDE, FAR_OU
 
 /** Less than this of a chemical moves nothing that is shown [-]. */
 const COUNTS = 1e-4;
+/** Less than this of a chemical in a liquid moves its density by less than the method is off anyway [-]. */
+const WEIGHS = 1e-2;
 
 /** What the model reads at the stream's temperature. Raoult's law stands on vapour pressures, equations of state do not. */
 function propertiesRead(c: StreamContext): readonly CorrProperty[] {
@@ -32,21 +34,43 @@ function propertiesRead(c: StreamContext): readonly CorrProperty[] {
   return c.model.spec.liquidH === 'hvap' ? [...both, 'enthalpy_of_vaporization'] : both;
 }
 
-/** The worst correlation of the stream; a gas alone reads no vapour pressure. */
-export function correlationRange(c: StreamContext): Finding[] {
-  const { stream, overrides, at, model } = c;
+/** Densities are read for a liquid, unless an equation of state takes its own. */
+const readsDensity = ({ model: { spec } }: StreamContext): boolean =>
+  spec.kind === 'raoult' || spec.liquidVolume === 'corrected';
+
+interface Outside {
+  readonly id: string;
+  readonly property: CorrProperty;
+  readonly distance_K: number;
+}
+
+/** The worst of the correlations that a stream reads; undefined when all hold. */
+function worstOf(c: StreamContext): Outside | undefined {
+  const { stream, model } = c;
   let total = 0;
   for (const n of stream.n_mol_s) total += n;
   const gasOnly = stream.phases.every((p) => p.kind === 'vapour');
   const properties = gasOnly ? (['ideal_gas_cp'] as const) : propertiesRead(c);
-  let worst: { id: string; property: CorrProperty; distance_K: number } | undefined;
+  const liquid = readsDensity(c) ? flowing(stream, 'liquid') : undefined;
+  let worst: Outside | undefined;
+  const look = (chemical: ChemicalData, property: CorrProperty): void => {
+    const distance_K = outside_K(chemical.corr[property] ?? [], stream.T_K);
+    if (distance_K > (worst?.distance_K ?? 0)) worst = { id: chemical.id, property, distance_K };
+  };
   model.chemicals.forEach((chemical, i) => {
     if (stream.n_mol_s[i]! < COUNTS * total || stream.n_mol_s[i] === 0) return;
-    for (const property of properties) {
-      const distance_K = outside_K(chemical.corr[property] ?? [], stream.T_K);
-      if (distance_K > (worst?.distance_K ?? 0)) worst = { id: chemical.id, property, distance_K };
-    }
+    for (const property of properties) look(chemical, property);
+    // A gas dissolved above its critical temperature has no density as a liquid that could be missed.
+    const hasLiquid = !(chemical.Tc_K !== undefined && stream.T_K >= chemical.Tc_K);
+    if (liquid && hasLiquid && liquid.x[i]! >= WEIGHS) look(chemical, 'liquid_density');
   });
+  return worst;
+}
+
+/** The worst correlation of the stream; a gas alone reads no vapour pressure and no liquid density. */
+export function correlationRange(c: StreamContext): Finding[] {
+  const { stream, overrides, at } = c;
+  const worst = worstOf(c);
   if (!worst || worst.distance_K <= thresholdOf(OUTSIDE, overrides)) return [];
   const distance = worst.distance_K;
   const at_least = (r: Rule): boolean => distance >= thresholdOf(r, overrides);
