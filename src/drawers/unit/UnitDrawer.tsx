@@ -51,7 +51,7 @@ export function UnitDrawer({ id }: { readonly id: UnitId }) {
   if (!unit) return null;
   const head = (
     <Head
-      label={`${capital(kindWord(unit.kind))} ${unit.tag}`}
+      label={`${capital(kindWord(unit.kind, unit.settings.service))} ${unit.tag}`}
       title={<Names unit={unit} />}
       sentence={
         kind
@@ -108,7 +108,7 @@ function Names({ unit }: { readonly unit: SketchUnit }) {
         label="Name"
         path="name"
         value={unit.name ?? ''}
-        placeholder={capital(kindWord(unit.kind))}
+        placeholder={capital(kindWord(unit.kind, unit.settings.service))}
         disabled={!writable}
         onCommit={(text) => run(sketch, (s) => setUnitName(s, unit.id, text))}
       />

@@ -1,4 +1,5 @@
 import { noSolution, type Outcome, solved } from '../outcome';
+import { preparePure } from '../thermo/pure/pure';
 import type { Call, CompositionSI } from './types';
 
 type Preset = Extract<CompositionSI, { is: 'preset' }>;
@@ -13,7 +14,7 @@ export const DRY_AIR = { N2: 0.7808, O2: 0.2095, Ar: 0.0093, CO2: 0.0004 } as co
 export const SIMPLE_AIR = { N2: 0.79, O2: 0.21 } as const;
 
 /**
- * Mole fractions of an air preset over the full list. Humid air: water's share is its vapour pressure at T times the relative
+ * Mole fractions of an air preset over the full list. Humid air: water's share is its vapour pressure at T (by its correlation) times the relative
  * humidity over P, the rest is dry air in proportion.
  *
  * @returns fractions that sum to 1, or the reason why there are none: conditions missing, a chemical not in the list, or more
@@ -37,7 +38,10 @@ export function airFractions(
         evidence: [],
       });
     if (air.at.H2O < 0) return missing(call, 'H2O');
-    const Psat = call.model.of([air.at.H2O]).saturationP_Pa(0, at.T);
+    // Humidity is a measured thing: the correlation of water's vapour pressure says how much water the air holds, not the model
+    // of the sketch, whose own saturation pressure may be off by a tenth and more.
+    const water = call.model.chemicals[air.at.H2O]!;
+    const Psat = preparePure(water).psat?.(at.T) ?? call.model.of([air.at.H2O]).saturationP_Pa(0, at.T);
     if (Psat === undefined)
       return noSolution({
         code: 'feed/water-data-missing',
