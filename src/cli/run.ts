@@ -1,8 +1,8 @@
 import { createHash } from 'node:crypto';
 import { mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { basename, join } from 'node:path';
-import { fileURLToPath } from 'node:url';
 import { bank } from '../data/bank';
+import { type Kinds, KNOWN_KINDS } from '../engine/network/kinds';
 import { makeMemory } from '../engine/network/memory';
 import { solveNetwork } from '../engine/network/solve';
 import type { SolveBatch } from '../engine/network/types';
@@ -28,7 +28,7 @@ export interface Voice {
   err(line: string): void;
 }
 
-const HERE = fileURLToPath(new URL('../..', import.meta.url));
+const HERE = join(import.meta.dirname, '../..');
 const version = (): string => JSON.parse(readFileSync(join(HERE, 'package.json'), 'utf8')).version;
 const font = (name: string): string => join(HERE, 'public/fonts', name);
 
@@ -95,14 +95,20 @@ function readSketch(file: string, orders: Orders, voice: Voice): Sketch | undefi
 
 const NOT_AVAILABLE = ['sketch/kind-not-available', 'sketch/model-not-available'];
 
-/** Compiles and solves once, from nothing. `available` lists kinds or models that this version does not have. */
+/** Compiles and solves once, from nothing, with the kinds of unit that are known. `available` lists kinds or models that this version does not have. */
 export async function solveSketch(
   sketch: Sketch,
+  kinds: Kinds = KNOWN_KINDS,
 ): Promise<{ readonly input: ReportInput; readonly available: readonly string[] }> {
-  const { basis, problem, gaps, notes, assumptions } = compile(sketch, await loadBankData(sketch));
+  const { basis, problem, gaps, notes, assumptions } = compile(
+    sketch,
+    await loadBankData(sketch, kinds.catalogue),
+    1,
+    { registry: kinds.catalogue },
+  );
   const missing = [...gaps, ...notes].filter((f) => NOT_AVAILABLE.includes(f.code)).map(missingText);
   const empty: SolveBatch = { streams: [], units: [], gone: [], findings: [] };
-  const batch = basis ? solveAll(basis, problem) : empty;
+  const batch = basis ? solveAll(basis, problem, kinds) : empty;
   const input: ReportInput = {
     sketch,
     basis: basis ?? { id: '', chemicals: [], model: NO_MODEL },
@@ -114,6 +120,7 @@ export async function solveSketch(
     assumptions,
     citations: await bank.sources(),
     sitePressure_Pa: problem.site.pressure_Pa,
+    kinds: kinds.catalogue,
     version: version(),
     fingerprint: fingerprint(writeSketch(sketch)),
     day: process.env.SPLITWRIGHT_DAY ?? new Date().toISOString().slice(0, 10),
@@ -136,8 +143,9 @@ const missingText = (finding: Finding): string =>
 function solveAll(
   basis: NonNullable<ReturnType<typeof compile>['basis']>,
   problem: ReturnType<typeof compile>['problem'],
+  kinds: Kinds,
 ): SolveBatch {
-  const steps = solveNetwork(problem, makeMemory(basis), { from: 'nothing' });
+  const steps = solveNetwork(problem, makeMemory(basis), { from: 'nothing', kinds });
   let step = steps.next();
   while (!step.done) step = steps.next();
   return step.value;

@@ -1,5 +1,6 @@
 import type { StreamResult, UnitResult } from '../engine/network/types';
 import { CATALOGUE } from '../engine/units/catalogue';
+import type { KindCatalogue } from '../engine/units/types';
 import { type Dimension, displayUnit, type Measures, show } from '../quantity';
 import type { LabelKey } from '../sketch/types';
 import type { LabelRow } from './types';
@@ -55,8 +56,9 @@ export const linkText = (
   kind: string,
   result: Pick<UnitResult, 'heat_W' | 'power_W'>,
   measures: Measures,
+  kinds: Readonly<Record<string, Pick<KindCatalogue, 'group'>>> = CATALOGUE,
 ): string =>
-  CATALOGUE[kind]?.group === 'rotating'
+  kinds[kind]?.group === 'rotating'
     ? powerText(result.power_W ?? 0, measures)
     : dutyText(result.heat_W ?? 0, measures);
 

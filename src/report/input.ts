@@ -2,6 +2,7 @@ import { measuresOf as sketchMeasures, withReference } from '../drawing/measures
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Basis, Closure, StreamResult, UnitResult } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
+import type { KindCatalogue } from '../engine/units/types';
 import type { Measures } from '../quantity';
 import type { Assumption, Sketch } from '../sketch/types';
 
@@ -25,6 +26,8 @@ export interface ReportInput {
   readonly fingerprint: string;
   /** ISO day the document was made on; handed in, so that two runs give the same bytes. */
   readonly day: string;
+  /** The kinds of unit that are known; the catalogue when absent. */
+  readonly kinds?: Readonly<Record<string, KindCatalogue>>;
   /** The clean answer differed from the live one. */
   readonly severalAnswers?: boolean;
 }

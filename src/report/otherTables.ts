@@ -70,7 +70,7 @@ function resultText(
   const measures = measuresOf(input);
   return Object.entries(results)
     .flatMap(([key, value]) => {
-      const word = resultWord(kind, key);
+      const word = resultWord(kind, key, input.kinds);
       if (!word || typeof value !== 'number' || key === 'duty_W' || key === 'power_W') return [];
       const { number: figure, unit } = show(value, word.dim, measures);
       return [`${word.label} ${figure}${unit ? ` ${unit}` : ''}`];

@@ -32,7 +32,14 @@ export function reportScene(input: ReportInput): Scene {
   for (const unit of sketch.units) {
     const result = input.units.get(unit.id);
     states.set(unit.id, result?.state ?? 'waiting');
-    if (result?.heat_W || result?.power_W) duties.set(unit.id, linkText(unit.kind, result, measures));
+    if (result?.heat_W || result?.power_W)
+      duties.set(unit.id, linkText(unit.kind, result, measures, input.kinds));
   }
-  return buildScene(sketch, { states, limits: worstByUnit(input), labels, duties });
+  return buildScene(sketch, {
+    states,
+    limits: worstByUnit(input),
+    labels,
+    duties,
+    ...(input.kinds ? { kinds: input.kinds } : {}),
+  });
 }

@@ -21,8 +21,10 @@ export function findingWords(finding: Finding, input: ReportInput): Said {
 export function resultWord(
   kind: string,
   key: string,
+  kinds: NonNullable<ReportInput['kinds']> = CATALOGUE,
 ): { readonly label: string; readonly dim: Dimension } | undefined {
-  const spec = CATALOGUE[kind]?.results[key];
+  const results = Object.hasOwn(kinds, kind) ? kinds[kind]?.results : undefined;
+  const spec = results && Object.hasOwn(results, key) ? results[key] : undefined;
   return spec && !spec.hidden ? { label: labelOf(kind, key), dim: spec.dim } : undefined;
 }
 
