@@ -4,11 +4,11 @@ import { Segmented } from '../../parts/Segmented';
 import { useStores } from '../../store/react';
 import { endWords } from '../../wording';
 import { Fields } from '../unit/Fields';
-import { useForm } from '../unit/form';
+import { type Form, FormProvider, useForm } from '../unit/form';
 import { FieldFindings, SettingRow } from '../unit/SettingRow';
 import { WholeField } from '../unit/WholeField';
 import { Efficiency } from './Efficiency';
-import { setDistillate } from './ends';
+import { setDistillate, setReboiler } from './ends';
 import { FixedBy } from './FixedBy';
 import { Feeds, SideDraws } from './Ports';
 import './column.css';
@@ -87,6 +87,7 @@ function Distillate() {
 
 function Reboiler() {
   const form = useForm();
+  const { sketch } = useStores();
   const value = form.value('bottom.reboiler');
   return (
     <SettingRow label="Bottom" path="bottom.reboiler">
@@ -101,7 +102,7 @@ function Reboiler() {
             { value: 'none', text: 'none' },
           ]}
           onChange={(next) =>
-            form.set([{ path: 'bottom.reboiler', value: next === 'reboiler' }], `set ${form.unit.tag} bottom`)
+            sketch.apply(`set ${form.unit.tag} bottom`, setReboiler(form.unit.id, next === 'reboiler'))
           }
         />
       </span>
@@ -124,14 +125,35 @@ function Pressure() {
       ([key]) => (there[key] ?? true) || form.value(`pressure.${key}`) !== undefined,
     ),
   );
+  const unused = Object.keys(there).filter((end) => !there[end] && Object.hasOwn(fields, end));
   return (
     <fieldset className="group">
       <legend>Pressure</legend>
-      <Fields fields={fields} base="pressure" choose={spec.choose} />
+      <FormProvider value={withPressureWords(form)}>
+        <Fields fields={fields} base="pressure" choose={spec.choose} />
+      </FormProvider>
+      {unused.map((end) => (
+        <p key={end} className="field-note">
+          There is no {end}: its pressure is kept and not used.
+        </p>
+      ))}
       <FieldFindings path="pressure" />
     </fieldset>
   );
 }
+
+/** Short ones: they stand under "pressure". */
+const PRESSURES: Readonly<Record<string, string>> = {
+  'pressure.condenser': 'condenser pressure',
+  'pressure.top': 'top pressure',
+  'pressure.bottom': 'bottom pressure',
+  'pressure.perStage': 'drop a stage',
+  'pressure.reboiler': 'reboiler pressure',
+};
+const withPressureWords = (form: Form): Form => ({
+  ...form,
+  word: (path) => PRESSURES[path] ?? form.word(path),
+});
 
 const fieldOf = (spec: SettingSpec | undefined, key: string): SettingSpec | undefined =>
   spec?.is === 'record' ? (spec.fields as Fielded)[key] : undefined;

@@ -1,9 +1,9 @@
 import { useMemo, useState } from 'react';
 import type { Finding } from '../../engine/outcome';
-import { bothDuties, conflictsOf, countMiss, type FixedView } from '../../engine/units/column/free';
+import { conflictsOf, countMiss, type FixedView } from '../../engine/units/column/free';
 import type { Json } from '../../sketch/types';
-import { FormProvider, useForm } from '../unit/form';
-import { FieldFindingList, FieldFindings } from '../unit/SettingRow';
+import { type Form, FormProvider, useForm } from '../unit/form';
+import { FieldFindings } from '../unit/SettingRow';
 import { capital } from '../words';
 import { type Draft, draftForm } from './draft';
 import { FixingRow } from './FixingRow';
@@ -12,7 +12,8 @@ import { useFixingWords } from './words';
 
 /** What fixes the column: one row each, how many of how many, and what contradicts what before anything is solved. */
 export function FixedBy() {
-  const form = useForm();
+  const plain = useForm();
+  const form = useMemo(() => ({ ...plain, findings: knownAtOnce(plain) }), [plain]);
   const words = useFixingWords();
   const view = form.unit.settings as FixedView;
   const items = useMemo(() => {
@@ -24,8 +25,6 @@ export function FixedBy() {
   const [draft, setDraft] = useState<Draft | null>(null);
   const isStale = draft !== null && draft.row > items.length;
   if (isStale) setDraft(null);
-  const conflicts = conflictsOf(view, sides);
-  const miss = countMiss(view);
 
   const put = (row: number, item: Json, label: string): void => {
     setDraft(null);
@@ -35,7 +34,7 @@ export function FixedBy() {
   const take = (row: number): void => {
     setDraft(null);
     form.set(
-      [{ path: `fixedBy.${row}`, value: undefined }],
+      [{ path: 'fixedBy', value: items.filter((_, k) => k !== row) }],
       `take away ${form.unit.tag} ${words.offer(offerKey((items[row] ?? {}) as object))}`,
     );
   };
@@ -45,7 +44,6 @@ export function FixedBy() {
   };
   const rowOf = (row: number) => {
     const pending = draft?.row === row ? draft : null;
-    const here = conflicts.filter(({ at }) => at.path?.split('.')[1] === String(row));
     const old = items[row];
     return (
       <FormProvider
@@ -69,7 +67,6 @@ export function FixedBy() {
           stays={pending && old !== undefined ? words.item(old) : undefined}
           leave={pending ? () => setDraft(null) : undefined}
         />
-        {pending ? null : <FieldFindingList findings={withUnit(here, form.unit.id)} />}
       </FormProvider>
     );
   };
@@ -93,25 +90,28 @@ export function FixedBy() {
       {free === 0 && rows === 0 ? (
         <p className="muted">Without ends nothing is free: feeds, stages and pressures fix this column.</p>
       ) : null}
-      {miss?.code === 'column/fixed-too-many' ? (
-        <p className="field-note">
-          {free === 0
-            ? 'Without ends nothing is free; take these away.'
-            : `Only ${free} ${free === 1 ? 'is' : 'are'} free with these ends; take one away.`}
-        </p>
-      ) : null}
-      {bothDuties(view) ? (
-        <p className="field-note">
-          With both duties given the balance is said nearly twice: a small change of one moves everything.
-        </p>
-      ) : null}
-      <FieldFindings path="fixedBy" />
+      <FormProvider value={form}>
+        <FieldFindings path="fixedBy" />
+      </FormProvider>
     </section>
   );
 }
 
-const withUnit = (findings: readonly Finding[], unit: Finding['at']['unit']): readonly Finding[] =>
-  findings.map((finding) => ({ ...finding, at: { ...finding.at, ...(unit ? { unit } : {}) } }));
+/**
+ * What the solver said of these settings, and what can be said without it: contradictions stand at their rows before an
+ * answer comes. That something is missing the count and the blank row say already.
+ */
+function knownAtOnce({ unit, findings }: Form): readonly Finding[] {
+  const view = unit.settings as FixedView;
+  const miss = countMiss(view);
+  const own = [...conflictsOf(view, Object.keys(unit.settings.sides ?? {}).length), ...(miss ? [miss] : [])];
+  const said = (f: Finding): boolean =>
+    findings.some(({ code, at }) => code === f.code && at.path === f.at.path);
+  return [
+    ...findings,
+    ...own.filter((f) => !said(f)).map((f) => ({ ...f, at: { ...f.at, unit: unit.id } })),
+  ].filter(({ code }) => code !== 'column/fixed-too-few');
+}
 
 /** The row that is missing: all that may stand there. */
 function BlankRow({

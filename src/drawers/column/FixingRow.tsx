@@ -6,7 +6,7 @@ import { FlowEditor } from '../unit/FlowEditor';
 import { useForm } from '../unit/form';
 import { quantityOf } from '../unit/given';
 import { FieldFindings, SettingRow } from '../unit/SettingRow';
-import { capital, portWord } from '../words';
+import { capital } from '../words';
 import { type Offer, offerKey, turned } from './fixings';
 import { BasisPicker, ChemicalPicker, ProductPicker, StagePicker } from './pickers';
 import { useFixingWords } from './words';
@@ -84,8 +84,7 @@ interface ValueProps {
 
 function Value({ base, item, word, isNew, leave }: ValueProps) {
   const form = useForm();
-  const { fix, product, at, basis } = item as Readonly<Record<string, Json>>;
-  const of = typeof product === 'string' ? portWord('column', product) : 'a product';
+  const { fix, at, basis } = item as Readonly<Record<string, Json>>;
   const field = (dims: Dimension, says: string, more: Partial<FieldMore> = {}) => (
     <ValueField
       base={base}
@@ -100,9 +99,9 @@ function Value({ base, item, word, isNew, leave }: ValueProps) {
   );
   switch (fix) {
     case 'refluxRatio':
-      return field('number', 'reflux to distillate, mol', { min: 0 });
+      return field('number', 'to distillate, mol', { min: 0 });
     case 'boilup':
-      return field('number', 'boil-up to bottoms, mol', { min: 0 });
+      return field('number', 'to bottoms, mol', { min: 0 });
     case 'flow':
     case 'reflux':
       return (
@@ -111,7 +110,7 @@ function Value({ base, item, word, isNew, leave }: ValueProps) {
     case 'purity':
       return (
         <>
-          {field('fraction', `in ${of}, ${basis === 'mass' ? 'mass' : 'mol'}`, PART)}
+          {field('fraction', basis === 'mass' ? 'by mass' : 'by mole', PART)}
           <div className="flow-of">
             <ChemicalPicker base={base} />
             <ProductPicker base={base} />
@@ -122,7 +121,7 @@ function Value({ base, item, word, isNew, leave }: ValueProps) {
     case 'recovery':
       return (
         <>
-          {field('fraction', 'of what all feeds bring', PART)}
+          {field('fraction', 'of all feeds', PART)}
           <div className="flow-of">
             <ChemicalPicker base={base} />
             <ProductPicker base={base} />

@@ -19,8 +19,21 @@ export const setDistillate =
     return streams === changed.streams ? changed : { ...changed, streams };
   };
 
+/** A column whose ends are chosen has a list of what fixes it, be it empty: without ends nothing is free. */
+const withList = (settings: Json | undefined): Json | undefined =>
+  valueAt(settings, 'fixedBy') === undefined ? withValue(settings, 'fixedBy', []) : settings;
+
+/** Whether there is a reboiler. */
+export const setReboiler =
+  (id: UnitId, reboiler: boolean): Change =>
+  (sketch) =>
+    changeUnit(id, (unit) => {
+      const settings = withList(withValue(unit.settings, 'bottom.reboiler', reboiler));
+      return settings === unit.settings ? unit : { ...unit, settings: settings as SketchUnit['settings'] };
+    })(sketch);
+
 function withDistillate(unit: SketchUnit, distillate: string, port: string): SketchUnit {
-  let settings = withValue(unit.settings, 'top.distillate', distillate);
+  let settings = withList(withValue(unit.settings, 'top.distillate', distillate));
   const fixed = valueAt(settings, 'fixedBy');
   (Array.isArray(fixed) ? (fixed as readonly Json[]) : []).forEach((item, k) => {
     const product = valueAt(item, 'product');
