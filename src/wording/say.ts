@@ -38,6 +38,11 @@ function valueText(seen: Evidence, percent: boolean, kind: string, ctx: SayConte
     return `${show(seen.value * 100, 'number', ctx.measures, { significant: 3 }).number} %`;
   }
   if (CHEMICALS.has(name)) return ctx.chemical?.(text) ?? text;
+  if (name === 'pair')
+    return text
+      .split(' + ')
+      .map((id) => ctx.chemical?.(id) ?? id)
+      .join(' + ');
   if (name === 'unit') return ctx.tag?.(text as UnitId) ?? text;
   if (name === 'stream') return ctx.number?.(text as StreamId) ?? text;
   if (name === 'port' || name === 'outlet') return portWord(kind, text);

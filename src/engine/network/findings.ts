@@ -12,5 +12,6 @@ export const NETWORK_FINDINGS = [
   'network/several-answers',
   'model/pair-none',
   'model/pair-predicted',
+  'model/pair-predicted-far',
 ] as const;
 export type NetworkFindingCode = (typeof NETWORK_FINDINGS)[number];

@@ -5,6 +5,7 @@ import type { Finding } from '../outcome';
 import type { Model } from '../thermo/types';
 import { PAIR_NONE, PAIR_PREDICTED } from '../units/limits/pairs';
 import { finding, named, type Overrides, saw, thresholdOf } from '../units/limits/rule';
+import { farPairs } from './farPairs';
 
 /** Dissolved gases and water tell on phase equilibrium at a tenth of the share. */
 const isTelling = (family: string | undefined): boolean => family === 'inorganic-gas' || family === 'water';
@@ -45,8 +46,8 @@ function meeting(one: Present, two: Present, least: number): Met | undefined {
 }
 
 /**
- * Pairs of the cubic equation that nothing is known of, each once, at the stream where they matter most; and how many of the
- * pairs that meet are predicted.
+ * Pairs of the cubic equation that nothing is known of, each once, at the stream where they matter most; predicted pairs far
+ * from zero; and how many of the pairs that meet are predicted.
  */
 export function pairLimits(
   model: Model,
@@ -86,6 +87,7 @@ export function pairLimits(
       finding(PAIR_NONE, { stream: worst.id }, seen, { ...overrides, [PAIR_NONE.code]: worst.least }),
     );
   }
+  found.push(...farPairs(model, shares, overrides));
   if (predicted > 0) found.push(finding(PAIR_PREDICTED, {}, [saw('count', predicted, 'number')], overrides));
   return found;
 }

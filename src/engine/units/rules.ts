@@ -6,7 +6,7 @@ import { DRUM_RULES } from './drum/limits';
 import { EXPANDER_RULES } from './expander/limits';
 import { HEATER_RULES } from './heater/limits';
 import { ENTERS_BELOW } from './limits/joiningPressure';
-import { PAIR_NONE, PAIR_PREDICTED } from './limits/pairs';
+import { PAIR_FAR, PAIR_NONE, PAIR_PREDICTED } from './limits/pairs';
 import type { Rule } from './limits/rule';
 import { UTILITY_RULES } from './limits/utilities';
 import { PRODUCT_RULES } from './product/limits';
@@ -31,4 +31,5 @@ export const RULES: readonly Rule[] = [
   ...PRODUCT_RULES,
   PAIR_NONE,
   PAIR_PREDICTED,
+  PAIR_FAR,
 ];

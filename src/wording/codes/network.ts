@@ -62,4 +62,9 @@ export const NETWORK_SENTENCES: Readonly<Record<string, Sentence>> = {
     says: 'Of the pairs that meet in the sketch {count} have a parameter that group contributions predict.',
     next: 'See the list of pairs; give measured values where they matter.',
   },
+  'model/pair-predicted-far': {
+    title: 'Predicted pairs far from zero',
+    says: 'The parameters of {pair...} are predicted at 25 °C and held constant at every temperature; they lie far from zero, the first at {kij}.',
+    next: 'Check them against data at the temperatures of the sketch, or give values of your own.',
+  },
 };

@@ -4,3 +4,5 @@ import { rule } from './rule';
 export const PAIR_NONE = rule('model/pair-none', 'caution', 0.05, 'fraction', 'own-rule');
 /** Counted in one note whenever two chemicals meet. */
 export const PAIR_PREDICTED = rule('model/pair-predicted', 'note', 0, 'fraction', 'own-rule');
+/** Size of a predicted pair [-] from which its change with temperature is worth a look, where both reach 0.5 % of a stream. */
+export const PAIR_FAR = rule('model/pair-predicted-far', 'caution', 0.3, 'number', 'own-rule');
