@@ -78,10 +78,11 @@ export const DASHES: readonly (string | undefined)[] = [
  * @param size  of the whole picture [px]
  */
 export function profilePicture(
-  data: ProfileData,
+  given: ProfileData,
   size: { readonly width: number; readonly height: number },
 ): ProfilePicture {
-  const places = placesOf(data);
+  const places = placesOf(given);
+  const data = { ...given, marks: given.marks.filter((mark) => places.includes(mark.at)) };
   const field = { top: TOP, bottom: size.height - FOOT };
   const y = heights(data, field);
   const axis = Math.max(...places.map((at) => measureText(placeWord(at), LABEL, 600))) + 8;
