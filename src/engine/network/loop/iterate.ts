@@ -19,9 +19,11 @@ const DEEPEST = 12;
 /** Plain passes before the first accelerated one. */
 const DIRECT = 2;
 /** Passes in which a unit may have no answer yet, because not everything flows that will. */
-const LENIENT = 6;
+const LENIENT = 16;
 /** Times in a row a point without an answer is approached again from half as far. */
 const RETREATS = 6;
+/** Such points in all, after which that is how it is. */
+const FAILURES = 15;
 /** A residual so many times the least one so far is none to go on from. */
 const WORSE = 30;
 /** Solved: change of the tear, and closure of the loop and of the units at its tears [-]. */
@@ -68,6 +70,7 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
   /** Streams of the first passes, before anything gathered: there a purge shows where it would take most. */
   let early: ReadonlyMap<StreamId, StreamState> = new Map();
   let retreats = 0;
+  let failures = 0;
   let damping = 1;
   let shown: Change | undefined;
   let last: { balance: UnitClosure; back: Torn } | undefined;
@@ -90,7 +93,8 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
         continue;
       }
       retreats++;
-      if (!best || retreats > RETREATS)
+      failures++;
+      if (!best || retreats > RETREATS || failures > FAILURES)
         return { is: 'unit-fails', unit: failed, said: going.said.get(failed)! };
       const near = retreat(x, best, loop);
       if (!near) return { is: 'unit-fails', unit: failed, said: going.said.get(failed)! };

@@ -1,6 +1,6 @@
 import type { StreamState } from '../../equilibrium/types';
 import type { StreamId, UnitId } from '../../ids';
-import { emptyStream, mixed } from '../../units/streams';
+import { emptyStream, mixed, scaledStream } from '../../units/streams';
 import type { Answer, Call } from '../../units/types';
 import { batchOf } from '../batch';
 import { seenBy } from '../reads';
@@ -9,7 +9,7 @@ import { sameData, sameState } from '../same';
 import { attempts, isFiniteState } from '../solveUnit';
 import type { SolveStep } from '../step';
 import type { LoopProgress, ProblemUnit } from '../types';
-import type { Going, Loop, Torn } from './types';
+import type { Going, Loop, Member, Torn } from './types';
 
 export interface Passed {
   /** What came back of what was assumed; with a unit failed, as far as it can be told. */
@@ -36,7 +36,8 @@ export function* runPass(
   const stateOf = (stream: StreamId): StreamState =>
     torn.get(stream) ?? going.states.get(stream) ?? stateIn(known, stream);
   let failed: UnitId | undefined;
-  for (const { unit, solver } of members) {
+  for (const member of members) {
+    const { unit, solver } = member;
     const call = callOf(unit, run, stateOf, (read) => assumed.seen[plan.scalars.indexOf(read)]);
     const last = going.said.get(unit.id);
     if (last && last.outcome.state === 'solved' && sameCall(last.call, call)) continue;
@@ -50,7 +51,7 @@ export function* runPass(
     }
     failed ??= unit.id;
     if (!lenient) break;
-    passOver(unit, call, going);
+    passOver(member, call, going, loop);
   }
   const of = (stream: StreamId): StreamState => going.states.get(stream) ?? stateOf(stream);
   const { MW_kg_mol } = memory.data;
@@ -68,16 +69,34 @@ function put(unit: ProblemUnit, out: Answer['out'], going: Going): void {
   for (const [port, stream] of Object.entries(unit.out)) going.states.set(stream, outletOf(unit, port, out));
 }
 
-function passOver(unit: ProblemUnit, call: Call<unknown>, { states }: Going): void {
-  const all = mixed(call.in, call.model.nc);
-  for (const stream of Object.values(unit.out))
-    if (!states.has(stream))
-      states.set(
-        stream,
-        emptyStream(
-          call.model.nc,
-          all.T_K > 0 ? all.T_K : call.site.ambient_K,
-          all.P_Pa < Number.POSITIVE_INFINITY ? all.P_Pa : call.site.pressure_Pa,
-        ),
-      );
+/** How much of its inlet a unit without an answer keeps in the loop [-]. */
+const GATHERS = 2;
+
+/**
+ * Outlets of a unit that has no answer yet. A unit of one inlet keeps all of it in the loop, and more: where a given flow is to
+ * go round it has to gather first; at no less than the pressure of what enters, so that none is lost from pass to pass. Others
+ * give what they gave before, or nothing.
+ */
+function passOver(
+  { unit }: Member,
+  call: Call<unknown>,
+  { states }: Going,
+  { entering, plan, run }: Loop,
+): void {
+  const { model, site } = call;
+  const inlets = Object.values(call.in);
+  const all = mixed(call.in, model.nc);
+  const T_K = all.T_K > 0 ? all.T_K : site.ambient_K;
+  const P_Pa = Math.max(...inlets.map((s) => s.P_Pa), ...entering.map(([, s]) => s.P_Pa));
+  const nothing = emptyStream(model.nc, T_K, P_Pa > 0 ? P_Pa : site.pressure_Pa);
+  const inner = new Set(plan.order);
+  const outlets = Object.values(unit.out);
+  const back = outlets.filter((stream) => inner.has(run.plan.target.get(stream)?.unit ?? -1));
+  const [only, ...more] = inlets;
+  for (const stream of outlets) {
+    if (more.length === 0 && only && only.phases.length > 0) {
+      const state = back.includes(stream) ? { ...scaledStream(only, GATHERS / back.length), P_Pa } : nothing;
+      states.set(stream, state);
+    } else if (!states.has(stream)) states.set(stream, nothing);
+  }
 }
