@@ -11,7 +11,7 @@ import { App } from './App';
 import { startAutosave } from './autosaving';
 import { ErrorBoundary } from './ErrorBoundary';
 import { keepFolds } from './folds';
-import { startSolving } from './solving';
+import { startSolving, wakeSolver } from './solving';
 import { applyTheme, storedTheme } from './theme';
 
 const root = document.getElementById('root');
@@ -19,6 +19,8 @@ if (!root) throw new Error('index.html has no element with the id "root"');
 
 const theme = storedTheme();
 applyTheme(theme);
+// While the sketch of last time is looked up, the solver's script is on its way.
+const solver = wakeSolver();
 const autosave = await startAutosave();
 const stores: Stores = {
   sketch: createSketchStore(autosave.last ?? emptySketch(crypto.randomUUID()), markEdit),
@@ -28,7 +30,7 @@ const stores: Stores = {
 };
 stores.session.setState({ theme });
 keepFolds(stores.session);
-startSolving(stores);
+startSolving(stores, solver);
 autosave.watch(stores);
 
 createRoot(root).render(

@@ -8,18 +8,31 @@ import { connectSolver, type SolverClient } from '../store/solverClient';
 export const makeWorker = (): Worker =>
   new Worker(new URL('../worker/solver.worker.ts', import.meta.url), { type: 'module' });
 
+/** The solver is warmed up when the page is idle, or after this [ms]. */
+const IDLE_MS = 500;
+
+/** Begins to load the solver at once; it is handed out first, then new ones. */
+export function wakeSolver(): () => Worker {
+  let awake: Worker | undefined = makeWorker();
+  return () => {
+    const worker = awake ?? makeWorker();
+    awake = undefined;
+    return worker;
+  };
+}
+
 /**
  * Keeps the results answering the document: compiles each new document (memoised), loads chemicals of the bank that it
  * newly names, and sends the problem to the worker. What changes no number (a label moved) is not sent.
  */
-export function startSolving(stores: Stores): SolverClient {
+export function startSolving(stores: Stores, make: () => Worker = makeWorker): SolverClient {
   const compile = makeCompile();
   let data: BankData | null = null;
   let loadedFor = '';
   let sent: Problem | null = null;
   const started = new Map<number, number>();
 
-  const client = connectSolver(makeWorker, {
+  const client = connectSolver(make, {
     results: (edit, last, batch) => {
       const begun = started.get(edit);
       stores.results.take(edit, last, batch, begun === undefined ? 0 : performance.now() - begun);
@@ -85,7 +98,8 @@ export function startSolving(stores: Stores): SolverClient {
   });
   run();
   // The worker's code is compiled while the page is idle, so that the first solve of a fresh tab is not the slow one.
-  const idle = window.requestIdleCallback ?? ((then: () => void) => setTimeout(then, 200));
-  idle(() => client.ask(0, { ask: 'prewarm' }));
+  const prewarm = (): void => client.ask(0, { ask: 'prewarm' });
+  if (window.requestIdleCallback) window.requestIdleCallback(prewarm, { timeout: IDLE_MS });
+  else setTimeout(prewarm, IDLE_MS);
   return client;
 }

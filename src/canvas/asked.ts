@@ -1,4 +1,5 @@
 import { pageOf, zoneOf } from '../drawing/frame';
+import { sameLayout } from '../drawing/scene';
 import type { Box, LineShape, Point, UnitShape } from '../drawing/types';
 import type { Stores } from '../store/react';
 import type { Thing } from '../store/session';
@@ -52,6 +53,6 @@ export function keepZones({ session }: Stores, sheet: SheetStore): () => void {
   };
   tell();
   return sheet.subscribe((now, before) => {
-    if (now.scene !== before.scene) tell();
+    if (!sameLayout(now.scene, before.scene)) tell();
   });
 }

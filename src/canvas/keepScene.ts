@@ -1,4 +1,4 @@
-import { buildScene } from '../drawing/scene';
+import { buildScene, sameLayout } from '../drawing/scene';
 import type { Scene } from '../drawing/types';
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Finding } from '../engine/outcome';
@@ -57,7 +57,7 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
       lines,
       labels,
       ...namesOf(sketch, results, gaps, units, labels),
-      ...(next === before.scene ? {} : { quiet: quietAt(next, zoomNow(), outerStreams(sketch)) }),
+      ...(sameRoom(next, before.scene) ? {} : { quiet: quietAt(next, zoomNow(), outerStreams(sketch)) }),
     });
   };
 
@@ -86,6 +86,12 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
     for (const end of stop) end();
   };
 }
+
+/** Whether nothing took or left room, so that the same labels step back. */
+const sameRoom = (a: Scene, b: Scene): boolean =>
+  a === b ||
+  (sameLayout(a, b) &&
+    a.units.every((unit, k) => (unit.limit === undefined) === (b.units[k]?.limit === undefined)));
 
 /** What is missing where, as one text: compiling makes its list anew with every edit. */
 const placesOf = (gaps: readonly Finding[]): string =>

@@ -47,6 +47,12 @@ export function buildScene(sketch: Sketch, input: SceneInput, before?: Scene): S
   return scene;
 }
 
+/** Whether everything stands where it stood in the other scene; marks of limits and texts may differ. */
+export const sameLayout = (a: Scene, b: Scene): boolean => {
+  const layout = kept.get(a)?.layout;
+  return a === b || (layout !== undefined && layout === kept.get(b)?.layout);
+};
+
 /** Whether the input says the same of a unit that stands where it stood, drawn from the same record. */
 function drawnAlike(id: UnitId, k: number, { input, ground }: Made, before: Made): boolean {
   const [u, v] = [ground.standing[k]!, before.ground.standing[k]];

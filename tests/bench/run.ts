@@ -3,8 +3,10 @@ import { writeFileSync } from 'node:fs';
 import { cpus } from 'node:os';
 import { parseArgs } from 'node:util';
 import { timeBrowser } from './browser';
+import { growth, timeColumns } from './column';
 import { timeFlashes } from './flash';
 import { timeModels } from './models';
+import { timeScene } from './scene';
 
 const now = (): number => performance.now();
 
@@ -12,6 +14,9 @@ const now = (): number => performance.now();
 const BENCHES: Readonly<Record<string, () => Promise<readonly object[]>>> = {
   models: async () => timeModels(now),
   flash: () => timeFlashes(now),
+  columns: () => timeColumns(now),
+  growth: async () => (await growth(now)).map(([stages, ms, steps]) => ({ stages, ms, steps })),
+  scene: async () => timeScene(now),
   browser: timeBrowser,
 };
 
