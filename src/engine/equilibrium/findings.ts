@@ -5,6 +5,7 @@ export const EQUILIBRIUM_FINDINGS = [
   'equilibrium/no-such-state',
   'equilibrium/between-states',
   'equilibrium/second-liquid',
+  'equilibrium/several-states',
   'equilibrium/no-entropy',
   'equilibrium/not-a-state',
 ] as const;

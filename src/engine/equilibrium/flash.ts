@@ -6,6 +6,7 @@ import type { EquilibriumCode } from './findings';
 import { flashPair } from './pairs';
 import { flashCaloric } from './ph';
 import { pureCaloric, saturateAtP, saturateAtT, share } from './pure';
+import { comesAgain } from './several';
 import { flashTP } from './tp';
 import type { Condition, FlashAnswer, FlashWarm } from './types';
 import { flashFraction } from './vf';
@@ -57,7 +58,9 @@ export function flash(
   const end = search(work, z, at, warm);
   if (end !== 'solved') return noSolution(reason(end, at, work, where));
   const answer = answerOf(work);
-  return solved(answer, answer.hiddenLiquid ? [secondLiquid(model, answer, answer.hiddenLiquid, where)] : []);
+  const findings = answer.hiddenLiquid ? [secondLiquid(model, answer, answer.hiddenLiquid, where)] : [];
+  if (work.several || comesAgain(work, z, at, answer)) findings.push(severalStates(at, answer, where));
+  return solved(answer, findings);
 }
 
 function search(w: FlashWork, z: Float64Array, at: Condition, warm: FlashWarm | undefined): FlashEnd {
@@ -65,6 +68,7 @@ function search(w: FlashWork, z: Float64Array, at: Condition, warm: FlashWarm | 
   w.iterations = 0;
   w.residual = 0;
   w.told = undefined;
+  w.several = false;
   w.feed.x.set(z);
   w.T_K = 'T_K' in at ? at.T_K : 0;
   w.P_Pa = 'P_Pa' in at ? at.P_Pa : 0;
@@ -137,13 +141,28 @@ const ASKED: readonly (readonly [string, string, Dimension])[] = [
   ['vapourFraction', 'vapourFraction', 'fraction'],
 ];
 
-function reason(end: Exclude<FlashEnd, 'solved'>, at: Condition, w: FlashWork, where: Place): Finding {
-  const evidence: Evidence[] = [];
+const askedFor = (at: Condition): Evidence[] => {
   const given = at as Readonly<Record<string, number>>;
-  for (const [key, name, dim] of ASKED) {
+  return ASKED.flatMap(([key, name, dim]) => {
     const value = given[key];
-    if (value !== undefined) evidence.push({ name, value, dim });
-  }
+    return value === undefined ? [] : [{ name, value, dim }];
+  });
+};
+
+/** "Several states have these conditions; the thinnest is taken." */
+const severalStates = (at: Condition, { T_K, P_Pa }: FlashAnswer, where: Place): Finding => ({
+  code: 'equilibrium/several-states' satisfies EquilibriumCode,
+  weight: 'note',
+  at: where,
+  evidence: [
+    ...askedFor(at),
+    ...('T_K' in at ? [] : [{ name: 'foundTemperature', value: T_K, dim: 'temperature' } as const]),
+    ...('P_Pa' in at ? [] : [{ name: 'foundPressure', value: P_Pa, dim: 'pressure' } as const]),
+  ],
+});
+
+function reason(end: Exclude<FlashEnd, 'solved'>, at: Condition, w: FlashWork, where: Place): Finding {
+  const evidence = askedFor(at);
   if (!('T_K' in at) && w.T_K > 0)
     evidence.push({ name: 'lastTemperature', value: w.T_K, dim: 'temperature' });
   if (!('P_Pa' in at) && w.P_Pa > 0) evidence.push({ name: 'lastPressure', value: w.P_Pa, dim: 'pressure' });

@@ -78,6 +78,18 @@ const totalOf = (w: FlashWork, of: Caloric): number => {
   return wholeOf(w, of);
 };
 
+/** Whether a state function changes its sign between a and b, on a grid of its own; looks no further than states go. */
+function crossesAgain(state: State, a: number, b: number): boolean {
+  let before = Number.NaN;
+  for (let k = 0; k <= GRID; k++) {
+    const value = state(a + ((b - a) * k) / GRID);
+    if (before * value < 0) return true;
+    if (Number.isNaN(value) && !Number.isNaN(before)) return false;
+    before = value;
+  }
+  return false;
+}
+
 function atTemperature(w: FlashWork, z: Float64Array, T: number, target: number, of: Caloric): PairEnd {
   const single: State = (lnP) =>
     flashTP(w, z, T, Math.exp(lnP), 'nothing') ? wholeOf(w, of) - target : Number.NaN;
@@ -120,7 +132,12 @@ function atFraction(w: FlashWork, z: Float64Array, beta: number, target: number,
   };
   // Above the mixture's critical pressure there is nothing to find, and each miss is a long search.
   const most = 2 * w.model.pseudoCritical(w.feed.x).P_Pa;
-  return search(w, state, Math.log(THIN_Pa), Math.log(Math.min(most, DENSE_Pa)), of, target);
+  const [thin, dense] = [Math.log(THIN_Pa), Math.log(Math.min(most, DENSE_Pa))];
+  const between = firstCrossing(state, thin, dense);
+  if (between === undefined) return 'no-such-state';
+  // Saturated vapour has its largest enthalpy well below the critical pressure: the same one comes twice.
+  w.several = crossesAgain(state, between[1], dense);
+  return tighten(w, state, between[0], between[1], of, target) ? 'solved' : 'no-convergence';
 }
 
 function atHeatAndEntropy(

@@ -1,5 +1,6 @@
 import { newtonFraction, type Sought, startPoint } from './fraction';
 import { expansionOf } from './naming';
+import { mayComeAgain } from './several';
 import { liquidLike, setPlane } from './stability';
 import { hiddenLiquid, isUnstable, vapourBelow } from './starts';
 import { flashTP } from './tp';
@@ -29,14 +30,40 @@ export function flashFraction(
   w.iterations = 0;
   w.hidden = false;
   w.lumped = false;
-  if (start !== undefined && newtonFraction(w, z, beta, sought, given, start, 0) === 'equal' && accept(w)) {
-    return 'solved';
-  }
+  const found = (from: number, ease: number): boolean =>
+    newtonFraction(w, z, beta, sought, given, from, ease) === 'equal' &&
+    accept(w) &&
+    isThinSide(w, z, beta, sought, given);
+  if (start !== undefined && found(start, 0)) return 'solved';
   const first = startPoint(w, z, beta, sought, given);
-  if (newtonFraction(w, z, beta, sought, given, first, 4) === 'equal' && accept(w)) return 'solved';
+  if (found(first, 4)) return 'solved';
   startPoint(w, z, beta, sought, given);
-  if (newtonFraction(w, z, beta, sought, given, first, 15) === 'equal' && accept(w)) return 'solved';
+  if (found(first, 15)) return 'solved';
   return searchFraction(w, z, beta, sought, given, first);
+}
+
+/** A step to the thin side that is well above rounding and below what turns a curve. */
+const ASIDE = { T: 1.002, P: 1.01 };
+const LESS = 1e-6;
+
+/**
+ * Whether what Newton found is not the retrograde one of several states: a little hotter, or at a little less pressure, there
+ * must be no less vapour. Asked only where states may come again; leaves w as it was.
+ */
+function isThinSide(w: FlashWork, z: Float64Array, beta: number, sought: Sought, given: number): boolean {
+  if (!mayComeAgain(w.model, z, sought === 'T' ? 'P' : 'T', given)) return true;
+  const u = sought === 'T' ? w.T_K : w.P_Pa;
+  const { iterations } = w;
+  const lnK = Float64Array.from(w.vap.x, (y, i) => Math.log(y / w.liq.x[i]!));
+  const ok =
+    sought === 'T'
+      ? flashTP(w, z, u * ASIDE.T, given, 'nothing')
+      : flashTP(w, z, given, u / ASIDE.P, 'nothing');
+  const less = ok && w.phases === 2 && w.vap.total < beta - LESS;
+  w.lnK.set(lnK);
+  w.iterations = iterations;
+  const back = newtonFraction(w, z, beta, sought, given, u, 0) === 'equal' && accept(w);
+  return back && !less;
 }
 
 /** Whether what Newton found is a vapour and a liquid; looks for a second liquid beside it. */

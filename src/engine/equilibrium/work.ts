@@ -60,6 +60,8 @@ export interface FlashWork extends FlashWorkOwner {
   residual: number;
   /** The single phase is two liquids taken together (w.vap, w.liq): the model has no single liquid for this feed. */
   lumped: boolean;
+  /** More than one state answers, as far as the search has seen; the answer is one of them. */
+  several: boolean;
   /** An answer that is not in the slots (a state between two others). */
   told: FlashAnswer | undefined;
   /** Another liquid was found; its composition is in hiddenX. */
@@ -118,6 +120,7 @@ export function makeFlashWork(model: ThermoModel): FlashWork {
     iterations: 0,
     residual: 0,
     lumped: false,
+    several: false,
     told: undefined,
     hidden: false,
     hiddenX: new Float64Array(n),

@@ -63,6 +63,18 @@ export const EQUILIBRIUM_WORDS: Readonly<Record<string, Words>> = {
     },
     next: () => 'Do not rely on the liquid’s figures; a model with two liquids is needed.',
   },
+  'equilibrium/several-states': {
+    title: 'Several states',
+    sentence: (s) => {
+      const found = [
+        ...(s.has('foundTemperature') ? [s.number('foundTemperature')] : []),
+        ...(s.has('foundPressure') ? [s.number('foundPressure')] : []),
+      ];
+      const at = found.length > 0 ? `, at ${andList(found)},` : '';
+      return `More than one state has ${asked(s)}; the one of low density${at} is taken.`;
+    },
+    next: () => 'Give temperature and pressure instead where another of them is meant.',
+  },
   'equilibrium/no-entropy': {
     title: 'No standard entropy',
     sentence: (s) => {
