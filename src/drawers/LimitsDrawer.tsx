@@ -88,6 +88,8 @@ function NoneFired() {
   );
 }
 
+const ABOUT_PAIRS = /^model\/pair-|^sketch\/(repeated-pair|pair-)/;
+
 function LimitRow({ finding }: { readonly finding: Finding }) {
   const { session } = useStores();
   const measures = useMeasures();
@@ -132,6 +134,11 @@ function LimitRow({ finding }: { readonly finding: Finding }) {
       {ruler ? <LimitRuler {...ruler} weight={finding.weight} /> : null}
       {basis ? <p className="muted">{basis}</p> : null}
       {next ? <p className="next">{next}</p> : null}
+      {ABOUT_PAIRS.test(finding.code) ? (
+        <button type="button" className="button line" onClick={() => session.setState({ over: 'pairs' })}>
+          Open the pair parameters
+        </button>
+      ) : null}
       {place ? (
         <button type="button" className="button line" onClick={open}>
           Open {place}

@@ -15,6 +15,6 @@ export { EDIT_REFUSALS, type Edit, type EditCode, type Edited, type Refused } fr
 export { setMaterial, setNumber, setStreamName, setTag, setUnitName } from './editing/names';
 export { setPair } from './editing/pairs';
 export type { SettingPath } from './editing/path';
-export { type ScaledFlow, scaledFlows, scaleFeeds } from './editing/scale';
+export { READABLE, type ScaledFlow, scaledFlows, scaleFeeds } from './editing/scale';
 export { clearSetting, normaliseParts, setByPath, setSetting, setSettings } from './editing/settings';
 export { addUnit, deleteUnits, insertUnitOnStream, mirrorUnit, moveUnits, turnUnit } from './editing/units';

@@ -60,6 +60,14 @@ describe('the limits drawer', () => {
     expect(page.stores.session.getState().drawer).toEqual({ is: 'limits' });
   });
 
+  test('leads from a pair without a parameter to the table of pairs', () => {
+    const page = openDrawer('limits', ({ stores }) =>
+      stores.results.setState({ findings: [finding('caution', 'u3', 'model/pair-none')] }),
+    );
+    fireEvent.click(screen.getByRole('button', { name: 'Open the pair parameters' }));
+    expect(page.stores.session.getState().over).toBe('pairs');
+  });
+
   test('keeps what is noted about the sketch apart from the limits', () => {
     openDrawer('limits', ({ stores }) => {
       stores.results.setState({ findings: [finding('caution', 'u2')] });

@@ -79,6 +79,8 @@ describe('scaling all feeds', () => {
     answer(page, 20);
     type('scale.flow', '0.3 kg/s');
     expect(flowOf(page)).toBe('150 kmol/h');
+    type('scale.flow', '50 kmol/h');
+    expect(flowOf(page)).toBe('138.8889 kmol/h');
   });
 
   test('tells in a notice that the stream came out otherwise', () => {

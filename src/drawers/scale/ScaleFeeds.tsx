@@ -7,7 +7,7 @@ import { QuantityField } from '../../parts/QuantityField';
 import { Segmented } from '../../parts/Segmented';
 import { displayUnit, formatSignificant, STANDARD_SITE } from '../../quantity';
 import type { Quantity } from '../../sketch/types';
-import { describeStream, scaledFlows, scaleFeeds } from '../../store/commands';
+import { describeStream, READABLE, scaledFlows, scaleFeeds } from '../../store/commands';
 import { useResults, useSketch, useStores } from '../../store/react';
 import { ScaledList } from './ScaledList';
 import { type Scaling, scalingFor, type Wanted, type WhyNot } from './scaling';
@@ -59,7 +59,7 @@ export function ScaleFeeds({ close }: { readonly close: () => void }) {
     }
     const edit = stepOf(scalingFor(next, base.results));
     sketch.change((s) => {
-      const made = edit === undefined ? undefined : scaleFeeds(s, edit.factor);
+      const made = edit === undefined ? undefined : scaleFeeds(s, edit.factor, figuresOf(edit));
       return made?.ok ? made.sketch : s;
     });
   };
@@ -81,8 +81,9 @@ export function ScaleFeeds({ close }: { readonly close: () => void }) {
 
   const step = stepOf(scaling);
   const times = step?.factor ?? 1;
-  const flows = useMemo(() => scaledFlows(base.sketch, times), [base, times]);
-  const label = step && step.factor !== 1 ? scaleFeeds(base.sketch, step.factor) : undefined;
+  const figures = figuresOf(step);
+  const flows = useMemo(() => scaledFlows(base.sketch, times, figures), [base, times, figures]);
+  const label = step && step.factor !== 1 ? scaleFeeds(base.sketch, step.factor, figures) : undefined;
   const keep = (): void => {
     if (!step || !label?.ok) return;
     kept.current = true;
@@ -172,6 +173,9 @@ export function ScaleFeeds({ close }: { readonly close: () => void }) {
 
 const stepOf = (scaling: Scaling | WhyNot): Scaling | undefined =>
   typeof scaling === 'string' ? undefined : scaling;
+
+/** A factor that is computed has more figures than anybody would type. */
+const figuresOf = (step: Scaling | undefined): number | undefined => (step?.target ? READABLE : undefined);
 
 /** What the chosen stream carries now, and whether it came out as wanted. */
 function StreamNow({

@@ -6,6 +6,8 @@ import { type Edit, refuse } from './edited';
 const FLOWS: readonly Dimension[] = ['molarFlow', 'massFlow'];
 /** More figures than anybody types, fewer than a product of two decimals leaves behind by binary rounding. */
 const FIGURES = 14;
+/** Figures of flows that a computed factor gives: far closer than anybody asks, and still readable in a field. */
+export const READABLE = 7;
 
 /** One flow of a feed as it is typed, before and after. */
 export interface ScaledFlow {
@@ -17,11 +19,17 @@ export interface ScaledFlow {
 }
 
 /** What scaling would change, feed by feed. Flows that cannot be read and shares of a stream are not among them. */
-export function scaledFlows(sketch: Pick<Sketch, 'units'>, factor: number): readonly ScaledFlow[] {
+export function scaledFlows(
+  sketch: Pick<Sketch, 'units'>,
+  factor: number,
+  figures = FIGURES,
+): readonly ScaledFlow[] {
   const found: ScaledFlow[] = [];
   for (const unit of sketch.units)
     if (unit.kind === 'feed')
-      scaledSettings(unit.settings, factor, (path, from, to) => found.push({ unit, path, from, to }));
+      scaledSettings(unit.settings, { factor, figures }, (path, from, to) =>
+        found.push({ unit, path, from, to }),
+      );
   return found;
 }
 
@@ -29,14 +37,15 @@ export function scaledFlows(sketch: Pick<Sketch, 'units'>, factor: number): read
  * Multiplies every flow typed at the feeds, total flows and flows of single chemicals, by a factor. Units of measure stay as
  * typed. Flows given elsewhere (air of a chamber, a product, a share) are not touched: those that follow the feeds follow.
  *
- * @param factor  [-], above 0
+ * @param factor   [-], above 0
+ * @param figures  of the flows that are written
  */
-export function scaleFeeds(sketch: Sketch, factor: number): Edit {
+export function scaleFeeds(sketch: Sketch, factor: number, figures = FIGURES): Edit {
   if (!Number.isFinite(factor) || factor <= 0) return refuse('edit/bad-factor');
   let count = 0;
   const units = sketch.units.map((unit) => {
     if (unit.kind !== 'feed') return unit;
-    const settings = scaledSettings(unit.settings, factor, () => {
+    const settings = scaledSettings(unit.settings, { factor, figures }, () => {
       count += 1;
     });
     return settings === unit.settings ? unit : { ...unit, settings };
@@ -50,15 +59,20 @@ export function scaleFeeds(sketch: Sketch, factor: number): Edit {
   };
 }
 
+interface Times {
+  readonly factor: number;
+  readonly figures: number;
+}
+
 function scaledSettings(
   settings: JsonObject,
-  factor: number,
+  times: Times,
   tell: (path: string, from: string, to: string) => void,
 ): JsonObject {
   const scaled = (value: Json | undefined, path: string): Json | undefined => {
     if (typeof value !== 'string') return value;
     const read = parseQuantity(value, FLOWS);
-    const next = read.ok ? timesText(value, read.si, factor) : undefined;
+    const next = read.ok ? timesText(value, read.si, times) : undefined;
     if (next === undefined) return value;
     tell(path, value, next);
     return next;
@@ -79,5 +93,5 @@ function scaledSettings(
 }
 
 /** The text with its number multiplied; the very same text for a factor of 1. */
-const timesText = (text: string, si: number, factor: number): string | undefined =>
-  factor === 1 ? text : withNumber(text, si * factor, FLOWS, undefined, { figures: FIGURES });
+const timesText = (text: string, si: number, { factor, figures }: Times): string | undefined =>
+  factor === 1 ? text : withNumber(text, si * factor, FLOWS, undefined, { figures });
