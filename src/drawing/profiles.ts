@@ -219,7 +219,8 @@ function drawPlot(
     anchor: 'start',
     ink: 'ink',
   };
-  const names = placeNames(requests(plot, lines, data, y, isFirst), box, lines);
+  const dotted = [...new Set(data.marks.map((mark) => y(mark.at)))];
+  const names = placeNames(requests(plot, lines, data, y, isFirst), box, lines, dotted);
   return { paths: [...paths, ...rings], texts: [title, ...labels, ...names], lines };
 }
 
