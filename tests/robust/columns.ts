@@ -176,6 +176,48 @@ function otherFixings(random: Random, s: StageSystem): Fixing[] {
   ]);
 }
 
+const profileOf = (s: StageSystem): Float64Array => s.T.slice();
+
+/** What is wrong with a solved column, by its flows and fugacities alone; undefined when nothing is. */
+function faultOf(s: StageSystem): string | undefined {
+  const { n, places, model, task } = s;
+  const liq = model.makeProps();
+  const vap = model.makeProps();
+  const x = new Float64Array(n);
+  const y = new Float64Array(n);
+  for (let j = 0; j < places; j++) {
+    const shadow = j === 0 && s.totalCondenser;
+    let L = 0;
+    let V = 0;
+    for (let i = 0; i < n; i++) {
+      L += s.l[j * n + i]!;
+      V += s.v[j * n + i]!;
+    }
+    if (!(L > 0 && V > 0)) return `no liquid or no vapour at ${j}`;
+    let apart = 0;
+    for (let i = 0; i < n; i++) {
+      const at = j * n + i;
+      x[i] = s.l[at]! / L;
+      y[i] = s.v[at]! / V;
+      apart = Math.max(apart, Math.abs(x[i]! - y[i]!));
+      const into = s.f[at]! + (j > 0 ? s.l[at - n]! : 0) + (j + 1 < places ? s.v[at + n]! : 0);
+      const out = s.l[at]! * (shadow ? 1 + s.p[0]! : 1) + (shadow ? 0 : s.v[at]!);
+      if (Math.abs(into - out) > 1e-9 * Math.max(into, out, 1e-12))
+        return `chemical ${i} does not close at ${j}`;
+    }
+    model.evaluate('liquid', s.T[j]!, task.P_Pa[j]!, x, 0, liq);
+    model.evaluate('vapour', s.T[j]!, task.P_Pa[j]!, y, 0, vap);
+    // A pure chemical has equal fractions; two phases of it still differ in volume.
+    if (apart < 1e-6 && vap.v_m3_mol < 1.05 * liq.v_m3_mol) return `one phase at ${j}`;
+    for (let i = 0; i < n; i++) {
+      if (x[i]! < 1e-50) continue;
+      const gap = Math.log(y[i]! / x[i]!) + vap.lnPhi[i]! - liq.lnPhi[i]!;
+      if (Math.abs(gap) > 1e-8) return `fugacities differ by ${gap} at ${j}`;
+    }
+  }
+  return undefined;
+}
+
 /**
  * Random columns of 3 to 12 chemicals, 8 to 60 stages, 1 to 25 bar, from nothing: plain ones, and those same columns fixed by
  * what came out of the plain ones, so that an answer exists.
@@ -187,9 +229,11 @@ export async function columns(seed: number, count: number): Promise<GroupReport>
   const cases: unknown[] = [];
   const byFixing: Record<string, [number, number]> = {};
   const tries: Record<string, number> = {};
+  const plainTries: Record<string, number> = {};
+  let otherAnswers = 0;
   let tried = 0;
   let answered = 0;
-  const wrong = 0;
+  let wrong = 0;
   let plainTried = 0;
   let plainSolved = 0;
   while (tried < count) {
@@ -204,6 +248,10 @@ export async function columns(seed: number, count: number): Promise<GroupReport>
       continue;
     }
     plainSolved++;
+    const how = plain.effort.tried.at(-1)!;
+    plainTries[how] = (plainTries[how] ?? 0) + 1;
+    if (faultOf(plain.system)) wrong++;
+    const places = profileOf(plain.system);
     for (let k = 0; k < 2 && tried < count; k++) {
       const fixed = otherFixings(random, plain.system);
       const name = fixed.map((f) => f.fix).join(' + ');
@@ -217,6 +265,13 @@ export async function columns(seed: number, count: number): Promise<GroupReport>
         cases.push({ ...drawn.of, fixed, why: end.failure.why, failure: end.failure });
         continue;
       }
+      const fault = faultOf(end.system);
+      if (fault !== undefined) {
+        wrong++;
+        cases.push({ ...drawn.of, fixed, why: fault });
+        continue;
+      }
+      if (profileOf(end.system).some((T, j) => Math.abs(T - places[j]!) > 1e-3)) otherAnswers++;
       const last = end.effort.tried.at(-1)!;
       tries[last] = (tries[last] ?? 0) + 1;
       tally[1]++;
@@ -231,6 +286,6 @@ export async function columns(seed: number, count: number): Promise<GroupReport>
     share: answered / tried,
     wanted: 0.98,
     cases,
-    more: { plainTried, plainSolved, byFixing, lastTry: tries },
+    more: { plainTried, plainSolved, plainTries, byFixing, lastTry: tries, otherAnswers },
   };
 }

@@ -1,3 +1,4 @@
+import { columns } from './columns';
 import { flashes } from './flashes';
 
 /** What a group found: cases tried, how they ended, and every case that needs looking at. */
@@ -18,4 +19,4 @@ export interface GroupReport {
 export type Group = (seed: number, count: number) => Promise<GroupReport>;
 
 /** One line a group. */
-export const GROUPS: Readonly<Record<string, Group>> = { flashes };
+export const GROUPS: Readonly<Record<string, Group>> = { flashes, columns };

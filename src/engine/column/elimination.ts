@@ -36,6 +36,11 @@ export class Elimination {
   private readonly Ql: Float64Array;
   private readonly a: Float64Array;
   private readonly b: Float64Array;
+  /** Of the state that was factored: vapour flows, liquid sums, shares. */
+  private readonly v: Float64Array;
+  private readonly L: Float64Array;
+  private readonly rL: Float64Array;
+  private readonly rV: Float64Array;
 
   constructor(private readonly s: StageSystem) {
     const { n, places } = s;
@@ -47,12 +52,20 @@ export class Elimination {
     this.Ql = new Float64Array(places * n * n);
     this.a = new Float64Array(places * n);
     this.b = new Float64Array(places * m);
+    this.v = new Float64Array(places * n);
+    this.L = new Float64Array(places);
+    this.rL = new Float64Array(places);
+    this.rV = new Float64Array(places);
   }
 
   /** Factors at the system's present state. False when a block is singular. */
   factor(): boolean {
     const { s, m, block, pivot, G } = this;
     const { n, places } = s;
+    this.v.set(s.v);
+    this.L.set(s.L);
+    this.rL.set(s.rL);
+    this.rV.set(s.rV);
     for (let j = 0; j < places; j++) {
       this.eliminated(j);
       this.fill(j);
@@ -207,7 +220,7 @@ export class Elimination {
     for (let j = from; j < places; j++) {
       const x = j * n;
       const y = j * m;
-      const scale = 1 / s.rL[j]!;
+      const scale = 1 / this.rL[j]!;
       for (let i = 0; i < n; i++) a[x + i] = (j > 0 ? a[x - n + i]! : 0) - M[x + i]!;
       for (let i = 0; i < n; i++) {
         let sum = 0;
@@ -235,14 +248,14 @@ export class Elimination {
     let sum = 0;
     if (!s.balancesEnergy(j)) {
       for (let i = 0; i < n; i++) sum += a[x + i]!;
-      return (j === 0 && s.totalCondenser ? -sum : sum) / s.rL[j]! / s.feedTotal;
+      return (j === 0 && s.totalCondenser ? -sum : sum) / this.rL[j]! / s.feedTotal;
     }
     const h = s.liq[j]!.hPartial;
     for (let i = 0; i < n; i++) sum += h[i]! * a[x + i]!;
     if (j > 0) {
       const up = s.leaving(j - 1);
       for (let i = 0; i < n; i++) sum -= up.hPartial[i]! * a[x - n + i]!;
-      sum -= T_SCALE_K * s.L[j - 1]! * up.cp_J_molK * b[j * m - 1]!;
+      sum -= T_SCALE_K * this.L[j - 1]! * up.cp_J_molK * b[j * m - 1]!;
     }
     return sum * per;
   }
@@ -262,15 +275,15 @@ export class Elimination {
           for (let c = 0; c < m; c++) sum -= block[row + c]! * b[below + c]!;
           b[y + i] = sum;
         }
-        const share = s.rV[j + 1]!;
+        const share = this.rV[j + 1]!;
         for (let i = 0; i < n; i++) {
-          let sum = a[x + i]! + share * s.v[x + n + i]! * b[below + i]!;
+          let sum = a[x + i]! + share * this.v[x + n + i]! * b[below + i]!;
           const g = (j + 1) * n * m + i * m;
           for (let c = 0; c < m; c++) sum -= G[g + c]! * b[below + c]!;
           out.l[x + i] = sum;
         }
       } else for (let i = 0; i < n; i++) out.l[x + i] = a[x + i]!;
-      for (let i = 0; i < n; i++) out.v[x + i] = s.v[x + i]! * b[y + i]!;
+      for (let i = 0; i < n; i++) out.v[x + i] = this.v[x + i]! * b[y + i]!;
       out.T[j] = T_SCALE_K * b[y + n]!;
     }
   }

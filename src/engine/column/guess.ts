@@ -113,7 +113,7 @@ export function guessOf(s: StageSystem): Guess {
   // With the reflux ratio given, a distillate too small to carry the feed's vapour over the top is no start.
   const ratioGiven = task.fixed.find((x) => x.fix === 'refluxRatio')?.value;
   const least = ratioGiven === undefined ? 0 : (1.05 * vapour) / (1 + ratioGiven);
-  const split = bestSplit(s, (lnC, m) => view(splitInto(d, f, lnK, lnC, m)), sharp, lnK, least);
+  const split = bestSplit(s, (lnC, m) => view(splitInto(d, f, lnK, lnC, m)), sharp, lnK, least, rest);
   let m = split?.m ?? sharp;
   let top = split?.D;
   const ratio = refluxRatioFrom(s.task.fixed, top, { vapour, rest, meanMass, places, m });
@@ -163,10 +163,15 @@ function bestSplit(
   sharp: number,
   lnK: Float64Array,
   least: number,
+  rest: number,
 ): { readonly D: number; readonly m: number } | undefined {
   const probe = at(0, sharp);
   const asks = s.task.fixed.filter((x) => missOf(x, probe) !== undefined);
-  if (asks.length === 0) return undefined;
+  const [only] = asks;
+  if (only === undefined) return undefined;
+  // A molar flow says it all.
+  if (asks.length === 1 && only.fix === 'flow' && only.flow.basis === 'mole')
+    return { D: only.product === 'top' ? only.flow.value : rest - only.flow.value, m: sharp };
   const ms =
     asks.length === 1
       ? [sharp]
@@ -179,6 +184,9 @@ function bestSplit(
       let sum = 0;
       for (const ask of asks) sum += (missOf(ask, view) ?? 0) ** 2;
       if (view.D < least) sum += 100 * (1 + Math.log(least / view.D)) ** 2;
+      // Towards all or nothing a purity comes back to the feed's: rather a split in between.
+      const lesser = Math.min(view.D, rest - view.D) / rest;
+      if (lesser < 0.04) sum += 0.5 * Math.log(0.04 / Math.max(lesser, 1e-30)) ** 2;
       if (Number.isFinite(sum) && (best === undefined || sum < best.miss)) best = { D: view.D, m, miss: sum };
       return sum;
     };

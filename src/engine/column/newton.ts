@@ -28,6 +28,9 @@ export interface NewtonOptions {
 }
 
 const SOLVED = 1e-9;
+/** From here on the last factors are tried again, as long as a step takes the residual down by this factor. */
+const NEAR = 1e-2;
+const CONTRACTS = 0.1;
 /** No flow falls below this share of its value in one step. */
 const LEAST_SHARE = 0.2;
 /** No total flow of a stage grows by more than this factor in one step. */
@@ -84,6 +87,9 @@ export class Newton {
     let merit = this.merit(wanted);
     let residual = this.worst(wanted);
     let resets = 0;
+    // Whether the derivatives are those of the state, and whether the last factors are worth another step.
+    let fresh = true;
+    let reuse = false;
     for (let pass = 1; pass <= options.iterations; pass++) {
       const end = (why: Exclude<NewtonEnd['end'], 'solved'>): NewtonEnd => ({
         end: why,
@@ -91,12 +97,18 @@ export class Newton {
         iterations: pass,
       });
       const converged = residual < SOLVED;
-      // One step more with the last factors: its error is that of two steps.
-      if (!(converged && pass > 1) && !this.factor(wanted)) return end('singular');
+      if (!(reuse || (converged && pass > 1))) {
+        if (!fresh) s.evaluate();
+        if (!this.factor(wanted)) return end('singular');
+      }
       if (!this.direction(wanted)) return end('singular');
       this.keep();
       if (converged) return this.finish(wanted, residual, pass);
+      const before = residual;
       const allowed = pass <= 10 ? 1e4 : 1;
+      // Near the answer the factors serve again: the step is not as good, and costs a third.
+      const near = residual < NEAR;
+      const level = near ? 1 : 2;
       let share = 1;
       for (let halving = 0; ; halving++) {
         const jump = this.move(wanted, share);
@@ -105,7 +117,7 @@ export class Newton {
           resets++;
           this.resetStages();
         }
-        const fine = s.evaluate();
+        const fine = s.evaluate(level);
         const next = fine ? this.merit(wanted) : Number.NaN;
         if (next <= allowed * merit || (reset && fine)) {
           merit = next;
@@ -121,6 +133,8 @@ export class Newton {
         this.restore();
       }
       residual = this.worst(wanted);
+      fresh = level === 2;
+      reuse = near && share === 1 && residual < CONTRACTS * before;
     }
     return { end: 'iterations', residual, iterations: options.iterations };
   }
@@ -279,7 +293,7 @@ export class Newton {
   }
 
   private merit(wanted: Wanted): number {
-    let sum = this.s.squares();
+    let sum = this.s.squares;
     wanted.targets.forEach((t, r) => {
       sum += (t.measure() - wanted.values[r]!) ** 2;
     });
@@ -287,7 +301,7 @@ export class Newton {
   }
 
   private worst(wanted: Wanted): number {
-    let value = this.s.worst().value;
+    let value = this.s.residual;
     wanted.targets.forEach((t, r) => {
       value = Math.max(value, Math.abs(t.measure() - wanted.values[r]!));
     });

@@ -35,6 +35,9 @@ const STARTS: readonly (readonly [Attempt, Sweeps])[] = [
 ];
 const ITERATIONS = 40;
 const WARM_ITERATIONS = 14;
+/** Steps of a scan: how long in the logarithm of a parameter, how many each way. */
+const SCAN_STEP = 0.25;
+const SCAN_STEPS = 20;
 /** A place is dry below this share of the feed. */
 const DRY = 1e-7;
 
@@ -48,6 +51,8 @@ class Search {
   /** Fixings that are targets, with their place in the task's list. */
   private readonly moved: readonly Placed[];
   private failure: Failure | undefined;
+  /** The failure that came furthest towards what is asked. */
+  private reach: Failure | undefined;
   /** How far the last way was followed, 0 to 1. */
   private way = 0;
 
@@ -117,13 +122,15 @@ class Search {
       targets: wanted.targets.slice(moved),
       values: wanted.values.slice(moved),
     };
-    const guess = guessOf(s);
     // With nothing to move the plain column is the one that was tried.
-    for (const other of moved === 0 ? [] : [guess, this.calmer(guess)])
-      if (this.plainColumn(plain, other) && this.moveFrom(moved)) return true;
-    if (this.failure?.why === 'out-of-reach') return false;
-    this.start(guess, PLAIN);
-    return this.fromConstantOverflow(plain) && (moved === 0 || this.moveFrom(moved));
+    if (moved === 0) return false;
+    const guess = guessOf(s);
+    for (const other of [guess, this.calmer(guess)])
+      if (this.plainColumn(plain, other) && (this.moveFrom(moved) || (moved === 1 && this.scan(plain))))
+        return true;
+    // The furthest that was reached says more than where the last try ended.
+    if (this.reach) this.failure = this.reach;
+    return false;
   }
 
   private plainColumn(plain: Wanted, guess: Guess): boolean {
@@ -147,20 +154,6 @@ class Search {
   private start(guess: Guess, sweeps: Sweeps): void {
     startBySweeps(this.system, guess, sweeps);
     this.setDirect();
-  }
-
-  /** Constant molar overflow first, then enthalpies more and more real. */
-  private fromConstantOverflow(wanted: Wanted): boolean {
-    const { system: s } = this;
-    s.realism = 0;
-    const fine = this.attempt('constant-overflow', wanted, ITERATIONS);
-    const done =
-      fine &&
-      this.follow(wanted, (way) => {
-        s.realism = way;
-      });
-    s.realism = 1;
-    return done;
   }
 
   /** From a solved system at 0 of the way to 1 in steps that adapt; false when it gets stuck. */
@@ -206,6 +199,59 @@ class Search {
     return false;
   }
 
+  /**
+   * With one thing asked: a plain column after the other along the one free parameter, both ways, until the measure passes
+   * what is wanted; from there to it. Finds answers beyond a fold, where the measure first runs away from its value.
+   */
+  private scan(plain: Wanted): boolean {
+    const { system: s, wanted } = this;
+    if (!this.effort.tried.includes('scan')) this.effort.tried.push('scan');
+    const told = this.failure;
+    const k = wanted.free[0]!;
+    const target = wanted.targets[0]!;
+    const gapOf = (): number => target.measure() - wanted.values[0]!;
+    const from = stateOf(s);
+    const before = stateOf(s);
+    for (const direction of [SCAN_STEP, -SCAN_STEP]) {
+      restore(s, from);
+      s.evaluate();
+      let gap = gapOf();
+      for (let step = 0; step < SCAN_STEPS; step++) {
+        put(s, before);
+        s.p[k] = this.shifted(k, direction);
+        if (!this.run(plain)) break;
+        const next = gapOf();
+        if (gap > 0 !== next > 0) {
+          if (this.run(wanted)) return true;
+          restore(s, before);
+          if (this.run(wanted)) return true;
+          break;
+        }
+        gap = next;
+      }
+    }
+    restore(s, from);
+    s.evaluate();
+    this.failure = told;
+    return false;
+  }
+
+  private run(wanted: Wanted): boolean {
+    const end = this.newton.run(wanted, { iterations: 18, resets: false });
+    this.effort.iterations += end.iterations;
+    this.effort.residual = end.residual;
+    return end.end === 'solved' && !this.isTrivial();
+  }
+
+  /** A parameter further on; of the bottoms the share of the whole, so that neither product vanishes. */
+  private shifted(k: number, by: number): number {
+    const { system: s } = this;
+    const p = s.p[k]!;
+    if (s.movers[k]!.moves !== 'bottoms') return p * Math.exp(by);
+    const odds = (p / (s.feedTotal - p)) * Math.exp(by);
+    return (s.feedTotal * odds) / (1 + odds);
+  }
+
   private noteReach(way: number, from: Float64Array, moved: number): void {
     let fixing = 0;
     let furthest = 0;
@@ -218,13 +264,9 @@ class Search {
     }
     const target = this.wanted.targets[fixing]!;
     const { index, fixed } = this.moved[fixing]!;
-    this.failure = {
-      ...this.standing(),
-      why: 'out-of-reach',
-      way,
-      fixing: index,
-      reached: naturalOf(this.system, fixed, target.measure()),
-    };
+    const reached = naturalOf(this.system, fixed, target.measure());
+    this.failure = { ...this.standing(), why: 'out-of-reach', way, fixing: index, reached };
+    if (way > (this.reach?.way ?? -1)) this.reach = this.failure;
   }
 
   private attempt(name: Attempt, wanted: Wanted, iterations: number): boolean {

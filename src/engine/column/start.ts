@@ -1,5 +1,5 @@
-import { bubbleStage } from './bubble';
 import type { Guess } from './guess';
+import type { SimpleK } from './simpleK';
 import { LEAST_VAPOUR, NOTHING, type StageSystem } from './system';
 
 /** How start values are swept: passes with start K-values, then with the model's. */
@@ -9,6 +9,9 @@ export interface Sweeps {
   /** Share of a new temperature and K taken by a model sweep; 1 is all. */
   readonly share: number;
 }
+
+/** Largest change of temperature in one sweep with the model's K [K]. */
+const MODEL_STEP_K = 10;
 
 /** Molar flows by constant overflow from the ends' flows and the feeds' vapour fractions, into L and V. */
 function constantOverflow(s: StageSystem, guess: Guess): void {
@@ -144,22 +147,46 @@ export function startBySweeps(s: StageSystem, guess: Guess, sweeps: Sweeps): voi
     }
   }
   for (let pass = 0; pass < sweeps.model; pass++) {
-    for (let j = 0; j < places; j++) {
-      const before = T[j]!;
-      bubbleStage(s, j, 1, 10);
-      T[j] = before + sweeps.share * (T[j]! - before);
-      const liq = s.liq[j]!;
-      const vap = s.vap[j]!;
-      for (let i = 0; i < n; i++) {
-        const lnK = liq.lnPhi[i]! - vap.lnPhi[i]! + (liq.dT[i]! - vap.dT[i]!) * (T[j]! - before);
-        const at = j * n + i;
-        K[at] =
-          sweeps.share === 1
-            ? Math.exp(lnK)
-            : Math.exp(sweeps.share * lnK + (1 - sweeps.share) * Math.log(K[at]!));
-      }
-    }
+    for (let j = 0; j < places; j++) modelSweep(s, j, simple, K, sweeps.share);
     componentFlows(s, K, diag);
     scaleTo(s, keptL, keptV);
   }
+}
+
+/**
+ * One step of a place towards its bubble point with the model's K, whose change with temperature is taken from the simple
+ * K-values: it needs no derivatives. K of the place follow the temperature.
+ */
+function modelSweep(s: StageSystem, j: number, simple: SimpleK, K: Float64Array, share: number): void {
+  const { n, l, v, T, model, task, scratch: x } = s;
+  const at = j * n;
+  const P = task.P_Pa[j]!;
+  const liq = s.liq[j]!;
+  const vap = s.vap[j]!;
+  const before = T[j]!;
+  let L = 0;
+  let V = 0;
+  for (let i = 0; i < n; i++) {
+    L += l[at + i]!;
+    V += v[at + i]!;
+  }
+  for (let i = 0; i < n; i++) x[i] = v[at + i]! / V;
+  model.evaluate('vapour', before, P, x, 0, vap);
+  for (let i = 0; i < n; i++) x[i] = l[at + i]! / L;
+  model.evaluate('liquid', before, P, x, 0, liq);
+  let sum = 0;
+  let slope = 0;
+  for (let i = 0; i < n; i++) {
+    const k = Math.exp(liq.lnPhi[i]! - vap.lnPhi[i]!);
+    const y = x[i]! * k;
+    K[at + i] = share === 1 ? k : k ** share * K[at + i]! ** (1 - share);
+    sum += y;
+    slope += y * simple.b[i]!;
+  }
+  const u = 1 / before + (Math.log(sum) * sum) / slope;
+  const next = u > 0 ? 1 / u : before + MODEL_STEP_K;
+  const step = share * Math.min(Math.max(next - before, -MODEL_STEP_K), MODEL_STEP_K);
+  T[j] = before + step;
+  const turn = 1 / before - 1 / T[j]!;
+  for (let i = 0; i < n; i++) K[at + i]! *= Math.exp(simple.b[i]! * turn);
 }

@@ -71,13 +71,6 @@ export class StageSystem {
   readonly M: Float64Array;
   readonly Q: Float64Array;
   readonly H: Float64Array;
-  /**
-   * 1: the model's enthalpies. 0: a vapour has 20 kJ/mol more than a liquid and nothing else counts, which is constant
-   * molar overflow. Between: the blend.
-   */
-  realism = 1;
-  /** Vapour in the feeds by place [mol/s]. */
-  private readonly feedVapour: Float64Array;
   /** Share of the equilibrium vapour in what Murphree's relation gives, by place and chemical; 1 without. */
   readonly theta: Float64Array;
   readonly scratch: Float64Array;
@@ -119,7 +112,6 @@ export class StageSystem {
     this.f = vector(places * n);
     this.F = vector(places);
     this.HF = vector(places);
-    this.feedVapour = vector(places);
     this.M = vector(places * n);
     this.Q = vector(places * n);
     this.H = vector(places);
@@ -130,14 +122,12 @@ export class StageSystem {
 
   /** Another task of the same shape (shapeOf): feeds, pressures and what is asked may differ. */
   load(task: ColumnTask): void {
-    const { n, f, F, HF, feedVapour } = this;
+    const { n, f, F, HF } = this;
     this.task = task;
     this.reflux = task.subcooling_K > 0 ? this.cooled : this.liq[0]!;
-    this.realism = 1;
     f.fill(0);
     F.fill(0);
     HF.fill(0);
-    feedVapour.fill(0);
     this.theta.fill(1);
     let total = 0;
     for (const feed of task.feeds) {
@@ -148,7 +138,6 @@ export class StageSystem {
       }
       F[feed.place]! += sum;
       HF[feed.place]! += feed.H_W;
-      feedVapour[feed.place]! += feed.vapourFraction * sum;
       total += sum;
     }
     this.feedTotal = total;
@@ -165,8 +154,12 @@ export class StageSystem {
     return j >= this.first && j <= this.last;
   }
 
-  /** Sums, properties and residuals at l, v, T, p. False when a property is not finite. */
-  evaluate(): boolean {
+  /**
+   * Sums, properties and residuals at l, v, T, p. False when a property is not finite.
+   *
+   * @param level  2: with all derivatives; 1: they stay those of the last evaluation at level 2
+   */
+  evaluate(level: 1 | 2 = 2): boolean {
     const { n, places, l, v, T, L, V, model, task } = this;
     const x = this.scratch;
     this.readMovers();
@@ -178,39 +171,19 @@ export class StageSystem {
       const sumV = V[j]!;
       for (let i = 0; i < n; i++) x[i] = l[at + i]! / sumL;
       const liq = this.liq[j]!;
-      model.evaluate('liquid', T[j]!, P, x, 2, liq);
+      model.evaluate('liquid', T[j]!, P, x, level, liq);
       if (j === 0 && this.reflux !== liq)
-        model.evaluate('liquid', T[0]! - task.subcooling_K, P, x, 2, this.reflux);
+        model.evaluate('liquid', T[0]! - task.subcooling_K, P, x, level, this.reflux);
       for (let i = 0; i < n; i++) x[i] = v[at + i]! / sumV;
       const vap = this.vap[j]!;
-      model.evaluate('vapour', T[j]!, P, x, 2, vap);
+      model.evaluate('vapour', T[j]!, P, x, level, vap);
       if (!Number.isFinite(liq.h_J_mol + vap.h_J_mol + liq.lnPhi[0]! + vap.lnPhi[0]!)) return false;
     }
-    if (this.realism < 1) this.simplify();
     this.balances();
     this.equilibria();
     this.energies();
+    this.summarise();
     return true;
-  }
-
-  private simplify(): void {
-    const t = this.realism;
-    const blend = (props: PhaseProps, h: number): void => {
-      props.h_J_mol = t * props.h_J_mol + (1 - t) * h;
-      props.cp_J_molK *= t;
-      for (let i = 0; i < this.n; i++) props.hPartial[i] = t * props.hPartial[i]! + (1 - t) * h;
-    };
-    for (let j = 0; j < this.places; j++) {
-      blend(this.liq[j]!, 0);
-      blend(this.vap[j]!, ENERGY_J_MOL);
-    }
-    if (this.reflux !== this.liq[0]) blend(this.reflux, 0);
-  }
-
-  /** Enthalpy that the feeds bring to place j, as real as the stages' [W]. */
-  fedEnthalpy(j: number): number {
-    const t = this.realism;
-    return t === 1 ? this.HF[j]! : t * this.HF[j]! + (1 - t) * ENERGY_J_MOL * this.feedVapour[j]!;
   }
 
   /** L and V from l and v. */
@@ -294,8 +267,7 @@ export class StageSystem {
     const { places, L, V, H, rL, rV, energyScale, feedTotal, totalCondenser, p, task } = this;
     for (let j = 0; j < places; j++) {
       if (this.balancesEnergy(j)) {
-        let h =
-          rL[j]! * L[j]! * this.liq[j]!.h_J_mol + rV[j]! * V[j]! * this.vap[j]!.h_J_mol - this.fedEnthalpy(j);
+        let h = rL[j]! * L[j]! * this.liq[j]!.h_J_mol + rV[j]! * V[j]! * this.vap[j]!.h_J_mol - this.HF[j]!;
         if (j > 0) h -= L[j - 1]! * this.leaving(j - 1).h_J_mol;
         if (j + 1 < places) h -= V[j + 1]! * this.vap[j + 1]!.h_J_mol;
         H[j] = h / energyScale;
@@ -304,50 +276,60 @@ export class StageSystem {
     }
   }
 
-  /** Scale of a mole balance: what enters the place of that chemical. */
-  inflow(j: number, i: number): number {
-    const { n, l, v, f, places } = this;
-    const at = j * n + i;
-    const inflow = f[at]! + (j > 0 ? l[at - n]! : 0) + (j + 1 < places ? v[at + n]! : 0);
-    return Math.max(inflow, LEAST_FLOW * this.feedTotal);
-  }
+  /** Largest scaled residual of the stages, and the square sum of all, after evaluate. */
+  residual = 0;
+  squares = 0;
 
-  /** Largest scaled residual of the stages and where it is. */
-  worst(): {
-    readonly value: number;
-    readonly place: number;
-    readonly of: 'balance' | 'equilibrium' | 'energy';
-  } {
-    let value = 0;
-    let place = 0;
-    let of: 'balance' | 'equilibrium' | 'energy' = 'balance';
-    const look = (r: number, j: number, what: typeof of): void => {
-      if (Math.abs(r) <= value) return;
-      value = Math.abs(r);
-      place = j;
-      of = what;
-    };
-    for (let j = 0; j < this.places; j++) {
-      for (let i = 0; i < this.n; i++) {
-        look(this.M[j * this.n + i]! / this.inflow(j, i), j, 'balance');
-        look(this.Q[j * this.n + i]!, j, 'equilibrium');
-      }
-      look(this.H[j]!, j, 'energy');
-    }
-    return { value, place, of };
-  }
-
-  /** Square sum of the scaled residuals of the stages. */
-  squares(): number {
+  private summarise(): void {
+    const { n, places, l, v, f, M, Q, H } = this;
+    const least = LEAST_FLOW * this.feedTotal;
+    let most = 0;
     let sum = 0;
-    for (let j = 0; j < this.places; j++) {
-      for (let i = 0; i < this.n; i++) {
-        const m = this.M[j * this.n + i]! / this.inflow(j, i);
-        const q = this.Q[j * this.n + i]!;
+    for (let j = 0; j < places; j++) {
+      const above = j > 0;
+      const below = j + 1 < places;
+      for (let at = j * n, end = at + n; at < end; at++) {
+        let inflow = f[at]!;
+        if (above) inflow += l[at - n]!;
+        if (below) inflow += v[at + n]!;
+        const m = Math.abs(M[at]!) / Math.max(inflow, least);
+        const q = Math.abs(Q[at]!);
+        if (m > most) most = m;
+        if (q > most) most = q;
         sum += m * m + q * q;
       }
-      sum += this.H[j]! * this.H[j]!;
+      const h = Math.abs(H[j]!);
+      if (h > most) most = h;
+      sum += h * h;
     }
-    return sum;
+    // A comparison with something that is not a number fails: then the sum tells.
+    this.residual = Number.isFinite(sum) ? most : Number.POSITIVE_INFINITY;
+    this.squares = sum;
   }
+
+  /** The largest scaled residual of the stages: where it is and of what. */
+  worst(): Worst {
+    let worst: Worst = { value: 0, place: 0, of: 'balance' };
+    const { n, places, l, v, f } = this;
+    for (let j = 0; j < places; j++) {
+      let m = 0;
+      let q = 0;
+      for (let at = j * n; at < (j + 1) * n; at++) {
+        const inflow = f[at]! + (j > 0 ? l[at - n]! : 0) + (j + 1 < places ? v[at + n]! : 0);
+        m = Math.max(m, Math.abs(this.M[at]!) / Math.max(inflow, LEAST_FLOW * this.feedTotal));
+        q = Math.max(q, Math.abs(this.Q[at]!));
+      }
+      const h = Math.abs(this.H[j]!);
+      if (m > worst.value) worst = { value: m, place: j, of: 'balance' };
+      if (q > worst.value) worst = { value: q, place: j, of: 'equilibrium' };
+      if (h > worst.value) worst = { value: h, place: j, of: 'energy' };
+    }
+    return worst;
+  }
+}
+
+export interface Worst {
+  readonly value: number;
+  readonly place: number;
+  readonly of: 'balance' | 'equilibrium' | 'energy';
 }

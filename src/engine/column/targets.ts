@@ -146,15 +146,10 @@ export function dutyOf(s: StageSystem, at: 'condenser' | 'reboiler'): number {
       rL[0]! * L[0]! * s.leaving(0).h_J_mol +
       rV[0]! * V[0]! * vap[0]!.h_J_mol -
       V[1]! * vap[1]!.h_J_mol -
-      s.fedEnthalpy(0)
+      s.HF[0]!
     );
   const j = s.places - 1;
-  return (
-    L[j]! * liq[j]!.h_J_mol +
-    V[j]! * vap[j]!.h_J_mol -
-    L[j - 1]! * s.leaving(j - 1).h_J_mol -
-    s.fedEnthalpy(j)
-  );
+  return L[j]! * liq[j]!.h_J_mol + V[j]! * vap[j]!.h_J_mol - L[j - 1]! * s.leaving(j - 1).h_J_mol - s.HF[j]!;
 }
 
 function dutyTarget(s: StageSystem, at: 'condenser' | 'reboiler', value: number): Target {

@@ -95,4 +95,4 @@ export type Attempt =
   | 'wilson-sweeps'
   | 'slow-sweeps'
   | 'plain-then-move'
-  | 'constant-overflow';
+  | 'scan';
