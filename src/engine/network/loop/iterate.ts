@@ -26,6 +26,8 @@ const RETREATS = 6;
 const FAILURES = 15;
 /** A residual so many times the least one so far is none to go on from. */
 const WORSE = 30;
+/** Each plain pass from such a point has to bring it to this share [-]. */
+const CALMS = 0.7;
 /** Solved: change of the tear, and closure of the loop and of the units at its tears [-]. */
 const SETTLED = 1e-9;
 const CLOSED = 2e-10;
@@ -35,7 +37,7 @@ const CLOSED = 2e-10;
  */
 const TOO_MUCH = 1e5;
 const MUCH = 1e2;
-const SOME = 1e1;
+const SOME = 1e3;
 /** Passes without a better closure after which what is closed well enough is taken. */
 const STALLED = 6;
 
@@ -72,6 +74,8 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
   let retreats = 0;
   let failures = 0;
   let damping = 1;
+  /** Residual of the last point away from the best one. */
+  let excursion = Number.POSITIVE_INFINITY;
   let shown: Change | undefined;
   let last: { balance: UnitClosure; back: Torn } | undefined;
   let plain = start.slopes ? 0 : DIRECT;
@@ -120,6 +124,14 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
     if (start.slopes && pass === 1 && isStale(balance, back)) return { is: 'stale' };
     if (gathered(balance, back, TOO_MUCH).length > 0) return gathering(loop, early, balance, back, MUCH)!;
     if (best && change.mean > WORSE * best.change.mean && pass > DIRECT + 1) {
+      // Plain passes often lead on from there: a gas that was overloaded condenses what is too much. While they do, they go on.
+      if (change.mean < CALMS * excursion) {
+        excursion = change.mean;
+        anderson.forget();
+        [x, assumed] = [g, back];
+        continue;
+      }
+      excursion = Number.POSITIVE_INFINITY;
       // Back to the best point, and on from there with a plain step, shorter each time.
       const next = best.x.map((v, i) => v + damping * (best!.g[i]! - v));
       damping /= 2;
@@ -134,6 +146,7 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
       damping = 1;
     }
     retreats = 0;
+    excursion = Number.POSITIVE_INFINITY;
     anderson.push(x, g);
     if (plain > 0) {
       plain--;
