@@ -36,7 +36,8 @@ function EvidenceList({ evidence }: { readonly evidence: readonly Evidence[] }) 
     <p className="muted">
       {numbers
         .map((e) => {
-          const { number, unit } = show(e.value, e.dim, measures);
+          const isCount = e.dim === 'number' && Number.isInteger(e.value);
+          const { number, unit } = show(e.value, e.dim, measures, isCount ? { decimals: 0 } : undefined);
           return `${capital(evidenceWord(e.name))} ${number} ${unit}`.trim();
         })
         .join(', ')}
