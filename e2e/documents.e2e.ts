@@ -1,13 +1,9 @@
 import { readFileSync } from 'node:fs';
 import AxeBuilder from '@axe-core/playwright';
 import { getDocument } from 'pdfjs-dist/legacy/build/pdf.mjs';
-import { expect, type Page } from 'playwright/test';
+import { expect } from 'playwright/test';
+import { field, labelText } from './hand';
 import { openExample, solved, test } from './page';
-
-const field = (page: Page, path: string) => page.locator(`.drawer [data-field="${path}"]`).first();
-/** The label of a stream on the sheet, its rows joined. */
-const labelText = async (page: Page, number: string): Promise<string> =>
-  (await page.locator(`[data-stream="${number}"] .label`).first().textContent()) ?? '';
 
 test('a pressure typed in another unit changes the numbers downstream, and undo brings them back', async ({
   quiet: page,

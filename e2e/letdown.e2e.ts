@@ -13,6 +13,9 @@ const PARTS = Object.entries(
   (settingsOf('u1').composition as { readonly parts: Readonly<Record<string, string>> }).parts,
 );
 
+// Long journeys: a busy machine needs more than the usual time.
+test.slow();
+
 let expected: Promise<ReadonlyMap<string, string>>;
 test.beforeAll(() => {
   expected = labelsByCommand(LET_DOWN_FILE);
@@ -79,6 +82,11 @@ async function backAndForth(
 test('the let-down is drawn by the pointer, undone to the empty sheet and made again', async ({
   quiet: page,
 }) => {
+  // The empty sheet is a whole page.
+  const zones = (side: string) => page.locator(`.zones[data-side="${side}"] span`).allTextContents();
+  expect(await zones('top')).toEqual(['1', '2', '3', '4', '5', '6', '7', '8']);
+  expect(await zones('left')).toEqual(['A', 'B', 'C', 'D', 'E', 'F']);
+
   await barButton(page, /^Chemicals/).click();
   for (const [id] of PARTS) {
     await field(page, 'chemicals.add').fill(id);

@@ -1,44 +1,5 @@
-import { expect, type Locator, type Page, test } from 'playwright/test';
-
-/** Middle of what is seen of an element. */
-async function middleOf(target: Locator): Promise<readonly [number, number]> {
-  const box = await target.boundingBox();
-  if (!box) throw new Error('nothing to be seen there');
-  return [box.x + box.width / 2, box.y + box.height / 2];
-}
-
-async function drag(
-  page: Page,
-  from: readonly [number, number],
-  to: readonly [number, number],
-): Promise<void> {
-  await page.mouse.move(...from);
-  await page.mouse.down();
-  await page.mouse.move((from[0] + to[0]) / 2, (from[1] + to[1]) / 2, { steps: 4 });
-  await page.mouse.move(...to, { steps: 4 });
-  await page.mouse.up();
-}
-
-const unit = (page: Page, tag: string): Locator => page.locator(`[data-unit="${tag}"]`);
-const stream = (page: Page, number: string): Locator => page.locator(`[data-stream="${number}"]`);
-
-/** A kind from the shelf to a place, counted from the sheet's upper left corner. */
-async function put(page: Page, kind: string, x: number, y: number): Promise<void> {
-  const sheet = await page.locator('.sheet-flow').boundingBox();
-  if (!sheet) throw new Error('there is no sheet');
-  await drag(page, await middleOf(page.locator(`[data-shelf="${kind}"]`)), [sheet.x + x, sheet.y + y]);
-}
-
-/** Pulls a stream from a unit's port to a place. */
-async function pull(page: Page, tag: string, port: string, to: readonly [number, number]): Promise<void> {
-  await unit(page, tag).hover();
-  await drag(page, await middleOf(page.locator(`[data-unit="${tag}"] [data-port="${port}"]`)), to);
-}
-
-const portAt = (page: Page, tag: string, port: string): Promise<readonly [number, number]> =>
-  unit(page, tag)
-    .hover()
-    .then(() => middleOf(page.locator(`[data-unit="${tag}"] [data-port="${port}"]`)));
+import { expect, test } from 'playwright/test';
+import { drag, middleOf, portAt, pull, put, stream, unit } from './hand';
 
 test.beforeEach(async ({ page }) => {
   await page.goto('./');
