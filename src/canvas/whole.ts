@@ -21,6 +21,14 @@ const titleOf = (gap: Finding): string => {
 const time = (ms: number): string =>
   ms < 1000 ? `${Math.max(1, Math.round(ms))} ms` : `${(ms / 1000).toFixed(1)} s`;
 
+/** ", loop of stream 14, pass 5, off by 2e-3": which loop, at which tear, how far. */
+function loopText(sketch: Sketch, { loop }: ResultsState): string {
+  if (!loop) return '';
+  const number = sketch.streams.find((s) => s.id === loop.stream)?.number ?? loop.stream;
+  const off = loop.residual === undefined ? '' : `, off by ${loop.residual.toExponential(0)}`;
+  return `, loop of stream ${number}, pass ${loop.pass}${off}`;
+}
+
 /** "Solved in 12 ms, edit 214", or what stops the train, first cause first. */
 export function wholeState(
   sketch: Sketch,
@@ -31,7 +39,10 @@ export function wholeState(
   if (sketch.units.length === 0) return { word: '', rest: 'Nothing to solve yet' };
   if (results.trouble) return { word: 'Stopped', rest: `: ${results.trouble}` };
   if (results.at && results.answering > results.solvedEdit)
-    return { word: 'Solving', rest: `, at ${tagOf(sketch, results.at)}, edit ${edit}` };
+    return {
+      word: 'Solving',
+      rest: `, at ${tagOf(sketch, results.at)}${loopText(sketch, results)}, edit ${edit}`,
+    };
   const whole = gaps.find((gap) => !gap.at.unit && !gap.at.stream);
   const stops = whole ? [titleOf(whole)] : [];
   const lacking = new Set(gaps.map((gap) => gap.at.unit));

@@ -15,7 +15,10 @@ let batch: SolveBatch;
 
 beforeAll(async () => {
   const sketch = opened(exampleText('nitrogen-loop'));
-  ({ basis, problem } = await compiled(sketch));
+  const made = await compiled(sketch);
+  if (!made.basis) throw new Error('the example has no basis');
+  ({ problem } = made);
+  basis = made.basis;
   tagOf = new Map(sketch.units.map((u) => [u.id, u.tag]));
   numberOf = new Map(sketch.streams.map((s) => [s.id, s.number]));
   batch = fresh(problem, basis);
