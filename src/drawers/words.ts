@@ -61,7 +61,7 @@ const VALUES: Readonly<Record<string, string>> = {
 export function assumptionWords(assumption: Assumption, kind: string | undefined) {
   const { path, unitText } = assumption;
   return {
-    what: CHOICES[path] ?? (kind === undefined ? humanised(path) : settingWord(kind, path)),
+    what: CHOICES[path] ?? settingWord(kind ?? '', path),
     value: VALUES[unitText] ?? (kind === undefined ? unitText : optionWord(kind, unitText)),
     where: path.startsWith('site.') ? 'the site' : path === 'chemicals' ? 'the chemicals' : 'the model',
   };
