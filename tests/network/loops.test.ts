@@ -105,6 +105,20 @@ describe('a gas loop with drum, divide and compressor', () => {
     expect(solvedStream(live, 'back').n_mol_s / solvedStream(clean, 'back').n_mol_s).toBeCloseTo(1, 8);
   });
 
+  test('that was cut and is drawn again has its answer back, not what its units had in between', () => {
+    const memory = makeMemory(basis);
+    const cut = gasLoop(0.05).map((u) =>
+      u.id === 'j' ? unit('j join in1=a > out=b', { p: { drop: 0 } }) : u,
+    );
+    const first = finish(problemOf(basis, gasLoop(0.05)), memory);
+    const open = finish(problemOf(basis, cut, { edit: 2 }), memory);
+    expect(unitResult(open, 'k')!.loop).toBeUndefined();
+    const again = finish(problemOf(basis, gasLoop(0.05), { edit: 3 }), memory);
+    expect(worstOf(again.closure!)).toBeLessThan(1e-9);
+    expect(again.steps).toEqual(['w']);
+    for (const id of ['back', 'p', 'l']) expect(solvedStream(again, id)).toEqual(solvedStream(first, id));
+  });
+
   test('without a purge says which chemical has no way out, and where a purge takes most of it', () => {
     const batch = fresh(problemOf(basis, gasLoop(0, 230)), basis);
     const found = batch.findings.filter((f) => f.code === 'network/no-way-out');

@@ -21,6 +21,9 @@ export interface SolveOptions {
   readonly kinds?: Kinds;
 }
 
+/** Loops that are remembered, so that undoing a cut finds the answer again. */
+const KEPT_LOOPS = 1000;
+
 /**
  * Solves a sketch unit by unit, upstream first, and yields before every unit that has to be solved anew; the caller may stop
  * there for ever. Units whose settings and entering states are bit for bit those of their last answer keep it, and with it the
@@ -57,6 +60,7 @@ export function* solveNetwork(
   forget(memory.streams, found.streams);
   for (const [key, { units }] of memory.loops)
     if (!units.every((u) => found.units.has(u.id))) memory.loops.delete(key);
+  for (const key of [...memory.loops.keys()].slice(0, -KEPT_LOOPS)) memory.loops.delete(key);
   const findings = collectFindings(run);
   if (live) findings.push(...severalAnswers(live, memory.streams));
   const closure = overallClosure(plan, found.units, memory, kinds);

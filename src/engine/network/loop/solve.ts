@@ -27,7 +27,10 @@ export function* solveLoop(members: readonly number[], run: Run): Generator<Solv
   const key = units.map((u) => u.id).join(' ');
   const asked = askedOf(units, run);
   const last = run.memory.loops.get(key);
-  if (last && sameLoop(last, asked) && keep(last, units, run)) return;
+  if (last && sameLoop(last, asked)) {
+    run.memory.loops.set(key, keep(last, units, run));
+    return;
+  }
   const plan = loopPlanOf(run.plan, members);
   const loop: Loop = {
     run,
@@ -40,7 +43,8 @@ export function* solveLoop(members: readonly number[], run: Run): Generator<Solv
   if (settled.is === 'solved') {
     const { torn, slopes } = settled;
     const warm: LoopWarm = { tears: plan.tears, scalars: plan.scalars, torn, slopes };
-    run.memory.loops.set(key, { ...asked, warm });
+    const answers = units.map((u) => run.memory.units.get(u.id)!);
+    run.memory.loops.set(key, { ...asked, answers, warm });
     return;
   }
   const unsolved = refusal(loop, settled);
@@ -85,28 +89,31 @@ function tell(units: readonly ProblemUnit[], results: Told, run: Run): void {
 }
 
 /** The last answer stands; only thresholds may have changed. */
-function keep(last: LoopMemory, units: readonly ProblemUnit[], run: Run): boolean {
-  if (last.unsolved) {
-    tell(units, last.unsolved, run);
-    return true;
+function keep(last: LoopMemory, units: readonly ProblemUnit[], run: Run): LoopMemory {
+  if (!last.answers) {
+    tell(units, last.unsolved ?? [], run);
+    return last;
   }
-  const { memory, problem, found, kinds } = run;
-  const all = units.map((unit) => [unit, memory.units.get(unit.id)] as const);
-  if (!all.every(([, m]) => m?.outcome.state === 'solved')) return false;
-  for (const [unit, m] of all) {
-    if (m?.outcome.state !== 'solved') continue;
-    let kept = m;
-    if (!sameData(m.limits, problem.limits)) {
-      const call = { unit: unit.id, in: m.in, outPorts: m.outPorts, settings: m.settings, site: m.site };
-      const whole = { ...call, model: memory.model, work: memory.work, limits: problem.limits };
-      const limitFindings = limitsOf(unit, solverOf(kinds, unit.kind)!, whole, m.outcome);
-      kept = { ...m, limits: problem.limits, limitFindings };
-    }
-    memory.units.set(unit.id, kept);
-    found.units.set(unit.id, kept.result);
-    settle(unit, m.outcome.value.out, run);
-  }
-  return true;
+  const { memory, found } = run;
+  const answers = last.answers.map((answer, k) => withLimits(answer, units[k]!, run));
+  answers.forEach((answer, k) => {
+    if (answer.outcome.state !== 'solved') throw new Error('a loop is kept with all its answers');
+    memory.units.set(units[k]!.id, answer);
+    found.units.set(units[k]!.id, answer.result);
+    settle(units[k]!, answer.outcome.value.out, run);
+  });
+  return { ...last, answers };
+}
+
+/** The same answer under the thresholds of now. */
+function withLimits(answer: UnitMemory, unit: ProblemUnit, { memory, problem, kinds }: Run): UnitMemory {
+  const { limits } = problem;
+  if (sameData(answer.limits, limits)) return answer;
+  const { in: inlets, outPorts, settings, site, outcome } = answer;
+  const { model, work } = memory;
+  const call = { unit: unit.id, in: inlets, outPorts, settings, site, limits, model, work };
+  const limitFindings = limitsOf(unit, solverOf(kinds, unit.kind)!, call, outcome);
+  return { ...answer, limits, limitFindings };
 }
 
 /** Takes the last pass for the answer, when every unit closes with the streams as they are now. */

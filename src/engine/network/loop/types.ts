@@ -4,6 +4,7 @@ import type { Anderson } from '../../numerics/anderson';
 import type { Finding, Outcome } from '../../outcome';
 import type { AnyKind } from '../../units/solvers';
 import type { Answer, Call, SiteSI } from '../../units/types';
+import type { UnitMemory } from '../memory';
 import type { Run } from '../run';
 import type { LoopResult, ProblemUnit, Read, UnitResult } from '../types';
 import type { LoopPlan } from './tears';
@@ -79,7 +80,9 @@ export interface LoopMemory {
   readonly reads: readonly Read[];
   readonly site: SiteSI;
   readonly entering: readonly (readonly [StreamId, StreamState])[];
-  /** Absent when every unit has an answer. */
+  /** Of every unit, when all have an answer: what the units themselves remember may be of another sketch by then. */
+  readonly answers?: readonly UnitMemory[];
+  /** What is said of every unit, when not. */
   readonly unsolved?: readonly (readonly [UnitId, UnitResult])[];
   readonly warm?: LoopWarm;
 }
