@@ -113,6 +113,7 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
     shown = change;
     last = { balance, back };
     if (pass <= DIRECT + 1 || early.size === 0) early = new Map(going.states);
+    if (start.slopes && isStale(balance, back)) return { is: 'stale' };
     const closure = Math.max(worstOf(balance), worstTaker(loop, going, back));
     if (closure < closest.closure) closest = { closure, pass };
     const stalled = pass - closest.pass >= STALLED && closure <= CLOSES / 2;
@@ -121,7 +122,6 @@ export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending,
       const result: LoopResult = { passes: pass, residual: change.most, tear };
       return { is: 'solved', torn: back, going, result, slopes: anderson };
     }
-    if (start.slopes && pass === 1 && isStale(balance, back)) return { is: 'stale' };
     if (gathered(balance, back, TOO_MUCH).length > 0) return gathering(loop, early, balance, back, MUCH)!;
     if (best && change.mean > WORSE * best.change.mean && pass > DIRECT + 1) {
       // Plain passes often lead on from there: a gas that was overloaded condenses what is too much. While they do, they go on.
