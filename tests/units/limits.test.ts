@@ -208,7 +208,9 @@ describe('streams', () => {
     const found = findings(wet, [feed({ T: 300, P: 5e5 }, 0, 0, 1, 0, 1, 0)]).filter((f) =>
       /second-liquid|liquids-together/.test(f.code),
     );
-    expect(found).toMatchObject([{ code: 'stream/liquids-together', weight: 'caution', at: { stream: 'a' } }]);
+    expect(found).toMatchObject([
+      { code: 'stream/liquids-together', weight: 'caution', at: { stream: 'a' } },
+    ]);
   });
 
   test('water beyond what oil dissolves is named where the model mixes everything', async () => {
