@@ -84,8 +84,8 @@ test('the let-down is drawn by the pointer, undone to the empty sheet and made a
 }) => {
   // The empty sheet is a whole page.
   const zones = (side: string) => page.locator(`.zones[data-side="${side}"] span`).allTextContents();
-  expect(await zones('top')).toEqual(['1', '2', '3', '4', '5', '6', '7', '8']);
-  expect(await zones('left')).toEqual(['A', 'B', 'C', 'D', 'E', 'F']);
+  await expect.poll(() => zones('top')).toEqual(['1', '2', '3', '4', '5', '6', '7', '8']);
+  await expect.poll(() => zones('left')).toEqual(['A', 'B', 'C', 'D', 'E', 'F']);
 
   await barButton(page, /^Chemicals/).click();
   for (const [id] of PARTS) {
