@@ -4,8 +4,15 @@ export function pickFile(accept: string): Promise<File | undefined> {
     const input = document.createElement('input');
     input.type = 'file';
     input.accept = accept;
-    input.addEventListener('change', () => resolve(input.files?.[0]));
-    input.addEventListener('cancel', () => resolve(undefined));
+    input.hidden = true;
+    const end = (file: File | undefined): void => {
+      input.remove();
+      resolve(file);
+    };
+    input.addEventListener('change', () => end(input.files?.[0]));
+    input.addEventListener('cancel', () => end(undefined));
+    // In the document while the dialogue is open: a loose element may be collected, and its answer lost.
+    document.body.append(input);
     input.click();
   });
 }
