@@ -8,6 +8,8 @@ export const test = base.extend<{ quiet: Page }>({
       if (message.type() === 'error') errors.push(message.text());
     });
     page.on('pageerror', (error) => errors.push(error.message));
+    // From here on the browser hands file dialogues over; asked for only when a key is pressed, it would come too late at times.
+    page.on('filechooser', () => undefined);
     await page.goto('./');
     await use(page);
     expect(errors).toEqual([]);
