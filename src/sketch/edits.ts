@@ -1,4 +1,5 @@
 /** Everything a user can do to a sketch: pure functions that share what did not change, each with a label for undo. */
+export { setDesignBasis, setDocuments, setHolds, setRevisions } from './editing/basis';
 export { setChemicals } from './editing/chemicals';
 export { bendStream, connect, deleteStream, disconnect, type End, whyNotConnect } from './editing/connect';
 export {

@@ -1,5 +1,6 @@
 import { FORMAT, LABEL_KEYS } from './fresh';
 import { KNOWN_KINDS, type Registry } from './registry';
+import { DOCUMENTS } from './schemas/documents';
 import { OWN_CHEMICAL } from './schemas/ownChemical';
 import { quantitySchema, SETTING_DEFS, settingsSchema } from './schemas/settings';
 import type { Schema } from './schemas/types';
@@ -48,6 +49,7 @@ export function sketchSchema(registry: Registry = KNOWN_KINDS): Schema {
           'approved',
           'revision',
           'date',
+          'purpose',
           'notes',
         ),
       },
@@ -97,6 +99,7 @@ export function sketchSchema(registry: Registry = KNOWN_KINDS): Schema {
         description: 'thresholds by code',
         additionalProperties: { anyOf: [{ $ref: '#/$defs/quantity' }, { type: 'number' }] },
       },
+      ...DOCUMENTS,
     },
     $defs: {
       ...SETTING_DEFS,

@@ -1,5 +1,6 @@
 import type { Corr } from '../engine/chemicals/types';
 import type { ChemId, Port, StreamId, UnitId } from '../engine/ids';
+import type { DesignBasis, DocumentChoices, Hold, Revision } from './documentTypes';
 
 export type Json = string | number | boolean | null | readonly Json[] | { readonly [key: string]: Json };
 
@@ -16,6 +17,8 @@ export interface TitleBlock {
   readonly approved?: string;
   readonly revision?: string;
   readonly date?: string;
+  /** What the document is for: "for review". */
+  readonly purpose?: string;
   readonly notes?: string;
 }
 
@@ -128,6 +131,10 @@ export interface Sketch {
   readonly display: Display;
   readonly notes: readonly Note[];
   readonly limits?: Readonly<Record<string, Quantity>>;
+  readonly revisions?: readonly Revision[];
+  readonly designBasis?: DesignBasis;
+  readonly holds?: readonly Hold[];
+  readonly documents?: DocumentChoices;
 }
 
 /** A value used because the user gave none. */

@@ -1,6 +1,7 @@
 import { word } from '../findings';
 import { isObject, type JsonObject, own } from '../json';
 import type { Json } from '../types';
+import { checkDocuments } from './documents';
 import { checkOwnChemical } from './ownChemical';
 import type { FileCode, Problems } from './problem';
 import * as value from './value';
@@ -15,6 +16,7 @@ const TITLE = [
   'approved',
   'revision',
   'date',
+  'purpose',
   'notes',
 ] as const;
 
@@ -42,6 +44,7 @@ export function checkShape(raw: JsonObject, problems: Problems): void {
       checkNote(note, `notes.${k}`, problems);
     });
   fields(raw, 'limits', problems, (_, v, path) => value.quantity(v, path, problems));
+  checkDocuments(raw, problems);
 }
 
 function fields(
