@@ -25,14 +25,20 @@ export function Text({ shape, stale }: { readonly shape: TextShape; readonly sta
   );
 }
 
-/** Keeps what is inside at its size on the screen: it grows and shrinks against the zoom, away from a fixed point. */
+/**
+ * Keeps what is inside at its size on the screen: it grows and shrinks against the zoom, away from a fixed point, up to the
+ * scale at which it has room.
+ */
 export function Steady({
   about: [x, y],
+  upTo,
   children,
 }: {
   readonly about: Point;
+  readonly upTo?: number;
   readonly children: React.ReactNode;
 }) {
-  const style = { transform: 'scale(var(--inv, 1))', transformOrigin: `${x}px ${y}px`, '--back': 1 };
+  const scale = upTo === undefined ? 'var(--inv, 1)' : `min(var(--inv, 1), ${upTo})`;
+  const style = { transform: `scale(${scale})`, transformOrigin: `${x}px ${y}px`, '--back': 1 };
   return <g style={style as CSSProperties}>{children}</g>;
 }

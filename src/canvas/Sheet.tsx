@@ -75,9 +75,9 @@ function View() {
       shownZoom.current = zoom;
       root.current?.style.setProperty('--inv', String(steadyScale(zoom)));
       root.current?.style.setProperty('--back', String(1 / zoom));
-      quietAgain(stores, sheet, zoom);
+      quietAgain(sheet, zoom);
     },
-    [stores, sheet],
+    [sheet],
   );
   useOnViewportChange({ onChange: scaleMarks });
 

@@ -1,11 +1,11 @@
 import { memo, useState } from 'react';
 import { useShallow } from 'zustand/react/shallow';
 import { diamondPath } from '../drawing/diamonds';
-import type { LabelShape, LineShape, Point } from '../drawing/types';
+import type { LabelShape, Point } from '../drawing/types';
 import type { StreamId } from '../engine/ids';
 import { useSession, useStores } from '../store/react';
 import { chooseStream, isPointed } from './choose';
-import { anchorOf, middleOf } from './lines';
+import { middleOf } from './lines';
 import { pullByPointer } from './pointer';
 import { portsOf } from './ports';
 import { useSheet, useSheetStore } from './sheetStore';
@@ -72,7 +72,7 @@ const StreamMark = memo(function StreamMark({ id }: { readonly id: StreamId }) {
         ) : null}
       </button>
       {line.hanging && line.arrow ? <LooseEnd id={id} at={line.arrow.at} from={at} /> : null}
-      {label && ((!quietLabel && !label.folded) || shown) ? drawLabel(label, line, at, opened) : null}
+      {label && ((!quietLabel && !label.folded) || shown) ? drawLabel(label, at, opened) : null}
     </div>
   );
 });
@@ -100,8 +100,8 @@ function LooseEnd({ id, at, from }: { readonly id: StreamId; readonly at: Point;
 }
 
 /** Rows with numbers right-aligned and units behind them; an opened label has a ground of its own. Part of its stream's view. */
-function drawLabel(label: LabelShape, line: LineShape, from: Point, opened: boolean) {
-  const anchor = anchorOf(line.points, label.box);
+function drawLabel(label: LabelShape, from: Point, opened: boolean) {
+  const anchor = label.hold;
   return (
     <svg
       className="label"
@@ -116,6 +116,12 @@ function drawLabel(label: LabelShape, line: LineShape, from: Point, opened: bool
           y={label.box.y - anchor[1] - 2}
           width={label.box.w + 8}
           height={label.box.h + 4}
+        />
+      ) : null}
+      {label.leader && !label.folded ? (
+        <path
+          className="leader"
+          d={`M${label.leader[0][0] - anchor[0]} ${label.leader[0][1] - anchor[1]}L${label.leader[1][0] - anchor[0]} ${label.leader[1][1] - anchor[1]}`}
         />
       ) : null}
       {label.rows.map((row, k) => {

@@ -1,4 +1,4 @@
-import { memo, useMemo } from 'react';
+import { Fragment, memo, useMemo } from 'react';
 import type { NodeProps } from 'reactflow';
 import { limitMark } from '../drawing/marks';
 import { transformOf } from '../drawing/transform';
@@ -8,7 +8,6 @@ import { useSession } from '../store/react';
 import { isPointed } from './choose';
 import { flagPort } from './extent';
 import { nodeBox } from './nodes';
-import { tagHold } from './quiet';
 import { Paths, Steady, Text } from './Shapes';
 import { useSheet, useSheetStore } from './sheetStore';
 import { UnitPorts } from './UnitPorts';
@@ -80,22 +79,32 @@ const Drawing = memo(function Drawing({
       ))}
     </>
   );
-  const hold = tagHold(shape);
   return (
     <>
-      {shape.duty ? (
-        <>
-          <Paths shapes={[shape.duty.line]} />
-          <Paths shapes={shape.duty.marks} />
-        </>
-      ) : null}
-      {flag ? <Steady about={flag}>{symbol}</Steady> : symbol}
-      {shape.duty?.text && showDuty ? (
-        <Steady about={shape.duty.text.at}>
-          <Text shape={shape.duty.text} stale={stale} />
+      {shape.links.map(({ name, line, marks }) => (
+        <Fragment key={name}>
+          <Paths shapes={[line]} />
+          <Paths shapes={marks} />
+        </Fragment>
+      ))}
+      {flag ? (
+        <Steady about={flag} upTo={shape.flagUpTo}>
+          {symbol}
         </Steady>
-      ) : null}
-      <Steady about={hold}>
+      ) : (
+        symbol
+      )}
+      {shape.links.map(({ name, text }) =>
+        text && showDuty ? (
+          <Steady key={name} about={text.at}>
+            <Text shape={text} stale={stale} />
+          </Steady>
+        ) : null,
+      )}
+      <Steady about={shape.hold} upTo={shape.tagUpTo}>
+        {showDuty
+          ? shape.remarks.map((remark) => <Text key={remark.at[1]} shape={remark} stale={stale} />)
+          : null}
         {tag ? <Text shape={{ ...tag, halo: true }} /> : null}
         <Paths shapes={shape.stateMark} />
         {shape.limit ? (

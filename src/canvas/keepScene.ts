@@ -1,6 +1,7 @@
 import { buildScene, sameLayout } from '../drawing/scene';
+import { textScaleAt } from '../drawing/textScale';
 import type { Scene } from '../drawing/types';
-import type { StreamId, UnitId } from '../engine/ids';
+import type { UnitId } from '../engine/ids';
 import type { Finding } from '../engine/outcome';
 import { measuresOf } from '../parts/measures';
 import type { Sketch } from '../sketch/types';
@@ -21,18 +22,6 @@ const indexed = <T, K>(
   keyOf: (item: T) => K,
 ): ReadonlyMap<K, T> => (list === before ? known : new Map(list.map((item) => [keyOf(item), item])));
 
-/** Streams from a feed, to a product, or with a loose end: their labels step back last. */
-const outerStreams = (sketch: Sketch): ReadonlySet<StreamId> => {
-  const edge = new Set<UnitId>(
-    sketch.units.filter((unit) => unit.kind === 'feed' || unit.kind === 'product').map((unit) => unit.id),
-  );
-  return new Set(
-    sketch.streams
-      .filter((s) => !s.from || !s.to || edge.has(s.from[0]) || edge.has(s.to[0]))
-      .map((s) => s.id),
-  );
-};
-
 /**
  * Keeps the sheet's scene in step with sketch and results: one pure function of both, with every shape handed on as the
  * same object wherever nothing changed, so that only the views of what changed are drawn again.
@@ -46,7 +35,7 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
     const { gaps } = stores.compiled.getState();
     const results = stores.results.getState();
     const before = sheet.getState();
-    const next = buildScene(sketch, input(sketch, results, gaps, before.moved), scene);
+    const next = buildScene(sketch, input(sketch, results, gaps, before.moved, before.textScale), scene);
     const units = indexed(next.units, before.scene.units, before.units, (shape) => shape.unit);
     const lines = indexed(next.lines, before.scene.lines, before.lines, (shape) => shape.stream);
     const labels = indexed(next.labels, before.scene.labels, before.labels, (shape) => shape.stream);
@@ -57,7 +46,7 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
       lines,
       labels,
       ...namesOf(sketch, results, gaps, units, labels),
-      ...(sameRoom(next, before.scene) ? {} : { quiet: quietAt(next, zoomNow(), outerStreams(sketch)) }),
+      ...(sameRoom(next, before.scene) ? {} : { quiet: quietAt(next, zoomNow()) }),
     });
   };
 
@@ -79,7 +68,7 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
       if (now.gaps !== before.gaps && placesOf(now.gaps) !== placesOf(before.gaps)) build();
     }),
     sheet.subscribe((now, before) => {
-      if (now.moved !== before.moved) build();
+      if (now.moved !== before.moved || now.textScale !== before.textScale) build();
     }),
   ];
   return () => {
@@ -97,10 +86,10 @@ const sameRoom = (a: Scene, b: Scene): boolean =>
 const placesOf = (gaps: readonly Finding[]): string =>
   gaps.map(({ code, at }) => [code, at.unit, at.path, at.port].join(' ')).join('\n');
 
-/** Labels step back anew when the zoom changes. */
-export function quietAgain(stores: Stores, sheet: SheetStore, zoom: number): void {
-  const { scene } = sheet.getState();
-  sheet.setState({ quiet: quietAt(scene, zoom, outerStreams(stores.sketch.getState().sketch)) });
+/** Texts are placed anew when the zoom changes what room they need. */
+export function quietAgain(sheet: SheetStore, zoom: number): void {
+  sheet.setState({ textScale: textScaleAt(zoom) });
+  sheet.setState({ quiet: quietAt(sheet.getState().scene, zoom) });
 }
 
 function namesOf(

@@ -1,4 +1,4 @@
-import type { Box, Point } from '../drawing/types';
+import type { Point } from '../drawing/types';
 
 /** Straight pieces of a line: start, end, length. */
 function pieces(points: readonly Point[]): { a: Point; b: Point; length: number }[] {
@@ -7,10 +7,6 @@ function pieces(points: readonly Point[]): { a: Point; b: Point; length: number 
     return { a, b, length: Math.abs(b[0] - a[0]) + Math.abs(b[1] - a[1]) };
   });
 }
-
-/** Length of the longest straight piece [px]. */
-export const longestPiece = (points: readonly Point[]): number =>
-  Math.max(0, ...pieces(points).map((piece) => piece.length));
 
 /** Middle of the longest straight piece. */
 export function middleOf(points: readonly Point[]): Point {
@@ -37,7 +33,3 @@ export function nearestOn(points: readonly Point[], [x, y]: Point): { at: Point;
   }
   return { at, distance };
 }
-
-/** Where a label hangs on its line: what it keeps its distance from while the zoom changes. */
-export const anchorOf = (points: readonly Point[], box: Box): Point =>
-  nearestOn(points, [box.x + box.w / 2, box.y + box.h / 2]).at;

@@ -1,5 +1,5 @@
-import { labelRows, linkText, type SolvedStream } from '../drawing/labelText';
-import type { DrawnState, LabelRow, SceneInput } from '../drawing/types';
+import { labelRows, linkTexts, remarksOf, type SolvedStream } from '../drawing/labelText';
+import type { DrawnState, LabelRow, LinkTexts, SceneInput } from '../drawing/types';
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Finding, Weight } from '../engine/outcome';
 import { worstWeight } from '../parts/LimitMark';
@@ -28,6 +28,7 @@ export function createSceneInput() {
     results: ResultsState,
     gaps: readonly Finding[],
     moved: SceneInput['moved'] | null,
+    textScale = 1,
   ): SceneInput => {
     if (sketch.display !== display || sketch.site !== site) {
       display = sketch.display;
@@ -51,14 +52,26 @@ export function createSceneInput() {
     // Before the first answer, what compiling misses is known already.
     const lacking = new Set(gaps.map((gap) => gap.at.unit));
     const states = new Map<UnitId, DrawnState>();
-    const duties = new Map<UnitId, string>();
-    for (const { id, kind } of sketch.units) {
+    const duties = new Map<UnitId, LinkTexts>();
+    const remarks = new Map<UnitId, readonly string[]>();
+    for (const unit of sketch.units) {
+      const { id, kind } = unit;
       const entry = results.units.get(id);
       states.set(id, entry ? drawnState(entry) : lacking.has(id) ? 'needs-value' : 'waiting');
       const shown = entry?.latest.state === 'solved' ? entry.latest : entry?.older;
-      if (shown?.heat_W !== undefined) duties.set(id, linkText(kind, shown, measures));
+      if (shown) duties.set(id, linkTexts(kind, shown, measures));
+      const lines = remarksOf(unit, shown);
+      if (lines.length > 0) remarks.set(id, lines);
     }
-    return { states, limits: worstByUnit(results), labels, duties, ...(moved ? { moved } : {}) };
+    return {
+      states,
+      limits: worstByUnit(results),
+      labels,
+      duties,
+      remarks,
+      textScale,
+      ...(moved ? { moved } : {}),
+    };
   };
 }
 

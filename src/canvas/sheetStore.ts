@@ -56,6 +56,8 @@ export interface SheetState {
   readonly streamNames: ReadonlyMap<StreamId, string>;
   /** Labels, diamonds and tags that step back at this zoom. */
   readonly quiet: Quiet;
+  /** How much larger than the sheet texts are at this zoom, in steps. */
+  readonly textScale: number;
   /** Positions while a drag or a move by keys lasts. */
   readonly moved: ReadonlyMap<UnitId, Point> | null;
   readonly movingByKeys: boolean;
@@ -72,7 +74,14 @@ export interface Quiet {
   readonly duties: boolean;
 }
 
-const emptyScene: Scene = { box: { x: 0, y: 0, w: 0, h: 0 }, units: [], lines: [], labels: [] };
+const emptyScene: Scene = {
+  box: { x: 0, y: 0, w: 0, h: 0 },
+  textScale: 1,
+  units: [],
+  lines: [],
+  labels: [],
+  omitted: [],
+};
 
 export const createSheetStore = () =>
   createStore<SheetState>()(() => ({
@@ -83,6 +92,7 @@ export const createSheetStore = () =>
     unitNames: new Map(),
     streamNames: new Map(),
     quiet: { labels: new Set(), diamonds: new Set(), duties: false },
+    textScale: 1,
     moved: null,
     movingByKeys: false,
     pulling: null,

@@ -1,4 +1,5 @@
 import type { ReactFlowInstance, useStoreApi } from 'reactflow';
+import { textScaleAt } from '../drawing/textScale';
 import type { Point } from '../drawing/types';
 import { fitting } from './extent';
 import type { SheetHandle } from './handle';
@@ -70,9 +71,12 @@ export function createView(
     },
     fit() {
       const [w, h] = size();
-      const { scene } = store.getState();
-      if (scene.units.length === 0 || w === 0 || h === 0) return;
-      const { zoom, middle: at } = fitting(scene, w - 2 * MARGIN, h - 2 * MARGIN, LEAST_ZOOM);
+      if (store.getState().scene.units.length === 0 || w === 0 || h === 0) return;
+      const wanted = (): ReturnType<typeof fitting> =>
+        fitting(store.getState().scene, w - 2 * MARGIN, h - 2 * MARGIN, LEAST_ZOOM);
+      // What keeps its size needs more room the smaller the rest gets: a few rounds settle it.
+      for (let round = 0; round < 4; round += 1) store.setState({ textScale: textScaleAt(wanted().zoom) });
+      const { zoom, middle: at } = wanted();
       put(at, zoom);
       isFitted = true;
     },

@@ -51,7 +51,8 @@ const CELL = 96;
 /** Cells in a row of the index; sheets are far smaller than that. */
 const ROW = 65536;
 
-interface Entry {
+/** What was put into an index; whoever has it can take it out again. */
+export interface Entry {
   readonly box: Box;
   readonly owner: unknown;
 }
@@ -61,7 +62,7 @@ export class BoxIndex {
   private readonly cells = new Map<number, Entry[]>();
 
   /** @param owner who put it there; `hits` can leave out one owner's boxes */
-  add(box: Box, owner?: unknown): void {
+  add(box: Box, owner?: unknown): Entry {
     const entry: Entry = { box, owner };
     const x2 = Math.floor((box.x + box.w) / CELL);
     const y2 = Math.floor((box.y + box.h) / CELL);
@@ -70,6 +71,20 @@ export class BoxIndex {
         const cell = this.cells.get(cx * ROW + cy);
         if (cell) cell.push(entry);
         else this.cells.set(cx * ROW + cy, [entry]);
+      }
+    }
+    return entry;
+  }
+
+  remove(entry: Entry): void {
+    const { box } = entry;
+    const x2 = Math.floor((box.x + box.w) / CELL);
+    const y2 = Math.floor((box.y + box.h) / CELL);
+    for (let cx = Math.floor(box.x / CELL); cx <= x2; cx++) {
+      for (let cy = Math.floor(box.y / CELL); cy <= y2; cy++) {
+        const cell = this.cells.get(cx * ROW + cy);
+        const at = cell?.indexOf(entry) ?? -1;
+        if (at >= 0) cell!.splice(at, 1);
       }
     }
   }

@@ -29,9 +29,9 @@ export function piecesByLength(points: readonly Point[]): readonly number[] {
 }
 
 /** Middles to try on a piece from its own middle outward: distances from its first point. */
-function places(length: number, last: boolean): number[] {
-  const from = FROM_BEND;
-  const to = length - FROM_BEND - (last ? HEAD : 0);
+function places(length: number, last: boolean, scale: number): number[] {
+  const from = FROM_BEND - DIAMOND + DIAMOND * scale;
+  const to = length - from - (last ? HEAD : 0);
   const middle = (from + to) / 2;
   const out = [middle];
   for (let by = STEP; middle + by <= to; by += STEP) out.push(middle + by, middle - by);
@@ -39,40 +39,41 @@ function places(length: number, last: boolean): number[] {
 }
 
 /**
- * Place of a line's diamond: the longest straight piece first, its middle first, clear of symbols, other lines,
- * crossings and other diamonds.
+ * Places for a line's diamond: the longest straight piece first, its middle first, clear of symbols, other lines,
+ * crossings and other diamonds. None when every piece is too short or taken.
  *
  * @param taken     symbols and lines (each with its own line as the owner) and the diamonds placed so far
  * @param crossings distances along no axis: the points where this line meets others
- * @returns undefined when every piece is too short or taken
+ * @param scale     how much larger than at 100 % diamonds are [-]
  */
-export function placeDiamond(
+export function* diamondPlaces(
   points: readonly Point[],
   line: number,
   taken: BoxIndex,
   crossings: readonly Point[],
-): DiamondPlace | undefined {
+  scale: number,
+): Generator<DiamondPlace> {
   for (const piece of piecesByLength(points)) {
     const [x1, y1] = points[piece]!;
     const [x2, y2] = points[piece + 1]!;
     const length = Math.abs(x2 - x1) + Math.abs(y2 - y1);
-    if (length < SHORTEST) return undefined;
+    if (length < SHORTEST + 2 * DIAMOND * (scale - 1)) return;
     const [ux, uy] = [Math.sign(x2 - x1), Math.sign(y2 - y1)];
-    for (const along of places(length, piece + 2 === points.length)) {
+    for (const along of places(length, piece + 2 === points.length, scale)) {
       const at: Point = [Math.round(x1 + ux * along), Math.round(y1 + uy * along)];
-      if (crossings.some(([x, y]) => Math.abs(x - at[0]) + Math.abs(y - at[1]) < FROM_CROSSING)) continue;
-      if (taken.hits(boxAround(at, DIAMOND), 2, line)) continue;
-      if (ownPieceNear(points, piece, at)) continue;
-      return { at, piece };
+      const apart = FROM_CROSSING + DIAMOND * (scale - 1);
+      if (crossings.some(([x, y]) => Math.abs(x - at[0]) + Math.abs(y - at[1]) < apart)) continue;
+      if (taken.hits(boxAround(at, DIAMOND * scale), 2, line)) continue;
+      if (ownPieceNear(points, piece, at, DIAMOND * scale)) continue;
+      yield { at, piece };
     }
   }
-  return undefined;
 }
 
-function ownPieceNear(points: readonly Point[], except: number, at: Point): boolean {
+function ownPieceNear(points: readonly Point[], except: number, at: Point, half: number): boolean {
   for (let k = 0; k + 1 < points.length; k++) {
     if (k === except) continue;
-    const box = boxOfPiece(points[k]!, points[k + 1]!, DIAMOND + 2);
+    const box = boxOfPiece(points[k]!, points[k + 1]!, half + 2);
     if (at[0] > box.x && at[0] < box.x + box.w && at[1] > box.y && at[1] < box.y + box.h) return true;
   }
   return false;

@@ -2,9 +2,9 @@ import type { StreamId, UnitId } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { Sketch, SketchStream } from '../sketch/types';
 import { sameBox } from './boxes';
-import { type LabelSize, labelSize } from './labels';
+import { type LabelSize, labelSize, roomFor } from './labelSize';
 import { sameValue } from './same';
-import { roomOf } from './sideTexts';
+import { remarkRoom, roomOf } from './sideTexts';
 import { portOf, type StandingUnit, standingUnits } from './standing';
 import { flagName } from './symbols/flag';
 import type { LabelRow, Point, SceneInput } from './types';
@@ -13,10 +13,15 @@ import type { LabelRow, Point, SceneInput } from './types';
 export interface Ground {
   readonly standing: readonly StandingUnit[];
   readonly streams: readonly SketchStream[];
-  /** Sizes of the labels: from units and count of rows, never from digits. */
+  /** Sizes of the labels at 100 %: from units and count of rows; from digits only where a number is unusually wide. */
   readonly sizes: ReadonlyMap<StreamId, LabelSize>;
-  /** Room of each unit's duty [px]. */
-  readonly rooms: readonly number[];
+  /** Room of each unit's duties, by link [px]. */
+  readonly rooms: readonly (readonly number[])[];
+  /** Count and width of the lines under each unit's tag [px]. */
+  readonly remarks: readonly (readonly [rows: number, width: number])[];
+  /** Streams of feeds and products, whose labels come first. */
+  readonly outer: ReadonlySet<StreamId>;
+  readonly textScale: number;
   readonly ribbons: ReadonlyMap<StreamId, number> | undefined;
 }
 
@@ -29,10 +34,10 @@ export interface Made {
 
 const sizeByUnits = new Map<string, LabelSize>();
 
-/** The same units give the same object, so that sizes are compared by identity. */
+/** The same units and rooms give the same object, so that sizes are compared by identity. */
 function sizeOf(rows: readonly LabelRow[]): LabelSize {
   let key = '';
-  for (const row of rows) key += `${row.unit}\n`;
+  for (const row of rows) key += `${row.unit}\n${roomFor(row.number)}\n`;
   let size = sizeByUnits.get(key);
   if (!size) {
     size = labelSize(rows);
@@ -55,14 +60,42 @@ export function groundOf(sketch: Sketch, input: SceneInput, before: Made | undef
     const rows = input.labels.get(id);
     if (rows && rows.length > 0) sizes.set(id, sizeOf(rows));
   }
-  const rooms = standing.map((u) => (u.link ? roomOf(input.duties.get(u.unit.id)) : 0));
-  return { standing, streams: sketch.streams, sizes, rooms, ribbons: input.ribbons };
+  const rooms = standing.map(({ unit, symbol }) =>
+    (symbol.links ?? []).map(({ name }) => roomOf(input.duties.get(unit.id)?.[name])),
+  );
+  const remarks = standing.map(({ unit }) => {
+    const rows = input.remarks?.get(unit.id) ?? [];
+    return [rows.length, remarkRoom(rows)] as const;
+  });
+  const { textScale = 1, ribbons } = input;
+  return {
+    standing,
+    streams: sketch.streams,
+    sizes,
+    rooms,
+    remarks,
+    outer: outerStreams(sketch),
+    textScale,
+    ribbons,
+  };
+}
+
+/** Streams that come from a feed, lead to a product, or have a loose end. */
+export function outerStreams(sketch: Sketch): ReadonlySet<StreamId> {
+  const edge = new Set<UnitId>();
+  for (const { id, kind } of sketch.units) if (kind === 'feed' || kind === 'product') edge.add(id);
+  const outer = new Set<StreamId>();
+  for (const { id, from, to } of sketch.streams) {
+    if (!from || !to || edge.has(from[0]) || edge.has(to[0])) outer.add(id);
+  }
+  return outer;
 }
 
 /** Whether everything stands where it stood, whatever else changed in the sketch. */
 export function sameGround(a: Ground, b: Ground): boolean {
   if (a.standing.length !== b.standing.length) return false;
-  if (!a.rooms.every((room, k) => room === b.rooms[k])) return false;
+  if (a.textScale !== b.textScale) return false;
+  if (!sameValue(a.rooms, b.rooms) || !sameValue(a.remarks, b.remarks)) return false;
   if (!sameMap(a.sizes, b.sizes) || !sameMap(a.ribbons, b.ribbons)) return false;
   if (a.standing === b.standing && a.streams === b.streams) return true;
   /** Units that became another record or symbol, though they stand where they stood. */
@@ -99,7 +132,7 @@ function standsAlike(a: StandingUnit, b: StandingUnit): boolean {
     (s.tagless === t.tagless &&
       s.nameInside === t.nameInside &&
       sameValue(s.nameAt, t.nameAt) &&
-      sameValue(a.link, b.link))
+      sameValue(a.links, b.links))
   );
 }
 

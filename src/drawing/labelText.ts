@@ -1,9 +1,9 @@
 import type { StreamResult, UnitResult } from '../engine/network/types';
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { KindCatalogue } from '../engine/units/types';
-import { type Dimension, displayUnit, type Measures, show } from '../quantity';
-import type { LabelKey } from '../sketch/types';
-import type { LabelRow } from './types';
+import { type Dimension, displayUnit, formatNumber, type Measures, show } from '../quantity';
+import type { LabelKey, SketchUnit } from '../sketch/types';
+import type { LabelRow, LinkTexts } from './types';
 
 export type SolvedStream = Extract<StreamResult, { state: 'solved' }>;
 
@@ -51,16 +51,49 @@ export const powerText = (power_W: number, measures: Measures): string => {
   return `W ${number} ${unit}`;
 };
 
-/** What stands beside the link of a solved unit: its shaft power where it turns, else its duty. */
-export const linkText = (
+const numberIn = (results: UnitResult['results'], key: string): number | undefined => {
+  const value = results?.[key];
+  return typeof value === 'number' ? value : undefined;
+};
+
+/**
+ * What stands beside the links of a solved unit, by their names: a column's condenser and reboiler each have their own duty,
+ * what turns has its shaft power, all else its duty.
+ */
+export function linkTexts(
   kind: string,
-  result: Pick<UnitResult, 'heat_W' | 'power_W'>,
+  result: Pick<UnitResult, 'heat_W' | 'power_W' | 'results'>,
   measures: Measures,
   kinds: Readonly<Record<string, Pick<KindCatalogue, 'group'>>> = CATALOGUE,
-): string =>
-  kinds[kind]?.group === 'rotating'
-    ? powerText(result.power_W ?? 0, measures)
-    : dutyText(result.heat_W ?? 0, measures);
+): LinkTexts {
+  if (kinds[kind]?.group === 'rotating') {
+    return result.power_W === undefined ? {} : { shaft: powerText(result.power_W, measures) };
+  }
+  const texts: Record<string, string> = {};
+  for (const [name, key] of [
+    ['condenser', 'condenserDuty_W'],
+    ['reboiler', 'reboilerDuty_W'],
+  ] as const) {
+    const duty_W = numberIn(result.results, key);
+    if (duty_W !== undefined) texts[name] = dutyText(duty_W, measures);
+  }
+  if (result.heat_W !== undefined) texts.heat = dutyText(result.heat_W, measures);
+  return texts;
+}
+
+/** Lines under the tag of a unit with stages: how many, and the reflux ratio of a solved one with a condenser. */
+export function remarksOf(
+  unit: Pick<SketchUnit, 'kind' | 'settings'>,
+  result: Pick<UnitResult, 'results'> | undefined,
+): readonly string[] {
+  if (unit.kind !== 'column') return [];
+  const { stages } = unit.settings;
+  const rows: string[] = [];
+  if (typeof stages === 'number') rows.push(`${stages} ${stages === 1 ? 'stage' : 'stages'}`);
+  const ratio = numberIn(result?.results, 'refluxRatio');
+  if (ratio !== undefined) rows.push(`reflux ${formatNumber(ratio)}`);
+  return rows;
+}
 
 /** "Labels: flow kmol/h, temperature °C, pressure bar(a)" */
 export function labelsSentence(keys: readonly LabelKey[], measures: Measures): string {

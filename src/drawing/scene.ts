@@ -4,7 +4,7 @@ import { sameBox } from './boxes';
 import { groundOf, type Made, sameGround } from './ground';
 import { type Layout, layOut } from './layout';
 import { keepSame, sameValue } from './same';
-import type { LabelRow, LabelShape, Scene, SceneInput, UnitShape } from './types';
+import type { LabelRow, LabelShape, Omitted, Scene, SceneInput, UnitShape } from './types';
 import { shapeOf } from './units';
 
 interface Kept extends Made {
@@ -41,7 +41,14 @@ export function buildScene(sketch: Sketch, input: SceneInput, before?: Scene): S
     return was && was.stale === stale && sameRows(was.rows, rows) ? was : { ...place, rows, stale };
   });
 
-  const next: Scene = { box: layout.box, units, lines: layout.lines, labels };
+  const next: Scene = {
+    box: layout.box,
+    textScale: ground.textScale,
+    units,
+    lines: layout.lines,
+    labels,
+    omitted: omittedOf(layout, input),
+  };
   const scene = before ? keepScene(next, before) : next;
   kept.set(scene, { ...now, layout });
   return scene;
@@ -53,6 +60,17 @@ export const sameLayout = (a: Scene, b: Scene): boolean => {
   return a === b || (layout !== undefined && layout === kept.get(b)?.layout);
 };
 
+/** What the sheet has no room for: labels that fold, tags and remarks, and duties that somebody asked for. */
+function omittedOf(layout: Layout, input: SceneInput): readonly Omitted[] {
+  const labels = layout.labels.filter((label) => label.folded);
+  const duties = layout.lost.filter(({ unit, link }) => input.duties.get(unit)?.[link] !== undefined);
+  return [
+    ...labels.map(({ stream }): Omitted => ({ what: 'label', stream })),
+    ...layout.omitted,
+    ...duties.map(({ unit, link }): Omitted => ({ what: 'duty', unit, link })),
+  ];
+}
+
 /** Whether the input says the same of a unit that stands where it stood, drawn from the same record. */
 function drawnAlike(id: UnitId, k: number, { input, ground }: Made, before: Made): boolean {
   const [u, v] = [ground.standing[k]!, before.ground.standing[k]];
@@ -60,7 +78,8 @@ function drawnAlike(id: UnitId, k: number, { input, ground }: Made, before: Made
   return (
     input.states.get(id) === before.input.states.get(id) &&
     input.limits.get(id) === before.input.limits.get(id) &&
-    input.duties.get(id) === before.input.duties.get(id)
+    sameValue(input.duties.get(id), before.input.duties.get(id)) &&
+    sameValue(input.remarks?.get(id), before.input.remarks?.get(id))
   );
 }
 
@@ -72,7 +91,15 @@ function keepScene(next: Scene, before: Scene): Scene {
   const units = keepSame<UnitShape>(next.units, before.units, (u) => u.unit);
   const lines = keepSame(next.lines, before.lines, (l) => l.stream);
   const labels = keepSame(next.labels, before.labels, (l) => l.stream);
-  const same = sameBox(next.box, before.box);
-  if (same && units === before.units && lines === before.lines && labels === before.labels) return before;
-  return { box: same ? before.box : next.box, units, lines, labels };
+  const omitted = sameValue(next.omitted, before.omitted) ? before.omitted : next.omitted;
+  const { textScale } = next;
+  const isSame = sameBox(next.box, before.box);
+  const isAll =
+    isSame &&
+    textScale === before.textScale &&
+    units === before.units &&
+    lines === before.lines &&
+    labels === before.labels &&
+    omitted === before.omitted;
+  return isAll ? before : { box: isSame ? before.box : next.box, textScale, units, lines, labels, omitted };
 }

@@ -14,11 +14,15 @@ export interface StandingUnit {
   readonly symbol: SymbolData;
   readonly pose: Pose;
   readonly box: Box;
-  /** Ends of its heat link: at the symbol, at the ring. */
-  readonly link?: readonly [Point, Point];
-  /** Room of the heat link with its ring. */
-  readonly linkBox?: Box;
+  /** Ends of its heat and shaft links: at the symbol, at the ring or double bar. */
+  readonly links: readonly (readonly [Point, Point])[];
+  /** Room of the links with their end marks. */
+  readonly linkBoxes: readonly Box[];
 }
+
+/** What lines and texts keep off: symbols, and their links. */
+export const symbolBoxes = (units: readonly StandingUnit[]): readonly Box[] =>
+  units.flatMap((u) => [u.box, ...u.linkBoxes]);
 
 /** Ports of kinds that nobody knows any more, as far as streams use them. */
 function usedPorts(sketch: Sketch): ReadonlyMap<UnitId, readonly PortSpec[]> {
@@ -52,9 +56,11 @@ export function standingUnits(
     const pose = poseOf(unit, moved?.get(unit.id));
     const known = stood.get(unit);
     if (known?.symbol === symbol && samePlace(known.pose, pose)) return known;
-    const plain = { unit, symbol, pose, box: boxOnSheet(pose, symbol.box) };
-    const link = symbol.link && ([toSheet(pose, symbol.link.from), toSheet(pose, symbol.link.to)] as const);
-    const now = link ? { ...plain, link, linkBox: boxOfPiece(...link, 4) } : plain;
+    const links = (symbol.links ?? []).map(
+      ({ from, to }) => [toSheet(pose, from), toSheet(pose, to)] as const,
+    );
+    const linkBoxes = links.map((link) => boxOfPiece(...link, 4));
+    const now = { unit, symbol, pose, box: boxOnSheet(pose, symbol.box), links, linkBoxes };
     stood.set(unit, now);
     return now;
   });

@@ -3,8 +3,8 @@ import { diamondPath } from './diamonds';
 import type { Frame } from './frame';
 import { limitMark } from './marks';
 import { FONT, type Palette, PRINT, TEXT, WEIGHT } from './tokens';
-import { transformOf } from './transform';
-import type { Box, LabelShape, LineShape, PathShape, Scene, TextShape, UnitShape } from './types';
+import { toSheet, transformOf } from './transform';
+import type { Box, LabelShape, LineShape, PathShape, Point, Scene, TextShape, UnitShape } from './types';
 
 const escaped = (text: string): string =>
   text.replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;').replaceAll('"', '&quot;');
@@ -62,6 +62,14 @@ export function labelTexts(label: LabelShape): readonly TextShape[] {
   });
 }
 
+/** The thin line that joins a label to its diamond. */
+export const leaderShape = ([a, b]: readonly [Point, Point]): PathShape => ({
+  d: `M${n(a[0])} ${n(a[1])}L${n(b[0])} ${n(b[1])}`,
+  width: WEIGHT.leader,
+  stroke: 'ink3',
+  fill: 'none',
+});
+
 /** A stream's diamond with its number. */
 export function diamondShapes(
   line: LineShape,
@@ -92,19 +100,33 @@ const symbolInPlace = (shape: UnitShape, palette: Palette, heavier = 1): string 
 /** Lines of a small picture keep at least this weight [px]. */
 const LIGHTEST = 1.1;
 
-function unitToSvg(shape: UnitShape, palette: Palette): string {
+/** What keeps its size while the sheet is small, drawn larger about the point that it holds to. */
+const grownAbout = (svg: string, [x, y]: Point, scale: number): string =>
+  scale === 1 || svg === ''
+    ? svg
+    : `<g transform="translate(${n(x)} ${n(y)}) scale(${scale}) translate(${n(-x)} ${n(-y)})">${svg}</g>`;
+
+function unitToSvg(shape: UnitShape, palette: Palette, textScale: number): string {
   const paths = (list: readonly PathShape[]): string => pathsToSvg(list, palette);
-  let out = shape.duty ? paths([shape.duty.line, ...shape.duty.marks]) : '';
-  out += symbolInPlace(shape, palette);
-  out += paths(shape.stateMark);
-  const texts = [...shape.texts, ...(shape.tagText ? [shape.tagText] : [])];
-  if (shape.duty?.text) texts.push(shape.duty.text);
-  out += texts.map((t) => textToSvg(t, palette)).join('');
+  const texts = (list: readonly TextShape[]): string => list.map((t) => textToSvg(t, palette)).join('');
+  const links = shape.links.map(({ line, marks }) => paths([line, ...marks])).join('');
+  const symbol = symbolInPlace(shape, palette) + texts(shape.texts);
+  const port = shape.symbol.nameInside ? (shape.symbol.ports('out') ?? shape.symbol.ports('in')) : undefined;
+  const flag = port ? toSheet(shape, port.at) : shape.at;
+  let tag = paths(shape.stateMark) + texts([...(shape.tagText ? [shape.tagText] : []), ...shape.remarks]);
   if (shape.limit) {
     const [x, y] = shape.limit.at;
-    out += `<g transform="translate(${n(x)} ${n(y)})">${paths(limitMark(shape.limit.weight))}</g>`;
+    tag += `<g transform="translate(${n(x)} ${n(y)})">${paths(limitMark(shape.limit.weight))}</g>`;
   }
-  return out;
+  const duties = shape.links.map(({ text }) =>
+    text ? grownAbout(textToSvg(text, palette), text.at, textScale) : '',
+  );
+  return (
+    links +
+    grownAbout(symbol, flag, port ? Math.min(textScale, shape.flagUpTo) : 1) +
+    grownAbout(tag, shape.hold, Math.min(textScale, shape.tagUpTo)) +
+    duties.join('')
+  );
 }
 
 export interface SvgOptions {
@@ -141,15 +163,20 @@ export function sceneToSvg(scene: Scene, palette: Palette = PRINT, options: SvgO
   }
   for (const line of scene.lines) parts.push(...material(line, heavier).map((p) => pathToSvg(p, palette)));
   for (const unit of scene.units) {
-    parts.push(bare ? symbolInPlace(unit, palette, heavier) : unitToSvg(unit, palette));
+    parts.push(bare ? symbolInPlace(unit, palette, heavier) : unitToSvg(unit, palette, scene.textScale));
   }
   if (!bare) {
     for (const line of scene.lines) {
       const diamond = diamondShapes(line);
-      if (diamond) parts.push(pathToSvg(diamond.path, palette), textToSvg(diamond.text, palette));
+      if (!diamond) continue;
+      const svg = pathToSvg(diamond.path, palette) + textToSvg(diamond.text, palette);
+      parts.push(grownAbout(svg, line.diamond!, scene.textScale));
     }
     for (const label of scene.labels) {
-      if (!label.folded) parts.push(...labelTexts(label).map((t) => textToSvg(t, palette)));
+      if (label.folded) continue;
+      const leader = label.leader ? pathToSvg(leaderShape(label.leader), palette) : '';
+      const rows = labelTexts(label).map((t) => textToSvg(t, palette));
+      parts.push(grownAbout(leader + rows.join(''), label.hold, scene.textScale));
     }
   }
   return (

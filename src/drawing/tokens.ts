@@ -8,6 +8,7 @@ export const WEIGHT = {
   detail: 1,
   link: 1.2,
   tagRule: 0.9,
+  leader: 0.7,
   diamond: 1.1,
   border: 1,
 } as const;

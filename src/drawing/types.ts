@@ -42,6 +42,8 @@ export interface PortPlace {
 }
 /** A heat link, which ends in a ring, or a shaft link, which ends in a double bar: from the symbol outward, in its own coordinates. */
 export interface LinkData {
+  /** What it is called in the texts of a scene: "heat" or "shaft"; a column has a "condenser" and a "reboiler". */
+  readonly name: string;
   /** Absent: heat. */
   readonly carries?: 'shaft';
   readonly from: Point;
@@ -59,7 +61,7 @@ export interface SymbolData {
   readonly nameInside?: boolean;
   /** Middle of the name inside. */
   readonly nameAt?: Point;
-  readonly link?: LinkData;
+  readonly links?: readonly LinkData[];
   /** Lines may choose among these places, whatever their port's name (join, divide). */
   readonly sides?: readonly PortPlace[];
   /** No tag is drawn (join, divide, feed, product). */
@@ -100,14 +102,26 @@ export interface UnitShape {
   readonly stateMark: readonly PathShape[];
   /** Symbol shown upright even when turned (names of feeds and products). */
   readonly texts: readonly TextShape[];
-  /** Heat or shaft link with its end mark and arrowhead (marks) and its duty or power, for units that have one. */
-  readonly duty?: {
-    readonly line: PathShape;
-    readonly marks: readonly PathShape[];
-    readonly text?: TextShape;
-  };
+  /** Heat and shaft links with their end marks and arrowheads (marks), each with its duty or power where it has room. */
+  readonly links: readonly LinkShape[];
+  /** Under the tag, where they have room: "32 stages". */
+  readonly remarks: readonly TextShape[];
   /** Middle of the 16 px mark (marks.ts draws it). */
   readonly limit?: { readonly weight: Weight; readonly at: Point };
+  /** Tag, state, limit mark and remarks keep their size on the screen: they grow about this point ... */
+  readonly hold: Point;
+  /** ... up to this text scale, for more has no room. */
+  readonly tagUpTo: number;
+  /** A flag with its name inside grows about its port up to this text scale. */
+  readonly flagUpTo: number;
+}
+
+/** A link as it is drawn. Its text keeps its size on the screen about its own point. */
+export interface LinkShape {
+  readonly name: string;
+  readonly line: PathShape;
+  readonly marks: readonly PathShape[];
+  readonly text?: TextShape;
 }
 
 export interface LineShape {
@@ -130,28 +144,49 @@ export interface LabelRow {
   readonly number: string;
   readonly unit: string;
 }
+/**
+ * A stream's label, as it is at 100 %. It keeps its size on the screen: at another text scale all of it, the leader line
+ * included, is scaled about `hold`.
+ */
 export interface LabelShape {
   readonly stream: StreamId;
   readonly box: Box;
+  /** A point of its line, or the middle of its diamond when there is a leader line. */
+  readonly hold: Point;
+  /** Thin line from the diamond to a label that has no room beside it. */
+  readonly leader?: readonly [Point, Point];
   readonly rows: readonly LabelRow[];
   /** x where numbers end (right-aligned) and where units start. */
   readonly numberRight: number;
   readonly unitLeft: number;
   /** Baseline of the first row; the next ones follow by 13 px. */
   readonly baseline: number;
-  /** No free place: opens on hover or focus. */
+  /** No place where it could only be read as its own stream's: left off, opens on hover or focus. */
   readonly folded: boolean;
   /** Numbers of an out-of-date unit: drawn in ink3 and italic. */
   readonly stale: boolean;
 }
 
+/** What is left off for want of room. */
+export type Omitted =
+  | { readonly what: 'label'; readonly stream: StreamId }
+  | { readonly what: 'tag' | 'remark'; readonly unit: UnitId }
+  | { readonly what: 'duty'; readonly unit: UnitId; readonly link: string };
+
 /** Everything on the sheet, placed. Canvas and PDF draw the same scene. */
 export interface Scene {
+  /** Around all of it, at the text scale. */
   readonly box: Box;
+  /** Nothing overlaps at this text scale, nor at a smaller one about the same points. */
+  readonly textScale: number;
   readonly units: readonly UnitShape[];
   readonly lines: readonly LineShape[];
   readonly labels: readonly LabelShape[];
+  readonly omitted: readonly Omitted[];
 }
+
+/** Texts of a unit's links by their names. */
+export type LinkTexts = Readonly<Record<string, string>>;
 
 /** What the scene shows beside the sketch itself. */
 export interface SceneInput {
@@ -159,8 +194,15 @@ export interface SceneInput {
   readonly limits: ReadonlyMap<UnitId, Weight>;
   /** Rows per stream, already formatted in the sketch's measures; absent: no label. */
   readonly labels: ReadonlyMap<StreamId, readonly LabelRow[]>;
-  /** Formatted duty ("Q 1307 kW") or shaft power ("W 52.1 kW") per unit; absent: a link without text. */
-  readonly duties: ReadonlyMap<UnitId, string>;
+  /** Formatted duty ("Q 1307 kW") or shaft power ("W 52.1 kW") per unit and name of the link; absent: a link without text. */
+  readonly duties: ReadonlyMap<UnitId, LinkTexts>;
+  /** Lines under a unit's tag ("32 stages"). */
+  readonly remarks?: ReadonlyMap<UnitId, readonly string[]>;
+  /**
+   * How much larger than at 100 % texts, diamonds and marks are, because they keep their size on a screen that is zoomed out
+   * (1 to 2); absent: 1. See textScaleAt.
+   */
+  readonly textScale?: number;
   /** Positions while a drag lasts, over the sketch's own. */
   readonly moved?: ReadonlyMap<UnitId, Point>;
   /** Width of a stream's ribbon in follow [px]; labels clear half of it. */

@@ -1,5 +1,6 @@
-import { type BoxIndex, hull } from './boxes';
+import { BoxIndex, boxAround } from './boxes';
 import { stateMark } from './marks';
+import { nearestOfBox, scaledAbout } from './near';
 import { placeDuty, placeName, type TextPlace } from './sideTexts';
 import type { StandingUnit } from './standing';
 import { flagName } from './symbols/flag';
@@ -7,39 +8,108 @@ import { linkShapes } from './symbols/shapes';
 import { placeTag, type TagPlace } from './tags';
 import { TEXT } from './tokens';
 import { toSheet } from './transform';
-import type { Box, Point, SceneInput, TextShape, UnitShape } from './types';
+import type { Box, LinkShape, Omitted, Point, SceneInput, TextShape, UnitShape } from './types';
 
 /** Places of what stands beside a unit's symbol. */
 export interface UnitTexts {
   readonly tag?: TagPlace;
   readonly name?: TextPlace;
-  readonly duty?: TextPlace;
+  /** By link; undefined without room. */
+  readonly duties: readonly (TextPlace | undefined)[];
+  readonly flagUpTo: number;
+}
+
+/** A flag with its name inside keeps its size on the screen about its port: the only one it has. */
+function flagHold({ symbol, pose }: StandingUnit): Point | undefined {
+  if (!symbol.nameInside) return undefined;
+  const port = symbol.ports('out') ?? symbol.ports('in');
+  return port && toSheet(pose, port.at);
+}
+
+/** A flag grows only as far as it meets nothing: tried from the full scale down [-]. */
+const SHARES = [1, 0.75, 0.5, 0.25] as const;
+const FLAG_CLEAR = 3;
+
+/**
+ * How far each flag may grow on a smaller sheet.
+ *
+ * @param taken symbols (their units as owners) and lines; grown flags are added
+ */
+export function growFlags(
+  units: readonly StandingUnit[],
+  taken: BoxIndex,
+  scale: number,
+): readonly { readonly upTo: number; readonly box: Box }[] {
+  return units.map((u) => {
+    const hold = flagHold(u);
+    if (!hold || scale === 1) return { upTo: 1, box: u.box };
+    for (const share of SHARES) {
+      const upTo = 1 + share * (scale - 1);
+      const box = scaledAbout(u.box, hold, upTo);
+      if (taken.hits(box, FLAG_CLEAR, u.unit.id)) continue;
+      taken.add(box, u.unit.id);
+      return { upTo, box };
+    }
+    return { upTo: 1, box: u.box };
+  });
+}
+
+interface Wanted {
+  /** Widths of the duties of each unit's links at 100 % [px]. */
+  readonly rooms: readonly (readonly number[])[];
+  readonly remarks: readonly (readonly [rows: number, width: number])[];
+  readonly scale: number;
+  readonly flags: readonly { readonly upTo: number; readonly box: Box }[];
 }
 
 /**
  * Tags, names and duties, each placed where it covers nothing. Room for a limit mark and a duty is kept even when there is
  * none, so that nothing moves when one appears.
  *
- * @param rooms for each unit, width of its duty [px]
  * @param taken symbols, lines and diamonds; what is placed here is added
- * @returns places for each unit, and the boxes of tags, marks, names and duties
+ * @returns places for each unit, the boxes of tags, marks, names and duties, and what has no room
  */
 export function placeTexts(
   units: readonly StandingUnit[],
-  rooms: readonly number[],
+  { rooms, remarks, scale, flags }: Wanted,
   taken: BoxIndex,
-): { readonly texts: readonly UnitTexts[]; readonly boxes: readonly Box[] } {
+): {
+  readonly texts: readonly UnitTexts[];
+  readonly boxes: readonly Box[];
+  readonly omitted: readonly Omitted[];
+} {
   const boxes: Box[] = [];
-  const add = (box: Box): void => {
-    boxes.push(box);
-    taken.add(box);
+  const omitted: Omitted[] = [];
+  const add = (...more: readonly Box[]): void => {
+    for (const box of more) {
+      boxes.push(box);
+      taken.add(box);
+    }
   };
-  const tags = units.map((u): TagPlace | undefined => {
+  const symbols = new BoxIndex();
+  const rings = new BoxIndex();
+  units.forEach((u, k) => {
+    symbols.add(flags[k]!.box, u.unit.id);
+    u.links.forEach(([, ring], n) => {
+      rings.add(boxAround(ring, 0.01), `${u.unit.id} ${n}`);
+    });
+  });
+  // Duties first: a tag has more places to choose from.
+  const duties = units.map((u, k) =>
+    u.links.map(([from, ring], n): TextPlace | undefined => {
+      const along: Point = [Math.sign(ring[0] - from[0]), Math.sign(ring[1] - from[1])];
+      const place = placeDuty(rooms[k]![n]!, ring, along, taken, rings, `${u.unit.id} ${n}`, scale);
+      if (place) add(place.box);
+      return place;
+    }),
+  );
+  const tags = units.map((u, k): TagPlace | undefined => {
     if (u.symbol.tagless) return undefined;
-    const place = placeTag(u.unit.tag, u.box, taken);
-    taken.add(place.box);
-    boxes.push(hull([place.box, place.limitBox])!);
-    taken.add(place.limitBox);
+    const [rows, remark] = remarks[k]!;
+    const place = placeTag({ tag: u.unit.tag, remark, rows }, u.box, taken, symbols, u.unit.id, scale);
+    if (!place) omitted.push({ what: 'tag', unit: u.unit.id });
+    else add(...place.boxes);
+    if (rows > 0 && !place?.remarks) omitted.push({ what: 'remark', unit: u.unit.id });
     return place;
   });
   const names = units.map((u): TextPlace | undefined => {
@@ -48,33 +118,25 @@ export function placeTexts(
     add(place.box);
     return place;
   });
-  const duties = units.map((u, k): TextPlace | undefined => {
-    if (!u.link) return undefined;
-    const place = placeDuty(rooms[k]!, u.link[1], direction(u.link), taken);
-    add(place.box);
-    return place;
-  });
   const texts = units.map((_, k): UnitTexts => {
-    const [tag, name, duty] = [tags[k], names[k], duties[k]];
-    return { ...(tag ? { tag } : {}), ...(name ? { name } : {}), ...(duty ? { duty } : {}) };
+    const [tag, name] = [tags[k], names[k]];
+    return {
+      ...(tag ? { tag } : {}),
+      ...(name ? { name } : {}),
+      duties: duties[k]!,
+      flagUpTo: flags[k]!.upTo,
+    };
   });
-  return { texts, boxes };
+  return { texts, boxes, omitted };
 }
 
-const direction = ([a, b]: readonly [Point, Point]): Point => [
-  Math.sign(b[0] - a[0]),
-  Math.sign(b[1] - a[1]),
-];
-
 /** A unit as it is drawn: its symbol with what stands beside it, and what the input says of it. */
-export function shapeOf(u: StandingUnit, input: SceneInput, { tag, name, duty }: UnitTexts): UnitShape {
+export function shapeOf(u: StandingUnit, input: SceneInput, texts: UnitTexts): UnitShape {
   const { unit, symbol, pose, box } = u;
+  const { tag, name, flagUpTo } = texts;
   const state = input.states.get(unit.id) ?? 'waiting';
   const weight = input.limits.get(unit.id);
-  const text = input.duties.get(unit.id);
-  const dutyText = duty && text !== undefined ? { ...duty.text, text } : undefined;
-  const stale = state === 'out-of-date';
-  return {
+  const shape = {
     unit: unit.id,
     tag: unit.tag,
     kind: unit.kind,
@@ -82,20 +144,52 @@ export function shapeOf(u: StandingUnit, input: SceneInput, { tag, name, duty }:
     symbol,
     box,
     state,
-    ...(tag ? { tagText: tagText(unit.tag, tag) } : {}),
-    stateMark: tag ? stateMark(state, tag.left, tag.width, tag.baseline) : [],
     texts: name ? [name.text] : nameInside(u),
-    ...(u.link && symbol.link
-      ? {
-          duty: {
-            ...linkShapes({ ...symbol.link, from: u.link[0], to: u.link[1] }),
-            ...(dutyText ? { text: stale ? { ...dutyText, italic: true } : dutyText } : {}),
-          },
-        }
-      : {}),
-    ...(tag && weight ? { limit: { weight, at: tag.limitAt } } : {}),
+    links: linksOf(u, input, texts, state === 'out-of-date'),
+    flagUpTo,
+  };
+  if (!tag) {
+    return { ...shape, stateMark: [], remarks: [], hold: nearestOfBox(box, pose.at), tagUpTo: 1 };
+  }
+  return {
+    ...shape,
+    tagText: tagText(unit.tag, tag),
+    stateMark: stateMark(state, tag.left, tag.width, tag.baseline),
+    remarks: remarksOf(tag, input.remarks?.get(unit.id) ?? [], state === 'out-of-date'),
+    ...(weight ? { limit: { weight, at: tag.limitAt } } : {}),
+    hold: tag.hold,
+    tagUpTo: tag.upTo,
   };
 }
+
+function linksOf(
+  { unit, symbol, links }: StandingUnit,
+  input: SceneInput,
+  { duties }: UnitTexts,
+  isStale: boolean,
+): readonly LinkShape[] {
+  return (symbol.links ?? []).map((link, n): LinkShape => {
+    const [from, to] = links[n]!;
+    const text = input.duties.get(unit.id)?.[link.name];
+    const place = duties[n];
+    const shape =
+      place && text !== undefined ? { ...place.text, text, ...(isStale ? { italic: true } : {}) } : undefined;
+    return { name: link.name, ...linkShapes({ ...link, from, to }), ...(shape ? { text: shape } : {}) };
+  });
+}
+
+const remarksOf = ({ remarks }: TagPlace, rows: readonly string[], isStale: boolean): readonly TextShape[] =>
+  remarks
+    ? rows.map((text, k) => ({
+        at: [remarks.at[0], remarks.at[1] + k * TEXT.labelLine],
+        text,
+        size: TEXT.label,
+        weight: 400,
+        ...(isStale ? { italic: true } : {}),
+        anchor: remarks.anchor,
+        ink: 'ink3',
+      }))
+    : [];
 
 const tagText = (text: string, place: TagPlace): TextShape => ({
   at: [place.left, place.baseline],

@@ -3,7 +3,7 @@ import type { SketchStream } from '../sketch/types';
 import { grown, overlaps } from './boxes';
 import { drawApart, piecesOf } from './nudge';
 import { hangingLine, keyOfEnd, type Route, type RouteEnd, routeLine } from './route';
-import { portOf, type StandingUnit } from './standing';
+import { portOf, type StandingUnit, symbolBoxes } from './standing';
 import type { Box, Point } from './types';
 import { type Detours, untangled } from './untangle';
 
@@ -53,7 +53,7 @@ export function wireSheet(
   before: RouteCache | undefined,
 ): { readonly wires: readonly Wire[]; readonly cache: RouteCache } {
   const byId = new Map<UnitId, StandingUnit>(units.map((u) => [u.unit.id, u]));
-  const obstacles = units.flatMap((u) => (u.linkBox ? [u.box, u.linkBox] : [u.box]));
+  const obstacles = symbolBoxes(units);
   const obstacleMap = new Map(obstacles.map((box) => [keyOfBox(box), box]));
   const changed = before ? changedBoxes(before.obstacles, obstacleMap) : [];
   const routes = new Map<StreamId, Kept>();

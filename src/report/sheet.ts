@@ -1,7 +1,7 @@
-import { labelRows, linkText } from '../drawing/labelText';
+import { labelRows, linkTexts, remarksOf } from '../drawing/labelText';
 import { measuresOf } from '../drawing/measures';
 import { buildScene } from '../drawing/scene';
-import type { DrawnState, LabelRow, Scene } from '../drawing/types';
+import type { DrawnState, LabelRow, LinkTexts, Scene } from '../drawing/types';
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Weight } from '../engine/outcome';
 import { type ReportInput, solvedStream } from './input';
@@ -28,18 +28,21 @@ export function reportScene(input: ReportInput): Scene {
     if (result) labels.set(stream.id, labelRows(result, sketch.display.labels, measures));
   }
   const states = new Map<UnitId, DrawnState>();
-  const duties = new Map<UnitId, string>();
+  const duties = new Map<UnitId, LinkTexts>();
+  const remarks = new Map<UnitId, readonly string[]>();
   for (const unit of sketch.units) {
     const result = input.units.get(unit.id);
     states.set(unit.id, result?.state ?? 'waiting');
-    if (result?.heat_W || result?.power_W)
-      duties.set(unit.id, linkText(unit.kind, result, measures, input.kinds));
+    if (result?.state === 'solved') duties.set(unit.id, linkTexts(unit.kind, result, measures, input.kinds));
+    const lines = remarksOf(unit, result?.state === 'solved' ? result : undefined);
+    if (lines.length > 0) remarks.set(unit.id, lines);
   }
   return buildScene(sketch, {
     states,
     limits: worstByUnit(input),
     labels,
     duties,
+    remarks,
     ...(input.kinds ? { kinds: input.kinds } : {}),
   });
 }

@@ -9,7 +9,7 @@ const tip = (kind: string): readonly number[] => {
 };
 
 test('on the shelf heat points up into the heater and down out of the cooler', () => {
-  const edge = plainSymbol('heater').link!.from;
+  const edge = plainSymbol('heater').links![0]!.from;
   expect(tip('heater')).toEqual(edge);
   const [x, y] = tip('cooler');
   expect(x).toBe(edge[0]);

@@ -1,4 +1,4 @@
-import type { DrawnState, LabelRow, SceneInput } from '../../src/drawing/types';
+import type { DrawnState, LabelRow, LinkTexts, SceneInput } from '../../src/drawing/types';
 import type { StreamId, UnitId } from '../../src/engine/ids';
 import type { Weight } from '../../src/engine/outcome';
 import type { Json, Sketch, SketchStream, SketchUnit } from '../../src/sketch/types';
@@ -57,6 +57,13 @@ const ROWS: readonly LabelRow[] = [
   { number: '3.000', unit: 'bar(a)' },
 ];
 
+const DUTIES: LinkTexts = {
+  heat: 'Q 1307 kW',
+  shaft: 'W 52.10 kW',
+  condenser: 'Q 1307 kW',
+  reboiler: 'Q 1661 kW',
+};
+
 /** What a solved sketch shows: three rows a stream, duties, a few limits. */
 export function inputOf(
   sketch: Sketch,
@@ -64,14 +71,19 @@ export function inputOf(
     readonly rows?: readonly LabelRow[];
     readonly states?: Readonly<Record<string, DrawnState>>;
     readonly limits?: Readonly<Record<string, Weight>>;
+    readonly textScale?: number;
   } = {},
 ): SceneInput {
-  const { rows = ROWS, states = {}, limits = {} } = more;
+  const { rows = ROWS, states = {}, limits = {}, textScale } = more;
   return {
     states: new Map(sketch.units.map((u) => [u.id, states[u.tag] ?? 'solved'])),
     limits: new Map(Object.entries(limits).map(([tag, weight]) => [tag as UnitId, weight])),
     labels: new Map(sketch.streams.map((s) => [s.id, rows])),
-    duties: new Map(sketch.units.map((u) => [u.id, 'Q 1307 kW'])),
+    duties: new Map(sketch.units.map((u) => [u.id, DUTIES])),
+    remarks: new Map(
+      sketch.units.filter((u) => u.kind === 'column').map((u) => [u.id, ['26 stages', 'reflux 2.400']]),
+    ),
+    ...(textScale ? { textScale } : {}),
   };
 }
 

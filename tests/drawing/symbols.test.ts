@@ -116,22 +116,22 @@ test('further inlets of a drum follow below the first in steps of 8 px', () => {
 test('a drum with a duty has a coil and a heat link, an adiabatic one has neither', () => {
   const drum = (settings: { [key: string]: Json }) =>
     symbolOf(sheetOf([['drum', 'V-1', 0, 0, { settings }]], []).units[0]!);
-  expect(drum({}).link).toBeUndefined();
-  expect(drum({ h: { duty: '20 kW' } }).link?.flow).toBe('in');
-  expect(drum({ h: { duty: '-20 kW' } }).link?.flow).toBe('out');
-  expect(drum({ h: { T: '20 degC' } }).link?.flow).toBe('none');
+  expect(drum({}).links).toBeUndefined();
+  expect(drum({ h: { duty: '20 kW' } }).links?.[0]?.flow).toBe('in');
+  expect(drum({ h: { duty: '-20 kW' } }).links?.[0]?.flow).toBe('out');
+  expect(drum({ h: { T: '20 degC' } }).links?.[0]?.flow).toBe('none');
   expect(drum({ h: { T: '20 degC' } }).paths.length).toBe(drum({}).paths.length + 1);
 });
 
 test('machines have a shaft link with a double bar, and a fan its blades', () => {
   const drawn = (kind: string, settings: { [key: string]: Json } = {}) =>
     symbolOf(sheetOf([[kind, 'K-1', 0, 0, { settings }]], []).units[0]!);
-  expect(drawn('pump').link).toMatchObject({ carries: 'shaft', flow: 'in' });
-  expect(drawn('expander').link?.flow).toBe('out');
-  const { line, marks } = linkShapes(drawn('compressor').link!);
+  expect(drawn('pump').links?.[0]).toMatchObject({ carries: 'shaft', flow: 'in' });
+  expect(drawn('expander').links?.[0]?.flow).toBe('out');
+  const { line, marks } = linkShapes(drawn('compressor').links![0]!);
   expect(line.dash).toBe('7 2 1.5 2');
   expect(marks[0]!.d.match(/M/g)).toHaveLength(2);
-  expect(linkShapes(drawn('heater').link!).line.dash).toBe('5 2.5');
+  expect(linkShapes(drawn('heater').links![0]!).line.dash).toBe('5 2.5');
   expect(drawn('compressor', { service: 'fan' }).paths.length).toBe(drawn('compressor').paths.length + 1);
 });
 

@@ -33,7 +33,7 @@ const plain: SymbolData = {
 };
 const heated = (flow: LinkData['flow']): SymbolData => ({
   ...plain,
-  link: { from: [24, 28], to: [24, 56], flow },
+  links: [{ name: 'heat', from: [24, 28], to: [24, 56], flow }],
 });
 const HEATED = { in: heated('in'), out: heated('out'), none: heated('none') };
 

@@ -1,15 +1,6 @@
 import type { Json } from '../../sketch/types';
-import type { PathShape, PortPlace, SymbolData } from '../types';
-import {
-  circle,
-  type DrawnUnit,
-  detail,
-  linkShapes,
-  numberOf,
-  outline,
-  port,
-  type SymbolKind,
-} from './shapes';
+import type { LinkData, PathShape, PortPlace, SymbolData } from '../types';
+import { circle, type DrawnUnit, detail, numberOf, outline, port, type SymbolKind } from './shapes';
 
 const GRID = 8;
 /** Half width of the shell, height of its round heads, radius of the ends' exchangers. */
@@ -91,10 +82,12 @@ const BEDS = detail(
 const zigzag = (x: number, y: number): PathShape =>
   detail(`M${x} ${y - 16}V${y - 6}L${x + 6} ${y - 2} ${x - 6} ${y + 3} ${x} ${y + 7}V${y + 16}`);
 const pipe = (d: string): PathShape => outline(d, 'none');
-const heat = (y: number, flow: 'in' | 'out'): readonly PathShape[] => {
-  const { line, marks } = linkShapes({ from: [BESIDE + ROUND, y], to: [FAR, y], flow });
-  return [line, ...marks];
-};
+const heatLink = (name: string, y: number, flow: 'in' | 'out'): LinkData => ({
+  name,
+  from: [BESIDE + ROUND, y],
+  to: [FAR, y],
+  flow,
+});
 
 /** Overhead line, condenser, drum and reflux, right of the top. */
 function condenser(T: number, vapour: boolean): readonly PathShape[] {
@@ -103,7 +96,6 @@ function condenser(T: number, vapour: boolean): readonly PathShape[] {
     pipe(`M0 ${-T}V${-T - 16}H${BESIDE}V${y - ROUND}M${BESIDE} ${y + ROUND}V${y + 28}`),
     outline(circle(ROUND, BESIDE, y)),
     zigzag(BESIDE, y),
-    ...heat(y, 'out'),
     outline(`M52 ${y + 28}H92A12 12 0 0 1 92 ${y + 52}H52A12 12 0 0 1 52 ${y + 28}Z`),
     detail(`M41 ${y + 42}H103`),
     pipe(`M56 ${y + 52}V${y + 64}H${HALF}`),
@@ -119,7 +111,6 @@ function reboiler(T: number): readonly PathShape[] {
     pipe(`M0 ${T}V${T + 16}H${BESIDE}V${y + ROUND}M${BESIDE} ${y - ROUND}V${y - 32}H${HALF}`),
     outline(circle(ROUND, BESIDE, y)),
     zigzag(BESIDE, y),
-    ...heat(y, 'in'),
   ];
 }
 
@@ -184,6 +175,10 @@ function build(form: Form): SymbolData {
       bare ? BEDS : trays(form.stages, T),
     ],
     ports,
+    links: [
+      ...(hasCondenser ? [heatLink('condenser', -T + GRID, 'out')] : []),
+      ...(form.reboiler ? [heatLink('reboiler', T - 16, 'in')] : []),
+    ],
   };
 }
 

@@ -24,7 +24,7 @@ const heated = (flow: LinkData['flow']): SymbolData => ({
   box,
   paths: [SHELL, MIST, LEVEL, COIL],
   ports,
-  link: { from: [24, 24], to: [48, 24], flow },
+  links: [{ name: 'heat', from: [24, 24], to: [48, 24], flow }],
 });
 const HEATED = { in: heated('in'), out: heated('out'), none: heated('none') };
 

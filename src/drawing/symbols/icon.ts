@@ -3,7 +3,7 @@ import { pathToSvg } from '../svg';
 import { type Palette, PRINT, WEIGHT } from '../tokens';
 import type { Box, PathShape, Point } from '../types';
 import { plainSymbol, SYMBOLS } from './registry';
-import { arrowhead, solid } from './shapes';
+import { arrowhead, linkShapes, solid } from './shapes';
 
 /** A kind as it stands on the shelf: its paths and the box they fill. */
 export interface Icon {
@@ -21,8 +21,13 @@ const HEAD: readonly [number, number] = [12, 7];
 export function iconOf(kind: string): Icon {
   const own = Object.hasOwn(SYMBOLS, kind) ? SYMBOLS[kind]?.icon : undefined;
   if (own) return { box: DOT_BOX, paths: own };
-  const { box, paths, link } = plainSymbol(kind);
+  const { box, paths, links = [] } = plainSymbol(kind);
+  const [link] = links;
   if (!link || link.carries === 'shaft') return { box, paths };
+  if (links.length > 1) {
+    const drawn = links.map(linkShapes).flatMap(({ line, marks }) => [line, ...marks]);
+    return { box, paths: [...paths, ...drawn] };
+  }
   const [x, y] = link.from;
   const length = Math.hypot(link.to[0] - x, link.to[1] - y);
   const [ux, uy]: Point = [(link.to[0] - x) / length, (link.to[1] - y) / length];

@@ -24,7 +24,7 @@ const plain: SymbolData = {
 };
 const heated = (flow: LinkData['flow']): SymbolData => ({
   ...plain,
-  link: { from: [24, 0], to: [48, 0], flow },
+  links: [{ name: 'heat', from: [24, 0], to: [48, 0], flow }],
 });
 const HEATED = { in: heated('in'), out: heated('out'), none: heated('none') };
 

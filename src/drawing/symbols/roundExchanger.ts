@@ -9,5 +9,5 @@ export const roundExchanger = (flow: LinkData['flow']): SymbolData => ({
   box: { x: -R, y: -R, w: 2 * R, h: 2 * R },
   paths: [outline(circle(R)), inner('M-16 0H-8L-4 -8 4 8 8 0H16')],
   ports: (name) => (name === 'in' || name === 'out' || name === 'heat' ? places[name] : undefined),
-  link: { from: [0, R], to: [0, 40], flow },
+  links: [{ name: 'heat', from: [0, R], to: [0, 40], flow }],
 });

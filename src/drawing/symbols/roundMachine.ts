@@ -17,5 +17,5 @@ export const roundMachine = (
   box: { x: -R, y: -R, w: 2 * R, h: 2 * R },
   paths: [outline(circle(R)), inner(lines), ...more],
   ports: (name) => (name === 'in' || name === 'out' || name === 'shaft' ? places[name] : undefined),
-  link: { carries: 'shaft', from: [0, R], to: [0, 40], flow },
+  links: [{ name: 'shaft', carries: 'shaft', from: [0, R], to: [0, 40], flow }],
 });

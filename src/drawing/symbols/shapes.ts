@@ -71,7 +71,7 @@ function doubleBar([x, y]: Point, [ux, uy]: Point): PathShape {
 }
 
 /** Line, end mark (ring or double bar) and arrowhead of a heat or shaft link. */
-export function linkShapes(link: LinkData): {
+export function linkShapes(link: Omit<LinkData, 'name'>): {
   readonly line: PathShape;
   readonly marks: readonly PathShape[];
 } {
