@@ -6,6 +6,7 @@ export {
   addNote,
   changeNote,
   deleteNote,
+  moveNotes,
   setDisplay,
   setLimit,
   setModel,
@@ -13,8 +14,17 @@ export {
   setTitle,
 } from './editing/document';
 export { EDIT_REFUSALS, type Edit, type EditCode, type Edited, type Refused } from './editing/edited';
+export {
+  copyPart,
+  FRAGMENT_FORMAT,
+  type Fragment,
+  fragmentText,
+  readFragment,
+} from './editing/fragment';
+export { deleteAndJoin, passingThrough, reconnect } from './editing/heal';
 export { setMaterial, setNumber, setStreamName, setTag, setUnitName } from './editing/names';
 export { setPair } from './editing/pairs';
+export { duplicateUnits, pasteFragment } from './editing/paste';
 export type { SettingPath } from './editing/path';
 export { READABLE, type ScaledFlow, scaledFlows, scaleFeeds } from './editing/scale';
 export { clearSetting, normaliseParts, setByPath, setSetting, setSettings } from './editing/settings';

@@ -50,6 +50,8 @@ export const SKETCH_FINDINGS = [
   'sketch/repeated-pair',
   'sketch/pair-unused',
   'sketch/parts-removed',
+  'sketch/reference-lost',
+  'sketch/chemical-differs',
 ] as const;
 
 export type SketchCode = (typeof SKETCH_FINDINGS)[number];

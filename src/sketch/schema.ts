@@ -91,7 +91,12 @@ export function sketchSchema(registry: Registry = KNOWN_KINDS): Schema {
         items: {
           type: 'object',
           required: ['text'],
-          properties: { ...texts('id', 'text', 'on'), at: point },
+          properties: {
+            ...texts('id', 'text', 'on'),
+            at: point,
+            kind: { enum: ['text', 'area'] },
+            size: point,
+          },
         },
       },
       limits: {

@@ -90,8 +90,13 @@ export interface SketchStream {
 export interface Note {
   readonly id: string;
   readonly text: string;
+  /** Upper left corner, sheet px; absent: not on the drawing. */
   readonly at?: readonly [number, number];
   readonly on?: string;
+  /** An area is a labelled rectangle behind the units. Absent: text. */
+  readonly kind?: 'text' | 'area';
+  /** Width and height [px]; absent: as the text needs. */
+  readonly size?: readonly [number, number];
 }
 
 export type MeasureSet = 'SI' | 'metric' | 'US';

@@ -74,35 +74,43 @@ export function setLimit(sketch: Sketch, code: string, value: Quantity | undefin
   return { ok: true, sketch: next, label: `limit ${code}` };
 }
 
-export function addNote(
-  sketch: Sketch,
-  text: string,
-  where: { readonly at?: Note['at']; readonly on?: string } = {},
-): Edit {
+type NotePlace = Pick<Note, 'at' | 'on' | 'kind' | 'size'>;
+const noteWord = (note: Pick<Note, 'kind'> | undefined): string =>
+  note?.kind === 'area' ? 'an area' : 'a note';
+
+export function addNote(sketch: Sketch, text: string, where: NotePlace = {}): Edit {
   if (text.trim() === '') return refuse('edit/empty-text');
-  const note: Note = {
-    id: nextNoteId(sketch.notes),
-    text,
-    ...(where.at === undefined ? {} : { at: where.at }),
-    ...(where.on === undefined ? {} : { on: where.on }),
+  const note: Note = { id: nextNoteId(sketch.notes), text, ...where };
+  return {
+    ok: true,
+    sketch: { ...sketch, notes: [...sketch.notes, note] },
+    label: `add ${noteWord(note)}`,
+    noteIds: [note.id],
   };
-  return { ok: true, sketch: { ...sketch, notes: [...sketch.notes, note] }, label: 'add a note' };
 }
 
-/** A note's text or place. */
+/** A note's text, place or size. */
 export function changeNote(
   sketch: Sketch,
   id: string,
-  change: { readonly text?: string; readonly at?: Note['at'] },
+  change: { readonly text?: string } & Omit<NotePlace, 'on' | 'kind'>,
 ): Edit {
-  if (!sketch.notes.some((n) => n.id === id)) return refuse('edit/unknown-note', word('note', id));
+  const note = sketch.notes.find((n) => n.id === id);
+  if (!note) return refuse('edit/unknown-note', word('note', id));
   if (change.text !== undefined && change.text.trim() === '') return refuse('edit/empty-text');
-  const notes = sketch.notes.map((n) =>
-    n.id === id
-      ? { ...n, text: change.text ?? n.text, ...(change.at === undefined ? {} : { at: change.at }) }
-      : n,
-  );
-  return { ok: true, sketch: changed(sketch, 'notes', notes), label: 'change a note' };
+  const notes = sketch.notes.map((n) => (n.id === id ? { ...n, ...change } : n));
+  return { ok: true, sketch: changed(sketch, 'notes', notes), label: `change ${noteWord(note)}` };
+}
+
+/** Moves notes and areas to other places. */
+export function moveNotes(sketch: Sketch, places: ReadonlyMap<string, readonly [number, number]>): Edit {
+  const notes = sketch.notes.map((n) => {
+    const at = places.get(n.id);
+    return at ? { ...n, at } : n;
+  });
+  const [first] = sketch.notes.filter((n) => places.has(n.id));
+  const label = places.size === 1 ? `move ${noteWord(first)}` : `move ${places.size} notes`;
+  return { ok: true, sketch: changed(sketch, 'notes', notes), label };
 }
 
 export const deleteNote = (sketch: Sketch, id: string): Edit => ({
@@ -112,5 +120,5 @@ export const deleteNote = (sketch: Sketch, id: string): Edit => ({
     'notes',
     sketch.notes.filter((n) => n.id !== id),
   ),
-  label: 'delete a note',
+  label: `delete ${noteWord(sketch.notes.find((n) => n.id === id))}`,
 });

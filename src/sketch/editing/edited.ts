@@ -17,6 +17,7 @@ export const EDIT_REFUSALS = [
   'edit/no-inlet',
   'edit/no-outlet',
   'edit/nothing-to-part',
+  'edit/nothing-to-join',
   'edit/outlet-needs-stream',
   'edit/empty-text',
   'edit/tag-taken',
@@ -49,6 +50,9 @@ export interface Edited {
   /** What was made, to be selected. */
   readonly unit?: UnitId;
   readonly stream?: StreamId;
+  /** Several at once, and notes of the sheet. */
+  readonly units?: readonly UnitId[];
+  readonly noteIds?: readonly string[];
   readonly notes?: readonly Finding[];
 }
 

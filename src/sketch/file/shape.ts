@@ -163,4 +163,9 @@ function checkNote(note: Json, path: string, problems: Problems): void {
   if (own(note, 'text') === undefined) problems.add(`${path}.text`, 'file/missing');
   for (const key of ['id', 'text', 'on']) value.text(own(note, key), `${path}.${key}`, problems);
   value.point(own(note, 'at'), `${path}.at`, problems);
+  value.oneOf(own(note, 'kind'), `${path}.kind`, problems, ['text', 'area']);
+  const size = own(note, 'size');
+  value.point(size, `${path}.size`, problems);
+  if (Array.isArray(size) && (size as readonly Json[]).some((v) => typeof v === 'number' && v <= 0))
+    problems.add(`${path}.size`, 'file/out-of-range');
 }

@@ -48,6 +48,8 @@ export const EDIT_WORDS: Readonly<Record<string, (s: Slots) => string>> = {
     `${capital(aKind(s))} has no outlet and cannot stand in a line; put it at the end.`,
   'edit/nothing-to-part': (s) =>
     `Stream ${s.text('stream')} has a loose end, so there is no line to part; put the unit down and connect the stream to it.`,
+  'edit/nothing-to-join': (s) =>
+    `${s.text('tag')} does not have one stream that comes and one that goes on, so there is no line to join; delete it and connect the ends as you want them.`,
   'edit/outlet-needs-stream': (s) =>
     `Stream ${s.text('stream')} belongs to an outlet that always has a stream; it stays as a loose end unless its unit is removed.`,
   'edit/empty-text': () =>

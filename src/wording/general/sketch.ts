@@ -386,4 +386,16 @@ export const SKETCH_WORDS: Readonly<Record<string, Words>> = {
       `A chemical was removed, and with it the ${s.setting()}${s.has('tag') ? ` at ${s.text('tag')}` : ''}.`,
     next: () => 'Check what is left there, or undo.',
   },
+  'sketch/reference-lost': {
+    title: 'Value left out',
+    sentence: (s) =>
+      `The ${s.setting()}${s.has('tag') ? ` of ${s.text('tag')}` : ''} was given as a share of a stream that did not come along.`,
+    next: () => 'Give the value anew.',
+  },
+  'sketch/chemical-differs': {
+    title: 'Another chemical of this name',
+    sentence: (s) =>
+      `${s.chemical()} is another chemical here than where the units come from; the one of this sketch is used.`,
+    next: (s) => `Check the data of ${s.chemical()}.`,
+  },
 };
