@@ -18,6 +18,24 @@ export interface Candidates {
   readonly heaviest: number;
 }
 
+/** T ln gamma of chemical i at infinite dilution in liquid j at [j * n + i], at 298.15 K and a high pressure [K]. */
+export function heatsApart(model: ThermoModel): Float64Array {
+  const { n } = model;
+  const props = model.makeProps();
+  const x = new Float64Array(n);
+  const found = new Float64Array(n * n);
+  for (let j = 0; j < n; j++) {
+    x.fill(0);
+    x[j] = 1;
+    model.evaluate('liquid', T_K, P_Pa, x, 0, props);
+    found.set(props.lnPhi, j * n);
+  }
+  // ln gamma of i in j: ln phi of i there less that of pure i.
+  const pure = Float64Array.from({ length: n }, (_, i) => found[i * n + i]!);
+  for (let k = 0; k < n * n; k++) found[k] = T_K * (found[k]! - pure[k % n]!);
+  return found;
+}
+
 /**
  * Which pure liquids a stability test starts from when a second liquid may hide.
  *
@@ -38,20 +56,11 @@ export function liquidFormers(model: ThermoModel): Candidates {
   if (n === 1 || model.spec.kind === 'raoult')
     return { formers: new Int32Array(0), heat_K: new Float64Array(0), lightest, heaviest };
 
-  const props = model.makeProps();
-  const x = new Float64Array(n);
-  /** ln phi of i in pure j at [j * n + i]. */
-  const lnPhi = new Float64Array(n * n);
-  for (let j = 0; j < n; j++) {
-    x.fill(0);
-    x[j] = 1;
-    model.evaluate('liquid', T_K, P_Pa, x, 0, props);
-    lnPhi.set(props.lnPhi, j * n);
-  }
+  const apart_K = heatsApart(model);
   const heat = new Float64Array(n);
   for (let j = 0; j < n; j++) {
     for (let i = 0; i < n; i++) {
-      const found = T_K * (lnPhi[j * n + i]! - lnPhi[i * n + i]!);
+      const found = apart_K[j * n + i]!;
       if (found > heat[i]!) heat[i] = found;
       if (found > heat[j]!) heat[j] = found;
     }

@@ -1,7 +1,6 @@
-import { liquidFormers } from '../../equilibrium/candidates';
+import { isOneLiquid } from '../../equilibrium/miscible';
 import { makeStream } from '../../equilibrium/stream';
 import type { Finding } from '../../outcome';
-import type { ThermoModel } from '../../thermo/types';
 import { joiningPressure } from '../limits/joiningPressure';
 import { finding, named, type Rule, saw, thresholdOf } from '../limits/rule';
 import { utilityLevels } from '../limits/utilities';
@@ -126,29 +125,20 @@ function nearCritical({ call, results }: Seen): Finding[] {
     : [];
 }
 
-const mayPart = new WeakMap<ThermoModel, boolean>();
-
-/** Whether any pure liquid among these may part from another at all. */
-function partsAtAll(model: ThermoModel): boolean {
-  const known = mayPart.get(model);
-  if (known !== undefined) return known;
-  const parts = liquidFormers(model).formers.length > 0;
-  mayPart.set(model, parts);
-  return parts;
-}
-
-/** The first stage whose liquid would rather be two: each is tested a little above its bubble pressure. */
+/** The first stage whose liquid would rather be two: each that might is tested a little above its bubble pressure. */
 function secondLiquid({ call, results }: Seen): Finding[] {
   const { T_K, P_Pa, x } = results.stages;
   const { model } = call;
   const present = model.chemicals.flatMap((c, i) => (x[c.id]!.some((v) => v > 0) ? [i] : []));
-  if (!partsAtAll(model.of(present))) return [];
-  const n = new Float64Array(model.nc);
+  const thermo = model.of(present);
+  const profiles = present.map((i) => x[model.chemicals[i]!.id]!);
+  const here = new Float64Array(present.length);
   for (let k = 0; k < T_K.length; k++) {
-    model.chemicals.forEach((c, i) => {
-      n[i] = x[c.id]![k]!;
-    });
-    const state = makeStream(model, n.slice(), { T_K: T_K[k]!, P_Pa: 1.001 * P_Pa[k]! }, call.work);
+    for (let p = 0; p < here.length; p++) here[p] = profiles[p]![k]!;
+    if (isOneLiquid(thermo, T_K[k]!, here)) continue;
+    const n = new Float64Array(model.nc);
+    for (let p = 0; p < here.length; p++) n[present[p]!] = here[p]!;
+    const state = makeStream(model, n, { T_K: T_K[k]!, P_Pa: 1.001 * P_Pa[k]! }, call.work);
     const other = state.state === 'solved' ? state.value.hiddenLiquid : undefined;
     if (!other) continue;
     let most = 0;
