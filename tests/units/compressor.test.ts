@@ -1,8 +1,19 @@
 /** What compressors and expanders do. Expected values are derived beside the check. */
 import { beforeAll, describe, expect, test } from 'vitest';
+import { makeMemory } from '../../src/engine/network/memory';
 import type { Basis, ProblemUnit } from '../../src/engine/network/types';
 import type { MachineResults } from '../../src/engine/units/compression/types';
-import { basisOf, fresh, molar, parts, problemOf, solvedStream, unit, unitResult } from '../network/fixtures';
+import {
+  basisOf,
+  finish,
+  fresh,
+  molar,
+  parts,
+  problemOf,
+  solvedStream,
+  unit,
+  unitResult,
+} from '../network/fixtures';
 
 let gas: Basis;
 let argon: Basis;
@@ -103,6 +114,22 @@ describe('a compressor', () => {
       expect(b.isentropicEfficiency).toBeCloseTo(0.74, 6);
       expect(b.polytropicHead_J_kg! / a.polytropicHead_J_kg!).toBeCloseTo(1, 6);
       expect(a.polytropicEfficiency!).toBeGreaterThan(0.74);
+    }
+  });
+
+  test('reports the same polytropic efficiency warm as from nothing, whatever was compressed before', () => {
+    const problem = (P: number, state: object, x: number[]) =>
+      problemOf(gas, [
+        feed(state, x),
+        unit('k compressor in=a > out=b', { p: { P }, efficiency: { isentropic: 0.74 } }),
+      ]);
+    const memory = makeMemory(gas);
+    const hot = { T: 350, P: 3e5 };
+    const asked = [problem(6e5, hot, RICH), problem(25e5, hot, RICH), problem(7e5, hot, [10, 15, 74, 1])];
+    for (const [k, p] of asked.entries()) {
+      const warm = unitResult(finish(p, memory), 'k')!.results as unknown as MachineResults;
+      const cold = unitResult(fresh(p, gas), 'k')!.results as unknown as MachineResults;
+      expect(warm.polytropicEfficiency! / cold.polytropicEfficiency! - 1, `${k}`).toBeCloseTo(0, 6);
     }
   });
 

@@ -42,19 +42,42 @@ export function followPath(
   return h;
 }
 
+/** A correction of temperature so small that the volume is carried over it along the line through the last two states [-]. */
+const SMALL = 1e-6;
+
 /**
  * Volumes of a gas that stays one phase: temperature from enthalpy by Newton's method, no flash.
  *
- * @param T_K  where to start; the last temperature found is kept as the next start
+ * The search starts from the last state found, moved by the change of enthalpy alone; heat capacity is taken once a call.
+ *
+ * @param from  a state of the gas
  */
-export function gasVolumes(thermo: ThermoModel, x: Float64Array, T_K: number): VolumeAt {
+export function gasVolumes(
+  thermo: ThermoModel,
+  x: Float64Array,
+  from: { readonly T_K: number; readonly h_J_mol: number },
+): VolumeAt {
   const props = thermo.makeProps();
-  let T = T_K;
+  let { T_K: T, h_J_mol: h } = from;
+  let cp = 0;
   return (P_Pa, h_J_mol) => {
+    if (cp > 0) T = Math.max(T + (h_J_mol - h) / cp, 0.7 * T);
+    h = h_J_mol;
+    let before = Number.NaN;
+    let vBefore = Number.NaN;
     for (let pass = 0; pass < 30; pass++) {
-      thermo.evaluate('vapour', T, P_Pa, x, 2, props);
-      const dT = (h_J_mol - props.h_J_mol) / props.cp_J_molK;
-      if (Math.abs(dT) < 1e-9 * T) return props.v_m3_mol;
+      thermo.evaluate('vapour', T, P_Pa, x, pass === 0 || pass > 4 ? 2 : 1, props);
+      if (pass === 0 || pass > 4) cp = props.cp_J_molK;
+      const v = props.v_m3_mol;
+      const dT = (h_J_mol - props.h_J_mol) / cp;
+      if (Math.abs(dT) < 1e-9 * T) return v;
+      const known = T - before;
+      if (Math.abs(dT) < SMALL * T && Math.abs(dT) < Math.abs(known)) {
+        T += dT;
+        return v + (dT * (v - vBefore)) / known;
+      }
+      before = T;
+      vBefore = v;
       T = Math.min(Math.max(T + dT, 0.7 * T), 1.4 * T);
       if (!(T > 1)) return undefined;
     }

@@ -13,7 +13,7 @@ import {
   type Leaving,
   leavingAt,
   type MachineWarm,
-  polytropicEfficiency,
+  polytropicPath,
   withLosses,
 } from './state';
 import type { MachineResults, MachineSettings } from './types';
@@ -161,7 +161,8 @@ export function solveMachine(
   const power_W = out.H_W - inlet.H_W;
   const mass = massFlow_kg_s(inlet.n_mol_s, call.model);
   const ideal_W = isentropic ? isentropic.H_W - inlet.H_W : undefined;
-  const polytropic = 'polytropic' in efficiency ? efficiency.polytropic : polytropicEfficiency(e, left.value);
+  const path = 'polytropic' in efficiency ? undefined : polytropicPath(e, left.value, warm.pathToIdeal ?? 1);
+  const polytropic = 'polytropic' in efficiency ? efficiency.polytropic : path?.efficiency;
   const dew = dewPoint(call, inlet, warm);
   const polytropic_W =
     polytropic === undefined ? undefined : power_W >= 0 ? power_W * polytropic : power_W / polytropic;
@@ -184,6 +185,7 @@ export function solveMachine(
     out: warmOf(out),
     ...(isentropic ? { isentropic: warmOf(isentropic) } : {}),
     ...(dew ? { dew: warmOf(dew) } : {}),
+    ...(path ? { pathToIdeal: path.toIdeal } : {}),
   };
   return solved({ ...answerOf({ out }, results, flashed), power_W, warm: next }, left.findings);
 }

@@ -9,14 +9,17 @@ import type { MachineSettings } from './types';
 /** Largest steps of ln P: with the gas alone, and with a flash at every point. */
 const GAS_STEP = 0.1;
 const FLASH_STEP = 0.2;
-/** For the efficiency that is only reported. */
-const REPORT_STEP = 0.25;
+/** For the efficiency that is only reported: no step longer than this, nor one that warms an ideal gas by more than 6 %. */
+const REPORT_STEP = 0.4;
+const REPORT_RISE = 0.06;
 
 /** Start values of a machine's flashes. */
 export interface MachineWarm {
   readonly out?: WarmState;
   readonly isentropic?: WarmState;
   readonly dew?: WarmState;
+  /** What the reported efficiency's path came to, by the ideal gas' answer [-]. */
+  readonly pathToIdeal?: number;
 }
 
 /** What enters, prepared once. */
@@ -116,7 +119,7 @@ function polytropicTo(
   const factor = P_Pa >= e.stream.P_Pa ? 1 / efficiency : efficiency;
   if (e.gas) {
     const at = { P_Pa: e.stream.P_Pa, h_J_mol: e.h_J_mol };
-    const volumes = gasVolumes(e.gas.thermo, e.gas.x, e.stream.T_K);
+    const volumes = gasVolumes(e.gas.thermo, e.gas.x, { T_K: e.stream.T_K, h_J_mol: e.h_J_mol });
     const h = followPath(volumes, at, P_Pa, factor, GAS_STEP);
     if (h !== undefined) {
       const made = outAt(call, e, P_Pa, h * e.total_mol_s, warm);
@@ -161,33 +164,49 @@ export function leavingAt(
   return solved({ out: made.value, isentropic: ideal.value }, made.findings);
 }
 
+/** The path of constant polytropic efficiency between two states. */
+export interface PathFound {
+  readonly efficiency: number;
+  /** Its factor (see followPath) by the ideal gas' [-]: where the next search starts. */
+  readonly toIdeal: number;
+}
+
 /**
  * The polytropic efficiency that leads from what enters to what leaves, both one gas phase: secant steps on the path itself,
- * from the ideal gas' answer. Undefined where it cannot be told.
+ * from the ideal gas' answer times `toIdeal`. Undefined where it cannot be told.
  */
-export function polytropicEfficiency(e: Entering, { out, isentropic }: Leaving): number | undefined {
+export function polytropicPath(
+  e: Entering,
+  { out, isentropic }: Leaving,
+  toIdeal: number,
+): PathFound | undefined {
   const { stream, gas } = e;
   if (!gas || !isentropic || !isOneGas(out) || out.P_Pa === stream.P_Pa) return undefined;
   const up = out.P_Pa > stream.P_Pa;
   const [ideal, real] = [Math.log(isentropic.T_K / stream.T_K), Math.log(out.T_K / stream.T_K)];
   const at = { P_Pa: stream.P_Pa, h_J_mol: e.h_J_mol };
   const wanted = out.H_W / e.total_mol_s - e.h_J_mol;
-  const volumes = gasVolumes(gas.thermo, gas.x, stream.T_K);
+  const volumes = gasVolumes(gas.thermo, gas.x, { T_K: stream.T_K, h_J_mol: e.h_J_mol });
+  const span = Math.abs(Math.log(out.P_Pa / stream.P_Pa));
+  const step = Math.min(REPORT_STEP, (REPORT_RISE * span) / Math.abs(real));
   const work = (factor: number): number =>
-    (followPath(volumes, at, out.P_Pa, factor, REPORT_STEP) ?? Number.NaN) - e.h_J_mol;
-  let factor = real / ideal;
+    (followPath(volumes, at, out.P_Pa, factor, step) ?? Number.NaN) - e.h_J_mol;
+  const start = real / ideal;
+  let factor = start * toIdeal;
   let last = factor;
   let lastMiss = 0;
   for (let pass = 0; pass < 8; pass++) {
     const miss = work(factor) - wanted;
     if (!Number.isFinite(miss)) return undefined;
-    if (Math.abs(miss) < 1e-8 * Math.abs(wanted)) break;
     // The work is nearly proportional to the factor: that is the first step.
     const slope = pass === 0 ? (miss + wanted) / factor : (miss - lastMiss) / (factor - last);
     last = factor;
     lastMiss = miss;
+    if (miss === 0) break;
     factor -= miss / slope;
+    // That step leaves no more than a tenth of what it found.
+    if (Math.abs(miss) < 1e-6 * Math.abs(wanted)) break;
   }
   const efficiency = up ? 1 / factor : factor;
-  return efficiency > 0 && Number.isFinite(efficiency) ? efficiency : undefined;
+  return efficiency > 0 && Number.isFinite(efficiency) ? { efficiency, toIdeal: factor / start } : undefined;
 }
