@@ -5,7 +5,7 @@ import type { Finding } from '../outcome';
 import type { Model } from '../thermo/types';
 import { PAIR_NONE, PAIR_PREDICTED } from '../units/limits/pairs';
 import { finding, named, type Overrides, saw, thresholdOf } from '../units/limits/rule';
-import { farPairs } from './farPairs';
+import { farPairs, type Shares } from './farPairs';
 
 /** Dissolved gases and water tell on phase equilibrium at a tenth of the share. */
 const isTelling = (family: string | undefined): boolean => family === 'inorganic-gas' || family === 'water';
@@ -45,6 +45,11 @@ function meeting(one: Present, two: Present, least: number): Met | undefined {
   return best;
 }
 
+function meetAnywhere(shares: readonly Shares[], i: number, j: number): boolean {
+  for (let k = 0; k < shares.length; k++) if (shares[k]!.z[i]! > 0 && shares[k]!.z[j]! > 0) return true;
+  return false;
+}
+
 /**
  * Pairs of the cubic equation that nothing is known of, each once, at the stream where they matter most; predicted pairs far
  * from zero; and how many of the pairs that meet are predicted.
@@ -63,15 +68,16 @@ export function pairLimits(
   });
   const found: Finding[] = [];
   let predicted = 0;
+  const least = thresholdOf(PAIR_NONE, overrides);
   for (const { i, j, origin } of unsure) {
     if (origin === 'predicted') {
-      if (shares.some(({ z }) => z[i]! > 0 && z[j]! > 0)) predicted++;
+      if (meetAnywhere(shares, i, j)) predicted++;
       continue;
     }
     const [a, b] = [model.chemicals[i]!, model.chemicals[j]!];
-    const least = thresholdOf(PAIR_NONE, overrides);
     let worst: (Met & { readonly id: StreamId }) | undefined;
     for (const { id, z } of shares) {
+      if (Math.min(z[i]!, z[j]!) < least * TELLING) continue;
       const met = meeting({ chemical: a, share: z[i]! }, { chemical: b, share: z[j]! }, least);
       if (met && met.times > (worst?.times ?? 0)) worst = { ...met, id };
     }

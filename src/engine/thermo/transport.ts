@@ -26,7 +26,8 @@ export interface Viscosities {
  */
 export function prepareViscosities(chemicals: readonly ChemicalData[]): Viscosities {
   const pure = chemicals.map(preparePure);
-  const M = chemicals.map((c) => c.MW_g_mol);
+  const n = chemicals.length;
+  const { fourthRoot, share } = wilkeTerms(chemicals.map((c) => c.MW_g_mol));
   const values = (
     of: 'viscosityG' | 'viscosityL',
     T: number,
@@ -49,14 +50,15 @@ export function prepareViscosities(chemicals: readonly ChemicalData[]): Viscosit
     gas_Pa_s(T, x) {
       const mu = values('viscosityG', T, x);
       if (!mu) return undefined;
+      const root = mu.map(Math.sqrt);
       let value = 0;
-      for (let i = 0; i < mu.length; i++) {
+      for (let i = 0; i < n; i++) {
         if (x[i] === 0) continue;
         let sum = 0;
-        for (let j = 0; j < mu.length; j++) {
+        for (let j = 0; j < n; j++) {
           if (x[j] === 0) continue;
-          const root = 1 + Math.sqrt(mu[i]! / mu[j]!) * (M[j]! / M[i]!) ** 0.25;
-          sum += (x[j]! * root * root) / Math.sqrt(8 * (1 + M[i]! / M[j]!));
+          const term = 1 + (root[i]! / root[j]!) * fourthRoot[i * n + j]!;
+          sum += x[j]! * term * term * share[i * n + j]!;
         }
         value += (x[i]! * mu[i]!) / sum;
       }
@@ -70,6 +72,19 @@ export function prepareViscosities(chemicals: readonly ChemicalData[]): Viscosit
       return { value: Math.exp(ln), rule: 'log-average' };
     },
   };
+}
+
+/** What of Wilke's rule depends on the molar masses alone, at [i * n + j]. */
+function wilkeTerms(M: readonly number[]): { fourthRoot: Float64Array; share: Float64Array } {
+  const n = M.length;
+  const fourthRoot = new Float64Array(n * n);
+  const share = new Float64Array(n * n);
+  for (let i = 0; i < n; i++)
+    for (let j = 0; j < n; j++) {
+      fourthRoot[i * n + j] = (M[j]! / M[i]!) ** 0.25;
+      share[i * n + j] = 1 / Math.sqrt(8 * (1 + M[i]! / M[j]!));
+    }
+  return { fourthRoot, share };
 }
 
 /** Cp/Cv of a phase [-] evaluated at level 2; undefined for a liquid of a model in which liquids have no volume. */

@@ -73,6 +73,24 @@ export function combustionOf(
   call: Pick<Call<unknown>, 'unit' | 'model'>,
   present: (i: number) => boolean,
 ): Outcome<Combustion> {
+  const key = call.model.chemicals.map((_, i) => (present(i) ? '1' : '0')).join('');
+  const known = kept.get(call.model)?.get(key);
+  if (known) return solved(known);
+  const made = workOut(call, present);
+  if (made.state === 'solved') {
+    const those = kept.get(call.model) ?? new Map<string, Combustion>();
+    kept.set(call.model, those.set(key, made.value));
+  }
+  return made;
+}
+
+/** By the chemicals that flow; of a basis there are few such sets. */
+const kept = new WeakMap<Model, Map<string, Combustion>>();
+
+function workOut(
+  call: Pick<Call<unknown>, 'unit' | 'model'>,
+  present: (i: number) => boolean,
+): Outcome<Combustion> {
   const { chemicals }: Pick<Model, 'chemicals'> = call.model;
   const places = gasPlaces(chemicals);
   const hf = (key: GasKey): number => chemicals[places[key]]?.Hf_J_mol ?? Number.NaN;

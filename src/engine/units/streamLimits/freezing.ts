@@ -12,6 +12,11 @@ export const FREEZING_RULES: readonly Rule[] = [MOSTLY, PARTLY, ICE, DRY_ICE];
 const ICE_K = 273.15;
 const DRY_ICE_K = 273.15 - 56;
 
+const solidBelow = (cas: string | undefined, T_K: number): Rule | undefined => {
+  if (cas === CAS_WATER && T_K < ICE_K) return ICE;
+  return cas === CAS_CO2 && T_K < DRY_ICE_K ? DRY_ICE : undefined;
+};
+
 /** A liquid below the melting point of what it mostly is; water below 0 degC, carbon dioxide below -56 degC. */
 export function freezing(c: StreamContext): Finding[] {
   const { stream, overrides, at } = c;
@@ -20,11 +25,10 @@ export function freezing(c: StreamContext): Finding[] {
   const liquid = flowing(stream, 'liquid');
   let worst: { id: string; x: number; Tm_K: number } | undefined;
   c.model.chemicals.forEach((chemical, i) => {
-    const whole = fractionOf(stream, i);
-    if (chemical.cas === CAS_WATER && stream.T_K < ICE_K && whole >= thresholdOf(ICE, overrides))
-      found.push(finding(ICE, at, [...seen, saw('fraction', whole, 'fraction')], overrides));
-    if (chemical.cas === CAS_CO2 && stream.T_K < DRY_ICE_K && whole >= thresholdOf(DRY_ICE, overrides))
-      found.push(finding(DRY_ICE, at, [...seen, saw('fraction', whole, 'fraction')], overrides));
+    const ice = solidBelow(chemical.cas, stream.T_K);
+    const whole = ice ? fractionOf(stream, i) : 0;
+    if (ice && whole >= thresholdOf(ice, overrides))
+      found.push(finding(ice, at, [...seen, saw('fraction', whole, 'fraction')], overrides));
     const x = liquid?.x[i] ?? 0;
     if (chemical.Tm_K !== undefined && stream.T_K < chemical.Tm_K && x > (worst?.x ?? 0))
       worst = { id: chemical.id, x, Tm_K: chemical.Tm_K };
