@@ -96,5 +96,5 @@ export const isLeaderFree = (
   leaderBoxes(leader).every((box) => {
     const middle: Point = [box.x + box.w / 2, box.y + box.h / 2];
     const away = Math.abs(middle[0] - diamond[0]) + Math.abs(middle[1] - diamond[1]);
-    return away < (DIAMOND + 3) * scale || !taken.hits(box, 0, `diamond ${stream}`);
+    return away < DIAMOND * scale + 3 || !taken.hits(box, 0, `diamond ${stream}`);
   });

@@ -57,6 +57,9 @@ export function tangles(lines: readonly (readonly Point[])[]): ReadonlyMap<numbe
   return out;
 }
 
+/** How far two close pieces run along one another, so that a shorter stretch counts as progress [px]. */
+const sharedLength = (a: Piece, b: Piece): number => Math.max(0, Math.min(a.hi, b.hi) - Math.max(a.lo, b.lo));
+
 /** What running along another line counts for, against one for a crossing. */
 export const TANGLE = 100;
 
@@ -66,7 +69,7 @@ export function trouble(points: readonly Point[], line: number, others: readonly
   for (let k = 0; k + 1 < points.length; k++) {
     const piece = pieceAt(points, line, k);
     for (const other of others) {
-      if (tooClose(piece, other)) sum += TANGLE;
+      if (tooClose(piece, other)) sum += TANGLE + sharedLength(piece, other) / 4;
       else if (cross(piece, other)) sum += 1;
     }
   }

@@ -1,4 +1,6 @@
 import { columns } from './columns';
+import { drawings } from './drawings';
+import { examples } from './examples';
 import { flashes } from './flashes';
 
 /** What a group found: cases tried, how they ended, and every case that needs looking at. */
@@ -16,7 +18,8 @@ export interface GroupReport {
   readonly more?: unknown;
 }
 
-export type Group = (seed: number, count: number) => Promise<GroupReport>;
+/** `only`: one case by its number, in groups that can run one alone. */
+export type Group = (seed: number, count: number, only?: number) => Promise<GroupReport>;
 
 /** One line a group. */
-export const GROUPS: Readonly<Record<string, Group>> = { flashes, columns };
+export const GROUPS: Readonly<Record<string, Group>> = { flashes, columns, examples, drawings };

@@ -1,0 +1,71 @@
+import type { StreamId, UnitId } from '../engine/ids';
+import { CATALOGUE } from '../engine/units/catalogue';
+import type { KindCatalogue } from '../engine/units/types';
+import type { Sketch, SketchStream } from '../sketch/types';
+import { graphOf, type LayoutGraph, placesIn } from './arrangeGraph';
+import { settle } from './arrangeSettle';
+import type { Point } from './types';
+
+/**
+ * What lays out a graph in layers: elkjs, in a worker of the page or in Node. Only its one function is used, so that the
+ * package (450 kB gzip) is loaded by whoever asks for arranging, and by nobody else.
+ */
+export interface LayoutEngine {
+  layout(graph: LayoutGraph): Promise<LayoutGraph>;
+}
+
+export interface ArrangeOptions {
+  /** Units that stay where they are. */
+  readonly keep?: Iterable<UnitId>;
+  readonly kinds?: Readonly<Record<string, KindCatalogue>>;
+}
+
+/** Where units go, and streams whose bends moved by hand make no sense any more. */
+export interface Arrangement {
+  readonly at: ReadonlyMap<UnitId, Point>;
+  readonly unbent: readonly StreamId[];
+}
+
+/**
+ * Places a sketch's units from left to right along the flow, on the grid, with room for lines, tags and labels between them.
+ * Ports, turns and mirrors stay as they are; recycles run back. The same sketch gives the same places.
+ *
+ * Source of the method: layered drawing after Sugiyama, Tagawa & Toda, IEEE Trans. Syst. Man Cybern. 11(2), 1981, p. 109, as
+ * elkjs carries it out.
+ *
+ * @param engine made by the caller: a worker on the page, the bundle in Node
+ */
+export async function arrange(
+  sketch: Sketch,
+  engine: LayoutEngine,
+  { keep = [], kinds = CATALOGUE }: ArrangeOptions = {},
+): Promise<Arrangement> {
+  const kept = new Set(keep);
+  const free = sketch.units.filter((unit) => !kept.has(unit.id));
+  if (free.length === 0) return { at: new Map(), unbent: [] };
+  const { graph, standing } = graphOf(sketch, kinds);
+  const wanted = placesIn(await engine.layout(graph), standing);
+  const at = settle(sketch, standing, wanted, kept);
+  const hasMoved = (end: SketchStream['from']): boolean => end !== undefined && !kept.has(end[0]);
+  const unbent = sketch.streams
+    .filter(({ via, from, to }) => via !== undefined && (hasMoved(from) || hasMoved(to)))
+    .map(({ id }) => id);
+  return { at, unbent };
+}
+
+/** The sketch with its units as arranged. */
+export function arranged(sketch: Sketch, { at, unbent }: Arrangement): Sketch {
+  const straight = new Set(unbent);
+  return {
+    ...sketch,
+    units: sketch.units.map((unit) => {
+      const place = at.get(unit.id);
+      return place ? { ...unit, at: place } : unit;
+    }),
+    streams: sketch.streams.map((stream) => {
+      if (!straight.has(stream.id)) return stream;
+      const { via: _, ...rest } = stream;
+      return rest;
+    }),
+  };
+}
