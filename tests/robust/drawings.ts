@@ -1,6 +1,5 @@
 import ELK from 'elkjs/lib/elk.bundled.js';
 import { arrange, arranged } from '../../src/drawing/arrange';
-import type { LayoutGraph } from '../../src/drawing/arrangeGraph';
 import { buildScene } from '../../src/drawing/scene';
 import type { Sketch } from '../../src/sketch/types';
 import { LAWS, openLabels, symbolsStandApart } from '../drawing/laws';
@@ -13,8 +12,7 @@ const SCALES = [1, 1.375, 2] as const;
 
 /** Plants of 5 to 60 units and their feeds and products, arranged, drawn, and held against every law of the drawing. */
 export async function drawings(seed: number, count: number): Promise<GroupReport> {
-  const elk = new ELK();
-  const engine = { layout: (graph: LayoutGraph) => elk.layout(graph as never) as Promise<LayoutGraph> };
+  const engine = new ELK();
   const laws = Object.entries({ ...LAWS, 'no two symbols lie on one another': symbolsStandApart });
   const reasons: Record<string, number> = {};
   const cases: unknown[] = [];
