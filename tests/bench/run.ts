@@ -4,6 +4,7 @@ import { cpus } from 'node:os';
 import { parseArgs } from 'node:util';
 import { timeBrowser } from './browser';
 import { growth, timeColumns } from './column';
+import { timeExample } from './example';
 import { timeFlashes } from './flash';
 import { timeModels } from './models';
 import { timeScene } from './scene';
@@ -16,6 +17,7 @@ const BENCHES: Readonly<Record<string, () => Promise<readonly object[]>>> = {
   flash: () => timeFlashes(now),
   columns: () => timeColumns(now),
   growth: async () => (await growth(now)).map(([stages, ms, steps]) => ({ stages, ms, steps })),
+  example: () => timeExample(now),
   scene: async () => timeScene(now),
   browser: timeBrowser,
 };
