@@ -2,7 +2,7 @@ import type { StreamId, UnitId } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { KindCatalogue } from '../engine/units/types';
 import type { Sketch, SketchStream } from '../sketch/types';
-import { graphOf, type LayoutGraph, placesIn } from './arrangeGraph';
+import { graphOf, type LaidOut, type LayoutGraph, placesIn } from './arrangeGraph';
 import { settle } from './arrangeSettle';
 import type { Point } from './types';
 
@@ -11,7 +11,7 @@ import type { Point } from './types';
  * package (450 kB gzip) is loaded by whoever asks for arranging, and by nobody else.
  */
 export interface LayoutEngine {
-  layout(graph: LayoutGraph): Promise<LayoutGraph>;
+  layout(graph: LayoutGraph): Promise<LaidOut>;
 }
 
 export interface ArrangeOptions {

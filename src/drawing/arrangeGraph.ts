@@ -6,30 +6,31 @@ import type { Box, Point, Side } from './types';
 
 /** The part of a layout engine's graph that is used; positions are of upper left corners [px]. */
 export interface LayoutGraph {
-  readonly id: string;
-  readonly layoutOptions?: Readonly<Record<string, string>>;
-  readonly children?: readonly LayoutNode[];
-  readonly edges?: readonly {
-    readonly id: string;
-    readonly sources: readonly string[];
-    readonly targets: readonly string[];
-  }[];
+  id: string;
+  layoutOptions?: Record<string, string>;
+  children?: LayoutNode[];
+  edges?: { id: string; sources: string[]; targets: string[] }[];
 }
 export interface LayoutNode {
-  readonly id: string;
-  readonly x?: number;
-  readonly y?: number;
-  readonly width: number;
-  readonly height: number;
-  readonly ports?: readonly {
-    readonly id: string;
-    readonly x: number;
-    readonly y: number;
-    readonly width: number;
-    readonly height: number;
-    readonly layoutOptions: Readonly<Record<string, string>>;
-  }[];
-  readonly layoutOptions?: Readonly<Record<string, string>>;
+  id: string;
+  x?: number;
+  y?: number;
+  width: number;
+  height: number;
+  ports?: LayoutPort[];
+  layoutOptions?: Record<string, string>;
+}
+interface LayoutPort {
+  id: string;
+  x: number;
+  y: number;
+  width: number;
+  height: number;
+  layoutOptions: Record<string, string>;
+}
+/** A graph that was laid out: only the places of its nodes are read. */
+export interface LaidOut {
+  children?: { id: string; x?: number; y?: number }[];
 }
 
 /** Room above a symbol for its tag, below it for its link and duty, beside it [px]. */
@@ -37,7 +38,7 @@ const ROOM = { above: 40, below: 24, beside: 8 } as const;
 /** Between layers: a diamond with its label, and lines that turn. */
 const BETWEEN = '112';
 
-const OPTIONS: Readonly<Record<string, string>> = {
+const OPTIONS: Record<string, string> = {
   'elk.algorithm': 'layered',
   'elk.direction': 'RIGHT',
   'elk.edgeRouting': 'ORTHOGONAL',
@@ -78,7 +79,7 @@ export function roomOf({ box, linkBoxes, symbol }: StandingUnit): Box {
 }
 
 /** Ports of a unit that streams use, on the border of its room, where their lines leave it. */
-function portsOf(unit: StandingUnit, names: ReadonlySet<string>): LayoutNode['ports'] {
+function portsOf(unit: StandingUnit, names: ReadonlySet<string>): LayoutPort[] {
   const room = roomOf(unit);
   return [...names].flatMap((name) => {
     const place = portOf(unit, name);
@@ -132,7 +133,7 @@ export function graphOf(
     if (u.symbol.sides) return node;
     return {
       ...node,
-      ports: portsOf(u, used.get(u.unit.id)!) ?? [],
+      ports: portsOf(u, used.get(u.unit.id)!),
       layoutOptions: { 'elk.portConstraints': 'FIXED_POS' },
     };
   });
@@ -140,7 +141,7 @@ export function graphOf(
 }
 
 /** Origins of the units in a graph that was laid out, not yet on the grid. */
-export function placesIn(graph: LayoutGraph, standing: readonly StandingUnit[]): ReadonlyMap<UnitId, Point> {
+export function placesIn(graph: LaidOut, standing: readonly StandingUnit[]): ReadonlyMap<UnitId, Point> {
   const nodes = new Map((graph.children ?? []).map((node) => [node.id, node]));
   return new Map(
     standing.map((u): [UnitId, Point] => {

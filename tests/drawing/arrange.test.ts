@@ -1,7 +1,6 @@
 import ELK from 'elkjs/lib/elk.bundled.js';
 import { describe, expect, test } from 'vitest';
 import { type Arrangement, arrange, arranged } from '../../src/drawing/arrange';
-import type { LayoutGraph } from '../../src/drawing/arrangeGraph';
 import { buildScene } from '../../src/drawing/scene';
 import type { UnitId } from '../../src/engine/ids';
 import type { Sketch } from '../../src/sketch/types';
@@ -9,7 +8,7 @@ import { LAWS, openLabels, symbolsStandApart } from './laws';
 import { randomPlant } from './plants';
 import { CROSSED, inputOf, LET_DOWN, RECYCLE, sheetOf } from './sheets';
 
-const engine = { layout: (graph: LayoutGraph) => new ELK().layout(graph as never) as Promise<LayoutGraph> };
+const engine = new ELK();
 const anew = async (sketch: Sketch): Promise<Sketch> => arranged(sketch, await arrange(sketch, engine));
 const placeOf = (sketch: Sketch, tag: string) => sketch.units.find((u) => u.tag === tag)!.at;
 
