@@ -38,7 +38,10 @@ export function SummaryPage() {
         </button>
         {report && report !== 'nothing' ? (
           <span className="muted">
-            {report.state.text}. {report.strip.purpose}. {report.strip.margin}.
+            {[report.state.text, report.strip.purpose, report.strip.warning, report.strip.margin]
+              .filter(Boolean)
+              .join('. ')}
+            .
           </span>
         ) : null}
       </div>
@@ -51,11 +54,18 @@ export function SummaryPage() {
         <section className="summary-scroll" aria-label="Tables" tabIndex={0}>
           {[
             report.streams,
+            report.duties,
+            report.powers,
             report.units,
             report.closure,
+            report.requirements,
             report.limits,
+            report.basis,
+            report.utilities,
             report.assumptions,
+            report.holds,
             report.pairs,
+            report.revisions,
           ].map((table) => (
             <SummaryTable key={table.key} table={table} />
           ))}

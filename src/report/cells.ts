@@ -1,4 +1,4 @@
-import { formatDecimals, plainNumber } from '../quantity';
+import { formatDecimals, MINUS, plainNumber, THIN_SPACE } from '../quantity';
 import type { Cell } from './types';
 
 export const text = (value: string, style: { bold?: boolean; muted?: boolean } = {}): Cell => ({
@@ -18,9 +18,16 @@ export function printed(cell: Cell): string {
   return cell.is === 'text' ? cell.text : formatDecimals(cell.value, cell.decimals);
 }
 
-/** The number a reader of the printed page would take from it. */
-export const printedValue = (cell: Cell): number =>
-  cell.is === 'number' ? Number(cell.value.toFixed(cell.decimals)) : 0;
+/** The number a reader of the printed page would take from it; a trace counts as nothing. */
+export function printedValue(cell: Cell): number {
+  if (cell.is !== 'number') return 0;
+  const figures = printed(cell).replaceAll(THIN_SPACE, '').replace(MINUS, '-');
+  return Number(figures) || 0;
+}
+
+/** Heads of a column of words and of a column of figures. */
+export const left = (key: string, head: string) => ({ key, head, align: 'left' as const });
+export const right = (key: string, head: string) => ({ key, head, align: 'right' as const });
 
 /** For CSV: every digit. */
 export function full(cell: Cell): string {

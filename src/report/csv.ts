@@ -27,20 +27,27 @@ export function writeCsv(report: ReportModel): string {
   const lines = [
     'Splitwright stream summary',
     ...report.title.map((entry) => `${textOf(entry.label)},${textOf(entry.text)}`),
-    textOf(report.strip.purpose),
+    ...[report.strip.warning, report.strip.purpose].filter(Boolean).map(textOf),
     `State,${textOf(report.state.text)}`,
     `Fingerprint,${textOf(report.strip.fingerprint)}`,
   ];
   for (const table of [
     report.streams,
+    report.duties,
+    report.powers,
     report.units,
     ...report.columns.flatMap(({ settings, figures, stages }) =>
       [settings, figures, stages].filter((table) => table !== undefined),
     ),
     report.closure,
+    report.requirements,
     report.limits,
+    report.basis,
+    report.utilities,
     report.assumptions,
+    report.holds,
     report.pairs,
+    report.revisions,
   ])
     lines.push('', ...tableCsv(table));
   lines.push('', ...report.cautions.map(textOf));

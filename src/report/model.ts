@@ -1,12 +1,23 @@
 import { stateWord } from '../wording';
+import { basisTable, holdTable, revisionTable, utilityTable } from './basisTables';
 import { columnReports } from './columns';
+import { dutyTable, powerTable } from './duties';
 import { measuresOf, type ReportInput } from './input';
-import { assumptionTable, closureTable, limitsTable, pairTable, unitTable } from './otherTables';
+import { assumptionTable, closureTable, limitsTable, pairTable } from './otherTables';
+import { requirementTable } from './requirements';
 import { streamTable } from './streamTable';
 import type { ReportModel, TitleEntry } from './types';
+import { unitTable } from './unitTable';
 import { modelText } from './words';
 
 export const PRELIMINARY = 'PRELIMINARY – NOT FOR CONSTRUCTION';
+
+/** Purposes that take the warning away: an issue that others may build or design in detail from. */
+const BINDING = /\b(for construction|for detailed design|as[- ]built)\b/i;
+
+/** The warning of every page, unless the purpose says otherwise. */
+export const warningOf = (purpose: string | undefined): string =>
+  BINDING.test(purpose ?? '') && !/\bnot\b/i.test(purpose ?? '') ? '' : PRELIMINARY;
 
 /** Builds the one model behind every table on screen, in CSV and in PDF. */
 export function buildReport(input: ReportInput): ReportModel {
@@ -16,8 +27,9 @@ export function buildReport(input: ReportInput): ReportModel {
     { label: 'Project', text: title.project ?? '' },
     { label: 'Area', text: title.area ?? '' },
     { label: 'Title', text: title.title ?? 'Untitled sketch' },
-    { label: 'Number', text: title.number ?? '' },
-    { label: 'Revision', text: title.revision ?? 'draft' },
+    { label: 'Sheet number', text: title.number ?? '' },
+    { label: 'Revision', text: revisionOf(input) },
+    { label: 'Purpose', text: title.purpose ?? '' },
     { label: 'Author', text: title.author ?? '' },
     { label: 'Checked', text: title.checked ?? '' },
     { label: 'Approved', text: title.approved ?? '' },
@@ -29,21 +41,33 @@ export function buildReport(input: ReportInput): ReportModel {
   return {
     title: entries,
     strip: {
-      purpose: PRELIMINARY,
+      warning: warningOf(title.purpose),
+      purpose: title.purpose?.trim() ?? '',
       margin: 'No design margin included',
       fingerprint: input.fingerprint,
       measures: `Measures: ${measuresOf(input).set}; pressures (a) or (g) as marked`,
       version: `Splitwright ${input.version}`,
-      number: [title.number, title.revision ? `Rev ${title.revision}` : 'draft', title.date ?? input.day]
+      number: [
+        title.number,
+        revisionOf(input) === 'draft' ? 'draft' : `Rev ${revisionOf(input)}`,
+        title.date ?? input.day,
+      ]
         .filter(Boolean)
         .join(', '),
     },
     streams: streamTable(input),
     units: unitTable(input),
+    duties: dutyTable(input),
+    powers: powerTable(input),
     columns: columnReports(input),
     closure: closureTable(input),
+    requirements: requirementTable(input),
     limits: limitsTable(input),
+    basis: basisTable(input),
+    utilities: utilityTable(input),
     assumptions: assumptionTable(input),
+    holds: holdTable(input),
+    revisions: revisionTable(input),
     pairs: pairTable(input),
     sources: sourcesOf(input),
     cautions: [
@@ -64,6 +88,10 @@ export function buildReport(input: ReportInput): ReportModel {
     state: stateOf(input),
   };
 }
+
+/** As typed, else the mark of the revision table's first line. */
+const revisionOf = ({ sketch }: ReportInput): string =>
+  sketch.title.revision ?? sketch.revisions?.[0]?.mark ?? 'draft';
 
 function stateOf(input: ReportInput): ReportModel['state'] {
   const open = input.sketch.units.filter((unit) => input.units.get(unit.id)?.state !== 'solved');

@@ -1,82 +1,13 @@
 import type { ClosureEntry } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
-import { displayUnit, formatDifference, show } from '../quantity';
+import { displayUnit, formatDifference } from '../quantity';
 import type { Dimension } from '../quantity/dimension';
 import type { Assumption } from '../sketch/types';
-import { kindWord, settingWord, stateWord, weightWord } from '../wording';
-import { absent, decimalsFor, number, text } from './cells';
+import { settingWord, weightWord } from '../wording';
+import { absent, decimalsFor, left, number, right, text } from './cells';
 import { measuresOf, type ReportInput } from './input';
-import type { Cell, Row, Table } from './types';
-import { findingWords, resultWord } from './words';
-
-const left = (key: string, head: string) => ({ key, head, align: 'left' as const });
-const right = (key: string, head: string) => ({ key, head, align: 'right' as const });
-
-/** Every drawn unit: state, heat and power, and what its kind reports. */
-export function unitTable(input: ReportInput): Table {
-  const measures = measuresOf(input);
-  const power = displayUnit('power', measures);
-  const shown = input.sketch.units.filter((unit) => unit.kind !== 'feed' && unit.kind !== 'product');
-  const watts = shown.map((unit) => {
-    const result = input.units.get(unit.id);
-    return { heat: result?.heat_W, power: result?.power_W };
-  });
-  const decimals = decimalsFor(
-    watts.flatMap((w) => [w.heat, w.power].map((v) => (v === undefined ? v : power.toDisplay(v)))),
-    5,
-    1,
-    4,
-  );
-  const duty = (value: number | undefined): Cell =>
-    value === undefined || value === 0 ? absent : number(power.toDisplay(value), decimals);
-  return {
-    key: 'units',
-    title: 'Units, duties and powers',
-    columns: [
-      left('kind', 'Kind'),
-      left('name', 'Service'),
-      left('state', 'State'),
-      right('heat', `Heat in, ${power.label}`),
-      right('power', `Power in, ${power.label}`),
-      left('results', 'Results'),
-    ],
-    rows: shown.map((unit, k): Row => {
-      const result = input.units.get(unit.id);
-      return {
-        key: unit.id,
-        label: unit.tag,
-        cells: [
-          text(kindWord(unit.kind, unit.settings.service)),
-          text(unit.name ?? ''),
-          text(stateText(result?.state)),
-          duty(watts[k]?.heat),
-          duty(watts[k]?.power),
-          text(resultText(input, unit.kind, result?.results)),
-        ],
-      };
-    }),
-    notes: ['Heat and power into a unit are positive; heat removed is negative. No design margin included.'],
-  };
-}
-
-const stateText = (state: string | undefined): string => stateWord(state ?? 'waiting');
-
-function resultText(
-  input: ReportInput,
-  kind: string,
-  results: Readonly<Record<string, unknown>> | undefined,
-): string {
-  if (!results) return '';
-  const measures = measuresOf(input);
-  return Object.entries(results)
-    .flatMap(([key, value]) => {
-      const word = resultWord(kind, key, input.kinds);
-      if (!word || typeof value !== 'number' || key === 'duty_W' || key === 'power_W') return [];
-      const { number: figure, unit } = show(value, word.dim, measures);
-      return [`${word.label} ${figure}${unit ? ` ${unit}` : ''}`];
-    })
-    .join('; ');
-}
+import type { Row, Table } from './types';
+import { findingWords } from './words';
 
 /** Mass, energy, chemicals and elements over the whole sketch. */
 export function closureTable(input: ReportInput): Table {
@@ -124,6 +55,14 @@ const RANK = ['beyond-limit', 'caution', 'note'] as const;
 const worstFirst = (findings: readonly Finding[]): Finding[] =>
   RANK.flatMap((weight) => findings.filter((finding) => finding.weight === weight));
 
+/** A limit of a stream or of a column leads to where its figures stand. */
+function linkOf({ at }: Finding, { sketch }: ReportInput): { readonly link?: string } {
+  if (at.stream) return { link: `stream.${at.stream}` };
+  return sketch.units.some((unit) => unit.id === at.unit && unit.kind === 'column')
+    ? { link: `column.${at.unit}` }
+    : {};
+}
+
 export function limitsTable(input: ReportInput): Table {
   return {
     key: 'limits',
@@ -139,6 +78,8 @@ export function limitsTable(input: ReportInput): Table {
       return {
         key: String(k),
         label: words.where || 'sketch',
+        ...linkOf(finding, input),
+        mark: finding.weight,
         title: `${words.title}, ${weightWord(finding.weight)}`,
         cells: [
           text(weightWord(finding.weight)),
@@ -163,14 +104,20 @@ export function assumptionTable(input: ReportInput): Table {
   return {
     key: 'assumptions',
     title: 'Assumption register',
-    columns: [left('where', 'Where'), left('value', 'Value used'), left('why', 'Why')],
-    rows: input.assumptions.map(
-      (a): Row => ({
+    columns: [left('where', 'Where'), left('value', 'Value used'), left('why', 'Why'), left('hold', 'HOLD')],
+    rows: input.assumptions.map((a): Row => {
+      const hold = input.sketch.holds?.find((h) => h.path === a.path && h.unit === a.unit);
+      return {
         key: a.no,
         label: a.no,
-        cells: [text(whereOf(a)), text(a.unitText || String(a.value)), text(a.reason)],
-      }),
-    ),
+        cells: [
+          text(whereOf(a)),
+          text(a.unitText || String(a.value)),
+          text(a.reason),
+          text(hold ? `HOLD ${hold.no}` : ''),
+        ],
+      };
+    }),
     notes:
       input.assumptions.length === 0
         ? ['No value was assumed.']

@@ -22,16 +22,20 @@ export interface RowRule {
   readonly value: (stream: SolvedStream) => number | undefined;
 }
 
-const phase = (stream: SolvedStream, vapour: boolean): PhaseResult | undefined =>
-  stream.phases.find((p) => p.fraction > 0 && (vapour ? isVapour(p) : p.kind === 'liquid'));
+type Block = 'vapour' | 'liquid' | 'liquid2';
 
 /** A dense phase stands in the vapour block; its name is printed in the row 'phase'. */
-const isVapour = (p: PhaseResult): boolean => p.kind === 'vapour' || p.kind === 'dense';
+const belongs = (p: PhaseResult, block: Block): boolean =>
+  p.kind === block || (block === 'vapour' && p.kind === 'dense');
+
+/** Whether a stream has something to print in a block. */
+export const hasBlock = (stream: SolvedStream, block: Block): boolean =>
+  stream.phases.some((p) => p.fraction > 0 && belongs(p, block));
 
 const of =
-  (vapour: boolean, pick: (p: PhaseResult, stream: SolvedStream) => number | undefined) =>
+  (block: Block, pick: (p: PhaseResult, stream: SolvedStream) => number | undefined) =>
   (stream: SolvedStream): number | undefined => {
-    const found = phase(stream, vapour);
+    const found = stream.phases.find((p) => p.fraction > 0 && belongs(p, block));
     return found ? pick(found, stream) : undefined;
   };
 
@@ -41,7 +45,9 @@ const massFlow = (p: PhaseResult, s: SolvedStream): number => (p.fraction * s.n_
 export function phaseWord(stream: SolvedStream): string {
   const present = stream.phases.filter((p) => p.fraction > 0).map((p) => p.kind);
   if (present.length === 0) return 'no flow';
-  if (present.length > 1) return 'two-phase';
+  if (present.length > 2) return 'three-phase';
+  if (present.length > 1)
+    return present[0] === 'vapour' || present[0] === 'dense' ? 'two-phase' : 'two liquids';
   return present[0] === 'liquid2' ? 'liquid' : (present[0] ?? 'no flow');
 }
 
@@ -108,7 +114,7 @@ export const FLOW_ROWS: readonly RowRule[] = [
     figures: 5,
     least: 1,
     most: 5,
-    value: (s) => of(true, (p) => p.fraction * s.n_mol_s * NORMAL_m3_mol)(s),
+    value: (s) => of('vapour', (p) => p.fraction * s.n_mol_s * NORMAL_m3_mol)(s),
   },
   {
     key: 'standardLiquid',
@@ -151,9 +157,17 @@ export const ENERGY_ROWS: readonly RowRule[] = [
   },
 ];
 
-const block = (vapour: boolean): readonly RowRule[] => {
-  const key = vapour ? 'vapour' : 'liquid';
+const block = (key: Block): readonly RowRule[] => {
   return [
+    {
+      key: `${key}.n`,
+      label: 'Molar flow',
+      dim: 'molarFlow',
+      figures: 6,
+      least: 2,
+      most: 6,
+      value: of(key, (p, s) => p.fraction * s.n_mol_s),
+    },
     {
       key: `${key}.m`,
       label: 'Mass flow',
@@ -161,7 +175,7 @@ const block = (vapour: boolean): readonly RowRule[] => {
       figures: 7,
       least: 2,
       most: 6,
-      value: of(vapour, massFlow),
+      value: of(key, massFlow),
     },
     {
       key: `${key}.volume`,
@@ -170,7 +184,7 @@ const block = (vapour: boolean): readonly RowRule[] => {
       figures: 5,
       least: 2,
       most: 6,
-      value: of(vapour, (p, s) => massFlow(p, s) / p.density_kg_m3),
+      value: of(key, (p, s) => massFlow(p, s) / p.density_kg_m3),
     },
     {
       key: `${key}.density`,
@@ -179,7 +193,7 @@ const block = (vapour: boolean): readonly RowRule[] => {
       figures: 4,
       least: 2,
       most: 4,
-      value: of(vapour, (p) => p.density_kg_m3),
+      value: of(key, (p) => p.density_kg_m3),
     },
     {
       key: `${key}.MW`,
@@ -188,7 +202,7 @@ const block = (vapour: boolean): readonly RowRule[] => {
       figures: 4,
       least: 2,
       most: 3,
-      value: of(vapour, (p) => p.MW_g_mol / 1000),
+      value: of(key, (p) => p.MW_g_mol / 1000),
     },
     {
       key: `${key}.Z`,
@@ -197,7 +211,7 @@ const block = (vapour: boolean): readonly RowRule[] => {
       figures: 4,
       least: 4,
       most: 4,
-      value: of(vapour, (p) => p.Z),
+      value: of(key, (p) => p.Z),
     },
     {
       key: `${key}.cp`,
@@ -206,7 +220,7 @@ const block = (vapour: boolean): readonly RowRule[] => {
       figures: 4,
       least: 3,
       most: 4,
-      value: of(vapour, (p) => (p.cp_J_molK * 1000) / p.MW_g_mol),
+      value: of(key, (p) => (p.cp_J_molK * 1000) / p.MW_g_mol),
     },
     {
       key: `${key}.cpcv`,
@@ -215,7 +229,7 @@ const block = (vapour: boolean): readonly RowRule[] => {
       figures: 4,
       least: 3,
       most: 3,
-      value: of(vapour, (p) => p.cpOverCv),
+      value: of(key, (p) => p.cpOverCv),
     },
     {
       key: `${key}.viscosity`,
@@ -224,9 +238,10 @@ const block = (vapour: boolean): readonly RowRule[] => {
       figures: 3,
       least: 4,
       most: 4,
-      value: of(vapour, (p) => p.viscosity_Pa_s),
+      value: of(key, (p) => p.viscosity_Pa_s),
     },
   ];
 };
-export const VAPOUR_ROWS = block(true);
-export const LIQUID_ROWS = block(false);
+export const VAPOUR_ROWS = block('vapour');
+export const LIQUID_ROWS = block('liquid');
+export const LIQUID2_ROWS = block('liquid2');

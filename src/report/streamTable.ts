@@ -7,7 +7,9 @@ import {
   CONDITION_ROWS,
   ENERGY_ROWS,
   FLOW_ROWS,
+  hasBlock,
   LIQUID_ROWS,
+  LIQUID2_ROWS,
   phaseWord,
   type RowRule,
   VAPOUR_ROWS,
@@ -23,9 +25,38 @@ const GAUGE: Readonly<Record<Measures['set'], string>> = { SI: 'kPa(g)', metric:
 
 /** Heat and material balance: one column a stream, rows in the trade's order. Totals come from unrounded values. */
 export function streamTable(input: ReportInput): Table {
+  const choices = input.sketch.documents ?? {};
+  const whole = allStreams(input, (stream) => !choices.withoutStreams?.includes(stream.id));
+  const table = { ...whole, rows: withoutRows(whole.rows, choices.withoutRows ?? []) };
+  return { ...table, notes: notes(input, table) };
+}
+
+/** Every row and every stream, whatever the documents leave out. */
+export const wholeStreamTable = (input: ReportInput): Table => {
+  const whole = allStreams(input, () => true);
+  return { ...whole, notes: notes(input, whole) };
+};
+
+/** Rows without those named; a group's name takes all of the group, and a group without rows goes too. */
+function withoutRows(rows: readonly Row[], names: readonly string[]): Row[] {
+  let groupGone = false;
+  const kept = rows.filter((row) => {
+    if (row.style === 'group') groupGone = names.includes(row.key);
+    return !(groupGone && !FREE.includes(row.key)) && !names.includes(row.key);
+  });
+  return kept.filter((row, k) => {
+    const next = kept[k + 1];
+    return row.style !== 'group' || (next !== undefined && next.style !== 'group');
+  });
+}
+
+/** Rows that stand between groups and belong to none. */
+const FREE = ['liquid2'];
+
+function allStreams(input: ReportInput, isShown: (stream: SketchStream) => boolean): Table {
   const { sketch } = input;
   const measures = measuresOf(input);
-  const streams = inOrder(sketch.streams);
+  const streams = inOrder(sketch.streams).filter(isShown);
   const results = streams.map((stream) => solvedStream(input.streams.get(stream.id)));
   const unitTag = new Map(
     sketch.units.map((unit) => [unit.id, unit.name && isBoundary(unit.kind) ? unit.name : unit.tag]),
@@ -49,6 +80,12 @@ export function streamTable(input: ReportInput): Table {
     group('liquid', 'Liquid'),
     ...LIQUID_ROWS.map((rule) => ruled(rule, results, measures)),
     { key: 'liquid2', label: 'Second liquid', cells: results.map(secondLiquid) },
+    ...(results.some((r) => r && hasBlock(r, 'liquid2'))
+      ? [
+          group('liquid2.block', 'Second liquid'),
+          ...LIQUID2_ROWS.map((rule) => ruled(rule, results, measures)),
+        ]
+      : []),
     ...composition(input, results),
     ...componentFlows(input, results, measures),
   ];
@@ -62,7 +99,7 @@ export function streamTable(input: ReportInput): Table {
       align: 'right',
     })),
     rows,
-    notes: notes(input, rows),
+    notes: [],
   };
 }
 
@@ -78,9 +115,10 @@ const stateWord = (input: ReportInput, stream: SketchStream | undefined): string
   stream && input.streams.get(stream.id)?.state === 'no-solution' ? 'no solution' : 'waiting';
 const secondLiquid = (stream: SolvedStream | undefined): Cell => {
   if (!stream) return absent;
+  if (hasBlock(stream, 'liquid2')) return text('found: see below');
   if (stream.hiddenLiquid)
     return text(stream.liquidsTogether ? 'found: both told as one' : 'found: one liquid shown');
-  return text(stream.phases.some((p) => p.kind === 'liquid' && p.fraction > 0) ? 'none found' : '–');
+  return text(hasBlock(stream, 'liquid') ? 'none found' : 'not tested');
 };
 
 function ruled(rule: RowRule, results: readonly (SolvedStream | undefined)[], measures: Measures): Row {
@@ -160,30 +198,47 @@ function componentFlows(
   ];
 }
 
-/** Largest difference between a printed total and the sum of the printed figures above it. No figure is adjusted. */
+/**
+ * Largest difference between a printed total and the sum of the printed figures above it, and in which stream it is. No
+ * figure is adjusted.
+ */
 export function roundingDifference(
   rows: readonly Row[],
   stem: 'm' | 'z',
-): { readonly value: number; readonly decimals: number } {
+): { readonly value: number; readonly decimals: number; readonly at: number } {
   const parts = rows.filter((row) => row.key.startsWith(`${stem}.`) && row.key !== `${stem}.total`);
   const total = rows.find((row) => row.key === `${stem}.total`);
-  let worst = 0;
-  let decimals = 2;
-  total?.cells.forEach((cell, k) => {
+  let worst = { value: 0, decimals: 2, at: -1 };
+  total?.cells.forEach((cell, at) => {
     if (cell.is !== 'number') return;
-    decimals = cell.decimals;
-    const sum = parts.reduce((so, row) => so + printedValue(row.cells[k] ?? absent), 0);
-    worst = Math.max(worst, Math.abs(sum - printedValue(cell)));
+    const { decimals } = cell;
+    const sum = parts.reduce((so, row) => so + printedValue(row.cells[at] ?? absent), 0);
+    // Sums of printed decimals carry binary dust: what counts is the last printed place.
+    const value = Number(Math.abs(sum - printedValue(cell)).toFixed(decimals));
+    worst = value > worst.value ? { value, decimals, at } : { ...worst, decimals };
   });
-  return { value: worst, decimals };
+  return worst;
 }
 
-function notes(input: ReportInput, rows: readonly Row[]): string[] {
-  const { value, decimals } = roundingDifference(rows, 'm');
-  const unit = displayUnit('massFlow', measuresOf(input)).label;
-  const site = displayUnit('pressure', { ...measuresOf(input) });
+function notes(input: ReportInput, table: Pick<Table, 'columns' | 'rows'>): string[] {
+  const measures = measuresOf(input);
+  const massUnit = displayUnit('massFlow', measures).label;
+  const said = (stem: 'm' | 'z', unit: string): string => {
+    const { value, decimals, at } = roundingDifference(table.rows, stem);
+    return `${value.toFixed(decimals)} ${unit} at most${at >= 0 ? ` (stream ${table.columns[at]?.head})` : ''}`;
+  };
+  const shown = ['m', 'z'].filter((stem) => table.rows.some((row) => row.key === `${stem}.total`));
+  const sums = [
+    ...(shown.includes('z') ? [said('z', 'mol %')] : []),
+    ...(shown.includes('m') ? [said('m', massUnit)] : []),
+  ];
+  const site = displayUnit('pressure', measures);
   return [
-    `Sum of printed figures differs from the totals by ${value.toFixed(decimals)} ${unit} at most: rounding. No figure is adjusted.`,
-    `Enthalpy: from the elements at 298.15 K, and from the same components as ideal gas at 25 °C; only differences mean something. Gauge pressure is above ${site.toDisplay(input.sitePressure_Pa).toPrecision(6)} ${site.label}. Normal gas: the vapour as ideal gas at 0 °C, 101.325 kPa(a). Standard liquid: 15 °C, ideal mixing of pure liquids. “–” absent, “<0.01” a trace.`,
+    ...(sums.length > 0
+      ? [
+          `Sum of printed figures differs by ${sums.join(' and by ')}: rounding. Totals come from unrounded values; no figure is adjusted.`,
+        ]
+      : []),
+    `Enthalpy: from the elements at 298.15 K, and from the same components as ideal gas at 25 °C; only differences mean something. Gauge pressure is above ${site.toDisplay(input.sitePressure_Pa).toPrecision(6)} ${site.label}. Normal gas: the vapour as ideal gas at 0 °C, 101.325 kPa(a). Standard liquid: 15 °C, ideal mixing of pure liquids. “–” absent, “<0.01” a trace. Decimals are fixed row by row.`,
   ];
 }

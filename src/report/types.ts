@@ -1,4 +1,5 @@
 import type { ProfileData } from '../drawing/profiles';
+import type { Weight } from '../engine/outcome';
 import type { Dimension } from '../quantity/dimension';
 
 /** A cell keeps the unrounded number; writers format it. Text cells are guarded against formula injection where it matters. */
@@ -16,6 +17,10 @@ export interface Row {
   /** The row in a few words, where a page has room for no more. */
   readonly title?: string;
   readonly style?: 'head' | 'group' | 'total';
+  /** Where more is said of it in the document: "stream.s3", "column.u5". */
+  readonly link?: string;
+  /** Weight of the limit that the row tells of. */
+  readonly mark?: Weight;
 }
 
 export interface Table {
@@ -51,6 +56,8 @@ export interface TitleEntry {
 export interface ReportModel {
   readonly title: readonly TitleEntry[];
   readonly strip: {
+    /** Empty when the purpose says otherwise. */
+    readonly warning: string;
     readonly purpose: string;
     readonly margin: string;
     readonly fingerprint: string;
@@ -60,10 +67,17 @@ export interface ReportModel {
   };
   readonly streams: Table;
   readonly units: Table;
+  readonly duties: Table;
+  readonly powers: Table;
   readonly columns: readonly ColumnReport[];
   readonly closure: Table;
+  readonly requirements: Table;
   readonly limits: Table;
+  readonly basis: Table;
+  readonly utilities: Table;
   readonly assumptions: Table;
+  readonly holds: Table;
+  readonly revisions: Table;
   readonly pairs: Table;
   readonly sources: readonly string[];
   readonly cautions: readonly string[];

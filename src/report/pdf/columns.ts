@@ -4,51 +4,83 @@ import { pathToSvg, textToSvg } from '../../drawing/svg';
 import { PRINT } from '../../drawing/tokens';
 import { printed } from '../cells';
 import type { ColumnReport, Table } from '../types';
+import type { Paper } from './paper';
+import { wrapped } from './wrap';
 
-/** Drawn for a screen, set smaller on paper [px], [pt]. */
+/** Drawn for a screen, set smaller on paper [px]. */
 const PICTURE = { width: 620, height: 280 } as const;
-const PICTURE_WIDTH = 490;
-const SIZE = 8.5;
+const GAP = 18;
 
-/** The columns: what was set and what came of it as tables, the profiles over the stages beside them. */
-export function columnPages(columns: readonly ColumnReport[]): Content[] {
-  if (columns.length === 0) return [];
-  return [
-    { text: 'Columns', bold: true, fontSize: 15, margin: [0, 0, 0, 6], id: 'columns', tocItem: true },
-    ...columns.map(columnBlock),
-  ];
+/** The columns: what was set and what came of it as tables, the profiles over the stages beside or below them. */
+export function columnPages(columns: readonly ColumnReport[], paper: Paper): Content[] {
+  return columns.map((column, k) => columnBlock(column, k === 0, paper));
 }
 
-function columnBlock({ title, settings, figures, profiles }: ColumnReport): Content {
+function columnBlock(
+  { key, title, settings, figures, profiles }: ColumnReport,
+  isFirst: boolean,
+  paper: Paper,
+): Content {
+  const isWide = paper.name === 'A3';
+  const figureWidth = isWide ? 224 : 216;
+  const pictureWidth = isWide ? 490 : 560;
+  const room = paper.inner.w - GAP - figureWidth - (isWide && profiles ? pictureWidth + GAP : 0);
+  const size = paper.text;
+  const settingWidth = room - 92 - 8;
+  const picture: Content[] = profiles
+    ? [{ svg: profilesSvg(profiles), width: pictureWidth, margin: [0, isWide ? 0 : 8, 0, 0] }]
+    : [];
+  const tables: Content[] = [
+    {
+      width: room,
+      ...plain(settings, size, [92, settingWidth], (row, cell) => [
+        label(row.label),
+        { text: wrapped(printed(cell), settingWidth, size) },
+      ]),
+    } as Content,
+    ...(figures
+      ? [
+          {
+            width: figureWidth,
+            ...plain(figures, size, ['*', 'auto', 'auto'], (row, cell) => [
+              label(row.label),
+              { text: printed(cell), alignment: 'right', noWrap: true },
+              { text: row.unit ?? '', color: PRINT.ink3 },
+            ]),
+          } as Content,
+        ]
+      : []),
+  ];
   return {
     unbreakable: true,
     margin: [0, 0, 0, 16],
     stack: [
-      { text: title, bold: true, fontSize: 10.5, margin: [0, 0, 0, 2] },
+      ...(isFirst
+        ? [
+            {
+              text: 'Columns',
+              bold: true,
+              fontSize: paper.heading,
+              margin: [0, 0, 0, 6],
+              id: 'columns',
+              tocItem: true,
+            } as Content,
+          ]
+        : []),
       {
-        columnGap: 18,
-        columns: [
-          {
-            width: '*',
-            ...plain(settings, [92, '*'], (row, cell) => [label(row.label), { text: printed(cell) }]),
-          },
-          ...(figures
-            ? [
-                {
-                  width: 224,
-                  ...plain(figures, ['*', 'auto', 'auto'], (row, cell) => [
-                    label(row.label),
-                    { text: printed(cell), alignment: 'right', noWrap: true },
-                    { text: row.unit ?? '', color: PRINT.ink3 },
-                  ]),
-                },
-              ]
-            : []),
-          ...(profiles
-            ? [{ width: PICTURE_WIDTH, stack: [{ svg: profilesSvg(profiles), width: PICTURE_WIDTH }] }]
-            : []),
-        ],
+        text: wrapped(title, paper.inner.w, size + 2, 600),
+        bold: true,
+        fontSize: size + 2,
+        margin: [0, 0, 0, 2],
+        id: `column.${key}`,
+        tocItem: true,
+        tocMargin: [12, 0, 0, 0],
       },
+      {
+        columnGap: GAP,
+        columns: isWide && profiles ? [...tables, { width: pictureWidth, stack: picture }] : tables,
+      },
+      ...(isWide ? [] : picture),
     ],
   };
 }
@@ -57,11 +89,12 @@ const label = (text: string): TableCell => ({ text, color: PRINT.ink2 });
 
 function plain(
   table: Table,
+  fontSize: number,
   widths: (string | number)[],
   cellsOf: (row: Table['rows'][number], cell: Table['rows'][number]['cells'][number]) => TableCell[],
 ) {
   return {
-    fontSize: SIZE,
+    fontSize,
     table: {
       widths,
       dontBreakRows: true,

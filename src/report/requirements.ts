@@ -1,0 +1,164 @@
+import { displayUnit, formatSignificant, parseQuantity, unitLabel } from '../quantity';
+import type { Dimension } from '../quantity/dimension';
+import type { Requirement, RequirementKind } from '../sketch/documentTypes';
+import type { Quantity } from '../sketch/types';
+import { left, text } from './cells';
+import { measuresOf, type ReportInput, type SolvedStream, solvedStream } from './input';
+import type { Row, Table } from './types';
+
+export const REQUIREMENT_DIMS: Readonly<Record<RequirementKind, Dimension>> = {
+  fraction: 'fraction',
+  recovery: 'fraction',
+  molarFlow: 'molarFlow',
+  massFlow: 'massFlow',
+  temperature: 'temperature',
+  pressure: 'pressure',
+  vapourFraction: 'fraction',
+};
+
+/** What the solver itself may be off, relative: a purity that was set is met by the answer it gives. */
+const SOLVER = 1e-8;
+
+export type Judged =
+  | { readonly is: 'met' | 'missed'; readonly value: number; readonly by: number }
+  | { readonly is: 'open'; readonly why: string };
+
+/** A requirement against the results [SI]. `by`: how far it is missed, 0 when met. */
+export function judged(input: ReportInput, requirement: Requirement): Judged {
+  const { sketch } = input;
+  if (!sketch.streams.some((stream) => stream.id === requirement.stream))
+    return { is: 'open', why: 'the stream is not in the sketch any more' };
+  const stream = solvedStream(input.streams.get(requirement.stream));
+  if (!stream) return { is: 'open', why: 'the stream is not solved' };
+  const value = resultOf(input, requirement, stream);
+  if (value === undefined) return { is: 'open', why: 'the component is not in the sketch' };
+  const min = limitOf(input, requirement, requirement.min);
+  const max = limitOf(input, requirement, requirement.max);
+  if (min === 'unreadable' || max === 'unreadable') return { is: 'open', why: 'the limit cannot be read' };
+  if (min === undefined && max === undefined) return { is: 'open', why: 'no limit is given' };
+  const slack = (limit: number): number => SOLVER * Math.max(Math.abs(limit), Math.abs(value));
+  if (min !== undefined && value < min - slack(min)) return { is: 'missed', value, by: min - value };
+  if (max !== undefined && value > max + slack(max)) return { is: 'missed', value, by: value - max };
+  return { is: 'met', value, by: 0 };
+}
+
+function limitOf(
+  input: ReportInput,
+  { of }: Requirement,
+  limit: Quantity | undefined,
+): number | 'unreadable' | undefined {
+  if (limit === undefined) return undefined;
+  const read = parseQuantity(limit, [REQUIREMENT_DIMS[of]], { P_Pa: input.sitePressure_Pa });
+  return read.ok ? read.si : 'unreadable';
+}
+
+function resultOf(input: ReportInput, requirement: Requirement, stream: SolvedStream): number | undefined {
+  const at = input.basis.chemicals.findIndex((chemical) => chemical.id === requirement.chemical);
+  const z = stream.z[at];
+  switch (requirement.of) {
+    case 'fraction': {
+      if (z === undefined) return undefined;
+      return requirement.basis === 'mass'
+        ? (z * (input.basis.chemicals[at]?.MW_g_mol ?? Number.NaN)) / stream.MW_g_mol
+        : z;
+    }
+    case 'recovery': {
+      if (z === undefined) return undefined;
+      const fed = input.sketch.streams.reduce((sum, { id, from }) => {
+        const isFeed = input.sketch.units.some((unit) => unit.id === from?.[0] && unit.kind === 'feed');
+        const feed = isFeed ? solvedStream(input.streams.get(id)) : undefined;
+        return sum + (feed ? feed.n_mol_s * (feed.z[at] ?? 0) : 0);
+      }, 0);
+      return fed > 0 ? (stream.n_mol_s * z) / fed : undefined;
+    }
+    case 'molarFlow':
+      return stream.n_mol_s;
+    case 'massFlow':
+      return stream.m_kg_s;
+    case 'temperature':
+      return stream.T_K;
+    case 'pressure':
+      return stream.P_Pa;
+    case 'vapourFraction':
+      return stream.vapourFraction;
+  }
+}
+
+const KIND_WORDS: Readonly<Record<RequirementKind, string>> = {
+  fraction: 'fraction',
+  recovery: 'recovery',
+  molarFlow: 'molar flow',
+  massFlow: 'mass flow',
+  temperature: 'temperature',
+  pressure: 'pressure',
+  vapourFraction: 'vapour fraction',
+};
+export const requirementKindWord = (of: RequirementKind): string => KIND_WORDS[of];
+
+/** "Benzene, mol", "recovery of Benzene", "temperature". */
+export function requirementWords(input: Pick<ReportInput, 'basis'>, requirement: Requirement): string {
+  const { of, basis, chemical } = requirement;
+  const name = input.basis.chemicals.find((c) => c.id === chemical)?.name ?? chemical ?? '…';
+  if (of === 'fraction') return `${name}, ${basis === 'mass' ? 'mass' : 'mol'}`;
+  return of === 'recovery' ? `recovery of ${name} from all feeds` : KIND_WORDS[of];
+}
+
+const asTyped = (limit: Quantity | undefined, of: RequirementKind): string => {
+  if (limit === undefined) return '–';
+  const read = parseQuantity(limit, [REQUIREMENT_DIMS[of]]);
+  return read.ok ? `${read.number} ${unitLabel(read.unit, read.dim)}`.trim() : String(limit);
+};
+
+function verdictText(verdict: Judged, said: (by: number) => string): string {
+  if (verdict.is === 'open') return `not known: ${verdict.why}`;
+  return verdict.is === 'met' ? 'met' : `missed by ${said(verdict.by)}`;
+}
+
+/** What each product must keep, what it has, and whether that is met; limits as typed. */
+export function requirementTable(input: ReportInput): Table {
+  const requirements = input.sketch.designBasis?.requirements ?? [];
+  const measures = measuresOf(input);
+  return {
+    key: 'requirements',
+    title: 'Product requirements',
+    columns: [
+      left('what', 'Of'),
+      left('min', 'At least'),
+      left('max', 'At most'),
+      left('value', 'Result'),
+      left('verdict', 'Verdict'),
+      left('note', 'Note'),
+    ],
+    rows: requirements.map((requirement, k): Row => {
+      const verdict = judged(input, requirement);
+      const isShare = REQUIREMENT_DIMS[requirement.of] === 'fraction';
+      const unit = displayUnit(REQUIREMENT_DIMS[requirement.of], measures);
+      const said = (si: number, isDifference = false): string => {
+        if (isShare) return `${formatSignificant(100 * si, 6)} %`;
+        const shown = isDifference ? unit.toDisplay(si) - unit.toDisplay(0) : unit.toDisplay(si);
+        return `${formatSignificant(shown, isDifference ? 3 : 6)} ${unit.label}`;
+      };
+      const number = input.sketch.streams.find((s) => s.id === requirement.stream)?.number;
+      return {
+        key: String(k),
+        label: number === undefined ? 'stream gone' : `Stream ${number}`,
+        ...(number === undefined ? {} : { link: `stream.${requirement.stream}` }),
+        cells: [
+          text(requirementWords(input, requirement)),
+          text(asTyped(requirement.min, requirement.of)),
+          text(asTyped(requirement.max, requirement.of)),
+          text(verdict.is === 'open' ? '–' : said(verdict.value)),
+          text(
+            verdictText(verdict, (by) => said(by, true)),
+            { bold: verdict.is !== 'met' },
+          ),
+          text(requirement.note ?? ''),
+        ],
+      };
+    }),
+    notes:
+      requirements.length === 0
+        ? ['No product requirement is given.']
+        : ['Judged on unrounded results. No design margin included.'],
+  };
+}
