@@ -46,7 +46,6 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
   const saved = useSession((state) => state.saved);
   const limitsOpen = useSession((state) => state.drawer?.is === 'limits');
   const worst = worstWeight(findings);
-  const [menu, setMenu] = useState(false);
   const more = actions.filter(
     (action) => action.group === 'sketch' || action.group === 'view' || action.group === 'help',
   );
@@ -96,6 +95,10 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
       >
         Redo
       </button>
+      <MenuButton
+        word="Edit"
+        actions={actions.filter((action) => action.group === 'edit' && !DIRECT.has(action.id))}
+      />
       <span className="divider" />
       <Word action={by('chemicals')}>Chemicals</Word>
       <Word action={by('assumptions')}>Assumptions</Word>
@@ -109,18 +112,7 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
       </button>
       <span className="divider" />
       <Word action={by('summary')}>Stream summary</Word>
-      <div className="menu-holder">
-        <button
-          type="button"
-          className="button"
-          aria-haspopup="menu"
-          aria-expanded={menu}
-          onClick={() => setMenu(!menu)}
-        >
-          File and view
-        </button>
-        {menu ? <Menu actions={more} close={() => setMenu(false)} /> : null}
-      </div>
+      <MenuButton word="File and view" actions={more} />
       <button type="button" className="button fill" onClick={() => by('export-pdf')?.run(stores)}>
         Export PDF
       </button>
@@ -128,10 +120,39 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
   );
 }
 
-function Menu({ actions, close }: { readonly actions: readonly Action[]; readonly close: () => void }) {
+/** Undo and redo stand in the bar themselves. */
+const DIRECT: ReadonlySet<string> = new Set(['undo', 'redo']);
+
+function MenuButton({ word, actions }: { readonly word: string; readonly actions: readonly Action[] }) {
+  const [open, setOpen] = useState(false);
+  return (
+    <div className="menu-holder">
+      <button
+        type="button"
+        className="button"
+        aria-haspopup="menu"
+        aria-expanded={open}
+        onClick={() => setOpen(!open)}
+      >
+        {word}
+      </button>
+      {open ? <Menu word={word} actions={actions} close={() => setOpen(false)} /> : null}
+    </div>
+  );
+}
+
+interface MenuProps {
+  readonly word: string;
+  readonly actions: readonly Action[];
+  readonly close: () => void;
+}
+
+function Menu({ word, actions, close }: MenuProps) {
   const stores = useStores();
   const step = (from: EventTarget & Element, by: number): void => {
-    const items = [...(from.closest('[role=menu]')?.querySelectorAll<HTMLElement>('[role=menuitem]') ?? [])];
+    const items = [
+      ...(from.closest('[role=menu]')?.querySelectorAll<HTMLElement>('[role=menuitem]:not(:disabled)') ?? []),
+    ];
     const at = items.indexOf(document.activeElement as HTMLElement);
     items[(at + by + items.length) % items.length]?.focus();
   };
@@ -141,9 +162,9 @@ function Menu({ actions, close }: { readonly actions: readonly Action[]; readonl
       <div
         className="menu"
         role="menu"
-        aria-label="File and view"
+        aria-label={word}
         tabIndex={-1}
-        ref={(element) => element?.querySelector<HTMLElement>('[role=menuitem]')?.focus()}
+        ref={(element) => element?.querySelector<HTMLElement>('[role=menuitem]:not(:disabled)')?.focus()}
         onKeyDown={(event) => {
           if (event.key === 'Escape') close();
           else if (event.key === 'ArrowDown') step(event.currentTarget, 1);

@@ -14,6 +14,7 @@ export function showSketch(stores: Stores, sketch: Sketch): void {
   stores.session.setState({
     units: [],
     streams: [],
+    notes: [],
     drawer: null,
     connecting: null,
     over: 'none',

@@ -3,7 +3,6 @@ import { plainSymbol } from '../drawing/symbols/registry';
 import { GRID } from '../drawing/tokens';
 import { boxOnSheet, transformOf } from '../drawing/transform';
 import type { Box, Point } from '../drawing/types';
-import type { UnitId } from '../engine/ids';
 import { Paths } from './Shapes';
 import type { Dropping } from './sheetStore';
 import { useSheet } from './sheetStore';
@@ -12,17 +11,18 @@ const NEAR = 96;
 /** Every second point of the grid is shown. */
 const STEP = 2 * GRID;
 
-/** Grid points around a place, fading out is left to the eye: a disc of them. */
-function gridPoints([x, y]: Point): Point[] {
-  const out: Point[] = [];
+/** Grid points around a place, as dots of one path: a disc of them. */
+function gridPoints([x, y]: Point): string {
+  let d = '';
   const [cx, cy] = [Math.round(x / STEP) * STEP, Math.round(y / STEP) * STEP];
   for (let dx = -NEAR; dx <= NEAR; dx += STEP)
-    for (let dy = -NEAR; dy <= NEAR; dy += STEP) if (Math.hypot(dx, dy) <= NEAR) out.push([cx + dx, cy + dy]);
-  return out;
+    for (let dy = -NEAR; dy <= NEAR; dy += STEP)
+      if (Math.hypot(dx, dy) <= NEAR) d += `M${cx + dx} ${cy + dy}h0`;
+  return d;
 }
 
-/** Dotted lines through the middles that a moving unit shares with others. */
-function guidesOf([x, y]: Point, others: readonly Point[]): string {
+/** Dotted lines through the middles that a unit from the shelf shares with others. */
+function sharedMiddles([x, y]: Point, others: readonly Point[]): string {
   const level = others.filter((p) => p[1] === y).map((p) => p[0]);
   const upright = others.filter((p) => p[0] === x).map((p) => p[1]);
   const across = level.length > 0 ? `M${Math.min(x, ...level)} ${y}H${Math.max(x, ...level)}` : '';
@@ -34,34 +34,48 @@ function guidesOf([x, y]: Point, others: readonly Point[]): string {
 export const DropLayer = memo(function DropLayer() {
   const dropping = useSheet((state) => state.dropping);
   const moved = useSheet((state) => state.moved);
+  if (dropping) return <FromShelf dropping={dropping} />;
+  const [first] = moved?.values() ?? [];
+  return first ? <Moving at={first} /> : null;
+});
+
+function Moving({ at }: { readonly at: Point }) {
+  const guide = useSheet((state) => state.guide);
+  return (
+    <svg className="ghost" aria-hidden="true">
+      <path className="grid" d={gridPoints(at)} />
+      <path className="guide" d={guide} />
+    </svg>
+  );
+}
+
+function FromShelf({ dropping }: { readonly dropping: Dropping }) {
   const units = useSheet((state) => state.scene.units);
-  const alone = moved?.size === 1 ? [...moved][0] : undefined;
-  if (!dropping && !alone) return null;
-  const at = dropping?.at ?? alone![1];
-  const except: UnitId | undefined = alone?.[0];
-  const others = units.filter((unit) => unit.unit !== except).map((unit) => unit.at);
+  const { at, tip } = dropping;
   return (
     <>
       <svg className="ghost" aria-hidden="true">
-        <g className="grid">
-          {gridPoints(at).map(([x, y]) => (
-            <circle key={`${x} ${y}`} cx={x} cy={y} r="0.8" />
-          ))}
-        </g>
-        <path className="guide" d={guidesOf(at, others)} />
-        {dropping ? <Ghost dropping={dropping} /> : null}
+        <path className="grid" d={gridPoints(at)} />
+        <path
+          className="guide"
+          d={sharedMiddles(
+            at,
+            units.map((unit) => unit.at),
+          )}
+        />
+        <Ghost dropping={dropping} />
       </svg>
-      {dropping && dropping.tip.length > 0 ? (
+      {tip.length > 0 ? (
         <div className="tip-place" style={{ transform: `translate(${at[0]}px, ${at[1]}px)` }}>
           <div className="tip" role="tooltip">
-            <b>{dropping.tip[0]}</b>
-            {dropping.tip[1]}
+            <b>{tip[0]}</b>
+            {tip[1]}
           </div>
         </div>
       ) : null}
     </>
   );
-});
+}
 
 function Ghost({ dropping }: { readonly dropping: Dropping }) {
   const symbol = plainSymbol(dropping.kind);

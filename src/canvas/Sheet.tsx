@@ -16,8 +16,11 @@ import { useSession, useSketch, useStores } from '../store/react';
 import './sheet.css';
 import './drawing.css';
 import './hand.css';
+import './notes.css';
 import { keepCentred, keepZones } from './asked';
+import { BendLayer } from './BendLayer';
 import { adds, chooseUnit } from './choose';
+import { keepClipboard } from './clipboardEvents';
 import { DropLayer } from './DropLayer';
 import { createDrag } from './drag';
 import { Frame } from './Frame';
@@ -25,6 +28,7 @@ import { putHandle } from './handle';
 import { keepScene, quietAgain } from './keepScene';
 import { endKeys } from './keys';
 import { Lines } from './Lines';
+import { Notes } from './Notes';
 import { nodesOf } from './nodes';
 import { OfferMenu } from './OfferMenu';
 import { PullLayer } from './PullLayer';
@@ -66,6 +70,7 @@ function View() {
   useEffect(() => putHandle(stores, view), [stores, view]);
   useEffect(() => keepCentred(stores, view), [stores, view]);
   useEffect(() => keepZones(stores, sheet), [stores, sheet]);
+  useEffect(() => keepClipboard(stores), [stores]);
 
   // Text and marks stand still on the screen while the sheet is zoomed: two custom properties, no rendering.
   const shownZoom = useRef(0);
@@ -153,7 +158,7 @@ function Flow({ view }: { readonly view: SheetView }) {
       onNodeDragStop={drag.stop}
       onSelectionStart={(event) => {
         banding.current = true;
-        if (!adds(event)) stores.session.setState({ units: [], streams: [] });
+        if (!adds(event)) stores.session.setState({ units: [], streams: [], notes: [] });
       }}
       onSelectionEnd={() => {
         banding.current = false;
@@ -186,8 +191,11 @@ function Flow({ view }: { readonly view: SheetView }) {
       attributionPosition="top-right"
     >
       <ViewportPortal>
+        <Notes kind="area" />
         <Lines />
+        <BendLayer />
         <StreamMarks />
+        <Notes kind="text" />
         <PullLayer />
         <DropLayer />
       </ViewportPortal>

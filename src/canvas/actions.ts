@@ -1,69 +1,10 @@
-import type { Sketch } from '../sketch/types';
 import type { Action } from '../store/action';
-import { deleteStream, deleteUnits, type Edit, mirrorUnit, turnUnit } from '../store/commands';
-import type { Stores } from '../store/react';
 import { toggleStream } from './choose';
-import { together, tryEdit } from './edit';
+import { editActions } from './editActions';
 import { sheetOf } from './handle';
-import { arrow, connectByKeys, enter, focusedThing, freePorts, leave, moveByKeys } from './keys';
+import { arrow, connectByKeys, enter, focusedThing, freePorts, leave } from './keys';
+import { idle, onSheet } from './onSheet';
 import type { Arrow } from './walk';
-
-/** Keys work on the sheet while nothing else on the screen has the focus. */
-const onSheet = (stores: Stores): boolean => {
-  if (!sheetOf(stores)) return false;
-  const focused = document.activeElement;
-  return (
-    focused === null ||
-    focused === document.body ||
-    (focused.closest('.sheet-view') !== null && !focused.closest('[role=menu]'))
-  );
-};
-
-const someUnits = ({ session }: Stores): boolean => session.getState().units.length > 0;
-const someThing = (stores: Stores): boolean =>
-  someUnits(stores) || stores.session.getState().streams.length > 0;
-const idle = (stores: Stores): boolean => stores.session.getState().over === 'none';
-
-/** The same edit on every selected unit, as one step. */
-function onEach(stores: Stores, edit: (sketch: Sketch, id: Parameters<typeof turnUnit>[1]) => Edit): void {
-  const [first, ...rest] = stores.session.getState().units;
-  if (!first) return;
-  tryEdit(stores, (sketch) =>
-    together(sketch, edit(sketch, first), ...rest.map((id) => (now: Sketch) => edit(now, id))),
-  );
-}
-
-function deleteSelected(stores: Stores): void {
-  const { units, streams } = stores.session.getState();
-  const made = tryEdit(stores, (sketch) => deletion(sketch, units, streams));
-  if (!made) return;
-  const { sketch } = stores.sketch.getState();
-  const left = streams.filter((id) => sketch.streams.some((stream) => stream.id === id));
-  stores.session.setState({ units: [], streams: left, spoken: `Done: ${made.label}` });
-}
-
-/** Streams first, then units; what stays because an outlet always has a stream is no reason to keep the rest. */
-function deletion(
-  sketch: Sketch,
-  units: readonly Parameters<typeof turnUnit>[1][],
-  streams: readonly Parameters<typeof deleteStream>[1][],
-): Edit {
-  const done: Edit[] = [];
-  let now = sketch;
-  for (const id of streams) {
-    const edit = deleteStream(now, id);
-    if (edit.ok) now = edit.sketch;
-    done.push(edit);
-  }
-  if (units.length > 0) {
-    const edit = deleteUnits(now, new Set(units));
-    if (edit.ok) now = edit.sketch;
-    done.push(edit);
-  }
-  const [first] = done;
-  if (first && (now === sketch || done.length === 1)) return first;
-  return { ok: true, sketch: now, label: `delete ${units.length + streams.length} things` };
-}
 
 const arrows = (['left', 'right', 'up', 'down'] as const).map((direction: Arrow): Action => {
   const key = `Arrow ${direction[0]!.toUpperCase()}${direction.slice(1)}`;
@@ -77,7 +18,8 @@ const arrows = (['left', 'right', 'up', 'down'] as const).map((direction: Arrow)
     }[direction],
     group: 'sheet',
     keys: [key],
-    when: (stores) => onSheet(stores) && idle(stores),
+    listens: onSheet,
+    when: idle,
     run: (stores) => arrow(stores, direction, false),
   };
 });
@@ -90,15 +32,6 @@ const addingArrows = arrows.map(
     run: (stores) => arrow(stores, walk.id.slice('walk-'.length) as Arrow, true),
   }),
 );
-
-const onUnits = (id: string, label: string, key: string, run: Action['run']): Action => ({
-  id,
-  label,
-  group: 'sheet',
-  keys: [key],
-  when: (stores) => onSheet(stores) && idle(stores) && someUnits(stores),
-  run,
-});
 
 const view = (id: string, label: string, keys: readonly string[], run: Action['run']): Action => ({
   id,
@@ -118,7 +51,8 @@ export const sheetActions: readonly Action[] = [
     label: 'Into the drawer; end a connection or a move',
     group: 'sheet',
     keys: ['Enter'],
-    when: (stores) => onSheet(stores) && idle(stores),
+    listens: onSheet,
+    when: idle,
     run: enter,
   },
   {
@@ -126,7 +60,8 @@ export const sheetActions: readonly Action[] = [
     label: 'Leave what is under way; clear the selection',
     group: 'sheet',
     keys: ['Esc'],
-    when: (stores) => onSheet(stores) && idle(stores),
+    listens: onSheet,
+    when: idle,
     run: (stores) => void leave(stores),
   },
   {
@@ -134,7 +69,8 @@ export const sheetActions: readonly Action[] = [
     label: 'Add to the selection, or take out',
     group: 'sheet',
     keys: ['Space'],
-    when: (stores) => onSheet(stores) && focusedThing() !== undefined,
+    listens: onSheet,
+    when: () => focusedThing() !== undefined,
     run: (stores) => {
       const thing = focusedThing();
       if (thing && 'unit' in thing) stores.session.toggleUnit(thing.unit);
@@ -146,31 +82,11 @@ export const sheetActions: readonly Action[] = [
     label: 'Start a connection; arrows choose, Enter ends it',
     group: 'sheet',
     keys: ['C'],
-    when: (stores) => onSheet(stores) && idle(stores) && freePorts(stores).length > 0,
+    listens: onSheet,
+    when: (stores) => idle(stores) && freePorts(stores).length > 0,
     run: connectByKeys,
   },
-  onUnits('move', 'Move by grid steps with the arrows', 'M', moveByKeys),
-  onUnits('turn', 'Turn by a quarter', 'R', (stores) => onEach(stores, turnUnit)),
-  onUnits('mirror', 'Mirror', 'X', (stores) => onEach(stores, mirrorUnit)),
-  {
-    id: 'delete',
-    label: 'Delete',
-    group: 'edit',
-    keys: ['Delete', 'Backspace'],
-    when: (stores) => onSheet(stores) && idle(stores) && someThing(stores),
-    run: deleteSelected,
-  },
-  {
-    id: 'select-all',
-    label: 'Select all',
-    group: 'edit',
-    keys: ['Ctrl+A'],
-    when: (stores) => onSheet(stores) && idle(stores),
-    run: ({ session, sketch }) => {
-      const { units, streams } = sketch.getState().sketch;
-      session.setState({ units: units.map((unit) => unit.id), streams: streams.map((stream) => stream.id) });
-    },
-  },
+  ...editActions,
   view('fit', 'Whole sheet in view', ['F'], (stores) => sheetOf(stores)?.fit()),
   view('zoom-in', 'Larger', ['+', '='], (stores) => sheetOf(stores)?.zoomBy(1.25)),
   view('zoom-out', 'Smaller', ['-', '\u2212'], (stores) => sheetOf(stores)?.zoomBy(0.8)),

@@ -3,11 +3,12 @@ import { GRID } from '../drawing/tokens';
 import type { Point } from '../drawing/types';
 import type { UnitId } from '../engine/ids';
 import type { Stores } from '../store/react';
-import { endMove } from './keys';
+import { bendsAfter } from './bends';
+import { drawnTo, type Guide, guidePath, guidesOf, MAGNET } from './guides';
+import { sheetOf } from './handle';
+import { endMove } from './moving';
 import { nodeBox } from './nodes';
-import type { SheetStore } from './sheetStore';
-
-const snapped = (by: number): number => Math.round(by / GRID) * GRID;
+import { AT_REST, type SheetState, type SheetStore } from './sheetStore';
 
 interface Start {
   readonly at: Point;
@@ -15,54 +16,73 @@ interface Start {
   readonly corner: Point;
 }
 
+interface Held {
+  readonly starts: ReadonlyMap<UnitId, Start>;
+  readonly lines: SheetState['lines'];
+  /** Known once it is known which units are in the hand. */
+  guides: readonly Guide[] | null;
+}
+
 /**
- * A drag of units: while it lasts their positions live on the sheet alone, on the grid; letting go makes one edit, Esc none.
+ * A drag of units: while it lasts their positions live on the sheet alone, on the grid or in line with others; letting go
+ * makes one edit, Esc none.
  */
 export function createDrag(stores: Stores, sheet: SheetStore) {
-  let starts: ReadonlyMap<UnitId, Start> | null = null;
+  let held: Held | null = null;
   let left = false;
   const giveUp = (event: KeyboardEvent): void => {
-    if (event.key !== 'Escape' || !starts) return;
+    if (event.key !== 'Escape' || !held) return;
     event.preventDefault();
     event.stopPropagation();
     left = true;
-    sheet.setState({ moved: null });
+    sheet.setState(AT_REST);
+  };
+
+  const guidesFor = (moving: ReadonlySet<UnitId>): readonly Guide[] => {
+    if (!held) return [];
+    held.guides ??= guidesOf(sheet.getState().scene.units, stores.sketch.getState().sketch.streams, moving);
+    return held.guides;
   };
 
   return {
     start(): void {
-      const places = new Map<UnitId, Start>();
+      const starts = new Map<UnitId, Start>();
       for (const shape of sheet.getState().scene.units) {
         const box = nodeBox(shape);
-        places.set(shape.unit, { at: shape.at, corner: [box.x, box.y] });
+        starts.set(shape.unit, { at: shape.at, corner: [box.x, box.y] });
       }
-      starts = places;
+      held = { starts, lines: sheet.getState().lines, guides: null };
       left = false;
       window.addEventListener('keydown', giveUp, true);
     },
 
-    /** Positions as the hand has them; all units move by the same whole steps of the grid. */
+    /** Positions as the hand has them; all units move by the same steps. */
     take(changes: readonly NodeChange<Node>[]): void {
-      if (!starts || left) return;
-      const moved = new Map<UnitId, Point>();
-      let by: Point | undefined;
+      if (!held || left) return;
+      const hands = new Map<UnitId, Start>();
+      let raw: Point | undefined;
       for (const change of changes) {
         if (change.type !== 'position' || !change.position) continue;
-        const id = change.id as UnitId;
-        const start = starts.get(id);
+        const start = held.starts.get(change.id as UnitId);
         if (!start) continue;
-        by ??= [snapped(change.position.x - start.corner[0]), snapped(change.position.y - start.corner[1])];
-        moved.set(id, [start.at[0] + by[0], start.at[1] + by[1]]);
+        raw ??= [change.position.x - start.corner[0], change.position.y - start.corner[1]];
+        hands.set(change.id as UnitId, start);
       }
-      if (moved.size === 0 || !by) return;
+      if (!raw) return;
+      const guides = guidesFor(new Set(hands.keys()));
+      const by = drawnTo(guides, raw, MAGNET / (sheetOf(stores)?.zoom() ?? 1), GRID);
+      const moved = new Map(
+        [...hands].map(([id, { at }]): [UnitId, Point] => [id, [at[0] + by[0], at[1] + by[1]]]),
+      );
       const now = sheet.getState().moved;
-      const same = now?.size === moved.size && [...moved].every(([id, p]) => samePoint(now.get(id), p));
-      if (!same) sheet.setState({ moved });
+      if (now?.size === moved.size && [...moved].every(([id, p]) => samePoint(now.get(id), p))) return;
+      const bends = bendsAfter(stores.sketch.getState().sketch, held.lines, moved);
+      sheet.setState({ moved, bends, guide: guidePath(guides, by) });
     },
 
     stop(): void {
       window.removeEventListener('keydown', giveUp, true);
-      starts = null;
+      held = null;
       if (!left) endMove(stores, sheet);
     },
   };

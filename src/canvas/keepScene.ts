@@ -8,10 +8,11 @@ import type { Sketch } from '../sketch/types';
 import type { Stores } from '../store/react';
 import type { ResultsState } from '../store/resultsStore';
 import type { SayContext } from '../wording';
+import { withBends } from './bends';
 import { streamName, unitName } from './names';
 import { quietAt } from './quiet';
 import { createSceneInput } from './sceneInput';
-import type { SheetState, SheetStore } from './sheetStore';
+import { AT_REST, type SheetState, type SheetStore } from './sheetStore';
 import { tagOf } from './words';
 
 /** The list as a map by id; the known map itself when the list is the same. */
@@ -31,10 +32,10 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
   let scene: Scene | undefined;
 
   const build = (): void => {
-    const { sketch } = stores.sketch.getState();
     const { gaps } = stores.compiled.getState();
     const results = stores.results.getState();
     const before = sheet.getState();
+    const sketch = withBends(stores.sketch.getState().sketch, before.bends);
     const next = buildScene(sketch, input(sketch, results, gaps, before.moved, before.textScale), scene);
     const units = indexed(next.units, before.scene.units, before.units, (shape) => shape.unit);
     const lines = indexed(next.lines, before.scene.lines, before.lines, (shape) => shape.stream);
@@ -68,7 +69,8 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
       if (now.gaps !== before.gaps && placesOf(now.gaps) !== placesOf(before.gaps)) build();
     }),
     sheet.subscribe((now, before) => {
-      if (now.moved !== before.moved || now.textScale !== before.textScale) build();
+      if (now.moved !== before.moved || now.bends !== before.bends || now.textScale !== before.textScale)
+        build();
     }),
   ];
   return () => {
@@ -137,8 +139,8 @@ function namesOf(
 
 /** Another document ends what was under way on the one before. */
 function settle({ session }: Stores, sheet: SheetStore): void {
-  const { moved, pulling, offer } = sheet.getState();
-  if (moved) sheet.setState({ moved: null, movingByKeys: false });
+  const { moved, bends, heldNotes, pulling, offer } = sheet.getState();
+  if (moved || bends || heldNotes) sheet.setState(AT_REST);
   if (pulling || offer) {
     sheet.setState({ pulling: null, offer: null });
     session.setState({ connecting: null });
@@ -147,13 +149,15 @@ function settle({ session }: Stores, sheet: SheetStore): void {
 
 /** What is gone from the sketch leaves the selection and the drawer. */
 function prune({ session }: Stores, sketch: Sketch): void {
-  const { units, streams, drawer } = session.getState();
+  const { units, streams, notes, drawer } = session.getState();
   const has = (list: readonly { readonly id: string }[], id: string): boolean =>
     list.some((record) => record.id === id);
   if (!units.every((id) => has(sketch.units, id)))
     session.setState({ units: units.filter((id) => has(sketch.units, id)) });
   if (!streams.every((id) => has(sketch.streams, id)))
     session.setState({ streams: streams.filter((id) => has(sketch.streams, id)) });
+  if (!notes.every((id) => has(sketch.notes, id)))
+    session.setState({ notes: notes.filter((id) => has(sketch.notes, id)) });
   if (drawer?.is === 'unit' && !has(sketch.units, drawer.id)) session.setState({ drawer: null });
   if (drawer?.is === 'stream' && !has(sketch.streams, drawer.id)) session.setState({ drawer: null });
 }

@@ -1,14 +1,12 @@
-import { GRID } from '../drawing/tokens';
-import type { Point } from '../drawing/types';
 import type { StreamId, UnitId } from '../engine/ids';
-import { moveUnits } from '../store/commands';
 import type { Stores } from '../store/react';
-import { tryEdit } from './edit';
+import { bendArrow, endBend } from './bending';
 import { type SheetHandle, sheetOf } from './handle';
 import { middleOf } from './lines';
+import { endMove, nudge } from './moving';
 import { isFree, portsOf, type StandingPort } from './ports';
 import { beginPull, cancelPull, endPull } from './pull';
-import type { SheetStore, Target } from './sheetStore';
+import { AT_REST, type SheetStore, type Target } from './sheetStore';
 import { type Arrow, chooseByArrow, type Places, stepFrom, type Thing } from './walk';
 import { portName } from './words';
 
@@ -55,7 +53,8 @@ export function arrow(stores: Stores, direction: Arrow, shift: boolean): void {
   if (!handle) return;
   const state = handle.store.getState();
   if (state.pulling) choosePort(stores, handle.store, direction);
-  else if (state.movingByKeys) nudge(handle.store, direction, shift ? 5 : 1);
+  else if (state.bending) bendArrow(stores, handle.store, direction, shift ? 5 : 1);
+  else if (state.movingByKeys) nudge(stores, handle.store, direction, shift ? 5 : 1);
   else walk(stores, handle, direction, shift);
 }
 
@@ -116,51 +115,10 @@ function choosePort(stores: Stores, sheet: SheetStore, direction: Arrow): void {
   say(stores, portName(stores.sketch.getState().sketch, next));
 }
 
-/** Starts moving the selected units by keys; pressed again, or with Enter, they stay where they are. */
-export function moveByKeys(stores: Stores): void {
-  const sheet = sheetOf(stores)?.store;
-  if (!sheet) return;
-  if (sheet.getState().movingByKeys) {
-    endMove(stores, sheet);
-    return;
-  }
-  const { sketch } = stores.sketch.getState();
-  const chosen = new Set(stores.session.getState().units);
-  const moved = new Map<UnitId, Point>(
-    sketch.units.filter((unit) => chosen.has(unit.id)).map((unit) => [unit.id, unit.at]),
-  );
-  if (moved.size === 0) return;
-  sheet.setState({ moved, movingByKeys: true });
-  say(stores, 'Moving. Arrows move by one step of the grid, Enter leaves it there, Esc puts it back.');
-}
-
-function nudge(sheet: SheetStore, direction: Arrow, steps: number): void {
-  const { moved } = sheet.getState();
-  if (!moved) return;
-  const by = GRID * steps;
-  const [dx, dy]: Point =
-    direction === 'left'
-      ? [-by, 0]
-      : direction === 'right'
-        ? [by, 0]
-        : direction === 'up'
-          ? [0, -by]
-          : [0, by];
-  sheet.setState({
-    moved: new Map([...moved].map(([id, [x, y]]): [UnitId, Point] => [id, [x + dx, y + dy]])),
-  });
-}
-
-/** Units stay where a drag or keys brought them: one edit. */
-export function endMove(stores: Stores, sheet: SheetStore): void {
-  const { moved } = sheet.getState();
-  if (moved) tryEdit(stores, (sketch) => moveUnits(sketch, moved));
-  sheet.setState({ moved: null, movingByKeys: false });
-}
-
 /** The pointer takes over: units moved by keys stay where they are, a connection started by keys is left. */
 export function endKeys(stores: Stores, sheet: SheetStore): void {
-  const { movingByKeys, pulling } = sheet.getState();
+  const { movingByKeys, bending, pulling } = sheet.getState();
+  if (bending?.byKeys) endBend(stores, sheet);
   if (movingByKeys) endMove(stores, sheet);
   if (pulling?.byKeys) cancelPull(stores, sheet);
 }
@@ -169,11 +127,14 @@ export function endKeys(stores: Stores, sheet: SheetStore): void {
 export function enter(stores: Stores): void {
   const handle = sheetOf(stores);
   if (!handle) return;
-  const { pulling, movingByKeys } = handle.store.getState();
+  const { pulling, movingByKeys, bending } = handle.store.getState();
   if (pulling) endPull(stores, handle.store, handle.zoom());
+  else if (bending) endBend(stores, handle.store);
   else if (movingByKeys) endMove(stores, handle.store);
   else {
+    const [note] = stores.session.getState().notes;
     const thing = currentThing(stores) ?? focusedThing();
+    if (!thing && note !== undefined) handle.store.setState({ writing: note });
     if (!thing) return;
     stores.session.enterDrawer(
       'unit' in thing ? { is: 'unit', id: thing.unit } : { is: 'stream', id: thing.stream },
@@ -185,14 +146,14 @@ export function enter(stores: Stores): void {
 export function leave(stores: Stores): boolean {
   const sheet = sheetOf(stores)?.store;
   if (!sheet) return false;
-  const { pulling, offer, moved, dropping } = sheet.getState();
+  const { pulling, offer, moved, heldNotes, bending, dropping } = sheet.getState();
   if (pulling || offer) cancelPull(stores, sheet);
   else if (dropping) sheet.setState({ dropping: null });
-  else if (moved) sheet.setState({ moved: null, movingByKeys: false });
+  else if (moved || heldNotes || bending) sheet.setState(AT_REST);
   else {
-    const { units, streams, notice } = stores.session.getState();
+    const { units, streams, notes, notice } = stores.session.getState();
     if (notice) stores.session.dismiss();
-    else if (units.length + streams.length > 0) stores.session.select([], []);
+    else if (units.length + streams.length + notes.length > 0) stores.session.select([], []);
     else return false;
   }
   return true;

@@ -46,6 +46,20 @@ export interface Dropping {
   readonly tip: readonly string[];
 }
 
+export interface Bending {
+  readonly stream: StreamId;
+  readonly piece: number;
+  /** The line before. */
+  readonly points: readonly Point[];
+  readonly by: number;
+  readonly byKeys: boolean;
+}
+
+export interface HeldNote {
+  readonly at: Point;
+  readonly size?: Point;
+}
+
 export interface SheetState {
   readonly scene: Scene;
   readonly units: ReadonlyMap<UnitId, UnitShape>;
@@ -61,6 +75,16 @@ export interface SheetState {
   /** Positions while a drag or a move by keys lasts. */
   readonly moved: ReadonlyMap<UnitId, Point> | null;
   readonly movingByKeys: boolean;
+  /** Guides that the moving units are in line with, as a path. */
+  readonly guide: string;
+  /** Bends while a gesture lasts, over the sketch's own; none straightens a line. */
+  readonly bends: ReadonlyMap<StreamId, readonly Point[]> | null;
+  /** The piece of a stream's line that is being moved. */
+  readonly bending: Bending | null;
+  /** Notes and areas as they stand while a gesture lasts. */
+  readonly heldNotes: ReadonlyMap<string, HeldNote> | null;
+  /** The note whose text is being typed. */
+  readonly writing: string | null;
   readonly pulling: Pulling | null;
   readonly offer: Offer | null;
   readonly dropping: Dropping | null;
@@ -73,6 +97,16 @@ export interface Quiet {
   readonly diamonds: ReadonlySet<StreamId>;
   readonly duties: boolean;
 }
+
+/** Nothing is in the hand. */
+export const AT_REST = {
+  moved: null,
+  movingByKeys: false,
+  guide: '',
+  bends: null,
+  bending: null,
+  heldNotes: null,
+} as const satisfies Partial<SheetState>;
 
 const emptyScene: Scene = {
   box: { x: 0, y: 0, w: 0, h: 0 },
@@ -93,8 +127,8 @@ export const createSheetStore = () =>
     streamNames: new Map(),
     quiet: { labels: new Set(), diamonds: new Set(), duties: false },
     textScale: 1,
-    moved: null,
-    movingByKeys: false,
+    ...AT_REST,
+    writing: null,
     pulling: null,
     offer: null,
     dropping: null,

@@ -79,6 +79,14 @@ function halfGap(a: PortPlace, b: PortPlace): number {
   return ahead > 0 ? ahead / 2 : Infinity;
 }
 
+/** How far a bend moved by hand lies straight before a port: the line leaves the port no further than that [px]. */
+function ahead({ at, side }: PortPlace, bend: Point): number {
+  const [ux, uy] = AWAY[side];
+  const aside = ux !== 0 ? bend[1] - at[1] : bend[0] - at[0];
+  const far = (bend[0] - at[0]) * ux + (bend[1] - at[1]) * uy;
+  return aside === 0 && far > 0 ? far : Infinity;
+}
+
 /** What else a line is to heed when it is led once more, because it ran along another one. */
 export interface Detour {
   readonly lanes: readonly Lane[];
@@ -148,9 +156,10 @@ function ledOnce(
   ) {
     return { points: straight, region: boxOfPiece(a.at, b.at, 6) };
   }
-  const half = via.length === 0 ? halfGap(a, b) : Infinity;
-  const start = along(a.at, a.side, stubOf(from, half, obstacles, detour?.stubs[0]));
-  const end = along(b.at, b.side, stubOf(to, half, obstacles, detour?.stubs[1]));
+  const [first, last] = [via[0], via.at(-1)];
+  const [before, behind] = first && last ? [ahead(a, first), ahead(b, last)] : [halfGap(a, b), halfGap(a, b)];
+  const start = along(a.at, a.side, stubOf(from, before, obstacles, detour?.stubs[0]));
+  const end = along(b.at, b.side, stubOf(to, behind, obstacles, detour?.stubs[1]));
   const stops = [start, ...via.filter((v) => !obstacles.some((o) => inside(v, grown(o, 6)))), end];
   const arrive = ((HEADING[b.side] + 2) & 3) as Heading;
 

@@ -9,6 +9,10 @@ export interface Action {
   readonly keys: readonly string[];
   /** Also works while a text field has the focus. */
   readonly whileTyping?: true;
+  /** The browser tells of the key itself (copy, cut, paste): it is shown with the action, and not listened for. */
+  readonly byBrowser?: true;
+  /** Where its keys are heard (the sheet has the focus); absent: everywhere. Menus do not ask. */
+  listens?(stores: Stores): boolean;
   when?(stores: Stores): boolean;
   run(stores: Stores): void;
 }
@@ -50,6 +54,8 @@ export function actionFor(
   return actions.find(
     (action) =>
       action.keys.includes(text) &&
+      !action.byBrowser &&
+      (action.listens?.(stores) ?? true) &&
       (!typing || action.whileTyping === true) &&
       (action.when?.(stores) ?? true),
   );

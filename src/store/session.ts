@@ -25,6 +25,8 @@ export type Theme = 'system' | 'light' | 'dark';
 export interface SessionState {
   readonly units: readonly UnitId[];
   readonly streams: readonly StreamId[];
+  /** Notes and areas of the sheet, by id. */
+  readonly notes: readonly string[];
   readonly drawer: DrawerChoice | null;
   /** Counts how often the keyboard was sent into the drawer. */
   readonly drawerEntered: number;
@@ -55,6 +57,7 @@ export function createSession() {
   const store = createStore<SessionState>()(() => ({
     units: [],
     streams: [],
+    notes: [],
     drawer: null,
     drawerEntered: 0,
     pointed: null,
@@ -84,13 +87,14 @@ export function createSession() {
           : alone && stream
             ? { is: 'stream', id: stream }
             : get().drawer;
-      set({ units, streams, drawer });
+      set({ units, streams, notes: [], drawer });
     },
     /** Selects one thing and has the sheet bring it to its middle; the drawer stays. */
     centre(thing: Thing): void {
       set({
         units: 'unit' in thing ? [thing.unit] : [],
         streams: 'stream' in thing ? [thing.stream] : [],
+        notes: [],
         centred: { key: (get().centred?.key ?? 0) + 1, thing },
       });
     },

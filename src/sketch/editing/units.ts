@@ -104,20 +104,30 @@ function shifted(stream: SketchStream, shifts: ReadonlyMap<UnitId, Place>): Sket
   return { ...stream, via: stream.via.map(([x, y]): Place => [x + a[0], y + a[1]]) };
 }
 
-/** A quarter turn, clockwise. */
+/** The lines at a unit find their own ways again: its ports are elsewhere. */
+function straightened(sketch: Sketch, before: Sketch, id: UnitId): Sketch {
+  if (sketch === before) return sketch;
+  const streams = sketch.streams.map((s) =>
+    s.via && (s.from?.[0] === id || s.to?.[0] === id) ? without(s, 'via') : s,
+  );
+  return streams.every((s, k) => s === sketch.streams[k]) ? sketch : { ...sketch, streams };
+}
+
+/** A quarter turn, clockwise. Bends moved by hand of the lines at the unit go. */
 export function turnUnit(sketch: Sketch, id: UnitId): Edit {
   const unit = unitOf(sketch, id);
   if (!unit) return refuse('edit/unknown-unit', word('unit', id));
   const turn = (((unit.turn ?? 0) + 90) % 360) as 0 | 90 | 180 | 270;
   const next = withUnit(sketch, id, (u) => (turn === 0 ? without(u, 'turn') : { ...u, turn }));
-  return { ok: true, sketch: next, label: `turn ${unit.tag}` };
+  return { ok: true, sketch: straightened(next, sketch, id), label: `turn ${unit.tag}` };
 }
 
+/** Left to right. Bends moved by hand of the lines at the unit go. */
 export function mirrorUnit(sketch: Sketch, id: UnitId): Edit {
   const unit = unitOf(sketch, id);
   if (!unit) return refuse('edit/unknown-unit', word('unit', id));
   const next = withUnit(sketch, id, (u) => (u.mirror ? without(u, 'mirror') : { ...u, mirror: true }));
-  return { ok: true, sketch: next, label: `mirror ${unit.tag}` };
+  return { ok: true, sketch: straightened(next, sketch, id), label: `mirror ${unit.tag}` };
 }
 
 /**
