@@ -3,7 +3,7 @@ import { flash, makeFlashWork } from '../../src/engine/equilibrium/flash';
 import { bankModel } from '../robust/bankModels';
 import { type FlashCase, missOf } from '../robust/flashes';
 import { faultOf } from '../robust/referee';
-import { KEPT, OPEN } from './kept-cases';
+import { KEPT } from './kept-cases';
 
 type Kept = FlashCase & { readonly name: string };
 
@@ -19,8 +19,4 @@ async function check(kept: Kept): Promise<void> {
 
 describe('flashes that once failed', () => {
   test.each(KEPT)('$name', check);
-});
-
-describe('flashes that still fail', () => {
-  for (const kept of OPEN) test.fails(kept.name, () => check(kept));
 });

@@ -1,7 +1,7 @@
 import { expansionOf } from './naming';
 import { vapourFractionOf } from './rachford-rice';
 import { orderByVolume, settle } from './settle';
-import { gibbsAgainstPlane, placeFlows } from './split';
+import { gibbsAgainstPlane, placeFlows, sameness } from './split';
 import { liquidLike, setPlane } from './stability';
 import { hiddenLiquid, vapourBelow } from './starts';
 import type { FlashWork, Slot } from './work';
@@ -32,6 +32,15 @@ function asOneLiquid(w: FlashWork, other: Float64Array): true {
   w.phases = 1;
   w.lumped = true;
   return true;
+}
+
+/** Whether two liquids that moved to another temperature are two liquids still, and no vapour lies below their plane. */
+export function staysTwoLiquids(w: FlashWork, T: number, P: number): boolean {
+  if (sameness(w)) return false;
+  orderByVolume(w);
+  if (!bothLiquid(w, T) || vapourBelow(w, T, P, w.vap, w.liq)) return false;
+  const smaller = w.vap.total < w.liq.total ? w.vap : w.liq;
+  return asOneLiquid(w, smaller.x);
 }
 
 function bothLiquid(w: FlashWork, T: number): boolean {

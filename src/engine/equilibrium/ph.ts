@@ -1,12 +1,13 @@
 import { answerOf } from './answer';
 import { between } from './blend';
 import { newtonCaloric } from './caloric';
+import { staysTwoLiquids } from './liquids';
 import { orderByVolume } from './settle';
-import { placeFlows } from './split';
+import { placeFlows, sameness } from './split';
 import { liquidLike, setPlane } from './stability';
 import { hiddenLiquid } from './starts';
 import { flashTP, type StartK } from './tp';
-import { type Caloric, closeEnough, frozenCp, LEAST_T_K, MOST_T_K, rounding, wholeOf } from './whole';
+import { type Caloric, closeEnough, LEAST_T_K, MOST_T_K, rounding, wholeOf } from './whole';
 import type { FlashWork } from './work';
 
 export type SearchEnd = 'solved' | 'no-convergence' | 'out-of-range' | 'between-states';
@@ -84,7 +85,11 @@ export function flashCaloric(
       // Not the stable state, or a phase is about to vanish: go on from that temperature.
       next = end === 'going' ? Number.NaN : w.T_K;
     } else if (w.lumped) {
-      next = T + (miss * slopeless(of, T)) / frozenCp(w);
+      w.iterations = 0;
+      const end = newtonCaloric(w, T, P, target, of);
+      iterations += w.iterations;
+      if (end === 'equal' && staysTwoLiquids(w, w.T_K, P)) return done(w, iterations);
+      next = end === 'going' ? Number.NaN : w.T_K;
     } else next = singleT(w, P, target, of, T, low, high);
 
     if (belowT > 0 && aboveT > 0) {
@@ -122,8 +127,6 @@ export function flashCaloric(
   return 'no-convergence';
 }
 
-const slopeless = (of: Caloric, T: number): number => (of === 'h' ? 1 : T);
-
 function done(w: FlashWork, iterations: number): 'solved' {
   w.iterations = iterations;
   return 'solved';
@@ -132,6 +135,7 @@ function done(w: FlashWork, iterations: number): 'solved' {
 /** A split that newtonCaloric found, tested as flashTP tests its own; small phases are real, but none is negative. */
 function isAnswer(w: FlashWork, P: number, hiddenBefore: boolean): boolean {
   const T = w.T_K;
+  if (sameness(w)) return false;
   orderByVolume(w);
   if (w.formers.length === 0) return true;
   if (liquidLike(w, w.vap, T) && liquidLike(w, w.liq, T)) return false;

@@ -272,7 +272,8 @@ export function newtonSplit(w: FlashWork, T: number, P: number, passes: number):
   return 'going';
 }
 
-function sameness(w: FlashWork): boolean {
+/** Both phases as placed are one: nothing has parted. */
+export function sameness(w: FlashWork): boolean {
   const { n, vap, liq } = w;
   for (let i = 0; i < n; i++) {
     if (Math.abs(Math.log(vap.x[i]! / liq.x[i]!)) > TRIVIAL) return false;

@@ -32,17 +32,25 @@ export function liquidLike(w: FlashWork, phase: Slot, T: number): boolean {
  *
  * @param w.startW  start amounts, length n
  * @param known1, known2  phases the trial may run into without being news (the tested phase, or both of a split)
+ * @param substitutions  steps before Newton
  * @returns true when the trial lies below the plane: then w.trial holds it (x normalised, flow unnormalised)
  * Source: Michelsen, Fluid Phase Equilib. 9 (1982) 1; criterion tpd(w) = sum of w (ln w + ln phi - d) < 0.
  */
-export function follow(w: FlashWork, T: number, P: number, known1: Slot, known2: Slot | undefined): boolean {
+export function follow(
+  w: FlashWork,
+  T: number,
+  P: number,
+  known1: Slot,
+  known2: Slot | undefined,
+  substitutions = SUBSTITUTIONS,
+): boolean {
   const { model, n, trial, d, startW } = w;
   const { flow: W, x, props } = trial;
   W.set(startW);
   let total = normalise(W, x, n);
   let before = Number.POSITIVE_INFINITY;
   const reach = known2 === undefined ? NEAR_FEED : NEAR_PHASE;
-  for (let pass = 0; pass < SUBSTITUTIONS; pass++) {
+  for (let pass = 0; pass < substitutions; pass++) {
     model.evaluate(trial.side, T, P, x, 0, props);
     w.iterations++;
     const distance = tpd(w);

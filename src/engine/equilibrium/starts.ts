@@ -1,4 +1,5 @@
 import { LN_GAMMA_APART } from './candidates';
+import { softLiquid } from './soft';
 import { BELOW, follow, liquidLike, setPlane } from './stability';
 import type { FlashWork, Slot } from './work';
 
@@ -37,9 +38,10 @@ export function isUnstable(w: FlashWork, T: number, P: number): boolean {
  * Whether some liquid rich in one of the liquid formers lies below the plane in w.d; w.trial then holds it.
  *
  * A pure liquid i lies at minus the logarithm of its activity above the plane: one evaluation rules most of them out.
- * Last comes the mixture of the tested phase with as much of the chemical that is least at home in it.
+ * Then comes the mixture of the tested phase with as much of the chemical that is least at home in it, and last what lies
+ * along the softest direction of a tested liquid.
  *
- * @param known1  the tested phase, a liquid if there is one; @param known2  the other phase of a split
+ * @param known1  the tested phase, a liquid if there is one; @param known2  the other phase of a split; level-2 properties
  */
 export function hiddenLiquid(
   w: FlashWork,
@@ -53,9 +55,11 @@ export function hiddenLiquid(
   const inLiquid = known2 !== undefined || liquidLike(w, known1, T);
   let stranger = -1;
   let most = STRANGE;
+  let strange = false;
   for (let k = 0; k < formers.length; k++) {
     const lnGammaMost = heat_K[k]! / T;
     if (lnGammaMost < LN_GAMMA_APART) continue;
+    strange = true;
     const i = formers[k]!;
     // Beside a vapour the tested phase is a liquid: the activity in it cannot be larger than this.
     const lnX = Math.log(tested.x[i]!);
@@ -72,11 +76,13 @@ export function hiddenLiquid(
     if (inLiquid && lnGamma < (above < CLOSE ? STRANGE / 4 : STRANGE)) continue;
     if (followPure(w, T, P, i, known1, known2)) return true;
   }
-  if (stranger < 0) return false;
-  for (let i = 0; i < n; i++) startW[i] = 0.5 * tested.x[i]!;
-  startW[stranger] = startW[stranger]! + 0.5;
-  w.trial.side = 'liquid';
-  return follow(w, T, P, known1, known2);
+  if (stranger >= 0) {
+    for (let i = 0; i < n; i++) startW[i] = 0.5 * tested.x[i]!;
+    startW[stranger] = startW[stranger]! + 0.5;
+    w.trial.side = 'liquid';
+    if (follow(w, T, P, known1, known2)) return true;
+  }
+  return strange && inLiquid && softLiquid(w, T, P, tested, known1, known2);
 }
 
 /** Distance of a pure trial from the plane; w.trial holds it. */

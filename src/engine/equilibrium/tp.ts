@@ -90,7 +90,11 @@ function flashHere(w: FlashWork, z: Float64Array, T: number, P: number, from: St
   feed.side = 'stable';
   model.evaluate('stable', T, P, feed.x, 0, feed.props);
   w.iterations++;
-  if (n === 1) return finishOne(w, T, P);
+  if (n === 1) {
+    model.evaluate('stable', T, P, feed.x, 2, feed.props);
+    w.iterations++;
+    return finishOne(w);
+  }
   setPlane(w, feed);
   w.vap.side = 'vapour';
   w.liq.side = 'liquid';
@@ -109,12 +113,14 @@ function flashHere(w: FlashWork, z: Float64Array, T: number, P: number, from: St
       if (end === 'equal' && gibbsAgainstPlane(w) < 1e-13) return finishTwo(w, z, T, P);
     }
   }
-  if (!isUnstable(w, T, P)) return finishOne(w, T, P);
+  model.evaluate('stable', T, P, feed.x, 2, feed.props);
+  w.iterations++;
+  if (!isUnstable(w, T, P)) return finishOne(w);
   const light = startFromTrial(w, z, T, P);
-  if (light === undefined) return finishOne(w, T, P);
+  if (light === undefined) return finishOne(w);
   end = settle(w, z, T, P);
   if (end === 'equal') return finishTwo(w, z, T, P);
-  return end === 'trivial' ? finishOne(w, T, P) : false;
+  return end === 'trivial' ? finishOne(w) : false;
 }
 
 /**
@@ -166,10 +172,8 @@ export function startFromTrial(
   return vap.side === 'liquid' ? 'liquid' : 'vapour';
 }
 
-/** A single phase: level-2 properties of the feed. */
-export function finishOne(w: FlashWork, T: number, P: number): true {
-  w.model.evaluate('stable', T, P, w.feed.x, 2, w.feed.props);
-  w.iterations++;
+/** A single phase: w.feed with level-2 properties. */
+function finishOne(w: FlashWork): true {
   w.phases = 1;
   w.residual = 0;
   return true;

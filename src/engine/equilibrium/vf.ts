@@ -77,7 +77,7 @@ function accept(w: FlashWork): boolean {
   if (Math.abs(vap.props.v_m3_mol / liq.props.v_m3_mol - 1) < ALIKE) {
     // Nearly one phase: near a critical point, or on the way to no split at all.
     w.feed.x.set(liq.x);
-    w.model.evaluate('stable', T, P, w.feed.x, 0, w.feed.props);
+    w.model.evaluate('stable', T, P, w.feed.x, 2, w.feed.props);
     setPlane(w, w.feed);
     if (isUnstable(w, T, P)) return false;
   }

@@ -15,13 +15,6 @@ export function wholeOf(w: FlashWork, of: Caloric): number {
     : vap.total * vap.props.s_J_molK + liq.total * liq.props.s_J_molK;
 }
 
-/** Heat capacity with the phases' amounts and compositions frozen [J/(mol K)]. */
-export function frozenCp(w: FlashWork): number {
-  const { vap, liq, feed } = w;
-  if (w.phases === 1 && !w.lumped) return feed.props.cp_J_molK;
-  return vap.total * vap.props.cp_J_molK + liq.total * liq.props.cp_J_molK;
-}
-
 /** How close an enthalpy or entropy must come to what was asked [J/mol, J/(mol K)]: some rounding errors. */
 export function closeEnough(of: Caloric, T: number, target: number): number {
   const size = of === 'h' ? 8.314 * T : 8.314;
