@@ -5,6 +5,9 @@ export interface Orders {
   readonly jsonDir?: string;
   readonly csv?: string;
   readonly pdf?: string;
+  readonly xlsx?: string;
+  /** The drawing alone. */
+  readonly svg?: string;
   /** TAG.path and value text, in the order given. */
   readonly sets: readonly (readonly [string, string])[];
   readonly strict: boolean;
@@ -15,9 +18,10 @@ export type ReadOrders =
   | { readonly ok: false; readonly why: string };
 
 export const USAGE =
-  'npm run -s solve -- FILE... [--json OUT | --json-dir DIR] [--csv OUT] [--pdf OUT] [--set TAG.path=value]... [--strict]';
+  'npm run -s solve -- FILE... [--json OUT | --json-dir DIR] [--csv OUT] [--pdf OUT] [--xlsx OUT] [--svg OUT] [--set TAG.path=value]... [--strict]';
 
-const WITH_VALUE = ['--json', '--json-dir', '--csv', '--pdf', '--set'] as const;
+const SINGLE = ['--json', '--csv', '--pdf', '--xlsx', '--svg'] as const;
+const WITH_VALUE = [...SINGLE, '--json-dir', '--set'] as const;
 type WithValue = (typeof WITH_VALUE)[number];
 const isWithValue = (text: string): text is WithValue => (WITH_VALUE as readonly string[]).includes(text);
 
@@ -44,7 +48,7 @@ export function readOrders(args: readonly string[]): ReadOrders {
     else files.push(arg);
   }
   if (files.length === 0) return { ok: false, why: 'no sketch file was named' };
-  const single = (['--json', '--csv', '--pdf'] as const).find((name) => outs[name] !== undefined);
+  const single = SINGLE.find((name) => outs[name] !== undefined);
   if (files.length > 1 && single)
     return { ok: false, why: `${single} goes with one file; use --json-dir for several` };
   if (outs['--json'] && outs['--json-dir'])
@@ -59,6 +63,8 @@ export function readOrders(args: readonly string[]): ReadOrders {
       ...(outs['--json-dir'] === undefined ? {} : { jsonDir: outs['--json-dir'] }),
       ...(outs['--csv'] === undefined ? {} : { csv: outs['--csv'] }),
       ...(outs['--pdf'] === undefined ? {} : { pdf: outs['--pdf'] }),
+      ...(outs['--xlsx'] === undefined ? {} : { xlsx: outs['--xlsx'] }),
+      ...(outs['--svg'] === undefined ? {} : { svg: outs['--svg'] }),
     },
   };
 }

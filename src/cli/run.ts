@@ -10,6 +10,7 @@ import type { Finding } from '../engine/outcome';
 import { writeCsv } from '../report/csv';
 import type { ReportInput } from '../report/input';
 import { buildReport } from '../report/model';
+import { sheetSvg } from '../report/picture';
 import { resultsJson } from '../report/resultsJson';
 import { loadBankData } from '../sketch/bank';
 import { compile } from '../sketch/compile';
@@ -167,6 +168,11 @@ async function writeAll(file: string, orders: Orders, input: ReportInput, result
     writeFileSync(join(orders.jsonDir, `${stem}.results.json`), json);
   }
   if (orders.csv) writeFileSync(orders.csv, writeCsv(buildReport(input)));
+  if (orders.xlsx) {
+    const { writeXlsx } = await import('../report/xlsx');
+    writeFileSync(orders.xlsx, await writeXlsx(buildReport(input)));
+  }
+  if (orders.svg) writeFileSync(orders.svg, `${sheetSvg(input)}\n`);
   if (orders.pdf) {
     const { writePdf } = await import('../report/pdf/write');
     const fonts = {

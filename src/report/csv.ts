@@ -1,5 +1,6 @@
 import { full } from './cells';
 import { guarded } from './guard';
+import { tablesOf } from './tables';
 import type { Cell, ReportModel, Table } from './types';
 
 const quoted = (value: string): string =>
@@ -31,25 +32,7 @@ export function writeCsv(report: ReportModel): string {
     `State,${textOf(report.state.text)}`,
     `Fingerprint,${textOf(report.strip.fingerprint)}`,
   ];
-  for (const table of [
-    report.streams,
-    report.duties,
-    report.powers,
-    report.units,
-    ...report.columns.flatMap(({ settings, figures, stages }) =>
-      [settings, figures, stages].filter((table) => table !== undefined),
-    ),
-    report.closure,
-    report.requirements,
-    report.limits,
-    report.basis,
-    report.utilities,
-    report.assumptions,
-    report.holds,
-    report.pairs,
-    report.revisions,
-  ])
-    lines.push('', ...tableCsv(table));
+  for (const [table] of tablesOf(report)) lines.push('', ...tableCsv(table));
   lines.push('', ...report.cautions.map(textOf));
   return `\ufeff${lines.join('\r\n')}\r\n`;
 }

@@ -3,6 +3,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { describe, expect, test } from 'vitest';
 import { run } from '../../src/cli/run';
+import { readXlsx } from '../report/readXlsx';
 import { EXAMPLES } from '../report/solved';
 
 const dir = mkdtempSync(join(tmpdir(), 'sketch-'));
@@ -120,6 +121,14 @@ describe('the headless command', () => {
     expect(code).toBe(0);
     expect(readJson(join(dir, 'out/let-down.results.json')).solved).toBe(true);
     expect(readJson(join(dir, 'out/condensate-flash.results.json')).solved).toBe(true);
+  });
+
+  test('writes spreadsheet and drawing, and PDF, all in one call', async () => {
+    const [xlsx, svg, pdf] = [join(dir, 'f.xlsx'), join(dir, 'f.svg'), join(dir, 'f.pdf')];
+    expect((await call(letDown, '--xlsx', xlsx, '--svg', svg, '--pdf', pdf)).code).toBe(0);
+    expect(readXlsx(new Uint8Array(readFileSync(xlsx))).map((s) => s.name)).toContain('Stream summary');
+    expect(readFileSync(svg, 'utf8')).toMatch(/^<svg [^>]*viewBox=.*>PV-1<\/text>.*<\/svg>\n$/s);
+    expect(readFileSync(pdf).subarray(0, 5).toString()).toBe('%PDF-');
   });
 
   test('gives the same results twice, but for the time', async () => {

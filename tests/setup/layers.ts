@@ -38,7 +38,7 @@ export const ROOMS: Readonly<Record<string, RoomRule>> = {
   report: {
     code: ['sketch', 'drawing', 'wording', 'quantity', 'catalogue', 'engine-types'],
     types: ['engine', 'data'],
-    packages: ['pdfmake', 'd3-scale', 'd3-shape'],
+    packages: ['pdfmake', 'write-excel-file', 'fflate', 'd3-scale', 'd3-shape'],
   },
   protocol: { code: ['engine-types'], types: ['engine'], packages: [] },
   worker: { code: ['engine', 'protocol', 'quantity'], types: [], packages: [] },
@@ -121,7 +121,12 @@ export const isFormula = (path: string): boolean =>
 
 /** Run by hand with Node to make committed files; nothing imports them. */
 export const isScript = (path: string): boolean =>
-  ['src/data/convert.ts', 'src/drawing/makeMetrics.ts', 'src/sketch/writeSchema.ts'].includes(path);
+  [
+    'src/data/convert.ts',
+    'src/drawing/makeMetrics.ts',
+    'src/sketch/writeSchema.ts',
+    'src/report/writeSchema.ts',
+  ].includes(path);
 
 /** Code that solves: the page reaches it through the worker, never by an import. */
 export const isSolver = (path: string): boolean =>
