@@ -2,7 +2,7 @@ import type { StreamId, UnitId } from '../engine/ids';
 import type { Basis, Closure, Problem, StreamResult, UnitResult } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
 import { connectSolver } from '../store/solverClient';
-import { makeWorker } from './solving';
+import { takeWorker } from './solverWorker';
 
 export interface CleanAnswer {
   readonly streams: ReadonlyMap<StreamId, StreamResult>;
@@ -16,7 +16,7 @@ export function solveFromNothing(basis: Basis, problem: Problem): Promise<CleanA
   return new Promise((resolve, reject) => {
     const streams = new Map<StreamId, StreamResult>();
     const units = new Map<UnitId, UnitResult>();
-    const client = connectSolver(makeWorker, {
+    const client = connectSolver(takeWorker, {
       results: (_edit, last, batch) => {
         for (const [id, result] of batch.streams) streams.set(id, result);
         for (const [id, result] of batch.units) units.set(id, result);

@@ -1,3 +1,4 @@
+import './awake';
 import { StrictMode } from 'react';
 import { createRoot } from 'react-dom/client';
 import { emptySketch } from '../sketch/fresh';
@@ -11,16 +12,25 @@ import { App } from './App';
 import { startAutosave } from './autosaving';
 import { ErrorBoundary } from './ErrorBoundary';
 import { keepFolds } from './folds';
-import { startSolving, wakeSolver } from './solving';
+import { startSolving } from './solving';
 import { applyTheme, storedTheme } from './theme';
+
+/** How long a page waits with drawing itself until its sketch has been sent to the solver [ms]. */
+const ASKED_MS = 150;
+
+const nextCompiled = ({ compiled }: Stores): Promise<void> =>
+  new Promise((done) => {
+    const stop = compiled.subscribe(() => {
+      stop();
+      done();
+    });
+  });
 
 const root = document.getElementById('root');
 if (!root) throw new Error('index.html has no element with the id "root"');
 
 const theme = storedTheme();
 applyTheme(theme);
-// While the sketch of last time is looked up, the solver's script is on its way.
-const solver = wakeSolver();
 const autosave = await startAutosave();
 const stores: Stores = {
   sketch: createSketchStore(autosave.last ?? emptySketch(crypto.randomUUID()), markEdit),
@@ -30,8 +40,10 @@ const stores: Stores = {
 };
 stores.session.setState({ theme });
 keepFolds(stores.session);
-startSolving(stores, solver);
+startSolving(stores);
 autosave.watch(stores);
+// A sketch of last time is on its way to the solver before the page takes the processor to draw itself; not for long.
+if (autosave.last) await Promise.race([nextCompiled(stores), new Promise((go) => setTimeout(go, ASKED_MS))]);
 
 createRoot(root).render(
   <StrictMode>

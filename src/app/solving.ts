@@ -4,28 +4,16 @@ import { type BankData, makeCompile, neededChemicals } from '../sketch/compile';
 import { afterPaint, markOnce, markShown } from '../store/marks';
 import type { Stores } from '../store/react';
 import { connectSolver, type SolverClient } from '../store/solverClient';
-
-export const makeWorker = (): Worker =>
-  new Worker(new URL('../worker/solver.worker.ts', import.meta.url), { type: 'module' });
+import { takeWorker } from './solverWorker';
 
 /** The solver is warmed up when the page is idle, or after this [ms]. */
 const IDLE_MS = 500;
-
-/** Begins to load the solver at once; it is handed out first, then new ones. */
-export function wakeSolver(): () => Worker {
-  let awake: Worker | undefined = makeWorker();
-  return () => {
-    const worker = awake ?? makeWorker();
-    awake = undefined;
-    return worker;
-  };
-}
 
 /**
  * Keeps the results answering the document: compiles each new document (memoised), loads chemicals of the bank that it
  * newly names, and sends the problem to the worker. What changes no number (a label moved) is not sent.
  */
-export function startSolving(stores: Stores, make: () => Worker = makeWorker): SolverClient {
+export function startSolving(stores: Stores, make: () => Worker = takeWorker): SolverClient {
   const compile = makeCompile();
   let data: BankData | null = null;
   let loadedFor = '';
@@ -97,7 +85,7 @@ export function startSolving(stores: Stores, make: () => Worker = makeWorker): S
     if (state.sketch !== before.sketch) run();
   });
   run();
-  // The worker's code is compiled while the page is idle, so that the first solve of a fresh tab is not the slow one.
+  // A worker warms up as soon as it starts; what a first solve has cut short goes on when the page is idle.
   const prewarm = (): void => client.ask(0, { ask: 'prewarm' });
   if (window.requestIdleCallback) window.requestIdleCallback(prewarm, { timeout: IDLE_MS });
   else setTimeout(prewarm, IDLE_MS);

@@ -12,11 +12,14 @@ export interface ServeOptions {
   readonly pace?: Pace;
   /** Milliseconds, never going back. */
   readonly now?: () => number;
+  /** Warm up at once, before anything is asked. */
+  readonly warmUp?: true;
 }
 
 type SolveOrder = Extract<ToWorker, { say: 'solve' }>;
 interface QuestionOrder {
-  readonly job: number;
+  /** Absent when nobody waits for the answer. */
+  readonly job?: number;
   readonly about: Question;
 }
 
@@ -34,7 +37,7 @@ const messageOf = (cause: unknown): string => (cause instanceof Error ? cause.me
  * @returns ends the service: nothing is begun any more
  */
 export function serveSolver(port: JobPort, options: ServeOptions = {}): () => void {
-  const { kinds = KNOWN_KINDS, pace = PACE, now = () => performance.now() } = options;
+  const { kinds = KNOWN_KINDS, pace = PACE, now = () => performance.now(), warmUp } = options;
   const turns = makeTurns();
   const bases = new Map<string, Basis>();
   const memories = new Map<string, Memory>();
@@ -42,6 +45,7 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
   const questions: QuestionOrder[] = [];
   let waiting: SolveOrder | undefined;
   let busy = false;
+  let warm = false;
   let closed = false;
   const say = (message: FromWorker): void => {
     if (!closed) port.postMessage(message);
@@ -91,11 +95,13 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
   async function runQuestion({ job, about }: QuestionOrder): Promise<void> {
     try {
       if (about.ask === 'prewarm') {
-        const value = await prewarm({ turns, now, overtaken: () => closed || waiting !== undefined });
-        say({ say: 'answer', job, value });
+        const overtaken = () => closed || waiting !== undefined;
+        const value = warm ? { solves: 0, enough: true } : await prewarm({ turns, now, overtaken });
+        warm = value.enough;
+        if (job !== undefined) say({ say: 'answer', job, value });
       }
     } catch (cause) {
-      say({ say: 'broke', job, message: messageOf(cause) });
+      say({ say: 'broke', ...(job === undefined ? {} : { job }), message: messageOf(cause) });
     }
   }
 
@@ -143,6 +149,10 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
   });
   port.start?.();
   say({ say: 'ready' });
+  if (warmUp) {
+    questions.push({ about: { ask: 'prewarm' } });
+    void work();
+  }
   return () => {
     closed = true;
     turns.close();
