@@ -4,6 +4,7 @@ import type { DrawerChoice } from '../store/session';
 import { AssumptionsDrawer } from './AssumptionsDrawer';
 import { ChemicalsDrawer } from './chemicals/ChemicalsDrawer';
 import { LimitsDrawer } from './LimitsDrawer';
+import { OWN_PARTS } from './own';
 import { Splitter, useDrawerWidth } from './Splitter';
 import { SketchDrawer } from './sketch/SketchDrawer';
 import { StreamDrawer } from './stream/StreamDrawer';
@@ -65,7 +66,11 @@ export function DrawerHost() {
     if (drawer?.is === 'stream') return state.sketch.streams.some((stream) => stream.id === drawer.id);
     return drawer !== null;
   });
-  const width = useDrawerWidth();
+  const kind = useSketch((state) =>
+    drawer?.is === 'unit' ? state.sketch.units.find((unit) => unit.id === drawer.id)?.kind : undefined,
+  );
+  const own = kind !== undefined && Object.hasOwn(OWN_PARTS, kind) ? OWN_PARTS[kind] : undefined;
+  const width = useDrawerWidth(own?.width);
   const { root, onFocus, leave } = useEntering();
   const key = drawer ? `${drawer.is} ${'id' in drawer ? drawer.id : ''}` : '';
   if (!drawer || !isThere) return null;

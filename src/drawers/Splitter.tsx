@@ -8,35 +8,47 @@ const onResize = (then: () => void): (() => void) => {
   return () => window.removeEventListener('resize', then);
 };
 
-function stored(at: WindowClass): number {
-  const px = Number(remembered(`drawer-width.${at}`));
-  return px >= LEAST && px <= MOST ? px : USUAL;
+/** Drawers that begin with a width of their own have a place of their own in what is remembered. */
+const keyOf = (at: WindowClass, usual: number): string =>
+  usual === USUAL ? `drawer-width.${at}` : `drawer-width.${usual}.${at}`;
+
+function stored(at: WindowClass, usual: number): number {
+  const px = Number(remembered(keyOf(at, usual)));
+  return px >= LEAST && px <= MOST ? px : usual;
 }
 
 export interface DrawerWidth {
   readonly px: number;
+  /** What a double click goes back to. */
+  readonly usual: number;
   /** Undefined on small screens, where the width is fixed. */
   readonly set: ((px: number) => void) | undefined;
 }
 
-/** The drawer's width, remembered on this computer for each class of window width; fixed in small windows. */
-export function useDrawerWidth(): DrawerWidth {
+/**
+ * The drawer's width, remembered on this computer for each class of window width; fixed in small windows.
+ *
+ * @param usual  where it begins [px]
+ */
+export function useDrawerWidth(usual = USUAL): DrawerWidth {
   const at = useSyncExternalStore(onResize, () => windowClass(window.innerWidth));
-  const [chosen, setChosen] = useState(() => ({ at, px: stored(at) }));
-  if (at === 'small') return { px: SMALL, set: undefined };
+  const key = keyOf(at, usual);
+  const [chosen, setChosen] = useState({ key: '', px: 0 });
+  if (at === 'small') return { px: SMALL, usual, set: undefined };
   return {
-    px: chosen.at === at ? chosen.px : stored(at),
+    px: chosen.key === key ? chosen.px : stored(at, usual),
+    usual,
     set: (next) => {
       const px = Math.round(Math.min(MOST, Math.max(LEAST, next)));
-      setChosen({ at, px });
-      remember(`drawer-width.${at}`, String(px));
+      setChosen({ key, px });
+      remember(key, String(px));
     },
   };
 }
 
 /** The drawer's inner edge: dragged, or stepped with the arrows. */
 export function Splitter({ width }: { readonly width: DrawerWidth }) {
-  const { set, px } = width;
+  const { set, px, usual } = width;
   if (!set) return null;
   return (
     // biome-ignore lint/a11y/useSemanticElements: a splitter that moves has a value, which a rule has not
@@ -55,7 +67,7 @@ export function Splitter({ width }: { readonly width: DrawerWidth }) {
         event.preventDefault();
         set(px + by);
       }}
-      onDoubleClick={() => set(USUAL)}
+      onDoubleClick={() => set(usual)}
       onPointerDown={(event) => {
         event.preventDefault();
         const element = event.currentTarget;

@@ -4,7 +4,8 @@ import { beforeEach, describe, expect, test, vi } from 'vitest';
 import { keepFolds } from '../../src/app/folds';
 import { remember, remembered, windowClass } from '../../src/store/remembered';
 import { createSession } from '../../src/store/session';
-import { makePage, show } from './page';
+import { columnSketch } from './columnSketch';
+import { makePage, show, unitId } from './page';
 
 const resize = (px: number): void => {
   window.innerWidth = px;
@@ -47,6 +48,23 @@ describe('the width of the drawer', () => {
     expect(width()).toBe('384px');
     resize(1900);
     expect(width()).toBe('400px');
+  });
+
+  test('of a column begins wider and is remembered apart', () => {
+    const page = makePage(columnSketch());
+    page.stores.session.openDrawer({ is: 'unit', id: unitId('c') });
+    show(page);
+    expect(width()).toBe('472px');
+    wider();
+    expect(width()).toBe('488px');
+    act(() => page.stores.session.openDrawer({ is: 'unit', id: unitId('u1') }));
+    expect(width()).toBe('368px');
+    act(() => page.stores.session.openDrawer({ is: 'unit', id: unitId('c') }));
+    expect(width()).toBe('488px');
+    fireEvent.doubleClick(screen.getByRole('separator', { name: 'Width of the drawer' }));
+    expect(width()).toBe('472px');
+    resize(1024);
+    expect(width()).toBe('304px');
   });
 
   test('is the usual one where something else was stored', () => {

@@ -2,6 +2,7 @@
 import { act, fireEvent, screen, within } from '@testing-library/react';
 import { beforeAll, describe, expect, test } from 'vitest';
 import { solveSketch } from '../../src/cli/run';
+import { type ColumnResults, columnResults } from '../../src/drawing/columnProfiles';
 import type { UnitResult } from '../../src/engine/network/types';
 import type { ReportInput } from '../../src/report/input';
 import { openSketch } from '../../src/sketch/read';
@@ -128,6 +129,22 @@ describe('what fixes a column', () => {
     expect(field('fixedBy.0.value').value).toBe('2.4');
   });
 
+  test('keeps a row that has no value yet while the drawer is closed, and takes no focus on opening again', () => {
+    const page = open(without(0));
+    fireEvent.click(screen.getByRole('button', { name: 'Temperature' }));
+    put('fixedBy.1.stage', '9');
+    act(() => page.stores.session.openDrawer(null));
+    expect(document.querySelector('.fixed-by')).toBeNull();
+    act(() => page.stores.session.openDrawer({ is: 'unit', id: unitId('c') }));
+    expect(field('fixedBy.1.stage').value).toBe('9');
+    expect(document.activeElement).toBe(document.body);
+    put('fixedBy.1.value', '118 degC');
+    expect((fixedBy(page) as unknown[])[1]).toEqual({ fix: 'temperature', stage: 9, value: '118 degC' });
+    act(() => page.stores.session.openDrawer(null));
+    act(() => page.stores.session.openDrawer({ is: 'unit', id: unitId('c') }));
+    expect(count()).toBe('fixed 2 of 2');
+  });
+
   test('leaves the old row when Esc is pressed in the empty new one', () => {
     const page = open();
     pick('fixedBy.0.fix', 'boilup');
@@ -241,6 +258,13 @@ describe('a solved column in its drawer', () => {
       );
     });
 
+  const solvedColumn = (): ColumnResults => {
+    solve(open());
+    const results = columnResults(input.units.get(unitId('c'))?.results);
+    if (!results) throw new Error('no profiles');
+    return results;
+  };
+
   test('tells duties by size and direction, and what fixed it', () => {
     const page = open();
     expect(document.querySelector('[data-profiles]')).toBeNull();
@@ -262,6 +286,39 @@ describe('a solved column in its drawer', () => {
     );
     expect(label).toMatch(/feed at stage 6/);
     expect(label).not.toMatch(/NaN|undefined|–/);
+  });
+
+  test('reads the profiles off place by place with the arrow keys', () => {
+    const results = solvedColumn();
+    const hand = screen.getByRole('slider', { name: 'Place read off the profiles' });
+    const reading = (): string => document.querySelector('.reading')?.textContent ?? '';
+    act(() => hand.focus());
+    expect(reading()).toMatch(/^Condenser/);
+    fireEvent.keyDown(hand, { key: 'ArrowDown' });
+    expect(reading()).toMatch(/^Stage 1/);
+    // Derived: shown in °C with four figures.
+    const T_degC = results.stages.T_K[0]! - 273.15;
+    expect(reading()).toContain(`temperature ${T_degC.toPrecision(4)} °C`);
+    expect(hand.getAttribute('aria-valuetext')).toContain(`Stage 1: temperature ${T_degC.toPrecision(4)} °C`);
+    expect(document.querySelectorAll('.reading-mark circle').length).toBeGreaterThanOrEqual(6);
+    fireEvent.keyDown(hand, { key: 'End' });
+    expect(reading()).toMatch(/^Reboiler/);
+    fireEvent.keyDown(hand, { key: 'ArrowDown' });
+    expect(reading()).toMatch(/^Reboiler/);
+    act(() => hand.blur());
+    expect(reading()).toMatch(/^Point at a stage/);
+  });
+
+  test('reads off the place under the pointer, and nothing once it has left', () => {
+    solvedColumn();
+    const hand = screen.getByRole('slider', { name: 'Place read off the profiles' });
+    const reading = (): string => document.querySelector('.reading')?.textContent ?? '';
+    fireEvent.pointerMove(hand, { clientY: 1000 });
+    expect(reading()).toMatch(/^Reboiler/);
+    fireEvent.pointerMove(hand, { clientY: 0 });
+    expect(reading()).toMatch(/^Condenser/);
+    fireEvent.pointerLeave(hand);
+    expect(reading()).toMatch(/^Point at a stage/);
   });
 
   test('has the figures of every place as a table that the keyboard reaches', () => {

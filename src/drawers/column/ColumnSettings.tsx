@@ -127,10 +127,12 @@ function Pressure() {
   );
   const unused = Object.keys(there).filter((end) => !there[end] && Object.hasOwn(fields, end));
   return (
-    <fieldset className="group">
-      <legend>Pressure</legend>
+    <fieldset className="group plain">
+      <legend className="unseen">Pressure</legend>
       <FormProvider value={withPressureWords(form)}>
-        <Fields fields={fields} base="pressure" choose={spec.choose} />
+        <div className="pairs-of">
+          <Fields fields={fields} base="pressure" choose={spec.choose} />
+        </div>
       </FormProvider>
       {unused.map((end) => (
         <p key={end} className="field-note">
@@ -142,7 +144,7 @@ function Pressure() {
   );
 }
 
-/** Short ones: they stand under "pressure". */
+/** Short ones: they stand side by side where there is room. */
 const PRESSURES: Readonly<Record<string, string>> = {
   'pressure.condenser': 'condenser pressure',
   'pressure.top': 'top pressure',

@@ -15,8 +15,8 @@ export function Efficiency() {
   const stages = form.value('stages');
   const most = typeof stages === 'number' ? stages : undefined;
   return (
-    <fieldset className="group">
-      <legend>Murphree efficiency, vapour</legend>
+    <fieldset className={items.length === 0 ? 'group line' : 'group'}>
+      <legend>{items.length === 0 ? 'Efficiency' : 'Murphree efficiency, vapour'}</legend>
       {items.map((_, k) => {
         const base = `${PATH}.${k}`;
         const of = `stretch ${k + 1}`;
@@ -74,7 +74,7 @@ export function Efficiency() {
         );
       })}
       <p className="muted">
-        {items.length === 0 ? 'Not set: all stages are equilibrium stages. ' : 'Elsewhere 100 %. '}
+        {items.length === 0 ? 'Not set: stages in equilibrium. ' : 'Elsewhere 100 %. '}
         <button
           type="button"
           className="link"
@@ -86,7 +86,7 @@ export function Efficiency() {
             )
           }
         >
-          Add an efficiency
+          {items.length === 0 ? 'Add a Murphree efficiency' : 'Add an efficiency'}
         </button>
       </p>
       <FieldFindings path={PATH} />

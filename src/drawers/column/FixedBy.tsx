@@ -1,11 +1,12 @@
-import { useMemo, useState } from 'react';
+import { useMemo } from 'react';
 import type { Finding } from '../../engine/outcome';
 import { conflictsOf, countMiss, type FixedView } from '../../engine/units/column/free';
 import type { Json } from '../../sketch/types';
 import { type Form, FormProvider, useForm } from '../unit/form';
 import { FieldFindings } from '../unit/SettingRow';
 import { capital } from '../words';
-import { type Draft, draftForm } from './draft';
+import { draftForm } from './draft';
+import { useDraft } from './drafts';
 import { FixingRow } from './FixingRow';
 import { fittingOffers, fixedOf, type Offer, offerKey } from './fixings';
 import { useFixingWords } from './words';
@@ -22,7 +23,7 @@ export function FixedBy() {
   }, [form.unit.settings.fixedBy]);
   const sides = Object.keys(form.unit.settings.sides ?? {}).length;
   const { fixed, free } = fixedOf(view);
-  const [draft, setDraft] = useState<Draft | null>(null);
+  const { draft, isNew, keep: setDraft } = useDraft(form.unit.id);
   const isStale = draft !== null && draft.row > items.length;
   if (isStale) setDraft(null);
 
@@ -65,6 +66,7 @@ export function FixedBy() {
           choose={(offer) => choose(row, offer)}
           take={() => (pending && old === undefined ? setDraft(null) : take(row))}
           stays={pending && old !== undefined ? words.item(old) : undefined}
+          isNew={pending !== null && isNew}
           leave={pending ? () => setDraft(null) : undefined}
         />
       </FormProvider>

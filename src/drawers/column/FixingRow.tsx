@@ -18,6 +18,8 @@ interface Props {
   readonly take: () => void;
   /** What goes on counting until this row has a value. */
   readonly stays: string | undefined;
+  /** Just chosen: its field takes the focus. */
+  readonly isNew: boolean;
   /** Back to what stood here; only of a row without a value. */
   readonly leave: (() => void) | undefined;
 }
@@ -25,7 +27,7 @@ interface Props {
 const AWAY = 'away';
 
 /** One quantity that fixes the column: which, its value with its basis, and of what or where. */
-export function FixingRow({ row, offers, choose, take, stays, leave }: Props) {
+export function FixingRow({ row, offers, choose, take, stays, isNew, leave }: Props) {
   const form = useForm();
   const words = useFixingWords();
   const base = `fixedBy.${row}`;
@@ -57,14 +59,7 @@ export function FixingRow({ row, offers, choose, take, stays, leave }: Props) {
           />
         }
       >
-        <Value
-          key={key}
-          base={base}
-          item={item}
-          word={words.offer(key)}
-          isNew={leave !== undefined}
-          leave={leave}
-        />
+        <Value key={key} base={base} item={item} word={words.offer(key)} isNew={isNew} leave={leave} />
         {stays === undefined ? null : <p className="field-note">Until a value is typed, {stays} stays.</p>}
         {['value', 'product', 'chemical', 'stage', 'at', 'basis'].map((part) => (
           <FieldFindings key={part} path={`${base}.${part}`} />

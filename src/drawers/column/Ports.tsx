@@ -21,8 +21,8 @@ export function Feeds() {
   const rows = usePortRows('feed');
   const stages = useStages();
   return (
-    <fieldset className="group">
-      <legend>Feeds</legend>
+    <fieldset className={rows.length === 0 ? 'group line' : 'group plain'}>
+      <legend className={rows.length === 0 ? undefined : 'unseen'}>Feeds</legend>
       {rows.map((row) => {
         const path = `feeds.${row.port}.stage`;
         return (
@@ -69,14 +69,12 @@ function NoStream({ path, word }: { readonly path: string; readonly word: string
 export function SideDraws() {
   const rows = usePortRows('side');
   return (
-    <fieldset className="group">
-      <legend>Side draws</legend>
+    <fieldset className={rows.length === 0 ? 'group line' : 'group plain'}>
+      <legend className={rows.length === 0 ? undefined : 'unseen'}>Side draws</legend>
       {rows.map((row) => (
         <SideDraw key={row.port} row={row} />
       ))}
-      {rows.length === 0 ? (
-        <p className="muted">None. A stream from the side of the column gets a row here.</p>
-      ) : null}
+      {rows.length === 0 ? <p className="muted">None: pull a stream from the side.</p> : null}
       <FieldFindings path="sides" />
     </fieldset>
   );
@@ -105,7 +103,7 @@ function SideDraw({ row }: { readonly row: PortRow }) {
         <FieldFindings path={`${base}.phase`} />
         <FieldFindings path={base} />
       </SettingRow>
-      <SettingRow label="" path={`${base}.flow`}>
+      <SettingRow label={<span className="unseen">{capital(`flow of ${word}`)}</span>} path={`${base}.flow`}>
         <FlowEditor
           path={`${base}.flow`}
           word={`flow of ${word}`}

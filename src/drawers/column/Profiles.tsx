@@ -10,6 +10,7 @@ import { Disclosure } from '../../parts/Disclosure';
 import { useMeasures } from '../../parts/measures';
 import { useSolvedChemicals } from '../chemicalNames';
 import { Picture } from './Picture';
+import { ProfileReader } from './ProfileReader';
 import { profileSentence } from './profileSentence';
 import { StageTable } from './StageTable';
 
@@ -64,7 +65,9 @@ export function Profiles({ results, outOfDate }: Props) {
         <span className="muted">real trays = stages / overall efficiency (not set)</span>
       </div>
       <div ref={element}>
-        <Picture picture={picture} label={says} stale={outOfDate} />
+        <ProfileReader data={data} picture={picture}>
+          <Picture picture={picture} label={says} stale={outOfDate} />
+        </ProfileReader>
       </div>
       <Disclosure title="Components shown" aside={chosen.map(nameOf).join(', ')}>
         <div className="checks">
