@@ -6,7 +6,7 @@ import { useSession, useSketch, useStores } from '../store/react';
 import { adds } from './choose';
 import { endKeys } from './keys';
 import { endWriting, holdNote } from './noteEdits';
-import { Text } from './Shapes';
+import { Steady, Text } from './Shapes';
 import { type HeldNote, useSheet, useSheetStore } from './sheetStore';
 
 /** Notes or areas of the sheet: areas lie behind units and lines, notes before them. */
@@ -61,9 +61,16 @@ const OneNote = memo(function OneNote({ note }: { readonly note: Note }) {
       style={{ transform: `translate(${box.x}px, ${box.y}px)`, width: box.w, height: box.h }}
     >
       <svg aria-hidden="true" style={{ left: -box.x, top: -box.y }}>
-        {shape.texts.map((text) => (
-          <Text key={text.at[1]} shape={text} />
-        ))}
+        {shape.texts.map((text) => {
+          const words = <Text key={text.at[1]} shape={text} />;
+          return isArea ? (
+            <Steady key={text.at[1]} about={[box.x, box.y]}>
+              {words}
+            </Steady>
+          ) : (
+            words
+          );
+        })}
       </svg>
       {/* An area is taken by its name and its border; what stands in it stays free for the hand. */}
       <button

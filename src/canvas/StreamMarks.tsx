@@ -7,7 +7,7 @@ import { useSession, useStores } from '../store/react';
 import { chooseStream, isPointed } from './choose';
 import { middleOf } from './lines';
 import { pullByPointer } from './pointer';
-import { portsOf } from './ports';
+import { sourcePort } from './ports';
 import { useSheet, useSheetStore } from './sheetStore';
 
 const LINE_HEIGHT = 13;
@@ -71,29 +71,34 @@ const StreamMark = memo(function StreamMark({ id }: { readonly id: StreamId }) {
           </svg>
         ) : null}
       </button>
-      {line.hanging && line.arrow ? <LooseEnd id={id} at={line.arrow.at} from={at} /> : null}
+      {line.arrow && (line.hanging || selected) ? (
+        <StreamEnd id={id} at={line.arrow.at} from={at} loose={line.hanging} />
+      ) : null}
       {label && ((!quietLabel && !label.folded) || shown) ? drawLabel(label, at, opened) : null}
     </div>
   );
 });
 
-/** The arrowhead of a stream that leads nowhere yet: pulled, it looks for a port. */
-function LooseEnd({ id, at, from }: { readonly id: StreamId; readonly at: Point; readonly from: Point }) {
+interface EndProps {
+  readonly id: StreamId;
+  readonly at: Point;
+  readonly from: Point;
+  readonly loose: boolean;
+}
+
+/** The arrowhead of a stream that leads nowhere yet, or of a selected one: pulled, it looks for a port. */
+function StreamEnd({ id, at, from, loose }: EndProps) {
   const stores = useStores();
   const sheet = useSheetStore();
   return (
     <div
       className="loose-end nodrag nopan"
-      title="Pull to a port"
+      data-end={loose ? 'loose' : 'joined'}
+      title={loose ? 'Pull to a port' : 'Pull to another port'}
       style={{ left: at[0] - from[0] + HALF, top: at[1] - from[1] + HALF }}
       onPointerDown={(event) => {
-        const { sketch } = stores.sketch.getState();
-        const end = sketch.streams.find((stream) => stream.id === id)?.from;
-        const unit = end && sketch.units.find((known) => known.id === end[0]);
-        const port =
-          unit &&
-          portsOf(sketch, unit, sheet.getState().units.get(unit.id)).find((known) => known.port === end[1]);
-        if (port) pullByPointer(stores, sheet, port, event);
+        const port = sourcePort(stores.sketch.getState().sketch, sheet.getState().units, id);
+        if (port) pullByPointer(stores, sheet, port, event, loose ? undefined : id);
       }}
     />
   );

@@ -2,7 +2,7 @@ import type { Action } from '../store/action';
 import { toggleStream } from './choose';
 import { editActions } from './editActions';
 import { sheetOf } from './handle';
-import { arrow, connectByKeys, enter, focusedThing, freePorts, leave } from './keys';
+import { arrow, connectByKeys, enter, focusedThing, freePorts, joinedStream, leave } from './keys';
 import { idle, onSheet } from './onSheet';
 import type { Arrow } from './walk';
 
@@ -79,11 +79,11 @@ export const sheetActions: readonly Action[] = [
   },
   {
     id: 'connect',
-    label: 'Start a connection; arrows choose, Enter ends it',
+    label: 'Start a connection, or lead a stream elsewhere; arrows choose, Enter ends it',
     group: 'sheet',
     keys: ['C'],
     listens: onSheet,
-    when: (stores) => idle(stores) && freePorts(stores).length > 0,
+    when: (stores) => idle(stores) && (freePorts(stores).length > 0 || joinedStream(stores) !== undefined),
     run: connectByKeys,
   },
   ...editActions,

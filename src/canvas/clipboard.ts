@@ -1,6 +1,8 @@
-import { overlaps } from '../drawing/boxes';
+import { BoxIndex, boxOfPiece, grown } from '../drawing/boxes';
+import { plainSymbol } from '../drawing/symbols/registry';
 import { GRID } from '../drawing/tokens';
-import type { Box, Point } from '../drawing/types';
+import { boxOnSheet, poseOf } from '../drawing/transform';
+import type { Point } from '../drawing/types';
 import type { UnitId } from '../engine/ids';
 import type { Finding } from '../engine/outcome';
 import type { Sketch } from '../sketch/types';
@@ -23,10 +25,8 @@ import { sheetOf } from './handle';
 
 /** Copies stand this far below the originals at first [px]. */
 const BELOW = 5 * GRID;
-/** Steps that are tried until a copy stands on nothing. */
-const TRIES = 24;
 /** Room around a copied unit for its tag and labels [px]. */
-const CLEAR = 24;
+const CLEAR = 16;
 
 // What was copied last: for a browser that does not hand its clipboard over when a menu asks for it.
 let last = '';
@@ -89,8 +89,7 @@ export function pasteText(stores: Stores, text: string): void {
     ]);
     return;
   }
-  const from = placesIn(fragment);
-  const shift = freeShift(stores, from, startOf(stores, fragment, from));
+  const shift = freeShift(stores, fragment, startOf(stores, fragment, placesIn(fragment)));
   announce(
     stores,
     tryEdit(stores, (sketch) => pasteFragment(sketch, fragment, shift)),
@@ -105,7 +104,7 @@ export function duplicateSelected(stores: Stores): void {
   const [units, notes] = [chosenUnits(stores), chosenNotes(stores)];
   const part = copyPart(stores.sketch.getState().sketch, units, notes);
   if (!part) return;
-  const shift = freeShift(stores, placesIn(part), [BELOW, BELOW]);
+  const shift = freeShift(stores, part, [BELOW, BELOW]);
   announce(
     stores,
     tryEdit(stores, (sketch) => duplicateUnits(sketch, units, shift, notes)),
@@ -166,20 +165,30 @@ function startOf(stores: Stores, fragment: Fragment, places: readonly Point[]): 
   return onGrid([mx - x, my - y]);
 }
 
-/** The first shift, from a given one on and ever further down and to the right, at which nothing stands on a unit. */
-function freeShift(stores: Stores, places: readonly Point[], start: Point): Point {
-  const taken =
-    sheetOf(stores)
-      ?.store.getState()
-      .scene.units.map((unit) => unit.box) ?? [];
+/** Steps to try, the nearest first, rather down and to the right. */
+const STEPS: readonly Point[] = Array.from(
+  { length: 41 * 41 },
+  (_, k): Point => [(k % 41) - 20, Math.floor(k / 41) - 20],
+).sort((a, b) => far(a) - far(b));
+function far([x, y]: Point): number {
+  return Math.hypot(x < 0 ? 1.5 * x : x, y < 0 ? 1.5 * y : y);
+}
+
+/** The shift nearest to a given one at which nothing stands on a unit or a line; the given one when there is none. */
+function freeShift(stores: Stores, part: Fragment, start: Point): Point {
+  const state = sheetOf(stores)?.store.getState();
+  if (!state) return start;
+  const boxes = part.units.map((unit) => {
+    const shape = state.units.get(unit.id);
+    if (shape && shape.at[0] === unit.at[0] && shape.at[1] === unit.at[1]) return grown(shape.box, CLEAR);
+    return grown(boxOnSheet(poseOf(unit), plainSymbol(unit.kind).box), CLEAR);
+  });
+  const taken = new BoxIndex();
+  for (const unit of state.scene.units) taken.add(unit.box);
+  for (const { points } of state.scene.lines)
+    for (let k = 0; k + 1 < points.length; k += 1) taken.add(boxOfPiece(points[k]!, points[k + 1]!, 1));
   const isFree = ([dx, dy]: Point): boolean =>
-    !places.some(([x, y]) => {
-      const box: Box = { x: x + dx - CLEAR, y: y + dy - CLEAR, w: 2 * CLEAR, h: 2 * CLEAR };
-      return taken.some((other) => overlaps(other, box));
-    });
-  for (let k = 0; k < TRIES; k += 1) {
-    const shift: Point = [start[0] + k * BELOW, start[1] + k * BELOW];
-    if (isFree(shift)) return shift;
-  }
-  return start;
+    !boxes.some((box) => taken.hits({ ...box, x: box.x + dx, y: box.y + dy }));
+  const shifts = STEPS.map(([x, y]): Point => [start[0] + x * BELOW, start[1] + y * BELOW]);
+  return shifts.find(isFree) ?? start;
 }

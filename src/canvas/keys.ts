@@ -4,7 +4,7 @@ import { bendArrow, endBend } from './bending';
 import { type SheetHandle, sheetOf } from './handle';
 import { middleOf } from './lines';
 import { endMove, nudge } from './moving';
-import { isFree, portsOf, type StandingPort } from './ports';
+import { isFree, portsOf, type StandingPort, sourcePort } from './ports';
 import { beginPull, cancelPull, endPull } from './pull';
 import { AT_REST, type SheetStore, type Target } from './sheetStore';
 import { type Arrow, chooseByArrow, type Places, stepFrom, type Thing } from './walk';
@@ -72,6 +72,13 @@ export function connectByKeys(stores: Stores): void {
   if (!handle) return;
   const { sketch } = stores.sketch.getState();
   const free = freePorts(stores);
+  const joined = joinedStream(stores);
+  const source = joined && sourcePort(sketch, handle.store.getState().units, joined);
+  if (source) {
+    beginPull(stores, handle.store, source, true, joined);
+    say(stores, 'Leading the stream elsewhere. Arrows choose a port, Enter connects, Esc leaves it.');
+    return;
+  }
   if (free.length === 0) {
     say(stores, 'No port is free here.');
     return;
@@ -85,6 +92,13 @@ export function connectByKeys(stores: Stores): void {
     stores,
     `Connect from ${portName(sketch, from)}: ${fitting.length === 1 ? 'one port fits' : `${fitting.length} ports fit`}. Arrows choose, Enter connects, Esc leaves it.`,
   );
+}
+
+/** The one selected stream, when it has both ends: its target end can be led elsewhere. */
+export function joinedStream({ session, sketch }: Stores): StreamId | undefined {
+  const { units, streams } = session.getState();
+  const known = sketch.getState().sketch.streams.find(({ id }) => id === streams[0]);
+  return units.length === 0 && streams.length === 1 && known?.from && known.to ? known.id : undefined;
 }
 
 /** Free ports of what is selected: outlets first. */

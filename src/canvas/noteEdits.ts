@@ -34,22 +34,39 @@ export function putNote(stores: Stores, kind: NonNullable<Note['kind']>): void {
       : { x: mx - AREA[0] / 2, y: my - AREA[1] / 2, w: AREA[0], h: AREA[1] };
   const at: Point = kind === 'area' ? [onGrid(box.x), onGrid(box.y)] : [onGrid(mx), onGrid(my)];
   const size = kind === 'area' ? ([onGrid(box.w), onGrid(box.h)] as const) : undefined;
-  const made = tryEdit(stores, (sketch) =>
-    addNote(sketch, kind === 'area' ? 'Battery limit' : 'Note', { kind, at, ...(size ? { size } : {}) }),
-  );
-  const id = made?.noteIds?.[0];
-  if (id === undefined) return;
+  const { sketch } = stores.sketch.getState();
+  const made = addNote(sketch, kind === 'area' ? 'Battery limit' : 'Note', {
+    kind,
+    at,
+    ...(size ? { size } : {}),
+  });
+  const id = made.ok ? made.noteIds?.[0] : undefined;
+  if (!made.ok || id === undefined) return;
+  // Putting it there and typing its text are one step: it ends with the typing.
+  stores.sketch.begin(made.label);
+  stores.sketch.change(() => made.sketch);
   stores.session.select([]);
   stores.session.setState({ notes: [id], spoken: kind === 'area' ? 'Area added' : 'Note added' });
   handle.store.setState({ writing: id });
 }
 
-/** What was typed becomes the note's text; a note that says nothing stays as it was. */
+/** What was typed becomes the note's text; a note that says nothing stays as it was. Null: Esc, a new note goes again. */
 export function endWriting(stores: Stores, sheet: SheetStore, id: string, text: string | null): void {
   if (sheet.getState().writing !== id) return;
   sheet.setState({ writing: null });
-  if (text === null || text.trim() === '') return;
-  tryEdit(stores, (sketch) => changeNote(sketch, id, { text: text.trim() }));
+  const { gesture, sketch } = stores.sketch.getState();
+  const words = text?.trim() ?? '';
+  if (gesture) {
+    const notes = sketch.notes.map((note) => (note.id === id && words ? { ...note, text: words } : note));
+    if (text === null) stores.sketch.cancel();
+    else {
+      stores.sketch.change((before) => ({ ...before, notes }));
+      stores.sketch.commit();
+    }
+    return;
+  }
+  if (words === '') return;
+  tryEdit(stores, (now) => changeNote(now, id, { text: words }));
 }
 
 /** A note or area under the pointer: it moves, or its lower right corner does; on the grid, one edit. */

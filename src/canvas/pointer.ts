@@ -1,3 +1,4 @@
+import type { StreamId } from '../engine/ids';
 import type { Stores } from '../store/react';
 import { sheetOf } from './handle';
 import { beginPull, cancelPull, endPull, movePull } from './pull';
@@ -35,11 +36,12 @@ export function pullByPointer(
   sheet: SheetStore,
   from: Target,
   event: React.PointerEvent,
+  moving?: StreamId,
 ): void {
   if (event.button !== 0) return;
   event.preventDefault();
   event.stopPropagation();
-  beginPull(stores, sheet, from, false);
+  beginPull(stores, sheet, from, false, moving);
   const to = ({ clientX, clientY }: PointerEvent): void => {
     const handle = sheetOf(stores);
     const at = handle?.toSheet(clientX, clientY);

@@ -1,6 +1,6 @@
 import { portOfShape } from '../drawing/transform';
 import type { UnitShape } from '../drawing/types';
-import type { Port, UnitId } from '../engine/ids';
+import type { Port, StreamId, UnitId } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { PortSpec } from '../engine/units/types';
 import type { Sketch, SketchStream, SketchUnit } from '../sketch/types';
@@ -43,6 +43,17 @@ export function portsOf(
       return [{ unit: unit.id, port, dir: spec.dir, place, stream, numbered: spec.numbered !== undefined }];
     }),
   );
+}
+
+/** The port that a stream comes from, as it stands on the sheet. */
+export function sourcePort(
+  sketch: Sketch,
+  shapes: SheetState['units'],
+  id: StreamId,
+): StandingPort | undefined {
+  const end = sketch.streams.find((stream) => stream.id === id)?.from;
+  const unit = end && sketch.units.find((known) => known.id === end[0]);
+  return unit && portsOf(sketch, unit, shapes.get(unit.id)).find((known) => known.port === end[1]);
 }
 
 /** Whether a stream can be pulled from a port: nothing is there yet, or a stream whose other end is loose. */

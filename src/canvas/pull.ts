@@ -1,7 +1,8 @@
 import { plainSymbol } from '../drawing/symbols/registry';
 import type { Point } from '../drawing/types';
+import type { StreamId } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
-import { addUnit, connect, nextPortName } from '../store/commands';
+import { addUnit, connect, disconnect, nextPortName, reconnect } from '../store/commands';
 import type { Stores } from '../store/react';
 import { together, tryEdit } from './edit';
 import { targetsFor } from './ports';
@@ -13,11 +14,18 @@ const CATCH = 14;
 const SHORTEST = 20;
 
 /** Takes hold of a port: every other port shows whether the stream can end there. */
-export function beginPull(stores: Stores, sheet: SheetStore, from: Target, byKeys: boolean): void {
+export function beginPull(
+  stores: Stores,
+  sheet: SheetStore,
+  from: Target,
+  byKeys: boolean,
+  moving?: StreamId,
+): void {
   const { sketch } = stores.sketch.getState();
-  const targets = targetsFor(sketch, from, sheet.getState().units);
+  const loose = moving === undefined ? undefined : disconnect(sketch, moving);
+  const targets = targetsFor(loose?.ok ? loose.sketch : sketch, from, sheet.getState().units);
   sheet.setState({
-    pulling: { from, targets, at: from.place.at, over: null, byKeys },
+    pulling: { from, targets, at: from.place.at, over: null, byKeys, ...(moving ? { moving } : {}) },
     offer: null,
     hovered: null,
   });
@@ -51,9 +59,15 @@ export function endPull(stores: Stores, sheet: SheetStore, zoom: number): void {
   const { pulling } = sheet.getState();
   if (!pulling) return;
   cancelPull(stores, sheet);
-  const { from, over, at, byKeys } = pulling;
+  const { from, over, at, byKeys, moving } = pulling;
   if (over?.reason) {
     stores.session.say('caution', over.reason);
+    return;
+  }
+  if (moving) {
+    if (over) tryEdit(stores, (sketch) => reconnect(sketch, moving, [over.unit, over.port]));
+    else if (!byKeys) tryEdit(stores, (sketch) => disconnect(sketch, moving));
+    stores.session.select([], [moving]);
     return;
   }
   if (over) {

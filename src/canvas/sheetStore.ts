@@ -25,6 +25,8 @@ export interface Pulling {
   readonly at: Point;
   readonly over: Target | null;
   readonly byKeys: boolean;
+  /** A stream whose target end is led elsewhere. */
+  readonly moving?: StreamId;
 }
 
 /** What a stream that ends on empty sheet can lead to. */

@@ -152,3 +152,19 @@ test('a free place covers nothing and is near the wished one', () => {
   expect(Math.hypot(at[0] - 100, at[1] - 100)).toBeLessThan(200);
   expect(freePlace([], symbol, [100, 100])).toEqual([104, 104]);
 });
+
+test('the end of a stream is pulled to another inlet and keeps its number, or is let go and hangs', async () => {
+  const { stores, sheet, now, port, labels } = sheetOn();
+  beginPull(stores, sheet, port('u3', 'vapour'), false, streamId('s3'));
+  // Its own place is free for it again.
+  const fitting = sheet.getState().pulling!.targets.filter((target) => !target.reason);
+  expect(fitting.map((target) => `${target.unit}.${target.port}`)).toEqual(['u4.in', 'u5.in']);
+  movePull(sheet, port('u5', 'in').place.at, 1);
+  endPull(stores, sheet, 1);
+  expect(now().streams.find((s) => s.id === 's3')!.to).toEqual(['u5', 'in']);
+  beginPull(stores, sheet, port('u3', 'vapour'), false, streamId('s3'));
+  movePull(sheet, [20, 20], 1);
+  endPull(stores, sheet, 1);
+  expect(now().streams.find((s) => s.id === 's3')!.to).toBeUndefined();
+  expect(labels()).toEqual(['lead stream 3 to E-101', 'disconnect stream 3']);
+});

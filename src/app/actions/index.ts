@@ -1,5 +1,6 @@
 import { sheetActions } from '../../canvas/actions';
 import type { Action } from '../../store/action';
+import { arrangeActions } from './arrange';
 import { documentActions } from './documents';
 import { fileActions } from './files';
 import { viewActions } from './view';
@@ -12,4 +13,5 @@ export const actions: readonly Action[] = [
   ...wholeActions,
   ...viewActions,
   ...sheetActions,
+  ...arrangeActions,
 ];
