@@ -210,6 +210,33 @@ describe('a loop that cannot be solved', () => {
     expect(unitResult(batch, 'v')).toMatchObject({ state: 'waiting', reasons: [{ at: { stream: 'd' } }] });
   });
 
+  test.each([
+    ['drops', { drop: 0.3e5 }],
+    ['ratios', { ratio: 0.9 }],
+  ])('because its pressure falls by %s on every way round says so, and by how much', (_, p) => {
+    const units = [
+      feed('f', 'in', 10, 1, 9),
+      unit('j join in1=in in2=back > out=a', { p: { drop: 0 } }),
+      unit('v valve in=a > out=b', { p }),
+      unit('x divide in=b > out1=back out2=out', { shares: { out2: share(0.2) } }),
+    ];
+    const batch = fresh(problemOf(basis, units), basis);
+    const found = batch.findings.filter((f) => f.code === 'network/pressure-falls');
+    expect(found).toHaveLength(1);
+    const of = (name: string) => found[0]!.evidence.find((e) => e.name === name)!.value;
+    // Derived: one valve stands in the loop.
+    const lost = 'drop' in p ? p.drop : (1 - p.ratio!) * of('pressure');
+    expect(of('fall') / lost).toBeCloseTo(1, 6);
+    expect(found[0]!.evidence.flatMap((e) => e.text ?? []).sort()).toEqual(['j', 'v', 'x']);
+    for (const id of ['j', 'v', 'x']) expect(unitResult(batch, id)!.state).toBe('no-solution');
+    // A unit that holds a pressure ends the fall: the same loop with a pump in it is solved.
+    const pumped = units.map((u) =>
+      u.id === 'x' ? unit('x divide in=b > out1=r out2=out', { shares: { out2: share(0.2) } }) : u,
+    );
+    pumped.push(unit('k compressor in=r > out=back', { p: { P: 2e5 }, efficiency: { isentropic: 0.7 } }));
+    expect(fresh(problemOf(basis, pumped), basis).closure!.complete).toBe(true);
+  });
+
   test('because a unit answers every time with something else gives up, and says how far it was', () => {
     let n = 0;
     const odd = {

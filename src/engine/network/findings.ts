@@ -3,6 +3,7 @@ export const NETWORK_FINDINGS = [
   'network/nothing-enters',
   'network/no-way-out',
   'network/loop-unsettled',
+  'network/pressure-falls',
   'network/unknown-kind',
   'network/inlet-missing',
   'network/source-missing',

@@ -17,6 +17,11 @@ export const NETWORK_SENTENCES: Readonly<Record<string, Sentence>> = {
     says: 'After {passes} passes stream {stream} still comes back changed by {residual%} of what was assumed; the loop is {unit...}.',
     next: 'Open the loop at stream {stream} with a product and a feed, see what comes back, and change what it reacts to most.',
   },
+  'network/pressure-falls': {
+    title: 'The pressure falls on every way round',
+    says: 'The loop of {unit...} comes back at stream {stream} {fall} lower than it left there at {pressure}, and so on every way round.',
+    next: 'Put a pump, a compressor or a fan into the loop that brings the pressure up again; where streams join, the lowest of their pressures counts.',
+  },
   'network/unknown-kind': {
     title: 'Not available',
     says: 'This kind of unit is not available in this version.',

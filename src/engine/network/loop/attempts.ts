@@ -37,13 +37,15 @@ export function* attemptAll(loop: Loop, warm: LoopWarm | undefined): Generator<S
   const start = (stream: StreamState): Torn => ({ streams: loop.plan.tears.map(() => stream), seen });
   const cold = { warm: new Map(), passes: COLD_PASSES };
   const ending = yield* iterate(loop, { ...cold, torn: start(scaledStream(mix, 0)) });
-  if (ending.is === 'solved' || gathers(ending)) return ending;
+  if (ending.is === 'solved' || isHopeless(ending)) return ending;
   const second = yield* iterate(loop, { ...cold, torn: start(mix) });
-  return second.is === 'solved' || gathers(second) ? second : ending;
+  return second.is === 'solved' || isHopeless(second) ? second : ending;
 }
 
-const gathers = (ending: Ending): boolean =>
-  ending.is === 'no-solution' && ending.findings[0].code === 'network/no-way-out';
+/** The loop as a whole cannot be, wherever it starts. */
+const HOPELESS: ReadonlySet<string> = new Set(['network/no-way-out', 'network/pressure-falls']);
+const isHopeless = (ending: Ending): boolean =>
+  ending.is === 'no-solution' && HOPELESS.has(ending.findings[0].code);
 
 /** All that enters the loop's units, together; undefined when no stream leads into it. */
 function entering({ run, members, entering: known }: Loop): StreamState | undefined {

@@ -23,6 +23,29 @@ export function unsettled({ plan, members }: Loop, passes: number, change: Chang
   return { is: 'no-solution', findings: [finding] };
 }
 
+/** From which pressure a tear came back how much lower. */
+export interface Fall {
+  /** By place in the plan. */
+  readonly tear: number;
+  readonly from_Pa: number;
+  readonly by_Pa: number;
+}
+
+/** The pressure falls on every way round: nothing in the loop brings it up again, and nothing holds it. */
+export function pressureFalls({ plan, members }: Loop, { tear, from_Pa, by_Pa }: Fall): Ending {
+  const finding: Finding = {
+    code: 'network/pressure-falls',
+    weight: 'beyond-limit',
+    at: { stream: plan.tears[tear]! },
+    evidence: [
+      { name: 'fall', value: by_Pa, dim: 'pressureDifference' },
+      { name: 'pressure', value: from_Pa, dim: 'pressure' },
+      ...named(members.map((m) => m.unit)),
+    ],
+  };
+  return { is: 'no-solution', findings: [finding] };
+}
+
 /** Nothing flows in the loop, or nothing comes in that could. */
 export function nothingEnters({ plan, members }: Pick<Loop, 'plan' | 'members'>): Ending {
   const stream = plan.tears[0] ?? plan.scalars[0]!.stream;
