@@ -1,6 +1,6 @@
 import { memo, useEffect } from 'react';
 import { useShallow } from 'zustand/react/shallow';
-import { labelsSentence } from '../drawing/labelText';
+import { labelsSentence, omittedSentence } from '../drawing/labelText';
 import { useMeasures } from '../parts/measures';
 import { useCompiled, useResults, useSketch, useStores } from '../store/react';
 import { kindWord, modelWord } from '../wording';
@@ -13,12 +13,16 @@ export const TitleStrip = memo(function TitleStrip() {
   const model = useSketch((state) => state.sketch.model.kind);
   const labels = useSketch((state) => state.sketch.display.labels);
   const measures = useMeasures();
+  const omitted = useSheet((state) => omittedSentence(state.scene.omitted));
   return (
     <footer className="title-strip">
       <span className="strip-title">{title.title?.trim() || 'Untitled sketch'}</span>
       <span>{title.revision ? `Rev ${title.revision}, draft` : 'No revision'}</span>
       <span>{modelWord(model)}</span>
-      <span className="strip-labels">{labelsSentence(labels, measures)}</span>
+      <span className="strip-labels">
+        {labelsSentence(labels, measures)}
+        {omitted ? `; ${omitted}` : ''}
+      </span>
       <span className="strip-gap" />
       <WholeState />
     </footer>

@@ -38,6 +38,19 @@ function places(length: number, last: boolean, scale: number): number[] {
   return out;
 }
 
+/** Whether a diamond at a point of its line is clear of symbols, other lines, crossings and other diamonds. */
+export const diamondMayStand = (
+  at: Point,
+  line: number,
+  taken: BoxIndex,
+  crossings: readonly Point[],
+  scale: number,
+): boolean => {
+  const apart = FROM_CROSSING + DIAMOND * (scale - 1);
+  if (crossings.some(([x, y]) => Math.abs(x - at[0]) + Math.abs(y - at[1]) < apart)) return false;
+  return !taken.hits(boxAround(at, DIAMOND * scale), 2, line);
+};
+
 /**
  * Places for a line's diamond: the longest straight piece first, its middle first, clear of symbols, other lines,
  * crossings and other diamonds. None when every piece is too short or taken.
@@ -61,9 +74,7 @@ export function* diamondPlaces(
     const [ux, uy] = [Math.sign(x2 - x1), Math.sign(y2 - y1)];
     for (const along of places(length, piece + 2 === points.length, scale)) {
       const at: Point = [Math.round(x1 + ux * along), Math.round(y1 + uy * along)];
-      const apart = FROM_CROSSING + DIAMOND * (scale - 1);
-      if (crossings.some(([x, y]) => Math.abs(x - at[0]) + Math.abs(y - at[1]) < apart)) continue;
-      if (taken.hits(boxAround(at, DIAMOND * scale), 2, line)) continue;
+      if (!diamondMayStand(at, line, taken, crossings, scale)) continue;
       if (ownPieceNear(points, piece, at, DIAMOND * scale)) continue;
       yield { at, piece };
     }

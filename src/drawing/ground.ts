@@ -22,6 +22,7 @@ export interface Ground {
   /** Streams of feeds and products, whose labels come first. */
   readonly outer: ReadonlySet<StreamId>;
   readonly textScale: number;
+  readonly underHand: boolean;
   readonly ribbons: ReadonlyMap<StreamId, number> | undefined;
 }
 
@@ -67,7 +68,7 @@ export function groundOf(sketch: Sketch, input: SceneInput, before: Made | undef
     const rows = input.remarks?.get(unit.id) ?? [];
     return [rows.length, remarkRoom(rows)] as const;
   });
-  const { textScale = 1, ribbons } = input;
+  const { textScale = 1, ribbons, underHand = false } = input;
   return {
     standing,
     streams: sketch.streams,
@@ -76,6 +77,7 @@ export function groundOf(sketch: Sketch, input: SceneInput, before: Made | undef
     remarks,
     outer: outerStreams(sketch),
     textScale,
+    underHand,
     ribbons,
   };
 }
@@ -94,7 +96,7 @@ export function outerStreams(sketch: Sketch): ReadonlySet<StreamId> {
 /** Whether everything stands where it stood, whatever else changed in the sketch. */
 export function sameGround(a: Ground, b: Ground): boolean {
   if (a.standing.length !== b.standing.length) return false;
-  if (a.textScale !== b.textScale) return false;
+  if (a.textScale !== b.textScale || (b.underHand && !a.underHand)) return false;
   if (!sameValue(a.rooms, b.rooms) || !sameValue(a.remarks, b.remarks)) return false;
   if (!sameMap(a.sizes, b.sizes) || !sameMap(a.ribbons, b.ribbons)) return false;
   if (a.standing === b.standing && a.streams === b.streams) return true;

@@ -3,7 +3,7 @@ import { CATALOGUE } from '../engine/units/catalogue';
 import type { KindCatalogue } from '../engine/units/types';
 import { type Dimension, displayUnit, formatNumber, type Measures, show } from '../quantity';
 import type { LabelKey, SketchUnit } from '../sketch/types';
-import type { LabelRow, LinkTexts } from './types';
+import type { LabelRow, LinkTexts, Omitted } from './types';
 
 export type SolvedStream = Extract<StreamResult, { state: 'solved' }>;
 
@@ -103,4 +103,19 @@ export function labelsSentence(keys: readonly LabelKey[], measures: Measures): s
     return `${spec.word} ${displayUnit(spec.dim, measures).label || (spec.unit ?? '')}`.trim();
   });
   return `Labels: ${words.join(', ')}`;
+}
+
+const OMITTED_WORDS = { label: 'label', tag: 'tag', remark: 'note', duty: 'duty' } as const;
+const PLURALS = { label: 'labels', tag: 'tags', remark: 'notes', duty: 'duties' } as const;
+
+/** "2 labels and 1 duty have no room here", what the sheet leaves off; empty when all of it has room. */
+export function omittedSentence(omitted: readonly Omitted[]): string {
+  if (omitted.length === 0) return '';
+  const words = (['label', 'tag', 'remark', 'duty'] as const).flatMap((what) => {
+    const count = omitted.filter((one) => one.what === what).length;
+    return count === 0 ? [] : [`${count} ${count === 1 ? OMITTED_WORDS[what] : PLURALS[what]}`];
+  });
+  const last = words.pop();
+  const list = words.length === 0 ? last : `${words.join(', ')} and ${last}`;
+  return `${list} ${omitted.length === 1 ? 'has' : 'have'} no room here`;
 }

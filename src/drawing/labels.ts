@@ -26,6 +26,11 @@ export interface LabelTask {
   readonly first: boolean;
   /** Where else its diamond may stand, the best first. */
   readonly elsewhere: () => Iterable<DiamondPlace>;
+  /**
+   * Where it stood on a sheet that is being changed by hand: it stays there while that keeps the rules. One that had no room
+   * is not looked for again before the hand lets go.
+   */
+  readonly before?: PlacedLabel | 'no room';
 }
 
 export interface PlacedLabel {
@@ -35,8 +40,10 @@ export interface PlacedLabel {
 }
 
 interface Standing extends PlacedLabel {
-  /** The room where no diamond of another stream may come to stand. */
-  readonly guard: Box;
+  /** Small boxes along its leader line. */
+  readonly dots: readonly Box[];
+  /** What it put into the index of labels. */
+  readonly entries: readonly Entry[];
 }
 
 /** What labels must heed, and what they take. */
@@ -109,6 +116,10 @@ export function placeLabels(
 
 class Placing {
   private readonly placed: (Standing | undefined)[];
+  /** Labels and their leader lines, by the index of their stream. */
+  private readonly index = new BoxIndex();
+  /** Where diamonds must not come, by the index of the label that says so. */
+  private readonly guards = new BoxIndex();
   private readonly anchors: Anchor[];
   private readonly tasks: readonly (LabelTask | undefined)[];
   private readonly ground: LabelGround;
@@ -121,9 +132,12 @@ class Placing {
   }
 
   run(): readonly (PlacedLabel | undefined)[] {
-    const ease = this.tasks.map((task, k) => (task ? this.easeOf(task, k) : 0));
-    const order = this.tasks.flatMap((task, k) => (task ? [k] : []));
+    let order = this.tasks.flatMap((task, k) => (task ? [k] : []));
     const rank = (k: number): number => (this.tasks[k]!.first ? 0 : 1);
+    for (const k of order) this.stay(k);
+    order = order.filter((k) => !this.placed[k] && this.tasks[k]!.before !== 'no room');
+    const ease = this.tasks.map(() => 0);
+    for (const k of order) ease[k] = this.easeOf(this.tasks[k]!, k);
     order.sort((a, b) => rank(a) - rank(b) || ease[a]! - ease[b]! || a - b);
     for (const k of order) this.place(k);
     for (const k of order) if (!this.placed[k]) this.place(k);
@@ -154,21 +168,47 @@ class Placing {
     else this.swap(k, wish);
   }
 
+  /** What stood here before the hand touched something else stays, if it still may. */
+  private stay(k: number): void {
+    const { before, wish } = this.tasks[k]!;
+    if (!before || before === 'no room') return;
+    const { box, anchor, leader } = before;
+    if (anchor.diamond !== wish.anchor.diamond) return;
+    if (anchor.diamond && (anchor.at[0] !== wish.anchor.at[0] || anchor.at[1] !== wish.anchor.at[1])) return;
+    if (!this.ground.allows(box, k, wish, anchor, leader !== undefined)) return;
+    if (leader && !isLeaderFree(leader, anchor.at, this.ground.taken, k, wish.scale)) return;
+    if (this.fits(box, k, CLEAR * wish.scale)) this.put(k, box, leader, anchor);
+  }
+
   private put(k: number, box: Box, leader?: readonly [Point, Point], anchor = this.anchors[k]!): void {
     const { wish } = this.tasks[k]!;
+    this.takeOff(k);
     this.anchors[k] = anchor;
     const guard = guardOf(box, wish, anchor, leader !== undefined);
-    this.placed[k] = { box, anchor, guard, ...(leader ? { leader } : {}) };
+    const dots = leader ? leaderBoxes(leader) : [];
+    const entries = [box, ...dots].map((one) => this.index.add(one, k));
+    entries.push(this.guards.add(guard, k));
+    this.placed[k] = { box, anchor, dots, entries, ...(leader ? { leader } : {}) };
+  }
+
+  private takeOff(k: number): void {
+    const standing = this.placed[k];
+    if (!standing) return;
+    standing.entries.forEach((entry, n) => {
+      if (n < standing.entries.length - 1) this.index.remove(entry);
+      else this.guards.remove(entry);
+    });
+    this.placed[k] = undefined;
   }
 
   /** Labels that a box would come too close to, and leader lines that it would cover. */
   private inTheWay(box: Box, except: number, clear: number): readonly number[] {
+    if (!this.index.hits(box, clear, except)) return [];
     const room = grown(box, clear);
     const out: number[] = [];
     this.placed.forEach((other, j) => {
       if (j === except || !other) return;
-      if (overlaps(room, other.box)) out.push(j);
-      else if (other.leader && leaderBoxes(other.leader).some((dot) => overlaps(box, dot))) out.push(j);
+      if (overlaps(room, other.box) || other.dots.some((dot) => overlaps(box, dot))) out.push(j);
     });
     return out;
   }
@@ -204,8 +244,7 @@ class Placing {
     let tried = 0;
     for (const place of elsewhere()) {
       if (++tried > OTHER_DIAMONDS) break;
-      if (this.placed.some((other, j) => j !== k && other && distanceTo(other.guard, place.at) === 0))
-        continue;
+      if (this.guards.hits(boxAround(place.at, 0.01), 0, k)) continue;
       const stone = boxAround(place.at, DIAMOND * scale);
       if (this.ground.taken.hits(stone, 2, k) || !this.fits(stone, k, CLEAR * scale)) continue;
       const anchor = { ...place, diamond: true };
@@ -227,24 +266,19 @@ class Placing {
       if (!this.ground.allows(box, k, wish, wish.anchor, false)) continue;
       const [j, ...more] = this.inTheWay(box, k, CLEAR * wish.scale);
       if (j === undefined || more.length > 0) continue;
-      const before = this.placed[j];
+      const before = this.placed[j]!;
+      this.takeOff(j);
       this.put(k, box);
-      this.placed[j] = undefined;
       const other = this.tasks[j]!.wish;
       const anchor = this.anchors[j]!;
       const moved = { ...other, anchor };
       const next = this.firstAt(atAnchor(moved), j, anchor) ?? this.firstAt(alongLine(moved), j, anchor);
-      if (next) {
-        this.put(j, next);
-        return true;
-      }
-      const led = this.firstLed(j, moved);
-      if (led) {
-        this.put(j, led.box, led.leader);
-        return true;
-      }
-      this.placed[j] = before;
-      this.placed[k] = undefined;
+      const led = next ? undefined : this.firstLed(j, moved);
+      if (next) this.put(j, next);
+      else if (led) this.put(j, led.box, led.leader);
+      if (next || led) return true;
+      this.takeOff(k);
+      this.put(j, before.box, before.leader, before.anchor);
     }
     return false;
   }

@@ -23,6 +23,9 @@ export function piecesOf(lines: readonly (readonly Point[])[]): Piece[] {
   return pieces;
 }
 
+const piecesOfLine = (points: readonly Point[], line: number): readonly Piece[] =>
+  Array.from({ length: points.length - 1 }, (_, k) => pieceAt(points, line, k));
+
 export function pieceAt(points: readonly Point[], line: number, k: number): Piece {
   const [x1, y1] = points[k]!;
   const [x2, y2] = points[k + 1]!;
@@ -45,13 +48,21 @@ const cross = (a: Piece, b: Piece): boolean =>
 /** Lines that another line runs along, each with the lines it is too close to. */
 export function tangles(lines: readonly (readonly Point[])[]): ReadonlyMap<number, ReadonlySet<number>> {
   const out = new Map<number, Set<number>>();
+  const note = (line: number, other: number): void => {
+    const near = out.get(line);
+    if (near) near.add(other);
+    else out.set(line, new Set([other]));
+  };
   const pieces = piecesOf(lines);
-  for (const a of pieces) {
-    for (const b of pieces) {
-      if (!tooClose(a, b)) continue;
-      const near = out.get(a.line) ?? new Set<number>();
-      near.add(b.line);
-      out.set(a.line, near);
+  for (const across of [true, false]) {
+    const side = pieces.filter((piece) => piece.across === across).sort((a, b) => a.at - b.at);
+    for (let n = 0; n < side.length; n++) {
+      const a = side[n]!;
+      for (let m = n + 1; m < side.length && side[m]!.at - a.at < APART; m++) {
+        if (!tooClose(a, side[m]!)) continue;
+        note(a.line, side[m]!.line);
+        note(side[m]!.line, a.line);
+      }
     }
   }
   return out;
@@ -124,14 +135,16 @@ export function drawApart(
   fixed: readonly boolean[],
 ): readonly (readonly Point[])[] {
   const out = [...lines];
+  const pieces = out.map((points, line) => piecesOfLine(points, line));
   for (let round = 0; round < 3; round++) {
     let changed = false;
     for (let line = 0; line < out.length; line++) {
       if (fixed[line]) continue;
       for (let k = 1; k + 2 < out[line]!.length; k++) {
-        const better = shifted(out, line, k, obstacles);
+        const better = shifted(out, pieces, line, k, obstacles);
         if (!better) continue;
         out[line] = better;
+        pieces[line] = piecesOfLine(better, line);
         changed = true;
       }
     }
@@ -142,14 +155,15 @@ export function drawApart(
 
 function shifted(
   lines: readonly (readonly Point[])[],
+  pieces: readonly (readonly Piece[])[],
   line: number,
   k: number,
   obstacles: readonly Box[],
 ): Point[] | undefined {
   const points = lines[line]!;
-  const piece = pieceAt(points, line, k);
-  const others = piecesOf(lines).filter((p) => p.line !== line);
-  if (!others.some((other) => tooClose(piece, other))) return undefined;
+  const piece = pieces[line]![k]!;
+  if (!pieces.some((other) => other.some((p) => tooClose(piece, p)))) return undefined;
+  const others = pieces.flat().filter((p) => p.line !== line);
   let least = trouble(points, line, others);
   let best: Point[] | undefined;
   for (const by of OFFSETS) {

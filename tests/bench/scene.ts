@@ -1,4 +1,4 @@
-/** Time of drawing a sheet of sixty units anew: from nothing, for new digits, for a state, for a unit under the hand. */
+/** Time of drawing sheets of 60 and 200 units anew: from nothing, for new digits, for a state, for a unit under the hand. */
 import { cpus, loadavg } from 'node:os';
 import { buildScene } from '../../src/drawing/scene';
 import type { LabelRow, Point, Scene, SceneInput } from '../../src/drawing/types';
@@ -6,16 +6,14 @@ import type { UnitId } from '../../src/engine/ids';
 import type { Sketch } from '../../src/sketch/types';
 import { inputOf, sheetOf } from '../drawing/sheets';
 
-const TRAINS = 6;
-
-/** Six trains below one another, each with a recycle; the liquid of every first drum leads on to the next train. */
-export function sixtyUnits(): Sketch {
+/** Trains of ten units below one another, each with a recycle; the liquid of every first drum leads on to the next train. */
+export function manyTrains(trains: number): Sketch {
   const units: Parameters<typeof sheetOf>[0][number][] = [];
   const streams: [string, string, string][] = [];
   const join = (from: string, to: string): void => {
     streams.push([`${streams.length + 1}`, from, to]);
   };
-  for (let t = 1; t <= TRAINS; t++) {
+  for (let t = 1; t <= trains; t++) {
     const y = 300 * t;
     units.push(
       ['feed', `FEED-${t}`, 80, y, { name: `Well ${t}` }],
@@ -39,7 +37,7 @@ export function sixtyUnits(): Sketch {
     join(`V-${t}02.liquid`, `D-${t}.in`);
     join(`D-${t}.out1`, `PROD-${t}02.in`);
     join(`D-${t}.out2`, `J-${t}.in2`);
-    join(`V-${t}01.liquid`, t < TRAINS ? `J-${t + 1}.in3` : '');
+    join(`V-${t}01.liquid`, t < trains ? `J-${t + 1}.in3` : '');
   }
   return sheetOf(units, streams);
 }
@@ -63,8 +61,10 @@ export interface SceneTiming {
 }
 
 /** @param now clock in milliseconds */
-export function timeScene(now: () => number, turns = 60): readonly SceneTiming[] {
-  const sketch = sixtyUnits();
+export const timeScene = (now: () => number, turns = 60): readonly SceneTiming[] =>
+  [6, 20].flatMap((trains) => timeSheet(manyTrains(trains), now, turns));
+
+function timeSheet(sketch: Sketch, now: () => number, turns: number): readonly SceneTiming[] {
   const input = inputOf(sketch);
   const sizes = { units: sketch.units.length, streams: sketch.streams.length };
 
@@ -100,10 +100,13 @@ export function timeScene(now: () => number, turns = 60): readonly SceneTiming[]
   const moved = (tag: string, k: number): SceneInput => {
     const [x, y] = sketch.units.find((u) => u.tag === tag)!.at;
     const [dx, dy] = [8 * ((k % 24) - 12), 8 * ((k % 14) - 7)];
-    return { ...input, moved: new Map<UnitId, Point>([[tag as UnitId, [x + dx, y + dy]]]) };
+    return { ...input, underHand: true, moved: new Map<UnitId, Point>([[tag as UnitId, [x + dx, y + dy]]]) };
   };
   return [
     timed('from nothing', () => buildScene(sketch, input)),
+    timed('another zoom', (k, before) =>
+      buildScene(sketch, { ...input, textScale: k % 2 ? 1.375 : 1.5 }, before),
+    ),
     timed('new digits in all labels', (k, before) => buildScene(sketch, withRows(99, k), before)),
     timed('new digits in five labels', (k, before) => buildScene(sketch, withRows(5, k), before)),
     timed('a setting and new digits', (k, before) =>
@@ -124,6 +127,9 @@ export function timeScene(now: () => number, turns = 60): readonly SceneTiming[]
           : input,
         before,
       ),
+    ),
+    timed('a drum moved, all placed anew', (k, before) =>
+      buildScene(sketch, { ...moved('V-301', k), underHand: false }, before),
     ),
     timed('a drum under the hand', (k, before) => buildScene(sketch, moved('V-301', k), before)),
     timed('a valve under the hand', (k, before) => buildScene(sketch, moved('PV-301', k), before)),

@@ -1,12 +1,13 @@
 import { describe, expect, test } from 'vitest';
 import { frameOf, pageOf, zoneOf } from '../../src/drawing/frame';
+import { omittedSentence } from '../../src/drawing/labelText';
 import { limitMark, stateMark } from '../../src/drawing/marks';
 import { cutText, measureText } from '../../src/drawing/metrics';
 import { buildScene } from '../../src/drawing/scene';
 import { sceneToSvg } from '../../src/drawing/svg';
 import { DARK, LIGHT, PRINT } from '../../src/drawing/tokens';
 import type { DrawnState, Point } from '../../src/drawing/types';
-import type { UnitId } from '../../src/engine/ids';
+import type { StreamId, UnitId } from '../../src/engine/ids';
 import type { SketchUnit } from '../../src/sketch/types';
 import { randomSheet, seeded } from './random';
 import { inputOf, LET_DOWN, RECYCLE, SHEETS, sheetOf } from './sheets';
@@ -62,6 +63,14 @@ describe('labels', () => {
       expect(gap).toBeGreaterThanOrEqual(14 + 6);
     }
   });
+});
+
+test('what has no room is said in words', () => {
+  const label = { what: 'label', stream: 's1' as StreamId } as const;
+  const duty = { what: 'duty', unit: 'u1' as UnitId, link: 'heat' } as const;
+  expect(omittedSentence([])).toBe('');
+  expect(omittedSentence([label])).toBe('1 label has no room here');
+  expect(omittedSentence([label, label, duty])).toBe('2 labels and 1 duty have no room here');
 });
 
 describe('a scene built upon an earlier one', () => {
