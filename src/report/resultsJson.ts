@@ -172,6 +172,9 @@ function unitRecord(
     power_W: result.power_W,
     iterations: result.iterations,
     residual: result.residual,
+    ...(result.loop
+      ? { loop: { ...result.loop, tear: result.loop.tear.map((id) => numbers.get(id) ?? id) } }
+      : {}),
     ...(result.made_mol_s ? { made_mol_s: byId(result.made_mol_s) } : {}),
     ...(result.drawn
       ? {

@@ -89,8 +89,12 @@ function unitSchema(kinds: Readonly<Record<string, KindCatalogue>>): Schema {
       loop: {
         type: 'object',
         description: 'how the loop was solved that the unit is part of',
-        required: ['passes', 'residual'],
-        properties: { passes: number, residual: number },
+        required: ['passes', 'residual', 'tear'],
+        properties: {
+          passes: number,
+          residual: number,
+          tear: described(listOf(text), 'numbers of the streams at which it was opened'),
+        },
       },
       made_mol_s: byName(number),
       drawn: described(byName(ref('drawnStream')), 'streams drawn from outside without a line, by port'),
