@@ -9,7 +9,7 @@ import { useCompiled, useResults, useSession, useSketch, useStores } from '../st
 import { type BalanceBasis, basisChoices, basisKey, dimOf, unitOf } from './basis';
 import { ClosureTable } from './ClosureTable';
 import { OpenClosure } from './OpenClosure';
-import { SideBar } from './SideBar';
+import { sideBar } from './sideBar';
 import { sidesOf } from './sides';
 import '../parts/parts.css';
 import './balance.css';
@@ -43,6 +43,7 @@ export function Balance() {
   const folded = useSession((state) => state.balanceFolded);
   const isSmall = useSmallScreen();
   const [wanted, setWanted] = useState('mass');
+  const [told, tell] = useState('');
 
   const choices = useMemo(() => basisChoices(data), [data]);
   const basis: BalanceBasis = choices.find((c) => basisKey(c.basis) === wanted)?.basis ?? { is: 'mass' };
@@ -76,26 +77,33 @@ export function Balance() {
   const bars = (
     <div className={sides.empty ? 'bars-of-balance empty' : 'bars-of-balance'}>
       <span className="side-word">In</span>
-      <SideBar
-        label="In"
-        side={sides.in}
-        full={full}
-        toDisplay={toDisplay}
-        gap={Math.max(0, -gap)}
-        unit={unit}
-        placeholder="Feeds will stand here"
-      />
+      {sideBar({
+        label: 'In',
+        side: sides.in,
+        full,
+        toDisplay,
+        gap: Math.max(0, -gap),
+        unit,
+        tell,
+        placeholder: 'Feeds will stand here',
+      })}
       <span className="side-word">Out</span>
-      <SideBar
-        label="Out"
-        side={sides.out}
-        full={full}
-        toDisplay={toDisplay}
-        gap={Math.max(0, gap)}
-        unit={unit}
-        placeholder="Products will stand here; both lines end at the same place when the balance closes"
-      />
+      {sideBar({
+        label: 'Out',
+        side: sides.out,
+        full,
+        toDisplay,
+        gap: Math.max(0, gap),
+        unit,
+        tell,
+        placeholder: 'Products will stand here; both lines end at the same place when the balance closes',
+      })}
       <span className="closing-line" aria-hidden="true" />
+      {told === '' ? null : (
+        <span className="piece-told" aria-hidden="true">
+          {told}
+        </span>
+      )}
     </div>
   );
   const total = (side: typeof sides.in) =>

@@ -1,5 +1,7 @@
+import { memo } from 'react';
+
 /** A stream's number in its diamond; filled in accent when it is the one that is selected. */
-export function Diamond({
+export const Diamond = memo(function Diamond({
   number,
   chosen = false,
   size = 24,
@@ -28,4 +30,4 @@ export function Diamond({
       </text>
     </svg>
   );
-}
+});

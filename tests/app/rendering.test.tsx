@@ -1,0 +1,119 @@
+// @vitest-environment jsdom
+
+import { readFileSync } from 'node:fs';
+import { act, cleanup, render } from '@testing-library/react';
+import type { ReactNode } from 'react';
+import { afterEach, beforeAll, describe, expect, test, vi } from 'vitest';
+import { Balance } from '../../src/balance/Balance';
+import { solveSketch } from '../../src/cli/run';
+import { DrawerHost } from '../../src/drawers/DrawerHost';
+import { setSetting } from '../../src/drawers/edits';
+import type { UnitId } from '../../src/engine/ids';
+import type { ReportInput } from '../../src/report/input';
+import { openSketch } from '../../src/sketch/read';
+import type { Sketch } from '../../src/sketch/types';
+import { createCompiledStore } from '../../src/store/compiledStore';
+import { type Stores, StoresProvider } from '../../src/store/react';
+import { createResultsStore } from '../../src/store/resultsStore';
+import { createSession } from '../../src/store/session';
+import { createSketchStore } from '../../src/store/sketchStore';
+
+/** The hook must stand before React is loaded. */
+const { rendered } = await vi.hoisted(() => import('./rendered'));
+
+/** The condensate train, and the same with more reflux in its first column, both solved. */
+let sketch: Sketch;
+let first: ReportInput;
+let second: ReportInput;
+const column = 'C-101';
+const idOf = (tag: string): UnitId => {
+  const unit = sketch.units.find((u) => u.tag === tag);
+  if (!unit) throw new Error(`no ${tag}`);
+  return unit.id;
+};
+beforeAll(async () => {
+  const opened = openSketch(
+    JSON.parse(readFileSync('public/examples/aromatic-condensate.sketch.json', 'utf8')),
+  );
+  if (!opened.ok) throw new Error('the example does not open');
+  sketch = opened.sketch;
+  first = (await solveSketch(sketch)).input;
+  second = (await solveSketch(setSetting(idOf(column), 'fixedBy.0.value', '4')(sketch))).input;
+}, 60_000);
+afterEach(cleanup);
+
+const all = ({ streams, units, findings, closure }: ReportInput) => ({
+  streams: [...streams],
+  units: [...units],
+  gone: [],
+  // As they come from the worker: new objects every time.
+  findings: structuredClone(findings),
+  ...(closure ? { closure } : {}),
+});
+
+function show(what: ReactNode): Stores {
+  const stores = {
+    sketch: createSketchStore(sketch),
+    results: createResultsStore(),
+    session: createSession(),
+    compiled: createCompiledStore(),
+  };
+  stores.compiled.setState({ edit: 1, basis: first.basis });
+  stores.results.take(1, true, all(first), 1);
+  stores.session.openDrawer({ is: 'unit', id: idOf(column) });
+  render(<StoresProvider value={stores}>{what}</StoresProvider>);
+  rendered.length = 0;
+  return stores;
+}
+const tally = (): Readonly<Record<string, number>> => {
+  const counts: Record<string, number> = {};
+  for (const name of rendered) counts[name] = (counts[name] ?? 0) + 1;
+  return counts;
+};
+
+describe('a new answer to the condensate train', () => {
+  const pieces = (): ReadonlyMap<string, string> =>
+    new Map(
+      [...document.querySelectorAll('.piece button')].map((button) => {
+        const [name = '', figure = ''] = (button.getAttribute('aria-label') ?? '').split(': ');
+        return [name, figure];
+      }),
+    );
+
+  test('draws the pieces of the balance whose figure or length changed, and at most three views more', () => {
+    const stores = show(<Balance />);
+    const before = pieces();
+    expect(before.size).toBe(6);
+    act(() => stores.results.take(2, true, all(second), 1));
+    const after = pieces();
+    const changed = [...after].filter(([name, figure]) => before.get(name) !== figure).length;
+    expect(changed).toBeGreaterThan(0);
+    expect(changed).toBeLessThan(6);
+    expect(rendered.length).toBeLessThanOrEqual(changed + 3);
+  });
+
+  test('draws no piece of the balance when it says the same once more', () => {
+    const stores = show(<Balance />);
+    act(() => stores.results.take(2, true, structuredClone(all(first)), 1));
+    expect(tally().Piece ?? 0).toBe(0);
+    expect(rendered.length).toBeLessThanOrEqual(3);
+  });
+
+  test('leaves the settings of an open drawer alone and draws its head and results', () => {
+    const stores = show(<DrawerHost />);
+    const sentence = document.querySelector('.drawer')?.textContent;
+    act(() => stores.results.take(2, true, all(second), 1));
+    expect(document.querySelector('.drawer')?.textContent).not.toBe(sentence);
+    const counts = tally();
+    expect(counts.ColumnOutcome).toBe(1);
+    for (const name of [
+      'UnitDrawer',
+      'ColumnSettings',
+      'SettingRow',
+      'QuantityField',
+      'WholeField',
+      'FixedBy',
+    ])
+      expect([name, counts[name] ?? 0]).toEqual([name, 0]);
+  });
+});
