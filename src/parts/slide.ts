@@ -27,22 +27,38 @@ interface Keys {
 const timesOf = (keys: Keys): 0.1 | 1 | 10 => (keys.shiftKey ? 10 : keys.ctrlKey ? 0.1 : 1);
 
 /**
- * The text so many steps away from where a slide began, or undefined where it would leave the range or stop being a
- * quantity of the dimension: a slide stops there.
+ * The text so many tenths of a step away from where a slide began, or undefined where it would leave the range or stop
+ * being a quantity of the dimension: a slide stops there.
  */
 export function slidText(
   from: string,
-  steps: number,
-  times: 0.1 | 1 | 10,
+  tenths: number,
   dims: Dimension | readonly Dimension[],
   site: Site,
   { min = Number.NEGATIVE_INFINITY, max = Number.POSITIVE_INFINITY }: SlideRange,
 ): string | undefined {
-  const text = stepNumber(from, Math.round(steps / times), times);
+  const text = stepNumber(from, tenths, 0.1);
   if (text === undefined) return undefined;
   const read = parseQuantity(text, dims, site);
   return read.ok && read.si >= min && read.si <= max ? text : undefined;
 }
+
+/** How far a slide is: whole steps of one size since the size last changed, on top of what was reached before it. */
+export interface Way {
+  /** Reached before this stretch, in tenths of a step: whole. */
+  readonly before: number;
+  readonly times: 0.1 | 1 | 10;
+  /** Steps of this stretch; a hand makes parts of one. */
+  readonly steps: number;
+}
+export const START: Way = { before: 0, times: 1, steps: 0 };
+
+export const tenthsOf = ({ before, times, steps }: Way): number =>
+  before + Math.round(steps) * Math.round(10 * times);
+
+/** The way after so many steps more; coarse steps after fine ones go on from there, so that no number jumps. */
+export const farther = (way: Way, by: number, times: Way['times']): Way =>
+  times === way.times ? { ...way, steps: way.steps + by } : { before: tenthsOf(way), times, steps: by };
 
 interface Options extends SlideRange {
   readonly text: Quantity | undefined;
@@ -57,13 +73,13 @@ export function useSlide(options: Options) {
   const latest = useRef(options);
   latest.current = options;
   const [state, setState] = useState<SlideState | null>(null);
-  const running = useRef<{ from: string; steps: number; now: string } | null>(null);
+  const running = useRef<{ from: string; way: Way; now: string } | null>(null);
 
   const begin = (): boolean => {
     const { text, dims, site, edit, disabled } = latest.current;
     if (disabled || text === undefined || !parseQuantity(text, dims, site).ok) return false;
     const from = String(text);
-    running.current = { from, steps: 0, now: from };
+    running.current = { from, way: START, now: from };
     edit.begin();
     setState({ from, now: from });
     return true;
@@ -72,10 +88,10 @@ export function useSlide(options: Options) {
     const run = running.current;
     if (!run) return;
     const { dims, site, edit, min, max } = latest.current;
-    const steps = run.steps + by * times;
-    const text = slidText(run.from, steps, times, dims, site, { min, max });
+    const way = farther(run.way, by, times);
+    const text = slidText(run.from, tenthsOf(way), dims, site, { min, max });
     if (text === undefined) return;
-    run.steps = steps;
+    run.way = way;
     if (text === run.now) return;
     run.now = text;
     edit.change(text);

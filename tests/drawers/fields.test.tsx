@@ -103,7 +103,7 @@ describe('a slide', () => {
     for (let k = 0; k < 3; k += 1) press('p.P', 'ArrowUp', { altKey: true });
     expect(settingsOf(page, 'u2')).toEqual({ p: { P: '5.03 bar' } });
     press('p.P', 'ArrowUp', { altKey: true, shiftKey: true });
-    expect(settingsOf(page, 'u2')).toEqual({ p: { P: '5.1 bar' } });
+    expect(settingsOf(page, 'u2')).toEqual({ p: { P: '5.13 bar' } });
     fireEvent.keyUp(field('p.P'), { key: 'Alt' });
     expect(undoLabels(page)).toEqual(['slide PV-101 outlet pressure']);
     page.stores.sketch.undo();
