@@ -1,4 +1,4 @@
-import type { StreamState } from '../../equilibrium/types';
+import type { FlashWarm, StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import type { ThermoModel } from '../../thermo/types';
 import { streamAt, totalOf, type WarmState, warmFrom, warmOf } from '../streams';
@@ -59,6 +59,47 @@ export function entering(call: Call<unknown>, stream: StreamState): Entering {
 export const withLosses = (ideal: number, efficiency: number): number =>
   ideal >= 0 ? ideal / efficiency : ideal * efficiency;
 
+/** A step of temperature after which the next one is lost in rounding [-]. */
+const EXACT = 1e-8;
+
+/**
+ * Temperature at which the gas that enters has a molar enthalpy or entropy, if it stays one gas: where the flash starts, which
+ * then only has to find that it does [K]. Undefined when what enters is no gas.
+ */
+function gasTemperature_K(
+  { gas, stream }: Entering,
+  P_Pa: number,
+  of: 'h_J_mol' | 's_J_molK',
+  target: number,
+  near_K: number | undefined,
+): number | undefined {
+  if (!gas) return undefined;
+  const props = gas.thermo.makeProps();
+  let T = near_K ?? stream.T_K;
+  for (let pass = 0; pass < 12; pass++) {
+    gas.thermo.evaluate('vapour', T, P_Pa, gas.x, 2, props);
+    const miss = target - props[of];
+    const dT = ((of === 'h_J_mol' ? 1 : T) * miss) / props.cp_J_molK;
+    T = Math.min(Math.max(T + dT, 0.7 * T), 1.4 * T);
+    if (Math.abs(dT) < EXACT * T) return T;
+  }
+  return undefined;
+}
+
+/** Where a flash of the machine starts: two phases from the last answer, a gas from its own temperature. */
+function startOf(
+  e: Entering,
+  warm: WarmState | undefined,
+  P_Pa: number,
+  of: 'h_J_mol' | 's_J_molK',
+  target: number,
+): FlashWarm {
+  const last = warmFrom(warm, e.stream.n_mol_s, e.stream.T_K);
+  if (last.K) return last;
+  const T_K = gasTemperature_K(e, P_Pa, of, target, warm?.T_K);
+  return T_K === undefined ? last : { T_K };
+}
+
 /** The fluid at the same entropy and another pressure. */
 function isentropicTo(
   call: Call<MachineSettings>,
@@ -69,7 +110,7 @@ function isentropicTo(
   const { stream, total_mol_s } = e;
   // Without a standard entropy the flash itself gives the reason and the chemical.
   const s_J_molK = (stream.S_W_K ?? 0) / total_mol_s;
-  const start = warmFrom(warm.isentropic, stream.n_mol_s, stream.T_K);
+  const start = startOf(e, warm.isentropic, P_Pa, 's_J_molK', s_J_molK);
   return streamAt(call, stream.n_mol_s, { P_Pa, s_J_molK }, start);
 }
 
@@ -105,8 +146,10 @@ const outAt = (
   P_Pa: number,
   H_W: number,
   warm: MachineWarm,
-): Outcome<StreamState> =>
-  streamAt(call, e.stream.n_mol_s, { P_Pa, H_W }, warmFrom(warm.out, e.stream.n_mol_s, e.stream.T_K));
+): Outcome<StreamState> => {
+  const start = startOf(e, warm.out, P_Pa, 'h_J_mol', H_W / e.total_mol_s);
+  return streamAt(call, e.stream.n_mol_s, { P_Pa, H_W }, start);
+};
 
 /** What leaves after a path of constant polytropic efficiency. */
 function polytropicTo(
