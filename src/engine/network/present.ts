@@ -7,5 +7,7 @@ export function presentOf(
 ): { thermo: ThermoModel; x: Float64Array; at: number[] } {
   const at: number[] = [];
   for (let i = 0; i < full.length; i++) if (full[i]! > 0) at.push(i);
-  return { thermo: model.of(at), x: Float64Array.from(at, (i) => full[i]!), at };
+  const x = new Float64Array(at.length);
+  for (let k = 0; k < x.length; k++) x[k] = full[at[k]!]!;
+  return { thermo: model.of(at), x, at };
 }

@@ -126,10 +126,13 @@ export function warmOf(stream: StreamState): WarmState {
   for (let i = 0; i < n_mol_s.length; i++) if (n_mol_s[i]! > 0) present.push(i);
   const [vapour, liquid] = phases;
   if (vapour?.kind !== 'vapour' || liquid?.kind !== 'liquid') return { T_K, P_Pa, present };
-  const K = Float64Array.from(present, (i) => vapour.x[i]! / liquid.x[i]!);
-  return K.every((k) => k > 0 && k < Number.POSITIVE_INFINITY)
-    ? { T_K, P_Pa, vapourFraction, K, present }
-    : { T_K, P_Pa, present };
+  const K = new Float64Array(present.length);
+  let usable = true;
+  for (let k = 0; k < K.length; k++) {
+    K[k] = vapour.x[present[k]!]! / liquid.x[present[k]!]!;
+    if (!(K[k]! > 0 && K[k]! < Number.POSITIVE_INFINITY)) usable = false;
+  }
+  return usable ? { T_K, P_Pa, vapourFraction, K, present } : { T_K, P_Pa, present };
 }
 
 /** Start values for a flash of `n_mol_s`: what was remembered, as far as it is about the same chemicals; else a temperature. */

@@ -69,8 +69,11 @@ export function resultsOf(
   const { settings, model } = call;
   const { first, last, n } = s;
   const { stages } = settings;
-  const vector = (of: (j: number) => number): Float64Array =>
-    Float64Array.from({ length: stages }, (_, k) => of(first + k));
+  const vector = (of: (j: number) => number): Float64Array => {
+    const out = new Float64Array(stages);
+    for (let k = 0; k < stages; k++) out[k] = of(first + k);
+    return out;
+  };
   const profile = (flows: Float64Array, sums: Float64Array): Profile => {
     const nothing = new Float64Array(stages);
     const out: Record<string, Float64Array> = {};
