@@ -105,6 +105,61 @@ test('the PDF carries the figures of the sheet', async ({ quiet: page }) => {
   for (const figure of label.match(/\d+\.\d+/g) ?? []) expect(words).toContain(figure);
 });
 
+test('documents are chosen, looked at and saved in every form', async ({ quiet: page }) => {
+  test.slow();
+  await openExample(page);
+  await page.locator('.sheet-flow').click({ position: { x: 8, y: 8 } });
+  await page.keyboard.press('p');
+  const dialogue = page.getByRole('dialog', { name: 'Documents' });
+  const pages = dialogue.locator('.documents-pages');
+  await expect(pages).toHaveAttribute('data-state', 'made', { timeout: 30_000 });
+  const whole = Number(await pages.locator('[data-pages]').getAttribute('data-pages'));
+  expect(whole).toBeGreaterThan(3);
+
+  await dialogue.getByRole('button', { name: 'Sections' }).click();
+  await dialogue.getByLabel('Model, pairs and sources').uncheck();
+  await dialogue.getByLabel('Limits', { exact: true }).uncheck();
+  await dialogue.getByRole('button', { name: 'Rows of the stream summary' }).click();
+  await dialogue.getByLabel('Normal gas flow').uncheck();
+  await expect
+    .poll(async () => Number(await pages.locator('[data-pages]').getAttribute('data-pages')), {
+      timeout: 30_000,
+    })
+    .toBeLessThan(whole);
+
+  const saved = async (what: string): Promise<Buffer> => {
+    const download = page.waitForEvent('download');
+    await dialogue.locator(`[data-export="${what}"]`).click();
+    return readFileSync(await (await download).path());
+  };
+  const pdf = page.waitForEvent('download');
+  await dialogue.locator('[data-export="summary-pdf"]').click();
+  const words = await pdfWords(await (await pdf).path());
+  expect(words).toContain('Massflow');
+  expect(words).not.toContain('Normalgasflow');
+  expect(words).not.toContain('Pairparametersinforce');
+  expect((await saved('sheet-pdf')).subarray(0, 5).toString()).toBe('%PDF-');
+  expect((await saved('xlsx')).subarray(0, 2).toString()).toBe('PK');
+  expect((await saved('csv')).toString('utf8')).toContain('Mass flow,kg/h');
+  expect(JSON.parse((await saved('json')).toString('utf8'))).toMatchObject({ solved: true });
+  expect((await saved('svg')).toString('utf8')).toContain('>V-1</text>');
+  await dialogue.locator('[data-field="documents.pictureWidth"]').fill('900');
+  await dialogue.locator('[data-field="documents.pictureWidth"]').press('Enter');
+  await expect(pages).toHaveAttribute('data-state', 'made', { timeout: 30_000 });
+  const png = await saved('png');
+  // Width in the header of a PNG file: bytes 16 to 19.
+  expect(png.readUInt32BE(16)).toBe(900);
+
+  await dialogue.getByRole('button', { name: 'Close' }).click();
+  await page.keyboard.press('Control+z');
+  await page.keyboard.press('Control+z');
+  await page.keyboard.press('p');
+  await dialogue.getByRole('button', { name: 'Rows of the stream summary' }).click();
+  await expect(dialogue.getByLabel('Normal gas flow')).toBeChecked();
+  await dialogue.getByRole('button', { name: 'Sections' }).click();
+  await expect(dialogue.getByLabel('Limits', { exact: true })).not.toBeChecked();
+});
+
 test('the stream summary shows the same table on the screen', async ({ quiet: page }) => {
   await openExample(page);
   await page.locator('.bar').getByRole('button', { name: 'Stream summary' }).click();
@@ -141,4 +196,14 @@ for (const scheme of ['light', 'dark'] as const)
     await page.locator('.bar').getByRole('button', { name: 'Stream summary' }).click();
     await expect(page.locator('[data-table="streams"]')).toBeVisible();
     await faults('stream summary');
+    await page.getByRole('dialog').getByRole('button', { name: 'Close' }).click();
+    await page.locator('.sheet-flow').click({ position: { x: 8, y: 8 } });
+    await page.keyboard.press('p');
+    await expect(page.locator('.documents-pages')).toHaveAttribute('data-state', 'made', { timeout: 30_000 });
+    await page.getByRole('button', { name: 'Sections' }).click();
+    // What the browser shows inside the frame is its own.
+    await page.locator('.documents-pages iframe').evaluateAll((frames) => {
+      for (const frame of frames) frame.remove();
+    });
+    await faults('documents');
   });

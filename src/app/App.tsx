@@ -13,6 +13,7 @@ import { Bar } from './Bar';
 import { bankIndex } from './bankIndex';
 import { Dialogue } from './Dialogue';
 import { dropFiles } from './documents';
+import { DocumentsPage } from './export/DocumentsPage';
 import { KeyList } from './KeyList';
 import { MySketches } from './MySketches';
 import { Notice } from './Notice';
@@ -63,6 +64,7 @@ function Over() {
   const close = (): void => session.setState({ over: 'none' });
   if (over === 'keys') return <KeyList actions={actions} />;
   if (over === 'open') return <MySketches />;
+  if (over === 'documents') return <DocumentsPage />;
   if (over === 'pairs')
     return (
       <Dialogue title="Pair parameters" wide>

@@ -20,7 +20,7 @@ export async function fingerprint(text: string): Promise<string> {
 /** Everything a report needs, solved once more from nothing. Undefined while the sketch cannot be compiled. */
 export async function cleanReportInput(stores: Stores): Promise<ReportInput | undefined> {
   const { sketch } = stores.sketch.getState();
-  const { basis, problem, gaps, assumptions } = stores.compiled.getState();
+  const { basis, problem, gaps, notes, assumptions } = stores.compiled.getState();
   if (!basis || !problem) return undefined;
   const live = new Map([...stores.results.getState().streams].map(([id, shown]) => [id, shown.latest]));
   const [clean, citations, print] = await Promise.all([
@@ -32,6 +32,7 @@ export async function cleanReportInput(stores: Stores): Promise<ReportInput | un
     sketch,
     basis,
     ...clean,
+    findings: [...clean.findings, ...notes],
     gaps,
     assumptions,
     citations,

@@ -31,11 +31,22 @@ export function streamTable(input: ReportInput): Table {
   return { ...table, notes: notes(input, table) };
 }
 
-/** Every row and every stream, whatever the documents leave out. */
-export const wholeStreamTable = (input: ReportInput): Table => {
-  const whole = allStreams(input, () => true);
-  return { ...whole, notes: notes(input, whole) };
-};
+/** Rows that may be left out, by name; composition and component flows only as a whole. */
+export function rowChoices(input: ReportInput): readonly { readonly key: string; readonly text: string }[] {
+  let block = '';
+  return allStreams(input, () => true).rows.flatMap((row) => {
+    if (row.style === 'group') {
+      block = row.label;
+      return ['composition', 'componentFlows'].includes(row.key) ? [{ key: row.key, text: row.label }] : [];
+    }
+    if (/^[zm]\./.test(row.key)) return [];
+    const unit = row.unit && row.label === 'Pressure' ? `, ${row.unit}` : '';
+    const prefix = /^(vapour|liquid|liquid2)\./.test(row.key)
+      ? `${block}: ${row.label.toLowerCase()}`
+      : row.label;
+    return [{ key: row.key, text: `${prefix}${unit}` }];
+  });
+}
 
 /** Rows without those named; a group's name takes all of the group, and a group without rows goes too. */
 function withoutRows(rows: readonly Row[], names: readonly string[]): Row[] {

@@ -42,7 +42,7 @@ export interface SessionState {
   readonly shelfFolded: boolean;
   readonly balanceFolded: boolean;
   /** Full-screen pages over the sheet. */
-  readonly over: 'none' | 'summary' | 'pdf' | 'open' | 'keys' | 'find' | 'pairs' | 'scale';
+  readonly over: 'none' | 'summary' | 'documents' | 'pdf' | 'open' | 'keys' | 'find' | 'pairs' | 'scale';
   readonly notice: Notice | null;
   /** Title bar: how autosave stands. */
   readonly saved: {

@@ -11,6 +11,7 @@ import {
   isSolver,
   PURE_ROOMS,
   ROOMS,
+  WORKER_ROOMS,
 } from './layers';
 
 /** Project files by path from the root ("src/app/main.tsx"), with their text. */
@@ -85,7 +86,7 @@ function directionFault({ from, to, how }: Edge): string | undefined {
   const rule = ROOMS[here]!;
   const fault = `${from} imports ${to} (${how}), against the direction of imports`;
   if (how === 'worker') {
-    return rule.startsWorker && there === 'worker'
+    return rule.startsWorker && WORKER_ROOMS.includes(there)
       ? undefined
       : `${from} starts ${to} as a worker, which it may not`;
   }

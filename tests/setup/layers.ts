@@ -40,6 +40,12 @@ export const ROOMS: Readonly<Record<string, RoomRule>> = {
     types: ['engine', 'data'],
     packages: ['pdfmake', 'write-excel-file', 'fflate', 'd3-scale', 'd3-shape'],
   },
+  /** The worker that makes documents: entry, messages, fonts and painting. */
+  documents: {
+    code: ['report', 'drawing', 'sketch', 'wording', 'quantity', 'catalogue', 'engine-types'],
+    types: ['engine', 'data'],
+    packages: ['pdfmake'],
+  },
   protocol: { code: ['engine-types'], types: ['engine'], packages: [] },
   worker: { code: ['engine', 'protocol', 'quantity'], types: [], packages: [] },
   store: {
@@ -76,7 +82,7 @@ export const ROOMS: Readonly<Record<string, RoomRule>> = {
       'catalogue',
       'engine-types',
     ],
-    types: ['engine'],
+    types: ['engine', 'documents'],
     packages: ['*'],
     startsWorker: true,
   },
@@ -86,6 +92,9 @@ export const ROOMS: Readonly<Record<string, RoomRule>> = {
     packages: ['node:*', 'pdfmake'],
   },
 };
+
+/** Rooms whose files run as workers. */
+export const WORKER_ROOMS: readonly string[] = ['worker', 'documents'];
 
 /** Floors of the engine, lowest first. Files directly in engine/ are the ground, below all of them. */
 export const FLOORS = [

@@ -16,19 +16,22 @@ function put<K extends Part>(sketch: Sketch, key: K, value: NonNullable<Sketch[K
 }
 
 /** A record without what is undefined, blank or an empty list. */
-function trimmed<T extends object>(record: T): T {
+function trimmed<T extends object>(record: Change<T>): T {
   const kept = Object.entries(record).filter(
     ([, v]) => v !== undefined && v !== '' && !(Array.isArray(v) && v.length === 0),
   );
   return Object.fromEntries(kept) as T;
 }
 
+/** Parts to change; undefined or empty takes one away. */
+type Change<T> = { readonly [K in keyof T]?: T[K] | undefined };
+
 /** The revision table, newest first. */
 export const setRevisions = (sketch: Sketch, revisions: readonly Revision[]): Edit =>
   put(sketch, 'revisions', revisions.map(trimmed), 'revision table');
 
 /** Parts of the design basis; an empty part is taken away. */
-export const setDesignBasis = (sketch: Sketch, change: Partial<DesignBasis>): Edit =>
+export const setDesignBasis = (sketch: Sketch, change: Change<DesignBasis>): Edit =>
   put(
     sketch,
     'designBasis',
@@ -46,5 +49,5 @@ export const setHolds = (sketch: Sketch, holds: readonly Hold[]): Edit =>
   put(sketch, 'holds', holds.map(trimmed), 'holds');
 
 /** What the documents show. */
-export const setDocuments = (sketch: Sketch, change: Partial<DocumentChoices>): Edit =>
+export const setDocuments = (sketch: Sketch, change: Change<DocumentChoices>): Edit =>
   put(sketch, 'documents', trimmed({ ...sketch.documents, ...change }), 'what the documents show');

@@ -1,0 +1,24 @@
+import { makeDocument } from './make';
+import type { FromDocuments, ToDocuments } from './messages';
+
+interface Scope {
+  postMessage(message: FromDocuments, transfer?: Transferable[]): void;
+  onmessage: ((event: MessageEvent<ToDocuments>) => void) | null;
+}
+const scope = globalThis as unknown as Scope;
+
+/** Entry of the documents' worker: one order at a time, nothing of the page. */
+scope.onmessage = async ({ data: { job, order } }) => {
+  try {
+    const made = await makeDocument(order, (doing, share) =>
+      scope.postMessage({ say: 'progress', job, doing, share }),
+    );
+    scope.postMessage({ say: 'made', job, ...made }, [made.bytes.buffer]);
+  } catch (error) {
+    scope.postMessage({
+      say: 'failed',
+      job,
+      message: error instanceof Error ? error.message : String(error),
+    });
+  }
+};
