@@ -30,8 +30,17 @@ export function measuresOf({ display, site }: Pick<Sketch, 'display' | 'site'>):
   return { set: display.set, units, site: siteOf(site) };
 }
 
-/** The same measures with pressures absolute, or counted from the site. */
-export const withReference = (measures: Measures, reference: 'absolute' | 'gauge'): Measures => ({
-  ...measures,
-  units: { ...measures.units, pressure: (reference === 'gauge' ? GAUGE : ABSOLUTE)[measures.set] },
-});
+/** "bar(g)", "barg" and "bar" are all bar. */
+const plainPressure = (unit: string): string =>
+  unit.replace(/\([ag]\)$/, '').replace(/^(bar|psi)[ag]$/, '$1');
+
+/** The same measures with pressures absolute, or counted from the site; in the unit that was chosen for them, where one was. */
+export function withReference(measures: Measures, reference: 'absolute' | 'gauge'): Measures {
+  const own = measures.units?.pressure;
+  const usual = (reference === 'gauge' ? GAUGE : ABSOLUTE)[measures.set];
+  const plain = plainPressure(own ?? usual);
+  // Not every unit takes a mark: one without counts as absolute.
+  const wanted = reference === 'gauge' ? [`${plain}(g)`] : [`${plain}(a)`, plain];
+  const pressure = wanted.find((unit) => !unitRefusal(unit, 'pressure')) ?? usual;
+  return { ...measures, units: { ...measures.units, pressure } };
+}

@@ -10,6 +10,8 @@ export interface TextFieldProps {
   readonly disabled?: boolean;
   readonly lines?: number;
   readonly className?: string;
+  /** Texts to choose from; any other may be typed. */
+  readonly offers?: readonly string[];
 }
 
 /** Words: Enter or leaving the field commits, Esc restores; a text that is not taken stays, with the reason. */
@@ -63,6 +65,7 @@ export function TextField(props: TextFieldProps) {
           {...shared}
           type="text"
           autoComplete="off"
+          list={props.offers ? `${id}-offers` : undefined}
           onKeyDown={(event) => {
             if (event.key === 'Enter') commit();
             else if (event.key === 'Escape' && draft !== null) {
@@ -72,6 +75,13 @@ export function TextField(props: TextFieldProps) {
           }}
         />
       )}
+      {props.offers ? (
+        <datalist id={`${id}-offers`}>
+          {props.offers.map((text) => (
+            <option key={text} value={text} />
+          ))}
+        </datalist>
+      ) : null}
       {why ? (
         <span className="refusal" id={id} role="alert">
           {why}

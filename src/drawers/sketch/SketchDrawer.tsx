@@ -1,14 +1,13 @@
 import { QuantityField } from '../../parts/QuantityField';
-import { Segmented } from '../../parts/Segmented';
 import { TextField } from '../../parts/TextField';
 import { type Dimension, STANDARD_SITE } from '../../quantity';
-import type { LabelKey, MeasureSet, Sketch, TitleBlock } from '../../sketch/types';
-import { type Edit, LABEL_KEYS, setDisplay, setSite, setTitle } from '../../store/commands';
+import type { Sketch, TitleBlock } from '../../sketch/types';
+import { type Edit, setSite, setTitle } from '../../store/commands';
 import { useCompiled, useSketch, useStores } from '../../store/react';
 import { Head } from '../Head';
 import { run } from '../run';
 import { useSay } from '../useSay';
-import { capital, labelKeyWord } from '../words';
+import { Measures } from './Measures';
 
 /** Title block, site, measures, and what the sheet's labels show. */
 export function SketchDrawer() {
@@ -153,79 +152,6 @@ function Site() {
           </div>
         );
       })}
-    </section>
-  );
-}
-
-const SETS: readonly { readonly value: MeasureSet; readonly text: string; readonly title: string }[] = [
-  { value: 'SI', text: 'SI', title: 'mol/s, K, kPa' },
-  { value: 'metric', text: 'metric', title: 'kmol/h, °C, bar' },
-  { value: 'US', text: 'US', title: 'lbmol/h, °F, psi' },
-];
-
-function Measures() {
-  const { sketch } = useStores();
-  const display = useSketch((state) => state.sketch.display);
-  const disabled = useSketch((state) => !state.writable);
-  const set = (choices: Parameters<typeof setDisplay>[1]): void =>
-    void run(sketch, (s) => setDisplay(s, choices));
-  const toggle = (key: LabelKey): void =>
-    set({
-      labels: display.labels.includes(key)
-        ? display.labels.filter((label) => label !== key)
-        : LABEL_KEYS.filter((label) => label === key || display.labels.includes(label)),
-    });
-  return (
-    <section className="section">
-      <div className="section-head">
-        <h3>Measures and labels</h3>
-      </div>
-      <div className="setting">
-        <div className="setting-label">Measures</div>
-        <div className="setting-control">
-          <Segmented
-            label="Measures"
-            path="display.set"
-            options={SETS}
-            value={display.set}
-            disabled={disabled}
-            onChange={(next) => set({ set: next })}
-          />
-        </div>
-      </div>
-      <div className="setting">
-        <div className="setting-label">Pressures</div>
-        <div className="setting-control">
-          <Segmented
-            label="Pressures are shown"
-            path="display.gauge"
-            options={[
-              { value: 'absolute', text: 'absolute (a)' },
-              { value: 'gauge', text: 'gauge (g)' },
-            ]}
-            value={display.gauge ? 'gauge' : 'absolute'}
-            disabled={disabled}
-            onChange={(next) => set({ gauge: next === 'gauge' ? true : undefined })}
-          />
-        </div>
-      </div>
-      <fieldset className="setting bare" data-field="display.labels">
-        <legend className="setting-label">Labels show</legend>
-        <div className="setting-control checks">
-          {LABEL_KEYS.map((key) => (
-            <label key={key}>
-              <input
-                type="checkbox"
-                checked={display.labels.includes(key)}
-                disabled={disabled || (!display.labels.includes(key) && display.labels.length >= 3)}
-                onChange={() => toggle(key)}
-              />
-              {capital(labelKeyWord(key))}
-            </label>
-          ))}
-          <p className="field-note">Up to three rows beside each stream.</p>
-        </div>
-      </fieldset>
     </section>
   );
 }
