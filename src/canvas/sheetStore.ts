@@ -116,6 +116,7 @@ const emptyScene: Scene = {
   units: [],
   lines: [],
   labels: [],
+  notes: [],
   omitted: [],
 };
 

@@ -3,6 +3,7 @@ import { CATALOGUE } from '../engine/units/catalogue';
 import type { Sketch, SketchStream } from '../sketch/types';
 import { sameBox } from './boxes';
 import { type LabelSize, labelSize, roomFor } from './labelSize';
+import { type StandingNote, standingNotes } from './notes';
 import { sameValue } from './same';
 import { remarkRoom, roomOf } from './sideTexts';
 import { portOf, type StandingUnit, standingUnits } from './standing';
@@ -21,6 +22,7 @@ export interface Ground {
   readonly remarks: readonly (readonly [rows: number, width: number])[];
   /** Streams of feeds and products, whose labels come first. */
   readonly outer: ReadonlySet<StreamId>;
+  readonly notes: readonly StandingNote[];
   readonly textScale: number;
   readonly underHand: boolean;
   readonly ribbons: ReadonlyMap<StreamId, number> | undefined;
@@ -76,6 +78,7 @@ export function groundOf(sketch: Sketch, input: SceneInput, before: Made | undef
     rooms,
     remarks,
     outer: outerStreams(sketch),
+    notes: standingNotes(sketch.notes),
     textScale,
     underHand,
     ribbons,
@@ -97,6 +100,7 @@ export function outerStreams(sketch: Sketch): ReadonlySet<StreamId> {
 export function sameGround(a: Ground, b: Ground): boolean {
   if (a.standing.length !== b.standing.length) return false;
   if (a.textScale !== b.textScale || (b.underHand && !a.underHand)) return false;
+  if (a.notes.length !== b.notes.length || a.notes.some((note, k) => note !== b.notes[k])) return false;
   if (!sameValue(a.rooms, b.rooms) || !sameValue(a.remarks, b.remarks)) return false;
   if (!sameMap(a.sizes, b.sizes) || !sameMap(a.ribbons, b.ribbons)) return false;
   if (a.standing === b.standing && a.streams === b.streams) return true;

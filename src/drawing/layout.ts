@@ -6,11 +6,12 @@ import { foldedBox, type LabelWish } from './labelPlaces';
 import { rowsIn, scaledSize } from './labelSize';
 import { LabelGround, type LabelTask, type PlacedLabel, placeLabels } from './labels';
 import { nearestOnLine, scaledAbout } from './near';
+import { placeNotes } from './notes';
 import { bridgesOf, drawPath } from './path';
 import { keepSame, sameValue } from './same';
 import { symbolBoxes } from './standing';
 import { WEIGHT } from './tokens';
-import type { Box, LabelShape, LineShape, Omitted, Point } from './types';
+import type { Box, LabelShape, LineShape, NoteShape, Omitted, Point } from './types';
 import { growFlags, placeTexts, type UnitTexts } from './units';
 import { crossingsOf, type RouteCache, type Wire, wireSheet } from './wiring';
 
@@ -29,6 +30,7 @@ export interface Layout {
   /** One for each unit. */
   readonly texts: readonly UnitTexts[];
   readonly labels: readonly LabelPlace[];
+  readonly notes: readonly NoteShape[];
   /** Tags and remarks without room. */
   readonly omitted: readonly Omitted[];
   /** Links without room for a duty. */
@@ -115,6 +117,8 @@ export function layOut(ground: Ground, before: Layout | undefined): Layout {
     stones.add(box);
     sheet.taken.add(box);
   }
+  const notes = placeNotes(ground.notes, sheet.taken, scale);
+  for (const { shape, room } of notes) if (shape.texts.length > 0) stones.add(room);
   const stayed = new Stayed(ground, before);
   const first = stones.place((wire) => stayed.stream(wire)?.place);
   first.forEach((place, k) => {
@@ -133,6 +137,7 @@ export function layOut(ground: Ground, before: Layout | undefined): Layout {
         ...symbolBoxes(standing),
         ...flags.map(({ box }) => box),
         ...boxes,
+        ...notes.flatMap(({ shape, room }) => [shape.box, room]),
         ...wires.flatMap((wire) => pieceBoxes(wire.points, HALF_LINE)),
         ...places.flatMap((place) => (place ? [boxAround(place.at, DIAMOND * scale)] : [])),
         ...labels.flatMap(({ folded, box, hold }) => (folded ? [] : [scaledAbout(box, hold, scale)])),
@@ -140,6 +145,7 @@ export function layOut(ground: Ground, before: Layout | undefined): Layout {
     lines: before ? keepSame(lines, before.lines, (line) => line.stream) : lines,
     texts,
     labels,
+    notes: notes.map(({ shape }) => shape),
     omitted,
     lost: standing.flatMap(({ unit, symbol }, k) =>
       (symbol.links ?? []).flatMap(({ name }, n) =>

@@ -38,3 +38,35 @@ export function cutText(text: string, room: number, size: number, weight: FontWe
   while (chars.length > 1 && measureText(`${chars.join('').trimEnd()}…`, size, weight) > room) chars.pop();
   return `${chars.join('').trimEnd()}…`;
 }
+
+/** A text in lines no wider than `room` px, broken between words, and inside a word only when it is wider than the line. */
+export function wrapText(
+  text: string,
+  room: number,
+  size: number,
+  weight: FontWeight = 400,
+): readonly string[] {
+  const fits = (line: string): boolean => measureText(line, size, weight) <= room;
+  return text.split(/\r?\n/).flatMap((paragraph) => {
+    const lines: string[] = [];
+    let line = '';
+    for (const word of paragraph.split(/ +/)) {
+      const longer = line === '' ? word : `${line} ${word}`;
+      if (fits(longer)) {
+        line = longer;
+        continue;
+      }
+      if (line !== '') lines.push(line);
+      line = '';
+      for (const char of word) {
+        if (line !== '' && !fits(line + char)) {
+          lines.push(line);
+          line = '';
+        }
+        line += char;
+      }
+    }
+    lines.push(line);
+    return lines;
+  });
+}

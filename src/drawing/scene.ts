@@ -47,6 +47,7 @@ export function buildScene(sketch: Sketch, input: SceneInput, before?: Scene): S
     units,
     lines: layout.lines,
     labels,
+    notes: layout.notes,
     omitted: omittedOf(layout, input),
   };
   const scene = before ? keepScene(next, before) : next;
@@ -91,6 +92,7 @@ function keepScene(next: Scene, before: Scene): Scene {
   const units = keepSame<UnitShape>(next.units, before.units, (u) => u.unit);
   const lines = keepSame(next.lines, before.lines, (l) => l.stream);
   const labels = keepSame(next.labels, before.labels, (l) => l.stream);
+  const notes = keepSame(next.notes, before.notes, (note) => note.id);
   const omitted = sameValue(next.omitted, before.omitted) ? before.omitted : next.omitted;
   const { textScale } = next;
   const isSame = sameBox(next.box, before.box);
@@ -100,6 +102,9 @@ function keepScene(next: Scene, before: Scene): Scene {
     units === before.units &&
     lines === before.lines &&
     labels === before.labels &&
+    notes === before.notes &&
     omitted === before.omitted;
-  return isAll ? before : { box: isSame ? before.box : next.box, textScale, units, lines, labels, omitted };
+  return isAll
+    ? before
+    : { box: isSame ? before.box : next.box, textScale, units, lines, labels, notes, omitted };
 }

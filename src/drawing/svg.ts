@@ -161,6 +161,7 @@ export function sceneToSvg(scene: Scene, palette: Palette = PRINT, options: SvgO
     parts.push(...frame.paths.map((p) => pathToSvg(p, palette)));
     parts.push(...frame.texts.map((t) => textToSvg(t, palette)));
   }
+  for (const { border } of bare ? [] : scene.notes) if (border) parts.push(pathToSvg(border, palette));
   for (const line of scene.lines) parts.push(...material(line, heavier).map((p) => pathToSvg(p, palette)));
   for (const unit of scene.units) {
     parts.push(bare ? symbolInPlace(unit, palette, heavier) : unitToSvg(unit, palette, scene.textScale));
@@ -171,6 +172,10 @@ export function sceneToSvg(scene: Scene, palette: Palette = PRINT, options: SvgO
       if (!diamond) continue;
       const svg = pathToSvg(diamond.path, palette) + textToSvg(diamond.text, palette);
       parts.push(grownAbout(svg, line.diamond!, scene.textScale));
+    }
+    for (const { texts, hold, upTo } of scene.notes) {
+      const svg = texts.map((t) => textToSvg(t, palette)).join('');
+      parts.push(grownAbout(svg, hold, Math.min(scene.textScale, upTo)));
     }
     for (const label of scene.labels) {
       if (label.folded) continue;

@@ -23,6 +23,7 @@ export const TEXT = {
   labelLine: 13,
   labelUnit: 11,
   duty: 11,
+  note: 12,
   diamond: 11,
   zone: 10,
 } as const;

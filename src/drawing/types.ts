@@ -167,6 +167,18 @@ export interface LabelShape {
   readonly stale: boolean;
 }
 
+/** A text note, or an area: a dashed border with its name inside, behind everything. */
+export interface NoteShape {
+  readonly id: string;
+  readonly kind: 'text' | 'area';
+  readonly box: Box;
+  readonly border?: PathShape;
+  readonly texts: readonly TextShape[];
+  /** Its text keeps its size on the screen about this point, up to this text scale. */
+  readonly hold: Point;
+  readonly upTo: number;
+}
+
 /** What is left off for want of room. */
 export type Omitted =
   | { readonly what: 'label'; readonly stream: StreamId }
@@ -182,6 +194,7 @@ export interface Scene {
   readonly units: readonly UnitShape[];
   readonly lines: readonly LineShape[];
   readonly labels: readonly LabelShape[];
+  readonly notes: readonly NoteShape[];
   readonly omitted: readonly Omitted[];
 }
 

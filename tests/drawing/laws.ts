@@ -282,6 +282,37 @@ export const symbolsStandApart: Law = (scene) =>
       ),
   );
 
+/** Labels, tags and duties keep off the texts of notes and the borders of areas, diamonds off the texts. */
+export const notesStandFree: Law = (scene) => {
+  const k = scene.textScale;
+  return scene.notes.flatMap((note) => {
+    const rooms = note.texts.map((text) => scaledAbout(boxOfText(text), note.hold, Math.min(k, note.upTo)));
+    const { x, y, w, h } = note.box;
+    const border = note.border
+      ? [
+          boxOfPiece([x, y], [x + w, y], 0.5),
+          boxOfPiece([x, y + h], [x + w, y + h], 0.5),
+          boxOfPiece([x, y], [x, y + h], 0.5),
+          boxOfPiece([x + w, y], [x + w, y + h], 0.5),
+        ]
+      : [];
+    const isHit = (box: Box): boolean => [...rooms, ...border].some((room) => overlaps(room, box));
+    const isOnText = (box: Box): boolean => rooms.some((room) => overlaps(room, box));
+    return [
+      ...openLabels(scene).flatMap((label) =>
+        isHit(label.seen) ? [`label ${label.stream} on note ${note.id}`] : [],
+      ),
+      ...scene.units.flatMap((unit) =>
+        textsOf(unit, k).some(isHit) ? [`a text of ${unit.tag} on note ${note.id}`] : [],
+      ),
+      ...scene.lines.flatMap((line) => {
+        const diamond = diamondOf(line, k);
+        return diamond && isOnText(diamond) ? [`diamond ${line.number} on note ${note.id}`] : [];
+      }),
+    ];
+  });
+};
+
 /** What is left off is said: every label that is not shown stands in the list of what has no room, and nothing else. */
 export const omittedIsSaid: Law = (scene) => {
   const folded = scene.labels.filter((label) => label.folded).map((label) => label.stream);
@@ -305,5 +336,6 @@ export const LAWS: Readonly<Record<string, Law>> = {
   'leader lines meet nothing': leadersMeetNothing,
   'diamonds stand on their lines, apart from all else': diamondsStandFree,
   'tags, marks, remarks and duties cover nothing': textsCoverNothing,
+  'labels, tags and diamonds keep off notes': notesStandFree,
   'what has no room is said': omittedIsSaid,
 };

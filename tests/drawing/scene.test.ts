@@ -276,6 +276,7 @@ test('an empty sketch is an empty scene', () => {
     units: [],
     lines: [],
     labels: [],
+    notes: [],
     omitted: [],
   });
 });

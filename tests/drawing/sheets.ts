@@ -165,8 +165,20 @@ export const CROSSED = sheetOf(
   ],
 );
 
+/** A recycle with what somebody wrote on it: a text where a label would stand, a text over a line, an area around two units. */
+export const NOTED: Sketch = {
+  ...RECYCLE,
+  notes: [
+    { id: 'n1', text: 'Flare connection by others, see sheet 2', at: [456, 328], size: [96, 64] },
+    { id: 'n2', text: 'Existing', at: [600, 290] },
+    { id: 'n3', text: 'Battery limit', at: [480, 96], kind: 'area', size: [440, 260] },
+    { id: 'n4', text: 'Not on the drawing' },
+  ],
+};
+
 export const SHEETS: Readonly<Record<string, Sketch>> = {
   'a feed let down into a drum': LET_DOWN,
   'a recycle with a purge': RECYCLE,
   'crossed, turned and hanging lines': CROSSED,
+  'a recycle with notes and an area': NOTED,
 };
