@@ -3,8 +3,8 @@ import { solveNetwork } from '../engine/network/solve';
 import type { Turns } from './port';
 import { WARMING, warmingProblem } from './prewarmProblem';
 
-/** Long enough for the compiler of the browser to settle [ms]. */
-const ENOUGH_MS = 700;
+/** So many solves, half of them from nothing, until the compiler has settled: more bring the first sketch nothing. */
+const ENOUGH = 24;
 const SLICE_MS = 8;
 
 export interface Prewarm {
@@ -21,10 +21,8 @@ export interface Prewarm {
  */
 export async function prewarm(d: Prewarm): Promise<{ readonly solves: number; readonly enough: boolean }> {
   const memory = makeMemory(WARMING);
-  const begun = d.now();
-  let slice = begun;
-  let solves = 0;
-  while (d.now() - begun < ENOUGH_MS) {
+  let slice = d.now();
+  for (let solves = 0; solves < ENOUGH; solves++) {
     const from = solves % 2 === 0 ? 'nothing' : 'warm';
     for (const _ of solveNetwork(warmingProblem(solves), memory, { from })) {
       if (d.now() - slice < SLICE_MS) continue;
@@ -32,7 +30,6 @@ export async function prewarm(d: Prewarm): Promise<{ readonly solves: number; re
       if (d.overtaken()) return { solves, enough: false };
       slice = d.now();
     }
-    solves += 1;
   }
-  return { solves, enough: true };
+  return { solves: ENOUGH, enough: true };
 }
