@@ -1,7 +1,9 @@
 /** Time of columns: cold, warm, and in multiples of one Peng-Robinson evaluation at the same number of chemicals. */
-import { solveColumn, stateOf, workFor } from '../../src/engine/column/solve';
+import { solveColumn } from '../../src/engine/column/solve';
+import { stateOf } from '../../src/engine/column/state';
 import { shapeOf } from '../../src/engine/column/system';
 import type { ColumnFeed, ColumnTask, Fixing } from '../../src/engine/column/types';
+import { workFor } from '../../src/engine/column/work';
 import { flash, makeFlashWork } from '../../src/engine/equilibrium/flash';
 import type { ThermoModel } from '../../src/engine/thermo/types';
 import { bankModel } from '../robust/bankModels';

@@ -230,6 +230,8 @@ export async function columns(seed: number, count: number): Promise<GroupReport>
   const byFixing: Record<string, [number, number]> = {};
   const tries: Record<string, number> = {};
   const plainTries: Record<string, number> = {};
+  /** One case for each way of starting beyond the first, to be kept in tests. */
+  const rescued: Record<string, ColumnCase> = {};
   let otherAnswers = 0;
   let tried = 0;
   let answered = 0;
@@ -274,6 +276,7 @@ export async function columns(seed: number, count: number): Promise<GroupReport>
       if (profileOf(end.system).some((T, j) => Math.abs(T - places[j]!) > 1e-3)) otherAnswers++;
       const last = end.effort.tried.at(-1)!;
       tries[last] = (tries[last] ?? 0) + 1;
+      if (last !== 'plain-start') rescued[last] ??= { ...drawn.of, fixed };
       tally[1]++;
       answered++;
     }
@@ -286,6 +289,6 @@ export async function columns(seed: number, count: number): Promise<GroupReport>
     share: answered / tried,
     wanted: 0.98,
     cases,
-    more: { plainTried, plainSolved, plainTries, byFixing, lastTry: tries, otherAnswers },
+    more: { plainTried, plainSolved, plainTries, byFixing, lastTry: tries, otherAnswers, rescued },
   };
 }

@@ -27,11 +27,37 @@ export function faultOf(model: ThermoModel, z: Float64Array, answer: FlashAnswer
     if (!(vapour! > liquid!) && model.spec.kind !== 'raoult')
       return 'the vapour is expanded less than the liquid';
   }
+  if (answer.liquidsTogether && phases.length === 2 && phases[0]!.fraction === 0) {
+    return faultOfBoiling(model, z, answer);
+  }
   if (answer.hiddenLiquid === undefined) {
     const below = lowestTrial(model, T_K, P_Pa, phases[phases.length - 1]!, phases[0]!);
     if (below < -1e-9) return `a trial phase lies ${below} below the plane`;
   }
   return undefined;
+}
+
+/**
+ * Two liquids that are about to boil, told as one: the plane through the vapour carries them if nothing lies below it and
+ * the told Gibbs energy h - T s lies on it. Needs neither liquid.
+ */
+function faultOfBoiling(model: ThermoModel, z: Float64Array, answer: FlashAnswer): string | undefined {
+  const { phases, T_K, P_Pa } = answer;
+  const [vapour] = phases;
+  const below = lowestTrial(model, T_K, P_Pa, vapour!, vapour!);
+  if (below < -1e-8) return `a trial phase lies ${below} below the plane of the boiling liquids`;
+  if (!model.hasEntropy) return undefined;
+  const gas = model.makeProps();
+  const whole = model.makeProps();
+  model.evaluate('vapour', T_K, P_Pa, vapour!.x, 0, gas);
+  model.evaluate('liquid', T_K, P_Pa, z, 1, whole);
+  const RT = 8.314462618 * T_K;
+  let off = (whole.h_J_mol - answer.h_J_mol) / RT - (whole.s_J_molK - answer.s_J_molK) / 8.314462618;
+  for (let i = 0; i < z.length; i++) {
+    const apart = Math.log(vapour!.x[i]!) + gas.lnPhi[i]! - Math.log(z[i]!) - whole.lnPhi[i]!;
+    off += z[i]! * apart;
+  }
+  return Math.abs(off) < 1e-8 ? undefined : `boiling liquids lie ${off} off their plane`;
 }
 
 function sideOf(answer: FlashAnswer, k: number): Side {

@@ -1,45 +1,29 @@
 import { startBySums } from './absorber';
+import { explain, type Failure, isTrivial, standing } from './failure';
 import { type Guess, guessOf } from './guess';
-import { Newton, type NewtonEnd, type Wanted } from './newton';
+import type { Newton, Wanted } from './newton';
+import { directParameters, drawTargets, type Placed } from './parameters';
 import { type Sweeps, startBySweeps } from './start';
-import { StageSystem, shapeOf } from './system';
-import { flowTarget, naturalOf, type Target, targetOf } from './targets';
-import type { Attempt, ColumnState, ColumnTask, Effort, Fixing } from './types';
+import { put, restore, stateOf } from './state';
+import type { StageSystem } from './system';
+import { naturalOf, targetOf } from './targets';
+import type { Attempt, ColumnState, ColumnTask, Effort } from './types';
+import { type ColumnWork, workFor } from './work';
 
 export type ColumnEnd =
   | { readonly state: 'solved'; readonly system: StageSystem; readonly effort: Effort }
   | { readonly state: 'no-solution'; readonly failure: Failure; readonly effort: Effort };
 
-/** Where the best attempt stood when it was given up. */
-export interface Failure {
-  readonly why: 'dries' | 'trivial' | 'no-convergence' | 'out-of-reach';
-  /** Place of the worst residual, or the one that runs dry. */
-  readonly place: number;
-  /** 'dries': what runs out there. */
-  readonly phase?: 'liquid' | 'vapour';
-  readonly residual: number;
-  readonly of: 'balance' | 'equilibrium' | 'energy';
-  /** 'out-of-reach': how much of the way from a plain column to what is asked was possible, and which fixing. */
-  readonly way?: number;
-  readonly fixing?: number;
-  /** 'out-of-reach': what was reached instead of that fixing's value, in its own unit. */
-  readonly reached?: number;
-}
-
-const PLAIN: Sweeps = { simple: 6, model: 3, share: 1 };
+const PLAIN: Sweeps = { simple: 8, model: 6, share: 0.5 };
 const STARTS: readonly (readonly [Attempt, Sweeps])[] = [
   ['plain-start', PLAIN],
-  ['more-sweeps', { simple: 2, model: 40, share: 1 }],
-  ['wilson-sweeps', { simple: 12, model: 0, share: 1 }],
-  ['slow-sweeps', { simple: 2, model: 200, share: 0.5 }],
+  ['more-sweeps', { simple: 12, model: 60, share: 0.3 }],
 ];
 const ITERATIONS = 40;
 const WARM_ITERATIONS = 14;
 /** Steps of a scan: how long in the logarithm of a parameter, how many each way. */
 const SCAN_STEP = 0.25;
 const SCAN_STEPS = 20;
-/** A place is dry below this share of the feed. */
-const DRY = 1e-7;
 
 /** A solve of one column: its system, its scratch, and the order in which starts are tried. */
 class Search {
@@ -109,7 +93,25 @@ class Search {
       this.start(guess, sweeps);
       if (this.attempt(name, this.wanted, ITERATIONS)) return true;
     }
-    return false;
+    return this.fromOverflow(guess, this.wanted);
+  }
+
+  /** Constant molar overflow first, then step by step to the model's enthalpies. */
+  private fromOverflow(guess: Guess, wanted: Wanted): boolean {
+    const { system: s } = this;
+    this.start(guess, PLAIN);
+    s.realHeat = 0;
+    const done =
+      this.attempt('heats', wanted, ITERATIONS) &&
+      this.follow(
+        wanted,
+        (way) => {
+          s.realHeat = way;
+        },
+        1,
+      );
+    s.realHeat = 1;
+    return done;
   }
 
   /** A plain column first: reflux ratio and flow as guessed; then step by step to what is asked. */
@@ -138,7 +140,7 @@ class Search {
       this.start(guess, sweeps);
       if (this.attempt('plain-then-move', plain, ITERATIONS)) return true;
     }
-    return false;
+    return this.fromOverflow(guess, plain);
   }
 
   /** Another plain column, far from dry: more reflux where that is open, else a distillate between what is possible. */
@@ -156,19 +158,19 @@ class Search {
     this.setDirect();
   }
 
-  /** From a solved system at 0 of the way to 1 in steps that adapt; false when it gets stuck. */
-  private follow(wanted: Wanted, set: (way: number) => void): boolean {
+  /** From a solved system at 0 of the way to 1 in steps that adapt, the first as given; false when it gets stuck. */
+  private follow(wanted: Wanted, set: (way: number) => void, first = 0.25): boolean {
     const { system: s } = this;
     const kept = stateOf(s);
     let done = 0;
-    let step = 0.25;
+    let step = first;
     for (let k = 0; k < 60; k++) {
       const next = Math.min(1, done + step);
       set(next);
       const end = this.newton.run(wanted, { iterations: 18, resets: false });
       this.effort.iterations += end.iterations;
       this.way = done;
-      if (end.end === 'solved' && !this.isTrivial()) {
+      if (end.end === 'solved' && !isTrivial(this.system)) {
         done = next;
         this.effort.residual = end.residual;
         if (done === 1) return true;
@@ -176,7 +178,7 @@ class Search {
         step *= 2;
         continue;
       }
-      this.failure = this.explain(end);
+      this.failure = explain(this.system, end);
       restore(s, kept);
       step /= 2;
       if (step < 1 / 256) break;
@@ -240,7 +242,7 @@ class Search {
     const end = this.newton.run(wanted, { iterations: 18, resets: false });
     this.effort.iterations += end.iterations;
     this.effort.residual = end.residual;
-    return end.end === 'solved' && !this.isTrivial();
+    return end.end === 'solved' && !isTrivial(this.system);
   }
 
   /** A parameter further on; of the bottoms the share of the whole, so that neither product vanishes. */
@@ -265,7 +267,7 @@ class Search {
     const target = this.wanted.targets[fixing]!;
     const { index, fixed } = this.moved[fixing]!;
     const reached = naturalOf(this.system, fixed, target.measure());
-    this.failure = { ...this.standing(), why: 'out-of-reach', way, fixing: index, reached };
+    this.failure = { ...standing(this.system), why: 'out-of-reach', way, fixing: index, reached };
     if (way > (this.reach?.way ?? -1)) this.reach = this.failure;
   }
 
@@ -276,38 +278,8 @@ class Search {
     const end = this.newton.run(wanted, { iterations, resets: ends && name !== 'warm' });
     effort.iterations += end.iterations;
     effort.residual = end.residual;
-    if (end.end === 'solved' && !this.isTrivial()) return true;
-    this.failure = this.explain(end);
-    return false;
-  }
-
-  private explain(end: NewtonEnd): Failure {
-    const { system: s } = this;
-    if (end.end === 'solved') return { ...this.standing(), why: 'trivial' };
-    for (let j = 0; j < s.places; j++) {
-      const L = s.L[j]! / s.feedTotal;
-      const V = s.V[j]! / s.feedTotal;
-      if (L < DRY || V < DRY)
-        return { ...this.standing(), why: 'dries', place: j, phase: L < V ? 'liquid' : 'vapour' };
-    }
-    return this.standing();
-  }
-
-  private standing(): Failure {
-    const worst = this.system.worst();
-    return { why: 'no-convergence', place: worst.place, residual: worst.value, of: worst.of };
-  }
-
-  /** Both phases of a stage are one: an answer of the equations, not of the column. */
-  private isTrivial(): boolean {
-    const { system: s } = this;
-    for (let j = 0; j < s.places; j++) {
-      let size = 0;
-      for (let i = j * s.n; i < (j + 1) * s.n; i++)
-        size = Math.max(size, Math.abs(Math.log((s.v[i]! * s.L[j]!) / (s.l[i]! * s.V[j]!))));
-      const volumes = s.vap[j]!.v_m3_mol / s.liq[j]!.v_m3_mol;
-      if (size < 1e-5 && volumes < 1.01) return true;
-    }
+    if (end.end === 'solved' && !isTrivial(this.system)) return true;
+    this.failure = explain(this.system, end);
     return false;
   }
 
@@ -319,77 +291,8 @@ class Search {
 const SUM_STARTS: readonly (readonly [Attempt, number, number])[] = [
   ['plain-start', 6, 2],
   ['more-sweeps', 30, 20],
-  ['wilson-sweeps', 12, 0],
+  ['no-model-sweeps', 12, 0],
 ];
-
-interface Placed {
-  readonly index: number;
-  readonly fixed: Fixing;
-}
-
-const drawTargets = (s: StageSystem): Target[] => s.task.draws.map((d, k) => flowTarget(s, k, d.flow));
-
-/** Fixings that are parameters themselves, by parameter; and the others. */
-function directParameters(
-  s: StageSystem,
-  fixed: readonly Fixing[],
-): { readonly direct: ReadonlyMap<number, number>; readonly left: readonly Placed[] } {
-  const direct = new Map<number, number>();
-  const left: Placed[] = [];
-  const bottoms = s.movers.findIndex((m) => m.moves === 'bottoms');
-  const { draws } = s.task;
-  fixed.forEach((x, index) => {
-    if (x.fix === 'refluxRatio') direct.set(0, s.totalCondenser ? 1 / x.value : x.value);
-    else if (x.fix === 'flow' && x.flow.basis === 'mole' && bottoms >= 0 && x.product === 'bottoms')
-      direct.set(bottoms, x.flow.value);
-    else if (
-      x.fix === 'flow' &&
-      x.flow.basis === 'mole' &&
-      bottoms >= 0 &&
-      x.product === 'top' &&
-      draws.every((d) => d.flow.basis === 'mole')
-    )
-      direct.set(bottoms, s.feedTotal - x.flow.value - draws.reduce((sum, d) => sum + d.flow.value, 0));
-    else left.push({ index, fixed: x });
-  });
-  return { direct, left };
-}
-
-export const stateOf = (s: StageSystem): ColumnState => ({
-  l: s.l.slice(),
-  v: s.v.slice(),
-  T_K: s.T.slice(),
-  p: s.p.slice(),
-});
-
-function put(s: StageSystem, kept: ColumnState): void {
-  kept.l.set(s.l);
-  kept.v.set(s.v);
-  kept.T_K.set(s.T);
-  kept.p.set(s.p);
-}
-
-function restore(s: StageSystem, kept: ColumnState): void {
-  s.l.set(kept.l);
-  s.v.set(kept.v);
-  s.T.set(kept.T_K);
-  s.p.set(kept.p);
-}
-
-/** Scratch of columns of one shape and one model; its contents mean nothing between solves. */
-export interface ColumnWork {
-  readonly shape: string;
-  readonly system: StageSystem;
-  readonly newton: Newton;
-}
-
-/** The workspace for a task: the one given if it fits, else a new one. */
-export function workFor(task: ColumnTask, known?: ColumnWork): ColumnWork {
-  const shape = shapeOf(task);
-  if (known?.shape === shape && known.system.model === task.model) return known;
-  const system = new StageSystem(task);
-  return { shape, system, newton: new Newton(system) };
-}
 
 /**
  * Solves a column: from an earlier state when there is one, then from start values of its own, then from a plain column

@@ -10,8 +10,11 @@ export interface Sweeps {
   readonly share: number;
 }
 
-/** Largest change of temperature in one sweep with the model's K [K]. */
+/** Largest change of temperature in one sweep, with simple K-values and with the model's [K]. */
+const SIMPLE_STEP_K = 20;
 const MODEL_STEP_K = 10;
+/** Share of a new temperature that a sweep with simple K-values takes: all of it swings where K changes steeply with T. */
+const SIMPLE_SHARE = 0.4;
 
 /** Molar flows by constant overflow from the ends' flows and the feeds' vapour fractions, into L and V. */
 function constantOverflow(s: StageSystem, guess: Guess): void {
@@ -89,6 +92,36 @@ function scaleTo(s: StageSystem, keptL: Float64Array, keptV: Float64Array): void
   s.V.set(keptV);
 }
 
+/**
+ * Scales every chemical's flows so that the top product's total is met: component balances alone do not see it.
+ * Source: the theta method, Lyster et al., Pet. Refiner 38(6) (1959) 221.
+ */
+function meetTop(s: StageSystem, top: number, fed: Float64Array): void {
+  const { n, places, l, v, scratch: d } = s;
+  const share = s.totalCondenser ? s.rL[0]! - 1 : 1;
+  for (let i = 0; i < n; i++) d[i] = Math.min(share * (s.totalCondenser ? l : v)[i]!, fed[i]!);
+  const scale = (i: number, theta: number): number =>
+    fed[i]! / (d[i]! + theta * Math.max(fed[i]! - d[i]!, 1e-12 * fed[i]!));
+  let low = -40;
+  let high = 40;
+  for (let pass = 0; pass < 40; pass++) {
+    const middle = (low + high) / 2;
+    const theta = Math.exp(middle);
+    let sum = 0;
+    for (let i = 0; i < n; i++) sum += d[i]! * scale(i, theta);
+    if (sum > top) low = middle;
+    else high = middle;
+  }
+  const theta = Math.exp((low + high) / 2);
+  for (let i = 0; i < n; i++) {
+    const r = scale(i, theta);
+    for (let at = i; at < places * n; at += n) {
+      l[at]! *= r;
+      v[at]! *= r;
+    }
+  }
+}
+
 /** Share r of what leaves that is drawn, from constant overflow and wanted draws; sets the parameters. */
 function setParameters(s: StageSystem, guess: Guess): void {
   const { movers, p } = s;
@@ -106,12 +139,13 @@ function setParameters(s: StageSystem, guess: Guess): void {
 
 /**
  * Start values for a column with at least one end: constant molar overflow, then sweeps over component flows and bubble
- * points, first with simple K-values, then with the model's.
+ * points, first with simple K-values, then with the model's. After every sweep temperatures are put in order, coolest at the
+ * top: sweeps swing, and waves in the profile would grow.
  * Mutates: l, v, T, p of the system.
  * Source: bubble-point sweeps after Wang & Henke, Hydrocarbon Process. 45 (1966) 155.
  */
 export function startBySweeps(s: StageSystem, guess: Guess, sweeps: Sweeps): void {
-  const { n, places, T, task } = s;
+  const { n, places, T } = s;
   constantOverflow(s, guess);
   setParameters(s, guess);
   s.readMovers();
@@ -121,41 +155,63 @@ export function startBySweeps(s: StageSystem, guess: Guess, sweeps: Sweeps): voi
     T[j] = guess.topT_K + ((guess.bottomT_K - guess.topT_K) * j) / Math.max(places - 1, 1);
   const K = new Float64Array(places * n);
   const diag = new Float64Array(places);
-  const { simple } = guess;
+  const fed = new Float64Array(n);
+  for (let at = 0; at < s.f.length; at++) fed[at % n]! += s.f[at]!;
+  const settle = (): void => {
+    componentFlows(s, K, diag);
+    meetTop(s, guess.top, fed);
+    scaleTo(s, keptL, keptV);
+  };
   for (let pass = 0; pass <= sweeps.simple; pass++) {
-    for (let j = 0; j < places; j++) {
-      const u = 1 / T[j]!;
-      const lnP = Math.log(simple.P_Pa / task.P_Pa[j]!);
-      for (let i = 0; i < n; i++) K[j * n + i] = Math.exp(simple.a[i]! - simple.b[i]! * u + lnP);
-    }
-    componentFlows(s, K, diag);
-    scaleTo(s, keptL, keptV);
-    if (pass === sweeps.simple) break;
-    for (let j = 0; j < places; j++) {
-      let sum = 0;
-      let slope = 0;
-      const at = j * n;
-      for (let i = 0; i < n; i++) {
-        const y = (K[at + i]! * s.l[at + i]!) / keptL[j]!;
-        sum += y;
-        slope += y * simple.b[i]!;
-      }
-      // ln(sum K x) is close to linear in 1/T, with this slope.
-      const u = 1 / T[j]! + (Math.log(sum) * sum) / slope;
-      const next = u > 0 ? 1 / u : T[j]! + 20;
-      T[j] = T[j]! + Math.min(Math.max(next - T[j]!, -20), 20);
-    }
+    simpleKs(s, guess.simple, K);
+    settle();
+    if (pass < sweeps.simple) simpleSweep(s, guess.simple, K, keptL);
   }
+  const before = new Float64Array(places);
   for (let pass = 0; pass < sweeps.model; pass++) {
-    for (let j = 0; j < places; j++) modelSweep(s, j, simple, K, sweeps.share);
-    componentFlows(s, K, diag);
-    scaleTo(s, keptL, keptV);
+    before.set(T);
+    for (let j = 0; j < places; j++) modelSweep(s, j, guess.simple, K, sweeps.share);
+    T.sort();
+    // K were those of the temperatures before.
+    for (let j = 0; j < places; j++) {
+      const turn = 1 / before[j]! - 1 / T[j]!;
+      for (let i = 0; i < n; i++) K[j * n + i]! *= Math.exp(guess.simple.b[i]! * turn);
+    }
+    settle();
   }
+}
+
+function simpleKs({ n, places, T, task }: StageSystem, { a, b, P_Pa }: SimpleK, K: Float64Array): void {
+  for (let j = 0; j < places; j++) {
+    const u = 1 / T[j]!;
+    const lnP = Math.log(P_Pa / task.P_Pa[j]!);
+    for (let i = 0; i < n; i++) K[j * n + i] = Math.exp(a[i]! - b[i]! * u + lnP);
+  }
+}
+
+/** Temperatures towards the bubble points that simple K-values give. */
+function simpleSweep(s: StageSystem, { b }: SimpleK, K: Float64Array, L: Float64Array): void {
+  const { n, places, T, l } = s;
+  for (let j = 0; j < places; j++) {
+    let sum = 0;
+    let slope = 0;
+    const at = j * n;
+    for (let i = 0; i < n; i++) {
+      const y = (K[at + i]! * l[at + i]!) / L[j]!;
+      sum += y;
+      slope += y * b[i]!;
+    }
+    // ln(sum K x) is close to linear in 1/T, with this slope.
+    const u = 1 / T[j]! + (Math.log(sum) * sum) / slope;
+    const next = u > 0 ? 1 / u : T[j]! + SIMPLE_STEP_K;
+    T[j] = T[j]! + SIMPLE_SHARE * Math.min(Math.max(next - T[j]!, -SIMPLE_STEP_K), SIMPLE_STEP_K);
+  }
+  T.sort();
 }
 
 /**
  * One step of a place towards its bubble point with the model's K, whose change with temperature is taken from the simple
- * K-values: it needs no derivatives. K of the place follow the temperature.
+ * K-values: it needs no derivatives. K stay those of the temperature before.
  */
 function modelSweep(s: StageSystem, j: number, simple: SimpleK, K: Float64Array, share: number): void {
   const { n, l, v, T, model, task, scratch: x } = s;
@@ -185,8 +241,5 @@ function modelSweep(s: StageSystem, j: number, simple: SimpleK, K: Float64Array,
   }
   const u = 1 / before + (Math.log(sum) * sum) / slope;
   const next = u > 0 ? 1 / u : before + MODEL_STEP_K;
-  const step = share * Math.min(Math.max(next - before, -MODEL_STEP_K), MODEL_STEP_K);
-  T[j] = before + step;
-  const turn = 1 / before - 1 / T[j]!;
-  for (let i = 0; i < n; i++) K[at + i]! *= Math.exp(simple.b[i]! * turn);
+  T[j] = before + share * Math.min(Math.max(next - before, -MODEL_STEP_K), MODEL_STEP_K);
 }

@@ -64,8 +64,15 @@ export class StageSystem {
   readonly f: Float64Array;
   readonly F: Float64Array;
   readonly HF: Float64Array;
+  /** Vapour that the feeds bring, by place [mol/s]. */
+  private readonly fedV: Float64Array;
   feedTotal = 0;
   energyScale = 0;
+  /**
+   * Share of the model's enthalpies in the energy balances; the rest counts ENERGY_J_MOL for every vapour and nothing for
+   * liquids, which is constant molar overflow. 1 except on the way to an answer.
+   */
+  realHeat = 1;
 
   /** Residuals: mole balances [mol/s], equilibrium [-], energy or what stands in its place [-]. */
   readonly M: Float64Array;
@@ -112,6 +119,7 @@ export class StageSystem {
     this.f = vector(places * n);
     this.F = vector(places);
     this.HF = vector(places);
+    this.fedV = vector(places);
     this.M = vector(places * n);
     this.Q = vector(places * n);
     this.H = vector(places);
@@ -128,6 +136,8 @@ export class StageSystem {
     f.fill(0);
     F.fill(0);
     HF.fill(0);
+    this.fedV.fill(0);
+    this.realHeat = 1;
     this.theta.fill(1);
     let total = 0;
     for (const feed of task.feeds) {
@@ -138,6 +148,7 @@ export class StageSystem {
       }
       F[feed.place]! += sum;
       HF[feed.place]! += feed.H_W;
+      this.fedV[feed.place]! += sum * feed.vapourFraction;
       total += sum;
     }
     this.feedTotal = total;
@@ -177,6 +188,7 @@ export class StageSystem {
       for (let i = 0; i < n; i++) x[i] = v[at + i]! / sumV;
       const vap = this.vap[j]!;
       model.evaluate('vapour', T[j]!, P, x, level, vap);
+      if (this.realHeat !== 1) this.mixHeats(j, level);
       if (!Number.isFinite(liq.h_J_mol + vap.h_J_mol + liq.lnPhi[0]! + vap.lnPhi[0]!)) return false;
     }
     this.balances();
@@ -184,6 +196,26 @@ export class StageSystem {
     this.energies();
     this.summarise();
     return true;
+  }
+
+  /** Enthalpies of place j as realHeat says. At level 1 the derivatives are those of before, mixed already. */
+  private mixHeats(j: number, level: 1 | 2): void {
+    const mix = (props: PhaseProps, h: number): void => {
+      const rest = (1 - this.realHeat) * h;
+      props.h_J_mol = this.realHeat * props.h_J_mol + rest;
+      if (level === 1) return;
+      props.cp_J_molK *= this.realHeat;
+      for (let i = 0; i < this.n; i++) props.hPartial[i] = this.realHeat * props.hPartial[i]! + rest;
+    };
+    mix(this.liq[j]!, 0);
+    mix(this.vap[j]!, ENERGY_J_MOL);
+    if (j === 0 && this.reflux !== this.liq[0]) mix(this.reflux, 0);
+  }
+
+  /** Enthalpy that the feeds of place j bring, as realHeat says [W]. */
+  private fedHeat(j: number): number {
+    const { realHeat, HF, fedV } = this;
+    return realHeat === 1 ? HF[j]! : realHeat * HF[j]! + (1 - realHeat) * fedV[j]! * ENERGY_J_MOL;
   }
 
   /** L and V from l and v. */
@@ -267,7 +299,8 @@ export class StageSystem {
     const { places, L, V, H, rL, rV, energyScale, feedTotal, totalCondenser, p, task } = this;
     for (let j = 0; j < places; j++) {
       if (this.balancesEnergy(j)) {
-        let h = rL[j]! * L[j]! * this.liq[j]!.h_J_mol + rV[j]! * V[j]! * this.vap[j]!.h_J_mol - this.HF[j]!;
+        let h =
+          rL[j]! * L[j]! * this.liq[j]!.h_J_mol + rV[j]! * V[j]! * this.vap[j]!.h_J_mol - this.fedHeat(j);
         if (j > 0) h -= L[j - 1]! * this.leaving(j - 1).h_J_mol;
         if (j + 1 < places) h -= V[j + 1]! * this.vap[j + 1]!.h_J_mol;
         H[j] = h / energyScale;

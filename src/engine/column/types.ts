@@ -92,7 +92,9 @@ export type Attempt =
   | 'warm'
   | 'plain-start'
   | 'more-sweeps'
-  | 'wilson-sweeps'
-  | 'slow-sweeps'
+  /** Absorbers: start K-values alone. */
+  | 'no-model-sweeps'
+  /** Constant molar overflow, then the model's enthalpies by and by. */
+  | 'heats'
   | 'plain-then-move'
   | 'scan';

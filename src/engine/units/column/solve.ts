@@ -1,14 +1,10 @@
-import {
-  type ColumnEnd,
-  type ColumnWork,
-  type Failure,
-  solveColumn,
-  stateOf,
-  workFor,
-} from '../../column/solve';
+import type { Failure } from '../../column/failure';
+import { type ColumnEnd, solveColumn } from '../../column/solve';
+import { stateOf } from '../../column/state';
 import type { StageSystem } from '../../column/system';
 import { dutyOf } from '../../column/targets';
 import type { ColumnState, ColumnTask } from '../../column/types';
+import { type ColumnWork, workFor } from '../../column/work';
 import { type Evidence, type Finding, noSolution, type Outcome, solved } from '../../outcome';
 import type { Answer, Call, UnitKind } from '../types';
 import { fedVapour, impossibleBy } from './feasible';
