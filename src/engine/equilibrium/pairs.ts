@@ -93,7 +93,7 @@ function crossesAgain(state: State, a: number, b: number): boolean {
 function atTemperature(w: FlashWork, z: Float64Array, T: number, target: number, of: Caloric): PairEnd {
   const single: State = (lnP) =>
     flashTP(w, z, T, Math.exp(lnP), 'nothing') ? wholeOf(w, of) - target : Number.NaN;
-  const inside: State = (beta) => (atVapour(w, z, T, beta) ? wholeOf(w, of) - target : Number.NaN);
+  const inside: State = (beta) => (atVapour(w, z, T, beta) ? totalOf(w, of) - target : Number.NaN);
   const dew = inside(1);
   const lnDew = Math.log(w.P_Pa);
   const bubble = inside(0);
@@ -128,7 +128,7 @@ function atFraction(w: FlashWork, z: Float64Array, beta: number, target: number,
       if (!saturateAtP(w, P)) return Number.NaN;
       share(w, beta);
     } else if (flashFraction(w, z, beta, 'T', P, undefined) !== 'solved') return Number.NaN;
-    return wholeOf(w, of) - target;
+    return totalOf(w, of) - target;
   };
   // Above the mixture's critical pressure there is nothing to find, and each miss is a long search.
   const most = 2 * w.model.pseudoCritical(w.feed.x).P_Pa;

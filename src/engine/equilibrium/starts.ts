@@ -135,7 +135,30 @@ function tame(W: Float64Array, n: number): void {
   for (let i = 0; i < n; i++) W[i] = W[i]! * scale;
 }
 
-/** Tests the phase in `phase` against a vapour-like trial only. */
+/**
+ * Tests the phase in `phase` against a vapour-like trial only; w.trial then holds what lies below its plane. A trial that
+ * starts as a vapour may end as one more liquid.
+ */
+export function lighterBelow(
+  w: FlashWork,
+  T: number,
+  P: number,
+  phase: Slot,
+  other: Slot | undefined,
+): 'vapour' | 'liquid' | 'nothing' {
+  const { n, model, K, startW } = w;
+  setPlane(w, phase);
+  model.startK(T, P, K);
+  for (let i = 0; i < n; i++) startW[i] = phase.x[i]! * K[i]!;
+  tame(startW, n);
+  w.trial.side = 'vapour';
+  if (follow(w, T, P, phase, other) || pureTrial(w, T, P, w.lightest, 'vapour', phase, other)) {
+    return liquidLike(w, w.trial, T) ? 'liquid' : 'vapour';
+  }
+  return 'nothing';
+}
+
+/** Whether a vapour lies below the plane of a phase. */
 export function vapourBelow(
   w: FlashWork,
   T: number,
@@ -143,12 +166,5 @@ export function vapourBelow(
   phase: Slot,
   other: Slot | undefined,
 ): boolean {
-  const { n, model, K, startW } = w;
-  setPlane(w, phase);
-  model.startK(T, P, K);
-  for (let i = 0; i < n; i++) startW[i] = phase.x[i]! * K[i]!;
-  tame(startW, n);
-  w.trial.side = 'vapour';
-  if (follow(w, T, P, phase, other)) return true;
-  return pureTrial(w, T, P, w.lightest, 'vapour', phase, other);
+  return lighterBelow(w, T, P, phase, other) === 'vapour';
 }

@@ -1,13 +1,13 @@
 import { newtonFraction, type Sought, startPoint } from './fraction';
+import { bubbleOfTwo, partInTwo } from './incipient';
 import { expansionOf } from './naming';
 import { mayComeAgain } from './several';
 import { liquidLike, setPlane } from './stability';
-import { hiddenLiquid, isUnstable, vapourBelow } from './starts';
+import { hiddenLiquid, isUnstable, lighterBelow } from './starts';
+import { type FractionSearch, searchFraction } from './sweep';
 import { flashTP } from './tp';
 import { LEAST_T_K, MOST_T_K } from './whole';
 import type { FlashWork } from './work';
-
-export type FractionSearch = 'solved' | 'no-convergence' | 'no-such-state' | 'out-of-range';
 
 /**
  * Phases of z at a given vapour fraction and a given pressure (temperature is sought) or temperature (pressure is
@@ -30,16 +30,19 @@ export function flashFraction(
   w.iterations = 0;
   w.hidden = false;
   w.lumped = false;
+  w.told = undefined;
+  const stands = (): boolean =>
+    accept(w) && (boilsAsTwo(w, z, beta, sought, given) || isStable(w, z, beta, sought, given));
   const found = (from: number, ease: number): boolean =>
     newtonFraction(w, z, beta, sought, given, from, ease) === 'equal' &&
-    accept(w) &&
-    isThinSide(w, z, beta, sought, given);
+    stands() &&
+    (w.told !== undefined || isThinSide(w, z, beta, sought, given));
   if (start !== undefined && found(start, 0)) return 'solved';
   const first = startPoint(w, z, beta, sought, given);
   if (found(first, 4)) return 'solved';
   startPoint(w, z, beta, sought, given);
   if (found(first, 15)) return 'solved';
-  return searchFraction(w, z, beta, sought, given, first);
+  return searchFraction(w, z, beta, sought, given, first, stands);
 }
 
 /** A step to the thin side that is well above rounding and below what turns a curve. */
@@ -52,26 +55,72 @@ const LESS = 1e-6;
  */
 function isThinSide(w: FlashWork, z: Float64Array, beta: number, sought: Sought, given: number): boolean {
   if (!mayComeAgain(w.model, z, sought === 'T' ? 'P' : 'T', given)) return true;
+  return withAside(w, z, beta, sought, given, () => {
+    const ok =
+      sought === 'T'
+        ? flashTP(w, z, w.T_K * ASIDE.T, given, 'nothing')
+        : flashTP(w, z, given, w.P_Pa / ASIDE.P, 'nothing');
+    return !(ok && w.phases === 2 && w.vap.total < beta - LESS);
+  });
+}
+
+/** At a bubble point beside which another liquid could form the feed itself parts: it is two liquids that boil. */
+function boilsAsTwo(w: FlashWork, z: Float64Array, beta: number, sought: Sought, given: number): boolean {
+  if (!w.hidden || beta > 0) return false;
+  const vapour = w.vap.x.slice();
+  const u = sought === 'T' ? w.T_K : w.P_Pa;
+  const lnK = Float64Array.from(w.vap.x, (y, i) => Math.log(y / w.liq.x[i]!));
+  const [T, P] = [w.T_K, w.P_Pa];
+  // What lies below the two liquids, if anything does, is one of a pair that lies lower.
+  for (let pair = 0; pair < 2; pair++) {
+    w.T_K = T;
+    w.P_Pa = P;
+    if (!partInTwo(w, z)) break;
+    if (bubbleOfTwo(w, z, sought, given, u, vapour)) return true;
+  }
+  w.lnK.set(lnK);
+  newtonFraction(w, z, beta, sought, given, u, 0);
+  accept(w);
+  return false;
+}
+
+/**
+ * Where another liquid could form, the stable state at this temperature and pressure may be two liquids without a vapour, or
+ * vapour with the other liquid: what Newton found is then not the state that has this vapour fraction.
+ */
+function isStable(w: FlashWork, z: Float64Array, beta: number, sought: Sought, given: number): boolean {
+  if (!w.hidden) return true;
+  return withAside(w, z, beta, sought, given, () => {
+    if (!flashTP(w, z, w.T_K, w.P_Pa, 'nothing')) return false;
+    return w.phases === 2 && Math.abs(w.vap.total - beta) < LESS;
+  });
+}
+
+/** Asks something that uses the workspace, and brings back what Newton found. */
+function withAside(
+  w: FlashWork,
+  z: Float64Array,
+  beta: number,
+  sought: Sought,
+  given: number,
+  ask: () => boolean,
+): boolean {
   const u = sought === 'T' ? w.T_K : w.P_Pa;
   const { iterations } = w;
   const lnK = Float64Array.from(w.vap.x, (y, i) => Math.log(y / w.liq.x[i]!));
-  const ok =
-    sought === 'T'
-      ? flashTP(w, z, u * ASIDE.T, given, 'nothing')
-      : flashTP(w, z, given, u / ASIDE.P, 'nothing');
-  const less = ok && w.phases === 2 && w.vap.total < beta - LESS;
+  const told = ask();
+  w.iterations += iterations;
+  if (!told) return false;
   w.lnK.set(lnK);
-  w.iterations = iterations;
-  const back = newtonFraction(w, z, beta, sought, given, u, 0) === 'equal' && accept(w);
-  return back && !less;
+  return newtonFraction(w, z, beta, sought, given, u, 0) === 'equal' && accept(w);
 }
 
 /** Whether what Newton found is a vapour and a liquid; looks for a second liquid beside it. */
 function accept(w: FlashWork): boolean {
   const { vap, liq, T_K: T, P_Pa: P } = w;
   if (!(T > LEAST_T_K && T < MOST_T_K)) return false;
-  const lighter = expansionOf(w.model, vap.x, vap.props) > expansionOf(w.model, liq.x, liq.props);
-  if (!lighter && (vap.props.single || liq.props.single)) return false;
+  const inOrder = expansionOf(w.model, vap.x, vap.props) > expansionOf(w.model, liq.x, liq.props);
+  if (!inOrder && (vap.props.single || liq.props.single)) return false;
   w.phases = 2;
   w.hidden = false;
   if (Math.abs(vap.props.v_m3_mol / liq.props.v_m3_mol - 1) < ALIKE) {
@@ -84,78 +133,15 @@ function accept(w: FlashWork): boolean {
   if (w.formers.length === 0) return true;
   if (liquidLike(w, vap, T) && liquidLike(w, liq, T)) return false;
   // A lighter vapour below the common plane: this is not the stable split.
-  if (vapourBelow(w, T, P, liq, vap)) return false;
-  setPlane(w, vap);
-  if (hiddenLiquid(w, T, P, vap, liq)) {
+  const below = lighterBelow(w, T, P, liq, vap);
+  if (below === 'vapour') return false;
+  if (below === 'nothing') setPlane(w, vap);
+  if (below === 'liquid' || hiddenLiquid(w, T, P, vap, liq)) {
     w.hidden = true;
     w.hiddenX.set(w.trial.x);
   }
   return true;
 }
 
-const GRID = 48;
 /** Volumes that differ by less than this share. */
 const ALIKE = 0.03;
-
-/**
- * The slow, sure way: flashes at given T and P from the thin side to the dense one, until the vapour fraction passes
- * the wanted value; then halves, then Newton.
- */
-function searchFraction(
-  w: FlashWork,
-  z: Float64Array,
-  beta: number,
-  sought: Sought,
-  given: number,
-  centre: number,
-): FractionSearch {
-  let iterations = w.iterations;
-  const at = (u: number): number | undefined => {
-    const ok = sought === 'T' ? flashTP(w, z, u, given, 'nothing') : flashTP(w, z, given, u, 'nothing');
-    iterations += w.iterations;
-    if (!ok) return undefined;
-    if (w.phases === 2) return w.vap.total;
-    const critical = w.model.pseudoCritical(w.feed.x);
-    // Beyond the ends, so that bubble and dew points are crossings too.
-    return !w.lumped && w.feed.props.v_m3_mol > critical.v_m3_mol ? 2 : -1;
-  };
-  const finish = (u: number): boolean => {
-    for (let i = 0; i < w.n; i++) w.lnK[i] = Math.log(w.vap.x[i]! / w.liq.x[i]!);
-    w.iterations = 0;
-    const end = newtonFraction(w, z, beta, sought, given, u, 0);
-    iterations += w.iterations;
-    return end === 'equal' && accept(w);
-  };
-  // From thin to dense: temperature down, pressure up.
-  const thin = sought === 'T' ? Math.min(centre * 2, MOST_T_K) : centre * 1e-3;
-  const dense = sought === 'T' ? Math.max(centre * 0.35, LEAST_T_K) : centre * 1e3;
-  let uBefore = thin;
-  let before = at(thin);
-  for (let k = 1; k <= GRID; k++) {
-    const u = thin * (dense / thin) ** (k / GRID);
-    const now = at(u);
-    if (before !== undefined && now !== undefined && (before - beta) * (now - beta) <= 0 && before !== now) {
-      let a = uBefore;
-      let fa = before;
-      let b = u;
-      for (let half = 0; half < 60; half++) {
-        const middle = Math.sqrt(a * b);
-        const f = at(middle);
-        if (f === undefined) break;
-        if (w.phases === 2 && (Math.abs(f - beta) < 0.05 || half > 6) && finish(middle)) {
-          w.iterations = iterations;
-          return 'solved';
-        }
-        if ((fa - beta) * (f - beta) > 0) {
-          a = middle;
-          fa = f;
-        } else b = middle;
-        if (Math.abs(Math.log(a / b)) < 1e-12) break;
-      }
-    }
-    uBefore = u;
-    before = now;
-  }
-  w.iterations = iterations;
-  return 'no-such-state';
-}
