@@ -19,10 +19,8 @@ export const TitleStrip = memo(function TitleStrip() {
       <span className="strip-title">{title.title?.trim() || 'Untitled sketch'}</span>
       <span>{title.revision ? `Rev ${title.revision}, draft` : 'No revision'}</span>
       <span>{modelWord(model)}</span>
-      <span className="strip-labels">
-        {labelsSentence(labels, measures)}
-        {omitted ? `; ${omitted}` : ''}
-      </span>
+      <span className="strip-labels">{labelsSentence(labels, measures)}</span>
+      {omitted ? <span>{omitted}</span> : null}
       <span className="strip-gap" />
       <WholeState />
     </footer>

@@ -156,6 +156,8 @@ function ledOnce(
   ) {
     return { points: straight, region: boxOfPiece(a.at, b.at, 6) };
   }
+  const exact = via.length > 0 && !detour ? asGiven(from, to, via, obstacles) : undefined;
+  if (exact) return exact;
   const [first, last] = [via[0], via.at(-1)];
   const [before, behind] = first && last ? [ahead(a, first), ahead(b, last)] : [halfGap(a, b), halfGap(a, b)];
   const start = along(a.at, a.side, stubOf(from, before, obstacles, detour?.stubs[0]));
@@ -174,6 +176,35 @@ function ledOnce(
     if (points) return { points: simplified([a.at, ...points, b.at]), region };
   }
   return undefined;
+}
+
+/** What a line moved by hand clears a symbol by: it only must not touch it [px]. */
+const BY_HAND = 2;
+
+const heads = (p: Point, q: Point): Point => [Math.sign(q[0] - p[0]), Math.sign(q[1] - p[1])];
+const isSame = (a: Point, b: Point): boolean => a[0] === b[0] && a[1] === b[1];
+
+/** The bends as they were set by hand, where they and the ports make a line of right angles that touches no symbol. */
+function asGiven(
+  from: RouteEnd,
+  to: RouteEnd,
+  via: readonly Point[],
+  obstacles: readonly Box[],
+): Route | undefined {
+  const points: readonly Point[] = [from.port.at, ...via, to.port.at];
+  const last = points.length - 2;
+  if (!isSame(heads(points[0]!, points[1]!), AWAY[from.port.side])) return undefined;
+  if (!isSame(heads(points[last + 1]!, points[last]!), AWAY[to.port.side])) return undefined;
+  for (let k = 0; k <= last; k++) {
+    const [p, q] = [points[k]!, points[k + 1]!];
+    if ((p[0] === q[0]) === (p[1] === q[1])) return undefined;
+    if (k > 0 && isSame(heads(points[k - 1]!, p), heads(q, p))) return undefined;
+    const own = [k === 0 ? from.own : undefined, k === last ? to.own : undefined];
+    const piece = boxOfPiece(p, q, BY_HAND);
+    if (obstacles.some((o) => !own.includes(o) && overlaps(o, piece))) return undefined;
+  }
+  const region = hull(points.map((p) => boxOfPiece(p, p, 2 * BY_HAND)))!;
+  return { points: simplified(points), region };
 }
 
 function throughStops(

@@ -9,6 +9,7 @@ import { DARK, LIGHT, PRINT } from '../../src/drawing/tokens';
 import type { DrawnState, Point } from '../../src/drawing/types';
 import type { StreamId, UnitId } from '../../src/engine/ids';
 import type { SketchUnit } from '../../src/sketch/types';
+import { LAWS } from './laws';
 import { randomSheet, seeded } from './random';
 import { inputOf, LET_DOWN, RECYCLE, SHEETS, sheetOf } from './sheets';
 
@@ -219,6 +220,51 @@ test('bends moved by hand are honoured, those inside a symbol are left out', () 
     [32, 0],
     [376, 0],
   ]);
+});
+
+describe('bends moved by hand', () => {
+  const given = [
+    [64, 0],
+    [64, -56],
+    [320, -56],
+    [320, 80],
+    [344, 80],
+    [344, 0],
+  ] as const;
+  const sketch = sheetOf(
+    [
+      ['feed', 'FEED-1', 0, 0],
+      ['product', 'PROD-1', 400, 0],
+      ['drum', 'V-1', 200, 40],
+    ],
+    [['1', 'FEED-1.out', 'PROD-1.in', given]],
+  );
+  const pointsOf = (of: typeof sketch) => buildScene(of, inputOf(of)).lines[0]!.points;
+  const moved = (tag: string, at: readonly [number, number]) => ({
+    ...sketch,
+    units: sketch.units.map((u) => (u.tag === tag ? { ...u, at } : u)),
+  });
+
+  test('make the line exactly as given where it has right angles and touches no symbol', () => {
+    expect(pointsOf(sketch)).toEqual([[32, 0], ...given, [376, 0]]);
+  });
+
+  test('lead the line on where a unit has moved and they no longer meet its port', () => {
+    const points = pointsOf(moved('PROD-1', [400, 24]));
+    for (const [x, y] of given.slice(1, 5)) {
+      const isOn = points.slice(1).some(([x2, y2], k) => {
+        const [x1, y1] = points[k]!;
+        return (x - x1) * (x - x2) <= 0 && (y - y1) * (y - y2) <= 0 && (x1 === x2 ? x === x1 : y === y1);
+      });
+      expect(isOn, `${x} ${y}`).toBe(true);
+    }
+    expect(points.at(-1)).toEqual([376, 24]);
+  });
+
+  test('give way to a symbol that came to stand on them', () => {
+    const sheet = moved('V-1', [200, -56]);
+    expect(LAWS['no line crosses a symbol']!(buildScene(sheet, inputOf(sheet)), sheet)).toEqual([]);
+  });
 });
 
 test('a hanging stream is a straight piece of 40 px with an arrowhead', () => {
