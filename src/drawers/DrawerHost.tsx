@@ -2,6 +2,7 @@ import { useEffect, useRef } from 'react';
 import { useSession, useSketch, useStores } from '../store/react';
 import type { DrawerChoice } from '../store/session';
 import { AssumptionsDrawer } from './AssumptionsDrawer';
+import { BasisDrawer } from './basis/BasisDrawer';
 import { ChemicalsDrawer } from './chemicals/ChemicalsDrawer';
 import { LimitsDrawer } from './LimitsDrawer';
 import { OWN_PARTS } from './own';
@@ -19,6 +20,7 @@ const NAMES: Readonly<Record<DrawerChoice['is'], string>> = {
   assumptions: 'Assumption register',
   chemicals: 'Chemicals drawer',
   sketch: 'Sketch drawer',
+  basis: 'Design basis drawer',
 };
 
 /** Where the keyboard begins: what the drawer names for it, else what needs a value, else its first control. */
@@ -106,6 +108,8 @@ function Content({ drawer }: { readonly drawer: DrawerChoice }) {
       return <LimitsDrawer />;
     case 'assumptions':
       return <AssumptionsDrawer />;
+    case 'basis':
+      return <BasisDrawer />;
     case 'chemicals':
       return <ChemicalsDrawer />;
     case 'sketch':

@@ -35,7 +35,7 @@ export interface ReportInput {
 export type SolvedStream = Extract<StreamResult, { state: 'solved' }>;
 
 /** Tables print absolute pressures; gauge ones have a row of their own. */
-export const measuresOf = (input: ReportInput): Measures =>
+export const measuresOf = (input: Pick<ReportInput, 'sketch'>): Measures =>
   withReference(sketchMeasures(input.sketch), 'absolute');
 
 export const solvedStream = (result: StreamResult | undefined): SolvedStream | undefined =>

@@ -6,6 +6,8 @@ import { left, text } from './cells';
 import { measuresOf, type ReportInput, type SolvedStream, solvedStream } from './input';
 import type { Row, Table } from './types';
 
+export { REQUIREMENT_KINDS } from '../sketch/documentTypes';
+
 export const REQUIREMENT_DIMS: Readonly<Record<RequirementKind, Dimension>> = {
   fraction: 'fraction',
   recovery: 'fraction',
@@ -23,8 +25,11 @@ export type Judged =
   | { readonly is: 'met' | 'missed'; readonly value: number; readonly by: number }
   | { readonly is: 'open'; readonly why: string };
 
+/** What judging needs to know. */
+export type JudgeInput = Pick<ReportInput, 'sketch' | 'basis' | 'streams' | 'sitePressure_Pa'>;
+
 /** A requirement against the results [SI]. `by`: how far it is missed, 0 when met. */
-export function judged(input: ReportInput, requirement: Requirement): Judged {
+export function judged(input: JudgeInput, requirement: Requirement): Judged {
   const { sketch } = input;
   if (!sketch.streams.some((stream) => stream.id === requirement.stream))
     return { is: 'open', why: 'the stream is not in the sketch any more' };
@@ -43,7 +48,7 @@ export function judged(input: ReportInput, requirement: Requirement): Judged {
 }
 
 function limitOf(
-  input: ReportInput,
+  input: JudgeInput,
   { of }: Requirement,
   limit: Quantity | undefined,
 ): number | 'unreadable' | undefined {
@@ -52,7 +57,7 @@ function limitOf(
   return read.ok ? read.si : 'unreadable';
 }
 
-function resultOf(input: ReportInput, requirement: Requirement, stream: SolvedStream): number | undefined {
+function resultOf(input: JudgeInput, requirement: Requirement, stream: SolvedStream): number | undefined {
   const at = input.basis.chemicals.findIndex((chemical) => chemical.id === requirement.chemical);
   const z = stream.z[at];
   switch (requirement.of) {
@@ -109,15 +114,30 @@ const asTyped = (limit: Quantity | undefined, of: RequirementKind): string => {
   return read.ok ? `${read.number} ${unitLabel(read.unit, read.dim)}`.trim() : String(limit);
 };
 
-function verdictText(verdict: Judged, said: (by: number) => string): string {
+/** A result or a difference of it in the measures, six and three figures: "99.87 %", "38.00 °C". */
+function said(input: JudgeInput, { of }: Requirement, si: number, isDifference: boolean): string {
+  const figures = isDifference ? 3 : 6;
+  if (REQUIREMENT_DIMS[of] === 'fraction') return `${formatSignificant(100 * si, figures)} %`;
+  const unit = displayUnit(REQUIREMENT_DIMS[of], measuresOf(input));
+  const shown = isDifference ? unit.toDisplay(si) - unit.toDisplay(0) : unit.toDisplay(si);
+  // A difference of temperatures or pressures counts from nothing.
+  const label = isDifference ? unit.label.replace(/\([ag]\)$/, '') : unit.label;
+  return `${formatSignificant(shown, figures)} ${label}`;
+}
+
+/** What a stream has of it; "–" where that is not known. */
+export const resultWords = (input: JudgeInput, requirement: Requirement, verdict: Judged): string =>
+  verdict.is === 'open' ? '–' : said(input, requirement, verdict.value, false);
+
+/** "met", "missed by 0.12 %", "not known: the stream is not solved". */
+export function verdictWords(input: JudgeInput, requirement: Requirement, verdict: Judged): string {
   if (verdict.is === 'open') return `not known: ${verdict.why}`;
-  return verdict.is === 'met' ? 'met' : `missed by ${said(verdict.by)}`;
+  return verdict.is === 'met' ? 'met' : `missed by ${said(input, requirement, verdict.by, true)}`;
 }
 
 /** What each product must keep, what it has, and whether that is met; limits as typed. */
 export function requirementTable(input: ReportInput): Table {
   const requirements = input.sketch.designBasis?.requirements ?? [];
-  const measures = measuresOf(input);
   return {
     key: 'requirements',
     title: 'Product requirements',
@@ -131,13 +151,6 @@ export function requirementTable(input: ReportInput): Table {
     ],
     rows: requirements.map((requirement, k): Row => {
       const verdict = judged(input, requirement);
-      const isShare = REQUIREMENT_DIMS[requirement.of] === 'fraction';
-      const unit = displayUnit(REQUIREMENT_DIMS[requirement.of], measures);
-      const said = (si: number, isDifference = false): string => {
-        if (isShare) return `${formatSignificant(100 * si, 6)} %`;
-        const shown = isDifference ? unit.toDisplay(si) - unit.toDisplay(0) : unit.toDisplay(si);
-        return `${formatSignificant(shown, isDifference ? 3 : 6)} ${unit.label}`;
-      };
       const number = input.sketch.streams.find((s) => s.id === requirement.stream)?.number;
       return {
         key: String(k),
@@ -147,11 +160,8 @@ export function requirementTable(input: ReportInput): Table {
           text(requirementWords(input, requirement)),
           text(asTyped(requirement.min, requirement.of)),
           text(asTyped(requirement.max, requirement.of)),
-          text(verdict.is === 'open' ? '–' : said(verdict.value)),
-          text(
-            verdictText(verdict, (by) => said(by, true)),
-            { bold: verdict.is !== 'met' },
-          ),
+          text(resultWords(input, requirement, verdict)),
+          text(verdictWords(input, requirement, verdict), { bold: verdict.is !== 'met' }),
           text(requirement.note ?? ''),
         ],
       };

@@ -7,7 +7,8 @@ export type DrawerChoice =
   | { readonly is: 'limits' }
   | { readonly is: 'assumptions' }
   | { readonly is: 'chemicals' }
-  | { readonly is: 'sketch' };
+  | { readonly is: 'sketch' }
+  | { readonly is: 'basis' };
 
 /** A unit or a stream, wherever it is shown. */
 export type Thing = { readonly unit: UnitId } | { readonly stream: StreamId };

@@ -3,7 +3,7 @@ import type { Stores } from '../../store/react';
 import type { DrawerChoice } from '../../store/session';
 
 const drawer = (
-  is: 'limits' | 'assumptions' | 'chemicals' | 'sketch',
+  is: 'limits' | 'assumptions' | 'chemicals' | 'sketch' | 'basis',
   label: string,
   keys: string[],
   /** What one opens it for is typed: the keyboard goes into it. */
@@ -50,6 +50,8 @@ export const viewActions: readonly Action[] = [
   drawer('assumptions', 'Assumption register', ['A']),
   drawer('chemicals', 'Chemicals and thermodynamic model', ['H'], true),
   drawer('sketch', 'Title block, site and measures', ['T'], true),
+  // Among the menu's words: the bar has no room for another.
+  { ...drawer('basis', 'Design basis, revisions and HOLDs', ['Shift+D'], true), group: 'sketch' },
   {
     id: 'balance',
     label: 'Fold or unfold the balance',
