@@ -70,7 +70,7 @@ export function createSceneInput() {
       duties,
       remarks,
       textScale,
-      ...(moved ? { moved, underHand: true } : {}),
+      ...(moved ? { moved } : {}),
     };
   };
 }

@@ -39,7 +39,7 @@ function places(length: number, last: boolean, scale: number): number[] {
 }
 
 /** Whether a diamond at a point of its line is clear of symbols, other lines, crossings and other diamonds. */
-export const diamondMayStand = (
+const diamondMayStand = (
   at: Point,
   line: number,
   taken: BoxIndex,

@@ -24,7 +24,6 @@ export interface Ground {
   readonly outer: ReadonlySet<StreamId>;
   readonly notes: readonly StandingNote[];
   readonly textScale: number;
-  readonly underHand: boolean;
   readonly ribbons: ReadonlyMap<StreamId, number> | undefined;
 }
 
@@ -70,7 +69,7 @@ export function groundOf(sketch: Sketch, input: SceneInput, before: Made | undef
     const rows = input.remarks?.get(unit.id) ?? [];
     return [rows.length, remarkRoom(rows)] as const;
   });
-  const { textScale = 1, ribbons, underHand = false } = input;
+  const { textScale = 1, ribbons } = input;
   return {
     standing,
     streams: sketch.streams,
@@ -80,7 +79,6 @@ export function groundOf(sketch: Sketch, input: SceneInput, before: Made | undef
     outer: outerStreams(sketch),
     notes: standingNotes(sketch.notes),
     textScale,
-    underHand,
     ribbons,
   };
 }
@@ -99,7 +97,7 @@ export function outerStreams(sketch: Sketch): ReadonlySet<StreamId> {
 /** Whether everything stands where it stood, whatever else changed in the sketch. */
 export function sameGround(a: Ground, b: Ground): boolean {
   if (a.standing.length !== b.standing.length) return false;
-  if (a.textScale !== b.textScale || (b.underHand && !a.underHand)) return false;
+  if (a.textScale !== b.textScale) return false;
   if (a.notes.length !== b.notes.length || a.notes.some((note, k) => note !== b.notes[k])) return false;
   if (!sameValue(a.rooms, b.rooms) || !sameValue(a.remarks, b.remarks)) return false;
   if (!sameMap(a.sizes, b.sizes) || !sameMap(a.ribbons, b.ribbons)) return false;

@@ -26,11 +26,6 @@ export interface LabelTask {
   readonly first: boolean;
   /** Where else its diamond may stand, the best first. */
   readonly elsewhere: () => Iterable<DiamondPlace>;
-  /**
-   * Where it stood on a sheet that is being changed by hand: it stays there while that keeps the rules. One that had no room
-   * is not looked for again before the hand lets go.
-   */
-  readonly before?: PlacedLabel | 'no room';
 }
 
 export interface PlacedLabel {
@@ -132,12 +127,9 @@ class Placing {
   }
 
   run(): readonly (PlacedLabel | undefined)[] {
-    let order = this.tasks.flatMap((task, k) => (task ? [k] : []));
+    const order = this.tasks.flatMap((task, k) => (task ? [k] : []));
+    const ease = this.tasks.map((task, k) => (task ? this.easeOf(task, k) : 0));
     const rank = (k: number): number => (this.tasks[k]!.first ? 0 : 1);
-    for (const k of order) this.stay(k);
-    order = order.filter((k) => !this.placed[k] && this.tasks[k]!.before !== 'no room');
-    const ease = this.tasks.map(() => 0);
-    for (const k of order) ease[k] = this.easeOf(this.tasks[k]!, k);
     order.sort((a, b) => rank(a) - rank(b) || ease[a]! - ease[b]! || a - b);
     for (const k of order) this.place(k);
     for (const k of order) if (!this.placed[k]) this.place(k);
@@ -166,18 +158,6 @@ class Placing {
     if (along) this.put(k, along);
     else if (led) this.put(k, led.box, led.leader);
     else this.swap(k, wish);
-  }
-
-  /** What stood here before the hand touched something else stays, if it still may. */
-  private stay(k: number): void {
-    const { before, wish } = this.tasks[k]!;
-    if (!before || before === 'no room') return;
-    const { box, anchor, leader } = before;
-    if (anchor.diamond !== wish.anchor.diamond) return;
-    if (anchor.diamond && (anchor.at[0] !== wish.anchor.at[0] || anchor.at[1] !== wish.anchor.at[1])) return;
-    if (!this.ground.allows(box, k, wish, anchor, leader !== undefined)) return;
-    if (leader && !isLeaderFree(leader, anchor.at, this.ground.taken, k, wish.scale)) return;
-    if (this.fits(box, k, CLEAR * wish.scale)) this.put(k, box, leader, anchor);
   }
 
   private put(k: number, box: Box, leader?: readonly [Point, Point], anchor = this.anchors[k]!): void {

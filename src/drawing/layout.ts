@@ -1,6 +1,6 @@
 import type { StreamId, UnitId } from '../engine/ids';
 import { BoxIndex, boxAround, hull, pieceBoxes } from './boxes';
-import { DIAMOND, type DiamondPlace, diamondMayStand, diamondPlaces, piecesByLength } from './diamonds';
+import { DIAMOND, type DiamondPlace, diamondPlaces, piecesByLength } from './diamonds';
 import type { Ground } from './ground';
 import { foldedBox, type LabelWish } from './labelPlaces';
 import { rowsIn, scaledSize } from './labelSize';
@@ -8,7 +8,7 @@ import { LabelGround, type LabelTask, type PlacedLabel, placeLabels } from './la
 import { nearestOnLine, scaledAbout } from './near';
 import { placeNotes } from './notes';
 import { bridgesOf, drawPath } from './path';
-import { keepSame, sameValue } from './same';
+import { keepSame } from './same';
 import { symbolBoxes } from './standing';
 import { WEIGHT } from './tokens';
 import type { Box, LabelShape, LineShape, NoteShape, Omitted, Point } from './types';
@@ -36,61 +36,6 @@ export interface Layout {
   /** Links without room for a duty. */
   readonly lost: readonly { readonly unit: UnitId; readonly link: string }[];
   readonly routes: RouteCache;
-  /** How it came to stand so: what a sheet under the hand goes on from. */
-  readonly stood: Stood;
-}
-
-interface StoodStream {
-  readonly points: readonly Point[];
-  readonly place: DiamondPlace | undefined;
-  readonly label: PlacedLabel | undefined;
-}
-interface Stood {
-  readonly ground: Ground;
-  readonly streams: ReadonlyMap<StreamId, StoodStream>;
-  readonly units: ReadonlyMap<UnitId, { readonly unit: number; readonly texts: UnitTexts }>;
-}
-
-/** What stood on the sheet before the hand moved, as far as it may stay. */
-class Stayed {
-  private readonly ground: Ground;
-  private readonly old: Stood | undefined;
-
-  constructor(ground: Ground, before: Layout | undefined) {
-    this.ground = ground;
-    const may = ground.underHand && before?.stood.ground.textScale === ground.textScale;
-    this.old = may ? before?.stood : undefined;
-  }
-
-  stream({ stream, points }: Wire): StoodStream | undefined {
-    const old = this.old?.streams.get(stream.id);
-    return old && (old.points === points || sameValue(old.points, points)) ? old : undefined;
-  }
-
-  label(wire: Wire): PlacedLabel | 'no room' | undefined {
-    const { sizes, ribbons } = this.ground;
-    const { id } = wire.stream;
-    const old = this.old?.ground;
-    if (!old || old.sizes.get(id) !== sizes.get(id) || old.ribbons?.get(id) !== ribbons?.get(id))
-      return undefined;
-    const stood = this.stream(wire);
-    return stood && (stood.label ?? 'no room');
-  }
-
-  texts(k: number): UnitTexts | undefined {
-    const { standing, rooms, remarks } = this.ground;
-    const now = standing[k]!;
-    const was = this.old?.units.get(now.unit.id);
-    if (!this.old || !was) return undefined;
-    const { ground } = this.old;
-    const alike =
-      sameValue(ground.standing[was.unit]!.pose, now.pose) &&
-      sameValue(ground.standing[was.unit]!.links, now.links) &&
-      ground.standing[was.unit]!.unit.tag === now.unit.tag &&
-      sameValue(ground.rooms[was.unit], rooms[k]) &&
-      sameValue(ground.remarks[was.unit], remarks[k]);
-    return alike ? was.texts : undefined;
-  }
 }
 
 /** @param before an earlier layout: its ways are kept where they still hold, its lines wherever nothing changed */
@@ -119,17 +64,12 @@ export function layOut(ground: Ground, before: Layout | undefined): Layout {
   }
   const notes = placeNotes(ground.notes, sheet.taken, scale);
   for (const { shape, room } of notes) if (shape.texts.length > 0) stones.add(room);
-  const stayed = new Stayed(ground, before);
-  const first = stones.place((wire) => stayed.stream(wire)?.place);
+  const first = stones.place();
   first.forEach((place, k) => {
     sheet.setDiamond(k, place?.at, scale);
   });
-  const { texts, boxes, omitted } = placeTexts(
-    standing,
-    { rooms, remarks, scale, flags, before: (k) => stayed.texts(k) },
-    sheet.taken,
-  );
-  const { labels, places, placed } = layLabels(wires, first, stones, ground, sheet, stayed);
+  const { texts, boxes, omitted } = placeTexts(standing, { rooms, remarks, scale, flags }, sheet.taken);
+  const { labels, places } = layLabels(wires, first, stones, ground, sheet);
   const lines = drawLines(wires, places);
   return {
     box:
@@ -153,13 +93,6 @@ export function layOut(ground: Ground, before: Layout | undefined): Layout {
       ),
     ),
     routes: cache,
-    stood: {
-      ground,
-      streams: new Map(
-        wires.map(({ stream, points }, k) => [stream.id, { points, place: places[k], label: placed[k] }]),
-      ),
-      units: new Map(standing.map(({ unit }, k) => [unit.id, { unit: k, texts: texts[k]! }])),
-    },
   };
 }
 
@@ -208,23 +141,12 @@ class Stones {
     return diamondPlaces(this.wires[k]!.points, k, this.taken, this.crossings[k]!, this.scale);
   }
 
-  /** @param before where a diamond stood; it stays there while it may */
-  place(before: (wire: Wire) => DiamondPlace | undefined): readonly (DiamondPlace | undefined)[] {
-    const half = DIAMOND * this.scale;
-    const put = (place: DiamondPlace, k: number): DiamondPlace => {
-      this.taken.add(boxAround(place.at, half), k);
-      return place;
-    };
-    const stayed = this.wires.map((wire, k) => {
-      const old = before(wire);
-      const { scale } = this;
-      return old && diamondMayStand(old.at, k, this.taken, this.crossings[k]!, scale)
-        ? put(old, k)
-        : undefined;
-    });
+  place(): readonly (DiamondPlace | undefined)[] {
     return this.wires.map((_, k) => {
-      if (stayed[k]) return stayed[k];
-      for (const place of this.of(k)) return put(place, k);
+      for (const place of this.of(k)) {
+        this.taken.add(boxAround(place.at, DIAMOND * this.scale), k);
+        return place;
+      }
       return undefined;
     });
   }
@@ -265,11 +187,9 @@ function layLabels(
   stones: Stones,
   { sizes, ribbons, outer, textScale: scale }: Ground,
   sheet: LabelGround,
-  stayed: Stayed,
 ): {
   readonly labels: readonly LabelPlace[];
   readonly places: readonly (DiamondPlace | undefined)[];
-  readonly placed: readonly (PlacedLabel | undefined)[];
 } {
   const tasks = wires.map((wire, k): LabelTask | undefined => {
     const size = sizes.get(wire.stream.id);
@@ -283,20 +203,14 @@ function layLabels(
       half: Math.max((ribbons?.get(wire.stream.id) ?? 0) / 2, HALF_LINE),
       scale,
     };
-    const before = stayed.label(wire);
-    return {
-      wish,
-      first: outer.has(wire.stream.id),
-      elsewhere: () => stones.of(k),
-      ...(before ? { before } : {}),
-    };
+    return { wish, first: outer.has(wire.stream.id), elsewhere: () => stones.of(k) };
   });
   const placed = placeLabels(tasks, sheet);
   const labels = tasks.flatMap((task, k): LabelPlace[] =>
     task ? [labelAt(wires[k]!.stream.id, task.wish, placed[k], sizes.get(wires[k]!.stream.id)!)] : [],
   );
   const places = first.map((place, k) => (placed[k]?.anchor.diamond ? placed[k].anchor : place));
-  return { labels, places, placed };
+  return { labels, places };
 }
 
 /** The label as it is at 100 %, with the point it grows about. */

@@ -106,21 +106,11 @@ export function placeDuty(
   const order: readonly Beside[] =
     along[0] < 0 ? ['left', 'below', 'above', 'right'] : ['right', 'left', 'below', 'above'];
   for (const place of besides(ring, '', style, order, scale)) {
-    if (dutyMayStand(place.box, ring, taken, rings, own, scale)) return place;
+    if (taken.hits(place.box, CLEAR * scale)) continue;
+    if (!rings.hits(place.box, distanceTo(place.box, ring) + NEARER * scale, own)) return place;
   }
   return undefined;
 }
-
-/** Whether a duty covers nothing and can only be read as its own link's. */
-export const dutyMayStand = (
-  box: Box,
-  ring: Point,
-  taken: BoxIndex,
-  rings: BoxIndex,
-  own: unknown,
-  scale: number,
-): boolean =>
-  !taken.hits(box, CLEAR * scale) && !rings.hits(box, distanceTo(box, ring) + NEARER * scale, own);
 
 /** The name of a flag that stands upright, beside it. */
 export function placeName(text: string, box: Box, taken: BoxIndex): TextPlace {

@@ -120,17 +120,6 @@ export function placeTag(
   return undefined;
 }
 
-/** Whether a tag may stay where it is: nothing else came to lie there, and no other symbol came nearer. */
-export const tagStays = (
-  place: TagPlace,
-  symbol: Box,
-  taken: BoxIndex,
-  symbols: BoxIndex,
-  own: unknown,
-): boolean =>
-  !place.boxes.some((box) => taken.hits(box, CLEAR * place.upTo)) &&
-  !symbols.hits(place.boxes[0]!, apart(place.boxes[0]!, symbol) + NEARER, own);
-
 function placeAt(
   [px, py]: Point,
   align: Align,

@@ -218,11 +218,6 @@ export interface SceneInput {
   readonly textScale?: number;
   /** Positions while a drag lasts, over the sketch's own. */
   readonly moved?: ReadonlyMap<UnitId, Point>;
-  /**
-   * While something is under the hand: diamonds, tags and labels that it does not touch stay where they were in the scene
-   * before, though a better place may have come free. Every rule holds all the same.
-   */
-  readonly underHand?: boolean;
   /** Width of a stream's ribbon in follow [px]; labels clear half of it. */
   readonly ribbons?: ReadonlyMap<StreamId, number>;
   /** Kinds whose ports are known; absent: the catalogue. A kind without a symbol of its own becomes a box. */

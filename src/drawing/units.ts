@@ -1,11 +1,11 @@
 import { BoxIndex, boxAround } from './boxes';
 import { stateMark } from './marks';
 import { nearestOfBox, scaledAbout } from './near';
-import { dutyMayStand, placeDuty, placeName, type TextPlace } from './sideTexts';
+import { placeDuty, placeName, type TextPlace } from './sideTexts';
 import type { StandingUnit } from './standing';
 import { flagName } from './symbols/flag';
 import { linkShapes } from './symbols/shapes';
-import { placeTag, type TagPlace, tagStays } from './tags';
+import { placeTag, type TagPlace } from './tags';
 import { TEXT } from './tokens';
 import { toSheet } from './transform';
 import type { Box, LinkShape, Omitted, Point, SceneInput, TextShape, UnitShape } from './types';
@@ -60,8 +60,6 @@ interface Wanted {
   readonly remarks: readonly (readonly [rows: number, width: number])[];
   readonly scale: number;
   readonly flags: readonly { readonly upTo: number; readonly box: Box }[];
-  /** Where the texts of a unit stood that nobody touched; they stay there while they may. */
-  readonly before: (unit: number) => UnitTexts | undefined;
 }
 
 /**
@@ -73,7 +71,7 @@ interface Wanted {
  */
 export function placeTexts(
   units: readonly StandingUnit[],
-  { rooms, remarks, scale, flags, before }: Wanted,
+  { rooms, remarks, scale, flags }: Wanted,
   taken: BoxIndex,
 ): {
   readonly texts: readonly UnitTexts[];
@@ -96,41 +94,23 @@ export function placeTexts(
       rings.add(boxAround(ring, 0.01), `${u.unit.id} ${n}`);
     });
   });
-  const stayed = units.map((_, k) => before(k));
-  // What stays comes first, then what is placed anew.
-  const order = [...units.keys()].sort((a, b) => Number(!stayed[a]) - Number(!stayed[b]) || a - b);
-  const inOrder = <T>(place: (u: StandingUnit, k: number) => T): readonly T[] => {
-    const out: T[] = [];
-    for (const k of order) out[k] = place(units[k]!, k);
-    return out;
-  };
   // Duties before tags: a tag has more places to choose from.
-  const duties = inOrder((u, k) =>
+  const duties = units.map((u, k) =>
     u.links.map(([from, ring], n): TextPlace | undefined => {
-      const own = `${u.unit.id} ${n}`;
       const along: Point = [Math.sign(ring[0] - from[0]), Math.sign(ring[1] - from[1])];
-      const old = stayed[k]?.duties[n];
-      const place =
-        old && dutyMayStand(old.box, ring, taken, rings, own, scale)
-          ? old
-          : placeDuty(rooms[k]![n]!, ring, along, taken, rings, own, scale);
+      const place = placeDuty(rooms[k]![n]!, ring, along, taken, rings, `${u.unit.id} ${n}`, scale);
       if (place) add(place.box);
       return place;
     }),
   );
-  const tags = inOrder((u, k): TagPlace | undefined => {
+  const tags = units.map((u, k): TagPlace | undefined => {
     if (u.symbol.tagless) return undefined;
     const [rows, remark] = remarks[k]!;
-    const own = u.unit.id;
-    const old = stayed[k]?.tag;
-    const place =
-      old && tagStays(old, u.box, taken, symbols, own)
-        ? old
-        : placeTag({ tag: u.unit.tag, remark, rows }, u.box, taken, symbols, own, scale);
+    const place = placeTag({ tag: u.unit.tag, remark, rows }, u.box, taken, symbols, u.unit.id, scale);
     if (place) add(...place.boxes);
     return place;
   });
-  const names = inOrder((u): TextPlace | undefined => {
+  const names = units.map((u): TextPlace | undefined => {
     if (u.symbol.nameAt === undefined || u.symbol.nameInside) return undefined;
     const place = placeName(flagName(u.unit), u.box, taken);
     add(place.box);
