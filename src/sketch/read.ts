@@ -1,7 +1,8 @@
 import type { Finding } from '../engine/outcome';
 import { MODEL_KINDS } from './compiling/modelKinds';
+import { decode } from './file/bytes';
 import { checkJoints } from './file/joints';
-import { MIGRATIONS, type Migration, migrate, VERSION } from './file/migrate';
+import { MIGRATIONS, type Migration, migrate, oldest, VERSION } from './file/migrate';
 import { placeUnits } from './file/place';
 import { checkPlain } from './file/plain';
 import { type FileProblem, Problems, typeName } from './file/problem';
@@ -28,28 +29,35 @@ export interface OpenOptions {
 }
 
 /**
- * Opens a sketch from its text or from parsed data: a whole document with everything optional filled in, or every reason
+ * Opens a sketch from the bytes of a file, its text or parsed data: a whole document with everything optional filled in, or every reason
  * with its place. Unknown fields, unknown kinds of unit and unknown models are kept. Never throws on any input.
  */
 export function openSketch(source: unknown, options: OpenOptions = {}): Opened {
   const { registry = KNOWN_KINDS, newId = () => crypto.randomUUID(), migrations = MIGRATIONS } = options;
   const problems = new Problems();
   let raw = source;
-  if (typeof source === 'string') {
-    const read = readJson(source);
+  if (source instanceof Uint8Array) {
+    const decoded = decode(source);
+    if (!decoded.ok) return { ok: false, problems: [decoded.problem] };
+    raw = decoded.text;
+  }
+  const wasText = typeof raw === 'string';
+  if (typeof raw === 'string') {
+    const read = readJson(raw);
     if (!read.ok) return { ok: false, problems: [read.problem] };
     raw = read.value;
   }
   if (!checkPlain(raw, problems)) return refused(problems);
   // Data that never was text may carry more than JSON can say: extra fields of lists, absent values.
-  if (typeof source !== 'string' && raw !== undefined) raw = JSON.parse(JSON.stringify(raw));
+  if (!wasText && raw !== undefined) raw = JSON.parse(JSON.stringify(raw));
   if (!isObject(raw)) {
     problems.add('', 'file/not-a-sketch', word('found', typeName(raw)));
     return refused(problems);
   }
-  const version = versionOf(raw, migrations.length + 1, problems);
-  if (version === undefined) return refused(problems);
-  const { document, steps } = migrate(raw, version, migrations);
+  const version = versionOf(raw, oldest(migrations), problems);
+  const migrated = version === undefined ? undefined : migrate(raw, version, problems, migrations);
+  if (migrated === undefined) return refused(problems);
+  const { document, steps } = migrated;
   checkShape(document, problems);
   if (problems.none) checkJoints(document, registry, problems);
   if (!problems.none) return refused(problems);
@@ -62,21 +70,16 @@ function refused(problems: Problems): Opened {
   return { ok: false, problems: [first, ...rest] };
 }
 
-function versionOf(raw: JsonObject, newest: number, problems: Problems): number | undefined {
+function versionOf(raw: JsonObject, first: number, problems: Problems): number | undefined {
   const format = own(raw, 'format');
   const version = own(raw, 'version');
   if (format !== FORMAT)
     problems.add('format', 'file/not-a-sketch', word('found', format === undefined ? '' : String(format)));
   else if (version === undefined) problems.add('version', 'file/missing');
-  else if (typeof version !== 'number' || !Number.isInteger(version) || version < 1)
-    problems.wrongType('version', 'whole number from 1', version);
-  else if (version > newest)
-    problems.add(
-      'version',
-      'file/newer-version',
-      evidence('found', version),
-      evidence('known', Math.max(newest, VERSION)),
-    );
+  else if (typeof version !== 'number' || !Number.isInteger(version) || version < first)
+    problems.wrongType('version', `whole number from ${first}`, version);
+  else if (version > VERSION)
+    problems.add('version', 'file/newer-version', evidence('found', version), evidence('known', VERSION));
   else return version;
   return undefined;
 }
@@ -124,7 +127,7 @@ function filled(
   const sketch: Sketch = {
     ...(given as Partial<Sketch>),
     format: FORMAT,
-    version: 1,
+    version: VERSION,
     id: given.id === undefined || given.id.trim() === '' ? newId() : given.id,
     title: given.title ?? {},
     site: given.site ?? {},

@@ -1,8 +1,8 @@
 import { describe, expect, test } from 'vitest';
-import { migrate } from '../../src/sketch/file/migrate';
+import { MIGRATIONS, type Migration, oldest, VERSION } from '../../src/sketch/file/migrate';
 import { type Opened, openSketch } from '../../src/sketch/read';
 import { writeSketch } from '../../src/sketch/write';
-import { codes, exampleText, type Loose, loose, opened } from './help';
+import { codes, exampleText, type Loose, letDown, loose, opened } from './help';
 
 const problems = (result: Opened): string[] =>
   result.ok ? [] : result.problems.map((p) => `${p.code} at ${p.path}`);
@@ -296,27 +296,114 @@ describe('writing', () => {
 });
 
 describe('migrations', () => {
-  const steps = [
-    { from: 1, what: 'area renamed', change: (old: object) => ({ ...old, place: 'x' }) },
-    { from: 2, what: 'notes counted', change: (old: object) => ({ ...old, count: 0 }) },
-  ] as const;
+  // Two versions before the first one, made up for these tests.
+  const steps: readonly Migration[] = [
+    {
+      from: -1,
+      what: 'the units’ list has another name',
+      change: ({ things, ...old }) => ({ ...old, units: things! }),
+    },
+    {
+      from: 0,
+      what: 'temperatures carry their unit',
+      change: (old) => ({
+        ...old,
+        site: { ...(old.site as object), ambient: `${(old.site as { ambient: number }).ambient} K` },
+      }),
+    },
+  ];
+  const older = (version: number): Loose => {
+    const { units, site, ...rest } = loose();
+    return {
+      ...rest,
+      version,
+      ...(version < 0 ? { things: units } : { units }),
+      site: { ...(site as object), ambient: 290 },
+      kept: ['as', 'it', 'is'],
+    };
+  };
+  const notesOf = (result: Opened): unknown[] =>
+    result.ok ? result.notes.map((note) => [note.code, note.evidence[0]?.text]) : [];
 
-  test('run in order from the version of the file', () => {
-    expect(migrate({ version: 1 }, 1, steps)).toEqual({
-      document: { version: 3, place: 'x', count: 0 },
-      steps: ['area renamed', 'notes counted'],
-    });
-    expect(migrate({ version: 2 }, 2, steps).steps).toEqual(['notes counted']);
-    expect(migrate({ version: 3 }, 3, steps)).toEqual({ document: { version: 3 }, steps: [] });
+  test('run in order from the version of the file, say what was changed and keep what they do not know', () => {
+    const whole = openSketch(older(-1), { migrations: steps });
+    expect(notesOf(whole)).toEqual(steps.map(({ what }) => ['sketch/migrated', what]));
+    const half = openSketch(older(0), { migrations: steps });
+    expect(notesOf(half)).toEqual([['sketch/migrated', steps[1]!.what]]);
+    for (const result of [whole, half]) {
+      expect(result.ok && result.sketch).toMatchObject({
+        version: VERSION,
+        site: { ambient: '290 K' },
+        kept: ['as', 'it', 'is'],
+      });
+      expect(result.ok && result.sketch.units.map((x) => x.tag)).toEqual(letDown().units.map((x) => x.tag));
+      // Saved and opened again it is a document of this version.
+      const again = result.ok ? openSketch(writeSketch(result.sketch)) : undefined;
+      expect(again?.ok && again.notes).toEqual([]);
+    }
+  });
+
+  test('leave a document of this version alone', () => {
+    const result = openSketch(loose(), { migrations: steps });
+    expect(result.ok && result.notes).toEqual([]);
+  });
+
+  test('a version older than the chain is refused', () => {
+    expect(problems(openSketch(older(-2), { migrations: steps }))).toEqual(['file/wrong-type at version']);
+    expect(problems(openSketch(older(0)))).toEqual(['file/wrong-type at version']);
+  });
+
+  test('a step that meets what it cannot read refuses the file and says which step', () => {
+    const { site, ...without } = older(0);
+    const broken = openSketch({ ...without, site: null }, { migrations: steps });
+    expect(problems(broken)).toEqual(['file/not-migrated at ']);
+    expect(slot(broken, 'what')).toBe(steps[1]!.what);
+    expect(site).toBeDefined();
+  });
+
+  test('what comes out of a step is checked like any other file', () => {
+    const result = openSketch({ ...older(-1), things: 'none' }, { migrations: steps });
+    expect(problems(result)).toEqual(['file/wrong-type at units']);
   });
 
   test('a gap in the list is our own mistake', () => {
-    expect(() => migrate({ version: 1 }, 1, steps.slice(1))).toThrow(/gap/);
+    const gap = [steps[0]!, { ...steps[1]!, from: 1 }];
+    expect(() => openSketch(older(-1), { migrations: gap })).toThrow(/gap/);
   });
 
-  test('an older file opens through them and says what was changed', () => {
-    const result = openSketch(loose(), { migrations: [steps[0]] });
-    expect(result.ok && codes(result.notes)).toEqual(['sketch/migrated']);
-    expect(result.ok && result.sketch).toMatchObject({ place: 'x' });
+  test('the chain that ships begins at the first version that was ever saved', () => {
+    expect(oldest(MIGRATIONS)).toBe(1);
+    expect(MIGRATIONS.map((step) => step.from)).toEqual(MIGRATIONS.map((_, k) => k + 1));
+  });
+});
+
+describe('bytes', () => {
+  const bytes = (text: string): Uint8Array => new TextEncoder().encode(text);
+  const named = exampleText('let-down').replace('"Let-down"', '"Entspannung für 15 °C, 蒸留"');
+
+  test('of a file give the same sketch as its text, with and without a mark, and in UTF-16', () => {
+    const wanted = writeSketch(opened(named));
+    expect(wanted).toContain('蒸留');
+    const wide = new Uint8Array(new Uint16Array([...`\ufeff${named}`].map((c) => c.charCodeAt(0))).buffer);
+    for (const source of [bytes(named), bytes(`\ufeff${named}`), wide])
+      expect(writeSketch(opened(source))).toBe(wanted);
+  });
+
+  test('that are no text are refused with their place, not read as question marks', () => {
+    const whole = bytes(named);
+    const at = whole.indexOf(bytes('ü')[0]!);
+    const spoilt = whole.slice();
+    spoilt[at + 1] = 0x20;
+    const result = openSketch(spoilt);
+    expect(problems(result)).toEqual(['file/not-text at ']);
+    const before = named.slice(0, named.indexOf('ü'));
+    expect(slot(result, 'line')).toBe(before.split('\n').length);
+    expect((result.ok ? undefined : result.problems[0].evidence[1])?.value).toBe(
+      before.length - before.lastIndexOf('\n'),
+    );
+    expect(problems(openSketch(new Uint8Array([0x50, 0x4b, 0x03, 0x04, 0x8f, 0xff])))).toEqual([
+      'file/not-text at ',
+    ]);
+    expect(problems(openSketch(new Uint8Array()))).toEqual(['file/empty at ']);
   });
 });

@@ -4,12 +4,14 @@ import { word } from '../findings';
 /** Why a file is not opened; the sentences live in wording/. */
 export const FILE_PROBLEMS = [
   'file/empty',
+  'file/not-text', // evidence: line, column
   'file/not-json', // evidence: line, column, found
   'file/repeated-key',
   'file/too-deep',
   'file/too-large',
   'file/not-a-sketch', // no or another format; evidence: found
   'file/newer-version',
+  'file/not-migrated', // evidence: what, why
   'file/missing',
   'file/wrong-type', // evidence: wanted, found
   'file/not-one-of', // evidence: found, wanted

@@ -72,6 +72,8 @@ const twice = (what: string, advice: string) => (s: Slots) =>
 /** What is wrong and what to do, by code; the place stands before it. */
 export const FILE_WORDS: Readonly<Record<string, (s: Slots) => string>> = {
   'file/empty': () => 'the file is empty; choose another.',
+  'file/not-text': () =>
+    'the file holds bytes that are no text from here on; it may be damaged or of another kind, so fetch or save it again.',
   'file/not-json': (s) =>
     s.has('found')
       ? `the text cannot be read from ${quoted(s.text('found'))} on; look for a missing comma, bracket or quotation mark just before it.`
@@ -88,6 +90,8 @@ export const FILE_WORDS: Readonly<Record<string, (s: Slots) => string>> = {
       : 'this is not a sketch of Splitwright; choose a file that was saved here.',
   'file/newer-version': (s) =>
     `the sketch was saved by a later version of Splitwright (its form is ${s.number('found')}, and this version reads up to ${s.number('known')}); open it with that version.`,
+  'file/not-migrated': (s) =>
+    `the sketch was saved by an earlier version of Splitwright and could not be brought up to date (${s.text('what')}: ${s.text('why')}); a damaged file is likely, so fetch or save it again.`,
   'file/missing': () => 'this is missing and a sketch needs it; add it.',
   'file/wrong-type': (s) =>
     `${typeWords(s.text('wanted'))} is wanted here${s.has('found') ? `, not ${typeWords(s.text('found'))}` : ''}; correct the value.`,
@@ -123,7 +127,7 @@ export const FILE_WORDS: Readonly<Record<string, (s: Slots) => string>> = {
 };
 
 /** The file's own heading says where these are; a place before them would add nothing. */
-const WITHOUT_PLACE = ['file/not-a-sketch', 'file/newer-version', 'file/more-problems'];
+const WITHOUT_PLACE = ['file/not-a-sketch', 'file/newer-version', 'file/not-migrated', 'file/more-problems'];
 
 /** `"tag": "V-1", ...`: the name at the start of the piece of text. */
 const keyFound = (found: string): string => /^"((?:[^"\\]|\\.)*)/.exec(found)?.[1] ?? found;
