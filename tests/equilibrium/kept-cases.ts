@@ -205,4 +205,12 @@ export const KEPT: readonly (FlashCase & { readonly name: string })[] = [
     z: [0.637203820415611, 0.32875812515159963, 0.034038054432789414],
     at: { P_Pa: 1115.7658235361882, vapourFraction: 0 },
   },
+  {
+    name: 'an enthalpy a hair above the bubble point at 10 mbar',
+    kind: 'peng-robinson',
+    sort: 'trace',
+    ids: ['ethylcyclohexane', 'naphthalene', '1-heptene', 'p-xylene'],
+    z: [0.0722268659217611, 0.46262089459235006, 0.4556861730347288, 0.00946606645116003],
+    at: { P_Pa: 1048.9586650423366, h_J_mol: -18794.763721522384 },
+  },
 ];

@@ -63,7 +63,12 @@ export function flashCaloric(
     }
     const miss = target - wholeOf(w, of);
     if (Math.abs(miss) <= closeEnough(of, T, target)) return done(w, iterations);
-    if (Math.abs(T - lastT) < 1e-12 * T && Math.abs(miss) < rounding(of, T)) return done(w, iterations);
+    if (Math.abs(T - lastT) < 1e-12 * T && Math.abs(miss) < rounding(of, T)) {
+      // Beside a boundary the single phase comes closer, a hair beyond where it is stable.
+      const there = atBoundary(w, z, T, T, P, target, of) || flashTP(w, z, T, P, 'nothing');
+      return there ? done(w, iterations + w.iterations) : 'no-convergence';
+    }
+    const moved = lastT > 0 ? Math.abs(T - lastT) : 0;
     lastT = T;
     if (miss > 0) {
       low = T;
@@ -76,12 +81,14 @@ export function flashCaloric(
     }
 
     let next: number;
+    let outside = false;
     if (w.phases === 2) {
       const hidden = w.hidden;
       w.iterations = 0;
       const end = newtonCaloric(w, T, P, target, of);
       iterations += w.iterations;
       if (end === 'equal' && isAnswer(w, P, hidden)) return done(w, iterations);
+      outside = end === 'outside';
       // Not the stable state, or a phase is about to vanish: go on from that temperature.
       next = end === 'going' ? Number.NaN : w.T_K;
     } else if (w.lumped) {
@@ -118,8 +125,11 @@ export function flashCaloric(
       }
       const edge = 1e-3 * (high - low);
       if (pass > 8 && (next - low < edge || high - next < edge)) next = (low + high) / 2;
-    } else if (!(next > low && next < high)) {
-      next = miss > 0 ? Math.min(T * 1.3, (T + high) / 2) : Math.max(T / 1.3, (T + low) / 2);
+    } else {
+      // A vanishing phase holds the temperature back, each time by less: a bracket needs steps that grow.
+      if (outside && Math.abs(next - T) < 2 * moved) next = T + Math.sign(miss) * 2 * moved;
+      const ahead = miss > 0 ? Math.min(T * 1.3, (T + high) / 2) : Math.max(T / 1.3, (T + low) / 2);
+      if (!(next > low && next < high) || (outside && Math.abs(next - T) > Math.abs(ahead - T))) next = ahead;
     }
     if (next > 0.999 * MOST_T_K || next < 1.001 * LEAST_T_K) return 'out-of-range';
     T = next;
