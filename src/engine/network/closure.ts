@@ -66,7 +66,11 @@ function sideOf(streams: readonly StreamState[], data: ClosureData): Side {
   return { n_mol_s, total_mol_s, mass_kg_s, H_W, sensible_W };
 }
 
+/** Of what is not there at all. */
+const NONE: ClosureEntry = Object.freeze({ in: 0, out: 0, made: 0, relative: 0 });
+
 const entry = (into: number, out: number, made: number, scale: number): ClosureEntry => {
+  if (into === 0 && out === 0 && made === 0) return NONE;
   const missing = Math.abs(into + made - out);
   return { in: into, out, made, relative: missing === 0 ? 0 : missing / scale };
 };

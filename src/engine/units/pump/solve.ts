@@ -2,7 +2,7 @@ import type { StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { answerOf } from '../answer';
 import type { PressureSI } from '../groups';
-import { emptyStream, outletPressure, streamAt, warmFrom } from '../streams';
+import { emptyStream, outletPressure, streamAt, type WarmState, warmFrom, warmOf } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { GRAVITY_m_s2, massFlow_kg_s, volumeFlow_m3_s } from '../volume';
 import { pumpLimits } from './limits';
@@ -33,13 +33,20 @@ export interface PumpResults {
   readonly T_K: number;
 }
 
-/** Bubble pressure of what enters [Pa]; undefined when vapour enters or none exists. */
-function bubblePressure(call: Call<PumpSettings>, inlet: StreamState): number | undefined {
+/** Start values of a pump's flashes. */
+interface PumpWarm {
+  readonly out?: WarmState;
+  readonly bubble?: WarmState;
+}
+
+/** What enters, at its bubble pressure; undefined when vapour enters or there is no such state. */
+function bubblePoint(call: Call<PumpSettings>, inlet: StreamState, warm: PumpWarm): StreamState | undefined {
   const incipient = inlet.phases.length === 2 && inlet.phases[0]!.fraction === 0;
-  if (incipient) return inlet.P_Pa;
+  if (incipient) return inlet;
   if (inlet.phases.some((p) => p.kind === 'vapour' && p.fraction > 0)) return undefined;
-  const point = streamAt(call, inlet.n_mol_s, { T_K: inlet.T_K, vapourFraction: 0 });
-  return point.state === 'solved' ? point.value.P_Pa : undefined;
+  const at = { T_K: inlet.T_K, vapourFraction: 0 };
+  const point = streamAt(call, inlet.n_mol_s, at, warmFrom(warm.bubble, inlet.n_mol_s, inlet.T_K));
+  return point.state === 'solved' ? point.value : undefined;
 }
 
 /** How far a pressure lies above the bubble pressure [Pa]; what a flash leaves by rounding at the bubble point itself is none. */
@@ -65,6 +72,7 @@ function nothing(call: Call<PumpSettings>, inlet: StreamState): Outcome<Answer<P
 
 function solve(call: Call<PumpSettings>): Outcome<Answer<PumpResults>> {
   const inlet = call.in.in!;
+  const warm = (call.warm ?? {}) as PumpWarm;
   const { p, efficiency, staticHead, drive } = call.settings;
   if (inlet.phases.length === 0) return nothing(call, inlet);
   const volume_m3_s = volumeFlow_m3_s(inlet, call.model);
@@ -85,11 +93,12 @@ function solve(call: Call<PumpSettings>): Outcome<Answer<PumpResults>> {
           call,
           inlet.n_mol_s,
           { P_Pa, H_W: inlet.H_W + power_W },
-          warmFrom(call.warm, inlet.n_mol_s, inlet.T_K),
+          warmFrom(warm.out, inlet.n_mol_s, inlet.T_K),
         );
   if (made.state !== 'solved') return noSolution(...made.findings);
   const out = made.value;
-  const bubbleP_Pa = bubblePressure(call, inlet);
+  const bubble = bubblePoint(call, inlet, warm);
+  const bubbleP_Pa = bubble?.P_Pa;
   const results: PumpResults = {
     power_W,
     hydraulicPower_W,
@@ -102,7 +111,9 @@ function solve(call: Call<PumpSettings>): Outcome<Answer<PumpResults>> {
     P_Pa,
     T_K: out.T_K,
   };
-  return solved({ ...answerOf({ out }, results, out === inlet ? [] : [out]), power_W }, made.findings);
+  const next: PumpWarm = { out: warmOf(out), ...(bubble ? { bubble: warmOf(bubble) } : {}) };
+  const answer = answerOf({ out }, results, out === inlet ? [] : [out]);
+  return solved({ ...answer, power_W, warm: next }, made.findings);
 }
 
 /** A liquid brought to a higher pressure. */
