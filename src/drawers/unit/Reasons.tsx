@@ -1,6 +1,7 @@
 import type { Evidence, Finding } from '../../engine/outcome';
 import { useMeasures } from '../../parts/measures';
 import { show } from '../../quantity';
+import { SENTENCES } from '../../wording/codes';
 import { useSay } from '../useSay';
 import { capital, evidenceWord } from '../words';
 
@@ -19,7 +20,7 @@ export function Reasons({ reasons }: { readonly reasons: readonly Finding[] }) {
           // biome-ignore lint/suspicious/noArrayIndexKey: the order is the reasons' own
           <div className="reason" key={k}>
             <p>{sentence}</p>
-            <EvidenceList evidence={reason.evidence} />
+            <EvidenceList evidence={unsaid(reason)} />
             {next ? <p className="next">{next}</p> : null}
           </div>
         );
@@ -27,6 +28,10 @@ export function Reasons({ reasons }: { readonly reasons: readonly Finding[] }) {
     </section>
   );
 }
+
+/** Evidence that the sentence does not carry already. */
+const unsaid = ({ code, evidence }: Finding): readonly Evidence[] =>
+  evidence.filter(({ name }) => !SENTENCES[code]?.says.includes(`{${name}`));
 
 function EvidenceList({ evidence }: { readonly evidence: readonly Evidence[] }) {
   const measures = useMeasures();

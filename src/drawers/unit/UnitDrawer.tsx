@@ -88,7 +88,10 @@ function useFindings(id: UnitId, which: (finding: Finding) => boolean): readonly
 
 /** What is said of the unit as a whole, and not of one of its settings. */
 function Noticed({ id }: { readonly id: UnitId }) {
-  const findings = useFindings(id, atUnit);
+  const latest = useUnitResult(id)?.latest;
+  // Why there is no solution stands above already.
+  const said = (latest?.state === 'no-solution' && latest.reasons) || [];
+  const findings = useFindings(id, atUnit).filter(({ code }) => said.every((reason) => reason.code !== code));
   if (findings.length === 0) return null;
   return (
     <section className="section">

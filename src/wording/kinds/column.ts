@@ -167,12 +167,12 @@ export const column: KindWords = {
     },
     'column/out-of-reach': {
       title: 'Out of reach',
-      says: 'Asked for {asked}; from a plain column on it came to {reached}, {way%} of the way, and no further. Tried: {tried...}.',
+      says: 'Asked for {asked}; from a plain column on it came to {reached}, {way%} of the way, and no further.',
       next: 'Ask for less, give more stages, or fix something else.',
     },
     'column/not-found': {
       title: 'No solution found',
-      says: 'The search ended at {place} with a residual of {residual} after {iterations} steps. Tried: {tried...}.',
+      says: 'The search ended at {place} with a residual of {residual} after {iterations} steps.',
       next: 'Start from what is easy, such as reflux ratio and distillate, and move on from there.',
     },
     'column/feed-vapour-above-top': {
