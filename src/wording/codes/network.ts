@@ -5,7 +5,7 @@ export const NETWORK_SENTENCES: Readonly<Record<string, Sentence>> = {
   'network/nothing-enters': {
     title: 'Nothing enters the loop',
     says: 'No stream leads into the loop of {unit...}, so nothing says how much flows in it.',
-    next: 'Give its circulating flow: end the loop in a product at stream {stream} and begin it again there with a feed of the same state, or let a feed join it.',
+    next: 'Give its circulating flow: cut the loop at stream {stream}, begin it there with a feed of what shall go round and end it in a product; it holds when the product comes out as the feed goes in. Or let a feed join it, and something leave.',
   },
   'network/no-way-out': {
     title: 'No way out',
