@@ -8,6 +8,7 @@ import { timeExample } from './example';
 import { timeFlashes } from './flash';
 import { timeModels } from './models';
 import { timeScene } from './scene';
+import { timeTwoColumns } from './twoColumns';
 
 const now = (): number => performance.now();
 
@@ -17,6 +18,7 @@ const BENCHES: Readonly<Record<string, () => Promise<readonly object[]>>> = {
   flash: () => timeFlashes(now),
   columns: () => timeColumns(now),
   growth: async () => (await growth(now)).map(([stages, ms, steps]) => ({ stages, ms, steps })),
+  train: () => timeTwoColumns(now),
   example: () => timeExample(now),
   scene: async () => timeScene(now),
   browser: timeBrowser,
