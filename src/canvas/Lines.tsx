@@ -4,6 +4,7 @@ import type { StreamId } from '../engine/ids';
 import { useSession, useStores } from '../store/react';
 import { chooseStream, isPointed } from './choose';
 import { useSheet } from './sheetStore';
+import { useField, useItem } from './watch';
 
 /** Every stream's line, hanging ones too, in one layer below the units. */
 export const Lines = memo(function Lines() {
@@ -19,9 +20,9 @@ export const Lines = memo(function Lines() {
 
 const Line = memo(function Line({ id }: { readonly id: StreamId }) {
   const stores = useStores();
-  const line = useSheet((state) => state.lines.get(id));
+  const line = useItem('lines', id);
   const selected = useSession((state) => state.streams.includes(id) || isPointed(state, id));
-  const opening = useSheet((state) => state.dropping?.on === id);
+  const opening = useField('dropping', (dropping) => dropping?.on === id);
   if (!line) return null;
   return (
     <g

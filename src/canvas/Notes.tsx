@@ -1,6 +1,7 @@
 import { memo, useLayoutEffect, useRef } from 'react';
 import { useShallow } from 'zustand/react/shallow';
-import { noteShape } from '../drawing/noteShapes';
+import { standingNotes } from '../drawing/notes';
+import type { Point } from '../drawing/types';
 import type { Note } from '../sketch/types';
 import { useSession, useSketch, useStores } from '../store/react';
 import { adds } from './choose';
@@ -8,6 +9,7 @@ import { endKeys } from './keys';
 import { endWriting, holdNote } from './noteEdits';
 import { Steady, Text } from './Shapes';
 import { type HeldNote, useSheet, useSheetStore } from './sheetStore';
+import { useField } from './watch';
 
 /** Notes or areas of the sheet: areas lie behind units and lines, notes before them. */
 export const Notes = memo(function Notes({ kind }: { readonly kind: NonNullable<Note['kind']> }) {
@@ -33,9 +35,11 @@ const OneNote = memo(function OneNote({ note }: { readonly note: Note }) {
   const writing = useSheet((state) => state.writing === note.id);
   const writable = useSketch((state) => state.writable);
   const standing = { ...note, ...held } as Note & HeldNote;
-  const shape = noteShape(standing);
+  const drawn = useField('scene', ({ notes }) => notes.find(({ id }) => id === note.id));
+  const [shape] = held || !drawn ? standingNotes([standing]) : [drawn];
   if (!shape) return null;
-  const { box } = shape;
+  const { box, texts } = shape;
+  const hold: Point = held || !drawn ? [box.x, box.y] : drawn.hold;
   const choose = (event: React.PointerEvent | React.MouseEvent): void => {
     endKeys(stores, sheet);
     const { notes } = stores.session.getState();
@@ -61,16 +65,11 @@ const OneNote = memo(function OneNote({ note }: { readonly note: Note }) {
       style={{ transform: `translate(${box.x}px, ${box.y}px)`, width: box.w, height: box.h }}
     >
       <svg aria-hidden="true" style={{ left: -box.x, top: -box.y }}>
-        {shape.texts.map((text) => {
-          const words = <Text key={text.at[1]} shape={text} />;
-          return isArea ? (
-            <Steady key={text.at[1]} about={[box.x, box.y]}>
-              {words}
-            </Steady>
-          ) : (
-            words
-          );
-        })}
+        <Steady about={hold} upTo={drawn?.upTo ?? 1}>
+          {texts.map((text) => (
+            <Text key={text.at[1]} shape={text} />
+          ))}
+        </Steady>
       </svg>
       {/* An area is taken by its name and its border; what stands in it stays free for the hand. */}
       <button

@@ -1,4 +1,5 @@
 import { useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import { createPortal } from 'react-dom';
 import {
   type Node,
   type NodeChange,
@@ -7,12 +8,12 @@ import {
   SelectionMode,
   useOnViewportChange,
   useReactFlow,
+  useStore,
   useStoreApi,
-  ViewportPortal,
 } from 'reactflow';
 import 'reactflow/dist/style.css';
 import type { UnitId } from '../engine/ids';
-import { useSession, useSketch, useStores } from '../store/react';
+import { type Stores, useSession, useSketch, useStores } from '../store/react';
 import './sheet.css';
 import './drawing.css';
 import './hand.css';
@@ -34,7 +35,7 @@ import { OfferMenu } from './OfferMenu';
 import { PullLayer } from './PullLayer';
 import { steadyScale } from './quiet';
 import { StreamMarks } from './StreamMarks';
-import { createSheetStore, SheetProvider, useSheet, useSheetStore } from './sheetStore';
+import { createSheetStore, SheetProvider, type SheetStore, useSheet, useSheetStore } from './sheetStore';
 import { TitleStrip } from './TitleStrip';
 import { UnitNode } from './UnitNode';
 import { createView, type SheetView } from './view';
@@ -70,6 +71,7 @@ function View() {
   useEffect(() => putHandle(stores, view), [stores, view]);
   useEffect(() => keepCentred(stores, view), [stores, view]);
   useEffect(() => keepZones(stores, sheet), [stores, sheet]);
+  useEffect(() => markHand(sheet, root), [sheet]);
   useEffect(() => keepClipboard(stores), [stores]);
 
   // Text and marks stand still on the screen while the sheet is zoomed: two custom properties, no rendering.
@@ -117,22 +119,21 @@ function View() {
   );
 }
 
-/** React Flow with the scene's units as its nodes. */
-function Flow({ view }: { readonly view: SheetView }) {
-  const stores = useStores();
-  const sheet = useSheetStore();
-  const shapes = useSheet((state) => state.scene.units);
-  const selected = useSession((state) => state.units);
-  const writable = useSketch((state) => state.writable);
-  const nodes = useRef<Node[]>([]);
-  nodes.current = useMemo(() => nodesOf(shapes, new Set(selected), nodes.current), [shapes, selected]);
-  const drag = useMemo(() => createDrag(stores, sheet), [stores, sheet]);
-  const banding = useRef(false);
+/** Units are under the hand: hand.css puts a pane before the sheet. */
+const markHand = (sheet: SheetStore, root: { readonly current: HTMLElement | null }): (() => void) =>
+  sheet.subscribe((now, before) => {
+    if ((now.moved === null) !== (before.moved === null))
+      root.current?.toggleAttribute('data-moving', now.moved !== null);
+  });
 
-  const change = useCallback(
-    (changes: NodeChange[]) => {
+/** What the hand does on the sheet. Made once: React Flow draws every node anew when it is handed other functions. */
+function createHandlers(stores: Stores, sheet: SheetStore, view: SheetView) {
+  const drag = createDrag(stores, sheet);
+  let banding = false;
+  return {
+    onNodesChange(changes: NodeChange[]): void {
       drag.take(changes);
-      if (!banding.current) return;
+      if (!banding) return;
       const chosen = new Set(stores.session.getState().units);
       for (const item of changes) {
         if (item.type !== 'select') continue;
@@ -141,37 +142,52 @@ function Flow({ view }: { readonly view: SheetView }) {
       }
       stores.session.setState({ units: [...chosen] });
     },
-    [drag, stores],
+    onNodeClick(event: React.MouseEvent, node: Node): void {
+      endKeys(stores, sheet);
+      chooseUnit(stores, node.id as UnitId, event);
+    },
+    onNodeDragStart: drag.start,
+    onNodeDragStop: drag.stop,
+    onSelectionStart(event: React.MouseEvent): void {
+      banding = true;
+      if (!adds(event)) stores.session.setState({ units: [], streams: [], notes: [] });
+    },
+    onSelectionEnd(): void {
+      banding = false;
+      const { units, streams } = stores.session.getState();
+      if (units.length > 0) stores.session.select(units, streams);
+    },
+    onMoveStart(event: unknown): void {
+      if (event) view.handled();
+    },
+    onPaneClick(): void {
+      endKeys(stores, sheet);
+      stores.session.select([], []);
+    },
+  };
+}
+
+/** React Flow with the scene's units as its nodes. */
+function Flow({ view }: { readonly view: SheetView }) {
+  const stores = useStores();
+  const sheet = useSheetStore();
+  const shapes = useSheet((state) => state.scene.units);
+  const selected = useSession((state) => state.units);
+  const writable = useSketch((state) => state.writable);
+  const moved = useSheet((state) => state.moved);
+  const handlers = useMemo(() => createHandlers(stores, sheet, view), [stores, sheet, view]);
+  const nodes = useRef<Node[]>([]);
+  nodes.current = useMemo(
+    () => nodesOf(shapes, new Set(selected), nodes.current, moved),
+    [shapes, selected, moved],
   );
 
   return (
     <ReactFlow
+      {...handlers}
       nodes={nodes.current}
       edges={NO_EDGES}
       nodeTypes={NODE_TYPES}
-      onNodesChange={change}
-      onNodeClick={(event, node) => {
-        endKeys(stores, sheet);
-        chooseUnit(stores, node.id as UnitId, event);
-      }}
-      onNodeDragStart={drag.start}
-      onNodeDragStop={drag.stop}
-      onSelectionStart={(event) => {
-        banding.current = true;
-        if (!adds(event)) stores.session.setState({ units: [], streams: [], notes: [] });
-      }}
-      onSelectionEnd={() => {
-        banding.current = false;
-        const { units, streams } = stores.session.getState();
-        if (units.length > 0) stores.session.select(units, streams);
-      }}
-      onMoveStart={(event) => {
-        if (event) view.handled();
-      }}
-      onPaneClick={() => {
-        endKeys(stores, sheet);
-        stores.session.select([], []);
-      }}
       nodesDraggable={writable}
       nodesConnectable={false}
       nodesFocusable={false}
@@ -190,15 +206,30 @@ function Flow({ view }: { readonly view: SheetView }) {
       maxZoom={LARGEST}
       attributionPosition="top-right"
     >
-      <ViewportPortal>
-        <Notes kind="area" />
-        <Lines />
-        <BendLayer />
-        <StreamMarks />
-        <Notes kind="text" />
-        <PullLayer />
-        <DropLayer />
-      </ViewportPortal>
+      {LAYERS}
     </ReactFlow>
   );
 }
+
+/**
+ * Into the sheet's own coordinates, as React Flow's portal leads, which looks through the whole page for its place with every
+ * change.
+ */
+function OnSheet({ children }: { readonly children: React.ReactNode }) {
+  const area = useStore((state) => state.domNode);
+  const place = useMemo(() => area?.querySelector('.react-flow__viewport-portal'), [area]);
+  return place ? createPortal(children, place) : null;
+}
+
+/** The same element every time: a node under the hand is no reason to draw the layers anew. */
+const LAYERS = (
+  <OnSheet>
+    <Notes kind="area" />
+    <Lines />
+    <BendLayer />
+    <StreamMarks />
+    <Notes kind="text" />
+    <PullLayer />
+    <DropLayer />
+  </OnSheet>
+);

@@ -9,6 +9,7 @@ import { middleOf } from './lines';
 import { pullByPointer } from './pointer';
 import { sourcePort } from './ports';
 import { useSheet, useSheetStore } from './sheetStore';
+import { useField, useItem } from './watch';
 
 const LINE_HEIGHT = 13;
 /** The stream's element is a square of 24 px around its diamond. */
@@ -29,11 +30,14 @@ export const StreamMarks = memo(function StreamMarks() {
 /** One stream's diamond and label. It listens to its own line, label, name and selection, to nothing else. */
 const StreamMark = memo(function StreamMark({ id }: { readonly id: StreamId }) {
   const stores = useStores();
-  const line = useSheet((state) => state.lines.get(id));
-  const label = useSheet((state) => state.labels.get(id));
-  const name = useSheet((state) => state.streamNames.get(id));
-  const quietLabel = useSheet((state) => state.quiet.labels.has(id));
-  const quietDiamond = useSheet((state) => state.quiet.diamonds.has(id));
+  const line = useItem('lines', id);
+  const label = useItem('labels', id);
+  const name = useItem('streamNames', id);
+  const quiet = useField(
+    'quiet',
+    ({ labels, diamonds }) => Number(labels.has(id)) + 2 * Number(diamonds.has(id)),
+  );
+  const [quietLabel, quietDiamond] = [(quiet & 1) !== 0, (quiet & 2) !== 0];
   const selected = useSession((state) => state.streams.includes(id));
   const pointed = useSession((state) => isPointed(state, id));
   const entry = useSession((state) => state.units.length === 0 && state.streams[0] === id);

@@ -9,20 +9,21 @@ import { isPointed } from './choose';
 import { flagPort } from './extent';
 import { nodeBox } from './nodes';
 import { Paths, Steady, Text } from './Shapes';
-import { useSheet, useSheetStore } from './sheetStore';
+import { useSheetStore } from './sheetStore';
 import { UnitPorts } from './UnitPorts';
+import { useField, useItem } from './watch';
 
 /** One unit on the sheet. It listens to its own shape, name and selection, to nothing else. */
 export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
   const unit = id as UnitId;
   const store = useSheetStore();
-  const shape = useSheet((state) => state.units.get(unit));
-  const name = useSheet((state) => state.unitNames.get(unit));
-  const quietDuty = useSheet((state) => state.quiet.duties);
+  const shape = useItem('units', unit);
+  const name = useItem('unitNames', unit);
+  const quietDuty = useField('quiet', ({ duties }) => duties);
   const selected = useSession((state) => state.units.includes(unit));
   const pointed = useSession((state) => isPointed(state, unit));
   const entry = useSession((state) => isEntry(state.units, state.streams, unit));
-  const first = useSheet((state) => state.scene.units[0]?.unit === unit);
+  const first = useField('scene', ({ units }) => units[0]?.unit === unit);
   if (!shape) return null;
   const box = nodeBox(shape);
   return (

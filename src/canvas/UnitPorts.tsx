@@ -7,6 +7,7 @@ import { capital, portWord } from '../wording';
 import { pullByPointer } from './pointer';
 import { isFree, portsOf } from './ports';
 import { useSheet, useSheetStore } from './sheetStore';
+import { useField } from './watch';
 
 interface Props {
   readonly unit: UnitId;
@@ -16,12 +17,11 @@ interface Props {
 
 /** Marks of the ports a stream can be pulled from, while the unit is under the pointer or selected alone. */
 export const UnitPorts = memo(function UnitPorts({ unit, origin }: Props) {
-  const hovered = useSheet((state) => state.hovered === unit);
-  const busy = useSheet((state) => state.pulling !== null || state.dropping !== null || state.moved !== null);
+  const hovered = useField('hovered', (over) => over === unit);
   const alone = useSession(
     (state) => state.units.length === 1 && state.streams.length === 0 && state.units[0] === unit,
   );
-  if (busy || !(hovered || alone)) return null;
+  if (!hovered && !alone) return null;
   return <Marks unit={unit} origin={origin} />;
 });
 
@@ -29,11 +29,12 @@ function Marks({ unit: id, origin }: Props) {
   const stores = useStores();
   const sheet = useSheetStore();
   const unit = useUnit(id);
+  const busy = useSheet((state) => state.pulling !== null || state.dropping !== null || state.moved !== null);
   const shape = useSheet((state) => state.units.get(id));
   const streams = useSketch(
     useShallow((state) => state.sketch.streams.filter((s) => s.from?.[0] === id || s.to?.[0] === id)),
   );
-  if (!unit) return null;
+  if (!unit || busy) return null;
   return portsOf({ streams }, unit, shape)
     .filter(isFree)
     .map((port) => (

@@ -8,7 +8,7 @@ import { drawnTo, type Guide, guidePath, guidesOf, MAGNET } from './guides';
 import { sheetOf } from './handle';
 import { endMove } from './moving';
 import { nodeBox } from './nodes';
-import { AT_REST, type SheetState, type SheetStore } from './sheetStore';
+import { AT_REST, hold, type SheetState, type SheetStore } from './sheetStore';
 
 interface Start {
   readonly at: Point;
@@ -77,7 +77,7 @@ export function createDrag(stores: Stores, sheet: SheetStore) {
       const now = sheet.getState().moved;
       if (now?.size === moved.size && [...moved].every(([id, p]) => samePoint(now.get(id), p))) return;
       const bends = bendsAfter(stores.sketch.getState().sketch, held.lines, moved);
-      sheet.setState({ moved, bends, guide: guidePath(guides, by) });
+      hold(sheet, { moved, bends, guide: guidePath(guides, by) });
     },
 
     stop(): void {

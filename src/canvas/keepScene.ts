@@ -1,6 +1,7 @@
 import { buildScene, sameLayout } from '../drawing/scene';
 import { textScaleAt } from '../drawing/textScale';
 import type { Scene } from '../drawing/types';
+import { linesUnderHand } from '../drawing/underHand';
 import type { UnitId } from '../engine/ids';
 import type { Finding } from '../engine/outcome';
 import { measuresOf } from '../parts/measures';
@@ -12,7 +13,7 @@ import { withBends } from './bends';
 import { streamName, unitName } from './names';
 import { quietAt } from './quiet';
 import { createSceneInput } from './sceneInput';
-import { AT_REST, type SheetState, type SheetStore } from './sheetStore';
+import { AT_REST, letFollow, type SheetState, type SheetStore } from './sheetStore';
 import { tagOf } from './words';
 
 /** The list as a map by id; the known map itself when the list is the same. */
@@ -30,27 +31,40 @@ const indexed = <T, K>(
 export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => number): () => void {
   const input = createSceneInput();
   let scene: Scene | undefined;
+  let still: Pick<SheetState, 'lines' | 'labels'> = { lines: new Map(), labels: new Map() };
 
   const build = (): void => {
+    const { sketch } = stores.sketch.getState();
     const { gaps } = stores.compiled.getState();
     const results = stores.results.getState();
     const before = sheet.getState();
-    const sketch = withBends(stores.sketch.getState().sketch, before.bends);
-    const next = buildScene(sketch, input(sketch, results, gaps, before.moved, before.textScale), scene);
+    const next = buildScene(sketch, input(sketch, results, gaps, null, before.textScale), scene);
     const units = indexed(next.units, before.scene.units, before.units, (shape) => shape.unit);
-    const lines = indexed(next.lines, before.scene.lines, before.lines, (shape) => shape.stream);
-    const labels = indexed(next.labels, before.scene.labels, before.labels, (shape) => shape.stream);
+    const lines = indexed(next.lines, before.scene.lines, still.lines, (shape) => shape.stream);
+    const labels = indexed(next.labels, before.scene.labels, still.labels, (shape) => shape.stream);
     scene = next;
+    still = { lines, labels };
     sheet.setState({
       scene: next,
       units,
-      lines,
-      labels,
+      ...withHand(before),
       ...namesOf(sketch, results, gaps, units, labels),
       ...(sameRoom(next, before.scene) ? {} : { quiet: quietAt(next, zoomNow()) }),
     });
   };
 
+  /** Lines and labels with what the hand is moving laid over them. */
+  const withHand = ({ moved, bends }: Pick<SheetState, 'moved' | 'bends'>): typeof still => {
+    if (!scene || (!moved && !bends)) return still;
+    const { streams } = withBends(stores.sketch.getState().sketch, bends);
+    const over = linesUnderHand(scene, streams, moved ?? new Map(), new Set(bends?.keys()));
+    return {
+      lines: new Map([...still.lines, ...over.lines]),
+      labels: new Map([...still.labels, ...over.labels]),
+    };
+  };
+
+  letFollow(sheet, withHand);
   build();
   let shown = stores.sketch.getState().sketch;
   const stop = [
@@ -69,8 +83,9 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
       if (now.gaps !== before.gaps && placesOf(now.gaps) !== placesOf(before.gaps)) build();
     }),
     sheet.subscribe((now, before) => {
-      if (now.moved !== before.moved || now.bends !== before.bends || now.textScale !== before.textScale)
-        build();
+      const held = now.moved !== before.moved || now.bends !== before.bends;
+      if (now.textScale !== before.textScale) build();
+      else if (held && now.lines === before.lines) sheet.setState(withHand(now));
     }),
   ];
   return () => {

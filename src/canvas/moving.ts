@@ -63,9 +63,11 @@ export function nudge(stores: Stores, sheet: SheetStore, direction: Arrow, steps
     heldNotes: heldNotes && new Map([...heldNotes].map(([id, note]) => [id, { ...note, at: by(note.at) }])),
   });
   // Where it stands now, what is it in line with?
-  const { scene } = sheet.getState();
-  const guides = next ? guidesOf(scene.units, sketch.streams, new Set(next.keys())) : [];
-  sheet.setState({ guide: guidePath(guides, [0, 0]) });
+  const [first] = next ?? [];
+  const start = first && sketch.units.find((unit) => unit.id === first[0])?.at;
+  if (!next || !first || !start) return;
+  const guides = guidesOf(sheet.getState().scene.units, sketch.streams, new Set(next.keys()));
+  sheet.setState({ guide: guidePath(guides, [first[1][0] - start[0], first[1][1] - start[1]]) });
 }
 
 /** Notes and areas that are moved by keys become wider, narrower, higher or lower. */

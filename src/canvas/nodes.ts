@@ -1,5 +1,5 @@
 import type { Node } from 'reactflow';
-import type { Box, UnitShape } from '../drawing/types';
+import type { Box, Point, UnitShape } from '../drawing/types';
 import type { UnitId } from '../engine/ids';
 
 const SMALLEST = 24;
@@ -12,6 +12,13 @@ export function nodeBox({ box }: Pick<UnitShape, 'box'>): Box {
   return { x: box.x - padX, y: box.y - padY, w: box.w + 2 * padX, h: box.h + 2 * padY };
 }
 
+/** Where the hand has it, if it does. */
+function boxUnderHand(shape: UnitShape, moved: ReadonlyMap<UnitId, Point> | null): Box {
+  const box = nodeBox(shape);
+  const at = moved?.get(shape.unit);
+  return at ? { ...box, x: box.x + at[0] - shape.at[0], y: box.y + at[1] - shape.at[1] } : box;
+}
+
 /**
  * React Flow's nodes: a cache of the scene's units. A node is made anew only when its unit's place, size or selection
  * changes; `data` stays empty, for the view listens to its own unit.
@@ -20,11 +27,12 @@ export function nodesOf(
   shapes: readonly UnitShape[],
   selected: ReadonlySet<UnitId>,
   before: readonly Node[],
+  moved: ReadonlyMap<UnitId, Point> | null = null,
 ): Node[] {
   const known = new Map(before.map((node) => [node.id, node]));
   let same = before.length === shapes.length;
   const nodes = shapes.map((shape, k) => {
-    const box = nodeBox(shape);
+    const box = boxUnderHand(shape, moved);
     const old = known.get(shape.unit);
     const isSelected = selected.has(shape.unit);
     const keep =

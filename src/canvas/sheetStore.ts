@@ -120,6 +120,20 @@ const emptyScene: Scene = {
   omitted: [],
 };
 
+type Followers = Pick<SheetState, 'lines' | 'labels'>;
+type Hand = Pick<SheetState, 'moved' | 'bends'>;
+const following = new WeakMap<object, (hand: Hand) => Followers>();
+
+/** Says what lines and labels are while units or bends are under the hand. */
+export const letFollow = (sheet: SheetStore, follow: (hand: Hand) => Followers): void => {
+  following.set(sheet, follow);
+};
+
+/** Takes units or bends under the hand, and all that follows them, in one change: everybody is told once. */
+export function hold(sheet: SheetStore, hand: Hand & Partial<SheetState>): void {
+  sheet.setState({ ...hand, ...following.get(sheet)?.(hand) });
+}
+
 export const createSheetStore = () =>
   createStore<SheetState>()(() => ({
     scene: emptyScene,
