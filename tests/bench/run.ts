@@ -4,6 +4,7 @@ import { cpus } from 'node:os';
 import { parseArgs } from 'node:util';
 import { timeBrowser } from './browser';
 import { growth, timeColumns } from './column';
+import { timeDrag } from './drag';
 import { timeExample } from './example';
 import { timeFlashes } from './flash';
 import { timeModels } from './models';
@@ -22,6 +23,7 @@ const BENCHES: Readonly<Record<string, () => Promise<readonly object[]>>> = {
   example: () => timeExample(now),
   scene: async () => timeScene(now),
   browser: timeBrowser,
+  drag: timeDrag,
 };
 
 const { values } = parseArgs({ options: { what: { type: 'string' }, json: { type: 'string' } } });
