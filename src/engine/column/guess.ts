@@ -145,7 +145,7 @@ function boilingPoint(s: StageSystem, z: Float64Array): number {
   const P = s.task.P_Pa[Math.floor(s.places / 2)]!;
   let low = 40;
   let high = 1500;
-  for (let pass = 0; pass < 24; pass++) {
+  for (let pass = 0; pass < 18; pass++) {
     const T = (low + high) / 2;
     s.model.startK(T, P, K);
     let sum = 0;
@@ -225,7 +225,7 @@ function meet(
 ): void {
   let low = -m * (Math.max(...lnK) + 1) - 50;
   let high = -m * (Math.min(...lnK) - 1) + 50;
-  for (let pass = 0; pass < 50; pass++) {
+  for (let pass = 0; pass < 34; pass++) {
     const middle = (low + high) / 2;
     if (splitInto(d, f, lnK, middle, m) > share * total) high = middle;
     else low = middle;

@@ -143,7 +143,8 @@ export class Newton {
   private finish(wanted: Wanted, before: number, pass: number): NewtonEnd {
     const { s } = this;
     this.move(wanted, 1);
-    if (s.evaluate()) {
+    // Derivatives have done their work.
+    if (s.evaluate(1)) {
       const residual = this.worst(wanted);
       if (residual <= before) return { end: 'solved', residual, iterations: pass };
     }

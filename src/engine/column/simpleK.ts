@@ -28,7 +28,7 @@ export function simplePoint(k: SimpleK, z: Float64Array, P_Pa: number, of: 'bubb
   const sign = of === 'bubble' ? 1 : -1;
   let low = 1 / 1500;
   let high = 1 / 40;
-  for (let pass = 0; pass < 40; pass++) {
+  for (let pass = 0; pass < 24; pass++) {
     const u = (low + high) / 2;
     let sum = 0;
     for (let i = 0; i < z.length; i++)

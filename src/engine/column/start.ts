@@ -102,17 +102,26 @@ function meetTop(s: StageSystem, top: number, fed: Float64Array): void {
   for (let i = 0; i < n; i++) d[i] = Math.min(share * (s.totalCondenser ? l : v)[i]!, fed[i]!);
   const scale = (i: number, theta: number): number =>
     fed[i]! / (d[i]! + theta * Math.max(fed[i]! - d[i]!, 1e-12 * fed[i]!));
+  // Newton in ln theta, within what is known: the total falls as theta grows.
   let low = -40;
   let high = 40;
-  for (let pass = 0; pass < 40; pass++) {
-    const middle = (low + high) / 2;
-    const theta = Math.exp(middle);
+  let t = 0;
+  for (let pass = 0; pass < 30; pass++) {
+    const theta = Math.exp(t);
     let sum = 0;
-    for (let i = 0; i < n; i++) sum += d[i]! * scale(i, theta);
-    if (sum > top) low = middle;
-    else high = middle;
+    let slope = 0;
+    for (let i = 0; i < n; i++) {
+      const part = d[i]! * scale(i, theta);
+      sum += part;
+      slope -= part * (1 - part / fed[i]!);
+    }
+    if (Math.abs(sum - top) < 1e-6 * top) break;
+    if (sum > top) low = t;
+    else high = t;
+    const next = t - (sum - top) / slope;
+    t = next > low && next < high ? next : (low + high) / 2;
   }
-  const theta = Math.exp((low + high) / 2);
+  const theta = Math.exp(t);
   for (let i = 0; i < n; i++) {
     const r = scale(i, theta);
     for (let at = i; at < places * n; at += n) {
@@ -167,15 +176,19 @@ export function startBySweeps(s: StageSystem, guess: Guess, sweeps: Sweeps): voi
     settle();
     if (pass < sweeps.simple) simpleSweep(s, guess.simple, K, keptL);
   }
+  if (sweeps.model === 0) return;
   const before = new Float64Array(places);
+  const lnK = K.map((k) => Math.log(Math.max(k, 1e-300)));
   for (let pass = 0; pass < sweeps.model; pass++) {
     before.set(T);
-    for (let j = 0; j < places; j++) modelSweep(s, j, guess.simple, K, sweeps.share);
+    for (let j = 0; j < places; j++) modelSweep(s, j, guess.simple, lnK, sweeps.share);
     T.sort();
-    // K were those of the temperatures before.
     for (let j = 0; j < places; j++) {
       const turn = 1 / before[j]! - 1 / T[j]!;
-      for (let i = 0; i < n; i++) K[j * n + i]! *= Math.exp(guess.simple.b[i]! * turn);
+      for (let at = j * n, i = 0; i < n; at++, i++) {
+        lnK[at]! += guess.simple.b[i]! * turn;
+        K[at] = Math.exp(lnK[at]!);
+      }
     }
     settle();
   }
@@ -211,9 +224,9 @@ function simpleSweep(s: StageSystem, { b }: SimpleK, K: Float64Array, L: Float64
 
 /**
  * One step of a place towards its bubble point with the model's K, whose change with temperature is taken from the simple
- * K-values: it needs no derivatives. K stay those of the temperature before.
+ * K-values: it needs no derivatives. ln K stay those of the temperature before.
  */
-function modelSweep(s: StageSystem, j: number, simple: SimpleK, K: Float64Array, share: number): void {
+function modelSweep(s: StageSystem, j: number, simple: SimpleK, lnK: Float64Array, share: number): void {
   const { n, l, v, T, model, task, scratch: x } = s;
   const at = j * n;
   const P = task.P_Pa[j]!;
@@ -233,9 +246,9 @@ function modelSweep(s: StageSystem, j: number, simple: SimpleK, K: Float64Array,
   let sum = 0;
   let slope = 0;
   for (let i = 0; i < n; i++) {
-    const k = Math.exp(liq.lnPhi[i]! - vap.lnPhi[i]!);
-    const y = x[i]! * k;
-    K[at + i] = share === 1 ? k : k ** share * K[at + i]! ** (1 - share);
+    const k = liq.lnPhi[i]! - vap.lnPhi[i]!;
+    const y = x[i]! * Math.exp(k);
+    lnK[at + i] = share * k + (1 - share) * lnK[at + i]!;
     sum += y;
     slope += y * simple.b[i]!;
   }
