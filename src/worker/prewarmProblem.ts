@@ -1,37 +1,46 @@
+import { type ElementCounts, molarMass_g_mol } from '../engine/chemicals/elements';
 import type { ChemicalData } from '../engine/chemicals/types';
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Basis, Problem, ProblemUnit } from '../engine/network/types';
 
-/** Made-up chemicals, light to heavy: they only have to lead the code along its usual paths, and are never shown. */
-const chemical = (
+/** Made-up chemicals with rounded constants: they only have to lead the code along its usual paths, and are never shown. */
+function chemical(
   id: string,
-  MW_g_mol: number,
+  elements: ElementCounts,
   Tc_K: number,
   Pc_Pa: number,
   omega: number,
-): ChemicalData => ({
-  id,
-  name: id,
-  MW_g_mol,
-  Tc_K,
-  Pc_Pa,
-  omega,
-  Hf_J_mol: 0,
-  S0_J_molK: 200,
-  elements: { C: 1 },
-  corr: { ideal_gas_cp: [{ form: 'powers', of: 'Cp', c: [20 + MW_g_mol, 0.1] }] },
-  sources: {},
-});
+  Hf_J_mol: number,
+): ChemicalData {
+  const MW_g_mol = molarMass_g_mol(elements) ?? Number.NaN;
+  return {
+    id,
+    name: id,
+    MW_g_mol,
+    Tc_K,
+    Pc_Pa,
+    omega,
+    Hf_J_mol,
+    S0_J_molK: 200,
+    elements,
+    corr: { ideal_gas_cp: [{ form: 'powers', of: 'Cp', c: [20 + MW_g_mol, 0.02] }] },
+    sources: {},
+  };
+}
 
 export const WARMING: Basis = {
   id: 'prewarm',
   chemicals: [
-    chemical('light', 20, 200, 46e5, 0.02),
-    chemical('lighter', 44, 370, 42e5, 0.15),
-    chemical('middling', 72, 470, 34e5, 0.25),
-    chemical('heavy', 86, 507, 30e5, 0.3),
-    chemical('heavier', 100, 540, 27e5, 0.35),
-    chemical('heaviest', 142, 618, 21e5, 0.49),
+    chemical('light', { C: 1, H: 4 }, 200, 46e5, 0.02, -75e3),
+    chemical('lighter', { C: 3, H: 8 }, 370, 42e5, 0.15, -100e3),
+    chemical('middling', { C: 5, H: 12 }, 470, 34e5, 0.25, -150e3),
+    chemical('heavy', { C: 6, H: 14 }, 507, 30e5, 0.3, -170e3),
+    chemical('heavier', { C: 7, H: 16 }, 540, 27e5, 0.35, -190e3),
+    chemical('heaviest', { C: 10, H: 22 }, 618, 21e5, 0.49, -250e3),
+    chemical('burning', { O: 2 }, 155, 50e5, 0.02, 0),
+    chemical('idle', { N: 2 }, 126, 34e5, 0.04, 0),
+    chemical('burnt', { C: 1, O: 2 }, 304, 74e5, 0.22, -390e3),
+    chemical('wet', { H: 2, O: 1 }, 647, 220e5, 0.34, -240e3),
   ],
   model: {
     kind: 'peng-robinson',
@@ -42,6 +51,7 @@ export const WARMING: Basis = {
     pairs: [
       { i: 0, j: 4, kij: 0.02, origin: 'predicted', source: '' },
       { i: 0, j: 5, kij: 0.04, origin: 'none', source: '' },
+      { i: 0, j: 7, kij: 0.03, origin: 'fitted', source: '' },
     ],
   },
 };
@@ -71,10 +81,11 @@ const column = (distillate: 'vapour' | 'liquid', share: number) => ({
   ],
 });
 
-/** Feed, cooler, drum, let-down, two columns, compressor, pump, join; the conditions change with the edit, so that nothing is reused. */
+/** Feed, cooler, drum, combustion, let-down, two columns, machines, join; the conditions change with the edit, so that nothing is reused. */
 export function warmingProblem(edit: number): Problem {
   const moved = 1 + 1e-3 * (edit % 50);
-  const parts = Float64Array.of(0.1, 0.15, 0.2, 0.2, 0.2, 0.15);
+  const parts = Float64Array.of(0.1, 0.15, 0.2, 0.2, 0.2, 0.15, 0, 0, 0, 0);
+  const air = Float64Array.of(0, 0, 0, 0, 0, 0, 0.21, 0.78, 0, 0.01);
   return {
     edit,
     basis: WARMING.id,
@@ -96,8 +107,17 @@ export function warmingProblem(edit: number): Problem {
       unit('k compressor', 'in=7', 'out=9', { p: { P: 6e5 }, efficiency: { isentropic: 0.75 } }),
       unit('b column', 'feed1=8', 'liquidDistillate=10 bottoms=11', column('liquid', 0.4)),
       unit('p pump', 'in=11', 'out=12', { p: { P: 8e5 }, efficiency: 0.7 }),
-      unit('j join', 'in1=3 in2=9', 'out=13', { p: { drop: 0 } }),
+      unit('g feed', '', 'out=16', {
+        state: { T: 300, P: 1e5 },
+        flow: { is: 'molar', n_mol_s: 100 * moved },
+        composition: { is: 'parts', basis: 'mole', parts: air },
+      }),
+      unit('n compressor', 'in=16', 'out=17', { p: { P: 1.2e5 }, efficiency: { isentropic: 0.7 } }),
+      unit('o valve', 'in=3', 'out=18', { p: { P: 1.2e5 } }),
+      unit('x chamber', 'fuel1=18 air=17', 'out=19', { p: { drop: 0 }, heat: { duty: 0 } }),
+      unit('y cooler', 'in=19', 'out=20', { p: { drop: 5e3 }, T: 450 }),
       unit('s cooler', 'in=10', 'out=14', { p: { drop: 1e4 }, subcooling: 5 }),
+      unit('j join', 'in1=9 in2=14', 'out=13', { p: { drop: 0 } }),
       unit('q heater', 'in=12', 'out=15', { p: { drop: 1e4 }, duty: 2e4 }),
       unit('e product', 'in=13', '', {}),
     ],
