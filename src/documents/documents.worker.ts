@@ -1,4 +1,4 @@
-import { makeDocument } from './make';
+import { makeDocument, wakePdf } from './make';
 import type { FromDocuments, ToDocuments } from './messages';
 
 interface Scope {
@@ -8,7 +8,13 @@ interface Scope {
 const scope = globalThis as unknown as Scope;
 
 /** Entry of the documents' worker: one order at a time, nothing of the page. */
-scope.onmessage = async ({ data: { job, order } }) => {
+scope.onmessage = async ({ data }) => {
+  if (data.say === 'wake') {
+    // What does not load now is asked for again, and told, with the order itself.
+    await wakePdf(data.fonts).catch(() => undefined);
+    return;
+  }
+  const { job, order } = data;
   try {
     const made = await makeDocument(order, (doing, share) =>
       scope.postMessage({ say: 'progress', job, doing, share }),

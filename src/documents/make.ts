@@ -10,6 +10,12 @@ export type Progress = (doing: string, share: number) => void;
 
 const XLSX = 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet';
 
+/** Loads the PDF maker and its fonts. */
+export async function wakePdf(fonts: string): Promise<void> {
+  const [, { pdfFonts }] = await Promise.all([import('../report/pdf/write'), import('./fonts')]);
+  await pdfFonts(fonts);
+}
+
 /** Makes one document. Heavy parts load when they are first asked for. */
 export async function makeDocument(order: DocumentOrder, progress: Progress): Promise<Made> {
   const { what, input, fonts } = order;

@@ -21,11 +21,10 @@ export interface Made {
   readonly pages?: number;
 }
 
-export interface ToDocuments {
-  readonly say: 'make';
-  readonly job: number;
-  readonly order: DocumentOrder;
-}
+export type ToDocuments =
+  | { readonly say: 'make'; readonly job: number; readonly order: DocumentOrder }
+  /** Pages will be asked for soon: load what makes them. */
+  | { readonly say: 'wake'; readonly fonts: string };
 
 export type FromDocuments =
   | { readonly say: 'progress'; readonly job: number; readonly doing: string; readonly share: number }

@@ -9,6 +9,7 @@ import { timeExample } from './example';
 import { timeFlashes } from './flash';
 import { timeModels } from './models';
 import { timeScene } from './scene';
+import { timeSummary } from './summary';
 import { timeTwoColumns } from './twoColumns';
 
 const now = (): number => performance.now();
@@ -22,6 +23,7 @@ const BENCHES: Readonly<Record<string, () => Promise<readonly object[]>>> = {
   train: () => timeTwoColumns(now),
   example: () => timeExample(now),
   scene: async () => timeScene(now),
+  summary: () => timeSummary(now),
   browser: timeBrowser,
   drag: timeDrag,
 };

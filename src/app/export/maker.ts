@@ -58,6 +58,11 @@ export function createMaker(start: () => DocumentWorker) {
   };
 
   return {
+    /** Loads what makes pages, ahead of the first order. */
+    wake(fonts: string): void {
+      worker ??= begin();
+      worker.postMessage({ say: 'wake', fonts });
+    },
     make(order: DocumentOrder, onProgress: Order['onProgress']): Making {
       jobs += 1;
       const job = jobs;

@@ -4,7 +4,7 @@ import type { Sketch } from '../../sketch/types';
 import { writeSketch } from '../../sketch/write';
 import { useSketch, useStores } from '../../store/react';
 import { fingerprint } from '../reporting';
-import { orderOf, type Solved, solvedForDocuments } from './exports';
+import { fontsAddress, orderOf, type Solved, solvedForDocuments } from './exports';
 import { CANCELLED, type Making, previewMaker } from './maker';
 
 export type Preview =
@@ -39,6 +39,7 @@ export function usePreview(): {
 
   useEffect(() => {
     let alive = true;
+    previewMaker().wake(fontsAddress());
     solvedForDocuments(stores).then(
       (solved) => {
         if (!alive) return;
