@@ -9,7 +9,7 @@ export const SMALL = LEAST_STEADY;
 
 const ALL_CLEAR: Quiet = { labels: new Set(), diamonds: new Set(), duties: false };
 
-/** What steps back at a zoom: under 50 % everything but symbols, tags and lines. Above, the scene itself leaves off what has no room. */
+/** What steps back at a zoom: under 40 % everything but symbols, tags and lines. Above, the scene itself leaves off what has no room. */
 export function quietAt(scene: Scene, zoom: number): Quiet {
   if (zoom >= SMALL) return ALL_CLEAR;
   const all = new Set(scene.lines.map((line) => line.stream));

@@ -18,16 +18,18 @@ function solvedScene() {
   return sheet.getState();
 }
 
-test('text keeps its size on the screen between 50 and 150 %', () => {
-  for (const zoom of [0.5, 0.8, 1, 1.5]) expect(steadyScale(zoom) * zoom).toBeCloseTo(1, 12);
+test('text shrinks with the sheet to 80 % and no further down to a zoom of 40 %; up to 150 % it does not swell', () => {
+  for (const zoom of [1, 1.5]) expect(steadyScale(zoom) * zoom).toBeCloseTo(1, 12);
+  for (const zoom of [0.8, 0.9]) expect(steadyScale(zoom)).toBe(1);
+  for (const zoom of [0.4, 0.6, 0.8]) expect(steadyScale(zoom) * zoom).toBeCloseTo(0.8, 12);
   expect(steadyScale(0.25)).toBe(2);
   expect(steadyScale(3)).toBeCloseTo(1 / 1.5, 12);
 });
 
-test('from 50 % up nothing that has room steps back, below only symbols, tags and lines stay', () => {
+test('from 40 % up nothing that has room steps back, below only symbols, tags and lines stay', () => {
   const { scene } = solvedScene();
-  expect(quietAt(scene, 0.5)).toMatchObject({ duties: false, labels: new Set() });
-  const far = quietAt(scene, 0.49);
+  expect(quietAt(scene, 0.4)).toMatchObject({ duties: false, labels: new Set() });
+  const far = quietAt(scene, 0.39);
   expect(far.labels.size).toBe(scene.labels.length);
   expect(far.diamonds.size).toBe(scene.lines.length);
 });
@@ -38,11 +40,11 @@ test('texts are placed anew for the scale at which they keep their size on the s
   keepScene(stores, sheet, () => 1);
   solveAll(stores);
   expect(sheet.getState().scene.textScale).toBe(1);
-  quietAgain(sheet, 0.7);
-  // 1 / 0.7 = 1.43, rounded up to the next eighth
-  expect(sheet.getState().scene.textScale).toBe(1.5);
+  quietAgain(sheet, 0.6);
+  // 0.8 / 0.6 = 1.33, rounded up to the next eighth
+  expect(sheet.getState().scene.textScale).toBe(1.375);
   const { scene } = sheet.getState();
-  quietAgain(sheet, 0.69);
+  quietAgain(sheet, 0.59);
   expect(sheet.getState().scene).toBe(scene);
   quietAgain(sheet, 2);
   expect(sheet.getState().scene.textScale).toBe(1);
@@ -68,8 +70,8 @@ test('zones belong to the page and stand at the edges of the view', () => {
 test('the whole scene fits the view, flags and labels at their size included', () => {
   const { scene } = solvedScene();
   const { zoom } = fitting(scene, 400, 400, 0.25);
-  expect(zoom).toBeLessThanOrEqual(Math.max(0.5, 400 / scene.box.w) + 1e-9);
-  expect(zoom).toBeGreaterThanOrEqual(0.5);
+  expect(zoom).toBeLessThanOrEqual(Math.max(0.4, 400 / scene.box.w) + 1e-9);
+  expect(zoom).toBeGreaterThanOrEqual(0.4);
   expect(fitting(scene, 4000, 4000, 0.25).zoom).toBe(1);
 });
 
