@@ -1,10 +1,13 @@
+import { useRef } from 'react';
 import { useStores } from '../store/react';
 import { capital, kindWord } from '../wording';
 import { offeredKinds, takeOffer } from './pull';
 import { ShelfIcon } from './ShelfIcon';
 import { useSheet, useSheetStore } from './sheetStore';
 
-/** A stream let go on empty sheet: the units it could lead to. */
+const PAUSE_MS = 900;
+
+/** A stream let go on empty sheet, or ended by keys at no port: the units it could lead to. */
 export function OfferMenu({
   toScreen,
 }: {
@@ -13,10 +16,19 @@ export function OfferMenu({
   const stores = useStores();
   const sheet = useSheetStore();
   const offer = useSheet((state) => state.offer);
+  const typed = useRef({ text: '', at: 0 });
   if (!offer) return null;
   const { x, y } = toScreen(offer.at);
   const kinds = offeredKinds(offer.from.dir);
   const close = (): void => sheet.setState({ offer: null });
+  /** Letters choose by the word they begin; a pause begins another word. */
+  const find = (from: Element, letter: string): void => {
+    const now = Date.now();
+    const text = now - typed.current.at > PAUSE_MS ? letter : typed.current.text + letter;
+    typed.current = { text, at: now };
+    const items = [...from.querySelectorAll<HTMLElement>('[role=menuitem]')];
+    items.find((item) => item.textContent?.toLowerCase().startsWith(text))?.focus();
+  };
   const step = (from: Element, by: number): void => {
     const items = [...from.querySelectorAll<HTMLElement>('[role=menuitem]')];
     const at = items.indexOf(document.activeElement as HTMLElement);
@@ -32,7 +44,7 @@ export function OfferMenu({
         left: `min(${x}px, calc(100% - 168px))`,
         top: `clamp(0px, ${y}px, calc(100% - ${Math.min(320, 36 + 28 * kinds.length)}px))`,
       }}
-      ref={(element) => element?.querySelector<HTMLElement>('[role=menuitem]')?.focus()}
+      ref={focusFirst}
       onBlur={(event) => {
         if (!event.currentTarget.contains(event.relatedTarget)) close();
       }}
@@ -40,6 +52,8 @@ export function OfferMenu({
         if (event.key === 'Escape') close();
         else if (event.key === 'ArrowDown') step(event.currentTarget, 1);
         else if (event.key === 'ArrowUp') step(event.currentTarget, -1);
+        else if (/^[a-z]$/i.test(event.key) && !event.ctrlKey && !event.metaKey)
+          find(event.currentTarget, event.key.toLowerCase());
         else return;
         event.preventDefault();
         event.stopPropagation();
@@ -60,3 +74,7 @@ export function OfferMenu({
     </div>
   );
 }
+
+/** Made once, so that the focus moves there when the menu opens, and not with every view of it. */
+const focusFirst = (element: HTMLElement | null): void =>
+  element?.querySelector<HTMLElement>('[role=menuitem]')?.focus({ preventScroll: true });

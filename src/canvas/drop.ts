@@ -19,7 +19,7 @@ import type { Stores } from '../store/react';
 import { together, tryEdit } from './edit';
 import { sheetOf } from './handle';
 import { nearestOn } from './lines';
-import type { Dropping, SheetStore } from './sheetStore';
+import type { Dropping, SheetState, SheetStore } from './sheetStore';
 
 /** A unit opens a line within this distance [screen px]. */
 const CATCH = 14;
@@ -203,6 +203,12 @@ export function freePlace(boxes: readonly Box[], symbol: Box, from: Point): Poin
   return onGrid(from);
 }
 
+/** What a new unit must not stand on: symbols and lines. */
+export const takenBoxes = ({ scene }: Pick<SheetState, 'scene'>): readonly Box[] => [
+  ...scene.units.map((unit) => unit.box),
+  ...scene.lines.flatMap(({ points }) => points.slice(1).map((p, k) => boxOfPiece(points[k]!, p, 1))),
+];
+
 /** The unit that a new one stands beside: the selected one, or the one that the selected stream leads to, or comes from. */
 function unitChosen({ session, sketch }: Stores): UnitId | undefined {
   const { units, streams } = session.getState();
@@ -220,11 +226,7 @@ export function place(stores: Stores, kind: string): UnitId | undefined {
   const start: Point = beside
     ? [beside.box.x + beside.box.w + ROOM[0] - symbol.x, beside.at[1]]
     : (sheet?.middle() ?? [0, 0]);
-  const lines = state?.scene.lines ?? [];
-  const taken = [
-    ...(state?.scene.units.map((unit) => unit.box) ?? []),
-    ...lines.flatMap(({ points }) => points.slice(1).map((p, k) => boxOfPiece(points[k]!, p, 1))),
-  ];
+  const taken = state ? takenBoxes(state) : [];
   const at = freePlace(taken, symbol, start);
   const made = tryEdit(stores, (sketch) => addUnit(sketch, kind, at));
   if (!made?.unit) return undefined;

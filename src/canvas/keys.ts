@@ -90,7 +90,7 @@ export function connectByKeys(stores: Stores): void {
   const fitting = handle.store.getState().pulling?.targets.filter((target) => !target.reason) ?? [];
   say(
     stores,
-    `Connect from ${portName(sketch, from)}: ${fitting.length === 1 ? 'one port fits' : `${fitting.length} ports fit`}. Arrows choose, Enter connects, Esc leaves it.`,
+    `Connect from ${portName(sketch, from)}: ${fitting.length === 1 ? 'one port fits' : `${fitting.length} ports fit`}. Arrows choose, Enter connects; Enter without a port offers units; Esc leaves it.`,
   );
 }
 

@@ -1,15 +1,20 @@
 import { plainSymbol } from '../drawing/symbols/registry';
+import { AWAY } from '../drawing/transform';
 import type { Point } from '../drawing/types';
 import type { StreamId } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
 import { addUnit, connect, disconnect, nextPortName, reconnect } from '../store/commands';
 import type { Stores } from '../store/react';
+import { freePlace, takenBoxes } from './drop';
 import { together, tryEdit } from './edit';
+import { sheetOf } from './handle';
 import { targetsFor } from './ports';
 import type { Offer, PortRef, SheetStore, Target } from './sheetStore';
 
 /** A port takes the stream within this distance [screen px]. */
 const CATCH = 14;
+/** A unit chosen by keys stands this far from the port, if there is room [px]. */
+const BESIDE = 104;
 /** Shorter pulls are taken for a click [screen px]. */
 const SHORTEST = 20;
 
@@ -77,7 +82,15 @@ export function endPull(stores: Stores, sheet: SheetStore, zoom: number): void {
     return;
   }
   const [x, y] = from.place.at;
-  if (!byKeys && Math.hypot(at[0] - x, at[1] - y) * zoom >= SHORTEST) {
+  if (byKeys) {
+    const [ux, uy] = AWAY[from.place.side];
+    const offered: Point = [x + ux * BESIDE, y + uy * BESIDE];
+    sheet.setState({
+      offer: { from: { unit: from.unit, port: from.port, dir: from.dir }, at: offered, byKeys: true },
+    });
+    return;
+  }
+  if (Math.hypot(at[0] - x, at[1] - y) * zoom >= SHORTEST) {
     sheet.setState({ offer: { from: { unit: from.unit, port: from.port, dir: from.dir }, at } });
   }
 }
@@ -100,12 +113,17 @@ export function takeOffer(stores: Stores, sheet: SheetStore, offer: Offer, kind:
   const port = matching(kind, offer.from.dir);
   const place = port === undefined ? undefined : plainSymbol(kind).ports(port);
   if (port === undefined || !place) return;
-  const at: Point = [offer.at[0] - place.at[0], offer.at[1] - place.at[1]];
+  const wished: Point = [offer.at[0] - place.at[0], offer.at[1] - place.at[1]];
+  const at = offer.byKeys ? freePlace(takenBoxes(sheet.getState()), plainSymbol(kind).box, wished) : wished;
   const made = tryEdit(stores, (sketch) => {
     const added = addUnit(sketch, kind, at);
     if (!added.ok || !added.unit) return added;
     const unit = added.unit;
     return together(sketch, added, (now) => connect(now, [offer.from.unit, offer.from.port], [unit, port]));
   });
-  if (made?.unit) stores.session.select([made.unit]);
+  const unit = made?.unit;
+  if (!unit) return;
+  stores.session.select([unit]);
+  sheetOf(stores)?.reveal(at);
+  setTimeout(() => sheetOf(stores)?.focus({ unit }), 0);
 }

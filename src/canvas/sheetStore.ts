@@ -33,6 +33,8 @@ export interface Pulling {
 export interface Offer {
   readonly from: PortRef;
   readonly at: Point;
+  /** Asked for by keys: the unit looks for a free place by itself. */
+  readonly byKeys?: true;
 }
 
 /** A unit from the shelf on its way over the sheet. */
