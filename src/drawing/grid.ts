@@ -16,8 +16,9 @@ const BESIDE_LANE = 12;
 export const CLOSED = 1;
 export const NEAR_SYMBOL = 2;
 export const ALONG_LANE = 4;
+export const OVER_LANE = 8;
 
-/** A straight piece of another line: crossing it is free, running along it is not. */
+/** A straight piece of another line: crossing it costs a little, running along it a lot. */
 export interface Lane {
   readonly across: boolean;
   /** Place across its direction, and its extent. */
@@ -129,6 +130,14 @@ export class Grid {
         if (across) this.across[b * nx + a]! |= ALONG_LANE;
         else this.down[a * nx + b]! |= ALONG_LANE;
       }
+    }
+    // The edge across which the piece lies: from the last coordinate before it to the next one.
+    const [, over] = span(aside, -Infinity, at);
+    if (over === 0 || over >= aside.length) return;
+    const [c1, c2] = span(along, lo, hi);
+    for (let c = c1; c < c2; c++) {
+      if (across) this.down[(over - 1) * nx + c]! |= OVER_LANE;
+      else this.across[c * nx + over - 1]! |= OVER_LANE;
     }
   }
 

@@ -1,5 +1,6 @@
 import type { StreamId, UnitId } from '../engine/ids';
 import { BoxIndex, boxAround, hull, pieceBoxes } from './boxes';
+import { crossingsOf } from './crossings';
 import { DIAMOND, type DiamondPlace, diamondPlaces, piecesByLength } from './diamonds';
 import type { Ground } from './ground';
 import { foldedBox, type LabelWish } from './labelPlaces';
@@ -13,7 +14,7 @@ import { symbolBoxes } from './standing';
 import { WEIGHT } from './tokens';
 import type { Box, LabelShape, LineShape, NoteShape, Omitted, Point } from './types';
 import { growFlags, placeTexts, type UnitTexts } from './units';
-import { crossingsOf, type RouteCache, type Wire, wireSheet } from './wiring';
+import { type RouteCache, type Wire, wireSheet } from './wiring';
 
 const HALF_LINE = WEIGHT.material / 2;
 /** Half the width of an arrowhead [px]. */

@@ -1,4 +1,4 @@
-import { ALONG_LANE, CLOSED, Grid, type Lane, NEAR_SYMBOL } from './grid';
+import { ALONG_LANE, CLOSED, Grid, type Lane, NEAR_SYMBOL, OVER_LANE } from './grid';
 import type { Box, Point } from './types';
 
 /** A bend costs as much as this way round [px]. */
@@ -6,6 +6,8 @@ export const BEND = 40;
 /** Times the way: near a symbol, and along another line. */
 const SOFT_COST = 1.6;
 const LANE_COST = 12;
+/** A crossing costs as much as this way round [px]. */
+export const CROSSING = 60;
 /** Among equal lines the one that bends late wins: its first straight piece is the longest. */
 const LATE = 1e-3;
 
@@ -110,7 +112,7 @@ export function findWay(
   const goal = node(leg.to);
   const { most = Infinity } = leg;
   // taken out of the loop: exports of another file are not free to read there
-  const [closed, nearSymbol, alongLane] = [CLOSED, NEAR_SYMBOL, ALONG_LANE];
+  const [closed, nearSymbol, alongLane, overLane] = [CLOSED, NEAR_SYMBOL, ALONG_LANE, OVER_LANE];
   const [gx, gy] = leg.to;
   ensure(nx * ny * 4);
   const first = node(leg.from) * 4 + leg.heading;
@@ -147,13 +149,16 @@ export function findWay(
       const y = ys[Math.floor(next / nx)]!;
       const length = Math.abs(x - xs[ix]!) + Math.abs(y - ys[iy]!);
       let to = g + length * (edge & alongLane ? LANE_COST : edge & nearSymbol ? SOFT_COST : 1);
+      if (edge & overLane) to += CROSSING;
       if (d !== heading) to += BEND + LATE * (Math.abs(gx - xs[ix]!) + Math.abs(gy - ys[iy]!));
       const s = next * 4 + d;
-      if (to < cost[s]!) {
-        cost[s] = to;
-        parent[s] = state;
-        push(to + Math.abs(gx - x) + Math.abs(gy - y) + BEND * bendsLeft(gx - x, gy - y, d, leg.arrive), s);
-      }
+      if (to >= cost[s]!) continue;
+      const least =
+        to + Math.abs(gx - x) + Math.abs(gy - y) + BEND * bendsLeft(gx - x, gy - y, d, leg.arrive);
+      if (least > most) continue;
+      cost[s] = to;
+      parent[s] = state;
+      push(least, s);
     }
   }
   return undefined;

@@ -112,15 +112,16 @@ export function placeDuty(
   return undefined;
 }
 
-/** The name of a flag that stands upright, beside it. */
-export function placeName(text: string, box: Box, taken: BoxIndex): TextPlace {
-  const style: Style = {
-    size: TEXT.flag,
-    ink: 'ink',
-    room: measureText(text, TEXT.flag),
-    gap: [box.w / 2 + 6, box.h / 2 + 6],
-  };
+/** The name of a flag that stands upright, beside it, or a little further away; undefined when there is no room. */
+export function placeName(text: string, box: Box, taken: BoxIndex): TextPlace | undefined {
   const middle: Point = [box.x + box.w / 2, box.y + box.h / 2];
-  const all = [...besides(middle, text, style, ['right', 'left', 'below', 'above'], 1)];
-  return all.find((place) => !taken.hits(place.box, CLEAR)) ?? all[0]!;
+  const room = measureText(text, TEXT.flag);
+  for (const far of [6, 16, 28]) {
+    const gap: Point = [box.w / 2 + far, box.h / 2 + far];
+    const style: Style = { size: TEXT.flag, ink: 'ink', room, gap };
+    for (const place of besides(middle, text, style, ['right', 'left', 'below', 'above'], 1)) {
+      if (!taken.hits(place.box, CLEAR)) return place;
+    }
+  }
+  return undefined;
 }

@@ -94,7 +94,14 @@ export function placeTexts(
       rings.add(boxAround(ring, 0.01), `${u.unit.id} ${n}`);
     });
   });
-  // Duties before tags: a tag has more places to choose from.
+  // Names of upright flags first, then duties, then tags: what has the fewest places to choose from.
+  const names = units.map((u): TextPlace | undefined => {
+    if (u.symbol.nameAt === undefined || u.symbol.nameInside) return undefined;
+    const place = placeName(flagName(u.unit), u.box, taken);
+    if (place) add(place.box);
+    else omitted.push({ what: 'tag', unit: u.unit.id });
+    return place;
+  });
   const duties = units.map((u, k) =>
     u.links.map(([from, ring], n): TextPlace | undefined => {
       const along: Point = [Math.sign(ring[0] - from[0]), Math.sign(ring[1] - from[1])];
@@ -108,12 +115,6 @@ export function placeTexts(
     const [rows, remark] = remarks[k]!;
     const place = placeTag({ tag: u.unit.tag, remark, rows }, u.box, taken, symbols, u.unit.id, scale);
     if (place) add(...place.boxes);
-    return place;
-  });
-  const names = units.map((u): TextPlace | undefined => {
-    if (u.symbol.nameAt === undefined || u.symbol.nameInside) return undefined;
-    const place = placeName(flagName(u.unit), u.box, taken);
-    add(place.box);
     return place;
   });
   units.forEach((u, k) => {

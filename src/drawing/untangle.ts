@@ -1,8 +1,9 @@
 import { boxOfPiece, grown, hull, overlaps, pieceBoxes } from './boxes';
+import { crossingsOf } from './crossings';
 import { APART, type Lane } from './grid';
 import { type Piece, pieceAt, TANGLE, tangles, trouble } from './nudge';
 import { detourLine, detourReach, keyOfEnd, type RouteEnd } from './route';
-import { BEND } from './search';
+import { BEND, CROSSING } from './search';
 import type { Box, Point } from './types';
 
 /** Straight pieces at the ports of a line that is led once more, to choose from [px]. */
@@ -43,7 +44,7 @@ export function untangled(
       if (fixed[line] || !from || !to) continue;
       if (![...near].some((other) => changed.has(other) || now.has(other))) continue;
       const task = taskOf(out, line, near, [from, to], obstacles);
-      if (!task) continue;
+      if (task.least < TANGLE) continue;
       const better = detours.get(task.key) ?? known.get(task.key) ?? (ledOff(task) || false);
       detours.set(task.key, better);
       if (!better) continue;
@@ -53,7 +54,63 @@ export function untangled(
     if (now.size === 0) break;
     changed = now;
   }
+  ledAround(out, ends, obstacles, fixed, known, detours);
   return { lines: out, detours };
+}
+
+/** Lines that cross others look for a way with fewer crossings, as far as it is worth its length and bends. */
+function ledAround(
+  out: (readonly Point[])[],
+  ends: readonly (readonly [RouteEnd | undefined, RouteEnd | undefined])[],
+  obstacles: readonly Box[],
+  fixed: readonly boolean[],
+  known: Detours,
+  detours: Map<string, readonly Point[] | false>,
+): void {
+  const crossings = crossingCounts(out);
+  const order = [...crossings.keys()].sort((a, b) => crossings.get(b)! - crossings.get(a)! || b - a);
+  for (const line of order) {
+    const [from, to] = ends[line]!;
+    if (fixed[line] || !from || !to) continue;
+    const task = taskOf(out, line, new Set(), [from, to], obstacles);
+    if (task.least === 0 || task.least >= TANGLE) continue;
+    const key = `around ${task.key}`;
+    const better = detours.get(key) ?? known.get(key) ?? (cheaper(task) || false);
+    detours.set(key, better);
+    if (better) out[line] = better;
+  }
+}
+
+function crossingCounts(lines: readonly (readonly Point[])[]): ReadonlyMap<number, number> {
+  const counts = new Map<number, number>();
+  crossingsOf(lines).forEach((points, line) => {
+    if (points.length > 0) counts.set(line, points.length);
+  });
+  return counts;
+}
+
+/** A way that costs less than the line does, its crossings counted. */
+function cheaper({
+  points,
+  line,
+  ends,
+  obstacles,
+  others,
+  lanes,
+  least,
+}: Task): readonly Point[] | undefined {
+  let most = costOf(points) + CROSSING * least;
+  let best: readonly Point[] | undefined;
+  for (const stubs of DETOUR_STUBS.slice(0, 1)) {
+    const way = detourLine(...ends, obstacles, { lanes, stubs, most })?.points;
+    if (!way) continue;
+    const left = trouble(way, line, others);
+    const cost = costOf(way) + CROSSING * left;
+    if (left >= TANGLE || cost >= most - 1) continue;
+    most = cost;
+    best = way;
+  }
+  return best;
 }
 
 const costOf = (points: readonly Point[]): number =>
@@ -87,14 +144,13 @@ function roomOf(points: readonly Point[]): Box {
   return room;
 }
 
-/** Undefined when the line is in no trouble that another way could end. */
 function taskOf(
   lines: readonly (readonly Point[])[],
   line: number,
   near: ReadonlySet<number>,
   ends: readonly [RouteEnd, RouteEnd],
   obstacles: readonly Box[],
-): Task | undefined {
+): Task {
   const points = lines[line]!;
   const around = grown(hull(pieceBoxes(points, 60))!, 60);
   const reach = hull([around, grown(detourReach(...ends), 2 * APART)])!;
@@ -117,7 +173,6 @@ function taskOf(
     }
   }
   const least = trouble(points, line, others);
-  if (least < TANGLE) return undefined;
   const close = obstacles.filter((o) => overlaps(reach, o));
   for (const o of close) key += `|${o.x} ${o.y} ${o.w} ${o.h}`;
   return { key, points, line, ends, obstacles: close, others, lanes, least };

@@ -1,7 +1,7 @@
 import type { StreamId, UnitId } from '../engine/ids';
 import type { SketchStream } from '../sketch/types';
 import { grown, overlaps } from './boxes';
-import { drawApart, piecesOf } from './nudge';
+import { drawApart } from './nudge';
 import { hangingLine, keyOfEnd, type Route, type RouteEnd, routeLine } from './route';
 import { portOf, type StandingUnit, symbolBoxes } from './standing';
 import type { Box, Point } from './types';
@@ -108,20 +108,4 @@ function sameOrder(a: ReadonlyMap<StreamId, Kept>, b: ReadonlyMap<StreamId, Kept
   if (a.size !== b.size) return false;
   const old = [...a];
   return [...b].every(([id, kept], k) => old[k]?.[0] === id && old[k][1].key === kept.key);
-}
-
-/** Points where each line meets others at right angles. */
-export function crossingsOf(lines: readonly (readonly Point[])[]): readonly (readonly Point[])[] {
-  const out: Point[][] = lines.map(() => []);
-  const pieces = piecesOf(lines);
-  const downs = pieces.filter((p) => !p.across);
-  for (const a of pieces) {
-    if (!a.across) continue;
-    for (const d of downs) {
-      if (d.line === a.line || d.at < a.lo || d.at > a.hi || a.at < d.lo || a.at > d.hi) continue;
-      out[a.line]!.push([d.at, a.at]);
-      out[d.line]!.push([d.at, a.at]);
-    }
-  }
-  return out;
 }

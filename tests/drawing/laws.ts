@@ -315,13 +315,18 @@ export const notesStandFree: Law = (scene) => {
 
 /** What is left off is said: every label that is not shown stands in the list of what has no room, and nothing else. */
 export const omittedIsSaid: Law = (scene) => {
+  const order = (id: string): number => scene.units.findIndex((u) => u.unit === id);
   const folded = scene.labels.filter((label) => label.folded).map((label) => label.stream);
   const said = scene.omitted.flatMap((one) => (one.what === 'label' ? [one.stream] : []));
-  const tagless = scene.units.filter((u) => !u.tagText && !u.symbol.tagless).map((u) => u.unit);
+  const tagless = scene.units
+    .filter((u) => (u.symbol.nameAt ? u.texts.length === 0 : !u.tagText && !u.symbol.tagless))
+    .map((u) => u.unit);
   const saidTags = scene.omitted.flatMap((one) => (one.what === 'tag' ? [one.unit] : []));
   return [
     ...(folded.join() === said.join() ? [] : [`folded ${folded.join()}, said ${said.join()}`]),
-    ...(tagless.join() === saidTags.join() ? [] : [`no tag at ${tagless.join()}, said ${saidTags.join()}`]),
+    ...(tagless.join() === [...saidTags].sort((a, b) => order(a) - order(b)).join()
+      ? []
+      : [`no tag at ${tagless.join()}, said ${saidTags.join()}`]),
   ];
 };
 
