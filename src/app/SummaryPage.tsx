@@ -36,6 +36,9 @@ export function SummaryPage() {
         <button type="button" className="button line" onClick={() => run('export-csv')}>
           Export CSV
         </button>
+        <button type="button" className="button line" onClick={() => run('documents')}>
+          More documents
+        </button>
         {report && report !== 'nothing' ? (
           <span className="muted">
             {[report.state.text, report.strip.purpose, report.strip.warning, report.strip.margin]

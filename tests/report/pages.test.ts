@@ -3,6 +3,7 @@ import type { ReportInput } from '../../src/report/input';
 import { writePdf } from '../../src/report/pdf/write';
 import { type Generated, solvedGenerated } from './generated';
 import { FONTS, inside, linesOf, type Placed, type ReadPage, readPdf, wordsOf } from './readPdf';
+import { solvedExample } from './solved';
 
 /** The strip at the foot of a page lies below this [pt]. */
 const STRIP = 48;
@@ -94,6 +95,27 @@ describe.each(CASES)('pages for $streams streams and $chemicals chemicals on $pa
       expect(wordsOf(page)).toContain('PRELIMINARY – NOT FOR CONSTRUCTION');
     });
   });
+});
+
+describe.each([
+  ['aromatic-condensate.sketch.json', 'A3', 'US'],
+  ['aromatic-condensate.sketch.json', 'A4', 'metric'],
+  ['nitrogen-loop.sketch.json', 'A4', 'US'],
+  ['condensate-flash.sketch.json', 'A4', 'SI'],
+] as const)('%s on %s in %s measures', (file, paper, set) => {
+  test('has nothing over anything else and nothing outside the border', async () => {
+    const input = await solvedExample(file, (sketch) => ({
+      ...sketch,
+      documents: { paper },
+      display: { ...sketch.display, set },
+    }));
+    const { pages } = await readPdf(await writePdf(input, FONTS));
+    expect(
+      pages.flatMap((page, k) => (k === 0 ? [] : overlaps(page).map((f) => `page ${k + 1}: ${f}`))),
+    ).toEqual([]);
+    for (const { width, texts } of pages)
+      for (const t of texts) expect([t.text, t.right < width && t.x >= 0 && t.y > 0]).toEqual([t.text, true]);
+  }, 60_000);
 });
 
 const LONG_WORD =
