@@ -13,7 +13,7 @@ import { FORMAT, FRESH_DISPLAY, LABEL_KEYS } from './fresh';
 import { isObject, type JsonObject, own } from './json';
 import { hangingStreams, nextNoteId } from './naming';
 import { KNOWN_KINDS, kindOf, type Registry } from './registry';
-import type { Display, LabelKey, Note, Sketch, SketchStream, SketchUnit } from './types';
+import type { Display, Json, LabelKey, Note, Sketch, SketchStream, SketchUnit } from './types';
 
 export type { FileCode, FileProblem } from './file/problem';
 
@@ -70,11 +70,13 @@ function refused(problems: Problems): Opened {
   return { ok: false, problems: [first, ...rest] };
 }
 
+const formatWord = (format: Json | undefined): string =>
+  format === undefined ? '' : typeof format === 'string' ? format : typeName(format);
+
 function versionOf(raw: JsonObject, first: number, problems: Problems): number | undefined {
   const format = own(raw, 'format');
   const version = own(raw, 'version');
-  if (format !== FORMAT)
-    problems.add('format', 'file/not-a-sketch', word('found', format === undefined ? '' : String(format)));
+  if (format !== FORMAT) problems.add('format', 'file/not-a-sketch', word('found', formatWord(format)));
   else if (version === undefined) problems.add('version', 'file/missing');
   else if (typeof version !== 'number' || !Number.isInteger(version) || version < first)
     problems.wrongType('version', `whole number from ${first}`, version);

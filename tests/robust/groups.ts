@@ -1,6 +1,7 @@
 import { columns } from './columns';
 import { drawings } from './drawings';
 import { examples } from './examples';
+import { files } from './files';
 import { flashes } from './flashes';
 
 /** What a group found: cases tried, how they ended, and every case that needs looking at. */
@@ -22,4 +23,4 @@ export interface GroupReport {
 export type Group = (seed: number, count: number, only?: number) => Promise<GroupReport>;
 
 /** One line a group. */
-export const GROUPS: Readonly<Record<string, Group>> = { flashes, columns, examples, drawings };
+export const GROUPS: Readonly<Record<string, Group>> = { flashes, columns, examples, drawings, files };

@@ -1,7 +1,7 @@
 import { evidence, word } from '../findings';
 import { isObject, type JsonObject } from '../json';
 import type { Json } from '../types';
-import type { Problems } from './problem';
+import { type Problems, typeName } from './problem';
 
 /** Small readers that put a reason on the list when a value is not what it must be. All take an absent value as fine. */
 
@@ -60,7 +60,8 @@ export function oneOf(
   wanted: readonly (string | number | boolean)[],
 ): void {
   if (value === undefined || (typeof value !== 'object' && wanted.includes(value))) return;
-  problems.add(path, 'file/not-one-of', word('found', String(value)), word('wanted', wanted.join(', ')));
+  const found = typeof value === 'object' ? typeName(value) : String(value);
+  problems.add(path, 'file/not-one-of', word('found', found), word('wanted', wanted.join(', ')));
 }
 
 /** "number unit" or a number; what it measures is judged where it is used. */

@@ -91,7 +91,7 @@ export const FILE_WORDS: Readonly<Record<string, (s: Slots) => string>> = {
   'file/newer-version': (s) =>
     `the sketch was saved by a later version of Splitwright (its form is ${s.number('found')}, and this version reads up to ${s.number('known')}); open it with that version.`,
   'file/not-migrated': (s) =>
-    `the sketch was saved by an earlier version of Splitwright and could not be brought up to date (${s.text('what')}: ${s.text('why')}); a damaged file is likely, so fetch or save it again.`,
+    `the sketch was saved by an earlier version of Splitwright and could not be brought up to date (${s.text('what')}); it may be damaged, so fetch or save it again.`,
   'file/missing': () => 'this is missing and a sketch needs it; add it.',
   'file/wrong-type': (s) =>
     `${typeWords(s.text('wanted'))} is wanted here${s.has('found') ? `, not ${typeWords(s.text('found'))}` : ''}; correct the value.`,
