@@ -201,7 +201,7 @@ describe('a column as a whole', () => {
         (t, f) => t + f.n_mol_s.reduce((u, n, i) => u + n * (mass ? s.chemicals[i]!.MW_g_mol * 1e-3 : 1), 0),
         0,
       );
-    for (const x of s.call.settings.fixedBy) {
+    for (const x of s.call.settings.fixedBy ?? []) {
       const have = (() => {
         switch (x.fix) {
           case 'refluxRatio':
@@ -275,7 +275,7 @@ describe('a column as a whole', () => {
       if (v.is === 'molar') return { ...v, n_mol_s: k * v.n_mol_s! } as F;
       return v.is === 'mass' ? ({ ...v, m_kg_s: k * v.m_kg_s! } as F) : f;
     };
-    const fixedBy = settings.fixedBy.map((x) =>
+    const fixedBy = (settings.fixedBy ?? []).map((x) =>
       x.fix === 'flow' || x.fix === 'reflux'
         ? { ...x, value: flow(x.value) }
         : x.fix === 'duty'

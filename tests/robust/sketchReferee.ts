@@ -78,7 +78,7 @@ function faultOfColumn(
   random: Random,
 ): string | undefined {
   const settings = unit.settings as ColumnSettings;
-  for (const [k, fixed] of settings.fixedBy.entries()) {
+  for (const [k, fixed] of (settings.fixedBy ?? []).entries()) {
     const miss = missOf(fixed, k, unit, r, sheet);
     if (!(miss <= MEETS)) return `fixing ${k} (${fixed.fix}) missed by ${miss}`;
   }

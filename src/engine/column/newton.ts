@@ -153,6 +153,14 @@ export class Newton {
     return { end: 'solved', residual: before, iterations: pass };
   }
 
+  /**
+   * Change of the only target's measure with the only free parameter, at the factors used last; undefined with another
+   * number of them.
+   */
+  slope(wanted: Wanted): number | undefined {
+    return wanted.free.length === 1 ? this.schur[0] : undefined;
+  }
+
   private factor(wanted: Wanted): boolean {
     const { s, elimination, borders, side, schur, unit } = this;
     if (!elimination.factor()) return false;

@@ -11,7 +11,13 @@ import type { Attempt, ColumnState, ColumnTask, Effort } from './types';
 import { type ColumnWork, workFor } from './work';
 
 export type ColumnEnd =
-  | { readonly state: 'solved'; readonly system: StageSystem; readonly effort: Effort }
+  | {
+      readonly state: 'solved';
+      readonly system: StageSystem;
+      readonly effort: Effort;
+      /** Where one fixing beside parameters is asked: how its measure changes with the bottoms or whatever is free. */
+      readonly slope?: number;
+    }
   | { readonly state: 'no-solution'; readonly failure: Failure; readonly effort: Effort };
 
 const PLAIN: Sweeps = { simple: 8, model: 6, share: 0.5 };
@@ -65,7 +71,13 @@ class Search {
   }
 
   private solved(): ColumnEnd {
-    return { state: 'solved', system: this.system, effort: this.effort };
+    const slope = this.newton.slope(this.wanted);
+    return {
+      state: 'solved',
+      system: this.system,
+      effort: this.effort,
+      ...(slope === undefined ? {} : { slope }),
+    };
   }
 
   private fromWarm(warm: ColumnState): boolean {

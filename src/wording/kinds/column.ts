@@ -205,6 +205,21 @@ export const column: KindWords = {
       says: 'On a stage the liquid is only {densityRatio} times as dense as the vapour; below {limit} these numbers are not to be trusted.',
       next: 'Lower the pressure.',
     },
+    'column/near-critical-pressure': {
+      title: 'Near the critical pressure',
+      says: 'The pressure of a stage, {pressure}, is {share%} of the pseudo-critical {critical} of its liquid; above {limit%} an equation of state grows uncertain.',
+      next: 'Lower the pressure.',
+    },
+    'column/several-purities': {
+      title: 'One of two answers',
+      says: 'At this reflux a purity of {chemical}, neither the lightest nor the heaviest, is often met twice: this is the answer with the {branch} {product}, {flow}.',
+      next: 'If the other is meant, fix that flow instead of the purity.',
+    },
+    'column/several-temperatures': {
+      title: 'One of several answers',
+      says: 'At this reflux the temperature at {place} falls here as more goes over the top, which it does not everywhere: another answer exists. This is the one with {flow} over the top.',
+      next: 'If another is meant, fix that flow instead of the temperature.',
+    },
     'column/second-liquid': {
       title: 'A second liquid in the column',
       says: 'The liquid of a stage would part in two; the other is mostly {chemical}. The numbers are for one liquid.',

@@ -95,7 +95,7 @@ export const column: KindCatalogue = {
       },
       choose: [{ keys: ['bottom', 'perStage'], count: 1 }],
     },
-    fixedBy: { is: 'list', of: fixing, min: 0, max: 3 },
+    fixedBy: { is: 'list', of: fixing, min: 0, max: 3, optional: true },
     sides: {
       is: 'map',
       keys: 'port',

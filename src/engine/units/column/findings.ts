@@ -31,6 +31,9 @@ export const COLUMN_FINDINGS = [
   'column/out-of-reach',
   'column/not-found',
   'column/feed-vapour-above-top',
+  // What was found, where more than one answer is possible.
+  'column/several-purities',
+  'column/several-temperatures',
   // Limits.
   'pressure/enters-below',
   'column/stage-dries',
@@ -38,6 +41,7 @@ export const COLUMN_FINDINGS = [
   'column/feed-off-stage',
   'column/near-critical',
   'column/too-near-critical',
+  'column/near-critical-pressure',
   'column/second-liquid',
   ...UTILITY_FINDINGS,
 ] as const;

@@ -2,12 +2,20 @@ import { isOneLiquid } from '../../equilibrium/miscible';
 import { makeStream } from '../../equilibrium/stream';
 import type { Finding } from '../../outcome';
 import { joiningPressure } from '../limits/joiningPressure';
-import { finding, named, type Rule, saw, thresholdOf } from '../limits/rule';
+import { finding, named, saw, thresholdOf } from '../limits/rule';
 import { utilityLevels } from '../limits/utilities';
 import type { Answer, Call, SiteSI } from '../types';
 import { topPort } from './free';
-import type { ColumnResults } from './results';
-import { DRIES, NEAR_CRITICAL, OFF_STAGE, PINCH, SECOND_LIQUID, TOO_NEAR_CRITICAL } from './rules';
+import type { ColumnResults, Profile } from './results';
+import {
+  DRIES,
+  NEAR_CRITICAL,
+  NEAR_CRITICAL_P,
+  OFF_STAGE,
+  PINCH,
+  SECOND_LIQUID,
+  TOO_NEAR_CRITICAL,
+} from './rules';
 import type { ColumnSettings, PlaceSI } from './settings';
 
 const PINCH_K = 0.1;
@@ -100,38 +108,60 @@ function feeds({ call, results }: Seen): Finding[] {
   return found;
 }
 
-function nearCritical({ call, results }: Seen): Finding[] {
+/** Liquid and vapour of nearly one density; else a pressure near the pseudo-critical one. */
+function nearCritical(seen: Seen): Finding[] {
+  const { call, results } = seen;
   const { densityRatio } = results.stages;
   let stage = 0;
   densityRatio.forEach((r, k) => {
     if (r < densityRatio[stage]!) stage = k;
   });
   const least = densityRatio[stage]!;
-  const below = (r: Rule): boolean => least < thresholdOf(r, call.limits);
-  const broken = below(TOO_NEAR_CRITICAL)
-    ? TOO_NEAR_CRITICAL
-    : below(NEAR_CRITICAL)
-      ? NEAR_CRITICAL
-      : undefined;
-  return broken
-    ? [
-        finding(
-          broken,
-          { unit: call.unit, stage: stage + 1 },
-          [saw('densityRatio', least, 'number')],
-          call.limits,
-        ),
-      ]
-    : [];
+  const broken = [TOO_NEAR_CRITICAL, NEAR_CRITICAL].find((r) => least < thresholdOf(r, call.limits));
+  if (!broken) return nearCriticalPressure(seen);
+  const evidence = [saw('densityRatio', least, 'number')];
+  return [finding(broken, { unit: call.unit, stage: stage + 1 }, evidence, call.limits)];
+}
+
+function nearCriticalPressure({ call, results }: Seen): Finding[] {
+  const { P_Pa, x } = results.stages;
+  const { thermo, profiles } = presentIn(call, x);
+  const here = new Float64Array(profiles.length);
+  let most = 0;
+  let stage = 0;
+  let critical = 0;
+  for (let k = 0; k < P_Pa.length; k++) {
+    for (let p = 0; p < here.length; p++) here[p] = profiles[p]![k]!;
+    const Pc = thermo.pseudoCritical(here).P_Pa;
+    if (P_Pa[k]! <= most * Pc) continue;
+    most = P_Pa[k]! / Pc;
+    critical = Pc;
+    stage = k + 1;
+  }
+  if (most <= thresholdOf(NEAR_CRITICAL_P, call.limits)) return [];
+  const evidence = [
+    saw('share', most, 'fraction'),
+    saw('pressure', P_Pa[stage - 1]!, 'pressure'),
+    saw('critical', critical, 'pressure'),
+  ];
+  return [finding(NEAR_CRITICAL_P, { unit: call.unit, stage }, evidence, call.limits)];
+}
+
+/** The model of those that are on the stages, and their profiles in its order. */
+function presentIn({ model }: Call<ColumnSettings>, x: Profile) {
+  const present = model.chemicals.flatMap((c, i) => (x[c.id]!.some((v) => v > 0) ? [i] : []));
+  return {
+    present,
+    thermo: model.of(present),
+    profiles: present.map((i) => x[model.chemicals[i]!.id]!),
+  };
 }
 
 /** The first stage whose liquid would rather be two: each that might is tested a little above its bubble pressure. */
 function secondLiquid({ call, results }: Seen): Finding[] {
   const { T_K, P_Pa, x } = results.stages;
   const { model } = call;
-  const present = model.chemicals.flatMap((c, i) => (x[c.id]!.some((v) => v > 0) ? [i] : []));
-  const thermo = model.of(present);
-  const profiles = present.map((i) => x[model.chemicals[i]!.id]!);
+  const { present, thermo, profiles } = presentIn(call, x);
   const here = new Float64Array(present.length);
   for (let k = 0; k < T_K.length; k++) {
     for (let p = 0; p < here.length; p++) here[p] = profiles[p]![k]!;

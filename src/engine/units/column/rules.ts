@@ -8,6 +8,8 @@ export const OFF_STAGE = rule('column/feed-off-stage', 'note', 40, 'temperatureD
 /** Mass density of liquid to vapour on a stage. */
 export const NEAR_CRITICAL = rule('column/near-critical', 'caution', 4, 'number');
 export const TOO_NEAR_CRITICAL = rule('column/too-near-critical', 'beyond-limit', 2.5, 'number');
+/** Pressure of a stage by the pseudo-critical pressure of its liquid (mole-fraction average). */
+export const NEAR_CRITICAL_P = rule('column/near-critical-pressure', 'caution', 0.85, 'fraction');
 export const SECOND_LIQUID = rule('column/second-liquid', 'beyond-limit', 0, 'number', 'phase-stability');
 export const COLUMN_RULES: readonly Rule[] = [
   DRIES,
@@ -15,5 +17,6 @@ export const COLUMN_RULES: readonly Rule[] = [
   OFF_STAGE,
   NEAR_CRITICAL,
   TOO_NEAR_CRITICAL,
+  NEAR_CRITICAL_P,
   SECOND_LIQUID,
 ];

@@ -33,7 +33,8 @@ export interface ColumnSettings {
     readonly perStage?: number;
     readonly reboiler?: number;
   };
-  readonly fixedBy: readonly FixedBy[];
+  /** Absent: nothing is fixed, as a column without ends has it. */
+  readonly fixedBy?: readonly FixedBy[];
   readonly sides?: Readonly<
     Record<Port, { readonly stage: number; readonly phase: 'liquid' | 'vapour'; readonly flow: FlowSI }>
   >;

@@ -13,6 +13,7 @@ import { columnLimits } from './limits';
 import { outletsOf } from './outlets';
 import { type ColumnResults, resultsOf } from './results';
 import type { ColumnSettings } from './settings';
+import { severalAnswers } from './several';
 import { type ColumnJob, jobOf, nameOfPlace, refuse } from './task';
 
 /** What a column remembers of its last solved state. */
@@ -197,6 +198,7 @@ function solve(call: Call<ColumnSettings>): Outcome<Answer<ColumnResults>> {
   const notes: Finding[] = bothDuties(call.settings)
     ? [{ code: 'column/both-duties', weight: 'note', at: { unit: call.unit, path: 'fixedBy' }, evidence: [] }]
     : [];
+  notes.push(...severalAnswers(call, job, end.system, end.slope));
   return solved(answer(call, job, end.system, work, end), notes);
 }
 

@@ -205,7 +205,7 @@ export function jobOf(call: Call<ColumnSettings>): Outcome<ColumnJob> {
       flow: amountOf(side.flow, all, call),
     };
   });
-  const fixed = settings.fixedBy.map((x, k) => fixingOf(x, k, r));
+  const fixed = (settings.fixedBy ?? []).map((x, k) => fixingOf(x, k, r));
   const efficiency = efficiencies(P_Pa.length, r, feeds);
   const [first, ...rest] = r.bad;
   if (first) return noSolution(first, ...rest);
