@@ -1,7 +1,9 @@
 import type { Assumption } from '../sketch/types';
+import { setHolds } from '../store/commands';
 import { useCompiled, useSketch, useStores } from '../store/react';
 import { focusField } from './focusField';
 import { Head } from './Head';
+import { run } from './run';
 import { assumptionWords, capital } from './words';
 
 /** Every value used because the user gave none: number, value, reason, and the way to the place where it can be given. */
@@ -45,7 +47,20 @@ interface RowProps {
 }
 
 function Row({ assumption, tag, kind }: RowProps) {
-  const { session } = useStores();
+  const { session, sketch } = useStores();
+  const writable = useSketch((state) => state.writable);
+  const hold = useSketch((state) =>
+    state.sketch.holds?.find((h) => h.path === assumption.path && h.unit === assumption.unit),
+  );
+  const raise = (): void => {
+    run(sketch, (s) => {
+      const holds = s.holds ?? [];
+      const no = holds.reduce((most, h) => Math.max(most, Number(h.no) || 0), 0) + 1;
+      const { path, unit } = assumption;
+      const what = `${tag ? `${tag} ` : ''}${assumptionWords(assumption, kind).what} to be confirmed`;
+      return setHolds(s, [...holds, { no: String(no), what, path, ...(unit ? { unit } : {}) }]);
+    });
+  };
   const { what, value, where } = assumptionWords(assumption, kind);
   const change = (): void => {
     if (assumption.unit) session.select([assumption.unit]);
@@ -63,7 +78,17 @@ function Row({ assumption, tag, kind }: RowProps) {
         <p className="muted">{assumption.reason}</p>
         <button type="button" className="link" onClick={change}>
           Change in {tag ?? where}
-        </button>
+        </button>{' '}
+        {hold ? (
+          <button type="button" className="link" onClick={() => session.openDrawer({ is: 'basis' })}>
+            HOLD {hold.no}
+            {hold.owner ? `, ${hold.owner}` : ''}
+          </button>
+        ) : (
+          <button type="button" className="link" disabled={!writable} onClick={raise}>
+            Raise a HOLD
+          </button>
+        )}
       </div>
     </li>
   );

@@ -115,7 +115,7 @@ function frontSheet(report: ReportModel, taken: Set<string>): Book[number] {
     ...report.title.map(({ label, text }) => [label, text] as const),
     ['State', report.state.text],
     ['Fingerprint of the file', strip.fingerprint],
-    ['Measures', strip.measures],
+    ['Measures', strip.measures.replace(/^Measures: /, '')],
     ['Program', strip.version],
   ];
   return {

@@ -1,5 +1,5 @@
 // @vitest-environment jsdom
-import { fireEvent, screen } from '@testing-library/react';
+import { act, fireEvent, screen } from '@testing-library/react';
 import { beforeEach, describe, expect, test } from 'vitest';
 import { solveSketch } from '../../src/cli/run';
 import { field, letDown, makePage, type Page, show, sketchOf, undoLabels } from './page';
@@ -97,6 +97,17 @@ describe('the design basis drawer', () => {
     expect(sketchOf(page).holds?.[0]).toMatchObject({ path: first?.path, owner: 'Process' });
     press('Remove HOLD 1');
     expect(sketchOf(page).holds?.map((h) => h.no)).toEqual(['2']);
+  });
+
+  test('a HOLD is raised beside its assumption too, and leads here', async () => {
+    await act(async () => page.stores.session.openDrawer({ is: 'assumptions' }));
+    const before = screen.getAllByRole('button', { name: 'Raise a HOLD' });
+    fireEvent.click(before[0]!);
+    const [first] = page.stores.compiled.getState().assumptions;
+    expect(sketchOf(page).holds).toMatchObject([{ no: '1', path: first?.path }]);
+    expect(screen.getAllByRole('button', { name: 'Raise a HOLD' }).length).toBe(before.length - 1);
+    press('HOLD 1');
+    expect(page.stores.session.getState().drawer).toEqual({ is: 'basis' });
   });
 
   test('changes nothing while the sketch is read only', () => {

@@ -257,9 +257,40 @@ describe('the document of one example', () => {
       'missed by',
       'Hot oil',
       'Chilled water',
+      'Product requirements: 1 met, 1 missed',
     ])
       expect([part, all.includes(part)]).toEqual([part, true]);
     for (const page of full) expect(page).toContain(`${PRELIMINARY} For review`);
+  });
+});
+
+describe('a document of what is not solved', () => {
+  test('prints no figure for it, says what is open, and leaves the closure open', async () => {
+    const open = await solvedExample('let-down.sketch.json', (sketch) => ({
+      ...sketch,
+      units: sketch.units.map((u) => (u.kind === 'valve' ? { ...u, settings: {} } : u)),
+    }));
+    const { pages } = await readPdf(await writePdf(open, FONTS));
+    const words = pages.map(wordsOf).join(' ');
+    expect(words).toContain('Not solved: PV-1 needs a value');
+    expect(words).toContain('open: not every unit is solved');
+    const figures = streamFigures(pages);
+    expect(figures.get('2')?.get('/Temperature °C')).toBe('–');
+    expect(figures.get('2')?.get('/Phase')).toBe('waiting');
+    expect(figures.get('1')?.get('Flows/Molar flow kmol/h')).toBe('150.000');
+    expect(words).not.toMatch(/NaN|undefined|Infinity/);
+  });
+
+  test('an empty sketch makes a document too', async () => {
+    const bare = await solvedExample('let-down.sketch.json', (sketch) => ({
+      ...sketch,
+      units: [],
+      streams: [],
+    }));
+    const { pages } = await readPdf(await writePdf(bare, FONTS));
+    const words = pages.map(wordsOf).join(' ');
+    expect(words).toContain('Nothing to solve yet');
+    expect(words).not.toMatch(/NaN|undefined|Infinity/);
   });
 });
 

@@ -153,8 +153,22 @@ function closureLines(report: ReportModel, { basis }: ReportInput): string[] {
     ...(figures.length > 0 ? figures : ['open: not every unit is solved']),
     'Closure shows arithmetic, not that the model is right.',
     report.state.text,
+    ...requirementLine(report),
     basis.model.pairs.length > 0 ? `${model}, ${basis.model.pairs.length} pairs` : model,
   ];
+}
+
+/** "Product requirements: 2 met, 1 missed"; nothing where none is given. */
+function requirementLine({ requirements }: ReportModel): string[] {
+  const verdicts = requirements.rows.map((row) => (row.cells[4] ? printed(row.cells[4]) : ''));
+  if (verdicts.length === 0) return [];
+  const counts = [
+    ['met', verdicts.filter((v) => v === 'met').length],
+    ['missed', verdicts.filter((v) => v.startsWith('missed')).length],
+    ['not known', verdicts.filter((v) => v.startsWith('not known')).length],
+  ] as const;
+  const said = counts.filter(([, n]) => n > 0).map(([word, n]) => `${n} ${word}`);
+  return [`Product requirements: ${said.join(', ')}`];
 }
 
 function titleBlock(report: ReportModel, width: number, scale: number): TableCell {
@@ -202,7 +216,7 @@ export function contentsPage(report: ReportModel, paper: Paper): Content {
     { label: 'State', text: report.state.text },
     { label: 'Fingerprint of the file', text: report.strip.fingerprint },
     { label: 'Program', text: report.strip.version },
-    { label: 'Measures', text: report.strip.measures },
+    { label: 'Measures', text: report.strip.measures.replace(/^Measures: /, '') },
     { label: 'HOLDs', text: report.holds.rows.length === 0 ? 'none raised' : `${report.holds.rows.length}` },
   ];
   return {
