@@ -1,5 +1,4 @@
 import { readFileSync } from 'node:fs';
-import AxeBuilder from '@axe-core/playwright';
 import { getDocument } from 'pdfjs-dist/legacy/build/pdf.mjs';
 import { expect } from 'playwright/test';
 import { field, labelText } from './hand';
@@ -169,41 +168,3 @@ test('the stream summary shows the same table on the screen', async ({ quiet: pa
   await page.getByRole('dialog').getByRole('button', { name: 'Close' }).click();
   await expect(page.getByRole('dialog')).toHaveCount(0);
 });
-
-for (const scheme of ['light', 'dark'] as const)
-  test(`the main screens have no serious fault of access in ${scheme}`, async ({ quiet: page }) => {
-    test.slow();
-    await page.emulateMedia({ colorScheme: scheme });
-    const faults = async (where: string): Promise<void> => {
-      const { violations } = await new AxeBuilder({ page }).analyze();
-      const serious = violations.filter((v) => v.impact === 'serious' || v.impact === 'critical');
-      expect(
-        serious.map((v) => `${where}: ${v.id}: ${v.nodes.map((n) => n.target.join(' ')).join(' | ')}`),
-      ).toEqual([]);
-    };
-    await expect(page.locator('.card').first()).toBeVisible();
-    await faults('start');
-    await openExample(page);
-    await faults('sheet');
-    await page.locator('[data-unit="FEED-1"]').click();
-    await faults('feed drawer');
-    await page.locator('[data-stream="2"] .stream-body').click();
-    await faults('stream drawer');
-    for (const name of [/^Limits/, 'Assumptions', 'Chemicals']) {
-      await page.locator('.bar').getByRole('button', { name }).click();
-      await faults(String(name));
-    }
-    await page.locator('.bar').getByRole('button', { name: 'Stream summary' }).click();
-    await expect(page.locator('[data-table="streams"]')).toBeVisible();
-    await faults('stream summary');
-    await page.getByRole('dialog').getByRole('button', { name: 'Close' }).click();
-    await page.locator('.sheet-flow').click({ position: { x: 8, y: 8 } });
-    await page.keyboard.press('p');
-    await expect(page.locator('.documents-pages')).toHaveAttribute('data-state', 'made', { timeout: 30_000 });
-    await page.getByRole('button', { name: 'Sections' }).click();
-    // What the browser shows inside the frame is its own.
-    await page.locator('.documents-pages iframe').evaluateAll((frames) => {
-      for (const frame of frames) frame.remove();
-    });
-    await faults('documents');
-  });

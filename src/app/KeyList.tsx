@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import type { Action } from '../store/action';
 import { useStores } from '../store/react';
 import { Dialogue } from './Dialogue';
@@ -12,11 +12,22 @@ const GROUPS: Readonly<Record<Action['group'], string>> = {
   help: 'Help',
 };
 
-/** All actions and their keys; typing filters, a click runs. */
+const GROUP_NAMES = Object.keys(GROUPS) as readonly Action['group'][];
+
+/** All actions and their keys; typing filters, Enter runs the first that is left, a click any. */
 export function KeyList({ actions }: { readonly actions: readonly Action[] }) {
   const stores = useStores();
   const [filter, setFilter] = useState('');
   const wanted = filter.toLowerCase();
+  const search = useRef<HTMLInputElement>(null);
+  // Once the dialogue stands: it gives the focus to its first button.
+  useEffect(() => search.current?.focus(), []);
+  const isReady = (action: Action): boolean => action.when?.(stores) ?? true;
+  const choose = (action: Action | undefined): void => {
+    if (!action || !isReady(action)) return;
+    stores.session.setState({ over: 'none' });
+    action.run(stores);
+  };
   const shown = actions.filter((a) => `${a.label} ${a.keys.join(' ')}`.toLowerCase().includes(wanted));
   return (
     <Dialogue title="All actions and their keys">
@@ -25,12 +36,18 @@ export function KeyList({ actions }: { readonly actions: readonly Action[] }) {
         <input
           type="search"
           className="plain-field"
+          ref={search}
           value={filter}
           onChange={(event) => setFilter(event.target.value)}
+          onKeyDown={(event) => {
+            if (event.key !== 'Enter' || wanted === '') return;
+            event.preventDefault();
+            choose(GROUP_NAMES.flatMap((group) => shown.filter((a) => a.group === group))[0]);
+          }}
         />
       </label>
       <div className="key-list">
-        {(Object.keys(GROUPS) as Action['group'][]).map((group) => {
+        {GROUP_NAMES.map((group) => {
           const rows = shown.filter((a) => a.group === group);
           return rows.length === 0 ? null : (
             <section key={group}>
@@ -41,10 +58,8 @@ export function KeyList({ actions }: { readonly actions: readonly Action[] }) {
                     <button
                       type="button"
                       className="link plain"
-                      onClick={() => {
-                        stores.session.setState({ over: 'none' });
-                        if (action.when?.(stores) ?? true) action.run(stores);
-                      }}
+                      disabled={!isReady(action)}
+                      onClick={() => choose(action)}
                     >
                       {action.label}
                     </button>

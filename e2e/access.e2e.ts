@@ -1,0 +1,150 @@
+import { createRequire } from 'node:module';
+import { expect, type Page } from 'playwright/test';
+import { field, unit } from './hand';
+import { openExample, solved, test } from './page';
+
+/** The checker itself, put into the page once: a builder would put it there for every look. */
+const ofTools = createRequire(createRequire(import.meta.url).resolve('@axe-core/playwright'));
+const AXE = ofTools.resolve('axe-core/axe.min.js');
+const TRAIN = '[data-example="aromatic-condensate.sketch.json"]';
+
+interface Options {
+  readonly runOnly?: readonly string[];
+}
+interface Violation {
+  readonly id: string;
+  readonly impact: string | null;
+  readonly nodes: readonly { readonly target: readonly string[] }[];
+}
+interface Checker {
+  run(root: string, options: object): Promise<{ readonly violations: readonly Violation[] }>;
+}
+
+/** Serious faults of what is on the page, as readable lines. */
+async function faultsOf(page: Page, root: string, options: Options): Promise<readonly string[]> {
+  const violations = await page.evaluate(
+    async ([within, given]) => {
+      const { axe } = window as unknown as { readonly axe: Checker };
+      const result = await axe.run(within, { ...given, resultTypes: ['violations'] });
+      return result.violations.map(({ id, impact, nodes }) => ({
+        id,
+        impact,
+        at: nodes.map((node) => node.target.join(' ')),
+      }));
+    },
+    [root, options] as const,
+  );
+  return violations
+    .filter(({ impact }) => impact === 'serious' || impact === 'critical')
+    .map(({ id, at }) => `${id}: ${at.join(' | ')}`);
+}
+
+/** Everything once in light; what depends on colours once more in dark, on the same page. `root`: what is new there. */
+async function scan(page: Page, where: string, root = 'html'): Promise<void> {
+  await page.emulateMedia({ colorScheme: 'light', reducedMotion: 'reduce' });
+  expect([where, 'light', ...(await faultsOf(page, root, {}))]).toEqual([where, 'light']);
+  await page.emulateMedia({ colorScheme: 'dark', reducedMotion: 'reduce' });
+  const dark = await faultsOf(page, root, { runOnly: ['color-contrast'] });
+  expect([where, 'dark', ...dark]).toEqual([where, 'dark']);
+}
+
+test('no screen and no drawer has a serious fault of access, in light and in dark', async ({
+  quiet: page,
+}) => {
+  await expect(page.locator('.card').first()).toBeVisible();
+  await page.addScriptTag({ path: AXE });
+  await scan(page, 'start');
+  await openExample(page, TRAIN);
+  await scan(page, 'sheet');
+  for (const tag of ['C-101', 'FEED-1', 'F-101']) {
+    await page.keyboard.press('Escape');
+    await unit(page, tag).click();
+    await expect(page.locator('.drawer [data-field="tag"]')).toHaveValue(tag);
+    await scan(page, tag, '.drawer');
+  }
+  await page.locator('[data-stream="2"] .stream-body').click();
+  await scan(page, 'stream drawer', '.drawer');
+  for (const [key, name] of [
+    ['l', 'Limits drawer'],
+    ['a', 'Assumption register'],
+    ['h', 'Chemicals drawer'],
+    ['t', 'Sketch drawer'],
+  ] as const) {
+    await page.keyboard.press('Escape');
+    await page.keyboard.press(key);
+    await expect(page.getByRole('complementary', { name })).toBeVisible();
+    await scan(page, name, '.drawer');
+  }
+  const dialogue = page.getByRole('dialog');
+  const look = async (name: string): Promise<void> => {
+    await expect(dialogue).toBeVisible();
+    await scan(page, name, 'dialog');
+    await dialogue.getByRole('button', { name: 'Close' }).click();
+    await expect(dialogue).toHaveCount(0);
+  };
+  for (const [key, name] of [
+    ['?', 'actions and keys'],
+    ['k', 'pair parameters'],
+    ['g', 'scaling all feeds'],
+  ] as const) {
+    // Out of the drawer's fields, where keys are typed text.
+    await page.keyboard.press('Escape');
+    await page.keyboard.press(key);
+    await look(name);
+  }
+  await page.locator('.bar').getByRole('button', { name: 'Stream summary' }).click();
+  await expect(page.locator('[data-table="streams"]')).toBeVisible();
+  await look('stream summary');
+});
+
+test('the list of actions opens by its key, is searched, and runs what is chosen', async ({
+  quiet: page,
+}) => {
+  await openExample(page);
+  await page.keyboard.press('?');
+  const list = page.getByRole('dialog', { name: 'All actions and their keys' });
+  await expect(list.getByRole('searchbox')).toBeFocused();
+  await page.keyboard.type('assumption');
+  await expect(list.locator('li')).toHaveCount(1);
+  await page.keyboard.press('Enter');
+  await expect(list).toHaveCount(0);
+  await expect(page.getByRole('complementary', { name: 'Assumption register' })).toBeVisible();
+});
+
+/** What a screen of 1440 x 900 leaves of itself at 200 %. */
+test('at 200 % everything is still there: it scrolls, and nothing hangs over the edge', async ({
+  quiet: page,
+}) => {
+  await page.setViewportSize({ width: 720, height: 450 });
+  await openExample(page);
+  const overhang = (): Promise<readonly string[]> =>
+    page.evaluate(() =>
+      [
+        ...document.querySelectorAll<HTMLElement>(
+          '.bar button, .balance select, .drawer .button, .menu button',
+        ),
+      ]
+        .filter((element) => element.getClientRects().length > 0)
+        .filter((element) => {
+          const { left, right, top, bottom } = element.getBoundingClientRect();
+          const isOut = left < -1 || right > innerWidth + 1 || top < -1 || bottom > innerHeight + 1;
+          const scrolls = (of: HTMLElement | null): boolean =>
+            of !== null && (/(auto|scroll)/.test(getComputedStyle(of).overflow) || scrolls(of.parentElement));
+          return isOut && !scrolls(element.parentElement);
+        })
+        .map((element) => element.textContent ?? ''),
+    );
+  expect(await overhang()).toEqual([]);
+  await page.getByRole('button', { name: 'File and view' }).click();
+  expect(await overhang()).toEqual([]);
+  await page.keyboard.press('Escape');
+  await unit(page, 'PV-1').click();
+  await expect(field(page, 'p.P')).toBeVisible();
+  await field(page, 'p.P').fill('9 bar');
+  await field(page, 'p.P').press('Enter');
+  await solved(page);
+  expect(await overhang()).toEqual([]);
+  const last = page.locator('.drawer-body .section').last();
+  await last.scrollIntoViewIfNeeded();
+  await expect(last).toBeInViewport();
+});
