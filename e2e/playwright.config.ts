@@ -24,13 +24,15 @@ export default defineConfig({
     baseURL: `http://localhost:${port}/`,
     viewport: { width: 1440, height: 900 },
     screenshot: 'only-on-failure',
+    // Every test begins as a first visit; only the journeys without a network keep the page's files.
+    serviceWorkers: 'block',
     launchOptions: {
       args: LAUNCH_ARGS,
       ...(browser.executablePath ? { executablePath: browser.executablePath } : {}),
     },
   },
   webServer: {
-    command: `npx vite preview --port ${port} --strictPort`,
+    command: `npx vite preview --port ${port} --strictPort${process.env.E2E_DIST ? ` --outDir ${process.env.E2E_DIST}` : ''}`,
     cwd: root,
     url: `http://localhost:${port}/`,
     reuseExistingServer: false,

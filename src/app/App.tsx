@@ -1,4 +1,4 @@
-import { useEffect, useMemo } from 'react';
+import { useEffect, useMemo, useState } from 'react';
 import { Balance } from '../balance/Balance';
 import { Sheet } from '../canvas/Sheet';
 import { Shelf } from '../canvas/Shelf';
@@ -19,9 +19,11 @@ import { MySketches } from './MySketches';
 import { Notice } from './Notice';
 import { Start } from './Start';
 import { SummaryPage } from './SummaryPage';
+import { ShareDialogue } from './share/ShareDialogue';
 import { applyTheme } from './theme';
 import './theme.css';
 import './layout.css';
+import './sketches.css';
 
 const isTyping = (target: EventTarget | null): boolean =>
   target instanceof HTMLElement && target.closest('input, textarea, select, [contenteditable]') !== null;
@@ -41,21 +43,33 @@ function useKeys(stores: Stores): void {
   }, [stores]);
 }
 
-/** A file dropped anywhere on the page is opened. */
-function useFileDrop(stores: Stores): void {
+/** A file dropped anywhere on the page is opened; while it hangs over the page, the page says so. True: one hangs there. */
+function useFileDrop(stores: Stores): boolean {
+  const [hangs, setHangs] = useState(false);
   useEffect(() => {
-    const over = (event: DragEvent): void => event.preventDefault();
+    const isFile = (event: DragEvent): boolean => event.dataTransfer?.types.includes('Files') ?? false;
+    const over = (event: DragEvent): void => {
+      event.preventDefault();
+      setHangs(isFile(event));
+    };
+    const leave = (event: DragEvent): void => {
+      if (event.relatedTarget === null) setHangs(false);
+    };
     const drop = (event: DragEvent): void => {
       event.preventDefault();
+      setHangs(false);
       if (event.dataTransfer) void dropFiles(stores, event.dataTransfer.files);
     };
     window.addEventListener('dragover', over);
+    window.addEventListener('dragleave', leave);
     window.addEventListener('drop', drop);
     return () => {
       window.removeEventListener('dragover', over);
+      window.removeEventListener('dragleave', leave);
       window.removeEventListener('drop', drop);
     };
   }, [stores]);
+  return hangs;
 }
 
 function Over() {
@@ -64,6 +78,7 @@ function Over() {
   const close = (): void => session.setState({ over: 'none' });
   if (over === 'keys') return <KeyList actions={actions} />;
   if (over === 'open') return <MySketches />;
+  if (over === 'share') return <ShareDialogue />;
   if (over === 'documents') return <DocumentsPage />;
   if (over === 'pairs')
     return (
@@ -82,7 +97,7 @@ function Over() {
 
 function Workplace({ stores }: { readonly stores: Stores }) {
   useKeys(stores);
-  useFileDrop(stores);
+  const fileHangs = useFileDrop(stores);
   const theme = useSession((state) => state.theme);
   useEffect(() => applyTheme(theme), [theme]);
   const isBlank = useSketch((state) => state.sketch.units.length === 0);
@@ -99,6 +114,7 @@ function Workplace({ stores }: { readonly stores: Stores }) {
       <DrawerHost />
       <Balance />
       <Over />
+      {fileHangs ? <div className="drop-here">Drop the file to open it</div> : null}
       <div className="unseen" role="status" aria-live="polite">
         {spoken}
       </div>

@@ -6,7 +6,7 @@ import { useResults, useSession, useSketch, useStores } from '../store/react';
 const savedText = {
   saved: 'Saved on this computer',
   saving: 'Saving',
-  failed: 'Not saved',
+  failed: 'Not saved on this computer',
   'read-only': 'Read only: open in another tab',
   unknown: '',
 } as const;
@@ -76,6 +76,16 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
       <span className="saved" data-state={saved.state} title={saved.detail}>
         {savedText[saved.state]}
       </span>
+      {saved.state === 'failed' ? (
+        <button
+          type="button"
+          className="button line not-saved"
+          title={saved.detail}
+          onClick={() => by('save')?.run(stores)}
+        >
+          Save as a file
+        </button>
+      ) : null}
       <span className="gap" />
       <button
         type="button"

@@ -1,5 +1,6 @@
 import { useSession, useStores } from '../store/react';
 import type { SessionState } from '../store/session';
+import { takeUpdate } from './offline';
 import { ReadOnly } from './ReadOnly';
 
 /** Over the sheet: that it can only be read; and what was refused or needs to be known, until it is put away. */
@@ -8,6 +9,7 @@ export function Notice() {
   return (
     <>
       <ReadOnly />
+      <Update />
       {notice ? <Told notice={notice} /> : null}
     </>
   );
@@ -26,8 +28,37 @@ function Told({ notice }: { readonly notice: NonNullable<SessionState['notice']>
           ))}
         </ul>
       ) : null}
-      <button type="button" className="button line" onClick={() => stores.session.dismiss()}>
-        Close
+      <div className="notice-steps">
+        {notice.steps?.map((step) => (
+          <button
+            key={step.label}
+            type="button"
+            className="button line"
+            onClick={() => {
+              stores.session.dismiss();
+              step.run();
+            }}
+          >
+            {step.label}
+          </button>
+        ))}
+        <button type="button" className="button line" onClick={() => stores.session.dismiss()}>
+          Close
+        </button>
+      </div>
+    </section>
+  );
+}
+
+/** Quiet, at the foot of the sheet: the version that is open goes on for as long as one likes. */
+function Update() {
+  const update = useSession((state) => state.update);
+  if (!update) return null;
+  return (
+    <section className="update" role="status" aria-label="New version">
+      <p>A new version is ready.</p>
+      <button type="button" className="button line" onClick={takeUpdate}>
+        Reload
       </button>
     </section>
   );

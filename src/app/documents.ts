@@ -1,12 +1,16 @@
 import { emptySketch } from '../sketch/fresh';
-import { openSketch } from '../sketch/read';
+import { type Opened, openSketch } from '../sketch/read';
 import type { Sketch } from '../sketch/types';
 import { writeSketch } from '../sketch/write';
 import type { Stores } from '../store/react';
 import { sayFileProblem } from '../wording';
 import { download, fileName, pickFile } from './files';
+import { theStorage } from './storage';
 
 export const SKETCH_ENDING = '.sketch.json';
+
+export const isEmpty = (sketch: Sketch): boolean =>
+  sketch.units.length === 0 && sketch.chemicals.length === 0 && sketch.notes.length === 0;
 
 /** Puts a document on the sheet: fresh history, nothing selected. */
 export function showSketch(stores: Stores, sketch: Sketch): void {
@@ -23,53 +27,123 @@ export function showSketch(stores: Stores, sketch: Sketch): void {
   stores.sketch.open(sketch);
 }
 
-export function newSketch(stores: Stores): void {
-  showSketch(stores, emptySketch(crypto.randomUUID()));
-}
+/** The document that was last saved as a file. */
+let asFile: Sketch | null = null;
 
-/** The sketch that is shown goes on as another one, with a name of its own. */
-export function editCopy(stores: Stores): void {
+/** What is shown is kept nowhere but in this page. */
+export function isKeptNowhere(stores: Stores): boolean {
   const { sketch } = stores.sketch.getState();
-  const title = sketch.title.title ? { ...sketch.title, title: `${sketch.title.title}, copy` } : sketch.title;
-  showSketch(stores, { ...sketch, id: crypto.randomUUID(), title });
+  return stores.session.getState().saved.state === 'failed' && !isEmpty(sketch) && sketch !== asFile;
 }
 
-/** Opens a sketch from text. Refused: says where and why, and the open sketch stays. */
-export function openText(stores: Stores, text: string, name: string, as: 'same' | 'copy' = 'same'): boolean {
-  const opened = openSketch(text);
+/** Goes on to another sketch at once, or only when asked again where the one that is shown would be lost. */
+export function leaveFor(stores: Stores, go: () => void): void {
+  if (!isKeptNowhere(stores)) {
+    go();
+    return;
+  }
+  stores.session.setState({ over: 'none' });
+  stores.session.say(
+    'caution',
+    'The sketch that is shown is not saved.',
+    ['It would be lost. Save it as a file first.'],
+    [
+      { label: 'Save as a file', run: () => saveFile(stores) },
+      { label: 'Go on without it', run: go },
+    ],
+  );
+}
+
+/** The browser asks before a page is closed whose sketch is kept nowhere else. */
+export function guardLeaving(stores: Stores): void {
+  window.addEventListener('beforeunload', (event) => {
+    if (isKeptNowhere(stores)) event.preventDefault();
+  });
+}
+
+export function newSketch(stores: Stores): void {
+  leaveFor(stores, () => showSketch(stores, emptySketch(crypto.randomUUID())));
+}
+
+/** The same content as another sketch, with a name of its own. */
+export function copyOf(sketch: Sketch): Sketch {
+  const title = sketch.title.title ? { ...sketch.title, title: `${sketch.title.title}, copy` } : sketch.title;
+  return { ...sketch, id: crypto.randomUUID(), title };
+}
+
+/** The sketch that is shown goes on as another one. */
+export function editCopy(stores: Stores): void {
+  showSketch(stores, copyOf(stores.sketch.getState().sketch));
+}
+
+function refuse(stores: Stores, name: string, { problems }: Extract<Opened, { ok: false }>): void {
+  stores.session.say(
+    'beyond',
+    `${name} was not opened; your sketch is untouched.`,
+    problems.map(sayFileProblem),
+  );
+}
+
+/** Opens a sketch as a new one of its own. Refused: says where and why, and the open sketch stays. */
+export function openAsNew(stores: Stores, source: unknown, name: string): boolean {
+  const opened = openSketch(source);
   if (!opened.ok) {
-    stores.session.say(
-      'beyond',
-      `${name} was not opened; your sketch is untouched.`,
-      opened.problems.map(sayFileProblem),
-    );
+    refuse(stores, name, opened);
     return false;
   }
-  showSketch(stores, as === 'copy' ? { ...opened.sketch, id: crypto.randomUUID() } : opened.sketch);
+  leaveFor(stores, () => showSketch(stores, { ...opened.sketch, id: crypto.randomUUID() }));
   return true;
+}
+
+/**
+ * Opens a file. Where its sketch is on this computer in another state, neither takes the other's place: the file becomes a
+ * sketch of its own.
+ */
+export async function openFileOf(stores: Stores, file: File): Promise<void> {
+  const opened = openSketch(new Uint8Array(await file.arrayBuffer()));
+  if (!opened.ok) {
+    refuse(stores, file.name, opened);
+    return;
+  }
+  const { sketch } = opened;
+  const stored = await theStorage()?.latest(sketch.id);
+  const isOther = stored !== undefined && writeSketch(stored.document) !== writeSketch(sketch);
+  leaveFor(stores, () => {
+    showSketch(stores, isOther ? { ...sketch, id: crypto.randomUUID() } : sketch);
+    if (isOther)
+      stores.session.say('info', `${file.name} was opened as a sketch of its own.`, [
+        'This sketch is on this computer in another state, which stays as it is: see “Sketches on this computer”.',
+      ]);
+  });
 }
 
 export async function openFile(stores: Stores): Promise<void> {
   const file = await pickFile('.json,application/json');
-  if (file) openText(stores, await file.text(), file.name);
+  if (file) await openFileOf(stores, file);
 }
 
 export function saveFile(stores: Stores): void {
   const { sketch } = stores.sketch.getState();
   const name = fileName(sketch.title.title, SKETCH_ENDING);
   download(name, writeSketch(sketch), 'application/json');
+  asFile = sketch;
   stores.session.setState({ spoken: `Saved as ${name}` });
 }
 
-/** Files dropped anywhere on the page: the first one is opened. */
+/** Files dropped anywhere on the page: one is opened; of several, none is chosen for the user. */
 export async function dropFiles(stores: Stores, files: FileList): Promise<void> {
-  const [file] = files;
-  if (file) openText(stores, await file.text(), file.name);
+  const [file, ...more] = files;
+  if (!file) return;
+  if (more.length > 0)
+    stores.session.say('caution', 'One sketch at a time: nothing was opened.', [
+      `${files.length} files were dropped. Drop one of them.`,
+    ]);
+  else await openFileOf(stores, file);
 }
 
 /** An example is opened as a copy, so that what is done to it is kept apart from the example. */
 export async function openExample(stores: Stores, file: string): Promise<void> {
   const answer = await fetch(`./examples/${file}`);
-  if (answer.ok) openText(stores, await answer.text(), file, 'copy');
+  if (answer.ok) openAsNew(stores, await answer.text(), file);
   else stores.session.say('beyond', 'The example could not be read.', [`${file}: ${answer.status}`]);
 }

@@ -1,7 +1,7 @@
 /** A tab that does not let go within this time is asleep or stuck: the sketch is taken without it. */
 const PATIENCE_MS = 2000;
 const CHANNEL = 'splitwright';
-const lockOf = (id: string): string => `splitwright:${id}`;
+export const lockOf = (id: string): string => `splitwright:${id}`;
 
 /** One tab at a time may change a sketch. */
 export interface Holding {
@@ -16,6 +16,8 @@ export interface Holder {
   lost(): void;
   /** Brings what is being written to its end. */
   finish(): Promise<void>;
+  /** Another tab has taken it by force: there was no time to finish. */
+  taken?(): void;
 }
 
 interface Means {
@@ -54,6 +56,7 @@ export function createHolding(holder: Holder, means: Means = browserMeans()): Ho
           if (held?.id === id) {
             held = null;
             holder.lost();
+            holder.taken?.();
           } else reject(error);
         });
     });

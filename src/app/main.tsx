@@ -12,6 +12,8 @@ import { App } from './App';
 import { startAutosave } from './autosaving';
 import { ErrorBoundary } from './ErrorBoundary';
 import { keepFolds } from './folds';
+import { keepOffline } from './offline';
+import { watchLinks } from './share/opening';
 import { startSolving } from './solving';
 import { applyTheme, storedTheme } from './theme';
 
@@ -42,6 +44,7 @@ stores.session.setState({ theme });
 keepFolds(stores.session);
 startSolving(stores);
 autosave.watch(stores);
+await watchLinks(stores);
 // A sketch of last time is on its way to the solver before the page takes the processor to draw itself; not for long.
 if (autosave.last) await Promise.race([nextCompiled(stores), new Promise((go) => setTimeout(go, ASKED_MS))]);
 
@@ -53,3 +56,4 @@ createRoot(root).render(
   </StrictMode>,
 );
 afterPaint(() => markOnce('app-ready'));
+keepOffline(stores.session);

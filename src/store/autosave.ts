@@ -16,6 +16,8 @@ export interface SketchHead {
   readonly counter: number;
   readonly at: number;
   readonly title: string;
+  /** When it was deleted; its states are still here until then and a while longer. */
+  readonly gone?: number;
 }
 
 interface Store extends DBSchema {
@@ -33,6 +35,12 @@ export type SaveOutcome =
 
 const KEEP_LAST = 20;
 const HOUR_MS = 3_600_000;
+/** How long a deleted sketch can be brought back [ms]. */
+export const KEEP_DELETED_MS = 30 * 24 * HOUR_MS;
+/** A browser that does not answer within this time is taken to have no storage [ms]. */
+const OPEN_MS = 4000;
+/** Written through to the disk before it counts as saved: a machine that stops loses no edit that was called saved. */
+const WRITE = { durability: 'strict' } as const;
 
 /** States to drop: all but the last 20 and the newest of each hour. Pure, so that it can be tested. */
 export function statesToDrop(states: readonly { readonly counter: number; readonly at: number }[]): number[] {
@@ -50,10 +58,12 @@ export function statesToDrop(states: readonly { readonly counter: number; readon
 
 const ofSketch = (id: string): IDBKeyRange => IDBKeyRange.bound([id, 0], [id, Number.MAX_SAFE_INTEGER]);
 
-function whyOf(error: unknown): SaveOutcome {
-  const name = error instanceof Error ? error.name : '';
-  const detail = error instanceof Error ? error.message : String(error);
-  return { ok: false, why: name === 'QuotaExceededError' ? 'storage-full' : 'storage-denied', detail };
+/** A full disk shows as an error of the request, or only as the reason for which the transaction was given up. */
+function whyOf(error: unknown, given: DOMException | null = null): SaveOutcome {
+  const reasons = [error, given].filter((e) => e instanceof Error || e instanceof DOMException);
+  const isFull = reasons.some((e) => e.name === 'QuotaExceededError');
+  const detail = reasons[0]?.message ?? String(error);
+  return { ok: false, why: isFull ? 'storage-full' : 'storage-denied', detail };
 }
 
 /**
@@ -63,8 +73,9 @@ function whyOf(error: unknown): SaveOutcome {
 export class SketchStorage {
   private constructor(private readonly db: IDBPDatabase<Store>) {}
 
-  static async open(name = 'splitwright'): Promise<SketchStorage> {
-    const db = await openDB<Store>(name, 1, {
+  /** Refused where the browser denies storage, or does not answer. */
+  static async open(name = 'splitwright', patience_ms = OPEN_MS): Promise<SketchStorage> {
+    const opening = openDB<Store>(name, 1, {
       upgrade(fresh) {
         fresh.createObjectStore('heads', { keyPath: 'id' }).createIndex('at', 'at');
         fresh
@@ -72,18 +83,30 @@ export class SketchStorage {
           .createIndex('when', ['sketch', 'at']);
       },
     });
-    return new SketchStorage(db);
+    let timer: ReturnType<typeof setTimeout> | undefined;
+    const late = new Promise<never>((_, reject) => {
+      timer = setTimeout(() => reject(new Error('the browser’s storage does not answer')), patience_ms);
+    });
+    try {
+      return new SketchStorage(await Promise.race([opening, late]));
+    } finally {
+      clearTimeout(timer);
+    }
   }
 
+  /**
+   * Stores the next state. `expected`: the counter of the state it follows, 0 for a new sketch; nothing is written where
+   * another one is stored, nor where there is no room. Never throws.
+   */
   async save(document: Sketch, expected: number, label: string, at: number): Promise<SaveOutcome> {
+    let tx: ReturnType<SketchStorage['writing']> | undefined;
     try {
-      const tx = this.db.transaction(['heads', 'states'], 'readwrite');
+      tx = this.writing();
       const heads = tx.objectStore('heads');
       const states = tx.objectStore('states');
       const head = await heads.get(document.id);
       if ((head?.counter ?? 0) !== expected) {
         tx.abort();
-        await tx.done.catch(() => undefined);
         return { ok: false, why: 'newer-elsewhere', detail: String(head?.counter ?? 0) };
       }
       const counter = expected + 1;
@@ -100,8 +123,15 @@ export class SketchStorage {
       await tx.done;
       return { ok: true, counter };
     } catch (error) {
-      return whyOf(error);
+      return whyOf(error, tx?.error ?? null);
     }
+  }
+
+  private writing() {
+    const tx = this.db.transaction(['heads', 'states'], 'readwrite', WRITE);
+    // Its end is awaited where it matters; a transaction that is given up before that is no fault of its own.
+    tx.done.catch(() => undefined);
+    return tx;
   }
 
   /** The latest stored state of a sketch. */
@@ -110,10 +140,19 @@ export class SketchStorage {
     return head ? this.db.get('states', [id, head.counter]) : undefined;
   }
 
-  /** Heads of all sketches, the most recent first. */
+  /** Heads of all sketches but deleted ones, the most recent first. */
   async list(): Promise<SketchHead[]> {
-    const heads = await this.db.getAllFromIndex('heads', 'at');
-    return heads.reverse();
+    return (await this.heads()).filter((head) => head.gone === undefined);
+  }
+
+  /** Heads of deleted sketches that can be brought back, the last deleted first. */
+  async deleted(): Promise<SketchHead[]> {
+    const gone = (await this.heads()).filter((head) => head.gone !== undefined);
+    return gone.sort((a, b) => (b.gone ?? 0) - (a.gone ?? 0));
+  }
+
+  private async heads(): Promise<SketchHead[]> {
+    return (await this.db.getAllFromIndex('heads', 'at')).reverse();
   }
 
   /** Kept states of a sketch, the most recent first. */
@@ -122,12 +161,35 @@ export class SketchStorage {
     return states.sort((a, b) => b.counter - a.counter);
   }
 
+  /** Takes a sketch off the list; its states stay until it is removed. */
+  async markDeleted(id: string, at: number): Promise<void> {
+    await this.mark(id, (head) => ({ ...head, gone: at }));
+  }
+
+  async bringBack(id: string): Promise<void> {
+    await this.mark(id, ({ gone, ...head }) => head);
+  }
+
+  private async mark(id: string, change: (head: SketchHead) => SketchHead): Promise<void> {
+    const tx = this.db.transaction('heads', 'readwrite', WRITE);
+    const head = await tx.store.get(id);
+    if (head) await tx.store.put(change(head));
+    await tx.done;
+  }
+
+  /** Removes a sketch with all its states, for good. */
   async remove(id: string): Promise<void> {
-    const tx = this.db.transaction(['heads', 'states'], 'readwrite');
+    const tx = this.writing();
     await tx.objectStore('heads').delete(id);
     for (const key of await tx.objectStore('states').index('when').getAllKeys(ofSketch(id)))
       await tx.objectStore('states').delete(key);
     await tx.done;
+  }
+
+  /** Removes for good what was deleted so long ago that it can no longer be brought back. */
+  async tidy(now: number): Promise<void> {
+    for (const head of await this.deleted())
+      if (now - (head.gone ?? now) > KEEP_DELETED_MS) await this.remove(head.id);
   }
 
   close(): void {

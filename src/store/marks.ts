@@ -1,5 +1,5 @@
 /**
- * Performance marks that scripts read: app-ready, first-solved, edit:N (input event) and shown:N (first frame painted after
+ * Performance marks that scripts read: app-ready, first-solved, offline-ready (every file is kept), edit:N (input event) and shown:N (first frame painted after
  * the text changed: a MessageChannel turn posted in requestAnimationFrame).
  */
 const KEEP = 400;
@@ -12,7 +12,7 @@ function mark(name: string): void {
 }
 
 export const markEdit = (edit: number): void => mark(`edit:${edit}`);
-export const markOnce = (name: 'app-ready' | 'first-solved'): void => {
+export const markOnce = (name: 'app-ready' | 'first-solved' | 'offline-ready'): void => {
   if (performance.getEntriesByName(name, 'mark').length === 0) performance.mark(name);
 };
 

@@ -18,6 +18,13 @@ export interface Notice {
   readonly tone: 'info' | 'caution' | 'beyond';
   readonly title: string;
   readonly lines: readonly string[];
+  /** What can be done about it: one button each. */
+  readonly steps?: readonly NoticeStep[];
+}
+
+export interface NoticeStep {
+  readonly label: string;
+  run(): void;
 }
 
 export type Theme = 'system' | 'light' | 'dark';
@@ -43,13 +50,25 @@ export interface SessionState {
   readonly shelfFolded: boolean;
   readonly balanceFolded: boolean;
   /** Full-screen pages over the sheet. */
-  readonly over: 'none' | 'summary' | 'documents' | 'pdf' | 'open' | 'keys' | 'find' | 'pairs' | 'scale';
+  readonly over:
+    | 'none'
+    | 'summary'
+    | 'documents'
+    | 'pdf'
+    | 'open'
+    | 'share'
+    | 'keys'
+    | 'find'
+    | 'pairs'
+    | 'scale';
   readonly notice: Notice | null;
   /** Title bar: how autosave stands. */
   readonly saved: {
     readonly state: 'saved' | 'saving' | 'failed' | 'read-only' | 'unknown';
     readonly detail?: string;
   };
+  /** A new version of the page is kept and waits to be asked for. */
+  readonly update: boolean;
   /** Read out politely by screen readers. */
   readonly spoken: string;
 }
@@ -71,6 +90,7 @@ export function createSession() {
     over: 'none',
     notice: null,
     saved: { state: 'unknown' },
+    update: false,
     spoken: '',
   }));
   const { getState: get, setState: set } = store;
@@ -110,9 +130,14 @@ export function createSession() {
     enterDrawer(drawer: DrawerChoice): void {
       set({ drawer, drawerEntered: get().drawerEntered + 1 });
     },
-    say(tone: Notice['tone'], title: string, lines: readonly string[] = []): void {
+    say(
+      tone: Notice['tone'],
+      title: string,
+      lines: readonly string[] = [],
+      steps: readonly NoticeStep[] = [],
+    ): void {
       notices += 1;
-      set({ notice: { key: notices, tone, title, lines }, spoken: [title, ...lines].join(' ') });
+      set({ notice: { key: notices, tone, title, lines, steps }, spoken: [title, ...lines].join(' ') });
     },
     dismiss(): void {
       set({ notice: null });

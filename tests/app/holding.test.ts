@@ -1,68 +1,13 @@
 import { describe, expect, test, vi } from 'vitest';
 import { createHolding } from '../../src/app/holding';
+import { fakeBrowser } from './tabs';
 
-type Granted = (lock: Lock | null) => unknown;
-interface Waiting {
-  readonly granted: Granted;
-  readonly settle: (error?: unknown) => void;
-}
-
-/** Exclusive locks of one browser, as the Web Locks API describes them: a queue a name; stealing refuses the holder. */
-function fakeLocks() {
-  const held = new Map<string, Waiting>();
-  const queue = new Map<string, Waiting[]>();
-  const grant = (name: string, entry: Waiting): void => {
-    held.set(name, entry);
-    void Promise.resolve(entry.granted({ name, mode: 'exclusive' })).then(() => {
-      if (held.get(name) !== entry) return;
-      held.delete(name);
-      entry.settle();
-      const next = queue.get(name)?.shift();
-      if (next) grant(name, next);
-    });
-  };
-  const request = (name: string, options: LockOptions, granted: Granted): Promise<unknown> =>
-    new Promise((resolve, reject) => {
-      const entry: Waiting = {
-        granted,
-        settle: (error) => (error === undefined ? resolve(undefined) : reject(error)),
-      };
-      const holder = held.get(name);
-      if (!holder) grant(name, entry);
-      else if (options.ifAvailable) void Promise.resolve(granted(null)).then(resolve);
-      else if (options.steal) {
-        grant(name, entry);
-        holder.settle(new DOMException('stolen', 'AbortError'));
-      } else {
-        queue.set(name, [...(queue.get(name) ?? []), entry]);
-        options.signal?.addEventListener('abort', () => {
-          queue.set(
-            name,
-            (queue.get(name) ?? []).filter((other) => other !== entry),
-          );
-          reject(options.signal?.reason);
-        });
-      }
-    });
-  return { request } as unknown as Pick<LockManager, 'request'>;
-}
-
-/** Tabs of one browser. A tab that is asleep hears nothing. */
+/** Tabs of one browser. */
 function browser() {
-  const locks = fakeLocks();
-  const listeners: { readonly tab: object; readonly hear: (event: { data: unknown }) => void }[] = [];
+  const means = fakeBrowser();
   const tab = ({ asleep = false, finish = () => Promise.resolve() } = {}) => {
     const lost = vi.fn();
-    const me = {};
-    const channel = {
-      postMessage: (data: unknown) => {
-        for (const { tab: other, hear } of listeners) if (other !== me) hear({ data });
-      },
-      addEventListener: (_type: string, hear: (event: { data: unknown }) => void) => {
-        if (!asleep) listeners.push({ tab: me, hear });
-      },
-    } as unknown as Pick<BroadcastChannel, 'postMessage' | 'addEventListener'>;
-    return { lost, ...createHolding({ lost, finish }, { locks, channel, patience_ms: 50 }) };
+    return { lost, ...createHolding({ lost, finish }, means(asleep)) };
   };
   return { tab };
 }

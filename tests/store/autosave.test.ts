@@ -1,7 +1,7 @@
 import 'fake-indexeddb/auto';
-import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import type { Sketch } from '../../src/sketch/types';
-import { SketchStorage, statesToDrop } from '../../src/store/autosave';
+import { KEEP_DELETED_MS, SketchStorage, statesToDrop } from '../../src/store/autosave';
 
 const sketch = (id: string, title: string): Sketch => ({
   format: 'splitwright.sketch',
@@ -61,6 +61,73 @@ describe('sketches on this computer', () => {
     await storage.remove('b');
     expect((await storage.list()).map((head) => head.id)).toEqual(['a']);
     expect(await storage.history('b')).toEqual([]);
+  });
+});
+
+describe('deleting', () => {
+  test('takes a sketch off the list; it comes back with all its states', async () => {
+    await storage.save(sketch('a', 'one'), 0, 'new', 1);
+    await storage.save(sketch('a', 'two'), 1, 'rename', 2);
+    await storage.markDeleted('a', 10);
+    expect(await storage.list()).toEqual([]);
+    expect((await storage.deleted()).map((head) => [head.id, head.gone])).toEqual([['a', 10]]);
+    await storage.bringBack('a');
+    expect((await storage.list()).map((head) => head.title)).toEqual(['two']);
+    expect(await storage.deleted()).toEqual([]);
+    expect(await storage.history('a')).toHaveLength(2);
+  });
+
+  test('is for good once a month has passed, and not before', async () => {
+    await storage.save(sketch('a', 'A'), 0, 'new', 1);
+    await storage.save(sketch('b', 'B'), 0, 'new', 2);
+    await storage.markDeleted('a', 1000);
+    await storage.tidy(1000 + KEEP_DELETED_MS);
+    expect(await storage.deleted()).toHaveLength(1);
+    await storage.tidy(1001 + KEEP_DELETED_MS);
+    expect(await storage.deleted()).toEqual([]);
+    expect(await storage.history('a')).toEqual([]);
+    expect((await storage.list()).map((head) => head.id)).toEqual(['b']);
+  });
+
+  test('an edit to a deleted sketch puts it back on the list', async () => {
+    await storage.save(sketch('a', 'one'), 0, 'new', 1);
+    await storage.markDeleted('a', 2);
+    expect(await storage.save(sketch('a', 'two'), 1, 'rename', 3)).toEqual({ ok: true, counter: 2 });
+    expect((await storage.list()).map((head) => head.title)).toEqual(['two']);
+  });
+});
+
+describe('a store that fails', () => {
+  afterEach(() => {
+    vi.restoreAllMocks();
+  });
+
+  test('full: says so, and keeps what was stored before', async () => {
+    await storage.save(sketch('a', 'one'), 0, 'new', 1);
+    vi.spyOn(IDBObjectStore.prototype, 'put').mockImplementation(() => {
+      throw new DOMException('no room', 'QuotaExceededError');
+    });
+    expect(await storage.save(sketch('a', 'two'), 1, 'rename', 2)).toEqual({
+      ok: false,
+      why: 'storage-full',
+      detail: 'no room',
+    });
+    vi.restoreAllMocks();
+    expect((await storage.latest('a'))?.document.title.title).toBe('one');
+    expect(await storage.save(sketch('a', 'two'), 1, 'rename', 3)).toEqual({ ok: true, counter: 2 });
+  });
+
+  test('closed under our hands: answers, and throws nothing', async () => {
+    storage.close();
+    expect(await storage.save(sketch('a', 'one'), 0, 'new', 1)).toMatchObject({
+      ok: false,
+      why: 'storage-denied',
+    });
+  });
+
+  test('one that never answers counts as none', async () => {
+    vi.spyOn(indexedDB, 'open').mockImplementation(() => new IDBOpenDBRequest());
+    await expect(SketchStorage.open('silent', 20)).rejects.toThrow('does not answer');
   });
 });
 

@@ -1,5 +1,5 @@
 import type { Action } from '../../store/action';
-import { newSketch, openFile, saveFile } from '../documents';
+import { isEmpty, newSketch, openFile, saveFile } from '../documents';
 
 export const fileActions: readonly Action[] = [
   {
@@ -30,6 +30,16 @@ export const fileActions: readonly Action[] = [
     label: 'Sketches on this computer',
     group: 'sketch',
     keys: ['Ctrl+Shift+O'],
+    whileTyping: true,
     run: ({ session }) => session.setState({ over: 'open' }),
+  },
+  {
+    id: 'share',
+    label: 'Share as a link',
+    group: 'sketch',
+    keys: ['Ctrl+Shift+L'],
+    whileTyping: true,
+    when: ({ sketch }) => !isEmpty(sketch.getState().sketch),
+    run: ({ session }) => session.setState({ over: 'share' }),
   },
 ];
