@@ -2,7 +2,8 @@ import { BoxIndex, boxAround, type Entry, grown, overlaps } from './boxes';
 import { DIAMOND, type DiamondPlace } from './diamonds';
 import { type Anchor, alongLine, atAnchor, CLEAR, type LabelWish } from './labelPlaces';
 import { isLeaderFree, type LedPlace, leaderBoxes, ledPlaces } from './leaders';
-import { distanceTo, distanceToLine } from './near';
+import { distanceTo, distanceToLine, scaledAbout } from './near';
+import { SCALE_STEP } from './textScale';
 import type { Box, Point } from './types';
 
 /**
@@ -90,6 +91,10 @@ export class LabelGround {
   }
 }
 
+/** Where a label on a leader line stands when texts are drawn one step smaller: nearer to its diamond. */
+const nearer = (box: Box, diamond: Point, scale: number): Box =>
+  scaledAbout(box, diamond, (scale - SCALE_STEP) / scale);
+
 const guardOf = (box: Box, { scale }: LabelWish, anchor: Anchor, isLed: boolean): Box => {
   const toMiddle = anchor.diamond && !isLed ? distanceTo(box, anchor.at) + NEARER * scale : 0;
   return grown(box, Math.max(toMiddle, (DIAMOND + ALOOF) * scale));
@@ -165,7 +170,7 @@ class Placing {
     this.takeOff(k);
     this.anchors[k] = anchor;
     const guard = guardOf(box, wish, anchor, leader !== undefined);
-    const dots = leader ? leaderBoxes(leader) : [];
+    const dots = leader ? [...leaderBoxes(leader), nearer(box, anchor.at, wish.scale)] : [];
     const entries = [box, ...dots].map((one) => this.index.add(one, k));
     entries.push(this.guards.add(guard, k));
     this.placed[k] = { box, anchor, dots, entries, ...(leader ? { leader } : {}) };
@@ -210,6 +215,8 @@ class Placing {
     for (const place of ledPlaces(wish)) {
       if (!this.ground.allows(place.box, k, wish, wish.anchor, true)) continue;
       if (!this.fits(place.box, k, CLEAR * wish.scale)) continue;
+      const low = nearer(place.box, wish.anchor.at, wish.scale);
+      if (this.ground.taken.hits(low, CLEAR) || !this.fits(low, k, CLEAR)) continue;
       if (!isLeaderFree(place.leader, wish.anchor.at, this.ground.taken, k, wish.scale)) continue;
       if (leaderBoxes(place.leader).every((dot) => this.fits(dot, k, 0))) return place;
     }

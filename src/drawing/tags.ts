@@ -1,7 +1,8 @@
 import type { BoxIndex } from './boxes';
 import { LIMIT_SIDE, STATE_ROOM } from './marks';
 import { measureText } from './metrics';
-import { apart, nearestOfBox } from './near';
+import { apart, nearestOfBox, scaledAbout } from './near';
+import { SCALE_STEP } from './textScale';
 import { TEXT } from './tokens';
 import type { Box, Point } from './types';
 
@@ -112,6 +113,9 @@ export function placeTag(
       for (const side of align === 'start' ? (['left', 'right'] as const) : (['right', 'left'] as const)) {
         const place = placeAt(corner, align, side, size, symbol, k);
         if (place.boxes.some((box) => taken.hits(box, CLEAR * k))) continue;
+        // Drawn one step smaller it stands a little nearer to its symbol.
+        const low = (k - SCALE_STEP) / k;
+        if (place.boxes.some((box) => taken.hits(scaledAbout(box, place.hold, low)))) continue;
         const toOwn = apart(place.boxes[0]!, symbol);
         if (!symbols.hits(place.boxes[0]!, toOwn + NEARER, own)) return place;
       }

@@ -213,7 +213,7 @@ export interface SceneInput {
   readonly remarks?: ReadonlyMap<UnitId, readonly string[]>;
   /**
    * How much larger than at 100 % texts, diamonds and marks are, because they keep their size on a screen that is zoomed out
-   * (1 to 2); absent: 1. See textScaleAt.
+   * (above 1), or smaller on one that is zoomed in; absent: 1. See textScaleAt.
    */
   readonly textScale?: number;
   /** Positions while a drag lasts, over the sketch's own. */

@@ -47,7 +47,7 @@ test('texts are placed anew for the scale at which they keep their size on the s
   quietAgain(sheet, 0.59);
   expect(sheet.getState().scene).toBe(scene);
   quietAgain(sheet, 2);
-  expect(sheet.getState().scene.textScale).toBe(1);
+  expect(sheet.getState().scene.textScale).toBe(0.75);
 });
 
 test('zones belong to the page and stand at the edges of the view', () => {

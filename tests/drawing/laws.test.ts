@@ -5,7 +5,7 @@ import type { Scene } from '../../src/drawing/types';
 import type { Weight } from '../../src/engine/outcome';
 import { openSketch } from '../../src/sketch/read';
 import type { Sketch } from '../../src/sketch/types';
-import { LAWS, openLabels } from './laws';
+import { LAWS, LAWS_BETWEEN_STEPS, openLabels } from './laws';
 import { randomSheet } from './random';
 import { inputOf, SHEETS } from './sheets';
 
@@ -22,8 +22,8 @@ const SEEDED = Array.from({ length: 60 }, (_, k): [string, Sketch] => [
   randomSheet(k + 1),
 ]);
 
-/** Texts keep their size on the screen: at 100 %, 80 % (1.25), 67 % (1.5) and 50 % (2). */
-const SCALES = [1, 1.25, 1.5, 2] as const;
+/** Texts as large as the sheet, smaller on one that is zoomed in, and larger on ever smaller sheets. */
+const SCALES = [1, 0.75, 1.25, 1.5, 2] as const;
 
 const sceneOf = (sketch: Sketch, textScale: number): Scene => {
   const limits = Object.fromEntries(sketch.units.map((u): [string, Weight] => [u.tag, 'caution']));
@@ -40,6 +40,14 @@ describe.each([...BY_HAND, ...SEEDED])('%s', (_name, sketch) => {
 
   test.each(Object.entries(LAWS))('%s', (_law, broken) => {
     for (const scene of scenes) expect(broken(scene, sketch), `text scale ${scene.textScale}`).toEqual([]);
+  });
+
+  test('keeps its laws between two steps of the text scale', () => {
+    for (const scene of scenes) {
+      const between = { ...scene, textScale: scene.textScale - 0.12 };
+      const broken = Object.values(LAWS_BETWEEN_STEPS).flatMap((law) => law(between, sketch));
+      expect(broken, `text scale ${between.textScale}`).toEqual([]);
+    }
   });
 });
 

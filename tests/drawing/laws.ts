@@ -128,62 +128,70 @@ export const noLinesRunAlong: Law = ({ lines }) =>
       ),
   );
 
-/** Labels clear symbols, lines, diamonds and one another by 6 px of the screen, and cover no text. */
-export const labelsCoverNothing: Law = (scene) => {
-  const k = scene.textScale;
-  const open = openLabels(scene);
-  return open.flatMap((label, n) => {
-    const number = scene.lines.find((l) => l.stream === label.stream)!.number;
-    const room = grown(label.seen, 5.9 * k);
-    const out: string[] = [];
-    const check = (isHit: boolean, what: string): void => {
-      if (isHit) out.push(`label ${number} on ${what}`);
-    };
-    for (const unit of scene.units) {
-      for (const box of solidOf(unit, k)) check(overlaps(room, box), unit.tag);
-      for (const box of textsOf(unit, k)) check(overlaps(label.seen, box), `a text of ${unit.tag}`);
-    }
-    for (const line of scene.lines) {
-      for (const [a, b] of pieces(line.points))
-        check(overlaps(room, boxOfPiece(a, b, 0.9)), `line ${line.number}`);
-      const diamond = diamondOf(line, k);
-      if (diamond) check(overlaps(room, diamond), `diamond ${line.number}`);
-    }
-    for (const other of open.slice(n + 1)) check(overlaps(room, other.seen), `the label of ${other.stream}`);
-    for (const other of open) {
-      for (const dot of leaderDots(other, k))
-        check(other !== label && overlaps(label.seen, dot), 'a leader line');
-    }
-    return out;
-  });
-};
+/** Labels clear symbols, lines, diamonds and one another by so many px of the screen, and cover no text. */
+const labelsClear =
+  (clear: number): Law =>
+  (scene) => {
+    const k = scene.textScale;
+    const open = openLabels(scene);
+    return open.flatMap((label, n) => {
+      const number = scene.lines.find((l) => l.stream === label.stream)!.number;
+      const room = grown(label.seen, clear * k);
+      const out: string[] = [];
+      const check = (isHit: boolean, what: string): void => {
+        if (isHit) out.push(`label ${number} on ${what}`);
+      };
+      for (const unit of scene.units) {
+        for (const box of solidOf(unit, k)) check(overlaps(room, box), unit.tag);
+        for (const box of textsOf(unit, k)) check(overlaps(label.seen, box), `a text of ${unit.tag}`);
+      }
+      for (const line of scene.lines) {
+        for (const [a, b] of pieces(line.points))
+          check(overlaps(room, boxOfPiece(a, b, 0.9)), `line ${line.number}`);
+        const diamond = diamondOf(line, k);
+        if (diamond) check(overlaps(room, diamond), `diamond ${line.number}`);
+      }
+      for (const other of open.slice(n + 1))
+        check(overlaps(room, other.seen), `the label of ${other.stream}`);
+      for (const other of open) {
+        for (const dot of leaderDots(other, k))
+          check(other !== label && overlaps(label.seen, dot), 'a leader line');
+      }
+      return out;
+    });
+  };
 
 /**
  * A label can be read as its own stream's only: it is nearer to its own line or diamond than to any other line, and nearer to
  * its own diamond than to any other diamond; or a leader line joins it to its own diamond.
  */
-export const labelsAreNearestToTheirOwn: Law = (scene) =>
-  openLabels(scene).flatMap((label) => {
-    const own = scene.lines.find((line) => line.stream === label.stream)!;
-    const k = scene.textScale;
-    const toMiddle = own.diamond ? distanceTo(label.seen, own.diamond) : Infinity;
-    const inner = 12 * k * Math.SQRT1_2;
-    const toOwn = Math.min(distanceToLine(label.seen, own.points), toMiddle - inner);
-    return scene.lines.flatMap((other) => {
-      if (other === own) return [];
-      const toLine = distanceToLine(label.seen, other.points);
-      const toOther = other.diamond ? distanceTo(label.seen, other.diamond) : Infinity;
-      if (label.leader)
-        return Math.min(toLine, toOther - 12 * k) < 13 * k
-          ? [`led label ${own.number} at ${other.number}`]
-          : [];
-      const out: string[] = [];
-      if (toLine < toOwn + 4 * k) out.push(`label ${own.number} is near line ${other.number}`);
-      if (own.diamond ? toOther < toMiddle + 4 * k : toOther < 25 * k)
-        out.push(`label ${own.number} is near diamond ${other.number}`);
-      return out;
+const labelsAreNearer =
+  (margin: number): Law =>
+  (scene) =>
+    openLabels(scene).flatMap((label) => {
+      const own = scene.lines.find((line) => line.stream === label.stream)!;
+      const k = scene.textScale;
+      const toMiddle = own.diamond ? distanceTo(label.seen, own.diamond) : Infinity;
+      const inner = 12 * k * Math.SQRT1_2;
+      const toOwn = Math.min(distanceToLine(label.seen, own.points), toMiddle - inner);
+      return scene.lines.flatMap((other) => {
+        if (other === own) return [];
+        const toLine = distanceToLine(label.seen, other.points);
+        const toOther = other.diamond ? distanceTo(label.seen, other.diamond) : Infinity;
+        if (label.leader)
+          return Math.min(toLine, toOther - 12 * k) < (9 + margin) * k
+            ? [`led label ${own.number} at ${other.number}`]
+            : [];
+        const out: string[] = [];
+        if (toLine < toOwn + margin * k) out.push(`label ${own.number} is near line ${other.number}`);
+        if (own.diamond ? toOther < toMiddle + margin * k : toOther < (21 + margin) * k)
+          out.push(`label ${own.number} is near diamond ${other.number}`);
+        return out;
+      });
     });
-  });
+
+export const labelsCoverNothing = labelsClear(5.9);
+export const labelsAreNearestToTheirOwn = labelsAreNearer(4);
 
 /** A leader line begins at its own diamond, ends at its label and meets nothing between. */
 export const leadersMeetNothing: Law = (scene) =>
@@ -343,4 +351,14 @@ export const LAWS: Readonly<Record<string, Law>> = {
   'tags, marks, remarks and duties cover nothing': textsCoverNothing,
   'labels, tags and diamonds keep off notes': notesStandFree,
   'what has no room is said': omittedIsSaid,
+};
+
+/**
+ * Between two steps of the text scale texts are drawn a little smaller than they were placed for, about the same points. Then
+ * the distances are a little smaller too, but nothing overlaps, and every label is nearest to its own stream still.
+ */
+export const LAWS_BETWEEN_STEPS: Readonly<Record<string, Law>> = {
+  ...LAWS,
+  'no label covers a symbol, line, diamond, text or another label': labelsClear(4),
+  'every label is nearest to its own stream, or joined to it by a leader line': labelsAreNearer(1),
 };
