@@ -48,11 +48,15 @@ function sayDamaged(stores: Stores, stored: StoredState, reasons: readonly strin
   ]);
 }
 
+/**
+ * What was open last. A browser that is ended at once may not have noted which sketch that was, though the sketch itself is
+ * written: then it is the one that was edited last.
+ */
 async function lastState(storage: SketchStorage): Promise<StoredState | undefined> {
+  const heads = await storage.list();
   const id = remembered();
-  if (!id) return undefined;
-  const isHere = (await storage.list()).some((head) => head.id === id);
-  return isHere ? storage.latest(id) : undefined;
+  const last = id === null ? heads[0] : heads.find((head) => head.id === id);
+  return last && storage.latest(last.id);
 }
 
 /** Opens storage softly: without it the page works, and the title bar says that nothing is kept. */

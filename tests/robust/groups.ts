@@ -24,3 +24,8 @@ export type Group = (seed: number, count: number, only?: number) => Promise<Grou
 
 /** One line a group. */
 export const GROUPS: Readonly<Record<string, Group>> = { flashes, columns, examples, drawings, files };
+
+/** Groups that drive a browser and take seconds a case: run only when named, and loaded only then. */
+export const SLOW_GROUPS: Readonly<Record<string, Group>> = {
+  kills: async (seed, count) => (await import('./kills')).kills(seed, count),
+};

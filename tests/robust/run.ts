@@ -1,7 +1,7 @@
 /** Random trials with a seed: `npm run robust -- [--what GROUP] [--seed N] [--count M] [--case K] [--json OUT]`. */
 import { writeFileSync } from 'node:fs';
 import { parseArgs } from 'node:util';
-import { GROUPS, type GroupReport } from './groups';
+import { GROUPS, type GroupReport, SLOW_GROUPS } from './groups';
 
 const { values } = parseArgs({
   options: {
@@ -26,9 +26,11 @@ async function main(): Promise<number> {
   const reports: Record<string, GroupReport & { seconds: number }> = {};
   let good = true;
   for (const name of names) {
-    const group = GROUPS[name];
+    const group = GROUPS[name] ?? SLOW_GROUPS[name];
     if (group === undefined) {
-      process.stderr.write(`no group "${name}"; there are: ${Object.keys(GROUPS).join(', ')}\n`);
+      process.stderr.write(
+        `no group "${name}"; there are: ${Object.keys({ ...GROUPS, ...SLOW_GROUPS }).join(', ')}\n`,
+      );
       return 2;
     }
     const start = performance.now();
