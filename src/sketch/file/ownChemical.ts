@@ -1,39 +1,24 @@
 import type { CorrForm } from '../../engine/chemicals/types';
+import { FEWEST as FEWEST_OF_USE, FORMS } from '../../engine/thermo/pure/usable';
 import { evidence, word } from '../findings';
 import { isObject, type JsonObject, own } from '../json';
 import type { Json } from '../types';
 import type { Problems } from './problem';
 import * as value from './value';
 
-/** Fewest coefficients that a form can do with: all up to the last that may not count as zero. */
-export const FEWEST: Readonly<Record<CorrForm, number>> = {
-  cp_nasa9: 1,
-  dippr101: 2,
-  wagner25: 6,
-  wagner36: 6,
-  dippr106: 6,
-  hvap_tau5: 6,
-  dippr105: 4,
-  rho_tau4: 6,
-  poly5: 1,
-  dippr114: 5,
-  dippr102: 1,
-  visc_exp2: 5,
-  visc_log3: 3,
-  sigma_sum3: 7,
-  sigma_som: 4,
-  powers: 1,
-  antoine: 3,
-  monatomic: 0,
-};
+/**
+ * Fewest coefficients that a row of a file may have. Of the NASA form a file may leave out more than makes sense: such files
+ * were always opened, and the row is judged when it is used.
+ */
+export const FEWEST: Readonly<Record<CorrForm, number>> = { ...FEWEST_OF_USE, cp_nasa9: 1 };
 
-/** The forms that can stand for a property. */
+/** The forms that can stand for a property, by its key in a file. */
 export const FORMS_OF = {
-  Cp: ['cp_nasa9', 'poly5', 'powers', 'monatomic'],
-  Psat: ['dippr101', 'wagner25', 'wagner36', 'antoine'],
-  Hvap: ['dippr106', 'hvap_tau5', 'poly5', 'powers'],
-  rhoL: ['dippr105', 'rho_tau4', 'poly5', 'powers'],
-  cpL: ['poly5', 'dippr114', 'powers'],
+  Cp: [...FORMS.ideal_gas_cp],
+  Psat: [...FORMS.vapor_pressure],
+  Hvap: [...FORMS.enthalpy_of_vaporization],
+  rhoL: [...FORMS.liquid_density],
+  cpL: [...FORMS.liquid_cp],
 } as const satisfies Record<string, readonly CorrForm[]>;
 
 const POSITIVE = ['MW', 'Tc', 'Pc', 'S0', 'vWilson', 'r', 'q'] as const;

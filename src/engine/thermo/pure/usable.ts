@@ -4,7 +4,7 @@ import { makeForm } from './forms';
 import { CP_FORMS } from './powers';
 
 /** Fewest coefficients that make sense of a form; those left out at the end count 0. */
-const FEWEST: Readonly<Record<CorrForm, number>> = {
+export const FEWEST: Readonly<Record<CorrForm, number>> = {
   cp_nasa9: 3,
   dippr101: 2,
   wagner25: 6,
@@ -39,12 +39,13 @@ const POSITIVE: Readonly<Partial<Record<CorrForm, readonly number[]>>> = {
   visc_exp2: [5],
 };
 
-const FORMS: Readonly<Record<CorrProperty, ReadonlySet<CorrForm>>> = {
+/** The forms that can stand for a property. */
+export const FORMS: Readonly<Record<CorrProperty, ReadonlySet<CorrForm>>> = {
   ideal_gas_cp: CP_FORMS,
   vapor_pressure: new Set(['dippr101', 'wagner25', 'wagner36', 'antoine']),
   enthalpy_of_vaporization: new Set(['dippr106', 'hvap_tau5', 'poly5', 'powers']),
   liquid_density: new Set(['dippr105', 'rho_tau4', 'poly5', 'powers']),
-  liquid_cp: new Set(['poly5', 'powers', 'dippr114']),
+  liquid_cp: new Set(['poly5', 'dippr114', 'powers']),
   liquid_viscosity: new Set(['dippr101', 'visc_exp2', 'visc_log3', 'poly5', 'powers']),
   gas_viscosity: new Set(['dippr102', 'poly5', 'powers']),
   liquid_conductivity: new Set(['poly5', 'powers']),
