@@ -3,7 +3,7 @@ import { useStores } from '../store/react';
 import { capital, kindWord } from '../wording';
 import { offeredKinds, takeOffer } from './pull';
 import { ShelfIcon } from './ShelfIcon';
-import { useSheet, useSheetStore } from './sheetStore';
+import { type Offer, useSheet, useSheetStore } from './sheetStore';
 
 const PAUSE_MS = 900;
 
@@ -16,7 +16,7 @@ export function OfferMenu({
   const stores = useStores();
   const sheet = useSheetStore();
   const offer = useSheet((state) => state.offer);
-  const typed = useRef({ text: '', at: 0 });
+  const typed = useRef<{ text: string; at: number; offer: Offer | null }>({ text: '', at: 0, offer: null });
   if (!offer) return null;
   const { x, y } = toScreen(offer.at);
   const kinds = offeredKinds(offer.from.dir);
@@ -24,8 +24,9 @@ export function OfferMenu({
   /** Letters choose by the word they begin; a pause begins another word. */
   const find = (from: Element, letter: string): void => {
     const now = Date.now();
-    const text = now - typed.current.at > PAUSE_MS ? letter : typed.current.text + letter;
-    typed.current = { text, at: now };
+    const goesOn = typed.current.offer === offer && now - typed.current.at <= PAUSE_MS;
+    const text = goesOn ? typed.current.text + letter : letter;
+    typed.current = { text, at: now, offer };
     const items = [...from.querySelectorAll<HTMLElement>('[role=menuitem]')];
     items.find((item) => item.textContent?.toLowerCase().startsWith(text))?.focus();
   };
