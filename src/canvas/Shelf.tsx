@@ -36,13 +36,19 @@ const matches = (query: string): boolean =>
   typeof window.matchMedia === 'function' &&
   window.matchMedia(query).matches;
 
+/** Beside a wide drawer the shelf shows symbols alone, so that the sheet keeps at least so much [px]. */
+const SHEET_AND_SHELF = 1040;
+
 /** What can be put on the sheet: dragged there, or by a click or Enter beside what is selected. */
 export function Shelf() {
   const stores = useStores();
   const narrow = useNarrow();
   const foldedByHand = useSession((state) => state.shelfFolded);
   const writable = useSketch((state) => state.writable);
-  const folded = narrow || foldedByHand;
+  const isTight = useSession(
+    ({ drawerPx }) => drawerPx > 0 && window.innerWidth - drawerPx < SHEET_AND_SHELF,
+  );
+  const folded = narrow || foldedByHand || isTight;
   const [typed, setTyped] = useState('');
   const [ghost, setGhost] = useState<Ghost | null>(null);
   const groups = shelfGroups(folded ? '' : typed);

@@ -1,4 +1,4 @@
-import { useEffect, useRef } from 'react';
+import { useEffect, useLayoutEffect, useRef } from 'react';
 import { useSession, useSketch, useStores } from '../store/react';
 import type { DrawerChoice } from '../store/session';
 import { AssumptionsDrawer } from './AssumptionsDrawer';
@@ -61,6 +61,7 @@ function useEntering() {
 
 /** The place at the side: one drawer at a time, folded away when there is none. */
 export function DrawerHost() {
+  const { session } = useStores();
   const drawer = useSession((state) => state.drawer);
   // A unit or stream that has gone (deleted, undone, another sketch) takes its drawer with it.
   const isThere = useSketch((state) => {
@@ -75,6 +76,8 @@ export function DrawerHost() {
   const width = useDrawerWidth(own?.width);
   const { root, onFocus, leave } = useEntering();
   const key = drawer ? `${drawer.is} ${'id' in drawer ? drawer.id : ''}` : '';
+  const drawerPx = drawer && isThere ? width.px : 0;
+  useLayoutEffect(() => session.setState({ drawerPx }), [session, drawerPx]);
   if (!drawer || !isThere) return null;
   return (
     <aside

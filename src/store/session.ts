@@ -38,6 +38,8 @@ export interface SessionState {
   readonly drawer: DrawerChoice | null;
   /** Counts how often the keyboard was sent into the drawer. */
   readonly drawerEntered: number;
+  /** Width that the open drawer takes from the sheet [px]; 0 while none is open. */
+  readonly drawerPx: number;
   /** Pointed at in another part of the screen: drawn as if selected, for as long as that lasts. */
   readonly pointed: Thing | null;
   /** What the sheet was last asked to bring to its middle; the key tells one asking from the next. */
@@ -80,6 +82,7 @@ export function createSession() {
     notes: [],
     drawer: null,
     drawerEntered: 0,
+    drawerPx: 0,
     pointed: null,
     centred: null,
     zones: new Map(),
