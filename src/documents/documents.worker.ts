@@ -7,6 +7,9 @@ interface Scope {
 }
 const scope = globalThis as unknown as Scope;
 
+/** The page is told of progress in steps of this share; every single line written would keep it busy. */
+const STEP = 0.04;
+
 /** Entry of the documents' worker: one order at a time, nothing of the page. */
 scope.onmessage = async ({ data }) => {
   if (data.say === 'wake') {
@@ -15,10 +18,14 @@ scope.onmessage = async ({ data }) => {
     return;
   }
   const { job, order } = data;
+  let told = { doing: '', share: 0 };
+  const progress = (doing: string, share: number): void => {
+    if (doing === told.doing && share - told.share < STEP) return;
+    told = { doing, share };
+    scope.postMessage({ say: 'progress', job, doing, share });
+  };
   try {
-    const made = await makeDocument(order, (doing, share) =>
-      scope.postMessage({ say: 'progress', job, doing, share }),
-    );
+    const made = await makeDocument(order, progress);
     scope.postMessage({ say: 'made', job, ...made }, [made.bytes.buffer]);
   } catch (error) {
     scope.postMessage({

@@ -1,3 +1,4 @@
+import { memo, useMemo } from 'react';
 import { Disclosure } from '../../parts/Disclosure';
 import { Segmented } from '../../parts/Segmented';
 import type { ReportInput } from '../../report/input';
@@ -13,7 +14,7 @@ interface Option {
 }
 
 /** Paper, sections, rows and streams of the documents; saved with the sketch, each change one step of undo. */
-export function Choices({ input }: { readonly input: ReportInput }) {
+export const Choices = memo(function Choices({ input }: { readonly input: ReportInput }) {
   const { sketch: store } = useStores();
   const sketch = useSketch((state) => state.sketch);
   const disabled = useSketch((state) => !state.writable);
@@ -22,7 +23,8 @@ export function Choices({ input }: { readonly input: ReportInput }) {
     const edit = setDocuments(store.getState().sketch, next);
     if (edit.ok) store.apply(edit.label, () => edit.sketch);
   };
-  const rows = rowChoices({ ...input, sketch });
+  // Which rows there are hangs on the results, not on what is chosen.
+  const rows = useMemo(() => rowChoices(input), [input]);
   const streams = sketch.streams.map((s) => ({
     key: s.id,
     text: `${s.number}${s.name ? ` ${s.name}` : ''}`,
@@ -62,7 +64,7 @@ export function Choices({ input }: { readonly input: ReportInput }) {
       ))}
     </>
   );
-}
+});
 
 function Checks(props: {
   readonly field: string;
