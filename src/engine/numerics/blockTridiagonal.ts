@@ -36,17 +36,42 @@ export function factorBlock(
     const f1 = a[next + k]!;
     for (let c = k + 2; c < w; c++) a[next + c]! -= f1 * a[top + c]!;
     const inv1 = 1 / a[next + k + 1]!;
-    for (let i = k + 2; i < n; i++) {
-      const row = at + i * w;
-      const g0 = a[row + k]!;
-      const g1 = a[row + k + 1]! * inv1;
-      a[row + k + 1] = g1;
-      for (let c = k + 2; c < w; c++) a[row + c] = a[row + c]! - g0 * a[top + c]! - g1 * a[next + c]!;
-    }
+    trailing(a, at, n, k, inv1);
   }
   if (k < n && !bringPivot(a, at, n, k, pivot, pivotAt)) return false;
   backSubstitute(a, at, n);
   return true;
+}
+
+/** Takes pivot rows k and k + 1 from the rows below, two a pass: each entry of the pivot rows is read once for both. */
+function trailing(a: Float64Array, at: number, n: number, k: number, inv1: number): void {
+  const w = 2 * n;
+  const top = at + k * w;
+  const next = top + w;
+  let i = k + 2;
+  for (; i + 1 < n; i += 2) {
+    const row = at + i * w;
+    const below = row + w;
+    const g0 = a[row + k]!;
+    const h0 = a[below + k]!;
+    const g1 = a[row + k + 1]! * inv1;
+    const h1 = a[below + k + 1]! * inv1;
+    a[row + k + 1] = g1;
+    a[below + k + 1] = h1;
+    for (let c = k + 2; c < w; c++) {
+      const p = a[top + c]!;
+      const q = a[next + c]!;
+      a[row + c] = a[row + c]! - g0 * p - g1 * q;
+      a[below + c] = a[below + c]! - h0 * p - h1 * q;
+    }
+  }
+  if (i < n) {
+    const row = at + i * w;
+    const g0 = a[row + k]!;
+    const g1 = a[row + k + 1]! * inv1;
+    a[row + k + 1] = g1;
+    for (let c = k + 2; c < w; c++) a[row + c] = a[row + c]! - g0 * a[top + c]! - g1 * a[next + c]!;
+  }
 }
 
 /** Brings the largest entry of column k, from row k down, to row k. */
@@ -142,7 +167,7 @@ export function solveBlock(
  * @param A    p x q, rows of length q from aAt on
  * @param B    q x m, rows of length bStride from bAt on
  * @param out  p x m, rows of length outStride from outAt on
- * Four rows of B a pass, so that each entry of C is read and written once for eight operations.
+ * Four rows of B and two of A a pass: each entry of C is read and written once for eight operations, each of B read once for two rows.
  */
 export function addProduct(
   factor: number,
@@ -158,26 +183,89 @@ export function addProduct(
   outAt: number,
   outStride: number,
 ): void {
-  for (let i = 0; i < p; i++) {
-    const ai = aAt + i * q;
-    const oi = outAt + i * outStride;
-    let k = 0;
-    for (; k + 3 < q; k += 4) {
-      const f0 = factor * A[ai + k]!;
-      const f1 = factor * A[ai + k + 1]!;
-      const f2 = factor * A[ai + k + 2]!;
-      const f3 = factor * A[ai + k + 3]!;
-      const b0 = bAt + k * bStride;
-      const b1 = b0 + bStride;
-      const b2 = b1 + bStride;
-      const b3 = b2 + bStride;
-      for (let c = 0; c < m; c++)
-        out[oi + c] = out[oi + c]! + f0 * B[b0 + c]! + f1 * B[b1 + c]! + f2 * B[b2 + c]! + f3 * B[b3 + c]!;
+  let i = 0;
+  for (; i + 1 < p; i += 2)
+    addTwoRows(factor, A, aAt + i * q, q, B, bAt, bStride, m, out, outAt + i * outStride, outStride);
+  if (i < p) addRow(factor, A, aAt + i * q, q, B, bAt, bStride, m, out, outAt + i * outStride);
+}
+
+function addTwoRows(
+  factor: number,
+  A: Float64Array,
+  ai: number,
+  q: number,
+  B: Float64Array,
+  bAt: number,
+  bStride: number,
+  m: number,
+  out: Float64Array,
+  oi: number,
+  outStride: number,
+): void {
+  const aj = ai + q;
+  const oj = oi + outStride;
+  let k = 0;
+  for (; k + 3 < q; k += 4) {
+    const f0 = factor * A[ai + k]!;
+    const f1 = factor * A[ai + k + 1]!;
+    const f2 = factor * A[ai + k + 2]!;
+    const f3 = factor * A[ai + k + 3]!;
+    const g0 = factor * A[aj + k]!;
+    const g1 = factor * A[aj + k + 1]!;
+    const g2 = factor * A[aj + k + 2]!;
+    const g3 = factor * A[aj + k + 3]!;
+    const b0 = bAt + k * bStride;
+    const b1 = b0 + bStride;
+    const b2 = b1 + bStride;
+    const b3 = b2 + bStride;
+    for (let c = 0; c < m; c++) {
+      const p0 = B[b0 + c]!;
+      const p1 = B[b1 + c]!;
+      const p2 = B[b2 + c]!;
+      const p3 = B[b3 + c]!;
+      out[oi + c] = out[oi + c]! + f0 * p0 + f1 * p1 + f2 * p2 + f3 * p3;
+      out[oj + c] = out[oj + c]! + g0 * p0 + g1 * p1 + g2 * p2 + g3 * p3;
     }
-    for (; k < q; k++) {
-      const f = factor * A[ai + k]!;
-      const b0 = bAt + k * bStride;
-      for (let c = 0; c < m; c++) out[oi + c]! += f * B[b0 + c]!;
+  }
+  for (; k < q; k++) {
+    const f = factor * A[ai + k]!;
+    const g = factor * A[aj + k]!;
+    const b0 = bAt + k * bStride;
+    for (let c = 0; c < m; c++) {
+      out[oi + c]! += f * B[b0 + c]!;
+      out[oj + c]! += g * B[b0 + c]!;
     }
+  }
+}
+
+function addRow(
+  factor: number,
+  A: Float64Array,
+  ai: number,
+  q: number,
+  B: Float64Array,
+  bAt: number,
+  bStride: number,
+  m: number,
+  out: Float64Array,
+  oi: number,
+): void {
+  let k = 0;
+  for (; k + 3 < q; k += 4) {
+    const f0 = factor * A[ai + k]!;
+    const f1 = factor * A[ai + k + 1]!;
+    const f2 = factor * A[ai + k + 2]!;
+    const f3 = factor * A[ai + k + 3]!;
+    const b0 = bAt + k * bStride;
+    const b1 = b0 + bStride;
+    const b2 = b1 + bStride;
+    const b3 = b2 + bStride;
+    for (let c = 0; c < m; c++)
+      out[oi + c] = out[oi + c]! + f0 * B[b0 + c]! + f1 * B[b1 + c]! + f2 * B[b2 + c]! + f3 * B[b3 + c]!;
+  }
+  for (; k < q; k++) {
+    const f = factor * A[ai + k]!;
+    const b0 = bAt + k * bStride;
+    for (let c = 0; c < m; c++) out[oi + c]! += f * B[b0 + c]!;
   }
 }
