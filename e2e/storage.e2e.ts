@@ -29,7 +29,7 @@ test('a full store is said at once, the edit stays, and saving goes on when ther
   });
   await setPressure(page, '7.5 bar', '7.500');
   await expect(saved(page)).toHaveAttribute('data-state', 'failed');
-  await expect(saved(page)).toHaveText('Not saved on this computer');
+  await expect(saved(page)).toHaveText('Not saved');
   await expect(page.locator('.notice')).toContainText('no room left');
   // The next step is at hand, and what it gives is the sketch as it stands.
   const download = page.waitForEvent('download');
@@ -69,7 +69,7 @@ bare('denied storage is said at once, and the page works and saves files', async
     Object.defineProperty(window, 'sessionStorage', denied);
   });
   await page.goto('./');
-  await expect(saved(page)).toHaveText('Not saved on this computer');
+  await expect(saved(page)).toHaveText('Not saved');
   await expect(page.locator('.notice')).toContainText('Nothing is kept on this computer');
   await page.locator('.notice').getByRole('button', { name: 'Close' }).click();
   await openExample(page);

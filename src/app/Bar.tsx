@@ -6,7 +6,7 @@ import { useResults, useSession, useSketch, useStores } from '../store/react';
 const savedText = {
   saved: 'Saved on this computer',
   saving: 'Saving',
-  failed: 'Not saved on this computer',
+  failed: 'Not saved',
   'read-only': 'Read only: open in another tab',
   unknown: '',
 } as const;
