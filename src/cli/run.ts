@@ -70,14 +70,14 @@ async function runFile(file: string, orders: Orders, voice: Voice): Promise<Exit
 }
 
 function readSketch(file: string, orders: Orders, voice: Voice): Sketch | undefined {
-  let text: string;
+  let bytes: Uint8Array;
   try {
-    text = readFileSync(file, 'utf8');
+    bytes = readFileSync(file);
   } catch (error) {
     voice.err(`${file}: ${error instanceof Error ? error.message : String(error)}`);
     return undefined;
   }
-  const opened = openSketch(text);
+  const opened = openSketch(bytes);
   if (!opened.ok) {
     for (const problem of opened.problems) voice.err(`${file}: ${sayFileProblem(problem)}`);
     return undefined;
