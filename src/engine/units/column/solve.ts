@@ -87,7 +87,12 @@ function reason(
     dim: 'number',
     text: typeof stage === 'number' ? `stage ${stage}` : stage,
   };
-  const tried: Evidence[] = effort.tried.map((text) => ({ name: 'tried', value: 0, dim: 'number', text }));
+  const tried: Evidence[] = [...new Set(effort.tried)].map((text) => ({
+    name: 'tried',
+    value: 0,
+    dim: 'number',
+    text,
+  }));
   const at = typeof stage === 'number' ? { stage } : {};
   const steps = evidence('iterations', effort.iterations);
   const code = CODES[failure.why];
