@@ -6,7 +6,7 @@ import { orderByVolume } from './settle';
 import { placeFlows, sameness } from './split';
 import { liquidLike, setPlane } from './stability';
 import { hiddenLiquid } from './starts';
-import { flashTP, type StartK } from './tp';
+import { flashTP, provedSplit, type StartK } from './tp';
 import { type Caloric, closeEnough, LEAST_T_K, MOST_T_K, rounding, wholeOf } from './whole';
 import type { FlashWork } from './work';
 
@@ -16,6 +16,11 @@ export type SearchEnd = 'solved' | 'no-convergence' | 'out-of-range' | 'between-
 const JUMP = 1e-8;
 const PASSES = 80;
 const GOLDEN = 0.618;
+/**
+ * So many passes, and only before the answer is bracketed, look for the single phase's temperature before they test its stability:
+ * a jump is closed in on by states that are known to be stable.
+ */
+const EARLY = 6;
 
 /**
  * Phases of z at given pressure and molar enthalpy or entropy. Both rise with temperature at constant pressure, so a
@@ -39,7 +44,6 @@ export function flashCaloric(
   let low = LEAST_T_K;
   let high = MOST_T_K;
   let T = T0 > low && T0 < high ? T0 : 300;
-  let start = from;
   let iterations = 0;
   let missed = 0;
   let belowT = 0;
@@ -47,10 +51,25 @@ export function flashCaloric(
   let aboveT = 0;
   let aboveMiss = 0;
   let lastT = 0;
+  /** T is where the single phase has the property. */
+  let tuned = false;
   for (let pass = 0; pass < PASSES; pass++) {
-    const ok = flashTP(w, z, T, P, start);
-    iterations += w.iterations;
-    start = 'nothing';
+    let ok: boolean | undefined;
+    if (pass < EARLY && !tuned && !(belowT > 0 && aboveT > 0)) {
+      ok = provedSplit(w, z, T, P, pass === 0 ? from : 'nothing');
+      const likely = ok === undefined ? likelyT(w, P, target, of, T, low, high) : Number.NaN;
+      iterations += w.iterations;
+      if (likely > 0) {
+        ok = flashTP(w, z, likely, P, 'nothing');
+        iterations += w.iterations;
+        if (ok) T = likely;
+      }
+    }
+    tuned = false;
+    if (ok !== true) {
+      ok = flashTP(w, z, T, P, 'nothing');
+      iterations += w.iterations;
+    }
     if (!ok) {
       // A state that does not settle (at a critical point, or where three phases meet) is stepped round.
       if (++missed > 8) {
@@ -97,7 +116,10 @@ export function flashCaloric(
       iterations += w.iterations;
       if (end === 'equal' && staysTwoLiquids(w, w.T_K, P)) return done(w, iterations);
       next = end === 'going' ? Number.NaN : w.T_K;
-    } else next = singleT(w, P, target, of, T, low, high);
+    } else {
+      next = singleT(w, P, target, of, T, low, high);
+      tuned = next > low && next < high;
+    }
 
     if (belowT > 0 && aboveT > 0) {
       if (high - low < JUMP * high) {
@@ -156,6 +178,33 @@ function isAnswer(w: FlashWork, P: number, hiddenBefore: boolean): boolean {
   // A second liquid that was not there at the start: the stable state may have no vapour; ask again from nothing.
   return !hidden || hiddenBefore;
 }
+
+/**
+ * Where to look after a start at which no split was proved: the temperature at which the single phase in w.feed has the property,
+ * whether it is stable or not; NaN if that leads nowhere. The stability test, which costs most, is then made there and not at the
+ * start. Far from there only a vapour that is heated is still a phase: a liquid may part or boil, a vapour condense.
+ */
+function likelyT(
+  w: FlashWork,
+  P: number,
+  target: number,
+  of: Caloric,
+  T: number,
+  low: number,
+  high: number,
+): number {
+  const { model, feed } = w;
+  model.evaluate('stable', T, P, feed.x, 2, feed.props);
+  w.iterations++;
+  const vapour = feed.props.side === 'vapour';
+  const found = singleT(w, P, target, of, T, low, high);
+  const most = vapour ? 0.999 * MOST_T_K : (1 + FAR) * T;
+  const inside = found > Math.max(low, (1 - FAR) * T) && found < Math.min(high, most);
+  return inside ? found : Number.NaN;
+}
+
+/** Change of temperature over which a single phase is followed, unless it is a heated vapour [-]. */
+const FAR = 0.2;
 
 /** Temperature at which the single phase of the feed, on its present root, has the property [K]; NaN if not found. */
 function singleT(

@@ -77,7 +77,19 @@ function approach(w: FlashWork, z: Float64Array, T: number, P: number): boolean 
   return false;
 }
 
-function flashHere(w: FlashWork, z: Float64Array, T: number, P: number, from: StartK): boolean {
+/**
+ * The cheap half of flashTP: a split from start values, kept where its Gibbs energy proves it.
+ *
+ * @returns as flashTP; undefined when no split was proved, which says nothing of the feed's stability. Then w.feed holds the single
+ *          phase (level 0) and w.d its plane
+ */
+export function provedSplit(
+  w: FlashWork,
+  z: Float64Array,
+  T: number,
+  P: number,
+  from: StartK,
+): boolean | undefined {
   const { model, n, feed, K, lnK } = w;
   w.T_K = T;
   w.P_Pa = P;
@@ -105,20 +117,23 @@ function flashHere(w: FlashWork, z: Float64Array, T: number, P: number, from: St
   } else {
     for (let i = 0; i < n; i++) K[i] = Math.exp(lnK[i]!);
   }
-  let end: SplitEnd = substitute(w, z, T, P, from === 'K' ? 1 : 3, CALM);
-  if (end === 'going') {
-    // Warm, the split is proved once it has settled; cold, it must already lie below the single phase to be pursued.
-    if (from === 'K' || gibbsAgainstPlane(w) < GAIN) {
-      end = settle(w, z, T, P);
-      if (end === 'equal' && gibbsAgainstPlane(w) < 1e-13) return finishTwo(w, z, T, P);
-    }
-  }
+  if (substitute(w, z, T, P, from === 'K' ? 1 : 3, CALM) !== 'going') return undefined;
+  // Warm, the split is proved once it has settled; cold, it must already lie below the single phase to be pursued.
+  if (from !== 'K' && !(gibbsAgainstPlane(w) < GAIN)) return undefined;
+  if (settle(w, z, T, P) !== 'equal' || !(gibbsAgainstPlane(w) < 1e-13)) return undefined;
+  return finishTwo(w, z, T, P);
+}
+
+function flashHere(w: FlashWork, z: Float64Array, T: number, P: number, from: StartK): boolean {
+  const proved = provedSplit(w, z, T, P, from);
+  if (proved !== undefined) return proved;
+  const { model, feed } = w;
   model.evaluate('stable', T, P, feed.x, 2, feed.props);
   w.iterations++;
   if (!isUnstable(w, T, P)) return finishOne(w);
   const light = startFromTrial(w, z, T, P);
   if (light === undefined) return finishOne(w);
-  end = settle(w, z, T, P);
+  const end = settle(w, z, T, P);
   if (end === 'equal') return finishTwo(w, z, T, P);
   return end === 'trivial' ? finishOne(w) : false;
 }
