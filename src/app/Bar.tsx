@@ -106,6 +106,7 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
         Redo
       </button>
       <MenuButton
+        short
         word="Edit"
         actions={actions.filter((action) => action.group === 'edit' && !DIRECT.has(action.id))}
       />
@@ -133,8 +134,17 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
 /** Undo and redo stand in the bar themselves. */
 const DIRECT: ReadonlySet<string> = new Set(['undo', 'redo']);
 
-function MenuButton({ word, actions }: { readonly word: string; readonly actions: readonly Action[] }) {
+interface MenuButtonProps {
+  readonly word: string;
+  readonly actions: readonly Action[];
+  /** Only what can be done now: a long list would not fit a small screen. */
+  readonly short?: true;
+}
+
+function MenuButton({ word, actions, short }: MenuButtonProps) {
+  const stores = useStores();
   const [open, setOpen] = useState(false);
+  const ready = (action: Action): boolean => action.when?.(stores) ?? true;
   return (
     <div className="menu-holder">
       <button
@@ -146,7 +156,9 @@ function MenuButton({ word, actions }: { readonly word: string; readonly actions
       >
         {word}
       </button>
-      {open ? <Menu word={word} actions={actions} close={() => setOpen(false)} /> : null}
+      {open ? (
+        <Menu word={word} actions={short ? actions.filter(ready) : actions} close={() => setOpen(false)} />
+      ) : null}
     </div>
   );
 }

@@ -44,7 +44,7 @@ export const arrangeActions: readonly Action[] = [
   },
   {
     id: 'arrange-selected',
-    label: 'Arrange what is selected, keep the rest',
+    label: 'Arrange only what is selected',
     group: 'edit',
     keys: ['Shift+S'],
     when: (stores) => isReady(stores) && stores.session.getState().units.length > 0,
