@@ -43,6 +43,13 @@ test('a full store is said at once, the edit stays, and saving goes on when ther
   await expect(page.locator('.notice')).toContainText('It would be lost');
   await expect(unit(page, 'PV-1')).toBeVisible();
   await page.locator('.notice').getByRole('button', { name: 'Close' }).click();
+  // Nor is the page closed without a question.
+  const asked = page.waitForEvent('dialog');
+  await page.evaluate(() => setTimeout(() => location.reload(), 0));
+  const question = await asked;
+  expect(question.type()).toBe('beforeunload');
+  await question.dismiss();
+  await expect(unit(page, 'PV-1')).toBeVisible();
   // Room again: the next edit is saved with all before it.
   await page.evaluate(() => Object.assign(window, { room: true }));
   await setPressure(page, '5.5 bar', '5.500');

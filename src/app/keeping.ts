@@ -12,7 +12,8 @@ const ELSEWHERE = 'Another tab is editing this sketch.';
 const DETAIL = {
   'newer-elsewhere':
     'Another tab has saved a newer state of this sketch. Go on with yours as a copy, or save it as a file.',
-  'storage-full': 'The browser has no room left. Save the sketch as a file now.',
+  'storage-full':
+    'The browser has no room left. Save the sketch as a file now; sketches that are deleted for good make room.',
   'storage-denied': 'The browser does not let this page store anything. Save the sketch as a file.',
 } as const;
 
