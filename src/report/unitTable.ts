@@ -1,4 +1,5 @@
-import { show } from '../quantity';
+import type { UnitResult } from '../engine/network/types';
+import { type Measures, show } from '../quantity';
 import type { SketchUnit } from '../sketch/types';
 import { fixedByText, kindWord, stagesText, stateWord } from '../wording';
 import { left, text } from './cells';
@@ -30,7 +31,9 @@ export function unitTable(input: ReportInput): Table {
             text(unit.name ?? ''),
             text(stateWord(result?.state ?? 'waiting')),
             text(
-              [columnText(input, unit), resultText(input, unit, result?.results)].filter(Boolean).join('; '),
+              [columnText(input, unit), heatText(input, result), resultText(input, unit, result?.results)]
+                .filter(Boolean)
+                .join('; '),
             ),
           ],
         };
@@ -49,6 +52,20 @@ function columnText(input: ReportInput, unit: SketchUnit): string {
   return `${stagesText(unit.settings)}; fixed by ${fixed || 'feeds, stages and pressures alone'}`;
 }
 
+const isDuty = (key: string): boolean => /duty_W$/i.test(key);
+
+/** The heat of a unit whose kind reports no duty of its own. */
+function heatText(input: ReportInput, result: UnitResult | undefined): string {
+  if (result?.state !== 'solved' || !result.heat_W || Object.keys(result.results ?? {}).some(isDuty))
+    return '';
+  return heatWords('duty', result.heat_W, measuresOf(input));
+}
+
+function heatWords(label: string, heat_W: number, measures: Measures): string {
+  const { number: figure, unit } = show(Math.abs(heat_W), 'power', measures);
+  return `${label}${heat_W === 0 ? '' : `, ${heat_W < 0 ? 'removed' : 'added'}`} ${figure} ${unit}`;
+}
+
 /** "condenser duty, removed 540.6 kW": heat by its size, its direction in a word. */
 function resultText(
   input: ReportInput,
@@ -61,10 +78,9 @@ function resultText(
     .flatMap(([key, value]) => {
       const word = resultWord(unit.kind, key, input.kinds);
       if (!word || typeof value !== 'number') return [];
-      const isHeat = /duty_W$/i.test(key);
-      const { number: figure, unit: label } = show(isHeat ? Math.abs(value) : value, word.dim, measures);
-      const way = isHeat && value !== 0 ? `, ${value < 0 ? 'removed' : 'added'}` : '';
-      return [`${word.label}${way} ${figure}${label ? ` ${label}` : ''}`];
+      if (isDuty(key)) return [heatWords(word.label, value, measures)];
+      const { number: figure, unit: label } = show(value, word.dim, measures);
+      return [`${word.label} ${figure}${label ? ` ${label}` : ''}`];
     })
     .join('; ');
 }
