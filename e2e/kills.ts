@@ -65,7 +65,7 @@ export async function killed(folder: string, address: string, { first, seed, by 
   let { context, page } = await launch(folder);
   try {
     await open(page, address, first);
-    const start = first ? 3 : Math.round((await valueShown(page)) * 100) / 100;
+    const start = Math.round((await valueShown(page)) * 100) / 100;
     const pressureOf = (edit: number): number => Math.round((start + edit * 0.01) * 100) / 100;
     let begun = 0;
     let made = 0;
