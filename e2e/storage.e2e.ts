@@ -167,6 +167,14 @@ test('a file dragged onto the page opens; a damaged one is refused with its plac
   // The same sketch in another state becomes one of its own; the first keeps its place on the list.
   await drop('older.sketch.json', example.replace('"Let-down"', '"Let-down as it was"'));
   await expect(notice).toContainText('opened as a sketch of its own');
-  await page.keyboard.press('Control+Shift+o');
-  await expect(page.locator('[data-sketch]')).toHaveCount(2);
+  await expect
+    .poll(async () => {
+      // The list is read when it opens; the new sketch may be on its way there.
+      await page.keyboard.press('Control+Shift+o');
+      await expect(page.locator('[data-sketch]').first()).toBeVisible();
+      const count = await page.locator('[data-sketch]').count();
+      await page.keyboard.press('Escape');
+      return count;
+    })
+    .toBe(2);
 });
