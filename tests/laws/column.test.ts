@@ -192,6 +192,23 @@ describe('a column as a whole', () => {
     }
   });
 
+  // Derived: the model at the products' own temperatures, pressures and compositions.
+  test.each(cases)('gives each product the properties of its own state: %s', (_, s, a) => {
+    for (const stream of Object.values(a.out))
+      for (const { kind, x, cp_J_molK, v_m3_mol, h_J_mol } of stream.phases) {
+        const there = Array.from(x.keys()).filter((i) => x[i]! > 0);
+        const model = s.model.of(there);
+        const props = model.makeProps();
+        if (kind !== 'vapour' && kind !== 'liquid')
+          throw new Error('a product of a column is a vapour or a liquid');
+        const here = Float64Array.from(there, (i) => x[i]!);
+        model.evaluate(kind, stream.T_K, stream.P_Pa, here, 2, props);
+        expect(Math.abs(cp_J_molK / props.cp_J_molK - 1)).toBeLessThan(1e-9);
+        expect(Math.abs(v_m3_mol / props.v_m3_mol - 1)).toBeLessThan(1e-9);
+        expect(Math.abs(h_J_mol - props.h_J_mol)).toBeLessThan(1e-6);
+      }
+  });
+
   test.each(cases)('ends where it was asked to: %s', (_, s, a) => {
     const { results: r, out } = a;
     const sum = (port: string, mass: boolean): number =>

@@ -20,6 +20,7 @@ export interface Outlets {
 interface Leaving {
   readonly port: Port;
   readonly n: Float64Array;
+  readonly place: number;
   readonly props: PhaseProps;
   readonly kind: 'vapour' | 'liquid';
   readonly T_K: number;
@@ -35,10 +36,11 @@ function leavingOf(call: Call<ColumnSettings>, job: ColumnJob, s: StageSystem): 
     return Float64Array.from({ length: s.n }, (_, i) => flow.at(i));
   };
   const liquidTop = s.totalCondenser;
-  return [
+  const leaving: Leaving[] = [
     {
       port: topPort(call.settings),
       n: flows('top'),
+      place: 0,
       props: liquidTop ? s.reflux : s.vap[0]!,
       kind: liquidTop ? 'liquid' : 'vapour',
       T_K: s.T[0]! - (liquidTop ? subcooling_K : 0),
@@ -47,6 +49,7 @@ function leavingOf(call: Call<ColumnSettings>, job: ColumnJob, s: StageSystem): 
     {
       port: 'bottoms',
       n: flows('bottoms'),
+      place: foot,
       props: s.liq[foot]!,
       kind: 'liquid',
       T_K: s.T[foot]!,
@@ -55,12 +58,23 @@ function leavingOf(call: Call<ColumnSettings>, job: ColumnJob, s: StageSystem): 
     ...draws.map((d, k) => ({
       port: job.drawPorts[k]!,
       n: flows(k),
+      place: d.place,
       props: (d.phase === 'liquid' ? s.liq : s.vap)[d.place]!,
       kind: d.phase,
       T_K: s.T[d.place]!,
       P_Pa: P_Pa[d.place]!,
     })),
   ];
+  for (const l of leaving) withHeatCapacity(s, l);
+  return leaving;
+}
+
+/** The last step of a solve takes no derivatives: heat capacities in the system are those of a state before its answer. */
+function withHeatCapacity(s: StageSystem, { place, kind, props, T_K, P_Pa }: Leaving): void {
+  const [flows, total] = kind === 'liquid' ? [s.l, s.L[place]!] : [s.v, s.V[place]!];
+  const x = s.scratch;
+  for (let i = 0; i < s.n; i++) x[i] = flows[place * s.n + i]! / total;
+  s.model.evaluate(kind, T_K, P_Pa, x, 2, props);
 }
 
 /**
