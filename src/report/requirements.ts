@@ -36,7 +36,7 @@ export function judged(input: JudgeInput, requirement: Requirement): Judged {
   const stream = solvedStream(input.streams.get(requirement.stream));
   if (!stream) return { is: 'open', why: 'the stream is not solved' };
   const value = resultOf(input, requirement, stream);
-  if (value === undefined) return { is: 'open', why: 'the component is not in the sketch' };
+  if (typeof value === 'string') return { is: 'open', why: value };
   const min = limitOf(input, requirement, requirement.min);
   const max = limitOf(input, requirement, requirement.max);
   if (min === 'unreadable' || max === 'unreadable') return { is: 'open', why: 'the limit cannot be read' };
@@ -57,25 +57,23 @@ function limitOf(
   return read.ok ? read.si : 'unreadable';
 }
 
-function resultOf(input: JudgeInput, requirement: Requirement, stream: SolvedStream): number | undefined {
+/** Fractions are of what flows. */
+const PER_FLOW: ReadonlySet<RequirementKind> = new Set(['fraction', 'vapourFraction']);
+const UNKNOWN = 'the component is not in the sketch';
+
+/** What the stream has of it, or why that cannot be told. */
+function resultOf(input: JudgeInput, requirement: Requirement, stream: SolvedStream): number | string {
+  const { of } = requirement;
+  if (PER_FLOW.has(of) && stream.n_mol_s === 0) return 'nothing flows in the stream';
   const at = input.basis.chemicals.findIndex((chemical) => chemical.id === requirement.chemical);
   const z = stream.z[at];
-  switch (requirement.of) {
+  switch (of) {
     case 'fraction': {
-      if (z === undefined) return undefined;
-      return requirement.basis === 'mass'
-        ? (z * (input.basis.chemicals[at]?.MW_g_mol ?? Number.NaN)) / stream.MW_g_mol
-        : z;
+      if (z === undefined) return UNKNOWN;
+      return requirement.basis === 'mass' ? (z * input.basis.chemicals[at]!.MW_g_mol) / stream.MW_g_mol : z;
     }
-    case 'recovery': {
-      if (z === undefined) return undefined;
-      const fed = input.sketch.streams.reduce((sum, { id, from }) => {
-        const isFeed = input.sketch.units.some((unit) => unit.id === from?.[0] && unit.kind === 'feed');
-        const feed = isFeed ? solvedStream(input.streams.get(id)) : undefined;
-        return sum + (feed ? feed.n_mol_s * (feed.z[at] ?? 0) : 0);
-      }, 0);
-      return fed > 0 ? (stream.n_mol_s * z) / fed : undefined;
-    }
+    case 'recovery':
+      return z === undefined ? UNKNOWN : recoveryOf(input, at, stream.n_mol_s * z);
     case 'molarFlow':
       return stream.n_mol_s;
     case 'massFlow':
@@ -87,6 +85,19 @@ function resultOf(input: JudgeInput, requirement: Requirement, stream: SolvedStr
     case 'vapourFraction':
       return stream.vapourFraction;
   }
+}
+
+/** Share of all that the feeds bring of a chemical [-]. */
+function recoveryOf({ sketch, streams }: JudgeInput, at: number, n_mol_s: number): number | string {
+  const feeds = new Set(sketch.units.filter((unit) => unit.kind === 'feed').map((unit) => unit.id));
+  let fed = 0;
+  for (const { id, from } of sketch.streams) {
+    if (!from || !feeds.has(from[0])) continue;
+    const feed = solvedStream(streams.get(id));
+    if (!feed) return 'a feed is not solved';
+    fed += feed.n_mol_s * feed.z[at]!;
+  }
+  return fed > 0 ? n_mol_s / fed : 'no feed brings the component';
 }
 
 const KIND_WORDS: Readonly<Record<RequirementKind, string>> = {

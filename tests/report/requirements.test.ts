@@ -50,6 +50,29 @@ describe('a product requirement', () => {
     });
   });
 
+  test('on a fraction is not judged where nothing flows, nor a recovery while a feed is not solved', () => {
+    const { id } = streamOf('17');
+    const nothing = {
+      ...result('17'),
+      n_mol_s: 0,
+      m_kg_s: 0,
+      MW_g_mol: 0,
+      z: new Float64Array(input.basis.chemicals.length),
+      phases: [],
+    };
+    const empty = { ...input, streams: new Map([...input.streams, [id, nothing]]) };
+    const benzene = chemical('benzene');
+    for (const basis of ['mole', 'mass'] as const)
+      expect(
+        judged(empty, { stream: id, of: 'fraction', basis, chemical: benzene, max: '1 %' }),
+      ).toMatchObject({ is: 'open', why: 'nothing flows in the stream' });
+    expect(judged(empty, { stream: id, of: 'massFlow', min: '1 kg/h' }).is).toBe('missed');
+
+    const rest = new Map([...input.streams].filter(([stream]) => stream !== streamOf('1').id));
+    const recovery = { stream: id, of: 'recovery', chemical: benzene, min: '1 %' } as const;
+    expect(judged({ ...input, streams: rest }, recovery)).toMatchObject({ why: 'a feed is not solved' });
+  });
+
   test('says why it cannot be judged', () => {
     const gone = judged(input, { stream: 'nowhere' as Requirement['stream'], of: 'pressure', min: '1 bar' });
     expect(gone).toMatchObject({ is: 'open', why: expect.stringContaining('not in the sketch') });
