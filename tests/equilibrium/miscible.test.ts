@@ -55,4 +55,18 @@ describe('what is told to be one liquid without a stability test', () => {
     here[IDS.indexOf('m-xylene')] = 0.4;
     expect(isOneLiquid(model, 400, here)).toBe(true);
   });
+
+  // Both were found among random mixtures; that they part is what a search from many starts says.
+  test('does not hold in the cold, where heavy ones part from a light liquid that takes them in when warm', async () => {
+    const k = { i: 0, j: 1, kij: 0.0177, origin: 'given', source: '' } as const;
+    const two = (await bankModel(['n-decane', 'carbon-dioxide'], 'peng-robinson', { pairs: [k] })).of([0, 1]);
+    expect(isOneLiquid(two, 109.4, Float64Array.of(0.0025, 0.9975))).toBe(false);
+  });
+
+  test('does not hold where two chemicals draw each other strongly, however small the activity of one', async () => {
+    const k = { i: 0, j: 1, kij: -0.205, origin: 'given', source: '' } as const;
+    const ids = ['carbon-monoxide', 'methyl-acrylate'];
+    const two = (await bankModel(ids, 'peng-robinson', { pairs: [k] })).of([0, 1]);
+    expect(isOneLiquid(two, 106.6, Float64Array.of(0.984, 0.016))).toBe(false);
+  });
 });

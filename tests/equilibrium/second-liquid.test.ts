@@ -74,6 +74,32 @@ describe('a second liquid is never hidden', () => {
     expect(await isSaid(1e-2)).toBe(true);
   });
 
+  // Derived: along all compositions some dense liquid lies below the tangent plane of the single one, so that it must part.
+  test.each([
+    ['carbon-dioxide', 'n-decane', 302, 64.6e5, 0.85],
+    ['carbon-dioxide', 'n-decane', 308, 72.94e5, 0.85],
+    ['carbon-dioxide', 'n-decane', 314, 82.32e5, 0.85],
+    ['ethane', 'naphthalene', 308, 50.09e5, 0.8],
+    ['ethane', 'benzonitrile', 308, 50.08e5, 0.85],
+  ])('%s and %s at %d K, on the brink of parting, are said to part', async (a, b, T_K, P_Pa, x) => {
+    const z = Float64Array.of(x, 1 - x);
+    const model = (await bankModel([a, b])).of([0, 1]);
+    const props = model.makeProps();
+    const potentials = (y: Float64Array): Float64Array => {
+      model.evaluate('liquid', T_K, P_Pa, y, 0, props);
+      return y.map((v, i) => Math.log(v) + props.lnPhi[i]!);
+    };
+    const plane = potentials(z);
+    let least = 0;
+    for (let k = 1; k < 200; k++) {
+      const y = Float64Array.of(k / 200, 1 - k / 200);
+      const distance = potentials(y).reduce((sum, v, i) => sum + y[i]! * (v - plane[i]!), 0);
+      if (props.v_m3_mol < 0.75 * model.pseudoCritical(y).v_m3_mol) least = Math.min(least, distance);
+    }
+    expect(least).toBeLessThan(-1e-4);
+    expect(got(await ask([a, b], [...z], { T_K, P_Pa })).hiddenLiquid).toBeDefined();
+  });
+
   test('heating through the three-phase point of water and n-hexane is continuous in enthalpy', async () => {
     const ids = ['water', 'n-hexane'];
     const z = [0.5, 0.5];

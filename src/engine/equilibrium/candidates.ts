@@ -18,8 +18,8 @@ export interface Candidates {
   readonly heaviest: number;
 }
 
-/** T ln gamma of chemical i at infinite dilution in liquid j at [j * n + i], at 298.15 K and a high pressure [K]. */
-export function heatsApart(model: ThermoModel): Float64Array {
+/** ln gamma of chemical i at infinite dilution in liquid j at [j * n + i], at a high pressure. */
+export function lnGammasApart(model: ThermoModel, T_K: number): Float64Array {
   const { n } = model;
   const props = model.makeProps();
   const x = new Float64Array(n);
@@ -32,7 +32,7 @@ export function heatsApart(model: ThermoModel): Float64Array {
   }
   // ln gamma of i in j: ln phi of i there less that of pure i.
   const pure = Float64Array.from({ length: n }, (_, i) => found[i * n + i]!);
-  for (let k = 0; k < n * n; k++) found[k] = T_K * (found[k]! - pure[k % n]!);
+  for (let k = 0; k < n * n; k++) found[k] = found[k]! - pure[k % n]!;
   return found;
 }
 
@@ -56,11 +56,11 @@ export function liquidFormers(model: ThermoModel): Candidates {
   if (n === 1 || model.spec.kind === 'raoult')
     return { formers: new Int32Array(0), heat_K: new Float64Array(0), lightest, heaviest };
 
-  const apart_K = heatsApart(model);
+  const apart = lnGammasApart(model, T_K);
   const heat = new Float64Array(n);
   for (let j = 0; j < n; j++) {
     for (let i = 0; i < n; i++) {
-      const found = apart_K[j * n + i]!;
+      const found = T_K * apart[j * n + i]!;
       if (found > heat[i]!) heat[i] = found;
       if (found > heat[j]!) heat[j] = found;
     }

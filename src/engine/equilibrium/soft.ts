@@ -5,6 +5,12 @@ import type { FlashWork, Slot } from './work';
 const SOFT = 0.75;
 /** How far along the softest direction a trial starts: the composition's logarithm moves by this, on the average. */
 const REACH = 2;
+/** Near its spinodal the other liquid is close, and a far start leads past it. */
+const NEARBY = 0.5;
+/** Least curvature below which the nearby starts are tried. */
+const SOFTER = 0.3;
+const FAR_WAYS = [REACH, -REACH];
+const ALL_WAYS = [REACH, -REACH, NEARBY, -NEARBY];
 /** No chemical's fraction changes by more than exp of this in a start. */
 const MOST = 6;
 const TURNS = 10;
@@ -31,16 +37,17 @@ export function softLiquid(
   known2: Slot | undefined,
 ): boolean {
   const { n, startW, step: u } = w;
-  if (softest(w, tested) > SOFT) return false;
+  const curvature = softest(w, tested);
+  if (curvature > SOFT) return false;
   w.trial.side = 'liquid';
-  for (const way of [REACH, -REACH]) {
+  for (const way of curvature < SOFTER ? ALL_WAYS : FAR_WAYS) {
+    // `follow` uses w.step for its own steps.
+    if (way !== REACH) softest(w, tested);
     for (let i = 0; i < n; i++) {
       const move = Math.max(-MOST, Math.min(MOST, way * u[i]!));
       startW[i] = tested.x[i]! * Math.exp(move);
     }
     if (follow(w, T, P, known1, known2, 0)) return true;
-    // `follow` uses w.step for its own steps.
-    if (way > 0) softest(w, tested);
   }
   return false;
 }

@@ -30,8 +30,10 @@ export function isUnstable(w: FlashWork, T: number, P: number): boolean {
   }
   if (model.spec.kind === 'raoult') return false;
   if (pureTrial(w, T, P, w.lightest, 'vapour', feed, undefined)) return true;
-  if (pureTrial(w, T, P, w.heaviest, 'liquid', feed, undefined)) return true;
-  return hiddenLiquid(w, T, P, feed, undefined);
+  const heaviestAbove = pureAbove(w, T, P, w.heaviest, 'liquid');
+  if (heaviestAbove < BELOW) return true;
+  if (heaviestAbove < FAR && followPure(w, T, P, w.heaviest, feed, undefined)) return true;
+  return hiddenLiquid(w, T, P, feed, undefined, heaviestAbove);
 }
 
 /**
@@ -42,6 +44,7 @@ export function isUnstable(w: FlashWork, T: number, P: number): boolean {
  * along the softest direction of a tested liquid.
  *
  * @param known1  the tested phase, a liquid if there is one; @param known2  the other phase of a split; level-2 properties
+ * @param heaviestAbove  how far the pure heaviest lies above the plane, when it has been followed without finding anything
  */
 export function hiddenLiquid(
   w: FlashWork,
@@ -49,6 +52,7 @@ export function hiddenLiquid(
   P: number,
   known1: Slot,
   known2: Slot | undefined,
+  heaviestAbove?: number,
 ): boolean {
   const { formers, heat_K, startW, n } = w;
   const tested = known2 ?? known1;
@@ -64,7 +68,8 @@ export function hiddenLiquid(
     // Beside a vapour the tested phase is a liquid: the activity in it cannot be larger than this.
     const lnX = Math.log(tested.x[i]!);
     if (inLiquid && lnX + 1.5 * lnGammaMost < -FAR) continue;
-    const above = pureAbove(w, T, P, i, 'liquid');
+    const tried = i === w.heaviest ? heaviestAbove : undefined;
+    const above = tried ?? pureAbove(w, T, P, i, 'liquid');
     if (above < BELOW) return true;
     if (!(above < FAR)) continue;
     // -above is ln(x gamma). A liquid rich in i lies below only if i is not at home in the tested one.
@@ -74,7 +79,7 @@ export function hiddenLiquid(
       stranger = i;
     }
     if (inLiquid && lnGamma < (above < CLOSE ? STRANGE / 4 : STRANGE)) continue;
-    if (followPure(w, T, P, i, known1, known2)) return true;
+    if (tried === undefined && followPure(w, T, P, i, known1, known2)) return true;
   }
   if (stranger >= 0) {
     for (let i = 0; i < n; i++) startW[i] = 0.5 * tested.x[i]!;
