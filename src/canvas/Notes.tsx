@@ -7,7 +7,7 @@ import { useSession, useSketch, useStores } from '../store/react';
 import { adds } from './choose';
 import { endKeys } from './keys';
 import { endWriting, holdNote } from './noteEdits';
-import { Steady, Text } from './Shapes';
+import { drawSteady, drawText } from './Shapes';
 import { type HeldNote, useSheet, useSheetStore } from './sheetStore';
 import { useField } from './watch';
 
@@ -65,11 +65,11 @@ const OneNote = memo(function OneNote({ note }: { readonly note: Note }) {
       style={{ transform: `translate(${box.x}px, ${box.y}px)`, width: box.w, height: box.h }}
     >
       <svg aria-hidden="true" style={{ left: -box.x, top: -box.y }}>
-        <Steady about={hold} upTo={drawn?.upTo ?? 1}>
-          {texts.map((text) => (
-            <Text key={text.at[1]} shape={text} />
-          ))}
-        </Steady>
+        {drawSteady(
+          hold,
+          drawn?.upTo ?? 1,
+          texts.map((text) => drawText(text)),
+        )}
       </svg>
       {/* An area is taken by its name and its border; what stands in it stays free for the hand. */}
       <button

@@ -30,7 +30,7 @@ import { keepScene, quietAgain } from './keepScene';
 import { endKeys } from './keys';
 import { Lines } from './Lines';
 import { Notes } from './Notes';
-import { nodesOf } from './nodes';
+import { nodeCache } from './nodes';
 import { OfferMenu } from './OfferMenu';
 import { PullLayer } from './PullLayer';
 import { steadyScale } from './quiet';
@@ -171,21 +171,17 @@ function createHandlers(stores: Stores, sheet: SheetStore, view: SheetView) {
 function Flow({ view }: { readonly view: SheetView }) {
   const stores = useStores();
   const sheet = useSheetStore();
-  const shapes = useSheet((state) => state.scene.units);
   const selected = useSession((state) => state.units);
   const writable = useSketch((state) => state.writable);
-  const moved = useSheet((state) => state.moved);
   const handlers = useMemo(() => createHandlers(stores, sheet, view), [stores, sheet, view]);
-  const nodes = useRef<Node[]>([]);
-  nodes.current = useMemo(
-    () => nodesOf(shapes, new Set(selected), nodes.current, moved),
-    [shapes, selected, moved],
-  );
+  const [cached] = useState(nodeCache);
+  // A new answer that moves no unit leaves React Flow alone.
+  const nodes = useSheet((state) => cached(state.scene.units, selected, state.moved));
 
   return (
     <ReactFlow
       {...handlers}
-      nodes={nodes.current}
+      nodes={nodes}
       edges={NO_EDGES}
       nodeTypes={NODE_TYPES}
       nodesDraggable={writable}

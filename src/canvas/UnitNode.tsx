@@ -1,4 +1,4 @@
-import { Fragment, memo, useMemo } from 'react';
+import { memo, type ReactNode, useMemo } from 'react';
 import type { NodeProps } from 'reactflow';
 import { limitMark } from '../drawing/marks';
 import { transformOf } from '../drawing/transform';
@@ -8,7 +8,7 @@ import { useSession } from '../store/react';
 import { isPointed } from './choose';
 import { flagPort } from './extent';
 import { nodeBox } from './nodes';
-import { Paths, Steady, Text } from './Shapes';
+import { drawPaths, drawSteady, drawText } from './Shapes';
 import { useSheetStore } from './sheetStore';
 import { UnitPorts } from './UnitPorts';
 import { useField, useItem } from './watch';
@@ -24,6 +24,8 @@ export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
   const pointed = useSession((state) => isPointed(state, unit));
   const entry = useSession((state) => isEntry(state.units, state.streams, unit));
   const first = useField('scene', ({ units }) => units[0]?.unit === unit);
+  const showDuty = !quietDuty || selected;
+  const drawing = useMemo(() => (shape ? drawUnit(shape, showDuty) : null), [shape, showDuty]);
   if (!shape) return null;
   const box = nodeBox(shape);
   return (
@@ -39,7 +41,7 @@ export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
       }}
     >
       <svg className="unit-drawing" aria-hidden="true" style={{ left: -box.x, top: -box.y }}>
-        <Drawing shape={shape} showDuty={!quietDuty || selected} />
+        {drawing}
       </svg>
       <button
         type="button"
@@ -50,7 +52,7 @@ export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
         aria-pressed={selected}
         data-focus-unit={unit}
       />
-      <UnitPorts unit={unit} origin={box} />
+      <UnitPorts unit={unit} x={box.x} y={box.y} />
     </div>
   );
 });
@@ -59,61 +61,40 @@ export const UnitNode = memo(function UnitNode({ id }: NodeProps) {
 const isEntry = (units: readonly string[], streams: readonly string[], unit: UnitId): boolean | null =>
   units.length + streams.length === 0 ? null : units[0] === unit;
 
-const Drawing = memo(function Drawing({
-  shape,
-  showDuty,
-}: {
-  readonly shape: UnitShape;
-  readonly showDuty: boolean;
-}) {
+/** Drawn as a part of the unit's view: one view a unit, however many strokes and texts it has. */
+function drawUnit(shape: UnitShape, showDuty: boolean): ReactNode {
   const stale = shape.state === 'out-of-date';
-  const tag = shape.tagText;
-  const limit = useMemo(() => (shape.limit ? limitMark(shape.limit.weight) : []), [shape.limit]);
+  const { tagText: tag, limit } = shape;
   const flag = flagPort(shape);
   const symbol = (
     <>
       <g className="symbol" transform={transformOf(shape)}>
-        <Paths shapes={shape.symbol.paths} />
+        {drawPaths(shape.symbol.paths)}
       </g>
-      {shape.texts.map((text) => (
-        <Text key={text.text} shape={text} />
-      ))}
+      {shape.texts.map((text) => drawText(text))}
     </>
   );
   return (
     <>
       {shape.links.map(({ name, line, marks }) => (
-        <Fragment key={name}>
-          <Paths shapes={[line]} />
-          <Paths shapes={marks} />
-        </Fragment>
+        <g key={name}>{drawPaths([line, ...marks])}</g>
       ))}
-      {flag ? (
-        <Steady about={flag} upTo={shape.flagUpTo}>
-          {symbol}
-        </Steady>
-      ) : (
-        symbol
-      )}
+      {flag ? drawSteady(flag, shape.flagUpTo, symbol) : symbol}
       {shape.links.map(({ name, text }) =>
-        text && showDuty ? (
-          <Steady key={name} about={text.at}>
-            <Text shape={text} stale={stale} />
-          </Steady>
-        ) : null,
+        text && showDuty ? drawSteady(text.at, undefined, drawText(text, stale), name) : null,
       )}
-      <Steady about={shape.hold} upTo={shape.tagUpTo}>
-        {showDuty
-          ? shape.remarks.map((remark) => <Text key={remark.at[1]} shape={remark} stale={stale} />)
-          : null}
-        {tag ? <Text shape={{ ...tag, halo: true }} /> : null}
-        <Paths shapes={shape.stateMark} />
-        {shape.limit ? (
-          <g transform={`translate(${shape.limit.at[0]} ${shape.limit.at[1]})`}>
-            <Paths shapes={limit} />
-          </g>
-        ) : null}
-      </Steady>
+      {drawSteady(
+        shape.hold,
+        shape.tagUpTo,
+        <>
+          {showDuty ? shape.remarks.map((remark) => drawText(remark, stale)) : null}
+          {tag ? drawText({ ...tag, halo: true }) : null}
+          {drawPaths(shape.stateMark)}
+          {limit ? (
+            <g transform={`translate(${limit.at[0]} ${limit.at[1]})`}>{drawPaths(limitMark(limit.weight))}</g>
+          ) : null}
+        </>,
+      )}
     </>
   );
-});
+}

@@ -1,6 +1,5 @@
 import { memo } from 'react';
 import { useShallow } from 'zustand/react/shallow';
-import type { Box } from '../drawing/types';
 import type { UnitId } from '../engine/ids';
 import { useSession, useSketch, useStores, useUnit } from '../store/react';
 import { capital, portWord } from '../wording';
@@ -11,21 +10,22 @@ import { useField } from './watch';
 
 interface Props {
   readonly unit: UnitId;
-  /** The node's box: port places are counted from its corner. */
-  readonly origin: Box;
+  /** The corner of the node's box: port places are counted from it. */
+  readonly x: number;
+  readonly y: number;
 }
 
 /** Marks of the ports a stream can be pulled from, while the unit is under the pointer or selected alone. */
-export const UnitPorts = memo(function UnitPorts({ unit, origin }: Props) {
+export const UnitPorts = memo(function UnitPorts({ unit, x, y }: Props) {
   const hovered = useField('hovered', (over) => over === unit);
   const alone = useSession(
     (state) => state.units.length === 1 && state.streams.length === 0 && state.units[0] === unit,
   );
   if (!hovered && !alone) return null;
-  return <Marks unit={unit} origin={origin} />;
+  return <Marks unit={unit} x={x} y={y} />;
 });
 
-function Marks({ unit: id, origin }: Props) {
+function Marks({ unit: id, x, y }: Props) {
   const stores = useStores();
   const sheet = useSheetStore();
   const unit = useUnit(id);
@@ -46,7 +46,7 @@ function Marks({ unit: id, origin }: Props) {
         data-port={port.port}
         aria-label={`${capital(portWord(unit.kind, port.port))} of ${unit.tag}: pull a stream`}
         title={capital(portWord(unit.kind, port.port))}
-        style={{ left: port.place.at[0] - origin.x, top: port.place.at[1] - origin.y }}
+        style={{ left: port.place.at[0] - x, top: port.place.at[1] - y }}
         onPointerDown={(event) => pullByPointer(stores, sheet, port, event)}
       >
         <svg aria-hidden="true">

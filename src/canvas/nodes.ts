@@ -59,3 +59,20 @@ export function nodesOf(
   });
   return same ? (before as Node[]) : nodes;
 }
+
+/** The nodes as they were for as long as nothing about them changes. */
+export function nodeCache() {
+  let nodes: Node[] = [];
+  let last: readonly unknown[] = [];
+  return (
+    shapes: readonly UnitShape[],
+    selected: readonly UnitId[],
+    moved: ReadonlyMap<UnitId, Point> | null,
+  ): Node[] => {
+    const asked = [shapes, selected, moved];
+    if (asked.every((part, k) => part === last[k])) return nodes;
+    last = asked;
+    nodes = nodesOf(shapes, new Set(selected), nodes, moved);
+    return nodes;
+  };
+}

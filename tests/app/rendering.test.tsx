@@ -5,6 +5,7 @@ import { act, cleanup, render } from '@testing-library/react';
 import type { ReactNode } from 'react';
 import { afterEach, beforeAll, describe, expect, test, vi } from 'vitest';
 import { Balance } from '../../src/balance/Balance';
+import { Sheet } from '../../src/canvas/Sheet';
 import { solveSketch } from '../../src/cli/run';
 import { DrawerHost } from '../../src/drawers/DrawerHost';
 import { setSetting } from '../../src/drawers/edits';
@@ -32,6 +33,14 @@ const idOf = (tag: string): UnitId => {
   return unit.id;
 };
 beforeAll(async () => {
+  vi.stubGlobal(
+    'ResizeObserver',
+    class {
+      observe() {}
+      unobserve() {}
+      disconnect() {}
+    },
+  );
   const opened = openSketch(
     JSON.parse(readFileSync('public/examples/aromatic-condensate.sketch.json', 'utf8')),
   );
@@ -115,5 +124,31 @@ describe('a new answer to the condensate train', () => {
       'FixedBy',
     ])
       expect([name, counts[name] ?? 0]).toEqual([name, 0]);
+  });
+
+  /** What stands at each unit and stream of the sheet, by tag and number. */
+  const texts = (): ReadonlyMap<string, string> =>
+    new Map(
+      [...document.querySelectorAll<HTMLElement>('[data-unit], [data-stream]')].map((element) => [
+        `${element.dataset.unit ?? ''} ${element.dataset.stream ?? ''}`,
+        element.textContent ?? '',
+      ]),
+    );
+
+  test('draws on the sheet the units and streams whose text changed, and at most three views more', () => {
+    // Wide enough for the whole train at a zoom at which texts stand.
+    vi.spyOn(HTMLElement.prototype, 'clientWidth', 'get').mockReturnValue(1400);
+    vi.spyOn(HTMLElement.prototype, 'clientHeight', 'get').mockReturnValue(900);
+    const stores = show(<Sheet />);
+    act(() => stores.results.take(2, true, all(second), 1));
+    const before = texts();
+    expect(before.size).toBeGreaterThan(40);
+    rendered.length = 0;
+    act(() => stores.results.take(3, true, all(first), 1));
+    const after = texts();
+    const changed = [...after].filter(([name, text]) => before.get(name) !== text).length;
+    expect(changed).toBeGreaterThan(0);
+    expect(changed).toBeLessThan(before.size / 2);
+    expect(rendered.length).toBeLessThanOrEqual(changed + 3);
   });
 });
