@@ -213,4 +213,12 @@ export const KEPT: readonly (FlashCase & { readonly name: string })[] = [
     z: [0.0722268659217611, 0.46262089459235006, 0.4556861730347288, 0.00946606645116003],
     at: { P_Pa: 1048.9586650423366, h_J_mol: -18794.763721522384 },
   },
+  {
+    name: 'a trace of nonane that parts from cold liquid carbon dioxide',
+    kind: 'peng-robinson',
+    sort: 'nearly pure',
+    ids: ['carbon-dioxide', 'n-octadecane', 'p-diethylbenzene', 'n-nonane'],
+    z: [0.9999999663010607, 2.087554173482754e-11, 9.222565855779175e-11, 3.3585838139189935e-8],
+    at: { T_K: 157.70320308909785, vapourFraction: 0 },
+  },
 ];

@@ -57,6 +57,14 @@ function apartOf(model: ThermoModel, T_K: number): Apart {
   return made;
 }
 
+/** The largest ln gamma at infinite dilution of chemical i in another one, or of another one in it. */
+export function mostApart(model: ThermoModel, T_K: number, i: number): number {
+  const { most } = apartOf(model, T_K);
+  let found = 0;
+  for (let j = 0; j < model.n; j++) found = Math.max(found, most[j * model.n + i]!);
+  return found;
+}
+
 /**
  * Whether a liquid is surely one liquid, without a stability test: far from parting even if the activity coefficients were half
  * as large again. False says nothing.

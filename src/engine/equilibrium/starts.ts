@@ -1,4 +1,5 @@
 import { LN_GAMMA_APART } from './candidates';
+import { mostApart } from './miscible';
 import { softLiquid } from './soft';
 import { BELOW, follow, liquidLike, setPlane } from './stability';
 import type { FlashWork, Slot } from './work';
@@ -7,6 +8,8 @@ import type { FlashWork, Slot } from './work';
 const FAR = 2.3;
 /** ln of an activity coefficient from which a chemical may be better off in a liquid of its own. */
 const STRANGE = 0.4;
+/** Below this, activity coefficients are found anew instead of extrapolated from 298 K [K]. */
+const COLD_K = 240;
 /** -ln of an activity at which the pure liquid is all but stable beside the tested one. */
 const CLOSE = 0.3;
 
@@ -61,10 +64,11 @@ export function hiddenLiquid(
   let most = STRANGE;
   let strange = false;
   for (let k = 0; k < formers.length; k++) {
-    const lnGammaMost = heat_K[k]! / T;
+    const i = formers[k]!;
+    // In the cold it grows faster than as 1/T.
+    const lnGammaMost = Math.max(heat_K[k]! / T, T < COLD_K ? mostApart(w.model, T, i) : 0);
     if (lnGammaMost < LN_GAMMA_APART) continue;
     strange = true;
-    const i = formers[k]!;
     // Beside a vapour the tested phase is a liquid: the activity in it cannot be larger than this.
     const lnX = Math.log(tested.x[i]!);
     if (inLiquid && lnX + 1.5 * lnGammaMost < -FAR) continue;
