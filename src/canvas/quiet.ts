@@ -1,15 +1,14 @@
-import { LEAST_STEADY } from '../drawing/textScale';
 import type { Scene } from '../drawing/types';
 import type { Quiet } from './sheetStore';
 
 export { steadyScale } from '../drawing/textScale';
 
 /** Below this zoom only symbols, tags and lines stay. */
-export const SMALL = LEAST_STEADY;
+export const SMALL = 0.3;
 
 const ALL_CLEAR: Quiet = { labels: new Set(), diamonds: new Set(), duties: false };
 
-/** What steps back at a zoom: under 40 % everything but symbols, tags and lines. Above, the scene itself leaves off what has no room. */
+/** What steps back at a zoom: under 30 % everything but symbols, tags and lines. Above, the scene itself leaves off what has no room. */
 export function quietAt(scene: Scene, zoom: number): Quiet {
   if (zoom >= SMALL) return ALL_CLEAR;
   const all = new Set(scene.lines.map((line) => line.stream));

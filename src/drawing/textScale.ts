@@ -1,7 +1,7 @@
 /** Zoomed out, texts, diamonds and marks shrink with the sheet to this share of their size: 9 px is still read. */
 const LEAST_READ = 0.8;
 /** Then they keep that size on the screen down to this zoom; zoomed in, they keep their full size up to the other one. */
-export const LEAST_STEADY = 0.4;
+const LEAST_STEADY = 0.5;
 const MOST_STEADY = 1.5;
 /** Texts are placed for one of so many scales from 1 to 2, and as many a unit below, so that they do not wander while somebody zooms. */
 const STEPS = 8;
