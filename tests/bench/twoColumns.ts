@@ -112,7 +112,7 @@ export async function timeTwoColumns(now: () => number, rounds = 60): Promise<re
   const rows: object[] = [];
   let unit_us = evaluation_us();
   const measured = (what: string, once: (k: number) => void): void => {
-    for (let k = 0; k < 20; k++) once(k);
+    for (let k = 0; k < 600; k++) once(k);
     const times = Array.from({ length: rounds }, (_, k) => {
       const begun = now();
       once(k);

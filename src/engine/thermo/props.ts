@@ -58,8 +58,7 @@ export class BaseProps implements PhaseProps {
   /** Brings hIdeal and cpIdeal to T. */
   idealAt(T: number): void {
     if (this.idealT === T) return;
-    this.ideal.hAll(T, this.hIdeal);
-    this.ideal.cpAll(T, this.cpIdeal);
+    this.ideal.caloric(T, this.hIdeal, this.cpIdeal);
     this.idealT = T;
   }
 

@@ -10,7 +10,7 @@ import type { ChemicalData, Corr } from '../../chemicals/types';
 import { T0_K } from '../types';
 import { type PowerTerms, powerIntegral, powerIntegralOverT, powerTerms, powerValue } from './powers';
 
-/** Prepared ideal-gas properties of n chemicals. Nothing here changes after it is made. */
+/** Prepared ideal-gas properties of n chemicals. The last temperature of `caloric` is remembered, nothing else changes. */
 export interface IdealGases {
   readonly n: number;
   /** Cp of chemical i [J/(mol K)] at T [K] > 0. */
@@ -22,6 +22,8 @@ export interface IdealGases {
   /** All n at once into arrays of length n that the caller owns; powers of T and ln T are taken once. */
   cpAll(T: number, cp: Float64Array): void;
   hAll(T: number, h: Float64Array): void;
+  /** Enthalpy and Cp in one pass. Liquid and vapour of a stage ask one after the other at the same T. */
+  caloric(T: number, h: Float64Array, cp: Float64Array): void;
   /** Enthalpy and entropy in one pass; `s` at 1 bar. */
   hsAll(T: number, h: Float64Array, s: Float64Array): void;
   allOf(T: number, cp: Float64Array, h: Float64Array, s: Float64Array): void;
@@ -134,8 +136,28 @@ export function prepareIdealGases(chemicals: readonly ChemicalData[]): IdealGase
     return poly * T + data[a + 2]! * ln + (data[a + 1]! + data[a]! * inv) * inv + data[at + 3 * terms + 1]!;
   };
 
+  let keptT = Number.NaN;
+  const keptH = new Float64Array(n);
+  const keptCp = new Float64Array(n);
+
   return {
     n,
+    caloric(T, h, cp) {
+      if (T !== keptT) {
+        const inv = 1 / T;
+        const ln = Math.log(T);
+        for (let i = 0; i < n; i += 1) {
+          const at = place(i, T);
+          keptH[i] = hAt(at, T, inv, ln);
+          keptCp[i] = cpAt(at, T, inv);
+        }
+        keptT = T;
+      }
+      for (let i = 0; i < n; i += 1) {
+        h[i] = keptH[i]!;
+        cp[i] = keptCp[i]!;
+      }
+    },
     cp: (i, T) => cpAt(place(i, T), T, 1 / T),
     h: (i, T) => hAt(place(i, T), T, 1 / T, Math.log(T)),
     s: (i, T) => sAt(place(i, T), T, 1 / T, Math.log(T)),
