@@ -221,4 +221,88 @@ export const KEPT: readonly (FlashCase & { readonly name: string })[] = [
     z: [0.9999999663010607, 2.087554173482754e-11, 9.222565855779175e-11, 3.3585838139189935e-8],
     at: { T_K: 157.70320308909785, vapourFraction: 0 },
   },
+  {
+    name: 'an entropy of a cold liquid at 160 bar, closer seen on the way than at the end',
+    kind: 'peng-robinson',
+    sort: 'pure',
+    ids: ['1-decene'],
+    z: [1],
+    at: { P_Pa: 15988399.118225938, s_J_molK: 378.68035012093895 },
+  },
+];
+
+/** Found too, and not mended: expected to fail, so that a mend is noticed. */
+export const OPEN: readonly (FlashCase & { readonly name: string })[] = [
+  {
+    name: 'dry ice temperature carbon dioxide with 8e-16 of a heavy one, at an enthalpy on its boundary: 5e-9 below the plane, allowed 1e-9',
+    kind: 'peng-robinson',
+    sort: 'trace',
+    ids: ['carbon-dioxide', 'p-diethylbenzene'],
+    z: [0.9999999999999992, 8.213097710378526e-16],
+    at: { P_Pa: 7345.076576939886, h_J_mol: -416777.68548107677 },
+  },
+];
+
+/** Bubble points of three liquids: an answer or a reason, once a vapour of NaN beside two liquids that do not boil. */
+export const NO_ANSWER: readonly (FlashCase & { readonly name: string })[] = [
+  {
+    name: 'nineteen chemicals with water, acids and formaldehyde at 1.6 bar',
+    kind: 'peng-robinson',
+    sort: 'anything',
+    ids: [
+      'tetralin',
+      'water',
+      'acetylene',
+      'ethylcyclopentane',
+      'butanal',
+      'propionic-acid',
+      'ethyl-acrylate',
+      'benzene',
+      'ethylene-oxide',
+      'benzoic-acid',
+      'r23',
+      'neopentane',
+      '2-ethyl-1-hexanol',
+      'hydrogen-sulfide',
+      '1-propanethiol',
+      'butyric-acid',
+      'dmf',
+      'n-octadecane',
+      'formaldehyde',
+    ],
+    z: [
+      0.1366848347736268, 0.018616098839739404, 0.07671582144706125, 0.04580434819068995,
+      0.0071215440251211045, 0.009955569136992875, 0.037354814080722505, 0.01484132180408862,
+      0.11713608532776475, 0.07497771411389556, 0.03538208968226684, 0.07327405132279075, 0.05474174335034099,
+      0.0680403027484945, 0.022044463224558625, 0.033208340574653245, 0.00050776985410934, 0.1060519509213171,
+      0.06754113658176573,
+    ],
+    at: { P_Pa: 160094.69726112235, vapourFraction: 0 },
+  },
+  {
+    name: 'thirteen chemicals with water, an amine and hydrogen chloride at 1.4 bar',
+    kind: 'peng-robinson',
+    sort: 'anything',
+    ids: [
+      'benzonitrile',
+      'chloroethane',
+      'n-eicosane',
+      'isooctane',
+      'water',
+      'cyclohexane',
+      'dimethyl-ether',
+      '2,3-dimethylpentane',
+      'n-butylamine',
+      'hydrogen-chloride',
+      'propane',
+      'n-heptadecane',
+      'allyl-alcohol',
+    ],
+    z: [
+      0.10899161892684195, 0.07156801385667978, 0.06079799024709852, 0.014589769635861517,
+      0.036697671197750914, 0.12771466935701317, 0.19672190480315502, 0.10740713495713516,
+      0.06066157764623464, 0.1189253252715445, 0.012403924814367086, 0.03256410587057776, 0.05095629341574,
+    ],
+    at: { P_Pa: 140397.52950118534, vapourFraction: 0 },
+  },
 ];

@@ -41,6 +41,8 @@ function together(kind: PhaseKind, parts: readonly [FlashPhase, number][]): Flas
   if (first === undefined) return undefined;
   let fraction = 0;
   for (const [, amount] of parts) fraction += amount;
+  // A phase that is about to form or to vanish: nothing of it, but a state of its own.
+  if (fraction === 0) return { ...first[0], fraction };
   const mean = (of: (phase: FlashPhase) => number): number => {
     let sum = 0;
     for (const [phase, amount] of parts) sum += amount * of(phase);

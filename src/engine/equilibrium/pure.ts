@@ -143,21 +143,30 @@ export function pureCaloric(
   const { feed, model } = w;
   let worse = 0;
   let least = Number.POSITIVE_INFINITY;
+  let leastT = T;
   for (let pass = 0; pass < 200; pass++) {
     model.evaluate(feed.side, T, P, feed.x, 2, feed.props);
     w.iterations++;
     w.T_K = T;
     const miss = target - (of === 'h' ? feed.props.h_J_mol : feed.props.s_J_molK);
     const close = closeEnough(of, T, target);
-    if (Math.abs(miss) < least) least = Math.abs(miss);
-    else worse++;
+    if (Math.abs(miss) < least) {
+      least = Math.abs(miss);
+      leastT = T;
+    } else worse++;
     if (Math.abs(miss) <= close || (worse > 3 && Math.abs(miss) < 10 * close)) return 'solved';
     if (miss > 0) low = T;
     else high = T;
     if (low > 0.999 * MOST_T_K || high < 1.001 * LEAST_T_K) return 'out-of-range';
     let next = T + (of === 'h' ? miss : miss * T) / feed.props.cp_J_molK;
     if (!(next > low && next < high)) next = (low + high) / 2;
-    if (next === T) return Math.abs(miss) < 1e3 * close ? 'solved' : 'no-convergence';
+    if (next === T) {
+      if (!(least < 1e3 * close)) return 'no-convergence';
+      // Rounding of a dense liquid's root ends the search a little beside the closest that was seen.
+      model.evaluate(feed.side, leastT, P, feed.x, 2, feed.props);
+      w.T_K = leastT;
+      return 'solved';
+    }
     T = next;
   }
   return 'no-convergence';

@@ -140,12 +140,14 @@ function partOfBoth(
   if (light.hiddenLiquid === undefined && heavy.hiddenLiquid === undefined) return 'none';
   const share = (beta - heavy.vapourFraction) / (light.vapourFraction - heavy.vapourFraction);
   if (!(share >= 0 && share <= 1)) return 'unexplained';
-  if (share > 0) {
+  if (beta > 0) {
     w.told = between(heavy, light, share);
     return 'explained';
   }
-  const vapour = light.phases.find((phase) => phase.kind === 'vapour');
-  if (vapour === undefined || !w.lumped) return 'unexplained';
-  const u = sought === 'T' ? heavy.T_K : heavy.P_Pa;
+  // A bubble point: the two liquids of one side, and the vapour of the other to begin with.
+  const [liquids, vapours] = light.vapourFraction === 0 ? [light, heavy] : [heavy, light];
+  const vapour = vapours.phases.find((phase) => phase.kind === 'vapour');
+  if (vapour === undefined || (liquids === light && !flashAt(thin)) || !w.lumped) return 'unexplained';
+  const u = sought === 'T' ? liquids.T_K : liquids.P_Pa;
   return bubbleOfTwo(w, z, sought, given, u, vapour.x) ? 'explained' : 'unexplained';
 }
