@@ -57,6 +57,8 @@ test('a sheet is drawn by keys alone', async ({ page }) => {
   await page.locator('[data-shelf="product"]').focus();
   await page.keyboard.press('Enter');
   await expect(unit(page, 'PROD-1')).toHaveAttribute('data-selected', 'true');
+  // The keyboard follows to the new unit; until then its keys belong to the shelf.
+  await expect(unit(page, 'PROD-1').locator('[data-focus-unit]')).toBeFocused();
   await page.keyboard.press('c');
   await page.keyboard.press('ArrowLeft');
   await page.keyboard.press('Enter');

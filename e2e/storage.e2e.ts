@@ -151,6 +151,8 @@ test('a file dragged onto the page opens; a damaged one is refused with its plac
       [name, text, times] as const,
     );
   const example = await (await page.request.get('./examples/let-down.sketch.json')).text();
+  // The page takes files once it stands.
+  await expect(page.getByText('Or open an example')).toBeVisible();
   await drop('mine.sketch.json', example);
   await solved(page);
   await expect(unit(page, 'PV-1')).toBeVisible();
