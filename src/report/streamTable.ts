@@ -1,3 +1,4 @@
+import { withReference } from '../drawing/measures';
 import { displayUnit, type Measures } from '../quantity';
 import { describeStream } from '../sketch/describe';
 import type { SketchStream } from '../sketch/types';
@@ -20,8 +21,6 @@ const byNumber = new Intl.Collator('en', { numeric: true });
 /** Streams in the order of their numbers: 2 before 10. */
 export const inOrder = (streams: readonly SketchStream[]): readonly SketchStream[] =>
   [...streams].sort((a, b) => byNumber.compare(a.number, b.number));
-
-const GAUGE: Readonly<Record<Measures['set'], string>> = { SI: 'kPa(g)', metric: 'bar(g)', US: 'psi(g)' };
 
 /** Heat and material balance: one column a stream, rows in the trade's order. Totals come from unrounded values. */
 export function streamTable(input: ReportInput): Table {
@@ -133,9 +132,7 @@ const secondLiquid = (stream: SolvedStream | undefined): Cell => {
 };
 
 function ruled(rule: RowRule, results: readonly (SolvedStream | undefined)[], measures: Measures): Row {
-  const own: Measures = rule.gauge
-    ? { ...measures, units: { ...measures.units, pressure: GAUGE[measures.set] } }
-    : measures;
+  const own = rule.gauge ? withReference(measures, 'gauge') : measures;
   const unit = displayUnit(rule.dim, own);
   const values = results.map((stream) => {
     const si = stream ? rule.value(stream) : undefined;

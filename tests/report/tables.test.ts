@@ -162,3 +162,10 @@ describe('pages of a wide, long table', () => {
     },
   );
 });
+
+test('pressures of the table keep the unit of one’s own, absolute and gauge', () => {
+  const own = { ...input.sketch, display: { ...input.sketch.display, units: { pressure: 'psi' } } };
+  const csv = writeCsv(buildReport({ ...input, sketch: own }));
+  const units = csv.split('\r\n').filter((line) => line.startsWith('Pressure,'));
+  expect(units.map((line) => line.split(',')[1])).toEqual(['psi(a)', 'psi(g)']);
+});
