@@ -9,40 +9,8 @@ import { actionFor } from '../../src/store/action';
 import { type Stores, StoresProvider } from '../../src/store/react';
 import { answer, letDown, solveAll, solvedStream, storesOf, streamId, unitId } from './fixture';
 
-/** Components that React rendered, by name, through the hook it offers to its tools. */
-const rendered = vi.hoisted(() => {
-  interface Fiber {
-    readonly flags: number;
-    readonly type: unknown;
-    readonly child: Fiber | null;
-    readonly sibling: Fiber | null;
-    readonly alternate: Fiber | null;
-  }
-  const names: string[] = [];
-  const PERFORMED_WORK = 1;
-  const nameOf = (type: unknown): string => {
-    if (typeof type === 'function') return type.name;
-    if (typeof type === 'object' && type !== null && 'type' in type) return nameOf(type.type);
-    return '';
-  };
-  const walk = (now: Fiber, before: Fiber | null): void => {
-    if (nameOf(now.type) !== '' && (now.flags & PERFORMED_WORK) !== 0) names.push(nameOf(now.type));
-    if (now.child === before?.child) return;
-    for (let child = now.child; child; child = child.sibling) walk(child, child.alternate);
-  };
-  Object.assign(globalThis, {
-    __REACT_DEVTOOLS_GLOBAL_HOOK__: {
-      supportsFiber: true,
-      inject: () => 1,
-      checkDCE: () => undefined,
-      onCommitFiberUnmount: () => undefined,
-      onPostCommitFiberRoot: () => undefined,
-      onCommitFiberRoot: (_id: number, root: { readonly current: Fiber }) =>
-        walk(root.current, root.current.alternate),
-    },
-  });
-  return names;
-});
+/** The hook must stand before React is loaded. */
+const { rendered } = await vi.hoisted(() => import('../app/rendered'));
 
 /** Views of this project; the rest belongs to the libraries. */
 const OURS =

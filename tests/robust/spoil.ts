@@ -4,7 +4,7 @@ import type { Random } from './random';
 
 type Node = { [key: string]: unknown } | unknown[];
 
-const STRANGE: readonly unknown[] = [
+export const STRANGE: readonly unknown[] = [
   null,
   '',
   ' ',

@@ -22,71 +22,14 @@ import { openSketch } from '../../src/sketch/read';
 import { KNOWN_KINDS } from '../../src/sketch/registry';
 import type { Json, Sketch } from '../../src/sketch/types';
 import { writeSketch } from '../../src/sketch/write';
+import { makeRandom } from '../robust/random';
+import { STRANGE, spoilValues } from '../robust/spoil';
 import { bankOf, exampleText, letDown, s, twoFlashes, u } from './help';
 
-/** Seeded numbers in [0, 1): mulberry32, a small public-domain generator. */
-function seeded(seed: number): () => number {
-  let a = seed >>> 0;
-  return () => {
-    a = (a + 0x6d2b79f5) >>> 0;
-    let t = Math.imul(a ^ (a >>> 15), a | 1);
-    t = (t + Math.imul(t ^ (t >>> 7), t | 61)) ^ t;
-    return ((t ^ (t >>> 14)) >>> 0) / 2 ** 32;
-  };
-}
+const seeded = (seed: number): (() => number) => makeRandom(seed).next;
 const pick = <T>(items: readonly T[], random: () => number): T => items[Math.floor(random() * items.length)]!;
 
-type Node = { [key: string]: unknown } | unknown[];
-const STRANGE: readonly unknown[] = [
-  null,
-  '',
-  ' ',
-  'x',
-  '-1 bar',
-  '1e400 K',
-  '3 barg',
-  '14 %',
-  0,
-  -1,
-  1e308,
-  Number.NaN,
-  true,
-  [],
-  {},
-  ['u1', 'out'],
-  ['u3', 'vapour'],
-  { P: '1 bar' },
-  { share: '1 %', of: { stream: 's1' }, basis: 'mole' },
-  { preset: 'humid air' },
-  { flows: { methane: '1 kg/h' } },
-  '__proto__',
-  'constructor',
-  undefined,
-  [[[[[[]]]]]],
-];
-
-/** One change somewhere in a document: a value replaced, a key taken away, doubled, or exchanged with another. */
-function mutate(root: Node, random: () => number): void {
-  const places: { readonly node: Node; readonly key: string }[] = [];
-  const walk = (node: Node): void => {
-    for (const [key, value] of Object.entries(node)) {
-      places.push({ node, key });
-      if (typeof value === 'object' && value !== null) walk(value as Node);
-    }
-  };
-  walk(root);
-  const { node, key } = pick(places, random);
-  const at = node as { [key: string]: unknown };
-  const other = pick(places, random);
-  const how = random();
-  if (how < 0.45) at[key] = structuredClone(pick(STRANGE, random));
-  else if (how < 0.6) {
-    if (Array.isArray(node)) node.splice(Number(key), 1);
-    else delete at[key];
-  } else if (how < 0.75) at[key] = structuredClone((other.node as { [key: string]: unknown })[other.key]);
-  else if (how < 0.85 && Array.isArray(node)) node.push(structuredClone(at[key]));
-  else at[String(pick(STRANGE, random)) || 'blank'] = structuredClone(at[key]);
-}
+type Node = Parameters<typeof spoilValues>[0];
 
 /** The settings of one unit, which compiling reads; the whole document once there are none. */
 function someSettings(raw: Node, random: () => number): Node {
@@ -105,13 +48,15 @@ describe('spoilt sketches', () => {
       ...twoFlashes(),
       chemicals: [...twoFlashes().chemicals, 'argon', 'oxygen', 'water'],
     });
-    const random = seeded(SEED);
+    const values = makeRandom(SEED);
+    const random = values.next;
     let openedCount = 0;
     let gapCount = 0;
     for (let k = 0; k < 300; k += 1) {
       const raw = JSON.parse(exampleText(pick(['let-down', 'condensate-flash'], random))) as Node;
       const times = 1 + Math.floor(random() * 2);
-      for (let j = 0; j < times; j += 1) mutate(random() < 0.4 ? raw : someSettings(raw, random), random);
+      for (let j = 0; j < times; j += 1)
+        spoilValues(random() < 0.4 ? raw : someSettings(raw, random), values);
       const result = openSketch(raw, { newId: () => 'x' });
       if (!result.ok) {
         expect(result.problems.length).toBeGreaterThan(0);
