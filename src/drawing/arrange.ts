@@ -53,14 +53,20 @@ export async function arrange(
   return { at, unbent };
 }
 
-/** The sketch with its units as arranged. */
+/** The units that the user placed by hand. */
+export const placedByHand = (sketch: Pick<Sketch, 'units'>): readonly UnitId[] =>
+  sketch.units.filter((unit) => unit.byHand).map((unit) => unit.id);
+
+/** The sketch with its units as arranged: what is placed anew is no longer placed by hand. */
 export function arranged(sketch: Sketch, { at, unbent }: Arrangement): Sketch {
   const straight = new Set(unbent);
   return {
     ...sketch,
     units: sketch.units.map((unit) => {
       const place = at.get(unit.id);
-      return place ? { ...unit, at: place } : unit;
+      if (!place) return unit;
+      const { byHand: _, ...rest } = unit;
+      return { ...rest, at: place };
     }),
     streams: sketch.streams.map((stream) => {
       if (!straight.has(stream.id)) return stream;

@@ -96,13 +96,18 @@ function filled(
   // Every field was checked by shape.ts; the rest is kept as it stands.
   const given = raw as unknown as Omit<Partial<Sketch>, 'units'> &
     Pick<Sketch, 'chemicals' | 'model' | 'streams'> & {
-      readonly units: readonly (Omit<SketchUnit, 'at' | 'mirror'> & {
+      readonly units: readonly (Omit<SketchUnit, 'at' | 'mirror' | 'byHand'> & {
         readonly at?: SketchUnit['at'];
         readonly mirror?: boolean;
+        readonly byHand?: boolean;
       })[];
     };
   const notes: Finding[] = steps.map((what) => finding('sketch/migrated', 'note', {}, word('what', what)));
-  const upright = given.units.map(({ mirror, ...unit }) => (mirror === true ? { ...unit, mirror } : unit));
+  const upright = given.units.map(({ mirror, byHand, ...unit }) => ({
+    ...unit,
+    ...(mirror === true ? { mirror } : {}),
+    ...(byHand === true ? { byHand } : {}),
+  }));
   const units = upright.every((u) => u.at !== undefined)
     ? (upright as readonly SketchUnit[])
     : placeUnits(upright, given.streams);

@@ -131,6 +131,7 @@ export function sketchSchema(registry: Registry = KNOWN_KINDS): Schema {
           at: point,
           turn: { enum: [0, 90, 180, 270] },
           mirror: { type: 'boolean' },
+          byHand: { type: 'boolean', description: 'placed by hand: arranging may leave it there' },
           material: text,
           settings: { type: 'object' },
         },

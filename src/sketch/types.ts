@@ -73,6 +73,8 @@ export interface SketchUnit {
   readonly at: readonly [number, number];
   readonly turn?: 0 | 90 | 180 | 270;
   readonly mirror?: true;
+  /** The user put it where it stands; arranging may leave it there. Set by moving and lining up, not by dropping or pasting. */
+  readonly byHand?: true;
   readonly material?: string;
   readonly settings: { readonly [key: string]: Json };
 }

@@ -20,7 +20,7 @@ const ORDER = {
     'holds',
     'documents',
   ],
-  unit: ['id', 'tag', 'name', 'kind', 'at', 'turn', 'mirror', 'material', 'settings'],
+  unit: ['id', 'tag', 'name', 'kind', 'at', 'turn', 'mirror', 'byHand', 'material', 'settings'],
   stream: ['id', 'number', 'name', 'from', 'to', 'via'],
 } as const;
 

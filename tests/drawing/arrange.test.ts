@@ -1,6 +1,6 @@
 import ELK from 'elkjs/lib/elk.bundled.js';
 import { describe, expect, test } from 'vitest';
-import { type Arrangement, arrange, arranged } from '../../src/drawing/arrange';
+import { type Arrangement, arrange, arranged, placedByHand } from '../../src/drawing/arrange';
 import { buildScene } from '../../src/drawing/scene';
 import type { UnitId } from '../../src/engine/ids';
 import type { Sketch } from '../../src/sketch/types';
@@ -88,6 +88,18 @@ describe('what was placed by hand', () => {
     const scene = buildScene(sheet, inputOf(sheet));
     const broken = Object.values({ ...LAWS, symbolsStandApart }).flatMap((law) => law(scene, sheet));
     expect(broken).toEqual([]);
+  });
+
+  test('is marked so only as long as it is kept', async () => {
+    const [first, second, ...others] = LET_DOWN.units;
+    const marked: Sketch = {
+      ...LET_DOWN,
+      units: [{ ...first!, byHand: true }, { ...second!, byHand: true }, ...others],
+    };
+    expect(placedByHand(marked)).toEqual([first!.id, second!.id]);
+    const keep = [first!.id];
+    expect(placedByHand(arranged(marked, await arrange(marked, engine, { keep })))).toEqual(keep);
+    expect(placedByHand(arranged(marked, await arrange(marked, engine)))).toEqual([]);
   });
 
   test('keeps its bends where both ends stay', async () => {

@@ -7,8 +7,8 @@ const isRecord = (value: Plain): value is Readonly<Record<string, Plain>> =>
 
 /** What opening may change, because it means the same or because it is told. */
 function isExcused(path: string, before: Plain, told: ReadonlySet<string>): boolean {
-  // Not turned over is what the absence of the word says; a sketch or note without a usable id gets one.
-  if (/^units\.\d+\.mirror$/.test(path)) return before === false;
+  // Not turned over, not placed by hand is what the absence of the word says; a sketch or note without a usable id gets one.
+  if (/^units\.\d+\.(mirror|byHand)$/.test(path)) return before === false;
   if (path === 'id') return typeof before === 'string' && before.trim() === '';
   if (/^notes\.\d+\.id$/.test(path)) return true;
   return path === 'display.labels' && told.has('sketch/label-not-available');

@@ -11,6 +11,7 @@ import {
   deleteStream,
   deleteUnits,
   disconnect,
+  duplicateUnits,
   insertUnitOnStream,
   mirrorUnit,
   moveUnits,
@@ -231,6 +232,22 @@ describe('moving, turning, mirroring', () => {
   test('a move to where it stands is no edit', () => {
     const before = letDown();
     expect(done(moveUnits(before, new Map([[u('u2'), [360, 320]]]))).sketch).toBe(before);
+  });
+  test('what was moved is marked as placed by hand, and what was lined up with it; a turned, new or pasted unit is not', () => {
+    const byHand = (sketch: Sketch): string[] => sketch.units.filter((x) => x.byHand).map((x) => x.id);
+    const before = letDown();
+    expect(byHand(before)).toEqual([]);
+    const places = new Map([
+      [u('u2'), [360, 400]],
+      [u('u3'), before.units[2]!.at],
+    ] as const);
+    const { sketch } = done(moveUnits(before, places));
+    expect(byHand(sketch)).toEqual(['u2', 'u3']);
+    expect(byHand(done(turnUnit(before, u('u2'))).sketch)).toEqual([]);
+    expect(byHand(done(addUnit(sketch, 'valve', [800, 800])).sketch)).toEqual(['u2', 'u3']);
+    const twice = done(duplicateUnits(sketch, new Set([u('u2'), u('u3')]), [400, 400])).sketch;
+    expect(twice.units).toHaveLength(sketch.units.length + 2);
+    expect(byHand(twice)).toEqual(['u2', 'u3']);
   });
   test('bends move with both their units and stay when only one moves', () => {
     const bent = done(bendStream(letDown(), s('s3'), [[584, 200]])).sketch;

@@ -6,7 +6,7 @@ import { isObject, type JsonObject, own, sameJson } from '../json';
 import { hangingStreams, nextNoteId, nextStreamId, nextStreamNumber, nextTag, nextUnitId } from '../naming';
 import { KNOWN_KINDS, kindOf, type Registry } from '../registry';
 import type { Json, Note, Sketch, SketchStream, SketchUnit } from '../types';
-import type { Edit } from './edited';
+import { type Edit, without } from './edited';
 import { copyPart, type Fragment } from './fragment';
 
 type Place = readonly [number, number];
@@ -48,7 +48,7 @@ export function pasteFragment(
     const id = nextUnitId(all);
     const tag = kind ? nextTag(all.units, kind) : freeTag(all.units, unit.tag);
     ids.set(unit.id, id);
-    units.push({ ...unit, id, tag, at: moved(unit.at) });
+    units.push({ ...without(unit, 'byHand'), id, tag, at: moved(unit.at) });
   }
   const end = (ends: SketchStream['from']): SketchStream['from'] =>
     ends && ids.has(ends[0]) ? [ids.get(ends[0]) as UnitId, ends[1]] : undefined;

@@ -82,7 +82,10 @@ const namesOf = (sketch: Sketch, ids: Iterable<UnitId>): string => {
   return tags.length === 1 ? (tags[0] ?? '') : `${tags.length} units`;
 };
 
-/** Moves units to places on the grid. Bends of streams between moved units move with them when all move alike. */
+/**
+ * Moves units to places on the grid, by hand: when any of them gets another place, all are marked as placed so. Bends of
+ * streams between moved units move with them when all move alike.
+ */
 export function moveUnits(sketch: Sketch, places: ReadonlyMap<UnitId, Place>): Edit {
   const shifts = new Map<UnitId, Place>();
   let next = sketch;
@@ -93,7 +96,12 @@ export function moveUnits(sketch: Sketch, places: ReadonlyMap<UnitId, Place>): E
     shifts.set(id, [at[0] - unit.at[0], at[1] - unit.at[1]]);
     next = withUnit(next, id, (u) => (u.at[0] === at[0] && u.at[1] === at[1] ? u : { ...u, at }));
   }
-  if (next !== sketch) next = { ...next, streams: next.streams.map((s) => shifted(s, shifts)) };
+  if (next !== sketch)
+    next = {
+      ...next,
+      units: next.units.map((u) => (places.has(u.id) && !u.byHand ? { ...u, byHand: true } : u)),
+      streams: next.streams.map((s) => shifted(s, shifts)),
+    };
   return { ok: true, sketch: next, label: `move ${namesOf(sketch, places.keys())}` };
 }
 

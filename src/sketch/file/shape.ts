@@ -120,6 +120,7 @@ function checkUnit(unit: JsonObject, path: string, problems: Problems): void {
   value.point(own(unit, 'at'), `${path}.at`, problems);
   value.oneOf(own(unit, 'turn'), `${path}.turn`, problems, [0, 90, 180, 270]);
   value.yesNo(own(unit, 'mirror'), `${path}.mirror`, problems);
+  value.yesNo(own(unit, 'byHand'), `${path}.byHand`, problems);
   const settings = own(unit, 'settings');
   if (settings === undefined) problems.add(`${path}.settings`, 'file/missing');
   value.object(settings, `${path}.settings`, problems);
