@@ -1,5 +1,5 @@
 import type { ChemId, StreamId, UnitId } from '../engine/ids';
-import type { Quantity } from './types';
+import type { Quantity } from './values';
 
 /** One line of the revision table. */
 export interface Revision {

@@ -1,11 +1,9 @@
 import type { Corr } from '../engine/chemicals/types';
 import type { ChemId, Port, StreamId, UnitId } from '../engine/ids';
 import type { DesignBasis, DocumentChoices, Hold, Revision } from './documentTypes';
+import type { Json, Quantity } from './values';
 
-export type Json = string | number | boolean | null | readonly Json[] | { readonly [key: string]: Json };
-
-/** "number unit" as the user typed it, or a plain number where dimensionless. */
-export type Quantity = string | number;
+export type { Json, Quantity } from './values';
 
 export interface TitleBlock {
   readonly project?: string;

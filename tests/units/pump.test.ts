@@ -1,7 +1,7 @@
 /** What a pump does. Expected values are derived beside the check unless a source is named. */
 import { beforeAll, describe, expect, test } from 'vitest';
 import type { Basis, ProblemUnit } from '../../src/engine/network/types';
-import type { PumpResults } from '../../src/engine/units/pump/solve';
+import type { PumpResults } from '../../src/engine/units/pump/types';
 import { basisOf, fresh, molar, parts, problemOf, solvedStream, unit, unitResult } from '../network/fixtures';
 
 let basis: Basis;

@@ -1,7 +1,7 @@
 /** What a reactor does. Expected values are derived beside the check. */
 import { beforeAll, describe, expect, test } from 'vitest';
 import type { Basis, ProblemUnit } from '../../src/engine/network/types';
-import type { ReactorResults } from '../../src/engine/units/reactor/solve';
+import type { ReactorResults } from '../../src/engine/units/reactor/types';
 import type { Json } from '../../src/sketch/types';
 import { audit, worstOfAudit } from '../laws/audit';
 import { basisOf, fresh, molar, parts, problemOf, solvedStream, unit, unitResult } from '../network/fixtures';

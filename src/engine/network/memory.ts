@@ -1,30 +1,13 @@
 import type { StreamState } from '../equilibrium/types';
-import type { Port, StreamId, UnitId } from '../ids';
-import type { Finding, Outcome } from '../outcome';
+import type { StreamId, UnitId } from '../ids';
+import type { Finding } from '../outcome';
 import { makeModel } from '../thermo/model';
 import type { Model } from '../thermo/types';
-import type { Answer, SiteSI, Work } from '../units/types';
+import type { Work } from '../units/types';
 import { type ClosureData, closureData } from './closure';
-import type { LoopMemory } from './loop/types';
-import type { Basis, StreamResult, UnitClosure, UnitResult } from './types';
-
-/** What was found for a unit, and for what: the key is the settings and the states entering, compared bit for bit. */
-export interface UnitMemory {
-  readonly kind: string;
-  readonly settings: unknown;
-  readonly in: Readonly<Record<Port, StreamState>>;
-  readonly outPorts: readonly Port[];
-  readonly site: SiteSI;
-  readonly outcome: Outcome<Answer>;
-  /** Start values of the last answer that was solved. */
-  readonly warm: unknown;
-  readonly result: UnitResult;
-  /** Of a solved unit inside the sketch. */
-  readonly closure?: UnitClosure;
-  /** Limits pass: what it found, and under which thresholds. */
-  readonly limits: Readonly<Record<string, number>>;
-  readonly limitFindings: readonly Finding[];
-}
+import type { LoopMemory } from './loop/memory';
+import type { Basis, StreamResult, UnitResult } from './types';
+import type { UnitMemory } from './unitMemory';
 
 /** A solved stream: its state, how it is shown, what it runs into. */
 export interface StreamMemory {

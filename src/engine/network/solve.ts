@@ -2,7 +2,7 @@ import { batchOf } from './batch';
 import { collectFindings } from './collect';
 import { catalogueOf, isBoundary, type Kinds, KNOWN_KINDS, solverOf } from './kinds';
 import { solveLoop } from './loop/solve';
-import type { Found, Memory, UnitMemory } from './memory';
+import type { Found, Memory } from './memory';
 import { overallClosure } from './overall';
 import { planOf } from './plan';
 import { whyNot } from './ready';
@@ -12,6 +12,7 @@ import { severalAnswers } from './several';
 import { answers, limitsOf, solveUnit } from './solveUnit';
 import type { SolveStep } from './step';
 import type { Problem, ProblemUnit, SolveBatch } from './types';
+import type { UnitMemory } from './unitMemory';
 
 export type { SolveStep } from './step';
 

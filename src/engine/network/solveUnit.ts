@@ -6,9 +6,10 @@ import { atUnit } from '../units/streams';
 import type { Answer, Call } from '../units/types';
 import { closureOf, worstOf } from './closure';
 import { describe } from './describe';
-import type { Memory, UnitMemory } from './memory';
+import type { Memory } from './memory';
 import { sameData, sameState } from './same';
 import type { LoopResult, Problem, ProblemUnit, StreamResult, UnitClosure, UnitResult } from './types';
+import type { UnitMemory } from './unitMemory';
 
 /** A solved unit closes at least this well [-]. */
 export const CLOSES = 1e-9;

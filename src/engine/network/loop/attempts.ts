@@ -5,8 +5,9 @@ import { sameData } from '../same';
 import { warmIn } from '../solveUnit';
 import type { SolveStep } from '../step';
 import { iterate } from './iterate';
+import type { LoopWarm, Torn } from './memory';
 import { nothingEnters } from './reasons';
-import type { Ending, Loop, LoopWarm, Torn } from './types';
+import type { Ending, Loop } from './types';
 
 /** Passes of an attempt. */
 const COLD_PASSES = 150;

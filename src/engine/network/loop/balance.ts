@@ -5,7 +5,8 @@ import { totalOf } from '../../units/streams';
 import type { Answer } from '../../units/types';
 import { closureOf, worstOf } from '../closure';
 import type { UnitClosure } from '../types';
-import type { Ending, Going, Loop, Torn } from './types';
+import type { Torn } from './memory';
+import type { Ending, Going, Loop } from './types';
 
 /** Which streams pass the loop's envelope: from outside or a feed, to outside or a product or nowhere. */
 export interface Envelope {

@@ -3,7 +3,8 @@ import { type Anderson, makeAnderson } from '../../numerics/anderson';
 import type { UnitClosure } from '../types';
 import { type Change, hold, weigh } from './advance';
 import { stayingOf } from './balance';
-import type { Going, Loop, Torn } from './types';
+import type { Torn } from './memory';
+import type { Going, Loop } from './types';
 import { type Layout, layoutOf, pack, unpack } from './vector';
 
 /** Differences the acceleration holds: for one tear, and for each further one. */

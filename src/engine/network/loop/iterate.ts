@@ -19,9 +19,10 @@ import {
   step,
   strayed,
 } from './course';
+import type { Torn } from './memory';
 import { runPass } from './pass';
 import { type Fall, pressureFalls, unsettled } from './reasons';
-import type { Ending, Loop, Torn } from './types';
+import type { Ending, Loop } from './types';
 
 /** Passes in which a unit may have no answer yet, because not everything flows that will. */
 const LENIENT = 16;

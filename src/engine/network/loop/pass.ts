@@ -9,7 +9,8 @@ import { sameData, sameState } from '../same';
 import { attempts, isFiniteState } from '../solveUnit';
 import type { SolveStep } from '../step';
 import type { LoopProgress, ProblemUnit } from '../types';
-import type { Going, Loop, Member, Torn } from './types';
+import type { Torn } from './memory';
+import type { Going, Loop, Member } from './types';
 
 export interface Passed {
   /** What came back of what was assumed; with a unit failed, as far as it can be told. */

@@ -1,15 +1,16 @@
 import type { UnitId } from '../../ids';
 import { isBoundary, solverOf } from '../kinds';
-import type { UnitMemory } from '../memory';
 import { note, outletOf, type Run, settle, spread, stateIn } from '../run';
 import { sameData, sameState } from '../same';
 import { limitsOf, remember } from '../solveUnit';
 import type { SolveStep } from '../step';
 import type { ProblemUnit, UnitResult } from '../types';
+import type { UnitMemory } from '../unitMemory';
 import { attemptAll } from './attempts';
+import type { LoopMemory, LoopWarm } from './memory';
 import { blocked, refusal } from './refuse';
 import { loopPlanOf } from './tears';
-import type { Ending, Loop, LoopMemory, LoopWarm, Member } from './types';
+import type { Ending, Loop, Member } from './types';
 
 /**
  * Solves the units of a loop together and settles them all. A loop whose units, settings and entering states are bit for bit

@@ -3,10 +3,10 @@ import type { StreamId, UnitId } from '../../ids';
 import type { Anderson } from '../../numerics/anderson';
 import type { Finding, Outcome } from '../../outcome';
 import type { AnyKind } from '../../units/solvers';
-import type { Answer, Call, SiteSI } from '../../units/types';
-import type { UnitMemory } from '../memory';
+import type { Answer, Call } from '../../units/types';
 import type { Run } from '../run';
-import type { LoopResult, ProblemUnit, Read, UnitResult } from '../types';
+import type { LoopResult, ProblemUnit } from '../types';
+import type { Torn } from './memory';
 import type { LoopPlan } from './tears';
 
 export interface Member {
@@ -23,14 +23,6 @@ export interface Loop {
   readonly members: readonly Member[];
   /** Streams that come from outside, or are read there. */
   readonly entering: readonly (readonly [StreamId, StreamState])[];
-}
-
-/** What a pass assumes, or what came back of it. */
-export interface Torn {
-  /** As the plan's tears. */
-  readonly streams: readonly StreamState[];
-  /** As the plan's scalars [mol/s or kg/s]. */
-  readonly seen: readonly number[];
 }
 
 /** What a unit was asked in the last pass, and what it said. */
@@ -65,24 +57,3 @@ export type Ending =
     }
   /** One of its units has none. */
   | { readonly is: 'unit-fails'; readonly unit: UnitId; readonly said: Said };
-
-/** Where the next solve of a loop may start: the tear of the last answer, and the slopes that were found on the way. */
-export interface LoopWarm {
-  readonly tears: readonly StreamId[];
-  readonly scalars: readonly Read[];
-  readonly torn: Torn;
-  readonly slopes: Anderson;
-}
-
-/** What was found for a loop, and for what. */
-export interface LoopMemory {
-  readonly units: readonly ProblemUnit[];
-  readonly reads: readonly Read[];
-  readonly site: SiteSI;
-  readonly entering: readonly (readonly [StreamId, StreamState])[];
-  /** Of every unit, when all have an answer: what the units themselves remember may be of another sketch by then. */
-  readonly answers?: readonly UnitMemory[];
-  /** What is said of every unit, when not. */
-  readonly unsolved?: readonly (readonly [UnitId, UnitResult])[];
-  readonly warm?: LoopWarm;
-}

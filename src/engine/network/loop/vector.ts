@@ -2,7 +2,8 @@ import type { StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { emptyStream, streamAt, totalOf, warmFrom, warmOf } from '../../units/streams';
 import { idealDatum_W } from '../closure';
-import type { Loop, Torn } from './types';
+import type { Torn } from './memory';
+import type { Loop } from './types';
 
 /**
  * A tear as numbers: amounts of all chemicals [mol/s], enthalpy per mole above the ideal gas at 298.15 K [J/mol], pressure [Pa];

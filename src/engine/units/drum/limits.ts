@@ -3,7 +3,7 @@ import { joiningPressure } from '../limits/joiningPressure';
 import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
 import { utilityLevels } from '../limits/utilities';
 import type { Answer, Call, SiteSI } from '../types';
-import type { DrumResults, DrumSettings } from './solve';
+import type { DrumResults, DrumSettings } from './types';
 
 /** A drum whose heat is set has a duty of more than this [W]. */
 const HAS_DUTY = rule('drum/has-duty', 'note', 0, 'power', 'balance');

@@ -2,24 +2,10 @@ import { streamOfPhase } from '../../equilibrium/stream';
 import type { Phase, StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { answerOf } from '../answer';
-import type { HeatSI, PressureSI } from '../groups';
 import { emptyStream, type Mixed, mixed, outletPressure, streamAt, warmFrom } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { drumLimits } from './limits';
-
-export interface DrumSettings {
-  /** Absent when temperature and vapour fraction are both given: the pressure is then a result. */
-  readonly p?: PressureSI;
-  /** Absent: adiabatic. */
-  readonly h?: HeatSI;
-}
-export interface DrumResults {
-  readonly T_K: number;
-  readonly P_Pa: number;
-  readonly vapourFraction: number;
-  /** Heat into the drum [W]; absent when it is adiabatic. */
-  readonly duty_W?: number;
-}
+import type { DrumResults, DrumSettings } from './types';
 
 function flash(call: Call<DrumSettings>, all: Mixed): Outcome<StreamState> {
   const { p, h = {} } = call.settings;

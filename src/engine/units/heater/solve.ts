@@ -1,6 +1,11 @@
-import { type HeatedResults, type HeatedSettings, solveHeated } from '../heated';
+import { heatedLimits } from '../heated/limits';
+import { solveHeated } from '../heated/solve';
+import type { HeatedResults, HeatedSettings } from '../heated/types';
 import type { UnitKind } from '../types';
-import { heaterLimits } from './limits';
+import { COOLS } from './limits';
 
 /** Heat goes into the stream. */
-export const heater: UnitKind<HeatedSettings, HeatedResults> = { solve: solveHeated, limits: heaterLimits };
+export const heater: UnitKind<HeatedSettings, HeatedResults> = {
+  solve: solveHeated,
+  limits: (...asked) => heatedLimits(COOLS, 'removed', ...asked),
+};

@@ -1,17 +1,9 @@
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { answerOf } from '../answer';
-import type { PressureSI } from '../groups';
 import { emptyStream, mixed, outletPressure, streamAt, warmFrom } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { joinLimits } from './limits';
-
-export interface JoinSettings {
-  readonly p: PressureSI;
-}
-export interface JoinResults {
-  readonly T_K: number;
-  readonly P_Pa: number;
-}
+import type { JoinResults, JoinSettings } from './types';
 
 function solve(call: Call<JoinSettings>): Outcome<Answer<JoinResults>> {
   const all = mixed(call.in, call.model.nc);

@@ -2,7 +2,7 @@ import type { Finding } from '../../outcome';
 import { fuelShareOfLimit } from '../limits/flammable';
 import { finding, named, rule, saw, thresholdOf } from '../limits/rule';
 import type { Call } from '../types';
-import type { ProductSettings } from './solve';
+import type { ProductSettings } from './types';
 
 /** Fuel in the gas that goes to atmosphere, as a share of its lower flammability limit [-]. */
 export const FLAMMABLE_TO_ATMOSPHERE = rule('product/flammable-to-atmosphere', 'caution', 0.25, 'fraction');

@@ -2,10 +2,7 @@ import { solved } from '../../outcome';
 import { answerOf } from '../answer';
 import type { UnitKind } from '../types';
 import { productLimits } from './limits';
-
-export interface ProductSettings {
-  readonly to?: 'process' | 'atmosphere' | 'storage';
-}
+import type { ProductSettings } from './types';
 
 /** A product takes what comes. */
 export const product: UnitKind<ProductSettings, Record<string, never>> = {

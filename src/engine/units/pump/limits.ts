@@ -1,7 +1,7 @@
 import type { Finding } from '../../outcome';
 import { finding, type Rule, rule, saw, thresholdOf } from '../limits/rule';
 import type { Answer, Call } from '../types';
-import type { PumpResults, PumpSettings } from './solve';
+import type { PumpResults, PumpSettings } from './types';
 
 /** Vapour in what enters, by mole [-]; what rounding may leave at a bubble point does not count. */
 const VAPOUR = rule('pump/vapour-enters', 'beyond-limit', 1e-8, 'fraction');

@@ -2,7 +2,7 @@ import type { Finding } from '../../outcome';
 import { joiningPressure } from '../limits/joiningPressure';
 import { utilityLevels } from '../limits/utilities';
 import type { Answer, Call, SiteSI } from '../types';
-import type { ReactorResults, ReactorSettings } from './solve';
+import type { ReactorResults, ReactorSettings } from './types';
 
 export function reactorLimits(
   call: Call<ReactorSettings>,

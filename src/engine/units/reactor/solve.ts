@@ -1,30 +1,11 @@
 import type { StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { answerOf } from '../answer';
-import type { HeatSI, PressureSI } from '../groups';
 import { emptyStream, type Mixed, mixed, outletPressure, streamAt, warmFrom } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { reactorLimits } from './limits';
-import { heatOfReaction_W, type Reaction, react } from './react';
-
-export interface ReactorSettings {
-  readonly reactions: readonly Reaction[];
-  /** Absent when temperature and vapour fraction are both given: the pressure is then a result. */
-  readonly p?: PressureSI;
-  /** Absent: adiabatic. */
-  readonly h?: HeatSI;
-}
-export interface ReactorResults {
-  readonly T_K: number;
-  readonly P_Pa: number;
-  readonly vapourFraction: number;
-  /** Heat into the reactor [W]; absent when it is adiabatic. */
-  readonly duty_W?: number;
-  /** Taken up by the reactions at 25 degC as ideal gases [W]; negative when heat is set free. */
-  readonly heatOfReaction_W: number;
-  /** Turns of each reaction [mol/s]. */
-  readonly extents_mol_s: readonly number[];
-}
+import { heatOfReaction_W, react } from './react';
+import type { ReactorResults, ReactorSettings } from './types';
 
 function outlet(call: Call<ReactorSettings>, all: Mixed, n_mol_s: Float64Array): Outcome<StreamState> {
   const { p, h = {} } = call.settings;

@@ -1,7 +1,7 @@
 import type { Finding } from '../../outcome';
 import { finding, type Rule, rule, saw, thresholdOf } from '../limits/rule';
 import type { Answer, Call } from '../types';
-import type { ValveResults, ValveSettings } from './solve';
+import type { ValveResults, ValveSettings } from './types';
 
 const UPHILL = rule('valve/outlet-above-inlet', 'beyond-limit', 0, 'pressureDifference', 'balance');
 /** Rise of the vapour fraction that counts as flashing [-]. */

@@ -1,21 +1,10 @@
 import type { StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { answerOf } from '../answer';
-import type { PressureSI } from '../groups';
 import { emptyStream, outletPressure, streamAt, totalOf, warmFrom } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { valveLimits } from './limits';
-
-export interface ValveSettings {
-  readonly p: PressureSI;
-}
-export interface ValveResults {
-  readonly drop_Pa: number;
-  readonly T_K: number;
-  /** Outlet less inlet. */
-  readonly dT_K: number;
-  readonly vapourFraction: number;
-}
+import type { ValveResults, ValveSettings } from './types';
 
 /** How far above its bubble point a liquid that flashes is looked for first, by its way from the inlet's temperature [-]. */
 const ABOVE = 0.1;

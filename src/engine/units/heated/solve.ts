@@ -1,22 +1,10 @@
-import type { StreamCondition } from '../equilibrium/stream';
-import type { StreamState } from '../equilibrium/types';
-import { noSolution, type Outcome, solved } from '../outcome';
-import { answerOf } from './answer';
-import type { OutletConditionSI, PressureSI } from './groups';
-import { emptyStream, outletPressure, streamAt, warmFrom } from './streams';
-import type { Answer, Call } from './types';
-
-export interface HeatedSettings extends OutletConditionSI {
-  /** Absent when temperature and vapour fraction are both given: the pressure is then a result. */
-  readonly p?: PressureSI;
-}
-export interface HeatedResults {
-  /** Heat into the unit [W]; negative when removed. */
-  readonly duty_W: number;
-  readonly T_K: number;
-  readonly P_Pa: number;
-  readonly vapourFraction: number;
-}
+import type { StreamCondition } from '../../equilibrium/stream';
+import type { StreamState } from '../../equilibrium/types';
+import { noSolution, type Outcome, solved } from '../../outcome';
+import { answerOf } from '../answer';
+import { emptyStream, outletPressure, streamAt, warmFrom } from '../streams';
+import type { Answer, Call } from '../types';
+import type { HeatedResults, HeatedSettings } from './types';
 
 /** A stated distance from the bubble point (below) or the dew point (above) at the outlet's pressure. */
 function fromSaturation(

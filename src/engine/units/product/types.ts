@@ -1,0 +1,3 @@
+export interface ProductSettings {
+  readonly to?: 'process' | 'atmosphere' | 'storage';
+}
