@@ -220,6 +220,22 @@ describe('a chamber', () => {
     expect(burn({ air: air({ stackO2Dry: 0.3 }) }).reason?.code).toBe('chamber/stack-oxygen-out-of-reach');
   });
 
+  test('refuses an air flow below zero, as a value', () => {
+    expect(burn({ air: air({ flow: molar(-5) }) }).reason).toMatchObject({
+      code: 'chamber/air-below-zero',
+      at: { unit: 'c', path: 'air.flow' },
+      evidence: [{ name: 'flow', value: -5, dim: 'molarFlow' }],
+    });
+  });
+
+  test('says of air that is water alone that its dry part has no oxygen', () => {
+    const composition = parts(...IDS.map((id) => (id === 'water' ? 1 : 0)));
+    expect(burn({ air: air({ stackO2Dry: 0.03, composition }) }).reason).toMatchObject({
+      code: 'chamber/stack-oxygen-out-of-reach',
+      evidence: [{ value: 0.03 }, { name: 'air', value: 0 }],
+    });
+  });
+
   test('without anything that burns mixes, and says so', () => {
     const c = burn({ air: air({ excess: 0.1 }) }, { fuel: { nitrogen: 1 } });
     expect(c.result.state).toBe('solved');

@@ -70,6 +70,11 @@ export const chamber: KindWords = {
       says: 'The fuels already bring {oxygen} of oxygen, which is more than what is set asks for.',
       next: 'Raise the {setting}, or give the air flow itself.',
     },
+    'chamber/air-below-zero': {
+      title: 'Air flow below zero',
+      says: 'The flow of the air is {flow}.',
+      next: 'Give an air flow of zero or more.',
+    },
     'chamber/stack-oxygen-out-of-reach': {
       title: 'More oxygen than the air has',
       says: 'The dry flue gas cannot hold {wanted%} of oxygen: the air itself has {air%}.',

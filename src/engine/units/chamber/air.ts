@@ -56,7 +56,16 @@ function amount(
   fuel: Float64Array,
   y: Float64Array,
 ): Outcome<number> {
-  if (air.flow !== undefined) return solved(stated(call, air.flow, y, fuel));
+  if (air.flow !== undefined) {
+    const n = stated(call, air.flow, y, fuel);
+    if (n >= 0) return solved(n);
+    return noSolution({
+      code: 'chamber/air-below-zero',
+      weight: 'beyond-limit',
+      at: { unit: call.unit, path: 'air.flow' },
+      evidence: [saw('flow', n, 'molarFlow')],
+    });
+  }
   const f = sumsOf(c, fuel);
   const a = sumsOf(c, y);
   const oxygen = saw('oxygen', f.O2, 'molarFlow');
@@ -82,13 +91,15 @@ function amount(
   const left0 = f.O2 - f.theoreticalO2;
   const perAir = a.O2 - a.theoreticalO2;
   const gives = perAir - wanted * (perAir + a.dryRest);
-  if (!(gives > 0))
+  if (!(gives > 0)) {
+    const dry = a.O2 + a.dryRest;
     return noSolution({
       code: 'chamber/stack-oxygen-out-of-reach',
       weight: 'beyond-limit',
       at,
-      evidence: [...seen, saw('air', a.O2 / (a.O2 + a.dryRest), 'fraction')],
+      evidence: [...seen, saw('air', dry > 0 ? a.O2 / dry : 0, 'fraction')],
     });
+  }
   const n = (wanted * (left0 + f.dryRest) - left0) / gives;
   return n >= 0
     ? solved(n)

@@ -12,6 +12,7 @@ export const CHAMBER_FINDINGS = [
   'chamber/product-missing',
   'chamber/chlorine-without-hydrogen',
   'chamber/nothing-burns',
+  'chamber/air-below-zero',
   'chamber/air-short',
   'chamber/no-oxygen',
   'chamber/oxygen-without-air',
