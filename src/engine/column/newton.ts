@@ -28,6 +28,8 @@ export interface NewtonOptions {
 }
 
 const SOLVED = 1e-9;
+/** Below this a further step only stirs the last digits. */
+const ROUNDING = 1e-12;
 /** From here on the last factors are tried again, as long as a step takes the residual down by this factor. */
 const NEAR = 1e-2;
 const CONTRACTS = 0.1;
@@ -101,6 +103,7 @@ export class Newton {
         if (!fresh) s.evaluate();
         if (!this.factor(wanted)) return end('singular');
       }
+      if (residual < ROUNDING) return { end: 'solved', residual, iterations: pass };
       if (!this.direction(wanted)) return end('singular');
       this.keep();
       if (converged) return this.finish(wanted, residual, pass);
@@ -149,7 +152,7 @@ export class Newton {
       if (residual <= before) return { end: 'solved', residual, iterations: pass };
     }
     this.restore();
-    s.evaluate();
+    s.evaluate(1);
     return { end: 'solved', residual: before, iterations: pass };
   }
 

@@ -20,10 +20,10 @@ export type ColumnEnd =
     }
   | { readonly state: 'no-solution'; readonly failure: Failure; readonly effort: Effort };
 
-const PLAIN: Sweeps = { simple: 8, model: 6, share: 0.5 };
+const PLAIN: Sweeps = { simple: 8, model: 6, share: 0.5, simple_K: 2, model_K: 0.5 };
 const STARTS: readonly (readonly [Attempt, Sweeps])[] = [
   ['plain-start', PLAIN],
-  ['more-sweeps', { simple: 12, model: 60, share: 0.3 }],
+  ['more-sweeps', { simple: 12, model: 60, share: 0.3, simple_K: 0, model_K: 0 }],
 ];
 const ITERATIONS = 40;
 const WARM_ITERATIONS = 14;

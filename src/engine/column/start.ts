@@ -8,6 +8,9 @@ export interface Sweeps {
   readonly model: number;
   /** Share of a new temperature and K taken by a model sweep; 1 is all. */
   readonly share: number;
+  /** Sweeps of either sort end when no temperature changes more: Newton then gets on faster than they do [K]. */
+  readonly simple_K: number;
+  readonly model_K: number;
 }
 
 /** Largest change of temperature in one sweep, with simple K-values and with the model's [K]. */
@@ -171,13 +174,16 @@ export function startBySweeps(s: StageSystem, guess: Guess, sweeps: Sweeps): voi
     meetTop(s, guess.top, fed);
     scaleTo(s, keptL, keptV);
   };
-  for (let pass = 0; pass <= sweeps.simple; pass++) {
+  const before = new Float64Array(places);
+  for (let pass = 0, moved = Number.POSITIVE_INFINITY; ; pass++) {
     simpleKs(s, guess.simple, K);
     settle();
-    if (pass < sweeps.simple) simpleSweep(s, guess.simple, K, keptL);
+    if (pass >= sweeps.simple || moved < sweeps.simple_K) break;
+    before.set(T);
+    simpleSweep(s, guess.simple, K, keptL);
+    moved = largestChange(before, T);
   }
   if (sweeps.model === 0) return;
-  const before = new Float64Array(places);
   const lnK = K.map((k) => Math.log(Math.max(k, 1e-300)));
   for (let pass = 0; pass < sweeps.model; pass++) {
     before.set(T);
@@ -191,7 +197,14 @@ export function startBySweeps(s: StageSystem, guess: Guess, sweeps: Sweeps): voi
       }
     }
     settle();
+    if (largestChange(before, T) < sweeps.model_K) break;
   }
+}
+
+function largestChange(before: Float64Array, after: Float64Array): number {
+  let most = 0;
+  for (let j = 0; j < after.length; j++) most = Math.max(most, Math.abs(after[j]! - before[j]!));
+  return most;
 }
 
 function simpleKs({ n, places, T, task }: StageSystem, { a, b, P_Pa }: SimpleK, K: Float64Array): void {
