@@ -14,6 +14,8 @@ import { bankIndex } from './bankIndex';
 import { Dialogue } from './Dialogue';
 import { dropFiles } from './documents';
 import { DocumentsPage } from './export/DocumentsPage';
+import { UnderWayList } from './export/UnderWayList';
+import { cancelNewest } from './export/underWay';
 import { KeyList } from './KeyList';
 import { MySketches } from './MySketches';
 import { Notice } from './Notice';
@@ -32,7 +34,12 @@ const isTyping = (target: EventTarget | null): boolean =>
 function useKeys(stores: Stores): void {
   useEffect(() => {
     const press = (event: KeyboardEvent): void => {
-      if (event.defaultPrevented || document.querySelector('[aria-modal="true"]')) return;
+      if (event.defaultPrevented) return;
+      if (document.querySelector('[aria-modal="true"]')) {
+        // One thing at a time: the dialogue itself is left with the next Esc.
+        if (event.key === 'Escape' && cancelNewest()) event.preventDefault();
+        return;
+      }
       const action = actionFor(actions, event, isTyping(event.target), stores);
       if (!action) return;
       event.preventDefault();
@@ -110,6 +117,7 @@ function Workplace({ stores }: { readonly stores: Stores }) {
         <Sheet />
         {isBlank ? <Start /> : null}
         <Notice />
+        <UnderWayList />
       </main>
       <DrawerHost />
       <Balance />

@@ -1,5 +1,6 @@
 import { type ReactNode, useEffect, useRef } from 'react';
 import { useStores } from '../store/react';
+import { UnderWayList } from './export/UnderWayList';
 
 /** A dialogue over the page: the browser's own, so that focus stays inside and Esc closes it. */
 export function Dialogue({
@@ -36,6 +37,7 @@ export function Dialogue({
           Close
         </button>
       </div>
+      <UnderWayList />
       {children}
     </dialog>
   );

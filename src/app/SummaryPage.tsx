@@ -15,15 +15,18 @@ export function SummaryPage() {
   const [report, setReport] = useState<ReportModel | 'nothing' | null>(null);
   useEffect(() => {
     let alive = true;
+    const end = new AbortController();
     const show = (input: ReportInput | undefined): void => {
       if (alive) setReport(input ? buildReport(input) : 'nothing');
     };
-    cleanReportInput(stores).then(show, (error: Error) => {
-      if (alive) setReport('nothing');
+    cleanReportInput(stores, end.signal).then(show, (error: Error) => {
+      if (!alive) return;
+      setReport('nothing');
       stores.session.say('beyond', 'The stream summary was not made.', [error.message]);
     });
     return () => {
       alive = false;
+      end.abort();
     };
   }, [stores]);
   const run = (id: string): void => actions.find((action) => action.id === id)?.run(stores);

@@ -11,9 +11,13 @@ export interface CleanAnswer {
   readonly findings: readonly Finding[];
 }
 
-/** Solves once from nothing in a worker of its own: what leaves the app never rests on a warm start. */
-export function solveFromNothing(basis: Basis, problem: Problem): Promise<CleanAnswer> {
+/**
+ * Solves once from nothing in a worker of its own: what leaves the app never rests on a warm start. Aborted, it ends the
+ * worker and is refused with the signal's reason.
+ */
+export function solveFromNothing(basis: Basis, problem: Problem, signal?: AbortSignal): Promise<CleanAnswer> {
   return new Promise((resolve, reject) => {
+    signal?.throwIfAborted();
     const streams = new Map<StreamId, StreamResult>();
     const units = new Map<UnitId, UnitResult>();
     const client = connectSolver(takeWorker, {
@@ -30,6 +34,10 @@ export function solveFromNothing(basis: Basis, problem: Problem): Promise<CleanA
         client.close();
         reject(new Error(message));
       },
+    });
+    signal?.addEventListener('abort', () => {
+      client.close();
+      reject(signal.reason);
     });
     client.solve(basis, problem, 'nothing');
   });

@@ -18,13 +18,16 @@ export async function fingerprint(text: string): Promise<string> {
 }
 
 /** Everything a report needs, solved once more from nothing. Undefined while the sketch cannot be compiled. */
-export async function cleanReportInput(stores: Stores): Promise<ReportInput | undefined> {
+export async function cleanReportInput(
+  stores: Stores,
+  signal?: AbortSignal,
+): Promise<ReportInput | undefined> {
   const { sketch } = stores.sketch.getState();
   const { basis, problem, gaps, notes, assumptions } = stores.compiled.getState();
   if (!basis || !problem) return undefined;
   const live = new Map([...stores.results.getState().streams].map(([id, shown]) => [id, shown.latest]));
   const [clean, citations, print] = await Promise.all([
-    solveFromNothing(basis, problem),
+    solveFromNothing(basis, problem, signal),
     bank.sources(),
     fingerprint(writeSketch(sketch)),
   ]);

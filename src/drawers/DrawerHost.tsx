@@ -92,7 +92,9 @@ export function DrawerHost() {
       <div
         className="drawer-inner"
         onKeyDown={(event) => {
-          if (event.key === 'Escape' && !event.defaultPrevented) leave();
+          if (event.key !== 'Escape' || event.defaultPrevented) return;
+          event.preventDefault();
+          leave();
         }}
       >
         <Content key={key} drawer={drawer} />

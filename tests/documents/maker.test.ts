@@ -60,6 +60,17 @@ describe('the page’s side of the documents’ worker', () => {
     expect((await two.made).type).toBe('new');
   });
 
+  test('cancelling one order begins the others again in the next worker', async () => {
+    const { workers, made } = maker();
+    const one = made.make(order, nothing);
+    const two = made.make({ ...order, what: 'json' }, nothing);
+    one.cancel();
+    await expect(one.made).rejects.toThrow(CANCELLED);
+    expect(workers[1]?.heard).toEqual([{ say: 'make', job: 2, order: { ...order, what: 'json' } }]);
+    workers[1]?.say({ say: 'made', job: 2, bytes: new Uint8Array([2]), type: 'b' });
+    expect((await two.made).type).toBe('b');
+  });
+
   test('cancelling what is made already leaves the worker alone', async () => {
     const { workers, made } = maker();
     const one = made.make(order, nothing);

@@ -1,7 +1,17 @@
 import type { Action } from '../../store/action';
 import { exportDocument } from '../export/exports';
+import { cancelNewest, documentsUnderWay } from '../export/underWay';
 
 export const documentActions: readonly Action[] = [
+  {
+    id: 'cancel-document',
+    label: 'Cancel the document that is being made',
+    group: 'result',
+    keys: ['Esc'],
+    whileTyping: true,
+    when: () => documentsUnderWay.getState().all.length > 0,
+    run: () => void cancelNewest(),
+  },
   {
     id: 'summary',
     label: 'Stream summary (heat and material balance)',

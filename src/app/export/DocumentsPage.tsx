@@ -1,4 +1,3 @@
-import { useState } from 'react';
 import type { DocumentKind } from '../../documents/messages';
 import { TextField } from '../../parts/TextField';
 import type { Sketch } from '../../sketch/types';
@@ -6,8 +5,7 @@ import { setDocuments } from '../../store/commands';
 import { useSketch, useStores } from '../../store/react';
 import { Dialogue } from '../Dialogue';
 import { Choices } from './Choices';
-import { copyPicture, deliver, EXPORTS, orderOf, type Solved, USUAL_WIDTH } from './exports';
-import { documentMaker } from './maker';
+import { copyPicture, EXPORTS, exportDocument, type Solved, saveMade, USUAL_WIDTH } from './exports';
 import { type Preview, upToDate, usePreview } from './usePreview';
 import './documents.css';
 
@@ -32,35 +30,25 @@ const DRAWING: readonly DocumentKind[] = ['sheet-pdf', 'svg', 'png'];
 
 function Saving({ solved, preview }: { readonly solved: Solved | undefined; readonly preview: Preview }) {
   const stores = useStores();
-  const [busy, setBusy] = useState<DocumentKind | 'copy' | null>(null);
-  const waits = !solved || busy !== null;
   const now = (): Sketch => stores.sketch.getState().sketch;
-  const save = async (what: DocumentKind): Promise<void> => {
-    if (!solved) return;
-    setBusy(what);
-    const { input, seconds } = await upToDate(solved, now());
-    const made = what === 'summary-pdf' && preview.is === 'made' && preview.of === input.sketch;
-    const making = made
-      ? { made: Promise.resolve(preview.made), cancel: () => undefined }
-      : documentMaker().make(orderOf(what, input, seconds), () => undefined);
-    await deliver(stores, making, what, input.sketch.title.title);
-    setBusy(null);
+  const save = (what: DocumentKind): void => {
+    const sketch = now();
+    if (what === 'summary-pdf' && preview.is === 'made' && preview.of === sketch)
+      saveMade(stores, preview.made, sketch.title.title);
+    else if (solved) void exportDocument(stores, what, () => upToDate(solved, sketch));
   };
-  const copy = async (): Promise<void> => {
-    if (!solved) return;
-    setBusy('copy');
+  const copy = (): void => {
     // Nothing is awaited before the clipboard is asked.
-    await copyPicture(stores, { ...solved.input, sketch: now() });
-    setBusy(null);
+    if (solved) void copyPicture(stores, { ...solved.input, sketch: now() });
   };
   const button = (what: DocumentKind) => (
     <button
       key={what}
       type="button"
       className={what === 'summary-pdf' ? 'button fill' : 'button line'}
-      disabled={waits}
+      disabled={!solved}
       data-export={what}
-      onClick={() => void save(what)}
+      onClick={() => save(what)}
     >
       {EXPORTS[what].label}
     </button>
@@ -72,13 +60,7 @@ function Saving({ solved, preview }: { readonly solved: Solved | undefined; read
       <h3>Save the drawing alone as</h3>
       <div className="documents-buttons">
         {DRAWING.map(button)}
-        <button
-          type="button"
-          className="button line"
-          disabled={waits}
-          data-export="copy"
-          onClick={() => void copy()}
-        >
+        <button type="button" className="button line" disabled={!solved} data-export="copy" onClick={copy}>
           Copy as picture
         </button>
       </div>

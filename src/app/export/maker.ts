@@ -10,7 +10,7 @@ export interface DocumentWorker {
 
 export interface Making {
   readonly made: Promise<Made>;
-  /** Ends the work; `made` is then refused with CANCELLED. */
+  /** Ends the work; `made` is then refused with CANCELLED. What else was asked for is begun again and not lost. */
   cancel(): void;
 }
 
@@ -22,6 +22,7 @@ export const CANCELLED = 'cancelled';
  */
 export function createMaker(start: () => DocumentWorker) {
   interface Order {
+    readonly order: DocumentOrder;
     readonly onProgress: (doing: string, share: number) => void;
     readonly resolve: (made: Made) => void;
     readonly reject: (error: Error) => void;
@@ -57,19 +58,35 @@ export function createMaker(start: () => DocumentWorker) {
     return fresh;
   };
 
+  const post = (job: number, order: DocumentOrder): void => {
+    worker ??= begin();
+    worker.postMessage({ say: 'make', job, order });
+  };
+
+  const cancel = (job: number): void => {
+    const given = open.get(job);
+    if (!given) return;
+    open.delete(job);
+    worker?.terminate();
+    worker = null;
+    given.reject(new Error(CANCELLED));
+    for (const [other, { order }] of open) post(other, order);
+  };
+
   return {
     /** Loads what makes pages, ahead of the first order. */
     wake(fonts: string): void {
       worker ??= begin();
       worker.postMessage({ say: 'wake', fonts });
     },
-    make(order: DocumentOrder, onProgress: Order['onProgress']): Making {
+    make(order: DocumentOrder, onProgress: (doing: string, share: number) => void): Making {
       jobs += 1;
       const job = jobs;
-      worker ??= begin();
-      const made = new Promise<Made>((resolve, reject) => open.set(job, { onProgress, resolve, reject }));
-      worker.postMessage({ say: 'make', job, order });
-      return { made, cancel: () => void (open.has(job) && end(CANCELLED)) };
+      const made = new Promise<Made>((resolve, reject) =>
+        open.set(job, { order, onProgress, resolve, reject }),
+      );
+      post(job, order);
+      return { made, cancel: () => cancel(job) };
     },
   };
 }

@@ -39,8 +39,9 @@ export function usePreview(): {
 
   useEffect(() => {
     let alive = true;
+    const end = new AbortController();
     previewMaker().wake(fontsAddress());
-    solvedForDocuments(stores).then(
+    solvedForDocuments(stores, end.signal).then(
       (solved) => {
         if (!alive) return;
         setClean(solved);
@@ -52,6 +53,7 @@ export function usePreview(): {
     );
     return () => {
       alive = false;
+      end.abort(new Error(CANCELLED));
     };
   }, [stores]);
 
