@@ -69,7 +69,7 @@ export function makeCompile({ registry = KNOWN_KINDS, thresholds = RULES }: Comp
 
     const site = readSite(sketch.site);
     const surroundings = surround(list, basisRead, site, registry);
-    const limits = readThresholds(sketch.limits, thresholds);
+    const limits = readThresholds(sketch.limits, thresholds, surroundings.sitePressure_Pa);
     const ports = portsOfAll(sketch.streams);
     const sourceless = new Set(sketch.streams.flatMap((s) => (s.from ? [] : [s.id])));
     const known = new Set<string>(sketch.streams.map((s) => s.id));
@@ -80,7 +80,7 @@ export function makeCompile({ registry = KNOWN_KINDS, thresholds = RULES }: Comp
     const unitDrafts: AssumptionDraft[] = [];
     const reads: Read[] = [];
     const formerUnits = new Map(last?.problem.units.map((u) => [u.id, u]));
-    let usesPressure = false;
+    let usesPressure = limits.usesSitePressure;
     let usesWater = false;
 
     const units = sketch.units.map((unit): ProblemUnit => {

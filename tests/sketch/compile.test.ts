@@ -534,6 +534,16 @@ describe('limits that the sketch overrides', () => {
     const c = await compiled({ ...letDown(), limits: { 'valve/cools': 'much' } });
     expect(gapsOf(c)).toEqual(['sketch/not-a-quantity at limits.valve/cools']);
   });
+  test('a gauge threshold counts from the site, like every gauge pressure', async () => {
+    const vacuum = (sketch: Sketch): Sketch => ({ ...sketch, limits: { 'stream/vacuum': '0.1 barg' } });
+    const high = await compiled(vacuum(done(setSite(letDown(), 'pressure', '0.8 bar')).sketch));
+    expect(high.problem.limits['stream/vacuum']).toBeCloseTo(0.9 * BAR, 6);
+    const standard = await compiled(vacuum(letDown()));
+    expect(standard.problem.limits['stream/vacuum']).toBeCloseTo(0.1 * BAR + 101_325, 6);
+    expect(standard.assumptions.map((a) => a.path)).toContain('site.pressure');
+    const broken = await compiled(vacuum(done(setSite(letDown(), 'pressure', 'high')).sketch));
+    expect(gapsOf(broken)).toContain('sketch/needs-site-pressure at limits.stream/vacuum');
+  });
 });
 
 describe('what did not change keeps its identity', () => {

@@ -13,12 +13,23 @@ export interface Threshold {
 export interface ThresholdsRead {
   readonly limits: Readonly<Record<string, number>>;
   readonly gaps: readonly Finding[];
+  readonly usesSitePressure: boolean;
 }
 
-/** Thresholds that the sketch overrides, by finding code [SI], each in its own dimension. An unknown code is told. */
-export function readThresholds(limits: Sketch['limits'], known: readonly Threshold[]): ThresholdsRead {
+/**
+ * Thresholds that the sketch overrides, by finding code [SI], each in its own dimension. An unknown code is told.
+ *
+ * @param sitePressure_Pa  gauge thresholds count from it; undefined when the sketch's own cannot be read
+ */
+export function readThresholds(
+  limits: Sketch['limits'],
+  known: readonly Threshold[],
+  sitePressure_Pa: number | undefined,
+): ThresholdsRead {
   const out: [string, number][] = [];
   const gaps: Finding[] = [];
+  let usesSitePressure = false;
+  const site = sitePressure_Pa === undefined ? undefined : { P_Pa: sitePressure_Pa };
   for (const [code, typed] of Object.entries(limits ?? {})) {
     const at = { path: `limits.${code}` };
     const rule = known.find((r) => r.code === code);
@@ -26,10 +37,14 @@ export function readThresholds(limits: Sketch['limits'], known: readonly Thresho
       gaps.push(finding('sketch/unknown-limit', 'caution', at, word('code', code)));
       continue;
     }
-    const parsed = parseQuantity(typed, rule.dim);
-    if (parsed.ok) out.push([code, parsed.si]);
-    else
+    const parsed = parseQuantity(typed, rule.dim, site);
+    if (!parsed.ok) {
       gaps.push(finding('sketch/not-a-quantity', 'caution', at, ...refusalEvidence(String(typed), parsed)));
+      continue;
+    }
+    if (parsed.gauge) usesSitePressure = true;
+    if (parsed.gauge && !site) gaps.push(finding('sketch/needs-site-pressure', 'caution', at));
+    else out.push([code, parsed.si]);
   }
-  return { limits: Object.fromEntries(out), gaps };
+  return { limits: Object.fromEntries(out), gaps, usesSitePressure };
 }
