@@ -91,8 +91,9 @@ export function chemicalFaults(c: ChemicalData): string[] {
 }
 
 /**
- * Clapeyron's slope with a virial vapour (Pitzer & Curl 1957, as in Poling, Prausnitz & O'Connell, 5th ed., eq. 4-4)
- * within 4 %.
+ * Whether the tabulated heat of vaporisation agrees with Clapeyron's, Tb (v_gas - v_liquid) dP/dT at the normal boiling point,
+ * within 4 %: gas by the second virial coefficient, liquid by its tabulated density.
+ * Source of the coefficient: Tsonopoulos, AIChE J. 20 (1974) 263, his f(0) and f(1) for non-polar gases.
  */
 function slopeAgrees(
   id: string,
