@@ -45,11 +45,11 @@ const empty: ResultsState = {
 function merge<K extends string, T extends { readonly state: string }>(
   known: ReadonlyMap<K, Shown<T>>,
   changed: readonly (readonly [K, T])[],
-  gone: readonly string[],
+  gone: readonly K[],
 ): ReadonlyMap<K, Shown<T>> {
-  if (changed.length === 0 && !gone.some((id) => known.has(id as K))) return known;
+  if (changed.length === 0 && !gone.some((id) => known.has(id))) return known;
   const next = new Map(known);
-  for (const id of gone) next.delete(id as K);
+  for (const id of gone) next.delete(id);
   for (const [id, latest] of changed) {
     const before = known.get(id);
     const lastSolved = before && (before.latest.state === 'solved' ? before.latest : before.older);
@@ -66,8 +66,10 @@ export function createResultsStore() {
   return {
     ...store,
     take(edit: number, last: boolean, batch: SolveBatch, tookMs: number): void {
-      const streams = merge(get().streams, batch.streams, batch.gone);
-      const units = merge(get().units, batch.units, batch.gone);
+      const goneStreams = batch.gone.flatMap((g) => ('stream' in g ? [g.stream] : []));
+      const goneUnits = batch.gone.flatMap((g) => ('unit' in g ? [g.unit] : []));
+      const streams = merge(get().streams, batch.streams, goneStreams);
+      const units = merge(get().units, batch.units, goneUnits);
       set(
         last
           ? {

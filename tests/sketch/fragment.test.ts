@@ -53,6 +53,20 @@ describe('copying and pasting', () => {
     expect(at(made.sketch.streams.slice(n), 5)).toEqual(at(made.sketch.streams.slice(0, n), 0));
   });
 
+  test('keeps every end where a unit and a stream of a file have the same id', () => {
+    const sketch = letDown();
+    const [first] = sketch.streams;
+    const unit = sketch.units.at(-1)!;
+    const asStream = (id: string): string => (id === first!.id ? unit.id : id);
+    // Ids are the file's own affair: they are unique among units and among streams, not over both.
+    const twins = opened({ ...sketch, streams: sketch.streams.map((x) => ({ ...x, id: asStream(x.id) })) });
+    const made = done(pasteFragment(twins, part(twins, ...all(twins)), [0, 400]));
+    expect(isSound(made.sketch)).toBe(true);
+    expect(made.sketch.streams.filter((x) => x.to)).toHaveLength(
+      2 * sketch.streams.filter((x) => x.to).length,
+    );
+  });
+
   test('a stream that led outside comes along with a loose end, one that came from outside does not', () => {
     const sketch = letDown();
     const drum = sketch.units.find((unit) => unit.kind === 'drum')!;

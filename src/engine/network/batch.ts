@@ -1,16 +1,15 @@
 import type { StreamId, UnitId } from '../ids';
 import type { Found, Memory } from './memory';
-import type { SolveBatch, StreamResult, UnitResult } from './types';
+import type { Gone, SolveBatch, StreamResult, UnitResult } from './types';
 
 /**
- * What changed since the last hand-out, told by identity. On the last batch also the ids that are no more.
+ * What changed since the last hand-out, told by identity. On the last batch also what is no more.
  * Mutates: memory.posted.
  */
 export function batchOf(found: Found, memory: Memory, last = false): SolveBatch {
   const { posted } = memory;
   const streams: (readonly [StreamId, StreamResult])[] = [];
   const units: (readonly [UnitId, UnitResult])[] = [];
-  const gone: string[] = [];
   for (const [id, result] of found.streams) {
     if (posted.streams.get(id) === result) continue;
     posted.streams.set(id, result);
@@ -21,15 +20,18 @@ export function batchOf(found: Found, memory: Memory, last = false): SolveBatch 
     posted.units.set(id, result);
     units.push([id, result]);
   }
-  if (last) {
-    for (const kept of [posted.streams, posted.units] as const) {
-      const wanted: ReadonlyMap<string, unknown> = kept === posted.streams ? found.streams : found.units;
-      for (const id of kept.keys())
-        if (!wanted.has(id)) {
-          gone.push(id);
-          (kept as Map<string, unknown>).delete(id);
-        }
-    }
-  }
+  const gone: readonly Gone[] = last
+    ? [
+        ...dropped(posted.streams, found.streams).map((stream) => ({ stream })),
+        ...dropped(posted.units, found.units).map((unit) => ({ unit })),
+      ]
+    : [];
   return { streams, units, gone, findings: [] };
+}
+
+/** Takes out what is not found any more, and says which. Mutates: posted. */
+function dropped<K>(posted: Map<K, unknown>, found: ReadonlyMap<K, unknown>): readonly K[] {
+  const ids = [...posted.keys()].filter((id) => !found.has(id));
+  for (const id of ids) posted.delete(id);
+  return ids;
 }

@@ -151,12 +151,14 @@ export interface Closure extends UnitClosure {
   readonly byUnit: Readonly<Record<string, UnitClosure>>;
 }
 
+export type Gone = { readonly unit: UnitId } | { readonly stream: StreamId };
+
 /** One batch of what changed since the last batch. */
 export interface SolveBatch {
   readonly streams: readonly (readonly [StreamId, StreamResult])[];
   readonly units: readonly (readonly [UnitId, UnitResult])[];
-  /** Ids whose results no longer exist. */
-  readonly gone: readonly string[];
+  /** What has no results any more. A unit and a stream may have the same id: which of them is meant is said. */
+  readonly gone: readonly Gone[];
   /** On the last batch. */
   readonly closure?: Closure;
   /** All of this edit on the last batch; empty before. Reasons of unsolved units stand in their UnitResult as well. */

@@ -40,24 +40,28 @@ export function pasteFragment(
 ): Edit {
   const moved = shiftedBy(shift);
   const notes: Finding[] = [];
-  const ids = new Map<string, string>();
+  // A unit and a stream may have the same id.
+  const unitIds = new Map<UnitId, UnitId>();
+  const streamIds = new Map<StreamId, StreamId>();
   const units: SketchUnit[] = [];
   for (const unit of fragment.units) {
     const all = { units: [...sketch.units, ...units] };
     const kind = kindOf(registry, unit.kind);
     const id = nextUnitId(all);
     const tag = kind ? nextTag(all.units, kind) : freeTag(all.units, unit.tag);
-    ids.set(unit.id, id);
+    unitIds.set(unit.id, id);
     units.push({ ...without(unit, 'byHand'), id, tag, at: moved(unit.at) });
   }
-  const end = (ends: SketchStream['from']): SketchStream['from'] =>
-    ends && ids.has(ends[0]) ? [ids.get(ends[0]) as UnitId, ends[1]] : undefined;
+  const end = (ends: SketchStream['from']): SketchStream['from'] => {
+    const unit = ends && unitIds.get(ends[0]);
+    return ends && unit && [unit, ends[1]];
+  };
   const streams: SketchStream[] = [];
-  for (const { from, to, via, id: _, number: __, ...rest } of fragment.streams) {
+  for (const { from, to, via, id: copied, number: _, ...rest } of fragment.streams) {
     const all = [...sketch.streams, ...streams];
     const [a, b] = [end(from), end(to)];
     const id = nextStreamId(all);
-    ids.set(_, id);
+    streamIds.set(copied, id);
     streams.push({
       id,
       number: nextStreamNumber(all),
@@ -70,8 +74,11 @@ export function pasteFragment(
   const stays = new Set<string>(fragment.of === sketch.id ? sketch.streams.map((s) => s.id) : []);
   const settled = units.map((unit): SketchUnit => {
     const lost: string[] = [];
-    const settings = referring(unit.settings, '', lost, (stream) =>
-      ids.has(stream) ? ids.get(stream) : stays.has(stream) ? stream : undefined,
+    const settings = referring(
+      unit.settings,
+      '',
+      lost,
+      (stream) => streamIds.get(stream) ?? (stays.has(stream) ? stream : undefined),
     );
     for (const path of lost)
       notes.push(finding('sketch/reference-lost', 'note', { unit: unit.id, path }, word('tag', unit.tag)));
@@ -82,7 +89,7 @@ export function pasteFragment(
   for (const note of fragment.notes) {
     const id = nextNoteId([...sketch.notes, ...jotted]);
     const { on, at, ...rest } = note;
-    const onto = on === undefined ? undefined : ids.get(on);
+    const onto = unitIds.get(on as UnitId) ?? streamIds.get(on as StreamId);
     jotted.push({ ...rest, id, ...(onto ? { on: onto } : {}), ...(at ? { at: moved(at) } : {}) });
   }
   return {
