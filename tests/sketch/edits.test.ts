@@ -39,6 +39,7 @@ import {
   feedSketch,
   gapsOf,
   letDown,
+  opened,
   refusedWith,
   s,
   twoFlashes,
@@ -404,6 +405,34 @@ describe('the list of chemicals', () => {
     expect(edit.notes?.map((n) => n.code)).toEqual(['sketch/parts-removed']);
     expect(edit.sketch.units[0]?.settings.composition).not.toHaveProperty('parts.propane');
     expect(edit.sketch.units[1]).toBe(before.units[1]);
+  });
+  test('a setting that is called like a chemical is none of its entries', () => {
+    const own = { id: 'P', own: { name: 'product', MW: 60, Cp: [{ form: 'monatomic' }] } };
+    const before = opened({ ...letDown(), chemicals: [...letDown().chemicals, own] });
+    const edit = done(setChemicals(before, letDown().chemicals, { cleanUp: true }));
+    expect(edit.notes).toEqual([]);
+    expect(edit.sketch.units).toBe(before.units);
+  });
+  test('a reaction loses the chemical it counts by, when that is taken away', () => {
+    const before = opened({
+      ...letDown(),
+      units: [
+        {
+          id: 'r',
+          tag: 'R-101',
+          kind: 'reactor',
+          settings: { reactions: [{ stoichiometry: { propane: -1, methane: 3 }, of: 'propane' }] },
+        },
+      ],
+      streams: [],
+    });
+    const rest = before.chemicals.filter((c) => c !== 'propane');
+    const edit = done(setChemicals(before, rest, { cleanUp: true }));
+    expect(edit.sketch.units[0]?.settings).toEqual({ reactions: [{ stoichiometry: { methane: 3 } }] });
+    expect(edit.notes?.map((n) => n.at.path)).toEqual([
+      'reactions.0.stoichiometry.propane',
+      'reactions.0.of',
+    ]);
   });
   test('a part of zero is no use', () => {
     const sketch = done(setSetting(letDown(), u('u1'), 'composition.parts.propane', '0 %')).sketch;

@@ -3,8 +3,10 @@ import { parseQuantity } from '../../quantity';
 import { chemicalId } from '../compiling/air';
 import { finding, word } from '../findings';
 import { isObject, type JsonObject, sameJson } from '../json';
+import { KNOWN_KINDS, kindOf, type Registry } from '../registry';
 import type { Json, Sketch, SketchChemical, SketchUnit } from '../types';
 import { type Edit, refuse } from './edited';
+import { type Here, isAbout, stepInto, topOf } from './named';
 
 /**
  * Sets the list of chemicals; its order is the order everywhere. A chemical that settings still name cannot be taken off the
@@ -13,8 +15,9 @@ import { type Edit, refuse } from './edited';
 export function setChemicals(
   sketch: Sketch,
   chemicals: readonly SketchChemical[],
-  options: { readonly cleanUp?: boolean } = {},
+  options: { readonly cleanUp?: boolean; readonly registry?: Registry } = {},
 ): Edit {
+  const { registry = KNOWN_KINDS } = options;
   const ids = chemicals.map(chemicalId);
   const twice = ids.find((id, k) => ids.indexOf(id) !== k);
   if (twice !== undefined) return refuse('edit/chemical-twice', word('chemical', twice));
@@ -26,7 +29,10 @@ export function setChemicals(
   const notes: Finding[] = [];
   const units = sketch.units.map((unit): SketchUnit => {
     const gone: string[] = [];
-    const settings = removed.size === 0 ? unit.settings : strip(unit.settings, removed, '', gone);
+    const settings =
+      removed.size === 0
+        ? unit.settings
+        : strip(unit.settings, removed, '', gone, topOf(kindOf(registry, unit.kind)));
     for (const path of gone)
       notes.push(finding('sketch/parts-removed', 'note', { unit: unit.id, path }, word('tag', unit.tag)));
     return settings === unit.settings ? unit : { ...unit, settings };
@@ -51,28 +57,33 @@ export function setChemicals(
 }
 
 /** Settings without entries about these chemicals; the places of those that were not zero are listed. */
-function strip(value: JsonObject, ids: ReadonlySet<string>, path: string, gone: string[]): JsonObject {
+function strip(
+  value: JsonObject,
+  ids: ReadonlySet<string>,
+  path: string,
+  gone: string[],
+  at: Here,
+): JsonObject {
   let same = true;
   const entries = Object.entries(value).flatMap(([key, v]): [string, Json][] => {
     const here = path === '' ? key : `${path}.${key}`;
-    const named = ids.has(key) || (key === 'chemical' && typeof v === 'string' && ids.has(v));
-    if (named) {
+    if (isAbout(ids, at, key, v)) {
       same = false;
       if (!isZero(v)) gone.push(here);
       return [];
     }
-    const next = stripInside(v, ids, here, gone);
+    const next = stripInside(v, ids, here, gone, stepInto(at, key));
     if (next !== v) same = false;
     return [[key, next]];
   });
   return same ? value : Object.fromEntries(entries);
 }
 
-function stripInside(value: Json, ids: ReadonlySet<string>, path: string, gone: string[]): Json {
-  if (isObject(value)) return strip(value, ids, path, gone);
+function stripInside(value: Json, ids: ReadonlySet<string>, path: string, gone: string[], at: Here): Json {
+  if (isObject(value)) return strip(value, ids, path, gone, at);
   if (!Array.isArray(value)) return value;
   const items = value as readonly Json[];
-  const next = items.map((item, k) => stripInside(item, ids, `${path}.${k}`, gone));
+  const next = items.map((item, k) => stripInside(item, ids, `${path}.${k}`, gone, stepInto(at, String(k))));
   return next.every((item, k) => item === items[k]) ? value : next;
 }
 

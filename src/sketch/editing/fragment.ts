@@ -4,9 +4,10 @@ import { readJson } from '../file/text';
 import { FORMAT } from '../fresh';
 import { isObject, own } from '../json';
 import { openSketch } from '../read';
-import { KNOWN_KINDS, type Registry } from '../registry';
-import type { Json, Note, Sketch, SketchChemical, SketchStream, SketchUnit } from '../types';
+import { KNOWN_KINDS, kindOf, type Registry } from '../registry';
+import type { Note, Sketch, SketchChemical, SketchStream, SketchUnit } from '../types';
 import { without } from './edited';
+import { namesAny, topOf } from './named';
 
 export const FRAGMENT_FORMAT = 'splitwright.fragment';
 
@@ -29,6 +30,7 @@ export function copyPart(
   sketch: Sketch,
   units: ReadonlySet<UnitId>,
   notes: ReadonlySet<string> = new Set(),
+  registry: Registry = KNOWN_KINDS,
 ): Fragment | undefined {
   const chosen = sketch.units.filter((unit) => units.has(unit.id));
   const jotted = sketch.notes.filter(
@@ -44,22 +46,13 @@ export function copyPart(
     version: 1,
     of: sketch.id,
     chemicals: sketch.chemicals.filter((chemical) => {
-      const id = chemicalId(chemical);
-      return chosen.some((unit) => names(unit.settings, id));
+      const id = new Set([chemicalId(chemical)]);
+      return chosen.some((unit) => namesAny(id, unit.settings, topOf(kindOf(registry, unit.kind))));
     }),
     units: chosen,
     streams,
     notes: jotted,
   };
-}
-
-/** Whether settings name a chemical: as a key, or as the chemical of something. */
-export function names(value: Json, id: string): boolean {
-  if (Array.isArray(value)) return (value as readonly Json[]).some((item) => names(item, id));
-  if (!isObject(value)) return false;
-  return Object.entries(value).some(
-    ([key, v]) => key === id || (key === 'chemical' && v === id) || names(v, id),
-  );
 }
 
 export const fragmentText = (fragment: Fragment): string => JSON.stringify(fragment, null, 1);

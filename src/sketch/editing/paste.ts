@@ -116,7 +116,7 @@ export function duplicateUnits(
   noteIds: ReadonlySet<string> = new Set(),
   registry: Registry = KNOWN_KINDS,
 ): Edit {
-  const part = copyPart(sketch, units, noteIds);
+  const part = copyPart(sketch, units, noteIds, registry);
   if (!part) return { ok: true, sketch, label: 'duplicate' };
   return pasteFragment(sketch, part, shift, registry, 'duplicate');
 }

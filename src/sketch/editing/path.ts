@@ -33,7 +33,7 @@ const SHARE: SettingSpec = {
 };
 
 /** What may stand one step further inside; several where it depends on a choice made beside it. */
-function inside(spec: SettingSpec, key: string, kind: KindCatalogue): readonly SettingSpec[] {
+export function inside(spec: SettingSpec, key: string, kind: KindCatalogue): readonly SettingSpec[] {
   const field = (fields: Readonly<Record<string, SettingSpec>>): readonly SettingSpec[] => {
     const found = Object.hasOwn(fields, key) ? fields[key] : undefined;
     return found ? [found] : [];
