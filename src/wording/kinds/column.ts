@@ -120,6 +120,11 @@ export const column: KindWords = {
       says: 'Both duties together nearly repeat the energy balance: a small change of either moves the products far.',
       next: 'Fix one duty and a flow or a ratio instead.',
     },
+    'column/setting-idle': {
+      title: 'A setting without an end',
+      says: 'The {setting} is given, and the column has no end for it: it changes nothing.',
+      next: 'Clear the setting, or choose the end that it is for.',
+    },
     'column/efficiency-needs-vapour': {
       title: 'An efficiency without vapour from below',
       says: 'The lowest stage has an efficiency, but neither a reboiler nor a feed gives it vapour from below.',
@@ -155,6 +160,11 @@ export const column: KindWords = {
       says: 'The feeds hold {fed%} of the component, the products {top%} and {bottoms%}: the feed must lie between them.',
       next: 'Move one of the purities beyond that of the feed.',
     },
+    'column/duty-wrong-way': {
+      title: 'Heat the wrong way',
+      says: 'At the {end} {asked} {sense} is asked; a condenser takes heat away and a reboiler brings it.',
+      next: 'Turn the sign of the duty round; in files heat into the column is positive.',
+    },
     'column/dries': {
       title: 'A stage runs dry',
       says: 'The {phase} at {place} goes to nothing: the column cannot carry what is asked.',
@@ -180,10 +190,25 @@ export const column: KindWords = {
       says: 'The feeds bring {fed} of vapour; reflux ratio and distillate carry {carried} over the top.',
       next: 'Raise the reflux ratio or the distillate, or cool the feed.',
     },
+    'column/feed-in-two-liquids': {
+      title: 'A feed in two liquids',
+      says: 'The {port} would part in two liquids, the other mostly {chemical}. A column here holds one liquid, which may have no state at all where both are condensed.',
+      next: 'Leave {chemical} out of what is fed, or part it off before the column.',
+    },
     'column/stage-dries': {
       title: 'A stage nearly dry',
       says: 'The smallest flow of {phase} on a stage is {flow}, {share%} of the feed; below {limit%} a stage hardly works.',
       next: 'Change the reflux or the boil-up, or move the feed.',
+    },
+    'column/pressure-falls-downwards': {
+      title: 'Pressure falls downwards',
+      says: 'The pressure at {upper} is {upperPressure}, above the {lowerPressure} at {lower}: vapour would have to flow uphill.',
+      next: 'Let the pressures rise from the condenser down to the reboiler.',
+    },
+    'column/vapour-below-dew-point': {
+      title: 'A vapour below its dew point',
+      says: 'The {port} has {temperature}, {below} below its dew point: an efficiency keeps its stage from equilibrium. It is carried on as vapour, and a unit that flashes it finds some liquid.',
+      next: 'Put a heater of no duty behind it to see it in equilibrium, or leave that stage without an efficiency.',
     },
     'column/pinch': {
       title: 'A pinch',
@@ -197,12 +222,12 @@ export const column: KindWords = {
     },
     'column/near-critical': {
       title: 'Near the critical point',
-      says: 'On a stage the liquid is only {densityRatio} times as dense as the vapour; below {limit} an equation of state grows uncertain.',
+      says: 'At {place} the liquid is only {densityRatio} times as dense as the vapour; below {limit} an equation of state grows uncertain.',
       next: 'Lower the pressure.',
     },
     'column/too-near-critical': {
       title: 'Too near the critical point',
-      says: 'On a stage the liquid is only {densityRatio} times as dense as the vapour; below {limit} these numbers are not to be trusted.',
+      says: 'At {place} the liquid is only {densityRatio} times as dense as the vapour; below {limit} these numbers are not to be trusted.',
       next: 'Lower the pressure.',
     },
     'column/near-critical-pressure': {
@@ -222,7 +247,7 @@ export const column: KindWords = {
     },
     'column/second-liquid': {
       title: 'A second liquid in the column',
-      says: 'The liquid of a stage would part in two; the other is mostly {chemical}. The numbers are for one liquid.',
+      says: 'The liquid at {place} would part in two; the other is mostly {chemical}. The numbers are for one liquid.',
       next: 'Take water out before the column, or mistrust its profile.',
     },
   },

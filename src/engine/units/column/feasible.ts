@@ -70,6 +70,31 @@ function valueMisses(fixed: readonly Fixing[]): Impossible[] {
   });
 }
 
+/** Heat into a condenser, or out of a reboiler, where nothing is fed at that end and the pressure rises downwards. */
+function dutyMisses({ fixed, feeds, P_Pa }: ColumnTask): Impossible[] {
+  const foot = P_Pa.length - 1;
+  return fixed.flatMap((x, k): Impossible[] => {
+    if (x.fix !== 'duty') return [];
+    const [place, inwards, below] = x.at === 'condenser' ? [0, false, 1] : [foot, true, foot];
+    if (feeds.some((f) => f.place === place) || P_Pa[below - 1]! > P_Pa[below]!) return [];
+    if (inwards ? x.value > 0 : x.value < 0) return [];
+    return [
+      {
+        code: 'column/duty-wrong-way',
+        fixing: k,
+        evidence: [
+          { name: 'end', value: 0, dim: 'number', text: x.at },
+          { name: 'asked', value: Math.abs(x.value), dim: 'power' },
+          { name: 'sense', value: 0, dim: 'number', text: x.value < 0 ? 'removed' : 'added' },
+        ],
+      },
+    ];
+  });
+}
+
+/** What is left of a whole by rounding alone counts as nothing [-]. */
+const ROUNDING = 1e-12;
+
 /** A product's or draw's flow against all that is fed. */
 function flowMisses(task: ColumnTask, fed: Fed): Impossible[] {
   const found: Impossible[] = [];
@@ -82,7 +107,7 @@ function flowMisses(task: ColumnTask, fed: Fed): Impossible[] {
         draw: k,
         evidence: [amount('value', flow.value, flow.basis)],
       });
-    else if (drawn[flow.basis] >= fed.total(flow.basis))
+    else if (drawn[flow.basis] >= fed.total(flow.basis) * (1 - ROUNDING))
       found.push({
         code: 'column/product-above-feed',
         draw: k,
@@ -95,7 +120,7 @@ function flowMisses(task: ColumnTask, fed: Fed): Impossible[] {
   task.fixed.forEach((x, k) => {
     if (x.fix !== 'flow') return;
     const most = fed.total(x.flow.basis) - drawn[x.flow.basis];
-    if (x.flow.value < most) return;
+    if (x.flow.value < most * (1 - ROUNDING)) return;
     found.push({
       code: 'column/product-above-feed',
       fixing: k,
@@ -188,7 +213,7 @@ function purityMisses({ fixed, draws }: ColumnTask, fed: Fed): Impossible[] {
 
 /** What is impossible by balances alone, before anything is solved. */
 export function impossibleBy(task: ColumnTask): Impossible[] {
-  const wrong = valueMisses(task.fixed);
+  const wrong = [...valueMisses(task.fixed), ...dutyMisses(task)];
   if (wrong.length > 0) return wrong;
   const fed = fedOf(task);
   return [...flowMisses(task, fed), ...contentMisses(task, fed), ...purityMisses(task, fed)];

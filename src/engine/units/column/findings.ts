@@ -16,6 +16,7 @@ export const COLUMN_FINDINGS = [
   'column/side-without-stream',
   'column/no-feed',
   'column/both-duties',
+  'column/setting-idle',
   'column/efficiency-needs-vapour',
   // What balances alone forbid.
   'column/product-above-feed',
@@ -24,6 +25,7 @@ export const COLUMN_FINDINGS = [
   'column/not-positive',
   'column/more-than-fed',
   'column/purities-apart',
+  'column/duty-wrong-way',
   'pressure/not-positive',
   // Why a column that could be has no answer.
   'column/dries',
@@ -31,6 +33,7 @@ export const COLUMN_FINDINGS = [
   'column/out-of-reach',
   'column/not-found',
   'column/feed-vapour-above-top',
+  'column/feed-in-two-liquids',
   // What was found, where more than one answer is possible.
   'column/several-purities',
   'column/several-temperatures',
@@ -39,6 +42,8 @@ export const COLUMN_FINDINGS = [
   'column/stage-dries',
   'column/pinch',
   'column/feed-off-stage',
+  'column/pressure-falls-downwards',
+  'column/vapour-below-dew-point',
   'column/near-critical',
   'column/too-near-critical',
   'column/near-critical-pressure',

@@ -8,17 +8,23 @@ import type { Answer, Call, SiteSI } from '../types';
 import { topPort } from './free';
 import type { ColumnResults, Profile } from './results';
 import {
+  BELOW_DEW,
   DRIES,
   NEAR_CRITICAL,
   NEAR_CRITICAL_P,
   OFF_STAGE,
   PINCH,
+  PRESSURE_FALLS,
   SECOND_LIQUID,
   TOO_NEAR_CRITICAL,
 } from './rules';
 import type { ColumnSettings, PlaceSI } from './settings';
 
 const PINCH_K = 0.1;
+
+const placeWord = (place: PlaceSI): string => (typeof place === 'number' ? `stage ${place}` : `the ${place}`);
+const atPlace = (call: Call<unknown>, place: PlaceSI): Finding['at'] =>
+  typeof place === 'number' ? { unit: call.unit, stage: place } : { unit: call.unit };
 
 interface Seen {
   readonly call: Call<ColumnSettings>;
@@ -108,19 +114,79 @@ function feeds({ call, results }: Seen): Finding[] {
   return found;
 }
 
+/** Vapour rises from a higher pressure to a lower one; here the largest fall on the way down. */
+function pressureFalls({ call, results }: Seen): Finding[] {
+  const { condenser, reboiler, stages } = results;
+  const places: (readonly [PlaceSI, number])[] = [
+    ...(condenser ? [['condenser', condenser.P_Pa] as const] : []),
+    ...Array.from(stages.P_Pa, (P, k) => [k + 1, P] as const),
+    ...(reboiler ? [['reboiler', reboiler.P_Pa] as const] : []),
+  ];
+  let most = places[0]!;
+  let fall = 0;
+  let found: readonly [typeof most, typeof most] = [most, most];
+  for (const place of places) {
+    if (place[1] > most[1]) most = place;
+    if (most[1] - place[1] <= fall) continue;
+    fall = most[1] - place[1];
+    found = [most, place];
+  }
+  if (fall <= thresholdOf(PRESSURE_FALLS, call.limits)) return [];
+  const [upper, lower] = found;
+  const evidence = [
+    saw('upperPressure', upper[1], 'pressure'),
+    saw('lowerPressure', lower[1], 'pressure'),
+    named('upper', placeWord(upper[0])),
+    named('lower', placeWord(lower[0])),
+  ];
+  return [finding(PRESSURE_FALLS, { ...atPlace(call, lower[0]), path: 'pressure' }, evidence, call.limits)];
+}
+
+/** Vapours that leave stages with an efficiency: Murphree's relation may leave them below their dew point. */
+function belowDewPoint({ call }: Seen, out: Answer<ColumnResults>['out']): Finding[] {
+  const { settings, model, work, unit, limits } = call;
+  if (!settings.murphree?.length) return [];
+  const stages = new Map<string, number>();
+  if (settings.top.distillate === 'none') stages.set(topPort(settings), 1);
+  for (const [port, { stage, phase }] of Object.entries(settings.sides ?? {}))
+    if (phase === 'vapour') stages.set(port, stage);
+  const found: Finding[] = [];
+  for (const [port, stage] of stages) {
+    const stream = out[port];
+    if (!stream || stream.phases.length === 0) continue;
+    const dew = makeStream(model, stream.n_mol_s, { P_Pa: stream.P_Pa, vapourFraction: 1 }, work);
+    if (dew.state !== 'solved') continue;
+    const below = dew.value.T_K - stream.T_K;
+    if (below <= thresholdOf(BELOW_DEW, limits)) continue;
+    const evidence = [
+      saw('temperature', stream.T_K, 'temperature'),
+      saw('below', below, 'temperatureDifference'),
+      named('port', port),
+    ];
+    found.push(finding(BELOW_DEW, { unit, port, stage }, evidence, limits));
+  }
+  return found;
+}
+
 /** Liquid and vapour of nearly one density; else a pressure near the pseudo-critical one. */
 function nearCritical(seen: Seen): Finding[] {
   const { call, results } = seen;
-  const { densityRatio } = results.stages;
-  let stage = 0;
-  densityRatio.forEach((r, k) => {
-    if (r < densityRatio[stage]!) stage = k;
+  let least = Number.POSITIVE_INFINITY;
+  let place: PlaceSI = 1;
+  const look = (ratio: number, at: PlaceSI): void => {
+    if (ratio >= least) return;
+    least = ratio;
+    place = at;
+  };
+  results.stages.densityRatio.forEach((r, k) => {
+    look(r, k + 1);
   });
-  const least = densityRatio[stage]!;
+  if (results.condenser) look(results.condenser.densityRatio, 'condenser');
+  if (results.reboiler) look(results.reboiler.densityRatio, 'reboiler');
   const broken = [TOO_NEAR_CRITICAL, NEAR_CRITICAL].find((r) => least < thresholdOf(r, call.limits));
   if (!broken) return nearCriticalPressure(seen);
-  const evidence = [saw('densityRatio', least, 'number')];
-  return [finding(broken, { unit: call.unit, stage: stage + 1 }, evidence, call.limits)];
+  const evidence = [saw('densityRatio', least, 'number'), named('place', placeWord(place))];
+  return [finding(broken, atPlace(call, place), evidence, call.limits)];
 }
 
 function nearCriticalPressure({ call, results }: Seen): Finding[] {
@@ -157,27 +223,54 @@ function presentIn({ model }: Call<ColumnSettings>, x: Profile) {
   };
 }
 
-/** The first stage whose liquid would rather be two: each that might is tested a little above its bubble pressure. */
-function secondLiquid({ call, results }: Seen): Finding[] {
+/** A liquid somewhere in the column, over the chemicals that are present. */
+interface LiquidAt {
+  readonly place: PlaceSI;
+  readonly T_K: number;
+  readonly P_Pa: number;
+  readonly x: Float64Array;
+}
+
+/** The liquids from the top down: what is condensed is coldest, and there water parts first. */
+function liquidsOf({ call, results }: Seen, present: readonly number[]): LiquidAt[] {
   const { T_K, P_Pa, x } = results.stages;
+  const ids = present.map((i) => call.model.chemicals[i]!.id);
+  const found: LiquidAt[] = [];
+  const end = (place: 'condenser' | 'reboiler'): void => {
+    const at = results[place];
+    if (at) found.push({ place, T_K: at.T_K, P_Pa: at.P_Pa, x: Float64Array.from(ids, (id) => at.x[id]!) });
+  };
+  end('condenser');
+  for (let k = 0; k < T_K.length; k++)
+    found.push({ place: k + 1, T_K: T_K[k]!, P_Pa: P_Pa[k]!, x: Float64Array.from(ids, (id) => x[id]![k]!) });
+  end('reboiler');
+  return found;
+}
+
+/** The first place whose liquid would rather be two: each that might is tested a little above its bubble pressure. */
+function secondLiquid(seen: Seen): Finding[] {
+  const { call, results } = seen;
   const { model } = call;
-  const { present, thermo, profiles } = presentIn(call, x);
-  const here = new Float64Array(present.length);
-  for (let k = 0; k < T_K.length; k++) {
-    for (let p = 0; p < here.length; p++) here[p] = profiles[p]![k]!;
-    if (isOneLiquid(thermo, T_K[k]!, here)) continue;
+  const { present, thermo } = presentIn(call, results.stages.x);
+  for (const { place, T_K, P_Pa, x } of liquidsOf(seen, present)) {
+    if (isOneLiquid(thermo, T_K, x)) continue;
     const n = new Float64Array(model.nc);
-    for (let p = 0; p < here.length; p++) n[present[p]!] = here[p]!;
-    const state = makeStream(model, n, { T_K: T_K[k]!, P_Pa: 1.001 * P_Pa[k]! }, call.work);
+    for (let p = 0; p < x.length; p++) n[present[p]!] = x[p]!;
+    const state = makeStream(model, n, { T_K, P_Pa: 1.001 * P_Pa }, call.work);
     const other = state.state === 'solved' ? state.value.hiddenLiquid : undefined;
     if (!other) continue;
     let most = 0;
     other.forEach((v, i) => {
       if (v > other[most]!) most = i;
     });
-    const id = model.chemicals[most]!.id;
-    const seen = { name: 'chemical', value: other[most]!, dim: 'fraction', text: id } as const;
-    return [finding(SECOND_LIQUID, { unit: call.unit, stage: k + 1 }, [seen], call.limits)];
+    const chemical = {
+      name: 'chemical',
+      value: other[most]!,
+      dim: 'fraction',
+      text: model.chemicals[most]!.id,
+    } as const;
+    const evidence = [chemical, named('place', placeWord(place))];
+    return [finding(SECOND_LIQUID, atPlace(call, place), evidence, call.limits)];
   }
   return [];
 }
@@ -190,6 +283,8 @@ export function columnLimits(
   const seen = { call, results };
   const found = [
     ...feeds(seen),
+    ...pressureFalls(seen),
+    ...belowDewPoint(seen, out),
     ...dries(seen),
     ...pinch(seen),
     ...nearCritical(seen),

@@ -16,6 +16,8 @@ export interface EndResults {
   readonly y: Readonly<Record<string, number>>;
   readonly hL_J_mol: number;
   readonly hV_J_mol: number;
+  /** As on the stages; of a total condenser at its bubble point [-]. */
+  readonly densityRatio: number;
 }
 
 export interface ColumnResults {
@@ -99,6 +101,7 @@ export function resultsOf(
     y: at(s.v, s.V, j),
     hL_J_mol: s.leaving(j).h_J_mol,
     hV_J_mol: s.vap[j]!.h_J_mol,
+    densityRatio: densityRatio(s, j),
   });
   const foot = s.places - 1;
   const distillate_mol_s = s.totalCondenser ? s.L[0]! * s.p[0]! : s.V[0]!;

@@ -10,11 +10,29 @@ export const NEAR_CRITICAL = rule('column/near-critical', 'caution', 4, 'number'
 export const TOO_NEAR_CRITICAL = rule('column/too-near-critical', 'beyond-limit', 2.5, 'number');
 /** Pressure of a stage by the pseudo-critical pressure of its liquid (mole-fraction average). */
 export const NEAR_CRITICAL_P = rule('column/near-critical-pressure', 'caution', 0.85, 'fraction');
+/** By how much a place lies above the pressure of one below it, to which its vapour would have to flow uphill. */
+export const PRESSURE_FALLS = rule(
+  'column/pressure-falls-downwards',
+  'beyond-limit',
+  1e3,
+  'pressureDifference',
+  'balance',
+);
+/** How far a vapour leaves below its dew point, which an efficiency of its stage may bring about. */
+export const BELOW_DEW = rule(
+  'column/vapour-below-dew-point',
+  'note',
+  0.5,
+  'temperatureDifference',
+  'own-rule',
+);
 export const SECOND_LIQUID = rule('column/second-liquid', 'beyond-limit', 0, 'number', 'phase-stability');
 export const COLUMN_RULES: readonly Rule[] = [
   DRIES,
   PINCH,
   OFF_STAGE,
+  PRESSURE_FALLS,
+  BELOW_DEW,
   NEAR_CRITICAL,
   TOO_NEAR_CRITICAL,
   NEAR_CRITICAL_P,

@@ -107,9 +107,8 @@ function reason(
     );
   }
   const vapour = carriedShort(job.task);
-  return vapour
-    ? [refuse(call, 'column/feed-vapour-above-top', { path: 'fixedBy' }, vapour), ...found]
-    : found;
+  if (vapour) found.unshift(refuse(call, 'column/feed-vapour-above-top', { path: 'fixedBy' }, vapour));
+  return [...feedsInTwoLiquids(call, job), ...found];
 }
 
 /** What was asked and what was reached instead, each in its own dimension. */
@@ -142,6 +141,40 @@ const CODES: Readonly<Record<Failure['why'], Finding['code']>> = {
   'out-of-reach': 'column/out-of-reach',
   'no-convergence': 'column/not-found',
 };
+
+/** Feeds that would part in two liquids: with one liquid only, what is condensed of them often has no state at all. */
+const feedsInTwoLiquids = (call: Call<ColumnSettings>, { feedPorts }: ColumnJob): Finding[] =>
+  feedPorts.flatMap((port) => {
+    const other = call.in[port]!.hiddenLiquid;
+    if (!other) return [];
+    let most = 0;
+    other.forEach((x, i) => {
+      if (x > other[most]!) most = i;
+    });
+    const chemical: Evidence = {
+      name: 'chemical',
+      value: other[most]!,
+      dim: 'fraction',
+      text: call.model.chemicals[most]!.id,
+    };
+    return [refuse(call, 'column/feed-in-two-liquids', { port }, [chemical])];
+  });
+
+/** Settings of ends that the column does not have, which change nothing. */
+function idleSettings(call: Call<ColumnSettings>): Finding[] {
+  const { subcooling, top, bottom, pressure } = call.settings;
+  const idle = [
+    ...(subcooling !== undefined && subcooling > 0 && top.distillate !== 'liquid' ? ['subcooling'] : []),
+    ...(pressure.condenser !== undefined && top.distillate === 'none' ? ['pressure.condenser'] : []),
+    ...(pressure.reboiler !== undefined && !bottom.reboiler ? ['pressure.reboiler'] : []),
+  ];
+  return idle.map((path) => ({
+    code: 'column/setting-idle',
+    weight: 'note',
+    at: { unit: call.unit, path },
+    evidence: [],
+  }));
+}
 
 /** Reflux ratio and distillate that carry less over the top than the feeds bring as vapour. */
 function carriedShort(task: ColumnTask): Evidence[] | undefined {
@@ -203,7 +236,7 @@ function solve(call: Call<ColumnSettings>): Outcome<Answer<ColumnResults>> {
   const notes: Finding[] = bothDuties(call.settings)
     ? [{ code: 'column/both-duties', weight: 'note', at: { unit: call.unit, path: 'fixedBy' }, evidence: [] }]
     : [];
-  notes.push(...severalAnswers(call, job, end.system, end.slope));
+  notes.push(...idleSettings(call), ...severalAnswers(call, job, end.system, end.slope));
   return solved(answer(call, job, end.system, work, end), notes);
 }
 
