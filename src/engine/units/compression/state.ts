@@ -216,7 +216,10 @@ export interface PathFound {
 
 /**
  * The polytropic efficiency that leads from what enters to what leaves, both one gas phase: secant steps on the path itself,
- * from the ideal gas' answer times `toIdeal`. Undefined where it cannot be told.
+ * from the ideal gas' answer times `toIdeal`.
+ *
+ * @returns  undefined where it cannot be told: two phases, no entropy, no change of pressure, a path that breaks off, or one
+ *           whose work is not met in eight steps to 1e-6
  */
 export function polytropicPath(
   e: Entering,
@@ -245,11 +248,13 @@ export function polytropicPath(
     const slope = pass === 0 ? (miss + wanted) / factor : (miss - lastMiss) / (factor - last);
     last = factor;
     lastMiss = miss;
-    if (miss === 0) break;
-    factor -= miss / slope;
+    if (miss !== 0) factor -= miss / slope;
     // That step leaves no more than a tenth of what it found.
-    if (Math.abs(miss) < 1e-6 * Math.abs(wanted)) break;
+    if (Math.abs(miss) > 1e-6 * Math.abs(wanted)) continue;
+    const efficiency = up ? 1 / factor : factor;
+    return efficiency > 0 && Number.isFinite(efficiency)
+      ? { efficiency, toIdeal: factor / start }
+      : undefined;
   }
-  const efficiency = up ? 1 / factor : factor;
-  return efficiency > 0 && Number.isFinite(efficiency) ? { efficiency, toIdeal: factor / start } : undefined;
+  return undefined;
 }
