@@ -4,6 +4,7 @@ import type { ReportInput } from '../report/input';
 import { writeSketch } from '../sketch/write';
 import type { Stores } from '../store/react';
 import { solveFromNothing } from './cleanSolve';
+import { inStep } from './inStep';
 
 declare const __APP_VERSION__: string;
 
@@ -22,8 +23,8 @@ export async function cleanReportInput(
   stores: Stores,
   signal?: AbortSignal,
 ): Promise<ReportInput | undefined> {
-  const { sketch } = stores.sketch.getState();
-  const { basis, problem, gaps, notes, assumptions } = stores.compiled.getState();
+  const { sketch, compiled } = await inStep(stores, signal);
+  const { basis, problem, gaps, notes, assumptions } = compiled;
   if (!basis || !problem) return undefined;
   const live = new Map([...stores.results.getState().streams].map(([id, shown]) => [id, shown.latest]));
   const [clean, citations, print] = await Promise.all([

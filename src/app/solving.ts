@@ -3,32 +3,46 @@ import { loadBankData } from '../sketch/bank';
 import { type BankData, makeCompile, neededChemicals } from '../sketch/compile';
 import { afterPaint, markOnce, markShown } from '../store/marks';
 import type { Stores } from '../store/react';
-import { connectSolver, type SolverClient } from '../store/solverClient';
+import { connectSolver, type SolverClient, type WorkerLike } from '../store/solverClient';
 import { takeWorker } from './solverWorker';
 
 /** The solver is warmed up when the page is idle, or after this [ms]. */
 const IDLE_MS = 500;
 
+const NO_DATA =
+  'The data of the chemicals could not be fetched. Load the page again with a network; the sketch is kept.';
+
 /**
  * Keeps the results answering the document: compiles each new document (memoised), loads chemicals of the bank that it
  * newly names, and sends the problem to the worker. What changes no number (a label moved) is not sent.
  */
-export function startSolving(stores: Stores, make: () => Worker = takeWorker): SolverClient {
+export function startSolving(
+  stores: Stores,
+  make: () => WorkerLike = takeWorker,
+  load: typeof loadBankData = loadBankData,
+): SolverClient {
   const compile = makeCompile();
   let data: BankData | null = null;
   let loadedFor = '';
   let sent: Problem | null = null;
+  /** Edit with which the sketch that is shown came. */
+  let since = 0;
   const started = new Map<number, number>();
+  /** An answer to another sketch, which may have the same ids, comes too late. A copy is sent as the problem it is a copy of. */
+  const isLate = (edit: number): boolean => edit < since && edit !== sent?.edit;
 
   const client = connectSolver(make, {
     results: (edit, last, batch) => {
+      if (isLate(edit)) return;
       const begun = started.get(edit);
       stores.results.take(edit, last, batch, begun === undefined ? 0 : performance.now() - begun);
       if (!last) return;
       for (const known of started.keys()) if (known <= edit) started.delete(known);
       if (edit === sent?.edit) answered(stores.compiled.getState().edit);
     },
-    at: (edit, unit, loop) => stores.results.at(edit, unit, loop ?? null),
+    at: (edit, unit, loop) => {
+      if (!isLate(edit)) stores.results.at(edit, unit, loop ?? null);
+    },
     broke: (_edit, message, unit) => {
       const tag = stores.sketch.getState().sketch.units.find((u) => u.id === unit)?.tag;
       stores.results.broke(
@@ -54,16 +68,34 @@ export function startSolving(stores: Stores, make: () => Worker = takeWorker): S
     const { sketch, edit } = stores.sketch.getState();
     const needed = neededChemicals(sketch).join();
     if (!data || needed !== loadedFor) {
-      void loadBankData(sketch).then((loaded) => {
-        if (neededChemicals(stores.sketch.getState().sketch).join() !== needed) return;
-        data = loaded;
-        loadedFor = needed;
-        run();
-      });
+      const isWanted = (): boolean => neededChemicals(stores.sketch.getState().sketch).join() === needed;
+      load(sketch).then(
+        (loaded) => {
+          if (!isWanted()) return;
+          data = loaded;
+          loadedFor = needed;
+          run();
+        },
+        (error: unknown) => {
+          if (!isWanted()) return;
+          const trouble = `${NO_DATA} (${error instanceof Error ? error.message : error})`;
+          stores.compiled.setState({ trouble });
+          stores.results.broke(trouble);
+        },
+      );
       return;
     }
     const { basis, problem, gaps, notes, assumptions } = compile(sketch, data, edit);
-    stores.compiled.setState({ edit, basis: basis ?? null, problem, gaps, notes, assumptions, loading: [] });
+    stores.compiled.setState({
+      edit,
+      basis: basis ?? null,
+      problem,
+      gaps,
+      notes,
+      assumptions,
+      loading: [],
+      trouble: undefined,
+    });
     // Results may have been cleared (another file, a model that cannot be solved) while the worker remembers handing them out.
     const blank = problem.units.length > 0 && stores.results.getState().units.size === 0;
     if (problem === sent && !blank) {
@@ -82,6 +114,7 @@ export function startSolving(stores: Stores, make: () => Worker = takeWorker): S
   };
 
   stores.sketch.subscribe((state, before) => {
+    if (state.sketch.id !== before.sketch.id) [since, sent] = [state.edit, null];
     if (state.sketch !== before.sketch) run();
   });
   run();

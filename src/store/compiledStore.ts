@@ -14,6 +14,8 @@ export interface CompiledState {
   readonly assumptions: readonly Assumption[];
   /** Chemicals the bank could not give yet (still loading), by id. */
   readonly loading: readonly string[];
+  /** Why the data of the sketch's chemicals could not be had; then what stands here is not of the sketch that is shown. */
+  readonly trouble?: string | undefined;
 }
 
 export function createCompiledStore() {
