@@ -1,7 +1,7 @@
 import type { Phase } from '../equilibrium/types';
 import { heatCapacityRatio } from '../thermo/transport';
 import type { Model, PhaseProps, ThermoModel } from '../thermo/types';
-import { presentOf } from './present';
+import { presentOf } from '../units/present';
 
 /** Scratch by model: what an evaluation writes into is large. */
 const kept = new WeakMap<ThermoModel, PhaseProps>();

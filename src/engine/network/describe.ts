@@ -1,8 +1,8 @@
 import type { Phase, StreamState } from '../equilibrium/types';
 import type { Model } from '../thermo/types';
+import { phaseVolume_m3_mol } from '../units/volume';
 import { capacityRatio } from './capacityRatio';
 import { type ClosureData, idealDatum_W } from './closure';
-import { presentOf } from './present';
 import { standardLiquid_m3_s } from './standardLiquid';
 import type { PhaseResult, StreamResult } from './types';
 import { phaseViscosity } from './viscosity';
@@ -14,14 +14,6 @@ function molarMass_kg_mol(x: Float64Array, data: ClosureData): number {
   return MW;
 }
 
-/** Volume of a phase as it is shown [m3/mol]: a liquid's by the liquid-volume method, unless the model says its own. */
-function shownVolume_m3_mol(phase: Phase, stream: StreamState, model: Model): number {
-  if (phase.kind !== 'liquid' && phase.kind !== 'liquid2') return phase.v_m3_mol;
-  if (model.spec.liquidVolume === 'cubic') return phase.v_m3_mol;
-  const { thermo, x } = presentOf(phase.x, model);
-  return thermo.liquidVolume_m3_mol(stream.T_K, stream.P_Pa, x);
-}
-
 function describePhase(
   phase: Phase,
   stream: StreamState,
@@ -29,7 +21,7 @@ function describePhase(
   data: ClosureData,
 ): { result: PhaseResult; v_m3_mol: number } {
   const MW = molarMass_kg_mol(phase.x, data);
-  const v_m3_mol = shownVolume_m3_mol(phase, stream, model);
+  const v_m3_mol = phaseVolume_m3_mol(phase, stream, model);
   const cpOverCv = capacityRatio(phase, stream.T_K, stream.P_Pa, model);
   const viscosity = phaseViscosity(phase, stream.T_K, model);
   const result: PhaseResult = {

@@ -5,6 +5,7 @@ import type { Finding } from '../outcome';
 import type { Model } from '../thermo/types';
 import { PAIR_NONE, PAIR_PREDICTED } from '../units/limits/pairs';
 import { finding, named, type Overrides, saw, thresholdOf } from '../units/limits/rule';
+import { totalOf } from '../units/total';
 import { farPairs, type Shares } from './farPairs';
 
 /** Dissolved gases and water tell on phase equilibrium at a tenth of the share. */
@@ -62,8 +63,7 @@ export function pairLimits(
   const unsure = model.spec.pairs.filter((p) => p.origin === 'none' || p.origin === 'predicted');
   if (unsure.length === 0) return [];
   const shares = streams.map(([id, s]) => {
-    let total = 0;
-    for (const n of s.n_mol_s) total += n;
+    const total = totalOf(s.n_mol_s);
     return { id, z: total > 0 ? s.n_mol_s.map((n) => n / total) : s.n_mol_s };
   });
   const found: Finding[] = [];

@@ -2,6 +2,7 @@ import { makeStream, type StreamCondition } from '../equilibrium/stream';
 import type { FlashWarm, StreamState } from '../equilibrium/types';
 import { type Finding, noSolution, type Outcome, solved } from '../outcome';
 import type { PressureSI } from './groups';
+import { placesOf } from './present';
 import { totalOf } from './total';
 import type { Call } from './types';
 
@@ -122,8 +123,7 @@ export interface WarmState extends FlashWarm {
 
 export function warmOf(stream: StreamState): WarmState {
   const { T_K, P_Pa, vapourFraction, n_mol_s, phases } = stream;
-  const present: number[] = [];
-  for (let i = 0; i < n_mol_s.length; i++) if (n_mol_s[i]! > 0) present.push(i);
+  const present = placesOf(n_mol_s);
   const [vapour, liquid] = phases;
   if (vapour?.kind !== 'vapour' || liquid?.kind !== 'liquid') return { T_K, P_Pa, present };
   const K = new Float64Array(present.length);

@@ -1,18 +1,17 @@
 import type { Phase, StreamState } from '../equilibrium/types';
 import type { Model } from '../thermo/types';
+import { presentOf } from './present';
 import { totalOf } from './total';
 
 /** Standard acceleration of gravity [m/s2], exact by definition. */
 export const GRAVITY_m_s2 = 9.80665;
 
 /** Volume of one phase [m3/mol]: a liquid's by the liquid-volume method unless the model's own was chosen; else the model's own. */
-function phaseVolume_m3_mol(phase: Phase, stream: StreamState, model: Model): number {
+export function phaseVolume_m3_mol(phase: Phase, stream: StreamState, model: Model): number {
   if (phase.kind !== 'liquid' && phase.kind !== 'liquid2') return phase.v_m3_mol;
   if (model.spec.liquidVolume === 'cubic') return phase.v_m3_mol;
-  const present: number[] = [];
-  for (let i = 0; i < phase.x.length; i++) if (phase.x[i]! > 0) present.push(i);
-  const x = Float64Array.from(present, (i) => phase.x[i]!);
-  return model.of(present).liquidVolume_m3_mol(stream.T_K, stream.P_Pa, x);
+  const { thermo, x } = presentOf(phase.x, model);
+  return thermo.liquidVolume_m3_mol(stream.T_K, stream.P_Pa, x);
 }
 
 /** Actual volume flow of a stream, all phases [m3/s]; 0 without flow. */

@@ -1,5 +1,6 @@
 import { loadIndex } from '../../data/bank';
-import { type ElementCounts, elementCounts } from '../../engine/chemicals/elements';
+import { elementCounts, sameElements } from '../../engine/chemicals/elements';
+import { GASES, type GasKey } from '../../engine/chemicals/gases';
 import type { SettingSpec } from '../../engine/units/types';
 import { isObject, own } from '../json';
 import { kindOf, type Registry } from '../registry';
@@ -17,19 +18,15 @@ export const AIR_OF: Readonly<Record<AirPreset, readonly AirKey[]>> = {
   'humid air': ['N2', 'O2', 'Ar', 'CO2', 'H2O'],
 };
 
-/** What ready-made air is made of, and what combustion takes and makes. */
-type GasKey = AirKey | 'SO2' | 'HCl';
-
-const GASES: Readonly<
-  Record<GasKey, { readonly id: string; readonly cas: string; readonly elements: ElementCounts }>
-> = {
-  N2: { id: 'nitrogen', cas: '7727-37-9', elements: { N: 2 } },
-  O2: { id: 'oxygen', cas: '7782-44-7', elements: { O: 2 } },
-  Ar: { id: 'argon', cas: '7440-37-1', elements: { Ar: 1 } },
-  CO2: { id: 'carbon-dioxide', cas: '124-38-9', elements: { C: 1, O: 2 } },
-  H2O: { id: 'water', cas: '7732-18-5', elements: { H: 2, O: 1 } },
-  SO2: { id: 'sulfur-dioxide', cas: '7446-09-5', elements: { S: 1, O: 2 } },
-  HCl: { id: 'hydrogen-chloride', cas: '7647-01-0', elements: { H: 1, Cl: 1 } },
+/** What the bank calls these gases. */
+const BANK_ID: Readonly<Record<GasKey, string>> = {
+  N2: 'nitrogen',
+  O2: 'oxygen',
+  Ar: 'argon',
+  CO2: 'carbon-dioxide',
+  H2O: 'water',
+  SO2: 'sulfur-dioxide',
+  HCl: 'hydrogen-chloride',
 };
 const KEYS: readonly GasKey[] = ['N2', 'O2', 'Ar', 'CO2', 'H2O', 'SO2', 'HCl'];
 /** What becomes of an element that burns. */
@@ -62,7 +59,7 @@ export function fullList(sketch: Pick<Sketch, 'chemicals' | 'units'>, registry: 
   const added: string[] = [];
   const forCombustion = new Set<string>();
   for (const key of KEYS) {
-    const { id } = GASES[key];
+    const id = BANK_ID[key];
     places[key] = place(sketch.chemicals, key);
     const wanted = forAir.has(key) || forFire.has(key);
     // An own chemical under the bank's name that is something else keeps the name; then the gas cannot be had.
@@ -91,22 +88,14 @@ function combustionNeeds(chemicals: readonly SketchChemical[]): ReadonlySet<GasK
 }
 
 function place(chemicals: readonly SketchChemical[], key: GasKey): number {
-  const { id, cas, elements } = GASES[key];
-  const byCas = chemicals.findIndex((c) => (typeof c === 'string' ? c === id : c.own.cas === cas));
+  const { cas, elements } = GASES[key];
+  const byCas = chemicals.findIndex((c) => (typeof c === 'string' ? c === BANK_ID[key] : c.own.cas === cas));
   if (byCas >= 0) return byCas;
-  return chemicals.findIndex(
-    (c) =>
-      typeof c !== 'string' &&
-      c.own.cas === undefined &&
-      c.own.formula !== undefined &&
-      sameElements(elementCounts(c.own.formula), elements),
-  );
-}
-
-function sameElements(a: ElementCounts | undefined, b: ElementCounts): boolean {
-  if (a === undefined) return false;
-  const keys = Object.keys(a);
-  return keys.length === Object.keys(b).length && keys.every((k) => a[k] === b[k]);
+  return chemicals.findIndex((c) => {
+    if (typeof c === 'string' || c.own.cas !== undefined || c.own.formula === undefined) return false;
+    const atoms = elementCounts(c.own.formula);
+    return atoms !== undefined && sameElements(atoms, elements);
+  });
 }
 
 export const isPreset = (value: Json | undefined): value is AirPreset =>

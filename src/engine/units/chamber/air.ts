@@ -1,8 +1,8 @@
+import { gasPlaces } from '../../chemicals/gases';
 import type { StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { airFractions } from '../air';
 import { named, saw } from '../limits/rule';
-import { gasPlaces } from '../reaction/places';
 import { emptyStream, streamAt, totalOf, warmFrom } from '../streams';
 import type { Call, FlowSI } from '../types';
 import { massFlow_kg_s } from '../volume';

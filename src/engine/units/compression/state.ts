@@ -1,6 +1,7 @@
 import type { FlashWarm, StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import type { ThermoModel } from '../../thermo/types';
+import { placesOf } from '../present';
 import { streamAt, totalOf, type WarmState, warmFrom, warmOf } from '../streams';
 import type { Call } from '../types';
 import { followPath, gasVolumes } from './path';
@@ -49,8 +50,7 @@ export function entering(call: Call<unknown>, stream: StreamState): Entering {
   const total_mol_s = totalOf(stream.n_mol_s);
   const common = { stream, total_mol_s, h_J_mol: stream.H_W / total_mol_s };
   if (!isOneGas(stream)) return common;
-  const present: number[] = [];
-  for (let i = 0; i < stream.n_mol_s.length; i++) if (stream.n_mol_s[i]! > 0) present.push(i);
+  const present = placesOf(stream.n_mol_s);
   const x = Float64Array.from(present, (i) => stream.n_mol_s[i]! / total_mol_s);
   return { ...common, gas: { thermo: call.model.of(present), x } };
 }

@@ -1,3 +1,4 @@
+import { GASES } from '../../chemicals/gases';
 import type { StreamState } from '../../equilibrium/types';
 import type { Model } from '../../thermo/types';
 
@@ -24,7 +25,7 @@ export function fuelShareOfLimit(stream: StreamState, model: Model): FuelShare {
   let chemical: string | undefined;
   model.chemicals.forEach((c, i) => {
     const y = gas.x[i]!;
-    if (c.cas === '7782-44-7') oxygen += y;
+    if (c.cas === GASES.O2.cas) oxygen += y;
     if (c.LFL === undefined || c.LFL <= 0 || y === 0) return;
     const part = y / c.LFL;
     share += part;

@@ -2,6 +2,7 @@ import type { StreamState } from '../../equilibrium/types';
 import type { UnitId } from '../../ids';
 import type { Finding } from '../../outcome';
 import type { Model } from '../../thermo/types';
+import { totalOf } from '../total';
 import type { SiteSI } from '../types';
 import { finding, named, type Overrides, type Rule, rule, saw, thresholdOf } from './rule';
 
@@ -43,8 +44,7 @@ const STYRENES = new Set(['100-42-5', '98-83-9']);
 
 /** The first present chemical that polymerises when warm, above a trace of 0.01 mol %. */
 function polymerising(stream: StreamState, model: Model): string | undefined {
-  let total = 0;
-  for (const n of stream.n_mol_s) total += n;
+  const total = totalOf(stream.n_mol_s);
   return model.chemicals.find(
     (c, i) =>
       stream.n_mol_s[i]! > 1e-4 * total &&

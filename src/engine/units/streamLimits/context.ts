@@ -1,7 +1,9 @@
+import { GASES } from '../../chemicals/gases';
 import type { Phase, StreamState } from '../../equilibrium/types';
 import type { Place } from '../../outcome';
 import type { Model } from '../../thermo/types';
 import type { Overrides } from '../limits/rule';
+import { totalOf } from '../total';
 
 /** What a stream's limits look at. */
 export interface StreamContext {
@@ -19,8 +21,7 @@ export const flowing = (stream: StreamState, kind: Phase['kind']): Phase | undef
 
 /** Overall mole fraction of chemical i [-]. */
 export function fractionOf(stream: StreamState, i: number): number {
-  let total = 0;
-  for (const n of stream.n_mol_s) total += n;
+  const total = totalOf(stream.n_mol_s);
   return total > 0 ? stream.n_mol_s[i]! / total : 0;
 }
 
@@ -33,5 +34,6 @@ export function fractionByCas(c: StreamContext, cas: ReadonlySet<string>): numbe
   return sum;
 }
 
-export const CAS_WATER = '7732-18-5';
-export const CAS_CO2 = '124-38-9';
+/** CAS numbers of what limits look for. */
+export const CAS_WATER = GASES.H2O.cas;
+export const CAS_CO2 = GASES.CO2.cas;

@@ -2,6 +2,7 @@ import type { ChemicalData, CorrProperty } from '../../chemicals/types';
 import type { Finding } from '../../outcome';
 import { outside_K } from '../../thermo/pure/curve';
 import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { totalOf } from '../total';
 import { flowing, type StreamContext } from './context';
 
 /** Distance outside a correlation's own range [K]: any, from the first threshold, from the second. */
@@ -47,8 +48,7 @@ interface Outside {
 /** The worst of the correlations that a stream reads; undefined when all hold. */
 function worstOf(c: StreamContext): Outside | undefined {
   const { stream, model } = c;
-  let total = 0;
-  for (const n of stream.n_mol_s) total += n;
+  const total = totalOf(stream.n_mol_s);
   const gasOnly = stream.phases.every((p) => p.kind === 'vapour');
   const properties = gasOnly ? (['ideal_gas_cp'] as const) : propertiesRead(c);
   const liquid = readsDensity(c) ? flowing(stream, 'liquid') : undefined;

@@ -1,6 +1,7 @@
 import type { StreamState } from '../../equilibrium/types';
 import { noSolution, type Outcome, solved } from '../../outcome';
 import { answerOf } from '../answer';
+import { placesOf } from '../present';
 import { emptyStream, outletPressure, streamAt, totalOf, warmFrom } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { valveLimits } from './limits';
@@ -17,8 +18,7 @@ const ABOVE = 0.1;
 function startT_K(call: Call<ValveSettings>, inlet: StreamState, P_Pa: number): number {
   const { T_K, n_mol_s } = inlet;
   if (inlet.vapourFraction > 0 || P_Pa >= inlet.P_Pa) return T_K;
-  const present: number[] = [];
-  for (let i = 0; i < n_mol_s.length; i++) if (n_mol_s[i]! > 0) present.push(i);
+  const present = placesOf(n_mol_s);
   const model = call.model.of(present);
   const K = new Float64Array(present.length);
   const total = totalOf(n_mol_s);

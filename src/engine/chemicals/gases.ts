@@ -1,9 +1,10 @@
-import { type ElementCounts, sameElements } from '../../chemicals/elements';
-import type { ChemicalData } from '../../chemicals/types';
+import { type ElementCounts, sameElements } from './elements';
+import type { ChemicalData } from './types';
 
 /** What combustion makes or takes, and what air holds. */
 export type GasKey = 'N2' | 'O2' | 'Ar' | 'CO2' | 'H2O' | 'SO2' | 'HCl';
 
+/** How each is known: by its CAS number, else by its atoms. */
 export const GASES: Readonly<Record<GasKey, { readonly cas: string; readonly elements: ElementCounts }>> = {
   N2: { cas: '7727-37-9', elements: { N: 2 } },
   O2: { cas: '7782-44-7', elements: { O: 2 } },

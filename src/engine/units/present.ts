@@ -1,12 +1,18 @@
 import type { Model, ThermoModel } from '../thermo/types';
 
+/** Places of the entries above zero of a vector over the full list, ascending: of the chemicals that are there. */
+export function placesOf(full: Float64Array): number[] {
+  const at: number[] = [];
+  for (let i = 0; i < full.length; i++) if (full[i]! > 0) at.push(i);
+  return at;
+}
+
 /** The chemicals that a vector over the full list holds: their model, their entries, their places. */
 export function presentOf(
   full: Float64Array,
   model: Model,
 ): { thermo: ThermoModel; x: Float64Array; at: number[] } {
-  const at: number[] = [];
-  for (let i = 0; i < full.length; i++) if (full[i]! > 0) at.push(i);
+  const at = placesOf(full);
   const x = new Float64Array(at.length);
   for (let k = 0; k < x.length; k++) x[k] = full[at[k]!]!;
   return { thermo: model.of(at), x, at };
