@@ -104,6 +104,9 @@ function solveAll(units: readonly ProblemUnit[], { model, work, warm }: Engine):
 const at = (times: readonly number[], share: number): number =>
   [...times].sort((a, b) => a - b)[Math.floor(share * (times.length - 1))]!;
 
+/** Rounds before any is timed: the compiler at run time still betters the code for some thousand. */
+const WARM_UP = 2000;
+
 /** @param now  clock in milliseconds */
 export async function timeTwoColumns(now: () => number, rounds = 60): Promise<readonly object[]> {
   const engine: Engine = { model: await bankModel(IDS), work: { flash: new Map() }, warm: new Map() };
@@ -112,7 +115,7 @@ export async function timeTwoColumns(now: () => number, rounds = 60): Promise<re
   const rows: object[] = [];
   let unit_us = evaluation_us();
   const measured = (what: string, once: (k: number) => void): void => {
-    for (let k = 0; k < 600; k++) once(k);
+    for (let k = 0; k < WARM_UP; k++) once(k);
     const times = Array.from({ length: rounds }, (_, k) => {
       const begun = now();
       once(k);
