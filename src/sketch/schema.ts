@@ -21,12 +21,122 @@ const end: Schema = {
 const texts = (...keys: readonly string[]): Readonly<Record<string, Schema>> =>
   Object.fromEntries(keys.map((key) => [key, text]));
 
+const TITLE: Schema = {
+  type: 'object',
+  properties: texts(
+    'project',
+    'area',
+    'number',
+    'title',
+    'author',
+    'checked',
+    'approved',
+    'revision',
+    'date',
+    'purpose',
+    'notes',
+  ),
+};
+
+const SITE: Schema = {
+  type: 'object',
+  properties: {
+    pressure: quantitySchema(['pressure']),
+    ambient: quantitySchema(['temperature']),
+    coolingWater: quantitySchema(['temperature']),
+  },
+};
+
+/** By the bank's id, or brought by the user. */
+const CHEMICAL: Schema = {
+  anyOf: [
+    name,
+    {
+      type: 'object',
+      required: ['id', 'own'],
+      properties: { id: name, own: { $ref: '#/$defs/ownChemical' } },
+    },
+  ],
+};
+
+const DISPLAY: Schema = {
+  type: 'object',
+  properties: {
+    set: { enum: ['SI', 'metric', 'US'] },
+    labels: { type: 'array', items: { type: 'string', description: LABEL_KEYS.join(', ') } },
+    units: { type: 'object', additionalProperties: text },
+    gauge: { type: 'boolean' },
+  },
+};
+
+const NOTE: Schema = {
+  type: 'object',
+  required: ['text'],
+  properties: {
+    ...texts('id', 'text', 'on'),
+    at: point,
+    kind: { enum: ['text', 'area'] },
+    size: point,
+  },
+};
+
+const LIMITS: Schema = {
+  type: 'object',
+  description: 'thresholds by code',
+  additionalProperties: { anyOf: [{ $ref: '#/$defs/quantity' }, { type: 'number' }] },
+};
+
+const MODEL: Schema = {
+  type: 'object',
+  required: ['kind'],
+  properties: {
+    kind: { ...name, description: 'peng-robinson, raoult; another kind is kept and not solved' },
+    ...texts('alpha', 'vapour', 'liquidH', 'liquidVolume'),
+    poynting: { type: 'boolean' },
+    bankPairs: { type: 'boolean' },
+    pairs: { type: 'array' },
+  },
+};
+
+const STREAM: Schema = {
+  type: 'object',
+  required: ['id', 'number'],
+  properties: {
+    id: name,
+    number: name,
+    name: text,
+    from: end,
+    to: end,
+    via: { type: 'array', items: point },
+  },
+};
+
+/** A unit; its settings as its kind has them. */
+const unitSchema = (kinds: readonly string[]): Schema => ({
+  type: 'object',
+  required: ['id', 'tag', 'kind', 'settings'],
+  properties: {
+    id: name,
+    tag: name,
+    name: text,
+    kind: { ...name, description: `${kinds.join(', ')}; another kind is kept` },
+    at: point,
+    turn: { enum: [0, 90, 180, 270] },
+    mirror: { type: 'boolean' },
+    byHand: { type: 'boolean', description: 'placed by hand: arranging may leave it there' },
+    material: text,
+    settings: { type: 'object' },
+  },
+  allOf: kinds.map((kind) =>
+    when('kind', kind, { properties: { settings: { $ref: `#/$defs/settings.${kind}` } } }),
+  ),
+});
+
 /**
  * The JSON Schema (draft 2020-12) of a sketch file, from the descriptions of the kinds' settings and the fixed parts.
  * Fields it does not name are allowed and kept, except inside settings. A setting that is missing is no fault of the file.
  */
 export function sketchSchema(registry: Registry = KNOWN_KINDS): Schema {
-  const kinds = Object.entries(registry);
   return {
     $schema: 'https://json-schema.org/draft/2020-12/schema',
     $id: 'sketch.schema.json',
@@ -37,122 +147,25 @@ export function sketchSchema(registry: Registry = KNOWN_KINDS): Schema {
       format: { const: FORMAT },
       version: { const: 1 },
       id: text,
-      title: {
-        type: 'object',
-        properties: texts(
-          'project',
-          'area',
-          'number',
-          'title',
-          'author',
-          'checked',
-          'approved',
-          'revision',
-          'date',
-          'purpose',
-          'notes',
-        ),
-      },
-      site: {
-        type: 'object',
-        properties: {
-          pressure: quantitySchema(['pressure']),
-          ambient: quantitySchema(['temperature']),
-          coolingWater: quantitySchema(['temperature']),
-        },
-      },
-      chemicals: {
-        type: 'array',
-        items: {
-          anyOf: [
-            name,
-            {
-              type: 'object',
-              required: ['id', 'own'],
-              properties: { id: name, own: { $ref: '#/$defs/ownChemical' } },
-            },
-          ],
-        },
-      },
+      title: TITLE,
+      site: SITE,
+      chemicals: { type: 'array', items: CHEMICAL },
       model: { $ref: '#/$defs/model' },
       units: { type: 'array', items: { $ref: '#/$defs/unit' } },
       streams: { type: 'array', items: { $ref: '#/$defs/stream' } },
-      display: {
-        type: 'object',
-        properties: {
-          set: { enum: ['SI', 'metric', 'US'] },
-          labels: { type: 'array', items: { type: 'string', description: LABEL_KEYS.join(', ') } },
-          units: { type: 'object', additionalProperties: text },
-          gauge: { type: 'boolean' },
-        },
-      },
-      notes: {
-        type: 'array',
-        items: {
-          type: 'object',
-          required: ['text'],
-          properties: {
-            ...texts('id', 'text', 'on'),
-            at: point,
-            kind: { enum: ['text', 'area'] },
-            size: point,
-          },
-        },
-      },
-      limits: {
-        type: 'object',
-        description: 'thresholds by code',
-        additionalProperties: { anyOf: [{ $ref: '#/$defs/quantity' }, { type: 'number' }] },
-      },
+      display: DISPLAY,
+      notes: { type: 'array', items: NOTE },
+      limits: LIMITS,
       ...DOCUMENTS,
     },
     $defs: {
       ...SETTING_DEFS,
       ownChemical: OWN_CHEMICAL,
-      model: {
-        type: 'object',
-        required: ['kind'],
-        properties: {
-          kind: { ...name, description: 'peng-robinson, raoult; another kind is kept and not solved' },
-          ...texts('alpha', 'vapour', 'liquidH', 'liquidVolume'),
-          poynting: { type: 'boolean' },
-          bankPairs: { type: 'boolean' },
-          pairs: { type: 'array' },
-        },
-      },
-      unit: {
-        type: 'object',
-        required: ['id', 'tag', 'kind', 'settings'],
-        properties: {
-          id: name,
-          tag: name,
-          name: text,
-          kind: { ...name, description: `${Object.keys(registry).join(', ')}; another kind is kept` },
-          at: point,
-          turn: { enum: [0, 90, 180, 270] },
-          mirror: { type: 'boolean' },
-          byHand: { type: 'boolean', description: 'placed by hand: arranging may leave it there' },
-          material: text,
-          settings: { type: 'object' },
-        },
-        allOf: kinds.map(([kind]) =>
-          when('kind', kind, { properties: { settings: { $ref: `#/$defs/settings.${kind}` } } }),
-        ),
-      },
-      stream: {
-        type: 'object',
-        required: ['id', 'number'],
-        properties: {
-          id: name,
-          number: name,
-          name: text,
-          from: end,
-          to: end,
-          via: { type: 'array', items: point },
-        },
-      },
+      model: MODEL,
+      unit: unitSchema(Object.keys(registry)),
+      stream: STREAM,
       ...Object.fromEntries(
-        kinds.map(([kind, catalogue]) => [`settings.${kind}`, settingsSchema(catalogue)]),
+        Object.entries(registry).map(([kind, catalogue]) => [`settings.${kind}`, settingsSchema(catalogue)]),
       ),
     },
   };
