@@ -46,6 +46,18 @@ test('an ordinary column is told nothing of its stages, its pressures or its end
   expect(of({}).codes.filter((c) => /^(column|pressure)\//.test(c))).toEqual([]);
 });
 
+test('a column above the critical point of what is fed says so among its reasons', () => {
+  // 60 bar lies above the critical pressure of propane, the highest of the three: 42.5 bar; mixtures of them reach about 50.
+  const hot = streamOf(paraffins, [40, 35, 25], 50, { T_K: 430, P_Pa: 61e5 });
+  const { codes, found } = of({ pressure: { top: 60e5, bottom: 60e5 } }, {}, hot);
+  expect(codes[0]).toBe('column/one-phase');
+  expect(evidenceOf(found, 'column/one-phase', 'place').text).toBe('stage 7');
+  // An ordinary column that cannot be has another reason.
+  const dry = of({ fixedBy: [{ fix: 'refluxRatio', value: 1e-4 }, D40] });
+  expect(dry.answer).toBeUndefined();
+  expect(dry.codes).not.toContain('column/one-phase');
+});
+
 describe('water in a column', async () => {
   const model = await bankModel(['n-pentane', 'n-hexane', 'n-heptane', 'water']);
   const settings: ColumnSettings = {

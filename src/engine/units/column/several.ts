@@ -87,7 +87,7 @@ function fallingTemperature(call: Call<ColumnSettings>, s: StageSystem, k: numbe
     weight: 'note',
     at: { unit: call.unit, path: `fixedBy.${k}` },
     evidence: [
-      { name: 'place', value: 0, dim: 'number', text: typeof at === 'number' ? `stage ${at}` : at },
+      { name: 'place', value: 0, dim: 'number', text: typeof at === 'number' ? `stage ${at}` : `the ${at}` },
       { name: 'flow', value: totalOf(s, 'top'), dim: 'molarFlow' },
     ],
   };

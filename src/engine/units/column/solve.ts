@@ -5,14 +5,16 @@ import type { StageSystem } from '../../column/system';
 import { dutyOf } from '../../column/targets';
 import type { ColumnState, ColumnTask } from '../../column/types';
 import { type ColumnWork, workFor } from '../../column/work';
+import { makeStream } from '../../equilibrium/stream';
 import { type Evidence, type Finding, noSolution, type Outcome, solved } from '../../outcome';
+import { mixed } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { fedVapour, impossibleBy } from './feasible';
 import { bothDuties, conflictsOf, countMiss } from './free';
 import { columnLimits } from './limits';
 import { outletsOf } from './outlets';
 import { type ColumnResults, resultsOf } from './results';
-import type { ColumnSettings } from './settings';
+import type { ColumnSettings, PlaceSI } from './settings';
 import { severalAnswers } from './several';
 import { type ColumnJob, jobOf, nameOfPlace, refuse } from './task';
 
@@ -73,6 +75,8 @@ const evidence = (name: string, value: number, dim: Evidence['dim'] = 'number'):
   dim,
 });
 
+const wordOf = (place: PlaceSI): string => (typeof place === 'number' ? `stage ${place}` : `the ${place}`);
+
 /** Why a column that might have an answer has none, with what was tried. */
 function reason(
   call: Call<ColumnSettings>,
@@ -85,7 +89,7 @@ function reason(
     name: 'place',
     value: 0,
     dim: 'number',
-    text: typeof stage === 'number' ? `stage ${stage}` : stage,
+    text: wordOf(stage),
   };
   const tried: Evidence[] = [...new Set(effort.tried)].map((text) => ({
     name: 'tried',
@@ -108,7 +112,7 @@ function reason(
   }
   const vapour = carriedShort(job.task);
   if (vapour) found.unshift(refuse(call, 'column/feed-vapour-above-top', { path: 'fixedBy' }, vapour));
-  return [...feedsInTwoLiquids(call, job), ...found];
+  return [...feedsInTwoLiquids(call, job), ...feedOfOnePhase(call, job), ...found];
 }
 
 /** What was asked and what was reached instead, each in its own dimension. */
@@ -159,6 +163,18 @@ const feedsInTwoLiquids = (call: Call<ColumnSettings>, { feedPorts }: ColumnJob)
     };
     return [refuse(call, 'column/feed-in-two-liquids', { port }, [chemical])];
   });
+
+/** What is fed has no two phases at the pressure of its stage: the column stands above the critical point of its feed. */
+function feedOfOnePhase(call: Call<ColumnSettings>, { task }: ColumnJob): Finding[] {
+  const { n_mol_s } = mixed(call.in, call.model.nc);
+  const { place } = task.feeds[0]!;
+  const at = { P_Pa: task.P_Pa[place]!, vapourFraction: 0.5 };
+  const made = makeStream(call.model, n_mol_s, at, call.work);
+  if (made.state === 'solved' || made.findings[0].code !== 'equilibrium/no-such-state') return [];
+  const where = nameOfPlace(call.settings, place);
+  const seen: Evidence = { name: 'place', value: 0, dim: 'number', text: wordOf(where) };
+  return [refuse(call, 'column/one-phase', { path: 'pressure' }, [seen])];
+}
 
 /** Settings of ends that the column does not have, which change nothing. */
 function idleSettings(call: Call<ColumnSettings>): Finding[] {
