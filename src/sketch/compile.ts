@@ -1,4 +1,5 @@
-import type { Basis, Problem, ProblemUnit, Read } from '../engine/network/types';
+import type { StreamId } from '../engine/ids';
+import type { Basis, Problem, ProblemUnit } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
 import { RULES } from '../engine/units/rules';
 import { chemicalId, type FullList, fullList } from './compiling/air';
@@ -74,48 +75,27 @@ export function makeCompile({ registry = KNOWN_KINDS, thresholds = RULES }: Comp
     const sourceless = new Set(sketch.streams.flatMap((s) => (s.from ? [] : [s.id])));
     const known = new Set<string>(sketch.streams.map((s) => s.id));
 
-    const gaps = [...basisRead.gaps, ...site.gaps, ...limits.gaps];
-    const notes = [...basisRead.notes];
-    const drafts = [...basisRead.assumptions];
-    const unitDrafts: AssumptionDraft[] = [];
-    const reads: Read[] = [];
+    const read = sketch.units.map((unit) =>
+      readOne(unit, ports.get(unit.id) ?? NO_PORTS, readUnit, surroundings, sourceless, known),
+    );
+    const gaps = [...basisRead.gaps, ...site.gaps, ...limits.gaps, ...read.flatMap((r) => r.gaps)];
+    const notes = [...basisRead.notes, ...read.flatMap((r) => r.read.notes), ...looseEnds(sketch)];
+    const usesPressure = limits.usesSitePressure || read.some((r) => r.read.usesSitePressure);
+    const drafts = [
+      ...basisRead.assumptions,
+      ...siteAssumptions(
+        sketch.site,
+        usesPressure,
+        read.some((r) => r.usesWater),
+      ),
+      ...read.flatMap((r) => r.read.assumptions),
+    ];
+    const isUsable = (r: OneRead): boolean => r.gaps.length === 0 && basis !== undefined;
     const formerUnits = new Map(last?.problem.units.map((u) => [u.id, u]));
-    let usesPressure = limits.usesSitePressure;
-    let usesWater = false;
-
-    const units = sketch.units.map((unit): ProblemUnit => {
-      const at = ports.get(unit.id) ?? NO_PORTS;
-      const read = readUnit(unit, at.used, surroundings);
-      const kind = kindOf(registry, unit.kind);
-      const here = [
-        ...read.gaps,
-        ...(kind ? portGaps(unit, kind, at, sourceless) : []),
-        ...read.reads
-          .filter((r) => !known.has(r.stream))
-          .map((r) =>
-            finding(
-              'sketch/unknown-stream',
-              'caution',
-              { unit: unit.id, path: r.path },
-              word('stream', r.stream),
-            ),
-          ),
-      ];
-      gaps.push(...here);
-      notes.push(...read.notes);
-      unitDrafts.push(...read.assumptions);
-      usesPressure ||= read.usesSitePressure;
-      usesWater ||= kind !== undefined && removesHeat(unit, kind.findings, 'h' in kind.settings);
-      const usable = here.length === 0 && basis !== undefined;
-      if (usable) reads.push(...read.reads);
-      return problemUnit(formerUnits.get(unit.id), unit, usable ? read : undefined, at);
-    });
-    for (const { id, from, to } of sketch.streams)
-      if (from && !to) notes.push(finding('sketch/loose-end', 'note', { stream: id }));
-
-    const { pressure, coolingWater } = sketch.site;
-    if (usesPressure && !isGiven(pressure)) drafts.push(siteAssumption('pressure'));
-    if (usesWater && !isGiven(coolingWater)) drafts.push(siteAssumption('coolingWater'));
+    const units = read.map((r) =>
+      problemUnit(formerUnits.get(r.unit.id), r.unit, isUsable(r) ? r.read : undefined, r.ports),
+    );
+    const reads = read.flatMap((r) => (isUsable(r) ? r.read.reads : []));
 
     const former = last?.problem;
     const next: Problem = {
@@ -137,12 +117,61 @@ export function makeCompile({ registry = KNOWN_KINDS, thresholds = RULES }: Comp
       notes: keepEqual(last?.notes, notes),
       assumptions: keepEqual(
         last?.assumptions,
-        [...drafts, ...unitDrafts].map((draft, k) => ({ no: `A${k + 1}`, ...draft })),
+        drafts.map((draft, k) => ({ no: `A${k + 1}`, ...draft })),
       ),
     };
     return last;
   };
 }
+
+/** One unit, read: its settings, and what is said of it beside them. */
+interface OneRead {
+  readonly unit: SketchUnit;
+  readonly ports: PortsRead;
+  readonly read: UnitRead;
+  readonly gaps: readonly Finding[];
+  /** Its limits may look at the cooling water. */
+  readonly usesWater: boolean;
+}
+
+function readOne(
+  unit: SketchUnit,
+  ports: PortsRead,
+  readUnit: ReturnType<typeof makeUnitReader>,
+  surroundings: Surroundings,
+  sourceless: ReadonlySet<StreamId>,
+  known: ReadonlySet<string>,
+): OneRead {
+  const read = readUnit(unit, ports.used, surroundings);
+  const kind = kindOf(surroundings.registry, unit.kind);
+  const strangers = read.reads
+    .filter((r) => !known.has(r.stream))
+    .map((r) =>
+      finding('sketch/unknown-stream', 'caution', { unit: unit.id, path: r.path }, word('stream', r.stream)),
+    );
+  return {
+    unit,
+    ports,
+    read,
+    gaps: [...read.gaps, ...(kind ? portGaps(unit, kind, ports, sourceless) : []), ...strangers],
+    usesWater: kind !== undefined && removesHeat(unit, kind.findings, 'h' in kind.settings),
+  };
+}
+
+const looseEnds = ({ streams }: Sketch): Finding[] =>
+  streams.flatMap(({ id, from, to }) =>
+    from && !to ? [finding('sketch/loose-end', 'note', { stream: id })] : [],
+  );
+
+/** What of the site is used and was not given. */
+const siteAssumptions = (
+  { pressure, coolingWater }: Sketch['site'],
+  usesPressure: boolean,
+  usesWater: boolean,
+): AssumptionDraft[] => [
+  ...(usesPressure && !isGiven(pressure) ? [siteAssumption('pressure')] : []),
+  ...(usesWater && !isGiven(coolingWater) ? [siteAssumption('coolingWater')] : []),
+];
 
 /** Compiles once, without a memory. */
 export const compile = (sketch: Sketch, bank: BankData, edit = 1, options: CompileOptions = {}): Compiled =>
