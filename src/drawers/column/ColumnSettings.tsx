@@ -139,7 +139,6 @@ function Pressure() {
           There is no {end}: its pressure is kept and not used.
         </p>
       ))}
-      <FieldFindings path="pressure" />
     </fieldset>
   );
 }

@@ -176,20 +176,10 @@ function feedOfOnePhase(call: Call<ColumnSettings>, { task }: ColumnJob): Findin
   return [refuse(call, 'column/one-phase', { path: 'pressure' }, [seen])];
 }
 
-/** Settings of ends that the column does not have, which change nothing. */
-function idleSettings(call: Call<ColumnSettings>): Finding[] {
-  const { subcooling, top, bottom, pressure } = call.settings;
-  const idle = [
-    ...(subcooling !== undefined && subcooling > 0 && top.distillate !== 'liquid' ? ['subcooling'] : []),
-    ...(pressure.condenser !== undefined && top.distillate === 'none' ? ['pressure.condenser'] : []),
-    ...(pressure.reboiler !== undefined && !bottom.reboiler ? ['pressure.reboiler'] : []),
-  ];
-  return idle.map((path) => ({
-    code: 'column/setting-idle',
-    weight: 'note',
-    at: { unit: call.unit, path },
-    evidence: [],
-  }));
+/** A subcooling that no liquid distillate takes up changes nothing. */
+function idleSubcooling({ unit, settings }: Call<ColumnSettings>): Finding[] {
+  if (!settings.subcooling || settings.top.distillate === 'liquid') return [];
+  return [{ code: 'column/setting-idle', weight: 'note', at: { unit, path: 'subcooling' }, evidence: [] }];
 }
 
 /** Reflux ratio and distillate that carry less over the top than the feeds bring as vapour. */
@@ -252,7 +242,7 @@ function solve(call: Call<ColumnSettings>): Outcome<Answer<ColumnResults>> {
   const notes: Finding[] = bothDuties(call.settings)
     ? [{ code: 'column/both-duties', weight: 'note', at: { unit: call.unit, path: 'fixedBy' }, evidence: [] }]
     : [];
-  notes.push(...idleSettings(call), ...severalAnswers(call, job, end.system, end.slope));
+  notes.push(...idleSubcooling(call), ...severalAnswers(call, job, end.system, end.slope));
   return solved(answer(call, job, end.system, work, end), notes);
 }
 
