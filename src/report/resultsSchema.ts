@@ -48,7 +48,10 @@ const SOLVED: Readonly<Record<string, Schema>> = {
 const PERHAPS: Readonly<Record<string, Schema>> = {
   S_W_K: number,
   s_J_molK: number,
-  standardLiquid_m3_s: described(number, 'as liquid at 15 degC, ideal mixing'),
+  standardLiquid_m3_s: described(
+    number,
+    'as liquid at 15 degC, ideal mixing; absent with 1e-6 or more, by mole, of chemicals above their critical temperature there',
+  ),
   hiddenLiquid: byName(share),
   liquidsTogether: { type: 'boolean' },
 };

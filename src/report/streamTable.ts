@@ -247,6 +247,6 @@ function notes(input: ReportInput, table: Pick<Table, 'columns' | 'rows'>): stri
           `Sum of printed figures differs by ${sums.join(' and by ')}: rounding. Totals come from unrounded values; no figure is adjusted.`,
         ]
       : []),
-    `Enthalpy: from the elements at 298.15 K, and from the same components as ideal gas at 25 °C; only differences mean something. Gauge pressure is above ${site.toDisplay(input.sitePressure_Pa).toPrecision(6)} ${site.label}. Normal gas: the vapour as ideal gas at 0 °C, 101.325 kPa(a). Standard liquid: 15 °C, ideal mixing of pure liquids. “–” absent, “<0.01” a trace. Decimals are fixed row by row.`,
+    `Enthalpy: from the elements at 298.15 K, and from the same components as ideal gas at 25 °C; only differences mean something. Gauge pressure is above ${site.toDisplay(input.sitePressure_Pa).toPrecision(6)} ${site.label}. Normal gas: the vapour as ideal gas at 0 °C, 101.325 kPa(a). Standard liquid: 15 °C, ideal mixing of pure liquids; none with 1 ppm or more (mol) of chemicals that are gases above their critical temperature at 15 °C. “–” absent, “<0.01” a trace. Decimals are fixed row by row.`,
   ];
 }

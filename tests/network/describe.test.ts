@@ -40,6 +40,16 @@ describe('a shown stream', () => {
     expect(s.phases[0]!.viscosityRule).toBe('viscosity/log-average');
   });
 
+  test('has a standard liquid volume in spite of a trace of gas, and none with more of it', () => {
+    const volume = (gas: number): number | undefined =>
+      shown({ T: 288.15, P: 101325 }, 0, gas, 1 - gas, 0).standardLiquid_m3_s;
+    const hexane = volume(0)!;
+    // Derived: a millionth is the bound; the volume of what is left is that of its hexane.
+    expect(volume(1e-60)! / hexane).toBeCloseTo(1, 12);
+    expect(volume(9e-7)! / (hexane * (1 - 9e-7))).toBeCloseTo(1, 12);
+    expect(volume(1.1e-6)).toBeUndefined();
+  });
+
   test('adds its phases up: amounts, mass, enthalpy, entropy, volume', () => {
     const s = shown({ T: 330, P: 10e5 }, 1, 2, 3, 4);
     expect(s.phases.map((p) => p.kind)).toEqual(['vapour', 'liquid']);

@@ -47,7 +47,7 @@ export function Conditions({ stream, outOfDate }: Props) {
         {row('As liquid, 15 °C', stream.standardLiquid_m3_s, 'volumeFlow', {
           title:
             stream.standardLiquid_m3_s === undefined
-              ? 'A chemical here has no liquid at 15 °C'
+              ? '1 ppm (mol) or more is above its critical temperature at 15 °C and has no liquid there'
               : 'Ideal mixing of the pure liquids at 15 °C',
         })}
         {row('Molar mass', stream.MW_g_mol / 1000, 'molarMass')}

@@ -19,13 +19,24 @@ function pureVolumes(model: Model): Float64Array {
   return v;
 }
 
+/** Chemicals without a liquid at 15 degC count for nothing as long as they are less of the stream than this, by mole. */
+const TRACE = 1e-6;
+
 /**
  * Volume flow as liquid at 15 degC by ideal mixing of pure liquids [m3/s]; a chemical that boils below 15 degC counts with its
- * saturated liquid. Undefined when one that flows is above its critical temperature there.
+ * saturated liquid. A chemical above its critical temperature there has no such volume: with a millionth of it or more in the
+ * stream there is no answer; less of it is left out, which moves the answer by about as little.
  */
 export function standardLiquid_m3_s(n_mol_s: Float64Array, model: Model): number | undefined {
   const v = pureVolumes(model);
-  let sum = 0;
-  for (let i = 0; i < n_mol_s.length; i++) if (n_mol_s[i] !== 0) sum += n_mol_s[i]! * v[i]!;
-  return Number.isFinite(sum) ? sum : undefined;
+  let [sum, liquid, gas] = [0, 0, 0];
+  for (let i = 0; i < n_mol_s.length; i++) {
+    if (n_mol_s[i] === 0) continue;
+    if (Number.isNaN(v[i])) gas += n_mol_s[i]!;
+    else {
+      liquid += n_mol_s[i]!;
+      sum += n_mol_s[i]! * v[i]!;
+    }
+  }
+  return gas < TRACE * (gas + liquid) || gas === 0 ? sum : undefined;
 }
