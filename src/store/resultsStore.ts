@@ -2,6 +2,7 @@ import { createStore } from 'zustand/vanilla';
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Closure, LoopProgress, SolveBatch, StreamResult, UnitResult } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
+import { makeAside } from './aside';
 
 /** The latest word on a stream or unit, and the last solved result where the latest has none to show. */
 export interface Shown<T> {
@@ -27,6 +28,8 @@ export interface ResultsState {
   readonly tookMs: number;
   /** Bumped when the worker had to be restarted or gave up; the message is for the title strip. */
   readonly trouble: string | null;
+  /** The solve under way was stopped by hand: there is no answer to the newest edit, and none is awaited. */
+  readonly stopped: boolean;
 }
 
 const empty: ResultsState = {
@@ -40,6 +43,7 @@ const empty: ResultsState = {
   loop: null,
   tookMs: 0,
   trouble: null,
+  stopped: false,
 };
 
 function merge<K extends string, T extends { readonly state: string }>(
@@ -63,18 +67,42 @@ function merge<K extends string, T extends { readonly state: string }>(
 export function createResultsStore() {
   const store = createStore<ResultsState>()(() => empty);
   const { getState: get, setState: set } = store;
+  const streamsAside = makeAside<StreamId, StreamResult>(() => ({ state: 'waiting' }));
+  const unitsAside = makeAside<UnitId, UnitResult>(({ kind }) => ({ kind, state: 'waiting' }));
+  /** Edit whose slow solve, or whose end without an answer, has made older results out of date. */
+  let outdatedFor = 0;
+  /** What is not of this edit is out of date from now on, and so is what was drawn from it. */
+  const outdate = (edit: number): void => {
+    if (edit === outdatedFor) return;
+    outdatedFor = edit;
+    const { streams, units } = get();
+    set({
+      streams: streamsAside.putAside(edit, streams),
+      units: unitsAside.putAside(edit, units),
+      closure: null,
+    });
+  };
   return {
     ...store,
     take(edit: number, last: boolean, batch: SolveBatch, tookMs: number): void {
       const goneStreams = batch.gone.flatMap((g) => ('stream' in g ? [g.stream] : []));
       const goneUnits = batch.gone.flatMap((g) => ('unit' in g ? [g.unit] : []));
+      streamsAside.heard(
+        edit,
+        batch.streams.map(([id]) => id),
+      );
+      unitsAside.heard(
+        edit,
+        batch.units.map(([id]) => id),
+      );
+      if (last) outdatedFor = 0;
       const streams = merge(get().streams, batch.streams, goneStreams);
       const units = merge(get().units, batch.units, goneUnits);
       set(
         last
           ? {
-              streams,
-              units,
+              streams: streamsAside.putBack(streams),
+              units: unitsAside.putBack(units),
               findings: batch.findings,
               closure: batch.closure ?? null,
               solvedEdit: edit,
@@ -83,17 +111,30 @@ export function createResultsStore() {
               loop: null,
               tookMs,
               trouble: null,
+              stopped: false,
             }
           : { streams, units, answering: edit },
       );
     },
+    /** A solve that takes long enough to be told of: older results are out of date from here on. */
     at(edit: number, unit: UnitId, loop: LoopProgress | null = null): void {
-      set({ answering: edit, at: unit, loop });
+      outdate(edit);
+      set({ answering: edit, at: unit, loop, stopped: false });
     },
+    /** There will be no answer to what was asked last. */
     broke(message: string): void {
+      outdate(Number.POSITIVE_INFINITY);
       set({ trouble: message, at: null, loop: null });
     },
+    /** By hand: the solve under way is given up. */
+    stop(): void {
+      outdate(Number.POSITIVE_INFINITY);
+      set({ stopped: true, at: null, loop: null });
+    },
     clear(): void {
+      streamsAside.clear();
+      unitsAside.clear();
+      outdatedFor = 0;
       set(empty);
     },
   };
