@@ -1,5 +1,6 @@
 /** A reflux ratio and a purity that two columns meet: derived, by walking along the distillate. */
 import { describe, expect, test } from 'vitest';
+import type { ColumnResults } from '../../src/engine/units/column/results';
 import type { ColumnSettings, FixedBy } from '../../src/engine/units/column/settings';
 import { column } from '../../src/engine/units/column/solve';
 import { sayFinding } from '../../src/wording';
@@ -95,6 +96,53 @@ describe('toluene between benzene and xylene, half of the distillate, at a reflu
     const outcome = column.solve(callWith(REFLUX, fixed));
     expect(outcome.state).toBe('solved');
     expect(outcome.findings.map((f) => f.code)).not.toContain('column/several-purities');
+  });
+});
+
+describe('a stage temperature at a given distillate', () => {
+  const FLOW: FixedBy = { fix: 'flow', product: 'liquidDistillate', value: molar(50) };
+  const atRatio = (value: number) => {
+    const a = solveCall(callWith({ fix: 'refluxRatio', value }, FLOW));
+    return (a.results as ColumnResults).stages.T_K[2]!;
+  };
+  const HIGH = 3;
+  const wanted_K = atRatio(HIGH);
+
+  test('is met by two columns, with little reflux and with much', () => {
+    let [a, b] = [0.4, 1.2];
+    expect(atRatio(a)).toBeGreaterThan(wanted_K);
+    expect(atRatio(b)).toBeLessThan(wanted_K);
+    for (let pass = 0; pass < 30; pass++) {
+      const m = (a + b) / 2;
+      if (atRatio(m) > wanted_K) a = m;
+      else b = m;
+    }
+    expect(atRatio(a)).toBeCloseTo(wanted_K, 5);
+    expect(HIGH / a).toBeGreaterThan(3);
+  });
+
+  test('solves to one of them, and a note says which', () => {
+    const outcome = column.solve(callWith({ fix: 'temperature', stage: 3, value: wanted_K }, FLOW));
+    if (outcome.state !== 'solved') throw new Error('not solved');
+    const note = outcome.findings.find((f) => f.code === 'column/another-possible')!;
+    expect(note.weight).toBe('note');
+    const ratio = note.evidence.find((e) => e.name === 'refluxRatio')!.value;
+    expect(atRatio(ratio)).toBeCloseTo(wanted_K, 6);
+    expect(sayFinding(note, { measures: 'metric' }).sentence).toMatch(/with a reflux ratio of [0-9.]+ and/);
+  });
+
+  test('and a purity beside a boil-up carries the same note only for a chemical between others', () => {
+    const codes = (...by: FixedBy[]) => {
+      const outcome = column.solve(callWith(...by));
+      expect(outcome.state).toBe('solved');
+      return outcome.findings.map((f) => f.code);
+    };
+    const boilup: FixedBy = { fix: 'boilup', value: 4 };
+    expect(codes(boilup, TOLUENE)).toContain('column/another-possible');
+    expect(codes(boilup, purity('liquidDistillate', 0, 0.6))).not.toContain('column/another-possible');
+    expect(codes(FLOW, purity('liquidDistillate', 1, tolueneAt(50)))).not.toContain(
+      'column/another-possible',
+    );
   });
 });
 

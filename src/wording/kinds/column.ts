@@ -245,6 +245,11 @@ export const column: KindWords = {
       says: 'At this reflux the temperature at {place} falls here as more goes over the top, which it does not everywhere: another answer exists. This is the one with {flow} over the top.',
       next: 'If another is meant, fix that flow instead of the temperature.',
     },
+    'column/another-possible': {
+      title: 'Perhaps one of several answers',
+      says: 'A {of} beside what else is fixed can be met by more than one column. This is the one with a reflux ratio of {refluxRatio} and {flow} over the top.',
+      next: 'If another is meant, fix its reflux ratio or its flow instead.',
+    },
     'column/second-liquid': {
       title: 'A second liquid in the column',
       says: 'The liquid at {place} would part in two; the other is mostly {chemical}. The numbers are for one liquid.',

@@ -37,6 +37,7 @@ export const COLUMN_FINDINGS = [
   // What was found, where more than one answer is possible.
   'column/several-purities',
   'column/several-temperatures',
+  'column/another-possible',
   // Limits.
   'pressure/enters-below',
   'column/stage-dries',

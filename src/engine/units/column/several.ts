@@ -13,11 +13,15 @@ const LIGHTER = 1.02;
 /** Less than this share of the feed does not make a mixture of three. */
 const LEAST_SHARE = 1e-3;
 
+/** What holds the inside flows as a reflux ratio does, so that a purity beside it can be met twice. */
+const HOLDS_FLOWS = new Set<Fixing['fix']>(['boilup', 'duty', 'reflux']);
+
 /**
- * Which answer was found where a reflux ratio and a purity, or a temperature, may be met more than once: with the reflux ratio
- * held, the share of a chemical between others in a product first rises and then falls as the product grows.
+ * Which answer was found where what is fixed may be met more than once. With the reflux ratio (or boil-up, duty, reflux) held,
+ * the share of a chemical between others in a product first rises and then falls as the product grows; a stage's temperature
+ * first falls and then rises with the reflux, and the other way round.
  *
- * @param slope  of the purity's or temperature's measure with the bottoms flow
+ * @param slope  with a reflux ratio: of the purity's or temperature's measure with the bottoms flow
  */
 export function severalAnswers(
   call: Call<ColumnSettings>,
@@ -26,8 +30,9 @@ export function severalAnswers(
   slope: number | undefined,
 ): Finding[] {
   const { fixed, draws } = job.task;
-  if (slope === undefined || draws.length > 0 || !job.task.reboiler) return [];
-  if (!fixed.some((x) => x.fix === 'refluxRatio')) return [];
+  if (draws.length > 0 || !job.task.reboiler || s.first === 0) return [];
+  if (!fixed.some((x) => x.fix === 'refluxRatio')) return anotherPossible(call, job, s);
+  if (slope === undefined) return [];
   const k = fixed.findIndex((x) => x.fix === 'purity' || x.fix === 'temperature');
   const x = fixed[k];
   if (x?.fix === 'temperature') return slope > 0 ? [fallingTemperature(call, s, k, x.place)] : [];
@@ -78,6 +83,33 @@ function isBetween(s: StageSystem, x: Purity): boolean {
   }
   const least = LEAST_SHARE * s.feedTotal;
   return x.product === 'bottoms' ? heavier > least : lighter > least;
+}
+
+/** No slope tells the branch here: the note says what was found, by the figures that the other answer would differ in. */
+function anotherPossible(call: Call<ColumnSettings>, { task }: ColumnJob, s: StageSystem): Finding[] {
+  const held = task.fixed.some((x) => HOLDS_FLOWS.has(x.fix));
+  const k = task.fixed.findIndex(
+    (x) => x.fix === 'temperature' || (held && x.fix === 'purity' && isBetween(s, x)),
+  );
+  if (k < 0) return [];
+  const flow = totalOf(s, 'top');
+  return [
+    {
+      code: 'column/another-possible',
+      weight: 'note',
+      at: { unit: call.unit, path: `fixedBy.${k}` },
+      evidence: [
+        {
+          name: 'of',
+          value: 0,
+          dim: 'number',
+          text: task.fixed[k]!.fix === 'temperature' ? 'stage temperature' : 'purity',
+        },
+        { name: 'refluxRatio', value: s.L[0]! / flow, dim: 'number' },
+        { name: 'flow', value: flow, dim: 'molarFlow' },
+      ],
+    },
+  ];
 }
 
 function fallingTemperature(call: Call<ColumnSettings>, s: StageSystem, k: number, place: number): Finding {
