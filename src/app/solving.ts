@@ -25,6 +25,8 @@ export function startSolving(
   let data: BankData | null = null;
   let loadedFor = '';
   let sent: Problem | null = null;
+  /** How it stands with what was sent last. */
+  let stand: 'asked' | 'answered' | 'stopped' = 'asked';
   /** Edit with which the sketch that is shown came. */
   let since = 0;
   const started = new Map<number, number>();
@@ -34,6 +36,8 @@ export function startSolving(
   const client = connectSolver(make, {
     results: (edit, last, batch) => {
       if (isLate(edit)) return;
+      // What is answered although it was stopped a moment before needs no asking again.
+      if (last && edit === sent?.edit) stand = 'answered';
       const begun = started.get(edit);
       stores.results.take(edit, last, batch, begun === undefined ? 0 : performance.now() - begun);
       if (!last) return;
@@ -41,7 +45,7 @@ export function startSolving(
       if (edit === sent?.edit) answered(stores.compiled.getState().edit);
     },
     at: (edit, unit, loop) => {
-      if (!isLate(edit)) stores.results.at(edit, unit, loop ?? null);
+      if (!isLate(edit) && stand !== 'stopped') stores.results.at(edit, unit, loop ?? null);
     },
     broke: (_edit, message, unit) => {
       const tag = stores.sketch.getState().sketch.units.find((u) => u.id === unit)?.tag;
@@ -99,7 +103,8 @@ export function startSolving(
     // Results may have been cleared (another file, a model that cannot be solved) while the worker remembers handing them out.
     const blank = problem.units.length > 0 && stores.results.getState().units.size === 0;
     if (problem === sent && !blank) {
-      answered(edit);
+      // A label that is moved while the solve runs, or after it was stopped, makes no answer out of the one before.
+      if (stand === 'answered') answered(edit);
       return;
     }
     if (!basis) {
@@ -109,6 +114,8 @@ export function startSolving(
       return;
     }
     sent = problem;
+    stand = 'asked';
+    if (stores.results.getState().stopped) stores.results.resume();
     started.set(problem.edit, performance.now());
     client.solve(basis, problem, 'warm', blank);
   };
@@ -116,6 +123,16 @@ export function startSolving(
   stores.sketch.subscribe((state, before) => {
     if (state.sketch.id !== before.sketch.id) [since, sent] = [state.edit, null];
     if (state.sketch !== before.sketch) run();
+  });
+  stores.results.subscribe(({ stopped }, before) => {
+    if (stopped === before.stopped) return;
+    if (stopped) {
+      stand = 'stopped';
+      client.stop();
+    } else if (stand === 'stopped') {
+      sent = null;
+      run();
+    }
   });
   run();
   // A worker warms up as soon as it starts; what a first solve has cut short goes on when the page is idle.

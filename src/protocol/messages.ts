@@ -18,6 +18,8 @@ export type ToWorker =
       readonly announce?: true;
       readonly blank?: true;
     }
+  /** The solve in flight and the one that waits are given up; what was solved on the way stays known. */
+  | { readonly say: 'stop' }
   | { readonly say: 'question'; readonly job: number; readonly about: Question }
   | { readonly say: 'drop'; readonly job: number };
 

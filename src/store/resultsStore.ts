@@ -131,6 +131,10 @@ export function createResultsStore() {
       outdate(Number.POSITIVE_INFINITY);
       set({ stopped: true, at: null, loop: null });
     },
+    /** What was stopped is asked for once more. */
+    resume(): void {
+      set({ stopped: false });
+    },
     clear(): void {
       streamsAside.clear();
       unitsAside.clear();

@@ -24,6 +24,8 @@ export interface SolverClient {
    * `blank`: no results are held any more, so everything is handed out, changed or not.
    */
   solve(basis: Basis, problem: Problem, from: 'warm' | 'nothing', blank?: boolean): void;
+  /** Gives the solve in flight up; what comes of it all the same is handed on. */
+  stop(): void;
   ask(job: number, about: Extract<ToWorker, { say: 'question' }>['about']): void;
   close(): void;
 }
@@ -125,6 +127,11 @@ export function connectSolver(make: () => WorkerLike, handlers: SolverHandlers):
       pending = { basis, problem, from };
       where = null;
       send(false, blank);
+    },
+    stop() {
+      pending = null;
+      clearTimeout(timer);
+      worker?.postMessage({ say: 'stop' });
     },
     ask(job, about) {
       worker ??= start();

@@ -47,6 +47,7 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
   let busy = false;
   let warm = false;
   let closed = false;
+  let stopped = false;
   const say = (message: FromWorker): void => {
     if (!closed) port.postMessage(message);
   };
@@ -69,6 +70,7 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
 
   async function runSolve({ problem, from, announce, blank }: SolveOrder): Promise<void> {
     const { edit } = problem;
+    stopped = false;
     const clean = from === 'nothing' ? ({ from } as const) : {};
     if (blank) {
       posted.streams.clear();
@@ -81,7 +83,7 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
         now,
         pace,
         announce: announce === true,
-        overtaken: () => closed || waiting !== undefined,
+        overtaken: () => closed || stopped || waiting !== undefined,
         partial: (part) => say({ say: 'results', edit, last: false, ...clean, ...part }),
         at: (unit, loop) => say({ say: 'at', edit, unit, ...(loop ? { loop } : {}) }),
       });
@@ -133,6 +135,10 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
         // What the page lacks it still lacks when a newer order takes the place of the one that said so.
         waiting = waiting?.blank ? { ...data, blank: true } : data;
         void work();
+        return;
+      case 'stop':
+        waiting = undefined;
+        stopped = true;
         return;
       case 'question':
         questions.push(data);

@@ -64,6 +64,19 @@ describe('the page’s end of the line', () => {
     expect(now().got.map((m) => m.say)).toEqual(['basis', 'solve', 'solve', 'basis', 'solve']);
   });
 
+  test('waits for nothing after a stop, and hands on what comes of it all the same', () => {
+    const solver = connect();
+    solver.solve(basis('b1'), problem(1), 'warm');
+    solver.stop();
+    expect(now().got.at(-1)).toEqual({ say: 'stop' });
+    vi.advanceTimersByTime(60_000);
+    expect(workers).toHaveLength(1);
+    now().say({ say: 'results', edit: 1, last: true, ...nothing });
+    expect(answered).toEqual([1]);
+    solver.solve(basis('b1'), problem(2), 'warm');
+    expect(now().got.at(-1)).toMatchObject({ say: 'solve', problem: { edit: 2 } });
+  });
+
   test('starts a silent worker anew and sends basis and problem again, asking it to name its units', () => {
     const solver = connect();
     solver.solve(basis('b1'), problem(1), 'warm');

@@ -194,6 +194,31 @@ describe('the solver behind a port', () => {
     expect(second.gone).toEqual(expect.arrayContaining(beyond.map((stream) => ({ stream }))));
   });
 
+  test('gives up a long solve, and what waits, when told to stop; the next order is solved as if nothing had been', async () => {
+    const clock = new Clock();
+    const solvedUnits: string[] = [];
+    const kinds = kindsWith(clock, 4, (id) => {
+      solvedUnits.push(id);
+      if (solvedUnits.length !== 30) return;
+      page.say({ say: 'solve', problem: edit(2, pipeline(90)), from: 'warm' });
+      page.say({ say: 'stop' });
+    });
+    const page = open({ kinds, now: clock.now });
+    page.say({ say: 'basis', basis });
+    page.say({ say: 'solve', problem: edit(1, pipeline(100)), from: 'warm' });
+    await page.until((m): m is Results => m.say === 'results' && m.edit === 1);
+    // An answer to a question comes when no solve is left: the one in flight and the one that waited are given up.
+    page.say({ say: 'question', job: 7, about: { ask: 'prewarm' } });
+    await page.until((m): m is Extract<FromWorker, { say: 'answer' }> => m.say === 'answer');
+    expect(solvedUnits.length).toBeLessThanOrEqual(33);
+    expect(page.heard.some((m) => m.say === 'results' && m.last)).toBe(false);
+    page.say({ say: 'solve', problem: edit(3, pipeline(100)), from: 'warm' });
+    expect((await page.last(3)).closure!.complete).toBe(true);
+    const handed = page.heard.flatMap((m) => (m.say === 'results' ? m.streams.map(([id]) => id) : []));
+    expect(new Set(handed).size).toBe(101);
+    expect(handed).toHaveLength(101);
+  });
+
   test('hands out what it has after 30 ms, then every 100 ms, and says where it is every 250 ms', async () => {
     const clock = new Clock();
     const page = open({ kinds: kindsWith(clock, 5), now: clock.now });
