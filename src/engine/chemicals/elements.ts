@@ -1,7 +1,7 @@
 /**
  * Abridged standard atomic weights [g/mol] of the elements a process chemical is likely to hold.
- * Source: Prohaska et al., Standard atomic weights of the elements 2021 (IUPAC Technical Report),
- * Pure Appl. Chem. 94 (2022) 573, table of abridged values; helium to all digits, the others to those printed.
+ * Source: Prohaska et al., Standard atomic weights of the elements 2021 (IUPAC Technical Report), Pure Appl. Chem. 94 (2022)
+ * 573, table of abridged values; helium and fluorine with more digits than those.
  */
 export const ATOMIC_WEIGHT: Readonly<Record<string, number>> = {
   H: 1.008,
@@ -41,8 +41,9 @@ export type ElementCounts = Readonly<Record<string, number>>;
 const TOKEN = /([A-Z][a-z]?)|([([])|([)\]])|(\d+)/y;
 
 /**
- * Atoms in a formula such as "C2H6O", "CH3CH2OH", "Ca(OH)2" or "(CH3)2SO".
- * @returns undefined when the text is no formula or names an element without a weight above
+ * Atoms in a formula such as "C2H6O", "CH3CH2OH", "Ca(OH)2" or "(CH3)2SO"; round and square brackets, no charges, no dots.
+ *
+ * @returns  undefined when the text is no formula or names an element without a weight above
  */
 export function elementCounts(formula: string): ElementCounts | undefined {
   const stack: Record<string, number>[] = [{}];
@@ -83,7 +84,7 @@ export function elementCounts(formula: string): ElementCounts | undefined {
   return openers.length > 0 || Object.keys(counts).length === 0 ? undefined : counts;
 }
 
-/** Same atoms in the same numbers, whatever their order: HCl and ClH, C2H6O and CH3CH2OH. */
+/** Same atoms in the same numbers, whatever their order: HCl and ClH, C2H6O and CH3CH2OH. A count of zero is no atom. */
 export function sameElements(a: ElementCounts, b: ElementCounts): boolean {
   const of = (x: ElementCounts): [string, number][] => Object.entries(x).filter(([, count]) => count !== 0);
   const left = of(a);

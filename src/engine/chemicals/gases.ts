@@ -23,7 +23,7 @@ export function gasPlace(chemicals: readonly ChemicalData[], key: GasKey): numbe
   return chemicals.findIndex((c) => c.cas === undefined && c.elements && sameElements(c.elements, elements));
 }
 
-/** Places of all these gases. */
+/** Places of all these gases in the full list; -1 for each that is not there. */
 export const gasPlaces = (chemicals: readonly ChemicalData[]): Readonly<Record<GasKey, number>> => ({
   N2: gasPlace(chemicals, 'N2'),
   O2: gasPlace(chemicals, 'O2'),

@@ -14,7 +14,7 @@ function propsFor(thermo: ThermoModel): PhaseProps {
   return made;
 }
 
-/** Cp / Cv of a vapour by the sketch's model; undefined for other phases and where the model has none. */
+/** Cp / Cv [-] of a vapour by the sketch's model; undefined for other phases and where the model has none. */
 export function capacityRatio(phase: Phase, T_K: number, P_Pa: number, model: Model): number | undefined {
   if (phase.kind !== 'vapour') return undefined;
   const { thermo, x } = presentOf(phase.x, model);

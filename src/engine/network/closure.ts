@@ -12,6 +12,7 @@ export interface ClosureData {
   readonly elements: readonly (readonly [string, Float64Array])[];
 }
 
+/** What closure asks of the chemicals, from the model's full list. */
 export function closureData(model: Model): ClosureData {
   const { chemicals, nc } = model;
   const names = new Set(chemicals.flatMap((c) => Object.keys(c.elements ?? {})));
@@ -31,7 +32,7 @@ const FLOOR = 1e-6;
 /** Energy is measured against no less than this per mole [J/mol]. */
 const LEAST_ENERGY_J_MOL = 1e3;
 
-/** Enthalpy of the same components as ideal gas at 298.15 K [W]. */
+/** Enthalpy of the same components as ideal gas at 298.15 K [W]: what a stream's enthalpy is measured from. */
 export function idealDatum_W(n_mol_s: Float64Array, data: ClosureData): number {
   let H = 0;
   for (let i = 0; i < data.nc; i++) if (n_mol_s[i] !== 0) H += n_mol_s[i]! * data.hIdeal_J_mol[i]!;
@@ -84,10 +85,13 @@ const atoms = (n: Float64Array, count: Float64Array): number => {
 /**
  * Closure over an envelope, from its streams, heat, power and what reactions made; nothing else is asked.
  *
- * Mass, chemicals, elements: |in + made - out| relative to the larger of in and out, and to no less than 1e-6 of the total flow.
- * Energy: |H in - H out + Q + W| relative to the largest of: sum of n |h - h as ideal gas at 298.15 K| (the larger side),
- * |Q| + |W|, n * 1 kJ/mol; never to formation enthalpies, which would hide errors. Its `made` is Q + W.
+ * Mass, chemicals, elements: |in + made - out| relative to the larger of in and out; chemicals and elements to no less than
+ * 1e-6 of the total flow. Energy: |H in - H out + Q + W| relative to the largest of: sum of n |h - h as ideal gas at 298.15 K|
+ * (the larger side), |Q| + |W|, n * 1 kJ/mol; never to formation enthalpies, which would hide errors. Its `made` is Q + W.
  * Elements are left out when a chemical that flows has no formula.
+ *
+ * @param heat_W, power_W  into the envelope [W]
+ * @param made_mol_s       full list, below zero for what is consumed [mol/s]
  */
 export function closureOf(
   ins: readonly StreamState[],

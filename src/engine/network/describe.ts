@@ -60,8 +60,10 @@ const describeEmpty = (stream: StreamState, nc: number): StreamResult => ({
 });
 
 /**
- * A stream as it is shown, printed and written to files: everything that follows from its state.
- * A pure function of the state; the network asks it once per new state.
+ * A stream as it is shown, printed and written to files: everything that follows from its state. A pure function of the state;
+ * the network asks it once per new state.
+ *
+ * @returns  a solved record; without flow its conditions stand and all amounts are 0
  */
 export function describe(stream: StreamState, model: Model, data: ClosureData): StreamResult {
   if (stream.phases.length === 0) return describeEmpty(stream, data.nc);

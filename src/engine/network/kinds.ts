@@ -8,11 +8,14 @@ export interface Kinds {
   readonly solvers: Readonly<Record<string, AnyKind>>;
 }
 
+/** The kinds of this version. */
 export const KNOWN_KINDS: Kinds = { catalogue: CATALOGUE, solvers: SOLVERS };
 
+/** What a kind is; undefined for one that is not known (names like "constructor" included). */
 export const catalogueOf = (kinds: Kinds, kind: string): KindCatalogue | undefined =>
   Object.hasOwn(kinds.catalogue, kind) ? kinds.catalogue[kind] : undefined;
 
+/** How a kind is solved; undefined for one that is not known. */
 export const solverOf = (kinds: Kinds, kind: string): AnyKind | undefined =>
   Object.hasOwn(kinds.solvers, kind) ? kinds.solvers[kind] : undefined;
 

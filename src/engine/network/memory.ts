@@ -42,9 +42,15 @@ export interface Memory {
   complete: number | undefined;
 }
 
+/** Nothing was handed out yet. */
 export const nothingPosted = (): Posted => ({ streams: new Map(), units: new Map() });
 
-/** @param posted  shared by the memories of one reader, so that a change of basis hands out what the reader does not have */
+/**
+ * An empty memory for a basis, with its model. A chemical that lacks what the model needs throws here or in the first solve:
+ * compiling lets none through (missingForModel).
+ *
+ * @param posted  shared by the memories of one reader, so that a change of basis hands out what the reader does not have
+ */
 export function makeMemory(basis: Basis, posted: Posted = nothingPosted()): Memory {
   const model = makeModel(basis.model, basis.chemicals);
   return {

@@ -54,6 +54,8 @@ function meetAnywhere(shares: readonly Shares[], i: number, j: number): boolean 
 /**
  * Pairs of the cubic equation that nothing is known of, each once, at the stream where they matter most; predicted pairs far
  * from zero; and how many of the pairs that meet are predicted.
+ *
+ * @param streams  solved ones
  */
 export function pairLimits(
   model: Model,

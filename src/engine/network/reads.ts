@@ -9,7 +9,7 @@ const isTree = (x: unknown): x is Tree => typeof x === 'object' && x !== null;
 type Share = Extract<FlowSI, { is: 'share' }>;
 const isShare = (x: unknown): x is Share => isTree(x) && x.is === 'share';
 
-/** What a read sees of a stream: all of it or one chemical, in mol/s or kg/s. */
+/** What a read sees of a stream: all of it or one chemical [mol/s or kg/s, as the read says]. */
 export function seenBy(read: Read, { n_mol_s }: StreamState, MW_kg_mol: Float64Array): number {
   if (read.of === 'mol') return read.chemical === undefined ? totalOf(n_mol_s) : n_mol_s[read.chemical]!;
   let m = 0;

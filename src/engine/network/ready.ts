@@ -12,6 +12,7 @@ export type Known = StreamState | 'waiting' | 'no-solution';
 /** Why a unit cannot be solved now. */
 export type Unready = { readonly state: Exclude<SolveState, 'solved'>; readonly reasons: readonly Finding[] };
 
+/** A reason of the network's own: a note where a unit only waits, else beyond limit. */
 export const because = (
   code: NetworkFindingCode,
   at: Finding['at'],
@@ -41,8 +42,9 @@ function openPorts(unit: ProblemUnit, catalogue: KindCatalogue): Finding[] {
 }
 
 /**
- * Why a unit cannot be solved yet, or undefined when it can: a missing value first, then what is missing upstream. Streams of a
- * loop of which nothing is known yet are none of its reasons.
+ * Why a unit cannot be solved yet, or undefined when it can: a missing value first (network/inlet-missing,
+ * network/outlet-missing, network/source-missing), then what is missing upstream (network/waits-for); network/unknown-kind
+ * before both. Streams of a loop of which nothing is known yet are none of its reasons.
  */
 export function whyNot(
   unit: ProblemUnit,

@@ -26,13 +26,13 @@ const UNSOLVED: Readonly<Record<'waiting' | 'no-solution', StreamResult>> = {
   'no-solution': { state: 'no-solution' },
 };
 
-/** A unit that has no answer; the record of the last hand-out is kept when it says the same. */
+/** Puts down a unit that has no answer; the record of the last hand-out is kept when it says the same. Mutates: run.found. */
 export function note(unit: ProblemUnit, result: UnitResult, { found, memory }: Run): void {
   const posted = memory.posted.units.get(unit.id);
   found.units.set(unit.id, posted && sameData(posted, result) ? posted : result);
 }
 
-/** The outlets of a unit without an answer. */
+/** Puts down that the outlets of a unit without an answer have none. Mutates: run.known, run.found, run.memory. */
 export function spread(
   unit: ProblemUnit,
   state: 'waiting' | 'no-solution',
@@ -45,7 +45,10 @@ export function spread(
   }
 }
 
-/** The outlets of a solved unit: states for what follows, results for the reader, limits. */
+/**
+ * Puts down the outlets of a solved unit: states for what follows, results for the reader, limits. Mutates: run.known,
+ * run.found, run.memory.
+ */
 export function settle(
   unit: ProblemUnit,
   out: Readonly<Record<Port, StreamState>>,
@@ -59,6 +62,7 @@ export function settle(
   }
 }
 
+/** The state at a port. Throws when the kind's solver gives none there: a mistake of ours. */
 export function outletOf(
   unit: ProblemUnit,
   port: Port,
@@ -96,7 +100,7 @@ function streamMemory(
   };
 }
 
-/** The state of a stream that is solved by now. */
+/** The state of a stream that is solved by now. Throws when it is not: a mistake of ours. */
 export function stateIn(known: ReadonlyMap<StreamId, Known>, stream: StreamId): StreamState {
   const state = known.get(stream);
   if (state === undefined || typeof state === 'string')

@@ -9,7 +9,10 @@ const KELVIN = 1e-4;
 /** Flows below this share of the stream are compared against it. */
 const TRACE = 1e-6;
 
-/** Streams in which a solve from nothing found another answer than the live one. */
+/**
+ * Streams in which a solve from nothing found another answer than the live one: network/several-answers, with the largest
+ * relative difference of a component's flow [-] and that of temperature [K].
+ */
 export function severalAnswers(
   live: ReadonlyMap<StreamId, StreamMemory>,
   clean: ReadonlyMap<StreamId, StreamMemory>,

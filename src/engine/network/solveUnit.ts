@@ -45,6 +45,7 @@ export const unitClosure = (
     memory.data,
   );
 
+/** Whether amounts, enthalpy, temperature and pressure are numbers. */
 export const isFiniteState = (s: StreamState): boolean =>
   Number.isFinite(s.T_K) &&
   Number.isFinite(s.P_Pa) &&
@@ -97,6 +98,8 @@ export function warmIn(memory: Memory, unit: ProblemUnit): unknown {
 
 /**
  * Solves one unit: warm if an earlier answer was solved, and once more from nothing if that fails.
+ *
+ * @param boundary  feed or product: no balance is drawn around it
  */
 export function solveUnit(
   unit: ProblemUnit,

@@ -23,9 +23,8 @@ function pureVolumes(model: Model): Float64Array {
 const TRACE = 1e-6;
 
 /**
- * Volume flow as liquid at 15 degC by ideal mixing of pure liquids [m3/s]; a chemical that boils below 15 degC counts with its
- * saturated liquid. A chemical above its critical temperature there has no such volume: with a millionth of it or more in the
- * stream there is no answer; less of it is left out, which moves the answer by about as little.
+ * Volume flow as liquid at 15 degC and 101325 Pa by ideal mixing of pure liquids [m3/s]; a chemical that boils below 15 degC
+ * counts with its saturated liquid. Undefined when one that flows, however little, is above its critical temperature there.
  */
 export function standardLiquid_m3_s(n_mol_s: Float64Array, model: Model): number | undefined {
   const v = pureVolumes(model);

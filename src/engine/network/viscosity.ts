@@ -14,8 +14,8 @@ function viscosities(model: Model): Viscosities {
 }
 
 /**
- * Viscosity of a phase and the key of the mixture rule behind it; undefined where a chemical has no data, and for dense phases,
- * for which no rule is built.
+ * Viscosity of a phase [Pa s] and the key of the mixture rule behind it; undefined where a chemical has no data, and for dense
+ * phases, for which no rule is built.
  */
 export function phaseViscosity(
   phase: Phase,

@@ -29,6 +29,13 @@ export interface Anderson {
 /** A difference whose part not explained by newer ones is smaller than this share is left out [-]. */
 const INDEPENDENT = 1e-8;
 
+/**
+ * An empty acceleration.
+ *
+ * @param n      length of the points
+ * @param depth  most differences that are held; the oldest is forgotten first
+ * Allocates (3 depth + 3) vectors of n here, nothing later. propose throws before the first point is pushed.
+ */
 export function makeAnderson(n: number, depth: number): Anderson {
   const dx = Array.from({ length: depth }, () => new Float64Array(n));
   const df = Array.from({ length: depth }, () => new Float64Array(n));

@@ -3,14 +3,14 @@
  */
 
 /**
- * LU factors of the square left half of an n x (2n) block by partial pivoting; the right half is replaced by the solution
- * of left * X = right.
+ * LU factors of the square left half of an n x (2n) block by partial pivoting; the right half is replaced by the solution of
+ * left * X = right.
  *
  * @param a      rows of length 2n from `at` on; left half becomes the factors, right half X
  * @param pivot  n entries from `pivotAt` on: row exchanged with row k at step k
  * @returns      false when a column has no finite pivot other than zero: the block is then undefined
  * Two pivots a pass: the trailing rows are read and written half as often.
- * Source: Golub & Van Loan, Matrix Computations, 4th ed., alg. 3.4.1 and sec. 3.2.11 (blocking).
+ * Source: Golub & Van Loan, Matrix Computations, 4th ed., alg. 3.4.1 (outer products, here two at a time).
  */
 export function factorBlock(
   a: Float64Array,
@@ -129,7 +129,10 @@ function backSubstitute(a: Float64Array, at: number, n: number): void {
   }
 }
 
-/** Solves with the factors left by factorBlock for one right-hand side, `b` from `bAt` on, in place. */
+/**
+ * Solves left * x = b with the factors left by factorBlock, for one right-hand side of n entries in `b` from `bAt` on, in
+ * place. The factors must be good: factorBlock gave true.
+ */
 export function solveBlock(
   a: Float64Array,
   at: number,

@@ -32,7 +32,7 @@ export function choleskyShifted(a: Float64Array, n: number, spare: Float64Array,
   }
 }
 
-/** Solves A x = b with the factor from choleskyShifted; b is overwritten by x. */
+/** Solves A x = b with the factor from choleskyShifted; b, length n, is overwritten by x. */
 export function choleskySolve(a: Float64Array, n: number, b: Float64Array): void {
   for (let i = 0; i < n; i++) {
     let sum = b[i]!;

@@ -35,9 +35,10 @@ export function luFactor(a: Float64Array, n: number, pivot: Int32Array): boolean
 }
 
 /**
- * Solves A x = b with factors from luFactor; b is overwritten by x.
+ * Solves A x = b with factors from luFactor, which gave true.
  *
- * @param b   values; the right-hand side starts at `at` and is contiguous
+ * @param a, pivot  as luFactor left them
+ * @param b         right-hand side, n entries from `at` on; overwritten by x
  */
 export function luSolve(a: Float64Array, n: number, pivot: Int32Array, b: Float64Array, at = 0): void {
   for (let k = 0; k < n; k++) {
@@ -59,7 +60,7 @@ export function luSolve(a: Float64Array, n: number, pivot: Int32Array, b: Float6
   }
 }
 
-/** Solves A X = B with factors from luFactor for m right-hand sides; B is row-major n*m, overwritten by X. */
+/** Solves A X = B with factors from luFactor, which gave true, for m right-hand sides; B is row-major n*m, overwritten by X. */
 export function luSolveMany(a: Float64Array, n: number, pivot: Int32Array, b: Float64Array, m: number): void {
   for (let k = 0; k < n; k++) if (pivot[k] !== k) swapRows(b, m, k, pivot[k]!);
   for (let i = 0; i < n; i++) for (let j = 0; j < i; j++) subtractRow(b, m, i, j, a[i * n + j]!);

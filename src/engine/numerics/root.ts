@@ -25,9 +25,10 @@ export interface RootLimits {
  * Zero of a continuous function between two arguments of opposite sign, without derivatives; never takes more than one
  * evaluation beyond bisection.
  *
- * @returns  a value in every case; see Root.why
- * Source: Oliveira & Takahashi, ACM Trans. Math. Softw. 47 (2020) 5 (interpolate, truncate, project), with
- * kappa1 = 0.2/(b - a), kappa2 = 2, n0 = 1.
+ * @param from, to  ends of the interval, in either order; both are evaluated
+ * @returns         a value in every case; see Root.why. `found` also when the interval closes on a jump of f: |f| tells.
+ * Source: Oliveira & Takahashi, ACM Trans. Math. Softw. 47 (2020) 5 (interpolate, truncate, project), with kappa1 = 0.2/(b -
+ * a), kappa2 = 2, n0 = 1.
  */
 export function bracketedRoot(f: (x: number) => number, from: number, to: number, limits: RootLimits): Root {
   const { xTol, fTol = 0, evaluations = 100 } = limits;

@@ -5,20 +5,21 @@ import type { Call, CompositionSI } from './types';
 type Preset = Extract<CompositionSI, { is: 'preset' }>;
 
 /**
- * Dry air by volume, rounded so that the four sum to one.
- * Source: U.S. Standard Atmosphere 1976, table 3 (78.084 N2, 20.9476 O2, 0.934 Ar; CO2 brought to 0.04, neon and the rest left
- * out): recalled from memory.
+ * Dry air [mol/mol], rounded so that the four sum to one.
+ * Source: U.S. Standard Atmosphere 1976, table 3 (78.084 % N2, 20.9476 % O2, 0.934 % Ar; CO2 brought to 0.04 %, neon and the
+ * rest left out).
  */
 export const DRY_AIR = { N2: 0.7808, O2: 0.2095, Ar: 0.0093, CO2: 0.0004 } as const;
-/** The two-gas stand-in used in combustion sums. */
+/** The two-gas stand-in used in combustion sums [mol/mol]. */
 export const SIMPLE_AIR = { N2: 0.79, O2: 0.21 } as const;
 
 /**
- * Mole fractions of an air preset over the full list. Humid air: water's share is its vapour pressure at T (by its correlation) times the relative
- * humidity over P, the rest is dry air in proportion.
+ * Mole fractions of an air preset over the full list. Humid air: water's share is its vapour pressure at T (by its correlation)
+ * times the relative humidity over P, the rest is dry air in proportion.
  *
- * @returns fractions that sum to 1, or the reason why there are none: conditions missing, a chemical not in the list, or more
- *   water than the air can carry at this pressure
+ * @param at  temperature [K] and pressure [Pa] of the air; asked of humid air only
+ * @returns   fractions, length nc, that sum to 1; or feed/air-needs-temperature-and-pressure, feed/air-component-missing,
+ *            feed/water-data-missing, feed/humidity-above-saturation
  */
 export function airFractions(
   call: Pick<Call<unknown>, 'unit' | 'model'>,

@@ -3,7 +3,13 @@ import type { Port } from '../ids';
 import { warmOf } from './streams';
 import type { Answer } from './types';
 
-/** The answer of a unit without reactions; effort and warm start come from the streams that were flashed in it. */
+/**
+ * The answer of a unit without reactions and without shaft power. Iterations of the streams that were flashed in it are summed,
+ * the worst of their residuals stands, and the last of them is where the next solve starts.
+ *
+ * @param flashed  streams made here; those passed on from an inlet do not count
+ * @param heat_W   heat into the unit [W]
+ */
 export function answerOf<R>(
   out: Readonly<Record<Port, StreamState>>,
   results: R,

@@ -7,7 +7,10 @@ export function placesOf(full: Float64Array): number[] {
   return at;
 }
 
-/** The chemicals that a vector over the full list holds: their model, their entries, their places. */
+/**
+ * The chemicals that a vector over the full list holds: their model, their entries as they stand (not scaled to sum 1), their
+ * places.
+ */
 export function presentOf(
   full: Float64Array,
   model: Model,

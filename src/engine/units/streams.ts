@@ -8,7 +8,7 @@ import type { Call } from './types';
 
 export { totalOf } from './total';
 
-/** A stream through which nothing flows; temperature and pressure say where it would start. */
+/** A stream through which nothing flows: no phases, no enthalpy; temperature and pressure say where it would start. */
 export const emptyStream = (nc: number, T_K: number, P_Pa: number): StreamState => ({
   n_mol_s: new Float64Array(nc),
   P_Pa,
@@ -21,7 +21,10 @@ export const emptyStream = (nc: number, T_K: number, P_Pa: number): StreamState 
   iterations: 0,
 });
 
-/** The same material in the same state, `share` times as much of it. */
+/**
+ * The same material in the same state, `share` times as much of it [-]; without flow for a share of 0, the very same stream for
+ * 1.
+ */
 export function scaledStream(stream: StreamState, share: number): StreamState {
   if (share === 1) return stream;
   if (share === 0 || stream.phases.length === 0)
@@ -46,7 +49,12 @@ export interface Mixed {
   readonly T_K: number;
 }
 
-/** Adds inlets up. The order of their ports does not change the sum: they are added by port name. */
+/**
+ * Adds inlets up. The order of their ports does not change the sum: they are added by port name. Without any inlet the pressure
+ * comes out infinite and the temperature not a number: the network asks no unit that lacks one.
+ *
+ * @param nc  length of the full list
+ */
 export function mixed(inlets: Call<unknown>['in'], nc: number): Mixed {
   const n_mol_s = new Float64Array(nc);
   const all = Object.keys(inlets)
@@ -71,7 +79,11 @@ export function mixed(inlets: Call<unknown>['in'], nc: number): Mixed {
   };
 }
 
-/** Outlet pressure [Pa], or the reason why there is none. */
+/**
+ * Outlet pressure [Pa] from what is set: itself, a drop from the inlet's [Pa], or a ratio to it [-].
+ *
+ * @returns  pressure/not-positive, at the setting, where nothing above zero is left
+ */
 export function outletPressure(
   call: Pick<Call<unknown>, 'unit'>,
   p: PressureSI,
@@ -92,13 +104,16 @@ export function outletPressure(
       });
 }
 
-/** The unit's name on findings that lower rooms made without knowing it. */
+/** The finding with the unit's name, where a lower room made it without knowing the unit. */
 export const atUnit = (call: Pick<Call<unknown>, 'unit'>, f: Finding): Finding =>
   f.at.unit === undefined ? { ...f, at: { unit: call.unit, ...f.at } } : f;
 
 /**
- * Flash of `n_mol_s` at two conditions, or at a pressure and an enthalpy flow, which the stream then carries exactly; findings
- * name the unit. A hidden second liquid is told once, by the limits of the stream that carries it.
+ * Flash of `n_mol_s` (full list, none below zero) at two conditions, or at a pressure and an enthalpy flow, which the stream
+ * then carries exactly. Findings name the unit. A hidden second liquid is told once, by the limits of the stream that carries
+ * it.
+ *
+ * @returns  no solution with the flash's own codes (equilibrium/...) where no state meets the conditions
  */
 export function streamAt(
   call: Pick<Call<unknown>, 'unit' | 'model' | 'work'>,
@@ -121,6 +136,10 @@ export interface WarmState extends FlashWarm {
   readonly present: readonly number[];
 }
 
+/**
+ * Start values to remember of a stream: its conditions, and K over the chemicals present where it is vapour and liquid with
+ * every K finite.
+ */
 export function warmOf(stream: StreamState): WarmState {
   const { T_K, P_Pa, vapourFraction, n_mol_s, phases } = stream;
   const present = placesOf(n_mol_s);

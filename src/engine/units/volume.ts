@@ -14,7 +14,7 @@ export function phaseVolume_m3_mol(phase: Phase, stream: StreamState, model: Mod
   return thermo.liquidVolume_m3_mol(stream.T_K, stream.P_Pa, x);
 }
 
-/** Actual volume flow of a stream, all phases [m3/s]; 0 without flow. */
+/** Actual volume flow of a stream, all phases that carry flow [m3/s]; 0 without flow. */
 export function volumeFlow_m3_s(stream: StreamState, model: Model): number {
   let volume = 0;
   for (const phase of stream.phases)

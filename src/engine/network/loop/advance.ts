@@ -9,7 +9,10 @@ const TRACE = 1e-6;
 /** Size of an enthalpy per mole [J/mol]. */
 const ENTHALPY_J_MOL = 1e4;
 
-/** Size of every entry, in which its residual is measured; a chemical below `least` of its tear is measured by that. */
+/**
+ * Size of every entry, in which its residual is measured; a chemical below `least` of its tear is measured by that. Mutates:
+ * out, of layout.length.
+ */
 export function sizes(
   x: Float64Array,
   g: Float64Array,
@@ -80,8 +83,10 @@ export const weigh = (x: Float64Array, g: Float64Array, layout: Layout, out: Flo
 
 /**
  * Keeps a proposal within what a step may do: flows stay above a tenth of their value and below a hundred times it, what has
- * gone is gone, what is new is taken as it came; enthalpy and pressure move at most twenty times as far as the pass did.
- * Mutates: y.
+ * gone is gone, what is new is taken as it came; enthalpy moves at most twenty times as far as the pass did, pressure between
+ * half and twice of what came back. Mutates: y.
+ *
+ * @param x, g  what the pass assumed and what came back, by `layout`
  */
 export function hold(y: Float64Array, x: Float64Array, g: Float64Array, layout: Layout): void {
   const { nc, tears, width, length } = layout;

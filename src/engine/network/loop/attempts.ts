@@ -14,8 +14,11 @@ const COLD_PASSES = 150;
 const WARM_PASSES = 50;
 
 /**
- * Solves a loop: from the tear of the last answer if there is one, else and then from empty tears, then from tears that
- * carry what enters.
+ * Solves a loop: from the tear of the last answer if there is one, else and then from empty tears, then from tears that carry
+ * what enters.
+ *
+ * @returns  solved; or the reason of the attempt that says most: network/nothing-enters, network/no-way-out,
+ *           network/pressure-falls, network/loop-unsettled, or a unit's own
  */
 export function* attemptAll(loop: Loop, warm: LoopWarm | undefined): Generator<SolveStep, Ending, void> {
   const mix = entering(loop);

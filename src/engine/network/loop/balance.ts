@@ -15,6 +15,7 @@ export interface Envelope {
   leaves(stream: StreamId): boolean;
 }
 
+/** The envelope around a loop's units but feeds and products. */
 export function envelopeOf({ run, members }: Loop): Envelope {
   const { units, source, target } = run.plan;
   const inner = new Set(members.filter((m) => !m.boundary).map((m) => m.unit.id));
@@ -93,6 +94,7 @@ export interface Staying {
   readonly round: number;
 }
 
+/** What of chemical i enters, leaves and goes round after a pass. */
 export function stayingOf(balance: UnitClosure, back: Torn, i: number): Staying {
   const { in: into, out, made } = balance.chemicals[i]!;
   let round = 0;

@@ -59,6 +59,7 @@ export interface Course {
   excursion: number;
 }
 
+/** An attempt before its first pass. */
 export function courseFrom(loop: Loop, start: Start): Course {
   const layout = layoutOf(loop);
   const depth = Math.min(DEEPEST, DEPTH + FURTHER * Math.max(0, layout.tears - 1));
@@ -79,6 +80,7 @@ export function courseFrom(loop: Loop, start: Start): Course {
   };
 }
 
+/** What is torn as numbers, in a new array; see pack. */
 export function packed(torn: Torn, layout: Layout, loop: Loop): Float64Array {
   const out = new Float64Array(layout.length);
   pack(torn, layout, loop, out);

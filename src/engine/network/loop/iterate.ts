@@ -59,7 +59,10 @@ interface Falls extends Fall {
 const MANY_FALLS = 4;
 const FALL = 1e-6;
 
-/** Passes around a loop from a start until it is solved, or there is a reason to stop. */
+/**
+ * Passes around a loop from a start until it is solved, or there is a reason to stop. Solved: every tear came back within 1e-9
+ * of its size, and the loop and the units at its tears close to 2e-10 (5e-10 where it gets no better).
+ */
 export function* iterate(loop: Loop, start: Start): Generator<SolveStep, Ending, void> {
   const c = courseFrom(loop, start);
   const watch: Watch = {

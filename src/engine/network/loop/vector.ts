@@ -17,6 +17,7 @@ export interface Layout {
   readonly length: number;
 }
 
+/** How many numbers a loop's tears and torn reads are. */
 export function layoutOf({ run, plan }: Loop): Layout {
   const { nc } = run.memory.model;
   const width = nc + 2;

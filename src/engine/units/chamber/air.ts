@@ -9,7 +9,11 @@ import { massFlow_kg_s } from '../volume';
 import { type Combustion, sumsOf } from './combustion';
 import type { ChamberAir, ChamberSettings } from './types';
 
-/** Mole fractions of the air that is drawn, over the full list; its oxygen is found by CAS number or formula. */
+/**
+ * Mole fractions of the air that is drawn, over the full list; its oxygen is found by CAS number or formula.
+ *
+ * @returns  chamber/air-by-component-flows, or what airFractions gives, at the air's composition
+ */
 export function drawnFractions(call: Call<ChamberSettings>, air: ChamberAir): Outcome<Float64Array> {
   const { composition: c } = air;
   if (c.is === 'flows')
@@ -40,7 +44,14 @@ function stated(call: Call<ChamberSettings>, flow: FlowSI, y: Float64Array, fuel
   return flow.share * (flow.basis === 'mole' ? totalOf(of) : massFlow_kg_s(of, call.model) / perMole_kg);
 }
 
-/** Air for an excess over what burns in the fuel and in the air itself [mol/s]; not finite when the air has no oxygen to give. */
+/**
+ * Air for an excess over what burns in the fuel and in the air itself [mol/s]; below zero when the fuel brings more oxygen than
+ * that, NaN when the air has no oxygen to give.
+ *
+ * @param fuel    amounts of all fuels, full list [mol/s]
+ * @param y       mole fractions of the air, full list
+ * @param excess  oxygen over the theoretical, less 1 [-]
+ */
 export function airForExcess(c: Combustion, fuel: Float64Array, y: Float64Array, excess: number): number {
   const f = sumsOf(c, fuel);
   const a = sumsOf(c, y);
@@ -106,7 +117,14 @@ function amount(
     : noSolution({ code: 'chamber/oxygen-without-air', weight: 'beyond-limit', at, evidence: [oxygen] });
 }
 
-/** The air that is drawn from outside, at its own temperature and pressure. */
+/**
+ * The air that is drawn from outside, at its own temperature and pressure.
+ *
+ * @param fuel  amounts of all fuels, full list [mol/s]
+ * @param y     mole fractions of the air, full list
+ * @returns     chamber/air-below-zero, chamber/no-oxygen, chamber/oxygen-without-air, chamber/stack-oxygen-out-of-reach, or the
+ *              flash's reason
+ */
 export function drawnAir(
   call: Call<ChamberSettings>,
   air: ChamberAir,
@@ -122,7 +140,13 @@ export function drawnAir(
   return streamAt(call, amounts, { T_K: air.T, P_Pa: air.P }, warmFrom(warm, amounts, air.T));
 }
 
-/** Air (or oxygen) that is missing, with what 15 % excess would take. */
+/**
+ * That air (or oxygen) is missing, with what 15 % excess would take: chamber/air-short, or chamber/no-oxygen where the air has
+ * none.
+ *
+ * @param y          mole fractions of the air, full list; undefined without any air
+ * @param missingO2  [mol/s]
+ */
 export function short<T>(
   call: Call<ChamberSettings>,
   c: Combustion,

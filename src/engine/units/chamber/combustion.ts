@@ -10,7 +10,7 @@ import type { Call } from '../types';
 /**
  * Heat of vaporisation of water at 25 degC [J/mol]: the difference of the enthalpies of formation of the gas, -241 826, and of
  * the liquid, -285 830.
- * Source: Cox, Wagman & Medvedev, CODATA Key Values for Thermodynamics (1989): recalled from memory. Steam tables: 43.99 kJ/mol.
+ * Source: Cox, Wagman & Medvedev, CODATA Key Values for Thermodynamics (1989).
  */
 export const WATER_CONDENSES_J_MOL = 44004;
 
@@ -63,11 +63,12 @@ const because = (
 });
 
 /**
- * What becomes of each chemical that is there: C to CO2, H to H2O and HCl, S to SO2, bound N to N2, Cl to HCl.
- * Oxygen that is taken: C + (H - Cl)/4 + S - O/2.
+ * What becomes of each chemical that is there: C to CO2, H to H2O and HCl, S to SO2, bound N to N2, Cl to HCl. Oxygen that is
+ * taken: C + (H - Cl)/4 + S - O/2 [mol/mol].
  *
  * @param present  whether each chemical of the full list flows
- * @returns        over the full list, or the chemicals that cannot be burnt
+ * @returns        over the full list; or one finding for each chemical that cannot be burnt: reaction/...,
+ *                 chamber/element-not-burnt, chamber/product-missing
  */
 export function combustionOf(
   call: Pick<Call<unknown>, 'unit' | 'model'>,
@@ -144,6 +145,11 @@ export interface Sums {
   readonly waterMade: number;
 }
 
+/**
+ * Oxygen needed and brought, dry gas made, heat set free by these amounts.
+ *
+ * @param n_mol_s  full list [mol/s]; per mole of a mixture just as well
+ */
 export function sumsOf({ of, places }: Combustion, n_mol_s: Float64Array): Sums {
   let theoreticalO2 = 0;
   let dryRest = 0;

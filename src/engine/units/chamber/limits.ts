@@ -12,8 +12,14 @@ const DISSOCIATES = rule('chamber/dissociation-neglected', 'note', 1803.15, 'tem
 const LITTLE_O2 = rule('chamber/little-oxygen', 'caution', 0.02, 'fraction');
 /** Heat that must be added [W]. */
 const TAKES = rule('chamber/takes-heat', 'caution', 0, 'power', 'balance');
+
+/** Thresholds that only a chamber has. */
 export const CHAMBER_RULES: readonly Rule[] = [COLD, HOT, TOO_HOT, DISSOCIATES, LITTLE_O2, TAKES];
 
+/**
+ * Limits of a chamber: streams that would have to flow uphill into it (drawn air too), a flame too cold or too hot, little
+ * oxygen left, heat that must be added. None without flow; of the flame none where nothing burns.
+ */
 export function chamberLimits(call: Call<ChamberSettings>, answer: Answer<ChamberResults>): Finding[] {
   const { results, drawn } = answer;
   const { limits } = call;

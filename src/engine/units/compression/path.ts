@@ -4,10 +4,12 @@ import type { ThermoModel } from '../../thermo/types';
 export type VolumeAt = (P_Pa: number, h_J_mol: number) => number | undefined;
 
 /**
- * Molar enthalpy at the end of a path of constant polytropic efficiency: dh/d ln P = factor v P.
+ * Molar enthalpy at the end of a path of constant polytropic efficiency [J/mol]: dh/d ln P = factor v P.
  *
- * Fourth-order Runge-Kutta in ln P. With a step of 0.1 a twentyfold compression of a monatomic gas ends within 1e-7 of its temperature.
+ * Fourth-order Runge-Kutta in ln P. With a step of 0.1 a twentyfold compression of a monatomic gas ends within 1e-7 of its
+ * temperature.
  *
+ * @param P2_Pa   pressure at the end, above or below the one at the start [Pa]
  * @param factor  1/efficiency while compressing, efficiency while expanding
  * @param step    largest step of ln P [-]
  * @returns       undefined when a state on the way does not exist
@@ -46,11 +48,12 @@ export function followPath(
 const SMALL = 1e-6;
 
 /**
- * Volumes of a gas that stays one phase: temperature from enthalpy by Newton's method, no flash.
+ * Volumes of a gas that stays one phase: temperature from enthalpy by Newton's method, no flash. The search starts from the
+ * last state found, moved by the change of enthalpy alone; heat capacity is taken once a call.
  *
- * The search starts from the last state found, moved by the change of enthalpy alone; heat capacity is taken once a call.
- *
+ * @param x     mole fractions of the chemicals of `thermo`, sum 1
  * @param from  a state of the gas
+ * @returns     a function with a memory: asked along a path, undefined where thirty steps find no temperature
  */
 export function gasVolumes(
   thermo: ThermoModel,

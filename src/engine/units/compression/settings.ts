@@ -1,6 +1,6 @@
 import type { ResultSpec, SettingSpec } from '../types';
 
-/** Outlet of a machine; drive efficiency for electric power only. */
+/** Outlet of a machine: pressure, ratio of outlet to inlet, or temperature. */
 export const machineOutlet: SettingSpec = {
   is: 'some',
   count: 1,
@@ -11,6 +11,7 @@ export const machineOutlet: SettingSpec = {
   },
 };
 
+/** Isentropic or polytropic efficiency [-]; absent: an assumption. */
 export const machineEfficiency: SettingSpec = {
   is: 'some',
   count: 1,
@@ -25,6 +26,7 @@ export const machineEfficiency: SettingSpec = {
   },
 };
 
+/** Efficiency of motor and drive [-]: for electric power only. */
 export const machineDrive: SettingSpec = {
   is: 'quantity',
   dim: 'fraction',
@@ -33,6 +35,7 @@ export const machineDrive: SettingSpec = {
   optional: true,
 };
 
+/** What compressors and expanders show; see MachineResults. */
 export const MACHINE_RESULTS: Readonly<Record<string, ResultSpec>> = {
   power_W: { dim: 'power' },
   electric_W: { dim: 'power' },

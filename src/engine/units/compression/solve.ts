@@ -136,9 +136,14 @@ function dewPoint(
  * A compressor or an expander: from one pressure to another with losses, no heat.
  *
  * Isentropic efficiency: the change of enthalpy at constant entropy divided by it (compressing) or times it (expanding).
- * Polytropic efficiency: dh = v dP / efficiency (compressing), dh = efficiency v dP (expanding), in small steps of pressure
- * on the model's real volumes, with a flash at every point where two phases are about.
- * The other efficiency of the two is reported.
+ * Polytropic efficiency: dh = v dP / efficiency (compressing), dh = efficiency v dP (expanding), in small steps of pressure on
+ * the model's real volumes, with a flash at every point where two phases are about. The other efficiency of the two is reported
+ * where it can be told.
+ *
+ * @param direction  in which a discharge temperature is sought; pressures are followed either way
+ * @returns  pressure/not-positive, compression/path-breaks-off, compression/temperature-out-of-reach,
+ *           compressor/temperature-below-inlet, expander/temperature-above-inlet, or the flash's reason (equilibrium/...), of
+ *           which a missing standard entropy is one
  */
 export function solveMachine(
   call: Call<MachineSettings>,

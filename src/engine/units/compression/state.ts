@@ -40,12 +40,15 @@ export interface Leaving {
 }
 
 const flowing = (s: StreamState) => s.phases.filter((p) => p.fraction > 0);
+
+/** Whether what flows is one gas phase: a vapour, or a dense phase that counts as one. */
 export const isOneGas = (s: StreamState): boolean => {
   const phases = flowing(s);
   const kind = phases.length === 1 ? phases[0]!.kind : undefined;
   return kind === 'vapour' || (kind === 'dense' && s.vapourFraction === 1);
 };
 
+/** What enters a machine, with flow; the gas alone is prepared where it is one gas phase. */
 export function entering(call: Call<unknown>, stream: StreamState): Entering {
   const total_mol_s = totalOf(stream.n_mol_s);
   const common = { stream, total_mol_s, h_J_mol: stream.H_W / total_mol_s };
@@ -55,7 +58,10 @@ export function entering(call: Call<unknown>, stream: StreamState): Entering {
   return { ...common, gas: { thermo: call.model.of(present), x } };
 }
 
-/** Work without losses to the work that is done, by the direction in which the fluid goes. */
+/**
+ * Work that is done for a work without losses, in any unit: more where the fluid takes it (>= 0), less where the fluid gives
+ * it.
+ */
 export const withLosses = (ideal: number, efficiency: number): number =>
   ideal >= 0 ? ideal / efficiency : ideal * efficiency;
 
@@ -181,7 +187,13 @@ function polytropicTo(
   return outAt(call, e, P_Pa, H_W, warm);
 }
 
-/** What leaves at a pressure, with the efficiency that is set, and without losses. */
+/**
+ * What leaves at a pressure [Pa], with the efficiency that is set, and without losses. At the inlet's own pressure it is the
+ * inlet.
+ *
+ * @returns  no solution where the isentropic or the last state is not found, or the path breaks off; a polytropic machine goes
+ *           without its isentropic state where there is none
+ */
 export function leavingAt(
   call: Call<MachineSettings>,
   e: Entering,

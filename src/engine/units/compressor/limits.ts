@@ -16,6 +16,8 @@ const HOT_LIGHT = rule('compressor/hot-light-gas', 'caution', 408.15, 'temperatu
 const HOT_OLEFINS = rule('compressor/hot-olefins', 'caution', 373.15, 'temperature');
 /** Power that comes out of the compressor [W]. */
 const GIVES = rule('compressor/gives-power', 'caution', 0, 'power', 'balance');
+
+/** Thresholds that only a compressor has. */
 export const COMPRESSOR_RULES: readonly Rule[] = [
   LIQUID,
   NEAR_DEW,
@@ -60,6 +62,10 @@ function discharge(call: Call<MachineSettings>, out: StreamState): Finding | und
     : undefined;
 }
 
+/**
+ * Limits of a compressor: liquid at the suction or a suction near its dew point, a high ratio, a hot discharge (sooner for
+ * light gases, and for olefins and dienes), power that comes out. None without flow.
+ */
 export function compressorLimits(call: Call<MachineSettings>, answer: Answer<MachineResults>): Finding[] {
   const inlet = call.in.in;
   const out = answer.out.out;

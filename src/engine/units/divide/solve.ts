@@ -74,5 +74,11 @@ function solve(call: Call<DivideSettings>): Outcome<Answer<DivideResults>> {
   return solved(answerOf(out, { shares: found }, []));
 }
 
-/** Given split of one stream; state and composition stay. */
+/**
+ * Given split of one stream; state and composition stay, so that mole and mass shares agree. The outlet without a share takes
+ * the rest.
+ *
+ * Gives divide/unknown-outlet, divide/no-rest-outlet, divide/several-rest-outlets, divide/share-below-zero,
+ * divide/shares-above-whole or divide/flow-from-nothing.
+ */
 export const divide: UnitKind<DivideSettings, DivideResults> = { solve, limits: () => [] };

@@ -10,8 +10,14 @@ const HAS_DUTY = rule('drum/has-duty', 'note', 0, 'power', 'balance');
 /** One outlet takes less than this share [-]. */
 const ONE_PHASE = rule('drum/one-phase', 'note', 0, 'fraction', 'balance');
 const DENSE = rule('drum/dense', 'caution', 0, 'fraction', 'own-rule');
+
+/** Thresholds that only a drum has. */
 export const DRUM_RULES: readonly Rule[] = [HAS_DUTY, ONE_PHASE, DENSE];
 
+/**
+ * Limits of a drum: inlets that would have to flow uphill, a duty, only one phase or one that is neither liquid nor vapour, the
+ * level of utility that its heat needs. None without flow.
+ */
 export function drumLimits(call: Call<DrumSettings>, answer: Answer<DrumResults>, site: SiteSI): Finding[] {
   const { vapour, liquid } = answer.out;
   const { results, heat_W } = answer;

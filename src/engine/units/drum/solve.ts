@@ -62,5 +62,8 @@ function solve(call: Call<DrumSettings>): Outcome<Answer<DrumResults>> {
   return solved(answerOf({ ...outlets(whole) }, results, flashed, heat_W), made.findings);
 }
 
-/** One equilibrium stage between a vapour and a liquid outlet. */
+/**
+ * One equilibrium stage between a vapour and a liquid outlet. Gives pressure/not-positive, or the flash's reason why there is
+ * no such state.
+ */
 export const drum: UnitKind<DrumSettings, DrumResults> = { solve, limits: drumLimits };

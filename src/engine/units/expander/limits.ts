@@ -5,8 +5,11 @@ import type { Answer, Call } from '../types';
 
 /** Power that goes into the expander [W]. */
 const TAKES = rule('expander/takes-power', 'caution', 0, 'power', 'balance');
+
+/** Thresholds that only an expander has. */
 export const EXPANDER_RULES: readonly Rule[] = [TAKES];
 
+/** Limits of an expander: power that goes in. */
 export function expanderLimits(call: Call<MachineSettings>, answer: Answer<MachineResults>): Finding[] {
   const inlet = call.in.in;
   if (!inlet || !(answer.power_W > thresholdOf(TAKES, call.limits))) return [];

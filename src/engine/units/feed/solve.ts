@@ -88,5 +88,10 @@ function solve(call: Call<FeedSettings>): Outcome<Answer<Record<string, never>>>
   return solved(answerOf({ out: made.value }, {}, [made.value]), made.findings);
 }
 
-/** What enters the sketch. */
+/**
+ * What enters the sketch: component flows [mol/s] from flow and composition, flashed at two conditions.
+ *
+ * Gives feed/no-components, feed/flow-missing, feed/flow-not-positive, feed/share-without-stream, what airFractions gives, or
+ * the flash's reason why there is no such state.
+ */
 export const feed: UnitKind<FeedSettings, Record<string, never>> = { solve, limits: () => [] };

@@ -62,8 +62,11 @@ function nothing(call: Call<HeatedSettings>, inlet: StreamState): Outcome<Answer
 }
 
 /**
- * A stream brought to a condition by heat alone; heaters and coolers are the same sum with another sign.
- * The duty is the difference of the enthalpy flows; where the duty is given, the outlet's enthalpy follows from it exactly.
+ * A stream brought to a condition by heat alone; heaters and coolers are the same sum with another sign. The duty is the
+ * difference of the enthalpy flows; where the duty is given, the outlet's enthalpy follows from it exactly.
+ *
+ * @returns  pressure/not-positive, temperature/not-positive, or the flash's reason why there is no such outlet; without flow an
+ *           outlet without flow and no duty, whatever is set
  */
 export function solveHeated(call: Call<HeatedSettings>): Outcome<Answer<HeatedResults>> {
   const inlet = call.in.in!;

@@ -29,5 +29,5 @@ function solve(call: Call<JoinSettings>): Outcome<Answer<JoinResults>> {
   return solved(answerOf({ out }, { T_K: out.T_K, P_Pa: out.P_Pa }, [out]), made.findings);
 }
 
-/** Adiabatic mixing. */
+/** Adiabatic mixing. Gives pressure/not-positive, or the flash's reason why there is no such state. */
 export const join: UnitKind<JoinSettings, JoinResults> = { solve, limits: joinLimits };

@@ -12,8 +12,10 @@ export interface FuelShare {
 }
 
 /**
- * How near the gas of a stream is to burning in air: sum of y_i / LFL_i over its vapour.
- * The limits hold at 25 degC and 1 atm in air; chemicals without one count as not burning.
+ * How near the gas of a stream is to burning in air: sum of y_i / LFL_i over its vapour (or its dense phase). The limits hold
+ * at 25 degC and 1 atm in air; chemicals without one count as not burning.
+ *
+ * @returns  share 0 without a gas
  * Source: Le Chatelier, Ann. Mines 19 (1891) 388.
  */
 export function fuelShareOfLimit(stream: StreamState, model: Model): FuelShare {

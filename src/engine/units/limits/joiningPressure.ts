@@ -13,10 +13,10 @@ export const ENTERS_BELOW = rule(
 );
 
 /**
- * Streams that would have to flow uphill into a unit.
+ * Streams that would have to flow uphill into a unit, each at its port.
  *
  * @param inlets  entering streams by port; those without flow are passed over
- * @param P_Pa  pressure inside the unit [Pa]
+ * @param P_Pa    pressure inside the unit [Pa]
  */
 export function joiningPressure(
   unit: UnitId,

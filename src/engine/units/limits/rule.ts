@@ -26,6 +26,7 @@ export interface Rule {
 /** Thresholds the sketch overrides, by finding code [SI]. */
 export type Overrides = Readonly<Record<string, number>> | undefined;
 
+/** A limit as data: code, weight, default threshold [SI] of a dimension, and what that rests on. */
 export const rule = (
   code: FindingCode,
   weight: Weight,

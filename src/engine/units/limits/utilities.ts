@@ -37,6 +37,7 @@ const HEATING: readonly Rule[] = [
 ];
 const POLYMERISES = rule('heating/polymerises', 'caution', degC(110), 'temperature');
 
+/** Thresholds of the limits in this file. */
 export const UTILITY_RULES: readonly Rule[] = [...COOLING, ...HEATING, POLYMERISES];
 
 /** Dienes and styrenes, by CAS number where the family alone does not tell. */
@@ -53,9 +54,11 @@ function polymerising(stream: StreamState, model: Model): string | undefined {
 }
 
 /**
- * Which level of cooling or heating a duty needs, judged by the temperature at which the stream leaves.
+ * Which level of cooling or heating a duty needs, judged by the temperature at which the stream leaves: the coldest or hottest
+ * level that fires is told, no other. Beside it, warm dienes and styrenes.
  *
  * @param heat_W  heat into the unit [W]; 0 asks for no level
+ * @param out     stream at whose temperature the heat is exchanged
  */
 export function utilityLevels(
   unit: UnitId,

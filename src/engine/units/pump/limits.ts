@@ -10,8 +10,11 @@ const LOW_HEAD = rule('pump/low-suction-head', 'note', 3, 'length');
 const STATIC_ONLY = rule('pump/static-head-only', 'note', 1e-4, 'fraction');
 /** Power that comes out of the pump [W]. */
 const GIVES = rule('pump/gives-power', 'caution', 0, 'power', 'balance');
+
+/** Thresholds that only a pump has. */
 export const PUMP_RULES: readonly Rule[] = [VAPOUR, LOW_HEAD, STATIC_ONLY, GIVES];
 
+/** Limits of a pump: vapour that enters, else too little head at the suction; power that comes out. None without flow. */
 export function pumpLimits(call: Call<PumpSettings>, answer: Answer<PumpResults>): Finding[] {
   const inlet = call.in.in;
   if (!inlet || inlet.phases.length === 0) return [];

@@ -90,5 +90,11 @@ function solve(call: Call<PumpSettings>): Outcome<Answer<PumpResults>> {
   return solved({ ...answer, power_W, warm: next }, made.findings);
 }
 
-/** A liquid brought to a higher pressure. */
+/**
+ * A liquid brought to a higher pressure. Hydraulic power is volume flow entering times rise of pressure; all shaft power goes
+ * into the fluid, which is flashed at the outlet pressure and its enthalpy.
+ *
+ * Gives pressure/not-positive, or the flash's reason why there is no such outlet. Vapour at the suction is a limit, not a
+ * failure.
+ */
 export const pump: UnitKind<PumpSettings, PumpResults> = { solve, limits: pumpLimits };

@@ -7,7 +7,10 @@ import type { Call } from '../types';
 /** Molar mass and formula of a chemical that reacts agree within this [-]: mass would not close otherwise. */
 const SAME_MASS = 1e-10;
 
-/** Why a chemical cannot take part in a reaction; undefined when it can. */
+/**
+ * Why a chemical cannot take part in a reaction: no formula, no enthalpy of formation, or a molar mass that is not that of its
+ * atoms to 1e-10, so that mass would not close. Undefined when it can.
+ */
 export function whyNotReacting(call: Pick<Call<unknown>, 'unit'>, c: ChemicalData): Finding | undefined {
   const because = (code: FindingCode, ...more: Finding['evidence']): Finding => ({
     code,

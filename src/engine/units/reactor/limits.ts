@@ -4,6 +4,9 @@ import { utilityLevels } from '../limits/utilities';
 import type { Answer, Call, SiteSI } from '../types';
 import type { ReactorResults, ReactorSettings } from './types';
 
+/**
+ * Limits of a reactor: inlets that would have to flow uphill, and the level of utility that its heat needs. None without flow.
+ */
 export function reactorLimits(
   call: Call<ReactorSettings>,
   answer: Answer<ReactorResults>,

@@ -82,8 +82,10 @@ export interface Reacted {
 /**
  * Amounts after the reactions, one after another: each converts a share of what is left of its chemical.
  *
- * @returns  the reason why not: an element that does not balance and by how much, a chemical that cannot react, a reactant that
- *           runs out, with what is needed, what is there and the conversion at which it does
+ * @param entering_mol_s  full list [mol/s]
+ * @returns  amounts [mol/s] and extents [mol/s]; or every fault of the reactions themselves (reaction/no-formula,
+ *           reaction/no-formation-enthalpy, reaction/molar-mass, reactor/unbalanced, reactor/key-not-consumed); or
+ *           reactor/reactant-short with what is needed, what is there and the conversion at which it runs out
  */
 export function react(
   call: Pick<Call<unknown>, 'unit' | 'model'>,
@@ -123,7 +125,12 @@ export function react(
   return solved({ n_mol_s: n, extents_mol_s: extents });
 }
 
-/** Heat that the reactions take up at 25 degC as ideal gases [W]; negative when they set heat free. */
+/**
+ * Heat that the reactions take up at 25 degC as ideal gases [W], sum of extent times sum of nu Hf; negative when they set heat
+ * free.
+ *
+ * @param extents  of each reaction [mol/s]
+ */
 export const heatOfReaction_W = (
   reactions: readonly Reaction[],
   extents: readonly number[],

@@ -45,5 +45,5 @@ function solve(call: Call<ReactorSettings>): Outcome<Answer<ReactorResults>> {
   return solved({ ...answer, made_mol_s: n_mol_s.map((n, i) => n - all.n_mol_s[i]!) }, made.findings);
 }
 
-/** Given conversions. */
+/** Given conversions, one reaction after another, then the outlet by pressure and heat. */
 export const reactor: UnitKind<ReactorSettings, ReactorResults> = { solve, limits: reactorLimits };

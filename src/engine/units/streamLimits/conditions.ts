@@ -12,6 +12,8 @@ const NEAR_CRITICAL = rule('stream/near-critical', 'caution', 4, 'number');
 const TOO_NEAR_CRITICAL = rule('stream/too-near-critical', 'beyond-limit', 2.5, 'number');
 const SECOND_LIQUID = rule('stream/second-liquid', 'caution', 0, 'number', 'phase-stability');
 const LIQUIDS_TOGETHER = rule('stream/liquids-together', 'caution', 0, 'number', 'phase-stability');
+
+/** Thresholds of the limits in this file. */
 export const CONDITION_RULES: readonly Rule[] = [
   COLD,
   TOO_COLD,
@@ -23,13 +25,17 @@ export const CONDITION_RULES: readonly Rule[] = [
   LIQUIDS_TOGETHER,
 ];
 
-/** Plain carbon steel turns brittle in the cold. */
+/**
+ * Plain carbon steel turns brittle in the cold: a caution below the first temperature, beyond limit below the second unless a
+ * material was chosen for the unit.
+ */
 export function coldSteel({ stream, overrides, at, materialNoted }: StreamContext): Finding[] {
   const below = (r: Rule): boolean => stream.T_K < thresholdOf(r, overrides);
   const broken = !materialNoted && below(TOO_COLD) ? TOO_COLD : below(COLD) ? COLD : undefined;
   return broken ? [finding(broken, at, [saw('temperature', stream.T_K, 'temperature')], overrides)] : [];
 }
 
+/** A pressure below the atmosphere's: air may leak in. */
 export const vacuum = ({ stream, overrides, at }: StreamContext): Finding[] =>
   stream.P_Pa < thresholdOf(VACUUM, overrides)
     ? [finding(VACUUM, at, [saw('pressure', stream.P_Pa, 'pressure')], overrides)]
@@ -61,7 +67,10 @@ export function hydrates(c: StreamContext): Finding[] {
   return [finding(HYDRATES, at, seen, overrides)];
 }
 
-/** Vapour and liquid that are nearly alike: an equation of state is at its weakest there. */
+/**
+ * Vapour and liquid that are nearly alike, by the ratio of their mass densities (the model's own volumes): an equation of state
+ * is at its weakest there.
+ */
 export function nearCritical({ stream, overrides, at, model }: StreamContext): Finding[] {
   const vapour = flowing(stream, 'vapour');
   const liquid = flowing(stream, 'liquid');

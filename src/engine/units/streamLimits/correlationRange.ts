@@ -21,6 +21,8 @@ const FAR_OUTSIDE = rule(
   'temperatureDifference',
   'table-range',
 );
+
+/** Thresholds of the limits in this file. */
 export const CORRELATION_RULES: readonly Rule[] = [OUTSIDE, WELL_OUTSIDE, FAR_OUTSIDE];
 
 /** Less than this of a chemical moves nothing that is shown [-]. */
@@ -67,7 +69,10 @@ function worstOf(c: StreamContext): Outside | undefined {
   return worst;
 }
 
-/** The worst correlation of the stream; a gas alone reads no vapour pressure and no liquid density. */
+/**
+ * The correlation that is farthest outside its own range, of those that the model reads for this stream: a note, a caution or
+ * beyond limit by the distance [K]. A gas alone reads no vapour pressure and no liquid density.
+ */
 export function correlationRange(c: StreamContext): Finding[] {
   const { stream, overrides, at } = c;
   const worst = worstOf(c);

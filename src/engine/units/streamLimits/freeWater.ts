@@ -5,6 +5,8 @@ import { CAS_WATER, flowing, type StreamContext } from './context';
 
 /** Water in a hydrocarbon liquid as a multiple of what dissolves. */
 const ABOVE = rule('stream/water-above-solubility', 'caution', 1, 'number');
+
+/** Thresholds of the limits in this file. */
 export const FREE_WATER_RULES: readonly Rule[] = [ABOVE];
 
 const AROMATIC: ReadonlySet<string> = new Set(['aromatic']);
@@ -19,9 +21,11 @@ const dissolves = ({ x, h_J_mol }: typeof IN_OTHERS, T_K: number): number =>
   x * Math.exp((h_J_mol / R_J_molK) * (1 / 298.15 - 1 / T_K));
 
 /**
- * Water beyond what a hydrocarbon liquid dissolves: models that mix everything (Raoult's law) never see it part.
- * An estimate for screening, between paraffins (hexane) and aromatics (benzene) by their shares; figures recalled from memory.
- * Silent where the stability test has spoken already.
+ * Water beyond what a hydrocarbon liquid dissolves: models that mix everything (Raoult's law) never see it part. Silent where
+ * the stability test has spoken already.
+ *
+ * An estimate for screening, between paraffins (hexane) and aromatics (benzene) by their shares, carried from 25 degC by a heat
+ * of solution (van 't Hoff): round figures of our own, no published correlation.
  */
 export function freeWater({ stream, overrides, at, model }: StreamContext): Finding[] {
   const liquid = flowing(stream, 'liquid');

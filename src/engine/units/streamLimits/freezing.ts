@@ -7,6 +7,8 @@ const MOSTLY = rule('stream/freezes-mostly', 'caution', 0.8, 'fraction', 'meltin
 const PARTLY = rule('stream/may-freeze', 'note', 0.2, 'fraction', 'melting-points');
 const ICE = rule('stream/ice', 'caution', 1e-3, 'fraction');
 const DRY_ICE = rule('stream/dry-ice', 'caution', 1e-2, 'fraction');
+
+/** Thresholds of the limits in this file. */
 export const FREEZING_RULES: readonly Rule[] = [MOSTLY, PARTLY, ICE, DRY_ICE];
 
 const ICE_K = 273.15;
@@ -17,7 +19,11 @@ const solidBelow = (cas: string | undefined, T_K: number): Rule | undefined => {
   return cas === CAS_CO2 && T_K < DRY_ICE_K ? DRY_ICE : undefined;
 };
 
-/** A liquid below the melting point of what it mostly is; water below 0 degC, carbon dioxide below -56 degC. */
+/**
+ * A liquid below the melting point of the chemical it has most of among those that could freeze; water below 0 degC and carbon
+ * dioxide below -56 degC (about its triple point) by their share of the whole stream. A screening by pure chemicals: most
+ * mixtures freeze below the melting points of their parts.
+ */
 export function freezing(c: StreamContext): Finding[] {
   const { stream, overrides, at } = c;
   const seen = [saw('temperature', stream.T_K, 'temperature')];

@@ -28,6 +28,7 @@ export const STREAM_FINDINGS = [
   'stream/far-outside-correlation',
 ] as const;
 
+/** Thresholds of all limits of streams. */
 export const STREAM_RULES: readonly Rule[] = [
   ...CONDITION_RULES,
   ...CORRELATION_RULES,

@@ -7,8 +7,11 @@ const UPHILL = rule('valve/outlet-above-inlet', 'beyond-limit', 0, 'pressureDiff
 /** Rise of the vapour fraction that counts as flashing [-]. */
 const FLASHES = rule('valve/flashes', 'note', 0, 'fraction', 'balance');
 const COOLS = rule('valve/cools', 'note', 20, 'temperatureDifference', 'balance');
+
+/** Thresholds that only a valve has. */
 export const VALVE_RULES: readonly Rule[] = [UPHILL, FLASHES, COOLS];
 
+/** Limits of a valve: a pressure that rises, a liquid that flashes, a stream that cools by much. None without flow. */
 export function valveLimits(call: Call<ValveSettings>, answer: Answer<ValveResults>): Finding[] {
   const inlet = call.in.in;
   const out = answer.out.out;

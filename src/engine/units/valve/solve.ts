@@ -70,5 +70,5 @@ function solve(call: Call<ValveSettings>): Outcome<Answer<ValveResults>> {
   return solved(answerOf({ out }, results, out === inlet ? [] : [out]), made.findings);
 }
 
-/** Throttling at constant enthalpy. */
+/** Throttling at constant enthalpy. Gives pressure/not-positive, or the flash's reason why there is no such outlet. */
 export const valve: UnitKind<ValveSettings, ValveResults> = { solve, limits: valveLimits };
