@@ -2,6 +2,7 @@ import { memo, useEffect } from 'react';
 import { useShallow } from 'zustand/react/shallow';
 import { labelsSentence, omittedSentence } from '../drawing/labelText';
 import { useMeasures } from '../parts/measures';
+import { revisionInForce } from '../store/commands';
 import { useCompiled, useResults, useSketch, useStores } from '../store/react';
 import { kindWord, modelWord } from '../wording';
 import { type SheetState, useSheet } from './sheetStore';
@@ -10,6 +11,7 @@ import { wholeState } from './whole';
 /** Foot of the sheet: name, revision, model, what labels show; at the right the state of the whole. */
 export const TitleStrip = memo(function TitleStrip() {
   const title = useSketch((state) => state.sketch.title);
+  const revision = useSketch((state) => revisionInForce(state.sketch));
   const model = useSketch((state) => state.sketch.model.kind);
   const labels = useSketch((state) => state.sketch.display.labels);
   const measures = useMeasures();
@@ -17,7 +19,7 @@ export const TitleStrip = memo(function TitleStrip() {
   return (
     <footer className="title-strip">
       <span className="strip-title">{title.title?.trim() || 'Untitled sketch'}</span>
-      <span>{title.revision ? `Rev ${title.revision}, draft` : 'No revision'}</span>
+      <span>{revision ? `Rev ${revision}, draft` : 'No revision'}</span>
       <span>{modelWord(model)}</span>
       <span className="strip-labels">{labelsSentence(labels, measures)}</span>
       {omitted ? <span>{omitted}</span> : null}

@@ -1,3 +1,4 @@
+import { revisionInForce } from '../sketch/revision';
 import { stateWord } from '../wording';
 import { basisTable, holdTable, revisionTable, utilityTable } from './basisTables';
 import { columnReports } from './columns';
@@ -23,12 +24,13 @@ export const warningOf = (purpose: string | undefined): string =>
 export function buildReport(input: ReportInput): ReportModel {
   const { sketch, basis } = input;
   const { title } = sketch;
+  const revision = revisionInForce(sketch);
   const entries: TitleEntry[] = [
     { label: 'Project', text: title.project ?? '' },
     { label: 'Area', text: title.area ?? '' },
     { label: 'Title', text: title.title ?? 'Untitled sketch' },
     { label: 'Sheet number', text: title.number ?? '' },
-    { label: 'Revision', text: revisionOf(input) },
+    { label: 'Revision', text: revision ?? 'draft' },
     { label: 'Purpose', text: title.purpose ?? '' },
     { label: 'Author', text: title.author ?? '' },
     { label: 'Checked', text: title.checked ?? '' },
@@ -47,11 +49,7 @@ export function buildReport(input: ReportInput): ReportModel {
       fingerprint: input.fingerprint,
       measures: `Measures: ${measuresOf(input).set}; pressures (a) or (g) as marked`,
       version: `Splitwright ${input.version}`,
-      number: [
-        title.number,
-        revisionOf(input) === 'draft' ? 'draft' : `Rev ${revisionOf(input)}`,
-        title.date ?? input.day,
-      ]
+      number: [title.number, revision ? `Rev ${revision}` : 'draft', title.date ?? input.day]
         .filter(Boolean)
         .join(', '),
     },
@@ -88,10 +86,6 @@ export function buildReport(input: ReportInput): ReportModel {
     state: stateOf(input),
   };
 }
-
-/** As typed, else the mark of the revision table's first line. */
-const revisionOf = ({ sketch }: ReportInput): string =>
-  sketch.title.revision ?? sketch.revisions?.[0]?.mark ?? 'draft';
 
 function stateOf(input: ReportInput): ReportModel['state'] {
   const open = input.sketch.units.filter((unit) => input.units.get(unit.id)?.state !== 'solved');

@@ -6,3 +6,4 @@ export { describeStream, portWords } from '../sketch/describe';
 export * from '../sketch/edits';
 export { LABEL_KEYS } from '../sketch/fresh';
 export { isOneOf, isThere, nextPortName } from '../sketch/registry';
+export { revisionInForce } from '../sketch/revision';

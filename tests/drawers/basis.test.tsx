@@ -56,6 +56,26 @@ describe('the design basis drawer', () => {
     expect(sketchOf(page).revisions?.[0]?.mark).toBe('A');
   });
 
+  test('gives the first entry the revision of the title block, which then shows the newest entry and where to change it', () => {
+    act(() => page.stores.sketch.apply('title', (s) => ({ ...s, title: { ...s.title, revision: 'C' } })));
+    press('Add a revision');
+    expect(sketchOf(page).revisions?.map((r) => r.mark)).toEqual(['C']);
+    press('Add a revision');
+    act(() => page.stores.session.openDrawer({ is: 'sketch' }));
+    const mark = screen.getByRole('status', { name: 'Revision' });
+    expect(mark.textContent).toBe('D');
+    expect(document.querySelector('[data-field="title.revision"] input')).toBeNull();
+    expect(screen.getByText(/“C”, typed here before, is kept/)).toBeTruthy();
+    press('Change it in the table');
+    expect(page.stores.session.getState().drawer).toEqual({ is: 'basis' });
+    type('revisions.0.mark', '0');
+    act(() => page.stores.session.openDrawer({ is: 'sketch' }));
+    expect(screen.getByRole('status', { name: 'Revision' }).textContent).toBe('0');
+    // Without entries the field is its own again, with the word it had.
+    act(() => page.stores.sketch.apply('clear', ({ revisions: _, ...s }) => s));
+    expect(field('title.revision').value).toBe('C');
+  });
+
   test('judges a requirement against the results at once, in any unit that is typed', () => {
     press('Add a requirement');
     choose('designBasis.requirements.0.stream', 's3');

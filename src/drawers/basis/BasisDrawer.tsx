@@ -60,9 +60,14 @@ function Purpose({ disabled }: Part) {
   );
 }
 
-/** A, B ... before approval; whoever has reached numbers goes on with numbers. */
-function nextMark(revisions: readonly Revision[]): string {
-  const last = revisions[0]?.mark ?? '';
+/**
+ * A, B ... before approval; whoever has reached numbers goes on with numbers. The table's first entry records the revision
+ * that the title block has had until then.
+ */
+function nextMark({ title, revisions = [] }: Pick<Sketch, 'title' | 'revisions'>): string {
+  const [newest] = revisions;
+  if (!newest) return title.revision?.trim() || 'A';
+  const last = newest.mark;
   if (/^\d+$/.test(last)) return String(Number(last) + 1);
   return /^[A-Y]$/.test(last) ? String.fromCharCode(last.charCodeAt(0) + 1) : 'A';
 }
@@ -79,7 +84,7 @@ function Revisions({ disabled }: Part) {
       disabled={disabled}
       empty="None is recorded: the document is a draft."
       name={(item) => `revision ${item.mark}`}
-      make={() => ({ mark: nextMark(revisions), date: new Date().toISOString().slice(0, 10) })}
+      make={() => ({ mark: nextMark(sketch.getState().sketch), date: new Date().toISOString().slice(0, 10) })}
       onChange={(items) => void run(sketch, (s) => setRevisions(s, items))}
     >
       {(item, set, k) => {

@@ -2,8 +2,9 @@ import { QuantityField } from '../../parts/QuantityField';
 import { TextField } from '../../parts/TextField';
 import { type Dimension, STANDARD_SITE } from '../../quantity';
 import type { Sketch, TitleBlock } from '../../sketch/types';
-import { type Edit, setSite, setTitle } from '../../store/commands';
+import { type Edit, revisionInForce, setSite, setTitle } from '../../store/commands';
 import { useCompiled, useSketch, useStores } from '../../store/react';
+import { focusField } from '../focusField';
 import { Head } from '../Head';
 import { run } from '../run';
 import { useSay } from '../useSay';
@@ -39,6 +40,7 @@ const LINES: readonly (readonly [keyof TitleBlock, string])[] = [
 function Title() {
   const { sketch } = useStores();
   const title = useSketch((state) => state.sketch.title);
+  const fromTable = useSketch((state) => (state.sketch.revisions?.length ?? 0) > 0);
   const disabled = useSketch((state) => !state.writable);
   const line = (key: keyof TitleBlock, label: string, lines?: number) => (
     <div className="setting" key={key}>
@@ -61,9 +63,44 @@ function Title() {
       <div className="section-head">
         <h3>Title block</h3>
       </div>
-      {LINES.map(([key, label]) => line(key, label))}
+      {LINES.map(([key, label]) =>
+        key === 'revision' && fromTable ? <RevisionLine key={key} /> : line(key, label),
+      )}
       {line('notes', 'Notes', 3)}
     </section>
+  );
+}
+
+/** The revision where the table has entries: its newest one, changed there. */
+function RevisionLine() {
+  const { session } = useStores();
+  const mark = useSketch((state) => revisionInForce(state.sketch));
+  const own = useSketch((state) => state.sketch.title.revision?.trim());
+  return (
+    <div className="setting">
+      <div className="setting-label">Revision</div>
+      <div className="setting-control" data-field="title.revision">
+        <div className="setting-label">
+          <output aria-label="Revision">{mark}</output>
+        </div>
+        <p className="field-note">
+          The newest entry of the revision table.{' '}
+          <button
+            type="button"
+            className="link"
+            onClick={() => {
+              session.openDrawer({ is: 'basis' });
+              focusField('revisions.0.mark');
+            }}
+          >
+            Change it in the table
+          </button>
+          {own && own !== mark ? (
+            <span> “{own}”, typed here before, is kept; it counts when the table is empty.</span>
+          ) : null}
+        </p>
+      </div>
+    </div>
   );
 }
 
