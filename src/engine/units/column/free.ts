@@ -30,7 +30,7 @@ export function fixedCount(view: FixedView): { readonly fixed: number; readonly 
   return { fixed: view.fixedBy?.length ?? 0, free: freeCount(view) };
 }
 
-/** Ports by which products of the ends leave. */
+/** Port by which the distillate, or the vapour of a column without a condenser, leaves. */
 export const topPort = (view: FixedView): string =>
   view.top?.distillate === 'liquid' ? 'liquidDistillate' : 'vapourDistillate';
 

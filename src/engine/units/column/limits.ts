@@ -66,9 +66,8 @@ function pinch({ call, results }: Seen): Finding[] {
   let best = 0;
   let from = 0;
   for (let a = 0, b = 0; b < T_K.length; b++) {
-    const run = T_K.subarray(a, b + 1);
     while (a < b && Math.max(...T_K.subarray(a, b + 1)) - Math.min(...T_K.subarray(a, b + 1)) > PINCH_K) a++;
-    if (run.length > 0 && b - a + 1 > best) {
+    if (b - a + 1 > best) {
       best = b - a + 1;
       from = a + 1;
     }
@@ -275,6 +274,11 @@ function secondLiquid(seen: Seen): Finding[] {
   return [];
 }
 
+/**
+ * Limits of a column: feeds that would have to flow uphill or are far from their stage's temperature, pressures that fall
+ * downwards, stages that nearly dry, pinches, nearness to the critical point, liquids that would part, vapours below their dew
+ * point, and the level of utility of each end's heat.
+ */
 export function columnLimits(
   call: Call<ColumnSettings>,
   { out, results }: Answer<ColumnResults>,

@@ -123,7 +123,9 @@ function streamOf(
 /**
  * Products of a solved column as streams, saturated (but for a subcooled distillate), and the heat of its ends. Chemicals and
  * energy close to rounding: the reboiler's duty, else the condenser's, is what the whole balance leaves; without either the
- * bottoms carry the rest of the enthalpy.
+ * bottoms carry the rest of the enthalpy. Outlets that the column has no product for are without flow.
+ *
+ * @param condenserDuty_W  asked only where both ends are there [W]
  */
 export function outletsOf(
   call: Call<ColumnSettings>,

@@ -61,7 +61,11 @@ export interface ColumnResults {
   readonly reboiler?: EndResults & { readonly boilup_mol_s: number; readonly bottoms_mol_s: number };
 }
 
-/** Results of a solved column, from the engine's state; duties as the caller has closed them. */
+/**
+ * Results of a solved column from the engine's state; chemicals that are not present stand with 0.
+ *
+ * @param duties  heat into the ends as the caller has closed them [W]; absent for an end that is not there
+ */
 export function resultsOf(
   call: Call<ColumnSettings>,
   job: ColumnJob,

@@ -4,9 +4,11 @@ import { type Rule, rule } from '../limits/rule';
 export const DRIES = rule('column/stage-dries', 'caution', 0.01, 'fraction');
 /** More than this many neighbouring stages within 0.1 K. */
 export const PINCH = rule('column/pinch', 'note', 5, 'number');
+/** How far a feed is from the temperature of its stage, either way. */
 export const OFF_STAGE = rule('column/feed-off-stage', 'note', 40, 'temperatureDifference');
 /** Mass density of liquid to vapour on a stage. */
 export const NEAR_CRITICAL = rule('column/near-critical', 'caution', 4, 'number');
+/** As above, where the numbers are not to be used. */
 export const TOO_NEAR_CRITICAL = rule('column/too-near-critical', 'beyond-limit', 2.5, 'number');
 /** Pressure of a stage by the pseudo-critical pressure of its liquid (mole-fraction average). */
 export const NEAR_CRITICAL_P = rule('column/near-critical-pressure', 'caution', 0.85, 'fraction');
@@ -26,7 +28,9 @@ export const BELOW_DEW = rule(
   'temperatureDifference',
   'own-rule',
 );
+/** Told wherever the stability test finds another liquid; the threshold has no effect. */
 export const SECOND_LIQUID = rule('column/second-liquid', 'beyond-limit', 0, 'number', 'phase-stability');
+/** Thresholds that only a column has. */
 export const COLUMN_RULES: readonly Rule[] = [
   DRIES,
   PINCH,

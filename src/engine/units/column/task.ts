@@ -18,6 +18,7 @@ export interface ColumnJob {
   readonly drawPorts: readonly Port[];
 }
 
+/** A finding of this unit that goes beyond limits: a reason why there is no answer. */
 export const refuse = (
   call: Pick<Call<unknown>, 'unit'>,
   code: Finding['code'],
@@ -164,8 +165,11 @@ function efficiencies(places: number, r: Reading, feeds: readonly ColumnFeed[]):
 }
 
 /**
- * What the engine is asked, from settings and entering streams.
- * @returns refusals where a name, a stage or a chemical does not exist in this column
+ * What the engine is asked, from settings and entering streams: chemicals present only, feeds that flow, pressures by place.
+ *
+ * @returns  column/no-feed; else every name that does not exist in this column: column/no-such-stage, column/no-such-end,
+ *           column/no-such-product, column/chemical-absent, column/port-without-stage, column/efficiency-needs-vapour,
+ *           pressure/not-positive
  */
 export function jobOf(call: Call<ColumnSettings>): Outcome<ColumnJob> {
   const { settings, model } = call;
