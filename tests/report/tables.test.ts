@@ -161,6 +161,21 @@ describe('pages of a wide, long table', () => {
       expect(pages.at(-1)?.rows.length).toBeLessThanOrEqual(47);
     },
   );
+
+  test('no page begins or ends with fewer than three rows of a group that goes on', () => {
+    for (let before = 0; before <= 46; before += 1)
+      for (let length = 1; length <= 60; length += 1) {
+        const whole = table(3, [before, length, 7]);
+        for (const { rows } of tablePages(whole, { columns: 16, room: 50, last: 47, height: () => 1 })) {
+          const heads = rows.flatMap((row, k) => (row.style === 'group' ? [k] : []));
+          heads.forEach((at, k) => {
+            const shown = (heads[k + 1] ?? rows.length) - at - 1;
+            const all = [before, length, 7][Number(/\d/.exec(rows[at]?.label ?? '')?.[0])] ?? 0;
+            expect([before, length, shown >= Math.min(3, all)]).toEqual([before, length, true]);
+          });
+        }
+      }
+  });
 });
 
 test('pressures of the table keep the unit of one’s own, absolute and gauge', () => {

@@ -3,109 +3,185 @@ import { profilePicture } from '../../drawing/profiles';
 import { pathToSvg, textToSvg } from '../../drawing/svg';
 import { PRINT } from '../../drawing/tokens';
 import { printed } from '../cells';
-import type { ColumnReport, Table } from '../types';
-import type { Paper } from './paper';
-import { wrapped } from './wrap';
+import type { ColumnReport } from '../types';
+import { LINE, type Paper } from './paper';
+import { GAP, highestRow } from './tables';
+import { keptTogether, type Lined, PADDING, rowHeight, setRows } from './together';
+import { linesOf } from './wrap';
 
 /** Drawn for a screen, set smaller on paper [px]. */
 const PICTURE = { width: 620, height: 280 } as const;
-const GAP = 18;
+const BESIDE = 18;
+/** Above and below a row [pt]. */
+const PAD = 1.6;
+/** Widths of a setting's label and of the figures [pt]. */
+const LABEL = 92;
+const ABOVE_PICTURE = 8;
 
 /** The columns: what was set and what came of it as tables, the profiles over the stages beside or below them. */
 export function columnPages(columns: readonly ColumnReport[], paper: Paper): Content[] {
-  return columns.map((column, k) => columnBlock(column, k === 0, paper));
+  return columns.flatMap((column, k) => columnBlock(column, k === 0, paper));
 }
 
-function columnBlock(
-  { key, title, settings, figures, profiles }: ColumnReport,
-  isFirst: boolean,
-  paper: Paper,
-): Content {
+function columnBlock(column: ColumnReport, isFirst: boolean, paper: Paper): Content[] {
+  const { profiles } = column;
   const isWide = paper.name === 'A3';
+  const size = paper.text;
   const figureWidth = isWide ? 224 : 216;
   const pictureWidth = isWide ? 490 : 560;
-  const room = paper.inner.w - GAP - figureWidth - (isWide && profiles ? pictureWidth + GAP : 0);
-  const size = paper.text;
-  const settingWidth = room - 92 - 8;
+  const room = paper.inner.w - BESIDE - figureWidth - (isWide && profiles ? pictureWidth + BESIDE : 0);
+  const { head, height: headHeight } = headOf(column, isFirst, paper);
+  const settings = settingRows(column, room, paper);
+  const figures = figureRows(column, paper);
   const picture: Content[] = profiles
-    ? [{ svg: profilesSvg(profiles), width: pictureWidth, margin: [0, isWide ? 0 : 8, 0, 0] }]
+    ? [
+        {
+          svg: profilesSvg(profiles),
+          width: pictureWidth,
+          margin: [0, isWide ? 0 : ABOVE_PICTURE, 0, 0],
+        },
+      ]
     : [];
+  const pictureHeight = profiles ? (pictureWidth * PICTURE.height) / PICTURE.width + ABOVE_PICTURE : 0;
+  const tablesHeight = Math.max(heightOf(settings, size), heightOf(figures, size));
+  const height = headHeight + (isWide ? Math.max(tablesHeight, pictureHeight) : tablesHeight + pictureHeight);
+  if (height > paper.inner.h) return longBlock(column, head, headHeight, picture, paper);
   const tables: Content[] = [
-    {
-      width: room,
-      ...plain(settings, size, [92, settingWidth], (row, cell) => [
-        label(row.label),
-        { text: wrapped(printed(cell), settingWidth, size) },
-      ]),
-    } as Content,
-    ...(figures
-      ? [
-          {
-            width: figureWidth,
-            ...plain(figures, size, ['*', 'auto', 'auto'], (row, cell) => [
-              label(row.label),
-              { text: printed(cell), alignment: 'right', noWrap: true },
-              { text: row.unit ?? '', color: PRINT.ink3 },
-            ]),
-          } as Content,
-        ]
+    { width: room, ...plain(settings, size, [LABEL, room - LABEL - 8]) } as Content,
+    ...(figures.length > 0
+      ? [{ width: figureWidth, ...plain(figures, size, ['*', 'auto', 'auto']) } as Content]
       : []),
   ];
+  return [
+    {
+      unbreakable: true,
+      margin: [0, GAP, 0, 0],
+      stack: [
+        ...head,
+        {
+          columnGap: BESIDE,
+          columns: isWide && profiles ? [...tables, { width: pictureWidth, stack: picture }] : tables,
+        },
+        ...(isWide ? [] : picture),
+      ],
+    },
+  ];
+}
+
+/** More than a page takes in one piece: one below the other, each table over as many pages as it needs. */
+function longBlock(
+  column: ColumnReport,
+  head: Content[],
+  headHeight: number,
+  picture: readonly Content[],
+  paper: Paper,
+): Content[] {
+  const size = paper.text;
+  const highest = highestRow(paper);
+  const tableOf = (
+    rows: readonly Lined[][],
+    above: Content[],
+    height: number,
+    widths: number[],
+  ): Content => ({
+    margin: [0, GAP, 0, 0],
+    fontSize: size,
+    ...keptTogether(
+      [[{ stack: above, colSpan: widths.length }, ...widths.slice(1).map((): TableCell => '')]],
+      rows.flatMap((row) => setRows(row, size, highest)),
+      widths,
+      paper.inner.h - height,
+    ),
+  });
+  const value = paper.inner.w - LABEL - 4 * PADDING;
+  const figures = figureRows(column, paper);
+  return [
+    tableOf(settingRows(column, paper.inner.w, paper), head, headHeight, [LABEL, value]),
+    ...(figures.length > 0
+      ? [
+          tableOf(
+            figures,
+            [{ text: `${column.title}: results`, bold: true }],
+            rowHeight(linesOf(`${column.title}: results`, paper.inner.w, size, 600).length, size),
+            [180, 70, 90],
+          ),
+        ]
+      : []),
+    ...picture,
+  ];
+}
+
+/** Heading of the section above the first, the column's own above every one, and what they take [pt]. */
+function headOf(
+  { key, title }: ColumnReport,
+  isFirst: boolean,
+  paper: Paper,
+): { readonly head: Content[]; readonly height: number } {
+  const size = paper.text + 2;
+  const lines = linesOf(title, paper.inner.w, size, 600);
+  const section: Content = {
+    text: 'Columns',
+    bold: true,
+    fontSize: paper.heading,
+    margin: [0, 0, 0, 6],
+    id: 'columns',
+    tocItem: true,
+  };
   return {
-    unbreakable: true,
-    margin: [0, 0, 0, 16],
-    stack: [
-      ...(isFirst
-        ? [
-            {
-              text: 'Columns',
-              bold: true,
-              fontSize: paper.heading,
-              margin: [0, 0, 0, 6],
-              id: 'columns',
-              tocItem: true,
-            } as Content,
-          ]
-        : []),
+    head: [
+      ...(isFirst ? [section] : []),
       {
-        text: wrapped(title, paper.inner.w, size + 2, 600),
+        text: lines.join('\n'),
         bold: true,
-        fontSize: size + 2,
+        fontSize: size,
         margin: [0, 0, 0, 2],
         id: `column.${key}`,
         tocItem: true,
         tocMargin: [12, 0, 0, 0],
       },
-      {
-        columnGap: GAP,
-        columns: isWide && profiles ? [...tables, { width: pictureWidth, stack: picture }] : tables,
-      },
-      ...(isWide ? [] : picture),
     ],
+    height: (isFirst ? paper.heading * LINE + 6 : 0) + lines.length * size * LINE + 2,
   };
 }
 
-const label = (text: string): TableCell => ({ text, color: PRINT.ink2 });
+const label = (lines: readonly string[]): Lined => ({ lines, look: { color: PRINT.ink2 } });
 
-function plain(
-  table: Table,
-  fontSize: number,
-  widths: (string | number)[],
-  cellsOf: (row: Table['rows'][number], cell: Table['rows'][number]['cells'][number]) => TableCell[],
-) {
+function settingRows({ settings }: ColumnReport, room: number, { text: size }: Paper): Lined[][] {
+  const width = room - LABEL - 4 * PADDING;
+  return settings.rows.map((row) => [
+    label(linesOf(row.label, LABEL, size)),
+    { lines: linesOf(printed(row.cells[0] ?? { is: 'absent' }), width, size) },
+  ]);
+}
+
+function figureRows({ figures }: ColumnReport, { text: size }: Paper): Lined[][] {
+  return (figures?.rows ?? []).map((row) => [
+    label(linesOf(row.label, 180, size)),
+    { lines: [printed(row.cells[0] ?? { is: 'absent' })], look: { alignment: 'right', noWrap: true } },
+    { lines: [row.unit ?? ''], look: { color: PRINT.ink3 } },
+  ]);
+}
+
+const heightOf = (rows: readonly Lined[][], size: number): number =>
+  rows.reduce((sum, row) => {
+    const lines = row.reduce((n, cell) => Math.max(n, cell.lines.length), 1);
+    return sum + rowHeight(lines, size, PAD);
+  }, 1);
+
+function plain(rows: readonly Lined[][], fontSize: number, widths: (string | number)[]) {
   return {
     fontSize,
     table: {
       widths,
       dontBreakRows: true,
-      body: table.rows.map((row) => cellsOf(row, row.cells[0] ?? { is: 'absent' })),
+      body: rows.map((row) => row.map(({ lines, look }): TableCell => ({ ...look, text: lines.join('\n') }))),
     },
     layout: {
-      hLineWidth: (i: number) => (i === 0 || i === table.rows.length ? 0.9 : 0.35),
+      hLineWidth: (i: number) => (i === 0 || i === rows.length ? 0.9 : 0.35),
       vLineWidth: () => 0,
-      hLineColor: (i: number) => (i === 0 || i === table.rows.length ? PRINT.ink : PRINT.rule),
-      paddingTop: () => 1.6,
-      paddingBottom: () => 1.6,
+      hLineColor: (i: number) => (i === 0 || i === rows.length ? PRINT.ink : PRINT.rule),
+      paddingTop: () => PAD,
+      paddingBottom: () => PAD,
       paddingLeft: () => 2,
       paddingRight: () => 2,
     },

@@ -9,7 +9,7 @@ import { columnPages } from './columns';
 import { contentsPage, drawing, firstPageFoot } from './front';
 import { PAPERS, type Paper } from './paper';
 import { streamPages } from './streams';
-import { type Destinations, titledList, titledTable, type Width } from './tables';
+import { type Destinations, type TableStyle, titledList, titledTable, type Width } from './tables';
 import { fitted } from './wrap';
 
 /** Border with zone marks, behind every page. */
@@ -119,20 +119,21 @@ export function pdfDocument(report: ReportModel, input: ReportInput): TDocumentD
   const choices = input.sketch.documents;
   const part = (key: SectionKey, make: () => Content[]): Content[] => (isShown(choices, key) ? make() : []);
   const links = destinations(report, input);
-  const table = (of: Table, rowHead: string, first: number, ...others: Width[]): Content =>
-    titledTable(of, {
-      paper,
-      rowHead,
-      links,
-      widths: [paper.name === 'A3' ? first : 0.72 * first, ...others],
-    });
+  const style = (rowHead: string, first: number, ...others: Width[]): TableStyle => ({
+    paper,
+    rowHead,
+    links,
+    widths: [paper.name === 'A3' ? first : 0.72 * first, ...others],
+  });
+  const table = (of: Table, ...styled: Parameters<typeof style>): Content =>
+    titledTable(of, style(...styled));
   const w = (points: number): number => (paper.name === 'A3' ? points : 0.72 * points);
   const share = (of: number): Width => ({ share: of });
   return {
     ...around(report, input, 'Stream summary (heat and material balance)'),
     content: [
       ...part('sheet', () => [drawing(input, paper), firstPageFoot(report, input, paper)]),
-      contentsPage(report, paper),
+      contentsPage(report, paper, !isShown(choices, 'sheet')),
       table(report.revisions, 'Revision', 60, w(80), share(1), w(110), w(110), w(110)),
       ...part('basis', () => [
         table(report.basis, 'What', 220, share(1)),
@@ -142,10 +143,10 @@ export function pdfDocument(report: ReportModel, input: ReportInput): TDocumentD
       ]),
       ...part('streams', () => streamPages(report.streams, paper)),
       ...part('duties', () => [
-        {
-          stack: [table(report.duties, 'Unit', 60, w(120), share(1), w(90), w(90), w(90), w(90), share(1.6))],
-          pageBreak: 'before',
-        } as Content,
+        titledTable(report.duties, {
+          ...style('Unit', 60, w(120), share(1), w(90), w(90), w(90), w(90), share(1.6)),
+          pageBreak: true,
+        }),
         table(report.powers, 'Unit', 60, w(120), share(1), w(120), w(120), w(120)),
       ]),
       ...part('units', () => [table(report.units, 'Tag', 60, w(110), share(1), w(90), share(3.6))]),

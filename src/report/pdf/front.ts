@@ -207,7 +207,7 @@ function titleBlock(report: ReportModel, width: number, scale: number): TableCel
 }
 
 /** Title block in full, contents with page numbers that lead there, and the state of the whole. */
-export function contentsPage(report: ReportModel, paper: Paper): Content {
+export function contentsPage(report: ReportModel, paper: Paper, isFirst: boolean): Content {
   const room = 0.42 * paper.inner.w;
   const size = paper.text + 0.5;
   const value = room - 120;
@@ -220,9 +220,8 @@ export function contentsPage(report: ReportModel, paper: Paper): Content {
     { label: 'HOLDs', text: report.holds.rows.length === 0 ? 'none raised' : `${report.holds.rows.length}` },
   ];
   return {
-    pageBreak: 'before',
+    ...(isFirst ? {} : { pageBreak: 'before' }),
     columnGap: 40,
-    margin: [0, 0, 0, 16],
     columns: [
       {
         width: room,

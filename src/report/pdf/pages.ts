@@ -20,8 +20,8 @@ export interface PageRoom {
 const LEAST_ROWS = 3;
 
 /**
- * Cuts a wide, long table into pages: columns in groups, rows where the page ends, never right under a group's heading; a
- * group that goes on repeats its heading with "(continued)".
+ * Cuts a wide, long table into pages: columns in groups, rows where the page ends, never right under a group's heading nor
+ * right before the group's last rows; a group that goes on repeats its heading with "(continued)".
  */
 export function tablePages(table: Table, at: PageRoom): TablePage[] {
   const count = Math.max(1, table.columns.length);
@@ -54,11 +54,15 @@ function rowPages(rows: readonly Row[], { room, height }: PageRoom, last: number
   };
   rows.forEach((row, k) => {
     const isGroup = row.style === 'group';
-    const ahead = isGroup ? rows.slice(k, k + 1 + LEAST_ROWS) : [row];
-    // What is left must fit above the notes, else the page ends early enough to leave some rows for the next one.
-    const isTail = rows.length - k <= LEAST_ROWS;
-    const most = isTail ? last : room;
-    const needed = (isTail ? rows.slice(k) : ahead).reduce((sum, r) => sum + height(r), 0);
+    const next = rows.findIndex((r, j) => j > k && r.style === 'group');
+    const end = next < 0 ? rows.length : next;
+    // A short group stays whole, a long one keeps its first rows and its last ones together.
+    const inGroup = end - k - (isGroup ? 1 : 0);
+    const isWhole = inGroup < (isGroup ? 2 * LEAST_ROWS : LEAST_ROWS + 1);
+    const together = rows.slice(k, isWhole ? end : k + (isGroup ? 1 + LEAST_ROWS : 1));
+    // The very last rows must fit above the notes.
+    const most = isWhole && end === rows.length ? last : room;
+    const needed = together.reduce((sum, r) => sum + height(r), 0);
     if (page.length > 0 && used + needed > most) turn(!isGroup);
     if (isGroup) heading = row;
     put(row);
