@@ -9,6 +9,10 @@ export function fitTemperature_K(c: ChemicalData): number {
   return Math.max(Math.min(298.15, c.Tb_K ?? 298.15), low);
 }
 
+/**
+ * Constant of the liquid-volume method from one density of the chemical's own curve, and where that comes from; nothing without
+ * a density, Tc or Pc.
+ */
 export function liquidVolumeConstant(c: ChemicalData): Pick<ChemicalData, 'zRA' | 'zRASource'> {
   const { rhoL } = preparePure(c);
   if (!rhoL || c.Tc_K === undefined || c.Pc_Pa === undefined) return {};

@@ -37,19 +37,22 @@ export function fromDouble(x: number): Ratio {
   return { n: BigInt(whole), d: 1n << BigInt(halvings) };
 }
 
+/** a b; not reduced. */
 export const times = (a: Ratio, b: Ratio): Ratio => ({ n: a.n * b.n, d: a.d * b.d });
 
+/** a + b; not reduced. */
 export const plus = (a: Ratio, b: Ratio): Ratio => ({ n: a.n * b.d + b.n * a.d, d: a.d * b.d });
 
+/** a - b; not reduced. */
 export const minus = (a: Ratio, b: Ratio): Ratio => ({ n: a.n * b.d - b.n * a.d, d: a.d * b.d });
 
-/** a / b; b must not be zero. */
+/** a / b. Throws when b is zero. */
 export function over(a: Ratio, b: Ratio): Ratio {
   if (b.n === 0n) throw new Error('division by zero');
   return b.n < 0n ? { n: -a.n * b.d, d: a.d * -b.n } : { n: a.n * b.d, d: a.d * b.n };
 }
 
-/** a to a whole power, which may be negative when a is not zero. */
+/** a to a whole power, which may be negative when a is not zero (else it throws). */
 export function power(a: Ratio, exponent: number): Ratio {
   const up = BigInt(Math.abs(exponent));
   const raised = { n: a.n ** up, d: a.d ** up };

@@ -2,6 +2,8 @@
 
 export const THIN_SPACE = '\u2009';
 export const MINUS = '\u2212';
+
+/** What stands for a number that is not there: an en dash. */
 export const ABSENT = '\u2013';
 
 export type NumberStyle = { readonly significant: number } | { readonly decimals: number };

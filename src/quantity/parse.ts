@@ -25,6 +25,7 @@ export interface ParsedQuantity {
   readonly gauge?: boolean;
 }
 
+/** The site when nothing is said of it: standard atmosphere. */
 export const STANDARD_SITE: Site = { P_Pa: STANDARD_ATMOSPHERE_Pa };
 
 const NO_UNIT: UnitOfMeasure = { ok: true, text: '', factor: ONE, shape: SHAPES.number };

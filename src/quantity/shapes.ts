@@ -37,6 +37,7 @@ export const DIMENSIONS = Object.keys(SHAPES) as readonly Dimension[];
 
 export const sameShape = (a: Shape, b: Shape): boolean => a.every((e, i) => e === b[i]);
 
+/** Shape of a times b to the power n. */
 export const addShape = (a: Shape, b: Shape, n: number): Shape => [
   a[0] + n * b[0],
   a[1] + n * b[1],

@@ -56,12 +56,14 @@ export const SKETCH_FINDINGS = [
 
 export type SketchCode = (typeof SKETCH_FINDINGS)[number];
 
+/** A number seen [SI], for a sentence's slot. */
 export const evidence = (name: string, value: number, dim: Dimension = 'number', text?: string): Evidence =>
   text === undefined ? { name, value, dim } : { name, value, dim, text };
 
 /** Evidence that is a word: a key, an id, what was typed. */
 export const word = (name: string, text: string): Evidence => ({ name, value: 0, dim: 'number', text });
 
+/** A finding of the document or its compile step. */
 export const finding = (
   code: SketchCode,
   weight: Weight,

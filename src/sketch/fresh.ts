@@ -1,7 +1,9 @@
 import type { Display, LabelKey, Sketch } from './types';
 
+/** What a sketch file says it is. */
 export const FORMAT = 'splitwright.sketch';
 
+/** Everything that a stream's label may show, in the order of the list of choices. */
 export const LABEL_KEYS: readonly LabelKey[] = [
   'molarFlow',
   'massFlow',
@@ -12,6 +14,7 @@ export const LABEL_KEYS: readonly LabelKey[] = [
   'volumeFlow',
 ];
 
+/** What a new sketch shows, and a file that says nothing of it. */
 export const FRESH_DISPLAY: Display = { set: 'metric', labels: ['molarFlow', 'temperature', 'pressure'] };
 
 /** An empty sketch. The model's options stay open and are listed as assumptions until somebody chooses. */

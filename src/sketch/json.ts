@@ -2,6 +2,7 @@ import type { Json } from './types';
 
 export type JsonObject = { readonly [key: string]: Json };
 
+/** Whether a value is a record: no list, not null. */
 export const isObject = (value: unknown): value is JsonObject =>
   typeof value === 'object' && value !== null && !Array.isArray(value);
 

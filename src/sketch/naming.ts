@@ -24,6 +24,7 @@ export function nextTag(units: readonly SketchUnit[], kind: KindCatalogue): stri
   return `${stem}${nextNumber(used, kind.tag.drawn ? FIRST_TAG : 1)}`;
 }
 
+/** The next free stream number, as text. */
 export const nextStreamNumber = (streams: readonly Pick<SketchStream, 'number'>[]): string =>
   String(
     nextNumber(

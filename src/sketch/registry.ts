@@ -7,6 +7,7 @@ import type { Json } from './types';
 /** The kinds of unit that are known, by name. An argument everywhere, so that a kind can be added without touching a file. */
 export type Registry = Readonly<Record<string, KindCatalogue>>;
 
+/** The kinds of this version. */
 export const KNOWN_KINDS: Registry = CATALOGUE;
 
 /** The kind's catalogue; undefined for a kind that this version does not know (names like "constructor" included). */

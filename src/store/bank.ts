@@ -16,5 +16,9 @@ export interface BankList {
 
 const empty: BankList = { index: [] };
 export const BankContext = createContext<BankList>(empty);
+
+/** Hands the bank's list down. */
 export const BankProvider = BankContext.Provider;
+
+/** The bank's list; empty where nobody hands one down. */
 export const useBank = (): BankList => useContext(BankContext);

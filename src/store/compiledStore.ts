@@ -18,6 +18,7 @@ export interface CompiledState {
   readonly trouble?: string | undefined;
 }
 
+/** An empty store: nothing compiled yet. */
 export function createCompiledStore() {
   const store = createStore<CompiledState>()(() => ({
     edit: 0,

@@ -9,6 +9,7 @@ const Context = createContext<Kinds>(CATALOGUE);
 export const KindsProvider = Context.Provider;
 export const useKinds = (): Kinds => useContext(Context);
 
+/** One kind; undefined for one that is not known. */
 export function useKind(kind: string): KindCatalogue | undefined {
   const kinds = useKinds();
   return Object.hasOwn(kinds, kind) ? kinds[kind] : undefined;

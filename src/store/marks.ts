@@ -11,7 +11,10 @@ function mark(name: string): void {
   if (made.length > KEEP) performance.clearMarks(made.shift() as string);
 }
 
+/** Marks the input of an edit. */
 export const markEdit = (edit: number): void => mark(`edit:${edit}`);
+
+/** Marks what happens once; later calls leave no mark. */
 export const markOnce = (name: 'app-ready' | 'first-solved' | 'offline-ready'): void => {
   if (performance.getEntriesByName(name, 'mark').length === 0) performance.mark(name);
 };
@@ -28,4 +31,5 @@ export function afterPaint(then: () => void): void {
   });
 }
 
+/** Marks the first frame that shows an edit's results; called after it was painted. */
 export const markShown = (edit: number): void => mark(`shown:${edit}`);

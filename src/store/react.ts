@@ -19,6 +19,7 @@ export interface Stores {
 const Context = createContext<Stores | null>(null);
 export const StoresProvider = Context.Provider;
 
+/** The page's stores. Throws outside their provider. */
 export function useStores(): Stores {
   const stores = useContext(Context);
   if (!stores) throw new Error('useStores outside StoresProvider');
@@ -33,9 +34,15 @@ export const useCompiled = <T>(pick: (state: CompiledState) => T): T => useStore
 /** One unit's record; rerenders for its own change only. */
 export const useUnit = (id: UnitId): SketchUnit | undefined =>
   useSketch((state) => state.sketch.units.find((unit) => unit.id === id));
+
+/** One stream's record; rerenders for its own change only. */
 export const useStream = (id: StreamId): SketchStream | undefined =>
   useSketch((state) => state.sketch.streams.find((stream) => stream.id === id));
+
+/** One unit's result; rerenders for its own change only. */
 export const useUnitResult = (id: UnitId): Shown<UnitResult> | undefined =>
   useResults((state) => state.units.get(id));
+
+/** One stream's result; rerenders for its own change only. */
 export const useStreamResult = (id: StreamId): Shown<StreamResult> | undefined =>
   useResults((state) => state.streams.get(id));

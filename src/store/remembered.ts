@@ -12,6 +12,7 @@ export function remembered(key: string): string | undefined {
   }
 }
 
+/** Keeps a text under a key; without effect where storage is denied or full. */
 export function remember(key: string, text: string): void {
   try {
     localStorage.setItem(PREFIX + key, text);

@@ -75,6 +75,7 @@ export interface SessionState {
   readonly spoken: string;
 }
 
+/** The session of a page that has just been opened. */
 export function createSession() {
   const store = createStore<SessionState>()(() => ({
     units: [],

@@ -10,6 +10,8 @@ export interface Pace {
   readonly next: number;
   readonly at: number;
 }
+
+/** The pace of the page's solver. */
 export const PACE: Pace = { pause: 8, first: 30, next: 100, at: 250 };
 
 export interface Drive {

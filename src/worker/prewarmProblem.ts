@@ -28,6 +28,7 @@ function chemical(
   };
 }
 
+/** Chemicals and model of the warm-up. */
 export const WARMING: Basis = {
   id: 'prewarm',
   chemicals: [

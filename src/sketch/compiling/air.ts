@@ -41,6 +41,7 @@ export interface FullList {
   readonly air: AirPlaces;
 }
 
+/** Id of a chemical of the sketch, from the bank or brought by the user. */
 export const chemicalId = (chemical: SketchChemical): string =>
   typeof chemical === 'string' ? chemical : chemical.id;
 
@@ -98,6 +99,7 @@ function place(chemicals: readonly SketchChemical[], key: GasKey): number {
   });
 }
 
+/** Whether a value names a ready-made air. */
 export const isPreset = (value: Json | undefined): value is AirPreset =>
   typeof value === 'string' && Object.hasOwn(AIR_OF, value);
 

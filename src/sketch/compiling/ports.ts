@@ -12,6 +12,7 @@ export interface PortsRead {
   readonly used: readonly Port[];
 }
 
+/** A unit without any stream. */
 export const NO_PORTS: PortsRead = { in: {}, out: {}, used: [] };
 
 /** Every unit's ports from the list of streams, in one pass. */

@@ -47,5 +47,6 @@ export function gap(
   return GAP;
 }
 
+/** A path one step further inside; the top is the empty path. */
 export const under = (path: string, key: string | number): string =>
   path === '' ? String(key) : `${path}.${key}`;

@@ -24,6 +24,10 @@ export interface SiteRead {
 
 const KEYS: readonly SiteKey[] = ['pressure', 'ambient', 'coolingWater'];
 
+/**
+ * The site's values in SI; what cannot be read, a gauge site pressure or a value that is not above zero leaves a gap and the
+ * standard value.
+ */
 export function readSite(site: Sketch['site']): SiteRead {
   const gaps: Finding[] = [];
   const broken = new Set<SiteKey>();

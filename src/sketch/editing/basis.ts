@@ -45,6 +45,7 @@ export const setDesignBasis = (sketch: Sketch, change: Change<DesignBasis>): Edi
     `design basis: ${Object.keys(change).join(', ')}`,
   );
 
+/** The list of HOLDs; an empty one is taken away. */
 export const setHolds = (sketch: Sketch, holds: readonly Hold[]): Edit =>
   put(sketch, 'holds', holds.map(trimmed), 'holds');
 

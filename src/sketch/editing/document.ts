@@ -78,6 +78,7 @@ type NotePlace = Pick<Note, 'at' | 'on' | 'kind' | 'size'>;
 const noteWord = (note: Pick<Note, 'kind'> | undefined): string =>
   note?.kind === 'area' ? 'an area' : 'a note';
 
+/** A note or an area, with the next free id; blank text is refused (edit/empty-text). */
 export function addNote(sketch: Sketch, text: string, where: NotePlace = {}): Edit {
   if (text.trim() === '') return refuse('edit/empty-text');
   const note: Note = { id: nextNoteId(sketch.notes), text, ...where };
@@ -113,6 +114,7 @@ export function moveNotes(sketch: Sketch, places: ReadonlyMap<string, readonly [
   return { ok: true, sketch: changed(sketch, 'notes', notes), label };
 }
 
+/** The sketch without a note; without effect where there is none of that id. */
 export const deleteNote = (sketch: Sketch, id: string): Edit => ({
   ok: true,
   sketch: changed(

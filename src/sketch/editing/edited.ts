@@ -58,6 +58,7 @@ export interface Edited {
 
 export type Edit = Edited | Refused;
 
+/** An edit that cannot be done, with its reason. */
 export const refuse = (code: EditCode, ...evidence: readonly Evidence[]): Refused => ({
   ok: false,
   code,
@@ -80,6 +81,7 @@ export function withUnit(sketch: Sketch, id: UnitId, change: (unit: SketchUnit) 
   return same ? sketch : { ...sketch, units };
 }
 
+/** The sketch with one stream replaced, or taken out (undefined); identical when the stream is. */
 export function withStream(
   sketch: Sketch,
   id: StreamId,

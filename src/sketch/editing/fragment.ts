@@ -9,6 +9,7 @@ import type { Note, Sketch, SketchChemical, SketchStream, SketchUnit } from '../
 import { without } from './edited';
 import { namesAny, topOf } from './named';
 
+/** What a fragment's text says it is. */
 export const FRAGMENT_FORMAT = 'splitwright.fragment';
 
 /** A part of a sketch on its way through the clipboard: units, what runs between them, what their settings name. */
@@ -55,6 +56,7 @@ export function copyPart(
   };
 }
 
+/** The fragment as text for the clipboard; readFragment reads it. */
 export const fragmentText = (fragment: Fragment): string => JSON.stringify(fragment, null, 1);
 
 /**

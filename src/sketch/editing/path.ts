@@ -8,6 +8,8 @@ import type { Json } from '../types';
 export type SettingPath = string | readonly string[];
 export const pathKeys = (path: SettingPath): readonly string[] =>
   typeof path === 'string' ? path.split('.') : path;
+
+/** The place with dots, for people. */
 export const pathText = (path: SettingPath): string => (typeof path === 'string' ? path : path.join('.'));
 
 const INDEX = /^(0|[1-9]\d{0,3})$/;

@@ -67,6 +67,7 @@ export class Problems {
   }
 }
 
+/** What a value is, in a file's words: null, list, text, number, boolean, object. */
 export function typeName(value: unknown): string {
   if (value === null) return 'null';
   if (Array.isArray(value)) return 'list';

@@ -5,6 +5,7 @@ import { type Problems, typeName } from './problem';
 
 /** Small readers that put a reason on the list when a value is not what it must be. All take an absent value as fine. */
 
+/** Text, or nothing. */
 export function text(value: Json | undefined, path: string, problems: Problems): value is string {
   if (typeof value === 'string') return true;
   if (value !== undefined) problems.wrongType(path, 'text', value);
@@ -21,22 +22,26 @@ export function name(value: Json | undefined, path: string, problems: Problems):
   return false;
 }
 
+/** A record, or nothing. */
 export function object(value: Json | undefined, path: string, problems: Problems): value is JsonObject {
   if (isObject(value)) return true;
   if (value !== undefined) problems.wrongType(path, 'object', value);
   return false;
 }
 
+/** A list, or nothing; its items are not looked at. */
 export function list(value: Json | undefined, path: string, problems: Problems): value is readonly Json[] {
   if (Array.isArray(value)) return true;
   if (value !== undefined) problems.wrongType(path, 'list', value);
   return false;
 }
 
+/** True or false, or nothing. */
 export function yesNo(value: Json | undefined, path: string, problems: Problems): void {
   if (value !== undefined && typeof value !== 'boolean') problems.wrongType(path, 'boolean', value);
 }
 
+/** A number above `min`, or nothing. */
 export function number(
   value: Json | undefined,
   path: string,
@@ -53,6 +58,7 @@ export function number(
   return false;
 }
 
+/** One of these values, or nothing. */
 export function oneOf(
   value: Json | undefined,
   path: string,
