@@ -139,6 +139,7 @@ function Pressure() {
           There is no {end}: its pressure is kept and not used.
         </p>
       ))}
+      <FieldFindings path="pressure" />
     </fieldset>
   );
 }

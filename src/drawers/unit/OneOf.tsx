@@ -16,7 +16,7 @@ interface Props {
   readonly count: 1 | 2 | readonly [1, 2];
   readonly pairs?: readonly (readonly [string, string])[] | undefined;
   readonly optional: boolean;
-  /** What is assumed when none is given. */
+  /** The setting that these are, with what is assumed when none is given; of a record's fields the record itself says what there is to say. */
   readonly spec?: SettingSpec;
 }
 
@@ -131,7 +131,7 @@ export function OneOf({ base, of, count, pairs = [], optional, spec }: Props) {
   return (
     <>
       {rows}
-      {base === '' ? null : <FieldFindings path={base} />}
+      {spec ? <FieldFindings path={base} /> : null}
     </>
   );
 }
