@@ -16,9 +16,11 @@ import { dropFiles } from './documents';
 import { DocumentsPage } from './export/DocumentsPage';
 import { UnderWayList } from './export/UnderWayList';
 import { cancelNewest } from './export/underWay';
+import { FindDialogue } from './find/FindDialogue';
 import { KeyList } from './KeyList';
 import { MySketches } from './MySketches';
-import { Notice } from './Notice';
+import { Notice, Update } from './Notice';
+import { SolvingLine } from './SolvingLine';
 import { Start } from './Start';
 import { SummaryPage } from './SummaryPage';
 import { ShareDialogue } from './share/ShareDialogue';
@@ -86,6 +88,7 @@ function Over() {
   if (over === 'keys') return <KeyList actions={actions} />;
   if (over === 'open') return <MySketches />;
   if (over === 'share') return <ShareDialogue />;
+  if (over === 'find') return <FindDialogue />;
   if (over === 'documents') return <DocumentsPage />;
   if (over === 'pairs')
     return (
@@ -117,7 +120,11 @@ function Workplace({ stores }: { readonly stores: Stores }) {
         <Sheet />
         {isBlank ? <Start /> : null}
         <Notice />
-        <UnderWayList />
+        <div className="at-foot">
+          <UnderWayList />
+          <SolvingLine />
+          <Update />
+        </div>
       </main>
       <DrawerHost />
       <Balance />

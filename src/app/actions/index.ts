@@ -3,6 +3,7 @@ import type { Action } from '../../store/action';
 import { arrangeActions } from './arrange';
 import { documentActions } from './documents';
 import { fileActions } from './files';
+import { findActions } from './find';
 import { viewActions } from './view';
 import { wholeActions } from './whole';
 
@@ -11,6 +12,7 @@ export const actions: readonly Action[] = [
   ...fileActions,
   ...documentActions,
   ...wholeActions,
+  ...findActions,
   ...viewActions,
   ...sheetActions,
   ...arrangeActions,
