@@ -36,26 +36,50 @@ const INDEPENDENT = 1e-8;
  * @param depth  most differences that are held; the oldest is forgotten first
  * Allocates (3 depth + 3) vectors of n here, nothing later. propose throws before the first point is pushed.
  */
-export function makeAnderson(n: number, depth: number): Anderson {
-  const dx = Array.from({ length: depth }, () => new Float64Array(n));
-  const df = Array.from({ length: depth }, () => new Float64Array(n));
-  const q = Array.from({ length: depth }, () => new Float64Array(n));
-  const r = new Float64Array(depth * depth);
-  const rhs = new Float64Array(depth);
-  const taken = new Int32Array(depth);
-  const rest = new Float64Array(n);
-  const lastX = new Float64Array(n);
-  const lastG = new Float64Array(n);
-  let placed = false;
-  let held = 0;
-  /** Place of the newest difference. */
-  let newest = depth - 1;
+export const makeAnderson = (n: number, depth: number): Anderson => new Acceleration(n, depth);
 
-  const push = (x: Float64Array, g: Float64Array): void => {
-    if (placed) {
-      newest = (newest + 1) % depth;
-      if (held < depth) held++;
-      const [toX, toF] = [dx[newest]!, df[newest]!];
+class Acceleration implements Anderson {
+  readonly n: number;
+  readonly depth: number;
+  held = 0;
+  /** Differences of points and of residuals, in a ring. */
+  private readonly dx: readonly Float64Array[];
+  private readonly df: readonly Float64Array[];
+  /** Orthogonal columns of the scaled differences, newest first, their triangle, and what of the residual lies along each. */
+  private readonly q: readonly Float64Array[];
+  private readonly r: Float64Array;
+  private readonly rhs: Float64Array;
+  /** Which difference each column is of. */
+  private readonly taken: Int32Array;
+  private readonly rest: Float64Array;
+  private readonly lastX: Float64Array;
+  private readonly lastG: Float64Array;
+  private placed = false;
+  /** Place of the newest difference. */
+  private newest: number;
+
+  constructor(n: number, depth: number) {
+    const vectors = (): Float64Array[] => Array.from({ length: depth }, () => new Float64Array(n));
+    this.n = n;
+    this.depth = depth;
+    this.dx = vectors();
+    this.df = vectors();
+    this.q = vectors();
+    this.r = new Float64Array(depth * depth);
+    this.rhs = new Float64Array(depth);
+    this.taken = new Int32Array(depth);
+    this.rest = new Float64Array(n);
+    this.lastX = new Float64Array(n);
+    this.lastG = new Float64Array(n);
+    this.newest = depth - 1;
+  }
+
+  push(x: Float64Array, g: Float64Array): void {
+    const { n, depth, lastX, lastG } = this;
+    if (this.placed) {
+      this.newest = (this.newest + 1) % depth;
+      if (this.held < depth) this.held++;
+      const [toX, toF] = [this.dx[this.newest]!, this.df[this.newest]!];
       for (let i = 0; i < n; i++) {
         toX[i] = x[i]! - lastX[i]!;
         toF[i] = g[i]! - x[i]! - (lastG[i]! - lastX[i]!);
@@ -63,17 +87,43 @@ export function makeAnderson(n: number, depth: number): Anderson {
     }
     lastX.set(x);
     lastG.set(g);
-    placed = true;
-  };
+    this.placed = true;
+  }
 
-  /** Orthogonal columns of the scaled differences, and what of the residual lies along each. */
-  const factor = (scale: Float64Array): number => {
+  propose(scale: Float64Array, out: Float64Array): number {
+    if (!this.placed) throw new Error('a point comes before a proposal');
+    const used = this.factor(scale);
+    const { n, depth, r, rhs } = this;
+    out.set(this.lastG);
+    for (let k = used - 1; k >= 0; k--) {
+      let gamma = rhs[k]!;
+      for (let j = k + 1; j < used; j++) gamma -= r[k * depth + j]! * rhs[j]!;
+      gamma /= r[k * depth + k]!;
+      rhs[k] = gamma;
+      const [ofX, ofF] = [this.dx[this.taken[k]!]!, this.df[this.taken[k]!]!];
+      for (let i = 0; i < n; i++) out[i]! -= gamma * (ofX[i]! + ofF[i]!);
+    }
+    return used;
+  }
+
+  forget(): void {
+    this.placed = false;
+    this.held = 0;
+  }
+
+  leap(): void {
+    this.placed = false;
+  }
+
+  /** Makes the columns; returns how many there are. */
+  private factor(scale: Float64Array): number {
+    const { n, depth, q, r, rest, lastX, lastG } = this;
     let used = 0;
     for (let i = 0; i < n; i++) rest[i] = (lastG[i]! - lastX[i]!) / scale[i]!;
-    for (let age = 0; age < held; age++) {
-      const at = (newest - age + depth) % depth;
+    for (let age = 0; age < this.held; age++) {
+      const at = (this.newest - age + depth) % depth;
       const column = q[used]!;
-      const from = df[at]!;
+      const from = this.df[at]!;
       for (let i = 0; i < n; i++) column[i] = from[i]! / scale[i]!;
       const whole = Math.sqrt(dot(column, column));
       for (let k = 0; k < used; k++) {
@@ -86,44 +136,12 @@ export function makeAnderson(n: number, depth: number): Anderson {
       for (let i = 0; i < n; i++) column[i]! /= left;
       r[used * depth + used] = left;
       const along = dot(column, rest);
-      rhs[used] = along;
+      this.rhs[used] = along;
       subtract(rest, along, column);
-      taken[used++] = at;
+      this.taken[used++] = at;
     }
     return used;
-  };
-
-  const propose = (scale: Float64Array, out: Float64Array): number => {
-    if (!placed) throw new Error('a point comes before a proposal');
-    const used = factor(scale);
-    out.set(lastG);
-    for (let k = used - 1; k >= 0; k--) {
-      let gamma = rhs[k]!;
-      for (let j = k + 1; j < used; j++) gamma -= r[k * depth + j]! * rhs[j]!;
-      gamma /= r[k * depth + k]!;
-      rhs[k] = gamma;
-      const [ofX, ofF] = [dx[taken[k]!]!, df[taken[k]!]!];
-      for (let i = 0; i < n; i++) out[i]! -= gamma * (ofX[i]! + ofF[i]!);
-    }
-    return used;
-  };
-
-  return {
-    n,
-    depth,
-    get held() {
-      return held;
-    },
-    push,
-    propose,
-    forget() {
-      placed = false;
-      held = 0;
-    },
-    leap() {
-      placed = false;
-    },
-  };
+  }
 }
 
 function dot(a: Float64Array, b: Float64Array): number {
