@@ -19,8 +19,7 @@ import { cancelNewest } from './export/underWay';
 import { FindDialogue } from './find/FindDialogue';
 import { KeyList } from './KeyList';
 import { MySketches } from './MySketches';
-import { Notice, Update } from './Notice';
-import { SolvingLine } from './SolvingLine';
+import { Notice } from './Notice';
 import { Start } from './Start';
 import { SummaryPage } from './SummaryPage';
 import { ShareDialogue } from './share/ShareDialogue';
@@ -120,11 +119,7 @@ function Workplace({ stores }: { readonly stores: Stores }) {
         <Sheet />
         {isBlank ? <Start /> : null}
         <Notice />
-        <div className="at-foot">
-          <UnderWayList />
-          <SolvingLine />
-          <Update />
-        </div>
+        <UnderWayList />
       </main>
       <DrawerHost />
       <Balance />
