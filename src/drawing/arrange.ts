@@ -2,6 +2,7 @@ import type { StreamId, UnitId } from '../engine/ids';
 import { CATALOGUE } from '../engine/units/catalogue';
 import type { KindCatalogue } from '../engine/units/types';
 import type { Sketch, SketchStream } from '../sketch/types';
+import { settleAround } from './arrangeAround';
 import { graphOf, type LaidOut, type LayoutGraph, placesIn } from './arrangeGraph';
 import { settle } from './arrangeSettle';
 import type { Point } from './types';
@@ -45,7 +46,10 @@ export async function arrange(
   if (free.length === 0) return { at: new Map(), unbent: [] };
   const { graph, standing } = graphOf(sketch, kinds);
   const wanted = placesIn(await engine.layout(graph), standing);
-  const at = settle(sketch, standing, wanted, kept);
+  const at =
+    kept.size === 0
+      ? settle(sketch, standing, wanted, { kept, taken: [], passage: 0 })
+      : settleAround(sketch, standing, wanted, kept, kinds);
   const hasMoved = (end: SketchStream['from']): boolean => end !== undefined && !kept.has(end[0]);
   const unbent = sketch.streams
     .filter(({ via, from, to }) => via !== undefined && (hasMoved(from) || hasMoved(to)))

@@ -35,18 +35,25 @@ export function pieceAt(points: readonly Point[], line: number, k: number): Piec
     : { line, k, across, at: x1, lo: Math.min(y1, y2), hi: Math.max(y1, y2) };
 }
 
-const tooClose = (a: Piece, b: Piece): boolean =>
+const tooClose = (a: Piece, b: Piece, apart: number = APART): boolean =>
   a.line !== b.line &&
   a.across === b.across &&
-  Math.abs(a.at - b.at) < APART &&
+  Math.abs(a.at - b.at) < apart &&
   a.lo < b.hi + 4 &&
   b.lo < a.hi + 4;
 
 const cross = (a: Piece, b: Piece): boolean =>
   a.line !== b.line && a.across !== b.across && a.at > b.lo && a.at < b.hi && b.at > a.lo && b.at < a.hi;
 
-/** Lines that another line runs along, each with the lines it is too close to. */
-export function tangles(lines: readonly (readonly Point[])[]): ReadonlyMap<number, ReadonlySet<number>> {
+/**
+ * Lines that another line runs along, each with the lines it is too close to.
+ *
+ * @param apart nearer than this is too close [px]
+ */
+export function tangles(
+  lines: readonly (readonly Point[])[],
+  apart: number = APART,
+): ReadonlyMap<number, ReadonlySet<number>> {
   const out = new Map<number, Set<number>>();
   const note = (line: number, other: number): void => {
     const near = out.get(line);
@@ -58,8 +65,8 @@ export function tangles(lines: readonly (readonly Point[])[]): ReadonlyMap<numbe
     const side = pieces.filter((piece) => piece.across === across).sort((a, b) => a.at - b.at);
     for (let n = 0; n < side.length; n++) {
       const a = side[n]!;
-      for (let m = n + 1; m < side.length && side[m]!.at - a.at < APART; m++) {
-        if (!tooClose(a, side[m]!)) continue;
+      for (let m = n + 1; m < side.length && side[m]!.at - a.at < apart; m++) {
+        if (!tooClose(a, side[m]!, apart)) continue;
         note(a.line, side[m]!.line);
         note(side[m]!.line, a.line);
       }
@@ -116,12 +123,19 @@ function allowed(
     if (Math.sign(was) !== Math.sign(is) || Math.abs(is) < least) return false;
   }
   for (const n of [k - 1, k, k + 1]) {
-    if (n === 0 || n + 2 === after.length) continue;
-    const box = boxOfPiece(after[n]!, after[n + 1]!, CLEAR);
+    const [first, last] = [n === 0, n + 2 === after.length];
+    // Of a piece at a port only what it gained: the rest leads into its own symbol.
+    if ((first || last) && lengthAt(after, n) <= lengthAt(before, n)) continue;
+    const from = first ? before[1]! : after[n]!;
+    const to = last ? before[n]! : after[n + 1]!;
+    const box = boxOfPiece(from, to, CLEAR);
     if (obstacles.some((o) => overlaps(o, box))) return false;
   }
   return true;
 }
+
+const lengthAt = (points: readonly Point[], n: number): number =>
+  Math.abs(points[n + 1]![0] - points[n]![0]) + Math.abs(points[n + 1]![1] - points[n]![1]);
 
 /**
  * Draws parallel pieces apart that would lie on or close to one another. Only pieces between two bends move; those

@@ -87,6 +87,12 @@ function ahead({ at, side }: PortPlace, bend: Point): number {
   return aside === 0 && far > 0 ? far : Infinity;
 }
 
+interface Way {
+  /** Whether ports that face one another share what lies between them; else each has its full stub. */
+  readonly narrow?: boolean;
+  readonly detour?: Detour;
+}
+
 /** What else a line is to heed when it is led once more, because it ran along another one. */
 export interface Detour {
   readonly lanes: readonly Lane[];
@@ -112,7 +118,11 @@ export function routeLine(
   via: readonly Point[],
   obstacles: readonly Box[],
 ): Route {
-  return ledOnce(from, to, via, obstacles) ?? lastResort(from, to);
+  const led = ledOnce(from, to, via, obstacles);
+  if (led) return led;
+  // Ports that face one another across a gap too narrow for a line between the symbols: round them, with full stubs.
+  const round = ledOnce(from, to, via, obstacles, { narrow: false });
+  return round ? { ...round, region: EVERYWHERE } : lastResort(from, to);
 }
 
 /** All that has a say in how an end lies, as one text. */
@@ -131,14 +141,14 @@ export const detourLine = (
   to: RouteEnd,
   obstacles: readonly Box[],
   detour: Detour,
-): Route | undefined => ledOnce(from, to, [], obstacles, detour);
+): Route | undefined => ledOnce(from, to, [], obstacles, { detour });
 
 function ledOnce(
   from: RouteEnd,
   to: RouteEnd,
   via: readonly Point[],
   obstacles: readonly Box[],
-  detour?: Detour,
+  { narrow = true, detour }: Way = {},
 ): Route | undefined {
   const a = from.port;
   const b = to.port;
@@ -159,7 +169,8 @@ function ledOnce(
   const exact = via.length > 0 && !detour ? asGiven(from, to, via, obstacles) : undefined;
   if (exact) return exact;
   const [first, last] = [via[0], via.at(-1)];
-  const [before, behind] = first && last ? [ahead(a, first), ahead(b, last)] : [halfGap(a, b), halfGap(a, b)];
+  const between = narrow ? halfGap(a, b) : Infinity;
+  const [before, behind] = first && last ? [ahead(a, first), ahead(b, last)] : [between, between];
   const start = along(a.at, a.side, stubOf(from, before, obstacles, detour?.stubs[0]));
   const end = along(b.at, b.side, stubOf(to, behind, obstacles, detour?.stubs[1]));
   const stops = [start, ...via.filter((v) => !obstacles.some((o) => inside(v, grown(o, 6)))), end];

@@ -3,6 +3,7 @@ import { frameOf, pageOf, zoneOf } from '../../src/drawing/frame';
 import { omittedSentence } from '../../src/drawing/labelText';
 import { limitMark, stateMark } from '../../src/drawing/marks';
 import { cutText, measureText } from '../../src/drawing/metrics';
+import { drawApart } from '../../src/drawing/nudge';
 import { buildScene } from '../../src/drawing/scene';
 import { sceneToSvg } from '../../src/drawing/svg';
 import { DARK, LIGHT, PRINT } from '../../src/drawing/tokens';
@@ -202,6 +203,34 @@ test('a unit pushed against another until their ports touch leaves the line with
     [x, 0],
   ]);
   expect(JSON.stringify(touching)).not.toContain('null');
+});
+
+test('ports that face one another across less than a line needs are joined round the symbols', () => {
+  const far = sheetOf(
+    [
+      ['cooler', 'E-1', 0, 0],
+      ['cooler', 'E-2', 40, 624],
+    ],
+    [['1', 'E-1.out', 'E-2.in']],
+  );
+  const scene = buildScene(far, inputOf(far));
+  expect(Object.values(LAWS).flatMap((law) => law(scene, far))).toEqual([]);
+});
+
+test('a piece is not drawn apart when that would lead the line out of its port through a symbol', () => {
+  const line: readonly Point[] = [
+    [0, 24],
+    [0, 40],
+    [200, 40],
+    [200, 160],
+  ];
+  const along: readonly Point[] = [
+    [-40, 40],
+    [240, 40],
+  ];
+  const symbol = { x: -20, y: 50, w: 40, h: 28 };
+  expect(drawApart([line, along], [], [false, true])[0]).not.toEqual(line);
+  expect(drawApart([line, along], [symbol], [false, true])[0]).toEqual(line);
 });
 
 test('bends moved by hand are honoured, those inside a symbol are left out', () => {
