@@ -2,6 +2,7 @@ import { useState } from 'react';
 import { LimitMark, worstWeight } from '../parts/LimitMark';
 import type { Action } from '../store/action';
 import { useResults, useSession, useSketch, useStores } from '../store/react';
+import { WhyNot } from './WhyNot';
 
 const savedText = {
   saved: 'Saved on this computer',
@@ -137,14 +138,15 @@ const DIRECT: ReadonlySet<string> = new Set(['undo', 'redo']);
 interface MenuButtonProps {
   readonly word: string;
   readonly actions: readonly Action[];
-  /** Only what can be done now: a long list would not fit a small screen. */
+  /** Only what can be done now, or says why not: a long list would not fit a small screen. */
   readonly short?: true;
 }
 
 function MenuButton({ word, actions, short }: MenuButtonProps) {
   const stores = useStores();
   const [open, setOpen] = useState(false);
-  const ready = (action: Action): boolean => action.when?.(stores) ?? true;
+  const listed = (action: Action): boolean =>
+    (action.when?.(stores) ?? true) || action.whyNot?.(stores) !== undefined;
   return (
     <div className="menu-holder">
       <button
@@ -157,7 +159,7 @@ function MenuButton({ word, actions, short }: MenuButtonProps) {
         {word}
       </button>
       {open ? (
-        <Menu word={word} actions={short ? actions.filter(ready) : actions} close={() => setOpen(false)} />
+        <Menu word={word} actions={short ? actions.filter(listed) : actions} close={() => setOpen(false)} />
       ) : null}
     </div>
   );
@@ -207,7 +209,10 @@ function Menu({ word, actions, close }: MenuProps) {
               action.run(stores);
             }}
           >
-            <span>{action.label}</span>
+            <span>
+              {action.label}
+              <WhyNot action={action} />
+            </span>
             <kbd>{action.keys[0] ?? ''}</kbd>
           </button>
         ))}

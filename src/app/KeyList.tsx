@@ -2,6 +2,7 @@ import { useEffect, useRef, useState } from 'react';
 import type { Action } from '../store/action';
 import { useStores } from '../store/react';
 import { Dialogue } from './Dialogue';
+import { WhyNot } from './WhyNot';
 
 const GROUPS: Readonly<Record<Action['group'], string>> = {
   sketch: 'Sketch',
@@ -62,6 +63,7 @@ export function KeyList({ actions }: { readonly actions: readonly Action[] }) {
                       onClick={() => choose(action)}
                     >
                       {action.label}
+                      <WhyNot action={action} />
                     </button>
                     <kbd>{action.keys.join(' or ')}</kbd>
                   </li>

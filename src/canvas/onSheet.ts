@@ -1,5 +1,5 @@
 import type { Sketch } from '../sketch/types';
-import type { Action } from '../store/action';
+import { type Action, isSheetFree } from '../store/action';
 import type { Edit } from '../store/commands';
 import type { Stores } from '../store/react';
 import { together, tryEdit } from './edit';
@@ -16,7 +16,7 @@ export const onSheet = (stores: Stores): boolean => {
   );
 };
 
-export const idle = (stores: Stores): boolean => stores.session.getState().over === 'none';
+export const idle = isSheetFree;
 export const isWritable = ({ sketch }: Stores): boolean => sketch.getState().writable;
 export const unitsChosen = ({ session }: Stores): number => session.getState().units.length;
 export const notesChosen = ({ session }: Stores): number => session.getState().notes.length;

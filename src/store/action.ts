@@ -14,7 +14,15 @@ export interface Action {
   /** Where its keys are heard (the sheet has the focus); absent: everywhere. Menus do not ask. */
   listens?(stores: Stores): boolean;
   when?(stores: Stores): boolean;
+  /** Why it cannot be run now, where a user could wonder: a menu then lists it with the reason. */
+  whyNot?(stores: Stores): string | undefined;
   run(stores: Stores): void;
+}
+
+/** Nothing lies over the sheet, or only the list of actions: it closes before it runs what was chosen in it. */
+export function isSheetFree({ session }: Stores): boolean {
+  const { over } = session.getState();
+  return over === 'none' || over === 'keys';
 }
 
 const named: Readonly<Record<string, string>> = {

@@ -1,14 +1,15 @@
-import { arrange, arranged } from '../../drawing/arrange';
+import { arrange, arranged, placedByHand } from '../../drawing/arrange';
 import type { UnitId } from '../../engine/ids';
-import type { Action } from '../../store/action';
+import type { Sketch } from '../../sketch/types';
+import { type Action, isSheetFree } from '../../store/action';
 import type { Stores } from '../../store/react';
 import { layoutEngine } from '../arranging';
 
-/** Places units anew as one step; what is not among them stays. */
-async function arrangeUnits(stores: Stores, which: ReadonlySet<UnitId> | 'all'): Promise<void> {
+const count = (n: number): string => `${n} unit${n === 1 ? '' : 's'}`;
+
+/** Places units anew as one step; those to keep stay. */
+async function arrangeAround(stores: Stores, keep: readonly UnitId[], label: string): Promise<void> {
   const { sketch, edit } = stores.sketch.getState();
-  const keep =
-    which === 'all' ? [] : sketch.units.filter((unit) => !which.has(unit.id)).map((unit) => unit.id);
   stores.session.setState({ spoken: 'Arranging' });
   try {
     const plan = await arrange(sketch, await layoutEngine(), { keep });
@@ -16,8 +17,6 @@ async function arrangeUnits(stores: Stores, which: ReadonlySet<UnitId> | 'all'):
       stores.session.say('info', 'Not arranged: the sketch was changed meanwhile.', ['Arrange once more.']);
       return;
     }
-    const label =
-      which === 'all' ? 'arrange all' : `arrange ${which.size} unit${which.size === 1 ? '' : 's'}`;
     stores.sketch.apply(label, (now) => arranged(now, plan));
     stores.session.setState({ spoken: `Done: ${label}` });
   } catch (error) {
@@ -27,10 +26,31 @@ async function arrangeUnits(stores: Stores, which: ReadonlySet<UnitId> | 'all'):
   }
 }
 
-const isReady = ({ sketch, session }: Stores): boolean =>
-  sketch.getState().writable &&
-  session.getState().over === 'none' &&
-  sketch.getState().sketch.units.length > 1;
+const sketchOf = ({ sketch }: Stores): Sketch => sketch.getState().sketch;
+
+const isReady = (stores: Stores): boolean =>
+  stores.sketch.getState().writable && isSheetFree(stores) && sketchOf(stores).units.length > 1;
+
+/** Why nothing could be arranged around what was placed by hand. */
+function whyNotKeep(stores: Stores): string | undefined {
+  const { units } = sketchOf(stores);
+  const kept = placedByHand(sketchOf(stores)).length;
+  if (units.length < 2) return undefined;
+  if (kept === 0) return 'No unit was moved or lined up by hand since it was last arranged.';
+  return kept === units.length ? 'Every unit was placed by hand: none is left to arrange.' : undefined;
+}
+
+function arrangeSelected(stores: Stores): void {
+  const chosen = new Set(stores.session.getState().units);
+  const others = sketchOf(stores).units.filter((unit) => !chosen.has(unit.id));
+  const keep = others.map((unit) => unit.id);
+  void arrangeAround(stores, keep, `arrange ${count(chosen.size)}`);
+}
+
+function arrangeTheRest(stores: Stores): void {
+  const keep = placedByHand(sketchOf(stores));
+  void arrangeAround(stores, keep, `arrange, ${count(keep.length)} kept`);
+}
 
 /** Layers from left to right along the flow. */
 export const arrangeActions: readonly Action[] = [
@@ -40,7 +60,16 @@ export const arrangeActions: readonly Action[] = [
     group: 'edit',
     keys: ['Shift+A'],
     when: isReady,
-    run: (stores) => void arrangeUnits(stores, 'all'),
+    run: (stores) => void arrangeAround(stores, [], 'arrange all'),
+  },
+  {
+    id: 'arrange-rest',
+    label: 'Arrange, keep what I placed',
+    group: 'edit',
+    keys: ['Shift+K'],
+    when: (stores) => isReady(stores) && whyNotKeep(stores) === undefined,
+    whyNot: whyNotKeep,
+    run: arrangeTheRest,
   },
   {
     id: 'arrange-selected',
@@ -48,6 +77,6 @@ export const arrangeActions: readonly Action[] = [
     group: 'edit',
     keys: ['Shift+S'],
     when: (stores) => isReady(stores) && stores.session.getState().units.length > 0,
-    run: (stores) => void arrangeUnits(stores, new Set(stores.session.getState().units)),
+    run: arrangeSelected,
   },
 ];

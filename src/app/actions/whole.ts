@@ -1,4 +1,4 @@
-import type { Action } from '../../store/action';
+import { type Action, isSheetFree } from '../../store/action';
 import { scaledFlows } from '../../store/commands';
 
 /** What concerns the whole sketch and has a dialogue of its own. */
@@ -8,9 +8,9 @@ export const wholeActions: readonly Action[] = [
     label: 'Scale all feeds',
     group: 'sketch',
     keys: ['G'],
-    when: ({ sketch, session }) => {
-      const { sketch: document, writable } = sketch.getState();
-      return writable && session.getState().over === 'none' && scaledFlows(document, 1).length > 0;
+    when: (stores) => {
+      const { sketch, writable } = stores.sketch.getState();
+      return writable && isSheetFree(stores) && scaledFlows(sketch, 1).length > 0;
     },
     run: ({ session }) => session.setState({ over: 'scale' }),
   },
