@@ -72,71 +72,20 @@ export function resultsOf(
   s: StageSystem,
   duties: { readonly condenser?: number; readonly reboiler?: number },
 ): ColumnResults {
-  const { settings, model } = call;
-  const { first, last, n } = s;
-  const { stages } = settings;
-  const vector = (of: (j: number) => number): Float64Array => {
-    const out = new Float64Array(stages);
-    for (let k = 0; k < stages; k++) out[k] = of(first + k);
-    return out;
-  };
-  const profile = (flows: Float64Array, sums: Float64Array): Profile => {
-    const nothing = new Float64Array(stages);
-    const out: Record<string, Float64Array> = {};
-    for (const c of model.chemicals) out[c.id] = nothing;
-    job.present.forEach((full, i) => {
-      out[model.chemicals[full]!.id] = vector((j) => flows[j * n + i]! / sums[j]!);
-    });
-    return out;
-  };
-  const at = (flows: Float64Array, sums: Float64Array, j: number): Record<string, number> => {
-    const out: Record<string, number> = {};
-    for (const c of model.chemicals) out[c.id] = 0;
-    job.present.forEach((full, i) => {
-      out[model.chemicals[full]!.id] = flows[j * n + i]! / sums[j]!;
-    });
-    return out;
-  };
-  const end = (j: number, duty_W: number, T_K: number): EndResults => ({
-    duty_W,
-    T_K,
-    P_Pa: s.task.P_Pa[j]!,
-    x: at(s.l, s.L, j),
-    y: at(s.v, s.V, j),
-    hL_J_mol: s.leaving(j).h_J_mol,
-    hV_J_mol: s.vap[j]!.h_J_mol,
-    densityRatio: densityRatio(s, j),
-  });
+  const { settings } = call;
   const foot = s.places - 1;
   const distillate_mol_s = s.totalCondenser ? s.L[0]! * s.p[0]! : s.V[0]!;
-  const firstDraw = s.movers.length - s.task.draws.length;
   const { condenser, reboiler } = duties;
+  const end = endOf(call, job, s);
   return {
-    ...(first === 1 ? { refluxRatio: s.L[0]! / distillate_mol_s } : {}),
+    ...(s.first === 1 ? { refluxRatio: s.L[0]! / distillate_mol_s } : {}),
     ...(settings.bottom.reboiler ? { boilup: s.V[foot]! / s.L[foot]! } : {}),
     duty_W: (condenser ?? 0) + (reboiler ?? 0),
     ...(condenser === undefined ? {} : { condenserDuty_W: condenser }),
     ...(reboiler === undefined ? {} : { reboilerDuty_W: reboiler }),
-    topT_K: s.T[first]!,
-    bottomT_K: s.T[last]!,
-    stages: {
-      T_K: vector((j) => s.T[j]!),
-      P_Pa: vector((j) => s.task.P_Pa[j]!),
-      L_mol_s: vector((j) => s.L[j]!),
-      V_mol_s: vector((j) => s.V[j]!),
-      x: profile(s.l, s.L),
-      y: profile(s.v, s.V),
-      hL_J_mol: vector((j) => s.liq[j]!.h_J_mol),
-      hV_J_mol: vector((j) => s.vap[j]!.h_J_mol),
-      densityRatio: vector((j) => densityRatio(s, j)),
-      feed: job.feedPorts.map((port, k) => ({ stage: nameOfPlace(settings, s.task.feeds[k]!.place), port })),
-      draw: s.task.draws.map((d, k) => ({
-        stage: nameOfPlace(settings, d.place),
-        phase: d.phase,
-        port: job.drawPorts[k]!,
-        n_mol_s: s.p[firstDraw + k]! * (d.phase === 'liquid' ? s.L : s.V)[d.place]!,
-      })),
-    },
+    topT_K: s.T[s.first]!,
+    bottomT_K: s.T[s.last]!,
+    stages: stagesOf(call, job, s),
     ...(condenser === undefined || settings.top.distillate === 'none'
       ? {}
       : {
@@ -160,6 +109,71 @@ export function resultsOf(
   };
 }
 
+/** Profiles over the stages, the ends left out. */
+function stagesOf(
+  { settings, model }: Call<ColumnSettings>,
+  job: ColumnJob,
+  s: StageSystem,
+): ColumnResults['stages'] {
+  const { stages } = settings;
+  const firstDraw = s.movers.length - s.task.draws.length;
+  const vector = (of: (j: number) => number): Float64Array => {
+    const out = new Float64Array(stages);
+    for (let k = 0; k < stages; k++) out[k] = of(s.first + k);
+    return out;
+  };
+  const profile = (flows: Float64Array, sums: Float64Array): Profile => {
+    const nothing = new Float64Array(stages);
+    const out: Record<string, Float64Array> = {};
+    for (const c of model.chemicals) out[c.id] = nothing;
+    job.present.forEach((full, i) => {
+      out[model.chemicals[full]!.id] = vector((j) => flows[j * s.n + i]! / sums[j]!);
+    });
+    return out;
+  };
+  return {
+    T_K: vector((j) => s.T[j]!),
+    P_Pa: vector((j) => s.task.P_Pa[j]!),
+    L_mol_s: vector((j) => s.L[j]!),
+    V_mol_s: vector((j) => s.V[j]!),
+    x: profile(s.l, s.L),
+    y: profile(s.v, s.V),
+    hL_J_mol: vector((j) => s.liq[j]!.h_J_mol),
+    hV_J_mol: vector((j) => s.vap[j]!.h_J_mol),
+    densityRatio: vector((j) => densityRatio(s, j)),
+    feed: job.feedPorts.map((port, k) => ({ stage: nameOfPlace(settings, s.task.feeds[k]!.place), port })),
+    draw: s.task.draws.map((d, k) => ({
+      stage: nameOfPlace(settings, d.place),
+      phase: d.phase,
+      port: job.drawPorts[k]!,
+      n_mol_s: s.p[firstDraw + k]! * (d.phase === 'liquid' ? s.L : s.V)[d.place]!,
+    })),
+  };
+}
+
+/** What is told of an end, by its place, its heat [W] and the temperature at which its liquid leaves [K]. */
+function endOf({ model }: Call<ColumnSettings>, job: ColumnJob, s: StageSystem) {
+  const fractions = (flows: Float64Array, sums: Float64Array, j: number): Record<string, number> => {
+    const out: Record<string, number> = {};
+    for (const c of model.chemicals) out[c.id] = 0;
+    job.present.forEach((full, i) => {
+      out[model.chemicals[full]!.id] = flows[j * s.n + i]! / sums[j]!;
+    });
+    return out;
+  };
+  return (j: number, duty_W: number, T_K: number): EndResults => ({
+    duty_W,
+    T_K,
+    P_Pa: s.task.P_Pa[j]!,
+    x: fractions(s.l, s.L, j),
+    y: fractions(s.v, s.V, j),
+    hL_J_mol: s.leaving(j).h_J_mol,
+    hV_J_mol: s.vap[j]!.h_J_mol,
+    densityRatio: densityRatio(s, j),
+  });
+}
+
+/** Mass density of a place's liquid by that of its vapour, by the model's own volumes [-]. */
 function densityRatio(s: StageSystem, j: number): number {
   let liquid = 0;
   let vapour = 0;
