@@ -7,6 +7,7 @@ import type { Stores } from '../store/react';
 import { tryEdit } from './edit';
 import { sheetOf } from './handle';
 import { endMove, LEAST_SIZE } from './moving';
+import { noteRoom } from './noteRoom';
 import { follow } from './pointer';
 import type { HeldNote, SheetStore } from './sheetStore';
 
@@ -16,7 +17,7 @@ const AREA: Point = [320, 200];
 
 const onGrid = (value: number): number => Math.round(value / GRID) * GRID;
 
-/** Puts a note in the middle of the view, or an area around what is selected, and has its text typed. */
+/** Puts a note where it stands on nothing, or an area around what is selected, and has its text typed. */
 export function putNote(stores: Stores, kind: NonNullable<Note['kind']>): void {
   const handle = sheetOf(stores);
   if (!handle) return;
@@ -32,7 +33,8 @@ export function putNote(stores: Stores, kind: NonNullable<Note['kind']>): void {
     kind === 'area' && around
       ? { x: around.x - AROUND, y: around.y - AROUND, w: around.w + 2 * AROUND, h: around.h + 2 * AROUND }
       : { x: mx - AREA[0] / 2, y: my - AREA[1] / 2, w: AREA[0], h: AREA[1] };
-  const at: Point = kind === 'area' ? [onGrid(box.x), onGrid(box.y)] : [onGrid(mx), onGrid(my)];
+  const at: Point =
+    kind === 'area' ? [onGrid(box.x), onGrid(box.y)] : noteRoom(handle.store.getState().scene, [mx, my]);
   const size = kind === 'area' ? ([onGrid(box.w), onGrid(box.h)] as const) : undefined;
   const { sketch } = stores.sketch.getState();
   const made = addNote(sketch, kind === 'area' ? 'Battery limit' : 'Note', {
@@ -48,6 +50,7 @@ export function putNote(stores: Stores, kind: NonNullable<Note['kind']>): void {
   stores.session.select([]);
   stores.session.setState({ notes: [id], spoken: kind === 'area' ? 'Area added' : 'Note added' });
   handle.store.setState({ writing: id });
+  if (kind === 'text') handle.reveal(at);
 }
 
 /** What was typed becomes the note's text; a note that says nothing stays as it was. Null: Esc, a new note goes again. */
