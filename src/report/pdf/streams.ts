@@ -37,7 +37,7 @@ function measured(table: Table, paper: Paper): Measures {
   const size = paper.streams;
   const clamp = (value: number, least: number, most: number): number =>
     Math.min(most, Math.max(least, value));
-  const most = 0.17 * paper.inner.w;
+  const widestLabel = 0.17 * paper.inner.w;
   const label = clamp(
     widest(
       table.rows.map((row) => row.label),
@@ -45,7 +45,7 @@ function measured(table: Table, paper: Paper): Measures {
       600,
     ) + 2,
     70,
-    most,
+    widestLabel,
   );
   const unit = clamp(
     widest(
@@ -60,7 +60,9 @@ function measured(table: Table, paper: Paper): Measures {
   );
   const room = paper.inner.w - label - unit - 2 * SIDES;
   const least = Math.max(44, figures.reduce((a, b) => Math.max(a, b), 0) + 1);
-  const columns = Math.max(1, Math.min(MOST_STREAMS, Math.floor(room / (least + SIDES))));
+  const most = Math.max(1, Math.min(MOST_STREAMS, Math.floor(room / (least + SIDES))));
+  // As many on each page, rather than full pages and a rest.
+  const columns = Math.ceil(table.columns.length / Math.ceil(table.columns.length / most)) || 1;
   const shown = Math.min(columns, Math.max(1, table.columns.length));
   const column = Math.min(84, room / shown - SIDES);
   const lines = table.columns.reduce((n, c) => Math.max(n, linesOf(c.sub ?? '', column, size).length), 1);
