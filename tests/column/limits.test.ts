@@ -238,3 +238,31 @@ test('a distillate of all that is fed is refused by the balance, however its sha
       'column/product-above-feed',
     ]);
 });
+
+describe('what fixes nothing is refused, since any column would meet it', () => {
+  test('the flow of a side draw, which is given with the draw', () => {
+    const sides = { side1: { stage: 4, phase: 'liquid', flow: molar(5) } } as const;
+    const twice = of({ sides, fixedBy: [R2, { fix: 'flow', product: 'side1', value: molar(5) }] });
+    expect(twice.codes).toEqual(['column/draw-flow-given']);
+    expect(twice.found[0]!.at.path).toBe('fixedBy.1');
+    expect(of({ sides, fixedBy: [R2, D40] }).answer).toBeDefined();
+  });
+
+  test('a temperature or a purity where one chemical is fed, a second purity of a product where two are', () => {
+    const fed = (parts: number[]) => streamOf(paraffins, parts, 50, { P_Pa: 15e5, vapourFraction: 0 });
+    const purity = (chemical: number, value: number): FixedBy => ({
+      fix: 'purity',
+      product: 'liquidDistillate',
+      chemical,
+      value,
+      basis: 'mole',
+    });
+    const codes = (parts: number[], fixedBy: readonly FixedBy[]) => of({ fixedBy }, {}, fed(parts)).codes;
+    expect(codes([0, 1, 0], [R2, { fix: 'temperature', stage: 'condenser', value: 380 }])).toEqual([
+      'column/follows-already',
+    ]);
+    expect(codes([0, 1, 1], [purity(1, 0.9), purity(2, 0.1)])).toEqual(['column/follows-already']);
+    expect(codes([1, 1, 1], [purity(0, 0.6), purity(2, 0.02)])).not.toContain('column/follows-already');
+    expect(of({ fixedBy: [R2, D40] }, {}, fed([0, 1, 0])).answer).toBeDefined();
+  });
+});

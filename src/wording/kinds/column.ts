@@ -85,6 +85,11 @@ export const column: KindWords = {
       says: 'What is not recovered in the distillate leaves with the bottoms: the second recovery follows from the first.',
       next: 'Fix the recovery of another component in one of the two.',
     },
+    'column/draw-flow-given': {
+      title: 'A draw fixed twice',
+      says: 'The flow of the {port} is given with the draw; once more among what fixes the column it leaves the column open.',
+      next: 'Clear the row, and fix something of the column itself.',
+    },
     'column/no-such-end': {
       title: 'No such end',
       says: 'The column has no {end}.',
@@ -164,6 +169,11 @@ export const column: KindWords = {
       title: 'Heat the wrong way',
       says: 'At the {end} {asked} {sense} is asked; a condenser takes heat away and a reboiler brings it.',
       next: 'Turn the sign of the duty round; in files heat into the column is positive.',
+    },
+    'column/follows-already': {
+      title: 'Given already',
+      says: 'Of chemicals the feeds bring {chemicals} only: this follows from the rest and fixes nothing.',
+      next: 'Fix a flow, a ratio or a duty instead.',
     },
     'column/dries': {
       title: 'A stage runs dry',

@@ -211,9 +211,26 @@ function purityMisses({ fixed, draws }: ColumnTask, fed: Fed): Impossible[] {
   });
 }
 
+/**
+ * What one or two chemicals leave open no more: of one, every purity, and every temperature by the pressure; of two, the second
+ * purity of a product by its first.
+ */
+function alreadyGiven({ model, fixed }: ColumnTask): Impossible[] {
+  const seen: Evidence = { name: 'chemicals', value: model.n, dim: 'number' };
+  return fixed.flatMap((x, k): Impossible[] => {
+    const follows =
+      model.n === 1
+        ? x.fix === 'purity' || x.fix === 'temperature'
+        : model.n === 2 &&
+          x.fix === 'purity' &&
+          fixed.slice(0, k).some((y) => y.fix === 'purity' && y.product === x.product);
+    return follows ? [{ code: 'column/follows-already', fixing: k, evidence: [seen] }] : [];
+  });
+}
+
 /** What is impossible by balances alone, before anything is solved. */
 export function impossibleBy(task: ColumnTask): Impossible[] {
-  const wrong = [...valueMisses(task.fixed), ...dutyMisses(task)];
+  const wrong = [...valueMisses(task.fixed), ...dutyMisses(task), ...alreadyGiven(task)];
   if (wrong.length > 0) return wrong;
   const fed = fedOf(task);
   return [...flowMisses(task, fed), ...contentMisses(task, fed), ...purityMisses(task, fed)];

@@ -9,6 +9,7 @@ export const COLUMN_FINDINGS = [
   'column/both-products-fixed',
   'column/reflux-three-ways',
   'column/recovery-both',
+  'column/draw-flow-given',
   'column/no-such-end',
   'column/no-such-product',
   'column/no-such-stage',
@@ -25,6 +26,7 @@ export const COLUMN_FINDINGS = [
   'column/not-positive',
   'column/more-than-fed',
   'column/purities-apart',
+  'column/follows-already',
   'column/duty-wrong-way',
   'pressure/not-positive',
   // Why a column that could be has no answer.

@@ -86,7 +86,8 @@ function withoutPlace(view: FixedView): Finding[] {
 
 /**
  * Quantities that contradict or repeat each other, whatever their values: the same twice, both end products' flows,
- * reflux ratio with reflux and distillate, one chemical's recovery in both of two products; and such as the column has no
+ * reflux ratio with reflux and distillate, one chemical's recovery in both of two products, the flow of a side draw, which its
+ * draw gives already; and such as the column has no
  * place for.
  *
  * @param sides  number of side draws: with one, recoveries in both ends leave something open
@@ -103,6 +104,10 @@ export function conflictsOf(view: FixedView, sides = 0): Finding[] {
       found.push(
         refusal('column/fixed-twice', `fixedBy.${k}`, [number('first', before + 1), number('second', k + 1)]),
       );
+  });
+  items.forEach((x, k) => {
+    if (x.fix === 'flow' && typeof x.product === 'string' && !isEndProduct(x.product))
+      found.push(refusal('column/draw-flow-given', `fixedBy.${k}`, [word('port', x.product)]));
   });
   const placeOf = (test: (x: FixedItem) => boolean): number => items.findIndex(test);
   const top = placeOf((x) => x.fix === 'flow' && x.product === topPort(view));
