@@ -1,9 +1,10 @@
-import { useCallback, useEffect, useState } from 'react';
-import type { SketchHead, StoredState } from '../store/autosave';
+import { useCallback, useEffect, useRef, useState } from 'react';
+import type { SketchHead } from '../store/autosave';
 import { useSketch, useStores } from '../store/react';
 import { sayFileProblem } from '../wording';
 import { Dialogue } from './Dialogue';
 import { leaveFor, newSketch, showSketch } from './documents';
+import { PastStates } from './PastStates';
 import { deleteSketch, duplicateSketch, renameSketch } from './shelving';
 import { theStorage } from './storage';
 import { openStored } from './stored';
@@ -29,19 +30,53 @@ export function MySketches() {
   );
 }
 
+interface Lists {
+  readonly heads: readonly SketchHead[];
+  readonly deleted: readonly SketchHead[];
+}
+
+/** A button of a row, by what it says: of a sketch on the list, or of a deleted one. */
+type Button = readonly [row: 'sketch' | 'deleted', id: string, words: string];
+
+/** The same button of the rows beside one, the next first. */
+const beside = (rows: readonly SketchHead[], { id }: SketchHead, of: Button[0], words: string): Button[] => {
+  const at = rows.findIndex((row) => row.id === id);
+  return [rows[at + 1], rows[at - 1]].flatMap((row) => (row ? [[of, row.id, words] as const] : []));
+};
+
+/** A row that goes takes the focus with it: it is put on the first of these that is there once the lists are read anew. */
+function useFocusAfter(lists: Lists | null, renamed: string | null) {
+  const root = useRef<HTMLDivElement>(null);
+  const wanted = useRef<readonly Button[] | null>(null);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: it asks when the rows have changed
+  useEffect(() => {
+    if (!wanted.current) return;
+    const buttons = [...(root.current?.querySelectorAll<HTMLElement>('[data-do]') ?? [])];
+    const places = wanted.current.map(([row, id, words]) =>
+      buttons.find((button) => button.dataset.do === words && button.closest('li')?.dataset[row] === id),
+    );
+    wanted.current = null;
+    (places.find((place) => place !== undefined) ?? buttons.find((b) => b.dataset.do === 'New'))?.focus();
+  }, [lists, renamed]);
+  const after = (...places: readonly Button[]): void => {
+    wanted.current = places;
+  };
+  return { root, after };
+}
+
 function Kept() {
   const stores = useStores();
   const openId = useSketch((state) => state.sketch.id);
-  const [heads, setHeads] = useState<readonly SketchHead[] | null>(null);
-  const [deleted, setDeleted] = useState<readonly SketchHead[]>([]);
+  const [lists, setLists] = useState<Lists | null>(null);
   const [renamed, setRenamed] = useState<string | null>(null);
   const [said, setSaid] = useState('');
+  const { root, after } = useFocusAfter(lists, renamed);
+  const { heads, deleted } = lists ?? { heads: [], deleted: [] };
 
   const read = useCallback(async (): Promise<void> => {
     const storage = theStorage();
     if (!storage) return;
-    setHeads(await storage.list());
-    setDeleted(await storage.deleted());
+    setLists({ heads: await storage.list(), deleted: await storage.deleted() });
   }, []);
   /** Does something to the list; what cannot be done is said where one looks. */
   const act = useCallback(
@@ -67,8 +102,28 @@ function Kept() {
     leaveFor(stores, () => showSketch(stores, opened.sketch));
     return '';
   };
-  const rename = async (head: SketchHead, title: string): Promise<string> => {
+  const backToName = (head: SketchHead): void => {
     setRenamed(null);
+    after(['sketch', head.id, 'Rename']);
+  };
+  const remove = async (head: SketchHead): Promise<string> => {
+    const done = await deleteSketch(stores, head);
+    // Where it was refused its own row is still there.
+    after(['sketch', head.id, 'Delete'], ...beside(heads, head, 'sketch', 'Delete'));
+    return done;
+  };
+  const bringBack = async (head: SketchHead): Promise<string> => {
+    await theStorage()?.bringBack(head.id);
+    after(['sketch', head.id, 'Delete']);
+    return `${nameOf(head)} is back.`;
+  };
+  const removeForGood = async (head: SketchHead): Promise<string> => {
+    await theStorage()?.remove(head.id);
+    after(...beside(deleted, head, 'deleted', 'Delete for good'));
+    return `${nameOf(head)} is gone for good.`;
+  };
+  const rename = async (head: SketchHead, title: string): Promise<string> => {
+    backToName(head);
     if (title === '' || title === head.title) return '';
     if (head.id !== openId) return renameSketch(head, title);
     // The open one is renamed as an edit, so that it can be undone like any other.
@@ -81,9 +136,9 @@ function Kept() {
   };
 
   return (
-    <>
+    <div ref={root}>
       <ul className="sketch-list">
-        {heads?.map((head) => (
+        {heads.map((head) => (
           <li key={head.id} data-sketch={head.id}>
             {renamed === head.id ? (
               <input
@@ -96,7 +151,7 @@ function Kept() {
                   if (event.key !== 'Escape') return;
                   event.preventDefault();
                   event.stopPropagation();
-                  setRenamed(null);
+                  backToName(head);
                 }}
                 onBlur={() => setRenamed(null)}
               />
@@ -111,16 +166,18 @@ function Kept() {
             </span>
             <Small words="Rename" of={head} onClick={() => setRenamed(head.id)} />
             <Small words="Duplicate" of={head} onClick={() => act(() => duplicateSketch(head))} />
-            <Small words="Delete" of={head} onClick={() => act(() => deleteSketch(stores, head))} />
+            <Small words="Delete" of={head} onClick={() => act(() => remove(head))} />
           </li>
         ))}
       </ul>
-      {heads?.length === 0 ? <p className="muted">None yet. Every edit is kept here by itself.</p> : null}
+      {lists && heads.length === 0 ? (
+        <p className="muted">None yet. Every edit is kept here by itself.</p>
+      ) : null}
       <p className="sketch-said" role="status">
         {said}
       </p>
       <p>
-        <button type="button" className="button line" onClick={() => newSketch(stores)}>
+        <button type="button" className="button line" data-do="New" onClick={() => newSketch(stores)}>
           New sketch
         </button>
       </p>
@@ -132,32 +189,14 @@ function Kept() {
               <li key={head.id} data-deleted={head.id}>
                 <span>{nameOf(head)}</span>
                 <span className="muted">{when(head.gone ?? head.at)}</span>
-                <Small
-                  words="Undo"
-                  of={head}
-                  onClick={() =>
-                    act(async () => {
-                      await theStorage()?.bringBack(head.id);
-                      return `${nameOf(head)} is back.`;
-                    })
-                  }
-                />
-                <Small
-                  words="Delete for good"
-                  of={head}
-                  onClick={() =>
-                    act(async () => {
-                      await theStorage()?.remove(head.id);
-                      return `${nameOf(head)} is gone for good.`;
-                    })
-                  }
-                />
+                <Small words="Undo" of={head} onClick={() => act(() => bringBack(head))} />
+                <Small words="Delete for good" of={head} onClick={() => act(() => removeForGood(head))} />
               </li>
             ))}
           </ul>
         </>
       ) : null}
-    </>
+    </div>
   );
 }
 
@@ -171,57 +210,14 @@ function Small({
   readonly onClick: () => void;
 }) {
   return (
-    <button type="button" className="button line" aria-label={`${words}: ${nameOf(of)}`} onClick={onClick}>
+    <button
+      type="button"
+      className="button line"
+      data-do={words}
+      aria-label={`${words}: ${nameOf(of)}`}
+      onClick={onClick}
+    >
       {words}
     </button>
-  );
-}
-
-function PastStates() {
-  const stores = useStores();
-  const openId = useSketch((state) => state.sketch.id);
-  const writable = useSketch((state) => state.writable);
-  const [states, setStates] = useState<readonly StoredState[]>([]);
-  const [trouble, setTrouble] = useState('');
-  useEffect(() => {
-    theStorage()
-      ?.history(openId)
-      .then(setStates, (error: unknown) => setTrouble(String(error)));
-  }, [openId]);
-  const bringBack = (state: StoredState): void => {
-    const opened = openStored(state);
-    if (!opened.ok) {
-      setTrouble(`It cannot be shown: ${opened.problems.map(sayFileProblem).join(' ')}`);
-      return;
-    }
-    stores.sketch.apply(`bring back the state of ${when(state.at)}`, () => opened.sketch);
-    stores.session.setState({ over: 'none' });
-  };
-  return (
-    <>
-      <h3>Past states of this sketch</h3>
-      <p className="muted">
-        The last 20 and one of every hour. Bringing one back is an edit: it can be undone.
-      </p>
-      {trouble ? <p role="alert">{trouble}</p> : null}
-      <ul className="sketch-list">
-        {states.map((state) => (
-          <li key={state.counter}>
-            <span>
-              {when(state.at)} <span className="muted">{state.label}</span>
-            </span>
-            <button
-              type="button"
-              className="button line"
-              aria-label={`Bring back the state of ${when(state.at)}: ${state.label}`}
-              disabled={!writable}
-              onClick={() => bringBack(state)}
-            >
-              Bring back
-            </button>
-          </li>
-        ))}
-      </ul>
-    </>
   );
 }
