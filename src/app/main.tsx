@@ -9,6 +9,7 @@ import { createResultsStore } from '../store/resultsStore';
 import { createSession } from '../store/session';
 import { createSketchStore } from '../store/sketchStore';
 import { App } from './App';
+import { storedSingleKeys } from './actions/singleKeys';
 import { startAutosave } from './autosaving';
 import { ErrorBoundary } from './ErrorBoundary';
 import { keepFolds } from './folds';
@@ -40,7 +41,7 @@ const stores: Stores = {
   session: createSession(),
   compiled: createCompiledStore(),
 };
-stores.session.setState({ theme });
+stores.session.setState({ theme, singleKeys: storedSingleKeys() });
 keepFolds(stores.session);
 startSolving(stores);
 autosave.watch(stores);

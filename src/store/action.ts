@@ -51,7 +51,10 @@ export function keyText(
     .join('+');
 }
 
-/** The action for a key press, if one is ready to run. */
+/** A letter, figure or mark without Ctrl or Alt: such a key can be struck, or heard by speech input, by mistake. */
+export const isSingleKey = (text: string): boolean => /^(Shift\+)?.$/.test(text);
+
+/** The action for a key press, if one is ready to run. Single keys can be turned off (WCAG 2.2, 2.1.4). */
 export function actionFor(
   actions: readonly Action[],
   event: KeyboardEvent,
@@ -59,6 +62,7 @@ export function actionFor(
   stores: Stores,
 ): Action | undefined {
   const text = keyText(event);
+  if (!stores.session.getState().singleKeys && isSingleKey(text)) return undefined;
   return actions.find(
     (action) =>
       action.keys.includes(text) &&

@@ -49,6 +49,8 @@ export interface SessionState {
   /** A connection started by keyboard or pointer, waiting for its other end. */
   readonly connecting: { readonly unit: UnitId; readonly port: Port } | null;
   readonly theme: Theme;
+  /** Whether keys without Ctrl or Alt run actions. */
+  readonly singleKeys: boolean;
   readonly shelfFolded: boolean;
   readonly balanceFolded: boolean;
   /** Full-screen pages over the sheet. */
@@ -89,6 +91,7 @@ export function createSession() {
     zones: new Map(),
     connecting: null,
     theme: 'system',
+    singleKeys: true,
     shelfFolded: false,
     balanceFolded: false,
     over: 'none',

@@ -4,6 +4,7 @@ import { arrangeActions } from './arrange';
 import { documentActions } from './documents';
 import { fileActions } from './files';
 import { findActions } from './find';
+import { singleKeyActions } from './singleKeys';
 import { viewActions } from './view';
 import { wholeActions } from './whole';
 
@@ -14,6 +15,7 @@ export const actions: readonly Action[] = [
   ...wholeActions,
   ...findActions,
   ...viewActions,
+  ...singleKeyActions,
   ...sheetActions,
   ...arrangeActions,
 ];
