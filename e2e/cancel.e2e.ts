@@ -37,7 +37,7 @@ test('a stream summary that is being made is cancelled by button and by key, and
   const release = await holdFonts(page);
   const downloads = downloadsOf(page);
   await openText(page, trainOf(80));
-  const line = page.locator('.sheet > .under-way');
+  const line = page.locator('.sheet .under-way');
   await expect(line).toHaveCount(0);
 
   // By the button, with the keyboard: the focus comes back to where it was.

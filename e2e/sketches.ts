@@ -64,3 +64,74 @@ export async function given(page: Page, text: string): Promise<void> {
     buffer: Buffer.from(text),
   });
 }
+
+const MANY = [
+  'propane',
+  'n-butane',
+  'n-pentane',
+  'n-hexane',
+  'cyclohexane',
+  'benzene',
+  'n-heptane',
+  'toluene',
+  'n-octane',
+  'ethylbenzene',
+  'm-xylene',
+  'n-nonane',
+];
+
+/**
+ * So many columns one after the other, of so many stages each, on twelve chemicals: most of each distillate goes back to the
+ * column before, so that every loop overlaps the next. A solve that takes its time, in many short steps.
+ */
+export function columnLoops(columns: number, stages: number): string {
+  const units: object[] = [];
+  const streams: { id: string; number: string; from: readonly string[]; to?: readonly string[] }[] = [];
+  const put = (tag: string, kind: string, x: number, y: number, settings: object = {}): void => {
+    units.push({ id: tag, tag, kind, at: [x, y], settings });
+  };
+  const lead = (from: readonly string[], to?: readonly string[]): void => {
+    const number = String(streams.length + 1);
+    streams.push({ id: `s${number}`, number, from, ...(to ? { to } : {}) });
+  };
+  const parts = Object.fromEntries(MANY.map((id, k) => [id, k === 0 ? '12 %' : '8 %']));
+  const state = { T: '90 degC', P: '4 bar' };
+  put('FEED-1', 'feed', 0, 360, { state, flow: '100 kmol/h', composition: { basis: 'mole', parts } });
+  lead(['FEED-1', 'out'], ['J-1', 'in1']);
+  for (let k = 1; k <= columns; k += 1) {
+    const [x, column] = [280 * k, `C-${100 + k}`];
+    put(`J-${k}`, 'join', x - 120, 360 + 16 * k);
+    put(column, 'column', x, 300, {
+      stages,
+      top: { distillate: 'liquid' },
+      bottom: { reboiler: true },
+      feeds: { feed1: { stage: Math.round(stages / 2) } },
+      pressure: { condenser: '2 bar', top: '2 bar', bottom: '2.4 bar' },
+      fixedBy: [
+        { fix: 'refluxRatio', value: 2 },
+        { fix: 'flow', product: 'liquidDistillate', value: { share: '30 %', of: 'feed', basis: 'mole' } },
+      ],
+    });
+    lead([`J-${k}`, 'out'], [column, 'feed1']);
+    lead([column, 'bottoms'], k < columns ? [`J-${k + 1}`, 'in1'] : undefined);
+    if (k === 1) {
+      lead([column, 'liquidDistillate']);
+      continue;
+    }
+    put(`D-${k}`, 'divide', x + 160, 240, { shares: { out2: { share: '80 %', of: 'feed', basis: 'mole' } } });
+    put(`P-${100 + k}`, 'pump', x + 40, 80, { p: { P: '4 bar' }, efficiency: '70 %' });
+    lead([column, 'liquidDistillate'], [`D-${k}`, 'in']);
+    lead([`D-${k}`, 'out1']);
+    lead([`D-${k}`, 'out2'], [`P-${100 + k}`, 'in']);
+    lead([`P-${100 + k}`, 'out'], [`J-${k - 1}`, 'in2']);
+  }
+  return JSON.stringify({
+    format: 'splitwright.sketch',
+    version: 1,
+    title: { title: 'Loops around columns' },
+    chemicals: MANY,
+    model: { kind: 'peng-robinson', alpha: '1976', bankPairs: true, pairs: [] },
+    units,
+    streams,
+  });
+}

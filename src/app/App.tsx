@@ -19,7 +19,8 @@ import { cancelNewest } from './export/underWay';
 import { FindDialogue } from './find/FindDialogue';
 import { KeyList } from './KeyList';
 import { MySketches } from './MySketches';
-import { Notice } from './Notice';
+import { Notice, Update } from './Notice';
+import { SolvingLine } from './SolvingLine';
 import { Start } from './Start';
 import { SummaryPage } from './SummaryPage';
 import { ShareDialogue } from './share/ShareDialogue';
@@ -119,7 +120,11 @@ function Workplace({ stores }: { readonly stores: Stores }) {
         <Sheet />
         {isBlank ? <Start /> : null}
         <Notice />
-        <UnderWayList />
+        <div className="at-foot">
+          <UnderWayList />
+          <SolvingLine />
+          <Update />
+        </div>
       </main>
       <DrawerHost />
       <Balance />

@@ -9,7 +9,6 @@ export function Notice() {
   return (
     <>
       <ReadOnly />
-      <Update />
       {notice ? <Told notice={notice} /> : null}
     </>
   );
@@ -51,11 +50,11 @@ function Told({ notice }: { readonly notice: NonNullable<SessionState['notice']>
 }
 
 /** Quiet, at the foot of the sheet: the version that is open goes on for as long as one likes. */
-function Update() {
+export function Update() {
   const update = useSession((state) => state.update);
   if (!update) return null;
   return (
-    <section className="update" role="status" aria-label="New version">
+    <section className="foot-line update" role="status" aria-label="New version">
       <p>A new version is ready.</p>
       <button type="button" className="button line" onClick={takeUpdate}>
         Reload

@@ -3,8 +3,9 @@ import { useShallow } from 'zustand/react/shallow';
 import { labelsSentence, omittedSentence } from '../drawing/labelText';
 import { useMeasures } from '../parts/measures';
 import { revisionInForce } from '../store/commands';
-import { useCompiled, useResults, useSketch, useStores } from '../store/react';
+import { type Stores, useCompiled, useResults, useSketch, useStores } from '../store/react';
 import { kindWord, modelWord } from '../wording';
+import { missed } from './quiet';
 import { type SheetState, useSheet } from './sheetStore';
 import { wholeState } from './whole';
 
@@ -15,7 +16,7 @@ export const TitleStrip = memo(function TitleStrip() {
   const model = useSketch((state) => state.sketch.model.kind);
   const labels = useSketch((state) => state.sketch.display.labels);
   const measures = useMeasures();
-  const omitted = useSheet((state) => omittedSentence(state.scene.omitted));
+  const omitted = useSheet(({ scene, quiet }) => omittedSentence(missed(scene.omitted, quiet)));
   return (
     <footer className="title-strip">
       <span className="strip-title">{title.title?.trim() || 'Untitled sketch'}</span>
@@ -35,25 +36,32 @@ const QUIET_MS = 900;
 const underWay = ({ dropping, moved, pulling }: SheetState): string =>
   dropping ? `Moving: ${kindWord(dropping.kind)}` : moved ? 'Moving' : pulling ? 'Connecting' : '';
 
+/** Names of the chemicals of what was compiled last. */
+const chemicalOf =
+  ({ compiled }: Stores) =>
+  (id: string): string | undefined =>
+    compiled.getState().basis?.chemicals.find((chemical) => chemical.id === id)?.name;
+
 function WholeState() {
   const stores = useStores();
   const sketch = useSketch((state) => state.sketch);
   const edit = useSketch((state) => state.edit);
   const gaps = useCompiled((state) => state.gaps);
   const results = useResults(
-    useShallow(({ units, at, answering, solvedEdit, tookMs, trouble }) => ({
+    useShallow(({ units, at, answering, solvedEdit, tookMs, trouble, stopped }) => ({
       units,
       at,
       answering,
       solvedEdit,
       tookMs,
       trouble,
+      stopped,
     })),
   );
   const doing = useSheet(underWay);
   const { word, rest } = doing
     ? { word: doing, rest: ', Esc leaves it' }
-    : wholeState(sketch, edit, { ...stores.results.getState(), ...results }, gaps);
+    : wholeState(sketch, edit, { ...stores.results.getState(), ...results }, gaps, chemicalOf(stores));
   const solvedEdit = results.solvedEdit;
 
   // One announcement for a run of edits: when the numbers have stood still for a moment.
@@ -65,6 +73,7 @@ function WholeState() {
         stores.sketch.getState().edit,
         stores.results.getState(),
         stores.compiled.getState().gaps,
+        chemicalOf(stores),
       );
       if (now.word) stores.session.setState({ spoken: `${now.word}${now.rest}` });
     }, QUIET_MS);

@@ -4,6 +4,7 @@ export { sayEditRefusal } from './general/edits';
 export { sayFileProblem } from './general/files';
 export { type QuantitySaid, sayQuantityRefusal } from './general/quantity';
 export { capital, humanised } from './humanise';
+export { loopName, sayLoopStop } from './loops';
 export { type Said, type SayContext, sayFinding } from './say';
 export { sayRefusal } from './sayRefusal';
 export {

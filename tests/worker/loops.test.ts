@@ -38,7 +38,9 @@ test('a loop on its way is told with its tear, pass and residual, and read in th
   const store = createResultsStore();
   store.at(1, unit, loop);
   const { word, rest } = wholeState(sketch, 1, store.getState());
-  expect(word + rest).toMatch(/^Solving, at \S+, loop of stream 14, pass \d+, off by \de[-+]\d+, edit 1$/);
+  expect(word + rest).toMatch(
+    /^Solving, at \S+, loop torn at stream 14, pass \d+, off by (0\.\d+|\d × 10⁻[⁰¹²³⁴⁵⁶⁷⁸⁹]+), edit 1$/,
+  );
   store.take(1, true, batch!, 5);
   expect(store.getState().loop).toBeNull();
 });

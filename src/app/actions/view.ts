@@ -46,6 +46,23 @@ export const viewActions: readonly Action[] = [
       if (label) session.setState({ spoken: `Redone: ${label}` });
     },
   },
+  {
+    id: 'stop-solving',
+    label: 'Stop solving, or go on after a stop',
+    group: 'result',
+    keys: ['Ctrl+.'],
+    whileTyping: true,
+    when: ({ results }) => {
+      const { at, answering, solvedEdit, stopped } = results.getState();
+      return stopped || (at !== null && answering > solvedEdit);
+    },
+    run: ({ results, session }) => {
+      const { stopped } = results.getState();
+      if (stopped) results.resume();
+      else results.stop();
+      session.setState({ spoken: stopped ? 'Solving' : 'Stopped' });
+    },
+  },
   drawer('limits', 'Limits', ['L']),
   drawer('assumptions', 'Assumption register', ['A']),
   drawer('chemicals', 'Chemicals and thermodynamic model', ['H'], true),

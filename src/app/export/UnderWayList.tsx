@@ -9,7 +9,7 @@ export function UnderWayList() {
   return (
     <section className="under-way" aria-label="Documents being made">
       {all.map(({ key, name, doing, share, askedFrom, cancel }) => (
-        <p key={key} data-making={name}>
+        <p className="foot-line" key={key} data-making={name}>
           <label>
             {name}: {doing} … <progress value={share} max={1} aria-label={`Making: ${name}`} />
           </label>

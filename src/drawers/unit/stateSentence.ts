@@ -18,7 +18,8 @@ export function stateSentence(
   switch (drawnState(entry)) {
     case 'solved': {
       const { iterations } = entry?.latest ?? {};
-      return `Solved${iterations ? `, ${iterations} iterations` : ''}.${own ? ` ${ownClosure(own, measures)}` : ''}`;
+      const effort = iterations ? `, ${iterations} iteration${iterations === 1 ? '' : 's'}` : '';
+      return `Solved${effort}.${own ? ` ${ownClosure(own, measures)}` : ''}`;
     }
     case 'needs-value':
       return reason ? say(reason).sentence : 'Needs a value.';
