@@ -5,7 +5,7 @@ import { useMeasures } from '../parts/measures';
 import { revisionInForce } from '../store/commands';
 import { type Stores, useCompiled, useResults, useSketch, useStores } from '../store/react';
 import { kindWord, modelWord } from '../wording';
-import { missed } from './quiet';
+import { missed, SMALL } from './quiet';
 import { type SheetState, useSheet } from './sheetStore';
 import { wholeState } from './whole';
 
@@ -17,12 +17,15 @@ export const TitleStrip = memo(function TitleStrip() {
   const labels = useSketch((state) => state.sketch.display.labels);
   const measures = useMeasures();
   const omitted = useSheet(({ scene, quiet }) => omittedSentence(missed(scene.omitted, quiet)));
+  const isFar = useSheet(({ quiet }) => quiet.duties);
   return (
     <footer className="title-strip">
       <span className="strip-title">{title.title?.trim() || 'Untitled sketch'}</span>
       <span>{revision ? `Rev ${revision}, draft` : 'No revision'}</span>
       <span>{modelWord(model)}</span>
-      <span className="strip-labels">{labelsSentence(labels, measures)}</span>
+      <span className="strip-labels">
+        {isFar ? `Labels: from ${100 * SMALL} % zoom` : labelsSentence(labels, measures)}
+      </span>
       {omitted ? <span>{omitted}</span> : null}
       <span className="strip-gap" />
       <WholeState />

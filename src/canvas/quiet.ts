@@ -1,4 +1,4 @@
-import type { Scene } from '../drawing/types';
+import type { Omitted, Scene } from '../drawing/types';
 import type { Quiet } from './sheetStore';
 
 export { steadyScale } from '../drawing/textScale';
@@ -14,3 +14,10 @@ export function quietAt(scene: Scene, zoom: number): Quiet {
   const all = new Set(scene.lines.map((line) => line.stream));
   return { labels: all, diamonds: all, duties: true };
 }
+
+/** Of what the scene leaves off for want of room: what would be shown at this zoom, had it room. */
+export const missed = (omitted: readonly Omitted[], { labels, duties }: Quiet): readonly Omitted[] =>
+  omitted.filter((one) => {
+    if (one.what === 'label') return !labels.has(one.stream);
+    return one.what === 'tag' || !duties;
+  });
