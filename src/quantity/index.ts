@@ -20,6 +20,7 @@ export {
   displayUnit,
   type MeasureSet,
   type Measures,
+  REFERENCE_GAS,
   type ShownQuantity,
   show,
   unitLabel,

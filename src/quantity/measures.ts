@@ -50,6 +50,14 @@ const SETS: Readonly<Record<Dimension, readonly [SI: string, metric: string, US:
   velocity: ['m/s', 'm/s', 'ft/s'],
 };
 
+/** Gas flow at a reference state, as ideal gas: the unit of each set, and the state that it stands for. */
+export const REFERENCE_GAS: Readonly<Record<MeasureSet, { readonly unit: string; readonly state: string }>> =
+  {
+    SI: { unit: 'Nm3/h', state: '0 °C and 101.325 kPa(a)' },
+    metric: { unit: 'Nm3/h', state: '0 °C and 101.325 kPa(a)' },
+    US: { unit: 'scf/h', state: '60 °F and 14.696 psi(a)' },
+  };
+
 const COLUMN: Readonly<Record<MeasureSet, 0 | 1 | 2>> = { SI: 0, metric: 1, US: 2 };
 const RAISED = '⁰¹²³⁴⁵⁶⁷⁸⁹';
 

@@ -2,9 +2,6 @@ import type { PhaseResult } from '../engine/network/types';
 import type { Dimension } from '../quantity/dimension';
 import type { SolvedStream } from './input';
 
-/** Volume of an ideal gas at 0 degC and 101325 Pa [m3/mol]: R T / P with the CODATA gas constant. */
-const NORMAL_m3_mol = (8.314462618 * 273.15) / 101325;
-
 /** One row of the stream table: what it measures and where the value comes from. */
 export interface RowRule {
   readonly key: string;
@@ -15,6 +12,8 @@ export interface RowRule {
   /** Gauge row of a pressure. */
   readonly gauge?: true;
   readonly unitLabel?: string;
+  /** As the volume of an ideal gas at the reference state of the measures; of an amount. */
+  readonly asGas?: true;
   readonly figures: number;
   readonly least: number;
   readonly most: number;
@@ -110,11 +109,12 @@ export const FLOW_ROWS: readonly RowRule[] = [
   {
     key: 'normal',
     label: 'Normal gas flow',
-    dim: 'volumeFlow',
+    dim: 'molarFlow',
+    asGas: true,
     figures: 5,
     least: 1,
     most: 5,
-    value: (s) => of('vapour', (p) => p.fraction * s.n_mol_s * NORMAL_m3_mol)(s),
+    value: (s) => of('vapour', (p) => p.fraction * s.n_mol_s)(s),
   },
   {
     key: 'standardLiquid',

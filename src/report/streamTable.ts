@@ -1,5 +1,5 @@
 import { withReference } from '../drawing/measures';
-import { displayUnit, type Measures } from '../quantity';
+import { displayUnit, type Measures, REFERENCE_GAS } from '../quantity';
 import { describeStream } from '../sketch/describe';
 import type { SketchStream } from '../sketch/types';
 import { absent, decimalsFor, number, printedValue, text } from './cells';
@@ -131,8 +131,13 @@ const secondLiquid = (stream: SolvedStream | undefined): Cell => {
   return text(hasBlock(stream, 'liquid') ? 'none found' : 'not tested');
 };
 
+const asGas = (measures: Measures): Measures => ({
+  ...measures,
+  units: { ...measures.units, molarFlow: REFERENCE_GAS[measures.set].unit },
+});
+
 function ruled(rule: RowRule, results: readonly (SolvedStream | undefined)[], measures: Measures): Row {
-  const own = rule.gauge ? withReference(measures, 'gauge') : measures;
+  const own = rule.gauge ? withReference(measures, 'gauge') : rule.asGas ? asGas(measures) : measures;
   const unit = displayUnit(rule.dim, own);
   const values = results.map((stream) => {
     const si = stream ? rule.value(stream) : undefined;
@@ -247,6 +252,6 @@ function notes(input: ReportInput, table: Pick<Table, 'columns' | 'rows'>): stri
           `Sum of printed figures differs by ${sums.join(' and by ')}: rounding. Totals come from unrounded values; no figure is adjusted.`,
         ]
       : []),
-    `Enthalpy: from the elements at 298.15 K, and from the same components as ideal gas at 25 °C; only differences mean something. Gauge pressure is above ${site.toDisplay(input.sitePressure_Pa).toPrecision(6)} ${site.label}. Normal gas: the vapour as ideal gas at 0 °C, 101.325 kPa(a). Standard liquid: 15 °C, ideal mixing of pure liquids; none with 1 ppm or more (mol) of chemicals that are gases above their critical temperature at 15 °C. “–” absent, “<0.01” a trace. Decimals are fixed row by row.`,
+    `Enthalpy: from the elements at 298.15 K, and from the same components as ideal gas at 25 °C; only differences mean something. Gauge pressure is above ${site.toDisplay(input.sitePressure_Pa).toPrecision(6)} ${site.label}. Normal gas: the vapour alone, as ideal gas at ${REFERENCE_GAS[measures.set].state}. Standard liquid: 15 °C, ideal mixing of pure liquids; none with 1 ppm or more (mol) of chemicals that are gases above their critical temperature at 15 °C. “–” absent, “<0.01” a trace. Decimals are fixed row by row.`,
   ];
 }

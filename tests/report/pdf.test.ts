@@ -71,7 +71,7 @@ function expected(stream: StreamJson, { chemicals }: ResultsJson['basis']): [str
     ['Flows/Mass flow kg/h', stream.m_kg_s * 3600],
     // Derived: ideal gas at 0 °C and 101325 Pa, 0.0224139695 m³/mol.
     [
-      'Flows/Normal gas flow m³/h',
+      'Flows/Normal gas flow Nm³/h',
       vapour && vapour.fraction * stream.n_mol_s * ((8.314462618 * 273.15) / 101325) * 3600,
     ],
     [

@@ -1,9 +1,7 @@
 import { FigureRow } from '../../parts/Figure';
 import { useMeasures, withReference } from '../../parts/measures';
-import { ABSENT, type Dimension, type Measures, show } from '../../quantity';
+import { ABSENT, type Dimension, type Measures, REFERENCE_GAS, show } from '../../quantity';
 import type { SolvedStream } from './sentence';
-
-const NORMAL_GAS = { SI: 'Nm3/h', metric: 'Nm3/h', US: 'scf/h' } as const;
 
 interface Props {
   readonly stream: SolvedStream;
@@ -25,7 +23,7 @@ export function Conditions({ stream, outOfDate }: Props) {
       <FigureRow label={label} title={title} text={text} unit={unit ?? shown.unit} outOfDate={outOfDate} />
     );
   };
-  const gas = { ...measures, units: { ...measures.units, molarFlow: NORMAL_GAS[measures.set] } };
+  const gas = { ...measures, units: { ...measures.units, molarFlow: REFERENCE_GAS[measures.set].unit } };
   return (
     <section className="section">
       <dl className="figures">
@@ -37,12 +35,9 @@ export function Conditions({ stream, outOfDate }: Props) {
         {row('Molar flow', stream.n_mol_s, 'molarFlow')}
         {row('Mass flow', stream.m_kg_s, 'massFlow')}
         {row('Volume flow, actual', stream.volume_m3_s, 'volumeFlow')}
-        {row('As gas, reference state', stream.n_mol_s, 'molarFlow', {
+        {row('All as ideal gas', stream.n_mol_s, 'molarFlow', {
           as: gas,
-          title:
-            measures.set === 'US'
-              ? 'Ideal gas at 60 °F and 14.696 psi(a)'
-              : 'Ideal gas at 0 °C and 101 325 Pa(a)',
+          title: `The whole stream, liquid too, as ideal gas at ${REFERENCE_GAS[measures.set].state}`,
         })}
         {row('As liquid, 15 °C', stream.standardLiquid_m3_s, 'volumeFlow', {
           title:
