@@ -6,6 +6,7 @@ import { guardLeaving, saveFile } from './documents';
 import { download } from './files';
 import { createHolding } from './holding';
 import { keepSketches } from './keeping';
+import { makeLasting } from './lasting';
 import { setStorage, setTakeOver } from './storage';
 import { openStored } from './stored';
 
@@ -95,7 +96,11 @@ function withoutStorage(stores: Stores, detail: string): void {
 
 function watch(stores: Stores, storage: SketchStorage): void {
   guardLeaving(stores);
-  const { takeOver } = keepSketches(stores, storage, createHolding, remember);
+  const keepForGood = makeLasting(navigator.storage);
+  const { takeOver } = keepSketches(stores, storage, createHolding, (id) => {
+    remember(id);
+    void keepForGood();
+  });
   setTakeOver(takeOver);
   storage
     .tidy(Date.now())
