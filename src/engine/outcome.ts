@@ -47,12 +47,20 @@ export type Outcome<T> =
       readonly findings: readonly [Finding, ...Finding[]];
     };
 
+/** A number seen, for a sentence's slot: SI value of the stated dimension. */
+export const saw = (name: string, value: number, dim: Dimension): Evidence => ({ name, value, dim });
+
+/** A name seen (an id, a port, what was typed), for a sentence's slot. */
+export const named = (name: string, text: string): Evidence => ({ name, value: 0, dim: 'number', text });
+
+/** An answer, with what was noticed on the way. */
 export const solved = <T>(value: T, findings: readonly Finding[] = []): Outcome<T> => ({
   state: 'solved',
   value,
   findings,
 });
 
+/** No answer: the reasons, the first of them the one that stopped the work. */
 export const noSolution = <T>(first: Finding, ...rest: Finding[]): Outcome<T> => ({
   state: 'no-solution',
   findings: [first, ...rest],

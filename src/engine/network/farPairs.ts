@@ -1,8 +1,8 @@
 import type { StreamId } from '../ids';
-import type { Evidence, Finding } from '../outcome';
+import { type Evidence, type Finding, saw } from '../outcome';
 import type { Model } from '../thermo/types';
 import { PAIR_FAR } from '../units/limits/pairs';
-import { finding, type Overrides, saw, thresholdOf } from '../units/limits/rule';
+import { finding, type Overrides, thresholdOf } from '../units/limits/rule';
 
 /** Both chemicals of a pair reach this share of a stream [-]. */
 const BOTH = 0.005;

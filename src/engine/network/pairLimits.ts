@@ -1,10 +1,10 @@
 import type { ChemicalData } from '../chemicals/types';
 import type { StreamState } from '../equilibrium/types';
 import type { StreamId } from '../ids';
-import type { Finding } from '../outcome';
+import { type Finding, named, saw } from '../outcome';
 import type { Model } from '../thermo/types';
 import { PAIR_NONE, PAIR_PREDICTED } from '../units/limits/pairs';
-import { finding, named, type Overrides, saw, thresholdOf } from '../units/limits/rule';
+import { finding, type Overrides, thresholdOf } from '../units/limits/rule';
 import { totalOf } from '../units/total';
 import { farPairs, type Shares } from './farPairs';
 

@@ -1,6 +1,6 @@
 import type { StreamState } from '../equilibrium/types';
 import type { StreamId } from '../ids';
-import type { Finding } from '../outcome';
+import { type Finding, named } from '../outcome';
 import type { KindCatalogue, PortSpec } from '../units/types';
 import type { NetworkFindingCode } from './findings';
 import type { Plan } from './plan';
@@ -67,7 +67,5 @@ export function whyNot(
 /** That a unit waits for a stream, and for whose. */
 export function waitsFor(unit: ProblemUnit, stream: StreamId, plan: Plan): Finding {
   const from = plan.units[plan.source.get(stream)!.unit]!;
-  return because('network/waits-for', { unit: unit.id, stream }, [
-    { name: 'unit', value: 0, dim: 'number', text: from.id },
-  ]);
+  return because('network/waits-for', { unit: unit.id, stream }, [named('unit', from.id)]);
 }

@@ -1,5 +1,5 @@
 import type { StreamId } from '../ids';
-import type { Finding } from '../outcome';
+import { type Finding, saw } from '../outcome';
 import { totalOf } from '../units/streams';
 import type { StreamMemory } from './memory';
 
@@ -33,10 +33,7 @@ export function severalAnswers(
       code: 'network/several-answers',
       weight: 'caution',
       at: { stream },
-      evidence: [
-        { name: 'flow', value: flow, dim: 'number' },
-        { name: 'temperature', value: kelvin, dim: 'temperatureDifference' },
-      ],
+      evidence: [saw('flow', flow, 'number'), saw('temperature', kelvin, 'temperatureDifference')],
     });
   }
   return found;

@@ -1,6 +1,6 @@
 import type { StreamState } from '../equilibrium/types';
 import type { Port } from '../ids';
-import { type Finding, noSolution, type Outcome } from '../outcome';
+import { type Finding, noSolution, type Outcome, saw } from '../outcome';
 import type { AnyKind } from '../units/solvers';
 import { atUnit } from '../units/streams';
 import type { Answer, Call } from '../units/types';
@@ -57,7 +57,7 @@ function refuseUnclosed(unit: ProblemUnit, relative: number): Finding {
     code: 'network/does-not-close',
     weight: 'beyond-limit',
     at: { unit: unit.id },
-    evidence: [{ name: 'relative', value: Number.isNaN(relative) ? -1 : relative, dim: 'number' }],
+    evidence: [saw('relative', Number.isNaN(relative) ? -1 : relative, 'number')],
   };
 }
 

@@ -1,4 +1,4 @@
-import { noSolution, type Outcome, solved } from '../outcome';
+import { named, noSolution, type Outcome, saw, solved } from '../outcome';
 import { preparePure } from '../thermo/pure/pure';
 import type { Call, CompositionSI } from './types';
 
@@ -48,7 +48,7 @@ export function airFractions(
         code: 'feed/water-data-missing',
         weight: 'beyond-limit',
         at: place,
-        evidence: [{ name: 'temperature', value: at.T, dim: 'temperature' }],
+        evidence: [saw('temperature', at.T, 'temperature')],
       });
     y_water = (air.relativeHumidity * Psat) / at.P;
     if (!(y_water < 1))
@@ -57,8 +57,8 @@ export function airFractions(
         weight: 'beyond-limit',
         at: place,
         evidence: [
-          { name: 'waterPressure', value: air.relativeHumidity * Psat, dim: 'pressure' },
-          { name: 'pressure', value: at.P, dim: 'pressure' },
+          saw('waterPressure', air.relativeHumidity * Psat, 'pressure'),
+          saw('pressure', at.P, 'pressure'),
         ],
       });
     z[air.at.H2O] = y_water;
@@ -76,5 +76,5 @@ const missing = (call: Pick<Call<unknown>, 'unit'>, formula: string): Outcome<Fl
     code: 'feed/air-component-missing',
     weight: 'beyond-limit',
     at: { unit: call.unit, path: 'composition' },
-    evidence: [{ name: 'chemical', value: 0, dim: 'number', text: formula }],
+    evidence: [named('chemical', formula)],
   });

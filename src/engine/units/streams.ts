@@ -1,6 +1,6 @@
 import { makeStream, type StreamCondition } from '../equilibrium/stream';
 import type { FlashWarm, StreamState } from '../equilibrium/types';
-import { type Finding, noSolution, type Outcome, solved } from '../outcome';
+import { type Finding, noSolution, type Outcome, saw, solved } from '../outcome';
 import type { PressureSI } from './groups';
 import { placesOf } from './present';
 import { totalOf } from './total';
@@ -97,10 +97,7 @@ export function outletPressure(
         code: 'pressure/not-positive',
         weight: 'beyond-limit',
         at: { unit: call.unit, path },
-        evidence: [
-          { name: 'pressure', value: P_Pa, dim: 'pressure' },
-          { name: 'inletPressure', value: inlet_Pa, dim: 'pressure' },
-        ],
+        evidence: [saw('pressure', P_Pa, 'pressure'), saw('inletPressure', inlet_Pa, 'pressure')],
       });
 }
 

@@ -1,6 +1,6 @@
 import type { StreamState } from '../../equilibrium/types';
 import type { StreamId, UnitId } from '../../ids';
-import type { Finding } from '../../outcome';
+import { type Finding, named, saw } from '../../outcome';
 import { totalOf } from '../../units/streams';
 import type { Answer } from '../../units/types';
 import { closureOf, worstOf } from '../closure';
@@ -142,7 +142,6 @@ function noWayOut(
     sum.leaving += leaving;
     sum.round += round;
   }
-  const name = (key: string, text: string) => ({ name: key, value: 0, dim: 'number', text }) as const;
   return {
     code: 'network/no-way-out',
     weight: 'beyond-limit',
@@ -151,12 +150,12 @@ function noWayOut(
       chemical: run.memory.model.chemicals[chemicals[0]!]!.id,
     },
     evidence: [
-      ...chemicals.map((i) => name('chemical', run.memory.model.chemicals[i]!.id)),
-      { name: 'entering', value: sum.entering, dim: 'molarFlow' },
-      { name: 'leaving', value: sum.leaving, dim: 'molarFlow' },
-      { name: 'round', value: sum.round, dim: 'molarFlow' },
-      { name: 'fraction', value: most, dim: 'fraction' },
-      ...members.map(({ unit }) => name('unit', unit.id)),
+      ...chemicals.map((i) => named('chemical', run.memory.model.chemicals[i]!.id)),
+      saw('entering', sum.entering, 'molarFlow'),
+      saw('leaving', sum.leaving, 'molarFlow'),
+      saw('round', sum.round, 'molarFlow'),
+      saw('fraction', most, 'fraction'),
+      ...members.map(({ unit }) => named('unit', unit.id)),
     ],
   };
 }

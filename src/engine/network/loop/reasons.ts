@@ -1,11 +1,10 @@
 import type { StreamId } from '../../ids';
-import type { Evidence, Finding } from '../../outcome';
+import { type Evidence, type Finding, named, saw } from '../../outcome';
 import type { ProblemUnit } from '../types';
 import type { Change } from './advance';
 import type { Ending, Loop } from './types';
 
-const named = (units: readonly ProblemUnit[]): Evidence[] =>
-  units.map((u) => ({ name: 'unit', value: 0, dim: 'number', text: u.id }));
+const namesOf = (units: readonly ProblemUnit[]): Evidence[] => units.map((u) => named('unit', u.id));
 
 /** The passes came to no end. */
 export function unsettled({ plan, members }: Loop, passes: number, change: Change | undefined): Ending {
@@ -15,9 +14,9 @@ export function unsettled({ plan, members }: Loop, passes: number, change: Chang
     weight: 'beyond-limit',
     at: { stream },
     evidence: [
-      { name: 'passes', value: passes, dim: 'number' },
-      { name: 'residual', value: change?.most ?? 1, dim: 'number' },
-      ...named(members.map((m) => m.unit)),
+      saw('passes', passes, 'number'),
+      saw('residual', change?.most ?? 1, 'number'),
+      ...namesOf(members.map((m) => m.unit)),
     ],
   };
   return { is: 'no-solution', findings: [finding] };
@@ -38,9 +37,9 @@ export function pressureFalls({ plan, members }: Loop, { tear, from_Pa, by_Pa }:
     weight: 'beyond-limit',
     at: { stream: plan.tears[tear]! },
     evidence: [
-      { name: 'fall', value: by_Pa, dim: 'pressureDifference' },
-      { name: 'pressure', value: from_Pa, dim: 'pressure' },
-      ...named(members.map((m) => m.unit)),
+      saw('fall', by_Pa, 'pressureDifference'),
+      saw('pressure', from_Pa, 'pressure'),
+      ...namesOf(members.map((m) => m.unit)),
     ],
   };
   return { is: 'no-solution', findings: [finding] };
@@ -53,7 +52,7 @@ export function nothingEnters({ plan, members }: Pick<Loop, 'plan' | 'members'>)
     code: 'network/nothing-enters',
     weight: 'beyond-limit',
     at: { stream },
-    evidence: named(members.map((m) => m.unit)),
+    evidence: namesOf(members.map((m) => m.unit)),
   };
   return { is: 'needs-value', findings: [finding] };
 }

@@ -1,8 +1,7 @@
 import { gasPlaces } from '../../chemicals/gases';
 import type { StreamState } from '../../equilibrium/types';
-import { noSolution, type Outcome, solved } from '../../outcome';
+import { named, noSolution, type Outcome, saw, solved } from '../../outcome';
 import { airFractions } from '../air';
-import { named, saw } from '../limits/rule';
 import { emptyStream, streamAt, totalOf, warmFrom } from '../streams';
 import type { Call, FlowSI } from '../types';
 import { massFlow_kg_s } from '../volume';

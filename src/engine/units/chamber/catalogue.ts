@@ -1,3 +1,4 @@
+import { named, saw } from '../../outcome';
 import { pressure } from '../groups';
 import type { KindCatalogue } from '../types';
 import { CHAMBER_FINDINGS } from './findings';
@@ -58,11 +59,7 @@ export const chamber: KindCatalogue = {
           {
             code: 'sketch/needs-one-of',
             at: { path: 'air' },
-            evidence: [
-              { name: 'known', value: 0, dim: 'number', text: AIR_KEYS.join(', ') },
-              { name: 'wanted', value: 1, dim: 'number' },
-              { name: 'given', value: 0, dim: 'number', text: '' },
-            ],
+            evidence: [named('known', AIR_KEYS.join(', ')), saw('wanted', 1, 'number'), named('given', '')],
           },
         ],
   brings: 'combustion',

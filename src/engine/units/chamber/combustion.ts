@@ -1,9 +1,8 @@
 import { type ElementCounts, sameElements } from '../../chemicals/elements';
 import { type GasKey, gasPlaces } from '../../chemicals/gases';
 import type { ChemicalData } from '../../chemicals/types';
-import { type Finding, noSolution, type Outcome, solved } from '../../outcome';
+import { type Finding, named, noSolution, type Outcome, solved } from '../../outcome';
 import type { Model } from '../../thermo/types';
-import { named } from '../limits/rule';
 import { whyNotReacting } from '../reaction/check';
 import type { Call } from '../types';
 

@@ -1,6 +1,6 @@
-import type { Finding } from '../../outcome';
+import { type Finding, saw } from '../../outcome';
 import { joiningPressure } from '../limits/joiningPressure';
-import { finding, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
 import type { Answer, Call } from '../types';
 import type { ChamberResults, ChamberSettings } from './types';
 

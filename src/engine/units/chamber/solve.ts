@@ -1,5 +1,5 @@
 import type { StreamState } from '../../equilibrium/types';
-import { type Finding, noSolution, type Outcome, solved } from '../../outcome';
+import { type Finding, noSolution, type Outcome, saw, solved } from '../../outcome';
 import { answerOf } from '../answer';
 import {
   emptyStream,
@@ -84,7 +84,7 @@ function afterFlame(
       code: 'chamber/chlorine-without-hydrogen',
       weight: 'beyond-limit',
       at: { unit: call.unit },
-      evidence: [{ name: 'water', value: -H2O, dim: 'molarFlow' }],
+      evidence: [saw('water', -H2O, 'molarFlow')],
     });
   return solved(n_mol_s);
 }

@@ -1,3 +1,4 @@
+import { named } from '../../outcome';
 import type { KindCatalogue, SettingSpec } from '../types';
 import { COLUMN_FINDINGS } from './findings';
 import { countMiss, type FixedView } from './free';
@@ -153,5 +154,5 @@ const needsStage = (port: string, path: string) =>
     code: 'column/port-without-stage',
     weight: 'beyond-limit',
     at: { port, path },
-    evidence: [{ name: 'port', value: 0, dim: 'number', text: port }],
+    evidence: [named('port', port)],
   }) as const;

@@ -1,5 +1,5 @@
 import type { AmountOf, ColumnProduct, ColumnTask, Fixing } from '../../column/types';
-import type { Evidence, Finding } from '../../outcome';
+import { type Evidence, type Finding, named, saw } from '../../outcome';
 
 /** A refusal by balances alone: which fixing (by its place in the list), and the figures that show it. */
 export interface Impossible {
@@ -63,7 +63,7 @@ function valueMisses(fixed: readonly Fixing[]): Impossible[] {
             {
               code: 'column/not-positive',
               fixing: k,
-              evidence: [{ name: 'value', value: x.value, dim: 'number' }],
+              evidence: [saw('value', x.value, 'number')],
             },
           ];
     return [];
@@ -83,9 +83,9 @@ function dutyMisses({ fixed, feeds, P_Pa }: ColumnTask): Impossible[] {
         code: 'column/duty-wrong-way',
         fixing: k,
         evidence: [
-          { name: 'end', value: 0, dim: 'number', text: x.at },
-          { name: 'asked', value: Math.abs(x.value), dim: 'power' },
-          { name: 'sense', value: 0, dim: 'number', text: x.value < 0 ? 'removed' : 'added' },
+          named('end', x.at),
+          saw('asked', Math.abs(x.value), 'power'),
+          named('sense', x.value < 0 ? 'removed' : 'added'),
         ],
       },
     ];
@@ -216,7 +216,7 @@ function purityMisses({ fixed, draws }: ColumnTask, fed: Fed): Impossible[] {
  * purity of a product by its first.
  */
 function alreadyGiven({ model, fixed }: ColumnTask): Impossible[] {
-  const seen: Evidence = { name: 'chemicals', value: model.n, dim: 'number' };
+  const seen = saw('chemicals', model.n, 'number');
   return fixed.flatMap((x, k): Impossible[] => {
     const follows =
       model.n === 1

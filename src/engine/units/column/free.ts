@@ -1,4 +1,4 @@
-import type { Finding } from '../../outcome';
+import { type Finding, named, saw } from '../../outcome';
 
 /**
  * What may be counted and compared without solving: how many quantities are free, which of those given contradict each
@@ -48,15 +48,12 @@ const refusal = (code: Finding['code'], path: string, evidence: Finding['evidenc
   evidence,
 });
 
-const number = (name: string, value: number) => ({ name, value, dim: 'number' }) as const;
-const word = (name: string, text: string) => ({ name, value: 0, dim: 'number', text }) as const;
-
 /** Too few or too many quantities for the ends; undefined when the number fits or the ends are not chosen. */
 export function countMiss(view: FixedView): Finding | undefined {
   const { fixed, free } = fixedCount(view);
   if (free === undefined || fixed === free) return undefined;
   const code = fixed < free ? 'column/fixed-too-few' : 'column/fixed-too-many';
-  return refusal(code, 'fixedBy', [number('fixed', fixed), number('free', free)]);
+  return refusal(code, 'fixedBy', [saw('fixed', fixed, 'number'), saw('free', free, 'number')]);
 }
 
 /** Items that have no place in this column: an end or a product that it does not have. */
@@ -75,11 +72,11 @@ function withoutPlace(view: FixedView): Finding[] {
             ? x.at
             : x.stage;
     if (needs === 'condenser' && !condenser)
-      found.push(refusal('column/no-such-end', path, [word('end', needs)]));
+      found.push(refusal('column/no-such-end', path, [named('end', needs)]));
     if (needs === 'reboiler' && !reboiler)
-      found.push(refusal('column/no-such-end', path, [word('end', needs)]));
+      found.push(refusal('column/no-such-end', path, [named('end', needs)]));
     if (isEndProduct(x.product) && x.product !== 'bottoms' && x.product !== topPort(view))
-      found.push(refusal('column/no-such-product', `${path}.product`, [word('port', String(x.product))]));
+      found.push(refusal('column/no-such-product', `${path}.product`, [named('port', String(x.product))]));
   });
   return found;
 }
@@ -102,12 +99,15 @@ export function conflictsOf(view: FixedView, sides = 0): Finding[] {
     if (before === undefined) seen.set(key, k);
     else
       found.push(
-        refusal('column/fixed-twice', `fixedBy.${k}`, [number('first', before + 1), number('second', k + 1)]),
+        refusal('column/fixed-twice', `fixedBy.${k}`, [
+          saw('first', before + 1, 'number'),
+          saw('second', k + 1, 'number'),
+        ]),
       );
   });
   items.forEach((x, k) => {
     if (x.fix === 'flow' && typeof x.product === 'string' && !isEndProduct(x.product))
-      found.push(refusal('column/draw-flow-given', `fixedBy.${k}`, [word('port', x.product)]));
+      found.push(refusal('column/draw-flow-given', `fixedBy.${k}`, [named('port', x.product)]));
   });
   const placeOf = (test: (x: FixedItem) => boolean): number => items.findIndex(test);
   const top = placeOf((x) => x.fix === 'flow' && x.product === topPort(view));

@@ -1,9 +1,10 @@
 import { isOneLiquid } from '../../equilibrium/miscible';
 import { makeStream } from '../../equilibrium/stream';
-import type { Finding } from '../../outcome';
+import { type Finding, named, saw } from '../../outcome';
 import { joiningPressure } from '../limits/joiningPressure';
-import { finding, named, saw, thresholdOf } from '../limits/rule';
+import { finding, thresholdOf } from '../limits/rule';
 import { utilityLevels } from '../limits/utilities';
+import { richestOf } from '../present';
 import type { Answer, Call, SiteSI } from '../types';
 import { topPort } from './free';
 import type { ColumnResults, Profile } from './results';
@@ -258,17 +259,7 @@ function secondLiquid(seen: Seen): Finding[] {
     const state = makeStream(model, n, { T_K, P_Pa: 1.001 * P_Pa }, call.work);
     const other = state.state === 'solved' ? state.value.hiddenLiquid : undefined;
     if (!other) continue;
-    let most = 0;
-    other.forEach((v, i) => {
-      if (v > other[most]!) most = i;
-    });
-    const chemical = {
-      name: 'chemical',
-      value: other[most]!,
-      dim: 'fraction',
-      text: model.chemicals[most]!.id,
-    } as const;
-    const evidence = [chemical, named('place', placeWord(place))];
+    const evidence = [richestOf(other, model), named('place', placeWord(place))];
     return [finding(SECOND_LIQUID, atPlace(call, place), evidence, call.limits)];
   }
   return [];

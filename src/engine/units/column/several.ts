@@ -1,7 +1,7 @@
 import type { StageSystem } from '../../column/system';
 import { productFlow, weightsOf } from '../../column/targets';
 import type { Fixing } from '../../column/types';
-import type { Finding } from '../../outcome';
+import { type Finding, named, saw } from '../../outcome';
 import type { Call } from '../types';
 import type { ColumnSettings } from './settings';
 import { type ColumnJob, nameOfPlace } from './task';
@@ -52,8 +52,8 @@ export function severalAnswers(
           dim: 'fraction',
           text: call.model.chemicals[job.present[x.chemical]!]!.id,
         },
-        { name: 'flow', value: flow, dim: 'molarFlow' },
-        { name: 'branch', value: 0, dim: 'number', text: rises ? 'smaller' : 'larger' },
+        saw('flow', flow, 'molarFlow'),
+        named('branch', rises ? 'smaller' : 'larger'),
         {
           name: 'product',
           value: 0,
@@ -105,8 +105,8 @@ function anotherPossible(call: Call<ColumnSettings>, { task }: ColumnJob, s: Sta
           dim: 'number',
           text: task.fixed[k]!.fix === 'temperature' ? 'stage temperature' : 'purity',
         },
-        { name: 'refluxRatio', value: s.L[0]! / flow, dim: 'number' },
-        { name: 'flow', value: flow, dim: 'molarFlow' },
+        saw('refluxRatio', s.L[0]! / flow, 'number'),
+        saw('flow', flow, 'molarFlow'),
       ],
     },
   ];
@@ -119,8 +119,8 @@ function fallingTemperature(call: Call<ColumnSettings>, s: StageSystem, k: numbe
     weight: 'note',
     at: { unit: call.unit, path: `fixedBy.${k}` },
     evidence: [
-      { name: 'place', value: 0, dim: 'number', text: typeof at === 'number' ? `stage ${at}` : `the ${at}` },
-      { name: 'flow', value: totalOf(s, 'top'), dim: 'molarFlow' },
+      named('place', typeof at === 'number' ? `stage ${at}` : `the ${at}`),
+      saw('flow', totalOf(s, 'top'), 'molarFlow'),
     ],
   };
 }

@@ -6,7 +6,8 @@ import { dutyOf } from '../../column/targets';
 import type { ColumnState, ColumnTask } from '../../column/types';
 import { type ColumnWork, workFor } from '../../column/work';
 import { makeStream } from '../../equilibrium/stream';
-import { type Evidence, type Finding, noSolution, type Outcome, solved } from '../../outcome';
+import { type Evidence, type Finding, named, noSolution, type Outcome, saw, solved } from '../../outcome';
+import { richestOf } from '../present';
 import { mixed } from '../streams';
 import type { Answer, Call, UnitKind } from '../types';
 import { fedVapour, impossibleBy } from './feasible';
@@ -34,9 +35,7 @@ function refusals(call: Call<ColumnSettings>): Finding[] {
   const without = sides
     .filter((port) => !call.outPorts.includes(port))
     .map((port) =>
-      refuse(call, 'column/side-without-stream', { port, path: `sides.${port}` }, [
-        { name: 'port', value: 0, dim: 'number', text: port },
-      ]),
+      refuse(call, 'column/side-without-stream', { port, path: `sides.${port}` }, [named('port', port)]),
     );
   const found = [...conflictsOf(settings, sides.length), ...(count ? [count] : [])];
   return [...found.map((f) => ({ ...f, at: { unit: call.unit, ...f.at } })), ...without];
@@ -69,12 +68,6 @@ function warmState(call: Call<ColumnSettings>, job: ColumnJob, work: ColumnWork)
 const totalFed = ({ feeds }: ColumnTask): number =>
   feeds.reduce((sum, f) => sum + f.n_mol_s.reduce((a, b) => a + b, 0), 0);
 
-const evidence = (name: string, value: number, dim: Evidence['dim'] = 'number'): Evidence => ({
-  name,
-  value,
-  dim,
-});
-
 const wordOf = (place: PlaceSI): string => (typeof place === 'number' ? `stage ${place}` : `the ${place}`);
 
 /** Why a column that might have an answer has none, with what was tried. */
@@ -85,29 +78,19 @@ function reason(
 ): Finding[] {
   const { failure, effort } = end;
   const stage = nameOfPlace(call.settings, failure.place);
-  const where: Evidence = {
-    name: 'place',
-    value: 0,
-    dim: 'number',
-    text: wordOf(stage),
-  };
-  const tried: Evidence[] = [...new Set(effort.tried)].map((text) => ({
-    name: 'tried',
-    value: 0,
-    dim: 'number',
-    text,
-  }));
+  const where = named('place', wordOf(stage));
+  const tried = [...new Set(effort.tried)].map((text) => named('tried', text));
   const at = typeof stage === 'number' ? { stage } : {};
-  const steps = evidence('iterations', effort.iterations);
+  const steps = saw('iterations', effort.iterations, 'number');
   const code = CODES[failure.why];
   const found: Finding[] = [];
   if (failure.why === 'out-of-reach') {
     const path = failure.fixing === undefined ? {} : { path: `fixedBy.${failure.fixing}` };
     found.push(refuse(call, code, path, [...reached(job.task, failure), steps, where, ...tried]));
   } else {
-    const phase: Evidence = { name: 'phase', value: 0, dim: 'number', text: failure.phase ?? 'vapour' };
+    const phase = named('phase', failure.phase ?? 'vapour');
     found.push(
-      refuse(call, code, at, [where, phase, evidence('residual', failure.residual), steps, ...tried]),
+      refuse(call, code, at, [where, phase, saw('residual', failure.residual, 'number'), steps, ...tried]),
     );
   }
   const vapour = carriedShort(job.task);
@@ -117,7 +100,7 @@ function reason(
 
 /** What was asked and what was reached instead, each in its own dimension. */
 function reached(task: ColumnTask, { fixing, reached: have, way }: Failure): Evidence[] {
-  const share = evidence('way', way ?? 0, 'fraction');
+  const share = saw('way', way ?? 0, 'fraction');
   const x = fixing === undefined ? undefined : task.fixed[fixing];
   if (!x || have === undefined) return [share];
   const [wanted, dim] = ((): readonly [number, Evidence['dim']] => {
@@ -136,7 +119,7 @@ function reached(task: ColumnTask, { fixing, reached: have, way }: Failure): Evi
         return [x.value, 'number'];
     }
   })();
-  return [evidence('asked', wanted, dim), evidence('reached', have, dim), share];
+  return [saw('asked', wanted, dim), saw('reached', have, dim), share];
 }
 
 const CODES: Readonly<Record<Failure['why'], Finding['code']>> = {
@@ -151,17 +134,7 @@ const feedsInTwoLiquids = (call: Call<ColumnSettings>, { feedPorts }: ColumnJob)
   feedPorts.flatMap((port) => {
     const other = call.in[port]!.hiddenLiquid;
     if (!other) return [];
-    let most = 0;
-    other.forEach((x, i) => {
-      if (x > other[most]!) most = i;
-    });
-    const chemical: Evidence = {
-      name: 'chemical',
-      value: other[most]!,
-      dim: 'fraction',
-      text: call.model.chemicals[most]!.id,
-    };
-    return [refuse(call, 'column/feed-in-two-liquids', { port }, [chemical])];
+    return [refuse(call, 'column/feed-in-two-liquids', { port }, [richestOf(other, call.model)])];
   });
 
 /** What is fed has no two phases at the pressure of its stage: the column stands above the critical point of its feed. */
@@ -172,7 +145,7 @@ function feedOfOnePhase(call: Call<ColumnSettings>, { task }: ColumnJob): Findin
   const made = makeStream(call.model, n_mol_s, at, call.work);
   if (made.state === 'solved' || made.findings[0].code !== 'equilibrium/no-such-state') return [];
   const where = nameOfPlace(call.settings, place);
-  const seen: Evidence = { name: 'place', value: 0, dim: 'number', text: wordOf(where) };
+  const seen = named('place', wordOf(where));
   return [refuse(call, 'column/one-phase', { path: 'pressure' }, [seen])];
 }
 
@@ -189,9 +162,7 @@ function carriedShort(task: ColumnTask): Evidence[] | undefined {
   if (ratio?.fix !== 'refluxRatio' || flow?.fix !== 'flow') return undefined;
   const carried = flow.flow.value * (1 + ratio.value);
   const fed = fedVapour(task);
-  return fed > carried
-    ? [evidence('fed', fed, 'molarFlow'), evidence('carried', carried, 'molarFlow')]
-    : undefined;
+  return fed > carried ? [saw('fed', fed, 'molarFlow'), saw('carried', carried, 'molarFlow')] : undefined;
 }
 
 function answer(

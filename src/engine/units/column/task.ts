@@ -1,7 +1,7 @@
 import type { AmountOf, ColumnDraw, ColumnFeed, ColumnProduct, ColumnTask, Fixing } from '../../column/types';
 import type { StreamState } from '../../equilibrium/types';
 import type { Port } from '../../ids';
-import { type Finding, noSolution, type Outcome, solved } from '../../outcome';
+import { type Finding, named, noSolution, type Outcome, saw, solved } from '../../outcome';
 import { mixed } from '../streams';
 import type { Call, FlowSI } from '../types';
 import { topPort } from './free';
@@ -25,9 +25,6 @@ export const refuse = (
   at: Omit<Finding['at'], 'unit'>,
   evidence: Finding['evidence'] = [],
 ): Finding => ({ code, weight: 'beyond-limit', at: { unit: call.unit, ...at }, evidence });
-
-const word = (name: string, text: string) => ({ name, value: 0, dim: 'number', text }) as const;
-const number = (name: string, value: number) => ({ name, value, dim: 'number' }) as const;
 
 /** Index of a place, counted from the top; undefined where the column has none such. */
 export function placeOf(s: ColumnSettings, place: PlaceSI): number | undefined {
@@ -92,7 +89,7 @@ function productOf(port: Port, { call, drawPorts, bad }: Reading, path: string):
   if (port === 'bottoms') return 'bottoms';
   if (port === topPort(call.settings)) return 'top';
   const draw = drawPorts.indexOf(port);
-  if (draw < 0) bad.push(refuse(call, 'column/no-such-product', { path }, [word('port', port)]));
+  if (draw < 0) bad.push(refuse(call, 'column/no-such-product', { path }, [named('port', port)]));
   return Math.max(draw, 0);
 }
 
@@ -101,7 +98,7 @@ function chemicalOf(index: number, { call, present, bad }: Reading, path: string
   if (at < 0)
     bad.push(
       refuse(call, 'column/chemical-absent', { path, chemical: call.model.chemicals[index]!.id }, [
-        word('chemical', call.model.chemicals[index]!.id),
+        named('chemical', call.model.chemicals[index]!.id),
       ]),
     );
   return Math.max(at, 0);
@@ -111,8 +108,8 @@ function stageOf(place: PlaceSI, { call, bad }: Reading, at: Omit<Finding['at'],
   const j = placeOf(call.settings, place);
   if (j === undefined) {
     const code = typeof place === 'number' ? 'column/no-such-stage' : 'column/no-such-end';
-    const seen = typeof place === 'number' ? number('stage', place) : word('end', place);
-    bad.push(refuse(call, code, at, [seen, number('stages', call.settings.stages)]));
+    const seen = typeof place === 'number' ? saw('stage', place, 'number') : named('end', place);
+    bad.push(refuse(call, code, at, [seen, saw('stages', call.settings.stages, 'number')]));
   }
   return j ?? 0;
 }
@@ -183,9 +180,7 @@ export function jobOf(call: Call<ColumnSettings>): Outcome<ColumnJob> {
   const bad = P_Pa.findIndex((P) => !(P > 0));
   if (bad >= 0)
     r.bad.push(
-      refuse(call, 'pressure/not-positive', { path: 'pressure' }, [
-        { name: 'pressure', value: P_Pa[bad]!, dim: 'pressure' },
-      ]),
+      refuse(call, 'pressure/not-positive', { path: 'pressure' }, [saw('pressure', P_Pa[bad]!, 'pressure')]),
     );
   const feedPorts = Object.keys(call.in)
     .sort()
@@ -195,7 +190,7 @@ export function jobOf(call: Call<ColumnSettings>): Outcome<ColumnJob> {
     if (stage === undefined)
       r.bad.push(
         refuse(call, 'column/port-without-stage', { port, path: `feeds.${port}.stage` }, [
-          word('port', port),
+          named('port', port),
         ]),
       );
     const place = stage === undefined ? 0 : stageOf(stage, r, { port, path: `feeds.${port}.stage` });

@@ -1,6 +1,6 @@
 import type { StreamState } from '../../equilibrium/types';
 import { bracketedRoot } from '../../numerics/root';
-import { type Finding, type FindingCode, noSolution, type Outcome, solved } from '../../outcome';
+import { type Finding, type FindingCode, noSolution, type Outcome, saw, solved } from '../../outcome';
 import { R_J_molK } from '../../thermo/types';
 import { answerOf } from '../answer';
 import { emptyStream, outletPressure, streamAt, warmFrom, warmOf } from '../streams';
@@ -29,10 +29,7 @@ const refused = <T>(call: Call<MachineSettings>, code: FindingCode, e: Entering,
     code,
     weight: 'beyond-limit',
     at: { unit: call.unit, path: 'p.T' },
-    evidence: [
-      { name: 'temperature', value: T_K, dim: 'temperature' },
-      { name: 'inletTemperature', value: e.stream.T_K, dim: 'temperature' },
-    ],
+    evidence: [saw('temperature', T_K, 'temperature'), saw('inletTemperature', e.stream.T_K, 'temperature')],
   });
 
 /** ln of the pressure ratio that an ideal gas of the inlet's heat capacity needs for a temperature; a start value. */

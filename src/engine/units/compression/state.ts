@@ -1,5 +1,5 @@
 import type { FlashWarm, StreamState } from '../../equilibrium/types';
-import { noSolution, type Outcome, solved } from '../../outcome';
+import { noSolution, type Outcome, saw, solved } from '../../outcome';
 import type { ThermoModel } from '../../thermo/types';
 import { placesOf } from '../present';
 import { streamAt, totalOf, type WarmState, warmFrom, warmOf } from '../streams';
@@ -182,7 +182,7 @@ function polytropicTo(
       code: 'compression/path-breaks-off',
       weight: 'beyond-limit',
       at: { unit: call.unit, path: 'efficiency.polytropic' },
-      evidence: [{ name: 'pressure', value: P_Pa, dim: 'pressure' }],
+      evidence: [saw('pressure', P_Pa, 'pressure')],
     });
   return outAt(call, e, P_Pa, H_W, warm);
 }

@@ -1,8 +1,8 @@
 import type { StreamState } from '../../equilibrium/types';
-import type { Finding } from '../../outcome';
+import { type Finding, saw } from '../../outcome';
 import type { Model } from '../../thermo/types';
 import type { MachineResults, MachineSettings } from '../compression/types';
-import { finding, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
 import { totalOf } from '../total';
 import type { Answer, Call } from '../types';
 import { massFlow_kg_s } from '../volume';

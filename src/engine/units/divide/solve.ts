@@ -1,6 +1,6 @@
 import type { StreamState } from '../../equilibrium/types';
 import type { Port } from '../../ids';
-import { type Finding, noSolution, type Outcome, solved } from '../../outcome';
+import { type Finding, noSolution, type Outcome, saw, solved } from '../../outcome';
 import { answerOf } from '../answer';
 import { scaledStream, totalOf } from '../streams';
 import type { Answer, Call, FlowSI, UnitKind } from '../types';
@@ -48,13 +48,13 @@ function shares(call: Call<DivideSettings>, inlet: StreamState): Record<Port, nu
     if (nothing && flow.is !== 'share' && (flow.is === 'molar' ? flow.n_mol_s : flow.m_kg_s) > 0)
       return { code: 'divide/flow-from-nothing', port };
     const share = nothing ? 0 : shareOf(flow, inlet, call);
-    const evidence = [{ name: 'share', value: share, dim: 'fraction' }] as const;
+    const evidence = [saw('share', share, 'fraction')] as const;
     if (!(share >= 0)) return { code: 'divide/share-below-zero', port, evidence };
     found[port] = share;
     sum += share;
   }
   if (sum > 1 + 1e-12)
-    return { code: 'divide/shares-above-whole', evidence: [{ name: 'share', value: sum, dim: 'fraction' }] };
+    return { code: 'divide/shares-above-whole', evidence: [saw('share', sum, 'fraction')] };
   found[taker] = Math.max(0, 1 - sum);
   return found;
 }

@@ -1,6 +1,6 @@
-import type { Finding } from '../../outcome';
+import { type Finding, named, saw } from '../../outcome';
 import { joiningPressure } from '../limits/joiningPressure';
-import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
 import { utilityLevels } from '../limits/utilities';
 import type { Answer, Call, SiteSI } from '../types';
 import type { DrumResults, DrumSettings } from './types';

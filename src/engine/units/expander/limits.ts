@@ -1,6 +1,6 @@
-import type { Finding } from '../../outcome';
+import { type Finding, saw } from '../../outcome';
 import type { MachineResults, MachineSettings } from '../compression/types';
-import { finding, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
 import type { Answer, Call } from '../types';
 
 /** Power that goes into the expander [W]. */

@@ -1,6 +1,6 @@
-import type { Finding } from '../../outcome';
+import { type Finding, saw } from '../../outcome';
 import { joiningPressure } from '../limits/joiningPressure';
-import { finding, type Rule, saw, thresholdOf } from '../limits/rule';
+import { finding, type Rule, thresholdOf } from '../limits/rule';
 import { utilityLevels } from '../limits/utilities';
 import type { Answer, Call, SiteSI } from '../types';
 import type { HeatedResults, HeatedSettings } from './types';

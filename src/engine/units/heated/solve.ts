@@ -1,6 +1,6 @@
 import type { StreamCondition } from '../../equilibrium/stream';
 import type { StreamState } from '../../equilibrium/types';
-import { noSolution, type Outcome, solved } from '../../outcome';
+import { noSolution, type Outcome, saw, solved } from '../../outcome';
 import { answerOf } from '../answer';
 import { emptyStream, outletPressure, streamAt, warmFrom } from '../streams';
 import type { Answer, Call } from '../types';
@@ -33,7 +33,7 @@ function wantTemperature(
     code: 'temperature/not-positive',
     weight: 'beyond-limit',
     at: { unit: call.unit, path },
-    evidence: [{ name: 'temperature', value: T_K, dim: 'temperature' }],
+    evidence: [saw('temperature', T_K, 'temperature')],
   });
 }
 

@@ -1,7 +1,7 @@
 import type { StreamState } from '../../equilibrium/types';
 import type { Port, UnitId } from '../../ids';
-import type { Finding } from '../../outcome';
-import { finding, type Overrides, rule, saw, thresholdOf } from './rule';
+import { type Finding, saw } from '../../outcome';
+import { finding, type Overrides, rule, thresholdOf } from './rule';
 
 /** How far below a unit's pressure a stream may enter it [Pa]. */
 export const ENTERS_BELOW = rule(

@@ -1,5 +1,13 @@
 import type { Dimension } from '../../../quantity/dimension';
-import type { Evidence, Finding, FindingCode, Place, Weight } from '../../outcome';
+import {
+  type Evidence,
+  type Finding,
+  type FindingCode,
+  named,
+  type Place,
+  saw,
+  type Weight,
+} from '../../outcome';
 
 /**
  * What a threshold rests on; the words stand in wording/. Figures of named documents that nobody has looked up count as common
@@ -37,12 +45,6 @@ export const rule = (
 
 /** The threshold in force [SI]. */
 export const thresholdOf = (r: Rule, overrides: Overrides): number => overrides?.[r.code] ?? r.threshold;
-
-/** A number seen, for a sentence's slot. */
-export const saw = (name: string, value: number, dim: Dimension): Evidence => ({ name, value, dim });
-
-/** A name seen (an id, a port), for a sentence's slot. */
-export const named = (name: string, text: string): Evidence => ({ name, value: 0, dim: 'number', text });
 
 /** The finding of a broken rule: what was seen, then the threshold in force ('limit') and the key of its basis ('basis'). */
 export const finding = (

@@ -1,10 +1,10 @@
 import type { StreamState } from '../../equilibrium/types';
 import type { UnitId } from '../../ids';
-import type { Finding } from '../../outcome';
+import { type Finding, named, saw } from '../../outcome';
 import type { Model } from '../../thermo/types';
 import { totalOf } from '../total';
 import type { SiteSI } from '../types';
-import { finding, named, type Overrides, type Rule, rule, saw, thresholdOf } from './rule';
+import { finding, type Overrides, type Rule, rule, thresholdOf } from './rule';
 
 const degC = (t: number): number => t + 273.15;
 

@@ -1,6 +1,6 @@
-import type { Finding } from '../../outcome';
+import { type Finding, named, saw } from '../../outcome';
 import { fuelShareOfLimit } from '../limits/flammable';
-import { finding, named, rule, saw, thresholdOf } from '../limits/rule';
+import { finding, rule, thresholdOf } from '../limits/rule';
 import type { Call } from '../types';
 import type { ProductSettings } from './types';
 

@@ -1,7 +1,6 @@
 import { molarMass_g_mol } from '../../chemicals/elements';
 import type { ChemicalData } from '../../chemicals/types';
-import type { Finding, FindingCode } from '../../outcome';
-import { named, saw } from '../limits/rule';
+import { type Finding, type FindingCode, named, saw } from '../../outcome';
 import type { Call } from '../types';
 
 /** Molar mass and formula of a chemical that reacts agree within this [-]: mass would not close otherwise. */

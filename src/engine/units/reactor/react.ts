@@ -1,6 +1,5 @@
 import type { ChemicalData } from '../../chemicals/types';
-import { type Finding, noSolution, type Outcome, solved } from '../../outcome';
-import { named, saw } from '../limits/rule';
+import { type Finding, named, noSolution, type Outcome, saw, solved } from '../../outcome';
 import { whyNotReacting } from '../reaction/check';
 import type { Call } from '../types';
 

@@ -1,5 +1,6 @@
-import type { Finding } from '../../outcome';
-import { finding, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { type Finding, saw } from '../../outcome';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
+import { richestOf } from '../present';
 import { CAS_CO2, CAS_WATER, flowing, fractionByCas, type StreamContext } from './context';
 
 const COLD = rule('stream/cold-steel', 'caution', 273.15 - 29, 'temperature');
@@ -93,15 +94,6 @@ export function nearCritical({ stream, overrides, at, model }: StreamContext): F
  */
 export function secondLiquid({ stream, overrides, at, model }: StreamContext): Finding[] {
   if (!stream.hiddenLiquid) return [];
-  let most = 0;
-  stream.hiddenLiquid.forEach((x, i) => {
-    if (x > stream.hiddenLiquid![most]!) most = i;
-  });
-  const seen = {
-    name: 'chemical',
-    value: stream.hiddenLiquid[most]!,
-    dim: 'fraction',
-    text: model.chemicals[most]!.id,
-  } as const;
+  const seen = richestOf(stream.hiddenLiquid, model);
   return [finding(stream.liquidsTogether ? LIQUIDS_TOGETHER : SECOND_LIQUID, at, [seen], overrides)];
 }

@@ -1,7 +1,7 @@
 import type { ChemicalData, CorrProperty } from '../../chemicals/types';
-import type { Finding } from '../../outcome';
+import { type Finding, named, saw } from '../../outcome';
 import { outside_K } from '../../thermo/pure/curve';
-import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
 import { totalOf } from '../total';
 import { flowing, type StreamContext } from './context';
 

@@ -1,6 +1,6 @@
-import type { Finding } from '../../outcome';
+import { type Finding, named, saw } from '../../outcome';
 import { fuelShareOfLimit } from '../limits/flammable';
-import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
 import type { StreamContext } from './context';
 
 /** Fuel as a share of its lower flammability limit, in a gas with at least this much oxygen. */

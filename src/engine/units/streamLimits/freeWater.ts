@@ -1,6 +1,6 @@
-import type { Finding } from '../../outcome';
+import { type Finding, saw } from '../../outcome';
 import { R_J_molK } from '../../thermo/types';
-import { finding, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
 import { CAS_WATER, flowing, type StreamContext } from './context';
 
 /** Water in a hydrocarbon liquid as a multiple of what dissolves. */

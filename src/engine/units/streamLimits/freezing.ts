@@ -1,5 +1,5 @@
-import type { Finding } from '../../outcome';
-import { finding, named, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { type Finding, named, saw } from '../../outcome';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
 import { CAS_CO2, CAS_WATER, flowing, fractionOf, type StreamContext } from './context';
 
 /** Thresholds are mole fractions in the liquid, of the whole for water and carbon dioxide. */

@@ -1,5 +1,5 @@
-import type { Finding } from '../../outcome';
-import { finding, type Rule, rule, saw, thresholdOf } from '../limits/rule';
+import { type Finding, saw } from '../../outcome';
+import { finding, type Rule, rule, thresholdOf } from '../limits/rule';
 import type { Answer, Call } from '../types';
 import type { ValveResults, ValveSettings } from './types';
 
