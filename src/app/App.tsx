@@ -1,4 +1,4 @@
-import { useEffect, useMemo, useState } from 'react';
+import { useEffect, useMemo } from 'react';
 import { Balance } from '../balance/Balance';
 import { Sheet } from '../canvas/Sheet';
 import { Shelf } from '../canvas/Shelf';
@@ -12,11 +12,11 @@ import { actions } from './actions';
 import { Bar } from './Bar';
 import { bankIndex } from './bankIndex';
 import { Dialogue } from './Dialogue';
-import { dropFiles } from './documents';
 import { DocumentsPage } from './export/DocumentsPage';
 import { UnderWayList } from './export/UnderWayList';
 import { cancelNewest } from './export/underWay';
 import { FindDialogue } from './find/FindDialogue';
+import { isTyping } from './isTyping';
 import { KeyList } from './KeyList';
 import { MySketches } from './MySketches';
 import { Notice, Update } from './Notice';
@@ -25,12 +25,10 @@ import { Start } from './Start';
 import { SummaryPage } from './SummaryPage';
 import { ShareDialogue } from './share/ShareDialogue';
 import { applyTheme } from './theme';
+import { useFileDrop } from './useFileDrop';
 import './theme.css';
 import './layout.css';
 import './sketches.css';
-
-const isTyping = (target: EventTarget | null): boolean =>
-  target instanceof HTMLElement && target.closest('input, textarea, select, [contenteditable]') !== null;
 
 /** Keys of all actions; a field keeps its own keys, a dialogue keeps them all. */
 function useKeys(stores: Stores): void {
@@ -50,35 +48,6 @@ function useKeys(stores: Stores): void {
     window.addEventListener('keydown', press);
     return () => window.removeEventListener('keydown', press);
   }, [stores]);
-}
-
-/** A file dropped anywhere on the page is opened; while it hangs over the page, the page says so. True: one hangs there. */
-function useFileDrop(stores: Stores): boolean {
-  const [hangs, setHangs] = useState(false);
-  useEffect(() => {
-    const isFile = (event: DragEvent): boolean => event.dataTransfer?.types.includes('Files') ?? false;
-    const over = (event: DragEvent): void => {
-      event.preventDefault();
-      setHangs(isFile(event));
-    };
-    const leave = (event: DragEvent): void => {
-      if (event.relatedTarget === null) setHangs(false);
-    };
-    const drop = (event: DragEvent): void => {
-      event.preventDefault();
-      setHangs(false);
-      if (event.dataTransfer) void dropFiles(stores, event.dataTransfer.files);
-    };
-    window.addEventListener('dragover', over);
-    window.addEventListener('dragleave', leave);
-    window.addEventListener('drop', drop);
-    return () => {
-      window.removeEventListener('dragover', over);
-      window.removeEventListener('dragleave', leave);
-      window.removeEventListener('drop', drop);
-    };
-  }, [stores]);
-  return hangs;
 }
 
 function Over() {
