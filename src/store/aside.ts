@@ -1,4 +1,4 @@
-import type { Shown } from './resultsStore';
+import type { Shown } from './shown';
 
 /**
  * Solved results of an earlier edit that are shown as out of date for as long as the newer answer is missing. What the last

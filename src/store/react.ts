@@ -4,8 +4,9 @@ import type { StreamId, UnitId } from '../engine/ids';
 import type { StreamResult, UnitResult } from '../engine/network/types';
 import type { SketchStream, SketchUnit } from '../sketch/types';
 import type { CompiledState, CompiledStore } from './compiledStore';
-import type { ResultsState, ResultsStore, Shown } from './resultsStore';
+import type { ResultsState, ResultsStore } from './resultsStore';
 import type { Session, SessionState } from './session';
+import type { Shown } from './shown';
 import type { SketchState, SketchStore } from './sketchStore';
 
 /** The page's stores, made once by the app and handed down by context; tests make their own. */

@@ -3,13 +3,7 @@ import type { StreamId, UnitId } from '../engine/ids';
 import type { Closure, LoopProgress, SolveBatch, StreamResult, UnitResult } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
 import { makeAside } from './aside';
-
-/** The latest word on a stream or unit, and the last solved result where the latest has none to show. */
-export interface Shown<T> {
-  readonly latest: T;
-  /** An older solved result, shown as out of date while the new one is missing. Never beside 'no solution'. */
-  readonly older?: T;
-}
+import type { Shown } from './shown';
 
 export interface ResultsState {
   readonly streams: ReadonlyMap<StreamId, Shown<StreamResult>>;

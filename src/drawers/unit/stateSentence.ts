@@ -1,7 +1,8 @@
 import type { UnitClosure, UnitResult } from '../../engine/network/types';
 import type { Finding } from '../../engine/outcome';
 import { displayUnit, formatDifference, type Measures } from '../../quantity';
-import { drawnState, type Shown } from '../../store/resultsStore';
+import { drawnState } from '../../store/resultsStore';
+import type { Shown } from '../../store/shown';
 import type { Said } from '../../wording';
 
 /** How a unit stands, in one sentence: the state's word, then the reason. */
