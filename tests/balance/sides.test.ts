@@ -6,7 +6,7 @@ import type { StreamId, UnitId } from '../../src/engine/ids';
 import type { Basis, StreamResult, UnitResult } from '../../src/engine/network/types';
 import { CATALOGUE } from '../../src/engine/units/catalogue';
 import type { SketchStream, SketchUnit } from '../../src/sketch/types';
-import type { Shown } from '../../src/store/resultsStore';
+import type { Shown } from '../../src/store/shown';
 
 // Invented figures; each side is added up by hand.
 const unit = (id: string, kind: string): SketchUnit => ({
