@@ -124,6 +124,17 @@ describe('units', () => {
     expect(levels).toEqual(level === undefined ? [] : [level]);
   });
 
+  test('cracking is said of what holds organics, and of no gas without them', () => {
+    const hot = (...x: number[]) => [
+      feed({ T: 300, P: 2e5 }, ...x),
+      unit('u heater in=a > out=b', { p: { drop: 0 }, T: 650 }),
+    ];
+    // Nitrogen, oxygen, methane, hexane.
+    const levels = (...x: number[]) => codes(air, hot(...x)).filter((c) => c.startsWith('heating/'));
+    expect(levels(0.79, 0.21, 0, 0)).toEqual(['heating/above-high-pressure-steam']);
+    expect(levels(0.9, 0, 0, 0.1)).toEqual(['heating/cracks']);
+  });
+
   test('cooling water is the site’s', () => {
     const units = [
       feed({ T: 380, P: 12e5 }, ...equal),
@@ -131,6 +142,19 @@ describe('units', () => {
     ];
     const site = { pressure_Pa: 101325, ambient_K: 293.15, coolingWater_K: 288.15 };
     expect(codes(hydrocarbons, units, { site })).not.toContain('cooling/below-cooling-water');
+  });
+
+  test('a reactor is hot on purpose', async () => {
+    const gases = await basisOf(['methane', 'water', 'carbon-monoxide', 'hydrogen']);
+    const nu = [-1, -1, 1, 3].map((value, chemical) => ({ chemical, value }));
+    const reactions = [{ stoichiometry: nu, of: 0, conversion: 0.7 }];
+    const units = [
+      feed({ T: 773.15, P: 20e5 }, 1, 3, 0, 0),
+      unit('r reactor in1=a > out=b', { reactions, p: { drop: 0 }, h: { T: 1073.15 } }),
+    ];
+    expect(codes(gases, units).filter((c) => c.startsWith('heating/'))).toEqual([
+      'heating/above-high-pressure-steam',
+    ]);
   });
 
   test('dienes are not heated above 110 degC without a word', () => {

@@ -34,7 +34,7 @@ export const pump: KindWords = {
     'pump/low-suction-head': {
       title: 'Low NPSH available',
       says: 'NPSH available is {head}, below {limit}; the bubble pressure at the inlet is {bubblePressure}.',
-      next: 'Set the static head above the pump, or cool the liquid before it.',
+      next: 'Set the static head above the pump, or more of it, or cool the liquid before it.',
     },
     'pump/static-head-only': {
       title: 'NPSH available: static head only',

@@ -28,9 +28,10 @@ const COOLING: readonly Rule[] = [
   rule('cooling/below-cooling-water', 'caution', 10, 'temperatureDifference'),
   rule('cooling/below-air', 'note', degC(50), 'temperature'),
 ];
+const CRACKS = rule('heating/cracks', 'beyond-limit', degC(350), 'temperature');
 /** From the hottest level down. */
 const HEATING: readonly Rule[] = [
-  rule('heating/cracks', 'beyond-limit', degC(350), 'temperature'),
+  CRACKS,
   rule('heating/above-high-pressure-steam', 'caution', degC(235), 'temperature'),
   rule('heating/above-medium-pressure-steam', 'note', degC(170), 'temperature'),
   rule('heating/above-low-pressure-steam', 'note', degC(135), 'temperature'),
@@ -42,6 +43,15 @@ export const UTILITY_RULES: readonly Rule[] = [...COOLING, ...HEATING, POLYMERIS
 
 /** Dienes and styrenes, by CAS number where the family alone does not tell. */
 const STYRENES = new Set(['100-42-5', '98-83-9']);
+
+/** Whether something is there that may crack: carbon with hydrogen, or what has no formula, above a trace of 0.01 mol %. */
+function holdsOrganics(stream: StreamState, model: Model): boolean {
+  const least = 1e-4 * totalOf(stream.n_mol_s);
+  return model.chemicals.some(
+    ({ elements }, i) =>
+      stream.n_mol_s[i]! > least && (!elements || ((elements.C ?? 0) > 0 && (elements.H ?? 0) > 0)),
+  );
+}
 
 /** The first present chemical that polymerises when warm, above a trace of 0.01 mol %. */
 function polymerising(stream: StreamState, model: Model): string | undefined {
@@ -59,6 +69,7 @@ function polymerising(stream: StreamState, model: Model): string | undefined {
  *
  * @param heat_W  heat into the unit [W]; 0 asks for no level
  * @param out     stream at whose temperature the heat is exchanged
+ * @param reacts  the unit is there for reactions: cracking is none of its limits
  */
 export function utilityLevels(
   unit: UnitId,
@@ -67,6 +78,7 @@ export function utilityLevels(
   model: Model,
   site: SiteSI,
   overrides: Overrides,
+  reacts = false,
 ): Finding[] {
   const seen = [saw('temperature', out.T_K, 'temperature')];
   const found: Finding[] = [];
@@ -79,7 +91,8 @@ export function utilityLevels(
     if (level) found.push(finding(level, { unit }, [...seen, water], overrides));
   }
   if (heat_W > 0) {
-    const level = HEATING.find((r) => out.T_K > thresholdOf(r, overrides));
+    const mayCrack = !reacts && holdsOrganics(out, model);
+    const level = HEATING.find((r) => out.T_K > thresholdOf(r, overrides) && (r !== CRACKS || mayCrack));
     if (level) found.push(finding(level, { unit }, seen, overrides));
     const chemical = out.T_K > thresholdOf(POLYMERISES, overrides) ? polymerising(out, model) : undefined;
     if (chemical)

@@ -16,6 +16,6 @@ export function reactorLimits(
   if (!out || out.phases.length === 0) return [];
   return [
     ...joiningPressure(call.unit, call.in, answer.results.P_Pa, call.limits),
-    ...utilityLevels(call.unit, answer.heat_W, out, call.model, site, call.limits),
+    ...utilityLevels(call.unit, answer.heat_W, out, call.model, site, call.limits, true),
   ];
 }
