@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import { LimitMark, worstWeight } from '../parts/LimitMark';
-import type { Action } from '../store/action';
+import { type Action, actingKeys, labelOf } from '../store/action';
 import { useResults, useSession, useSketch, useStores } from '../store/react';
 import { WhyNot } from './WhyNot';
 
@@ -20,8 +20,9 @@ function Word({
   readonly children?: React.ReactNode;
 }) {
   const stores = useStores();
+  const singleKeys = useSession((state) => state.singleKeys);
   if (!action) return null;
-  const keys = action.keys[0];
+  const [keys] = actingKeys(action, singleKeys);
   return (
     <button
       type="button"
@@ -173,6 +174,7 @@ interface MenuProps {
 
 function Menu({ word, actions, close }: MenuProps) {
   const stores = useStores();
+  const { singleKeys } = stores.session.getState();
   const step = (from: EventTarget & Element, by: number): void => {
     const items = [
       ...(from.closest('[role=menu]')?.querySelectorAll<HTMLElement>('[role=menuitem]:not(:disabled)') ?? []),
@@ -210,10 +212,10 @@ function Menu({ word, actions, close }: MenuProps) {
             }}
           >
             <span>
-              {action.label}
+              {labelOf(action, stores)}
               <WhyNot action={action} />
             </span>
-            <kbd>{action.keys[0] ?? ''}</kbd>
+            <kbd>{actingKeys(action, singleKeys)[0] ?? ''}</kbd>
           </button>
         ))}
       </div>

@@ -16,8 +16,14 @@ export interface Action {
   when?(stores: Stores): boolean;
   /** Why it cannot be run now, where a user could wonder: a menu then lists it with the reason. */
   whyNot?(stores: Stores): string | undefined;
+  /** How it stands: 'on', 'off'. Shown behind the label. */
+  now?(stores: Stores): string;
   run(stores: Stores): void;
 }
+
+/** 'Undo', 'Single keys act: on' */
+export const labelOf = ({ label, now }: Action, stores: Stores): string =>
+  now ? `${label}: ${now(stores)}` : label;
 
 /** Nothing lies over the sheet, or only the list of actions: it closes before it runs what was chosen in it. */
 export function isSheetFree({ session }: Stores): boolean {
@@ -53,6 +59,10 @@ export function keyText(
 
 /** A letter, figure or mark without Ctrl or Alt: such a key can be struck, or heard by speech input, by mistake. */
 export const isSingleKey = (text: string): boolean => /^(Shift\+)?.$/.test(text);
+
+/** The keys of an action that do something now: single keys may be turned off. */
+export const actingKeys = ({ keys }: Pick<Action, 'keys'>, singleKeys: boolean): readonly string[] =>
+  singleKeys ? keys : keys.filter((key) => !isSingleKey(key));
 
 /** The action for a key press, if one is ready to run. Single keys can be turned off (WCAG 2.2, 2.1.4). */
 export function actionFor(

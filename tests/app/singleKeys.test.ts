@@ -1,7 +1,7 @@
 import { describe, expect, test, vi } from 'vitest';
 import { actions } from '../../src/app/actions';
 import { storedSingleKeys } from '../../src/app/actions/singleKeys';
-import { actionFor, isSingleKey } from '../../src/store/action';
+import { actingKeys, actionFor, isSingleKey, labelOf } from '../../src/store/action';
 import { letDown, makePage } from '../drawers/page';
 
 const kept = new Map<string, string>();
@@ -50,5 +50,31 @@ describe('keys without Ctrl or Alt', () => {
     turn();
     expect(found(press('l'))).toBe('limits');
     expect(storedSingleKeys()).toBe(true);
+  });
+
+  test('are turned off and on by a key with a modifier and from the list of actions, which opens without a single key', () => {
+    const { stores } = makePage(letDown);
+    const f1 = press('F1');
+    const shifted = press('F1', { shiftKey: true });
+    const turn = actionFor(actions, shifted, true, stores)!;
+    expect(labelOf(turn, stores)).toBe('Single keys act: on');
+    turn.run(stores);
+    expect(labelOf(turn, stores)).toBe('Single keys act: off');
+    expect(stores.session.getState().notice?.lines[0]).toContain('Shift+F1 turns single keys on again');
+    expect(actionFor(actions, f1, false, stores)?.id).toBe('keys');
+    // The notice says it, and takes it back.
+    stores.session.getState().notice?.steps?.[0]?.run();
+    expect(stores.session.getState().singleKeys).toBe(true);
+    expect(storedSingleKeys()).toBe(true);
+  });
+
+  test('are shown as off: every action keeps a way without them', () => {
+    const keysOf = (id: string) => actions.find((action) => action.id === id)!;
+    expect(actingKeys(keysOf('limits'), true)).toEqual(['L']);
+    expect(actingKeys(keysOf('limits'), false)).toEqual([]);
+    expect(actingKeys(keysOf('keys'), false)).toEqual(['F1']);
+    // All that acts then has a modifier or no character of its own.
+    const left = actions.flatMap((action) => actingKeys(action, false));
+    expect(left.filter((key) => key.length === 1 || /^Shift\+.$/.test(key))).toEqual([]);
   });
 });

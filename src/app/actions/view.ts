@@ -102,7 +102,7 @@ export const viewActions: readonly Action[] = [
     id: 'keys',
     label: 'All actions and their keys',
     group: 'help',
-    keys: ['?'],
+    keys: ['?', 'F1'],
     run: ({ session }) => session.setState({ over: session.getState().over === 'keys' ? 'none' : 'keys' }),
   },
   {
