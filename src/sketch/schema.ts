@@ -5,6 +5,7 @@ import { OWN_CHEMICAL } from './schemas/ownChemical';
 import { quantitySchema, SETTING_DEFS, settingsSchema } from './schemas/settings';
 import type { Schema } from './schemas/types';
 import { when } from './schemas/when';
+import { TITLE_KEYS } from './types';
 
 export type { Schema } from './schemas/types';
 
@@ -23,19 +24,7 @@ const texts = (...keys: readonly string[]): Readonly<Record<string, Schema>> =>
 
 const TITLE: Schema = {
   type: 'object',
-  properties: texts(
-    'project',
-    'area',
-    'number',
-    'title',
-    'author',
-    'checked',
-    'approved',
-    'revision',
-    'date',
-    'purpose',
-    'notes',
-  ),
+  properties: texts(...TITLE_KEYS),
 };
 
 const SITE: Schema = {

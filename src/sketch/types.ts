@@ -5,20 +5,22 @@ import type { Json, Quantity } from './values';
 
 export type { Json, Quantity } from './values';
 
-export interface TitleBlock {
-  readonly project?: string;
-  readonly area?: string;
-  readonly number?: string;
-  readonly title?: string;
-  readonly author?: string;
-  readonly checked?: string;
-  readonly approved?: string;
-  readonly revision?: string;
-  readonly date?: string;
-  /** What the document is for: "for review". */
-  readonly purpose?: string;
-  readonly notes?: string;
-}
+/** Fields of the title block; the purpose is what the document is for: "for review". */
+export const TITLE_KEYS = [
+  'project',
+  'area',
+  'number',
+  'title',
+  'author',
+  'checked',
+  'approved',
+  'revision',
+  'date',
+  'purpose',
+  'notes',
+] as const;
+
+export type TitleBlock = { readonly [key in (typeof TITLE_KEYS)[number]]?: string };
 
 /** A chemical the user brings: constants in SI (MW in g/mol), correlations by form. */
 export interface OwnChemical {

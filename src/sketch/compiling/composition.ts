@@ -3,7 +3,7 @@ import { evidence, finding, word } from '../findings';
 import { isObject, type JsonObject, own } from '../json';
 import type { Json } from '../types';
 import { AIR_OF, isPreset } from './air';
-import { isGiven, readQuantity } from './quantity';
+import { isGiven, readBasis, readQuantity } from './quantity';
 import { GAP, gap, type Scope, under } from './scope';
 
 /** Parts whose sum is off by no more than this are brought to 1, with a note. */
@@ -38,17 +38,11 @@ export function readComposition(value: Json, path: string, scope: Scope): Compos
 }
 
 function readParts(value: JsonObject, path: string, scope: Scope): CompositionSI | typeof GAP {
-  const basis = own(value, 'basis');
-  if (!isGiven(basis))
+  const typed = own(value, 'basis');
+  if (!isGiven(typed))
     return gap(scope, 'sketch/needs-value', under(path, 'basis'), word('known', 'mole, mass'));
-  if (basis !== 'mole' && basis !== 'mass')
-    return gap(
-      scope,
-      'sketch/unknown-option',
-      under(path, 'basis'),
-      word('typed', String(basis)),
-      word('known', 'mole, mass'),
-    );
+  const basis = readBasis(typed, under(path, 'basis'), scope);
+  if (basis === GAP) return GAP;
   const at = under(path, 'parts');
   const parts = readEach(own(value, 'parts'), at, scope, (v, p, k, out) => {
     const part = readQuantity(v, ['fraction'], p, scope);

@@ -3,7 +3,7 @@ import type { FlowSI } from '../../engine/units/types';
 import { word } from '../findings';
 import { isObject, own } from '../json';
 import type { Json } from '../types';
-import { isGiven, readQuantity } from './quantity';
+import { isGiven, readBasis, readQuantity } from './quantity';
 import { GAP, gap, type Scope, under } from './scope';
 
 const SHARE_KEYS = ['share', 'of', 'basis', 'chemical'];
@@ -39,18 +39,11 @@ function readShare(value: { readonly [key: string]: Json }, path: string, scope:
   const share = readQuantity(own(value, 'share') as Json, ['fraction'], under(path, 'share'), scope, {
     min: 0,
   });
-  const basis = own(value, 'basis');
   const of = own(value, 'of') as Json;
   const id = own(value, 'chemical');
   const chemical = typeof id === 'string' ? scope.indexOf.get(id) : undefined;
-  if (basis !== 'mole' && basis !== 'mass')
-    return gap(
-      scope,
-      'sketch/unknown-option',
-      under(path, 'basis'),
-      word('typed', String(basis)),
-      word('known', 'mole, mass'),
-    );
+  const basis = readBasis(own(value, 'basis'), under(path, 'basis'), scope);
+  if (basis === GAP) return GAP;
   if (id !== undefined && chemical === undefined)
     return gap(scope, 'sketch/unknown-chemical', under(path, 'chemical'), word('chemical', String(id)));
   if (share === GAP) return GAP;

@@ -25,7 +25,7 @@ export function readQuantity(
   dims: readonly Dimension[],
   path: string,
   scope: Scope,
-  range: { readonly min?: number; readonly max?: number } = {},
+  range: Range = {},
 ): ParsedQuantity | typeof GAP {
   if (typeof value !== 'string' && typeof value !== 'number')
     return gap(scope, 'sketch/wrong-type', path, word('wanted', 'quantity'));
@@ -37,24 +37,40 @@ export function readQuantity(
     if (scope.sitePressure_Pa === undefined) return gap(scope, 'sketch/needs-site-pressure', path);
   }
   const { si, dim } = parsed;
-  if (range.min !== undefined && si < range.min)
-    return gap(
-      scope,
-      'sketch/below-minimum',
-      path,
-      evidence('value', si, dim),
-      evidence('minimum', range.min, dim),
-    );
-  if (range.max !== undefined && si > range.max)
-    return gap(
-      scope,
-      'sketch/above-maximum',
-      path,
-      evidence('value', si, dim),
-      evidence('maximum', range.max, dim),
-    );
-  return parsed;
+  return outside(si, dim, range, path, scope) ?? parsed;
 }
+
+/** What a number may be [SI], its ends included. */
+export interface Range {
+  readonly min?: number;
+  readonly max?: number;
+}
+
+/** The gap that a number outside its range leaves; undefined for one inside. */
+export function outside(
+  si: number,
+  dim: Dimension,
+  { min, max }: Range,
+  path: string,
+  scope: Scope,
+): typeof GAP | undefined {
+  const value = evidence('value', si, dim);
+  if (min !== undefined && si < min)
+    return gap(scope, 'sketch/below-minimum', path, value, evidence('minimum', min, dim));
+  if (max !== undefined && si > max)
+    return gap(scope, 'sketch/above-maximum', path, value, evidence('maximum', max, dim));
+  return undefined;
+}
+
+/** What the fractions of an amount count. */
+export const readBasis = (
+  basis: Json | undefined,
+  path: string,
+  scope: Scope,
+): 'mole' | 'mass' | typeof GAP =>
+  basis === 'mole' || basis === 'mass'
+    ? basis
+    : gap(scope, 'sketch/unknown-option', path, word('typed', String(basis)), word('known', 'mole, mass'));
 
 /** Null and empty text count as not given. */
 export const isGiven = (value: Json | undefined): value is Json =>

@@ -5,7 +5,7 @@ import { portSpec } from '../registry';
 import type { Json } from '../types';
 import { readComposition } from './composition';
 import { readFlow } from './flow';
-import { isGiven, readQuantity } from './quantity';
+import { isGiven, outside, readQuantity } from './quantity';
 import { ABSENT, type AssumptionDraft, GAP, gap, type Scope, under } from './scope';
 
 type Fields = Readonly<Record<string, SettingSpec>>;
@@ -192,23 +192,7 @@ function readGiven(spec: SettingSpec, value: Json, path: string, scope: Scope): 
     }
     case 'whole':
       if (typeof value !== 'number' || !Number.isInteger(value)) return wrong('whole number');
-      if (value < spec.min)
-        return gap(
-          scope,
-          'sketch/below-minimum',
-          path,
-          evidence('value', value),
-          evidence('minimum', spec.min),
-        );
-      if (spec.max !== undefined && value > spec.max)
-        return gap(
-          scope,
-          'sketch/above-maximum',
-          path,
-          evidence('value', value),
-          evidence('maximum', spec.max),
-        );
-      return value;
+      return outside(value, 'number', spec, path, scope) ?? value;
     case 'stage':
       if (spec.ends && (value === 'condenser' || value === 'reboiler')) return value;
       return typeof value === 'number' && Number.isInteger(value) && value >= 1 ? value : wrong('stage');

@@ -1,30 +1,16 @@
 import { word } from '../findings';
 import { isObject, type JsonObject, own } from '../json';
-import type { Json } from '../types';
+import { type Json, TITLE_KEYS } from '../types';
 import { checkDocuments } from './documents';
 import { checkOwnChemical } from './ownChemical';
 import type { FileCode, Problems } from './problem';
 import * as value from './value';
 
-const TITLE = [
-  'project',
-  'area',
-  'number',
-  'title',
-  'author',
-  'checked',
-  'approved',
-  'revision',
-  'date',
-  'purpose',
-  'notes',
-] as const;
-
 /** Every known field has its type, every required one is there, names are unique. What settings mean is judged on compiling. */
 export function checkShape(raw: JsonObject, problems: Problems): void {
   value.text(own(raw, 'id'), 'id', problems);
   fields(raw, 'title', problems, (key, v, path) => {
-    if (TITLE.some((t) => t === key)) value.text(v, path, problems);
+    if (TITLE_KEYS.some((t) => t === key)) value.text(v, path, problems);
   });
   fields(raw, 'site', problems, (key, v, path) => {
     if (['pressure', 'ambient', 'coolingWater'].includes(key)) value.quantity(v, path, problems);
