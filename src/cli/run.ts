@@ -10,7 +10,7 @@ import type { Finding } from '../engine/outcome';
 import { writeCsv } from '../report/csv';
 import type { ReportInput } from '../report/input';
 import { buildReport } from '../report/model';
-import { sheetSvg } from '../report/picture';
+import { sheetSvgFile } from '../report/picture';
 import { resultsJson } from '../report/resultsJson';
 import { loadBankData } from '../sketch/bank';
 import { compile } from '../sketch/compile';
@@ -172,14 +172,21 @@ async function writeAll(file: string, orders: Orders, input: ReportInput, result
     const { writeXlsx } = await import('../report/xlsx');
     writeFileSync(orders.xlsx, await writeXlsx(buildReport(input)));
   }
-  if (orders.svg) writeFileSync(orders.svg, `${sheetSvg(input)}\n`);
+  const fonts = {
+    normal: font('SourceSans3-Regular.ttf'),
+    bold: font('SourceSans3-SemiBold.ttf'),
+    italics: font('SourceSans3-Italic.ttf'),
+  };
+  if (orders.svg) {
+    const files = {
+      normal: readFileSync(fonts.normal),
+      bold: readFileSync(fonts.bold),
+      italics: readFileSync(fonts.italics),
+    };
+    writeFileSync(orders.svg, `${sheetSvgFile(input, files)}\n`);
+  }
   if (orders.pdf) {
     const { writePdf } = await import('../report/pdf/write');
-    const fonts = {
-      normal: font('SourceSans3-Regular.ttf'),
-      bold: font('SourceSans3-SemiBold.ttf'),
-      italics: font('SourceSans3-Italic.ttf'),
-    };
     writeFileSync(orders.pdf, await writePdf(input, fonts));
   }
 }

@@ -1,6 +1,7 @@
 import pdfmake from 'pdfmake';
 import { FONT } from '../drawing/tokens';
 import type { PdfFonts } from '../report/pdf/write';
+import type { FontFiles } from '../report/picture';
 
 const FACES: Readonly<Record<keyof PdfFonts, string>> = {
   normal: 'SourceSans3-Regular.ttf',
@@ -26,6 +27,17 @@ function face(folder: string, file: string): Promise<ArrayBuffer> {
   // What failed once may succeed the next time.
   fetched.catch(() => files.delete(file));
   return fetched;
+}
+
+/** The shipped font's files. */
+export async function fontFiles(folder: string): Promise<FontFiles> {
+  const bytes = async (file: string): Promise<Uint8Array> => new Uint8Array(await face(folder, file));
+  const [normal, bold, italics] = await Promise.all([
+    bytes(FACES.normal),
+    bytes(FACES.bold),
+    bytes(FACES.italics),
+  ]);
+  return { normal, bold, italics };
 }
 
 /** Puts the shipped font where the PDF maker looks for it. */

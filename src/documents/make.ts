@@ -1,6 +1,6 @@
 import { writeCsv } from '../report/csv';
 import { buildReport } from '../report/model';
-import { sheetSvg } from '../report/picture';
+import { sheetSvg, sheetSvgFile } from '../report/picture';
 import { resultsJson } from '../report/resultsJson';
 import type { DocumentOrder, Made } from './messages';
 import { paintSvg, sizeOf } from './paint';
@@ -45,8 +45,10 @@ export async function makeDocument(order: DocumentOrder, progress: Progress): Pr
       return text(writeCsv(buildReport(input)), 'text/csv;charset=utf-8');
     case 'json':
       return text(`${JSON.stringify(resultsJson(input, order.seconds ?? 0), null, 1)}\n`, 'application/json');
-    case 'svg':
-      return text(sheetSvg(input), 'image/svg+xml');
+    case 'svg': {
+      const { fontFiles } = await import('./fonts');
+      return text(sheetSvgFile(input, await fontFiles(fonts)), 'image/svg+xml');
+    }
     case 'png':
       return { bytes: await picture(order), type: 'image/png' };
   }

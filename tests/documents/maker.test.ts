@@ -1,4 +1,5 @@
-import { describe, expect, test } from 'vitest';
+import { readFileSync } from 'node:fs';
+import { afterEach, describe, expect, test, vi } from 'vitest';
 import { CANCELLED, createMaker, type DocumentWorker } from '../../src/app/export/maker';
 import { makeDocument } from '../../src/documents/make';
 import type { DocumentOrder, FromDocuments, ToDocuments } from '../../src/documents/messages';
@@ -94,11 +95,30 @@ describe('the page’s side of the documents’ worker', () => {
 });
 
 describe('making a document', () => {
+  afterEach(() => vi.unstubAllGlobals());
+  /** The folder of the shipped font, as the page serves it. */
+  const serveFonts = (): void => {
+    vi.stubGlobal(
+      'fetch',
+      async (address: string) => new Response(readFileSync(`public/${address}`) as BodyInit),
+    );
+  };
+
+  // First: a font that came once is kept.
+  test('a font that does not come is told, not left out of the drawing', async () => {
+    vi.stubGlobal('fetch', async () => new Response('', { status: 404 }));
+    const input = await solvedExample('let-down.sketch.json');
+    await expect(makeDocument({ what: 'svg', input, fonts: 'nowhere' }, nothing)).rejects.toThrow(
+      'SourceSans3-Regular.ttf: 404',
+    );
+  });
+
   test('gives spreadsheet, CSV, results and drawing of one answer, and says what it is doing', async () => {
     const input = await solvedExample('let-down.sketch.json');
+    serveFonts();
     const said: string[] = [];
     const make = (what: DocumentOrder['what']) =>
-      makeDocument({ what, input, fonts: '', seconds: 0.25 }, (doing) => said.push(doing));
+      makeDocument({ what, input, fonts: 'fonts', seconds: 0.25 }, (doing) => said.push(doing));
     const text = async (what: DocumentOrder['what']) => new TextDecoder().decode((await make(what)).bytes);
     expect(readXlsx((await make('xlsx')).bytes).length).toBeGreaterThan(10);
     expect(await text('csv')).toContain('Stream summary');
