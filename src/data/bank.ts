@@ -19,6 +19,7 @@ import { type Chunk, chunkOf, type IndexEntry } from './families';
 
 export type { IndexEntry } from './families';
 
+/** The bank of chemicals; its parts are loaded when they are asked for. */
 export interface Bank {
   /** Every chemical, in the order of the bank: gases, water, then by family. */
   readonly index: readonly IndexEntry[];

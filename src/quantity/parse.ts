@@ -12,6 +12,7 @@ export interface Site {
   readonly P_Pa: number;
 }
 
+/** A quantity as read: SI value and dimension, and what was typed. */
 export interface ParsedQuantity {
   readonly ok: true;
   /** In the SI unit of `dim`. */

@@ -17,6 +17,7 @@ export type QuantityCode =
   | 'quantity/below-absolute-zero' // an absolute temperature under 0 K
   | 'quantity/below-vacuum'; // an absolute pressure under 0 Pa
 
+/** Why a text is no quantity; its sentence stands in wording/, by the code. */
 export interface Refusal {
   readonly ok: false;
   readonly code: QuantityCode;

@@ -35,6 +35,7 @@ export const SHAPES: Readonly<Record<Dimension, Shape>> = {
 /** Every dimension, in the order of the table above. */
 export const DIMENSIONS = Object.keys(SHAPES) as readonly Dimension[];
 
+/** Whether two units measure the same. */
 export const sameShape = (a: Shape, b: Shape): boolean => a.every((e, i) => e === b[i]);
 
 /** Shape of a times b to the power n. */

@@ -18,6 +18,7 @@ import type { Assumption, Sketch, SketchUnit } from './types';
 export type { BankData } from './compiling/basis';
 export type { Threshold } from './compiling/thresholds';
 
+/** What a sketch becomes for the engine, and what it lacks. */
 export interface Compiled {
   /** Undefined while a chemical or the model cannot be used; then `problem.basis` is empty and nothing is to be solved. */
   readonly basis: Basis | undefined;

@@ -17,6 +17,7 @@ import type { Display, Json, LabelKey, Note, Sketch, SketchStream, SketchUnit } 
 
 export type { FileCode, FileProblem } from './file/problem';
 
+/** A sketch with what was noticed on reading, or every reason why the file is none. */
 export type Opened =
   | { readonly ok: true; readonly sketch: Sketch; readonly notes: readonly Finding[] }
   | { readonly ok: false; readonly problems: readonly [FileProblem, ...FileProblem[]] };

@@ -48,8 +48,10 @@ export interface OwnChemical {
   readonly q?: number;
 }
 
+/** Id of a chemical of the bank, or a chemical with the user's own constants. */
 export type SketchChemical = string | { readonly id: ChemId; readonly own: OwnChemical };
 
+/** The thermodynamic model as chosen. What is absent is filled in and told as an assumption (compiling/model.ts). */
 export interface ModelChoice {
   /** Known kinds are solved; another kind is kept and reads "not available in this version". */
   readonly kind: string;
@@ -64,6 +66,7 @@ export interface ModelChoice {
   readonly pairs?: readonly Json[];
 }
 
+/** A unit on the sheet. Its settings stand as typed, by the catalogue of its kind. */
 export interface SketchUnit {
   readonly id: UnitId;
   readonly tag: string;
@@ -79,6 +82,7 @@ export interface SketchUnit {
   readonly settings: { readonly [key: string]: Json };
 }
 
+/** A stream. An end that is absent hangs free: a feed without `from`, a product without `to`. */
 export interface SketchStream {
   readonly id: StreamId;
   readonly number: string;
@@ -89,6 +93,7 @@ export interface SketchStream {
   readonly via?: readonly (readonly [number, number])[];
 }
 
+/** A text or an area on the sheet. `on`: id of the unit or stream that it stands on. */
 export interface Note {
   readonly id: string;
   readonly text: string;

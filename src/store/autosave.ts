@@ -11,6 +11,7 @@ export interface StoredState {
   readonly document: Sketch;
 }
 
+/** A saved sketch in the list: number of its newest state, when that was saved [ms since 1970]. */
 export interface SketchHead {
   readonly id: string;
   readonly counter: number;

@@ -5,6 +5,7 @@ import type { Finding } from '../engine/outcome';
 import { makeAside } from './aside';
 import type { Shown } from './shown';
 
+/** Results by id, as last handed out by the worker, and how its work stands. */
 export interface ResultsState {
   readonly streams: ReadonlyMap<StreamId, Shown<StreamResult>>;
   readonly units: ReadonlyMap<UnitId, Shown<UnitResult>>;
@@ -20,7 +21,7 @@ export interface ResultsState {
   readonly loop: LoopProgress | null;
   /** Wall time of the last complete solve, posting included [ms]. */
   readonly tookMs: number;
-  /** Bumped when the worker had to be restarted or gave up; the message is for the title strip. */
+  /** Why there is no answer, or that the worker had to be restarted, for the title strip; null after an answer. */
   readonly trouble: string | null;
   /** The solve under way was stopped by hand: there is no answer to the newest edit, and none is awaited. */
   readonly stopped: boolean;

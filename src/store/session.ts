@@ -13,6 +13,7 @@ export type DrawerChoice =
 /** A unit or a stream, wherever it is shown. */
 export type Thing = { readonly unit: UnitId } | { readonly stream: StreamId };
 
+/** A message over the sheet. */
 export interface Notice {
   readonly key: number;
   readonly tone: 'info' | 'caution' | 'beyond';

@@ -10,6 +10,7 @@ export interface HistoryEntry {
 
 export type Change = (sketch: Sketch) => Sketch;
 
+/** The document on the sheet and its undo history, the next to undo last in `past`, the next to redo first in `future`. */
 export interface SketchState {
   readonly sketch: Sketch;
   /** Counts every document shown, undone ones too; results carry the number they answer. */

@@ -10,6 +10,7 @@ export interface WorkerLike {
   onerror: ((event: ErrorEvent) => void) | null;
 }
 
+/** What the solver tells the page. */
 export interface SolverHandlers {
   results(edit: number, last: boolean, batch: SolveBatch): void;
   at(edit: number, unit: UnitId, loop?: LoopProgress): void;

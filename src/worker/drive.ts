@@ -14,6 +14,7 @@ export interface Pace {
 /** The pace of the page's solver. */
 export const PACE: Pace = { pause: 8, first: 30, next: 100, at: 250 };
 
+/** What a solve in slices needs of its surroundings: `now` in ms, never going back; `announce`: say which unit it is at. */
 export interface Drive {
   readonly turns: Turns;
   readonly now: () => number;

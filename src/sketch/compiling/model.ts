@@ -21,6 +21,7 @@ const CHOICES_OF: Readonly<Record<ModelSpec['kind'], readonly (keyof ModelChoice
 
 const REASON = 'Not chosen in the sketch.';
 
+/** A binary interaction parameter of the sketch: chemical ids and kij [-]. */
 export interface GivenPair {
   readonly i: string;
   readonly j: string;

@@ -10,6 +10,7 @@ export interface Threshold {
   readonly dim: Dimension;
 }
 
+/** `limits`: overridden thresholds by finding code, in SI of the threshold's dimension. */
 export interface ThresholdsRead {
   readonly limits: Readonly<Record<string, number>>;
   readonly gaps: readonly Finding[];

@@ -18,6 +18,7 @@ export interface Surroundings {
   readonly key: string;
 }
 
+/** One unit compiled: settings in SI with chemicals as places of the full list, or null with the gaps. */
 export interface UnitRead {
   /** Compiled settings, or null when something is missing. */
   readonly settings: unknown;

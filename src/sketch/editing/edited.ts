@@ -36,6 +36,7 @@ export const EDIT_REFUSALS = [
 
 export type EditCode = (typeof EDIT_REFUSALS)[number];
 
+/** An edit that cannot be done; its sentence stands in wording/, by the code. */
 export interface Refused {
   readonly ok: false;
   readonly code: EditCode;
@@ -65,8 +66,11 @@ export const refuse = (code: EditCode, ...evidence: readonly Evidence[]): Refuse
   evidence,
 });
 
+/** The unit of an id; undefined where there is none. */
 export const unitOf = (sketch: Pick<Sketch, 'units'>, id: UnitId): SketchUnit | undefined =>
   sketch.units.find((u) => u.id === id);
+
+/** The stream of an id; undefined where there is none. */
 export const streamOf = (sketch: Pick<Sketch, 'streams'>, id: StreamId): SketchStream | undefined =>
   sketch.streams.find((s) => s.id === id);
 

@@ -10,6 +10,7 @@ export interface Here {
   readonly specs: readonly SettingSpec[];
 }
 
+/** The top of a unit's settings. */
 export const topOf = (kind: KindCatalogue | undefined): Here => ({
   kind,
   specs: kind ? [{ is: 'record', fields: kind.settings }] : [],
