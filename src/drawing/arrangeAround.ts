@@ -1,4 +1,4 @@
-import type { UnitId } from '../engine/ids';
+import type { StreamId, UnitId } from '../engine/ids';
 import type { KindCatalogue } from '../engine/units/types';
 import type { Sketch } from '../sketch/types';
 import { settle } from './arrangeSettle';
@@ -9,8 +9,20 @@ import { portOf, type StandingUnit, standingUnits } from './standing';
 import type { Box, Point } from './types';
 import { wireSheet } from './wiring';
 
-/** Room for lines between units, tried until they find ways that meet nothing [px]. */
-const PASSAGES = [32, 48, 72, 104] as const;
+/**
+ * What is tried until all lines find ways that meet nothing: room for lines between units, and how far down units are pushed
+ * whose lines were in trouble before [px].
+ */
+const TRIES = [
+  { passage: 32, down: 0 },
+  { passage: 48, down: 0 },
+  { passage: 72, down: 0 },
+  { passage: 32, down: 24 },
+  { passage: 32, down: -24 },
+  { passage: 48, down: 40 },
+  { passage: 48, down: -40 },
+  { passage: 104, down: 0 },
+] as const;
 /** Lines that run along one another nearer than this look like one; ports of one symbol are further apart [px]. */
 const MERGED = 4;
 /** A line bent by hand keeps units this far away [px]. */
@@ -26,15 +38,36 @@ export function settleAround(
 ): ReadonlyMap<UnitId, Point> {
   const taken = takenByHand(sketch, standing, kept);
   let best: ReadonlyMap<UnitId, Point> = new Map();
-  let least = Infinity;
-  for (const passage of PASSAGES) {
-    const places = settle(sketch, standing, wanted, { kept, taken, passage });
-    const faults = faultsOf(sketch, places, kinds);
-    if (faults >= least) continue;
+  let least: readonly StreamId[] | undefined;
+  for (const { passage, down } of TRIES) {
+    const pushed = down === 0 ? wanted : pushedDown(sketch, wanted, kept, least ?? [], down);
+    const places = settle(sketch, standing, pushed, { kept, taken, passage });
+    const faults = linesInTrouble(sketch, places, kinds);
+    if (least && faults.length >= least.length) continue;
     [best, least] = [places, faults];
-    if (faults === 0) break;
+    if (faults.length === 0) break;
   }
   return best;
+}
+
+/** The layout with the units at some lines elsewhere; with all, where both ends of all those lines are kept. */
+function pushedDown(
+  sketch: Sketch,
+  wanted: ReadonlyMap<UnitId, Point>,
+  kept: ReadonlySet<UnitId>,
+  lines: readonly StreamId[],
+  down: number,
+): ReadonlyMap<UnitId, Point> {
+  const ends = new Set(
+    sketch.streams
+      .filter(({ id }) => lines.includes(id))
+      .flatMap(({ from, to }) => [from, to].flatMap((end) => (end && !kept.has(end[0]) ? [end[0]] : []))),
+  );
+  return new Map(
+    [...wanted].map(([id, [x, y]]) =>
+      !kept.has(id) && (ends.size === 0 || ends.has(id)) ? [id, [x, y + down]] : [id, [x, y]],
+    ),
+  );
 }
 
 /** Texts on the sheet, and lines between kept units with their bends. */
@@ -54,29 +87,29 @@ function takenByHand(
   return [...texts, ...lines];
 }
 
-/** How often lines lead over symbols or along one another when units stand at these places. */
-function faultsOf(
+/** Streams whose lines lead over a symbol or along one another when units stand at these places. */
+function linesInTrouble(
   sketch: Sketch,
   places: ReadonlyMap<UnitId, Point>,
   kinds: Readonly<Record<string, KindCatalogue>>,
-): number {
+): readonly StreamId[] {
   const units = sketch.units.map((unit) => ({ ...unit, at: places.get(unit.id) ?? unit.at }));
   const standing = standingUnits({ ...sketch, units }, undefined, kinds);
   const { wires } = wireSheet(sketch.streams, standing, undefined);
   const lines = wires.map((wire) => wire.points);
-  let faults = 0;
-  for (const [line, near] of tangles(lines, MERGED))
-    for (const other of near) if (!shareAnEnd(lines[line]!, lines[other]!)) faults += 1;
-  for (const { points, stream } of wires) {
+  const merged = tangles(lines, MERGED);
+  return wires.flatMap(({ points, stream }, line) => {
+    const along = [...(merged.get(line) ?? [])].some((other) => !shareAnEnd(points, lines[other]!));
     const pieces = pieceBoxes(points, 1);
-    pieces.forEach((piece, k) => {
+    const isOver = (piece: Box, k: number): boolean => {
       const own = [k === 0 && stream.from?.[0], k === pieces.length - 1 && stream.to?.[0]];
-      for (const { unit, box, linkBoxes } of standing) {
-        if (!own.includes(unit.id) && [box, ...linkBoxes].some((b) => overlaps(piece, b))) faults += 1;
-      }
-    });
-  }
-  return faults;
+      return standing.some(
+        ({ unit, box, linkBoxes }) =>
+          !own.includes(unit.id) && [box, ...linkBoxes].some((b) => overlaps(piece, b)),
+      );
+    };
+    return along || pieces.some(isOver) ? [stream.id] : [];
+  });
 }
 
 /** Lines of one port run into it together. */

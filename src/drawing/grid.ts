@@ -2,7 +2,7 @@ import { grown } from './boxes';
 import type { Box, Point } from './types';
 
 /** Clear of a symbol by this much, always [px]; less than a grid step, so that lines pass between close symbols. */
-const HARD = 6;
+export const HARD = 6;
 /** Closer than this costs extra, so that lines keep away where there is room [px]. */
 const SOFT = 12;
 /** Where lines run past a symbol: a roomy and a narrow channel on each side [px]. */

@@ -1,5 +1,5 @@
 import { boxOfPiece, grown, hull, overlaps } from './boxes';
-import type { Lane } from './grid';
+import { HARD, type Lane } from './grid';
 import { findWay, type Heading } from './search';
 import { AWAY, HEADING } from './transform';
 import type { Box, Point, PortPlace, Side } from './types';
@@ -24,6 +24,10 @@ const along = ([x, y]: Point, side: Side, by: number): Point => [
 ];
 
 const inside = ([x, y]: Point, b: Box): boolean => x > b.x && x < b.x + b.w && y > b.y && y < b.y + b.h;
+
+/** Whether a point lies where no line may pass: inside a symbol or too close to it. */
+const isShut = (p: Point, obstacles: readonly Box[]): boolean =>
+  obstacles.some((o) => inside(p, grown(o, HARD)));
 
 const crossesAny = (a: Point, b: Point, obstacles: readonly Box[], by: number, except?: Box): boolean => {
   const piece = boxOfPiece(a, b, by);
@@ -173,7 +177,9 @@ function ledOnce(
   const [before, behind] = first && last ? [ahead(a, first), ahead(b, last)] : [between, between];
   const start = along(a.at, a.side, stubOf(from, before, obstacles, detour?.stubs[0]));
   const end = along(b.at, b.side, stubOf(to, behind, obstacles, detour?.stubs[1]));
-  const stops = [start, ...via.filter((v) => !obstacles.some((o) => inside(v, grown(o, 6)))), end];
+  // No way leads out of a symbol: known before the whole sheet is searched for one.
+  if (!isSame(start, end) && (isShut(start, obstacles) || isShut(end, obstacles))) return undefined;
+  const stops = [start, ...via.filter((v) => !isShut(v, obstacles)), end];
   const arrive = ((HEADING[b.side] + 2) & 3) as Heading;
 
   const around = hull([...stops, a.at, b.at].map((p) => boxOfPiece(p, p, REGION)))!;
