@@ -1,8 +1,7 @@
-import { useState } from 'react';
 import { LimitMark, worstWeight } from '../parts/LimitMark';
-import { type Action, actingKeys, labelOf } from '../store/action';
+import { type Action, actingKeys } from '../store/action';
 import { useResults, useSession, useSketch, useStores } from '../store/react';
-import { WhyNot } from './WhyNot';
+import { MenuButton } from './Menu';
 
 const savedText = {
   saved: 'Saved on this computer',
@@ -135,90 +134,3 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
 
 /** Undo and redo stand in the bar themselves. */
 const DIRECT: ReadonlySet<string> = new Set(['undo', 'redo']);
-
-interface MenuButtonProps {
-  readonly word: string;
-  readonly actions: readonly Action[];
-  /** Only what can be done now, or says why not: a long list would not fit a small screen. */
-  readonly short?: true;
-}
-
-function MenuButton({ word, actions, short }: MenuButtonProps) {
-  const stores = useStores();
-  const [open, setOpen] = useState(false);
-  const listed = (action: Action): boolean =>
-    (action.when?.(stores) ?? true) || action.whyNot?.(stores) !== undefined;
-  return (
-    <div className="menu-holder">
-      <button
-        type="button"
-        className="button"
-        aria-haspopup="menu"
-        aria-expanded={open}
-        onClick={() => setOpen(!open)}
-      >
-        {word}
-      </button>
-      {open ? (
-        <Menu word={word} actions={short ? actions.filter(listed) : actions} close={() => setOpen(false)} />
-      ) : null}
-    </div>
-  );
-}
-
-interface MenuProps {
-  readonly word: string;
-  readonly actions: readonly Action[];
-  readonly close: () => void;
-}
-
-function Menu({ word, actions, close }: MenuProps) {
-  const stores = useStores();
-  const { singleKeys } = stores.session.getState();
-  const step = (from: EventTarget & Element, by: number): void => {
-    const items = [
-      ...(from.closest('[role=menu]')?.querySelectorAll<HTMLElement>('[role=menuitem]:not(:disabled)') ?? []),
-    ];
-    const at = items.indexOf(document.activeElement as HTMLElement);
-    items[(at + by + items.length) % items.length]?.focus();
-  };
-  return (
-    <>
-      <button type="button" className="menu-away" aria-label="Close the menu" tabIndex={-1} onClick={close} />
-      <div
-        className="menu"
-        role="menu"
-        aria-label={word}
-        tabIndex={-1}
-        ref={(element) => element?.querySelector<HTMLElement>('[role=menuitem]:not(:disabled)')?.focus()}
-        onKeyDown={(event) => {
-          if (event.key === 'Escape') close();
-          else if (event.key === 'ArrowDown') step(event.currentTarget, 1);
-          else if (event.key === 'ArrowUp') step(event.currentTarget, -1);
-          else return;
-          event.preventDefault();
-          event.stopPropagation();
-        }}
-      >
-        {actions.map((action) => (
-          <button
-            key={action.id}
-            type="button"
-            role="menuitem"
-            disabled={!(action.when?.(stores) ?? true)}
-            onClick={() => {
-              close();
-              action.run(stores);
-            }}
-          >
-            <span>
-              {labelOf(action, stores)}
-              <WhyNot action={action} />
-            </span>
-            <kbd>{actingKeys(action, singleKeys)[0] ?? ''}</kbd>
-          </button>
-        ))}
-      </div>
-    </>
-  );
-}
