@@ -1,4 +1,5 @@
 import { beforeAll, describe, expect, test } from 'vitest';
+import type { StreamState } from '../../src/engine/equilibrium/types';
 import { worstOf } from '../../src/engine/network/closure';
 import { KNOWN_KINDS } from '../../src/engine/network/kinds';
 import { makeMemory } from '../../src/engine/network/memory';
@@ -145,14 +146,17 @@ describe('a sketch', () => {
     expect(clean.findings.map((f) => f.code)).not.toContain('network/several-answers');
   });
 
-  test('says so when a solve from nothing finds another answer than the live one', () => {
+  test.each([
+    ['temperature', ({ T_K }: StreamState) => ({ T_K: T_K + 1 })],
+    ['vapour fraction', ({ vapourFraction }: StreamState) => ({ vapourFraction: vapourFraction + 0.1 })],
+  ])('says so when a solve from nothing finds another %s than the live one', (_, other) => {
     // A kind with two answers, of which it takes the one it started from.
     const catalogue: KindCatalogue = { ...KNOWN_KINDS.catalogue.valve!, kind: 'fickle' };
     const solver: AnyKind = {
       solve: (call: Call<never>) => {
         const out = scaledStream(call.in.in!, 1);
-        const T_K = call.warm === undefined ? out.T_K : out.T_K + 1;
-        return solved({ ...answerOf({ out: { ...out, T_K } }, {} as never, []), warm: 'here' });
+        const changed = call.warm === undefined ? out : { ...out, ...other(out) };
+        return solved({ ...answerOf({ out: changed }, {} as never, []), warm: 'here' });
       },
       limits: () => [],
     };

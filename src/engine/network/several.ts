@@ -3,15 +3,17 @@ import { type Finding, saw } from '../outcome';
 import { totalOf } from '../units/streams';
 import type { StreamMemory } from './memory';
 
-/** A live answer and one from nothing agree within this, relative in any flow and in kelvins. */
+/** A live answer and one from nothing agree within this: relative in any flow, in kelvins, in vapour fraction. */
 const FLOW = 1e-6;
 const KELVIN = 1e-4;
+const VAPOUR = 1e-4;
 /** Flows below this share of the stream are compared against it. */
 const TRACE = 1e-6;
 
 /**
  * Streams in which a solve from nothing found another answer than the live one: network/several-answers, with the largest
- * relative difference of a component's flow [-] and that of temperature [K].
+ * relative difference of a component's flow [-], that of temperature [K] and that of vapour fraction [-], by which alone two
+ * states of a boiling pure chemical differ.
  */
 export function severalAnswers(
   live: ReadonlyMap<StreamId, StreamMemory>,
@@ -28,12 +30,17 @@ export function severalAnswers(
       if (x !== y) flow = Math.max(flow, Math.abs(x - y) / Math.max(x, y, floor));
     }
     const kelvin = Math.abs(a.T_K - b.T_K);
-    if (flow <= FLOW && kelvin <= KELVIN) continue;
+    const vapour = Math.abs(a.vapourFraction - b.vapourFraction);
+    if (flow <= FLOW && kelvin <= KELVIN && vapour <= VAPOUR) continue;
     found.push({
       code: 'network/several-answers',
       weight: 'caution',
       at: { stream },
-      evidence: [saw('flow', flow, 'number'), saw('temperature', kelvin, 'temperatureDifference')],
+      evidence: [
+        saw('flow', flow, 'fraction'),
+        saw('temperature', kelvin, 'temperatureDifference'),
+        saw('vapourFraction', vapour, 'fraction'),
+      ],
     });
   }
   return found;

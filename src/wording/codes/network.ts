@@ -54,7 +54,7 @@ export const NETWORK_SENTENCES: Readonly<Record<string, Sentence>> = {
   },
   'network/several-answers': {
     title: 'Several answers',
-    says: 'Solved from nothing, stream {stream} comes out otherwise than on the screen, by {temperature} in temperature. The answer from nothing stands.',
+    says: 'Solved from nothing, stream {stream} comes out otherwise than on the screen: the flow of a component by {flow%}, the temperature by {temperature}, the vapour fraction by {vapourFraction}. The answer from nothing stands.',
     next: 'Look for conditions that allow more than one state.',
   },
   'model/pair-none': {
