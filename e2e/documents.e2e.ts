@@ -119,7 +119,7 @@ test('documents are chosen, looked at and saved in every form', async ({ quiet: 
   await dialogue.getByLabel('Model, pairs and sources').uncheck();
   await dialogue.getByLabel('Limits', { exact: true }).uncheck();
   await dialogue.getByRole('button', { name: 'Rows of the stream summary' }).click();
-  await dialogue.getByLabel('Normal gas flow').uncheck();
+  await dialogue.getByLabel('Vapour as ideal gas').uncheck();
   await expect
     .poll(async () => Number(await pages.locator('[data-pages]').getAttribute('data-pages')), {
       timeout: 30_000,
@@ -154,7 +154,7 @@ test('documents are chosen, looked at and saved in every form', async ({ quiet: 
   await page.keyboard.press('Control+z');
   await page.keyboard.press('p');
   await dialogue.getByRole('button', { name: 'Rows of the stream summary' }).click();
-  await expect(dialogue.getByLabel('Normal gas flow')).toBeChecked();
+  await expect(dialogue.getByLabel('Vapour as ideal gas')).toBeChecked();
   await dialogue.getByRole('button', { name: 'Sections' }).click();
   await expect(dialogue.getByLabel('Limits', { exact: true })).not.toBeChecked();
 });

@@ -18,9 +18,9 @@ export {
 export {
   type DisplayUnit,
   displayUnit,
+  gasVolumes,
   type MeasureSet,
   type Measures,
-  REFERENCE_GAS,
   type ShownQuantity,
   show,
   unitLabel,

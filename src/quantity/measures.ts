@@ -50,13 +50,30 @@ const SETS: Readonly<Record<Dimension, readonly [SI: string, metric: string, US:
   velocity: ['m/s', 'm/s', 'ft/s'],
 };
 
-/** Gas flow at a reference state, as ideal gas: the unit of each set, and the state that it stands for. */
-export const REFERENCE_GAS: Readonly<Record<MeasureSet, { readonly unit: string; readonly state: string }>> =
-  {
-    SI: { unit: 'Nm3/h', state: '0 °C and 101.325 kPa(a)' },
-    metric: { unit: 'Nm3/h', state: '0 °C and 101.325 kPa(a)' },
-    US: { unit: 'scf/h', state: '60 °F and 14.696 psi(a)' },
+/** Reference states of gas volumes, by the symbol that stands for a volume at them. */
+const GAS_STATES: Readonly<Record<string, string>> = {
+  Nm3: '0 °C, 1.01325 bar',
+  Sm3: '15 °C, 1.01325 bar',
+  scf: '60 °F, 14.696 psi',
+};
+
+const GAS_UNITS: Readonly<Record<MeasureSet, string>> = { SI: 'Nm3/h', metric: 'Nm3/h', US: 'scf/h' };
+
+/**
+ * What an amount per time is shown in as volume of ideal gas: the unit chosen for molar flows where that is a gas volume, else
+ * the set's own.
+ *
+ * @returns  the measures with that unit for molar flows, and in words the reference state that it stands for
+ */
+export function gasVolumes(measures: Measures): { readonly measures: Measures; readonly state: string } {
+  const chosen = measures.units?.molarFlow;
+  const symbol = (unit: string): string => unit.split('/')[0] ?? '';
+  const unit = chosen !== undefined && symbol(chosen) in GAS_STATES ? chosen : GAS_UNITS[measures.set];
+  return {
+    measures: { ...measures, units: { ...measures.units, molarFlow: unit } },
+    state: GAS_STATES[symbol(unit)] ?? '',
   };
+}
 
 const COLUMN: Readonly<Record<MeasureSet, 0 | 1 | 2>> = { SI: 0, metric: 1, US: 2 };
 const RAISED = '⁰¹²³⁴⁵⁶⁷⁸⁹';

@@ -9,6 +9,7 @@ import type {
 import type { Finding } from '../engine/outcome';
 import type { Sketch, SketchStream, SketchUnit } from '../sketch/types';
 import type { ReportInput } from './input';
+import { normalVapour_m3_s } from './volumeFlows';
 
 type Plain =
   | string
@@ -18,6 +19,10 @@ type Plain =
   | undefined
   | readonly Plain[]
   | { readonly [key: string]: Plain };
+
+/** Ids of the chemicals, in the order of every vector over them. */
+type Ids = readonly string[];
+const byId = (x: Float64Array, ids: Ids): Plain => Object.fromEntries(ids.map((id, i) => [id, x[i] ?? 0]));
 
 const list = (vector: Float64Array | readonly number[]): number[] => Array.from(vector);
 
@@ -42,7 +47,6 @@ export function resultsJson(input: ReportInput, seconds: number): Plain {
   const tags = new Map<string, string>(sketch.units.map((unit) => [unit.id, unit.tag]));
   const numbers = new Map<string, string>(sketch.streams.map((stream) => [stream.id, stream.number]));
   const ids = basis.chemicals.map((chemical) => chemical.id);
-  const byId = (x: Float64Array): Plain => Object.fromEntries(ids.map((id, i) => [id, x[i] ?? 0]));
   const isSolved =
     sketch.units.length > 0 &&
     input.gaps.length === 0 &&
@@ -55,13 +59,13 @@ export function resultsJson(input: ReportInput, seconds: number): Plain {
     streams: Object.fromEntries(
       sketch.streams.map((stream) => [
         stream.number,
-        { ...ends(stream, tags), ...streamRecord(input.streams.get(stream.id), byId) },
+        { ...ends(stream, tags), ...streamRecord(input.streams.get(stream.id), ids) },
       ]),
     ),
     units: Object.fromEntries(
       sketch.units.map((unit) => [
         unit.tag,
-        unitRecord(unit, sketch, input.units.get(unit.id), byId, numbers),
+        unitRecord(unit, sketch, input.units.get(unit.id), ids, numbers),
       ]),
     ),
     closure: closure ? closureRecord(closure, basis, tags) : null,
@@ -97,11 +101,9 @@ function ends(
   return { from: end(stream.from), to: end(stream.to) };
 }
 
-function streamRecord(
-  result: StreamResult | undefined,
-  byId: (x: Float64Array) => Plain,
-): { readonly [key: string]: Plain } {
+function streamRecord(result: StreamResult | undefined, ids: Ids): { readonly [key: string]: Plain } {
   if (result?.state !== 'solved') return { state: result?.state ?? 'waiting' };
+  const vapour = normalVapour_m3_s(result);
   return {
     state: 'solved',
     T_K: result.T_K,
@@ -117,19 +119,21 @@ function streamRecord(
     MW_g_mol: result.MW_g_mol,
     HfromIdeal_W: result.HfromIdeal_W,
     volume_m3_s: result.volume_m3_s,
+    ...(vapour === undefined ? {} : { vapourIdealGas_m3_s: vapour }),
     ...(result.standardLiquid_m3_s === undefined ? {} : { standardLiquid_m3_s: result.standardLiquid_m3_s }),
-    z: byId(result.z),
-    phases: result.phases.map((phase) => phaseRecord(phase, byId)),
-    ...(result.hiddenLiquid ? { hiddenLiquid: byId(result.hiddenLiquid) } : {}),
+    ...(result.noStandardLiquid ? { noStandardLiquid: result.noStandardLiquid.map((i) => ids[i]) } : {}),
+    z: byId(result.z, ids),
+    phases: result.phases.map((phase) => phaseRecord(phase, ids)),
+    ...(result.hiddenLiquid ? { hiddenLiquid: byId(result.hiddenLiquid, ids) } : {}),
     ...(result.liquidsTogether ? { liquidsTogether: true } : {}),
   };
 }
 
-const phaseRecord = (p: PhaseResult, byId: (x: Float64Array) => Plain): Plain => ({
+const phaseRecord = (p: PhaseResult, ids: Ids): Plain => ({
   kind: p.kind,
   fraction: p.fraction,
   ...(p.byConvention ? { byConvention: true } : {}),
-  x: byId(p.x),
+  x: byId(p.x, ids),
   h_J_mol: p.h_J_mol,
   ...(p.s_J_molK === undefined ? {} : { s_J_molK: p.s_J_molK }),
   Z: p.Z,
@@ -146,7 +150,7 @@ function unitRecord(
   unit: SketchUnit,
   sketch: Sketch,
   result: UnitResult | undefined,
-  byId: (x: Float64Array) => Plain,
+  ids: Ids,
   numbers: ReadonlyMap<string, string>,
 ): Plain {
   const at = (end: 'from' | 'to'): Plain =>
@@ -175,11 +179,11 @@ function unitRecord(
     ...(result.loop
       ? { loop: { ...result.loop, tear: result.loop.tear.map((id) => numbers.get(id) ?? id) } }
       : {}),
-    ...(result.made_mol_s ? { made_mol_s: byId(result.made_mol_s) } : {}),
+    ...(result.made_mol_s ? { made_mol_s: byId(result.made_mol_s, ids) } : {}),
     ...(result.drawn
       ? {
           drawn: Object.fromEntries(
-            Object.entries(result.drawn).map(([port, s]) => [port, streamRecord(s, byId)]),
+            Object.entries(result.drawn).map(([port, s]) => [port, streamRecord(s, ids)]),
           ),
         }
       : {}),

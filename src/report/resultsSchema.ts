@@ -48,9 +48,17 @@ const SOLVED: Readonly<Record<string, Schema>> = {
 const PERHAPS: Readonly<Record<string, Schema>> = {
   S_W_K: number,
   s_J_molK: number,
+  vapourIdealGas_m3_s: described(
+    number,
+    'the vapour alone, or the dense phase, as ideal gas at 273.15 K and 101325 Pa; absent without',
+  ),
   standardLiquid_m3_s: described(
     number,
-    'as liquid at 15 degC, ideal mixing; absent with 1e-6 or more, by mole, of chemicals above their critical temperature there',
+    'as liquid at 15 degC, ideal mixing; absent where noStandardLiquid is there; less than 1e-6 of the mass of chemicals without a liquid density there is left out',
+  ),
+  noStandardLiquid: described(
+    listOf(text),
+    'chemicals that have no liquid density at 15 degC and are 1e-6 of the mass or more',
   ),
   hiddenLiquid: byName(share),
   liquidsTogether: { type: 'boolean' },

@@ -1,9 +1,10 @@
 import { withReference } from '../drawing/measures';
-import { displayUnit, type Measures, REFERENCE_GAS } from '../quantity';
+import { displayUnit, type Measures } from '../quantity';
 import { describeStream } from '../sketch/describe';
 import type { SketchStream } from '../sketch/types';
-import { absent, decimalsFor, number, printedValue, text } from './cells';
+import { absent, decimalsFor, number, text } from './cells';
 import { measuresOf, type ReportInput, type SolvedStream, solvedStream } from './input';
+import { streamNotes } from './streamNotes';
 import {
   CONDITION_ROWS,
   ENERGY_ROWS,
@@ -16,6 +17,7 @@ import {
   VAPOUR_ROWS,
 } from './streamRows';
 import type { Cell, Row, Table } from './types';
+import { vapourAsGas } from './volumeFlows';
 
 const byNumber = new Intl.Collator('en', { numeric: true });
 /** Streams in the order of their numbers: 2 before 10. */
@@ -27,7 +29,7 @@ export function streamTable(input: ReportInput): Table {
   const choices = input.sketch.documents ?? {};
   const whole = allStreams(input, (stream) => !choices.withoutStreams?.includes(stream.id));
   const table = { ...whole, rows: withoutRows(whole.rows, choices.withoutRows ?? []) };
-  return { ...table, notes: notes(input, table) };
+  return { ...table, notes: streamNotes(input, table) };
 }
 
 /** Rows that may be left out, by name; composition and component flows only as a whole. */
@@ -131,13 +133,9 @@ const secondLiquid = (stream: SolvedStream | undefined): Cell => {
   return text(hasBlock(stream, 'liquid') ? 'none found' : 'not tested');
 };
 
-const asGas = (measures: Measures): Measures => ({
-  ...measures,
-  units: { ...measures.units, molarFlow: REFERENCE_GAS[measures.set].unit },
-});
-
 function ruled(rule: RowRule, results: readonly (SolvedStream | undefined)[], measures: Measures): Row {
-  const own = rule.gauge ? withReference(measures, 'gauge') : rule.asGas ? asGas(measures) : measures;
+  const gas = rule.asGas ? vapourAsGas(measures) : undefined;
+  const own = rule.gauge ? withReference(measures, 'gauge') : (gas?.measures ?? measures);
   const unit = displayUnit(rule.dim, own);
   const values = results.map((stream) => {
     const si = stream ? rule.value(stream) : undefined;
@@ -146,7 +144,7 @@ function ruled(rule: RowRule, results: readonly (SolvedStream | undefined)[], me
   const decimals = decimalsFor(values, rule.figures, rule.least, rule.most);
   return {
     key: rule.key,
-    label: rule.label,
+    label: gas?.label ?? rule.label,
     unit: rule.unitLabel ?? unit.label,
     cells: values.map((value) => number(value, decimals, rule.bold === true)),
   };
@@ -208,50 +206,5 @@ function componentFlows(
       style: 'total',
       cells: totals.map((value) => number(value, decimals, true)),
     },
-  ];
-}
-
-/**
- * Largest difference between a printed total and the sum of the printed figures above it, and in which stream it is. No
- * figure is adjusted.
- */
-export function roundingDifference(
-  rows: readonly Row[],
-  stem: 'm' | 'z',
-): { readonly value: number; readonly decimals: number; readonly at: number } {
-  const parts = rows.filter((row) => row.key.startsWith(`${stem}.`) && row.key !== `${stem}.total`);
-  const total = rows.find((row) => row.key === `${stem}.total`);
-  let worst = { value: 0, decimals: 2, at: -1 };
-  total?.cells.forEach((cell, at) => {
-    if (cell.is !== 'number') return;
-    const { decimals } = cell;
-    const sum = parts.reduce((so, row) => so + printedValue(row.cells[at] ?? absent), 0);
-    // Sums of printed decimals carry binary dust: what counts is the last printed place.
-    const value = Number(Math.abs(sum - printedValue(cell)).toFixed(decimals));
-    worst = value > worst.value ? { value, decimals, at } : { ...worst, decimals };
-  });
-  return worst;
-}
-
-function notes(input: ReportInput, table: Pick<Table, 'columns' | 'rows'>): string[] {
-  const measures = measuresOf(input);
-  const massUnit = displayUnit('massFlow', measures).label;
-  const said = (stem: 'm' | 'z', unit: string): string => {
-    const { value, decimals, at } = roundingDifference(table.rows, stem);
-    return `${value.toFixed(decimals)} ${unit} at most${at >= 0 ? ` (stream ${table.columns[at]?.head})` : ''}`;
-  };
-  const shown = ['m', 'z'].filter((stem) => table.rows.some((row) => row.key === `${stem}.total`));
-  const sums = [
-    ...(shown.includes('z') ? [said('z', 'mol %')] : []),
-    ...(shown.includes('m') ? [said('m', massUnit)] : []),
-  ];
-  const site = displayUnit('pressure', measures);
-  return [
-    ...(sums.length > 0
-      ? [
-          `Sum of printed figures differs by ${sums.join(' and by ')}: rounding. Totals come from unrounded values; no figure is adjusted.`,
-        ]
-      : []),
-    `Enthalpy: from the elements at 298.15 K, and from the same components as ideal gas at 25 °C; only differences mean something. Gauge pressure is above ${site.toDisplay(input.sitePressure_Pa).toPrecision(6)} ${site.label}. Normal gas: the vapour alone, as ideal gas at ${REFERENCE_GAS[measures.set].state}. Standard liquid: 15 °C, ideal mixing of pure liquids; none with 1 ppm or more (mol) of chemicals that are gases above their critical temperature at 15 °C. “–” absent, “<0.01” a trace. Decimals are fixed row by row.`,
   ];
 }

@@ -60,6 +60,30 @@ describe('the stream drawer', () => {
     expect(shown).toContain('Pressure3.987bar(g)');
   });
 
+  test('tells the vapour alone as gas, with the reference state in the row’s name', () => {
+    const phase = { h_J_mol: 0, Z: 0.9, MW_g_mol: 20, density_kg_m3: 10, cp_J_molK: 40 } as const;
+    openStream(
+      solvedStream({
+        n_mol_s: 10,
+        vapourFraction: 0.4,
+        phases: [
+          { ...phase, kind: 'vapour', fraction: 0.4, x: Float64Array.of(0.9, 0.1, 0) },
+          { ...phase, kind: 'liquid', fraction: 0.6, x: Float64Array.of(0.1, 0.4, 0.5) },
+        ],
+      }),
+    );
+    const shown = [...document.querySelectorAll('.figure-row')].map((row) => row.textContent);
+    // Derived: 4 mol/s x 3600 s/h x 22.413969e-3 m3/mol = 322.76 m3/h.
+    expect(shown).toContain('Vapour as ideal gas, 0 °C, 1.01325 bar322.8Nm³/h');
+  });
+
+  test('says which chemical leaves a stream without a standard liquid flow', () => {
+    openStream(solvedStream({ noStandardLiquid: [0] }));
+    const row = screen.getByText('Standard liquid, 15 °C').closest('.figure-row');
+    expect(row?.textContent).toContain('–');
+    expect(row?.getAttribute('title')).toBe('Methane has no liquid density at 15 °C');
+  });
+
   test('shows an older result as out of date while a new one is missing', () => {
     openStream(solvedStream(), { state: 'waiting' });
     expect(screen.getByText(/Out of date/)).toBeTruthy();

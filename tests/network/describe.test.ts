@@ -40,14 +40,23 @@ describe('a shown stream', () => {
     expect(s.phases[0]!.viscosityRule).toBe('viscosity/log-average');
   });
 
-  test('has a standard liquid volume in spite of a trace of gas, and none with more of it', () => {
-    const volume = (gas: number): number | undefined =>
-      shown({ T: 288.15, P: 101325 }, 0, gas, 1 - gas, 0).standardLiquid_m3_s;
-    const hexane = volume(0)!;
-    // Derived: a millionth is the bound; the volume of what is left is that of its hexane.
-    expect(volume(1e-60)! / hexane).toBeCloseTo(1, 12);
-    expect(volume(9e-7)! / (hexane * (1 - 9e-7))).toBeCloseTo(1, 12);
-    expect(volume(1.1e-6)).toBeUndefined();
+  test('has a standard liquid volume in spite of a trace of gas by mass; with more of it, it names the gas', () => {
+    // Mole fraction of methane (16.043 g/mol) in hexane (86.177 g/mol) that makes a part w of the mass.
+    const at = (w: number) => {
+      const gas = w / 16.043 / (w / 16.043 + (1 - w) / 86.177);
+      return shown({ T: 288.15, P: 101325 }, 0, gas, 1 - gas, 0);
+    };
+    const hexane = at(0).standardLiquid_m3_s!;
+    expect(at(0).noStandardLiquid).toBeUndefined();
+    // Derived: the bound is a millionth of the mass; the volume of what is left is that of its hexane.
+    expect(at(1e-60).standardLiquid_m3_s! / hexane).toBeCloseTo(1, 12);
+    const trace = at(9e-7);
+    expect(trace.standardLiquid_m3_s! / (hexane * trace.z[2]!)).toBeCloseTo(1, 12);
+    const more = at(1.1e-6);
+    expect(more.standardLiquid_m3_s).toBeUndefined();
+    // By place in the basis: methane is the second.
+    expect(more.noStandardLiquid).toEqual([1]);
+    expect(shown({ T: 288.15, P: 101325 }, 1, 1, 1, 0).noStandardLiquid).toEqual([0, 1]);
   });
 
   test('adds its phases up: amounts, mass, enthalpy, entropy, volume', () => {

@@ -54,7 +54,7 @@ function expected(stream: StreamJson, { chemicals }: ResultsJson['basis']): [str
           [`${name}/Molar mass kg/kmol`, p.MW_g_mol],
           [`${name}/Z`, p.Z],
           [`${name}/Heat capacity kJ/(kg K)`, p.cp_J_molK / p.MW_g_mol],
-          [`${name}/Cp/Cv`, p.cpOverCv],
+          ...(name === 'Vapour' ? [[`${name}/Cp/Cv`, p.cpOverCv] as [string, number | undefined]] : []),
           [`${name}/Viscosity mPa s`, p.viscosity_Pa_s === undefined ? undefined : p.viscosity_Pa_s * 1000],
         ]
       : [];
@@ -71,11 +71,11 @@ function expected(stream: StreamJson, { chemicals }: ResultsJson['basis']): [str
     ['Flows/Mass flow kg/h', stream.m_kg_s * 3600],
     // Derived: ideal gas at 0 °C and 101325 Pa, 0.0224139695 m³/mol.
     [
-      'Flows/Normal gas flow Nm³/h',
+      'Flows/Vapour as ideal gas, 0 °C, 1.01325 bar Nm³/h',
       vapour && vapour.fraction * stream.n_mol_s * ((8.314462618 * 273.15) / 101325) * 3600,
     ],
     [
-      'Flows/Standard liquid flow m³/h',
+      'Flows/Standard liquid, 15 °C m³/h',
       stream.standardLiquid_m3_s === undefined ? undefined : stream.standardLiquid_m3_s * 3600,
     ],
     ['Flows/Molar mass kg/kmol', stream.MW_g_mol],

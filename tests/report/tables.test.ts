@@ -4,7 +4,7 @@ import { tableCsv, writeCsv } from '../../src/report/csv';
 import type { ReportInput } from '../../src/report/input';
 import { buildReport } from '../../src/report/model';
 import { tablePages } from '../../src/report/pdf/pages';
-import { roundingDifference } from '../../src/report/streamTable';
+import { roundingDifference } from '../../src/report/streamNotes';
 import type { ReportModel, Row, Table } from '../../src/report/types';
 import { solvedExample } from './solved';
 

@@ -1,6 +1,9 @@
 import { FigureRow } from '../../parts/Figure';
 import { useMeasures, withReference } from '../../parts/measures';
-import { ABSENT, type Dimension, type Measures, REFERENCE_GAS, show } from '../../quantity';
+import { ABSENT, type Dimension, type Measures, show } from '../../quantity';
+import { noStandardLiquid, STANDARD_LIQUID, vapour_mol_s, vapourAsGas } from '../../report/volumeFlows';
+import { useSolvedChemicals } from '../chemicalNames';
+import { capital } from '../words';
 import type { SolvedStream } from './sentence';
 
 interface Props {
@@ -23,7 +26,9 @@ export function Conditions({ stream, outOfDate }: Props) {
       <FigureRow label={label} title={title} text={text} unit={unit ?? shown.unit} outOfDate={outOfDate} />
     );
   };
-  const gas = { ...measures, units: { ...measures.units, molarFlow: REFERENCE_GAS[measures.set].unit } };
+  const chemicals = useSolvedChemicals();
+  const gas = vapourAsGas(measures);
+  const whyNone = noStandardLiquid(stream, (k) => chemicals[k]?.name ?? 'a chemical');
   return (
     <section className="section">
       <dl className="figures">
@@ -35,15 +40,12 @@ export function Conditions({ stream, outOfDate }: Props) {
         {row('Molar flow', stream.n_mol_s, 'molarFlow')}
         {row('Mass flow', stream.m_kg_s, 'massFlow')}
         {row('Volume flow, actual', stream.volume_m3_s, 'volumeFlow')}
-        {row('All as ideal gas', stream.n_mol_s, 'molarFlow', {
-          as: gas,
-          title: `The whole stream, liquid too, as ideal gas at ${REFERENCE_GAS[measures.set].state}`,
+        {row(gas.label, vapour_mol_s(stream), 'molarFlow', {
+          as: gas.measures,
+          title: 'The vapour alone, or the dense phase; no liquid',
         })}
-        {row('As liquid, 15 °C', stream.standardLiquid_m3_s, 'volumeFlow', {
-          title:
-            stream.standardLiquid_m3_s === undefined
-              ? '1 ppm (mol) or more is above its critical temperature at 15 °C and has no liquid there'
-              : 'Ideal mixing of the pure liquids at 15 °C',
+        {row(STANDARD_LIQUID, stream.standardLiquid_m3_s, 'volumeFlow', {
+          title: whyNone === undefined ? 'Ideal mixing of the pure liquids' : capital(whyNone),
         })}
         {row('Molar mass', stream.MW_g_mol / 1000, 'molarMass')}
       </dl>

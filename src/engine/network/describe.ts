@@ -3,7 +3,7 @@ import type { Model } from '../thermo/types';
 import { phaseVolume_m3_mol } from '../units/volume';
 import { capacityRatio } from './capacityRatio';
 import { type ClosureData, idealDatum_W } from './closure';
-import { standardLiquid_m3_s } from './standardLiquid';
+import { standardLiquid } from './standardLiquid';
 import type { PhaseResult, StreamResult } from './types';
 import { phaseViscosity } from './viscosity';
 
@@ -83,7 +83,7 @@ export function describe(stream: StreamState, model: Model, data: ClosureData): 
     if (gas) vapourMass += (flow * result.MW_g_mol) / 1e3;
     return result;
   });
-  const standard = standardLiquid_m3_s(stream.n_mol_s, model);
+  const standard = standardLiquid(stream.n_mol_s, model);
   return {
     state: 'solved',
     T_K: stream.T_K,
@@ -99,7 +99,7 @@ export function describe(stream: StreamState, model: Model, data: ClosureData): 
     vapourMassFraction: vapourMass / m,
     z: stream.n_mol_s.map((x) => x / n),
     volume_m3_s: volume,
-    ...(standard === undefined ? {} : { standardLiquid_m3_s: standard }),
+    ...('m3_s' in standard ? { standardLiquid_m3_s: standard.m3_s } : { noStandardLiquid: standard.lacking }),
     phases,
     ...(stream.hiddenLiquid ? { hiddenLiquid: stream.hiddenLiquid } : {}),
     ...(stream.liquidsTogether ? { liquidsTogether: true } : {}),

@@ -87,6 +87,8 @@ export type StreamResult =
       readonly volume_m3_s: number;
       /** As liquid at 15 degC by ideal mixing of pure liquids [m3/s]; absent when a chemical has no liquid there. */
       readonly standardLiquid_m3_s?: number;
+      /** Where that is absent: the chemicals, by place in the basis, that have no liquid density there and are no mere trace. */
+      readonly noStandardLiquid?: readonly number[];
       readonly phases: readonly PhaseResult[];
       readonly hiddenLiquid?: Float64Array;
       /** The liquid is two liquids told together: enthalpy and entropy of both, composition of the whole. */
