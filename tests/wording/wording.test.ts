@@ -31,7 +31,7 @@ describe('every kind', () => {
       ...Object.keys(settings).map((key) => settingWord(kind, key)),
       ...Object.keys(results).map((key) => resultWord(kind, key)),
     ];
-    for (const word of words) expect(word).toMatch(/^[a-zA-Z][a-zA-Z0-9 ()-]*$/);
+    for (const word of words) expect(word).toMatch(/^[a-zA-Z][a-zA-Z0-9 °()-]*$/);
   });
 
   test('that is called by its service goes by that', () => {

@@ -30,8 +30,8 @@ export const chamber: KindWords = {
     CO2_kg_s: 'carbon dioxide that leaves',
     air_mol_s: 'air drawn from outside',
     theoreticalO2_mol_s: 'theoretical oxygen',
-    LHV_W: 'lower heating value at 25 degC as ideal gas',
-    HHV_W: 'higher heating value at 25 degC as ideal gas',
+    LHV_W: 'lower heating value at 25 °C as ideal gas',
+    HHV_W: 'higher heating value at 25 °C as ideal gas',
     duty_W: 'duty',
   },
   sentences: {

@@ -20,7 +20,7 @@ export const reactor: KindWords = {
     P_Pa: 'pressure',
     vapourFraction: 'vapour fraction',
     duty_W: 'duty',
-    heatOfReaction_W: 'heat of reaction at 25 degC as ideal gas',
+    heatOfReaction_W: 'heat of reaction at 25 °C as ideal gas',
     extents_mol_s: 'turns of each reaction',
   },
   sentences: {
