@@ -15,7 +15,7 @@ import type { Offer, PortRef, SheetStore, Target } from './sheetStore';
 const CATCH = 14;
 /** A unit chosen by keys stands this far from the port, if there is room [px]. */
 const BESIDE = 104;
-/** Shorter pulls are taken for a click [screen px]. */
+/** Shorter pulls are taken for a click on the unit: ports of a dot on the line lie over all of it [screen px]. */
 const SHORTEST = 20;
 
 /** Takes hold of a port: every other port shows whether the stream can end there. */
@@ -92,7 +92,7 @@ export function endPull(stores: Stores, sheet: SheetStore, zoom: number): void {
   }
   if (Math.hypot(at[0] - x, at[1] - y) * zoom >= SHORTEST) {
     sheet.setState({ offer: { from: { unit: from.unit, port: from.port, dir: from.dir }, at } });
-  }
+  } else stores.session.select([from.unit]);
 }
 
 /** The first port of a kind that faces the other way, by its full name. */

@@ -47,6 +47,16 @@ test('a loose stream pulled to a fitting port keeps its number, in one step', ()
   expect(labels()).toEqual(['connect V-101 and E-101']);
 });
 
+test('a click on a port selects its unit, and makes and offers nothing', () => {
+  const { pull, port, stores, now, sheet } = sheetOn();
+  const before = now();
+  const [x, y] = port('u5', 'out').place.at;
+  pull(port('u5', 'out'), [x + 3, y - 2]);
+  expect(stores.session.getState()).toMatchObject({ units: ['u5'], drawer: { is: 'unit', id: 'u5' } });
+  expect(now()).toBe(before);
+  expect(sheet.getState().offer).toBeNull();
+});
+
 test('a port that does not fit gives its reason and nothing changes', () => {
   const { pull, port, stores, now, sheet } = sheetOn();
   const before = now();
