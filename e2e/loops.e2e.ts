@@ -1,8 +1,8 @@
 import type { Page } from 'playwright/test';
 import { expect } from 'playwright/test';
-import { field, labelText, unit } from './hand';
+import { drag, field, labelText, middleOf, type Place, pull, stream, unit } from './hand';
 import { solved, test } from './page';
-import { columnLoops, given } from './sketches';
+import { closedLoop, columnLoops, given, withoutPurge } from './sketches';
 
 /** Many short steps, seconds in all: long enough to be told of on a fast machine, never silent for long on a slow one. */
 const SLOW = columnLoops(8, 100);
@@ -89,5 +89,71 @@ test('a slow solve is stopped by its button, shows no number of before as new, a
   expect(new Set(answered.map((text) => /edit (\d+)/.exec(text)?.[1])).size).toBe(1);
   await expect.poll(() => labelText(page, '1')).toContain('110.0');
   // What goes in comes out: the answer is the edit's.
+  await expect(page.locator('.balance')).toHaveAttribute('data-closed', 'yes');
+});
+
+async function type(page: Page, path: string, text: string): Promise<void> {
+  await field(page, path).fill(text);
+  await field(page, path).press('Enter');
+}
+/** A place on the sheet, counted from its upper left corner. */
+async function onSheet(page: Page, x: number, y: number): Promise<Place> {
+  const sheet = await page.locator('.sheet-flow').boundingBox();
+  if (!sheet) throw new Error('there is no sheet');
+  return [sheet.x + x, sheet.y + y];
+}
+
+test('a loop that nothing enters is named with what to do, and what it says to do gives its answer', async ({
+  quiet: page,
+}) => {
+  await given(page, closedLoop());
+  await expect(strip(page)).toHaveText(
+    'Not solved yet: nothing enters the loop of E-101, E-102, K-101 and PV-101',
+  );
+  await unit(page, 'K-101').click();
+  await expect(page.locator('.drawer')).toContainText('delete one of its streams');
+  await page.keyboard.press('Escape');
+
+  await stream(page, '4').locator('.stream-body').click();
+  await page.keyboard.press('Delete');
+  await pull(page, 'K-101', 'in', await onSheet(page, 120, 220));
+  await page.getByRole('menuitem', { name: 'Feed' }).click();
+  await pull(page, 'E-102', 'out', await onSheet(page, 120, 560));
+  await page.getByRole('menuitem', { name: 'Product' }).click();
+  await unit(page, 'FEED-1').click();
+  await type(page, 'state.T', '-10 degC');
+  await type(page, 'state.P', '2.4 bar');
+  await type(page, 'flow', '100 kmol/h');
+  await type(page, 'composition.parts.propane', '100 %');
+  await solved(page);
+  await page.keyboard.press('Escape');
+  // It comes out as it goes in: flow, temperature, pressure and enthalpy, hence the state.
+  const numbers = async (number: string): Promise<readonly string[]> =>
+    (await labelText(page, number)).match(/-?−?\d[\d.]*/g) ?? [];
+  const entering = await numbers('5');
+  expect(entering).toEqual(['100.0', '−10.00', '2.400']);
+  expect(await numbers('4')).toEqual(entering);
+});
+
+test('a chemical without a way out is named with its loop and stream, and the purge that is advised lets it out', async ({
+  quiet: page,
+}) => {
+  await given(page, withoutPurge());
+  await expect(strip(page)).toHaveText(
+    'Not solved yet: Nitrogen has no way out of the loop of E-101, K-101, V-101 and J-1',
+  );
+  await expect(page.locator('.balance')).toContainText('Nitrogen has no way out of the loop');
+  await unit(page, 'K-101').click();
+  await expect(page.locator('.drawer')).toContainText('drop a divide from the shelf onto stream 4');
+  await page.keyboard.press('Escape');
+
+  const shelf = await middleOf(page.locator('[data-shelf="divide"]'));
+  await drag(page, shelf, await middleOf(stream(page, '4').locator('.stream-body')));
+  await expect(unit(page, 'D-1')).toBeAttached();
+  await pull(page, 'D-1', 'out2', await onSheet(page, 1080, 160));
+  await page.getByRole('menuitem', { name: 'Product' }).click();
+  await unit(page, 'D-1').click();
+  await type(page, 'shares.out2', '2 %');
+  await solved(page);
   await expect(page.locator('.balance')).toHaveAttribute('data-closed', 'yes');
 });

@@ -135,3 +135,70 @@ export function columnLoops(columns: number, stages: number): string {
     streams,
   });
 }
+
+const sketchOf = (
+  title: string,
+  chemicals: readonly string[],
+  units: readonly object[],
+  ends: readonly string[],
+) =>
+  JSON.stringify({
+    format: 'splitwright.sketch',
+    version: 1,
+    title: { title },
+    chemicals,
+    model: { kind: 'peng-robinson', alpha: '1976', bankPairs: true, pairs: [] },
+    units,
+    streams: ends.map((text, k) => {
+      const [from = '', to = ''] = text.split(' > ');
+      return { id: `s${k + 1}`, number: String(k + 1), from: from.split(' '), to: to.split(' ') };
+    }),
+  });
+const unitOf = (tag: string, kind: string, at: readonly [number, number], settings: object = {}) => ({
+  id: tag,
+  tag,
+  kind,
+  at,
+  settings,
+});
+
+/** Propane goes round by a compressor; nothing enters, so nothing says how much. */
+export const closedLoop = (): string =>
+  sketchOf(
+    'Refrigeration',
+    ['propane'],
+    [
+      unitOf('K-101', 'compressor', [300, 100], { p: { P: '14 bar' }, efficiency: { isentropic: '75 %' } }),
+      unitOf('E-101', 'cooler', [500, 100], { T: '38 degC', p: { drop: '0.3 bar' } }),
+      unitOf('PV-101', 'valve', [500, 300], { p: { P: '2.5 bar' } }),
+      unitOf('E-102', 'heater', [300, 300], { T: '-10 degC', p: { drop: '0.1 bar' } }),
+    ],
+    ['K-101 out > E-101 in', 'E-101 out > PV-101 in', 'PV-101 out > E-102 in', 'E-102 out > K-101 in'],
+  );
+
+/** Hexane is condensed out of nitrogen, which goes round and has no way out. */
+export const withoutPurge = (): string =>
+  sketchOf(
+    'Gas loop without a purge',
+    ['nitrogen', 'n-hexane'],
+    [
+      unitOf('FEED-1', 'feed', [0, 200], {
+        state: { T: '57 degC', P: '2 bar' },
+        flow: '18 kmol/h',
+        composition: { basis: 'mole', parts: { nitrogen: '10 %', 'n-hexane': '90 %' } },
+      }),
+      unitOf('J-1', 'join', [200, 200]),
+      unitOf('E-101', 'cooler', [300, 200], { T: '-8 degC', p: { drop: '0.1 bar' } }),
+      unitOf('V-101', 'drum', [450, 200]),
+      unitOf('K-101', 'compressor', [300, 40], { p: { P: '2 bar' }, efficiency: { isentropic: '70 %' } }),
+      unitOf('PROD-1', 'product', [700, 300]),
+    ],
+    [
+      'FEED-1 out > J-1 in1',
+      'J-1 out > E-101 in',
+      'E-101 out > V-101 in1',
+      'V-101 vapour > K-101 in',
+      'K-101 out > J-1 in2',
+      'V-101 liquid > PROD-1 in',
+    ],
+  );

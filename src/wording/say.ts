@@ -1,6 +1,6 @@
 import type { StreamId, UnitId } from '../engine/ids';
 import type { Evidence, Finding } from '../engine/outcome';
-import { formatDecimals, type MeasureSet, type Measures, show } from '../quantity';
+import { formatDecimals, type MeasureSet, type Measures, show, THIN_SPACE } from '../quantity';
 import { SENTENCES } from './codes';
 import { EQUILIBRIUM_WORDS } from './general/equilibrium';
 import { SKETCH_WORDS } from './general/sketch';
@@ -74,6 +74,9 @@ function whereOf({ at }: Finding, ctx: SayContext): string {
   return [unit, stream].filter(Boolean).join(', ');
 }
 
+/** In running text a line may not end within a number: "281" above "300 kmol/h" reads as two. */
+const unbroken = (text: string): string => text.replaceAll(THIN_SPACE, '\u202f');
+
 /** What the document and a flash say. */
 const WORDS: Readonly<Record<string, Words>> = { ...SKETCH_WORDS, ...EQUILIBRIUM_WORDS };
 
@@ -100,8 +103,8 @@ export function sayFinding(f: Finding, ctx: SayContext): Said {
   const basis = f.evidence.find((e) => e.name === 'basis')?.text;
   return {
     title,
-    sentence: capital(sentence),
-    ...(next === undefined ? {} : { next }),
+    sentence: unbroken(capital(sentence)),
+    ...(next === undefined ? {} : { next: unbroken(next) }),
     ...(basis === undefined ? {} : { basis: basisWord(basis) }),
     where: whereOf(f, ctx),
   };

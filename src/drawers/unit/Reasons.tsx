@@ -29,9 +29,30 @@ export function Reasons({ reasons }: { readonly reasons: readonly Finding[] }) {
   );
 }
 
-/** Evidence that the sentence does not carry already. */
-const unsaid = ({ code, evidence }: Finding): readonly Evidence[] =>
-  evidence.filter(({ name }) => !SENTENCES[code]?.says.includes(`{${name}`));
+/** What to do about values that are missing and no field of the unit asks for; what is missing stands in the head. */
+export function NextSteps({ reasons }: { readonly reasons: readonly Finding[] }) {
+  const say = useSay();
+  const steps = [...new Set(reasons.flatMap((reason) => say(reason).next ?? []))];
+  if (steps.length === 0) return null;
+  return (
+    <section className="section" aria-label="What to do">
+      <div className="section-head">
+        <h3>What to do</h3>
+      </div>
+      {steps.map((step) => (
+        <div className="reason" key={step}>
+          <p className="next">{step}</p>
+        </div>
+      ))}
+    </section>
+  );
+}
+
+/** Evidence that neither the sentence nor the next step carries already. */
+function unsaid({ code, evidence }: Finding): readonly Evidence[] {
+  const { says = '', next = '' } = SENTENCES[code] ?? {};
+  return evidence.filter(({ name }) => !`${says} ${next}`.includes(`{${name}`));
+}
 
 function EvidenceList({ evidence }: { readonly evidence: readonly Evidence[] }) {
   const measures = useMeasures();

@@ -17,7 +17,7 @@ import { useSteady } from '../useSteady';
 import { capital, kindWord } from '../words';
 import { FormProvider, makeForm } from './form';
 import { Known } from './Known';
-import { Reasons } from './Reasons';
+import { NextSteps, Reasons } from './Reasons';
 import { Results } from './Results';
 import { SettingEditor } from './SettingEditor';
 import { FieldFindingList } from './SettingRow';
@@ -127,7 +127,9 @@ function UnitHead({ unit, isKnown }: { readonly unit: SketchUnit; readonly isKno
 
 function WhyNot({ id }: { readonly id: UnitId }) {
   const latest = useUnitResult(id)?.latest;
-  return <Reasons reasons={latest?.state === 'no-solution' ? (latest.reasons ?? []) : []} />;
+  const reasons = latest?.reasons ?? [];
+  if (latest?.state === 'no-solution') return <Reasons reasons={reasons} />;
+  return <NextSteps reasons={latest?.state === 'needs-value' ? reasons : []} />;
 }
 
 function Names({ unit }: { readonly unit: SketchUnit }) {

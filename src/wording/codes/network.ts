@@ -5,17 +5,17 @@ export const NETWORK_SENTENCES: Readonly<Record<string, Sentence>> = {
   'network/nothing-enters': {
     title: 'Nothing enters the loop',
     says: 'No stream leads into the loop of {unit...}, so nothing says how much flows in it.',
-    next: 'Give its circulating flow: cut the loop at stream {stream}, begin it there with a feed of what shall go round and end it in a product; it holds when the product comes out as the feed goes in. Or let a feed join it, and something leave.',
+    next: 'Say how much shall go round: delete one of its streams, best one that leaves a heater or a cooler with a set temperature. Draw a feed to the inlet that is free then, with that flow, temperature and pressure, and a product from the free outlet. The answer is that of the closed loop when the product comes out in the state in which the feed goes in; change the feed until it does. Or let a feed join the loop, and something leave it.',
   },
   'network/no-way-out': {
     title: 'No way out',
-    says: 'What has no way out of the loop of {unit...}: {chemical...}. {entering} enter, {leaving} leave, and with {round} going round it still gathers.',
-    next: 'Draw a purge from stream {stream}, {fraction%} of which is that, or let more of it leave elsewhere.',
+    says: 'The loop of {unit...} has no way out for {chemical...}: {entering} enter, {leaving} leave, and with {round} going round it still gathers.',
+    next: 'Give it a purge: drop a divide from the shelf onto stream {stream}, {fraction%} of which is that, draw a product from its free outlet, and set the share that leaves there. Or let more of it leave elsewhere.',
   },
   'network/loop-unsettled': {
     title: 'The loop does not settle',
     says: 'After {passes} passes stream {stream} still comes back changed by {residual%} of what was assumed; the loop is {unit...}.',
-    next: 'Open the loop at stream {stream} with a product and a feed, see what comes back, and change what it reacts to most.',
+    next: 'Open the loop: delete stream {stream}, draw a product from the outlet that is free then and a feed to the free inlet. See what comes out for what goes in, and change what it reacts to most.',
   },
   'network/pressure-falls': {
     title: 'The pressure falls on every way round',
