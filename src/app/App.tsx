@@ -15,7 +15,7 @@ import { Dialogue } from './Dialogue';
 import { DocumentsPage } from './export/DocumentsPage';
 import { UnderWayList } from './export/UnderWayList';
 import { cancelNewest } from './export/underWay';
-import { FindDialogue } from './find/FindDialogue';
+import { FindField } from './find/FindField';
 import { isTyping } from './isTyping';
 import { KeyList } from './KeyList';
 import { MySketches } from './MySketches';
@@ -57,7 +57,6 @@ function Over() {
   if (over === 'keys') return <KeyList actions={actions} />;
   if (over === 'open') return <MySketches />;
   if (over === 'share') return <ShareDialogue />;
-  if (over === 'find') return <FindDialogue />;
   if (over === 'documents') return <DocumentsPage />;
   if (over === 'pairs')
     return (
@@ -80,6 +79,7 @@ function Workplace({ stores }: { readonly stores: Stores }) {
   const theme = useSession((state) => state.theme);
   useEffect(() => applyTheme(theme), [theme]);
   const isBlank = useSketch((state) => state.sketch.units.length === 0);
+  const finding = useSession((state) => state.over === 'find');
   const spoken = useSession((state) => state.spoken);
   return (
     <div className="app">
@@ -89,6 +89,7 @@ function Workplace({ stores }: { readonly stores: Stores }) {
         <Sheet />
         {isBlank ? <Start /> : null}
         <Notice />
+        {finding ? <FindField /> : null}
         <div className="at-foot">
           <UnderWayList />
           <SolvingLine />

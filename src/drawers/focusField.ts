@@ -9,3 +9,13 @@ export function focusField(path: string): void {
     target?.scrollIntoView?.({ block: 'center' });
   });
 }
+
+/** Puts the focus on a chemical's row once the chemicals drawer stands; its first field keeps it where there is no such row. */
+export function focusChemical(id: string): void {
+  requestAnimationFrame(() => {
+    const rows = [...document.querySelectorAll<HTMLElement>('.drawer .chemicals > [data-chemical]')];
+    const row = rows.find((element) => element.dataset.chemical === id);
+    row?.focus();
+    row?.scrollIntoView?.({ block: 'center' });
+  });
+}

@@ -11,8 +11,8 @@ export interface Action {
   readonly whileTyping?: true;
   /** The browser tells of the key itself (copy, cut, paste): it is shown with the action, and not listened for. */
   readonly byBrowser?: true;
-  /** Where its keys are heard (the sheet has the focus); absent: everywhere. Menus do not ask. */
-  listens?(stores: Stores): boolean;
+  /** Where a key of its own is heard (the sheet has the focus); absent: everywhere. Menus do not ask. */
+  listens?(stores: Stores, key: string): boolean;
   when?(stores: Stores): boolean;
   /** Why it cannot be run now, where a user could wonder: a menu then lists it with the reason. */
   whyNot?(stores: Stores): string | undefined;
@@ -77,7 +77,7 @@ export function actionFor(
     (action) =>
       action.keys.includes(text) &&
       !action.byBrowser &&
-      (action.listens?.(stores) ?? true) &&
+      (action.listens?.(stores, text) ?? true) &&
       (!typing || action.whileTyping === true) &&
       (action.when?.(stores) ?? true),
   );

@@ -1,6 +1,7 @@
 import type { StreamId, UnitId } from '../../engine/ids';
 import type { Basis } from '../../engine/network/types';
 import type { Sketch } from '../../sketch/types';
+import { describeStream } from '../../store/commands';
 import { kindWord } from '../../wording';
 
 export type Target =
@@ -13,13 +14,15 @@ export interface FoundThing {
   readonly target: Target;
   /** "C-101", "Stream 12", "Benzene" */
   readonly name: string;
-  /** "column, Benzene column", "K-101 to Light ends", "component" */
+  /** "column, Benzene column", "stream, K-101 to Light ends", "chemical" */
   readonly about: string;
-  /** What it goes by in a search, the best first: the number of a stream, the tag of a unit. */
-  readonly words: readonly string[];
+  /** What it is called: the tag, the number, the chemical's name. */
+  readonly own: readonly string[];
+  /** What else it goes by: the name of the unit, the kind, the description. */
+  readonly other: readonly string[];
 }
 
-/** Everything that can be found: units, streams, then components, each in the order of the sketch. */
+/** Everything that can be found: units, streams, then chemicals, each in the order of the sketch. */
 export function thingsOf(
   { units, streams }: Pick<Sketch, 'units' | 'streams'>,
   chemicals: Basis['chemicals'],
@@ -34,24 +37,27 @@ export function thingsOf(
         target: { unit: id },
         name: tag,
         about: [word, name].filter(Boolean).join(', '),
-        words: [tag, name ?? '', word],
+        own: [tag],
+        other: [name ?? '', word],
       };
     }),
-    ...streams.map(({ id, number, name, from, to }): FoundThing => {
-      const ends = `${endOf(from)} to ${endOf(to)}`;
+    ...streams.map((stream): FoundThing => {
+      const { id, number, name, from, to } = stream;
       return {
         target: { stream: id },
         name: `Stream ${number}`,
-        about: [name, ends].filter(Boolean).join(', '),
-        words: [number, name ?? '', `stream ${number}`],
+        about: [name, `${endOf(from)} to ${endOf(to)}`].filter(Boolean).join(', '),
+        own: [number],
+        other: [describeStream({ units }, stream), `stream ${number}`],
       };
     }),
     ...chemicals.map(
-      ({ id, name, formula }): FoundThing => ({
+      ({ id, name, formula, cas, assumed }): FoundThing => ({
         target: { chemical: id },
         name,
-        about: ['component', formula].filter(Boolean).join(', '),
-        words: [name, formula ?? '', id],
+        about: [assumed ? 'chemical that a unit brought in' : 'chemical', formula].filter(Boolean).join(', '),
+        own: [name],
+        other: [formula ?? '', id, cas ?? ''],
       }),
     ),
   ];
@@ -59,12 +65,18 @@ export function thingsOf(
 
 const plain = (text: string): string => text.toLowerCase().replace(/[\s\-–,]/g, '');
 
-/** How well a thing answers: 0 is its own name, then what begins with the words, then what has them. */
-function rank({ words }: FoundThing, wanted: string): number | undefined {
-  const names = words.map(plain);
-  if (names.includes(wanted)) return 0;
-  if (names.some((name) => name.startsWith(wanted))) return 1;
-  return names.some((name) => name.includes(wanted)) ? 2 : undefined;
+/** Fewer letters than this are looked for at the beginning of what a thing goes by, and anywhere in what it is called. */
+const ANYWHERE = 3;
+
+/** How well a thing answers: what it is called before what else it goes by; whole, then beginning, then within. */
+function rank({ own, other }: FoundThing, wanted: string): number | undefined {
+  const [called, known] = [own.map(plain), other.map(plain)];
+  if (called.includes(wanted)) return 0;
+  if (known.includes(wanted)) return 1;
+  if (called.some((word) => word.startsWith(wanted))) return 2;
+  if (known.some((word) => word.startsWith(wanted))) return 3;
+  if (called.some((word) => word.includes(wanted))) return 4;
+  return wanted.length >= ANYWHERE && known.some((word) => word.includes(wanted)) ? 5 : undefined;
 }
 
 /** The things that answer a search, the best first; within a rank their order stays. Nothing typed: all of them. */

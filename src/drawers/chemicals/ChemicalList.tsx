@@ -44,7 +44,7 @@ export function ChemicalList() {
     <>
       <ol className="chemicals">
         {chemicals.map((chemical, k) => (
-          <li key={chemical.id} data-chemical={chemical.id}>
+          <li key={chemical.id} data-chemical={chemical.id} tabIndex={-1}>
             <Row chemical={chemical} />
             <span className="tools">
               <button
