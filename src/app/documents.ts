@@ -3,7 +3,7 @@ import { type Opened, openSketch } from '../sketch/read';
 import type { Sketch } from '../sketch/types';
 import { writeSketch } from '../sketch/write';
 import type { Stores } from '../store/react';
-import { sayFileProblem } from '../wording';
+import { sayFileProblem, sayFinding } from '../wording';
 import { download, fileName, pickFile } from './files';
 import { theStorage } from './storage';
 
@@ -84,6 +84,24 @@ function refuse(stores: Stores, name: string, { problems }: Extract<Opened, { ok
   );
 }
 
+/** What was noticed on reading a file that opened: what was added to it, what this version cannot show. */
+function notedOn({ sketch, notes }: Extract<Opened, { ok: true }>): readonly string[] {
+  const context = {
+    measures: sketch.display.set,
+    tag: (id: string) => sketch.units.find((unit) => unit.id === id)?.tag,
+    number: (id: string) => sketch.streams.find((stream) => stream.id === id)?.number,
+  };
+  return notes.map((note) => {
+    const { sentence, next } = sayFinding(note, context);
+    return next ? `${sentence} ${next}` : sentence;
+  });
+}
+
+/** Nothing of a file is lost without a word. */
+function tell(stores: Stores, title: string, lines: readonly string[]): void {
+  if (lines.length > 0) stores.session.say('info', title, lines);
+}
+
 /** Opens a sketch as a new one of its own. Refused: says where and why, and the open sketch stays. */
 export function openAsNew(stores: Stores, source: unknown, name: string): boolean {
   const opened = openSketch(source);
@@ -91,7 +109,10 @@ export function openAsNew(stores: Stores, source: unknown, name: string): boolea
     refuse(stores, name, opened);
     return false;
   }
-  leaveFor(stores, () => showSketch(stores, { ...opened.sketch, id: crypto.randomUUID() }));
+  leaveFor(stores, () => {
+    showSketch(stores, { ...opened.sketch, id: crypto.randomUUID() });
+    tell(stores, `${name} is open.`, notedOn(opened));
+  });
   return true;
 }
 
@@ -110,10 +131,13 @@ export async function openFileOf(stores: Stores, file: File): Promise<void> {
   const isOther = stored !== undefined && writeSketch(stored.document) !== writeSketch(sketch);
   leaveFor(stores, () => {
     showSketch(stores, isOther ? { ...sketch, id: crypto.randomUUID() } : sketch);
+    const notes = notedOn(opened);
     if (isOther)
-      stores.session.say('info', `${file.name} was opened as a sketch of its own.`, [
+      tell(stores, `${file.name} was opened as a sketch of its own.`, [
         'This sketch is on this computer in another state, which stays as it is: see “Sketches on this computer”.',
+        ...notes,
       ]);
+    else tell(stores, `${file.name} is open.`, notes);
   });
 }
 

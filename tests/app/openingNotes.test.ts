@@ -1,0 +1,54 @@
+// @vitest-environment jsdom
+import { readFileSync } from 'node:fs';
+import { expect, test } from 'vitest';
+import { openAsNew, openFileOf } from '../../src/app/documents';
+import { letDown, makePage } from '../drawers/page';
+
+const noticeOf = ({ stores }: ReturnType<typeof makePage>) => stores.session.getState().notice;
+
+function fileOf(text: string, name = 'some.sketch.json'): File {
+  const file = new File([text], name);
+  file.arrayBuffer = async () => new TextEncoder().encode(text).buffer as ArrayBuffer;
+  return file;
+}
+
+test('what a file has that this version cannot show is told when it opens, thing by thing', async () => {
+  const page = makePage(letDown);
+  const text = JSON.stringify({
+    ...letDown,
+    id: 'other',
+    display: { set: 'metric', labels: ['temperature', 'colour'] },
+    streams: letDown.streams.slice(0, 3),
+  });
+  await openFileOf(page.stores, fileOf(text));
+  const notice = noticeOf(page);
+  expect(notice?.title).toBe('some.sketch.json is open.');
+  expect(notice?.lines.join('\n')).toMatch(/label “colour” is not available/);
+  // The drum's liquid always has a stream; the file had none there.
+  expect(notice?.lines.join('\n')).toMatch(/Stream 4 was added at an outlet/);
+  expect(notice?.lines).toHaveLength(2);
+});
+
+test('a link or an example is told of alike, and nothing is said of a file that is whole', async () => {
+  const page = makePage(letDown);
+  openAsNew(
+    page.stores,
+    JSON.stringify({
+      ...letDown,
+      units: [...letDown.units, { id: 'u9', tag: 'X-1', kind: 'washer', settings: {} }],
+    }),
+    'The sketch in the link',
+  );
+  expect(noticeOf(page)?.title).toBe('The sketch in the link is open.');
+  expect(noticeOf(page)?.lines[0]).toMatch(/“washer” is not available in this version; the unit is kept/);
+  for (const name of [
+    'let-down',
+    'aromatic-condensate',
+    'nitrogen-loop',
+    'light-hydrocarbons',
+    'condensate-flash',
+  ]) {
+    await openFileOf(page.stores, fileOf(readFileSync(`public/examples/${name}.sketch.json`, 'utf8')));
+    expect([name, noticeOf(page)]).toEqual([name, null]);
+  }
+});
