@@ -28,8 +28,9 @@ export const BELOW_DEW = rule(
   'temperatureDifference',
   'own-rule',
 );
-/** Told wherever the stability test finds another liquid; the threshold has no effect. */
+/** Told wherever the stability test finds another liquid: there is no threshold that a sketch could move. */
 export const SECOND_LIQUID = rule('column/second-liquid', 'beyond-limit', 0, 'number', 'phase-stability');
+
 /** Thresholds that only a column has. */
 export const COLUMN_RULES: readonly Rule[] = [
   DRIES,
@@ -40,5 +41,4 @@ export const COLUMN_RULES: readonly Rule[] = [
   NEAR_CRITICAL,
   TOO_NEAR_CRITICAL,
   NEAR_CRITICAL_P,
-  SECOND_LIQUID,
 ];

@@ -11,6 +11,7 @@ const HYDRATES = rule('stream/hydrates-not-checked', 'note', 0.5, 'fraction');
 /** Mass density of liquid to vapour. */
 const NEAR_CRITICAL = rule('stream/near-critical', 'caution', 4, 'number');
 const TOO_NEAR_CRITICAL = rule('stream/too-near-critical', 'beyond-limit', 2.5, 'number');
+// Told wherever the stability test finds another liquid: there is no threshold that a sketch could move.
 const SECOND_LIQUID = rule('stream/second-liquid', 'caution', 0, 'number', 'phase-stability');
 const LIQUIDS_TOGETHER = rule('stream/liquids-together', 'caution', 0, 'number', 'phase-stability');
 
@@ -22,8 +23,6 @@ export const CONDITION_RULES: readonly Rule[] = [
   HYDRATES,
   NEAR_CRITICAL,
   TOO_NEAR_CRITICAL,
-  SECOND_LIQUID,
-  LIQUIDS_TOGETHER,
 ];
 
 /**
