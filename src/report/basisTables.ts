@@ -104,7 +104,7 @@ export function holdTable(input: ReportInput): Table {
     columns: [
       left('what', 'What is not settled'),
       left('owner', 'Owner'),
-      left('date', 'By'),
+      left('date', 'Due'),
       left('assumption', 'Assumption'),
     ],
     rows: holds.map((hold, k): Row => {

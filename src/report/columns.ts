@@ -106,6 +106,7 @@ function settingsTable(input: ReportInput, unit: SketchUnit, title: string): Tab
   return {
     key: `column.${unit.id}.settings`,
     title: `Column ${title}: settings`,
+    short: [unit.tag, 'settings'],
     columns: [{ key: 'value', head: 'As set', align: 'left' }],
     rows,
     notes: [],
@@ -159,6 +160,7 @@ function figureTable(input: ReportInput, results: ColumnResults, unit: SketchUni
   return {
     key: `column.${unit.id}.figures`,
     title: `Column ${title}: results`,
+    short: [unit.tag, 'results'],
     columns: [{ key: 'value', head: 'Value', align: 'right' }],
     rows,
     notes: [],
@@ -182,6 +184,7 @@ function stageTable(input: ReportInput, results: ColumnResults, unit: SketchUnit
   return {
     key: `column.${unit.id}.stages`,
     title: `Column ${title}: stages`,
+    short: [unit.tag, 'stages'],
     columns: [
       head('T', 'T', T.label),
       head('P', 'P', P.label),

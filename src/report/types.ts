@@ -26,6 +26,8 @@ export interface Row {
 export interface Table {
   readonly key: string;
   readonly title: string;
+  /** Where room is short: whose the table is and what it holds, "C-101" and "results"; of the two only the first is cut. */
+  readonly short?: readonly [whose: string, what: string];
   readonly columns: readonly {
     readonly key: string;
     readonly head: string;

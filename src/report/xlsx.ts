@@ -35,16 +35,22 @@ function figureOf(cell: Cell | undefined, row: Row): CellObject | null {
   return { value: cell.value, type: Number, format: format(cell.decimals), ...bold };
 }
 
-/** Names of sheets: at most 31 letters, none that the format forbids, no two alike. */
-function sheetName(title: string, taken: Set<string>): string {
-  const plain =
-    title
-      .replace(/[\\/?*[\]:]/g, ' ')
-      .replace(/^'|'$/g, '')
-      .trim() || 'Sheet';
+const LONGEST = 31;
+const plain = (name: string): string =>
+  name
+    .replace(/[\\/?*[\]:]/g, ' ')
+    .replace(/\s+/g, ' ')
+    .replace(/^[' ]+|[' ]+$/g, '');
+
+/**
+ * A sheet's name: at most 31 letters, none that the format forbids, no two alike. What is too long is cut before its ending,
+ * which says what the sheet holds.
+ */
+function sheetName(whole: string, ending: string, taken: Set<string>): string {
   for (let k = 1; ; k += 1) {
-    const end = k === 1 ? '' : ` ${k}`;
-    const name = `${plain.slice(0, 31 - end.length).trim()}${end}`;
+    const end = [plain(ending), k === 1 ? '' : String(k)].filter(Boolean).join(' ');
+    const stem = plain(plain(whole).slice(0, LONGEST - (end === '' ? 0 : end.length + 1)));
+    const name = [stem, end].filter(Boolean).join(' ') || 'Sheet';
     if (taken.has(name.toLowerCase())) continue;
     taken.add(name.toLowerCase());
     return name;
@@ -90,7 +96,7 @@ function tableSheet(table: Table, rowHead: string, taken: Set<string>): Book[num
   );
   const notes = table.notes.map((note): Line => [words(note, NOTE)]);
   return {
-    sheet: sheetName(table.title.replace(/ \(.*\)$/, ''), taken),
+    sheet: sheetName(...(table.short ?? [table.title.replace(/ \(.*\)$/, ''), '']), taken),
     data: [...heads, ...rows, ...(notes.length > 0 ? [[], ...notes] : [])],
     stickyRowsCount: heads.length,
     stickyColumnsCount: hasUnit ? 2 : 1,
@@ -119,7 +125,7 @@ function frontSheet(report: ReportModel, taken: Set<string>): Book[number] {
     ['Program', strip.version],
   ];
   return {
-    sheet: sheetName('Title', taken),
+    sheet: sheetName('Title', '', taken),
     data: [
       [words('Stream summary (heat and material balance)', { fontWeight: 'bold', fontSize: 14 })],
       ...[strip.warning, strip.purpose, strip.margin]

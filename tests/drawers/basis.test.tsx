@@ -112,9 +112,16 @@ describe('the design basis drawer', () => {
     press('Raise a HOLD');
     choose('holds.0.path', `${first?.unit ?? ''} ${first?.path}`);
     type('holds.0.owner', 'Process');
+    // "By" names a person in revisions: the day of a HOLD is another word.
+    expect(screen.getByLabelText('Due').closest('[data-field="holds.0.date"]')).not.toBeNull();
+    type('holds.0.date', '2026-03-01');
     press('Raise a HOLD');
     expect(sketchOf(page).holds?.map((h) => h.no)).toEqual(['1', '2']);
-    expect(sketchOf(page).holds?.[0]).toMatchObject({ path: first?.path, owner: 'Process' });
+    expect(sketchOf(page).holds?.[0]).toMatchObject({
+      path: first?.path,
+      owner: 'Process',
+      date: '2026-03-01',
+    });
     press('Remove HOLD 1');
     expect(sketchOf(page).holds?.map((h) => h.no)).toEqual(['2']);
   });

@@ -252,6 +252,8 @@ describe('the document of one example', () => {
       'Feed raised',
       'HOLD 1',
       'Feed pressure to be confirmed',
+      'What is not settled Owner Due Assumption',
+      'What changed By Checked Approved',
       'Feed case: Winter',
       'met',
       'missed by',

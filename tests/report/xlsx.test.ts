@@ -29,6 +29,31 @@ describe('the spreadsheet, read by another reader', () => {
     for (const name of names) expect(name).toMatch(/^[^\\/?*[\]:]{1,31}$/);
   });
 
+  test('has sheets of a column named by its tag and by what they hold', () => {
+    const names = sheets.map((s) => s.name);
+    for (const { tag } of input.sketch.units.filter(({ kind }) => kind === 'column'))
+      for (const what of ['settings', 'results', 'stages']) expect(names).toContain(`${tag} ${what}`);
+  });
+
+  test('keeps what a sheet holds in its name, however long and alike the tags are', async () => {
+    const long = await solvedExample('aromatic-condensate.sketch.json', (sketch) => ({
+      ...sketch,
+      units: sketch.units.map((unit) =>
+        unit.kind === 'column' ? { ...unit, tag: `'A [very] long/tag: of a column ${unit.tag}` } : unit,
+      ),
+    }));
+    const names = readXlsx(await writeXlsx(buildReport(long))).map((s) => s.name);
+    expect(new Set(names.map((n) => n.toLowerCase())).size).toBe(names.length);
+    // Allowed by the format: at most 31 letters, none of \\ / ? * [ ] :, no apostrophe at an end.
+    for (const name of names) expect(name).toMatch(/^(?!')[^\\/?*[\]:]{1,31}(?<!')$/);
+    const columns = long.sketch.units.filter(({ kind }) => kind === 'column').length;
+    expect(columns).toBeGreaterThan(1);
+    for (const what of ['settings', 'results', 'stages'])
+      expect(names.filter((name) => new RegExp(`^A very .* ${what}( \\d)?$`).test(name))).toHaveLength(
+        columns,
+      );
+  });
+
   test('holds the same numbers, every digit, with the decimals of the printed row as format', () => {
     let compared = 0;
     for (const [k, [table]] of tablesOf(report).entries()) {

@@ -303,7 +303,7 @@ function Holds({ disabled }: Part) {
             onChange={(owner) => set({ ...item, owner })}
           />
           <Words
-            label="By"
+            label="Due"
             path={`holds.${k}.date`}
             disabled={disabled}
             value={item.date}

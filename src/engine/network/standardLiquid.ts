@@ -29,7 +29,7 @@ export type StandardLiquid = { readonly m3_s: number } | { readonly lacking: rea
  * Volume flow as liquid at 15 degC and 101325 Pa by ideal mixing of pure liquids [m3/s]; a chemical that boils below 15 degC
  * counts with its saturated liquid. One without a liquid density at 15 degC (above its critical temperature, or that is not
  * known) is left out where it is less than 1e-6 of the stream's mass: its own volume, were there one, would move the answer
- * by a few millionths at most. Where one is more than that, there is no answer: all of those are named.
+ * by a few millionths (hydrogen: by 1e-5). Where one is more than that, there is no answer: all of those are named.
  */
 export function standardLiquid(n_mol_s: Float64Array, model: Model): StandardLiquid {
   const v = pureVolumes(model);
