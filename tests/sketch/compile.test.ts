@@ -530,14 +530,17 @@ describe('limits that the sketch overrides', () => {
     expect(c.problem.limits).toEqual({ 'valve/cools': 20 });
     expect(gapsOf(c)).toEqual(['sketch/unknown-limit at limits.valve/colour']);
   });
-  test.each(['stream/second-liquid', 'stream/liquids-together', 'column/second-liquid'])(
-    'a threshold is told for %s, which is found or not',
-    async (code) => {
-      const c = await compiled({ ...letDown(), limits: { [code]: 1 } });
-      expect(c.problem.limits).toEqual({});
-      expect(gapsOf(c)).toEqual([`sketch/unknown-limit at limits.${code}`]);
-    },
-  );
+  test.each([
+    'stream/second-liquid',
+    'stream/liquids-together',
+    'column/second-liquid',
+    'drum/dense',
+    'model/pair-predicted',
+  ])('a threshold is told for %s, which is found or not', async (code) => {
+    const c = await compiled({ ...letDown(), limits: { [code]: 1 } });
+    expect(c.problem.limits).toEqual({});
+    expect(gapsOf(c)).toEqual([`sketch/unknown-limit at limits.${code}`]);
+  });
   test('text that is no quantity is a gap', async () => {
     const c = await compiled({ ...letDown(), limits: { 'valve/cools': 'much' } });
     expect(gapsOf(c)).toEqual(['sketch/not-a-quantity at limits.valve/cools']);

@@ -6,7 +6,7 @@ import { DRUM_RULES } from './drum/limits';
 import { EXPANDER_RULES } from './expander/limits';
 import { HEATER_RULES } from './heater/limits';
 import { ENTERS_BELOW } from './limits/joiningPressure';
-import { PAIR_FAR, PAIR_NONE, PAIR_PREDICTED } from './limits/pairs';
+import { PAIR_FAR, PAIR_NONE } from './limits/pairs';
 import type { Rule } from './limits/rule';
 import { UTILITY_RULES } from './limits/utilities';
 import { PRODUCT_RULES } from './product/limits';
@@ -14,7 +14,10 @@ import { PUMP_RULES } from './pump/limits';
 import { STREAM_RULES } from './streamLimits';
 import { VALVE_RULES } from './valve/limits';
 
-/** Every limit with its default threshold and basis: what a sketch may override and what is printed. Imports no solver. */
+/**
+ * Every limit that counts from a threshold, with its default and basis: what a sketch may override. What is there or not (a
+ * second liquid, a dense phase, a predicted pair) has none. Imports no solver.
+ */
 export const RULES: readonly Rule[] = [
   ...STREAM_RULES,
   ENTERS_BELOW,
@@ -30,6 +33,5 @@ export const RULES: readonly Rule[] = [
   ...CHAMBER_RULES,
   ...PRODUCT_RULES,
   PAIR_NONE,
-  PAIR_PREDICTED,
   PAIR_FAR,
 ];

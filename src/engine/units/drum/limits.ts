@@ -9,10 +9,11 @@ import type { DrumResults, DrumSettings } from './types';
 const HAS_DUTY = rule('drum/has-duty', 'note', 0, 'power', 'balance');
 /** One outlet takes less than this share [-]. */
 const ONE_PHASE = rule('drum/one-phase', 'note', 0, 'fraction', 'balance');
+/** A state that is neither liquid nor vapour: told wherever it is found, by no threshold. */
 const DENSE = rule('drum/dense', 'caution', 0, 'fraction', 'own-rule');
 
 /** Thresholds that only a drum has. */
-export const DRUM_RULES: readonly Rule[] = [HAS_DUTY, ONE_PHASE, DENSE];
+export const DRUM_RULES: readonly Rule[] = [HAS_DUTY, ONE_PHASE];
 
 /**
  * Limits of a drum: inlets that would have to flow uphill, a duty, only one phase or one that is neither liquid nor vapour, the
