@@ -97,6 +97,11 @@ test('no screen and no drawer has a serious fault of access, in light and in dar
     await page.keyboard.press(key);
     await look(name);
   }
+  await page.keyboard.press('/');
+  await page.keyboard.type('c-10');
+  await expect(page.getByRole('option').first()).toBeVisible();
+  await scan(page, 'finding', '.find');
+  await page.keyboard.press('Escape');
   await page.locator('.bar').getByRole('button', { name: 'Stream summary' }).click();
   await expect(page.locator('[data-table="streams"]')).toBeVisible();
   await look('stream summary');

@@ -130,6 +130,9 @@ describe('the search field', () => {
     fireEvent.pointerDown(await screen.findByRole('option'));
     await waitFor(() => expect(document.activeElement?.getAttribute('data-chemical')).toBe('n-butane'));
     expect(stores.session.getState()).toMatchObject({ over: 'none', drawer: { is: 'chemicals' } });
+    // Esc leaves the drawer for where the search was begun.
+    fireEvent.keyDown(document.activeElement!, { key: 'Escape' });
+    expect(document.activeElement?.textContent).toBe('before');
   });
 
   test('Esc closes it and gives the focus back; leaving it by Tab closes it and keeps the focus there', async () => {

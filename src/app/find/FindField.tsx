@@ -73,7 +73,10 @@ export function FindField() {
   const go = (k: number): void => {
     const thing = found[k];
     if (!part) setAsked(true);
-    if (part && thing) part.goTo(stores, thing.target);
+    if (!part || !thing) return;
+    // First, so that a drawer knows where the keyboard came from.
+    giveBack();
+    part.goTo(stores, thing.target);
   };
   // biome-ignore lint/correctness/useExhaustiveDependencies: once, when what was waited for is there
   useEffect(() => {
