@@ -60,4 +60,4 @@ export function readNumber(text: string, start: number): ScannedNumber | UnitFau
 
 /** A quantity's outline as a regular expression for a schema: a number, then perhaps a unit. parseQuantity decides. */
 export const QUANTITY_PATTERN =
-  '^\\s*[+\\-−]?(?:\\d+\\.?\\d*|\\.\\d+)(?:[eE][+\\-−]?\\d+)?(?:\\s*[A-Za-z%°].*)?$';
+  '^\\s*[+\\-−]?(?:\\d+\\.?\\d*|\\.\\d+)(?:[eE][+\\-−]?\\d+)?(?:\\s*[A-Za-z%°][\\s\\S]*)?\\s*$';

@@ -189,7 +189,8 @@ test('the outline for a schema lets through what can be read, and stops commas, 
   for (const dim of DIMENSIONS) {
     for (const unit of suggestedUnits(dim)) expect(`-1.5e3 ${unit}`).toMatch(outline);
   }
-  for (const text of ['15 °C', '75%', '.5', '5. Pa', '−15 degC']) expect(text).toMatch(outline);
+  for (const text of ['15 °C', '75%', '.5', '5. Pa', '−15 degC', ' 3 ', '3 bar\n'])
+    expect(text).toMatch(outline);
   for (const text of ['', 'bar', '1,000 bar', '1 000 bar', 'ten bar', '1.2.3'])
     expect(text).not.toMatch(outline);
 });

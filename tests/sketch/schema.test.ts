@@ -52,6 +52,7 @@ describe('what opening or compiling refuses does not fit either', () => {
     ['an unknown setting', settings('valve', { q: '1 bar' })],
     ['a bare number for a pressure', settings('valve', { p: { P: 3 } })],
     ['text that is no quantity', settings('valve', { p: { P: 'high' } })],
+    ['a comma in a number', settings('valve', { p: { P: '1,000 bar' } })],
     ['two of one group', settings('valve', { p: { P: '3 bar', drop: '1 bar' } })],
     ['two that exclude each other', settings('heater', { T: '3 degC', duty: '1 kW' })],
     [

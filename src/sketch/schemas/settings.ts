@@ -1,5 +1,5 @@
 import type { KindCatalogue, SettingSpec } from '../../engine/units/types';
-import { type Dimension, suggestedUnits } from '../../quantity';
+import { type Dimension, QUANTITY_PATTERN, suggestedUnits } from '../../quantity';
 import { AIR_OF } from '../compiling/air';
 import type { Schema } from './types';
 import { when } from './when';
@@ -161,7 +161,7 @@ export const SETTING_DEFS: Readonly<Record<string, Schema>> = {
   quantity: {
     description: 'A number and its unit as typed: "10 bar", "3.5 barg", "75 %"; "." is the decimal sign.',
     type: 'string',
-    pattern: '^\\s*[+\\-−]?(\\d+\\.?\\d*|\\.\\d+)([eE][+\\-−]?\\d+)?(\\s*[^\\s\\d].*)?$',
+    pattern: QUANTITY_PATTERN,
   },
   flow: { anyOf: [quantitySchema(FLOW_DIMS), SHARE] },
   flowOrShare: { anyOf: [quantitySchema(['fraction', ...FLOW_DIMS]), SHARE] },
