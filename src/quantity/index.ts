@@ -19,6 +19,7 @@ export {
   type DisplayUnit,
   displayUnit,
   gasVolumes,
+  inPercent,
   type MeasureSet,
   type Measures,
   type ShownQuantity,

@@ -130,6 +130,12 @@ export function displayUnit(dim: Dimension, measures: Measures | MeasureSet): Di
   };
 }
 
+/** Measures with fractions in per cent, unless another unit was chosen for them. */
+export function inPercent(measures: Measures | MeasureSet): Measures {
+  const own: Measures = typeof measures === 'string' ? { set: measures } : measures;
+  return { ...own, units: { fraction: '%', ...own.units } };
+}
+
 export interface ShownQuantity {
   readonly number: string;
   readonly unit: string;

@@ -1,5 +1,5 @@
 import type { UnitResult } from '../engine/network/types';
-import { type Measures, show } from '../quantity';
+import { inPercent, type Measures, show } from '../quantity';
 import type { SketchUnit } from '../sketch/types';
 import { fixedByText, kindWord, stagesText, stateWord } from '../wording';
 import { left, text } from './cells';
@@ -79,7 +79,11 @@ function resultText(
       const word = resultWord(unit.kind, key, input.kinds);
       if (!word || typeof value !== 'number') return [];
       if (isDuty(key)) return [heatWords(word.label, value, measures)];
-      const { number: figure, unit: label } = show(value, word.dim, measures);
+      const { number: figure, unit: label } = show(
+        value,
+        word.dim,
+        word.percent ? inPercent(measures) : measures,
+      );
       return [`${word.label} ${figure}${label ? ` ${label}` : ''}`];
     })
     .join('; ');

@@ -22,10 +22,12 @@ export function resultWord(
   kind: string,
   key: string,
   kinds: NonNullable<ReportInput['kinds']> = CATALOGUE,
-): { readonly label: string; readonly dim: Dimension } | undefined {
+): { readonly label: string; readonly dim: Dimension; readonly percent: boolean } | undefined {
   const results = Object.hasOwn(kinds, kind) ? kinds[kind]?.results : undefined;
   const spec = results && Object.hasOwn(results, key) ? results[key] : undefined;
-  return spec && !spec.hidden ? { label: labelOf(kind, key), dim: spec.dim } : undefined;
+  return spec && !spec.hidden
+    ? { label: labelOf(kind, key), dim: spec.dim, percent: spec.percent === true }
+    : undefined;
 }
 
 /** "Peng–Robinson, 1976 alpha" */

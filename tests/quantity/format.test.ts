@@ -8,6 +8,7 @@ import {
   formatDifference,
   formatNumber,
   formatSignificant,
+  inPercent,
   type MeasureSet,
   parseQuantity,
   plainNumber,
@@ -191,5 +192,14 @@ describe('measures', () => {
     expect(() =>
       displayUnit('pressureDifference', { set: 'SI', units: { pressureDifference: 'barg' } }),
     ).toThrow();
+  });
+});
+
+test('fractions are shown in per cent where that is asked, unless a unit was chosen for them', () => {
+  expect(show(1.2, 'fraction', 'metric')).toEqual({ number: '1.200', unit: '' });
+  expect(show(1.2, 'fraction', inPercent('metric'))).toEqual({ number: '120.0', unit: '%' });
+  expect(show(0.000343, 'fraction', inPercent({ set: 'US', units: { fraction: 'ppm' } }))).toEqual({
+    number: '343.0',
+    unit: 'ppm',
   });
 });

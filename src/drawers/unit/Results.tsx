@@ -1,6 +1,6 @@
 import { FigureRow } from '../../parts/Figure';
 import { useMeasures } from '../../parts/measures';
-import { show } from '../../quantity';
+import { inPercent, show } from '../../quantity';
 import { useUnitResult } from '../../store/react';
 import { capital, resultWord } from '../words';
 import { useForm } from './form';
@@ -30,11 +30,11 @@ export function Results() {
         {outOfDate ? <span className="muted">out of date</span> : null}
       </div>
       <dl className="figures">
-        {listed.map(([key, { dim }]) => {
+        {listed.map(([key, { dim, percent }]) => {
           const value = shown.results?.[key];
           if (typeof value !== 'number') return null;
           const [word, size] = directed(key, resultWord(form.kind.kind, key), value);
-          const { number, unit } = show(size, dim, measures);
+          const { number, unit } = show(size, dim, percent ? inPercent(measures) : measures);
           return (
             <FigureRow key={key} label={capital(word)} text={number} unit={unit} outOfDate={outOfDate} />
           );

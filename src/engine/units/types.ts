@@ -121,6 +121,8 @@ export interface ResultSpec {
   readonly dim: Dimension;
   /** Leave out of the drawer's list and the printed tables (vectors, internals). */
   readonly hidden?: true;
+  /** A fraction that the trade speaks of in per cent: excess air of 1.2 would read as 20 %. */
+  readonly percent?: true;
 }
 
 /** What a kind is, without solving anything: safe for the page. */
