@@ -36,7 +36,7 @@ export function streamNotes(input: ReportInput, table: Pick<Table, 'columns' | '
     `Gauge pressure is above ${site.toDisplay(input.sitePressure_Pa).toPrecision(6)} ${site.label}.`,
     ...(has('normal') ? ['Vapour as ideal gas: the vapour alone (or the dense phase), no liquid.'] : []),
     ...(has('vapour.cpcv') && has('liquid.density')
-      ? ['No Cp/Cv of liquids: the model’s own would be more than 10 % off, or it has none.']
+      ? ['No Cp/Cv of liquids: the model’s own would be some 10 to 40 % off, or it has none.']
       : []),
     '“–” absent, “<0.01” a trace. Decimals are fixed row by row.',
   ];
@@ -79,7 +79,7 @@ function standardLiquidNotes(input: ReportInput, { columns }: Pick<Table, 'colum
   const reasons = [...byStreams].map(([streams, names]) => `${names.join(', ')} in ${streams}`);
   return [
     `${STANDARD_LIQUID}: ideal mixing of pure liquids; what has no liquid density there is left out below 1e-6 of the mass.${
-      reasons.length === 0 ? '' : ` “–” for more of it: ${reasons.join('; ')}.`
+      reasons.length === 0 ? '' : ` No figure where more of it flows: ${reasons.join('; ')}.`
     }`,
   ];
 }

@@ -47,7 +47,7 @@ describe.each([
     const blank = streams.columns.filter((_, at) => row.cells[at]?.is !== 'number').map(({ head }) => head);
     const lacking = solvedStreams(input).filter(([, s]) => s.noStandardLiquid);
     expect(blank).toEqual(lacking.map(([number]) => number));
-    expect(note).toContain(`“–” for more of it: ${reason}.`);
+    expect(note).toContain(`No figure where more of it flows: ${reason}.`);
   });
 
   test('and its reason stand in the results file, one or the other', () => {
