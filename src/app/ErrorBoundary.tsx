@@ -15,19 +15,39 @@ export class ErrorBoundary extends Component<Props, { readonly error: Error | nu
     return { error };
   }
 
+  /** With nothing open and nothing selected: what could not be drawn may be what was open. */
+  private readonly again = (): void => {
+    this.props.stores.session.setState({ drawer: null, over: 'none', units: [], streams: [], notes: [] });
+    this.setState({ error: null });
+  };
+
   override render(): ReactNode {
     const { error } = this.state;
-    if (!error) return this.props.children;
+    const { stores, children } = this.props;
+    if (!error) return children;
+    const last = stores.sketch.getState().past.at(-1)?.label;
     return (
       <main className="broken" role="alert">
         <h1>This page hit a fault of its own</h1>
         <p>Your sketch is not lost. Save it as a file, then show the page again.</p>
         <p className="muted">{error.message}</p>
-        <p>
-          <button type="button" className="button line" onClick={() => saveFile(this.props.stores)}>
+        <p className="notice-steps">
+          <button type="button" className="button line" onClick={() => saveFile(stores)}>
             Save as a file
-          </button>{' '}
-          <button type="button" className="button fill" onClick={() => this.setState({ error: null })}>
+          </button>
+          {last ? (
+            <button
+              type="button"
+              className="button line"
+              onClick={() => {
+                stores.sketch.undo();
+                this.again();
+              }}
+            >
+              Undo “{last}” and show the page again
+            </button>
+          ) : null}
+          <button type="button" className="button fill" onClick={this.again}>
             Show the page again
           </button>
         </p>
