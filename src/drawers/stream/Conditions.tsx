@@ -3,7 +3,6 @@ import { useMeasures, withReference } from '../../parts/measures';
 import { ABSENT, type Dimension, type Measures, show } from '../../quantity';
 import { noStandardLiquid, STANDARD_LIQUID, vapour_mol_s, vapourAsGas } from '../../report/volumeFlows';
 import { useSolvedChemicals } from '../chemicalNames';
-import { capital } from '../words';
 import type { SolvedStream } from './sentence';
 
 interface Props {
@@ -45,10 +44,11 @@ export function Conditions({ stream, outOfDate }: Props) {
           title: 'The vapour alone, or the dense phase; no liquid',
         })}
         {row(STANDARD_LIQUID, stream.standardLiquid_m3_s, 'volumeFlow', {
-          title: whyNone === undefined ? 'Ideal mixing of the pure liquids' : capital(whyNone),
+          title: 'Ideal mixing of the pure liquids',
         })}
         {row('Molar mass', stream.MW_g_mol / 1000, 'molarMass')}
       </dl>
+      {whyNone === undefined ? null : <p className="muted small">No standard liquid: {whyNone}.</p>}
     </section>
   );
 }
