@@ -1,9 +1,9 @@
 import { type Kinds, KNOWN_KINDS } from '../engine/network/kinds';
-import { type Memory, makeMemory, nothingPosted } from '../engine/network/memory';
+import { nothingPosted } from '../engine/network/memory';
 import { solveNetwork } from '../engine/network/solve';
-import type { Basis } from '../engine/network/types';
 import type { FromWorker, Question, ToWorker } from '../protocol/messages';
 import { drive, PACE, type Pace } from './drive';
+import { Memories } from './memories';
 import { type JobPort, makeTurns } from './port';
 import { prewarm } from './prewarm';
 
@@ -23,11 +23,6 @@ interface QuestionOrder {
   readonly about: Question;
 }
 
-/** Memories that are kept, so that undoing a change of chemicals or model finds its answers again. */
-const KEPT_MEMORIES = 2;
-/** Bases that are kept; the page posts one again when it comes back to it. */
-const KEPT_BASES = 4;
-
 const messageOf = (cause: unknown): string => (cause instanceof Error ? cause.message : String(cause));
 
 /**
@@ -39,11 +34,12 @@ const messageOf = (cause: unknown): string => (cause instanceof Error ? cause.me
 export function serveSolver(port: JobPort, options: ServeOptions = {}): () => void {
   const { kinds = KNOWN_KINDS, pace = PACE, now = () => performance.now(), warmUp } = options;
   const turns = makeTurns();
-  const bases = new Map<string, Basis>();
-  const memories = new Map<string, Memory>();
   const posted = nothingPosted();
+  const memories = new Memories(posted);
   const questions: QuestionOrder[] = [];
   let waiting: SolveOrder | undefined;
+  /** The page lacks what was handed out, until a solve hands it out anew; also when the order that said so is never begun. */
+  let blank = false;
   let busy = false;
   let warm = false;
   let closed = false;
@@ -52,32 +48,17 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
     if (!closed) port.postMessage(message);
   };
 
-  function memoryOf(id: string): Memory {
-    const known = memories.get(id);
-    if (known) {
-      // Asked for last, forgotten last.
-      memories.delete(id);
-      memories.set(id, known);
-      return known;
-    }
-    const basis = bases.get(id);
-    if (!basis) throw new Error(`no basis ${id} was posted`);
-    const made = makeMemory(basis, posted);
-    memories.set(id, made);
-    for (const old of [...memories.keys()].slice(0, -KEPT_MEMORIES)) memories.delete(old);
-    return made;
-  }
-
-  async function runSolve({ problem, from, announce, blank }: SolveOrder): Promise<void> {
+  async function runSolve({ problem, from, announce }: SolveOrder): Promise<void> {
     const { edit } = problem;
     stopped = false;
     const clean = from === 'nothing' ? ({ from } as const) : {};
     if (blank) {
       posted.streams.clear();
       posted.units.clear();
+      blank = false;
     }
     try {
-      const memory = memoryOf(problem.basis);
+      const memory = memories.of(problem.basis);
       const batch = await drive(solveNetwork(problem, memory, { from, kinds }), {
         turns,
         now,
@@ -89,7 +70,7 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
       });
       if (batch) say({ say: 'results', edit, last: true, ...clean, ...batch });
     } catch (cause) {
-      memories.delete(problem.basis);
+      memories.forget(problem.basis);
       say({ say: 'broke', edit, message: messageOf(cause) });
     }
   }
@@ -127,13 +108,11 @@ export function serveSolver(port: JobPort, options: ServeOptions = {}): () => vo
   port.addEventListener('message', ({ data }) => {
     switch (data.say) {
       case 'basis':
-        bases.delete(data.basis.id);
-        bases.set(data.basis.id, data.basis);
-        for (const old of [...bases.keys()].slice(0, -KEPT_BASES)) bases.delete(old);
+        memories.learn(data.basis);
         return;
       case 'solve':
-        // What the page lacks it still lacks when a newer order takes the place of the one that said so.
-        waiting = waiting?.blank ? { ...data, blank: true } : data;
+        blank ||= data.blank === true;
+        waiting = data;
         void work();
         return;
       case 'stop':

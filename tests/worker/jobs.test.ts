@@ -219,6 +219,28 @@ describe('the solver behind a port', () => {
     expect(handed).toHaveLength(101);
   });
 
+  test('hands everything out anew where the order that asked for it was stopped before it began', async () => {
+    const clock = new Clock();
+    let solvedUnits = 0;
+    const kinds = kindsWith(clock, 4, () => {
+      solvedUnits++;
+      if (solvedUnits !== 130) return;
+      page.say({ say: 'solve', problem: edit(3, pipeline(100)), from: 'warm', blank: true });
+      page.say({ say: 'stop' });
+    });
+    const page = open({ kinds, now: clock.now });
+    page.say({ say: 'basis', basis });
+    page.say({ say: 'solve', problem: edit(1, pipeline(100)), from: 'warm' });
+    await page.last(1);
+    page.say({ say: 'solve', problem: edit(2, pipeline(90)), from: 'nothing' });
+    page.say({ say: 'question', job: 7, about: { ask: 'prewarm' } });
+    await page.until((m): m is Extract<FromWorker, { say: 'answer' }> => m.say === 'answer');
+    page.say({ say: 'solve', problem: edit(4, pipeline(100)), from: 'warm' });
+    await page.last(4);
+    const handed = page.heard.flatMap((m) => (m.say === 'results' && m.edit === 4 ? m.streams : []));
+    expect(handed).toHaveLength(101);
+  });
+
   test('hands out what it has after 30 ms, then every 100 ms, and says where it is every 250 ms', async () => {
     const clock = new Clock();
     const page = open({ kinds: kindsWith(clock, 5), now: clock.now });
