@@ -158,3 +158,43 @@ test('at 200 % everything is still there: it scrolls, and nothing hangs over the
   await last.scrollIntoViewIfNeeded();
   await expect(last).toBeInViewport();
 });
+
+test('at 200 % beside a drawer the strip says to the end what stops the train; parts without room are left out whole', async ({
+  quiet: page,
+}) => {
+  await page.setViewportSize({ width: 720, height: 450 });
+  await openExample(page, TRAIN);
+  /** Parts of the strip that are seen, and how much of each is cut off [px]. */
+  const strip = (): Promise<
+    readonly { readonly text: string; readonly cut: number; readonly px: number }[]
+  > =>
+    page.locator('.strip-parts > span, .strip-state').evaluateAll((parts) =>
+      parts
+        .filter((part) => {
+          const [own, strip] = [part, part.closest('.title-strip')!].map((e) => e.getBoundingClientRect());
+          return own!.top < strip!.bottom - 4;
+        })
+        .map((part) => ({
+          text: part.textContent ?? '',
+          cut: part.scrollWidth - part.clientWidth,
+          px: part.clientWidth,
+        })),
+    );
+  for (const tag of ['PV-101', 'PV-102']) {
+    await unit(page, tag).getByRole('button').first().click();
+    await field(page, 'p.P').fill('');
+    await field(page, 'p.P').press('Enter');
+  }
+  const state = page.locator('.strip-state');
+  await expect(state).toHaveText('Not solved yet: PV-101 needs a value, PV-102 needs a value');
+  const narrow = await strip();
+  expect(narrow.at(-1)).toMatchObject({ text: await state.textContent(), cut: 0 });
+  // Nothing is left of a part but a letter or two.
+  expect(narrow.filter(({ px }) => px < 60)).toEqual([]);
+  await page.keyboard.press('Escape');
+  await page.keyboard.press('Escape');
+  await expect(page.locator('.drawer')).toHaveCount(0);
+  await page.setViewportSize({ width: 1440, height: 900 });
+  await expect.poll(async () => (await strip()).length).toBeGreaterThan(4);
+  expect((await strip()).filter(({ cut }) => cut > 1)).toEqual([]);
+});

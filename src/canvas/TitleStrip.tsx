@@ -9,7 +9,7 @@ import { missed, SMALL } from './quiet';
 import { type SheetState, useSheet } from './sheetStore';
 import { wholeState } from './whole';
 
-/** Foot of the sheet: name, revision, model, what labels show; at the right the state of the whole. */
+/** Foot of the sheet: name, revision, model, what has no room, what labels show; at the right the state of the whole. */
 export const TitleStrip = memo(function TitleStrip() {
   const title = useSketch((state) => state.sketch.title);
   const revision = useSketch((state) => revisionInForce(state.sketch));
@@ -20,14 +20,16 @@ export const TitleStrip = memo(function TitleStrip() {
   const isFar = useSheet(({ quiet }) => quiet.duties);
   return (
     <footer className="title-strip">
-      <span className="strip-title">{title.title?.trim() || 'Untitled sketch'}</span>
-      <span>{revision ? `Rev ${revision}, draft` : 'No revision'}</span>
-      <span>{modelWord(model)}</span>
-      <span className="strip-labels">
-        {isFar ? `Labels: from ${100 * SMALL} % zoom` : labelsSentence(labels, measures)}
+      <span className="strip-parts">
+        <i />
+        <span className="strip-title">{title.title?.trim() || 'Untitled sketch'}</span>
+        <span>{revision ? `Rev ${revision}, draft` : 'No revision'}</span>
+        <span>{modelWord(model)}</span>
+        {omitted ? <span>{omitted}</span> : null}
+        <span className="strip-labels">
+          {isFar ? `Labels: from ${100 * SMALL} % zoom` : labelsSentence(labels, measures)}
+        </span>
       </span>
-      {omitted ? <span>{omitted}</span> : null}
-      <span className="strip-gap" />
       <WholeState />
     </footer>
   );
