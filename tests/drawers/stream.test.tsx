@@ -74,7 +74,7 @@ describe('the stream drawer', () => {
     );
     const shown = [...document.querySelectorAll('.figure-row')].map((row) => row.textContent);
     // Derived: 4 mol/s x 3600 s/h x 22.413969e-3 m3/mol = 322.76 m3/h.
-    expect(shown).toContain('Vapour as ideal gas, 0 °C, 1.01325 bar322.8Nm³/h');
+    expect(shown).toContain('Vapour as ideal gas, 0\u00a0°C, 1.01325\u00a0bar322.8Nm³/h');
   });
 
   test('says which chemical leaves a stream without a standard liquid flow', () => {

@@ -10,6 +10,9 @@ interface Props {
   readonly outOfDate: boolean;
 }
 
+/** Keeps each number with its unit where a label takes two lines. */
+const unbroken = (label: string): string => label.replace(/(\d) (?=\S)/g, '$1\u00a0');
+
 /** Temperature, pressure, vapour fraction and every way to say the flow. */
 export function Conditions({ stream, outOfDate }: Props) {
   const measures = useMeasures();
@@ -39,7 +42,7 @@ export function Conditions({ stream, outOfDate }: Props) {
         {row('Molar flow', stream.n_mol_s, 'molarFlow')}
         {row('Mass flow', stream.m_kg_s, 'massFlow')}
         {row('Volume flow, actual', stream.volume_m3_s, 'volumeFlow')}
-        {row(gas.label, vapour_mol_s(stream), 'molarFlow', {
+        {row(unbroken(gas.label), vapour_mol_s(stream), 'molarFlow', {
           as: gas.measures,
           title: 'The vapour alone, or the dense phase; no liquid',
         })}
