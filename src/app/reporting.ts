@@ -1,5 +1,6 @@
 import { bank } from '../data/bank';
 import { answersDiffer } from '../report/compare';
+import { dayOf } from '../report/day';
 import type { ReportInput } from '../report/input';
 import { writeSketch } from '../sketch/write';
 import type { Stores } from '../store/react';
@@ -43,7 +44,7 @@ export async function cleanReportInput(
     sitePressure_Pa: problem.site.pressure_Pa,
     version: __APP_VERSION__,
     fingerprint: print,
-    day: new Date().toISOString().slice(0, 10),
+    day: dayOf(new Date()),
     severalAnswers: answersDiffer(live, clean.streams),
   };
 }

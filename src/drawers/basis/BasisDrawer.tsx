@@ -1,3 +1,4 @@
+import { dayOf } from '../../report/day';
 import type { DesignBasis, FeedCase, Hold, Revision, UtilityLevel } from '../../sketch/documentTypes';
 import type { Sketch } from '../../sketch/types';
 import { setDesignBasis, setHolds, setRevisions, setTitle } from '../../store/commands';
@@ -84,7 +85,7 @@ function Revisions({ disabled }: Part) {
       disabled={disabled}
       empty="None is recorded: the document is a draft."
       name={(item) => `revision ${item.mark}`}
-      make={() => ({ mark: nextMark(sketch.getState().sketch), date: new Date().toISOString().slice(0, 10) })}
+      make={() => ({ mark: nextMark(sketch.getState().sketch), date: dayOf(new Date()) })}
       onChange={(items) => void run(sketch, (s) => setRevisions(s, items))}
     >
       {(item, set, k) => {
