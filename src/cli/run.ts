@@ -8,6 +8,7 @@ import { solveNetwork } from '../engine/network/solve';
 import type { SolveBatch } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
 import { writeCsv } from '../report/csv';
+import { dayOf } from '../report/day';
 import type { ReportInput } from '../report/input';
 import { buildReport } from '../report/model';
 import { sheetSvgFile } from '../report/picture';
@@ -124,7 +125,7 @@ export async function solveSketch(
     kinds: kinds.catalogue,
     version: version(),
     fingerprint: fingerprint(writeSketch(sketch)),
-    day: process.env.SPLITWRIGHT_DAY ?? new Date().toISOString().slice(0, 10),
+    day: process.env.SPLITWRIGHT_DAY ?? dayOf(new Date()),
   };
   return { input, available: missing };
 }
