@@ -13,6 +13,7 @@ import type { ReportInput } from '../report/input';
 import { buildReport } from '../report/model';
 import { sheetSvgFile } from '../report/picture';
 import { resultsJson } from '../report/resultsJson';
+import { findingWords } from '../report/words';
 import { loadBankData } from '../sketch/bank';
 import { compile } from '../sketch/compile';
 import { setByPath } from '../sketch/edits';
@@ -66,8 +67,22 @@ async function runFile(file: string, orders: Orders, voice: Voice): Promise<Exit
   }
   const report = buildReport(input);
   voice.out(`${file}: ${report.state.text} (${seconds.toFixed(3)} s)`);
+  if (!results.solved) for (const line of whyNot(input)) voice.err(`  ${line}`);
   if (!results.solved) return 1;
   return orders.strict && input.findings.some((f) => f.weight === 'beyond-limit') ? 1 : 0;
+}
+
+/** Why units have no answer, once each; those that only wait say nothing. */
+function whyNot(input: ReportInput): readonly string[] {
+  const reasons = [
+    ...input.gaps,
+    ...[...input.units.values()].flatMap(({ state, reasons = [] }) => (state === 'waiting' ? [] : reasons)),
+  ];
+  const lines = reasons.map((reason) => {
+    const { where, sentence, next = '' } = findingWords(reason, input);
+    return `${where ? `${where}: ` : ''}${sentence} ${next}`.trim();
+  });
+  return [...new Set(lines)];
 }
 
 function readSketch(file: string, orders: Orders, voice: Voice): Sketch | undefined {

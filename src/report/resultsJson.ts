@@ -238,6 +238,10 @@ function findingRecord(
       ...(stream ? { stream: numbers.get(stream) ?? stream } : {}),
       ...rest,
     },
-    evidence: finding.evidence.map((e) => ({ ...e, value: Number.isFinite(e.value) ? e.value : null })),
+    evidence: finding.evidence.map((e) => ({
+      ...e,
+      value: Number.isFinite(e.value) ? e.value : null,
+      ...(e.name === 'unit' && e.text ? { text: tags.get(e.text) ?? e.text } : {}),
+    })),
   };
 }

@@ -146,7 +146,7 @@ export function resultsSchema(kinds: Readonly<Record<string, KindCatalogue>> = C
         record({
           code: text,
           weight: { enum: ['note', 'caution', 'beyond-limit'] },
-          at: record({}, { unit: text, stream: text, port: text, path: text, stage: number }),
+          at: record({}, { unit: text, stream: text, port: text, path: text, stage: number, chemical: text }),
           evidence: listOf({ type: 'object', required: ['name', 'value'], properties: { name: text } }),
         }),
       ),

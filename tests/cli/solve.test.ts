@@ -47,6 +47,20 @@ describe('the headless command', () => {
     expect(readJson(json).streams['2'].P_Pa).toBe(12e5);
   });
 
+  test('says why a unit has no answer, and the next step, once', async () => {
+    const loop = join(EXAMPLES, 'nitrogen-loop.sketch.json');
+    const closed = await call(loop, '--set', 'D-1.shares.out2=0 %');
+    expect(closed.code).toBe(1);
+    const lines = closed.err.split('\n');
+    // Eight units go round; the reason is one.
+    expect(lines).toHaveLength(1);
+    expect(lines[0]).toMatch(/Nitrogen.*Oxygen/);
+    expect(lines[0]).toMatch(/purge/);
+    const open = await call(letDown, '--set', 'PV-1.p={}');
+    expect(open.err).toMatch(/^ {2}PV-1: /);
+    expect((await call(letDown)).err).toBe('');
+  });
+
   test('says 1 and still writes the results when something needs a value', async () => {
     const json = join(dir, 'c.json');
     const { code } = await call(letDown, '--json', json, '--set', 'PV-1.p={}');

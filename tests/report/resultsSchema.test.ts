@@ -30,6 +30,21 @@ describe('the schema of the results file', () => {
     expect(faults(resultsSchema(), results)).toEqual([]);
   });
 
+  test('holds for reasons that name chemicals, and those name units by their tags', async () => {
+    const closed = await solvedExample('nitrogen-loop.sketch.json', (sketch) => ({
+      ...sketch,
+      units: sketch.units.map((u) =>
+        u.kind === 'divide' ? { ...u, settings: { shares: { out2: '0 %' } } } : u,
+      ),
+    }));
+    const results = asFile(resultsJson(closed, 0.1));
+    const why = results.findings.find((f: { code: string }) => f.code === 'network/no-way-out');
+    expect(why.at.chemical).toBe('nitrogen');
+    const units = why.evidence.filter((e: { name: string }) => e.name === 'unit');
+    expect(units.map((e: { text: string }) => e.text)).toContain('K-301');
+    expect(faults(resultsSchema(), results)).toEqual([]);
+  });
+
   test.each([
     ['a field that nobody named', (r: ReturnType<typeof asFile>) => (r.streams['1'].colour = 'red')],
     ['a temperature as text', (r: ReturnType<typeof asFile>) => (r.streams['1'].T_K = '300')],
