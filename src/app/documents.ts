@@ -167,7 +167,15 @@ export async function dropFiles(stores: Stores, files: FileList): Promise<void> 
 
 /** An example is opened as a copy, so that what is done to it is kept apart from the example. */
 export async function openExample(stores: Stores, file: string): Promise<void> {
-  const answer = await fetch(`./examples/${file}`);
-  if (answer.ok) openAsNew(stores, await answer.text(), file);
-  else stores.session.say('beyond', 'The example could not be read.', [`${file}: ${answer.status}`]);
+  const refused = (why: string): void =>
+    stores.session.say('beyond', 'The example could not be read.', [`${file}: ${why}`]);
+  try {
+    const answer = await fetch(`./examples/${file}`);
+    if (answer.ok) openAsNew(stores, await answer.text(), file);
+    else refused(String(answer.status));
+  } catch (error) {
+    // Without a network, before the page's files are kept.
+    if (!(error instanceof TypeError)) throw error;
+    refused(`there is no network (${error.message})`);
+  }
 }

@@ -1,8 +1,8 @@
 // @vitest-environment jsdom
 import { readFileSync } from 'node:fs';
-import { expect, test } from 'vitest';
-import { openAsNew, openFileOf } from '../../src/app/documents';
-import { letDown, makePage } from '../drawers/page';
+import { expect, test, vi } from 'vitest';
+import { openAsNew, openExample, openFileOf } from '../../src/app/documents';
+import { letDown, makePage, sketchOf } from '../drawers/page';
 
 const noticeOf = ({ stores }: ReturnType<typeof makePage>) => stores.session.getState().notice;
 
@@ -51,4 +51,17 @@ test('a link or an example is told of alike, and nothing is said of a file that 
     await openFileOf(page.stores, fileOf(readFileSync(`public/examples/${name}.sketch.json`, 'utf8')));
     expect([name, noticeOf(page)]).toEqual([name, null]);
   }
+});
+
+test('an example that cannot be had says so, and the sketch that is open stays', async () => {
+  const page = makePage(letDown);
+  const before = sketchOf(page);
+  vi.stubGlobal('fetch', () => Promise.reject(new TypeError('Failed to fetch')));
+  await openExample(page.stores, 'let-down.sketch.json');
+  expect(noticeOf(page)?.lines).toEqual(['let-down.sketch.json: there is no network (Failed to fetch)']);
+  vi.stubGlobal('fetch', async () => ({ ok: false, status: 404 }));
+  await openExample(page.stores, 'let-down.sketch.json');
+  expect(noticeOf(page)?.lines).toEqual(['let-down.sketch.json: 404']);
+  expect(sketchOf(page)).toBe(before);
+  vi.unstubAllGlobals();
 });
