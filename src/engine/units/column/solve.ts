@@ -138,10 +138,12 @@ const feedsInTwoLiquids = (call: Call<ColumnSettings>, { feedPorts }: ColumnJob)
   });
 
 /** What is fed has no two phases at the pressure of its stage: the column stands above the critical point of its feed. */
-function feedOfOnePhase(call: Call<ColumnSettings>, { task }: ColumnJob): Finding[] {
-  const { n_mol_s } = mixed(call.in, call.model.nc);
+function feedOfOnePhase(call: Call<ColumnSettings>, { task, present }: ColumnJob): Finding[] {
+  const { n_mol_s, total_mol_s } = mixed(call.in, call.model.nc);
   const { place } = task.feeds[0]!;
   const at = { P_Pa: task.P_Pa[place]!, vapourFraction: 0.5 };
+  const x = Float64Array.from(present, (i) => n_mol_s[i]! / total_mol_s);
+  if (at.P_Pa < task.model.pseudoCritical(x).P_Pa) return [];
   const made = makeStream(call.model, n_mol_s, at, call.work);
   if (made.state === 'solved' || made.findings[0].code !== 'equilibrium/no-such-state') return [];
   const where = nameOfPlace(call.settings, place);
