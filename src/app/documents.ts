@@ -116,12 +116,32 @@ export function openAsNew(stores: Stores, source: unknown, name: string): boolea
   return true;
 }
 
+/** Larger than any sketch: such a file is not even read [bytes]. */
+const MOST_BYTES = 16 * 1024 * 1024;
+
+/** The bytes of a file, or undefined once it is said why there are none. */
+async function bytesOf(stores: Stores, file: File): Promise<Uint8Array | undefined> {
+  const refused = (why: string): undefined =>
+    void stores.session.say('beyond', `${file.name} was not opened; your sketch is untouched.`, [why]);
+  if (file.size > MOST_BYTES)
+    return refused(`It has ${Math.round(file.size / 2 ** 20)} MB; no sketch has more than 16.`);
+  try {
+    return new Uint8Array(await file.arrayBuffer());
+  } catch (error) {
+    // Taken away, locked, or a folder.
+    if (!(error instanceof DOMException)) throw error;
+    return refused(`The browser could not read it (${error.message}). Is it still there, and is it a file?`);
+  }
+}
+
 /**
  * Opens a file. Where its sketch is on this computer in another state, neither takes the other's place: the file becomes a
  * sketch of its own.
  */
 export async function openFileOf(stores: Stores, file: File): Promise<void> {
-  const opened = openSketch(new Uint8Array(await file.arrayBuffer()));
+  const bytes = await bytesOf(stores, file);
+  if (!bytes) return;
+  const opened = openSketch(bytes);
   if (!opened.ok) {
     refuse(stores, file.name, opened);
     return;

@@ -65,3 +65,21 @@ test('an example that cannot be had says so, and the sketch that is open stays',
   expect(sketchOf(page)).toBe(before);
   vi.unstubAllGlobals();
 });
+
+test('a file that is larger than any sketch is not even read; one that cannot be read says so', async () => {
+  const page = makePage(letDown);
+  const before = sketchOf(page);
+  const film = fileOf('', 'film.mp4');
+  Object.defineProperty(film, 'size', { value: 3 * 2 ** 30 });
+  const read = vi.spyOn(film, 'arrayBuffer');
+  await openFileOf(page.stores, film);
+  expect(read).not.toHaveBeenCalled();
+  expect(noticeOf(page)?.title).toBe('film.mp4 was not opened; your sketch is untouched.');
+  expect(noticeOf(page)?.lines).toEqual(['It has 3072 MB; no sketch has more than 16.']);
+
+  const folder = fileOf('', 'folder');
+  folder.arrayBuffer = () => Promise.reject(new DOMException('not readable', 'NotReadableError'));
+  await openFileOf(page.stores, folder);
+  expect(noticeOf(page)?.lines[0]).toMatch(/^The browser could not read it \(not readable\)/);
+  expect(sketchOf(page)).toBe(before);
+});
