@@ -147,11 +147,12 @@ function Kept() {
                 defaultValue={head.title}
                 ref={(element) => element?.focus()}
                 onKeyDown={(event) => {
-                  if (event.key === 'Enter') act(() => rename(head, event.currentTarget.value.trim()));
-                  if (event.key !== 'Escape') return;
+                  if (event.key !== 'Enter' && event.key !== 'Escape') return;
+                  // The button that has the focus next would take the key for its own.
                   event.preventDefault();
                   event.stopPropagation();
-                  backToName(head);
+                  if (event.key === 'Enter') act(() => rename(head, event.currentTarget.value.trim()));
+                  else backToName(head);
                 }}
                 onBlur={() => setRenamed(null)}
               />
