@@ -150,6 +150,15 @@ describe.each(FILES)('the stream summary of %s as PDF', (file) => {
       for (const link of links) if (link !== 'page') expect(read.destinations).toContain(link);
   });
 
+  test('has the same headings as bookmarks, columns inside their section', () => {
+    const titles = read.bookmarks.map((b) => b.title);
+    expect(titles[0]).toBe('Process flow diagram');
+    expect(titles.at(-1)).toBe('Cautions');
+    expect(new Set(titles).size).toBe(titles.length);
+    const columns = input.sketch.units.filter((u) => u.kind === 'column').length;
+    expect(read.bookmarks.flatMap((b) => b.inside)).toHaveLength(columns);
+  });
+
   test('comes out the same byte for byte', async () => {
     const digest = (data: Uint8Array): string => createHash('sha256').update(data).digest('hex');
     expect(digest(await writePdf(input, FONTS))).toBe(digest(bytes));

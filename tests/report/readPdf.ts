@@ -31,6 +31,10 @@ export async function readPdf(bytes: Uint8Array): Promise<{
   readonly pages: readonly ReadPage[];
   readonly info: Readonly<Record<string, unknown>>;
   readonly destinations: readonly string[];
+  /** Number of the page, from 1, and height above its foot [pt] that each destination leads to. */
+  readonly places: ReadonlyMap<string, { readonly page: number; readonly y: number }>;
+  /** Titles of the bookmarks, one level in the other. */
+  readonly bookmarks: readonly { readonly title: string; readonly inside: readonly string[] }[];
 }> {
   const document = await getDocument({ data: new Uint8Array(bytes), verbosity: 0 }).promise;
   const pages: ReadPage[] = [];
@@ -61,8 +65,23 @@ export async function readPdf(bytes: Uint8Array): Promise<{
     });
   }
   const { info } = await document.getMetadata();
-  const destinations = Object.keys(await document.getDestinations());
-  return { pages, info: info as Record<string, unknown>, destinations };
+  const found = await document.getDestinations();
+  const places = new Map<string, { page: number; y: number }>();
+  for (const [name, place] of Object.entries(found) as [string, unknown[]][]) {
+    const page = await document.getPageIndex(place[0] as Parameters<typeof document.getPageIndex>[0]);
+    places.set(name, { page: page + 1, y: Number(place[3]) });
+  }
+  const outline = (await document.getOutline()) ?? [];
+  return {
+    pages,
+    info: info as Record<string, unknown>,
+    destinations: Object.keys(found),
+    places,
+    bookmarks: outline.map(({ title, items }) => ({
+      title,
+      inside: (items as { readonly title: string }[]).map((item) => item.title),
+    })),
+  };
 }
 
 /** Texts one after the other; a space where the page leaves one. */

@@ -221,16 +221,47 @@ describe.each(['A3', 'A4'] as const)('on %s nothing is lost', (paper) => {
   );
 });
 
+/** Lines of the contents that name another page than the one where the heading first stands, or that no link leads to. */
+function wrongContents({ pages, places }: Awaited<ReturnType<typeof readPdf>>, paper: PaperName): unknown[] {
+  const { margin, inner, text } = PAPERS[paper];
+  const edge = margin.left + 0.42 * inner.w;
+  const isHeading = (line: readonly Placed[]): boolean => (line[0]?.size ?? 0) > text + 1.8;
+  const contents = pages.find((page) =>
+    linesOf(page).some((l) => isHeading(l) && /^Contents/.test(textOf(l))),
+  );
+  const listed = linesOf({ ...contents!, texts: contents!.texts.filter((t) => t.right < edge + 1) }).filter(
+    (line) => line.length > 1 && /^\d+$/.test(line.at(-1)!.text) && line.at(-1)!.right > edge - 12,
+  );
+  const wrong = listed.flatMap((line) => {
+    const title = textOf(line.slice(0, -1));
+    const page = Number(line.at(-1)?.text);
+    // The drawing is its own heading.
+    if (title === 'Processflowdiagram')
+      return page === 1 && places.get('sheet')?.page === 1 ? [] : [[title, page]];
+    const standing = pages.flatMap((p, k) =>
+      linesOf(p).flatMap((l) =>
+        isHeading(l) && textOf(l) === title ? [{ page: k + 1, y: l[0]?.y ?? 0 }] : [],
+      ),
+    )[0];
+    const isLed = [...places.values()].some(
+      (place) => place.page === page && standing && place.y > standing.y && place.y < standing.y + 22,
+    );
+    return standing?.page === page && isLed ? [] : [[title, page, standing]];
+  });
+  return listed.length > 8 ? wrong : [['too few', listed.length]];
+}
+
 const FILES = readdirSync(EXAMPLES).filter((name) => name.endsWith('.sketch.json'));
 
 describe.each(FILES.flatMap((file) => [[file, 'A3'] as const, [file, 'A4'] as const]))(
   'the summary of %s on %s',
   (file, paper) => {
-    test('leaves no row, no heading and no page alone', async () => {
+    test('leaves no row, no heading and no page alone, and its contents name the right pages', async () => {
       const input = await solvedExample(file, (sketch) => ({ ...sketch, documents: { paper } }));
-      const { pages } = await readPdf(await writePdf(input, FONTS));
-      expect(faultsOf(pages, buildReport(input), paper)).toEqual([]);
-      expect(lonely(pages, paper)).toEqual([]);
+      const read = await readPdf(await writePdf(input, FONTS));
+      expect(faultsOf(read.pages, buildReport(input), paper)).toEqual([]);
+      expect(lonely(read.pages, paper)).toEqual([]);
+      expect(wrongContents(read, paper)).toEqual([]);
     }, 60_000);
   },
 );
@@ -240,11 +271,12 @@ describe.each([
   [{ streams: 80, chemicals: 4, long: true }, 'A3'],
   [{ streams: 80, chemicals: 40 }, 'A4'],
 ] as const)('the summary of %o on %s', (what, paper) => {
-  test('leaves no row, no heading and no page alone', async () => {
+  test('leaves no row, no heading and no page alone, and its contents name the right pages', async () => {
     const solved = await solvedGenerated(what);
     const input = { ...solved, sketch: { ...solved.sketch, documents: { paper } } };
-    const { pages } = await readPdf(await writePdf(input, FONTS));
-    expect(faultsOf(pages, buildReport(input), paper)).toEqual([]);
-    expect(lonely(pages, paper)).toEqual([]);
+    const read = await readPdf(await writePdf(input, FONTS));
+    expect(faultsOf(read.pages, buildReport(input), paper)).toEqual([]);
+    expect(lonely(read.pages, paper)).toEqual([]);
+    expect(wrongContents(read, paper)).toEqual([]);
   }, 120_000);
 });

@@ -1,9 +1,10 @@
-import type { Content, TableCell } from 'pdfmake/interfaces';
+import type { Content, ContentText, TableCell } from 'pdfmake/interfaces';
 import { profilePicture } from '../../drawing/profiles';
 import { pathToSvg, textToSvg } from '../../drawing/svg';
 import { PRINT } from '../../drawing/tokens';
 import { printed } from '../cells';
 import type { ColumnReport } from '../types';
+import { type Entry, marked } from './contents';
 import { LINE, type Paper } from './paper';
 import { GAP, highestRow } from './tables';
 import { keptTogether, type Lined, PADDING, rowHeight, setRows } from './together';
@@ -12,6 +13,7 @@ import { linesOf } from './wrap';
 /** Drawn for a screen, set smaller on paper [px]. */
 const PICTURE = { width: 620, height: 280 } as const;
 const BESIDE = 18;
+const SECTION: Entry = { key: 'columns', title: 'Columns' };
 /** Above and below a row [pt]. */
 const PAD = 1.6;
 /** Widths of a setting's label and of the figures [pt]. */
@@ -30,7 +32,7 @@ function columnBlock(column: ColumnReport, isFirst: boolean, paper: Paper): Cont
   const figureWidth = isWide ? 224 : 216;
   const pictureWidth = isWide ? 490 : 560;
   const room = paper.inner.w - BESIDE - figureWidth - (isWide && profiles ? pictureWidth + BESIDE : 0);
-  const { head, height: headHeight } = headOf(column, isFirst, paper);
+  const { head, entries, height: headHeight } = headOf(column, isFirst, paper);
   const settings = settingRows(column, room, paper);
   const figures = figureRows(column, paper);
   const picture: Content[] = profiles
@@ -45,7 +47,7 @@ function columnBlock(column: ColumnReport, isFirst: boolean, paper: Paper): Cont
   const pictureHeight = profiles ? (pictureWidth * PICTURE.height) / PICTURE.width + ABOVE_PICTURE : 0;
   const tablesHeight = Math.max(heightOf(settings, size), heightOf(figures, size));
   const height = headHeight + (isWide ? Math.max(tablesHeight, pictureHeight) : tablesHeight + pictureHeight);
-  if (height > paper.inner.h) return longBlock(column, head, headHeight, picture, paper);
+  if (height > paper.inner.h) return longBlock(column, isFirst, picture, paper);
   const tables: Content[] = [
     { width: room, ...plain(settings, size, [LABEL, room - LABEL - 8]) } as Content,
     ...(figures.length > 0
@@ -57,7 +59,7 @@ function columnBlock(column: ColumnReport, isFirst: boolean, paper: Paper): Cont
       unbreakable: true,
       margin: [0, GAP, 0, 0],
       stack: [
-        ...head,
+        ...head.map((text, k) => ({ ...text, ...marked(entries[k] as Entry) })),
         {
           columnGap: BESIDE,
           columns: isWide && profiles ? [...tables, { width: pictureWidth, stack: picture }] : tables,
@@ -71,18 +73,18 @@ function columnBlock(column: ColumnReport, isFirst: boolean, paper: Paper): Cont
 /** More than a page takes in one piece: one below the other, each table over as many pages as it needs. */
 function longBlock(
   column: ColumnReport,
-  head: Content[],
-  headHeight: number,
+  isFirst: boolean,
   picture: readonly Content[],
   paper: Paper,
 ): Content[] {
   const size = paper.text;
+  const { head, entries, height } = headOf(column, isFirst, paper);
   const highest = highestRow(paper);
   const tableOf = (
     rows: readonly Lined[][],
-    above: Content[],
-    height: number,
     widths: number[],
+    above: Content[],
+    at: { readonly head: number; readonly entries: readonly Entry[] },
   ): Content => ({
     margin: [0, GAP, 0, 0],
     fontSize: size,
@@ -90,21 +92,20 @@ function longBlock(
       [[{ stack: above, colSpan: widths.length }, ...widths.slice(1).map((): TableCell => '')]],
       rows.flatMap((row) => setRows(row, size, highest)),
       widths,
-      paper.inner.h - height,
+      { page: paper.inner.h, ...at },
     ),
   });
   const value = paper.inner.w - LABEL - 4 * PADDING;
   const figures = figureRows(column, paper);
+  const results = `${column.title}: results`;
   return [
-    tableOf(settingRows(column, paper.inner.w, paper), head, headHeight, [LABEL, value]),
+    tableOf(settingRows(column, paper.inner.w, paper), [LABEL, value], head, { head: height, entries }),
     ...(figures.length > 0
       ? [
-          tableOf(
-            figures,
-            [{ text: `${column.title}: results`, bold: true }],
-            rowHeight(linesOf(`${column.title}: results`, paper.inner.w, size, 600).length, size),
-            [180, 70, 90],
-          ),
+          tableOf(figures, [180, 70, 90], [{ text: results, bold: true }], {
+            head: rowHeight(linesOf(results, paper.inner.w, size, 600).length, size),
+            entries: [],
+          }),
         ]
       : []),
     ...picture,
@@ -116,31 +117,23 @@ function headOf(
   { key, title }: ColumnReport,
   isFirst: boolean,
   paper: Paper,
-): { readonly head: Content[]; readonly height: number } {
+): { readonly head: ContentText[]; readonly entries: readonly Entry[]; readonly height: number } {
   const size = paper.text + 2;
   const lines = linesOf(title, paper.inner.w, size, 600);
-  const section: Content = {
-    text: 'Columns',
+  const own: ContentText = { text: lines.join('\n'), bold: true, fontSize: size, margin: [0, 0, 0, 2] };
+  const entry: Entry = { key: `column.${key}`, title, parent: SECTION.key };
+  const ownHeight = lines.length * size * LINE + 2;
+  if (!isFirst) return { head: [own], entries: [entry], height: ownHeight };
+  const section: ContentText = {
+    text: SECTION.title,
     bold: true,
     fontSize: paper.heading,
     margin: [0, 0, 0, 6],
-    id: 'columns',
-    tocItem: true,
   };
   return {
-    head: [
-      ...(isFirst ? [section] : []),
-      {
-        text: lines.join('\n'),
-        bold: true,
-        fontSize: size,
-        margin: [0, 0, 0, 2],
-        id: `column.${key}`,
-        tocItem: true,
-        tocMargin: [12, 0, 0, 0],
-      },
-    ],
-    height: (isFirst ? paper.heading * LINE + 6 : 0) + lines.length * size * LINE + 2,
+    head: [section, own],
+    entries: [SECTION, entry],
+    height: paper.heading * LINE + 6 + ownHeight,
   };
 }
 

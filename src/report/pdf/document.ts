@@ -6,6 +6,7 @@ import type { ReportInput } from '../input';
 import { isShown, type SectionKey } from '../sections';
 import type { ReportModel, Table } from '../types';
 import { columnPages } from './columns';
+import { entriesOf } from './contents';
 import { contentsPage, drawing, firstPageFoot } from './front';
 import { PAPERS, type Paper } from './paper';
 import { streamPages } from './streams';
@@ -129,43 +130,44 @@ export function pdfDocument(report: ReportModel, input: ReportInput): TDocumentD
     titledTable(of, style(...styled));
   const w = (points: number): number => (paper.name === 'A3' ? points : 0.72 * points);
   const share = (of: number): Width => ({ share: of });
+  const sheet = part('sheet', () => [drawing(input, paper), firstPageFoot(report, input, paper)]);
+  const sections: Content[] = [
+    table(report.revisions, 'Revision', 60, w(80), share(1), w(110), w(110), w(110)),
+    ...part('basis', () => [
+      table(report.basis, 'What', 220, share(1)),
+      ...(report.utilities.rows.length > 0
+        ? [table(report.utilities, 'Level', 200, w(80), w(120), w(120), share(1))]
+        : []),
+    ]),
+    ...part('streams', () => streamPages(report.streams, paper)),
+    ...part('duties', () => [
+      titledTable(report.duties, {
+        ...style('Unit', 60, w(120), share(1), w(90), w(90), w(90), w(90), share(1.6)),
+        pageBreak: true,
+      }),
+      table(report.powers, 'Unit', 60, w(120), share(1), w(120), w(120), w(120)),
+    ]),
+    ...part('units', () => [table(report.units, 'Tag', 60, w(110), share(1), w(90), share(3.6))]),
+    ...part('columns', () => columnPages(report.columns, paper)),
+    ...part('closure', () => [table(report.closure, 'Balance', 220, w(130), w(130), w(110), w(100))]),
+    ...part('requirements', () => [
+      table(report.requirements, 'Stream', 80, share(1.2), w(100), w(100), w(120), share(1), share(1)),
+    ]),
+    ...part('limits', () => [table(report.limits, 'Where', 100, w(84), share(2), share(1), share(1.2))]),
+    ...part('assumptions', () => [
+      table(report.assumptions, 'No.', 40, share(1.3), share(1), share(2), w(70)),
+      table(report.holds, 'No.', 70, share(2), share(1), w(110), w(110)),
+    ]),
+    ...part('model', () => [
+      table(report.pairs, 'Pair', 260, w(70), w(100), share(1)),
+      titledList('sources', 'Sources', report.sources, paper),
+    ]),
+    titledList('cautions', 'Cautions', report.cautions, paper),
+  ];
+  const entries = entriesOf([sheet, sections]);
   return {
     ...around(report, input, 'Stream summary (heat and material balance)'),
-    content: [
-      ...part('sheet', () => [drawing(input, paper), firstPageFoot(report, input, paper)]),
-      contentsPage(report, paper, !isShown(choices, 'sheet')),
-      table(report.revisions, 'Revision', 60, w(80), share(1), w(110), w(110), w(110)),
-      ...part('basis', () => [
-        table(report.basis, 'What', 220, share(1)),
-        ...(report.utilities.rows.length > 0
-          ? [table(report.utilities, 'Level', 200, w(80), w(120), w(120), share(1))]
-          : []),
-      ]),
-      ...part('streams', () => streamPages(report.streams, paper)),
-      ...part('duties', () => [
-        titledTable(report.duties, {
-          ...style('Unit', 60, w(120), share(1), w(90), w(90), w(90), w(90), share(1.6)),
-          pageBreak: true,
-        }),
-        table(report.powers, 'Unit', 60, w(120), share(1), w(120), w(120), w(120)),
-      ]),
-      ...part('units', () => [table(report.units, 'Tag', 60, w(110), share(1), w(90), share(3.6))]),
-      ...part('columns', () => columnPages(report.columns, paper)),
-      ...part('closure', () => [table(report.closure, 'Balance', 220, w(130), w(130), w(110), w(100))]),
-      ...part('requirements', () => [
-        table(report.requirements, 'Stream', 80, share(1.2), w(100), w(100), w(120), share(1), share(1)),
-      ]),
-      ...part('limits', () => [table(report.limits, 'Where', 100, w(84), share(2), share(1), share(1.2))]),
-      ...part('assumptions', () => [
-        table(report.assumptions, 'No.', 40, share(1.3), share(1), share(2), w(70)),
-        table(report.holds, 'No.', 70, share(2), share(1), w(110), w(110)),
-      ]),
-      ...part('model', () => [
-        table(report.pairs, 'Pair', 260, w(70), w(100), share(1)),
-        titledList('sources', 'Sources', report.sources, paper),
-      ]),
-      titledList('cautions', 'Cautions', report.cautions, paper),
-    ],
+    content: [...sheet, contentsPage(report, paper, { entries, isFirst: sheet.length === 0 }), ...sections],
   };
 }
 

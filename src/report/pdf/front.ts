@@ -7,6 +7,7 @@ import { printed } from '../cells';
 import type { ReportInput } from '../input';
 import { reportScene } from '../sheet';
 import type { ReportModel } from '../types';
+import { anchor, contentsTable, type Entry } from './contents';
 import { LINE, type Paper } from './paper';
 import { fitted, wrapped } from './wrap';
 
@@ -20,7 +21,10 @@ export function drawing(input: ReportInput, paper: Paper): Content {
   const scale = Math.min(paper.inner.w / w, paper.sheet / h, 1.25);
   const above = Math.max(0, (paper.sheet - h * scale) / 2);
   return {
-    stack: [{ svg: sceneToSvg(scene, PRINT), width: w * scale, height: h * scale, alignment: 'center' }],
+    stack: [
+      anchor({ key: 'sheet', title: 'Process flow diagram' }, above),
+      { svg: sceneToSvg(scene, PRINT), width: w * scale, height: h * scale, alignment: 'center' },
+    ],
     margin: [0, above, 0, above],
   };
 }
@@ -63,8 +67,7 @@ export function firstPageFoot(report: ReportModel, input: ReportInput, paper: Pa
   const scale = paper.name === 'A3' ? 1 : 0.72;
   const size = paper.name === 'A3' ? 8.5 : 6.6;
   const widths = [262, 318, 232, 322].map((w) => (w * (paper.inner.w - 36)) / 1134);
-  const head = (text: string, more: object = {}): Content => ({
-    ...more,
+  const head = (text: string): Content => ({
     text,
     bold: true,
     fontSize: size + 1.5,
@@ -98,10 +101,7 @@ export function firstPageFoot(report: ReportModel, input: ReportInput, paper: Pa
       body: [
         [
           {
-            stack: [
-              head('Process flow diagram: key', { id: 'sheet', tocItem: true }),
-              { svg: keySvg(), width: 250 * scale },
-            ],
+            stack: [head('Process flow diagram: key'), { svg: keySvg(), width: 250 * scale }],
           },
           {
             stack: [
@@ -207,11 +207,15 @@ function titleBlock(report: ReportModel, width: number, scale: number): TableCel
 }
 
 /** Title block in full, contents with page numbers that lead there, and the state of the whole. */
-export function contentsPage(report: ReportModel, paper: Paper, isFirst: boolean): Content {
+export function contentsPage(
+  report: ReportModel,
+  paper: Paper,
+  { entries, isFirst }: { readonly entries: readonly Entry[]; readonly isFirst: boolean },
+): Content {
   const room = 0.42 * paper.inner.w;
   const size = paper.text + 0.5;
   const value = room - 120;
-  const entries = [
+  const facts = [
     ...report.title,
     { label: 'State', text: report.state.text },
     { label: 'Fingerprint of the file', text: report.strip.fingerprint },
@@ -227,7 +231,7 @@ export function contentsPage(report: ReportModel, paper: Paper, isFirst: boolean
         width: room,
         stack: [
           { text: 'Contents', bold: true, fontSize: paper.heading, margin: [0, 0, 0, 6], id: 'contents' },
-          { toc: { numberStyle: { bold: true }, textStyle: { fontSize: size } } },
+          contentsTable(entries, size),
         ],
       },
       {
@@ -238,7 +242,7 @@ export function contentsPage(report: ReportModel, paper: Paper, isFirst: boolean
             fontSize: size,
             table: {
               widths: [108, value],
-              body: entries.map(({ label, text }): TableCell[] => [
+              body: facts.map(({ label, text }): TableCell[] => [
                 { text: label, color: PRINT.ink2 },
                 { text: wrapped(text || '–', value, size) },
               ]),

@@ -3,6 +3,7 @@ import { measureText } from '../../drawing/metrics';
 import { FONT, PRINT } from '../../drawing/tokens';
 import { printed } from '../cells';
 import type { Row, Table } from '../types';
+import { marked } from './contents';
 import { tablePages } from './pages';
 import { LINE, type Paper } from './paper';
 import { ruled, valueCell } from './tables';
@@ -118,7 +119,7 @@ export function streamPages(table: Table, paper: Paper): Content[] {
             bold: true,
             fontSize: paper.heading,
             margin: [0, 0, 0, 6],
-            ...(k === 0 ? { id: table.key, tocItem: true } : {}),
+            ...(k === 0 ? marked(table) : {}),
           },
           {
             table: {

@@ -2,6 +2,7 @@ import type { Content, ContentTable, TableCell } from 'pdfmake/interfaces';
 import { PRINT } from '../../drawing/tokens';
 import { printed } from '../cells';
 import type { Cell, Row, Table } from '../types';
+import { marked } from './contents';
 import { LINE, type Paper } from './paper';
 import { keptTogether, type Layout, type Lined, PADDING, rowHeight, setRows } from './together';
 import { linesOf, wrapped } from './wrap';
@@ -88,7 +89,7 @@ export const highestRow = (paper: Paper): number => HIGHEST * paper.inner.h;
 
 /**
  * A table with its heading and notes inside its head: they stand with its first rows, are repeated where the table goes
- * on, and the heading is in the contents once.
+ * on, and the contents lead to the first.
  */
 export function titledTable(table: Table, style: TableStyle): Content {
   const { paper, rowHead } = style;
@@ -105,7 +106,12 @@ export function titledTable(table: Table, style: TableStyle): Content {
       colSpan: widths.length,
       margin: [-PADDING, 0, 0, 2],
       stack: [
-        { text: table.title, bold: true, fontSize: paper.heading, id: table.key, tocItem: true },
+        {
+          text: table.title,
+          bold: true,
+          fontSize: paper.heading,
+          ...(table.rows.length === 0 ? marked(table) : {}),
+        },
         ...table.notes.map((note) => ({
           text: wrapped(note, whole, size),
           color: PRINT.ink2,
@@ -130,8 +136,14 @@ export function titledTable(table: Table, style: TableStyle): Content {
     2 +
     table.notes.reduce((sum, note) => sum + 1 + linesOf(note, whole, size).length * size * LINE, 0);
   const [head] = setRows(heads, size, Number.POSITIVE_INFINITY);
-  const room = paper.inner.h - above - (head?.height ?? 0);
-  return { ...around, ...keptTogether([heading, [...(head?.cells ?? [])]], rows, widths, room) };
+  return {
+    ...around,
+    ...keptTogether([heading, [...(head?.cells ?? [])]], rows, widths, {
+      page: paper.inner.h,
+      head: above + (head?.height ?? 0),
+      entries: [table],
+    }),
+  };
 }
 
 /** A heading with paragraphs below it, one a row, so that it never stands alone. */
@@ -142,9 +154,8 @@ export function titledList(key: string, title: string, texts: readonly string[],
     text: title,
     bold: true,
     fontSize: paper.heading,
-    id: key,
-    tocItem: true,
     margin: [-PADDING, 0, 0, 2],
+    ...(texts.length === 0 ? marked({ key, title }) : {}),
   };
   const rows = texts.flatMap((text) =>
     setRows([{ lines: linesOf(text, width, size) }], size, highestRow(paper)),
@@ -152,6 +163,10 @@ export function titledList(key: string, title: string, texts: readonly string[],
   return {
     margin: [0, GAP, 0, 0],
     fontSize: size,
-    ...keptTogether([[heading]], rows, [width], paper.inner.h - rowHeight(1, paper.heading) - 2),
+    ...keptTogether([[heading]], rows, [width], {
+      page: paper.inner.h,
+      head: rowHeight(1, paper.heading) + 2,
+      entries: [{ key, title }],
+    }),
   };
 }

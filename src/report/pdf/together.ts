@@ -1,5 +1,6 @@
-import type { ContentTable, TableCell } from 'pdfmake/interfaces';
+import type { Content, ContentTable, TableCell } from 'pdfmake/interfaces';
 import { PRINT } from '../../drawing/tokens';
+import { anchor, type Entry } from './contents';
 import { LINE } from './paper';
 
 export type Layout = NonNullable<Exclude<ContentTable['layout'], string>>;
@@ -85,18 +86,22 @@ export function endsOf(heights: readonly number[], room: number): Ends {
  * A table whose first rows stay with its head and whose last rows stay together. The PDF maker knows the former; for the
  * latter the last rows are a table of their own inside one unbreakable row, with the same columns.
  *
- * @param room height of a page under the head [pt]
+ * @param at height of a page and of the table's head [pt], and the entries of the contents that lead to the head
  */
 export function keptTogether(
   heads: readonly TableCell[][],
   rows: readonly SetRow[],
   widths: readonly number[],
-  room: number,
+  at: { readonly page: number; readonly head: number; readonly entries: readonly Entry[] },
 ): ContentTable {
   const { first, last } = endsOf(
     rows.map((row) => row.height),
-    room,
+    at.page - at.head,
   );
+  const cells = rows.map((row) => [...row.cells]);
+  const [corner] = cells[0] ?? [];
+  if (cells[0] && corner !== undefined)
+    cells[0][0] = { stack: [...at.entries.map((entry) => anchor(entry, at.head)), corner as Content] };
   const inner = last > 1 ? last : 0;
   const outer = rows.length - inner;
   const isEnd = (k: number): boolean => k === 0 || k === rows.length;
@@ -107,7 +112,7 @@ export function keptTogether(
   const tail: TableCell = {
     colSpan: widths.length,
     margin: [-PADDING, 0, -PADDING, 0],
-    table: { widths: [...widths], body: rows.slice(outer).map((row) => [...row.cells]) },
+    table: { widths: [...widths], body: cells.slice(outer) },
     layout: {
       ...sides,
       hLineWidth: (i) => (i === 0 || i === inner ? 0 : width(outer + i)),
@@ -127,7 +132,7 @@ export function keptTogether(
       widths: [...widths],
       body: [
         ...heads,
-        ...rows.slice(0, outer).map((row) => [...row.cells]),
+        ...cells.slice(0, outer),
         ...(inner > 0 ? [[tail, ...widths.slice(1).map((): TableCell => '')]] : []),
       ],
     },
