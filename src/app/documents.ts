@@ -147,7 +147,13 @@ export async function openFileOf(stores: Stores, file: File): Promise<void> {
     return;
   }
   const { sketch } = opened;
-  const stored = await theStorage()?.latest(sketch.id);
+  const stored = await theStorage()
+    ?.latest(sketch.id)
+    .catch((error: unknown) => {
+      // A store that breaks keeps no file from being opened; that it cannot be kept is said when it is to be kept.
+      console.warn(`What is stored of ${file.name} could not be looked up: ${String(error)}`);
+      return undefined;
+    });
   const isOther = stored !== undefined && writeSketch(stored.document) !== writeSketch(sketch);
   leaveFor(stores, () => {
     showSketch(stores, isOther ? { ...sketch, id: crypto.randomUUID() } : sketch);

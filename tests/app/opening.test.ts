@@ -2,6 +2,7 @@
 import { readFileSync } from 'node:fs';
 import { expect, test, vi } from 'vitest';
 import { openAsNew, openExample, openFileOf } from '../../src/app/documents';
+import { setStorage } from '../../src/app/storage';
 import { letDown, makePage, sketchOf } from '../drawers/page';
 
 const noticeOf = ({ stores }: ReturnType<typeof makePage>) => stores.session.getState().notice;
@@ -82,4 +83,17 @@ test('a file that is larger than any sketch is not even read; one that cannot be
   await openFileOf(page.stores, folder);
   expect(noticeOf(page)?.lines[0]).toMatch(/^The browser could not read it \(not readable\)/);
   expect(sketchOf(page)).toBe(before);
+});
+
+test('a store that breaks keeps no file from being opened', async () => {
+  const page = makePage(letDown);
+  const warned = vi.spyOn(console, 'warn').mockImplementation(() => undefined);
+  setStorage({ latest: () => Promise.reject(new Error('broken')) } as never);
+  await openFileOf(
+    page.stores,
+    fileOf(JSON.stringify({ ...letDown, id: 'other', title: { title: 'Mine' } })),
+  );
+  expect(sketchOf(page).title.title).toBe('Mine');
+  expect(warned.mock.calls.flat().join()).toContain('broken');
+  warned.mockRestore();
 });
