@@ -3,7 +3,7 @@ import type { StageSystem } from './system';
 
 /** Where the best attempt stood when it was given up. */
 export interface Failure {
-  readonly why: 'dries' | 'trivial' | 'no-convergence' | 'out-of-reach';
+  readonly why: 'dries' | 'trivial' | 'no-convergence' | 'out-of-reach' | 'open';
   /** Place of the worst residual, or the one that runs dry. */
   readonly place: number;
   /** 'dries': what runs out there. */

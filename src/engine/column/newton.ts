@@ -52,9 +52,12 @@ export class Newton {
   private readonly dp: Float64Array;
   private readonly unit: Float64Array;
   private readonly kept: { l: Float64Array; v: Float64Array; T: Float64Array; p: Float64Array };
+  /** Change of every target's measure with the logarithm of every free parameter, the stages' equations held; factored. */
   private readonly schur: Float64Array;
   private readonly pivot: Int32Array;
   private readonly g: Float64Array;
+  /** Free parameters as they were when the factors were made. */
+  private readonly factored: Float64Array;
 
   constructor(private readonly s: StageSystem) {
     const size = s.l.length;
@@ -77,6 +80,7 @@ export class Newton {
     this.schur = new Float64Array(k * k);
     this.pivot = new Int32Array(k);
     this.g = new Float64Array(k);
+    this.factored = new Float64Array(k);
   }
 
   /**
@@ -157,7 +161,18 @@ export class Newton {
   }
 
   /**
-   * Change of the only target's measure with the only free parameter, at the factors used last; undefined with another
+   * The least that a direction of the free parameters moves the targets' measures, by the pivots of their sensitivities: a
+   * relative change of the parameters by one changes measures by about this. Infinity with nothing free.
+   */
+  leastPivot(wanted: Wanted): number {
+    const k = wanted.free.length;
+    let least = Number.POSITIVE_INFINITY;
+    for (let c = 0; c < k; c++) least = Math.min(least, Math.abs(this.schur[c * k + c]!));
+    return least;
+  }
+
+  /**
+   * Change of the only target's measure with the logarithm of the only free parameter, at the factors used last; undefined with another
    * number of them.
    */
   slope(wanted: Wanted): number | undefined {
@@ -177,7 +192,9 @@ export class Newton {
     for (let c = 0; c < k; c++) {
       unit.fill(0);
       unit[wanted.free[c]!] = 1;
-      for (let r = 0; r < k; r++) schur[r * k + c] = wanted.targets[r]!.slope(borders[c]!, unit);
+      const p = s.p[wanted.free[c]!]!;
+      this.factored[c] = p;
+      for (let r = 0; r < k; r++) schur[r * k + c] = p * wanted.targets[r]!.slope(borders[c]!, unit);
     }
     return k === 0 || luFactor(schur, k, this.pivot);
   }
@@ -224,7 +241,7 @@ export class Newton {
     }
     if (k > 0) luSolve(schur, k, this.pivot, g);
     for (let c = 0; c < k; c++) {
-      const share = g[c]!;
+      const share = this.factored[c]! * g[c]!;
       if (!Number.isFinite(share)) return false;
       dp[wanted.free[c]!] = share;
       const border = borders[c]!;

@@ -27,6 +27,11 @@ const STARTS: readonly (readonly [Attempt, Sweeps])[] = [
 ];
 const ITERATIONS = 40;
 const WARM_ITERATIONS = 14;
+/**
+ * What is asked settles the parameters only if it changes with them by more than this: residuals of 1e-12 then leave them
+ * certain to four digits.
+ */
+const SETTLES = 1e-8;
 /** Steps of a scan: how long in the logarithm of a parameter, how many each way. */
 const SCAN_STEP = 0.25;
 const SCAN_STEPS = 20;
@@ -71,6 +76,12 @@ class Search {
   }
 
   private solved(): ColumnEnd {
+    if (this.newton.leastPivot(this.wanted) < SETTLES)
+      return {
+        state: 'no-solution',
+        failure: { ...standing(this.system), why: 'open' },
+        effort: this.effort,
+      };
     const slope = this.newton.slope(this.wanted);
     return {
       state: 'solved',

@@ -175,6 +175,11 @@ export const column: KindWords = {
       says: 'Of chemicals the feeds bring {chemicals} only: this follows from the rest and fixes nothing.',
       next: 'Fix a flow, a ratio or a duty instead.',
     },
+    'column/not-settled': {
+      title: 'What is fixed settles nothing',
+      says: 'What is asked is met, but it hardly changes with the flows that it should settle: a whole range of columns would meet it, and no number of theirs can be told.',
+      next: 'Fix something that depends on them: a flow, a ratio, or a component that both products hold.',
+    },
     'column/dries': {
       title: 'A stage runs dry',
       says: 'The {phase} at {place} goes to nothing: the column cannot carry what is asked.',

@@ -34,6 +34,7 @@ export const COLUMN_FINDINGS = [
   'column/one-phase',
   'column/out-of-reach',
   'column/not-found',
+  'column/not-settled',
   'column/feed-vapour-above-top',
   'column/feed-in-two-liquids',
   // What was found, where more than one answer is possible.

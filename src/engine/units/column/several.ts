@@ -35,7 +35,8 @@ export function severalAnswers(
   if (slope === undefined) return [];
   const k = fixed.findIndex((x) => x.fix === 'purity' || x.fix === 'temperature');
   const x = fixed[k];
-  if (x?.fix === 'temperature') return slope > 0 ? [fallingTemperature(call, s, k, x.place)] : [];
+  if (x?.fix === 'temperature')
+    return slope > 0 ? [fallingTemperature(call, s, k, x.place)] : anotherPossible(call, job, s);
   if (x?.fix !== 'purity' || !isBetween(s, x)) return [];
   // A main part is measured by what is not it; more bottoms is less distillate.
   const rises = (x.value <= 0.5 ? slope : -slope) * (x.product === 'bottoms' ? 1 : -1) > 0;

@@ -84,6 +84,7 @@ function reason(
   const steps = saw('iterations', effort.iterations, 'number');
   const code = CODES[failure.why];
   const found: Finding[] = [];
+  if (failure.why === 'open') return [refuse(call, code, { path: 'fixedBy' }, [steps])];
   if (failure.why === 'out-of-reach') {
     const path = failure.fixing === undefined ? {} : { path: `fixedBy.${failure.fixing}` };
     found.push(refuse(call, code, path, [...reached(job.task, failure), steps, where, ...tried]));
@@ -127,6 +128,7 @@ const CODES: Readonly<Record<Failure['why'], Finding['code']>> = {
   trivial: 'column/one-phase',
   'out-of-reach': 'column/out-of-reach',
   'no-convergence': 'column/not-found',
+  open: 'column/not-settled',
 };
 
 /** Feeds that would part in two liquids: with one liquid only, what is condensed of them often has no state at all. */
