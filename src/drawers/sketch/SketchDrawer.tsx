@@ -84,21 +84,21 @@ function RevisionLine() {
           <output aria-label="Revision">{mark}</output>
         </div>
         <p className="field-note">
-          The newest entry of the revision table.{' '}
-          <button
-            type="button"
-            className="link"
-            onClick={() => {
-              session.openDrawer({ is: 'basis' });
-              focusField('revisions.0.mark');
-            }}
-          >
-            Change it in the table
-          </button>
-          {own && own !== mark ? (
-            <span> “{own}”, typed here before, is kept; it counts when the table is empty.</span>
-          ) : null}
+          The newest entry of the revision table.
+          {own && own !== mark
+            ? ` “${own}”, typed here before, is kept; it counts when the table is empty.`
+            : ''}
         </p>
+        <button
+          type="button"
+          className="link"
+          onClick={() => {
+            session.openDrawer({ is: 'basis' });
+            focusField('revisions.0.mark');
+          }}
+        >
+          Change it in the table
+        </button>
       </div>
     </div>
   );
