@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { splitAtDecimal } from '../quantity';
 
 export interface NumberCellProps {
@@ -25,8 +26,8 @@ export interface FigureRowProps extends NumberCellProps {
   readonly outOfDate?: boolean;
 }
 
-/** Name, number, unit, under a rule. */
-export function FigureRow({ label, title, outOfDate, ...cell }: FigureRowProps) {
+/** Name, number, unit, under a rule; drawn again when one of them is another. */
+export const FigureRow = memo(function FigureRow({ label, title, outOfDate, ...cell }: FigureRowProps) {
   return (
     <div className={outOfDate ? 'figure-row older' : 'figure-row'} title={title}>
       <dt>{label}</dt>
@@ -35,4 +36,4 @@ export function FigureRow({ label, title, outOfDate, ...cell }: FigureRowProps) 
       </dd>
     </div>
   );
-}
+});

@@ -1,7 +1,7 @@
 // @vitest-environment jsdom
 
 import { readFileSync } from 'node:fs';
-import { act, cleanup, render } from '@testing-library/react';
+import { act, cleanup, fireEvent, render } from '@testing-library/react';
 import type { ReactNode } from 'react';
 import { afterEach, beforeAll, describe, expect, test, vi } from 'vitest';
 import { Balance } from '../../src/balance/Balance';
@@ -80,6 +80,15 @@ const tally = (): Readonly<Record<string, number>> => {
   return counts;
 };
 
+/** What stands at each unit and stream of the sheet, by tag and number. */
+const texts = (): ReadonlyMap<string, string> =>
+  new Map(
+    [...document.querySelectorAll<HTMLElement>('[data-unit], [data-stream]')].map((element) => [
+      `${element.dataset.unit ?? ''} ${element.dataset.stream ?? ''}`,
+      element.textContent ?? '',
+    ]),
+  );
+
 describe('a new answer to the condensate train', () => {
   const pieces = (): ReadonlyMap<string, string> =>
     new Map(
@@ -126,15 +135,6 @@ describe('a new answer to the condensate train', () => {
       expect([name, counts[name] ?? 0]).toEqual([name, 0]);
   });
 
-  /** What stands at each unit and stream of the sheet, by tag and number. */
-  const texts = (): ReadonlyMap<string, string> =>
-    new Map(
-      [...document.querySelectorAll<HTMLElement>('[data-unit], [data-stream]')].map((element) => [
-        `${element.dataset.unit ?? ''} ${element.dataset.stream ?? ''}`,
-        element.textContent ?? '',
-      ]),
-    );
-
   test('draws on the sheet the units and streams whose text changed, and at most three views more', () => {
     // Wide enough for the whole train at a zoom at which texts stand.
     vi.spyOn(HTMLElement.prototype, 'clientWidth', 'get').mockReturnValue(1400);
@@ -150,5 +150,90 @@ describe('a new answer to the condensate train', () => {
     expect(changed).toBeGreaterThan(0);
     expect(changed).toBeLessThan(before.size / 2);
     expect(rendered.length).toBeLessThanOrEqual(changed + 3);
+  });
+});
+
+describe('an open unit drawer', () => {
+  const fieldOf = (path: string): HTMLInputElement => {
+    const found = document.querySelector<HTMLInputElement>(`.drawer [data-field="${path}"]`);
+    if (!found) throw new Error(`no field ${path}`);
+    return found;
+  };
+  const drawer = (stores: Stores, tag: string): void =>
+    act(() => stores.session.openDrawer({ is: 'unit', id: idOf(tag) }));
+  /** Steps a number as Alt and an arrow do; what is drawn is counted from the second step on: the first opens the ruler. */
+  const step = (path: string): string => {
+    const field = fieldOf(path);
+    const before = field.value;
+    for (const _ of [1, 2]) {
+      rendered.length = 0;
+      act(() => void fireEvent.keyDown(field, { key: 'ArrowUp', altKey: true }));
+    }
+    expect(field.value).not.toBe(before);
+    return field.value;
+  };
+  const RULED = { QuantityField: 1, SlideRuler: 1 };
+
+  test.each([
+    ['C-101', 'fixedBy.0.value', { ValueField: 1, FixedText: 1 }],
+    ['C-101', 'pressure.top', { SettingControl: 1 }],
+    // A share says of what it is one: its lists stand beside the number.
+    ['C-101', 'fixedBy.1.value.share', { FlowEditor: 1, Choice: 2, Segmented: 1, FixedText: 1 }],
+    ['FEED-1', 'state.T', { SettingControl: 1 }],
+    ['P-101', 'efficiency', { SettingControl: 1 }],
+  ])(
+    'of %s draws, when %s is dragged, that field and what repeats it, of the rest nothing',
+    (tag, path, more) => {
+      drawer(show(<DrawerHost />), tag);
+      step(path);
+      expect(tally()).toEqual({ ...RULED, ...more });
+    },
+  );
+
+  test('draws, when a part of a composition is dragged, that part and the sum', () => {
+    drawer(show(<DrawerHost />), 'FEED-1');
+    step('composition.parts.benzene');
+    const { SumNote = 0, ...counts } = tally();
+    expect(counts).toEqual({ ...RULED, Part: 1, FieldFindings: 1, FieldFindingList: 1, Sum: 1 });
+    expect(SumNote).toBeLessThanOrEqual(1);
+  });
+
+  test('goes on from the number as it stands, in every field that shows it', () => {
+    const stores = show(<DrawerHost />);
+    const value = step('fixedBy.0.value');
+    expect(document.querySelector('.fixed-text')?.textContent).toContain(`reflux ratio ${value}`);
+    act(() => void fireEvent.keyUp(fieldOf('fixedBy.0.value'), { key: 'Alt' }));
+    // Another hand changes the same number: undo, a second view.
+    act(() => void stores.sketch.undo());
+    expect(fieldOf('fixedBy.0.value').value).toBe('2.4');
+    expect(document.querySelector('.fixed-text')?.textContent).toContain('reflux ratio 2.4');
+  });
+
+  test('leaves the sheet’s count as it is; its own is that of its changed figures and fifteen views that hold them', () => {
+    vi.spyOn(HTMLElement.prototype, 'clientWidth', 'get').mockReturnValue(1400);
+    vi.spyOn(HTMLElement.prototype, 'clientHeight', 'get').mockReturnValue(900);
+    const figures = (): readonly string[] =>
+      [...document.querySelectorAll('.drawer .figure-row, .drawer .field-findings li')].map(
+        (e) => e.textContent ?? '',
+      );
+    const stores = show(
+      <>
+        <Sheet />
+        <DrawerHost />
+      </>,
+    );
+    act(() => stores.results.take(2, true, all(second), 1));
+    const [sheet, own] = [texts(), figures()];
+    rendered.length = 0;
+    act(() => stores.results.take(3, true, all(first), 1));
+    const count = (before: Iterable<unknown>, after: Iterable<unknown>): number => {
+      const old = [...before];
+      return [...after].filter((text, k) => JSON.stringify(text) !== JSON.stringify(old[k])).length;
+    };
+    const [k, m] = [count(sheet, texts()), count(own, figures())];
+    expect(k).toBeGreaterThan(0);
+    expect(m).toBeGreaterThan(5);
+    // Every changed figure is a row and a number, every changed finding a row and a mark.
+    expect(rendered.length).toBeLessThanOrEqual(k + 3 + 2 * m + 15);
   });
 });

@@ -6,7 +6,7 @@ import type { Dimension } from '../../quantity';
 import { show } from '../../quantity';
 import { useUnitResult } from '../../store/react';
 import { stagesText } from '../../wording';
-import { useForm } from '../unit/form';
+import { useForm } from '../unit/useForm';
 import { Profiles } from './Profiles';
 import { useFixingWords } from './words';
 
@@ -14,7 +14,6 @@ import { useFixingWords } from './words';
 export function ColumnOutcome() {
   const form = useForm();
   const measures = useMeasures();
-  const words = useFixingWords();
   const entry = useUnitResult(form.unit.id);
   const latest = entry?.latest;
   const outOfDate = latest?.state !== 'solved' && entry?.older !== undefined;
@@ -33,7 +32,6 @@ export function ColumnOutcome() {
       'power',
     );
   const { condenser, reboiler, stages } = results;
-  const fixed = words.all(form.unit.settings);
   return (
     <>
       <section className="section">
@@ -51,14 +49,19 @@ export function ColumnOutcome() {
           {row(`Bottom temperature, stage ${stages.T_K.length}`, results.bottomT_K, 'temperature')}
           {row('Reboiler temperature', reboiler?.T_K, 'temperature')}
         </dl>
-        {outOfDate ? null : (
-          <p className="fixed-text">
-            {stagesText(form.unit.settings)}
-            {fixed === '' ? '.' : `; fixed by ${fixed}.`}
-          </p>
-        )}
+        {outOfDate ? null : <FixedText />}
       </section>
       <Profiles results={results} outOfDate={outOfDate} />
     </>
   );
+}
+
+/** Stages, ends and what fixes the column, as set. */
+function FixedText() {
+  const words = useFixingWords();
+  const text = useForm().ask(({ unit: { settings } }) => {
+    const fixed = words.all(settings);
+    return `${stagesText(settings)}${fixed === '' ? '.' : `; fixed by ${fixed}.`}`;
+  });
+  return <p className="fixed-text">{text}</p>;
 }

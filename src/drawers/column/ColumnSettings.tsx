@@ -1,11 +1,11 @@
-import type { FixedView } from '../../engine/units/column/free';
 import type { SettingSpec } from '../../engine/units/types';
 import { Segmented } from '../../parts/Segmented';
 import { useStores } from '../../store/react';
 import { endWords } from '../../wording';
 import { Fields } from '../unit/Fields';
-import { type Form, FormProvider, useForm } from '../unit/form';
+import { type Form, withAnswers } from '../unit/form';
 import { FieldFindings, SettingRow } from '../unit/SettingRow';
+import { FormProvider, useChanged, useForm } from '../unit/useForm';
 import { WholeField } from '../unit/WholeField';
 import { Efficiency } from './Efficiency';
 import { setDistillate, setReboiler } from './ends';
@@ -28,7 +28,7 @@ export function ColumnSettings() {
   const { settings } = form.kind;
   const { stages, subcooling } = settings;
   const { max } = stages?.is === 'whole' ? stages : {};
-  const ends = endWords(form.unit.settings);
+  const ends = form.ask(({ unit }) => endWords(unit.settings));
   const isLiquid = form.value('top.distillate') === 'liquid';
   return (
     <>
@@ -47,7 +47,7 @@ export function ColumnSettings() {
         </SettingRow>
         <Distillate />
         <Reboiler />
-        {subcooling && (isLiquid || form.value('subcooling') !== undefined) ? (
+        {subcooling && (isLiquid || form.has('subcooling')) ? (
           <form.Editor spec={subcooling} path="subcooling" />
         ) : null}
         <Pressure />
@@ -113,23 +113,22 @@ function Reboiler() {
 /** Pressures of the places that there are; one given for an end that has gone stays in sight. */
 function Pressure() {
   const form = useForm();
+  const source = useChanged(withPressureWords);
   const spec = form.kind.settings.pressure;
   if (spec?.is !== 'record') return null;
-  const view = form.unit.settings as FixedView;
+  const distillate = form.value('top.distillate');
   const there: Readonly<Record<string, boolean>> = {
-    condenser: view.top?.distillate !== undefined && view.top.distillate !== 'none',
-    reboiler: view.bottom?.reboiler === true,
+    condenser: distillate !== undefined && distillate !== 'none',
+    reboiler: form.value('bottom.reboiler') === true,
   };
   const fields = Object.fromEntries(
-    Object.entries(spec.fields).filter(
-      ([key]) => (there[key] ?? true) || form.value(`pressure.${key}`) !== undefined,
-    ),
+    Object.entries(spec.fields).filter(([key]) => (there[key] ?? true) || form.has(`pressure.${key}`)),
   );
   const unused = Object.keys(there).filter((end) => !there[end] && Object.hasOwn(fields, end));
   return (
     <fieldset className="group plain">
       <legend className="unseen">Pressure</legend>
-      <FormProvider value={withPressureWords(form)}>
+      <FormProvider value={source}>
         <div className="pairs-of">
           <Fields fields={fields} base="pressure" choose={spec.choose} />
         </div>
@@ -152,10 +151,8 @@ const PRESSURES: Readonly<Record<string, string>> = {
   'pressure.perStage': 'drop a stage',
   'pressure.reboiler': 'reboiler pressure',
 };
-const withPressureWords = (form: Form): Form => ({
-  ...form,
-  word: (path) => PRESSURES[path] ?? form.word(path),
-});
+const withPressureWords = (form: Form): Form =>
+  withAnswers({ ...form, word: (path) => PRESSURES[path] ?? form.word(path) });
 
 const fieldOf = (spec: SettingSpec | undefined, key: string): SettingSpec | undefined =>
   spec?.is === 'record' ? (spec.fields as Fielded)[key] : undefined;

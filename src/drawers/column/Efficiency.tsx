@@ -1,8 +1,8 @@
 import { QuantityField } from '../../parts/QuantityField';
 import type { Json } from '../../sketch/types';
-import { useForm } from '../unit/form';
 import { quantityOf } from '../unit/given';
 import { FieldFindings } from '../unit/SettingRow';
+import { useForm } from '../unit/useForm';
 import { WholeField } from '../unit/WholeField';
 
 const PATH = 'murphree';

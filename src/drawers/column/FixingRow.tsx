@@ -3,9 +3,9 @@ import { QuantityField } from '../../parts/QuantityField';
 import type { Dimension } from '../../quantity';
 import type { Json, Quantity } from '../../sketch/types';
 import { FlowEditor } from '../unit/FlowEditor';
-import { useForm } from '../unit/form';
 import { quantityOf } from '../unit/given';
 import { FieldFindings, SettingRow } from '../unit/SettingRow';
+import { useForm } from '../unit/useForm';
 import { capital } from '../words';
 import { type Offer, offerKey, turned } from './fixings';
 import { BasisPicker, ChemicalPicker, ProductPicker, StagePicker } from './pickers';
@@ -31,7 +31,8 @@ export function FixingRow({ row, offers, choose, take, stays, isNew, leave }: Pr
   const form = useForm();
   const words = useFixingWords();
   const base = `fixedBy.${row}`;
-  const item = form.value(base) ?? {};
+  // Its number is the field's own: what is dragged there leaves the row as it is.
+  const item = form.ask((now) => ({ ...((now.value(base) ?? {}) as object), value: null }));
   const key = offerKey(item as object);
   const known = offers.some((offer) => offer.key === key);
   const ordinal = ['first', 'second', 'third'][row] ?? String(row + 1);

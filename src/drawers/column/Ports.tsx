@@ -1,8 +1,8 @@
 import type { Port } from '../../engine/ids';
 import { Segmented } from '../../parts/Segmented';
 import { FlowEditor } from '../unit/FlowEditor';
-import { useForm } from '../unit/form';
 import { FieldFindings, SettingRow } from '../unit/SettingRow';
+import { useForm } from '../unit/useForm';
 import { WholeField } from '../unit/WholeField';
 import { capital, portWord } from '../words';
 import { endsOf, type PortRow, usePortRows } from './places';
@@ -109,7 +109,7 @@ function SideDraw({ row }: { readonly row: PortRow }) {
           word={`flow of ${word}`}
           beside={[]}
           share={false}
-          needed={form.value(`${base}.flow`) === undefined}
+          needed={!form.has(`${base}.flow`)}
         />
       </SettingRow>
     </>

@@ -1,6 +1,6 @@
 import type { Json } from '../../sketch/types';
 import { keysOf, type Path, valueAt, withValue } from '../edits';
-import type { Form } from '../unit/form';
+import { type Form, withAnswers } from '../unit/form';
 
 /** A row of what fixes the column that has no value yet: kept here until one is typed, so that the train goes on as it was. */
 export interface Draft {
@@ -33,7 +33,7 @@ export function draftForm(
     if (valueAt(next, 'value') === undefined) keep(next);
     else put(next, label);
   };
-  return {
+  return withAnswers({
     ...form,
     value: (path) => {
       const rest = inside(path);
@@ -48,5 +48,5 @@ export function draftForm(
           `set ${form.unit.tag} ${word}`,
         ),
     }),
-  };
+  });
 }

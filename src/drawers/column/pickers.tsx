@@ -1,7 +1,7 @@
 import { Choice } from '../../parts/Choice';
 import { Segmented } from '../../parts/Segmented';
 import { useChemicals } from '../chemicalNames';
-import { useForm } from '../unit/form';
+import { useForm } from '../unit/useForm';
 import { WholeField } from '../unit/WholeField';
 import { portWord } from '../words';
 import { endsOf, usePortRows } from './places';

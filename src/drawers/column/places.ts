@@ -1,7 +1,7 @@
 import { useMemo } from 'react';
 import { useSketch } from '../../store/react';
 import type { Form } from '../unit/form';
-import { useForm } from '../unit/form';
+import { useForm } from '../unit/useForm';
 
 export interface PortRow {
   readonly port: string;

@@ -1,8 +1,8 @@
 import { Choice } from '../../parts/Choice';
 import { QuantityField } from '../../parts/QuantityField';
-import { useForm } from './form';
 import { quantityOf } from './given';
 import { SettingRow } from './SettingRow';
+import { useForm } from './useForm';
 
 const AIRS = [
   { value: 'dry air', text: 'dry air' },

@@ -2,9 +2,9 @@ import type { SettingSpec } from '../../engine/units/types';
 import { Choice } from '../../parts/Choice';
 import { capital, optionWord } from '../words';
 import { Fields } from './Fields';
-import { useForm } from './form';
 import { hasOneLine, SettingControl } from './SettingControl';
 import { FieldFindings, SettingRow } from './SettingRow';
+import { useForm } from './useForm';
 
 type CasesSpec = Extract<SettingSpec, { is: 'cases' }>;
 const VALUE = 'value';

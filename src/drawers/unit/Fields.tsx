@@ -1,7 +1,8 @@
 import type { Choice, Moot, SettingSpec } from '../../engine/units/types';
 import { capital } from '../words';
-import { type Form, joined, useForm } from './form';
+import { type Form, joined } from './form';
 import { OneOf } from './OneOf';
+import { useForm } from './useForm';
 
 interface Props {
   readonly fields: Readonly<Record<string, SettingSpec>>;
@@ -14,7 +15,7 @@ interface Props {
 }
 
 const isMoot = (form: Form, rules: readonly Moot[], key: string): Moot | undefined =>
-  rules.find((rule) => rule.key === key && rule.when.every((path) => form.value(path) !== undefined));
+  rules.find((rule) => rule.key === key && rule.when.every((path) => form.has(path)));
 
 /** Settings one after the other, in the catalogue's order; those of which only some are given share their rows. */
 export function Fields({ fields, base, choose = [], moot = [], dormant = false }: Props) {
@@ -30,7 +31,7 @@ export function Fields({ fields, base, choose = [], moot = [], dormant = false }
       );
     }
     const rule = isMoot(form, moot, key);
-    if (rule && form.value(key) === undefined)
+    if (rule && !form.has(key))
       return (
         <p className="field-note" key={key}>
           {capital(form.word(key))} follows from {rule.when.map((path) => form.word(path)).join(' and ')}.

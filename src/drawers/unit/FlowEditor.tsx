@@ -8,8 +8,8 @@ import { useSketch } from '../../store/react';
 import { useChemicals } from '../chemicalNames';
 import { type SettingChange, valueAt } from '../edits';
 import { capital } from '../words';
-import { useForm } from './form';
 import { quantityOf } from './given';
+import { useForm } from './useForm';
 
 interface Props {
   readonly path: string;

@@ -1,3 +1,4 @@
+import { useMemo } from 'react';
 import { useShallow } from 'zustand/react/shallow';
 import { FigureRow } from '../../parts/Figure';
 import { useMeasures } from '../../parts/measures';
@@ -5,7 +6,7 @@ import { show } from '../../quantity';
 import type { SketchStream } from '../../sketch/types';
 import { useSketch, useStores, useStreamResult } from '../../store/react';
 import { shownStream } from '../../store/resultsStore';
-import { useForm } from './form';
+import { useForm } from './useForm';
 
 /** What enters the unit, so that a setting can be chosen with it in sight. */
 export function Known() {
@@ -30,15 +31,22 @@ function Inlet({ stream }: { readonly stream: SketchStream }) {
   const { session } = useStores();
   const measures = useMeasures();
   const shown = shownStream(useStreamResult(stream.id));
-  const link = (
-    <button type="button" className="link" onClick={() => session.select([], [stream.id])}>
-      stream {stream.number}
-    </button>
+  const { id, number } = stream;
+  const label = useMemo(
+    () => (
+      <>
+        Inlet,{' '}
+        <button type="button" className="link" onClick={() => session.select([], [id])}>
+          stream {number}
+        </button>
+      </>
+    ),
+    [session, id, number],
   );
   if (!shown)
     return (
       <dl className="figures">
-        <FigureRow label={<>Inlet, {link}</>} text="–" unit="" />
+        <FigureRow label={label} text="–" unit="" />
       </dl>
     );
   const { result, outOfDate } = shown;
@@ -50,7 +58,7 @@ function Inlet({ stream }: { readonly stream: SketchStream }) {
   const vapour = show(result.vapourFraction, 'fraction', measures);
   return (
     <dl className="figures">
-      <FigureRow label={<>Inlet, {link}</>} text={n.number} unit={n.unit} outOfDate={outOfDate} />
+      <FigureRow label={label} text={n.number} unit={n.unit} outOfDate={outOfDate} />
       <FigureRow label="Inlet pressure" text={P.number} unit={P.unit} outOfDate={outOfDate} />
       <FigureRow label="Inlet temperature" text={T.number} unit={T.unit} outOfDate={outOfDate} />
       <FigureRow label="Inlet vapour fraction" text={vapour.number} unit="mol/mol" outOfDate={outOfDate} />

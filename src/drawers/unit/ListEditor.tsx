@@ -2,9 +2,9 @@ import type { SettingSpec } from '../../engine/units/types';
 import type { Json } from '../../sketch/types';
 import { capital } from '../words';
 import { Fields } from './Fields';
-import { useForm } from './form';
 import { hasOneLine } from './SettingControl';
 import { FieldFindings } from './SettingRow';
+import { useForm } from './useForm';
 
 type ListSpec = Extract<SettingSpec, { is: 'list' }>;
 

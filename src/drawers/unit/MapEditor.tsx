@@ -6,9 +6,9 @@ import { useSketch, useUnitResult } from '../../store/react';
 import { useChemicals } from '../chemicalNames';
 import { capital, portWord } from '../words';
 import { Fields } from './Fields';
-import { useForm } from './form';
 import { hasOneLine, SettingControl } from './SettingControl';
 import { FieldFindings, SettingRow } from './SettingRow';
+import { useForm } from './useForm';
 
 type MapSpec = Extract<SettingSpec, { is: 'map' }>;
 interface Props {

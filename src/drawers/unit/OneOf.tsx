@@ -3,11 +3,12 @@ import type { SettingSpec } from '../../engine/units/types';
 import { Choice } from '../../parts/Choice';
 import { unitLabel } from '../../quantity';
 import { capital } from '../words';
-import { joined, useForm } from './form';
+import { joined } from './form';
 import { assumedKey, quantityOf } from './given';
 import { SettingControl } from './SettingControl';
 import { FieldFindings, SettingRow } from './SettingRow';
 import { choices, choose, freshSlots, type Group, keptSlots, losers } from './slots';
+import { useForm } from './useForm';
 
 interface Props {
   /** '' for settings at the top level. */
@@ -31,7 +32,7 @@ export function OneOf({ base, of, count, pairs = [], optional, spec }: Props) {
     pairs,
     assumed: assumed?.key,
   };
-  const given = group.all.filter((key) => form.value(joined(base, key)) !== undefined);
+  const given = group.all.filter((key) => form.has(joined(base, key)));
   const [slots, setSlots] = useState(() => freshSlots(group, given));
   const kept = keptSlots(group, slots, given);
   if (kept !== slots) setSlots(kept);

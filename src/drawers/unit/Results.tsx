@@ -3,7 +3,7 @@ import { useMeasures } from '../../parts/measures';
 import { inPercent, show } from '../../quantity';
 import { useUnitResult } from '../../store/react';
 import { capital, resultWord } from '../words';
-import { useForm } from './form';
+import { useForm } from './useForm';
 
 /** Heat and power are told by their size and a word for their direction. */
 function directed(key: string, word: string, value: number): readonly [string, number] {

@@ -9,8 +9,8 @@ import { useChemicals } from '../chemicalNames';
 import { type SettingChange, valueAt } from '../edits';
 import { capital, optionWord, portWord } from '../words';
 import { FlowEditor } from './FlowEditor';
-import { useForm } from './form';
 import { quantityOf } from './given';
+import { useForm } from './useForm';
 import { WholeField } from './WholeField';
 
 export interface ControlProps {

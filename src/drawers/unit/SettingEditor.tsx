@@ -3,13 +3,13 @@ import { CasesEditor } from './CasesEditor';
 import { CompositionEditor } from './CompositionEditor';
 import { Fields } from './Fields';
 import type { EditorProps } from './form';
-import { useForm } from './form';
 import { assumedAt } from './given';
 import { ListEditor } from './ListEditor';
 import { MapEditor } from './MapEditor';
 import { OneOf } from './OneOf';
 import { SettingControl } from './SettingControl';
 import { FieldFindings, SettingRow } from './SettingRow';
+import { useForm } from './useForm';
 
 /** Any setting, by its description alone. */
 export function SettingEditor({ spec, path, dormant = false }: EditorProps) {
@@ -32,7 +32,7 @@ export function SettingEditor({ spec, path, dormant = false }: EditorProps) {
     case 'composition':
       return <CompositionEditor path={path} assumed={assumed} />;
     case 'record': {
-      const isAbsent = spec.optional === true && form.value(path) === undefined;
+      const isAbsent = spec.optional === true && !form.has(path);
       const inside = (
         <>
           <Fields fields={spec.fields} base={path} choose={spec.choose} dormant={dormant || isAbsent} />

@@ -1,7 +1,8 @@
+import { memo } from 'react';
 import type { Finding } from '../../engine/outcome';
 import { LimitMark } from '../../parts/LimitMark';
 import { useSay } from '../useSay';
-import { useForm } from './form';
+import { useForm } from './useForm';
 
 /** A missing value is told by the field itself and by the drawer's head. */
 const MARKED = new Set(['sketch/needs-value', 'sketch/needs-one-of']);
@@ -24,7 +25,7 @@ export function FieldFindingList({ findings }: { readonly findings: readonly Fin
   );
 }
 
-function FieldFinding({ finding }: { readonly finding: Finding }) {
+const FieldFinding = memo(function FieldFinding({ finding }: { readonly finding: Finding }) {
   const say = useSay();
   const { sentence, next } = say(finding);
   return (
@@ -35,7 +36,7 @@ function FieldFinding({ finding }: { readonly finding: Finding }) {
       </span>
     </li>
   );
-}
+});
 
 interface Props {
   readonly label: React.ReactNode;

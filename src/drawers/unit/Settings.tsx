@@ -1,6 +1,6 @@
 import { Fields } from './Fields';
-import { useForm } from './form';
 import { FieldFindings } from './SettingRow';
+import { useForm } from './useForm';
 
 /** Every setting of a kind, in its catalogue's order: made from the descriptions alone. */
 export function Settings() {

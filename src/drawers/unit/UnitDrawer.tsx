@@ -1,13 +1,13 @@
-import { useMemo } from 'react';
+import { memo, useMemo } from 'react';
+import { useShallow } from 'zustand/react/shallow';
 import type { UnitId } from '../../engine/ids';
 import type { Finding } from '../../engine/outcome';
-import { useMeasures, useSite } from '../../parts/measures';
+import { useMeasures } from '../../parts/measures';
 import { TextField } from '../../parts/TextField';
-import type { SketchUnit } from '../../sketch/types';
 import { setMaterial, setTag, setUnitName } from '../../store/commands';
 import type { CompiledState } from '../../store/compiledStore';
 import { useKind } from '../../store/kinds';
-import { useCompiled, useResults, useSketch, useStores, useUnit, useUnitResult } from '../../store/react';
+import { useCompiled, useResults, useSketch, useStores, useUnitResult } from '../../store/react';
 import type { ResultsState } from '../../store/resultsStore';
 import { Head } from '../Head';
 import { OWN_PARTS } from '../own';
@@ -15,7 +15,7 @@ import { run } from '../run';
 import { useSay } from '../useSay';
 import { useSteady } from '../useSteady';
 import { capital, kindWord } from '../words';
-import { FormProvider, makeForm } from './form';
+import { findingsOf, formSource } from './formSource';
 import { Known } from './Known';
 import { NextSteps, Reasons } from './Reasons';
 import { Results } from './Results';
@@ -23,67 +23,47 @@ import { SettingEditor } from './SettingEditor';
 import { FieldFindingList } from './SettingRow';
 import { Settings } from './Settings';
 import { stateSentence } from './stateSentence';
+import { FormProvider } from './useForm';
 
 /**
  * One unit: its settings, what it knows, what it makes of them. Made from its kind's catalogue, save what a kind draws
- * itself. New results are drawn by the parts that show them; the settings stand as they are.
+ * itself. The drawer as a whole is drawn once; fields and figures follow what they show.
  */
 export function UnitDrawer({ id }: { readonly id: UnitId }) {
-  const unit = useUnit(id);
-  const kind = useKind(unit?.kind ?? '');
-  const { sketch } = useStores();
-  const site = useSite();
-  const disabled = useSketch((state) => !state.writable);
-  const assumptions = useCompiled(
-    useSteady((state: CompiledState) => state.assumptions.filter((a) => a.unit === id)),
+  const name = useSketch((state) => state.sketch.units.find((unit) => unit.id === id)?.kind);
+  const kind = useKind(name ?? '');
+  const stores = useStores();
+  const source = useMemo(
+    () => (kind ? formSource(stores, id, kind, SettingEditor) : undefined),
+    [stores, id, kind],
   );
-  const findings = useFindings(id, atField);
-  const form = useMemo(
-    () =>
-      unit && kind
-        ? makeForm({ unit, kind, site, disabled, findings, assumptions, Editor: SettingEditor }, sketch)
-        : undefined,
-    [unit, kind, site, disabled, findings, assumptions, sketch],
-  );
-  if (!unit) return null;
-  if (!kind || !form) return <UnitHead unit={unit} isKnown={false} />;
+  if (name === undefined) return null;
+  if (!kind || !source) return <UnitHead id={id} isKnown={false} />;
   const parts = Object.hasOwn(OWN_PARTS, kind.kind) ? OWN_PARTS[kind.kind] : undefined;
   const SettingsPart = parts?.Settings ?? Settings;
   const ResultsPart = parts?.Results ?? Results;
   return (
-    <FormProvider value={form}>
-      <UnitHead unit={unit} isKnown />
+    <FormProvider value={source}>
+      <UnitHead id={id} isKnown />
       <div className="drawer-body">
-        <SettingsPart key={unit.id} />
+        <SettingsPart key={id} />
         <WhyNot id={id} />
         <Noticed id={id} />
         <Known />
         <ResultsPart />
-        {kind.tag.drawn ? <Material unit={unit} disabled={disabled} /> : null}
+        {kind.tag.drawn ? <Material id={id} /> : null}
       </div>
     </FormProvider>
   );
 }
 
-const atField = (finding: Finding): boolean => finding.at.path !== undefined;
 const atUnit = (finding: Finding): boolean => finding.at.path === undefined;
 
-/** What there is to say of one unit: what it lacks, what was noticed, what it runs into; each once. */
-function useFindings(id: UnitId, which: (finding: Finding) => boolean): readonly Finding[] {
-  const here = (finding: Finding): boolean => finding.at.unit === id && which(finding);
-  const known = useCompiled(
-    useSteady(({ gaps, notes }: CompiledState) => [...gaps.filter(here), ...notes.filter(here)]),
-  );
-  const found = useResults(useSteady(({ findings }: ResultsState) => findings.filter(here)));
-  return useMemo(() => {
-    const seen = new Set<string>();
-    return [...known, ...found].filter((finding) => {
-      const key = `${finding.code} ${finding.at.path} ${finding.at.port}`;
-      if (seen.has(key)) return false;
-      seen.add(key);
-      return true;
-    });
-  }, [known, found]);
+function useFindings(id: UnitId): readonly Finding[] {
+  const here = (...lists: (readonly Finding[])[]) => findingsOf(id, atUnit, lists);
+  const known = useCompiled(useSteady(({ gaps, notes }: CompiledState) => here(gaps, notes)));
+  const found = useResults(useSteady(({ findings }: ResultsState) => here(findings)));
+  return useMemo(() => findingsOf(id, atUnit, [known, found]), [id, known, found]);
 }
 
 /** What is said of the unit as a whole, and not of one of its settings. */
@@ -91,7 +71,7 @@ function Noticed({ id }: { readonly id: UnitId }) {
   const latest = useUnitResult(id)?.latest;
   // Why there is no solution stands above already.
   const said = (latest?.state === 'no-solution' && latest.reasons) || [];
-  const findings = useFindings(id, atUnit).filter(({ code }) => said.every((reason) => reason.code !== code));
+  const findings = useFindings(id).filter(({ code }) => said.every((reason) => reason.code !== code));
   if (findings.length === 0) return null;
   return (
     <section className="section">
@@ -103,19 +83,33 @@ function Noticed({ id }: { readonly id: UnitId }) {
   );
 }
 
+/** What the head says of a unit apart from how it stands. */
+const useNames = (id: UnitId) =>
+  useSketch(
+    useShallow(({ sketch }) => {
+      const unit = sketch.units.find((u) => u.id === id);
+      return {
+        tag: unit?.tag ?? '',
+        name: unit?.name ?? '',
+        word: unit ? kindWord(unit.kind, unit.settings.service) : '',
+      };
+    }),
+  );
+
 /** Tag, name and how the unit stands. */
-function UnitHead({ unit, isKnown }: { readonly unit: SketchUnit; readonly isKnown: boolean }) {
+function UnitHead({ id, isKnown }: { readonly id: UnitId; readonly isKnown: boolean }) {
   const say = useSay();
   const measures = useMeasures();
-  const entry = useUnitResult(unit.id);
+  const { tag, word } = useNames(id);
+  const entry = useUnitResult(id);
   const gaps = useCompiled(
-    useSteady((state: CompiledState) => state.gaps.filter((gap) => gap.at.unit === unit.id)),
+    useSteady((state: CompiledState) => state.gaps.filter((gap) => gap.at.unit === id)),
   );
-  const own = useResults((state) => state.closure?.byUnit[unit.id]);
+  const own = useResults((state) => state.closure?.byUnit[id]);
   return (
     <Head
-      label={`${capital(kindWord(unit.kind, unit.settings.service))} ${unit.tag}`}
-      title={<Names unit={unit} />}
+      label={`${capital(word)} ${tag}`}
+      title={<Names id={id} />}
       sentence={
         isKnown
           ? stateSentence(entry, gaps, say, measures, own)
@@ -129,36 +123,39 @@ function WhyNot({ id }: { readonly id: UnitId }) {
   const latest = useUnitResult(id)?.latest;
   const reasons = latest?.reasons ?? [];
   if (latest?.state === 'no-solution') return <Reasons reasons={reasons} />;
-  return <NextSteps reasons={latest?.state === 'needs-value' ? reasons : []} />;
+  return latest?.state === 'needs-value' ? <NextSteps reasons={reasons} /> : null;
 }
 
-function Names({ unit }: { readonly unit: SketchUnit }) {
+const Names = memo(function Names({ id }: { readonly id: UnitId }) {
   const { sketch } = useStores();
   const writable = useSketch((state) => state.writable);
+  const { tag, name, word } = useNames(id);
   return (
     <span className="names">
       <TextField
         label="Tag"
         path="tag"
         className="tag"
-        value={unit.tag}
+        value={tag}
         disabled={!writable}
-        onCommit={(text) => run(sketch, (s) => setTag(s, unit.id, text))}
+        onCommit={(text) => run(sketch, (s) => setTag(s, id, text))}
       />
       <TextField
         label="Name"
         path="name"
-        value={unit.name ?? ''}
-        placeholder={capital(kindWord(unit.kind, unit.settings.service))}
+        value={name}
+        placeholder={capital(word)}
         disabled={!writable}
-        onCommit={(text) => run(sketch, (s) => setUnitName(s, unit.id, text))}
+        onCommit={(text) => run(sketch, (s) => setUnitName(s, id, text))}
       />
     </span>
   );
-}
+});
 
-function Material({ unit, disabled }: { readonly unit: SketchUnit; readonly disabled: boolean }) {
+function Material({ id }: { readonly id: UnitId }) {
   const { sketch } = useStores();
+  const disabled = useSketch((state) => !state.writable);
+  const material = useSketch((state) => state.sketch.units.find((unit) => unit.id === id)?.material);
   return (
     <section className="section">
       <div className="setting">
@@ -168,10 +165,10 @@ function Material({ unit, disabled }: { readonly unit: SketchUnit; readonly disa
             label="Material of construction"
             path="material"
             className="framed"
-            value={unit.material ?? ''}
+            value={material ?? ''}
             placeholder="not said"
             disabled={disabled}
-            onCommit={(text) => run(sketch, (s) => setMaterial(s, unit.id, text))}
+            onCommit={(text) => run(sketch, (s) => setMaterial(s, id, text))}
           />
         </div>
       </div>

@@ -2,7 +2,7 @@ import { useId, useState } from 'react';
 import { Choice } from '../../parts/Choice';
 import type { SettingChange } from '../edits';
 import { capital } from '../words';
-import { useForm } from './form';
+import { useForm } from './useForm';
 
 interface Props {
   readonly path: string;

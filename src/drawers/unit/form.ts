@@ -1,4 +1,4 @@
-import { createContext, type ReactNode, useContext } from 'react';
+import type { ReactNode } from 'react';
 import type { Finding } from '../../engine/outcome';
 import type { KindCatalogue, SettingSpec } from '../../engine/units/types';
 import type { FieldEdit } from '../../parts/fieldEdit';
@@ -26,6 +26,10 @@ export interface Form {
   /** The editor of any setting, for settings that hold others. */
   readonly Editor: (props: EditorProps) => ReactNode;
   value(path: Path): Json | undefined;
+  /** Whether there is a value, whatever it is. */
+  has(path: Path): boolean;
+  /** What a view makes of the settings, where that stays the same while they change. */
+  ask<T>(question: (form: Form) => T): T;
   word(path: string): string;
   set(changes: readonly SettingChange[], label: string): void;
   /** For a field at a path; `beside`: changes that go with a new text (another key that it replaces). */
@@ -37,15 +41,6 @@ export interface Form {
   ): FieldEdit;
 }
 
-const Context = createContext<Form | null>(null);
-export const FormProvider = Context.Provider;
-
-export function useForm(): Form {
-  const form = useContext(Context);
-  if (!form) throw new Error('useForm outside a unit drawer');
-  return form;
-}
-
 export const dotted = (path: Path): string => keysOf(path).join('.');
 export const joined = (base: string, key: string): string => (base === '' ? key : `${base}.${key}`);
 
@@ -55,7 +50,7 @@ export function makeForm(
 ): Form {
   const { unit, kind } = parts;
   const set: Form['set'] = (changes, label) => void store.apply(label, setSettings(unit.id, changes));
-  return {
+  return withAnswers({
     ...parts,
     value: (path) => valueAt(unit.settings, path),
     word: (path) => settingWord(kind.kind, path),
@@ -71,5 +66,15 @@ export function makeForm(
       commit: () => store.commit(),
       cancel: () => store.cancel(),
     }),
+  });
+}
+
+/** A form whose answers rest on its own values. */
+export function withAnswers(form: Omit<Form, 'has' | 'ask'>): Form {
+  const whole: Form = {
+    ...form,
+    has: (path) => form.value(path) !== undefined,
+    ask: (question) => question(whole),
   };
+  return whole;
 }
