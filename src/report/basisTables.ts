@@ -1,14 +1,10 @@
-import { displayUnit, formatDecimals, parseQuantity, unitLabel } from '../quantity';
+import { displayUnit, formatDecimals } from '../quantity';
 import type { Dimension } from '../quantity/dimension';
-import type { Quantity, Sketch } from '../sketch/types';
+import type { Sketch } from '../sketch/types';
 import { left, text } from './cells';
 import { measuresOf, type ReportInput, solvedStream } from './input';
 import type { Row, Table } from './types';
-
-const typed = (value: Quantity, dim: Dimension): string => {
-  const read = parseQuantity(value, [dim]);
-  return read.ok ? `${read.number} ${unitLabel(read.unit, read.dim)}`.trim() : String(value);
-};
+import { typedWords } from './words';
 
 const SITE: readonly (readonly [keyof Sketch['site'], string, Dimension, string])[] = [
   ['pressure', 'Site pressure', 'pressure', '101325 Pa(a)'],
@@ -28,7 +24,7 @@ export function basisTable(input: ReportInput): Table {
   for (const line of feedLines(input)) add(...line);
   for (const [key, label, dim, usual] of SITE) {
     const value = sketch.site[key];
-    add(label, value === undefined ? `${usual}, not given: used where needed` : typed(value, dim));
+    add(label, value === undefined ? `${usual}, not given: used where needed` : typedWords(value, dim));
   }
   if (basis.conditions) add('Site conditions', basis.conditions);
   if (basis.notes) add('Notes', basis.notes);
@@ -85,8 +81,8 @@ export function utilityTable(input: ReportInput): Table {
         label: level.name,
         cells: [
           text(level.use),
-          text(level.supply === undefined ? 'not given: not used' : typed(level.supply, 'temperature')),
-          text(level.back === undefined ? 'as it comes' : typed(level.back, 'temperature')),
+          text(level.supply === undefined ? 'not given: not used' : typedWords(level.supply, 'temperature')),
+          text(level.back === undefined ? 'as it comes' : typedWords(level.back, 'temperature')),
           text(level.note ?? ''),
         ],
       }),

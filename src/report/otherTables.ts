@@ -7,7 +7,7 @@ import { settingWord, weightWord } from '../wording';
 import { absent, decimalsFor, left, number, right, text } from './cells';
 import { measuresOf, type ReportInput } from './input';
 import type { Row, Table } from './types';
-import { findingWords } from './words';
+import { assumedWords, findingWords } from './words';
 
 /** Mass, energy, chemicals and elements over the whole sketch. */
 export function closureTable(input: ReportInput): Table {
@@ -106,13 +106,14 @@ export function assumptionTable(input: ReportInput): Table {
     title: 'Assumption register',
     columns: [left('where', 'Where'), left('value', 'Value used'), left('why', 'Why'), left('hold', 'HOLD')],
     rows: input.assumptions.map((a): Row => {
+      const where = whereOf(a);
       const hold = input.sketch.holds?.find((h) => h.path === a.path && h.unit === a.unit);
       return {
         key: a.no,
         label: a.no,
         cells: [
-          text(whereOf(a)),
-          text(a.unitText || String(a.value)),
+          text(where),
+          text(assumedWords(a, where)),
           text(a.reason),
           text(hold ? `HOLD ${hold.no}` : ''),
         ],

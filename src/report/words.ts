@@ -1,7 +1,8 @@
 import type { Finding } from '../engine/outcome';
 import type { ModelSpec } from '../engine/thermo/types';
 import { CATALOGUE } from '../engine/units/catalogue';
-import type { Dimension } from '../quantity';
+import { DIMENSIONS, type Dimension, parseQuantity, unitLabel } from '../quantity';
+import type { Assumption, Quantity } from '../sketch/types';
 import { resultWord as labelOf, modelWord as nameOfModel, type Said, sayFinding } from '../wording';
 import { measuresOf, type ReportInput } from './input';
 
@@ -35,3 +36,19 @@ export const modelText = (model: ModelSpec): string =>
   model.kind === 'peng-robinson'
     ? `${nameOfModel(model.kind)}, ${model.alpha} alpha`
     : nameOfModel(model.kind);
+
+/** A quantity as typed, its unit as it is shown: "28 degC" as "28 °C", pressures with (a) or (g); other text as it is. */
+export function typedWords(value: Quantity, dims: Dimension | readonly Dimension[]): string {
+  const read = parseQuantity(value, dims);
+  return read.ok ? `${read.number} ${unitLabel(read.unit, read.dim)}`.trim() : String(value);
+}
+
+/** What was assumed, as it would be typed. A unit of pressure is shared by drops, which count from nothing: their names say so. */
+export const assumedWords = ({ unitText, value }: Assumption, where: string): string =>
+  unitText === ''
+    ? String(value)
+    : typedWords(unitText, [
+        where.endsWith('drop') ? 'pressureDifference' : 'pressure',
+        'temperature',
+        ...DIMENSIONS,
+      ]);

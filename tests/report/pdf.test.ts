@@ -205,6 +205,13 @@ describe('the document of one example', () => {
     expect(words).toContain('only differences mean something');
   });
 
+  test('shows units as they are read, never as they are typed, and pressures with their reference', () => {
+    expect(words).toContain('C-101 reboiler pressure 3.05 bar(a)');
+    expect(words).toContain('cooling water 28 °C');
+    expect(words).toContain('V-101 pressure drop 0 bar No');
+    expect(words).not.toMatch(/deg[CF]|\d ?m3|\d ?bar[ag]\b/);
+  });
+
   test('has metadata of the title block', () => {
     expect(read.info).toMatchObject({
       Title: `${input.sketch.title.title} – stream summary (heat and material balance)`,
