@@ -2,7 +2,7 @@
 import { act, fireEvent, screen, waitFor } from '@testing-library/react';
 import { describe, expect, test } from 'vitest';
 import { actions } from '../../src/app/actions';
-import { FindField } from '../../src/app/find/FindField';
+import { FindField, NAMES } from '../../src/app/find/FindField';
 import { findThings, thingsOf } from '../../src/app/find/things';
 import { DrawerHost } from '../../src/drawers/DrawerHost';
 import { actionFor } from '../../src/store/action';
@@ -14,7 +14,7 @@ const chemicals = [
   { id: 'n-butane', name: 'n-Butane', formula: 'C4H10' },
 ] as never;
 const namesFor = (page: Page, text: string): readonly string[] =>
-  findThings(thingsOf(sketchOf(page), chemicals), text).map(({ name }) => name);
+  findThings(thingsOf(sketchOf(page), chemicals, NAMES), text).map(({ name }) => name);
 
 /** As the app shows it: over the sheet, for as long as it is asked for. */
 function Over() {

@@ -1,8 +1,14 @@
 import { useEffect, useId, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import { describeStream } from '../../store/commands';
 import { useCompiled, useSketch, useStores } from '../../store/react';
+import { kindWord } from '../../wording';
+import { goTo } from './goTo';
+import type { Names } from './things';
 import './find.css';
 
 type Finding = typeof import('./finding');
+
+export const NAMES: Names = { kind: kindWord, stream: describeStream };
 
 /** What finds and lists is fetched when it is first asked for; what is typed meanwhile is not lost. */
 function useFinding(): Finding | null {
@@ -63,7 +69,10 @@ export function FindField() {
   /** Enter came before there was anything to find with. */
   const [asked, setAsked] = useState(false);
   const id = useId();
-  const things = useMemo(() => part?.thingsOf(sketch, chemicals ?? []) ?? [], [part, sketch, chemicals]);
+  const things = useMemo(
+    () => part?.thingsOf(sketch, chemicals ?? [], NAMES) ?? [],
+    [part, sketch, chemicals],
+  );
   const found = useMemo(
     () => (text.trim() === '' ? [] : (part?.findThings(things, text) ?? [])),
     [part, things, text],
@@ -76,7 +85,7 @@ export function FindField() {
     if (!part || !thing) return;
     // First, so that a drawer knows where the keyboard came from.
     giveBack();
-    part.goTo(stores, thing.target);
+    goTo(stores, thing.target);
   };
   // biome-ignore lint/correctness/useExhaustiveDependencies: once, when what was waited for is there
   useEffect(() => {

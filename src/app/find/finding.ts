@@ -1,4 +1,3 @@
 /** What a search needs once it is asked for; fetched then. */
 export { FoundList } from './FoundList';
-export { goTo } from './goTo';
 export { findThings, thingsOf } from './things';

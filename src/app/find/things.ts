@@ -1,8 +1,6 @@
 import type { StreamId, UnitId } from '../../engine/ids';
 import type { Basis } from '../../engine/network/types';
 import type { Sketch } from '../../sketch/types';
-import { describeStream } from '../../store/commands';
-import { kindWord } from '../../wording';
 
 export type Target =
   | { readonly unit: UnitId }
@@ -22,17 +20,24 @@ export interface FoundThing {
   readonly other: readonly string[];
 }
 
+/** How the page names kinds and streams: handed in, so that what is fetched brings nothing along that the page has. */
+export interface Names {
+  readonly kind: (kind: string, service?: unknown) => string;
+  readonly stream: (sketch: Pick<Sketch, 'units'>, stream: Sketch['streams'][number]) => string;
+}
+
 /** Everything that can be found: units, streams, then chemicals, each in the order of the sketch. */
 export function thingsOf(
   { units, streams }: Pick<Sketch, 'units' | 'streams'>,
   chemicals: Basis['chemicals'],
+  names: Names,
 ): readonly FoundThing[] {
   const tags = new Map(units.map(({ id, tag }) => [id, tag]));
   const endOf = (end: Sketch['streams'][number]['from']): string =>
     (end && tags.get(end[0])) ?? 'nowhere yet';
   return [
     ...units.map(({ id, tag, name, kind, settings }): FoundThing => {
-      const word = kindWord(kind, settings.service);
+      const word = names.kind(kind, settings.service);
       return {
         target: { unit: id },
         name: tag,
@@ -48,7 +53,7 @@ export function thingsOf(
         name: `Stream ${number}`,
         about: [name, `${endOf(from)} to ${endOf(to)}`].filter(Boolean).join(', '),
         own: [number],
-        other: [describeStream({ units }, stream), `stream ${number}`],
+        other: [names.stream({ units }, stream), `stream ${number}`],
       };
     }),
     ...chemicals.map(
