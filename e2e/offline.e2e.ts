@@ -133,7 +133,7 @@ test('a new version is offered quietly, and taken only when asked for', async ({
     await page.goto(address);
     await openExample(page);
     await kept(page);
-    await expect(page).toHaveTitle('Splitwright');
+    await expect(page).toHaveTitle('Let-down – Splitwright');
     // The next version: another title, and the list of kept files says so.
     const html = readFileSync(join(folder, 'index.html'), 'utf8');
     writeFileSync(
@@ -150,13 +150,13 @@ test('a new version is offered quietly, and taken only when asked for', async ({
     const bar = page.getByRole('status', { name: 'New version' });
     await expect(bar).toBeVisible({ timeout: 60_000 });
     // Not taken unasked: the page that runs is the old one, also after another load.
-    await expect(page).toHaveTitle('Splitwright');
+    await expect(page).toHaveTitle('Let-down – Splitwright');
     await page.reload();
     await solved(page);
-    await expect(page).toHaveTitle('Splitwright');
+    await expect(page).toHaveTitle('Let-down – Splitwright');
     await expect(bar).toBeVisible({ timeout: 60_000 });
     await bar.getByRole('button', { name: 'Reload' }).click();
-    await expect(page).toHaveTitle('Splitwright, newer');
+    await expect(page).toHaveTitle('Let-down – Splitwright, newer');
     await solved(page);
     await expect(bar).toHaveCount(0);
   } finally {

@@ -24,6 +24,7 @@ import { SolvingLine } from './SolvingLine';
 import { Start } from './Start';
 import { SummaryPage } from './SummaryPage';
 import { ShareDialogue } from './share/ShareDialogue';
+import { nameTab } from './tabName';
 import { applyTheme } from './theme';
 import { useFileDrop } from './useFileDrop';
 import './theme.css';
@@ -78,6 +79,8 @@ function Workplace({ stores }: { readonly stores: Stores }) {
   const fileHangs = useFileDrop(stores);
   const theme = useSession((state) => state.theme);
   useEffect(() => applyTheme(theme), [theme]);
+  const title = useSketch((state) => state.sketch.title.title);
+  useEffect(() => nameTab(title), [title]);
   const isBlank = useSketch((state) => state.sketch.units.length === 0);
   const finding = useSession((state) => state.over === 'find');
   const spoken = useSession((state) => state.spoken);
