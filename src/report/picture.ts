@@ -3,6 +3,7 @@ import { type FontWeight, measureText } from '../drawing/metrics';
 import { sheetFrame } from '../drawing/sheetFrame';
 import { sceneToSvg } from '../drawing/svg';
 import { FONT, PRINT } from '../drawing/tokens';
+import { printedTitle } from '../sketch/revision';
 import type { ReportInput } from './input';
 import { warningOf } from './model';
 import { reportScene } from './sheet';
@@ -19,7 +20,8 @@ const FAMILIES = `${FONT}, 'Source Sans 3', sans-serif`;
 
 /** The drawing alone as SVG on white paper, in its frame with title block, with the clean answer's numbers. */
 function drawing(input: ReportInput): string {
-  const { title, documents } = input.sketch;
+  const { documents } = input.sketch;
+  const title = printedTitle(input.sketch);
   const scene = reportScene(input);
   const frame = sheetFrame(scene.box, documents?.paper ?? 'A3', title, warningOf(title.purpose));
   return sceneToSvg(scene, PRINT, { ground: true, frame });
