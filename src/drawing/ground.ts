@@ -37,7 +37,7 @@ export interface Made {
 const sizeByUnits = new Map<string, LabelSize>();
 
 /** The same units and rooms give the same object, so that sizes are compared by identity. */
-function sizeOf(rows: readonly LabelRow[]): LabelSize {
+export function sizeOf(rows: readonly LabelRow[]): LabelSize {
   let key = '';
   for (const row of rows) key += `${row.unit}\n${roomFor(row.number)}\n`;
   let size = sizeByUnits.get(key);

@@ -215,7 +215,7 @@ function layLabels(
 }
 
 /** The label as it is at 100 %, with the point it grows about. */
-function labelAt(
+export function labelAt(
   stream: StreamId,
   wish: LabelWish,
   placed: PlacedLabel | undefined,

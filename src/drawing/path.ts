@@ -22,8 +22,10 @@ export type Bridges = ReadonlyMap<number, ReadonlyMap<number, readonly number[]>
 /**
  * Crossings of the lines, kept by the horizontal piece; those too near a bend or end of it cannot be jumped and are
  * left out.
+ *
+ * @param only lines whose bridges are asked for; absent: all
  */
-export function bridgesOf(lines: readonly (readonly Point[])[]): Bridges {
+export function bridgesOf(lines: readonly (readonly Point[])[], only?: ReadonlySet<number>): Bridges {
   const downs: { x: number; lo: number; hi: number }[] = [];
   for (const points of lines) {
     for (let k = 0; k + 1 < points.length; k++) {
@@ -34,6 +36,7 @@ export function bridgesOf(lines: readonly (readonly Point[])[]): Bridges {
   }
   const bridges = new Map<number, Map<number, number[]>>();
   lines.forEach((points, line) => {
+    if (only && !only.has(line)) return;
     for (let k = 0; k + 1 < points.length; k++) {
       const [x1, y1] = points[k]!;
       const [x2, y2] = points[k + 1]!;

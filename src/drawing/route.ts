@@ -92,6 +92,8 @@ function ahead({ at, side }: PortPlace, bend: Point): number {
 }
 
 interface Way {
+  /** Looks for a way around its ends alone, not all over the sheet. */
+  readonly near?: true;
   /** Whether ports that face one another share what lies between them; else each has its full stub. */
   readonly narrow?: boolean;
   readonly detour?: Detour;
@@ -129,6 +131,14 @@ export function routeLine(
   return round ? { ...round, region: EVERYWHERE } : lastResort(from, to);
 }
 
+/** The line while an end is under the hand: a way around its ends, else over whatever is there. */
+export const routeNear = (
+  from: RouteEnd,
+  to: RouteEnd,
+  via: readonly Point[],
+  obstacles: readonly Box[],
+): readonly Point[] => (ledOnce(from, to, via, obstacles, { near: true }) ?? lastResort(from, to)).points;
+
 /** All that has a say in how an end lies, as one text. */
 export const keyOfEnd = (e: RouteEnd | undefined): string =>
   e ? `${e.port.at} ${e.port.side} ${e.own ? `${e.own.x} ${e.own.y} ${e.own.w} ${e.own.h}` : ''}` : '-';
@@ -152,7 +162,7 @@ function ledOnce(
   to: RouteEnd,
   via: readonly Point[],
   obstacles: readonly Box[],
-  { narrow = true, detour }: Way = {},
+  { narrow = true, near: nearOnly, detour }: Way = {},
 ): Route | undefined {
   const a = from.port;
   const b = to.port;
@@ -186,7 +196,7 @@ function ledOnce(
   const near = obstacles.filter((o) => overlaps(grown(o, 16), around));
   const looks: readonly (readonly [readonly Box[], Box])[] = [
     [near, around],
-    ...(detour ? [] : [[obstacles, EVERYWHERE] as const]),
+    ...(detour || nearOnly ? [] : [[obstacles, EVERYWHERE] as const]),
   ];
   for (const [boxes, region] of looks) {
     const points = throughStops(stops, HEADING[a.side], arrive, boxes, region, detour);
