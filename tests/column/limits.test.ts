@@ -58,6 +58,24 @@ test('a column above the critical point of what is fed says so among its reasons
   expect(dry.codes).not.toContain('column/one-phase');
 });
 
+test('an absorber whose feeds make one phase together says so', async () => {
+  const model = await bankModel(['n-butane', 'n-pentane', 'n-decane']);
+  const settings: ColumnSettings = {
+    stages: 10,
+    top: { distillate: 'none' },
+    bottom: { reboiler: false },
+    feeds: { feed1: { stage: 1 }, feed2: { stage: 10 } },
+    pressure: { top: 30e5, bottom: 30e5 },
+  };
+  // Butane boils at about 3 bar here: at 31 bar it is no gas.
+  const oil = streamOf(model, [0, 0, 1], 60, { T_K: 300, P_Pa: 31e5 });
+  const liquid = streamOf(model, [9, 1, 0], 100, { T_K: 310, P_Pa: 31e5 });
+  const { answer, codes, found } = said(model, { feed1: oil, feed2: liquid }, settings);
+  expect(answer).toBeUndefined();
+  expect(codes[0]).toBe('column/feeds-one-phase');
+  expect(evidenceOf(found, 'column/feeds-one-phase', 'phase').text).toBe('liquid');
+});
+
 describe('water in a column', async () => {
   const model = await bankModel(['n-pentane', 'n-hexane', 'n-heptane', 'water']);
   const settings: ColumnSettings = {

@@ -205,6 +205,11 @@ export const column: KindWords = {
       says: 'The feeds bring {fed} of vapour; reflux ratio and distillate carry {carried} over the top.',
       next: 'Raise the reflux ratio or the distillate, or cool the feed.',
     },
+    'column/feeds-one-phase': {
+      title: 'One phase only',
+      says: 'Mixed, the feeds are all {phase} at the pressure of the column: without a condenser and a reboiler nothing makes a second phase.',
+      next: 'Change the temperature, the pressure or the amounts of the feeds, or give the column an end.',
+    },
     'column/feed-in-two-liquids': {
       title: 'A feed in two liquids',
       says: 'The {port} would part in two liquids, the other mostly {chemical}. A column here holds one liquid, which may have no state at all where both are condensed.',

@@ -37,6 +37,7 @@ export const COLUMN_FINDINGS = [
   'column/not-settled',
   'column/feed-vapour-above-top',
   'column/feed-in-two-liquids',
+  'column/feeds-one-phase',
   // What was found, where more than one answer is possible.
   'column/several-purities',
   'column/several-temperatures',

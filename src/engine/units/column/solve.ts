@@ -139,15 +139,23 @@ const feedsInTwoLiquids = (call: Call<ColumnSettings>, { feedPorts }: ColumnJob)
     return [refuse(call, 'column/feed-in-two-liquids', { port }, [richestOf(other, call.model)])];
   });
 
-/** What is fed has no two phases at the pressure of its stage: the column stands above the critical point of its feed. */
+/** What is fed has no two phases: with an end, none at the pressure of its stage; without ends, none when it is all mixed. */
 function feedOfOnePhase(call: Call<ColumnSettings>, { task, present }: ColumnJob): Finding[] {
-  const { n_mol_s, total_mol_s } = mixed(call.in, call.model.nc);
+  const { n_mol_s, total_mol_s, H_W } = mixed(call.in, call.model.nc);
   const { place } = task.feeds[0]!;
-  const at = { P_Pa: task.P_Pa[place]!, vapourFraction: 0.5 };
+  const P_Pa = task.P_Pa[place]!;
+  if (task.top === 'none' && !task.reboiler) {
+    const together = makeStream(call.model, n_mol_s, { P_Pa, H_W }, call.work);
+    const flowing = together.state === 'solved' ? together.value.phases.filter((p) => p.fraction > 0) : [];
+    if (flowing.length !== 1 || flowing[0]!.kind === 'dense') return [];
+    return [refuse(call, 'column/feeds-one-phase', {}, [named('phase', flowing[0]!.kind)])];
+  }
   const x = Float64Array.from(present, (i) => n_mol_s[i]! / total_mol_s);
-  if (at.P_Pa < task.model.pseudoCritical(x).P_Pa) return [];
-  const made = makeStream(call.model, n_mol_s, at, call.work);
-  if (made.state === 'solved' || made.findings[0].code !== 'equilibrium/no-such-state') return [];
+  if (P_Pa < task.model.pseudoCritical(x).P_Pa) return [];
+  for (const vapourFraction of [0.5, 0.9, 0.1]) {
+    const made = makeStream(call.model, n_mol_s, { P_Pa, vapourFraction }, call.work);
+    if (made.state === 'solved' || made.findings[0].code !== 'equilibrium/no-such-state') return [];
+  }
   const where = nameOfPlace(call.settings, place);
   const seen = named('place', wordOf(where));
   return [refuse(call, 'column/one-phase', { path: 'pressure' }, [seen])];
