@@ -1,5 +1,6 @@
 import { useSession, useStores } from '../store/react';
 import type { SessionState } from '../store/session';
+import { saveFile } from './documents';
 import { takeUpdate } from './offline';
 import { ReadOnly } from './ReadOnly';
 
@@ -49,9 +50,28 @@ function Told({ notice }: { readonly notice: NonNullable<SessionState['notice']>
   );
 }
 
-/** Quiet, at the foot of the sheet: the version that is open goes on for as long as one likes. */
+/** At the foot of the sheet: that there is a new version, which waits as long as one likes, or that the page has lost a part. */
 export function Update() {
+  const stores = useStores();
   const update = useSession((state) => state.update);
+  const outdated = useSession((state) => state.outdated);
+  const kept = useSession(({ saved }) => saved.state === 'saved' || saved.state === 'read-only');
+  if (outdated)
+    return (
+      <section className="foot-line" role="alert" aria-label="Reload needed">
+        <span>
+          <strong>This page needs to be loaded again.</strong> A part of it could not be fetched: a new
+          version may have taken its place, or there is no network.{' '}
+          {kept ? 'What you drew is kept.' : 'Save what you drew as a file first.'}
+        </span>
+        <button type="button" className="button line" onClick={() => saveFile(stores)}>
+          Save as a file
+        </button>
+        <button type="button" className="button fill" onClick={takeUpdate}>
+          Reload
+        </button>
+      </section>
+    );
   if (!update) return null;
   return (
     <section className="foot-line update" role="status" aria-label="New version">

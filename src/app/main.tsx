@@ -13,6 +13,7 @@ import { storedSingleKeys } from './actions/singleKeys';
 import { startAutosave } from './autosaving';
 import { ErrorBoundary } from './ErrorBoundary';
 import { keepFolds } from './folds';
+import { watchMissing } from './missing';
 import { keepOffline } from './offline';
 import { watchLinks } from './share/opening';
 import { startSolving } from './solving';
@@ -43,6 +44,7 @@ const stores: Stores = {
 };
 stores.session.setState({ theme, singleKeys: storedSingleKeys() });
 keepFolds(stores.session);
+watchMissing(stores.session);
 startSolving(stores);
 autosave.watch(stores);
 await watchLinks(stores);

@@ -1,5 +1,7 @@
+import { watchLoading } from './missing';
+
 const makeWorker = (): Worker =>
-  new Worker(new URL('../worker/solver.worker.ts', import.meta.url), { type: 'module' });
+  watchLoading(new Worker(new URL('../worker/solver.worker.ts', import.meta.url), { type: 'module' }));
 
 let awake: Worker | undefined;
 

@@ -74,6 +74,8 @@ export interface SessionState {
   };
   /** A new version of the page is kept and waits to be asked for. */
   readonly update: boolean;
+  /** A part of the page could not be fetched: only loading it again helps. */
+  readonly outdated: boolean;
   /** Read out politely by screen readers. */
   readonly spoken: string;
 }
@@ -99,6 +101,7 @@ export function createSession() {
     notice: null,
     saved: { state: 'unknown' },
     update: false,
+    outdated: false,
     spoken: '',
   }));
   const { getState: get, setState: set } = store;

@@ -1,4 +1,5 @@
 import type { DocumentOrder, FromDocuments, Made, ToDocuments } from '../../documents/messages';
+import { isMissing, tellMissing, watchLoading } from '../missing';
 
 /** What the page's side needs of the documents' worker; a real one, or a stand-in in tests. */
 export interface DocumentWorker {
@@ -49,7 +50,11 @@ export function createMaker(start: () => DocumentWorker) {
       else {
         open.delete(message.job);
         if (message.say === 'made') order.resolve(message);
-        else order.reject(new Error(message.message));
+        else {
+          const error = new Error(message.message);
+          if (isMissing(error)) tellMissing();
+          order.reject(error);
+        }
       }
     };
     fresh.onerror = (event) => {
@@ -94,10 +99,12 @@ export function createMaker(start: () => DocumentWorker) {
 export type Maker = ReturnType<typeof createMaker>;
 
 const start = (): Worker =>
-  new Worker(new URL('../../documents/documents.worker.ts', import.meta.url), {
-    type: 'module',
-    name: 'documents',
-  });
+  watchLoading(
+    new Worker(new URL('../../documents/documents.worker.ts', import.meta.url), {
+      type: 'module',
+      name: 'documents',
+    }),
+  );
 
 const once = (): (() => Maker) => {
   let maker: Maker | undefined;

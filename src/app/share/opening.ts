@@ -7,9 +7,19 @@ const MARK = '#sketch=';
 async function openLink(stores: Stores): Promise<void> {
   const { hash } = location;
   if (!hash.startsWith(MARK)) return;
+  let link: typeof import('./link');
+  try {
+    link = await import('./link');
+  } catch (error) {
+    // The link stays in the address: it is read when the page is loaded again.
+    stores.session.say('beyond', 'The link was not opened; your sketches are untouched.', [
+      `Load the page again. (${error instanceof Error ? error.message : String(error)})`,
+    ]);
+    return;
+  }
   // Once is enough: a page that is loaded again shows what was made of it.
   history.replaceState(history.state, '', location.pathname + location.search);
-  const { readLink, sayLinkFault } = await import('./link');
+  const { readLink, sayLinkFault } = link;
   const read = readLink(hash);
   if (!read.ok) {
     stores.session.say('beyond', 'The link was not opened; your sketches are untouched.', [
