@@ -35,114 +35,131 @@ export interface SolverClient {
 const SILENCE_MS = 3000;
 const RESTARTS = 2;
 
+/** What was asked last and has no answer yet. */
+interface Pending {
+  readonly basis: Basis;
+  readonly problem: Problem;
+  readonly from: 'warm' | 'nothing';
+}
+
 /**
  * One worker kept alive. While an edit is unanswered and the worker stays silent for three seconds it is ended, started
  * again, and the problem sent once more, now with every unit named before it is solved; after two restarts on one edit it
  * is reported as broken, with the unit the worker was last heard of in. A restarted worker hands everything out anew.
  */
-export function connectSolver(make: () => WorkerLike, handlers: SolverHandlers): SolverClient {
-  let worker: WorkerLike | null = null;
-  let basisSent = '';
-  let pending: { basis: Basis; problem: Problem; from: 'warm' | 'nothing' } | null = null;
-  let restarts = 0;
-  let where: UnitId | null = null;
-  let timer: ReturnType<typeof setTimeout> | undefined;
-  let closed = false;
+export const connectSolver = (make: () => WorkerLike, handlers: SolverHandlers): SolverClient =>
+  new Connection(make, handlers);
 
-  const watch = (): void => {
-    clearTimeout(timer);
-    if (pending) timer = setTimeout(() => restart('silent for three seconds'), SILENCE_MS);
-  };
+class Connection implements SolverClient {
+  private worker: WorkerLike | null = null;
+  private basisSent = '';
+  private pending: Pending | null = null;
+  private restarts = 0;
+  private where: UnitId | null = null;
+  private timer: ReturnType<typeof setTimeout> | undefined;
+  private closed = false;
 
-  const restart = (why: string): void => {
-    worker?.terminate();
-    worker = null;
-    basisSent = '';
-    if (closed || !pending) return;
-    restarts += 1;
-    if (restarts > RESTARTS) {
-      const { edit } = pending.problem;
-      giveUp(edit, why);
-      return;
+  constructor(
+    private readonly make: () => WorkerLike,
+    private readonly handlers: SolverHandlers,
+  ) {}
+
+  solve(basis: Basis, problem: Problem, from: 'warm' | 'nothing', blank = false): void {
+    if (this.pending?.problem.edit !== problem.edit) this.restarts = 0;
+    this.pending = { basis, problem, from };
+    this.where = null;
+    this.send(this.pending, blank ? { blank: true } : {});
+  }
+
+  stop(): void {
+    this.pending = null;
+    clearTimeout(this.timer);
+    this.worker?.postMessage({ say: 'stop' });
+  }
+
+  ask(job: number, about: Extract<ToWorker, { say: 'question' }>['about']): void {
+    this.worker ??= this.start();
+    this.worker.postMessage({ say: 'question', job, about });
+  }
+
+  close(): void {
+    this.closed = true;
+    clearTimeout(this.timer);
+    this.worker?.terminate();
+    this.worker = null;
+  }
+
+  private send(
+    { basis, problem, from }: Pending,
+    how: { readonly announce?: true; readonly blank?: true },
+  ): void {
+    this.worker ??= this.start();
+    if (this.basisSent !== basis.id) {
+      this.worker.postMessage({ say: 'basis', basis });
+      this.basisSent = basis.id;
     }
-    send(true);
-  };
+    this.worker.postMessage({ say: 'solve', problem, from, ...how });
+    this.watch();
+  }
 
-  const giveUp = (edit: number, why: string): void => {
-    pending = null;
-    restarts = 0;
-    clearTimeout(timer);
-    handlers.broke(edit, why, where);
-  };
-
-  const start = (): WorkerLike => {
-    const fresh = make();
-    fresh.onmessage = (event) => {
-      if (fresh !== worker) return;
-      const message = event.data;
-      watch();
-      if (message.say === 'results') {
-        const { edit, last, from = 'warm' } = message;
-        // The live answer of an edit may come while its answer from nothing is still awaited.
-        if (last && pending?.problem.edit === edit && pending.from === from) {
-          pending = null;
-          restarts = 0;
-          clearTimeout(timer);
-        }
-        handlers.results(message.edit, message.last, message);
-      } else if (message.say === 'at') {
-        where = message.unit;
-        handlers.at(message.edit, message.unit, message.loop);
-      } else if (message.say === 'answer') handlers.answer(message.job, message.value);
-      else if (message.say === 'broke' && message.edit !== undefined) {
-        // A mistake of ours that the worker survived: the same again would end the same way.
-        if (pending?.problem.edit === message.edit) giveUp(message.edit, message.message);
-      }
+  private start(): WorkerLike {
+    const fresh = this.make();
+    fresh.onmessage = ({ data }) => {
+      if (fresh === this.worker) this.hear(data);
     };
     fresh.onerror = (event) => {
-      if (fresh === worker) restart(event.message || 'the solver stopped');
+      if (fresh === this.worker) this.restart(event.message || 'the solver stopped');
     };
     return fresh;
-  };
+  }
 
-  const send = (announce = false, blank = false): void => {
-    if (!pending) return;
-    worker ??= start();
-    if (basisSent !== pending.basis.id) {
-      worker.postMessage({ say: 'basis', basis: pending.basis });
-      basisSent = pending.basis.id;
+  private hear(message: FromWorker): void {
+    this.watch();
+    switch (message.say) {
+      case 'results': {
+        const { edit, last, from = 'warm' } = message;
+        // The live answer of an edit may come while its answer from nothing is still awaited.
+        if (last && this.pending?.problem.edit === edit && this.pending.from === from) this.settled();
+        this.handlers.results(edit, last, message);
+        return;
+      }
+      case 'at':
+        this.where = message.unit;
+        this.handlers.at(message.edit, message.unit, message.loop);
+        return;
+      case 'answer':
+        this.handlers.answer(message.job, message.value);
+        return;
+      case 'broke':
+        // A mistake of ours that the worker survived: the same again would end the same way.
+        if (message.edit !== undefined && this.pending?.problem.edit === message.edit)
+          this.giveUp(message.edit, message.message);
     }
-    worker.postMessage({
-      say: 'solve',
-      problem: pending.problem,
-      from: pending.from,
-      ...(announce ? { announce } : {}),
-      ...(blank ? { blank } : {}),
-    });
-    watch();
-  };
+  }
 
-  return {
-    solve(basis, problem, from, blank = false) {
-      if (pending?.problem.edit !== problem.edit) restarts = 0;
-      pending = { basis, problem, from };
-      where = null;
-      send(false, blank);
-    },
-    stop() {
-      pending = null;
-      clearTimeout(timer);
-      worker?.postMessage({ say: 'stop' });
-    },
-    ask(job, about) {
-      worker ??= start();
-      worker.postMessage({ say: 'question', job, about });
-    },
-    close() {
-      closed = true;
-      clearTimeout(timer);
-      worker?.terminate();
-      worker = null;
-    },
-  };
+  private watch(): void {
+    clearTimeout(this.timer);
+    if (this.pending) this.timer = setTimeout(() => this.restart('silent for three seconds'), SILENCE_MS);
+  }
+
+  private restart(why: string): void {
+    this.worker?.terminate();
+    this.worker = null;
+    this.basisSent = '';
+    if (this.closed || !this.pending) return;
+    this.restarts += 1;
+    if (this.restarts > RESTARTS) this.giveUp(this.pending.problem.edit, why);
+    else this.send(this.pending, { announce: true });
+  }
+
+  private giveUp(edit: number, why: string): void {
+    this.settled();
+    this.handlers.broke(edit, why, this.where);
+  }
+
+  private settled(): void {
+    this.pending = null;
+    this.restarts = 0;
+    clearTimeout(this.timer);
+  }
 }

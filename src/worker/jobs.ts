@@ -32,114 +32,139 @@ const messageOf = (cause: unknown): string => (cause instanceof Error ? cause.me
  * @returns ends the service: nothing is begun any more
  */
 export function serveSolver(port: JobPort, options: ServeOptions = {}): () => void {
-  const { kinds = KNOWN_KINDS, pace = PACE, now = () => performance.now(), warmUp } = options;
-  const turns = makeTurns();
-  const posted = nothingPosted();
-  const memories = new Memories(posted);
-  const questions: QuestionOrder[] = [];
-  let waiting: SolveOrder | undefined;
-  /** The page lacks what was handed out, until a solve hands it out anew; also when the order that said so is never begun. */
-  let blank = false;
-  let busy = false;
-  let warm = false;
-  let closed = false;
-  let stopped = false;
-  const say = (message: FromWorker): void => {
-    if (!closed) port.postMessage(message);
-  };
+  const service = new Service(port, options);
+  port.addEventListener('message', ({ data }) => service.take(data));
+  port.start?.();
+  service.open(options.warmUp === true);
+  return () => service.close();
+}
 
-  async function runSolve({ problem, from, announce }: SolveOrder): Promise<void> {
+class Service {
+  private readonly turns = makeTurns();
+  private readonly posted = nothingPosted();
+  private readonly memories = new Memories(this.posted);
+  private readonly questions: QuestionOrder[] = [];
+  private readonly kinds: Kinds;
+  private readonly pace: Pace;
+  private readonly now: () => number;
+  private waiting: SolveOrder | undefined;
+  /** The page lacks what was handed out, until a solve hands it out anew; also when the order that said so is never begun. */
+  private blank = false;
+  private busy = false;
+  private warm = false;
+  private closed = false;
+  private stopped = false;
+
+  constructor(
+    private readonly port: JobPort,
+    { kinds = KNOWN_KINDS, pace = PACE, now = () => performance.now() }: ServeOptions,
+  ) {
+    this.kinds = kinds;
+    this.pace = pace;
+    this.now = now;
+  }
+
+  open(warmUp: boolean): void {
+    this.say({ say: 'ready' });
+    if (warmUp) this.question({ about: { ask: 'prewarm' } });
+  }
+
+  close(): void {
+    this.closed = true;
+    this.turns.close();
+  }
+
+  take(order: ToWorker): void {
+    switch (order.say) {
+      case 'basis':
+        this.memories.learn(order.basis);
+        return;
+      case 'solve':
+        this.blank ||= order.blank === true;
+        this.waiting = order;
+        void this.work();
+        return;
+      case 'stop':
+        this.waiting = undefined;
+        this.stopped = true;
+        return;
+      case 'question':
+        this.question(order);
+        return;
+      case 'drop': {
+        const at = this.questions.findIndex((q) => q.job === order.job);
+        if (at >= 0) this.questions.splice(at, 1);
+        return;
+      }
+      default:
+        order satisfies never;
+    }
+  }
+
+  private say(message: FromWorker): void {
+    if (!this.closed) this.port.postMessage(message);
+  }
+
+  private question(order: QuestionOrder): void {
+    this.questions.push(order);
+    void this.work();
+  }
+
+  private async work(): Promise<void> {
+    if (this.busy) return;
+    this.busy = true;
+    while (!this.closed) {
+      const order = this.waiting;
+      this.waiting = undefined;
+      if (order) {
+        await this.runSolve(order);
+        continue;
+      }
+      const question = this.questions.shift();
+      if (!question) break;
+      await this.runQuestion(question);
+    }
+    this.busy = false;
+  }
+
+  private async runSolve({ problem, from, announce }: SolveOrder): Promise<void> {
+    const { turns, now, pace, kinds } = this;
     const { edit } = problem;
-    stopped = false;
+    this.stopped = false;
     const clean = from === 'nothing' ? ({ from } as const) : {};
-    if (blank) {
-      posted.streams.clear();
-      posted.units.clear();
-      blank = false;
+    if (this.blank) {
+      this.posted.streams.clear();
+      this.posted.units.clear();
+      this.blank = false;
     }
     try {
-      const memory = memories.of(problem.basis);
-      const batch = await drive(solveNetwork(problem, memory, { from, kinds }), {
+      const batch = await drive(solveNetwork(problem, this.memories.of(problem.basis), { from, kinds }), {
         turns,
         now,
         pace,
         announce: announce === true,
-        overtaken: () => closed || stopped || waiting !== undefined,
-        partial: (part) => say({ say: 'results', edit, last: false, ...clean, ...part }),
-        at: (unit, loop) => say({ say: 'at', edit, unit, ...(loop ? { loop } : {}) }),
+        overtaken: () => this.closed || this.stopped || this.waiting !== undefined,
+        partial: (part) => this.say({ say: 'results', edit, last: false, ...clean, ...part }),
+        at: (unit, loop) => this.say({ say: 'at', edit, unit, ...(loop ? { loop } : {}) }),
       });
-      if (batch) say({ say: 'results', edit, last: true, ...clean, ...batch });
+      if (batch) this.say({ say: 'results', edit, last: true, ...clean, ...batch });
     } catch (cause) {
-      memories.forget(problem.basis);
-      say({ say: 'broke', edit, message: messageOf(cause) });
+      this.memories.forget(problem.basis);
+      this.say({ say: 'broke', edit, message: messageOf(cause) });
     }
   }
 
-  async function runQuestion({ job, about }: QuestionOrder): Promise<void> {
+  private async runQuestion({ job, about }: QuestionOrder): Promise<void> {
+    const { turns, now } = this;
     try {
       if (about.ask === 'prewarm') {
-        const overtaken = () => closed || waiting !== undefined;
-        const value = warm ? { solves: 0, enough: true } : await prewarm({ turns, now, overtaken });
-        warm = value.enough;
-        if (job !== undefined) say({ say: 'answer', job, value });
+        const overtaken = (): boolean => this.closed || this.waiting !== undefined;
+        const value = this.warm ? { solves: 0, enough: true } : await prewarm({ turns, now, overtaken });
+        this.warm = value.enough;
+        if (job !== undefined) this.say({ say: 'answer', job, value });
       }
     } catch (cause) {
-      say({ say: 'broke', ...(job === undefined ? {} : { job }), message: messageOf(cause) });
+      this.say({ say: 'broke', ...(job === undefined ? {} : { job }), message: messageOf(cause) });
     }
   }
-
-  async function work(): Promise<void> {
-    if (busy) return;
-    busy = true;
-    while (!closed) {
-      const order = waiting;
-      waiting = undefined;
-      if (order) {
-        await runSolve(order);
-        continue;
-      }
-      const question = questions.shift();
-      if (!question) break;
-      await runQuestion(question);
-    }
-    busy = false;
-  }
-
-  port.addEventListener('message', ({ data }) => {
-    switch (data.say) {
-      case 'basis':
-        memories.learn(data.basis);
-        return;
-      case 'solve':
-        blank ||= data.blank === true;
-        waiting = data;
-        void work();
-        return;
-      case 'stop':
-        waiting = undefined;
-        stopped = true;
-        return;
-      case 'question':
-        questions.push(data);
-        void work();
-        return;
-      case 'drop': {
-        const at = questions.findIndex((q) => q.job === data.job);
-        if (at >= 0) questions.splice(at, 1);
-        return;
-      }
-      default:
-        return data satisfies never;
-    }
-  });
-  port.start?.();
-  say({ say: 'ready' });
-  if (warmUp) {
-    questions.push({ about: { ask: 'prewarm' } });
-    void work();
-  }
-  return () => {
-    closed = true;
-    turns.close();
-  };
 }
