@@ -198,7 +198,7 @@ export const column: KindWords = {
     'column/not-found': {
       title: 'No solution found',
       says: 'The search ended at {place} with a residual of {residual} after {iterations} steps.',
-      next: 'Start from what is easy, such as reflux ratio and distillate, and move on from there.',
+      next: 'Start from what is easy, such as fewer stages and a middling split, and move on from there.',
     },
     'column/feed-vapour-above-top': {
       title: 'More vapour than the top carries',
