@@ -170,7 +170,8 @@ export function solveBlock(
  * @param A    p x q, rows of length q from aAt on
  * @param B    q x m, rows of length bStride from bAt on
  * @param out  p x m, rows of length outStride from outAt on
- * Four rows of B and two of A a pass: each entry of C is read and written once for eight operations, each of B read once for two rows.
+ * Four rows of B and two of A a pass: each entry of C is read and written once for eight operations, each of B read once for
+ * two rows.
  */
 export function addProduct(
   factor: number,

@@ -102,7 +102,10 @@ export function stayingOf(balance: UnitClosure, back: Torn, i: number): Staying 
   return { entering: into + made, leaving: out, round };
 }
 
-/** Chemicals that gather in the loop, by place: more than half of what enters stays although so many times it goes round; worst first. */
+/**
+ * Chemicals that gather in the loop, by place: more than half of what enters stays although so many times it goes round; worst
+ * first.
+ */
 export function gathered(balance: UnitClosure, back: Torn, times: number): number[] {
   const staying = balance.chemicals.map((_, i) => stayingOf(balance, back, i));
   const gathers = ({ entering, leaving, round }: Staying): boolean =>
