@@ -38,7 +38,7 @@ export function keepScene(stores: Stores, sheet: SheetStore, zoomNow: () => numb
     const { gaps } = stores.compiled.getState();
     const results = stores.results.getState();
     const before = sheet.getState();
-    const next = buildScene(sketch, input(sketch, results, gaps, null, before.textScale), scene);
+    const next = buildScene(sketch, input(sketch, results, gaps, before.textScale), scene);
     const units = indexed(next.units, before.scene.units, before.units, (shape) => shape.unit);
     const lines = indexed(next.lines, before.scene.lines, still.lines, (shape) => shape.stream);
     const labels = indexed(next.labels, before.scene.labels, still.labels, (shape) => shape.stream);

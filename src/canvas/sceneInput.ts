@@ -23,13 +23,7 @@ export function createSceneInput() {
   let measures: Measures = { set: 'metric' };
   let rows = new Map<StreamId, Kept>();
 
-  return (
-    sketch: Sketch,
-    results: ResultsState,
-    gaps: readonly Finding[],
-    moved: SceneInput['moved'] | null,
-    textScale = 1,
-  ): SceneInput => {
+  return (sketch: Sketch, results: ResultsState, gaps: readonly Finding[], textScale = 1): SceneInput => {
     if (sketch.display !== display || sketch.site !== site) {
       display = sketch.display;
       site = sketch.site;
@@ -70,7 +64,6 @@ export function createSceneInput() {
       duties,
       remarks,
       textScale,
-      ...(moved ? { moved } : {}),
     };
   };
 }

@@ -94,7 +94,7 @@ function linesInTrouble(
   kinds: Readonly<Record<string, KindCatalogue>>,
 ): readonly StreamId[] {
   const units = sketch.units.map((unit) => ({ ...unit, at: places.get(unit.id) ?? unit.at }));
-  const standing = standingUnits({ ...sketch, units }, undefined, kinds);
+  const standing = standingUnits({ ...sketch, units }, kinds);
   const { wires } = wireSheet(sketch.streams, standing, undefined);
   const lines = wires.map((wire) => wire.points);
   const merged = tangles(lines, MERGED);

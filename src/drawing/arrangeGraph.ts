@@ -109,7 +109,7 @@ export function graphOf(
   sketch: Sketch,
   kinds: Readonly<Record<string, KindCatalogue>>,
 ): { readonly graph: LayoutGraph; readonly standing: readonly StandingUnit[] } {
-  const standing = standingUnits(sketch, undefined, kinds);
+  const standing = standingUnits(sketch, kinds);
   const byId = new Map(standing.map((u) => [u.unit.id, u]));
   const used = new Map<UnitId, Set<string>>(standing.map((u) => [u.unit.id, new Set()]));
   for (const { from, to } of sketch.streams) {

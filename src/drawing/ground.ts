@@ -54,9 +54,8 @@ export function groundOf(sketch: Sketch, input: SceneInput, before: Made | undef
     before !== undefined &&
     sketch.units === before.sketch.units &&
     sketch.streams === before.sketch.streams &&
-    kinds === (before.input.kinds ?? CATALOGUE) &&
-    sameMap(input.moved, before.input.moved);
-  const standing = stands ? before.ground.standing : standingUnits(sketch, input.moved, kinds);
+    kinds === (before.input.kinds ?? CATALOGUE);
+  const standing = stands ? before.ground.standing : standingUnits(sketch, kinds);
   const sizes = new Map<StreamId, LabelSize>();
   for (const { id } of sketch.streams) {
     const rows = input.labels.get(id);

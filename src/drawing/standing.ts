@@ -47,13 +47,12 @@ const samePlace = (a: Pose, b: Pose): boolean =>
 
 export function standingUnits(
   sketch: Sketch,
-  moved: ReadonlyMap<UnitId, Point> | undefined,
   kinds: Readonly<Record<string, KindCatalogue>> = CATALOGUE,
 ): readonly StandingUnit[] {
   const used = usedPorts(sketch);
   const units = sketch.units.map((unit): StandingUnit => {
     const symbol = symbolOf(unit, kinds, used.get(unit.id));
-    const pose = poseOf(unit, moved?.get(unit.id));
+    const pose = poseOf(unit);
     const known = stood.get(unit);
     if (known?.symbol === symbol && samePlace(known.pose, pose)) return known;
     const links = (symbol.links ?? []).map(
@@ -71,30 +70,3 @@ export const portOf = (standing: StandingUnit, name: string): PortPlace | undefi
   const port = standing.symbol.ports(name);
   return port && portOnSheet(standing.pose, port);
 };
-
-/**
- * The usual place of a unit's port on the sheet; undefined when the unit has no such port. The lines of a dot may have
- * chosen other sides: a drawn unit knows them (portOfShape in transform.ts).
- */
-export function portPlace(
-  unit: SketchUnit,
-  name: string,
-  moved?: Point,
-  kinds: Readonly<Record<string, KindCatalogue>> = CATALOGUE,
-): PortPlace | undefined {
-  const port = symbolOf(unit, kinds).ports(name);
-  return port && portOnSheet(poseOf(unit, moved), port);
-}
-
-/** Places of all ports as the sketch's lines have them, dots included; undefined for a port that is not there. */
-export function portFinder(
-  sketch: Sketch,
-  moved?: ReadonlyMap<UnitId, Point>,
-  kinds: Readonly<Record<string, KindCatalogue>> = CATALOGUE,
-): (unit: UnitId, name: string) => PortPlace | undefined {
-  const byId = new Map(standingUnits(sketch, moved, kinds).map((u) => [u.unit.id, u]));
-  return (unit, name) => {
-    const standing = byId.get(unit);
-    return standing && portOf(standing, name);
-  };
-}

@@ -10,8 +10,8 @@ export interface Pose {
   readonly mirror: boolean;
 }
 
-export const poseOf = (unit: SketchUnit, moved?: Point): Pose => ({
-  at: moved ?? unit.at,
+export const poseOf = (unit: SketchUnit): Pose => ({
+  at: unit.at,
   turn: unit.turn ?? 0,
   mirror: unit.mirror === true,
 });

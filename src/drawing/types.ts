@@ -216,8 +216,6 @@ export interface SceneInput {
    * (above 1), or smaller on one that is zoomed in; absent: 1. See textScaleAt.
    */
   readonly textScale?: number;
-  /** Positions while a drag lasts, over the sketch's own. */
-  readonly moved?: ReadonlyMap<UnitId, Point>;
   /** Width of a stream's ribbon in follow [px]; labels clear half of it. */
   readonly ribbons?: ReadonlyMap<StreamId, number>;
   /** Kinds whose ports are known; absent: the catalogue. A kind without a symbol of its own becomes a box. */

@@ -1,7 +1,8 @@
-/** Time of drawing sheets of 60 and 200 units anew: from nothing, for new digits, for a state, for a unit that was moved. */
+/** Time of drawing sheets of 60 and 200 units anew: from nothing, for new digits, for a state, for units that a hand moves. */
 import { cpus, loadavg } from 'node:os';
 import { buildScene } from '../../src/drawing/scene';
 import type { LabelRow, Point, Scene, SceneInput } from '../../src/drawing/types';
+import { linesUnderHand } from '../../src/drawing/underHand';
 import type { UnitId } from '../../src/engine/ids';
 import type { Sketch } from '../../src/sketch/types';
 import { inputOf, sheetOf } from '../drawing/sheets';
@@ -97,11 +98,24 @@ function timeSheet(sketch: Sketch, now: () => number, turns: number): readonly S
       ...sketch.streams.slice(0, count).map((s) => [s.id, rowsOf(k)] as const),
     ]),
   });
-  const moved = (tag: string, k: number): SceneInput => {
-    const [x, y] = sketch.units.find((u) => u.tag === tag)!.at;
+  /** As the hand has them: the canvas asks once a frame. */
+  const held = (tags: readonly string[], k: number): ReadonlyMap<UnitId, Point> => {
     const [dx, dy] = [8 * ((k % 24) - 12), 8 * ((k % 14) - 7)];
-    return { ...input, moved: new Map<UnitId, Point>([[tag as UnitId, [x + dx, y + dy]]]) };
+    const units = sketch.units.filter((u) => tags.includes(u.tag));
+    return new Map(units.map((u) => [u.id, [u.at[0] + dx, u.at[1] + dy]]));
   };
+  const underHand = (what: string, tags: readonly string[]): SceneTiming =>
+    timed(`${what} under the hand`, (k, before) => {
+      linesUnderHand(before, sketch.streams, held(tags, k), new Set());
+      return before;
+    });
+  const letGo = (k: number, before: Scene): Scene => {
+    const there = held(['V-301'], k);
+    const units = sketch.units.map((u) => ({ ...u, at: there.get(u.id) ?? u.at }));
+    return buildScene({ ...sketch, units }, input, before);
+  };
+  const ten = sketch.units.slice(30, 40).map((u) => u.tag);
+  const half = sketch.units.filter((_, k) => k % 2 === 0).map((u) => u.tag);
   return [
     timed('from nothing', () => buildScene(sketch, input)),
     timed('another zoom', (k, before) =>
@@ -128,8 +142,10 @@ function timeSheet(sketch: Sketch, now: () => number, turns: number): readonly S
         before,
       ),
     ),
-    timed('a drum moved', (k, before) => buildScene(sketch, moved('V-301', k), before)),
-    timed('a valve moved', (k, before) => buildScene(sketch, moved('PV-301', k), before)),
-    timed('a join moved', (k, before) => buildScene(sketch, moved('J-4', k), before)),
+    underHand('a drum', ['V-301']),
+    underHand('a join', ['J-4']),
+    underHand('ten units', ten),
+    underHand('every second unit', half),
+    timed('a drum let go', letGo),
   ];
 }

@@ -32,7 +32,7 @@ export function handPlaced(sketch: Sketch, seed: number): Sketch {
   const next = seeded(9000 + seed);
   const step = (far: number): number => 8 * Math.round(((next() * 2 - 1) * far) / 8);
   const share = 0.1 + 0.8 * next();
-  const standing = standingUnits(sketch, undefined);
+  const standing = standingUnits(sketch);
   const taken: Box[] = [];
   const places = new Map<UnitId, Point>();
   for (const u of standing) {

@@ -12,7 +12,7 @@ import type { StreamId, UnitId } from '../../src/engine/ids';
 import type { SketchUnit } from '../../src/sketch/types';
 import { LAWS } from './laws';
 import { randomSheet, seeded } from './random';
-import { inputOf, LET_DOWN, RECYCLE, SHEETS, sheetOf } from './sheets';
+import { inputOf, LET_DOWN, placedAt, RECYCLE, SHEETS, sheetOf } from './sheets';
 
 const rowsWith = (number: string) => [
   { number, unit: 'kmol/h' },
@@ -156,8 +156,7 @@ describe('a scene built upon an earlier one', () => {
 
   test('keeps the lines that have nothing to do with a moved unit', () => {
     const before = buildScene(RECYCLE, inputOf(RECYCLE));
-    const moved = new Map<UnitId, Point>([['PROD-1' as UnitId, [1016, 96]]]);
-    const after = buildScene(RECYCLE, { ...inputOf(RECYCLE), moved }, before);
+    const after = buildScene(placedAt(RECYCLE, [['PROD-1', [1016, 96]]]), inputOf(RECYCLE), before);
     const changed = after.lines.filter((line, k) => line !== before.lines[k]).map((line) => line.number);
     expect(changed).toEqual(['7']);
   });
@@ -165,18 +164,16 @@ describe('a scene built upon an earlier one', () => {
   test.each([3, 11, 23, 35])(
     'equals one built from scratch after every step of a random walk: seed %i',
     (seed) => {
-      const sketch = randomSheet(seed);
+      let sketch = randomSheet(seed);
       const input = inputOf(sketch);
       const next = seeded(seed);
-      const moved = new Map<UnitId, Point>();
       let scene = buildScene(sketch, input);
       for (let step = 0; step < 12; step++) {
-        const unit = sketch.units[Math.floor(next() * sketch.units.length)]!;
-        const [x, y] = moved.get(unit.id) ?? unit.at;
-        moved.set(unit.id, [x + 8 * Math.floor(next() * 5 - 2), y + 8 * Math.floor(next() * 5 - 2)]);
-        const now = { ...input, moved: new Map(moved) };
-        scene = buildScene(sketch, now, scene);
-        expect(scene).toEqual(buildScene(sketch, now));
+        const { tag, at } = sketch.units[Math.floor(next() * sketch.units.length)]!;
+        const by = (): number => 8 * Math.floor(next() * 5 - 2);
+        sketch = placedAt(sketch, [[tag, [at[0] + by(), at[1] + by()]]]);
+        scene = buildScene(sketch, input, scene);
+        expect(scene).toEqual(buildScene(sketch, input));
       }
     },
   );
@@ -196,8 +193,7 @@ test('a unit pushed against another until their ports touch leaves the line with
   );
   const scene = buildScene(sketch, inputOf(sketch));
   const [[x], [far]] = [scene.lines[0]!.points[0]!, scene.lines[0]!.points.at(-1)!];
-  const moved = new Map<UnitId, Point>([['PV-1' as UnitId, [200 - (far - x), 0]]]);
-  const touching = buildScene(sketch, { ...inputOf(sketch), moved }, scene);
+  const touching = buildScene(placedAt(sketch, [['PV-1', [200 - (far - x), 0]]]), inputOf(sketch), scene);
   expect(touching.lines[0]!.points).toEqual([
     [x, 0],
     [x, 0],

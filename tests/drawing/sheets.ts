@@ -87,6 +87,18 @@ export function inputOf(
   };
 }
 
+/** The sketch with units elsewhere, by their tags. */
+export const placedAt = (
+  sketch: Sketch,
+  places: readonly (readonly [tag: string, at: readonly [number, number]])[],
+): Sketch => ({
+  ...sketch,
+  units: sketch.units.map((unit) => {
+    const place = places.find(([tag]) => tag === unit.tag);
+    return place ? { ...unit, at: place[1] } : unit;
+  }),
+});
+
 /** A feed let down into a drum. */
 export const LET_DOWN = sheetOf(
   [

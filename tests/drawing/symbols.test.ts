@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { buildScene } from '../../src/drawing/scene';
-import { portFinder, portPlace, standingUnits } from '../../src/drawing/standing';
+import { portOf, standingUnits } from '../../src/drawing/standing';
 import { iconOf, symbolToSvg } from '../../src/drawing/symbols/icon';
 import { plainSymbol, SYMBOLS, symbolOf } from '../../src/drawing/symbols/registry';
 import { linkShapes } from '../../src/drawing/symbols/shapes';
@@ -213,7 +213,7 @@ describe('a dot that no one has turned', () => {
   });
 
   test('keeps its usual sides once it is turned by hand', () => {
-    const dot = standingUnits(below({ turn: 180 }), undefined)[1]!;
+    const dot = standingUnits(below({ turn: 180 }))[1]!;
     expect(dot.symbol).toBe(SYMBOLS.divide!.draw({ tag: '', kind: 'divide', settings: {} }));
   });
 
@@ -221,10 +221,10 @@ describe('a dot that no one has turned', () => {
     const scene = buildScene(below({}), inputOf(below({})));
     expect(portOfShape(scene.units[1]!, 'out3')?.side).toBe('bottom');
     const dot = scene.units[1]!;
-    const find = portFinder(below({}));
+    const standing = standingUnits(below({}))[1]!;
     for (const name of ['in', 'out1', 'out2', 'out3']) {
-      expect(find(dot.unit, name)).toEqual(portOfShape(dot, name));
+      expect(portOf(standing, name)).toEqual(portOfShape(dot, name));
     }
-    expect(portPlace(below({}).units[1]!, 'in')?.side).toBe('left');
+    expect(portOfShape(dot, 'in')?.side).toBe('top');
   });
 });

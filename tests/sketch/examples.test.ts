@@ -27,7 +27,7 @@ describe.each(names)('%s', (name) => {
     expect([gaps, notes]).toEqual([[], []]);
   });
   test('every unit stands on the grid, on a sheet of A3 shape, clear of the others', () => {
-    const boxes = standingUnits(sketch, undefined).map((unit) => unit.box);
+    const boxes = standingUnits(sketch).map((unit) => unit.box);
     for (const { at } of sketch.units) expect(at.map((x) => x % 8)).toEqual([0, 0]);
     for (const box of boxes) {
       expect(box.x >= 0 && box.x + box.w <= 1600 && box.y >= 0 && box.y + box.h <= 1000).toBe(true);
