@@ -1,4 +1,4 @@
-import { formatDecimals, MINUS, plainNumber, THIN_SPACE } from '../quantity';
+import { formatDecimals, formatDifference, MINUS, plainNumber, THIN_SPACE } from '../quantity';
 import type { Cell } from './types';
 
 export const text = (value: string, style: { bold?: boolean; muted?: boolean } = {}): Cell => ({
@@ -12,10 +12,14 @@ export const number = (value: number | undefined, decimals: number, bold = false
     ? absent
     : { is: 'number', value, decimals, ...(bold ? { bold } : {}) };
 
+/** A difference that should be nothing: what counts is its size. */
+export const difference = (value: number): Cell => ({ is: 'number', value, decimals: 0, power: true });
+
 /** As printed: fixed decimals, '–' for absent, '<0.01' for a trace. */
 export function printed(cell: Cell): string {
   if (cell.is === 'absent') return '–';
-  return cell.is === 'text' ? cell.text : formatDecimals(cell.value, cell.decimals);
+  if (cell.is === 'text') return cell.text;
+  return cell.power ? formatDifference(cell.value) : formatDecimals(cell.value, cell.decimals);
 }
 
 /** The number a reader of the printed page would take from it; a trace counts as nothing. */

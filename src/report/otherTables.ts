@@ -1,10 +1,10 @@
 import type { ClosureEntry } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
-import { displayUnit, formatDifference } from '../quantity';
+import { displayUnit } from '../quantity';
 import type { Dimension } from '../quantity/dimension';
 import type { Assumption } from '../sketch/types';
 import { settingWord, weightWord } from '../wording';
-import { absent, decimalsFor, left, number, right, text } from './cells';
+import { absent, decimalsFor, difference, left, number, right, text } from './cells';
 import { measuresOf, type ReportInput } from './input';
 import type { Row, Table } from './types';
 import { assumedWords, findingWords } from './words';
@@ -26,7 +26,7 @@ export function closureTable(input: ReportInput): Table {
         number(values[0], places),
         number(values[1], places),
         values[2] === 0 ? absent : number(values[2], places),
-        text(formatDifference(entry.relative)),
+        difference(entry.relative),
       ],
     });
   };

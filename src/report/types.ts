@@ -5,8 +5,17 @@ import type { Dimension } from '../quantity/dimension';
 /** A cell keeps the unrounded number; writers format it. Text cells are guarded against formula injection where it matters. */
 export type Cell =
   | { readonly is: 'text'; readonly text: string; readonly bold?: boolean; readonly muted?: boolean }
-  /** Already in display units; `decimals` fixed for the row; trace: shown '<0.01' when smaller than the last place but not zero. */
-  | { readonly is: 'number'; readonly value: number; readonly decimals: number; readonly bold?: boolean }
+  /**
+   * Already in display units; `decimals` fixed for the row; trace: shown '<0.01' when smaller than the last place but not zero.
+   * `power`: printed by its size, "3 × 10⁻¹⁵".
+   */
+  | {
+      readonly is: 'number';
+      readonly value: number;
+      readonly decimals: number;
+      readonly bold?: boolean;
+      readonly power?: true;
+    }
   | { readonly is: 'absent' };
 
 export interface Row {

@@ -32,7 +32,7 @@ function figureOf(cell: Cell | undefined, row: Row): CellObject | null {
     return cell.text === ''
       ? null
       : words(cell.text, { ...bold, alignVertical: 'top', ...(cell.text.length > 60 ? { wrap: true } : {}) });
-  return { value: cell.value, type: Number, format: format(cell.decimals), ...bold };
+  return { value: cell.value, type: Number, format: cell.power ? '0E+0' : format(cell.decimals), ...bold };
 }
 
 const LONGEST = 31;
