@@ -59,9 +59,6 @@ export async function loadChemicals(ids: readonly string[]): Promise<ChemicalDat
   });
 }
 
-/** Data of one chemical. Throws on an id that is not in the index. */
-export const loadChemical = async (id: string): Promise<ChemicalData> => (await loadChemicals([id]))[0]!;
-
 interface PairRow extends FittedPair {
   readonly use: boolean;
   readonly status: string;

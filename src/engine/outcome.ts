@@ -4,7 +4,7 @@ import type { StreamId, UnitId } from './ids';
 /**
  * What went wrong or deserves notice, as a value: code, place and evidence. The sentence and the next step live in
  * wording/, found by the code. Codes read 'room/what' ('valve/outlet-above-inlet'); every kind keeps its own list in
- * its findings.ts, and the union of those lists is derived where all kinds are known (units/findings.ts).
+ * its findings.ts.
  */
 export type FindingCode = `${string}/${string}`;
 

@@ -46,7 +46,3 @@ export const addShape = (a: Shape, b: Shape, n: number): Shape => [
   a[3] + n * b[3],
   a[4] + n * b[4],
 ];
-
-/** The dimensions that a unit of this shape can measure. */
-export const dimensionsOf = (shape: Shape): Dimension[] =>
-  DIMENSIONS.filter((d) => sameShape(SHAPES[d], shape));

@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { choleskyShifted, choleskySolve } from '../../src/engine/numerics/cholesky';
-import { luFactor, luSolve, luSolveMany } from '../../src/engine/numerics/lu';
+import { luFactor, luSolve } from '../../src/engine/numerics/lu';
 import { seeded } from './seeded';
 
 const matrix = (n: number, next: () => number): Float64Array =>
@@ -22,12 +22,6 @@ describe('LU', () => {
       luSolve(lu, n, pivot, y);
       const back = times(a, n, y);
       for (let i = 0; i < n; i++) expect(Math.abs(back[i]! - b[i]!)).toBeLessThan(1e-12);
-      const many = Float64Array.from({ length: 2 * n }, (_, k) => b[k >> 1]! * (1 + (k & 1)));
-      luSolveMany(lu, n, pivot, many, 2);
-      for (let i = 0; i < n; i++) {
-        expect(many[2 * i]).toBeCloseTo(y[i]!, 9);
-        expect(many[2 * i + 1]! / 2).toBeCloseTo(y[i]!, 9);
-      }
     }
   });
 

@@ -60,26 +60,10 @@ export function luSolve(a: Float64Array, n: number, pivot: Int32Array, b: Float6
   }
 }
 
-/** Solves A X = B with factors from luFactor, which gave true, for m right-hand sides; B is row-major n*m, overwritten by X. */
-export function luSolveMany(a: Float64Array, n: number, pivot: Int32Array, b: Float64Array, m: number): void {
-  for (let k = 0; k < n; k++) if (pivot[k] !== k) swapRows(b, m, k, pivot[k]!);
-  for (let i = 0; i < n; i++) for (let j = 0; j < i; j++) subtractRow(b, m, i, j, a[i * n + j]!);
-  for (let i = n - 1; i >= 0; i--) {
-    for (let j = i + 1; j < n; j++) subtractRow(b, m, i, j, a[i * n + j]!);
-    const scale = 1 / a[i * n + i]!;
-    for (let c = i * m; c < i * m + m; c++) b[c]! *= scale;
-  }
-}
-
 function swapRows(a: Float64Array, width: number, p: number, q: number): void {
   for (let j = 0; j < width; j++) {
     const kept = a[p * width + j]!;
     a[p * width + j] = a[q * width + j]!;
     a[q * width + j] = kept;
   }
-}
-
-function subtractRow(b: Float64Array, m: number, i: number, j: number, factor: number): void {
-  if (factor === 0) return;
-  for (let c = 0; c < m; c++) b[i * m + c]! -= factor * b[j * m + c]!;
 }

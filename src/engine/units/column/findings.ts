@@ -55,4 +55,3 @@ export const COLUMN_FINDINGS = [
   'column/second-liquid',
   ...UTILITY_FINDINGS,
 ] as const;
-export type ColumnCode = (typeof COLUMN_FINDINGS)[number];
