@@ -1,7 +1,8 @@
 import { describe, expect, test } from 'vitest';
 import { NETWORK_FINDINGS } from '../../src/engine/network/findings';
 import type { Finding } from '../../src/engine/outcome';
-import { CATALOGUE, LIMIT_RULES as RULES } from '../../src/engine/units/catalogue';
+import { CATALOGUE } from '../../src/engine/units/catalogue';
+import { RULES } from '../../src/engine/units/rules';
 import { STREAM_FINDINGS } from '../../src/engine/units/streamLimits';
 import { kindWord, portWord, resultWord, sayFinding, settingWord } from '../../src/wording';
 import { SENTENCES } from '../../src/wording/codes';

@@ -33,4 +33,3 @@ export const CATALOGUE: Readonly<Record<string, KindCatalogue>> = {
 };
 
 /** Thresholds of all limits: what a sketch may override, and what is printed with its basis. */
-export { RULES as LIMIT_RULES } from './rules';
