@@ -162,6 +162,17 @@ describe('pages of a wide, long table', () => {
     },
   );
 
+  test('groups stay in one piece where that takes no more pages, and only there', () => {
+    const parts = (groups: readonly number[]): string[] =>
+      tablePages(table(3, groups), { columns: 16, room: 50, last: 47, height: () => 1 }).map(({ rows }) =>
+        rows.flatMap((row) => (row.style === 'group' ? [row.label.slice(6)] : [])).join(', '),
+      );
+    // Derived: 21 and 21 rows of 50, then 21; in one run 50 and 13, no page less.
+    expect(parts([20, 20, 20])).toEqual(['0, 1', '2']);
+    // 31 and 31 and 31 rows are three pages in one piece each, but two pages hold them with a cut.
+    expect(parts([30, 30, 30])).toEqual(['0, 1', '1 (continued), 2']);
+  });
+
   test('no page begins or ends with fewer than three rows of a group that goes on', () => {
     for (let before = 0; before <= 46; before += 1)
       for (let length = 1; length <= 60; length += 1) {

@@ -32,12 +32,21 @@ export function tablePages(table: Table, at: PageRoom): TablePage[] {
       (_, k) => first + k,
     );
     const isLast = first + at.columns >= count;
-    for (const rows of rowPages(table.rows, at, isLast ? at.last : at.room)) pages.push({ columns, rows });
+    const last = isLast ? at.last : at.room;
+    const full = rowPages(table.rows, at, last, false);
+    const whole = rowPages(table.rows, at, last, true);
+    // Groups in one piece where that takes no more pages.
+    for (const rows of whole.length <= full.length ? whole : full) pages.push({ columns, rows });
   }
   return pages;
 }
 
-function rowPages(rows: readonly Row[], { room, height }: PageRoom, last: number): Row[][] {
+function rowPages(
+  rows: readonly Row[],
+  { room, height }: PageRoom,
+  last: number,
+  keepsGroups: boolean,
+): Row[][] {
   const pages: Row[][] = [];
   let page: Row[] = [];
   let used = 0;
@@ -56,14 +65,16 @@ function rowPages(rows: readonly Row[], { room, height }: PageRoom, last: number
     const isGroup = row.style === 'group';
     const next = rows.findIndex((r, j) => j > k && r.style === 'group');
     const end = next < 0 ? rows.length : next;
-    // A short group stays whole, a long one keeps its first rows and its last ones together.
     const inGroup = end - k - (isGroup ? 1 : 0);
-    const isWhole = inGroup < (isGroup ? 2 * LEAST_ROWS : LEAST_ROWS + 1);
-    const together = rows.slice(k, isWhole ? end : k + (isGroup ? 1 + LEAST_ROWS : 1));
+    const heightOf = (to: number): number => rows.slice(k, to).reduce((sum, r) => sum + height(r), 0);
+    // A short group stays whole, a long one keeps its first rows and its last ones together.
+    const isWhole =
+      inGroup < (isGroup ? 2 * LEAST_ROWS : LEAST_ROWS + 1) ||
+      (keepsGroups && isGroup && heightOf(end) <= (end === rows.length ? last : room));
+    const to = isWhole ? end : k + (isGroup ? 1 + LEAST_ROWS : 1);
     // The very last rows must fit above the notes.
     const most = isWhole && end === rows.length ? last : room;
-    const needed = together.reduce((sum, r) => sum + height(r), 0);
-    if (page.length > 0 && used + needed > most) turn(!isGroup);
+    if (page.length > 0 && used + heightOf(to) > most) turn(!isGroup);
     if (isGroup) heading = row;
     put(row);
   });

@@ -99,11 +99,12 @@ const notesHeight = (table: Table, paper: Paper): number =>
 export function streamPages(table: Table, paper: Paper): Content[] {
   const at = measured(table, paper);
   const room = paper.inner.h - at.head;
+  const heights = new Map(table.rows.map((row) => [row, heightOf(row, at)]));
   const pages = tablePages(table, {
     columns: at.columns,
     room,
     last: room - notesHeight(table, paper),
-    height: (row) => heightOf(row, at),
+    height: (row) => heights.get(row) ?? heightOf(row, at),
   });
   const seen = new Set<number>();
   return [
