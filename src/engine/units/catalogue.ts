@@ -31,5 +31,3 @@ export const CATALOGUE: Readonly<Record<string, KindCatalogue>> = {
   chamber,
   reactor,
 };
-
-/** Thresholds of all limits: what a sketch may override, and what is printed with its basis. */
