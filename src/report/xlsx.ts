@@ -100,6 +100,7 @@ function tableSheet(table: Table, rowHead: string, taken: Set<string>): Book[num
     data: [...heads, ...rows, ...(notes.length > 0 ? [[], ...notes] : [])],
     stickyRowsCount: heads.length,
     stickyColumnsCount: hasUnit ? 2 : 1,
+    orientation: 'landscape',
     columns: [
       { width: width([rowHead, ...table.rows.map((row) => row.label)], 10, 40) },
       ...(hasUnit ? [{ width: 10 }] : []),

@@ -1,3 +1,4 @@
+import { strFromU8, unzipSync } from 'fflate';
 import { beforeAll, describe, expect, test } from 'vitest';
 import { printed } from '../../src/report/cells';
 import type { ReportInput } from '../../src/report/input';
@@ -111,6 +112,15 @@ describe('the spreadsheet, read by another reader', () => {
   test('keeps heads, names and units in view', () => {
     expect(sheets.find((s) => s.name === 'Stream summary')?.frozen).toEqual({ rows: 3, columns: 2 });
     expect(sheets.find((s) => s.name === 'Assumption register')?.frozen).toEqual({ rows: 2, columns: 1 });
+  });
+
+  test('prints its tables across the long side of the paper', async () => {
+    const files = unzipSync(await writeXlsx(report));
+    const pages = Object.keys(files).filter((name) => /worksheets\/sheet\d+\.xml$/.test(name));
+    const wide = pages.filter((name) =>
+      /<pageSetup[^>]*orientation="landscape"/.test(strFromU8(files[name]!)),
+    );
+    expect(wide).toHaveLength(pages.length - 1);
   });
 
   test('comes out the same byte for byte', async () => {
