@@ -1,4 +1,4 @@
-import { displayUnit, formatDecimals } from '../quantity';
+import { displayUnit, formatDecimals, plainNumber } from '../quantity';
 import type { Dimension } from '../quantity/dimension';
 import type { Sketch } from '../sketch/types';
 import { left, text } from './cells';
@@ -6,10 +6,11 @@ import { measuresOf, type ReportInput, solvedStream } from './input';
 import type { Row, Table } from './types';
 import { typedWords } from './words';
 
-const SITE: readonly (readonly [keyof Sketch['site'], string, Dimension, string])[] = [
-  ['pressure', 'Site pressure', 'pressure', '101325 Pa(a)'],
-  ['ambient', 'Ambient temperature', 'temperature', '20 °C'],
-  ['coolingWater', 'Cooling water in', 'temperature', '28 °C'],
+/** Each with what counts where the sketch says nothing [SI]. */
+const SITE: readonly (readonly [keyof Sketch['site'], string, Dimension, number])[] = [
+  ['pressure', 'Site pressure', 'pressure', 101325],
+  ['ambient', 'Ambient temperature', 'temperature', 293.15],
+  ['coolingWater', 'Cooling water in', 'temperature', 301.15],
 ];
 
 /** Feed cases, the feeds as they stand, site conditions and notes. */
@@ -24,7 +25,9 @@ export function basisTable(input: ReportInput): Table {
   for (const line of feedLines(input)) add(...line);
   for (const [key, label, dim, usual] of SITE) {
     const value = sketch.site[key];
-    add(label, value === undefined ? `${usual}, not given: used where needed` : typedWords(value, dim));
+    const unit = displayUnit(dim, measuresOf(input));
+    const shown = `${plainNumber(Number(unit.toDisplay(usual).toPrecision(6)))} ${unit.label}`;
+    add(label, value === undefined ? `${shown}, not given: used where needed` : typedWords(value, dim));
   }
   if (basis.conditions) add('Site conditions', basis.conditions);
   if (basis.notes) add('Notes', basis.notes);
