@@ -59,7 +59,7 @@ export const NETWORK_SENTENCES: Readonly<Record<string, Sentence>> = {
   },
   'model/pair-none': {
     title: 'Pair without a parameter',
-    says: 'Nothing is known of how {first} and {second} act on each other; stream {stream} holds {fraction%} of {first} and {other%} of {second}. Zero is used.',
+    says: 'Nothing is known of how {first} and {second} act on each other; stream {stream} holds {fraction%} of {first} and {other%} of {second}, {limit%} or more. Zero is used.',
     next: 'Give the pair a parameter of your own.',
   },
   'model/pair-predicted': {

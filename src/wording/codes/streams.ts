@@ -19,22 +19,22 @@ export const STREAM_SENTENCES: Readonly<Record<string, Sentence>> = {
   },
   'stream/may-freeze': {
     title: 'A component may freeze',
-    says: 'At {temperature} the liquid holds {fraction%} {chemical}, which alone freezes at {meltingPoint}.',
+    says: 'At {temperature} the liquid holds {fraction%} {chemical}, which alone freezes at {meltingPoint}; from {limit%} on this is said.',
     next: 'Check the freezing point of the mixture.',
   },
   'stream/freezes-mostly': {
     title: 'The liquid may freeze',
-    says: 'At {temperature} the liquid is {fraction%} {chemical}, which alone freezes at {meltingPoint}.',
+    says: 'At {temperature} the liquid is {fraction%} {chemical}, which alone freezes at {meltingPoint}; from {limit%} on this is said.',
     next: 'Keep the stream warmer, or check its freezing point.',
   },
   'stream/ice': {
     title: 'Ice may form',
-    says: 'The stream holds {fraction%} water at {temperature}.',
+    says: 'The stream holds {fraction%} water at {temperature}; from {limit%} on this is said.',
     next: 'Dry the stream, keep it above 0 °C, or plan for an inhibitor.',
   },
   'stream/dry-ice': {
     title: 'Dry ice may form',
-    says: 'The stream holds {fraction%} carbon dioxide at {temperature}.',
+    says: 'The stream holds {fraction%} carbon dioxide at {temperature}; from {limit%} on this is said.',
     next: 'Remove carbon dioxide, or keep the stream warmer.',
   },
   'stream/cold-steel': {
@@ -54,7 +54,7 @@ export const STREAM_SENTENCES: Readonly<Record<string, Sentence>> = {
   },
   'stream/hydrates-not-checked': {
     title: 'Hydrates not checked',
-    says: 'Wet gas with {fraction%} of hydrate formers is at {temperature} and {pressure}. Hydrates are not calculated here.',
+    says: 'Wet gas with {fraction%} of hydrate formers, more than {limit%}, is at {temperature} and {pressure}. Hydrates are not calculated here.',
     next: 'Check the hydrate temperature elsewhere.',
   },
   'stream/near-critical': {
@@ -69,7 +69,7 @@ export const STREAM_SENTENCES: Readonly<Record<string, Sentence>> = {
   },
   'stream/flammable-mixture': {
     title: 'Flammable mixture',
-    says: 'The gas holds {oxygen%} oxygen and fuel, mostly {chemical}, at {shareOfLimit%} of its lower flammability limit (25 °C, 1 atm).',
+    says: 'The gas holds {oxygen%} oxygen and fuel, mostly {chemical}, at {shareOfLimit%} of its lower flammability limit (25 °C, 1 atm); from {limit%} on this is said.',
     next: 'Take it to a hazard review.',
   },
   'stream/outside-correlation': {
@@ -79,12 +79,12 @@ export const STREAM_SENTENCES: Readonly<Record<string, Sentence>> = {
   },
   'stream/well-outside-correlation': {
     title: 'Outside a correlation',
-    says: 'At {temperature} the {property} of {chemical} is used {distance} outside its stated range.',
+    says: 'At {temperature} the {property} of {chemical} is used {distance} outside its stated range; from {limit} on this is said.',
     next: 'Compare with another source, or bring a correlation of your own.',
   },
   'stream/far-outside-correlation': {
     title: 'Far outside a correlation',
-    says: 'At {temperature} the {property} of {chemical} is used {distance} outside its stated range.',
+    says: 'At {temperature} the {property} of {chemical} is used {distance} outside its stated range; from {limit} on this is said.',
     next: 'Do not rely on this stream; bring a correlation that covers it, or choose another model.',
   },
 };

@@ -9,7 +9,7 @@ export const UNIT_SENTENCES: Readonly<Record<string, Sentence>> = {
   },
   'pressure/enters-below': {
     title: 'Flows against the pressure',
-    says: 'The stream at the {port} has {streamPressure}; inside there are {unitPressure}.',
+    says: 'The stream at the {port} has {streamPressure}; inside there are {unitPressure}, more than {limit} above it.',
     next: 'Raise the pressure of the stream, or lower the pressure of the unit.',
   },
   'temperature/not-positive': {

@@ -107,7 +107,7 @@ export const chamber: KindWords = {
     },
     'chamber/dissociation-neglected': {
       title: 'Dissociation is neglected',
-      says: 'At {temperature} carbon dioxide and water begin to come apart, which is left out here: the real flame is colder.',
+      says: 'At {temperature}, above {limit}, carbon dioxide and water begin to come apart, which is left out here: the real flame is colder.',
       next: 'Read the temperature as an upper bound.',
     },
     'chamber/little-oxygen': {

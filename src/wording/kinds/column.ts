@@ -232,12 +232,12 @@ export const column: KindWords = {
     },
     'column/pinch': {
       title: 'A pinch',
-      says: 'Stages {from} to {to} lie within 0.1 K at {temperature}: {stages} stages that do little.',
+      says: 'Stages {from} to {to} lie within 0.1 K at {temperature}: {stages} stages that do little; more than {limit} are told.',
       next: 'Take stages away, move the feed, or raise the reflux.',
     },
     'column/feed-off-stage': {
       title: 'The feed is far from its stage',
-      says: 'The {port} has {feedTemperature}, its stage {stageTemperature}.',
+      says: 'The {port} has {feedTemperature}, its stage {stageTemperature}: more than {limit} apart.',
       next: 'Heat or cool the feed, or move it to another stage.',
     },
     'column/near-critical': {
