@@ -77,6 +77,7 @@ put('N', ONE, FORCE);
 put('kN', is('1000'), FORCE);
 put('mN', is('0.001'), FORCE);
 put('dyn', is('0.00001'), FORCE);
+put('kgf', GRAVITY, FORCE);
 const pressures: [string, Ratio][] = [
   ['Pa', ONE],
   ['kPa', is('1e3')],
@@ -109,12 +110,15 @@ put('GJ', is('1e9'), ENERGY);
 put('kcal kcal(IT)', is('4186.8'), ENERGY);
 put('kcal(th)', is('4184'), ENERGY);
 put('BTU BTU(IT)', BTU, ENERGY);
+put('MMBTU', times(BTU, is('1e6')), ENERGY);
 put('Wh', is('3600'), ENERGY);
 put('kWh', is('3.6e6'), ENERGY);
 put('W', ONE, SHAPES.power);
 put('kW', is('1e3'), SHAPES.power);
 put('MW', is('1e6'), SHAPES.power);
 put('mW', is('0.001'), SHAPES.power);
+// Horsepower of 550 ft lbf/s (NIST SP 811, App. B.8: 7.456999e2 W); the metric one, 735.5 W, is another unit and not taken.
+put('hp', times(times(is('550'), FOOT), times(POUND, GRAVITY)), SHAPES.power);
 
 // Viscosity: 1 cP = 1 mPa s (NIST SP 811, App. B.8).
 put('mPa', is('0.001'), PRESSURE);
