@@ -1,5 +1,6 @@
 import type { ClosureEntry } from '../engine/network/types';
 import type { Finding } from '../engine/outcome';
+import type { ModelSpec } from '../engine/thermo/types';
 import { displayUnit } from '../quantity';
 import type { Dimension } from '../quantity/dimension';
 import type { Assumption } from '../sketch/types';
@@ -7,7 +8,7 @@ import { settingWord, weightWord } from '../wording';
 import { absent, decimalsFor, difference, left, number, right, text } from './cells';
 import { measuresOf, type ReportInput } from './input';
 import type { Row, Table } from './types';
-import { assumedWords, findingWords } from './words';
+import { assumedWords, findingWords, modelText } from './words';
 
 /** Mass, energy, chemicals and elements over the whole sketch. */
 export function closureTable(input: ReportInput): Table {
@@ -126,6 +127,14 @@ export function assumptionTable(input: ReportInput): Table {
   };
 }
 
+/** The model that the pairs belong to, and whose liquid densities are shown. */
+function modelNote(model: ModelSpec): string {
+  if (model.kind !== 'peng-robinson') return `${modelText(model)}: no pair parameters.`;
+  const density =
+    model.liquidVolume === 'corrected' ? 'corrected, for density only' : 'those of the equation';
+  return `${modelText(model)}; liquid volumes ${density}. Attraction of a pair: √(a₁ a₂) (1 − k).`;
+}
+
 export function pairTable(input: ReportInput): Table {
   const { chemicals, model } = input.basis;
   return {
@@ -143,6 +152,6 @@ export function pairTable(input: ReportInput): Table {
         ],
       }),
     ),
-    notes: [],
+    notes: [modelNote(model)],
   };
 }

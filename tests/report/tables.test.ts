@@ -195,3 +195,18 @@ test('pressures of the table keep the unit of one’s own, absolute and gauge', 
   const units = csv.split('\r\n').filter((line) => line.startsWith('Pressure,'));
   expect(units.map((line) => line.split(',')[1])).toEqual(['psi(a)', 'psi(g)']);
 });
+
+test('pairs stand under the model that they belong to', async () => {
+  expect(report.pairs.notes).toEqual([
+    'Peng–Robinson, 1976 alpha; liquid volumes corrected, for density only. Attraction of a pair: √(a₁ a₂) (1 − k).',
+  ]);
+  const changed = async (model: object): Promise<readonly string[]> =>
+    buildReport(
+      await solvedExample('let-down.sketch.json', (s) => ({ ...s, model: { ...s.model, ...model } })),
+    ).pairs.notes;
+  expect(await changed({ alpha: '1978', liquidVolume: 'cubic' })).toEqual([
+    'Peng–Robinson, 1978 alpha; liquid volumes those of the equation. Attraction of a pair: √(a₁ a₂) (1 − k).',
+  ]);
+  const [raoult] = await changed({ kind: 'raoult', pairs: [] });
+  expect(raoult).toMatch(/: no pair parameters\.$/);
+});
