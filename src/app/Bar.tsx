@@ -69,7 +69,7 @@ export function Bar({ actions }: { readonly actions: readonly Action[] }) {
         type="button"
         className="name"
         title="Title block, site and measures"
-        onClick={() => stores.session.openDrawer({ is: 'sketch' })}
+        onClick={() => stores.session.enterDrawer({ is: 'sketch' })}
       >
         {title || 'Untitled sketch'}
         {number ? <span className="muted"> {number}</span> : null}

@@ -95,7 +95,8 @@ export function Start() {
         ))}
       </div>
       <p className="muted">
-        Enter opens the framed example. Sketches stay on this computer and save themselves.
+        Enter opens the framed example. Without a mouse: F6 goes from part to part of the screen, and ? lists
+        all keys. Sketches stay on this computer and save themselves.
       </p>
     </section>
   );

@@ -169,7 +169,7 @@ export function Balance() {
             <b className={isClosed ? 'closed' : ''}>{total(sides.out)}</b>
           </div>
           <div className="closure-side">
-            {closure?.complete ? (
+            {closure?.complete && !sides.empty ? (
               <>
                 <ClosureTable closure={closure} data={data} measures={measures} />
                 <p className="muted">Closure shows arithmetic, not that the model is right.</p>

@@ -37,9 +37,22 @@ export const TitleStrip = memo(function TitleStrip() {
 
 const QUIET_MS = 900;
 
-/** What the hand is doing, while it does it. */
-const underWay = ({ dropping, moved, pulling }: SheetState): string =>
-  dropping ? `Moving: ${kindWord(dropping.kind)}` : moved ? 'Moving' : pulling ? 'Connecting' : '';
+/** What the hand is doing, while it does it; by keys, which of them count then. */
+const underWay = ({ dropping, moved, heldNotes, movingByKeys, pulling, bending }: SheetState): string => {
+  if (dropping) return `Moving: ${kindWord(dropping.kind)}, Esc leaves it`;
+  if (movingByKeys) return 'Moving: arrows move it, Enter leaves it there, Esc puts it back';
+  if (moved || heldNotes) return 'Moving, Esc leaves it';
+  if (bending?.byKeys) return 'Bending: arrows move the piece, Enter leaves it there, Esc puts it back';
+  if (pulling?.byKeys)
+    return 'Connecting: arrows choose a port, Enter connects or offers units, Esc leaves it';
+  return pulling ? 'Connecting, Esc leaves it' : '';
+};
+
+/** What is done in bold, then what goes with it. */
+function inTwo(text: string): { readonly word: string; readonly rest: string } {
+  const at = text.search(/[:,]/);
+  return { word: text.slice(0, at), rest: text.slice(at) };
+}
 
 /** Names of the chemicals of what was compiled last. */
 const chemicalOf =
@@ -65,7 +78,7 @@ function WholeState() {
   );
   const doing = useSheet(underWay);
   const { word, rest } = doing
-    ? { word: doing, rest: ', Esc leaves it' }
+    ? inTwo(doing)
     : wholeState(sketch, edit, { ...stores.results.getState(), ...results }, gaps, chemicalOf(stores));
   const solvedEdit = results.solvedEdit;
 

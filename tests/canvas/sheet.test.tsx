@@ -101,6 +101,10 @@ test('a connection can be made by keys alone: C, an arrow, Enter', () => {
   act(() => stores.session.select([unitId('u3')]));
   press(stores, 'c');
   expect(stores.session.getState().spoken).toMatch(/^Connect from V-101 liquid.*one port fits/);
+  // What the screen reader says stands on the sheet as well.
+  expect(page.querySelector('[data-strip="state"]')?.textContent).toBe(
+    'Connecting: arrows choose a port, Enter connects or offers units, Esc leaves it',
+  );
   expect(page.querySelectorAll('.target[data-fits="yes"]')).toHaveLength(1);
   expect(page.querySelectorAll('.target[data-fits="no"]').length).toBeGreaterThan(2);
   press(stores, 'ArrowDown');

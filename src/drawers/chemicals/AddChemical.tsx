@@ -9,7 +9,7 @@ import { searchBank } from './search';
 
 /** A search over the bank by name, formula or CAS number; arrows walk the answers, Enter adds one. */
 export function AddChemical() {
-  const { sketch } = useStores();
+  const { sketch, session } = useStores();
   const writable = useSketch((state) => state.writable);
   const { index } = useBank();
   const listed = useChemicals();
@@ -22,7 +22,10 @@ export function AddChemical() {
   );
   const add = (chosen: string | undefined): void => {
     if (chosen === undefined) return;
-    setWhy(run(sketch, (s) => setChemicals(s, [...s.chemicals, chosen])));
+    const refused = run(sketch, (s) => setChemicals(s, [...s.chemicals, chosen]));
+    setWhy(refused);
+    const name = found.find((entry) => entry.id === chosen)?.name;
+    if (refused === undefined && name) session.setState({ spoken: `${name} added` });
     setText('');
     setAt(0);
   };
