@@ -1,6 +1,6 @@
 import type { TitleBlock } from '../sketch/types';
 import { type Frame, ZONES_ACROSS, ZONES_DOWN } from './frame';
-import { cutText, wrapText } from './metrics';
+import { cutText, measureText, wrapText } from './metrics';
 import type { Box, PathShape, TextShape } from './types';
 
 /** Sheets of ISO 216, landscape [mm]. */
@@ -24,6 +24,8 @@ const LEAST_SCALE = 3.2;
 const LETTERS = 'ABCDEF';
 /** Cap height of Source Sans 3 over its font size [-], as the font's OS/2 table says. */
 const CAPS = 0.66;
+/** From line to line of a value in two lines, by its size [-]. */
+const LINE = 1.12;
 
 interface Cell {
   readonly caption: string;
@@ -40,6 +42,14 @@ export interface SheetFrame extends Frame {
   readonly block: Box;
   /** Sheet px for each mm of the paper. */
   readonly scale: number;
+}
+
+/** What a sheet says besides its title block's fields. */
+export interface SheetWords {
+  /** "PRELIMINARY – NOT FOR CONSTRUCTION", or nothing. */
+  readonly warning?: string;
+  /** What the drawing had no room for, or nothing; stands beside the title block. */
+  readonly leftOff?: string;
 }
 
 /** Cells of the title block, in ISO 7200's manner: who, what, which, when. */
@@ -71,12 +81,16 @@ const ruled = (d: string, width: number, stroke: PathShape['stroke']): PathShape
 
 /**
  * Border with zones and title block around a drawing, on A3 or A4 landscape: the smallest such sheet that holds it, in the
- * drawing's own px. What is too long for its cell is cut with an ellipsis.
+ * drawing's own px. What is too long for its cell is set smaller, then in two lines, then cut with an ellipsis.
  *
  * @param drawing the box of the scene
- * @param warning "PRELIMINARY – NOT FOR CONSTRUCTION", or nothing
  */
-export function sheetFrame(drawing: Box, paper: SheetPaper, title: TitleBlock, warning = ''): SheetFrame {
+export function sheetFrame(
+  drawing: Box,
+  paper: SheetPaper,
+  title: TitleBlock,
+  { warning = '', leftOff = '' }: SheetWords = {},
+): SheetFrame {
   const { w: W, h: H } = PAPERS[paper];
   const off = MM.edge + MM.border;
   const room = {
@@ -115,15 +129,53 @@ export function sheetFrame(drawing: Box, paper: SheetPaper, title: TitleBlock, w
       ruled(rectangle(inner), 2 * thin, 'ink'),
       ruled(rectangle(block), 2 * thin, 'ink'),
     ],
-    texts: [...zones.texts, ...cells.flatMap(({ cell, box }) => cellTexts(cell, box, scale))],
+    texts: [
+      ...zones.texts,
+      ...cells.flatMap(({ cell, box }) => cellTexts(cell, box, scale)),
+      ...(leftOff === '' ? [] : [beside(leftOff, inner, block, scale)]),
+    ],
   };
+}
+
+/** At the foot of the sheet, left of the title block. */
+function beside(words: string, inner: Box, block: Box, scale: number): TextShape {
+  const size = MM.value * scale;
+  const inset = 2 * MM.inset * scale;
+  return {
+    at: [inner.x + inset, inner.y + inner.h - inset],
+    text: cutText(words, block.x - inner.x - 2 * inset, size, 400),
+    size,
+    weight: 400,
+    anchor: 'start',
+    ink: 'ink3',
+  };
+}
+
+/** Sizes in which a value is tried, by the size of its cell [-]. */
+const SMALLER = [1, 0.85, 0.7] as const;
+
+/** A value in the largest size in which it fits its cell: in one line, in as many as there is height for, or cut at last. */
+function valueIn(
+  value: string,
+  room: { readonly w: number; readonly h: number },
+  full: number,
+): { readonly rows: readonly string[]; readonly size: number } {
+  for (const share of SMALLER) {
+    const size = full * share;
+    const rows = wrapText(value, room.w, size, 600);
+    const whole = rows.every((row) => measureText(row, size, 600) <= room.w);
+    if (whole && rows.length <= Math.max(1, Math.floor(room.h / (size * LINE)))) return { rows, size };
+  }
+  const size = full * SMALLER[SMALLER.length - 1]!;
+  const most = Math.max(1, Math.floor(room.h / (size * LINE)));
+  const wrapped = wrapText(value, room.w, size, 600);
+  const rest = wrapped.slice(most - 1).join(' ');
+  return { rows: [...wrapped.slice(0, most - 1), cutText(rest, room.w, size, 600)], size };
 }
 
 function cellTexts({ caption, value, large }: Cell, box: Box, scale: number): readonly TextShape[] {
   const inset = MM.inset * scale;
-  const size = (large ? MM.title : MM.value) * scale;
   const small = MM.caption * scale;
-  const room = box.w - 2 * inset;
   const head: TextShape = {
     at: [box.x + inset, box.y + 0.8 * scale + small * CAPS],
     text: caption,
@@ -132,17 +184,16 @@ function cellTexts({ caption, value, large }: Cell, box: Box, scale: number): re
     anchor: 'start',
     ink: 'ink3',
   };
-  const wrapped = value === '' ? [] : wrapText(value, room, size, 600);
-  const most = large ? 2 : 1;
-  const rows = wrapped.slice(0, most);
-  // What does not fit is cut where the last line ends.
-  if (wrapped.length > most) rows[most - 1] = cutText(`${rows[most - 1]} ${wrapped[most]}`, room, size, 600);
-  const bottom = box.y + box.h - 1.2 * scale;
+  if (value === '') return [head];
+  const under = (0.8 + MM.caption * CAPS + 0.5) * scale;
+  const room = { w: box.w - 2 * inset, h: box.h - under - 0.6 * scale };
+  const { rows, size } = valueIn(value, room, (large ? MM.title : MM.value) * scale);
+  const bottom = box.y + box.h - (rows.length > 1 && !large ? 0.8 : 1.2) * scale;
   return [
     head,
     ...rows.map(
       (text, k): TextShape => ({
-        at: [box.x + inset, bottom - (rows.length - 1 - k) * size * 1.2],
+        at: [box.x + inset, bottom - (rows.length - 1 - k) * size * LINE],
         text,
         size,
         weight: 600,

@@ -3,10 +3,11 @@ import { type FontWeight, measureText } from '../drawing/metrics';
 import { sheetFrame } from '../drawing/sheetFrame';
 import { sceneToSvg } from '../drawing/svg';
 import { FONT, PRINT } from '../drawing/tokens';
+import type { Scene } from '../drawing/types';
 import { printedTitle } from '../sketch/revision';
 import type { ReportInput } from './input';
 import { warningOf } from './model';
-import { reportScene } from './sheet';
+import { leftOffPaper, paperScene } from './sheet';
 
 /** The faces of the shipped font as TrueType files. */
 export interface FontFiles {
@@ -18,12 +19,16 @@ export interface FontFiles {
 /** Where the shipped font is not known by its own name, it may be by its usual one; else any plain one will do. */
 const FAMILIES = `${FONT}, 'Source Sans 3', sans-serif`;
 
+const PT_PER_MM = 72 / 25.4;
+
 /** The drawing alone as SVG on white paper, in its frame with title block, with the clean answer's numbers. */
 function drawing(input: ReportInput): string {
-  const { documents } = input.sketch;
   const title = printedTitle(input.sketch);
-  const scene = reportScene(input);
-  const frame = sheetFrame(scene.box, documents?.paper ?? 'A3', title, warningOf(title.purpose));
+  const paper = input.sketch.documents?.paper ?? 'A3';
+  const framed = (scene: Scene) =>
+    sheetFrame(scene.box, paper, title, { warning: warningOf(title.purpose), leftOff: leftOffPaper(scene) });
+  const scene = paperScene(input, (plain) => PT_PER_MM / framed(plain).scale);
+  const frame = framed(scene);
   return sceneToSvg(scene, PRINT, { ground: true, frame });
 }
 

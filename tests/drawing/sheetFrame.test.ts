@@ -46,7 +46,7 @@ describe.each(['A3', 'A4'] as const)('the sheet on %s', (paper) => {
   test.each(boxes)(
     'holds a drawing of $w x $h above its title block, in the shape of the paper',
     (drawing) => {
-      const frame = sheetFrame(drawing, paper, TITLE, WARNING);
+      const frame = sheetFrame(drawing, paper, TITLE, { warning: WARNING });
       // ISO 216: 420 x 297 mm and 297 x 210 mm
       expect(frame.page.w / frame.page.h).toBeCloseTo(paper === 'A3' ? 420 / 297 : 297 / 210, 9);
       expect(inside(drawing, frame.drawing)).toBe(true);
@@ -61,7 +61,7 @@ describe.each(['A3', 'A4'] as const)('the sheet on %s', (paper) => {
     ['long', LONG],
     ['empty', {}],
   ])('has %s texts that stay in the sheet and lie on nothing', (_name, title) => {
-    const frame = sheetFrame(boxes[0]!, paper, title, WARNING);
+    const frame = sheetFrame(boxes[0]!, paper, title, { warning: WARNING });
     const texts = frame.texts.map(boxOf);
     texts.forEach((box, k) => {
       expect(inside(box, frame.page), frame.texts[k]!.text).toBe(true);
@@ -70,9 +70,33 @@ describe.each(['A3', 'A4'] as const)('the sheet on %s', (paper) => {
   });
 
   test('cuts what is too long for its cell', () => {
-    const { texts } = sheetFrame(boxes[0]!, paper, LONG, WARNING);
-    expect(texts.filter((t) => t.text.endsWith('…'))).toHaveLength(Object.keys(LONG).length);
+    const { texts } = sheetFrame(boxes[0]!, paper, LONG, { warning: WARNING });
+    // The title's cell has the height for all of it.
+    expect(texts.filter((t) => t.text.endsWith('…'))).toHaveLength(Object.keys(LONG).length - 1);
     expect(texts.map((t) => t.text)).toContain(WARNING);
+  });
+
+  test('sets an entry of usual length smaller, or in two lines, rather than cutting it', () => {
+    const title = {
+      project: 'Condensate stabilisation, second study for the review in spring',
+      number: 'SK-100-01-0004-REV-STUDY',
+      title:
+        'Light-hydrocarbon train: stabiliser, depropaniser and debutaniser with off-gas to the combustion chamber',
+      author: 'A. Verylongname-Example, process',
+      purpose: 'For comment and design review',
+    };
+    const { texts } = sheetFrame(boxes[0]!, paper, title, { warning: WARNING });
+    const words = texts.map((t) => t.text).join(' ');
+    for (const value of Object.values(title)) expect(words).toContain(value);
+    expect(words).not.toContain('…');
+  });
+
+  test('says beside the title block what the drawing had no room for', () => {
+    const frame = sheetFrame(boxes[0]!, paper, TITLE, { leftOff: '3 labels have no room here' });
+    const text = frame.texts.find((t) => t.text.startsWith('3 labels'))!;
+    expect(inside(boxOf(text), frame.inner)).toBe(true);
+    expect(overlaps(boxOf(text), frame.block)).toBe(false);
+    expect(overlaps(boxOf(text), frame.drawing)).toBe(false);
   });
 
   test('names zones 1 to 8 and A to F at both edges', () => {
@@ -88,7 +112,7 @@ test('a small drawing is not blown up: the sheet is larger instead', () => {
 
 test('frames the scene as SVG', () => {
   const scene = buildScene(RECYCLE, inputOf(RECYCLE));
-  const frame = sheetFrame(scene.box, 'A4', TITLE, WARNING);
+  const frame = sheetFrame(scene.box, 'A4', TITLE, { warning: WARNING });
   const svg = sceneToSvg(scene, undefined, { frame });
   expect(svg).toContain('SK-100-01');
   expect(svg).toContain(WARNING);

@@ -1,9 +1,13 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { afterEach, beforeAll, describe, expect, test, vi } from 'vitest';
+import { solveSketch } from '../../src/cli/run';
 import { makeDocument } from '../../src/documents/make';
 import { glyphOf, needed, tablesOf } from '../../src/drawing/trueType';
 import type { ReportInput } from '../../src/report/input';
 import { type FontFiles, selfContained, sheetSvg, sheetSvgFile } from '../../src/report/picture';
+import { paperScene } from '../../src/report/sheet';
+import type { Sketch } from '../../src/sketch/types';
+import { generatedSketch } from './generated';
 import { FONTS } from './readPdf';
 import { EXAMPLES, solvedExample } from './solved';
 
@@ -146,5 +150,40 @@ describe('the order of a drawing in the worker', () => {
     const { bytes, type } = await makeDocument({ what: 'svg', input, fonts: 'shipped' }, () => undefined);
     expect(type).toBe('image/svg+xml');
     expect(new TextDecoder().decode(bytes)).toBe(sheetSvgFile(input, FILES));
+  });
+});
+
+describe('lettering on paper', () => {
+  const PT_PER_MM = 72 / 25.4;
+  const onA4 = (sketch: Sketch): Sketch => ({ ...sketch, documents: { ...sketch.documents, paper: 'A4' } });
+  /** Size in which the numbers of labels come out on an A4 sheet [pt]. */
+  const lettering = (input: ReportInput): { readonly pt: number; readonly svg: string } => {
+    const svg = sheetSvg(input);
+    const [, , width] = /viewBox="[-\d.]+ ([-\d.]+) ([\d.]+) [\d.]+"/.exec(svg) ?? [];
+    const [before = '', after = ''] = svg.split('>185.0</text>');
+    const label = Number(/font-size="([\d.]+)"[^>]*$/.exec(before)?.[1]);
+    // The group that the label stands in may be drawn larger.
+    const grown = Number(/.* scale\(([\d.]+)\)/s.exec(before)?.[1] ?? 1);
+    expect(after).not.toBe('');
+    return { pt: ((label * grown) / Number(width)) * 297 * PT_PER_MM, svg };
+  };
+
+  test('of a wide train on A4 is set larger until it is read', async () => {
+    // ISO 216: A4 is 297 mm wide.
+    const { pt, svg } = lettering(await solvedExample('aromatic-condensate.sketch.json', onA4));
+    expect(pt).toBeGreaterThan(5.7);
+    expect(pt).toBeLessThan(8);
+    // Every stream keeps its number, whatever has room besides.
+    for (let k = 1; k <= 20; k++) expect(svg).toMatch(new RegExp(`>${k}</text>`));
+  });
+
+  test('with more streams than have room for labels, says on the sheet how many are left off', async () => {
+    const sketch = onA4(await generatedSketch({ streams: 80, chemicals: 4 }));
+    const { input } = await solveSketch(sketch);
+    const svg = sheetSvg(input);
+    const drawn = [...svg.matchAll(/>kmol\/h<\/text>/g)].length;
+    const left = Number(/>(\d+) labels?\b[^<]* no room here: see the stream summary\.</.exec(svg)?.[1] ?? 0);
+    expect(drawn + left).toBe(80);
+    expect(left).toBe(paperScene(input, () => 0.26).omitted.filter((o) => o.what === 'label').length);
   });
 });

@@ -7,7 +7,7 @@ import { isShown, type SectionKey } from '../sections';
 import type { ReportModel, Table } from '../types';
 import { columnPages } from './columns';
 import { entriesOf } from './contents';
-import { contentsPage, drawing, firstPageFoot } from './front';
+import { contentsPage, firstPage } from './front';
 import { PAPERS, type Paper } from './paper';
 import { streamPages } from './streams';
 import { type Destinations, type TableStyle, titledList, titledTable, type Width } from './tables';
@@ -110,7 +110,7 @@ export function sheetDocument(report: ReportModel, input: ReportInput): TDocumen
   const paper = paperOf(input);
   return {
     ...around(report, input, 'Process flow diagram'),
-    content: [drawing(input, paper), firstPageFoot(report, input, paper)],
+    content: firstPage(report, input, paper),
   };
 }
 
@@ -130,7 +130,7 @@ export function pdfDocument(report: ReportModel, input: ReportInput): TDocumentD
     titledTable(of, style(...styled));
   const w = (points: number): number => (paper.name === 'A3' ? points : 0.72 * points);
   const share = (of: number): Width => ({ share: of });
-  const sheet = part('sheet', () => [drawing(input, paper), firstPageFoot(report, input, paper)]);
+  const sheet = part('sheet', () => firstPage(report, input, paper));
   const sections: Content[] = [
     table(report.revisions, 'Revision', 60, w(80), share(1), w(110), w(110), w(110)),
     ...part('basis', () => [

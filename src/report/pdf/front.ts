@@ -2,10 +2,11 @@ import type { Content, TableCell } from 'pdfmake/interfaces';
 import { limitMark } from '../../drawing/marks';
 import { pathToSvg, sceneToSvg } from '../../drawing/svg';
 import { FONT, PRINT } from '../../drawing/tokens';
+import type { Scene } from '../../drawing/types';
 import type { Weight } from '../../engine/outcome';
 import { printed } from '../cells';
 import type { ReportInput } from '../input';
-import { reportScene } from '../sheet';
+import { leftOffPaper, paperScene } from '../sheet';
 import type { ReportModel } from '../types';
 import { anchor, contentsTable, type Entry } from './contents';
 import { LINE, type Paper } from './paper';
@@ -14,11 +15,21 @@ import { fitted, wrapped } from './wrap';
 /** Limits named under the drawing, worst first; all of them stand in their own table. */
 const LIMITS_SHOWN = 6;
 
-/** The drawing in the middle of its room, never above its own size times 1.25. */
-export function drawing(input: ReportInput, paper: Paper): Content {
-  const scene = reportScene(input);
+/** How large the drawing comes out on the first page [pt of the paper for each px]; never above its own size times 1.25. */
+const scaleOn =
+  (paper: Paper) =>
+  ({ box }: Scene): number =>
+    Math.min(paper.inner.w / (box.w + 16), paper.sheet / (box.h + 16), 1.25);
+
+/** First page: the drawing in the middle of its room, and below it key, limits, closure and title block. */
+export function firstPage(report: ReportModel, input: ReportInput, paper: Paper): Content[] {
+  const scene = paperScene(input, scaleOn(paper));
+  return [drawing(scene, paper), foot(report, input, paper, leftOffPaper(scene))];
+}
+
+function drawing(scene: Scene, paper: Paper): Content {
   const [w, h] = [scene.box.w + 16, scene.box.h + 16];
-  const scale = Math.min(paper.inner.w / w, paper.sheet / h, 1.25);
+  const scale = scaleOn(paper)(scene);
   const above = Math.max(0, (paper.sheet - h * scale) / 2);
   return {
     stack: [
@@ -62,8 +73,8 @@ function keySvg(): string {
   return `<svg xmlns="http://www.w3.org/2000/svg" width="250" height="${height}" viewBox="0 0 250 ${height}">${rows.join('')}</svg>`;
 }
 
-/** Key, limits, closure and title block under the drawing: each in its own room, nothing runs over. */
-export function firstPageFoot(report: ReportModel, input: ReportInput, paper: Paper): Content {
+/** Each in its own room, nothing runs over. */
+function foot(report: ReportModel, input: ReportInput, paper: Paper, leftOff: string): Content {
   const scale = paper.name === 'A3' ? 1 : 0.72;
   const size = paper.name === 'A3' ? 8.5 : 6.6;
   const widths = [262, 318, 232, 322].map((w) => (w * (paper.inner.w - 36)) / 1134);
@@ -119,7 +130,12 @@ export function firstPageFoot(report: ReportModel, input: ReportInput, paper: Pa
               ),
             ],
           },
-          { stack: [head('Closure'), ...lines(closureLines(report, input), widths[2] ?? 0, most)] },
+          {
+            stack: [
+              head('Closure'),
+              ...lines([...closureLines(report, input), ...(leftOff ? [leftOff] : [])], widths[2] ?? 0, most),
+            ],
+          },
           titleBlock(report, widths[3] ?? 0, scale),
         ],
       ],
@@ -174,23 +190,29 @@ function requirementLine({ requirements }: ReportModel): string[] {
 function titleBlock(report: ReportModel, width: number, scale: number): TableCell {
   const entry = (label: string): string => report.title.find((t) => t.label === label)?.text ?? '';
   const quarter = width / 4;
-  const block = (label: string, span = 1): TableCell => ({
-    stack: [
-      { text: label, fontSize: 7 * scale, color: PRINT.ink3 },
-      {
-        text: fitted(entry(label) || '–', quarter * span - 10, 9.5 * scale, 1, label === 'Title' ? 600 : 400),
-        fontSize: 9.5 * scale,
-        bold: label === 'Title',
-      },
-    ],
-    colSpan: span,
-  });
+  const block = (label: string, span = 1): TableCell => {
+    const weight = label === 'Title' ? 600 : 400;
+    const { text, size } = inRoom(entry(label) || '–', quarter * span - 10, weight);
+    return {
+      stack: [
+        { text: label, fontSize: 7 * scale, color: PRINT.ink3 },
+        { text, fontSize: size * scale, bold: weight === 600 },
+      ],
+      colSpan: span,
+    };
+  };
+  /** A title block is read to its end: the letters are smaller where that is enough, else there are two lines. */
+  function inRoom(words: string, room: number, weight: 400 | 600): { text: string; size: number } {
+    const oneLine = [9.5, 8.5, 7.5].find((size) => fitted(words, room, size * scale, 1, weight) === words);
+    const size = oneLine ?? 7;
+    return { text: fitted(words, room, size * scale, 2, weight), size };
+  }
   return {
     table: {
       widths: [1, 2, 3, 4].map(() => quarter - 8.2),
       body: [
         [block('Project', 2), {}, block('Area', 2), {}],
-        [block('Title', 3), {}, {}, block('Sheet number')],
+        [block('Title', 2), {}, block('Sheet number', 2), {}],
         [block('Author'), block('Checked'), block('Approved'), block('Date')],
         [block('Purpose', 3), {}, {}, block('Revision')],
       ],
