@@ -1,13 +1,14 @@
 import { addProduct, factorBlock, solveBlock } from '../numerics/blockTridiagonal';
 import { type StageSystem, T_SCALE_K } from './system';
 
-/** A change of the unknowns, or a right-hand side: by place and chemical, by place, by parameter. */
+/** A change of the unknowns, or a right-hand side: l and v by place and chemical (place * n + chemical), T by place. */
 export interface Change {
   readonly l: Float64Array;
   readonly v: Float64Array;
   readonly T: Float64Array;
 }
 
+/** A change of all unknowns of a system, all zero. */
 export const makeChange = (s: StageSystem): Change => ({
   l: new Float64Array(s.l.length),
   v: new Float64Array(s.v.length),

@@ -240,7 +240,10 @@ interface Rough {
   readonly m: number;
 }
 
-/** Reflux ratio from what is fixed, or from how sharp the split must be (Gilliland's correlation, minimum taken as 1). */
+/**
+ * Reflux ratio [-] from what is fixed, or from how sharp the split must be: Gilliland's correlation (1940) in the form of
+ * Eduljee (1975), Y = 0.75 (1 - X^0.5668), with the least reflux ratio taken as 1.
+ */
 function refluxRatioFrom(fixed: readonly Fixing[], top: number | undefined, r: Rough): number | undefined {
   for (const x of fixed) if (x.fix === 'refluxRatio') return x.value;
   if (top === undefined) return undefined;

@@ -13,6 +13,10 @@ export interface Wanted {
   readonly values: Float64Array;
 }
 
+/**
+ * How a search ended; `residual` is the largest scaled one [-]. 'stuck': steps are cut to almost nothing; 'iterations': too
+ * many.
+ */
 export type NewtonEnd =
   | { readonly end: 'solved'; readonly residual: number; readonly iterations: number }
   | {
@@ -21,6 +25,7 @@ export type NewtonEnd =
       readonly iterations: number;
     };
 
+/** Most steps, and what may be done on the way. */
 export interface NewtonOptions {
   readonly iterations: number;
   /** Bubble-point resets while temperatures jump. */
@@ -172,8 +177,8 @@ export class Newton {
   }
 
   /**
-   * Change of the only target's measure with the logarithm of the only free parameter, at the factors used last; undefined with another
-   * number of them.
+   * Change of the only target's measure with the logarithm of the only free parameter, at the factors used last; undefined
+   * with another number of them.
    */
   slope(wanted: Wanted): number | undefined {
     return wanted.free.length === 1 ? this.schur[0] : undefined;

@@ -7,6 +7,7 @@ export interface SimpleK {
   readonly P_Pa: number;
 }
 
+/** Simple K-values through the model's start values at T1 and T2 [K], at the pressure of the middle place. */
 export function simpleK(s: StageSystem, T1: number, T2: number): SimpleK {
   const { n, model, task } = s;
   const P_Pa = task.P_Pa[Math.floor(s.places / 2)]!;

@@ -10,6 +10,7 @@ import { naturalOf, targetOf } from './targets';
 import type { Attempt, ColumnState, ColumnTask, Effort } from './types';
 import { type ColumnWork, workFor } from './work';
 
+/** The system at its answer, or why none was found. */
 export type ColumnEnd =
   | {
       readonly state: 'solved';

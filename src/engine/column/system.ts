@@ -361,6 +361,7 @@ export class StageSystem {
   }
 }
 
+/** The largest scaled residual [-], the place that has it, and which of the place's equations it belongs to. */
 export interface Worst {
   readonly value: number;
   readonly place: number;

@@ -102,6 +102,7 @@ function ratioTarget(
 export const weightsOf = (s: StageSystem, basis: 'mole' | 'mass'): Float64Array =>
   Float64Array.from(s.model.chemicals, (c) => (basis === 'mole' ? 1 : c.MW_g_mol * 1e-3));
 
+/** The flow of a product as a target, in its own basis. */
 export const flowTarget = (s: StageSystem, product: ColumnProduct, flow: AmountOf): Target =>
   sumTarget(productFlow(s, product), weightsOf(s, flow.basis), flow.value);
 

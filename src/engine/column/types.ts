@@ -23,6 +23,7 @@ export interface ColumnTask {
   readonly fixed: readonly Fixing[];
 }
 
+/** A feed: its place, mol/s over the model's chemicals, and its enthalpy flow [W] with all it brings, both phases together. */
 export interface ColumnFeed {
   readonly place: number;
   readonly n_mol_s: Float64Array;
@@ -34,6 +35,7 @@ export interface ColumnFeed {
   readonly y?: Float64Array;
 }
 
+/** A side draw: the place and the phase it is drawn from. */
 export interface ColumnDraw {
   readonly place: number;
   readonly phase: 'liquid' | 'vapour';
@@ -49,6 +51,10 @@ export interface AmountOf {
 /** 'top': the distillate, or the top vapour where there is no condenser; a number: that side draw. */
 export type ColumnProduct = 'top' | 'bottoms' | number;
 
+/**
+ * One quantity that is fixed. Reflux ratio: reflux by distillate, boilup: vapour by bottoms, both molar [-]; temperature [K];
+ * duty [W], into the column positive; `chemical` is a place in the model's list.
+ */
 export type Fixing =
   | { readonly fix: 'refluxRatio'; readonly value: number }
   | { readonly fix: 'boilup'; readonly value: number }

@@ -4,6 +4,7 @@ import { differences, EQUAL, evaluateBoth, fillHessian, moveFlows, NEARLY_EQUAL 
 import { type Caloric, closeEnough, LEAST_T_K, MOST_T_K } from './whole';
 import type { FlashWork } from './work';
 
+/** How the search ended: at the answer; a phase vanishes or the temperature leaves the range searched; without an answer. */
 export type CaloricEnd = 'equal' | 'outside' | 'going';
 
 /** Largest change of temperature in one step [-]. */

@@ -8,6 +8,7 @@ const T_K = 298.15;
 /** High enough for every chemical to be as dense as a liquid. */
 const P_Pa = 5e7;
 
+/** Chemicals of a model that matter for a second liquid, found once a model. */
 export interface Candidates {
   /** Indices into the model's chemicals, ascending. */
   readonly formers: Int32Array;

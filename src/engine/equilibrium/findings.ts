@@ -9,4 +9,5 @@ export const EQUILIBRIUM_FINDINGS = [
   'equilibrium/no-entropy',
   'equilibrium/not-a-state',
 ] as const;
+
 export type EquilibriumCode = (typeof EQUILIBRIUM_FINDINGS)[number];

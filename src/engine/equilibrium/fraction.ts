@@ -4,6 +4,8 @@ import type { FlashWork } from './work';
 
 /** Which of temperature and pressure is sought. */
 export type Sought = 'T' | 'P';
+
+/** How the search ended: at equal fugacities; with both phases one; without an answer. */
 export type FractionEnd = 'equal' | 'trivial' | 'going';
 
 const EQUAL = 1e-11;

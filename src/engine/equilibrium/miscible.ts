@@ -1,7 +1,10 @@
 import type { ThermoModel } from '../thermo/types';
 import { lnGammasApart } from './candidates';
 
-/** Activity coefficients are those of pure solvents at a high pressure; the logarithm of each is taken this many times too large. */
+/**
+ * Activity coefficients are those of pure solvents at a high pressure; the logarithm of each is taken this many times too
+ * large.
+ */
 const MARGIN = 1.5;
 /** -ln of an activity of a tenth: no liquid rich in such a chemical is near. */
 const FAR = 2.3;

@@ -1,6 +1,7 @@
 import type { PhaseProps, ThermoModel } from '../thermo/types';
 import type { PhaseKind } from './types';
 
+/** What a phase is called, and as what it counts. */
 export interface PhaseName {
   readonly kind: PhaseKind;
   /** The name follows the rule only: the model itself does not tell vapour from liquid here. */

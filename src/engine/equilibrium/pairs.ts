@@ -7,6 +7,7 @@ import { flashFraction } from './vf';
 import { type Caloric, closeEnough, rounding, wholeOf } from './whole';
 import type { FlashWork } from './work';
 
+/** How a search for a state by two conditions ended. */
 export type PairEnd = 'solved' | 'no-convergence' | 'no-such-state';
 
 /** Pressures that are searched [Pa]. */

@@ -10,6 +10,7 @@ import { flashTP, provedSplit, type StartK } from './tp';
 import { type Caloric, closeEnough, LEAST_T_K, MOST_T_K, rounding, wholeOf } from './whole';
 import type { FlashWork } from './work';
 
+/** How a search for a temperature ended. 'between-states': enthalpy or entropy jumps over what was asked. */
 export type SearchEnd = 'solved' | 'no-convergence' | 'out-of-range' | 'between-states';
 
 /** Relative width of a temperature bracket below which enthalpy is taken to jump. */

@@ -14,6 +14,7 @@ const LARGEST_LNK = 600;
 /** No flow loses more than this share of itself in one step. */
 const CUT = 0.95;
 
+/** How the search ended: at equal fugacities; without an answer; with both phases one; with the feed a single phase. */
 export type SplitEnd = 'equal' | 'going' | 'trivial' | 'outside';
 
 /** Flows, fractions and totals of both phases from w.K at vapour fraction beta. */
@@ -36,11 +37,13 @@ export function placeFlows(w: FlashWork, z: Float64Array, beta: number): void {
   fractions(liq, n);
 }
 
+/** Mole fractions of a phase from its flows, the first n of them. */
 export function fractions(phase: Slot, n: number): void {
   const scale = 1 / phase.total;
   for (let i = 0; i < n; i++) phase.x[i] = phase.flow[i]! * scale;
 }
 
+/** Properties of both phases as placed, at T [K] and P [Pa]. */
 export function evaluateBoth(w: FlashWork, T: number, P: number, level: 0 | 1 | 2): void {
   const { model, vap, liq } = w;
   model.evaluate(vap.side, T, P, vap.x, level, vap.props);

@@ -6,6 +6,7 @@ import { flashTP } from './tp';
 import { LEAST_T_K, MOST_T_K } from './whole';
 import type { FlashWork } from './work';
 
+/** How a search for a vapour fraction ended. */
 export type FractionSearch = 'solved' | 'no-convergence' | 'no-such-state' | 'out-of-range';
 
 /** Steps from the thin end of the usual range to its dense end. */
@@ -18,13 +19,14 @@ const JUMP = 1e-12;
 type FractionAt = (u: number) => number | undefined;
 
 /**
- * The slow, sure way to a vapour fraction: flashes at given T and P from the thin side to the dense one, until the
- * vapour fraction passes the wanted value; then halves, then Newton. Where the fraction jumps because a second liquid
- * comes or goes, the state is part of those on both sides.
+ * The slow, sure way to a vapour fraction: flashes at given T and P from the thin side to the dense one, until the vapour
+ * fraction passes the wanted value; then halves, then Newton. Where the fraction jumps because a second liquid comes or goes,
+ * the state is part of those on both sides.
  *
  * @param centre  where the start values have the fraction
  * @param stands  whether what Newton left in the workspace is an answer
- * @returns 'no-convergence' where the fraction jumps and two liquids do not explain it (three may); 'out-of-range' when the state lies beyond the coldest temperature or the least pressure
+ * @returns  'no-convergence' where the fraction jumps and two liquids do not explain it (three may); 'out-of-range' when the
+ *           state lies beyond the coldest temperature or the least pressure
  */
 export function searchFraction(
   w: FlashWork,

@@ -23,6 +23,7 @@ export interface FlashPhase {
   readonly byConvention?: true;
 }
 
+/** The state that a flash found, over the present chemicals. */
 export interface FlashAnswer {
   readonly T_K: number;
   readonly P_Pa: number;

@@ -3,6 +3,7 @@ import type { FlashWork } from './work';
 /** What fixes a state besides temperature or pressure: molar enthalpy or molar entropy. */
 export type Caloric = 'h' | 's';
 
+/** Temperatures that are searched [K]. */
 export const LEAST_T_K = 20;
 export const MOST_T_K = 4000;
 

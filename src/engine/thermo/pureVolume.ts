@@ -16,9 +16,9 @@ export interface PureVolume {
 }
 
 /**
- * Volume of one chemical as (part of) a liquid at any T [m3/mol]: the modified Rackett equation up to Tr 0.9 with
- * the constant of pure/volumeConstant.ts, beyond that with the value and slope of Tr 0.9 towards a limit reached within a few tenths of Tc, which serves dissolved
- * gases; without critical constants the stated density; without that 800 kg/m3.
+ * Volume of one chemical as (part of) a liquid at any T [m3/mol]: the modified Rackett equation up to Tr 0.9 with the constant
+ * of pure/volumeConstant.ts, beyond that with the value and slope of Tr 0.9 towards a limit reached within a few tenths of Tc,
+ * which serves dissolved gases; without critical constants the stated density; without that 800 kg/m3.
  */
 export function pureVolume(pure: PureChemical): PureVolume {
   const { chemical } = pure;

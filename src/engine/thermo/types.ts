@@ -7,6 +7,7 @@ export const T0_K = 298.15;
 /** Reference pressure of standard entropies [Pa]. */
 export const P0_Pa = 1e5;
 
+/** Where a parameter comes from: the sketch, the bank's table, group contributions, or nowhere (0 is used). */
 export type PairOrigin = 'given' | 'fitted' | 'predicted' | 'none';
 
 /** One binary parameter of a cubic equation, with where it comes from. i < j index the basis' chemicals. */
@@ -69,7 +70,10 @@ export interface PhaseProps {
   /** Molar heat capacity at constant volume [J/(mol K)]; undefined where the phase has no volume that counts; level 2. */
   cv_J_molK?: number | undefined;
   Z: number;
-  /** Which side was evaluated in the end. With a single real root: the side that was asked, or for 'stable' by volume against 'pseudo-critical'. */
+  /**
+   * Which side was evaluated in the end. With a single real root: the side that was asked, or for 'stable' by volume against
+   * 'pseudo-critical'.
+   */
   side: 'vapour' | 'liquid';
   /** True when an equation of state had one real root only (vapour and liquid coincide). */
   single: boolean;

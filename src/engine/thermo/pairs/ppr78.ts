@@ -25,6 +25,7 @@ export type GroupTable = ReadonlyMap<string, GroupInteraction>;
 
 const key = (k: string, l: string): string => (k < l ? `${k}|${l}` : `${l}|${k}`);
 
+/** The table of group interactions, to be looked up in either order. */
 export function makeGroupTable(rows: readonly GroupInteraction[]): GroupTable {
   return new Map(rows.map((row) => [key(row.a, row.b), row]));
 }

@@ -23,8 +23,10 @@ export interface PairChoice {
   readonly pairs: readonly { readonly i: string; readonly j: string; readonly kij: number }[];
 }
 
+/** Key of a pair of ids or CAS numbers, the same in either order. */
 export const pairKey = (a: string, b: string): string => (a < b ? `${a}|${b}` : `${b}|${a}`);
 
+/** Fitted constants by the CAS numbers of both chemicals. */
 export function fittedTable(rows: readonly FittedPair[]): ReadonlyMap<string, FittedPair> {
   return new Map(rows.map((row) => [pairKey(row.cas[0], row.cas[1]), row]));
 }

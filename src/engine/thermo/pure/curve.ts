@@ -8,6 +8,7 @@
 import type { Corr } from '../../chemicals/types';
 import { type Form, makeForm } from './forms';
 
+/** A property over temperature. */
 export interface Curve {
   /** Value [SI] at T [K] > 0. */
   at(T: number): number;
@@ -15,6 +16,7 @@ export interface Curve {
   slope(T: number): number;
 }
 
+/** A property over temperature by its logarithm. */
 export interface LogCurve {
   /** ln of the value in SI. */
   ln(T: number): number;

@@ -70,6 +70,7 @@ const MOST: Readonly<Record<CorrProperty, number>> = {
   surface_tension: 1e3,
 };
 
+/** Why rows of a correlation cannot be used. */
 export interface CorrFault {
   /**
    * 'form': not one for this property; 'coefficients': too few, not finite, or a critical constant not positive;
