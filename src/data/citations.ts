@@ -42,7 +42,7 @@ export const CITATIONS: Readonly<Record<string, string>> = {
   'est-diff':
     'Estimate: ideal-gas Cp by difference of similar molecules; scheme in the note; 3 to 7 % near 298 K, less when hot',
   'est-Benson':
-    'Estimate: group heat capacities after Benson, Thermochemical Kinetics, 2nd ed., Wiley 1976, from memory; unverified',
+    'Estimate: group heat capacities after Benson, Thermochemical Kinetics, 2nd ed., Wiley 1976; not checked against the printed table',
   'est-CSP':
     "Estimate: liquid Cp by corresponding states (Rowlinson & Bondi, in Poling, Prausnitz & O'Connell, 5th ed., eq. 6-6.4)",
   'est-CSP+CRC':
