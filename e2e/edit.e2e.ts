@@ -29,6 +29,17 @@ test('the train is arranged, a unit turned and mirrored, units lined up, a bend 
   await expect(undoWord(page)).toHaveText('Undo arrange all', { timeout: 40_000 });
   expect(await drawing(page)).not.toBe(before);
 
+  // What is put elsewhere by hand stays there, the others find their places around it.
+  const drum = page.locator('.react-flow__node', { has: unit(page, 'V-101') });
+  const [x, y] = await middleOf(unit(page, 'V-101'));
+  await drag(page, [x, y], [x + 40, y + 80]);
+  await expect(undoWord(page)).toHaveText('Undo move V-101');
+  const [byHand, others] = [await drum.getAttribute('style'), await drawing(page)];
+  await page.keyboard.press('Shift+K');
+  await expect(undoWord(page)).toHaveText('Undo arrange, 1 unit kept', { timeout: 40_000 });
+  expect(await drum.getAttribute('style')).toBe(byHand);
+  expect(await drawing(page)).not.toBe(others);
+
   await unit(page, 'E-101').click();
   await page.keyboard.press('r');
   await expect(undoWord(page)).toHaveText('Undo turn E-101');

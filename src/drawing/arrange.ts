@@ -61,21 +61,25 @@ export async function arrange(
 export const placedByHand = (sketch: Pick<Sketch, 'units'>): readonly UnitId[] =>
   sketch.units.filter((unit) => unit.byHand).map((unit) => unit.id);
 
-/** The sketch with its units as arranged: what is placed anew is no longer placed by hand. */
+/**
+ * The sketch with its units as arranged: what is placed anew is no longer placed by hand. The same sketch when all stands
+ * so already.
+ */
 export function arranged(sketch: Sketch, { at, unbent }: Arrangement): Sketch {
   const straight = new Set(unbent);
-  return {
-    ...sketch,
-    units: sketch.units.map((unit) => {
-      const place = at.get(unit.id);
-      if (!place) return unit;
-      const { byHand: _, ...rest } = unit;
-      return { ...rest, at: place };
-    }),
-    streams: sketch.streams.map((stream) => {
-      if (!straight.has(stream.id)) return stream;
-      const { via: _, ...rest } = stream;
-      return rest;
-    }),
-  };
+  const units = sketch.units.map((unit) => {
+    const place = at.get(unit.id);
+    if (!place || (!unit.byHand && place[0] === unit.at[0] && place[1] === unit.at[1])) return unit;
+    const { byHand: _, ...rest } = unit;
+    return { ...rest, at: place };
+  });
+  const streams = sketch.streams.map((stream) => {
+    if (!straight.has(stream.id)) return stream;
+    const { via: _, ...rest } = stream;
+    return rest;
+  });
+  const stands =
+    units.every((unit, k) => unit === sketch.units[k]) &&
+    streams.every((stream, k) => stream === sketch.streams[k]);
+  return stands ? sketch : { ...sketch, units, streams };
 }

@@ -59,6 +59,11 @@ test('a recycle is cut where it goes back: the feed stays at the left edge', asy
   expect(placeOf(sheet, 'FEED-1')[0]).toBe(Math.min(...sheet.units.map((u) => u.at[0])));
 });
 
+test('what stands as arranged is the same sketch once more', async () => {
+  const once = await anew(LET_DOWN);
+  expect(await anew(once)).toBe(once);
+});
+
 test('the same sketch gives the same places', async () => {
   const [a, b] = [await arrange(randomPlant(3), engine), await arrange(randomPlant(3), engine)];
   expect([...a.at]).toEqual([...b.at]);

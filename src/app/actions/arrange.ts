@@ -17,8 +17,9 @@ async function arrangeAround(stores: Stores, keep: readonly UnitId[], label: str
       stores.session.say('info', 'Not arranged: the sketch was changed meanwhile.', ['Arrange once more.']);
       return;
     }
-    stores.sketch.apply(label, (now) => arranged(now, plan));
-    stores.session.setState({ spoken: `Done: ${label}` });
+    const next = arranged(sketch, plan);
+    if (next !== sketch) stores.sketch.apply(label, () => next);
+    stores.session.setState({ spoken: next === sketch ? 'All stands as arranged' : `Done: ${label}` });
   } catch (error) {
     stores.session.say('beyond', 'Not arranged; the sketch is as it was.', [
       error instanceof Error ? error.message : String(error),
