@@ -164,3 +164,76 @@ describe('settings of a column as typed', () => {
     expect(at('none')).toEqual(['bottoms', 'vapourDistillate']);
   });
 });
+
+describe('two gases at the lowest stage, which has an efficiency', () => {
+  const ids = ['methane', 'propane', 'n-butane', 'n-decane'];
+  const feed = (flow: string, T: string, percent: readonly number[]) => ({
+    state: { T, P: '20 bar' },
+    flow,
+    composition: { basis: 'mole', parts: Object.fromEntries(ids.map((id, i) => [id, `${percent[i]} %`])) },
+  });
+  const oil = feed('50 kmol/h', '300 K', [0, 0, 0, 100]);
+  const lean = feed('80 kmol/h', '320 K', [90, 8, 2, 0]);
+  const rich = feed('20 kmol/h', '340 K', [50, 40, 10, 0]);
+  const absorber = (stages: Readonly<Record<string, number>>) => ({
+    stages: 4,
+    top: { distillate: 'none' },
+    bottom: { reboiler: false },
+    feeds: Object.fromEntries(Object.entries(stages).map(([port, stage]) => [port, { stage }])),
+    pressure: { top: '20 bar', perStage: '0 bar' },
+    murphree: [{ from: 1, to: 4, value: 0.6 }],
+    fixedBy: [],
+  });
+  type Feed = ReturnType<typeof feed>;
+  const apart = (one: Feed, other: Feed): unknown =>
+    sketchOf(
+      ids,
+      [
+        ['f1', 'F-1', 'feed', oil],
+        ['f2', 'F-2', 'feed', one],
+        ['f3', 'F-3', 'feed', other],
+        ['c', 'C-1', 'column', absorber({ feed1: 1, feed2: 4, feed3: 4 })],
+      ],
+      [
+        ['1', 'f1.out', 'c.feed1'],
+        ['2', 'f2.out', 'c.feed2'],
+        ['3', 'f3.out', 'c.feed3'],
+        ['4', 'c.vapourDistillate'],
+        ['5', 'c.bottoms'],
+      ],
+    );
+  const joined = sketchOf(
+    ids,
+    [
+      ['f1', 'F-1', 'feed', oil],
+      ['f2', 'F-2', 'feed', lean],
+      ['f3', 'F-3', 'feed', rich],
+      ['j', 'J-1', 'join', {}],
+      ['c', 'C-1', 'column', absorber({ feed1: 1, feed2: 4 })],
+    ],
+    [
+      ['1', 'f1.out', 'c.feed1'],
+      ['2', 'f2.out', 'j.in1'],
+      ['3', 'f3.out', 'j.in2'],
+      ['6', 'j.out', 'c.feed2'],
+      ['4', 'c.vapourDistillate'],
+      ['5', 'c.bottoms'],
+    ],
+  );
+
+  test.each([
+    ['as they are', apart(lean, rich)],
+    ['the other way round', apart(rich, lean)],
+  ])('rise as one, %s', async (_, doc) => {
+    const want = solvedStream((await solve(opened(joined))).batch, 's4');
+    const got = solvedStream((await solve(opened(doc))).batch, 's4');
+    expect(got.n_mol_s / want.n_mol_s).toBeCloseTo(1, 8);
+    for (const i of ids.keys()) expect(got.z[i]! / want.z[i]!).toBeCloseTo(1, 6);
+  });
+
+  test('a liquid at its bubble point brings no vapour there', async () => {
+    const boiling = { ...rich, state: { P: '20 bar', vapourFraction: 0 } } as unknown as Feed;
+    const { batch } = await solve(opened(apart(boiling, boiling)));
+    expect(unitResult(batch, 'c')!.reasons!.map((r) => r.code)).toEqual(['column/efficiency-needs-vapour']);
+  });
+});

@@ -31,7 +31,7 @@ export interface ColumnFeed {
   readonly T_K: number;
   /** Vapour fraction as it arrives [-]; a start value, and what is balanced before solving. */
   readonly vapourFraction: number;
-  /** Composition of its vapour, used below the lowest stage of a column without a reboiler. */
+  /** Composition of all vapour fed at its place, used below the lowest stage of a column without a reboiler. */
   readonly y?: Float64Array;
 }
 

@@ -63,18 +63,38 @@ function amountOf(flow: FlowSI, n_mol_s: Float64Array, call: Call<ColumnSettings
   return { value: flow.share * sum, basis: flow.basis };
 }
 
-function feedOf(place: number, stream: StreamState, present: readonly number[]): ColumnFeed {
-  const vapour = stream.phases.find(
-    (p) => p.kind === 'vapour' || (p.kind === 'dense' && stream.vapourFraction >= 0.5),
-  );
-  return {
-    place,
-    n_mol_s: Float64Array.from(present, (i) => stream.n_mol_s[i]!),
-    H_W: stream.H_W,
-    T_K: stream.T_K,
-    vapourFraction: stream.vapourFraction,
-    ...(vapour ? { y: Float64Array.from(present, (i) => vapour.x[i]!) } : {}),
-  };
+interface Fed {
+  readonly place: number;
+  readonly stream: StreamState;
+}
+
+/** Mole fractions of all vapour that comes with the feeds of a place, over the chemicals present; undefined without any. */
+function vapourAt(at: number, fed: readonly Fed[], present: readonly number[]): Float64Array | undefined {
+  const y = new Float64Array(present.length);
+  for (const { place, stream } of fed) {
+    if (place !== at) continue;
+    const vapour = stream.phases.find(
+      (p) => p.kind === 'vapour' || (p.kind === 'dense' && stream.vapourFraction >= 0.5),
+    );
+    if (vapour) for (let k = 0; k < y.length; k++) y[k]! += vapour.n_mol_s[present[k]!]!;
+  }
+  const total = y.reduce((a, b) => a + b, 0);
+  return total > 0 ? y.map((n) => n / total) : undefined;
+}
+
+/** Feeds as the engine takes them: several at one place bring one vapour. */
+function feedsOf(fed: readonly Fed[], present: readonly number[]): ColumnFeed[] {
+  return fed.map(({ place, stream }) => {
+    const y = vapourAt(place, fed, present);
+    return {
+      place,
+      n_mol_s: Float64Array.from(present, (i) => stream.n_mol_s[i]!),
+      H_W: stream.H_W,
+      T_K: stream.T_K,
+      vapourFraction: stream.vapourFraction,
+      ...(y ? { y } : {}),
+    };
+  });
 }
 
 interface Reading {
@@ -185,7 +205,7 @@ export function jobOf(call: Call<ColumnSettings>): Outcome<ColumnJob> {
   const feedPorts = Object.keys(call.in)
     .sort()
     .filter((port) => call.in[port]!.phases.length > 0);
-  const feeds = feedPorts.map((port) => {
+  const fed = feedPorts.map((port): Fed => {
     const stage = settings.feeds[port]?.stage;
     if (stage === undefined)
       r.bad.push(
@@ -194,8 +214,9 @@ export function jobOf(call: Call<ColumnSettings>): Outcome<ColumnJob> {
         ]),
       );
     const place = stage === undefined ? 0 : stageOf(stage, r, { port, path: `feeds.${port}.stage` });
-    return feedOf(place, call.in[port]!, present);
+    return { place, stream: call.in[port]! };
   });
+  const feeds = feedsOf(fed, present);
   const draws = drawPorts.map((port): ColumnDraw => {
     const side = settings.sides![port]!;
     return {
