@@ -198,3 +198,25 @@ test('at 200 % beside a drawer the strip says to the end what stops the train; p
   await expect.poll(async () => (await strip()).length).toBeGreaterThan(4);
   expect((await strip()).filter(({ cut }) => cut > 1)).toEqual([]);
 });
+
+test('the lines over the foot of the sheet have no serious fault of access', async ({ quiet: page }) => {
+  let release = (): void => undefined;
+  const free = new Promise<void>((go) => {
+    release = go;
+  });
+  await openExample(page);
+  await page.addScriptTag({ path: AXE });
+  await page.route('**/fonts/*.ttf', async (route) => {
+    await free;
+    await route.continue();
+  });
+  await page.keyboard.press('Control+p');
+  const foot = page.locator('.at-foot');
+  await expect(foot).toContainText('Laying out the pages');
+  await page.evaluate(() => window.dispatchEvent(new Event('vite:preloadError')));
+  await expect(foot).toContainText('needs to be loaded again');
+  await scan(page, 'lines over the foot', '.at-foot');
+  await page.keyboard.press('Escape');
+  await expect(foot).not.toContainText('Laying out');
+  release();
+});

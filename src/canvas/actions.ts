@@ -57,7 +57,7 @@ export const sheetActions: readonly Action[] = [
   },
   {
     id: 'escape',
-    label: 'Leave what is under way; clear the selection',
+    label: 'Leave what is under way, then the selection, then the drawer',
     group: 'sheet',
     keys: ['Esc'],
     listens: onSheet,

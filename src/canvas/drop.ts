@@ -231,6 +231,7 @@ export function place(stores: Stores, kind: string): UnitId | undefined {
   const made = tryEdit(stores, (sketch) => addUnit(sketch, kind, at));
   if (!made?.unit) return undefined;
   stores.session.select([made.unit]);
-  sheet?.reveal(at);
+  // Once its drawer has taken its room from the sheet.
+  setTimeout(() => sheet?.reveal(at), 0);
   return made.unit;
 }

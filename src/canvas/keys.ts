@@ -156,7 +156,7 @@ export function enter(stores: Stores): void {
   }
 }
 
-/** Esc: leaves what is under way, one thing at a time; last, the selection. */
+/** Esc: leaves what is under way, one thing at a time; last, the selection and then the drawer. */
 export function leave(stores: Stores): boolean {
   const sheet = sheetOf(stores)?.store;
   if (!sheet) return false;
@@ -165,9 +165,10 @@ export function leave(stores: Stores): boolean {
   else if (dropping) sheet.setState({ dropping: null });
   else if (moved || heldNotes || bending) sheet.setState(AT_REST);
   else {
-    const { units, streams, notes, notice } = stores.session.getState();
+    const { units, streams, notes, notice, drawer } = stores.session.getState();
     if (notice) stores.session.dismiss();
     else if (units.length + streams.length + notes.length > 0) stores.session.select([], []);
+    else if (drawer) stores.session.openDrawer(null);
     else return false;
   }
   return true;

@@ -124,6 +124,9 @@ export function takeOffer(stores: Stores, sheet: SheetStore, offer: Offer, kind:
   const unit = made?.unit;
   if (!unit) return;
   stores.session.select([unit]);
-  sheetOf(stores)?.reveal(at);
-  setTimeout(() => sheetOf(stores)?.focus({ unit }), 0);
+  // Once its drawer has taken its room from the sheet.
+  setTimeout(() => {
+    sheetOf(stores)?.reveal(at);
+    sheetOf(stores)?.focus({ unit });
+  }, 0);
 }

@@ -117,6 +117,15 @@ test('a connection can be made by keys alone: C, an arrow, Enter', () => {
   expect(page.querySelector('.target')).toBeNull();
 });
 
+test('Esc on the sheet clears the selection first, and then closes the drawer', () => {
+  const { stores } = show();
+  act(() => stores.session.select([unitId('u3')]));
+  press(stores, 'Escape');
+  expect(stores.session.getState()).toMatchObject({ units: [], drawer: { is: 'unit' } });
+  press(stores, 'Escape');
+  expect(stores.session.getState().drawer).toBeNull();
+});
+
 test('Esc leaves a connection that was started', () => {
   const { stores, page } = show();
   act(() => stores.session.select([unitId('u3')]));

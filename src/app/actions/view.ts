@@ -134,7 +134,7 @@ function jumpRegion(by: number): void {
   for (let k = 1; k <= regions.length; k += 1) {
     const region = regions[(here + by * k + regions.length * 2) % regions.length];
     const target = region?.querySelector<HTMLElement>(
-      'button:not(:disabled):not([tabindex="-1"]), input, select, [tabindex="0"]',
+      'button:not(:disabled):not([tabindex="-1"]), input, select, [tabindex="0"]:not([role="separator"])',
     );
     if (target) {
       target.focus();

@@ -121,9 +121,11 @@ function UnitHead({ id, isKnown }: { readonly id: UnitId; readonly isKnown: bool
 
 function WhyNot({ id }: { readonly id: UnitId }) {
   const latest = useUnitResult(id)?.latest;
+  const isAsked = useCompiled(({ gaps }) => gaps.some((gap) => gap.at.unit === id));
   const reasons = latest?.reasons ?? [];
   if (latest?.state === 'no-solution') return <Reasons reasons={reasons} />;
-  return latest?.state === 'needs-value' ? <NextSteps reasons={reasons} /> : null;
+  // What the sketch itself lacks is asked for at its field, or among the notes.
+  return latest?.state === 'needs-value' && !isAsked ? <NextSteps reasons={reasons} /> : null;
 }
 
 const Names = memo(function Names({ id }: { readonly id: UnitId }) {
