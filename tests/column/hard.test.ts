@@ -19,7 +19,7 @@ test.each(KEPT)('kept for "%s"', async (by, c) => {
 
 test('every way of starting a column with ends has a case that needs it', () => {
   expect(new Set(KEPT.map(([by]) => by))).toEqual(
-    new Set(['more-sweeps', 'heats', 'plain-then-move', 'scan']),
+    new Set(['more-sweeps', 'heats', 'plain-then-move', 'scan', 'other-ratio']),
   );
 });
 

@@ -1,7 +1,7 @@
 import type { Attempt } from '../../src/engine/column/types';
 import type { ColumnCase } from '../robust/columns';
 
-/** Columns that the first start does not solve, each with the way that does. Drawn at random (`npm run robust -- --what columns`);
+/** Columns that the first start does not solve, each with the way that does. Drawn at random (`npm run robust -- --what columns`, `oneEnded`);
  * each needs its way still when its feed is changed in the fifth digit. */
 export const KEPT: readonly (readonly [Attempt, ColumnCase])[] = [
   [
@@ -145,20 +145,28 @@ export const KEPT: readonly (readonly [Attempt, ColumnCase])[] = [
   [
     'heats',
     {
-      ids: ['1-decene', 'cis-decalin', 'p-xylene', 'm-diethylbenzene', 'cyclohexene'],
-      z: [
-        0.10199668273647314, 0.02264164052186591, 0.3831720408555133, 0.039075096361930246,
-        0.4531145395242174,
+      ids: [
+        'cumene',
+        'p-diethylbenzene',
+        'benzene',
+        'o-xylene',
+        'ethylcyclopentane',
+        'n-decane',
+        '3-methylheptane',
       ],
-      stages: 55,
+      z: [
+        0.41933347682087807, 0.18940397516631935, 0.12214946545487045, 0.10397901676642572,
+        0.005052081816842686, 0.029142916428157254, 0.13093906754650647,
+      ],
+      stages: 35,
       top: 'vapour',
       reboiler: true,
-      P_Pa: [345338.740539236, 424137.0672401618],
-      feedPlace: 45,
-      vapourFraction: 0,
+      P_Pa: [229398.92161396, 256736.6250795605],
+      feedPlace: 9,
+      vapourFraction: 0.9289664989337325,
       fixed: [
-        { fix: 'flow', product: 'top', flow: { value: 89.15786584094167, basis: 'mole' } },
-        { fix: 'recovery', product: 'top', chemical: 0, value: 0.5305828800551033 },
+        { fix: 'refluxRatio', value: 5.673415612830644 },
+        { fix: 'recovery', product: 'bottoms', chemical: 3, value: 0.9891787589171659 },
       ],
     },
   ],
@@ -194,6 +202,37 @@ export const KEPT: readonly (readonly [Attempt, ColumnCase])[] = [
         { fix: 'flow', product: 'top', flow: { value: 72.91621681489042, basis: 'mole' } },
         { fix: 'recovery', product: 'top', chemical: 2, value: 0.922177127787655 },
       ],
+    },
+  ],
+  [
+    'other-ratio',
+    {
+      ids: ['p-xylene', 'n-pentane', 'indane'],
+      z: [0.3998064341079374, 0.32231165381128124, 0.2778819120807813],
+      stages: 23,
+      top: 'vapour',
+      reboiler: false,
+      P_Pa: [1393088.9243255286, 1409246.6374081476],
+      feedPlace: 23,
+      vapourFraction: 1,
+      fixed: [{ fix: 'refluxRatio', value: 2.877579922020942 }],
+    },
+  ],
+  [
+    'other-ratio',
+    {
+      ids: ['propane', 'isobutane', 'ethylene', 'acetylene', 'ethane', 'methylacetylene', 'propylene'],
+      z: [
+        0.09288137842792396, 0.039373755943514784, 0.02921638740553479, 0.32973160286383646,
+        0.2648212803828082, 0.033665062136537305, 0.2103105328398445,
+      ],
+      stages: 30,
+      top: 'liquid',
+      reboiler: false,
+      P_Pa: [217637.6360805073, 222405.9797880539],
+      feedPlace: 30,
+      vapourFraction: 1,
+      fixed: [{ fix: 'refluxRatio', value: 2.9859354916946885 }],
     },
   ],
 ];

@@ -22,7 +22,7 @@ export interface ColumnCase {
   readonly fixed: readonly Fixing[];
 }
 
-const FEED_MOL_S = 100;
+export const FEED_MOL_S = 100;
 const GASES = ['hydrogen', 'nitrogen', 'methane', 'carbon-monoxide', 'carbon-dioxide', 'argon'];
 
 interface Drawn {
@@ -31,7 +31,7 @@ interface Drawn {
 }
 
 /** Chemicals that live together in a column: hydrocarbons of neighbouring volatility, now and then a gas or a wide cut. */
-async function makePool(): Promise<readonly ChemicalData[]> {
+export async function makePool(): Promise<readonly ChemicalData[]> {
   const all = await usable('peng-robinson');
   const onlyCH = (c: ChemicalData): boolean =>
     Object.keys(c.elements ?? { X: 1 }).every((e) => e === 'C' || e === 'H');
@@ -40,7 +40,7 @@ async function makePool(): Promise<readonly ChemicalData[]> {
     .sort((a, b) => a.Tb_K! - b.Tb_K!);
 }
 
-function chemicalsOf(random: Random, pool: readonly ChemicalData[]): string[] {
+export function chemicalsOf(random: Random, pool: readonly ChemicalData[]): string[] {
   const count = random.whole(3, 12);
   // A window of boiling points, wide or narrow, around a middle.
   const width = random.between(25, 160);
@@ -179,7 +179,7 @@ function otherFixings(random: Random, s: StageSystem): Fixing[] {
 const profileOf = (s: StageSystem): Float64Array => s.T.slice();
 
 /** What is wrong with a solved column, by its flows and fugacities alone; undefined when nothing is. */
-function faultOf(s: StageSystem): string | undefined {
+export function faultOf(s: StageSystem): string | undefined {
   const { n, places, model, task } = s;
   const liq = model.makeProps();
   const vap = model.makeProps();

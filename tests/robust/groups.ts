@@ -3,6 +3,7 @@ import { drawings } from './drawings';
 import { examples } from './examples';
 import { files } from './files';
 import { flashes } from './flashes';
+import { oneEnded } from './oneEnded';
 
 /** What a group found: cases tried, how they ended, and every case that needs looking at. */
 export interface GroupReport {
@@ -23,7 +24,14 @@ export interface GroupReport {
 export type Group = (seed: number, count: number, only?: number) => Promise<GroupReport>;
 
 /** One line a group. */
-export const GROUPS: Readonly<Record<string, Group>> = { flashes, columns, examples, drawings, files };
+export const GROUPS: Readonly<Record<string, Group>> = {
+  flashes,
+  columns,
+  oneEnded,
+  examples,
+  drawings,
+  files,
+};
 
 /** Groups that drive a browser and take seconds a case: run only when named, and loaded only then. */
 export const SLOW_GROUPS: Readonly<Record<string, Group>> = {

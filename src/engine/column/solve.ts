@@ -33,6 +33,8 @@ const WARM_ITERATIONS = 14;
  * certain to four digits.
  */
 const SETTLES = 1e-8;
+/** Reflux ratios to come from, by the one that is asked. */
+const OTHER_RATIOS = [3, 0.3, 10, 0.1];
 /** Steps of a scan: how long in the logarithm of a parameter, how many each way. */
 const SCAN_STEP = 0.25;
 const SCAN_STEPS = 20;
@@ -72,7 +74,7 @@ class Search {
 
   solve(warm: ColumnState | undefined): ColumnEnd {
     if (warm && this.fromWarm(warm)) return this.solved();
-    if (this.fromStarts() || this.fromPlain()) return this.solved();
+    if (this.fromStarts() || this.fromPlain() || this.fromOtherRatio()) return this.solved();
     return { state: 'no-solution', failure: this.failure!, effort: this.effort };
   }
 
@@ -175,6 +177,31 @@ class Search {
     const least = Math.min((1.1 * guess.vapour) / (1 + guess.refluxRatio), 0.9 * all);
     const top = (least + all) / 2;
     return { ...guess, top, bottoms: all - top };
+  }
+
+  /**
+   * With a reflux ratio and nothing to be moved to: a column with much more of it, or much less, and from there to what is asked. Without a
+   * reboiler the products follow from the heat alone, and start values miss them where both are sharp.
+   */
+  private fromOtherRatio(): boolean {
+    const { system: s } = this;
+    const wanted = this.direct.get(0);
+    if (s.first === 0 || wanted === undefined || this.moved.length > 0) return false;
+    const told = this.failure;
+    const guess = guessOf(s);
+    for (const times of OTHER_RATIOS) {
+      const refluxRatio = guess.refluxRatio * times;
+      const top = this.task.reboiler ? guess.top : (guess.top * (1 + guess.refluxRatio)) / (1 + refluxRatio);
+      this.start({ ...guess, refluxRatio, top, bottoms: guess.top + guess.bottoms - top }, PLAIN);
+      const from = s.totalCondenser ? wanted / times : wanted * times;
+      s.p[0] = from;
+      const set = (way: number): void => {
+        s.p[0] = from ** (1 - way) * wanted ** way;
+      };
+      if (this.attempt('other-ratio', this.wanted, ITERATIONS) && this.follow(this.wanted, set)) return true;
+    }
+    this.failure = told;
+    return false;
   }
 
   private start(guess: Guess, sweeps: Sweeps): void {

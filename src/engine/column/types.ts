@@ -103,4 +103,6 @@ export type Attempt =
   /** Constant molar overflow, then the model's enthalpies by and by. */
   | 'heats'
   | 'plain-then-move'
-  | 'scan';
+  | 'scan'
+  /** Another reflux ratio than the one given, then moved to it. */
+  | 'other-ratio';
