@@ -27,6 +27,15 @@ test('the train is arranged, a unit turned and mirrored, units lined up, a bend 
   const before = await drawing(page);
   await edit(page, 'Arrange all');
   await expect(undoWord(page)).toHaveText('Undo arrange all', { timeout: 40_000 });
+  // All of it is in view.
+  const area = (await page.locator('.sheet-flow').boundingBox())!;
+  for (const unit of await page.locator('[data-unit]').all()) {
+    const box = (await unit.boundingBox())!;
+    expect(box.x).toBeGreaterThan(area.x - 1);
+    expect(box.y).toBeGreaterThan(area.y - 1);
+    expect(box.x + box.width).toBeLessThan(area.x + area.width + 1);
+    expect(box.y + box.height).toBeLessThan(area.y + area.height + 1);
+  }
   expect(await drawing(page)).not.toBe(before);
 
   // What is put elsewhere by hand stays there, the others find their places around it.

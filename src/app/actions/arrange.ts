@@ -1,3 +1,4 @@
+import { sheetOf } from '../../canvas/handle';
 import { arrange, arranged, placedByHand } from '../../drawing/arrange';
 import type { UnitId } from '../../engine/ids';
 import type { Sketch } from '../../sketch/types';
@@ -19,6 +20,8 @@ async function arrangeAround(stores: Stores, keep: readonly UnitId[], label: str
     }
     const next = arranged(sketch, plan);
     if (next !== sketch) stores.sketch.apply(label, () => next);
+    // Where much was placed anew, some of it would lie out of view.
+    if (keep.length < sketch.units.length / 2) sheetOf(stores)?.fit();
     stores.session.setState({ spoken: next === sketch ? 'All stands as arranged' : `Done: ${label}` });
   } catch (error) {
     stores.session.say('beyond', 'Not arranged; the sketch is as it was.', [
