@@ -39,6 +39,7 @@ export function Balance() {
   const streamResults = useResults((state) => state.streams);
   const unitResults = useResults((state) => state.units);
   const closure = useResults((state) => state.closure);
+  const between = useResults((state) => state.answering > state.solvedEdit);
   const data = useCompiled((state) => state.basis);
   const folded = useSession((state) => state.balanceFolded);
   const isSmall = useSmallScreen();
@@ -69,7 +70,8 @@ export function Balance() {
   const known = sides.in.unknown.length + sides.out.unknown.length === 0 && !sides.empty;
   const isOld = [...sides.in.segments, ...sides.out.segments].some((segment) => segment.outOfDate);
   const isClosed = known && !isOld && full > 0 && Math.abs(missing) <= CLOSED * full;
-  const gap = known && !isClosed ? missing : 0;
+  // Figures of two edits against each other say nothing of what is missing.
+  const gap = known && !isOld && !between && !isClosed ? missing : 0;
   const isCompact = folded || isSmall;
   const number = (si: number): string => formatSignificant(toDisplay(si), 5);
   const basisWords = `${choices.find((c) => basisKey(c.basis) === key)?.text ?? 'mass'}, ${unit}`;

@@ -2,7 +2,7 @@
 import { act, fireEvent, screen } from '@testing-library/react';
 import { describe, expect, test } from 'vitest';
 import { Balance } from '../../src/balance/Balance';
-import type { Closure, ClosureEntry, StreamResult } from '../../src/engine/network/types';
+import type { Closure, ClosureEntry, SolveBatch, StreamResult } from '../../src/engine/network/types';
 import { letDown, makePage, type Page, show, solvedStream, streamId, unitId } from '../drawers/page';
 
 const even: ClosureEntry = { in: 2, out: 2, made: 0, relative: 0 };
@@ -45,6 +45,41 @@ describe('the balance', () => {
     expect(band().dataset.closed).toBe('yes');
     expect(document.querySelector('.totals .closed')?.textContent).toBe('7\u2009200.0');
     expect(screen.getByText('Closure shows arithmetic, not that the model is right.')).toBeTruthy();
+  });
+
+  test('holds no figure of one edit against one of another: nothing is called missing while a solve runs', () => {
+    const page = makePage({
+      ...letDown,
+      units: [
+        letDown.units[0],
+        { id: 'u2', tag: 'PV-1', kind: 'valve', settings: {} },
+        { id: 'u4', tag: 'PROD-1', kind: 'product', settings: {} },
+      ],
+      streams: [
+        { id: 's1', number: '1', from: ['u1', 'out'], to: ['u2', 'in'] },
+        { id: 's2', number: '2', from: ['u2', 'out'], to: ['u4', 'in'] },
+      ],
+    });
+    const { results } = page.stores;
+    const nothing = { units: [], gone: [], findings: [] };
+    const [small, large] = [solvedStream(), solvedStream({ m_kg_s: 3 })];
+    const both = (stream: StreamResult): SolveBatch => ({
+      ...nothing,
+      streams: [
+        [streamId('s1'), stream],
+        [streamId('s2'), stream],
+      ],
+    });
+    results.take(1, true, both(small), 1);
+    window.innerWidth = 1440;
+    show(page, <Balance />);
+    act(() => results.take(2, false, { ...nothing, streams: [[streamId('s1'), large]] }, 1));
+    expect(band().textContent).not.toContain('missing');
+    act(() => results.at(2, unitId('u2')));
+    expect(band().textContent).not.toContain('missing');
+    expect(band().dataset.closed).not.toBe('yes');
+    act(() => results.take(2, true, both(large), 1));
+    expect(band().dataset.closed).toBe('yes');
   });
 
   test('names feeds and products and selects a stream on a click', () => {
