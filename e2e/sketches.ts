@@ -1,4 +1,4 @@
-import type { Page } from 'playwright/test';
+import { expect, type Page } from 'playwright/test';
 import { solved } from './page';
 
 const CHEMICALS = ['methane', 'propane', 'n-butane', 'n-pentane', 'benzene', 'toluene', 'n-decane', 'water'];
@@ -52,10 +52,10 @@ export async function openText(page: Page, text: string): Promise<void> {
   await solved(page);
 }
 
-/** Hands a sketch's text over as a file. */
+/** Hands a sketch's text over as a file, on the start screen. */
 export async function given(page: Page, text: string): Promise<void> {
-  // Keys are heard once the page stands.
-  await page.waitForFunction(() => performance.getEntriesByName('app-ready').length > 0);
+  // Keys are heard once the page stands: the framed example takes the focus then.
+  await expect(page.locator('.card').first()).toBeFocused();
   const chooser = page.waitForEvent('filechooser');
   await page.keyboard.press('Control+o');
   await (await chooser).setFiles({
