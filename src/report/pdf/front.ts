@@ -195,16 +195,16 @@ function titleBlock(report: ReportModel, width: number, scale: number): TableCel
     const { text, size } = inRoom(entry(label) || '–', quarter * span - 10, weight);
     return {
       stack: [
-        { text: label, fontSize: 7 * scale, color: PRINT.ink3 },
+        { text: label, fontSize: 6 * scale, color: PRINT.ink3 },
         { text, fontSize: size * scale, bold: weight === 600 },
       ],
       colSpan: span,
     };
   };
-  /** A title block is read to its end: the letters are smaller where that is enough, else there are two lines. */
+  /** A title block is read to its end: the letters are smaller where that is enough, else two lines, which four rows have room for. */
   function inRoom(words: string, room: number, weight: 400 | 600): { text: string; size: number } {
     const oneLine = [9.5, 8.5, 7.5].find((size) => fitted(words, room, size * scale, 1, weight) === words);
-    const size = oneLine ?? 7;
+    const size = oneLine ?? 6;
     return { text: fitted(words, room, size * scale, 2, weight), size };
   }
   return {
