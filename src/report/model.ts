@@ -79,6 +79,11 @@ export function buildReport(input: ReportInput): ReportModel {
             `Of ${basis.model.pairs.length} pairs ${predicted} are predicted by a group-contribution method and ${missing} have no value (0 used). Check those that matter against data.`,
           ]
         : []),
+      ...(basis.model.kind === 'peng-robinson'
+        ? [
+            'Heat capacities of liquids come from the cubic equation, commonly 3 to 13 % off (most for aromatics, which it puts too low): so are duties that only warm or cool a liquid.',
+          ]
+        : []),
       'Closure shows arithmetic, not that the model is right.',
       'The limits are screening checks with common-practice thresholds, not a hazard review. Relief, materials, hydrates, corrosion and flammability need the responsible licensed engineer and the local codes.',
       'Early-design figures: not for construction, purchase or operation.',
