@@ -5,6 +5,8 @@ import { timeModels } from './models';
 import { CHANGES, memoryOf, readTrain, solveAll } from './train';
 
 const ROUNDS = 60;
+/** Rounds of every change before any is timed: the compiler at run time still betters the code for that long. */
+const WARM_UP = 120;
 const FRESH = 5;
 const CHILD = fileURLToPath(new URL('./exampleFresh.ts', import.meta.url));
 
@@ -38,7 +40,7 @@ function freshProcess(warmed: boolean): { readonly first_ms: number; readonly un
 export async function timeExample(now: () => number): Promise<readonly object[]> {
   const train = await readTrain();
   const memory = memoryOf(train);
-  for (let k = 0; k < 30; k++) {
+  for (let k = 0; k < WARM_UP; k++) {
     solveAll(train.asItIs, memory, 'nothing');
     for (const problem of train.changed) solveAll(problem, memory, 'warm');
   }
