@@ -1,3 +1,4 @@
+import { absorbers } from './absorbers';
 import { columns } from './columns';
 import { drawings } from './drawings';
 import { examples } from './examples';
@@ -28,6 +29,7 @@ export const GROUPS: Readonly<Record<string, Group>> = {
   flashes,
   columns,
   oneEnded,
+  absorbers,
   examples,
   drawings,
   files,

@@ -148,7 +148,8 @@ export class Newton {
       fresh = level === 2;
       reuse = near && share === 1 && residual < CONTRACTS * before;
     }
-    return { end: 'iterations', residual, iterations: options.iterations };
+    // The last step of all may have been the one that got there.
+    return { end: residual < SOLVED ? 'solved' : 'iterations', residual, iterations: options.iterations };
   }
 
   /** One full step more; kept when it is no worse. */

@@ -8,6 +8,7 @@ import { put, restore, stateOf } from './state';
 import type { StageSystem } from './system';
 import { naturalOf, targetOf } from './targets';
 import type { Attempt, ColumnState, ColumnTask, Effort } from './types';
+import { startUniform } from './uniform';
 import { type ColumnWork, workFor } from './work';
 
 /** The system at its answer, or why none was found. */
@@ -107,19 +108,30 @@ class Search {
 
   private fromStarts(): boolean {
     const { system: s } = this;
-    if (s.first === 0 && !this.task.reboiler) {
-      for (const [name, passes, withModel] of SUM_STARTS) {
-        startBySums(s, passes, withModel);
-        if (this.attempt(name, this.wanted, ITERATIONS)) return true;
-      }
-      return false;
-    }
+    if (s.first === 0 && !this.task.reboiler) return this.fromSums();
     const guess = guessOf(s);
     for (const [name, sweeps] of STARTS) {
       this.start(guess, sweeps);
       if (this.attempt(name, this.wanted, ITERATIONS)) return true;
     }
     return this.fromOverflow(guess, this.wanted);
+  }
+
+  /** Without ends: sum rates; then from a column of like stages, its feeds moved to what they are. */
+  private fromSums(): boolean {
+    const { system: s } = this;
+    for (const [name, passes, withModel] of SUM_STARTS) {
+      startBySums(s, passes, withModel);
+      if (this.attempt(name, this.wanted, ITERATIONS)) return true;
+    }
+    const told = this.failure;
+    const set = startUniform(s);
+    if (!set) return false;
+    set(0);
+    const done = this.attempt('like-stages', this.wanted, ITERATIONS) && this.follow(this.wanted, set);
+    set(1);
+    if (!done) this.failure = told;
+    return done;
   }
 
   /** Constant molar overflow first, then step by step to the model's enthalpies. */

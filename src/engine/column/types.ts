@@ -100,6 +100,8 @@ export type Attempt =
   | 'more-sweeps'
   /** Absorbers: start K-values alone. */
   | 'no-model-sweeps'
+  /** Absorbers: all stages alike, fed with what is in equilibrium, then moved to the feeds that are. */
+  | 'like-stages'
   /** Constant molar overflow, then the model's enthalpies by and by. */
   | 'heats'
   | 'plain-then-move'
