@@ -23,6 +23,8 @@ export interface Drive {
   overtaken(): boolean;
   partial(batch: SolveBatch): void;
   at(unit: UnitId, loop?: LoopProgress): void;
+  /** Takes what is to be called while one unit takes long. */
+  readonly hear?: (alive: () => void) => void;
   readonly announce: boolean;
 }
 
@@ -39,14 +41,21 @@ export async function drive(
   let slice = begun;
   let posted: number | undefined;
   let said = begun;
+  let going: SolveStep | undefined;
+  const sayAt = ({ unit, loop }: SolveStep, t: number): void => {
+    d.at(unit, loop);
+    said = t;
+  };
+  d.hear?.(() => {
+    const t = d.now();
+    if (going && t - said >= d.pace.at) sayAt(going, t);
+  });
   for (;;) {
     const step = solve.next();
     if (step.done) return step.value;
+    going = step.value;
     const t = d.now();
-    if (d.announce || t - said >= d.pace.at) {
-      d.at(step.value.unit, step.value.loop);
-      said = t;
-    }
+    if (d.announce || t - said >= d.pace.at) sayAt(going, t);
     if (t - slice < d.pace.pause) continue;
     if (posted === undefined ? t - begun >= d.pace.first : t - posted >= d.pace.next) {
       d.partial(step.value.collect());

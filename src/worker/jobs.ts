@@ -138,7 +138,8 @@ class Service {
       this.blank = false;
     }
     try {
-      const batch = await drive(solveNetwork(problem, this.memories.of(problem.basis), { from, kinds }), {
+      const memory = this.memories.of(problem.basis);
+      const batch = await drive(solveNetwork(problem, memory, { from, kinds }), {
         turns,
         now,
         pace,
@@ -146,6 +147,9 @@ class Service {
         overtaken: () => this.closed || this.stopped || this.waiting !== undefined,
         partial: (part) => this.say({ say: 'results', edit, last: false, ...clean, ...part }),
         at: (unit, loop) => this.say({ say: 'at', edit, unit, ...(loop ? { loop } : {}) }),
+        hear: (alive) => {
+          memory.work.alive = alive;
+        },
       });
       if (batch) this.say({ say: 'results', edit, last: true, ...clean, ...batch });
     } catch (cause) {

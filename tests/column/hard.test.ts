@@ -19,6 +19,14 @@ test.each(KEPT)('kept for "%s"', async (by, c) => {
   expect(end.effort.residual).toBeLessThan(1e-9);
 });
 
+test('a column that takes many tries says before each that it is alive', async () => {
+  const [, c] = KEPT.find(([by]) => by === 'plain-then-move')!;
+  const model = (await bankModel(c.ids)).of(c.ids.map((_, i) => i));
+  let said = 0;
+  const end = solveColumn(taskOf(c, model, c.fixed)!, undefined, undefined, () => said++);
+  expect(said).toBeGreaterThan(new Set(end.effort.tried).size);
+});
+
 test('every way of starting a column with ends has a case that needs it', () => {
   expect(new Set(KEPT.map(([by]) => by))).toEqual(
     new Set(['more-sweeps', 'heats', 'plain-then-move', 'scan', 'other-ratio']),

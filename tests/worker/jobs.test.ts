@@ -256,6 +256,27 @@ describe('the solver behind a port', () => {
     expect(page.heard.filter((m) => m.say === 'at')).toHaveLength(2);
   });
 
+  test('says at most every 250 ms that it still runs while one unit takes seconds', async () => {
+    const clock = new Clock();
+    const kinds = kindsWith(clock, 0);
+    const slow: AnyKind = {
+      ...kinds.solvers.pipe!,
+      solve: (call: Call<never>) => {
+        for (let k = 0; k < 40; k++) {
+          clock.t += 100;
+          call.work.alive?.();
+        }
+        return kinds.solvers.pipe!.solve(call);
+      },
+    };
+    const page = open({ kinds: { ...kinds, solvers: { ...kinds.solvers, pipe: slow } }, now: clock.now });
+    page.say({ say: 'basis', basis });
+    page.say({ say: 'solve', problem: edit(1, pipeline(1)), from: 'warm' });
+    await page.last(1);
+    // Four seconds in steps of 100 ms: one word every 300 ms.
+    expect(page.heard.flatMap((m) => (m.say === 'at' ? [m.unit] : []))).toEqual(Array(13).fill('p0'));
+  });
+
   test('names every unit before it is solved when it is asked to', async () => {
     const page = open();
     page.say({ say: 'basis', basis });

@@ -58,6 +58,7 @@ class Search {
   constructor(
     private readonly task: ColumnTask,
     { system, newton }: ColumnWork,
+    private readonly alive: () => void,
   ) {
     this.system = system;
     this.newton = newton;
@@ -230,6 +231,7 @@ class Search {
     for (let k = 0; k < 60; k++) {
       const next = Math.min(1, done + step);
       set(next);
+      this.alive();
       const end = this.newton.run(wanted, { iterations: 18, resets: false });
       this.effort.iterations += end.iterations;
       this.way = done;
@@ -302,6 +304,7 @@ class Search {
   }
 
   private run(wanted: Wanted): boolean {
+    this.alive();
     const end = this.newton.run(wanted, { iterations: 18, resets: false });
     this.effort.iterations += end.iterations;
     this.effort.residual = end.residual;
@@ -337,6 +340,7 @@ class Search {
   private attempt(name: Attempt, wanted: Wanted, iterations: number): boolean {
     const { effort } = this;
     if (effort.tried.at(-1) !== name) effort.tried.push(name);
+    this.alive();
     const ends = this.system.first === 1 || this.task.reboiler;
     const end = this.newton.run(wanted, { iterations, resets: ends && name !== 'warm' });
     effort.iterations += end.iterations;
@@ -364,7 +368,12 @@ const SUM_STARTS: readonly (readonly [Attempt, number, number])[] = [
  * @param task  feasible as far as balances tell (see feasible.ts)
  * @param warm  an earlier solved state; only changes the way
  * @param work  scratch from workFor; the answer's system lives in it until the next solve
+ * @param alive called before every attempt and every step of a way
  * @returns     the system at its answer, every scaled residual below 1e-9, with all properties in it; or why not
  */
-export const solveColumn = (task: ColumnTask, warm?: ColumnState, work = workFor(task)): ColumnEnd =>
-  new Search(task, work).solve(warm);
+export const solveColumn = (
+  task: ColumnTask,
+  warm?: ColumnState,
+  work = workFor(task),
+  alive: () => void = () => {},
+): ColumnEnd => new Search(task, work, alive).solve(warm);

@@ -155,6 +155,8 @@ export interface KindCatalogue {
 /** Scratch of the worker that lives from solve to solve (flash work by chemicals present); never part of an answer. */
 export interface Work {
   readonly flash: Map<string, unknown>;
+  /** Called now and then while one unit takes long, for whoever wants to know that it still runs; the engine has no clock. */
+  alive?: () => void;
 }
 
 export interface SiteSI {

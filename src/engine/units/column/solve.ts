@@ -217,7 +217,7 @@ function solve(call: Call<ColumnSettings>): Outcome<Answer<ColumnResults>> {
   });
   if (wrong) return noSolution(wrong, ...others);
   const work = workOf(call, job.task);
-  const end = solveColumn(job.task, warmState(call, job, work), work);
+  const end = solveColumn(job.task, warmState(call, job, work), work, call.work.alive);
   if (end.state !== 'solved') {
     const [why, ...rest] = reason(call, job, end);
     return noSolution(why!, ...rest);
