@@ -9,6 +9,8 @@ import { findBrowser, LAUNCH_ARGS } from '../tests/setup/browser.mjs';
 export const profile = (): string => mkdtempSync(join(tmpdir(), 'splitwright-profile-'));
 
 const FIELD = '.drawer [data-field="p.P"]';
+/** From one edit to the next [ms]: a fraction of what a quick hand needs to type a value and Enter. */
+const PACE_MS = 100;
 const WAIT = { timeout: 20_000 } as const;
 
 interface Trial {
@@ -77,6 +79,7 @@ export async function killed(folder: string, address: string, { first, seed, by 
         await field.fill(`${pressureOf(begun)} bar`, WAIT);
         await field.press('Enter', WAIT);
         made = begun;
+        await new Promise((done) => setTimeout(done, PACE_MS));
       }
     })().catch((error: unknown) => {
       // The page goes away under the hand: what this is about.

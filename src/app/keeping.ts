@@ -7,6 +7,9 @@ import { editCopy, isEmpty, saveFile, showSketch } from './documents';
 import type { Holder, Holding } from './holding';
 import { openStored, storedAs } from './stored';
 
+/** Edits pause when none came for so long [ms]. */
+const PAUSE_MS = 500;
+
 const ELSEWHERE = 'Another tab is editing this sketch.';
 
 const DETAIL = {
@@ -126,6 +129,18 @@ export function keepSketches(
     );
   };
 
+  /** Onto the disk once the edits pause: the next edit never waits for the disk. */
+  let flushing: ReturnType<typeof setTimeout> | undefined;
+  const flushSoon = (id: string): void => {
+    clearTimeout(flushing);
+    flushing = setTimeout(() => {
+      storage.flush(id).catch((error: unknown) => {
+        const detail = error instanceof Error ? error.message : String(error);
+        failed({ ok: false, why: 'storage-denied', detail });
+      });
+    }, PAUSE_MS);
+  };
+
   const step = async ({ sketch, label }: Job): Promise<void> => {
     if ((sketch.id !== current || !held) && !(await adopt(sketch))) return;
     if (sketch === saved) {
@@ -133,7 +148,7 @@ export function keepSketches(
       return;
     }
     if (stores.session.getState().saved.state !== 'failed') tell({ state: 'saving' });
-    const outcome = await storage.save(sketch, counter, label, now());
+    const outcome = await storage.save(sketch, counter, label, now(), 'relaxed');
     if (!outcome.ok) {
       failed(outcome);
       return;
@@ -141,6 +156,7 @@ export function keepSketches(
     counter = outcome.counter;
     saved = sketch;
     tell({ state: 'saved' });
+    flushSoon(sketch.id);
   };
 
   const run = async (): Promise<void> => {

@@ -40,8 +40,11 @@ const HOUR_MS = 3_600_000;
 export const KEEP_DELETED_MS = 30 * 24 * HOUR_MS;
 /** A browser that does not answer within this time is taken to have no storage [ms]. */
 const OPEN_MS = 4000;
-/** Written through to the disk before it counts as saved: a machine that stops loses no edit that was called saved. */
-const WRITE = { durability: 'strict' } as const;
+/**
+ * When a write counts as done: 'relaxed' once the system has it, so that a browser that crashes loses nothing, in a few ms;
+ * 'strict' once it is on the disk, so that a machine that stops loses nothing either, which may take longer than the next edit.
+ */
+export type Durability = 'relaxed' | 'strict';
 
 /** States to drop: all but the last 20 and the newest of each hour. Pure, so that it can be tested. */
 export function statesToDrop(states: readonly { readonly counter: number; readonly at: number }[]): number[] {
@@ -99,10 +102,16 @@ export class SketchStorage {
    * Stores the next state. `expected`: the counter of the state it follows, 0 for a new sketch; nothing is written where
    * another one is stored, nor where there is no room. Never throws.
    */
-  async save(document: Sketch, expected: number, label: string, at: number): Promise<SaveOutcome> {
+  async save(
+    document: Sketch,
+    expected: number,
+    label: string,
+    at: number,
+    durability: Durability = 'strict',
+  ): Promise<SaveOutcome> {
     let tx: ReturnType<SketchStorage['writing']> | undefined;
     try {
-      tx = this.writing();
+      tx = this.writing(durability);
       const heads = tx.objectStore('heads');
       const states = tx.objectStore('states');
       const head = await heads.get(document.id);
@@ -128,8 +137,13 @@ export class SketchStorage {
     }
   }
 
-  private writing() {
-    const tx = this.db.transaction(['heads', 'states'], 'readwrite', WRITE);
+  /** What was written of a sketch is on the disk when this resolves. */
+  async flush(id: string): Promise<void> {
+    await this.mark(id, (head) => head);
+  }
+
+  private writing(durability: Durability = 'strict') {
+    const tx = this.db.transaction(['heads', 'states'], 'readwrite', { durability });
     // Its end is awaited where it matters; a transaction that is given up before that is no fault of its own.
     tx.done.catch(() => undefined);
     return tx;
@@ -172,7 +186,7 @@ export class SketchStorage {
   }
 
   private async mark(id: string, change: (head: SketchHead) => SketchHead): Promise<void> {
-    const tx = this.db.transaction('heads', 'readwrite', WRITE);
+    const tx = this.db.transaction('heads', 'readwrite', { durability: 'strict' });
     const head = await tx.store.get(id);
     if (head) await tx.store.put(change(head));
     await tx.done;

@@ -33,6 +33,18 @@ describe('sketches on this computer', () => {
     expect((await storage.latest('a'))?.document.title.title).toBe('two');
   });
 
+  test('are put on the disk afterwards as they stand, also one that is not there', async () => {
+    const open = vi.spyOn(IDBDatabase.prototype, 'transaction');
+    await storage.save(sketch('a', 'one'), 0, 'new', 1000, 'relaxed');
+    await storage.flush('a');
+    await storage.flush('b');
+    const asked = open.mock.calls.map(([, , options]) => options?.durability);
+    open.mockRestore();
+    expect(asked).toEqual(['relaxed', 'strict', 'strict']);
+    expect((await storage.list()).map((head) => [head.id, head.counter])).toEqual([['a', 1]]);
+    expect((await storage.latest('a'))?.document.title.title).toBe('one');
+  });
+
   test('are not overwritten by a tab that has not seen the newest state', async () => {
     await storage.save(sketch('a', 'one'), 0, 'new', 1000);
     await storage.save(sketch('a', 'two'), 1, 'rename', 2000);
