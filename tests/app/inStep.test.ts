@@ -3,7 +3,7 @@ import { describe, expect, test, vi } from 'vitest';
 import { inStep } from '../../src/app/inStep';
 import { startSolving } from '../../src/app/solving';
 import type { SolveBatch } from '../../src/engine/network/types';
-import type { FromWorker, ToWorker } from '../../src/protocol/messages';
+import type { FromWorker } from '../../src/protocol/messages';
 import { loadBankData } from '../../src/sketch/bank';
 import { openSketch } from '../../src/sketch/read';
 import type { Sketch } from '../../src/sketch/types';
@@ -12,7 +12,7 @@ import type { Stores } from '../../src/store/react';
 import { createResultsStore } from '../../src/store/resultsStore';
 import { createSession } from '../../src/store/session';
 import { createSketchStore } from '../../src/store/sketchStore';
-import type { WorkerLike } from '../../src/store/solverClient';
+import { Puppet } from '../store/puppet';
 
 function example(name: string): Sketch {
   const opened = openSketch(readFileSync(`public/examples/${name}.sketch.json`, 'utf8'));
@@ -37,19 +37,6 @@ function slowBank() {
       });
     });
   return { load, waiting };
-}
-
-class Puppet implements WorkerLike {
-  readonly got: ToWorker[] = [];
-  onmessage: WorkerLike['onmessage'] = null;
-  onerror: WorkerLike['onerror'] = null;
-  postMessage(message: ToWorker): void {
-    this.got.push(message);
-  }
-  terminate(): void {}
-  say(data: FromWorker): void {
-    this.onmessage?.({ data } as MessageEvent<FromWorker>);
-  }
 }
 
 function solving(first: Sketch) {

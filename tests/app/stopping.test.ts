@@ -3,7 +3,7 @@ import { afterEach, beforeEach, expect, test, vi } from 'vitest';
 import { startSolving } from '../../src/app/solving';
 import type { UnitId } from '../../src/engine/ids';
 import type { SolveBatch } from '../../src/engine/network/types';
-import type { FromWorker, ToWorker } from '../../src/protocol/messages';
+import type { FromWorker } from '../../src/protocol/messages';
 import { openSketch } from '../../src/sketch/read';
 import type { Sketch } from '../../src/sketch/types';
 import { createCompiledStore } from '../../src/store/compiledStore';
@@ -11,20 +11,8 @@ import type { Stores } from '../../src/store/react';
 import { createResultsStore, drawnState } from '../../src/store/resultsStore';
 import { createSession } from '../../src/store/session';
 import { createSketchStore } from '../../src/store/sketchStore';
-import type { SolverClient, WorkerLike } from '../../src/store/solverClient';
-
-class Puppet implements WorkerLike {
-  readonly got: ToWorker[] = [];
-  onmessage: WorkerLike['onmessage'] = null;
-  onerror: WorkerLike['onerror'] = null;
-  postMessage(message: ToWorker): void {
-    this.got.push(message);
-  }
-  terminate(): void {}
-  say(data: FromWorker): void {
-    this.onmessage?.({ data } as MessageEvent<FromWorker>);
-  }
-}
+import type { SolverClient } from '../../src/store/solverClient';
+import { Puppet } from '../store/puppet';
 
 const valve = 'u2' as UnitId;
 let stores: Stores;

@@ -3,9 +3,21 @@ import type { ColumnFeed, ColumnTask } from '../../src/engine/column/types';
 import { flash, makeFlashWork } from '../../src/engine/equilibrium/flash';
 import type { ThermoModel } from '../../src/engine/thermo/types';
 import { bankModel } from './bankModels';
-import { chemicalsOf, FEED_MOL_S, faultOf, makePool } from './columns';
+import { chemicalsOf, FEED_MOL_S, makePool } from './columns';
 import type { GroupReport } from './groups';
 import { makeRandom, type Random } from './random';
+import { Tally } from './tally';
+
+/** What anyone needs to try an absorber again. */
+interface AbsorberCase {
+  readonly ids: readonly string[];
+  readonly P_Pa: readonly number[];
+  readonly feeds: readonly {
+    readonly place: number;
+    readonly T_K: number;
+    readonly n_mol_s: readonly number[];
+  }[];
+}
 
 /** A feed of some of the chemicals, saturated. */
 function saturated(
@@ -80,36 +92,14 @@ function draw(random: Random, model: ThermoModel): ColumnTask | undefined {
 export async function absorbers(seed: number, count: number): Promise<GroupReport> {
   const random = makeRandom(seed);
   const pool = await makePool();
-  const reasons: Record<string, number> = {};
-  const cases: unknown[] = [];
-  const lastTry: Record<string, number> = {};
-  let tried = 0;
-  let answered = 0;
-  let wrong = 0;
-  while (tried < count) {
+  const tally = new Tally<AbsorberCase>();
+  while (tally.tried < count) {
     const ids = chemicalsOf(random, pool);
     const model = (await bankModel(ids)).of(ids.map((_, i) => i));
     const task = model.n > 1 ? draw(random, model) : undefined;
     if (!task) continue;
-    tried++;
-    const end = solveColumn(task);
-    const fault = end.state === 'solved' ? faultOf(end.system) : undefined;
-    if (end.state === 'solved' && fault === undefined) {
-      answered++;
-      const how = end.effort.tried.at(-1)!;
-      lastTry[how] = (lastTry[how] ?? 0) + 1;
-      continue;
-    }
-    const why = end.state === 'solved' ? fault! : end.failure.why;
-    if (end.state === 'solved') wrong++;
-    else reasons[why] = (reasons[why] ?? 0) + 1;
-    const { P_Pa, feeds } = task;
-    cases.push({
-      ids,
-      P_Pa: [...P_Pa],
-      feeds: feeds.map((f) => ({ place: f.place, T_K: f.T_K, n_mol_s: [...f.n_mol_s] })),
-      why,
-    });
+    const feeds = task.feeds.map((f) => ({ place: f.place, T_K: f.T_K, n_mol_s: [...f.n_mol_s] }));
+    tally.take(solveColumn(task), { ids, P_Pa: [...task.P_Pa], feeds });
   }
-  return { tried, answered, reasons, wrong, share: answered / tried, wanted: 0.98, cases, more: { lastTry } };
+  return tally.report();
 }

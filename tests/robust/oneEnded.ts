@@ -1,11 +1,12 @@
 import { solveColumn } from '../../src/engine/column/solve';
 import type { StageSystem } from '../../src/engine/column/system';
 import { productFlow } from '../../src/engine/column/targets';
-import type { ColumnTask, Fixing } from '../../src/engine/column/types';
+import type { Fixing } from '../../src/engine/column/types';
 import { bankModel } from './bankModels';
-import { type ColumnCase, chemicalsOf, FEED_MOL_S, faultOf, makePool, taskOf } from './columns';
+import { type ColumnCase, chemicalsOf, FEED_MOL_S, makePool, taskOf } from './columns';
 import type { GroupReport } from './groups';
 import { makeRandom, type Random } from './random';
+import { Tally } from './tally';
 
 /**
  * A rectifier: saturated vapour under the last stage, a condenser, any reflux ratio. A stripper: saturated liquid on the first
@@ -55,54 +56,17 @@ function otherFixing(s: StageSystem): Fixing {
 export async function oneEnded(seed: number, count: number): Promise<GroupReport> {
   const random = makeRandom(seed);
   const pool = await makePool();
-  const reasons: Record<string, number> = {};
-  const cases: unknown[] = [];
-  const rescued: Record<string, ColumnCase> = {};
-  const lastTry: Record<string, number> = {};
-  let tried = 0;
-  let answered = 0;
-  let wrong = 0;
-  /** The system of a solved column; undefined when there is none, or a wrong one. */
-  const solved = (of: ColumnCase, task: ColumnTask): StageSystem | undefined => {
-    tried++;
-    const end = solveColumn(task);
-    if (end.state !== 'solved') {
-      const { why } = end.failure;
-      reasons[why] = (reasons[why] ?? 0) + 1;
-      cases.push({ ...of, why, failure: end.failure });
-      return undefined;
-    }
-    const fault = faultOf(end.system);
-    if (fault !== undefined) {
-      wrong++;
-      cases.push({ ...of, why: fault });
-      return undefined;
-    }
-    answered++;
-    const how = end.effort.tried.at(-1)!;
-    lastTry[how] = (lastTry[how] ?? 0) + 1;
-    if (how !== 'plain-start') rescued[how] ??= of;
-    return end.system;
-  };
-  while (tried < count) {
+  const tally = new Tally<ColumnCase>();
+  while (tally.tried < count) {
     const ids = chemicalsOf(random, pool);
     const model = (await bankModel(ids)).of(ids.map((_, i) => i));
     const critical_Pa = Math.min(...model.chemicals.filter((c) => c.Tb_K! > 150).map((c) => c.Pc_Pa!));
     const of = draw(random, ids, critical_Pa);
     const task = taskOf(of, model, of.fixed);
-    const plain = task && solved(of, task);
-    if (!plain || tried >= count) continue;
+    const plain = task && tally.take(solveColumn(task), of);
+    if (!plain || tally.tried >= count) continue;
     const fixed = [otherFixing(plain)];
-    solved({ ...of, fixed }, { ...task, fixed });
+    tally.take(solveColumn({ ...task, fixed }), { ...of, fixed });
   }
-  return {
-    tried,
-    answered,
-    reasons,
-    wrong,
-    share: answered / tried,
-    wanted: 0.98,
-    cases,
-    more: { lastTry, rescued },
-  };
+  return tally.report();
 }

@@ -1,32 +1,12 @@
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import type { Basis, Problem } from '../../src/engine/network/types';
-import type { FromWorker, ToWorker } from '../../src/protocol/messages';
-import { connectSolver, type WorkerLike } from '../../src/store/solverClient';
+import { connectSolver } from '../../src/store/solverClient';
 import { problemOf, unitId } from '../network/fixtures';
+import { Puppet } from './puppet';
 
 const basis = (id: string): Basis => ({ id, chemicals: [], model: {} as Basis['model'] });
 const problem = (edit: number, of = 'b1'): Problem => problemOf(basis(of), [], { edit });
 const nothing = { streams: [], units: [], gone: [], findings: [] } as const;
-
-/** A worker that says only what the test lets it say. */
-class Puppet implements WorkerLike {
-  readonly got: ToWorker[] = [];
-  ended = false;
-  onmessage: WorkerLike['onmessage'] = null;
-  onerror: WorkerLike['onerror'] = null;
-  postMessage(message: ToWorker): void {
-    this.got.push(message);
-  }
-  terminate(): void {
-    this.ended = true;
-  }
-  say(data: FromWorker): void {
-    this.onmessage?.({ data } as MessageEvent<FromWorker>);
-  }
-  crash(message: string): void {
-    this.onerror?.({ message } as ErrorEvent);
-  }
-}
 
 let workers: Puppet[];
 let answered: number[];

@@ -16,7 +16,7 @@ interface Fed {
  * their vapour under the last one. Both are in equilibrium, so that every place is like the others. From there the feeds can
  * be moved to what they are.
  *
- * Mutates: l, v, T of the system; its feeds become those of the start.
+ * Mutates: l, v, T of the system; what is returned, its feeds.
  *
  * @returns  sets the feeds a share of the way from the start's to the task's; undefined when the whole has no two phases
  */

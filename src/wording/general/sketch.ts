@@ -1,4 +1,5 @@
 import { type Dimension, suggestedUnits } from '../../quantity';
+import { CORRELATION_WORDS } from './correlation';
 import { sayQuantityRefusal } from './quantity';
 import {
   andList,
@@ -61,43 +62,6 @@ function unitsFor(s: Slots, wanted: Dimension | undefined): string {
     ? `Type the ${s.setting()} with its unit: ${orList(units)}.`
     : `Type the ${s.setting()}.`;
 }
-
-/** "The vapour pressure of Heavy oil", with the row where there are several. */
-const correlation = (s: Slots): string => {
-  const of = s.has('property') ? propertyWord(s.text('property')) : 'correlation';
-  const several = (s.value('rows') ?? 1) > 1 && s.value('row') !== undefined;
-  return `The ${of} of ${s.chemical()}${several ? ` (correlation ${s.number('row')})` : ''}`;
-};
-
-/** Why a correlation cannot be used, and what helps. */
-const FAULTS: Readonly<Record<string, { says(s: Slots): string; readonly next: string }>> = {
-  form: {
-    says: (s) => `its form${s.has('form') ? ` ${quoted(s.text('form'))}` : ''} is none for this property`,
-    next: 'Choose a form that gives this property.',
-  },
-  coefficients: {
-    says: () =>
-      'coefficients are missing, or one that stands for a critical temperature or pressure is not above zero',
-    next: 'Check the coefficients against their source, in number and order.',
-  },
-  range: {
-    says: () => 'its range does not run from a lower to a higher temperature',
-    next: 'Give the lower end as Tmin and the upper end as Tmax, in kelvin.',
-  },
-  overlap: {
-    says: () => 'its range overlaps that of another, so that two hold at one temperature',
-    next: 'Let one range end where the next begins.',
-  },
-  value: {
-    says: (s) => `at ${s.number('temperature')} its value is not above zero, or beyond all measure`,
-    next: 'Check coefficients and range: each must hold over the whole range that is stated.',
-  },
-  falling: {
-    says: (s) => `at ${s.number('temperature')} it falls with rising temperature`,
-    next: 'Check the coefficients and the range; a vapour pressure rises everywhere.',
-  },
-};
-const faultOf = (s: Slots): string => FAULTS[s.text('fault')]?.says(s) ?? 'it makes no sense as it stands';
 
 /** What the document and its compile step may say. */
 export const SKETCH_WORDS: Readonly<Record<string, Words>> = {
@@ -281,11 +245,7 @@ export const SKETCH_WORDS: Readonly<Record<string, Words>> = {
       `The thermodynamic model needs the ${propertyWord(s.text('lacks'))} of ${s.chemical()}, which is not known.`,
     next: () => 'Choose another model, or bring the data with an own chemical.',
   },
-  'sketch/correlation-not-usable': {
-    title: 'Correlation not usable',
-    sentence: (s) => `${correlation(s)} cannot be used: ${faultOf(s)}.`,
-    next: (s) => FAULTS[s.text('fault')]?.next ?? 'Correct the correlation.',
-  },
+  'sketch/correlation-not-usable': CORRELATION_WORDS,
   'sketch/formula-not-read': {
     title: 'Formula not read',
     sentence: (s) =>

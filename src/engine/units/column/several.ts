@@ -21,7 +21,7 @@ const HOLDS_FLOWS = new Set<Fixing['fix']>(['boilup', 'duty', 'reflux']);
  * the share of a chemical between others in a product first rises and then falls as the product grows; a stage's temperature
  * first falls and then rises with the reflux, and the other way round.
  *
- * @param slope  with a reflux ratio: of the purity's or temperature's measure with the bottoms flow
+ * @param slope  with a reflux ratio: of the purity's or temperature's measure with the logarithm of the bottoms flow
  */
 export function severalAnswers(
   call: Call<ColumnSettings>,
@@ -55,12 +55,7 @@ export function severalAnswers(
         },
         saw('flow', flow, 'molarFlow'),
         named('branch', rises ? 'smaller' : 'larger'),
-        {
-          name: 'product',
-          value: 0,
-          dim: 'number',
-          text: x.product === 'bottoms' ? 'bottoms' : 'distillate',
-        },
+        named('product', x.product === 'bottoms' ? 'bottoms' : 'distillate'),
       ],
     },
   ];
@@ -100,12 +95,7 @@ function anotherPossible(call: Call<ColumnSettings>, { task }: ColumnJob, s: Sta
       weight: 'note',
       at: { unit: call.unit, path: `fixedBy.${k}` },
       evidence: [
-        {
-          name: 'of',
-          value: 0,
-          dim: 'number',
-          text: task.fixed[k]!.fix === 'temperature' ? 'stage temperature' : 'purity',
-        },
+        named('of', task.fixed[k]!.fix === 'temperature' ? 'stage temperature' : 'purity'),
         saw('refluxRatio', s.L[0]! / flow, 'number'),
         saw('flow', flow, 'molarFlow'),
       ],
