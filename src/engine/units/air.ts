@@ -7,7 +7,7 @@ type Preset = Extract<CompositionSI, { is: 'preset' }>;
 /**
  * Dry air [mol/mol], rounded so that the four sum to one.
  * Source: U.S. Standard Atmosphere 1976, table 3 (78.084 % N2, 20.9476 % O2, 0.934 % Ar; CO2 brought to 0.04 %, neon and the
- * rest left out).
+ * rest left out); not checked against the printed table.
  */
 export const DRY_AIR = { N2: 0.7808, O2: 0.2095, Ar: 0.0093, CO2: 0.0004 } as const;
 /** The two-gas stand-in used in combustion sums [mol/mol]. */

@@ -25,7 +25,8 @@ const dissolves = ({ x, h_J_mol }: typeof IN_OTHERS, T_K: number): number =>
  * the stability test has spoken already.
  *
  * An estimate for screening, between paraffins (hexane) and aromatics (benzene) by their shares, carried from 25 degC by a heat
- * of solution (van 't Hoff): round figures of our own, no published correlation.
+ * of solution (van 't Hoff): round solubilities as handbooks have them, not checked
+ * against one.
  */
 export function freeWater({ stream, overrides, at, model }: StreamContext): Finding[] {
   const liquid = flowing(stream, 'liquid');
